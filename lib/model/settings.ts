@@ -1,0 +1,63 @@
+/** What a batch's Setup sheet (or the office, or a default) says about how every frame of it is analysed and checked. */
+export interface Settings {
+  readonly title: string | null;
+  readonly units: 'metric' | 'us';
+  readonly analysis: 'first order' | 'second order';
+  readonly material: string | null;
+  readonly strengthCheck: 'elastic stress' | 'AISC 360-22 LRFD' | 'AISC 360-22 ASD' | 'EN 1993-1-1';
+  /** f: allowable stress ÷ yield. */
+  readonly stressFactor: number;
+  readonly nearLimit: number;
+  /** n of L/n; 'none' = declared to have none; null = silent. */
+  readonly deflectionRatio: number | 'none' | null;
+  readonly swayRatio: number | 'none' | null;
+  readonly stability: 'screened' | 'by others';
+  readonly combinationSet: string | null;
+  readonly imperfections: 'none' | 'EN 1993-1-1' | 'AISC 360';
+  readonly stiffnessReduction: 'none' | 'AISC 360';
+  readonly shearDeformation: boolean;
+}
+
+export type SettingName = keyof Settings;
+
+/** How each setting is written in the Setup sheet and in the results. */
+export const settingWords: Readonly<Record<SettingName, string>> = {
+  title: 'title',
+  units: 'units',
+  analysis: 'analysis',
+  material: 'material',
+  strengthCheck: 'strength check',
+  stressFactor: 'stress factor',
+  nearLimit: 'near limit',
+  deflectionRatio: 'deflection ratio',
+  swayRatio: 'sway ratio',
+  stability: 'stability',
+  combinationSet: 'combination set',
+  imperfections: 'imperfections',
+  stiffnessReduction: 'stiffness reduction',
+  shearDeformation: 'shear deformation',
+};
+
+export const defaultSettings: Settings = {
+  title: null,
+  units: 'metric',
+  analysis: 'first order',
+  material: null,
+  strengthCheck: 'elastic stress',
+  stressFactor: 0.6,
+  nearLimit: 0.9,
+  deflectionRatio: null,
+  swayRatio: null,
+  stability: 'screened',
+  combinationSet: null,
+  imperfections: 'none',
+  stiffnessReduction: 'none',
+  shearDeformation: false,
+};
+
+export interface SettingOrigin {
+  readonly source: 'sheet' | 'office' | 'default';
+  /** "Setup B6" where the sheet gave it. */
+  readonly cell: string | null;
+}
+export type SettingOrigins = Readonly<Record<SettingName, SettingOrigin>>;
