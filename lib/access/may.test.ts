@@ -1,0 +1,31 @@
+import { describe, expect, it } from 'vitest';
+import { acts, homeOf, may, personRoles } from './may';
+
+const of = (role: (typeof personRoles)[number], officeId = 'north') => ({ role, officeId });
+
+describe('who may do what', () => {
+  it('lets nobody touch a thing of another office, whatever the role and the act', () => {
+    for (const role of personRoles)
+      for (const act of acts) expect(may(of(role), act, { officeId: 'south' }), `${role}: ${act}`).toBe(false);
+  });
+
+  it('gives the lead everything in the office but the client’s own page', () => {
+    for (const act of acts) expect(may(of('lead'), act, { officeId: 'north' })).toBe(act !== 'read what was issued');
+  });
+
+  it('lets a checker read everything and change nothing', () => {
+    expect(acts.filter((act) => may(of('checker'), act))).toEqual(['read projects', 'read a batch', 'take results away']);
+  });
+
+  it('lets an analyst prepare and run batches but not add people', () => {
+    expect(may(of('analyst'), 'bring sheets in')).toBe(true);
+    expect(may(of('analyst'), 'run')).toBe(true);
+    expect(may(of('analyst'), 'add people')).toBe(false);
+    expect(may(of('analyst'), 'assign people')).toBe(false);
+  });
+
+  it('shows a client only what was issued', () => {
+    expect(acts.filter((act) => may(of('client'), act))).toEqual(['read what was issued']);
+    expect(homeOf('client')).toBe('/issued');
+  });
+});

@@ -1,0 +1,48 @@
+/** Who may do what: one table. Pages, route handlers and navigation all ask here, and nowhere else. */
+export const personRoles = ['lead', 'analyst', 'checker', 'client'] as const;
+export type PersonRole = (typeof personRoles)[number];
+
+/** Whoever stands behind a request: a session row's person with the role they hold in that session's office. */
+export interface Person {
+  readonly id: string;
+  readonly name: string;
+  readonly email: string;
+  readonly role: PersonRole;
+  readonly officeId: string;
+  readonly officeName: string;
+  readonly sessionId: string;
+}
+
+const staff = ['lead', 'analyst', 'checker'] as const;
+
+const table = {
+  'read projects': staff,
+  'add a project': ['lead', 'analyst'],
+  'read a batch': staff,
+  'bring sheets in': ['lead', 'analyst'],
+  run: ['lead', 'analyst'],
+  'take results away': staff,
+  'read people': ['lead'],
+  'add people': ['lead'],
+  'assign people': ['lead'],
+  'read what was issued': ['client'],
+} as const satisfies Readonly<Record<string, readonly PersonRole[]>>;
+
+export type Act = keyof typeof table;
+export const acts = Object.keys(table) as Act[];
+
+/**
+ * Whether a person may do something, and to a thing of which office.
+ *
+ * @param of what it would be done to; leave out for things the person's own office is the whole of
+ * @returns false for everything of another office, whatever the role
+ */
+export function may(person: Pick<Person, 'role' | 'officeId'>, act: Act, of?: { readonly officeId: string }): boolean {
+  const roles: readonly PersonRole[] = table[act];
+  return roles.includes(person.role) && (of === undefined || of.officeId === person.officeId);
+}
+
+/** The page each role starts from. */
+export function homeOf(role: PersonRole): '/projects' | '/issued' {
+  return role === 'client' ? '/issued' : '/projects';
+}
