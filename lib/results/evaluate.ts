@@ -1,0 +1,79 @@
+/** Analysis, checks, mass and verdict of one frame: what a run does with each frame, wherever it runs. */
+import { createAnalyser } from '@/lib/analysis/analyser';
+import { checkFrame } from '@/lib/checks/check-frame';
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import { frameMass } from '@/lib/results/mass';
+import type { Failure, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { frameVerdict, governingOf } from '@/lib/results/verdict';
+
+export type Analyser = ReturnType<typeof createAnalyser>;
+
+export interface EvaluateOptions {
+  /** Make the second, independent analysis too (lib/results/second-sample.ts chooses). */
+  readonly second: boolean;
+  /** Keep every subject × check × combination, not only the governing ones. */
+  readonly all: boolean;
+}
+
+/**
+ * Everything that is computed for one frame.
+ *
+ * @param analyser keeps orderings and buffers from frame to frame of one shape; one per thread
+ * @returns status "not solved" with its failure where the frame moves freely, hangs apart or fails its certificate
+ */
+export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
+  const analysis = analyser.analyse(frame, settings, { second: options.second });
+  if (!('states' in analysis)) return unsolved(frame, analysis);
+  const bad = analysis.states.find((state) => !finite(state));
+  if (bad) {
+    const message = `the results of ${bad.name} are not finite numbers: the frame's stiffness or loads are out of all proportion`;
+    return unsolved(frame, { code: 'not-solved', message, node: null });
+  }
+  const found = checkFrame(frame, analysis.states, settings, { all: options.all });
+  const notChecked = [
+    ...new Set([
+      ...frame.notChecked,
+      ...found.checks.filter((c) => c.verdict === 'not checked').map((c) => `${c.check}: ${c.reason ?? 'not checked'}`),
+    ]),
+  ];
+  if (found.checks.length === 0 && notChecked.length === 0) notChecked.push('nothing to check');
+  return {
+    status: 'solved',
+    failure: null,
+    verdict: frameVerdict(found.checks, notChecked),
+    governing: governingOf(found.checks),
+    notChecked,
+    assumptions: [...new Set(found.assumptions)],
+    mass: frameMass(frame),
+    states: analysis.states,
+    checks: found.checks,
+    allChecks: found.all,
+    certificate: analysis.certificate,
+  };
+}
+
+function unsolved(frame: Frame, failure: Failure): FrameEvaluation {
+  return {
+    status: 'not solved',
+    failure,
+    verdict: 'not checked',
+    governing: null,
+    notChecked: [...new Set([`not solved: ${failure.message}`, ...frame.notChecked])],
+    assumptions: [],
+    mass: frameMass(frame),
+    states: [],
+    checks: [],
+    allChecks: null,
+    certificate: null,
+  };
+}
+
+/** A node without a rotation of its own has rz NaN by agreement; nothing else may be. */
+function finite(state: ResultState): boolean {
+  return (
+    state.displacements.every((d, i) => Number.isFinite(d) || (i % 3 === 2 && Number.isNaN(d))) &&
+    state.reactions.every(Number.isFinite) &&
+    state.endForces.every(Number.isFinite)
+  );
+}

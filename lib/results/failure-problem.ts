@@ -1,0 +1,160 @@
+/** Mechanisms and loose parts found by the analysis, told as problems at the cell that can put them right. */
+import type { Intake, SheetRead } from '@/lib/intake/intake';
+import type { Problem } from '@/lib/problems/problem';
+import type { Failure } from '@/lib/results/result';
+
+export interface FrameFailure {
+  readonly frame: string;
+  readonly failure: Failure;
+}
+
+/** What of an intake is needed to find cells and keep the order of problems. */
+export type FailureContext = Pick<Intake, 'problems' | 'sheets' | 'rows'>;
+
+/**
+ * The intake's problems and those that the analysis found, in the order of sheets in the file, rows, columns.
+ * A failed certificate is no problem of a sheet: it stands in the frame's reasons only.
+ */
+export function problemsWithFailures(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
+  const found = failureProblems(intake, failures);
+  if (found.length === 0) return intake.problems;
+  const order = new Map(intake.sheets.map((sheet, i) => [sheet.name, i] as const));
+  const at = (p: Problem): number => (p.sheet === null ? -1 : (order.get(p.sheet) ?? order.size));
+  const after = (p: Problem, q: Problem): boolean => {
+    if (at(p) !== at(q)) return at(p) > at(q);
+    if ((p.row ?? 0) !== (q.row ?? 0)) return (p.row ?? 0) > (q.row ?? 0);
+    return columnNumber(p.cell) > columnNumber(q.cell);
+  };
+  const all = [...intake.problems];
+  for (const problem of found) {
+    const place = all.findIndex((other) => after(other, problem));
+    all.splice(place < 0 ? all.length : place, 0, problem);
+  }
+  return all;
+}
+
+function failureProblems(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
+  const rows = failures.length > 0 ? new RowFinder(intake) : null;
+  const byCell = new Map<string, Problem & { frames: string[] }>();
+  for (const { frame, failure } of failures) {
+    if (failure.code === 'not-solved' || !rows) continue;
+    const place = rows.find(frame, failure);
+    const key = place ? `${failure.code} ${place.sheet} ${place.cell}` : `${failure.code} ${frame}`;
+    const same = byCell.get(key);
+    if (same) {
+      same.frames.push(frame);
+      continue;
+    }
+    byCell.set(key, {
+      severity: 'error',
+      code: failure.code,
+      sheet: place?.sheet ?? null,
+      file: place?.file ?? null,
+      row: place?.row ?? null,
+      column: place?.column ?? null,
+      cell: place?.cell ?? null,
+      frames: [frame],
+      found: place?.found ?? null,
+      message: failure.message,
+      stopsAll: false,
+    });
+  }
+  return [...byCell.values()];
+}
+
+interface Place {
+  readonly sheet: string;
+  readonly file: string;
+  readonly row: number;
+  readonly column: string;
+  readonly cell: string;
+  readonly found: string | null;
+}
+
+/** Finds a frame's first row on the sheets that can mend it: Supports, else Members or Nodes, else Variants. */
+class RowFinder {
+  private readonly sheets: readonly { sheet: SheetRead; rows: ReadonlyMap<string, readonly RowAt[]> }[];
+
+  constructor(intake: FailureContext) {
+    const bySheet = new Map<string, FailureContext['rows'][number][]>();
+    for (const row of intake.rows) {
+      const list = bySheet.get(row.sheet);
+      if (list) list.push(row);
+      else bySheet.set(row.sheet, [row]);
+    }
+    this.sheets = intake.sheets.map((sheet) => {
+      const rows = new Map<string, RowAt[]>();
+      const frameAt = columnOf(sheet, 'frame');
+      if (frameAt < 0) return { sheet, rows };
+      for (const row of bySheet.get(sheet.name) ?? []) {
+        if (sheet.headingRow !== null && row.row <= sheet.headingRow) continue;
+        const id = idKey(row.cells[frameAt] ?? null);
+        if (id === null) continue;
+        const list = rows.get(id);
+        if (list) list.push({ row: row.row, cells: row.cells });
+        else rows.set(id, [{ row: row.row, cells: row.cells }]);
+      }
+      return { sheet, rows };
+    });
+  }
+
+  find(frame: string, failure: Failure): Place | null {
+    const nodeColumns = ['node', 'start', 'end'];
+    const kinds = failure.code === 'mechanism' ? ['supports', 'variants', 'nodes'] : ['members', 'nodes', 'variants'];
+    for (const kind of kinds)
+      for (const { sheet, rows } of this.sheets) {
+        if (sheet.known?.toLowerCase() !== kind) continue;
+        const own = rows.get(idKey(frame) ?? '') ?? [];
+        const named =
+          kind === 'members' || kind === 'nodes' ? own.find((row) => this.names(sheet, row, failure, nodeColumns)) : own[0];
+        const row = named ?? own[0];
+        if (row) return place(sheet, row);
+      }
+    return null;
+  }
+
+  private names(sheet: SheetRead, row: RowAt, failure: Failure, columns: readonly string[]): boolean {
+    const node = idKey(failure.node);
+    return node !== null && columns.some((name) => idKey(row.cells[columnOf(sheet, name)] ?? null) === node);
+  }
+}
+
+interface RowAt {
+  readonly row: number;
+  readonly cells: readonly (string | null)[];
+}
+
+function place(sheet: SheetRead, row: RowAt): Place {
+  const column = columnOf(sheet, 'frame');
+  const heading = sheet.headings.find((h) => columnNumber(h.cell) === column + 1);
+  const letters = (heading?.cell ?? 'A1').replace(/\d+$/, '');
+  return {
+    sheet: sheet.name,
+    file: sheet.file,
+    row: row.row,
+    column: heading?.text ?? 'frame',
+    cell: `${letters}${row.row}`,
+    found: row.cells[column] ?? null,
+  };
+}
+
+/** 0-based column of a known heading, −1 where the sheet has none. */
+function columnOf(sheet: SheetRead, known: string): number {
+  const heading = sheet.headings.find((h) => h.known?.toLowerCase() === known);
+  return heading ? columnNumber(heading.cell) - 1 : -1;
+}
+
+/** 1-based number of a cell's column: "AB7" → 28; 0 where there is no cell. */
+function columnNumber(cell: string | null): number {
+  let n = 0;
+  for (const letter of cell?.match(/^[A-Z]+/)?.[0] ?? '') n = n * 26 + letter.charCodeAt(0) - 64;
+  return n;
+}
+
+/** Ids match without regard to case and outer blanks; "1.0" is the id 1, "01" is another. */
+function idKey(text: string | null): string | null {
+  const id = text?.trim() ?? '';
+  if (id === '') return null;
+  if (/^-?(0|[1-9]\d*)(\.\d+)?$/.test(id)) return String(Number(id));
+  return id.toLowerCase();
+}

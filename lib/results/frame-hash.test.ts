@@ -1,0 +1,43 @@
+import { describe, expect, it } from 'vitest';
+import { defaultSettings } from '@/lib/model/settings';
+import { canonicalJson, frameHash } from '@/lib/results/frame-hash';
+import { cantileverFrame } from '@/tests/fakes/cantilever-frame';
+
+describe('the content address of a frame', () => {
+  const frame = cantileverFrame('F1');
+  const address = frameHash(frame, defaultSettings);
+
+  it('leaves name, title, group, number off and note outside', () => {
+    const other = cantileverFrame('F2', { title: 'Sign', group: 'north', count: 12, note: 'as built' });
+    expect(frameHash(other, { ...defaultSettings, title: 'Gantry', material: 'S355' })).toBe(address);
+  });
+
+  it('does not depend on the order in which the model was put together', () => {
+    const turned = Object.fromEntries(Object.entries(frame).reverse()) as unknown as typeof frame;
+    expect(frameHash(turned, defaultSettings)).toBe(address);
+  });
+
+  it.each([
+    ['a load', cantileverFrame('F1', { nodeLoads: [{ case: 1, node: 1, Fx_N: 0, Fy_N: -2001, Mz_Nm: 0 }] })],
+    ['a support', cantileverFrame('F1', { supports: [{ node: 0, ux: 'fixed', uy: 'fixed', rz: 1e9, angle_rad: 0 }] })],
+    ['a combination', cantileverFrame('F1', { combinations: [] })],
+    ['what the sheets leave unchecked', cantileverFrame('F1', { notChecked: ['no combinations'] })],
+  ])('changes with %s', (_what, changed) => {
+    expect(frameHash(changed, defaultSettings)).not.toBe(address);
+  });
+
+  it.each([
+    { stressFactor: 0.66 },
+    { nearLimit: 0.95 },
+    { stability: 'by others' as const },
+    { deflectionRatio: 'none' as const },
+  ])('changes with the setting %j', (change) => {
+    expect(frameHash(frame, { ...defaultSettings, ...change })).not.toBe(address);
+  });
+});
+
+describe('canonical JSON', () => {
+  it('orders keys, leaves out what is undefined and reads −0 as 0', () => {
+    expect(canonicalJson({ b: [-0, 1.5, null], a: { d: 'x', c: undefined } })).toBe('{"a":{"d":"x"},"b":[0,1.5,null]}');
+  });
+});

@@ -1,0 +1,181 @@
+/** The published results file (lib/results/schema.ts), written frame by frame: the same input gives the same bytes. */
+import { memberExtremes, memberLine } from '@/lib/analysis/member-line';
+import type { FrameRead } from '@/lib/intake/intake';
+import type { Frame } from '@/lib/model/frame';
+import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
+import type { Problem } from '@/lib/problems/problem';
+import type { Check, Extreme, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { resultsFormat, type FrameResultJson, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
+import type { ResultSource } from '@/lib/results/source';
+
+/** Reason given for a frame that its sheets do not let run. */
+export const notRead = 'not analysed: errors in its sheets';
+
+/**
+ * One frame as published. `evaluation` null: the frame could not be read or has not been analysed.
+ * With `all`, checks are those of every combination where the evaluation holds them.
+ */
+export function frameResultJson(read: FrameRead, evaluation: FrameEvaluation | null, all = false): FrameResultJson {
+  const { frame } = read;
+  if (!frame || !evaluation) {
+    return {
+      frame: read.id,
+      status: 'not solved',
+      verdict: 'not checked',
+      governing: null,
+      notChecked: [frame ? 'not analysed yet' : notRead],
+      mass: null,
+      results: [],
+      checks: [],
+      certificate: null,
+    };
+  }
+  const solved = evaluation.status === 'solved';
+  const checks = solved ? ((all ? evaluation.allChecks : null) ?? evaluation.checks) : [];
+  const { governing, certificate } = evaluation;
+  return {
+    frame: read.id,
+    status: evaluation.status,
+    verdict: evaluation.verdict,
+    governing: governing && {
+      subject: governing.subject ?? read.id,
+      check: governing.check,
+      combination: governing.combination,
+      ratio: maybe(governing.ratio),
+    },
+    notChecked: [...evaluation.notChecked],
+    mass: maybe(evaluation.mass),
+    results: solved ? evaluation.states.map((state) => stateJson(frame, state)) : [],
+    checks: checks.map((check) => checkJson(read.id, check)),
+    certificate:
+      solved && certificate
+        ? {
+            residual: plain(certificate.residual),
+            equilibrium: plain(certificate.equilibrium),
+            condition: plain(certificate.condition),
+            digits: plain(certificate.digits),
+            second: maybe(certificate.second),
+            secondReason: certificate.secondReason,
+          }
+        : null,
+  };
+}
+
+function stateJson(frame: Frame, state: ResultState): FrameResultJson['results'][number] {
+  return {
+    name: state.name,
+    kind: state.kind,
+    purpose: state.purpose,
+    order: state.order,
+    criticalLoadFactor: maybe(state.criticalLoadFactor),
+    displacements: frame.nodes.map((node, i) => ({
+      node: node.id,
+      ux: plain(state.displacements[3 * i]!),
+      uy: plain(state.displacements[3 * i + 1]!),
+      rz: maybe(state.displacements[3 * i + 2]!),
+    })),
+    reactions: frame.supports.map((support, i) => ({
+      node: frame.nodes[support.node]!.id,
+      fx: plain(state.reactions[3 * i]!),
+      fy: plain(state.reactions[3 * i + 1]!),
+      mz: plain(state.reactions[3 * i + 2]!),
+    })),
+    members: frame.members.map((member, i) => {
+      const [N0, V0, M0, N1, V1, M1] = state.endForces.subarray(6 * i, 6 * i + 6);
+      const extremes = memberExtremes(memberLine(frame, state, i));
+      return {
+        member: member.id,
+        start: { N: plain(N0!), V: plain(V0!), M: plain(M0!) },
+        end: { N: plain(N1!), V: plain(V1!), M: plain(M1!) },
+        extremes: { N: extremeJson(extremes.N), V: extremeJson(extremes.V), M: extremeJson(extremes.M) },
+        deflection: { value: plain(extremes.deflection.value), at: plain(extremes.deflection.at) },
+      };
+    }),
+  };
+}
+
+function extremeJson(extreme: Extreme): Extreme {
+  return {
+    max: plain(extreme.max),
+    maxAt: plain(extreme.maxAt),
+    min: plain(extreme.min),
+    minAt: plain(extreme.minAt),
+  };
+}
+
+function checkJson(frameId: string, check: Check): FrameResultJson['checks'][number] {
+  const checked = check.verdict !== 'not checked';
+  return {
+    subject: check.subject ?? frameId,
+    check: check.check,
+    combination: check.combination,
+    at: maybe(check.at),
+    face: check.face,
+    value: checked ? maybe(check.value) : null,
+    limit: checked ? maybe(check.limit) : null,
+    ratio: checked ? maybe(check.ratio) : null,
+    verdict: check.verdict,
+    reason: check.reason,
+    reference: check.reference,
+  };
+}
+
+/** Every setting in the words of the Setup sheet, with where it came from. */
+export function settingsJson(settings: Settings, origins: SettingOrigins): ResultsJson['settings'] {
+  const names = Object.keys(settingWords) as SettingName[];
+  return Object.fromEntries(
+    names.map((name) => {
+      const value = settings[name];
+      const { source } = origins[name];
+      const word = typeof value === 'boolean' ? (value ? 'yes' : 'no') : value;
+      return [settingWords[name], { value: word, defaulted: source === 'default', source }];
+    }),
+  );
+}
+
+export function problemJson(problem: Problem): ProblemJson {
+  return {
+    severity: problem.severity,
+    code: problem.code,
+    file: problem.file,
+    sheet: problem.sheet,
+    row: problem.row,
+    column: problem.column,
+    cell: problem.cell,
+    frame: problem.frames[0] ?? null,
+    frames: [...problem.frames],
+    found: problem.found,
+    message: problem.message,
+  };
+}
+
+/** The file as pieces of text in order, one frame a line; never holds more than a frame. */
+export async function* resultsJson(source: ResultSource, options: { readonly all: boolean }): AsyncGenerator<string> {
+  const { input } = source;
+  const files = input.files.map(({ name, sha256, size }) => ({ name, sha256, size }));
+  yield `{"format":${JSON.stringify(resultsFormat)},"engine":${JSON.stringify(source.engine)},\n`;
+  yield `"input":${JSON.stringify({ name: input.name, sha256: input.sha256, files })},\n`;
+  yield `"settings":${JSON.stringify(settingsJson(source.settings, source.origins))},\n"problems":[`;
+  let comma = '\n';
+  for (const problem of source.problems) {
+    yield comma + JSON.stringify(problemJson(problem));
+    comma = ',\n';
+  }
+  yield '],\n"frames":[';
+  comma = '\n';
+  for await (const { read, evaluation } of source.frames()) {
+    yield comma + JSON.stringify(frameResultJson(read, evaluation, options.all));
+    comma = ',\n';
+  }
+  yield ']}\n';
+}
+
+/** A figure fit for JSON: −0 is 0. Anything not finite has no place in a solved frame. */
+function plain(value: number): number {
+  if (!Number.isFinite(value)) throw new RangeError(`Expected a finite figure in the results, got ${value}`);
+  return value === 0 ? 0 : value;
+}
+
+function maybe(value: number | null): number | null {
+  return value === null || !Number.isFinite(value) ? null : plain(value);
+}
