@@ -1,0 +1,14 @@
+import { type Kysely, type Migration, Migrator } from 'kysely';
+import * as firstTables from '@/db/migrations/2026-12-01-first-tables';
+import type { DB } from '@/db/schema';
+
+/** Registered by hand: bundlers see imports, not folders. */
+const migrations: Record<string, Migration> = { '2026-12-01-first-tables': firstTables };
+
+/** Brings the database up to date; names of the migrations that ran. Safe to call at every start. */
+export async function migrate(db: Kysely<DB>): Promise<string[]> {
+  const migrator = new Migrator({ db, provider: { getMigrations: () => Promise.resolve(migrations) } });
+  const { error, results } = await migrator.migrateToLatest();
+  if (error) throw new Error('The database could not be brought up to date', { cause: error });
+  return (results ?? []).map((result) => result.migrationName);
+}

@@ -1,0 +1,34 @@
+import { mkdirSync } from 'node:fs';
+import path from 'node:path';
+import Sqlite from 'better-sqlite3';
+import { Kysely, SqliteDialect } from 'kysely';
+import type { DB } from '@/db/schema';
+
+export type RawDatabase = Sqlite.Database;
+export type Db = Kysely<DB>;
+
+export interface OpenDatabase {
+  /** For everything but bulk work. */
+  readonly db: Db;
+  /** The driver itself, for bulk inserts and exports in a worker thread. */
+  readonly raw: RawDatabase;
+  readonly close: () => Promise<void>;
+}
+
+/**
+ * Opens a database file, for the server, a worker thread, the command line or a test.
+ * One writer at a time, many readers: others wait up to 10 s for the writer's short transactions.
+ *
+ * @throws {Error} of the driver where the file cannot be opened, or with `readonly` does not exist
+ */
+export function openDatabase(file: string, { readonly = false }: { readonly?: boolean } = {}): OpenDatabase {
+  if (!readonly) mkdirSync(path.dirname(file), { recursive: true });
+  const raw = new Sqlite(file, { timeout: 10_000, readonly, fileMustExist: readonly });
+  if (!readonly) raw.pragma('journal_mode = WAL');
+  raw.pragma('synchronous = NORMAL');
+  raw.pragma('foreign_keys = ON');
+  raw.pragma('cache_size = -32000');
+  raw.pragma('temp_store = MEMORY');
+  const db = new Kysely<DB>({ dialect: new SqliteDialect({ database: raw }) });
+  return { db, raw, close: () => db.destroy() };
+}
