@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { defaultSettings } from '@/lib/model/settings';
 import { canonicalJson, frameHash } from '@/lib/results/frame-hash';
-import { cantileverFrame } from '@/tests/fakes/cantilever-frame';
+import { cantileverFrame } from '@/lib/results/cantilever-frame';
 
 describe('the content address of a frame', () => {
   const frame = cantileverFrame('F1');

@@ -2,7 +2,7 @@
 import { createHash } from 'node:crypto';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import { engineVersion } from '@/lib/results/engine-version';
+import { engineVersion } from '@/lib/analysis/engine-version';
 
 /**
  * SHA-256 (hex) over the frame's model, loads, resolved properties, combinations and limits, the settings that matter

@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 
-/**
- * A cantilever of 3 m, 200 mm × 100 mm solid steel bar, 2 kN downwards at its tip in case "tip", with self-weight in
+/** For tests. 
+ * For tests: a cantilever of 3 m, 200 mm × 100 mm solid steel bar, 2 kN downwards at its tip in case "tip", with self-weight in
  * case "dead"; one strength and one service combination.
  */
 export function cantileverFrame(id: string, change: Partial<Frame> = {}): Frame {
