@@ -1,0 +1,76 @@
+/** The first sheet: what was analysed, by what, under which assumptions, and what must not be concluded from it. */
+import { settingWords, type SettingName } from '@/lib/model/settings';
+import { cautions, checkedWords } from '@/lib/reports/cautions';
+import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
+
+const sign = [
+  'Global X right, Y up, rotations and moments anticlockwise. Local x from start to end; local y is 90° anticlockwise from it:',
+  '        y (top)',
+  '        ↑',
+  '  start ●────────→ x   end ●',
+  '        bottom',
+  'N: tension positive. M: positive with tension on the bottom (local −y) face. V = dM/dx.',
+  'Reactions are what the support does to the frame; the load on the foundation is the reverse.',
+];
+
+const originWords = { sheet: 'Setup', office: "the office's own", default: 'default, the sheet is silent' };
+
+function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
+  const { title, input, settings } = source;
+  yield [settings.title ?? title.batch ?? input.name];
+  yield [];
+  const notYet = 'not yet';
+  yield ['project', title.project ?? ''];
+  yield ['batch', title.batch ?? ''];
+  yield ['revision', title.revision ?? ''];
+  yield ['state', title.state ?? ''];
+  yield ['prepared', title.prepared ?? ''];
+  yield ['checked', title.checked ?? notYet];
+  yield ['issued', title.issued ?? notYet];
+  yield ['input', input.name];
+  yield ['input SHA-256', input.sha256];
+  for (const file of input.files.length > 1 ? input.files : []) yield ['', `${file.name}: ${file.sha256}`];
+  yield ['engine', source.engine];
+  yield [
+    'units',
+    settings.units === 'metric' ? 'metric: m, mm, kN, kN·m, MPa, kg' : 'US customary: ft, in, kip, kip·ft, ksi, lb',
+  ];
+  yield [];
+  yield [
+    'frames',
+    `${facts.frames} in all: ${facts.over} over, ${facts.notChecked} not checked, ${facts.near} near, ${facts.within} within`,
+  ];
+  if (facts.notSolved > 0)
+    yield ['', `${facts.notSolved} of the frames not checked have no solution or were stopped by errors in the sheets`];
+  const words = checkedWords(settings);
+  yield ['checked', words.checked];
+  yield ['not checked', words.notChecked];
+  yield [];
+  yield ['signs', sign[0] ?? ''];
+  for (const line of sign.slice(1)) yield ['', line];
+  yield [];
+  yield ['settings', '', 'given by'];
+  for (const name of Object.keys(settingWords) as SettingName[]) {
+    const value = settings[name];
+    const origin = source.origins[name];
+    yield [
+      settingWords[name],
+      value === null ? 'silent' : typeof value === 'boolean' ? (value ? 'yes' : 'no') : value,
+      origin.cell ?? originWords[origin.source],
+    ];
+  }
+  if (facts.assumptions.length > 0) {
+    yield [];
+    yield ['assumptions', facts.assumptions[0] ?? ''];
+    for (const line of facts.assumptions.slice(1)) yield ['', line];
+  }
+  yield [];
+  yield ['cautions', cautions[0] ?? ''];
+  for (const line of cautions.slice(1)) yield ['', line];
+}
+
+export function coverSheet(source: ReportSource, facts: BatchFacts): ReportSheet {
+  return { name: 'Cover', columns: [], boldFirst: true, rows: () => rows(source, facts) };
+}

@@ -1,0 +1,31 @@
+/** The sheets of a result workbook, in their order (sheets §6). The CSV set is made of the same ones. */
+import { gatherFacts } from '@/lib/reports/workbook/batch-facts';
+import { membersSheet, movementsSheet } from '@/lib/reports/workbook/check-sheets';
+import { coverSheet } from '@/lib/reports/workbook/cover-sheet';
+import { flagsSheet, framesSheet } from '@/lib/reports/workbook/frame-sheets';
+import { inputSheet, problemsSheet } from '@/lib/reports/workbook/input-sheets';
+import { combinationsSheet, limitsSheet, loadCasesSheet, loadTotalsSheet, sectionsSheet } from '@/lib/reports/workbook/model-sheets'; // prettier-ignore
+import type { ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import { displacementsSheet, membersByCombinationSheet, reactionsSheet } from '@/lib/reports/workbook/state-sheets';
+
+export async function reportSheets(source: ReportSource): Promise<ReportSheet[]> {
+  const facts = await gatherFacts(source.frames({ states: false }));
+  return [
+    coverSheet(source, facts),
+    framesSheet(source),
+    flagsSheet(source),
+    membersSheet(source),
+    membersByCombinationSheet(source),
+    reactionsSheet(source),
+    displacementsSheet(source),
+    movementsSheet(source),
+    sectionsSheet(source),
+    loadCasesSheet(source),
+    combinationsSheet(source),
+    limitsSheet(source),
+    loadTotalsSheet(source),
+    inputSheet(source),
+    problemsSheet(source),
+  ];
+}

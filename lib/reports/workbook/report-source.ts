@@ -1,0 +1,43 @@
+/** What a result workbook is made from: stored numbers, never recomputed ones. */
+import type { InputIdentity, InputRow } from '@/lib/intake/intake';
+import type { Frame } from '@/lib/model/frame';
+import type { SettingOrigins, Settings } from '@/lib/model/settings';
+import type { Problem } from '@/lib/problems/problem';
+import type { FrameEvaluation } from '@/lib/results/result';
+
+/** Who and what the cover names; null = not yet, or unknown to the command line. */
+export interface ReportTitle {
+  readonly project: string | null;
+  readonly batch: string | null;
+  readonly revision: string | null;
+  readonly state: string | null;
+  readonly prepared: string | null;
+  readonly checked: string | null;
+  readonly issued: string | null;
+}
+
+export interface ReportFrame {
+  /** 1-based place in sheet order. */
+  readonly number: number;
+  readonly id: string;
+  readonly title: string | null;
+  readonly group: string | null;
+  readonly count: number;
+  readonly note: string | null;
+  /** Null where errors in the sheets stopped it. */
+  readonly frame: Frame | null;
+  /** Null where it was never run. `states` may be empty where they were not asked for. */
+  readonly evaluation: FrameEvaluation | null;
+}
+
+export interface ReportSource {
+  readonly title: ReportTitle;
+  readonly engine: string;
+  readonly input: InputIdentity;
+  readonly settings: Settings;
+  readonly origins: SettingOrigins;
+  readonly problems: readonly Problem[];
+  readonly inputRows: () => Iterable<InputRow>;
+  /** Frames in sheet order; called once for each sheet that needs them. `states` says whether states are needed. */
+  readonly frames: (need: { readonly states: boolean }) => Iterable<ReportFrame> | AsyncIterable<ReportFrame>;
+}

@@ -1,0 +1,135 @@
+/** Sheets → one XLSX, streamed: a row is gone from memory once it is written, and the sink's pace is kept. */
+import type { Writable } from 'node:stream';
+import ExcelJS from 'exceljs';
+import type { ReportCell, ReportColumn, ReportSheet } from '@/lib/reports/workbook/report-sheet';
+
+/** Rows of one sheet that the format allows. */
+const mostRows = 1_048_576;
+/** Rows between two looks at whether the sink keeps up. */
+const breath = 256;
+const mostWaiting = 1 << 20;
+
+const ink = { argb: 'FF12212D' };
+const solid = (argb: string): ExcelJS.Fill => ({ type: 'pattern', pattern: 'solid', fgColor: { argb } });
+const verdictStyles: Readonly<Record<string, Partial<ExcelJS.Style>>> = {
+  over: { fill: solid('FFFBE6E1'), font: { color: { argb: 'FFB3241A' }, bold: true } },
+  near: { fill: solid('FFFBF0D3'), font: { color: { argb: 'FF7F4D00' } } },
+  'not checked': { fill: solid('FFE3E6E4'), font: { color: { argb: 'FF3F515A' }, italic: true } },
+};
+const headStyle: Partial<ExcelJS.Style> = {
+  font: { bold: true, color: ink },
+  border: { bottom: { style: 'thin', color: ink } },
+  alignment: { wrapText: true, vertical: 'bottom' },
+};
+const boldStyle: Partial<ExcelJS.Style> = { font: { bold: true, color: ink } };
+
+/** exceljs writes each style object once as long as it is the same object. */
+function columnStyles(columns: readonly ReportColumn[]): (Partial<ExcelJS.Style> | null)[] {
+  const shared = new Map<string, Partial<ExcelJS.Style>>();
+  return columns.map(({ format }) => {
+    if (format === undefined) return null;
+    const known = shared.get(format) ?? { numFmt: format };
+    shared.set(format, known);
+    return known;
+  });
+}
+
+interface Piped {
+  readonly pipes?: readonly { readonly writableLength?: number }[];
+}
+
+const wentAway = (): Error => new Error('The reader of the workbook went away before it was complete');
+
+/** Resolves only if the sink closes before it has taken everything. */
+function closedEarly(sink: Writable): Promise<boolean> {
+  return new Promise((resolve) => sink.once('close', () => resolve(!sink.writableFinished)));
+}
+
+/** Waits until what the sheet has handed on is compressed and the sink has taken it. */
+async function keepPace(page: ExcelJS.Worksheet, sink: Writable): Promise<void> {
+  const { stream } = page as unknown as { stream?: Piped };
+  const waiting = (): number => (stream?.pipes?.[0]?.writableLength ?? 0) + sink.writableLength;
+  await new Promise((resolve) => setImmediate(resolve));
+  while (!sink.destroyed && waiting() > mostWaiting) await new Promise((resolve) => setTimeout(resolve, 2));
+  if (sink.destroyed) throw wentAway();
+}
+
+function openPage(book: ExcelJS.stream.xlsx.WorkbookWriter, sheet: ReportSheet, part: number): ExcelJS.Worksheet {
+  const name = part === 1 ? sheet.name : `${sheet.name} ${part}`;
+  const table = sheet.columns.length > 0;
+  const page = book.addWorksheet(name, table ? { views: [{ state: 'frozen', ySplit: 1 }] } : {});
+  if (!table) {
+    page.columns = [{ width: 18 }, { width: 90 }, { width: 22 }];
+    return page;
+  }
+  page.columns = sheet.columns.map(({ width }) => ({ width: width ?? 12 }));
+  const head = page.addRow(sheet.columns.map(({ heading }) => heading));
+  for (let index = 1; index <= sheet.columns.length; index += 1) head.getCell(index).style = headStyle;
+  head.commit();
+  return page;
+}
+
+function closePage(page: ExcelJS.Worksheet, sheet: ReportSheet, rows: number): void {
+  if (sheet.columns.length > 0) {
+    page.autoFilter = { from: { row: 1, column: 1 }, to: { row: Math.max(rows, 1), column: sheet.columns.length } };
+  }
+  page.commit();
+}
+
+function addRow(
+  page: ExcelJS.Worksheet,
+  sheet: ReportSheet,
+  styles: readonly (Partial<ExcelJS.Style> | null)[],
+  cells: readonly ReportCell[],
+): void {
+  const row = page.addRow(cells);
+  if (sheet.columns.length === 0) {
+    if (sheet.boldFirst && cells.length > 0) row.getCell(1).style = boldStyle;
+    row.commit();
+    return;
+  }
+  for (let index = 0; index < sheet.columns.length; index += 1) {
+    const value = cells[index];
+    const style = styles[index];
+    if (style && typeof value === 'number') row.getCell(index + 1).style = style;
+    else if (sheet.columns[index]?.verdict && typeof value === 'string') {
+      const filled = verdictStyles[value];
+      if (filled) row.getCell(index + 1).style = filled;
+    }
+  }
+  row.commit();
+}
+
+/**
+ * Writes the sheets one after another.
+ * @param rowLimit rows a sheet may hold before it goes on as "… 2" (smaller in tests)
+ * @throws Error where the sink is destroyed before the end
+ */
+export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, rowLimit = mostRows): Promise<void> {
+  const book = new ExcelJS.stream.xlsx.WorkbookWriter({ stream: sink, useStyles: true, useSharedStrings: false });
+  for (const sheet of sheets) {
+    const styles = columnStyles(sheet.columns);
+    let part = 1;
+    let page = openPage(book, sheet, part);
+    let rows = 1;
+    let since = 0;
+    for await (const cells of sheet.rows()) {
+      if (rows >= rowLimit) {
+        closePage(page, sheet, rows);
+        part += 1;
+        page = openPage(book, sheet, part);
+        rows = 1;
+      }
+      addRow(page, sheet, styles, cells);
+      rows += 1;
+      since += 1;
+      if (since === breath) {
+        since = 0;
+        await keepPace(page, sink);
+      }
+    }
+    closePage(page, sheet, rows);
+  }
+  const early = await Promise.race([book.commit().then(() => false), closedEarly(sink)]);
+  if (early || (sink.destroyed && !sink.writableFinished)) throw wentAway();
+}
