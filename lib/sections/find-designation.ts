@@ -75,17 +75,25 @@ function sectionOf({ row, range }: Entry): Section {
   return section;
 }
 
+/** Letters of the series, without the X between figures. */
+const lettersOf = (key: string): string => key.replace(/(?<=\d)X(?=\d)|[^A-Z]/g, '');
+
+/**
+ * The designation whose text is nearest: up to two letters or figures apart, letters of the series counting double, since
+ * a size is mistyped more often than a series; among those, the one whose figures are nearest. A size typed without
+ * its series is compared as such.
+ */
 function nearest(key: string): string | null {
-  const letters = key.replace(/[^A-Z]|(?<=\d)X(?=\d)/g, '');
-  if (!/\d/.test(key) || notHeld.test(letters)) return null;
+  const letters = lettersOf(key);
+  if (!/\d/.test(key) || notHeld.test(letters) || /^[\d.]+$/.test(key)) return null;
   let best: string | null = null;
   let least = Infinity;
   for (const [candidate, { row }] of byKey) {
-    if (Math.abs(candidate.length - key.length) > 2) continue;
-    // A size that was mistyped is likelier than a series: letters that differ weigh double; nearer sizes win a tie.
-    const other = candidate.replace(/[^A-Z]|(?<=\d)X(?=\d)/g, '');
-    const apart = editDistance(candidate, key) + editDistance(other, letters);
-    const distance = apart + Math.min(0.9, sizeApart(candidate, key));
+    const series = letters === '' ? '' : lettersOf(candidate);
+    const compared = letters === '' ? candidate.replace(/^[A-Z]+|[A-Z]+$/g, '') : candidate;
+    if (Math.abs(compared.length - key.length) > 2) continue;
+    const apart = editDistance(compared, key) + editDistance(series, letters);
+    const distance = apart + Math.min(0.99, sizeApart(candidate, key));
     if (apart <= 2 && distance < least) {
       least = distance;
       best = row[0];
@@ -94,8 +102,14 @@ function nearest(key: string): string | null {
   return best;
 }
 
+/** How far apart the figures are, each relative to the larger, added up. */
 function sizeApart(a: string, b: string): number {
-  const first = Number(/\d+/.exec(a)?.[0] ?? 0);
-  const second = Number(/\d+/.exec(b)?.[0] ?? 0);
-  return Math.abs(first - second) / Math.max(first, second, 1);
+  const first = a.match(/[\d.]+/g) ?? [];
+  const second = b.match(/[\d.]+/g) ?? [];
+  let apart = 0;
+  for (let i = 0; i < Math.max(first.length, second.length); i++) {
+    const [x, y] = [Number(first[i] ?? 0), Number(second[i] ?? 0)];
+    apart += Math.abs(x - y) / Math.max(x, y, 1e-9);
+  }
+  return apart;
 }
