@@ -4,13 +4,12 @@ export type PersonRole = (typeof personRoles)[number];
 
 /** Whoever stands behind a request: a session row's person with the role they hold in that session's office. */
 export interface Person {
-  readonly id: string;
+  readonly id: number;
   readonly name: string;
   readonly email: string;
   readonly role: PersonRole;
-  readonly officeId: string;
+  readonly office: number;
   readonly officeName: string;
-  readonly sessionId: string;
 }
 
 const staff = ['lead', 'analyst', 'checker'] as const;
@@ -37,9 +36,9 @@ export const acts = Object.keys(table) as Act[];
  * @param of what it would be done to; leave out for things the person's own office is the whole of
  * @returns false for everything of another office, whatever the role
  */
-export function may(person: Pick<Person, 'role' | 'officeId'>, act: Act, of?: { readonly officeId: string }): boolean {
+export function may(person: Pick<Person, 'role' | 'office'>, act: Act, of?: { readonly office: number }): boolean {
   const roles: readonly PersonRole[] = table[act];
-  return roles.includes(person.role) && (of === undefined || of.officeId === person.officeId);
+  return roles.includes(person.role) && (of === undefined || of.office === person.office);
 }
 
 /** The page each role starts from. */

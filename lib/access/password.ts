@@ -3,8 +3,6 @@ import { hash, verify } from '@node-rs/argon2';
 
 const costs = { memoryCost: 19_456, timeCost: 2, parallelism: 1 } as const;
 
-export const passwordLength = { min: 10, max: 200 } as const;
-
 export function hashPassword(password: string): Promise<string> {
   return hash(password, costs);
 }

@@ -1,0 +1,21 @@
+import type { ReactNode } from 'react';
+import { DeskBar } from '@/app/_client/desk-bar';
+import { QueryProvider } from '@/app/_client/query-provider';
+import { pagePerson } from '@/app/_server/page-person';
+import { may } from '@/lib/access/may';
+
+/** The bar over every page of the office. Whether the page may be seen is settled by the page itself. */
+export default async function DeskLayout({ children }: { readonly children: ReactNode }) {
+  const person = await pagePerson();
+  if (person === null) return children;
+  const words = [
+    ...(may(person, 'read projects') ? [{ label: 'Projects', href: '/projects', within: ['/projects', '/batches'] }] : []),
+    ...(may(person, 'read people') ? [{ label: 'People', href: '/people', within: ['/people'] }] : []),
+  ];
+  return (
+    <QueryProvider>
+      <DeskBar office={person.officeName} person={person.name} role={person.role} home="/" words={words} />
+      <main id="content">{children}</main>
+    </QueryProvider>
+  );
+}

@@ -1,0 +1,67 @@
+/** What the API takes: one schema a body or query, with the sentence a person reads where it doesn't fit. */
+import { z } from 'zod';
+import { passwordLength } from '@/lib/access/password-length';
+import { personRoles } from '@/lib/access/may';
+
+const text = (what: string, max: number) =>
+  z
+    .string({ error: `Enter ${what}.` })
+    .trim()
+    .min(1, `Enter ${what}.`)
+    .max(max, `Keep ${what} to ${max} characters.`);
+
+export const emailInput = z
+  .string({ error: 'Enter an e-mail address.' })
+  .trim()
+  .toLowerCase()
+  .max(200, 'Keep the e-mail address to 200 characters.')
+  .pipe(z.email('Enter an e-mail address, like name@office.example.'));
+
+export const credentialsInput = z.object({
+  email: emailInput,
+  password: z.string().min(1, 'Enter your password.').max(passwordLength.max),
+});
+
+export const projectInput = z.object({
+  number: z.string().trim().max(40, 'Keep the number to 40 characters.').default(''),
+  name: text('the project’s name', 120),
+});
+
+export const personInput = z.object({
+  name: text('the person’s name', 120),
+  email: emailInput,
+  role: z.enum(personRoles, { error: 'Choose what they come to do: lead, analyst, checker or client.' }),
+  password: z
+    .string({ error: 'Enter a first password.' })
+    .min(passwordLength.min, `Give a first password of at least ${passwordLength.min} characters.`)
+    .max(passwordLength.max, `Keep the password to ${passwordLength.max} characters.`),
+});
+
+export const assignedInput = z.object({ people: z.array(z.number().int().positive()).max(500) });
+
+export const batchNameInput = text('the batch’s name', 120);
+
+/** Which page of a table's rows: after or before a cursor given by the page before it. */
+export const pageInput = z.object({
+  after: z.string().max(2000).optional(),
+  before: z.string().max(2000).optional(),
+  size: z.coerce.number().int().min(1, 'Ask for at least 1 row.').max(500, 'Ask for at most 500 rows.').default(100),
+});
+
+export const exportInput = z.object({
+  format: z.enum(['csv', 'xlsx'], { error: 'Choose the format: csv or xlsx.' }),
+});
+
+export const cellInput = z.object({
+  sheet: z.string().min(1).max(200),
+  cell: z.string().regex(/^[A-Z]{1,3}[1-9]\d{0,6}$/, 'Name a cell, like E412.'),
+  file: z.string().max(200).optional(),
+});
+
+/** Ids are whole numbers; anything else names nothing. */
+export const idInput = z
+  .string()
+  .regex(/^[1-9]\d{0,14}$/)
+  .transform(Number);
+export const frameNumberInput = z.coerce.number().int().min(1).max(20_000);
+export const letterInput = z.string().regex(/^[A-Z]{1,3}$/);
