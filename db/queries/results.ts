@@ -1,7 +1,11 @@
-/** Signatures for those who code against them; bodies follow in this folder. */
+import { instant } from '@/db/clock';
+import { packJson, packModel, packState, unpackJson, unpackModel, unpackState } from '@/db/encode';
+import { ListWriter, type Solved, summaryOf } from '@/db/list-rows';
 import type { RawDatabase } from '@/db/open';
-import type { Frame } from '@/lib/model/frame';
-import type { FrameEvaluation, MemberExtremes, Verdict } from '@/lib/results/result';
+import { inShortTransactions } from '@/db/short-transactions';
+import { rankOf } from '@/db/verdict-rank';
+import type { Frame, Purpose } from '@/lib/model/frame';
+import type { FrameEvaluation, MemberExtremes, ResultState, Verdict } from '@/lib/results/result';
 
 /** A frame version that waits to be run, under the name of the first frame that has it. */
 export interface WaitingFrame {
@@ -24,6 +28,9 @@ export interface MemberGoverning {
   readonly verdict: Verdict;
 }
 
+/** Ratio and verdict of a member under one result, where they were asked for. */
+export type MemberUnderResult = MemberExtremes & { readonly ratio?: number | null; readonly verdict?: Verdict | null };
+
 export interface FrameResults {
   readonly version: number;
   readonly frame: Frame;
@@ -31,28 +38,144 @@ export interface FrameResults {
   /** By member; [] for a frame that was not solved. */
   readonly members: readonly MemberGoverning[];
   /** By state of the evaluation, then by member. */
-  readonly extremes: readonly (readonly MemberExtremes[])[];
+  readonly extremes: readonly (readonly MemberUnderResult[])[];
+}
+
+/** What stands in frame_version.evaluation: all but the states, which have rows of their own. */
+interface StoredEvaluation {
+  readonly evaluation: Omit<FrameEvaluation, 'states' | 'allChecks'>;
+  readonly members: readonly MemberGoverning[];
 }
 
 /** Versions of the revision that still wait, in the order of its frames. Skips those in `inHand`. */
-export declare function listWaiting(
+export function listWaiting(
   raw: RawDatabase,
   revision: number,
   limit: number,
-  inHand?: ReadonlySet<number>,
-): WaitingFrame[];
+  inHand: ReadonlySet<number> = new Set(),
+): WaitingFrame[] {
+  const rows = raw
+    .prepare<[number], NamedVersion & { id: number; hash: string }>(
+      `select v.id, v.hash, v.model, f.frame_id, f.title, f.group_name, f.count, f.note
+       from revision_frame f indexed by revision_frame_status join frame_version v on v.id = f.version
+       where f.revision = ? and f.status = 'waiting' order by f.frame`,
+    )
+    .iterate(revision);
+  const found = new Map<number, WaitingFrame>();
+  for (const row of rows) {
+    if (inHand.has(row.id) || found.has(row.id)) continue;
+    found.set(row.id, { version: row.id, hash: row.hash, frame: frameOf(row) });
+    if (found.size >= limit) break;
+  }
+  return [...found.values()];
+}
 
 /** Versions of the revision: all, and those that still wait. */
-export declare function countWaiting(raw: RawDatabase, revision: number): { total: number; waiting: number };
+export function countWaiting(raw: RawDatabase, revision: number): { total: number; waiting: number } {
+  const { total, waiting } = raw
+    .prepare<[number], { total: number; waiting: number | null }>(
+      `select count(distinct version) as total, count(distinct case when status = 'waiting' then version end) as waiting
+       from revision_frame where revision = ?`,
+    )
+    .get(revision)!;
+  return { total, waiting: waiting ?? 0 };
+}
 
 /**
- * Stores a chunk's results in one transaction, for every revision that has these versions.
+ * Stores a chunk's results, for every revision that has these versions, a frame never in part: in one transaction
+ * where the chunk is small (about 2 ms a frame of four members and twelve results), in several where it is not.
  * A version that was stored before is left alone.
  *
  * @returns the versions that were stored now
  */
-export declare function insertChunkResults(
+export function insertChunkResults(
   raw: RawDatabase,
   results: readonly FrameResults[],
   run: { readonly person: number | null },
-): number[];
+): number[] {
+  const write = resultWriter(raw, run.person);
+  const stored: number[] = [];
+  inShortTransactions(raw, results, (result) => {
+    if (write(result)) stored.push(result.version);
+  });
+  return stored;
+}
+
+function resultWriter(raw: RawDatabase, person: number | null): (result: FrameResults) => boolean {
+  const lists = new ListWriter(raw);
+  const solve = raw.prepare(
+    `update frame_version set state = ?, evaluation = ?, verdict = ?, ratio = ?, check_name = ?, subject = ?, section = ?,
+     combination = ?, critical_load_factor = ?, mass = ?, reason = ?, residual = ?, equilibrium = ?, condition = ?, digits = ?,
+     second = ?, second_reason = ?, solved_at = ? where id = ? and state = 'waiting'`,
+  );
+  const state = raw.prepare('insert into result_state values (?, ?, ?, ?, ?, ?, ?, ?)');
+  const member = raw.prepare(`insert into member_result values (${Array(19).fill('?').join(',')})`);
+  const places = raw.prepare<[number], { revision: number; frame: number }>(
+    'select revision, frame from revision_frame where version = ? order by revision, frame',
+  );
+  const stamp = raw.prepare('update revision set stamp = stamp + 1 where id = ?');
+  return ({ version, frame, evaluation, members, extremes }) => {
+    const s = summaryOf({ frame, evaluation });
+    const c = evaluation.certificate;
+    const { changes } = solve.run(
+      evaluation.status, packEvaluation({ frame, evaluation, members }), s.verdict, s.ratio, s.check, s.subject, s.section,
+      s.combination, s.criticalLoadFactor, s.mass, s.reason, c?.residual ?? null, c?.equilibrium ?? null, c?.condition ?? null,
+      c?.digits ?? null, c?.second ?? null, c?.secondReason ?? null, instant(), version,
+    ); // prettier-ignore
+    if (changes === 0) return false;
+    evaluation.states.forEach((one, i) => {
+      state.run(version, i, one.name, one.kind, one.purpose, one.order, one.criticalLoadFactor, packState(one));
+      (extremes[i] ?? []).forEach(({ N, V, M, deflection, ratio, verdict }, m) => {
+        member.run(
+          version, i, m, N.max, N.maxAt, N.min, N.minAt, V.max, V.maxAt, V.min, V.minAt, M.max, M.maxAt, M.min, M.minAt,
+          deflection.value, deflection.at, ratio ?? null, verdict ? rankOf(verdict) : null,
+        ); // prettier-ignore
+      });
+    });
+    const where = places.all(version);
+    for (const place of where) lists.write(place.revision, place.frame, { frame, evaluation, members }, person);
+    lists.flush();
+    for (const revision of new Set(where.map((place) => place.revision))) stamp.run(revision);
+    return true;
+  };
+}
+
+function packEvaluation({ evaluation, members }: Solved): Buffer {
+  const { states: _states, allChecks: _all, ...rest } = evaluation;
+  return packJson({ evaluation: rest, members } satisfies StoredEvaluation);
+}
+
+export interface NamedVersion {
+  readonly frame_id: string;
+  readonly title: string | null;
+  readonly group_name: string;
+  readonly count: number;
+  readonly note: string | null;
+  readonly model: Buffer;
+}
+
+/** A stored model under the name that a revision's frame gives it. */
+export function frameOf(row: NamedVersion): Frame {
+  const { frame_id: id, title, group_name, count, note } = row;
+  return { id, title, group: group_name === '' ? null : group_name, count, note, ...unpackModel(row.model) };
+}
+
+export interface StoredState {
+  readonly name: string;
+  readonly kind: 'case' | 'combination';
+  readonly purpose: Purpose | null;
+  readonly order_of: 1 | 2;
+  readonly critical_load_factor: number | null;
+  readonly packed: Buffer;
+}
+
+/** A version's evaluation as it was stored, put together with its states in their order. */
+export function evaluationOf(stored: Buffer, states: readonly StoredState[]): Omit<Solved, 'frame'> {
+  const { evaluation, members } = unpackJson(stored) as StoredEvaluation;
+  return { evaluation: { ...evaluation, states: states.map(stateOf), allChecks: null }, members };
+}
+
+function stateOf(row: StoredState): ResultState {
+  const { name, kind, purpose, order_of: order, critical_load_factor: criticalLoadFactor } = row;
+  return { name, kind, purpose, order, criticalLoadFactor, ...unpackState(row.packed) };
+}

@@ -1,0 +1,136 @@
+/** Writes the rows of a solved frame into the lists of a revision that are filtered and sorted (README, "Lists"). */
+import { orNone, orNoneHigh } from '@/db/absent';
+import type { RawDatabase } from '@/db/open';
+import type { MemberGoverning } from '@/db/queries/results';
+import { TallyWriter } from '@/db/tally';
+import { rankOf } from '@/db/verdict-rank';
+import type { Frame } from '@/lib/model/frame';
+import type { Check, FrameEvaluation } from '@/lib/results/result';
+import { governingIndex } from '@/lib/results/verdict';
+
+/** What a frame's rows are made from: its model and what is stored of its version. */
+export interface Solved {
+  readonly frame: Frame;
+  readonly evaluation: FrameEvaluation;
+  readonly members: readonly MemberGoverning[];
+}
+
+/** Summary of a frame as the frames table and its version show it. */
+export function summaryOf({ frame, evaluation }: Omit<Solved, 'members'>) {
+  const { governing } = evaluation;
+  const check = governing ? evaluation.checks[governingIndex(evaluation.checks)] : undefined;
+  const factors = evaluation.states.flatMap((state) => state.criticalLoadFactor ?? []);
+  return {
+    status: evaluation.status,
+    verdict: rankOf(evaluation.verdict),
+    ratio: governing?.ratio ?? null,
+    check: governing?.check ?? null,
+    subject: governing?.subject ?? null,
+    combination: governing?.combination ?? null,
+    section: sectionOf(frame, check),
+    criticalLoadFactor: factors.length > 0 ? Math.min(...factors) : null,
+    mass: evaluation.mass,
+    reason: evaluation.failure?.message ?? (evaluation.notChecked.length > 0 ? evaluation.notChecked.join('; ') : null),
+  };
+}
+
+function sectionOf(frame: Frame, check: Check | undefined): string | null {
+  const member = check?.member === null || check?.member === undefined ? undefined : frame.members[check.member];
+  return member ? (frame.sections[member.section]?.name ?? null) : null;
+}
+
+/** Prepared once for many frames; call inside a transaction. */
+export class ListWriter {
+  private readonly tally: TallyWriter;
+  private readonly frame;
+  private readonly member;
+  private readonly check;
+  private readonly reaction;
+  private readonly movement;
+
+  constructor(raw: RawDatabase) {
+    this.tally = new TallyWriter(raw);
+    this.frame = raw.prepare(
+      `update revision_frame set status = ?, verdict = ?, ratio = ?, check_name = ?, subject = ?, section = ?, combination = ?,
+       critical_load_factor = ?, mass = ?, reason = ?, run_by = ? where revision = ? and frame = ?`,
+    );
+    const insert = (table: string, columns: number) =>
+      raw.prepare(`insert into ${table} values (${Array(columns).fill('?').join(',')})`);
+    this.member = insert('member_row', 17);
+    this.check = insert('check_row', 17);
+    this.reaction = insert('reaction_row', 10);
+    this.movement = insert('movement_row', 11);
+  }
+
+  /** Adds a solved (or not solvable) frame's rows to a revision, where it has none yet. */
+  write(revision: number, index: number, solved: Solved, runBy: number | null): void {
+    const s = summaryOf(solved);
+    this.frame.run(
+      s.status, s.verdict, orNone(s.ratio), s.check ?? '', s.subject, s.section ?? '', s.combination ?? '',
+      orNoneHigh(s.criticalLoadFactor), orNone(s.mass), s.reason, runBy, revision, index,
+    ); // prettier-ignore
+    if (solved.evaluation.status !== 'solved') return;
+    this.writeMembers(revision, index, solved);
+    this.writeChecks(revision, index, solved);
+    this.writeStates(revision, index, solved);
+  }
+
+  /** Brings the counts of what was written into the same transaction. */
+  flush(): void {
+    this.tally.flush();
+  }
+
+  private writeMembers(revision: number, index: number, { frame, members }: Solved): void {
+    frame.members.forEach((member, i) => {
+      const found = members[i];
+      if (!found) return;
+      const start = frame.nodes[member.start]!;
+      const end = frame.nodes[member.end]!;
+      const role = member.role ?? '';
+      const section = frame.sections[member.section]?.name ?? '';
+      const group = member.group ?? '';
+      const check = found.check ?? '';
+      const verdict = rankOf(found.verdict);
+      this.member.run(
+        revision, index, i, member.id, role, section, group, Math.hypot(end.x_m - start.x_m, end.y_m - start.y_m),
+        found.combination, found.N, found.V, found.M, found.at, found.deflection, check, orNone(found.ratio), verdict,
+      ); // prettier-ignore
+      this.tally.add(revision, 'members', role, section, group, check, String(verdict));
+    });
+  }
+
+  private writeChecks(revision: number, index: number, { frame, evaluation }: Solved): void {
+    evaluation.checks.forEach((check, i) => {
+      const member = check.member === null ? undefined : frame.members[check.member];
+      const role = member?.role ?? '';
+      const section = (member && frame.sections[member.section]?.name) ?? '';
+      const combination = check.combination ?? '';
+      const verdict = rankOf(check.verdict);
+      this.check.run(
+        revision, index, i, check.subject, role, section, check.check, combination, check.at, check.face,
+        check.value, check.limit, check.quantity, orNone(check.ratio), verdict, check.reason, check.reference,
+      ); // prettier-ignore
+      this.tally.add(revision, 'checks', role, section, check.check, combination, String(verdict));
+    });
+  }
+
+  private writeStates(revision: number, index: number, { frame, evaluation }: Solved): void {
+    evaluation.states.forEach((state, result) => {
+      const kind = state.kind === 'case' ? 0 : 1;
+      frame.supports.forEach((support, i) => {
+        const node = frame.nodes[support.node]!.id;
+        const [fx, fy, mz] = state.reactions.subarray(3 * i, 3 * i + 3);
+        this.reaction.run(revision, index, result, i, node, state.name, kind, orNone(fx!), orNone(fy!), orNone(mz!));
+        this.tally.add(revision, 'reactions', node, state.name, String(kind), '', '');
+      });
+      frame.nodes.forEach((node, i) => {
+        const [ux, uy, rz] = state.displacements.subarray(3 * i, 3 * i + 3);
+        const place = node.place ?? '';
+        this.movement.run(
+          revision, index, result, i, node.id, place, state.name, kind, orNone(ux!), orNone(uy!), orNone(rz!),
+        ); // prettier-ignore
+        this.tally.add(revision, 'movements', node.id, place, state.name, String(kind), '');
+      });
+    });
+  }
+}

@@ -1,0 +1,28 @@
+import type { RawDatabase } from '@/db/open';
+
+/** A transaction takes no new item after this long, so that it ends well under the 50 ms it may last. */
+const slice_ms = 20;
+
+/**
+ * Does `work` for every item, in as many transactions as keep each short; an item is never divided.
+ * Between two of them others may write.
+ */
+export function inShortTransactions<T>(raw: RawDatabase, items: Iterable<T>, work: (item: T) => void): void {
+  const iterator = items[Symbol.iterator]();
+  // An item is fetched (and made, where items come from a generator) before its transaction begins.
+  let item = iterator.next();
+  while (item.done !== true) {
+    raw.exec('begin immediate');
+    try {
+      const began = performance.now();
+      do {
+        work(item.value);
+        item = iterator.next();
+      } while (item.done !== true && performance.now() - began < slice_ms);
+      raw.exec('commit');
+    } catch (fault) {
+      if (raw.inTransaction) raw.exec('rollback');
+      throw fault;
+    }
+  }
+}
