@@ -1,0 +1,181 @@
+import type { Frame } from '@/lib/model/frame';
+import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
+import type { MemberData } from './member-data';
+import type { Topology } from './topology';
+
+/**
+ * Stiffness of a member between its nodes in the terms that matter: axial, and bending with the joints condensed.
+ * N/m, N, N·m: Y₁ = kvv(v₁ − v₂) + kv1 φ₁ + kv2 φ₂, m₁ = kv1(v₁ − v₂) + S11 φ₁ + S12 φ₂, and so on.
+ */
+export interface MemberStiffness {
+  ka: number;
+  kvv: number;
+  kv1: number;
+  kv2: number;
+  S11: number;
+  S12: number;
+  S22: number;
+}
+
+const joints = emptyJointStiffness();
+
+/** First-order stiffness of a member. README (2.2), (2.3). */
+export function memberStiffness(m: MemberData, out: MemberStiffness): MemberStiffness {
+  const L = m.length;
+  const { S11, S12, S22 } = jointStiffness(m.EI, L, m.startSpring, m.endSpring, joints);
+  out.ka = m.EA / L;
+  out.kvv = (S11 + 2 * S12 + S22) / (L * L);
+  out.kv1 = (S11 + S12) / L;
+  out.kv2 = (S12 + S22) / L;
+  out.S11 = S11;
+  out.S12 = S12;
+  out.S22 = S22;
+  return out;
+}
+
+export function emptyMemberStiffness(): MemberStiffness {
+  return { ka: 0, kvv: 0, kv1: 0, kv2: 0, S11: 0, S12: 0, S22: 0 };
+}
+
+/** Angle of each node's axes from global X: its support's, else 0. Radians, by node. */
+export function nodeAngles(frame: Frame): Float64Array {
+  const angles = new Float64Array(frame.nodes.length);
+  for (const support of frame.supports) angles[support.node] = support.angle_rad;
+  return angles;
+}
+
+/** Adds Tᵀ k T of one member to K (blocks of topology.ts); held rows and columns are left out. */
+export function addMember(K: Float64Array, t: Topology, m: MemberData, k: MemberStiffness, angles: Float64Array): void {
+  const pa = t.positionOf[m.start]!;
+  const pb = t.positionOf[m.end]!;
+  if (pa >= 0) addEnd(K, t, pa, m.start, m, angles[m.start]!, k.ka, k.kvv, k.kv1, k.S11);
+  if (pb >= 0) addEnd(K, t, pb, m.end, m, angles[m.end]!, k.ka, k.kvv, -k.kv2, k.S22);
+  if (pa >= 0 && pb >= 0) addCoupling(K, t, pa, pb, m, k, angles);
+}
+
+function addEnd(
+  K: Float64Array,
+  t: Topology,
+  p: number,
+  node: number,
+  m: MemberData,
+  angle: number,
+  ka: number,
+  kvv: number,
+  kvt: number,
+  S: number,
+): void {
+  // prettier-ignore
+  let c = m.cos;
+  let s = m.sin;
+  if (angle !== 0) {
+    const ca = Math.cos(angle);
+    const sa = Math.sin(angle);
+    c = m.cos * ca + m.sin * sa;
+    s = m.sin * ca - m.cos * sa;
+  }
+  const fx = t.free[3 * node]!;
+  const fy = t.free[3 * node + 1]!;
+  const fz = t.free[3 * node + 2]!;
+  const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+  const xy = fx * fy * c * s * (ka - kvv);
+  const xt = fx * fz * -s * kvt;
+  const yt = fy * fz * c * kvt;
+  K[at] = K[at]! + fx * (c * c * ka + s * s * kvv);
+  K[at + 1] = K[at + 1]! + xy;
+  K[at + 2] = K[at + 2]! + xt;
+  K[at + 3] = K[at + 3]! + xy;
+  K[at + 4] = K[at + 4]! + fy * (s * s * ka + c * c * kvv);
+  K[at + 5] = K[at + 5]! + yt;
+  K[at + 6] = K[at + 6]! + xt;
+  K[at + 7] = K[at + 7]! + yt;
+  K[at + 8] = K[at + 8]! + fz * S;
+}
+
+const block = new Float64Array(9);
+
+function addCoupling(
+  K: Float64Array,
+  t: Topology,
+  pa: number,
+  pb: number,
+  m: MemberData,
+  k: MemberStiffness,
+  angles: Float64Array,
+): void {
+  let c1 = m.cos;
+  let s1 = m.sin;
+  let c2 = m.cos;
+  let s2 = m.sin;
+  const a = angles[m.start]!;
+  const b = angles[m.end]!;
+  if (a !== 0) {
+    c1 = m.cos * Math.cos(a) + m.sin * Math.sin(a);
+    s1 = m.sin * Math.cos(a) - m.cos * Math.sin(a);
+  }
+  if (b !== 0) {
+    c2 = m.cos * Math.cos(b) + m.sin * Math.sin(b);
+    s2 = m.sin * Math.cos(b) - m.cos * Math.sin(b);
+  }
+  const { ka, kvv, kv1, kv2, S12 } = k;
+  const x0 = -ka * c2;
+  const x1 = -ka * s2;
+  const y0 = kvv * s2;
+  const y1 = -kvv * c2;
+  block[0] = c1 * x0 - s1 * y0;
+  block[1] = c1 * x1 - s1 * y1;
+  block[2] = -s1 * kv2;
+  block[3] = s1 * x0 + c1 * y0;
+  block[4] = s1 * x1 + c1 * y1;
+  block[5] = c1 * kv2;
+  block[6] = kv1 * s2;
+  block[7] = -kv1 * c2;
+  block[8] = S12;
+  const i = Math.min(pa, pb);
+  const j = Math.max(pa, pb);
+  const at = 9 * (t.columnStart[j]! + i - t.firstRow[j]!);
+  for (let r = 0; r < 3; r++) {
+    const fr = t.free[3 * m.start + r]!;
+    for (let q = 0; q < 3; q++) {
+      const value = fr * t.free[3 * m.end + q]! * block[3 * r + q]!;
+      const to = pa < pb ? at + 3 * r + q : at + 3 * q + r;
+      K[to] = K[to]! + value;
+    }
+  }
+}
+
+/** Adds the supports' springs, and 1 on the diagonal of everything that is not an unknown (its own equation: 1·d = 0). */
+export function addSupports(K: Float64Array, t: Topology, frame: Frame): void {
+  for (let p = 0; p < t.size; p++) {
+    const node = t.nodeAt[p]!;
+    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+    for (let r = 0; r < 3; r++) if (!t.free[3 * node + r]) K[at + 4 * r] = 1;
+  }
+  for (const support of frame.supports) {
+    const p = t.positionOf[support.node]!;
+    if (p < 0) continue;
+    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+    if (typeof support.ux === 'number') K[at] = K[at]! + support.ux;
+    if (typeof support.uy === 'number') K[at + 4] = K[at + 4]! + support.uy;
+    if (typeof support.rz === 'number' && t.free[3 * support.node + 2]) K[at + 8] = K[at + 8]! + support.rz;
+  }
+}
+
+/** K = Σ Tᵀ k T + springs, with one element a member. README (2.6). @param K 9 × blocks, overwritten */
+export function assemble(K: Float64Array, t: Topology, frame: Frame, data: readonly MemberData[], angles: Float64Array): void {
+  K.fill(0);
+  const k = emptyMemberStiffness();
+  for (const m of data) addMember(K, t, m, memberStiffness(m, k), angles);
+  addSupports(K, t, frame);
+}
+
+/** The diagonal of K, 3 a position. */
+export function diagonalOf(K: Float64Array, t: Topology, out: Float64Array): Float64Array {
+  for (let p = 0; p < t.size; p++) {
+    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+    out[3 * p] = K[at]!;
+    out[3 * p + 1] = K[at + 4]!;
+    out[3 * p + 2] = K[at + 8]!;
+  }
+  return out;
+}

@@ -1,0 +1,93 @@
+import type { Frame } from '@/lib/model/frame';
+import { emptyMemberStiffness, memberStiffness } from './assemble';
+import { endForces, endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
+import { memberData } from './member-data';
+import type { Topology } from './topology';
+
+/** A case as recovered: what a ResultState holds of it, and how far its nodes are out of balance. */
+export interface Recovered {
+  readonly displacements: Float64Array;
+  readonly reactions: Float64Array;
+  readonly endForces: Float64Array;
+  /** K d − f by node and direction, node axes, at unknowns; N and N·m. */
+  readonly outOfBalance: Float64Array;
+}
+
+/** q = k T d + q_F and R = what the members ask of the supports − loads put straight on them. README (2.8). */
+export function recover(
+  frame: Frame,
+  t: Topology,
+  angles: Float64Array,
+  loads: LoadVectors,
+  d: Float64Array,
+  loadCase: number,
+): Recovered {
+  const data = memberData(frame);
+  const nodes = frame.nodes.length;
+  const all = loads.prescribed.slice(loadCase * nodes * 3, (loadCase + 1) * nodes * 3);
+  for (let p = 0; p < t.size; p++) {
+    const node = t.nodeAt[p]!;
+    for (let r = 0; r < 3; r++) if (t.free[3 * node + r]) all[3 * node + r] = d[(loadCase * t.size + p) * 3 + r]!;
+  }
+  const forces = new Float64Array(6 * data.length);
+  // what the nodes must do to the members, node axes
+  const asked = new Float64Array(3 * nodes);
+  const k = emptyMemberStiffness();
+  const u = new Float64Array(6);
+  const q = new Float64Array(6);
+  data.forEach((m, i) => {
+    toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
+    endForces(memberStiffness(m, k), u, q);
+    const fixed = (loadCase * data.length + i) * 6;
+    for (let r = 0; r < 6; r++) q[r] = q[r]! + loads.fixedEnd[fixed + r]!;
+    for (let end = 0; end < 2; end++) {
+      const node = end === 0 ? m.start : m.end;
+      const [x, y] = endInNodeAxes(m, angles[node]!, q[3 * end]!, q[3 * end + 1]!);
+      asked[3 * node] = asked[3 * node]! + x;
+      asked[3 * node + 1] = asked[3 * node + 1]! + y;
+      asked[3 * node + 2] = asked[3 * node + 2]! + q[3 * end + 2]!;
+    }
+    // internal forces: N = −X₁, V = Y₁, M = −m₁ at the start; N = X₂, V = −Y₂, M = m₂ at the end (+ 0 makes −0 a 0)
+    forces[6 * i] = -q[0]! + 0;
+    forces[6 * i + 1] = q[1]! + 0;
+    forces[6 * i + 2] = -q[2]! + 0;
+    forces[6 * i + 3] = q[3]! + 0;
+    forces[6 * i + 4] = -q[4]! + 0;
+    forces[6 * i + 5] = q[5]! + 0;
+  });
+  for (const load of frame.nodeLoads) {
+    if (load.case !== loadCase) continue;
+    const ca = Math.cos(angles[load.node]!);
+    const sa = Math.sin(angles[load.node]!);
+    const o = 3 * load.node;
+    asked[o] = asked[o]! - (load.Fx_N * ca + load.Fy_N * sa);
+    asked[o + 1] = asked[o + 1]! - (load.Fy_N * ca - load.Fx_N * sa);
+    asked[o + 2] = asked[o + 2]! - load.Mz_Nm;
+  }
+  const reactions = new Float64Array(3 * frame.supports.length);
+  frame.supports.forEach((support, i) => {
+    const o = 3 * support.node;
+    const held = [support.ux, support.uy, support.rz].map((restraint, r) => {
+      if (restraint === 'free') return 0;
+      const R = restraint === 'fixed' ? asked[o + r]! : -restraint * all[o + r]!;
+      asked[o + r] = asked[o + r]! - R;
+      return R;
+    });
+    const ca = Math.cos(support.angle_rad);
+    const sa = Math.sin(support.angle_rad);
+    reactions[3 * i] = held[0]! * ca - held[1]! * sa + 0;
+    reactions[3 * i + 1] = held[0]! * sa + held[1]! * ca + 0;
+    reactions[3 * i + 2] = held[2]! + 0;
+  });
+  for (let i = 0; i < nodes; i++) {
+    for (let r = 0; r < 3; r++) if (!t.free[3 * i + r]) asked[3 * i + r] = 0;
+    const ca = Math.cos(angles[i]!);
+    const sa = Math.sin(angles[i]!);
+    const x = all[3 * i]!;
+    const y = all[3 * i + 1]!;
+    all[3 * i] = x * ca - y * sa;
+    all[3 * i + 1] = x * sa + y * ca;
+    if (t.noRotation[i]) all[3 * i + 2] = NaN;
+  }
+  return { displacements: all, reactions, endForces: forces, outOfBalance: asked };
+}
