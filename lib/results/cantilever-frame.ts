@@ -1,6 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 
-/** For tests. 
+/**
  * For tests: a cantilever of 3 m, 200 mm × 100 mm solid steel bar, 2 kN downwards at its tip in case "tip", with self-weight in
  * case "dead"; one strength and one service combination.
  */

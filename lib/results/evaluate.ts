@@ -1,13 +1,11 @@
 /** Analysis, checks, mass and verdict of one frame: what a run does with each frame, wherever it runs. */
-import { createAnalyser } from '@/lib/analysis/analyser';
+import type { Analyser } from '@/lib/analysis/analyser';
 import { checkFrame } from '@/lib/checks/check-frame';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import { frameMass } from '@/lib/results/mass';
 import type { Failure, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { frameVerdict, governingOf } from '@/lib/results/verdict';
-
-export type Analyser = ReturnType<typeof createAnalyser>;
 
 export interface EvaluateOptions {
   /** Make the second, independent analysis too (lib/results/second-sample.ts chooses). */
@@ -23,8 +21,8 @@ export interface EvaluateOptions {
  * @returns status "not solved" with its failure where the frame moves freely, hangs apart or fails its certificate
  */
 export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
-  const analysis = analyser.analyse(frame, settings, { second: options.second });
-  if (!('states' in analysis)) return unsolved(frame, analysis);
+  const analysis = analyser.analyse(frame, { second: options.second, settings });
+  if (!analysis.ok) return unsolved(frame, analysis.failure);
   const bad = analysis.states.find((state) => !finite(state));
   if (bad) {
     const message = `the results of ${bad.name} are not finite numbers: the frame's stiffness or loads are out of all proportion`;

@@ -77,6 +77,12 @@ describe('what the analysis finds wrong', () => {
     ]);
   });
 
+  it('is told once, however often it is asked for', () => {
+    const failures = [{ frame: 'F1', failure: mechanism }];
+    const problems = problemsWithFailures(intake, failures);
+    expect(problemsWithFailures({ ...intake, problems }, failures)).toEqual(problems);
+  });
+
   it('leaves a failed certificate to the frame’s reasons', () => {
     const failed: Failure = { code: 'not-solved', message: 'residual 1e-3', node: null };
     expect(problemsWithFailures(intake, [{ frame: 'F1', failure: failed }])).toEqual(intake.problems);

@@ -16,24 +16,27 @@ export type FailureContext = Pick<Intake, 'problems' | 'sheets' | 'rows'>;
  * A failed certificate is no problem of a sheet: it stands in the frame's reasons only.
  */
 export function problemsWithFailures(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
-  const found = failureProblems(intake, failures);
-  if (found.length === 0) return intake.problems;
-  const order = new Map(intake.sheets.map((sheet, i) => [sheet.name, i] as const));
-  const at = (p: Problem): number => (p.sheet === null ? -1 : (order.get(p.sheet) ?? order.size));
-  const after = (p: Problem, q: Problem): boolean => {
-    if (at(p) !== at(q)) return at(p) > at(q);
-    if ((p.row ?? 0) !== (q.row ?? 0)) return (p.row ?? 0) > (q.row ?? 0);
-    return columnNumber(p.cell) > columnNumber(q.cell);
-  };
-  const all = [...intake.problems];
-  for (const problem of found) {
-    const place = all.findIndex((other) => after(other, problem));
-    all.splice(place < 0 ? all.length : place, 0, problem);
-  }
-  return all;
+  return problemsInOrder([...intake.problems, ...failureProblems(intake, failures)], intake.sheets);
 }
 
-function failureProblems(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
+/** Problems in the order of sheets in the file, rows, columns; those of one cell stay as they are. */
+export function problemsInOrder(problems: readonly Problem[], sheets: readonly SheetRead[]): readonly Problem[] {
+  const byName = new Map<string, number>();
+  const byFile = new Map<string, number>();
+  sheets.forEach((sheet, i) => {
+    if (!byName.has(sheet.name)) byName.set(sheet.name, i);
+    byFile.set(`${sheet.file} ${sheet.name}`, i);
+  });
+  const at = (p: Problem): number =>
+    p.sheet === null ? -1 : (byFile.get(`${p.file ?? ''} ${p.sheet}`) ?? byName.get(p.sheet) ?? sheets.length);
+  return problems
+    .map((problem, i) => ({ problem, i, sheet: at(problem), row: problem.row ?? 0, column: columnNumber(problem.cell) }))
+    .sort((a, b) => a.sheet - b.sheet || a.row - b.row || a.column - b.column || a.i - b.i)
+    .map(({ problem }) => problem);
+}
+
+/** Problems for what the analysis found, one a cell; without those that `intake.problems` already holds. */
+export function failureProblems(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
   const rows = failures.length > 0 ? new RowFinder(intake) : null;
   const byCell = new Map<string, Problem & { frames: string[] }>();
   for (const { frame, failure } of failures) {
@@ -59,7 +62,9 @@ function failureProblems(intake: FailureContext, failures: readonly FrameFailure
       stopsAll: false,
     });
   }
-  return [...byCell.values()];
+  const same = (p: Problem): string => `${p.code} ${p.sheet ?? ''} ${p.cell ?? ''} ${p.cell === null ? (p.frames[0] ?? '') : ''}`;
+  const known = new Set(intake.problems.map(same));
+  return [...byCell.values()].filter((problem) => !known.has(same(problem)));
 }
 
 interface Place {

@@ -1,12 +1,13 @@
 /** The published results file (lib/results/schema.ts), written frame by frame: the same input gives the same bytes. */
-import { memberExtremes, memberLine } from '@/lib/analysis/member-line';
+import { memberExtremes } from '@/lib/analysis/member-extremes';
+import { memberLine } from '@/lib/analysis/member-line';
 import type { FrameRead } from '@/lib/intake/intake';
 import type { Frame } from '@/lib/model/frame';
 import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
+import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import type { Check, Extreme, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { resultsFormat, type FrameResultJson, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
-import type { ResultSource } from '@/lib/results/source';
 
 /** Reason given for a frame that its sheets do not let run. */
 export const notRead = 'not analysed: errors in its sheets';
@@ -150,7 +151,7 @@ export function problemJson(problem: Problem): ProblemJson {
 }
 
 /** The file as pieces of text in order, one frame a line; never holds more than a frame. */
-export async function* resultsJson(source: ResultSource, options: { readonly all: boolean }): AsyncGenerator<string> {
+export async function* resultsJson(source: ReportSource, options: { readonly all: boolean }): AsyncGenerator<string> {
   const { input } = source;
   const files = input.files.map(({ name, sha256, size }) => ({ name, sha256, size }));
   yield `{"format":${JSON.stringify(resultsFormat)},"engine":${JSON.stringify(source.engine)},\n`;
@@ -163,8 +164,8 @@ export async function* resultsJson(source: ResultSource, options: { readonly all
   }
   yield '],\n"frames":[';
   comma = '\n';
-  for await (const { read, evaluation } of source.frames()) {
-    yield comma + JSON.stringify(frameResultJson(read, evaluation, options.all));
+  for await (const each of source.frames({ states: true })) {
+    yield comma + JSON.stringify(frameResultJson(each, each.evaluation, options.all));
     comma = ',\n';
   }
   yield ']}\n';

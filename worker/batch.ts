@@ -1,0 +1,102 @@
+/** The command line: the same intake, analysis and checks as the web application, without server or account. */
+import { mkdir, readFile } from 'node:fs/promises';
+import { basename, dirname, resolve } from 'node:path';
+import { readIntake } from '@/lib/intake/read-intake';
+import type { InputFile, Intake } from '@/lib/intake/intake';
+import { readArguments, usage, type BatchArguments } from '@/worker/command/arguments';
+import { evaluateBatch, type EvaluatedBatch } from '@/worker/command/evaluate-batch';
+import { ProgressBar } from '@/worker/command/progress-bar';
+import { summarise } from '@/worker/command/summary';
+import { writeCsvFolder, writeJsonFile, writeWorkbookFile } from '@/worker/threads/write-files';
+
+/**
+ * Runs the command with the words typed after `--`, paths relative to `folder`.
+ * @returns 0 every frame solved · 1 some not · 2 nothing could be read, or the arguments make no sense
+ */
+export async function runBatch(words: readonly string[], folder: string): Promise<0 | 1 | 2> {
+  const wanted = readArguments(words);
+  if ('wrong' in wanted) {
+    process.stderr.write(`${wanted.wrong}\n\n${usage}\n`);
+    return 2;
+  }
+  const files = await readFiles(wanted.files, folder);
+  if (!files) return 2;
+  const intake = await readIntake(files);
+  const bar = new ProgressBar(intake.frames.filter(({ frame }) => frame !== null).length);
+  const batch = await evaluateBatch(intake, { all: wanted.all, onDone: (done) => bar.show(done) });
+  bar.end();
+  try {
+    if (!(await writeOutputs(batch, wanted, folder))) return 2;
+    if (nothingRead(intake)) {
+      for (const line of problemLines(intake)) process.stderr.write(`${line}\n`);
+      return 2;
+    }
+    if (!wanted.json && !wanted.xlsx && !wanted.csv) process.stdout.write(await summarise(batch));
+    return batch.solved === intake.frames.length ? 0 : 1;
+  } finally {
+    batch.close();
+  }
+}
+
+/** Nothing could be read: no frame was found, or the whole batch is stopped by a problem with its files. */
+function nothingRead(intake: Intake): boolean {
+  return intake.frames.length === 0 || intake.problems.some((problem) => problem.stopsAll);
+}
+
+function* problemLines({ problems }: Intake): Generator<string> {
+  const worst = problems.filter((problem) => problem.severity === 'error');
+  for (const { file, sheet, cell, message } of worst.slice(0, 20)) {
+    const place = [sheet ?? file, cell].filter(Boolean).join(', ');
+    yield place ? `${place}: ${message}` : message;
+  }
+  if (worst.length > 20) yield `… and ${worst.length - 20} more. --json OUT writes them all.`;
+  if (worst.length === 0) yield 'No frame was found in what was sent.';
+}
+
+async function readFiles(names: readonly string[], folder: string): Promise<InputFile[] | null> {
+  const files: InputFile[] = [];
+  for (const name of names) {
+    try {
+      files.push({ name: basename(name), bytes: await readFile(resolve(folder, name)) });
+    } catch (error) {
+      process.stderr.write(`${name} could not be read: ${why(error)}.\n`);
+      return null;
+    }
+  }
+  return files;
+}
+
+async function writeOutputs(batch: EvaluatedBatch, wanted: BatchArguments, folder: string): Promise<boolean> {
+  const outputs: readonly (readonly [string | null, (path: string) => Promise<void>])[] = [
+    [wanted.json, (path) => writeJsonFile(batch, path, { all: wanted.all })],
+    [wanted.xlsx, (path) => writeWorkbookFile(batch, path)],
+    [wanted.csv, (path) => writeCsvFolder(batch, path)],
+  ];
+  for (const [name, write] of outputs) {
+    if (name === null) continue;
+    const path = resolve(folder, name);
+    try {
+      await mkdir(dirname(path), { recursive: true });
+      await write(path);
+    } catch (error) {
+      if (!isFileError(error)) throw error;
+      process.stderr.write(`${name} could not be written: ${why(error)}.\n`);
+      return false;
+    }
+  }
+  return true;
+}
+
+const isFileError = (error: unknown): error is NodeJS.ErrnoException => error instanceof Error && 'syscall' in error;
+
+function why(error: unknown): string {
+  if (!isFileError(error)) return String(error);
+  const words: Record<string, string> = {
+    ENOENT: 'there is no such file or folder',
+    EACCES: 'it is not allowed',
+    EISDIR: 'it is a folder',
+    ENOTDIR: 'a part of its path is not a folder',
+    ENOSPC: 'the disk is full',
+  };
+  return words[error.code ?? ''] ?? error.message;
+}

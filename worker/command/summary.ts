@@ -1,0 +1,63 @@
+/** What the command line prints where no output is named. */
+import type { Verdict } from '@/lib/results/result';
+import { formatRatio } from '@/lib/units/format';
+import type { EvaluatedBatch } from './evaluate-batch';
+
+interface Line {
+  readonly frame: string;
+  readonly verdict: Verdict;
+  readonly ratio: number | null;
+  readonly where: string;
+  readonly reason: string;
+}
+
+/** Frames, counts by verdict, and the ten worst (over first, then near, by ratio) as a table. */
+export async function summarise(source: EvaluatedBatch): Promise<string> {
+  const counts: Record<Verdict, number> = { over: 0, 'not checked': 0, near: 0, within: 0 };
+  let unsolved = 0;
+  const worst: Line[] = [];
+  for await (const { id, evaluation } of source.frames({ states: false })) {
+    const verdict = evaluation?.verdict ?? 'not checked';
+    counts[verdict]++;
+    if (evaluation?.status !== 'solved') unsolved++;
+    const g = evaluation?.governing;
+    worst.push({
+      frame: id,
+      verdict,
+      ratio: g?.ratio ?? null,
+      where: g ? [g.check, g.subject ?? '', g.combination ?? ''].filter(Boolean).join(' · ') : '',
+      reason: evaluation ? (evaluation.notChecked[0] ?? '') : 'errors in its sheets',
+    });
+    // Keep the worst only, however many frames there are; the order of the sheet on a tie.
+    if (worst.length > 200) keepWorst(worst);
+  }
+  keepWorst(worst);
+  const by = (severity: string): number => source.problems.filter((problem) => problem.severity === severity).length;
+  const lines = [
+    `${source.input.name}  sha256 ${source.input.sha256.slice(0, 12)}…  ${source.engine}`,
+    `${source.frameCount} frames: ${counts.over} over, ${counts['not checked']} not checked, ${counts.near} near, ${counts.within} within; ${unsolved} not solved`,
+    `Problems in the sheets: ${by('error')} errors, ${by('warning')} warnings, ${by('note')} notes`,
+    '',
+    'Worst first',
+    ...table(worst, source.settings.nearLimit),
+    '',
+    'Results of a linear-elastic plane model of what the sheets say, to be reviewed by a competent engineer.',
+  ];
+  return `${lines.join('\n')}\n`;
+}
+
+const rank: Readonly<Record<Verdict, number>> = { over: 3, 'not checked': 2, near: 1, within: 0 };
+
+function keepWorst(lines: Line[]): void {
+  lines.sort((a, b) => rank[b.verdict] - rank[a.verdict] || (b.ratio ?? -1) - (a.ratio ?? -1));
+  lines.length = Math.min(lines.length, 10);
+}
+
+function table(lines: readonly Line[], nearLimit: number): string[] {
+  const cells = [
+    ['frame', 'verdict', 'ratio', 'governed by'],
+    ...lines.map((line) => [line.frame, line.verdict, formatRatio(line.ratio, nearLimit), line.where || line.reason]),
+  ];
+  const widths = [0, 1, 2].map((column) => Math.max(...cells.map((row) => row[column]!.length)));
+  return cells.map((row) => row.map((cell, i) => (i < 3 ? cell.padEnd(widths[i]!) : cell)).join('  ').trimEnd()); // prettier-ignore
+}

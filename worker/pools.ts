@@ -1,0 +1,48 @@
+/** The threads: two that solve and write files, one that reads, all at lowered priority. */
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { Piscina } from 'piscina';
+
+/** Added to the threads' nice value, so that pages answer during a run as they do at rest. */
+const niceIncrement = 10;
+/** Bounds on a thread's heap, MB: a hostile file or a runaway frame ends its thread, never the server. */
+const solveHeap_MB = 512;
+const readHeap_MB = 400;
+
+export interface Pools {
+  readonly solve: Piscina;
+  readonly read: Piscina;
+  /** Address of a bundle of dist-worker. */
+  readonly bundle: (name: 'read' | 'solve' | 'write') => string;
+  close(): Promise<void>;
+}
+
+/** @param folder where the bundles are; dist-worker of the folder the server was started in if not given */
+export function createPools(folder = join(/* turbopackIgnore: true */ process.cwd(), 'dist-worker')): Pools {
+  // A living thread keeps the code it has loaded: in development none is kept longer than its task.
+  const idleTimeout = process.env.NODE_ENV === 'development' ? 0 : 30_000;
+  const solve = new Piscina({
+    minThreads: 0,
+    maxThreads: 2,
+    niceIncrement,
+    idleTimeout,
+    resourceLimits: { maxOldGenerationSizeMb: solveHeap_MB },
+  });
+  const read = new Piscina({
+    minThreads: 0,
+    maxThreads: 1,
+    niceIncrement,
+    idleTimeout: 0,
+    resourceLimits: { maxOldGenerationSizeMb: readHeap_MB },
+  });
+  return {
+    solve,
+    read,
+    bundle: (name) => pathToFileURL(join(folder, `${name}.mjs`)).href,
+    close: async () => {
+      await Promise.all([solve.destroy(), read.destroy()]);
+    },
+  };
+}
+
+export const readHeap = `${readHeap_MB} MB`;

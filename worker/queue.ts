@@ -1,0 +1,176 @@
+/**
+ * The pump that moves queued work through the threads. What is to be done, is being done and is done stands in the
+ * database; this only asks it and hands out chunks, office by office.
+ */
+import { EventEmitter } from 'node:events';
+import PQueue from 'p-queue';
+import type { OpenDatabase } from '@/db/open';
+import { listUnfinishedJobs, requeueJobs, type JobRecord } from '@/db/queries/jobs';
+import { countWaiting } from '@/db/queries/waiting';
+import type { Pools } from './pools';
+import type { ProgressEvents, RunProgress } from './progress';
+import { readOneRevision } from './reading';
+import { RunWork } from './run-work';
+import { Turns } from './turns';
+
+/** Says what went wrong where no person is waiting for the answer. */
+export type Log = (message: string, facts: Readonly<Record<string, unknown>>) => void;
+
+export interface QueueOptions {
+  readonly database: OpenDatabase;
+  /** The same database's file, for the threads. */
+  readonly file: string;
+  readonly pools: Pools;
+  readonly log: Log;
+  /** Told of every chunk handed out, in order: for tests. */
+  readonly onChunk?: (chunk: { readonly office: number; readonly revision: number; readonly frames: number }) => void;
+}
+
+interface ReadWork {
+  readonly office: number;
+  readonly job: JobRecord;
+  taken: boolean;
+}
+
+export class WorkQueue {
+  readonly events: ProgressEvents = new EventEmitter();
+  private readonly solving = new PQueue({ concurrency: 2 });
+  private readonly reading = new PQueue({ concurrency: 1 });
+  private readonly runs = new Turns<RunWork>();
+  private readonly reads = new Turns<ReadWork>();
+  private readonly known = new Set<number>();
+  /** Versions that some thread has in hand: two runs of one batch may wait for the same frame. */
+  private readonly inHand = new Set<number>();
+  private pumping: Promise<void> | null = null;
+  private again = false;
+  private closed = false;
+
+  constructor(private readonly options: QueueOptions) {
+    this.events.setMaxListeners(0);
+  }
+
+  /** Takes up what an earlier process left unfinished, then whatever is queued. */
+  async start(): Promise<void> {
+    await requeueJobs(this.options.database.db, 'any');
+    this.wake();
+  }
+
+  /** To be called after a job was inserted; returns at once. */
+  wake(): void {
+    if (this.closed) return;
+    this.again = true;
+    this.pumping ??= this.pump()
+      .catch((error: unknown) => this.options.log('the queue met a fault and goes on at the next request', { error }))
+      .finally(() => (this.pumping = null));
+  }
+
+  /** Hands out no more chunks of a revision's run; those in hand are kept. False where it knows of no such run. */
+  stop(revision: number): boolean {
+    const runs = this.runs.all().filter((run) => run.revision === revision);
+    for (const run of runs) run.stop();
+    this.wake();
+    return runs.length > 0;
+  }
+
+  progress(revision: number): RunProgress {
+    const run = this.runs.all().find((each) => each.revision === revision);
+    const { total, waiting } = run?.counts ?? countWaiting(this.options.database.raw, revision);
+    const done = total - waiting;
+    const rate = run?.meter?.rate ?? null;
+    return {
+      revision,
+      state: run?.state ?? null,
+      total,
+      done,
+      rate,
+      secondsLeft: rate && run ? Math.ceil(waiting / rate) : null,
+      last: run?.meter?.last ?? [],
+    };
+  }
+
+  /** Settles when nothing is queued or going on. */
+  async idle(): Promise<void> {
+    do {
+      await this.pumping;
+      await this.solving.onIdle();
+      await this.reading.onIdle();
+    } while (this.pumping || this.solving.pending + this.solving.size + this.reading.pending + this.reading.size > 0);
+  }
+
+  /** Hands out nothing more and waits for what is in hand; unfinished work is taken up by the next start. */
+  async close(): Promise<void> {
+    this.closed = true;
+    await this.pumping;
+    await this.solving.onIdle();
+    await this.reading.onIdle();
+  }
+
+  private async pump(): Promise<void> {
+    while (this.again && !this.closed) {
+      this.again = false;
+      await this.learn();
+      while (this.reading.pending + this.reading.size < 1 && (await this.handOutReading()));
+      while (this.solving.pending + this.solving.size < 2 && (await this.handOutChunk()));
+    }
+  }
+
+  /** Learns of jobs inserted since. */
+  private async learn(): Promise<void> {
+    for (const job of await listUnfinishedJobs(this.options.database.db)) {
+      if (this.known.has(job.id)) continue;
+      if (job.kind === 'read') this.reads.add({ office: job.office, job, taken: false });
+      else if (job.kind === 'run') this.runs.add(new RunWork(job, this.options, this.inHand));
+      else continue;
+      this.known.add(job.id);
+    }
+  }
+
+  private async handOutReading(): Promise<boolean> {
+    const work = await this.reads.next((each) => (each.taken ? null : each));
+    if (!work || this.closed) return false;
+    work.taken = true;
+    void this.reading.add(async () => {
+      try {
+        await readOneRevision(this.options, work.job);
+      } catch (error) {
+        this.options.log('a reading could not be recorded', { error, job: work.job.id });
+      }
+      this.reads.remove(work);
+      this.moved(work.job.revision);
+    });
+    return true;
+  }
+
+  private async handOutChunk(): Promise<boolean> {
+    const chunk = await this.runs.next((run) => run.nextChunk());
+    await this.settleRuns();
+    if (!chunk || this.closed) return false;
+    const { run } = chunk;
+    this.options.onChunk?.({ office: run.office, revision: run.revision, frames: chunk.versions.length });
+    void this.solving.add(async () => {
+      await run.solve(chunk);
+      await this.settleRuns();
+      this.moved(run.revision);
+    });
+    return true;
+  }
+
+  /** Records the end of runs that have nothing more to give and nothing in hand. */
+  private async settleRuns(): Promise<void> {
+    for (const run of [...this.runs.all()]) {
+      if (!run.ended) continue;
+      this.runs.remove(run);
+      try {
+        await run.finish();
+      } catch (error) {
+        this.options.log('the end of a run could not be recorded', { error, job: run.job.id });
+      }
+      this.moved(run.revision);
+    }
+  }
+
+  private moved(revision: number | null): void {
+    if (revision !== null) this.events.emit('progress', revision);
+    this.wake();
+  }
+}

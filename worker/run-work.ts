@@ -1,0 +1,158 @@
+/** One run in the queue: which frame versions are left, which are in hand, and how it ends. */
+import { finishJob, leaseJob, updateJobProgress, type JobRecord } from '@/db/queries/jobs';
+import { findRevisionById, updateRevisionState } from '@/db/queries/revisions';
+import { countWaiting, listVersions } from '@/db/queries/waiting';
+import type { Settings } from '@/lib/model/settings';
+import { secondSample } from '@/lib/results/second-sample';
+import { RunMeter } from './progress';
+import type { QueueOptions } from './queue';
+import type { FailuresTask } from './threads/failures';
+import type { SolvedFrame, SolveTask } from './threads/solve';
+
+/** Frames handed to a thread at once: about a tenth of a second's work, so that offices alternate and a kill loses little. */
+export const chunkSize = 50;
+
+/** A lease outlives any chunk; the one process that works here takes all of them up again when it starts. */
+const lease_ms = 10 * 60_000;
+
+export interface Chunk {
+  readonly run: RunWork;
+  readonly versions: readonly number[];
+}
+
+export class RunWork {
+  readonly office: number;
+  readonly revision: number;
+  meter: RunMeter | null = null;
+  private waiting: number[] | null = null;
+  private settings: Settings | null = null;
+  private second: ReadonlySet<number> = new Set();
+  private total = 0;
+  private left = 0;
+  private chunksInHand = 0;
+  private stopped = false;
+  private failure: string | null = null;
+
+  constructor(
+    readonly job: JobRecord,
+    private readonly options: QueueOptions,
+    private readonly inHand: Set<number>,
+  ) {
+    if (job.revision === null) throw new RangeError(`Expected the run of job ${job.id} to name a revision`);
+    this.office = job.office;
+    this.revision = job.revision;
+  }
+
+  get state(): 'queued' | 'running' | 'stopping' {
+    return this.stopped ? 'stopping' : this.waiting ? 'running' : 'queued';
+  }
+
+  /** Different frames of the revision and those not solved yet; null before the run has begun. */
+  get counts(): { readonly total: number; readonly waiting: number } | null {
+    return this.waiting && { total: this.total, waiting: this.left };
+  }
+
+  /** Nothing more to give, nothing in hand. */
+  get ended(): boolean {
+    if (this.chunksInHand > 0) return false;
+    return this.stopped || this.failure !== null || this.waiting?.length === 0;
+  }
+
+  stop(): void {
+    this.stopped = true;
+  }
+
+  /** The next versions to solve, marked as in hand; null where there are none to give now. */
+  async nextChunk(): Promise<Chunk | null> {
+    if (this.stopped || this.failure !== null) return null;
+    try {
+      this.waiting ??= await this.begin();
+    } catch (error) {
+      this.fail(error);
+      return null;
+    }
+    const versions: number[] = [];
+    const left: number[] = [];
+    for (const version of this.waiting) {
+      if (versions.length < chunkSize && !this.inHand.has(version)) versions.push(version);
+      else left.push(version);
+    }
+    // What another run has in hand comes later; the thread leaves alone what is solved by then.
+    if (versions.length === 0) return null;
+    this.waiting = left;
+    for (const version of versions) this.inHand.add(version);
+    this.chunksInHand++;
+    return { run: this, versions };
+  }
+
+  /** Solves a chunk in a thread. A fault ends the run as failed; what is stored stays. */
+  async solve({ versions }: Chunk): Promise<void> {
+    const { pools, file } = this.options;
+    const task: SolveTask = {
+      file,
+      job: this.job.id,
+      versions,
+      settings: this.settings!,
+      second: new Set(versions.filter((version) => this.second.has(version))),
+      person: this.job.person,
+    };
+    try {
+      const name = 'solveChunk';
+      const solved = (await pools.solve.run(task, { filename: pools.bundle('solve'), name })) as SolvedFrame[];
+      this.meter?.add(solved, solved.length);
+      this.left -= versions.length;
+    } catch (error) {
+      this.fail(error);
+    } finally {
+      for (const version of versions) this.inHand.delete(version);
+      this.chunksInHand--;
+    }
+  }
+
+  /** Records how the run ended. */
+  async finish(): Promise<void> {
+    const { database, file, pools } = this.options;
+    const { db, raw } = database;
+    const { total, waiting } = countWaiting(raw, this.revision);
+    const kept = `${(total - waiting).toLocaleString('en-GB')} of ${total.toLocaleString('en-GB')} frames are kept`;
+    if (waiting === 0 && this.failure === null) {
+      const task: FailuresTask = { file, office: this.office, revision: this.revision };
+      await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'tellFailures' });
+      await updateRevisionState(db, this.office, this.revision, ['running'], 'run');
+      await finishJob(db, this.job.id, 'done');
+    } else if (this.failure !== null) {
+      const reason = `The run stopped before it finished. ${kept}. Start it again to do the rest. (${this.failure})`;
+      await updateRevisionState(db, this.office, this.revision, ['running'], 'failed', { reason });
+      await finishJob(db, this.job.id, 'failed', this.failure);
+    } else {
+      await updateRevisionState(db, this.office, this.revision, ['running'], 'stopped', { reason: `Stopped. ${kept}.` });
+      await finishJob(db, this.job.id, 'stopped');
+    }
+  }
+
+  private async begin(): Promise<number[]> {
+    const { db, raw } = this.options.database;
+    const until = new Date(Date.now() + lease_ms).toISOString();
+    const job = await leaseJob(db, { owner: `${process.pid}`, until, job: this.job.id });
+    const revision = await findRevisionById(db, this.office, this.revision);
+    if (!job || !revision?.settings) throw new Error('The revision of this run is not there any more');
+    this.settings = revision.settings;
+    const versions = listVersions(raw, this.revision);
+    const chosen = secondSample(versions.map((each) => each.hash));
+    this.second = new Set(versions.filter((each) => chosen.has(each.hash)).map((each) => each.version));
+    const waiting = versions.filter((each) => each.waiting).map((each) => each.version);
+    this.total = versions.length;
+    await updateJobProgress(db, this.job.id, { done: this.total - waiting.length, total: this.total });
+    this.left = waiting.length;
+    this.meter = new RunMeter();
+    return waiting;
+  }
+
+  private fail(error: unknown): void {
+    this.options.log('a chunk of a run failed', { error, revision: this.revision, job: this.job.id });
+    const outOfMemory = error instanceof Error && 'code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY';
+    this.failure ??= outOfMemory
+      ? 'a frame needed more memory than a thread may use'
+      : 'a fault of the program, which was logged';
+  }
+}
