@@ -1,0 +1,120 @@
+import { Fragment, type ReactNode } from 'react';
+import type { Verdict } from '@/lib/results/result';
+import { RatioText } from '../ui/ratio-text';
+import { VerdictMark } from '../ui/verdict-mark';
+import type { WorkingLine, WorkingPart } from './working-data';
+
+interface WorkingProps {
+  /** "rafter BC, normal stress" */
+  readonly title: string;
+  /** "elastic stress", a clause: at the right of the heading. */
+  readonly reference?: string | null;
+  readonly lines: readonly WorkingLine[];
+  readonly ratio: number | null;
+  readonly verdict: Verdict;
+  readonly nearLimit: number;
+  /** Why it is not checked. */
+  readonly reason?: string | null;
+  /** Ends with the ratio and its verdict; off where the lines already do. */
+  readonly conclude?: boolean;
+}
+
+/** The calculation of one check, as an engineer would set it out: what, formula, numbers put in, limit, ratio. */
+export function Working({ title, reference, lines, ratio, verdict, nearLimit, reason, conclude = true }: WorkingProps) {
+  return (
+    <section className="working" aria-label={`Working: ${title}`}>
+      <div className="zone-head">
+        <h2>Working: {title}</h2>
+        {reference && <span className="zone-note zone-aside">{reference}</span>}
+      </div>
+      <dl className="working-lines">
+        {lines.map((line, i) => (
+          <div key={i} className="working-line">
+            <dt>{line.what}</dt>
+            <dd>
+              <Parts parts={line.parts} />
+              {line.source && <span className="working-source"> {line.source}</span>}
+            </dd>
+          </div>
+        ))}
+        {conclude && (
+          <div className="working-line">
+            <dt>verdict</dt>
+            <dd className="working-verdict">
+              {ratio !== null && <RatioText ratio={ratio} verdict={verdict} nearLimit={nearLimit} />}{' '}
+              <VerdictMark verdict={verdict} word />
+              {reason && <span>: {reason}</span>}
+            </dd>
+          </div>
+        )}
+      </dl>
+    </section>
+  );
+}
+
+function Parts({ parts }: { readonly parts: readonly WorkingPart[] }) {
+  return parts.map((part, i) => (
+    <Fragment key={i}>
+      {i > 0 && needsSpace(parts[i - 1], part) ? ' ' : ''}
+      {one(part)}
+    </Fragment>
+  ));
+}
+
+/** Units and signs stand a space apart; nothing needs one before a comma. */
+const needsSpace = (_before: WorkingPart | undefined, part: WorkingPart): boolean =>
+  part.kind !== 'text' || !/^[,;:)]/.test(part.text);
+
+function one(part: WorkingPart): ReactNode {
+  switch (part.kind) {
+    case 'text':
+      return part.text;
+    case 'symbol':
+      return (
+        <span className="w-symbol">
+          <var>{part.symbol}</var>
+          {part.sub && <sub>{part.sub}</sub>}
+          {part.sup && <sup>{part.sup}</sup>}
+        </span>
+      );
+    case 'number':
+      return <Figure text={part.text} unit={part.unit} />;
+    case 'result':
+      return (
+        <b>
+          <Figure text={part.text} unit={part.unit} />
+        </b>
+      );
+    case 'fraction':
+      return (
+        <span className="w-fraction">
+          <span className="w-over">
+            <Parts parts={part.over} />
+          </span>
+          <span className="sr-only"> over </span>
+          <span className="w-under">
+            <Parts parts={part.under} />
+          </span>
+        </span>
+      );
+    case 'root':
+      return (
+        <span className="w-root">
+          <span aria-hidden="true">√</span>
+          <span className="sr-only">root of </span>
+          <span className="w-radicand">
+            <Parts parts={part.of} />
+          </span>
+        </span>
+      );
+  }
+}
+
+function Figure({ text, unit }: { readonly text: string; readonly unit?: string }) {
+  return (
+    <span className="whitespace-nowrap">
+      {text}
+      {unit && ` ${unit}`}
+    </span>
+  );
+}
