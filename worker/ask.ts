@@ -2,7 +2,7 @@
 import type { OpenDatabase } from '@/db/open';
 import { findLatestJob, finishJob, insertJob } from '@/db/queries/jobs';
 import { updateRevisionState } from '@/db/queries/revisions';
-import { countWaiting } from '@/db/queries/waiting';
+import { countWaiting } from '@/db/queries/results';
 import type { WorkQueue } from './queue';
 
 /** Queues the reading of a revision whose files are stored; false where that is queued already. */

@@ -1,4 +1,4 @@
-/** The threads: two that solve and write files, one that reads, all at lowered priority. */
+/** The threads: two that solve, one that reads, two that write files, all at lowered priority. */
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { Piscina } from 'piscina';
@@ -8,10 +8,12 @@ const niceIncrement = 10;
 /** Bounds on a thread's heap, MB: a hostile file or a runaway frame ends its thread, never the server. */
 const solveHeap_MB = 512;
 const readHeap_MB = 400;
+const writeHeap_MB = 512;
 
 export interface Pools {
   readonly solve: Piscina;
   readonly read: Piscina;
+  readonly write: Piscina;
   /** Address of a bundle of dist-worker. */
   readonly bundle: (name: 'read' | 'solve' | 'write') => string;
   close(): Promise<void>;
@@ -35,12 +37,20 @@ export function createPools(folder = join(/* turbopackIgnore: true */ process.cw
     idleTimeout: 0,
     resourceLimits: { maxOldGenerationSizeMb: readHeap_MB },
   });
+  const write = new Piscina({
+    minThreads: 0,
+    maxThreads: 2,
+    niceIncrement,
+    idleTimeout,
+    resourceLimits: { maxOldGenerationSizeMb: writeHeap_MB },
+  });
   return {
     solve,
     read,
+    write,
     bundle: (name) => pathToFileURL(join(folder, `${name}.mjs`)).href,
     close: async () => {
-      await Promise.all([solve.destroy(), read.destroy()]);
+      await Promise.all([solve, read, write].map((pool) => pool.destroy()));
     },
   };
 }

@@ -6,7 +6,7 @@ import { EventEmitter } from 'node:events';
 import PQueue from 'p-queue';
 import type { OpenDatabase } from '@/db/open';
 import { listUnfinishedJobs, requeueJobs, type JobRecord } from '@/db/queries/jobs';
-import { countWaiting } from '@/db/queries/waiting';
+import { countWaiting } from '@/db/queries/results';
 import type { Pools } from './pools';
 import type { ProgressEvents, RunProgress } from './progress';
 import { readOneRevision } from './reading';

@@ -1,7 +1,8 @@
 /** One run in the queue: which frame versions are left, which are in hand, and how it ends. */
 import { finishJob, leaseJob, updateJobProgress, type JobRecord } from '@/db/queries/jobs';
 import { findRevisionById, updateRevisionState } from '@/db/queries/revisions';
-import { countWaiting, listVersions } from '@/db/queries/waiting';
+import { countWaiting } from '@/db/queries/results';
+import { listVersions } from '@/db/queries/waiting';
 import type { Settings } from '@/lib/model/settings';
 import { secondSample } from '@/lib/results/second-sample';
 import { RunMeter } from './progress';
@@ -91,6 +92,7 @@ export class RunWork {
     const task: SolveTask = {
       file,
       job: this.job.id,
+      revision: this.revision,
       versions,
       settings: this.settings!,
       second: new Set(versions.filter((version) => this.second.has(version))),

@@ -1,5 +1,6 @@
 /** Mechanisms and loose parts found by the analysis, told as problems at the cell that can put them right. */
-import type { Intake, SheetRead } from '@/lib/intake/intake';
+import type { InputRow, Intake, SheetRead } from '@/lib/intake/intake';
+import { idKey as compared } from '@/lib/intake/ids';
 import type { Problem } from '@/lib/problems/problem';
 import type { Failure } from '@/lib/results/result';
 
@@ -9,7 +10,9 @@ export interface FrameFailure {
 }
 
 /** What of an intake is needed to find cells and keep the order of problems. */
-export type FailureContext = Pick<Intake, 'problems' | 'sheets' | 'rows'>;
+export interface FailureContext extends Pick<Intake, 'problems' | 'sheets'> {
+  readonly rows: Iterable<InputRow>;
+}
 
 /**
  * The intake's problems and those that the analysis found, in the order of sheets in the file, rows, columns.
@@ -37,10 +40,11 @@ export function problemsInOrder(problems: readonly Problem[], sheets: readonly S
 
 /** Problems for what the analysis found, one a cell; without those that `intake.problems` already holds. */
 export function failureProblems(intake: FailureContext, failures: readonly FrameFailure[]): readonly Problem[] {
-  const rows = failures.length > 0 ? new RowFinder(intake) : null;
+  if (failures.length === 0) return [];
+  const rows = new RowFinder(intake, new Set(failures.flatMap(({ frame }) => idKey(frame) ?? [])));
   const byCell = new Map<string, Problem & { frames: string[] }>();
   for (const { frame, failure } of failures) {
-    if (failure.code === 'not-solved' || !rows) continue;
+    if (failure.code === 'not-solved') continue;
     const place = rows.find(frame, failure);
     const key = place ? `${failure.code} ${place.sheet} ${place.cell}` : `${failure.code} ${frame}`;
     const same = byCell.get(key);
@@ -76,31 +80,26 @@ interface Place {
   readonly found: string | null;
 }
 
+/** Sheets where a frame that moves freely or hangs apart can be mended. */
+const mending: ReadonlySet<string> = new Set(['supports', 'members', 'nodes', 'variants']);
+
 /** Finds a frame's first row on the sheets that can mend it: Supports, else Members or Nodes, else Variants. */
 class RowFinder {
-  private readonly sheets: readonly { sheet: SheetRead; rows: ReadonlyMap<string, readonly RowAt[]> }[];
+  private readonly sheets: readonly { sheet: SheetRead; rows: Map<string, RowAt[]> }[];
 
-  constructor(intake: FailureContext) {
-    const bySheet = new Map<string, FailureContext['rows'][number][]>();
-    for (const row of intake.rows) {
-      const list = bySheet.get(row.sheet);
-      if (list) list.push(row);
-      else bySheet.set(row.sheet, [row]);
-    }
-    this.sheets = intake.sheets.map((sheet) => {
-      const rows = new Map<string, RowAt[]>();
-      const frameAt = columnOf(sheet, 'frame');
-      if (frameAt < 0) return { sheet, rows };
-      for (const row of bySheet.get(sheet.name) ?? []) {
-        if (sheet.headingRow !== null && row.row <= sheet.headingRow) continue;
-        const id = idKey(row.cells[frameAt] ?? null);
-        if (id === null) continue;
+  /** @param frames keys of the frames that will be asked for: rows of others are not kept */
+  constructor(intake: FailureContext, frames: ReadonlySet<string>) {
+    this.sheets = intake.sheets.map((sheet) => ({ sheet, rows: new Map<string, RowAt[]>() }));
+    const wanted = this.sheets.filter(({ sheet }) => mending.has(sheet.known?.toLowerCase() ?? ''));
+    for (const { sheet: name, row, cells } of intake.rows)
+      for (const { sheet, rows } of wanted) {
+        if (sheet.name !== name || (sheet.headingRow !== null && row <= sheet.headingRow)) continue;
+        const id = idKey(cells[columnOf(sheet, 'frame')] ?? null);
+        if (id === null || !frames.has(id)) continue;
         const list = rows.get(id);
-        if (list) list.push({ row: row.row, cells: row.cells });
-        else rows.set(id, [{ row: row.row, cells: row.cells }]);
+        if (list) list.push({ row, cells });
+        else rows.set(id, [{ row, cells }]);
       }
-      return { sheet, rows };
-    });
   }
 
   find(frame: string, failure: Failure): Place | null {
@@ -156,10 +155,8 @@ function columnNumber(cell: string | null): number {
   return n;
 }
 
-/** Ids match without regard to case and outer blanks; "1.0" is the id 1, "01" is another. */
+/** The form in which ids are compared; null for a blank cell. */
 function idKey(text: string | null): string | null {
-  const id = text?.trim() ?? '';
-  if (id === '') return null;
-  if (/^-?(0|[1-9]\d*)(\.\d+)?$/.test(id)) return String(Number(id));
-  return id.toLowerCase();
+  const key = text === null ? '' : compared(text);
+  return key === '' ? null : key;
 }

@@ -1,8 +1,7 @@
 /** In a thread: mechanisms and loose parts that a run has found, told as problems at their cells. */
 import { insertProblems } from '@/db/queries/intake';
-import { iterateInputRows, listProblems, listSheets } from '@/db/queries/problems';
-import { listFailures } from '@/db/queries/waiting';
-import type { InputRow } from '@/lib/intake/intake';
+import { listProblems, listSheets } from '@/db/queries/problems';
+import { inputRows, listFailures } from '@/db/queries/waiting';
 import { failureProblems } from '@/lib/results/failure-problem';
 import { openOnce } from './open-once';
 
@@ -18,9 +17,7 @@ export async function tellFailures({ file, office, revision }: FailuresTask): Pr
   const { db, raw } = openOnce(file);
   const failures = listFailures(raw, revision);
   if (failures.length === 0) return;
-  const rows: InputRow[] = [];
-  for await (const row of iterateInputRows(db, office, revision)) rows.push(row);
   const [problems, sheets] = await Promise.all([listProblems(db, office, revision), listSheets(db, office, revision)]);
-  const found = failureProblems({ problems, sheets, rows }, failures);
+  const found = failureProblems({ problems, sheets, rows: inputRows(raw, revision) }, failures);
   if (found.length > 0) insertProblems(raw, revision, found);
 }

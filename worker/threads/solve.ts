@@ -1,6 +1,6 @@
 /** In a thread: a chunk of a run's frame versions, from their models in the database to their results in it. */
 import { insertChunkResults, type FrameResults } from '@/db/queries/results';
-import { addJobProgress, getWaitingFrames } from '@/db/queries/waiting';
+import { addJobProgress, listWaitingFrames } from '@/db/queries/waiting';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import type { Settings } from '@/lib/model/settings';
 import { evaluateFrame } from '@/lib/results/evaluate';
@@ -15,6 +15,7 @@ export interface SolveTask {
   /** The database's file. */
   readonly file: string;
   readonly job: number;
+  readonly revision: number;
   readonly versions: readonly number[];
   readonly settings: Settings;
   /** Versions that get the second, independent analysis. */
@@ -30,27 +31,21 @@ export interface SolvedFrame {
 }
 
 const analyser = createAnalyser();
-/** Frames stored in one transaction, so that no one waits longer than about 50 ms for the writer. */
-const transactionSize = 10;
-
 /** Evaluates and stores the versions; those that were stored meanwhile are left alone. */
 export function solveChunk(task: SolveTask): SolvedFrame[] {
   const { raw } = openOnce(task.file);
-  const done: SolvedFrame[] = [];
-  let results: FrameResults[] = [];
-  const store = (): void => {
-    const stored = new Set(insertChunkResults(raw, results, { person: task.person }));
-    for (const { version, frame, evaluation } of results)
-      if (stored.has(version))
-        done.push({ version, frame: frame.id, verdict: evaluation.verdict, ratio: evaluation.governing?.ratio ?? null });
-    results = [];
-  };
-  for (const { version, frame } of getWaitingFrames(raw, task.versions)) {
+  const results = listWaitingFrames(raw, task.revision, task.versions).map(({ version, frame }): FrameResults => {
     const evaluation = evaluateFrame(analyser, frame, task.settings, { second: task.second.has(version), all: false });
-    results.push({ version, frame, evaluation, ...memberResults(frame, evaluation) });
-    if (results.length === transactionSize) store();
-  }
-  if (results.length > 0) store();
-  addJobProgress(raw, task.job, done.length);
-  return done;
+    return { version, frame, evaluation, ...memberResults(frame, evaluation) };
+  });
+  const stored = new Set(insertChunkResults(raw, results, { person: task.person }));
+  addJobProgress(raw, task.job, stored.size);
+  return results
+    .filter(({ version }) => stored.has(version))
+    .map(({ version, frame, evaluation }) => ({
+      version,
+      frame: frame.id,
+      verdict: evaluation.verdict,
+      ratio: evaluation.governing?.ratio ?? null,
+    }));
 }
