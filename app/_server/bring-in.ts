@@ -2,13 +2,13 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import { db } from '@/db/client';
 import { insertActivity } from '@/db/queries/activity';
-import { insertJob } from '@/db/queries/jobs';
 import { insertRevision } from '@/db/queries/revisions';
 import { insertUpload } from '@/db/queries/uploads';
 import type { Person } from '@/lib/access/may';
 import { notFound } from '@/lib/api/error';
 import type { SentFile } from '@/lib/api/multipart';
-import { wake } from '@/worker/queue';
+import { askForReading } from '@/worker/ask';
+import { queue, serverDatabase } from '@/worker/boot';
 
 /**
  * Keeps the files of an upload as a batch's next revision and has them read.
@@ -27,9 +27,8 @@ export async function bringIn(
     const upload = { revision: revision.id, name, size: bytes.length, sha256, bytes, person: person.id };
     await insertUpload(db(), person.office, upload);
   }
-  await insertJob(db(), person.office, { kind: 'read', revision: revision.id, person: person.id });
   const done = { what: 'brought sheets in', project: batch.project, batch: batch.id, revision: revision.id, person: person.id };
   await insertActivity(db(), person.office, done);
-  wake();
+  await askForReading(queue(), serverDatabase(), { office: person.office, revision: revision.id, person: person.id });
   return revision.letter;
 }

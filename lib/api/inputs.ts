@@ -52,11 +52,16 @@ export const exportInput = z.object({
   format: z.enum(['csv', 'xlsx'], { error: 'Choose the format: csv or xlsx.' }),
 });
 
-export const cellInput = z.object({
-  sheet: z.string().min(1).max(200),
-  cell: z.string().regex(/^[A-Z]{1,3}[1-9]\d{0,6}$/, 'Name a cell, like E412.'),
-  file: z.string().max(200).optional(),
-});
+export const cellInput = z
+  .object({
+    sheet: z.string({ error: 'Name the sheet: ?sheet=Members.' }).min(1).max(200),
+    cell: z
+      .string()
+      .regex(/^[A-Z]{1,3}[1-9]\d{0,6}$/, 'Name a cell, like E412.')
+      .optional(),
+    row: z.coerce.number().int().min(1).max(1_048_576).optional(),
+  })
+  .refine((at) => at.cell !== undefined || at.row !== undefined, 'Name the cell, like E412, or the row.');
 
 /** Ids are whole numbers; anything else names nothing. */
 export const idInput = z

@@ -17,14 +17,14 @@ interface Exported {
 export function viewSheet({ view, units, parameters, rows }: Exported): ReportSheet {
   const columns = shownColumns(view, parameters);
   const unitPlace = columns.findLastIndex((column) => column.quantity === 'byCheck');
-  const heads = columns.map((column) => head(column, units, parameters));
+  const heads = columns.map((column) => head(column, units));
   if (unitPlace >= 0) heads.splice(unitPlace + 1, 0, text('unit', 8));
   return {
     name: view.table,
     columns: heads,
     async *rows() {
       for await (const row of rows()) {
-        const cells = columns.map((column) => cell(column, row, units, parameters));
+        const cells = columns.map((column) => cell(column, row, units));
         if (unitPlace >= 0) cells.splice(unitPlace + 1, 0, unitOf(row, units));
         yield cells;
       }
@@ -32,20 +32,20 @@ export function viewSheet({ view, units, parameters, rows }: Exported): ReportSh
   };
 }
 
-function head(column: Column, units: System, parameters: readonly ParameterColumn[]): ReportColumn {
+function head(column: Column, units: System): ReportColumn {
   if (column.kind === 'ratio') return ratioColumn(column.label);
   if (column.kind === 'verdict') return verdictColumn(column.label);
   if (column.kind !== 'number') return text(column.label, column.kind === 'id' ? 14 : 18);
-  const quantity = columnQuantity(column, parameters);
+  const quantity = columnQuantity(column);
   return quantity === null
     ? { heading: column.label, width: 12, format: '0.000' }
     : quantityColumn(column.label, quantity, units);
 }
 
-function cell(column: Column, row: Row, units: System, parameters: readonly ParameterColumn[]): ReportCell {
+function cell(column: Column, row: Row, units: System): ReportCell {
   const value = row.cells[column.key] ?? null;
   if (typeof value !== 'number') return value;
-  const quantity = column.quantity === 'byCheck' ? checkQuantity(row) : columnQuantity(column, parameters);
+  const quantity = column.quantity === 'byCheck' ? checkQuantity(row) : columnQuantity(column);
   return quantity === null ? value : cellOf(value, quantity, units);
 }
 

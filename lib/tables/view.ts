@@ -8,7 +8,8 @@ export type ColumnKind = 'text' | 'id' | 'number' | 'ratio' | 'verdict' | 'sever
 
 /** Quantities that a column may be in, for its unit under the head. */
 export type ColumnQuantity =
-  'length' | 'displacement' | 'force' | 'moment' | 'stress' | 'rotation' | 'mass' | 'number' | 'byCheck';
+  | 'length' | 'displacement' | 'force' | 'moment' | 'stress' | 'rotation' | 'mass' | 'number' | 'byCheck'
+  | 'angle' | 'lineLoad' | 'areaLoad' | 'springTranslation' | 'springRotation' | 'temperature'; // prettier-ignore
 
 export interface Column {
   readonly key: string;

@@ -1,0 +1,61 @@
+import { SheetIndex } from '@/components/sheet-index/sheet-index';
+import { TitleBlock } from '@/components/title-block/title-block';
+import { day } from '@/app/_server/dates';
+import type { RevisionRecord } from '@/db/queries/revisions';
+import { pages } from '@/lib/api/addresses';
+import type { TableName } from '@/lib/tables/view';
+import { stateWords } from './state-words';
+import { ResultTools } from './result-tools';
+
+export type SheetName = 'read' | 'run' | 'glance' | TableName;
+
+interface RevisionHeadProps {
+  readonly revision: RevisionRecord;
+  readonly sheet: SheetName;
+  /** Rows of each table, where they are known. */
+  readonly counts?: Partial<Record<TableName, number>>;
+}
+
+/** The numbered sheets; compare (8) and marks (9) keep their numbers for when they come. */
+const sheets = ['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems'] as const;
+
+/** Title block and sheet index over every page of a revision. */
+export function RevisionHead({ revision, sheet, counts = {} }: RevisionHeadProps) {
+  const { batch, letter, frames, errors, warnings, notes } = revision;
+  const number = sheets.findIndex((name) => name === sheet) + 1;
+  const known: Partial<Record<SheetName, number>> = { frames, problems: errors + warnings + notes, ...counts };
+  const hasResults = revision.runStartedAt !== null;
+  return (
+    <>
+      <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
+      {(hasResults || number > 0) && (
+        <SheetIndex
+          sheets={sheets.map((name) => ({
+            label: name[0]!.toUpperCase() + name.slice(1),
+            href: hasResults || name === 'problems' ? pages.sheet(batch, letter, name) : null,
+            count: known[name] ?? null,
+            current: name === sheet,
+          }))}
+          tools={<ResultTools batch={batch} letter={letter} ready={hasResults && revision.state !== 'running'} />}
+        />
+      )}
+    </>
+  );
+}
+
+/** What the title block says of a revision. */
+export function titleOf(revision: RevisionRecord) {
+  const { project, projectName, projectNumber, batch, batchName, letter } = revision;
+  const name = projectNumber === null || projectNumber === '' ? projectName : `${projectNumber} ${projectName}`;
+  return {
+    project: { name, href: pages.project(project) },
+    batch: { name: batchName, href: pages.revision(batch, letter) },
+    revision: { letter, date: day(revision.createdAt) },
+    state: stateWords(revision),
+    prepared: `${revision.createdBy.name}, ${day(revision.createdAt)}`,
+    checked: null,
+    issued: null,
+    inputHash: revision.input?.sha256 ?? null,
+    scope: revision.settings?.stability === 'by others' ? 'stress and movement only' : null,
+  };
+}

@@ -1,0 +1,64 @@
+import type { GoverningCount, SectionWork } from '@/components/charts/charts-data';
+import type { WorstFrame } from '@/components/charts/worst-frames';
+import type { StripFrame } from '@/components/strip/strip-data';
+import type { BatchSummary, SummaryCell } from '@/db/queries/summary';
+import { pages } from '@/lib/api/addresses';
+import type { Verdict } from '@/lib/results/result';
+
+/** Above this many frames the strip's readout names verdict and ratio only, to keep the page light. */
+const longStrip = 3000;
+
+/** A frame that errors stop, or that was not run, is not checked; during a run it waits. */
+export function stripFrames(cells: readonly SummaryCell[], running = false): StripFrame[] {
+  return cells.map(({ id, status, verdict, ratio, group, check, subject, section, combination }) => {
+    const waiting = running && status === 'waiting';
+    const reason = status === 'stopped' ? 'stopped by errors in its sheets' : status === 'waiting' ? 'not run yet' : null;
+    const cell: StripFrame = {
+      id,
+      verdict: verdict ?? 'not checked',
+      ratio,
+      group,
+      ...(waiting && { state: 'waiting' as const }),
+    };
+    return cells.length > longStrip ? cell : { ...cell, check, subject, section, combination, reason };
+  });
+}
+
+export function worstFrames(batch: number, letter: string, cells: readonly SummaryCell[]): WorstFrame[] {
+  return cells.map(({ index, id, verdict, ratio, check, subject, section, combination }) => ({
+    id,
+    href: pages.frame(batch, letter, index + 1),
+    ratio,
+    verdict: verdict ?? 'not checked',
+    check,
+    subject,
+    section,
+    combination,
+  }));
+}
+
+/** Which check governs how many frames, by verdict; the most frequent first. */
+export function governingCounts(cells: readonly SummaryCell[]): GoverningCount[] {
+  const counts = new Map<string, { over: number; near: number; within: number; notChecked: number }>();
+  for (const { check, verdict } of cells) {
+    if (check === null || verdict === null) continue;
+    const count = counts.get(check) ?? { over: 0, near: 0, within: 0, notChecked: 0 };
+    count[verdict === 'not checked' ? 'notChecked' : verdict] += 1;
+    counts.set(check, count);
+  }
+  const all = (one: GoverningCount) => one.over + one.near + one.within + one.notChecked;
+  return [...counts].map(([check, count]) => ({ check, ...count })).sort((a, b) => all(b) - all(a));
+}
+
+export function sectionWork(sections: BatchSummary['sections'], nearLimit: number): SectionWork[] {
+  return sections.slice(0, 8).map(({ section, members, median, worst }) => ({
+    section,
+    members,
+    median,
+    worst,
+    verdict: verdictOf(worst, nearLimit),
+  }));
+}
+
+const verdictOf = (ratio: number | null, nearLimit: number): Verdict =>
+  ratio === null ? 'not checked' : ratio > 1 ? 'over' : ratio >= nearLimit ? 'near' : 'within';

@@ -1,0 +1,90 @@
+import type { Metadata } from 'next';
+import Link from 'next/link';
+import { checkedWords } from '@/app/_server/checked-words';
+import { needResults, pageRevision, type RevisionParams } from '@/app/_server/page-revision';
+import { GoverningChecks } from '@/components/charts/governing-checks';
+import { HardestSections } from '@/components/charts/hardest-sections';
+import { Spread } from '@/components/charts/spread';
+import { WorstFrames } from '@/components/charts/worst-frames';
+import { Strip } from '@/components/strip/strip';
+import { Cautions } from '@/components/ui/notice';
+import { Columns, Sheet, Zone } from '@/components/ui/sheet';
+import { db } from '@/db/client';
+import { findSummary, listParameterRatios } from '@/db/queries/summary';
+import { pages } from '@/lib/api/addresses';
+import type { View } from '@/lib/tables/view';
+import { RevisionHead } from '../_head/revision-head';
+import { governingCounts, sectionWork, stripFrames, worstFrames } from './glance-data';
+import { RatioOver } from './ratio-over';
+
+export const metadata: Metadata = { title: 'Glance' };
+
+/** Sheet 1: the whole batch at a glance. */
+export default async function GlancePage({ params }: { readonly params: Promise<RevisionParams> }) {
+  const { person, revision } = await pageRevision(params, 'glance');
+  needResults(revision);
+  const summary = await findSummary(db(), person.office, revision.id);
+  if (summary === undefined) throw new Error(`Expected a summary of revision ${revision.id}`);
+  const { batch, letter, units } = revision;
+  const nearLimit = revision.settings?.nearLimit ?? 0.9;
+  const { cells, counts } = summary;
+  const numeric = summary.parameters.filter((one) => one.numeric);
+  const first = numeric[0] && (await listParameterRatios(db(), person.office, revision.id, numeric[0].name));
+  const worst = worstFrames(batch, letter, summary.worst);
+  const over: View = {
+    table: 'frames',
+    filters: [{ column: 'verdict', op: 'in', values: ['over'] }],
+    sort: { column: 'ratio', descending: true },
+    columns: null,
+  };
+  const side = (
+    <>
+      <Zone
+        title="Worst frames"
+        note={counts.over > 0 ? `${worst.length} shown, ${counts.over.toLocaleString('en-GB')} over` : `${worst.length} shown`}
+        aside={counts.over > 0 && <Link href={pages.table(batch, letter, over)}>all over</Link>}
+      >
+        <WorstFrames frames={worst} nearLimit={nearLimit} />
+      </Zone>
+      <Zone title="What governs">
+        <GoverningChecks counts={governingCounts(cells)} frames={cells.length} />
+      </Zone>
+      <Zone title="Sections working hardest">
+        <HardestSections sections={sectionWork(summary.sections, nearLimit)} nearLimit={nearLimit} />
+      </Zone>
+    </>
+  );
+  const main = (
+    <>
+      <Zone>
+        <Strip frames={stripFrames(cells)} nearLimit={nearLimit} hrefPattern={`${pages.sheet(batch, letter, 'frames')}/{n}`} />
+      </Zone>
+      <div className={first === undefined ? '' : 'zone-pair'}>
+        {first !== undefined && (
+          <RatioOver
+            batch={batch}
+            letter={letter}
+            units={units}
+            nearLimit={nearLimit}
+            parameters={numeric}
+            first={first}
+            frames={cells.map((cell) => cell.id)}
+          />
+        )}
+        <Zone title="Spread of governing ratios" note="frames in steps of 0.025">
+          <Spread ratios={cells.flatMap((cell) => cell.ratio ?? [])} nearLimit={nearLimit} />
+        </Zone>
+      </div>
+    </>
+  );
+  return (
+    <Sheet>
+      <RevisionHead revision={revision} sheet="glance" />
+      <h1 className="sr-only">
+        {revision.batchName}, revision {letter}, at a glance
+      </h1>
+      <Columns main={main} side={side} />
+      <Cautions {...checkedWords(revision)} />
+    </Sheet>
+  );
+}

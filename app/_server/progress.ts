@@ -1,0 +1,38 @@
+import 'server-only';
+import { db } from '@/db/client';
+import { findRevision } from '@/db/queries/revisions';
+import type { RunProgressData, RunState } from '@/components/run/run-data';
+import { notFound } from '@/lib/api/error';
+import { runProgress } from '@/worker/boot';
+import { time } from './dates';
+
+/** How far a run is, with the revision's state read anew. */
+export interface Progress extends RunProgressData {
+  readonly revisionState: string;
+  /** The frames solved last, newest first. */
+  readonly last: readonly { readonly frame: string; readonly verdict: string; readonly ratio: number | null }[];
+}
+
+export async function progressOf(office: number, batch: number, letter: string): Promise<Progress> {
+  const revision = await findRevision(db(), office, batch, letter);
+  if (revision === undefined) throw notFound('revision');
+  const { state: going, total, done, rate, secondsLeft, last } = runProgress(revision.id);
+  return {
+    revisionState: revision.state,
+    state: runState(revision.state, going),
+    total,
+    done,
+    rate,
+    secondsLeft,
+    started: revision.runStartedAt === null ? null : time(revision.runStartedAt),
+    message: revision.state === 'failed' || revision.state === 'stopped' ? revision.reason : null,
+    last: last.map(({ frame, verdict, ratio }) => ({ frame, verdict, ratio })),
+  };
+}
+
+function runState(revision: string, going: 'queued' | 'running' | 'stopping' | null): RunState {
+  if (going === 'running' || going === 'stopping') return going;
+  if (going === 'queued' || revision === 'running') return 'waiting';
+  if (revision === 'stopped' || revision === 'failed') return revision;
+  return revision === 'reading' || revision === 'read' ? 'waiting' : 'done';
+}

@@ -1,0 +1,28 @@
+import 'server-only';
+import { db } from '@/db/client';
+import type { RevisionRecord } from '@/db/queries/revisions';
+import { findSummary } from '@/db/queries/summary';
+import { notFound } from '@/lib/api/error';
+import { strictView } from '@/lib/api/strict-view';
+import type { ParameterColumn } from '@/lib/tables/shown-columns';
+import { tableNames, type TableName, type View } from '@/lib/tables/view';
+
+export function isTable(name: string): name is TableName {
+  return (tableNames as readonly string[]).includes(name);
+}
+
+/** @throws {ApiError} not-found for a table there is none of, bad-request for what the table doesn't offer */
+export function requireView(table: string, request: Request): View {
+  if (!isTable(table)) throw notFound('table');
+  return strictView(table, new URL(request.url).searchParams);
+}
+
+/** The parameters of the batch's families, which tables offer as columns and filters. */
+export async function parametersOf(revision: RevisionRecord): Promise<readonly ParameterColumn[]> {
+  return (await findSummary(db(), revision.office, revision.id))?.parameters ?? [];
+}
+
+/** The same, where the view shows any. */
+export async function viewParameters(revision: RevisionRecord, view: View): Promise<readonly ParameterColumn[]> {
+  return view.columns?.some((column) => column.startsWith('p:')) === true ? parametersOf(revision) : [];
+}

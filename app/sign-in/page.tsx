@@ -1,0 +1,29 @@
+import type { Metadata } from 'next';
+import { redirect } from 'next/navigation';
+import { SignInSheet } from '@/components/sign-in/sign-in-sheet';
+import { homeOf } from '@/lib/access/may';
+import { engineVersion } from '@/lib/analysis/engine-version';
+import { pagePerson } from '../_server/page-person';
+import { SignInForm } from './sign-in-form';
+
+export const metadata: Metadata = { title: 'Sign in' };
+
+interface SignInProps {
+  readonly searchParams: Promise<{ readonly next?: string | string[] }>;
+}
+
+export default async function SignInPage({ searchParams }: SignInProps) {
+  const person = await pagePerson();
+  const { next } = await searchParams;
+  if (person !== null) redirect(localPath(next) ?? homeOf(person.role));
+  return (
+    <SignInSheet version={engineVersion}>
+      <SignInForm next={localPath(next) ?? '/'} />
+    </SignInSheet>
+  );
+}
+
+/** A path of this site, and nothing that a browser could take for another. */
+function localPath(next: string | string[] | undefined): string | null {
+  return typeof next === 'string' && /^\/(?![/\\])[^\\]*$/.test(next) ? next : null;
+}
