@@ -4,6 +4,7 @@ import type { Certificate, Failure, ResultState } from '@/lib/results/result';
 import { assemble, diagonalOf, nodeAngles } from './assemble';
 import { conditionEstimate, scaledNorm, type Condition } from './condition';
 import { unheldPart } from './connected';
+import { bucklingSpace, criticalLoadFactor } from './critical/critical-load-factor';
 import { globalEquilibrium } from './equilibrium';
 import { factor } from './factor';
 import { loadVectors, type LoadVectors } from './load-vectors';
@@ -11,6 +12,8 @@ import { describeMovement, freeToMove, nullVector } from './mechanism';
 import { memberData } from './member-data';
 import { recover, type Recovered } from './recover';
 import { refusal } from './refusals';
+import { largestDifference } from './second/compare-states';
+import { secondAnalysis } from './second/second-analysis';
 import { solve } from './solve';
 import { superpose } from './superpose';
 import { buildTopology, topologyKey, unknowns, type Topology } from './topology';
@@ -34,6 +37,11 @@ const pivotTolerance = 1e-12;
 const residualTolerance = 1e-10;
 const equilibriumTolerance = 1e-8;
 const leastDigits = 6;
+const secondTolerance = 1e-6;
+/** The second analysis is dense: above this number of unknowns it would cost more than all the rest. */
+const secondUnknowns = 300;
+/** Share of the forces met on the way below which a result is taken for their rounding. */
+const rounding = 1e-4;
 const rememberedTopologies = 64;
 
 /**
@@ -76,20 +84,28 @@ function analyse(frame: Frame, t: Topology, options: AnalyseOptions): Analysis {
   solve(K, t, inner, d, frame.cases.length); // K d = f
   const recovered = frame.cases.map((_, c) => recover(frame, t, angles, loads, d, c)); // q = k T d + q_F, R = K d − f
   const cases = recovered.map((r, c) => caseState(frame, r, c));
-  const states = [...cases, ...frame.combinations.map((_, i) => superpose(frame, cases, i))];
+  const space = bucklingSpace(t);
+  const combinations = frame.combinations.map((_, i) => {
+    const state = superpose(frame, cases, i);
+    if (state.purpose !== 'strength') return state;
+    return { ...state, criticalLoadFactor: criticalLoadFactor(frame, t, angles, diagonal, state, space) };
+  });
+  const floors = recovered.map((r) => rounding * r.handled);
   const residual = largestResidual(t, diagonal, norm, loads, d, recovered, frame.cases.length);
-  const equilibrium = frame.cases.reduce((most, _, c) => worse(most, globalEquilibrium(frame, c, recovered[c]!.reactions)), 0);
+  const equilibrium = frame.cases.reduce(
+    (most, _, c) => worse(most, globalEquilibrium(frame, c, recovered[c]!.reactions, floors[c]!)),
+    0,
+  );
   const certificate: Certificate = {
     residual,
     equilibrium,
     condition: condition.condition,
     digits,
-    second: null,
-    secondReason: 'sampled',
+    ...compareWithSecond(frame, t, cases, floors, options.second ?? true),
   };
   const doubt = outsideTolerance(certificate);
   if (doubt) return { ok: false, failure: { code: 'not-solved', message: doubt, node: null } };
-  return { ok: true, states, certificate };
+  return { ok: true, states: [...cases, ...combinations], certificate };
 }
 
 function refuseSettings(settings: Settings | undefined): Failure | null {
@@ -117,6 +133,23 @@ function caseState(frame: Frame, recovered: Recovered, index: number): ResultSta
     reactions,
     endForces,
   };
+}
+
+/** Certificate item 3. */
+function compareWithSecond(
+  frame: Frame,
+  t: Topology,
+  cases: readonly ResultState[],
+  floors: readonly number[],
+  wanted: boolean,
+): Pick<Certificate, 'second' | 'secondReason'> {
+  // prettier-ignore
+  if (!wanted) return { second: null, secondReason: 'sampled' };
+  if (t.free.reduce((sum, free) => sum + free, 0) > secondUnknowns) return { second: null, secondReason: 'too large' };
+  const states = secondAnalysis(frame);
+  if (!states) return { second: Infinity, secondReason: null };
+  const second = states.reduce((most, state, c) => worse(most, largestDifference(frame, cases[c]!, state, floors[c]!)), 0);
+  return { second, secondReason: null };
 }
 
 /** NaN is worst of all. */
@@ -171,5 +204,7 @@ function outsideTolerance(c: Certificate): string | null {
     return `The equations are not met closely enough: residual ${c.residual.toExponential(1)}, at most 1e-10 is asked for.`;
   if (!(c.equilibrium <= equilibriumTolerance))
     return `Loads and reactions are not in balance: ${c.equilibrium.toExponential(1)} of their size, at most 1e-8 is asked for.`;
+  if (c.secondReason === null && !((c.second ?? NaN) <= secondTolerance))
+    return `Two independent analyses differ by ${(c.second ?? NaN).toExponential(1)} of the largest value, at most 1e-6 is allowed.`;
   return null;
 }

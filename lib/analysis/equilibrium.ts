@@ -5,8 +5,10 @@ import { typedTotals } from './typed-totals';
 /**
  * Global equilibrium of one case: loads as typed and reactions, in x, y and about the middle of the frame,
  * relative to the sum of their sizes; a case without load or reaction counts 0. Certificate item 1.
+ *
+ * @param floor sizes below this are the rounding of bigger forces that cancel (a settlement of a determinate frame), N
  */
-export function globalEquilibrium(frame: Frame, loadCase: number, reactions: Float64Array): number {
+export function globalEquilibrium(frame: Frame, loadCase: number, reactions: Float64Array, floor: number): number {
   const { left, right, low, high, size } = bounds(frame);
   const x0 = (left + right) / 2;
   const y0 = (low + high) / 2;
@@ -24,7 +26,7 @@ export function globalEquilibrium(frame: Frame, loadCase: number, reactions: Flo
     sizeM += Math.abs((node.x_m - x0) * ry) + Math.abs((node.y_m - y0) * rx) + Math.abs(rm);
   });
   // moments without any lever of their own are judged against the forces over the frame's size, and the other way round
-  const scale = Math.max(sizeF, sizeM / size);
+  const scale = Math.max(sizeF, sizeM / size, floor);
   if (!(scale > 0)) return scale === 0 ? 0 : NaN;
   return Math.max(Math.abs(Fx), Math.abs(Fy), Math.abs(Mz) / size) / scale;
 }

@@ -11,6 +11,8 @@ export interface Recovered {
   readonly endForces: Float64Array;
   /** K d − f by node and direction, node axes, at unknowns; N and N·m. */
   readonly outOfBalance: Float64Array;
+  /** Largest force met on the way before stiffness × movement cancels, N: results far below it are its rounding. */
+  readonly handled: number;
 }
 
 /** q = k T d + q_F and R = what the members ask of the supports − loads put straight on them. README (2.8). */
@@ -35,9 +37,16 @@ export function recover(
   const k = emptyMemberStiffness();
   const u = new Float64Array(6);
   const q = new Float64Array(6);
+  let handled = 0;
   data.forEach((m, i) => {
     toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
     endForces(memberStiffness(m, k), u, q);
+    handled = Math.max(
+      handled,
+      k.ka * Math.max(Math.abs(u[0]!), Math.abs(u[3]!)),
+      k.kvv * Math.max(Math.abs(u[1]!), Math.abs(u[4]!)),
+      (k.kv1 + k.kv2) * Math.max(Math.abs(u[2]!), Math.abs(u[5]!)),
+    );
     const fixed = (loadCase * data.length + i) * 6;
     for (let r = 0; r < 6; r++) q[r] = q[r]! + loads.fixedEnd[fixed + r]!;
     for (let end = 0; end < 2; end++) {
@@ -89,5 +98,5 @@ export function recover(
     all[3 * i + 1] = x * sa + y * ca;
     if (t.noRotation[i]) all[3 * i + 2] = NaN;
   }
-  return { displacements: all, reactions, endForces: forces, outOfBalance: asked };
+  return { displacements: all, reactions, endForces: forces, outOfBalance: asked, handled };
 }

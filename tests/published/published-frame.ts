@@ -64,8 +64,6 @@ export interface Ask {
   readonly end?: string;
   readonly quantity?: string;
   readonly sign?: number;
-  readonly length?: number;
-  readonly EI?: number;
 }
 
 const metres: Readonly<Record<string, number>> = { m: 1, mm: 1e-3, in: 0.0254, ft: 0.3048 };

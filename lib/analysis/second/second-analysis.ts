@@ -1,0 +1,196 @@
+import type { Frame } from '@/lib/model/frame';
+import { LuDecomposition, Matrix } from 'ml-matrix';
+import { equivalentLoads, pointLoads, stretchLoad } from './second-loads';
+import { memberFacts, secondModel, type SecondModel, type Stretch } from './second-model';
+
+/** What the second analysis finds for one case, laid out as in a ResultState. */
+export interface SecondState {
+  readonly displacements: Float64Array;
+  readonly reactions: Float64Array;
+  readonly endForces: Float64Array;
+}
+
+/**
+ * The second, independent analysis (engine, Certificate 3): dense, by transformation matrices, in global axes.
+ *
+ * It shares nothing with the first beyond the model: the frame is cut at every load point so that each stretch carries
+ * handbook loads only, ends that are not rigid have a rotation of their own, and supports are held by Lagrange
+ * multipliers, which are the reactions. Solved by LU with row exchanges.
+ * @returns a state for each case; null where the equations are singular
+ */
+export function secondAnalysis(frame: Frame): SecondState[] | null {
+  const model = secondModel(frame);
+  const constraints = heldDirections(frame);
+  const n = model.size;
+  const K = Matrix.zeros(n + constraints.length, n + constraints.length);
+  for (const stretch of model.stretches) spread(K, stretch.unknowns, globalStiffness(frame, stretch));
+  for (const [a, b, k] of model.springs) spread(K, [a, b], new Matrix([[k, -k], [-k, k]])); // prettier-ignore
+  addSupportSprings(K, frame);
+  const typical = Math.max(...Array.from({ length: n }, (_, i) => K.get(i, i)));
+  for (let i = 0; i < n; i++) if (K.getRow(i).every((value) => value === 0)) K.set(i, i, typical);
+  constraints.forEach((c, i) => {
+    c.unknowns.forEach((unknown, k) => {
+      K.set(n + i, unknown, typical * c.direction[k]!);
+      K.set(unknown, n + i, typical * c.direction[k]!);
+    });
+  });
+  const F = Matrix.zeros(n + constraints.length, frame.cases.length);
+  frame.cases.forEach((_, c) => fillLoads(F, model, constraints, typical, c));
+  const lu = new LuDecomposition(K);
+  if (lu.isSingular()) return null;
+  const solution = lu.solve(F);
+  return frame.cases.map((_, c) => stateOf(model, constraints, typical, solution.getColumn(c), c));
+}
+
+interface Held {
+  readonly support: number;
+  readonly kind: 'x' | 'y' | 'turn';
+  readonly unknowns: readonly number[];
+  readonly direction: readonly number[];
+}
+
+function heldDirections(frame: Frame): Held[] {
+  return frame.supports.flatMap((s, support) => {
+    const held: Held[] = [];
+    const plane = [3 * s.node, 3 * s.node + 1];
+    const c = Math.cos(s.angle_rad);
+    const d = Math.sin(s.angle_rad);
+    if (s.ux === 'fixed') held.push({ support, kind: 'x', unknowns: plane, direction: [c, d] });
+    if (s.uy === 'fixed') held.push({ support, kind: 'y', unknowns: plane, direction: [-d, c] });
+    if (s.rz === 'fixed') held.push({ support, kind: 'turn', unknowns: [3 * s.node + 2], direction: [1] });
+    return held;
+  });
+}
+
+function supportSpring(frame: Frame, index: number): Matrix {
+  const s = frame.supports[index]!;
+  const number = (value: number | 'fixed' | 'free'): number => (typeof value === 'number' ? value : 0);
+  const c = Math.cos(s.angle_rad);
+  const d = Math.sin(s.angle_rad);
+  const R = new Matrix([[c, d, 0], [-d, c, 0], [0, 0, 1]]); // prettier-ignore
+  return R.transpose()
+    .mmul(Matrix.diag([number(s.ux), number(s.uy), number(s.rz)]))
+    .mmul(R);
+}
+
+function addSupportSprings(K: Matrix, frame: Frame): void {
+  frame.supports.forEach((s, i) => spread(K, [3 * s.node, 3 * s.node + 1, 3 * s.node + 2], supportSpring(frame, i)));
+}
+
+function spread(K: Matrix, unknowns: readonly number[], k: Matrix): void {
+  unknowns.forEach((row, i) => unknowns.forEach((column, j) => K.set(row, column, K.get(row, column) + k.get(i, j))));
+}
+
+function localStiffness(EA: number, EI: number, l: number): Matrix {
+  const a = EA / l;
+  const b = (12 * EI) / l ** 3;
+  const c = (6 * EI) / l ** 2;
+  const d = (4 * EI) / l;
+  const e = (2 * EI) / l;
+  return new Matrix([
+    [a, 0, 0, -a, 0, 0],
+    [0, b, c, 0, -b, c],
+    [0, c, d, 0, -c, e],
+    [-a, 0, 0, a, 0, 0],
+    [0, -b, -c, 0, b, -c],
+    [0, c, e, 0, -c, d],
+  ]);
+}
+
+function turning(ex: number, ey: number): Matrix {
+  const T = Matrix.zeros(6, 6);
+  for (const o of [0, 3]) {
+    T.set(o, o, ex);
+    T.set(o, o + 1, ey);
+    T.set(o + 1, o, -ey);
+    T.set(o + 1, o + 1, ex);
+    T.set(o + 2, o + 2, 1);
+  }
+  return T;
+}
+
+function globalStiffness(frame: Frame, stretch: Stretch): Matrix {
+  const { EA, EI, ex, ey } = memberFacts(frame, stretch.member);
+  const T = turning(ex, ey);
+  return T.transpose()
+    .mmul(localStiffness(EA, EI, stretch.to - stretch.from))
+    .mmul(T);
+}
+
+function fillLoads(F: Matrix, model: SecondModel, constraints: readonly Held[], typical: number, loadCase: number): void {
+  const { frame } = model;
+  const add = (row: number, value: number): void => {
+    F.set(row, loadCase, F.get(row, loadCase) + value);
+  };
+  for (const load of frame.nodeLoads) {
+    if (load.case !== loadCase) continue;
+    add(3 * load.node, load.Fx_N);
+    add(3 * load.node + 1, load.Fy_N);
+    add(3 * load.node + 2, load.Mz_Nm);
+  }
+  for (const stretch of model.stretches) {
+    const { EA, EI, ex, ey, L } = memberFacts(frame, stretch.member);
+    const p = equivalentLoads(stretchLoad(model, stretch, loadCase), stretch.to - stretch.from, EA, EI);
+    const global = turning(ex, ey).transpose().mmul(Matrix.columnVector(p));
+    stretch.unknowns.forEach((unknown, k) => add(unknown, global.get(k, 0)));
+    for (const load of pointLoads(model, stretch.member, loadCase)) {
+      // a point load belongs to the stretch that it begins, the last one's end to the last
+      const atStart = Math.abs(load.at - stretch.from) <= 1e-9 * L;
+      const atEnd = stretch.to === L && Math.abs(load.at - L) <= 1e-9 * L;
+      if (!atStart && !atEnd) continue;
+      const o = atStart ? 0 : 3;
+      add(stretch.unknowns[o]!, load.FX);
+      add(stretch.unknowns[o + 1]!, load.FY);
+      add(stretch.unknowns[o + 2]!, load.M);
+    }
+  }
+  constraints.forEach((held, i) => {
+    const support = frame.supports[held.support]!;
+    for (const s of frame.settlements) {
+      if (s.case !== loadCase || s.node !== support.node) continue;
+      const moved = held.kind === 'x' ? s.dx_m : held.kind === 'y' ? s.dy_m : s.rz_rad;
+      add(model.size + i, typical * (moved ?? 0));
+    }
+  });
+}
+
+function stateOf(model: SecondModel, constraints: readonly Held[], typical: number, d: number[], loadCase: number): SecondState {
+  const { frame } = model;
+  const displacements = Float64Array.from({ length: 3 * frame.nodes.length }, (_, i) => d[i]!);
+  const reactions = new Float64Array(3 * frame.supports.length);
+  constraints.forEach((held, i) => {
+    const force = -typical * d[model.size + i]!;
+    held.direction.forEach((share, k) => {
+      const at = 3 * held.support + (held.kind === 'turn' ? 2 : k);
+      reactions[at] = reactions[at]! + force * share;
+    });
+  });
+  frame.supports.forEach((s, i) => {
+    const moved = Matrix.columnVector([d[3 * s.node]!, d[3 * s.node + 1]!, d[3 * s.node + 2]!]);
+    const force = supportSpring(frame, i).mmul(moved);
+    for (let k = 0; k < 3; k++) reactions[3 * i + k] = reactions[3 * i + k]! - force.get(k, 0);
+  });
+  const endForces = new Float64Array(6 * frame.members.length);
+  for (const stretch of model.stretches) {
+    const { EA, EI, ex, ey, L } = memberFacts(frame, stretch.member);
+    const l = stretch.to - stretch.from;
+    const u = turning(ex, ey).mmul(Matrix.columnVector(stretch.unknowns.map((unknown) => d[unknown]!)));
+    const p = equivalentLoads(stretchLoad(model, stretch, loadCase), l, EA, EI);
+    const q = Matrix.sub(localStiffness(EA, EI, l).mmul(u), Matrix.columnVector(p)).getColumn(0);
+    const o = 6 * stretch.member;
+    const beside = pointLoads(model, stretch.member, loadCase);
+    if (stretch.from === 0) {
+      const here = beside.filter((load) => load.at <= 1e-9 * L);
+      endForces[o] = -q[0]! + here.reduce((sum, load) => sum + load.Px, 0);
+      endForces[o + 1] = q[1]! - here.reduce((sum, load) => sum + load.Py, 0);
+      endForces[o + 2] = -q[2]! + here.reduce((sum, load) => sum + load.M, 0);
+    }
+    if (stretch.to === L) {
+      const here = beside.filter((load) => load.at >= L * (1 - 1e-9));
+      endForces[o + 3] = q[3]! - here.reduce((sum, load) => sum + load.Px, 0);
+      endForces[o + 4] = -q[4]! + here.reduce((sum, load) => sum + load.Py, 0);
+      endForces[o + 5] = q[5]! - here.reduce((sum, load) => sum + load.M, 0);
+    }
+  }
+  return { displacements, reactions, endForces };
+}
