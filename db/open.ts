@@ -15,6 +15,15 @@ export interface OpenDatabase {
   readonly close: () => Promise<void>;
 }
 
+const drivers = new WeakMap<Db, RawDatabase>();
+
+/** The driver beneath an open database, for reads whose statements are kept prepared. @throws {RangeError} for a transaction */
+export function driverOf(db: Db): RawDatabase {
+  const raw = drivers.get(db);
+  if (!raw) throw new RangeError('Expected a database given by openDatabase, got something else (a transaction?)');
+  return raw;
+}
+
 /**
  * Opens a database file, for the server, a worker thread, the command line or a test.
  * One writer at a time, many readers: others wait up to 10 s for the writer's short transactions.
@@ -30,5 +39,6 @@ export function openDatabase(file: string, { readonly = false }: { readonly?: bo
   raw.pragma('cache_size = -32000');
   raw.pragma('temp_store = MEMORY');
   const db = new Kysely<DB>({ dialect: new SqliteDialect({ database: raw }) });
+  drivers.set(db, raw);
   return { db, raw, close: () => db.destroy() };
 }

@@ -82,6 +82,8 @@ create table input_row (
   primary key (revision, ordinal)
 ) strict, without rowid;
 
+create index input_row_place on input_row (revision, sheet, row);
+
 create table sheet_read (
   revision integer not null references revision, ordinal integer not null, name text not null, file text not null,
   known text, heading_row integer, rows integer not null, headings text not null,

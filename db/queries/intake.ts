@@ -1,7 +1,7 @@
 import { noneHigh, noneLow } from '@/db/absent';
 import { instant } from '@/db/clock';
 import { packModel } from '@/db/encode';
-import { ListWriter } from '@/db/list-rows';
+import { ListWriter } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { evaluationOf, type StoredState } from '@/db/queries/results';
 import { inShortTransactions } from '@/db/short-transactions';

@@ -1,10 +1,11 @@
 import { instant } from '@/db/clock';
 import { packJson, packModel, packState, unpackJson, unpackModel, unpackState } from '@/db/encode';
-import { ListWriter, type Solved, summaryOf } from '@/db/list-rows';
+import { ListWriter, type Solved, summaryOf } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { inShortTransactions } from '@/db/short-transactions';
 import { rankOf } from '@/db/verdict-rank';
 import type { Frame, Purpose } from '@/lib/model/frame';
+import type { MemberGoverning } from '@/lib/results/member-results';
 import type { FrameEvaluation, MemberExtremes, ResultState, Verdict } from '@/lib/results/result';
 
 /** A frame version that waits to be run, under the name of the first frame that has it. */
@@ -12,20 +13,6 @@ export interface WaitingFrame {
   readonly version: number;
   readonly hash: string;
   readonly frame: Frame;
-}
-
-/** A member's line in the members table: its governing check, and the forces where that check stands. */
-export interface MemberGoverning {
-  readonly check: string | null;
-  readonly combination: string | null;
-  readonly at: number | null;
-  readonly N: number | null;
-  readonly V: number | null;
-  readonly M: number | null;
-  /** Largest of the service combinations, signed along local y. */
-  readonly deflection: number | null;
-  readonly ratio: number | null;
-  readonly verdict: Verdict;
 }
 
 /** Ratio and verdict of a member under one result, where they were asked for. */

@@ -1,7 +1,11 @@
-/** Signatures for those who code against them; bodies follow in this folder. */
-import type { Db } from '@/db/open';
+import { orNull } from '@/db/absent';
+import { type Db, driverOf, type RawDatabase } from '@/db/open';
+import { countRevisionVerdicts } from '@/db/queries/revisions';
+import { stampOf } from '@/db/queries/lists';
 import type { VerdictCounts } from '@/db/queries/verdict-counts';
 import type { FrameStatus } from '@/db/schema';
+import { statement } from '@/db/statements';
+import { verdictOf } from '@/db/verdict-rank';
 import type { Verdict } from '@/lib/results/result';
 
 export interface SummaryCell {
@@ -17,6 +21,7 @@ export interface SummaryCell {
   readonly section: string | null;
   readonly combination: string | null;
   readonly group: string | null;
+  readonly reason: string | null;
 }
 
 export interface BatchSummary {
@@ -27,28 +32,164 @@ export interface BatchSummary {
   /** Which check governs how many frames, and how many of these are over; the most frequent first. */
   readonly governing: readonly { readonly check: string; readonly frames: number; readonly over: number }[];
   /** Sections by how hard their members work; the hardest first. */
-  readonly sections: readonly {
-    readonly section: string;
-    readonly members: number;
-    readonly median: number | null;
-    readonly worst: number | null;
-    readonly over: number;
-  }[];
+  readonly sections: readonly SectionSummary[];
   /** Worst first, at most ten: over before not checked before near, then by ratio. */
   readonly worst: readonly SummaryCell[];
   /** Parameters of the batch's families. */
   readonly parameters: readonly { readonly name: string; readonly quantity: string; readonly numeric: boolean }[];
-  /** kg of all frames with their number off; null where a mass is not known. */
+  /** kg of all frames with their number off, those without a known mass left out; null where none is known. */
   readonly mass: number | null;
 }
 
+export interface SectionSummary {
+  readonly section: string;
+  readonly members: number;
+  /** Of its members that have a ratio. */
+  readonly median: number | null;
+  readonly worst: number | null;
+  readonly over: number;
+}
+
+const step = 0.05;
+const steps = 26; // 0 to 1.25, and all above
+
 /** A revision at a glance. @returns undefined where it is not the office's */
-export declare function findSummary(db: Db, office: number, revision: number): Promise<BatchSummary | undefined>;
+export async function findSummary(db: Db, office: number, revision: number): Promise<BatchSummary | undefined> {
+  const raw = driverOf(db);
+  if (stampOf(raw, office, revision) === undefined) return undefined;
+  const rows = readFrames(raw, revision);
+  const cells = rows.map(cellOf);
+  const frames = Array<number>(steps).fill(0);
+  for (const { ratio } of cells) if (ratio !== null) frames[Math.min(Math.floor(ratio / step), steps - 1)]! += 1;
+  return {
+    counts: await countRevisionVerdicts(db, office, revision),
+    cells,
+    spread: { step, frames },
+    governing: governingChecks(cells),
+    sections: sectionsOf(raw, revision),
+    worst: worstOf(raw, revision, cells),
+    parameters: parametersOf(raw, revision),
+    mass: massOf(rows),
+  };
+}
 
 /** Values of one numeric parameter beside each frame's ratio, in sheet order: a picture over a parameter. */
-export declare function listParameterRatios(
+export async function listParameterRatios(
   db: Db,
   office: number,
   revision: number,
   parameter: string,
-): Promise<{ index: number; value: number; ratio: number | null; verdict: Verdict | null; group: string | null }[]>;
+): Promise<{ index: number; value: number; ratio: number | null; verdict: Verdict | null; group: string | null }[]> {
+  const rows = await db
+    .selectFrom('revision_frame')
+    .innerJoin('revision', 'revision.id', 'revision_frame.revision')
+    .innerJoin('frame_parameter', 'frame_parameter.version', 'revision_frame.version')
+    .select((eb) => [
+      'revision_frame.frame as index',
+      eb.ref('frame_parameter.number').$notNull().as('value'),
+      'revision_frame.ratio',
+      'revision_frame.verdict',
+      'revision_frame.group_name as group',
+    ])
+    .where('revision.office', '=', office)
+    .where('revision_frame.revision', '=', revision)
+    .where('frame_parameter.name', '=', parameter)
+    .where('frame_parameter.number', 'is not', null)
+    .orderBy('revision_frame.frame')
+    .execute();
+  return rows.map((row) => ({ ...row, ratio: orNull(row.ratio), verdict: verdictOf(row.verdict), group: row.group || null }));
+}
+
+interface Read {
+  index: number;
+  id: string;
+  status: FrameStatus;
+  verdict: number;
+  ratio: number;
+  check_name: string;
+  subject: string | null;
+  section: string;
+  combination: string;
+  group_name: string;
+  reason: string | null;
+  mass: number;
+  count: number;
+}
+
+function readFrames(raw: RawDatabase, revision: number): Read[] {
+  return statement<Read>(
+    raw,
+    `select frame as "index", frame_id as id, status, verdict, ratio, check_name, subject, section, combination, group_name,
+     reason, mass, count from revision_frame where revision = ? order by frame`,
+  ).all(revision);
+}
+
+function cellOf(row: Read): SummaryCell {
+  const { index, id, status, reason } = row;
+  const check = row.check_name || null;
+  return {
+    index, id, status, reason, check,
+    verdict: verdictOf(row.verdict),
+    ratio: orNull(row.ratio),
+    subject: check === null ? null : (row.subject ?? id),
+    section: row.section || null,
+    combination: row.combination || null,
+    group: row.group_name || null,
+  }; // prettier-ignore
+}
+
+function governingChecks(cells: readonly SummaryCell[]): BatchSummary['governing'] {
+  const checks = new Map<string, { check: string; frames: number; over: number }>();
+  for (const { check, verdict } of cells) {
+    if (check === null) continue;
+    const known = checks.get(check) ?? { check, frames: 0, over: 0 };
+    known.frames += 1;
+    if (verdict === 'over') known.over += 1;
+    checks.set(check, known);
+  }
+  return [...checks.values()].sort((a, b) => b.frames - a.frames || (a.check < b.check ? -1 : 1));
+}
+
+/** From the list of members by section, whose order makes the median the row in the middle. */
+function sectionsOf(raw: RawDatabase, revision: number): SectionSummary[] {
+  const counted = statement<{ section: string; members: number; over: number }>(
+    raw,
+    `select b as section, sum(rows) as members, sum(case when e = '3' then rows else 0 end) as over
+     from tally where revision = ? and list = 'members' group by b`,
+  ).all(revision);
+  const ratios = 'from member_row indexed by member_row_section_ratio where revision = ? and section = ? and ratio >= 0';
+  const withRatio = statement<{ n: number }>(raw, `select count(*) as n ${ratios}`);
+  const nth = statement<{ ratio: number }>(raw, `select ratio ${ratios} order by ratio desc limit 1 offset ?`);
+  const found = counted.map(({ section, members, over }): SectionSummary => {
+    const { n } = withRatio.get(revision, section)!;
+    if (n === 0) return { section, members, median: null, worst: null, over };
+    const at = (offset: number) => nth.get(revision, section, offset)!.ratio;
+    return { section, members, median: (at((n - 1) >> 1) + at(n >> 1)) / 2, worst: at(0), over };
+  });
+  return found.sort((a, b) => (b.worst ?? -1) - (a.worst ?? -1) || (a.section < b.section ? -1 : 1));
+}
+
+function worstOf(raw: RawDatabase, revision: number, cells: readonly SummaryCell[]): SummaryCell[] {
+  const rows = statement<{ frame: number }>(
+    raw,
+    `select frame from revision_frame where revision = ? and verdict = ? order by ratio desc, frame limit 10`,
+  );
+  const frames = [3, 2, 1, 0].flatMap((verdict) => rows.all(revision, verdict));
+  return frames.slice(0, 10).flatMap(({ frame }) => cells[frame] ?? []);
+}
+
+function parametersOf(raw: RawDatabase, revision: number): BatchSummary['parameters'] {
+  // A family's variants have the same parameters, so one frame of each family is enough.
+  const rows = statement<{ name: string; quantity: string; numeric: number }>(
+    raw,
+    `select distinct p.name, p.quantity, p.number is not null as numeric from frame_parameter p where p.version in (
+       select min(version) from revision_frame where revision = ? and family <> '' and version is not null group by family)
+     order by p.name`,
+  ).all(revision);
+  return rows.map(({ name, quantity, numeric }) => ({ name, quantity, numeric: numeric === 1 }));
+}
+
+function massOf(rows: readonly Read[]): number | null {
+  const known = rows.filter((row) => orNull(row.mass) !== null);
+  return known.length === 0 ? null : known.reduce((sum, row) => sum + row.mass * row.count, 0);
+}

@@ -69,3 +69,18 @@ export function* inputRows(raw: RawDatabase, revision: number): Generator<InputR
     last = rows.at(-1)!.ordinal;
   }
 }
+
+/**
+ * Fails revisions in state "reading" that no job will read: their upload was cut short when the server ended.
+ *
+ * @returns their ids
+ */
+export function failStrandedReadings(raw: RawDatabase, reason: string): number[] {
+  return raw
+    .prepare<[string], number>(
+      `update revision set state = 'failed', reason = ? where state = 'reading'
+       and not exists (select 1 from job where job.revision = revision.id and job.state in ('queued', 'running')) returning id`,
+    )
+    .pluck()
+    .all(reason);
+}

@@ -1,10 +1,10 @@
 /** Writes the rows of a solved frame into the lists of a revision that are filtered and sorted (README, "Lists"). */
 import { orNone, orNoneHigh } from '@/db/absent';
 import type { RawDatabase } from '@/db/open';
-import type { MemberGoverning } from '@/db/queries/results';
-import { TallyWriter } from '@/db/tally';
+import { TallyWriter } from '@/db/lists/tally';
 import { rankOf } from '@/db/verdict-rank';
 import type { Frame } from '@/lib/model/frame';
+import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation } from '@/lib/results/result';
 import { governingIndex } from '@/lib/results/verdict';
 
