@@ -1,0 +1,99 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { Check, MemberLine, ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings } from './check-row';
+import { checkCriticalLoadFactor } from './critical-load-factor';
+import { checkDeflection } from './deflection';
+import { checkDisplacement } from './displacement';
+import { spansOf, type Span } from './spans';
+import { checkSpread } from './spread';
+import { checkStability, stabilitySubject } from './stability';
+import { checkStress, stressNotChecked } from './strength-stress';
+import { checkSway } from './sway';
+
+export interface FrameChecks {
+  /** One row for each subject × check: the combination that governs, the first on a tie. */
+  readonly checks: readonly Check[];
+  /** Every subject × check × combination, where asked for. */
+  readonly allChecks: readonly Check[] | null;
+  /** What stands assumed, once each. */
+  readonly assumptions: readonly string[];
+  /** What was not checked and why, "check: reason", once each: the frame's own reasons first. */
+  readonly notChecked: readonly string[];
+}
+
+/**
+ * Every check of one frame (engine.md, "Checks"): elastic stress of members, stability of spans and the critical load factor in
+ * strength combinations; deflection, sway, displacement and spread in service combinations. Order of rows: stress by member,
+ * stability by span, critical load factor, then movements.
+ *
+ * @param states the frame's results, cases and combinations; cases are not checked
+ * @param lineOf the exact line of a member in a state; called once for each strength or service combination and member
+ * @param options.all keep every subject × check × combination too
+ */
+export function checkFrame(
+  frame: Frame,
+  settings: Settings,
+  states: readonly ResultState[],
+  lineOf: (state: ResultState, member: number) => MemberLine,
+  options: { readonly all: boolean },
+): FrameChecks {
+  const strength = states.filter((state) => state.kind === 'combination' && state.purpose === 'strength');
+  const service = states.filter((state) => state.kind === 'combination' && state.purpose === 'service');
+  const findings: Findings = {
+    checks: [],
+    all: options.all ? [] : null,
+    assumptions: new Set(),
+    notChecked: new Set(frame.notChecked),
+    noService: strength.length > 0 ? 'no service combinations' : 'no combinations',
+  };
+  const spans = spansOf(frame);
+  checkStrength(frame, settings, spans, strength, service.length > 0, lineOf, findings);
+  for (const span of spans) checkDeflection(frame, settings, span, service, lineOf, findings);
+  for (const span of spans) checkSway(frame, settings, span, service, findings);
+  checkDisplacement(frame, settings, service, findings);
+  checkSpread(frame, settings, service, findings);
+  return {
+    checks: findings.checks,
+    allChecks: findings.all,
+    assumptions: [...findings.assumptions],
+    notChecked: [...findings.notChecked],
+  };
+}
+
+type LineOf = (state: ResultState, member: number) => MemberLine;
+
+function checkStrength(
+  frame: Frame,
+  settings: Settings,
+  spans: readonly Span[],
+  states: readonly ResultState[],
+  others: boolean,
+  lineOf: LineOf,
+  findings: Findings,
+): void {
+  const screened = settings.stability === 'screened' ? spans : [];
+  const none =
+    settings.strengthCheck !== 'elastic stress'
+      ? `strength check ${settings.strengthCheck} is not available`
+      : states.length === 0
+        ? others
+          ? 'no strength combinations'
+          : 'no combinations'
+        : null;
+  if (none) {
+    frame.members.forEach((_, i) => stressNotChecked(frame, i, none, findings));
+    for (const span of screened) keepGoverning(findings, [notCheckedRow(stabilitySubject(span), null, none)]);
+    return;
+  }
+  const byMember = frame.members.map((_, i) => states.map((state) => lineOf(state, i)));
+  for (let i = 0; i < frame.members.length; i++) checkStress(frame, settings, i, states, byMember[i]!, findings);
+  findings.assumptions.add(
+    'Equivalent stress: the larger face stress with the peak shear stress of the same place, on the safe side',
+  );
+  for (const span of screened) {
+    const lines = states.map((_, c) => span.pieces.map((piece) => byMember[piece.member]![c]!));
+    checkStability(frame, settings, span, states, lines, findings);
+  }
+  checkCriticalLoadFactor(settings, states, findings);
+}

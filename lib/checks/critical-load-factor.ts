@@ -1,0 +1,43 @@
+import type { Settings } from '@/lib/model/settings';
+import type { Check, ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { figure } from './figure';
+import { verdictOf } from './verdict';
+
+/**
+ * Critical load factor of the frame in every strength combination, times the stress factor: below 1 over; below 10 with a
+ * first-order analysis not checked (EN 1993-1-1 5.2.1(3)). No positive root: the loads cannot buckle it.
+ */
+export function checkCriticalLoadFactor(settings: Settings, states: readonly ResultState[], findings: Findings): void {
+  const subject: Subject = {
+    subjectKind: 'frame',
+    subject: null,
+    check: 'critical load factor',
+    quantity: 'number',
+    reference: 'EN 1993-1-1 5.2.1(3): α_cr ≥ 10 for first-order analysis',
+    member: null,
+  };
+  const f = settings.stressFactor;
+  const rows = states.map((state): Check => {
+    const alpha = state.criticalLoadFactor;
+    const value = alpha === null ? null : alpha * f;
+    const ratio = value === null ? 0 : 1 / value;
+    if (value !== null && value >= 1 && value < 10 && state.order === 1) {
+      const reason = `second-order effects not negligible (α_cr ${figure(value, 'down')}${f === 1 ? '' : ', stress factor included'})`;
+      return notCheckedRow(subject, state.name, reason, { alpha, f, value });
+    }
+    return {
+      ...subject,
+      combination: state.name,
+      at: null,
+      face: null,
+      value,
+      limit: 1,
+      ratio,
+      verdict: verdictOf(ratio, settings.nearLimit),
+      reason: null,
+      inputs: { alpha, f, value, limit: 1, ratio },
+    };
+  });
+  keepGoverning(findings, rows);
+}

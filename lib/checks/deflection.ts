@@ -1,0 +1,118 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { MemberLine, ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { namesSpan } from './limits';
+import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
+import { SAME, turningPoints } from './peak';
+import { valueAt } from './polynomial';
+import type { Span } from './spans';
+
+/** Roles whose deflection is only limited where Limits name them; `*` does not bring them in. */
+const onlyNamed: ReadonlySet<string | null> = new Set(['column', 'strut', 'tie', 'brace']);
+
+/** How a span's deflection is measured: from the line between its moved ends, or from its root. */
+export type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever'; readonly root: 'start' | 'end' };
+
+/**
+ * Deflection of a span in every service combination. A span: largest departure, square to the line between its moved ends.
+ * A cantilever: largest displacement square to the member relative to the root node's, root rotation not deducted.
+ * @param lineOf the exact line of a member in a state
+ */
+export function checkDeflection(
+  frame: Frame,
+  settings: Settings,
+  span: Span,
+  states: readonly ResultState[],
+  lineOf: (state: ResultState, member: number) => MemberLine,
+  findings: Findings,
+): void {
+  const named = limitsWithSetup(frame, settings, 'deflection').filter((limit) => namesSpan(limit, span, frame));
+  const limits = onlyNamed.has(span.role) ? named.filter((limit) => limit.target !== 'all') : named;
+  const subject: Subject = {
+    subjectKind: span.kind,
+    subject: span.name,
+    check: 'deflection',
+    quantity: 'displacement',
+    reference: 'Limits',
+    member: span.pieces[0]!.member,
+  };
+  if (limits.length === 0) {
+    if (onlyNamed.has(span.role)) return;
+    const why = withoutLimit(settings, 'deflection', findings);
+    if (why) keepGoverning(findings, [notCheckedRow(subject, null, why)]);
+    return;
+  }
+  if (!span.whole) return keepGoverning(findings, [notCheckedRow(subject, null, 'pieces of the span do not form one line')]);
+  const rule = deflectionRule(frame, span, findings);
+  const measured = (c: number): Movement => {
+    const lines = span.pieces.map((piece) => lineOf(states[c]!, piece.member));
+    const { value, at } = deflectionOf(span, rule, lines);
+    return { value, at, inputs: { rule: rule.kind, root: rule.kind === 'cantilever' ? rule.root : null, x: at } };
+  };
+  checkMovement(subject, 'deflection', limits, span.length_m, settings, states, measured, findings);
+}
+
+/**
+ * A cantilever is a span of that role, or an arm or beam with one end that has no other member and no support.
+ * The root of a cantilever whose both ends are joined to something is its one supported end, else its start.
+ */
+export function deflectionRule(frame: Frame, span: Span, findings: Findings): DeflectionRule {
+  const pieces = new Set(span.pieces.map((piece) => piece.member));
+  const supported = (node: number): boolean =>
+    frame.supports.some((s) => s.node === node && (s.ux !== 'free' || s.uy !== 'free' || s.rz !== 'free'));
+  const loose = (node: number): boolean =>
+    !supported(node) && !frame.members.some((m, i) => !pieces.has(i) && (m.start === node || m.end === node));
+  const start = loose(span.startNode);
+  const end = loose(span.endNode);
+  if (start !== end && (span.role === 'cantilever' || span.role === 'arm' || span.role === 'beam'))
+    return { kind: 'cantilever', root: start ? 'end' : 'start' };
+  if (span.role !== 'cantilever') return { kind: 'span' };
+  const root = supported(span.endNode) && !supported(span.startNode) ? 'end' : 'start';
+  findings.assumptions.add(`${span.name}: a cantilever with no free end; its ${root} is taken as the root`);
+  return { kind: 'cantilever', root };
+}
+
+const departure = new Float64Array(16);
+const points = new Float64Array(32);
+
+/** Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start. */
+export function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): { value: number; at: number } {
+  const last = span.pieces.length - 1;
+  const first = endDeflection(span, 0, lines, 'near');
+  const final = endDeflection(span, last, lines, 'far');
+  const rest = rule.kind === 'span' ? first : rule.root === 'start' ? first : final;
+  const slope = rule.kind === 'span' ? (final - first) / span.length_m : 0;
+  let value = 0;
+  let at = 0;
+  for (let p = 0; p <= last; p++) {
+    const { from_m, length_m, reversed } = span.pieces[p]!;
+    const sign = reversed ? -1 : 1;
+    const segments = lines[p]!.segments;
+    for (let i = 0; i < segments.length; i++) {
+      const { v, from, to } = segments[reversed ? segments.length - 1 - i : i]!;
+      const degree = Math.max(1, v.length - 1);
+      for (let k = 0; k <= degree; k++) departure[k] = sign * (v[k] ?? 0);
+      const x0 = reversed ? from_m + length_m - from : from_m + from;
+      departure[0] = departure[0]! - rest - slope * x0;
+      departure[1] = departure[1]! - sign * slope;
+      const count = turningPoints(departure, degree, to - from, points);
+      for (let j = 0; j < count; j++) {
+        const s = points[reversed ? count - 1 - j : j]!;
+        const here = Math.abs(valueAt(departure, degree, s));
+        if (here > value * (1 + SAME)) [value, at] = [here, x0 + sign * s];
+      }
+    }
+  }
+  return { value, at };
+}
+
+/** Deflection at the near or far end of a piece as the span runs, square to it, m. */
+function endDeflection(span: Span, piece: number, lines: readonly MemberLine[], which: 'near' | 'far'): number {
+  const { reversed } = span.pieces[piece]!;
+  const segments = lines[piece]!.segments;
+  const atStart = (which === 'near') !== reversed;
+  const segment = segments[atStart ? 0 : segments.length - 1]!;
+  const v = valueAt(segment.v, segment.v.length - 1, atStart ? 0 : segment.to - segment.from);
+  return reversed ? -v : v;
+}

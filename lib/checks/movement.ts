@@ -1,0 +1,103 @@
+import type { Frame, Limit, Measure } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { Check, ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { allowance, limitIn, limitsOf } from './limits';
+import { SAME } from './peak';
+import { verdictOf } from './verdict';
+
+/** What a movement of one subject in one combination came to. */
+export interface Movement {
+  /** In size, m. */
+  readonly value: number;
+  readonly at: number | null;
+  readonly inputs: Check['inputs'];
+}
+
+/** Setup's ratio as the `*` row that it is, where the frame's limits do not hold it already. */
+export function limitsWithSetup(frame: Frame, settings: Settings, measure: 'deflection' | 'sway'): readonly Limit[] {
+  const given = limitsOf(frame, measure);
+  const ratio = measure === 'deflection' ? settings.deflectionRatio : settings.swayRatio;
+  if (typeof ratio !== 'number' || given.some((limit) => limit.target === 'all' && limit.combination === null)) return given;
+  const setup: Limit = {
+    target: 'all',
+    name: '*',
+    measure,
+    direction: null,
+    toNode: null,
+    ratio,
+    absolute_m: null,
+    combination: null,
+    namedFrame: false,
+    source: 'Setup',
+  };
+  return [...given, setup];
+}
+
+/** Why a movement has no limit at all, or null where Setup declares that it needs none. */
+export function withoutLimit(settings: Settings, measure: 'deflection' | 'sway', findings: Findings): string | null {
+  const declared = measure === 'deflection' ? settings.deflectionRatio : settings.swayRatio;
+  if (declared !== 'none') return `no ${measure} limit`;
+  findings.assumptions.add(`${measure === 'deflection' ? 'Deflection' : 'Sway'}: declared to have no limit`);
+  return null;
+}
+
+/**
+ * A subject's movement against the limits that name it, in every service combination.
+ * @param limits most specific first; in a combination that none of them is for, the movement is not limited
+ * @param length_m what a limit's ratio divides
+ * @param measured the movement in a state, by its index
+ */
+export function checkMovement(
+  subject: Subject,
+  measure: Measure,
+  limits: readonly Limit[],
+  length_m: number,
+  settings: Settings,
+  states: readonly ResultState[],
+  measured: (state: number) => Movement,
+  findings: Findings,
+): void {
+  const rows: Check[] = [];
+  let largest = -1;
+  for (let c = 0; c < states.length; c++) {
+    const combination = states[c]!.name;
+    const limit = limitIn(limits, combination);
+    if (!limit) continue;
+    const allowed = allowance(limit, length_m);
+    if (allowed === null || !(allowed > 0)) {
+      rows.push(
+        notCheckedRow(
+          subject,
+          combination,
+          `needs ${measure === 'displacement' ? 'absolute' : 'ratio or absolute'} in ${limit.source}`,
+        ),
+      );
+      continue;
+    }
+    const { value, at, inputs } = measured(c);
+    const ratio = value / allowed;
+    if (!findings.all && largest >= 0 && ratio <= largest * (1 + SAME)) continue;
+    largest = Math.max(largest, ratio);
+    rows.push({
+      ...subject,
+      combination,
+      at,
+      face: null,
+      value,
+      limit: allowed,
+      ratio,
+      verdict: verdictOf(ratio, settings.nearLimit),
+      reason: null,
+      reference: limit.source,
+      inputs: { ...inputs, n: limit.ratio, absolute: limit.absolute_m, length: length_m, value, limit: allowed, ratio },
+    });
+  }
+  if (rows.length === 0)
+    rows.push(notCheckedRow(subject, null, states.length === 0 ? findings.noService : whyNone(measure, limits)));
+  keepGoverning(findings, rows);
+}
+
+function whyNone(measure: Measure, limits: readonly Limit[]): string {
+  return `no ${measure} limit for any service combination of the frame (${limits.map((limit) => limit.source).join(', ')})`;
+}

@@ -1,0 +1,205 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { Check, MemberLine, ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { figure } from './figure';
+import { SAME, turningPoints } from './peak';
+import { valueAt } from './polynomial';
+import { spanBuckling, type SpanBuckling } from './span-buckling';
+import type { Span } from './spans';
+
+/** Below these parts of the critical load and moment buckling is negligible (EN 1993-1-1 6.3.1.2(4), 6.3.2.2(4)). */
+const NEGLIGIBLE_N = 0.04;
+const NEGLIGIBLE_M = 0.16;
+
+export const stabilitySubject = (span: Span): Subject => ({
+  subjectKind: span.kind,
+  subject: span.name,
+  check: 'stability',
+  quantity: 'number',
+  reference: 'EN 1993-1-1 6.3.1.2(4), 6.3.2.2(4): buckling negligible',
+  member: span.pieces[0]!.member,
+});
+
+/** A combination's compression and moments along a span, divided by the stress factor, against its critical ones. */
+interface Screening {
+  readonly N: number;
+  readonly positive: number;
+  readonly negative: number;
+  readonly major: number;
+  readonly minor: number;
+  readonly bending: number;
+  readonly ratio: number;
+  readonly needs: readonly string[];
+}
+
+/**
+ * Stability screening of a span in every strength combination: where N ≤ 0.04 N_cr about both axes and M ≤ 0.16 M_cr,
+ * both with the actions divided by the stress factor, buckling is negligible; else it is not checked here.
+ * @param lines for each of `states` the line of each piece, in the order of span.pieces
+ */
+export function checkStability(
+  frame: Frame,
+  settings: Settings,
+  span: Span,
+  states: readonly ResultState[],
+  lines: readonly (readonly MemberLine[])[],
+  findings: Findings,
+): void {
+  const subject = stabilitySubject(span);
+  const broken = whyNotOneMember(frame, span);
+  if (broken) {
+    keepGoverning(
+      findings,
+      states.slice(0, findings.all ? undefined : 1).map((state) => notCheckedRow(subject, state.name, broken)),
+    );
+    return;
+  }
+  const buckling = spanBuckling(frame, span);
+  note(span, buckling, findings);
+  const rows: Check[] = [];
+  let largest = -1;
+  for (let c = 0; c < states.length; c++) {
+    const state = states[c]!;
+    const found = screen(settings, buckling, state, lines[c]!);
+    if (found.needs.length > 0 || found.ratio > 1) {
+      rows.push(refused(settings, span, subject, state, buckling, found));
+      // a combination that is not checked governs all that follow
+      if (!findings.all) break;
+    } else if (findings.all || largest < 0 || found.ratio > largest * (1 + SAME)) {
+      largest = Math.max(largest, found.ratio);
+      rows.push(negligible(settings, span, subject, state, buckling, found));
+    }
+  }
+  keepGoverning(findings, rows);
+}
+
+function whyNotOneMember(frame: Frame, span: Span): string | null {
+  if (!span.whole) return 'pieces of the span do not form one line';
+  const first = frame.members[span.pieces[0]!.member]!;
+  const unlike = span.pieces.some((p) => {
+    const m = frame.members[p.member]!;
+    return m.section !== first.section || m.material !== first.material || m.turned !== first.turned;
+  });
+  return unlike ? 'pieces of the span have different sections' : null;
+}
+
+function note(span: Span, buckling: SpanBuckling, findings: Findings): void {
+  if (buckling.blank.length > 0)
+    findings.assumptions.add(`${span.name}: length ${buckling.blank.join(', ')} taken as the length of the span`);
+  if (buckling.ltb.kind !== 'formula') return;
+  findings.assumptions.add('M_cr: uniform moment (C1 = 1), load at the shear centre');
+  if (buckling.ltb.note) findings.assumptions.add(buckling.ltb.note);
+}
+
+const NONE: readonly string[] = [];
+
+function screen(settings: Settings, of: SpanBuckling, state: ResultState, lines: readonly MemberLine[]): Screening {
+  const f = settings.stressFactor;
+  actionsOf(lines);
+  // what rounding leaves of zero: a stress of E/10⁹
+  const noForce = 1e-9 * of.E * of.A;
+  const noMoment = noForce * Math.sqrt(of.Imajor / of.A);
+  const N = compression > noForce ? compression / f : 0;
+  const positive = sagging > noMoment ? sagging / f : 0;
+  const negative = hogging > noMoment ? hogging / f : 0;
+  const major = N / of.NcrMajor;
+  const minor = of.NcrMinor === null ? 0 : N / of.NcrMinor;
+  const bending = Math.max(positive / of.McrTop, negative / of.McrBottom);
+  const ratio = Math.max(major / NEGLIGIBLE_N, minor / NEGLIGIBLE_N, bending / NEGLIGIBLE_M);
+
+  let needs = NONE;
+  if (N > 0 && of.NcrMinor === null) needs = ['I minor'];
+  if (N > 0 && of.blankInPlane !== null && !(state.order === 2 && settings.imperfections !== 'none')) {
+    const amplified = state.criticalLoadFactor === null ? Infinity : state.criticalLoadFactor * f;
+    if (amplified < 10)
+      needs = [...needs, `length ${of.blankInPlane} (blank in plane, with α_cr × f = ${figure(amplified, 'down')} below 10)`];
+  }
+  if ((positive > 0 || negative > 0) && of.ltb.kind === 'needs') {
+    const known = needs;
+    needs = [...known, ...of.ltb.needs.filter((need) => !known.includes(need))];
+  }
+  return { N, positive, negative, major, minor, bending, ratio, needs };
+}
+
+function refused(
+  settings: Settings,
+  span: Span,
+  subject: Subject,
+  state: ResultState,
+  of: SpanBuckling,
+  found: Screening,
+): Check {
+  const inputs = inputsOf(settings, span, of, found);
+  if (found.needs.length > 0) return notCheckedRow(subject, state.name, `needs ${found.needs.join(', ')}`, inputs);
+  const figures: string[] = [];
+  if (found.major > NEGLIGIBLE_N) figures.push(`N/N_cr major ${figure(found.major, 'up')}`);
+  if (found.minor > NEGLIGIBLE_N) figures.push(`N/N_cr minor ${figure(found.minor, 'up')}`);
+  if (found.bending > NEGLIGIBLE_M) figures.push(`M/M_cr ${figure(found.bending, 'up')}`);
+  const cure = 'closer restraints (lengths) or a design-code check would clear it';
+  return notCheckedRow(subject, state.name, `buckling not negligible (${figures.join(', ')}): ${cure}`, inputs);
+}
+
+function negligible(
+  settings: Settings,
+  span: Span,
+  subject: Subject,
+  state: ResultState,
+  of: SpanBuckling,
+  found: Screening,
+): Check {
+  const { ratio } = found;
+  return {
+    ...subject,
+    combination: state.name,
+    at: null,
+    face: null,
+    value: ratio,
+    limit: 1,
+    ratio,
+    verdict: 'within',
+    reason: null,
+    inputs: { ...inputsOf(settings, span, of, found), value: ratio, limit: 1, ratio },
+  };
+}
+
+function inputsOf(settings: Settings, span: Span, of: SpanBuckling, found: Screening): Check['inputs'] {
+  const { E, Imajor, Iminor, Lmajor, Lminor, NcrMajor, NcrMinor, ltb } = of;
+  const inputs: Record<string, number | string | null> = { f: settings.stressFactor, E, L: span.length_m, N: found.N };
+  if (found.N > 0) {
+    Object.assign(inputs, { Imajor, Lmajor, NcrMajor, NNcrMajor: found.major });
+    if (Iminor !== null) Object.assign(inputs, { Iminor, Lminor, NcrMinor, NNcrMinor: found.minor });
+  }
+  if (found.positive === 0 && found.negative === 0) return { ...inputs, M: 0 };
+  if (ltb.kind === 'none') return { ...inputs, M: Math.max(found.positive, found.negative), noLtb: ltb.why };
+  if (ltb.kind === 'needs') return inputs;
+  const top = found.positive / of.McrTop >= found.negative / of.McrBottom;
+  const M = top ? found.positive : -found.negative;
+  const { Iz, It, Iw, G } = ltb;
+  const at = top ? { ltbFace: 'top', Lltb: of.Ltop, Mcr: of.McrTop } : { ltbFace: 'bottom', Lltb: of.Lbottom, Mcr: of.McrBottom };
+  return { ...inputs, M, ...at, Iz, It, Iw, G, MMcr: found.bending };
+}
+
+const points = new Float64Array(32);
+let compression = 0;
+let sagging = 0;
+let hogging = 0;
+
+/** Largest compression and moments of either sign along the pieces, N and N·m, into the three figures above. */
+function actionsOf(lines: readonly MemberLine[]): void {
+  compression = sagging = hogging = 0;
+  for (const line of lines)
+    for (let i = 0; i < line.segments.length; i++) {
+      const { N, M, from, to } = line.segments[i]!;
+      const axial = N.length - 1;
+      let count = turningPoints(N, axial, to - from, points);
+      for (let j = 0; j < count; j++) compression = Math.max(compression, -valueAt(N, axial, points[j]!));
+      const bent = M.length - 1;
+      count = turningPoints(M, bent, to - from, points);
+      for (let j = 0; j < count; j++) {
+        const moment = valueAt(M, bent, points[j]!);
+        if (moment > sagging) sagging = moment;
+        if (-moment > hogging) hogging = -moment;
+      }
+    }
+}

@@ -1,0 +1,51 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { ResultState } from '@/lib/results/result';
+import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { namesSpan } from './limits';
+import { checkMovement, limitsWithSetup, withoutLimit } from './movement';
+import type { Span } from './spans';
+
+/** A column: by its role, or without a role within 20° of vertical. */
+export function isColumn(frame: Frame, span: Span): boolean {
+  if (span.role !== null) return span.role === 'column';
+  const a = frame.nodes[span.startNode]!;
+  const b = frame.nodes[span.endNode]!;
+  return Math.abs(b.x_m - a.x_m) <= Math.abs(b.y_m - a.y_m) * Math.tan((20 * Math.PI) / 180) * (1 + 1e-9);
+}
+
+/** Sway of a column in every service combination: |ux(top) − ux(bottom)| against its height |Δy|. */
+export function checkSway(
+  frame: Frame,
+  settings: Settings,
+  span: Span,
+  states: readonly ResultState[],
+  findings: Findings,
+): void {
+  if (!isColumn(frame, span)) return;
+  const subject: Subject = {
+    subjectKind: span.kind,
+    subject: span.name,
+    check: 'sway',
+    quantity: 'displacement',
+    reference: 'Limits',
+    member: span.pieces[0]!.member,
+  };
+  const limits = limitsWithSetup(frame, settings, 'sway').filter((limit) => namesSpan(limit, span, frame));
+  if (limits.length === 0) {
+    const why = withoutLimit(settings, 'sway', findings);
+    if (why) keepGoverning(findings, [notCheckedRow(subject, null, why)]);
+    return;
+  }
+  if (!span.whole) return keepGoverning(findings, [notCheckedRow(subject, null, 'pieces of the span do not form one line')]);
+  const rise = frame.nodes[span.endNode]!.y_m - frame.nodes[span.startNode]!.y_m;
+  const height = Math.abs(rise);
+  if (height < 1e-3) return keepGoverning(findings, [notCheckedRow(subject, null, 'a column without height has no sway')]);
+  const [top, bottom] = rise > 0 ? [span.endNode, span.startNode] : [span.startNode, span.endNode];
+  const measured = (c: number) => {
+    const d = states[c]!.displacements;
+    const [uxTop, uxBottom] = [d[3 * top]!, d[3 * bottom]!];
+    return { value: Math.abs(uxTop - uxBottom), at: null, inputs: { uxTop, uxBottom } };
+  };
+  checkMovement(subject, 'sway', limits, height, settings, states, measured, findings);
+}
