@@ -35,12 +35,12 @@ export const pools = (): Pools => work().pools;
 /** How far a revision's run is; `queue().events` says 'progress' when it has moved. */
 export const runProgress = (revision: number): RunProgress => queue().progress(revision);
 
-/** Brings the database up to date, then takes up what an earlier process left unfinished without keeping requests waiting. */
+/** Brings the database up to date, then queues again what an earlier process left unfinished; the work itself keeps no request waiting. */
 export function boot(): Promise<void> {
   const here = work();
   return (here.booted ??= (async () => {
     const ran = await migrate(db());
     for (const migration of ran) log('migration', { migration });
-    void here.queue.start().catch((error: unknown) => log('unfinished work could not be taken up', { error }));
+    await here.queue.start();
   })());
 }

@@ -1,6 +1,7 @@
 /** The threads: two that solve, one that reads, two that write files, all at lowered priority. */
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
+import type { MessagePort } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 
 /** Added to the threads' nice value, so that pages answer during a run as they do at rest. */
@@ -10,10 +11,23 @@ const solveHeap_MB = 512;
 const readHeap_MB = 400;
 const writeHeap_MB = 512;
 
+/** What of a pool is used: a function of a bundle, run in a thread. */
+export interface ThreadPool {
+  run(
+    task: unknown,
+    call: {
+      readonly filename: string;
+      readonly name: string;
+      readonly signal?: AbortSignal;
+      readonly transferList?: (MessagePort | ArrayBuffer)[];
+    },
+  ): Promise<unknown>;
+}
+
 export interface Pools {
-  readonly solve: Piscina;
-  readonly read: Piscina;
-  readonly write: Piscina;
+  readonly solve: ThreadPool;
+  readonly read: ThreadPool;
+  readonly write: ThreadPool;
   /** Address of a bundle of dist-worker. */
   readonly bundle: (name: 'read' | 'solve' | 'write') => string;
   close(): Promise<void>;

@@ -7,6 +7,7 @@ import PQueue from 'p-queue';
 import type { OpenDatabase } from '@/db/open';
 import { listUnfinishedJobs, requeueJobs, type JobRecord } from '@/db/queries/jobs';
 import { countWaiting } from '@/db/queries/results';
+import { failStrandedReadings } from '@/db/queries/waiting';
 import type { Pools } from './pools';
 import type { ProgressEvents, RunProgress } from './progress';
 import { readOneRevision } from './reading';
@@ -51,7 +52,9 @@ export class WorkQueue {
 
   /** Takes up what an earlier process left unfinished, then whatever is queued. */
   async start(): Promise<void> {
-    await requeueJobs(this.options.database.db, 'any');
+    const { db, raw } = this.options.database;
+    await requeueJobs(db, 'any');
+    failStrandedReadings(raw, 'The files did not arrive completely before the server ended. Bring them in again.');
     this.wake();
   }
 
