@@ -65,7 +65,6 @@ function addEnd(
   kvt: number,
   S: number,
 ): void {
-  // prettier-ignore
   let c = m.cos;
   let s = m.sin;
   if (angle !== 0) {

@@ -19,7 +19,6 @@ export function factor(
   pivots: Float64Array,
   tolerance: number,
 ): number {
-  // prettier-ignore
   const { size, firstRow, columnStart } = t;
   for (let j = 0; j < size; j++) {
     const hj = firstRow[j]!;
@@ -55,11 +54,11 @@ export function factor(
       K[++at] = g1;
       K[++at] = g2;
       K[++at] = g3;
-      K[++at] = g4; // prettier-ignore
+      K[++at] = g4;
       K[++at] = g5;
       K[++at] = g6;
       K[++at] = g7;
-      K[++at] = g8; // prettier-ignore
+      K[++at] = g8;
     }
     const d = 9 * (baseJ + j);
     let d00 = K[d]!, d01 = K[d + 1]!, d02 = K[d + 2]!, d11 = K[d + 4]!, d12 = K[d + 5]!, d22 = K[d + 8]!; // prettier-ignore

@@ -80,7 +80,13 @@ export function describeMovement(frame: Frame, t: Topology, angles: Float64Array
   const dy = moves[3 * i + 1]!;
   const { how, hold } = wayOf(frame, i, dx, dy);
   const centre = rigidTurn(frame, moves, size);
-  const together = movers.length > 1 ? ` together with ${list('node', movers.slice(1).map((k) => frame.nodes[k]!.id))}` : ''; // prettier-ignore
+  const together =
+    movers.length > 1
+      ? ` together with ${list(
+          'node',
+          movers.slice(1).map((k) => frame.nodes[k]!.id),
+        )}`
+      : '';
   const pins = pinsAt(frame, neighbourhood(frame, i));
   if (centre !== null) return { node, how: `${how} as the whole frame turns about ${centre}`, remedy: remedy(hold, pins) };
   return { node, how: how + together, remedy: remedy(hold, pins) };
@@ -104,7 +110,7 @@ function wayOf(frame: Frame, i: number, dx: number, dy: number): { how: string; 
   const degrees = (Math.atan2(dy, dx) * 180) / Math.PI;
   const line = ((degrees % 180) + 180) % 180;
   if (support && support.angle_rad !== 0) {
-    const own = ((degrees - (support.angle_rad * 180) / Math.PI) % 180 + 180) % 180; // prettier-ignore
+    const own = (((degrees - (support.angle_rad * 180) / Math.PI) % 180) + 180) % 180;
     const axis = own < 1 || own > 179 ? 'ux' : Math.abs(own - 90) < 1 ? 'uy' : null;
     const turned = `${number((support.angle_rad * 180) / Math.PI)}°`;
     if (axis && loose(support[axis]))

@@ -51,7 +51,10 @@ export function memberLine(frame: Frame, state: ResultState, member: number): Me
     const to = cuts[i]!;
     if (i > 1) jump(from);
     const [qx, qy] = loadBetween(acting.lines, from, to);
-    const n = integral(qx.map((c) => -c), N); // prettier-ignore
+    const n = integral(
+      qx.map((c) => -c),
+      N,
+    );
     const v = integral(qy, V);
     const moment = integral(v, M);
     segments.push({ from, to, N: n, V: v, M: moment, u: [], v: [] });

@@ -32,14 +32,18 @@ function loadRefusal(frame: Frame): Failure | null {
   const light = heavy ? data.findIndex((m) => !Number.isFinite(m.weight)) : -1;
   if (heavy && light >= 0) {
     const member = frame.members[light]!;
-    return noSolution(`Case ${heavy.name} has self-weight: material ${frame.materials[member.material]!.name} of member ${member.id} needs a density.`); // prettier-ignore
+    return noSolution(
+      `Case ${heavy.name} has self-weight: material ${frame.materials[member.material]!.name} of member ${member.id} needs a density.`,
+    );
   }
   for (const load of frame.memberLoads) {
     if (load.kind !== 'temperature') continue;
     const member = frame.members[load.member]!;
     const m = data[load.member]!;
     if ((load.dT_K !== 0 || load.dTAcross_K !== 0) && !Number.isFinite(m.expansion))
-      return noSolution(`Member ${member.id} has a temperature load: material ${frame.materials[member.material]!.name} needs its expansion.`); // prettier-ignore
+      return noSolution(
+        `Member ${member.id} has a temperature load: material ${frame.materials[member.material]!.name} needs its expansion.`,
+      );
     if (load.dTAcross_K !== 0 && !(m.depth > 0))
       return noSolution(`Member ${member.id} has dT across: section ${frame.sections[member.section]!.name} needs its depth.`);
   }

@@ -78,7 +78,6 @@ function takeMemberLoad(
     [load.q1_N_m, 1 / 3],
     [load.q2_N_m, 2 / 3],
   ] as const) {
-    // prettier-ignore
     const resultant = (q * share * length) / 2;
     const s = load.from_m + third * length;
     take(resultant * dx, resultant * dy, a.x_m + s * ex, a.y_m + s * ey);

@@ -97,7 +97,6 @@ function trial(
   lambda: number,
   space: BucklingSpace,
 ): Trial {
-  // prettier-ignore
   const { K, inner, pivots } = space;
   const data = memberData(frame);
   const count: InnerCount = { negative: 0, logSize: 0 };

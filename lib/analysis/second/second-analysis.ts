@@ -24,7 +24,15 @@ export function secondAnalysis(frame: Frame): SecondState[] | null {
   const n = model.size;
   const K = Matrix.zeros(n + constraints.length, n + constraints.length);
   for (const stretch of model.stretches) spread(K, stretch.unknowns, globalStiffness(frame, stretch));
-  for (const [a, b, k] of model.springs) spread(K, [a, b], new Matrix([[k, -k], [-k, k]])); // prettier-ignore
+  for (const [a, b, k] of model.springs)
+    spread(
+      K,
+      [a, b],
+      new Matrix([
+        [k, -k],
+        [-k, k],
+      ]),
+    );
   addSupportSprings(K, frame);
   const typical = Math.max(...Array.from({ length: n }, (_, i) => K.get(i, i)));
   for (let i = 0; i < n; i++) if (K.getRow(i).every((value) => value === 0)) K.set(i, i, typical);
@@ -67,7 +75,11 @@ function supportSpring(frame: Frame, index: number): Matrix {
   const number = (value: number | 'fixed' | 'free'): number => (typeof value === 'number' ? value : 0);
   const c = Math.cos(s.angle_rad);
   const d = Math.sin(s.angle_rad);
-  const R = new Matrix([[c, d, 0], [-d, c, 0], [0, 0, 1]]); // prettier-ignore
+  const R = new Matrix([
+    [c, d, 0],
+    [-d, c, 0],
+    [0, 0, 1],
+  ]);
   return R.transpose()
     .mmul(Matrix.diag([number(s.ux), number(s.uy), number(s.rz)]))
     .mmul(R);

@@ -80,8 +80,12 @@ export function pointLoads(
     const along = load.direction === 'x';
     const [FX, FY] =
       load.axes === 'global'
-        ? along ? [load.P_N, 0] : [0, load.P_N]
-        : along ? [load.P_N * ex, load.P_N * ey] : [-load.P_N * ey, load.P_N * ex]; // prettier-ignore
+        ? along
+          ? [load.P_N, 0]
+          : [0, load.P_N]
+        : along
+          ? [load.P_N * ex, load.P_N * ey]
+          : [-load.P_N * ey, load.P_N * ex];
     return [{ at: load.at_m, FX, FY, Px: FX * ex + FY * ey, Py: FY * ex - FX * ey, M: 0 }];
   });
 }

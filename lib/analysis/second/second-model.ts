@@ -32,7 +32,6 @@ export function memberFacts(
   alpha: number;
   depth: number;
 } {
-  // prettier-ignore
   const m = frame.members[member]!;
   const from = frame.nodes[m.start]!;
   const to = frame.nodes[m.end]!;
