@@ -3,6 +3,7 @@ import type { Analyser } from '@/lib/analysis/analyser';
 import { checkFrame } from '@/lib/checks/check-frame';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
+import { lineMemo, type LineOf } from '@/lib/results/line-memo';
 import { frameMass } from '@/lib/results/mass';
 import type { Failure, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { frameVerdict, governingOf } from '@/lib/results/verdict';
@@ -12,6 +13,8 @@ export interface EvaluateOptions {
   readonly second: boolean;
   /** Keep every subject × check × combination, not only the governing ones. */
   readonly all: boolean;
+  /** Exact lines of the frame's members, where the caller goes on to use them (lib/results/line-memo.ts). */
+  readonly lineOf?: LineOf;
 }
 
 /**
@@ -28,25 +31,20 @@ export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settin
     const message = `the results of ${bad.name} are not finite numbers: the frame's stiffness or loads are out of all proportion`;
     return unsolved(frame, { code: 'not-solved', message, node: null });
   }
-  const found = checkFrame(frame, analysis.states, settings, { all: options.all });
-  const notChecked = [
-    ...new Set([
-      ...frame.notChecked,
-      ...found.checks.filter((c) => c.verdict === 'not checked').map((c) => `${c.check}: ${c.reason ?? 'not checked'}`),
-    ]),
-  ];
-  if (found.checks.length === 0 && notChecked.length === 0) notChecked.push('nothing to check');
+  const lineOf = options.lineOf ?? lineMemo(frame);
+  const { checks, allChecks, assumptions, ...found } = checkFrame(frame, settings, analysis.states, lineOf, { all: options.all });
+  const notChecked = checks.length === 0 && found.notChecked.length === 0 ? ['nothing to check'] : found.notChecked;
   return {
     status: 'solved',
     failure: null,
-    verdict: frameVerdict(found.checks, notChecked),
-    governing: governingOf(found.checks),
+    verdict: frameVerdict(checks, notChecked),
+    governing: governingOf(checks),
     notChecked,
-    assumptions: [...new Set(found.assumptions)],
+    assumptions,
     mass: frameMass(frame),
     states: analysis.states,
-    checks: found.checks,
-    allChecks: found.all,
+    checks,
+    allChecks,
     certificate: analysis.certificate,
   };
 }

@@ -1,45 +1,46 @@
 /** The published results file (lib/results/schema.ts), written frame by frame: the same input gives the same bytes. */
 import { memberExtremes } from '@/lib/analysis/member-extremes';
 import { memberLine } from '@/lib/analysis/member-line';
-import type { FrameRead } from '@/lib/intake/intake';
 import type { Frame } from '@/lib/model/frame';
 import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
-import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
 import type { Check, Extreme, FrameEvaluation, ResultState } from '@/lib/results/result';
-import { resultsFormat, type FrameResultJson, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
+import { resultsFormat, type FrameResult, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
 
 /** Reason given for a frame that its sheets do not let run. */
-export const notRead = 'not analysed: errors in its sheets';
+const notRead = 'not analysed: errors in its sheets';
 
-/**
- * One frame as published. `evaluation` null: the frame could not be read or has not been analysed.
- * With `all`, checks are those of every combination where the evaluation holds them.
- */
-export function frameResultJson(read: FrameRead, evaluation: FrameEvaluation | null, all = false): FrameResultJson {
-  const { frame } = read;
-  if (!frame || !evaluation) {
-    return {
-      frame: read.id,
-      status: 'not solved',
-      verdict: 'not checked',
-      governing: null,
-      notChecked: [frame ? 'not analysed yet' : notRead],
-      mass: null,
-      results: [],
-      checks: [],
-      certificate: null,
-    };
-  }
+/** A frame that errors in its sheets stopped, or that has not been analysed yet, as published. */
+export function unsolvedFrameJson(id: string, reason: string): FrameResult {
+  return {
+    frame: id,
+    status: 'not solved',
+    verdict: 'not checked',
+    governing: null,
+    notChecked: [reason],
+    mass: null,
+    results: [],
+    checks: [],
+    certificate: null,
+  };
+}
+
+/** One frame as published. With `all`, checks are those of every combination where the evaluation holds them. */
+export function frameResultJson(
+  frame: Frame,
+  evaluation: FrameEvaluation,
+  options: { readonly all: boolean } = { all: false },
+): FrameResult {
   const solved = evaluation.status === 'solved';
-  const checks = solved ? ((all ? evaluation.allChecks : null) ?? evaluation.checks) : [];
+  const checks = solved ? ((options.all ? evaluation.allChecks : null) ?? evaluation.checks) : [];
   const { governing, certificate } = evaluation;
   return {
-    frame: read.id,
+    frame: frame.id,
     status: evaluation.status,
     verdict: evaluation.verdict,
     governing: governing && {
-      subject: governing.subject ?? read.id,
+      subject: governing.subject ?? frame.id,
       check: governing.check,
       combination: governing.combination,
       ratio: maybe(governing.ratio),
@@ -47,7 +48,7 @@ export function frameResultJson(read: FrameRead, evaluation: FrameEvaluation | n
     notChecked: [...evaluation.notChecked],
     mass: maybe(evaluation.mass),
     results: solved ? evaluation.states.map((state) => stateJson(frame, state)) : [],
-    checks: checks.map((check) => checkJson(read.id, check)),
+    checks: checks.map((check) => checkJson(frame.id, check)),
     certificate:
       solved && certificate
         ? {
@@ -62,7 +63,7 @@ export function frameResultJson(read: FrameRead, evaluation: FrameEvaluation | n
   };
 }
 
-function stateJson(frame: Frame, state: ResultState): FrameResultJson['results'][number] {
+function stateJson(frame: Frame, state: ResultState): FrameResult['results'][number] {
   return {
     name: state.name,
     kind: state.kind,
@@ -104,7 +105,7 @@ function extremeJson(extreme: Extreme): Extreme {
   };
 }
 
-function checkJson(frameId: string, check: Check): FrameResultJson['checks'][number] {
+function checkJson(frameId: string, check: Check): FrameResult['checks'][number] {
   const checked = check.verdict !== 'not checked';
   return {
     subject: check.subject ?? frameId,
@@ -165,10 +166,15 @@ export async function* resultsJson(source: ReportSource, options: { readonly all
   yield '],\n"frames":[';
   comma = '\n';
   for await (const each of source.frames({ states: true })) {
-    yield comma + JSON.stringify(frameResultJson(each, each.evaluation, options.all));
+    yield comma + JSON.stringify(outcomeJson(each, options));
     comma = ',\n';
   }
   yield ']}\n';
+}
+
+function outcomeJson({ id, frame, evaluation }: ReportFrame, options: { readonly all: boolean }): FrameResult {
+  if (!frame) return unsolvedFrameJson(id, notRead);
+  return evaluation ? frameResultJson(frame, evaluation, options) : unsolvedFrameJson(id, 'not analysed yet');
 }
 
 /** A figure fit for JSON: −0 is 0. Anything not finite has no place in a solved frame. */

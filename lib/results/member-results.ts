@@ -1,9 +1,9 @@
 /** What tables and filters need of each member: its extremes under every state, and the check that governs it. */
 import { memberExtremes } from '@/lib/analysis/member-extremes';
-import { memberLine } from '@/lib/analysis/member-line';
 import { valueAt } from '@/lib/analysis/value-at';
 import type { Frame } from '@/lib/model/frame';
 import type { Check, FrameEvaluation, MemberExtremes, MemberLine, Verdict } from '@/lib/results/result';
+import type { LineOf } from '@/lib/results/line-memo';
 import { governingIndex } from '@/lib/results/verdict';
 
 /** A member's line in the members table; forces stand where its governing check does. */
@@ -28,9 +28,10 @@ export interface MemberResults {
   readonly extremes: readonly (readonly MemberExtremes[])[];
 }
 
-export function memberResults(frame: Frame, evaluation: FrameEvaluation): MemberResults {
+/** @param lineOf as used for the evaluation, so that no line is worked out twice */
+export function memberResults(frame: Frame, evaluation: FrameEvaluation, lineOf: LineOf): MemberResults {
   if (evaluation.status !== 'solved') return { members: [], extremes: [] };
-  const lines = evaluation.states.map((state) => frame.members.map((_, i) => memberLine(frame, state, i)));
+  const lines = evaluation.states.map((state) => frame.members.map((_, i) => lineOf(state, i)));
   const extremes = lines.map((ofState) => ofState.map((line) => memberExtremes(line)));
   const members = frame.members.map((_, i): MemberGoverning => {
     const checks = evaluation.checks.filter((check) => concerns(frame, check, i));

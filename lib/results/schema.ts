@@ -69,7 +69,7 @@ export const frameResultSchema = z.strictObject({
   checks: z.array(check),
   certificate: certificate.nullable(),
 });
-export type FrameResultJson = z.infer<typeof frameResultSchema>;
+export type FrameResult = z.infer<typeof frameResultSchema>;
 
 export const problemSchema = z.strictObject({
   severity: z.enum(['error', 'warning', 'note']),

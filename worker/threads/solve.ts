@@ -4,6 +4,7 @@ import { addJobProgress, listWaitingFrames } from '@/db/queries/waiting';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import type { Settings } from '@/lib/model/settings';
 import { evaluateFrame } from '@/lib/results/evaluate';
+import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults } from '@/lib/results/member-results';
 import type { Verdict } from '@/lib/results/result';
 import { openOnce } from './open-once';
@@ -35,8 +36,10 @@ const analyser = createAnalyser();
 export function solveChunk(task: SolveTask): SolvedFrame[] {
   const { raw } = openOnce(task.file);
   const results = listWaitingFrames(raw, task.revision, task.versions).map(({ version, frame }): FrameResults => {
-    const evaluation = evaluateFrame(analyser, frame, task.settings, { second: task.second.has(version), all: false });
-    return { version, frame, evaluation, ...memberResults(frame, evaluation) };
+    const lineOf = lineMemo(frame);
+    const options = { second: task.second.has(version), all: false, lineOf };
+    const evaluation = evaluateFrame(analyser, frame, task.settings, options);
+    return { version, frame, evaluation, ...memberResults(frame, evaluation, lineOf) };
   });
   const stored = new Set(insertChunkResults(raw, results, { person: task.person }));
   addJobProgress(raw, task.job, stored.size);
