@@ -168,7 +168,8 @@ class Gather {
     const ratio = peak.value / limit;
     const { of, fy } = this;
     const W = peak.face === 'top' ? of.Wtop_m3 : of.Wbottom_m3;
-    const inputs: Record<string, number | string | null> = {};
+    const section = this.frame.sections[this.frame.members[this.member]!.section]!.name;
+    const inputs: Record<string, number | string | null> = { section };
     if (check !== 1) Object.assign(inputs, { N: peak.N, M: peak.M, A: of.A_m2, W, face: peak.face });
     if (check !== 0) Object.assign(inputs, { V: peak.V, Av: of.AvPeak_m2 });
     return {

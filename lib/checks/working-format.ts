@@ -1,0 +1,15 @@
+import { unitLabel } from '@/lib/units/batch-unit';
+import { formatQuantity, formatRatio } from '@/lib/units/format';
+import type { System } from '@/lib/units/quantity';
+import type { WorkingFormat } from './working-parts';
+
+/** Numbers of a working in a batch's units: four figures, so that a reader can follow the sum with a calculator. */
+export function workingFormat(system: System, nearLimit: number): WorkingFormat {
+  return {
+    quantity: (si, quantity) => ({
+      text: formatQuantity(si, quantity, system, { significant: 4 }),
+      unit: quantity === 'number' ? '' : unitLabel(quantity, system),
+    }),
+    ratio: (ratio) => formatRatio(ratio, nearLimit),
+  };
+}
