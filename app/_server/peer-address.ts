@@ -14,6 +14,6 @@ export function takeAddressFromConnection(): void {
     if (event === 'request' && request instanceof http.IncomingMessage) {
       request.headers['x-forwarded-for'] = request.socket.remoteAddress ?? 'unknown';
     }
-    return emit.call(this, event, ...rest);
+    return emit.apply(this, [event, ...rest] as Parameters<typeof emit>);
   };
 }

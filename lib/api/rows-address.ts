@@ -11,6 +11,7 @@ export function rowsAddress(
   view: View,
   at: { readonly after?: string; readonly before?: string },
 ): string {
-  const cursor = at.after !== undefined ? { after: at.after } : at.before !== undefined ? { before: at.before } : {};
+  const cursor: Readonly<Record<string, string>> =
+    at.after !== undefined ? { after: at.after } : at.before !== undefined ? { before: at.before } : {};
   return api.table(batch, letter, view, { ...cursor, size: rowsAtOnce });
 }

@@ -4,7 +4,6 @@ import { dayTime } from '@/app/_server/dates';
 import { requirePagePerson } from '@/app/_server/page-person';
 import { pageThing } from '@/app/_server/page-thing';
 import { requireProject } from '@/app/_server/things';
-import { TitleBlock } from '@/components/title-block/title-block';
 import { ButtonLink } from '@/components/ui/button';
 import { Empty } from '@/components/ui/notice';
 import { Columns, Sheet, Zone } from '@/components/ui/sheet';
@@ -25,9 +24,11 @@ export default async function ProjectPage({ params }: { readonly params: Promise
   const project = await pageThing(requireProject(person, asked));
   const batches = await listBatches(db(), person.office, project.id);
   const mayBring = may(person, 'bring sheets in');
+  const name = project.number === null || project.number === '' ? project.name : `${project.number} ${project.name}`;
   const list = (
     <Zone
-      title="Batches"
+      title={`Batches of ${name}`}
+      level={1}
       note="the newest first, each by its latest revision"
       aside={
         mayBring && (
@@ -56,21 +57,8 @@ export default async function ProjectPage({ params }: { readonly params: Promise
       )}
     </Zone>
   );
-  const name = project.number === null || project.number === '' ? project.name : `${project.number} ${project.name}`;
   return (
     <Sheet>
-      <TitleBlock
-        project={{ name }}
-        batch={null}
-        revision={null}
-        state={null}
-        prepared={null}
-        checked={null}
-        issued={null}
-        inputHash={null}
-        sheet="batches"
-      />
-      <h1 className="sr-only">{name}</h1>
       {may(person, 'assign people') ? (
         <Columns
           main={list}

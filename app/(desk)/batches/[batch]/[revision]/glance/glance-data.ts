@@ -1,28 +1,8 @@
 import type { GoverningCount, SectionWork } from '@/components/charts/charts-data';
 import type { WorstFrame } from '@/components/charts/worst-frames';
-import type { StripFrame } from '@/components/strip/strip-data';
 import type { BatchSummary, SummaryCell } from '@/db/queries/summary';
 import { pages } from '@/lib/api/addresses';
 import type { Verdict } from '@/lib/results/result';
-
-/** Above this many frames the strip's readout names verdict and ratio only, to keep the page light. */
-const longStrip = 3000;
-
-/** A frame that errors stop, or that was not run, is not checked; during a run it waits. */
-export function stripFrames(cells: readonly SummaryCell[], running = false): StripFrame[] {
-  return cells.map(({ id, status, verdict, ratio, group, check, subject, section, combination }) => {
-    const waiting = running && status === 'waiting';
-    const reason = status === 'stopped' ? 'stopped by errors in its sheets' : status === 'waiting' ? 'not run yet' : null;
-    const cell: StripFrame = {
-      id,
-      verdict: verdict ?? 'not checked',
-      ratio,
-      group,
-      ...(waiting && { state: 'waiting' as const }),
-    };
-    return cells.length > longStrip ? cell : { ...cell, check, subject, section, combination, reason };
-  });
-}
 
 export function worstFrames(batch: number, letter: string, cells: readonly SummaryCell[]): WorstFrame[] {
   return cells.map(({ index, id, verdict, ratio, check, subject, section, combination }) => ({

@@ -14,7 +14,8 @@ import { findSummary, listParameterRatios } from '@/db/queries/summary';
 import { pages } from '@/lib/api/addresses';
 import type { View } from '@/lib/tables/view';
 import { RevisionHead } from '../_head/revision-head';
-import { governingCounts, sectionWork, stripFrames, worstFrames } from './glance-data';
+import { stripFrames } from '../_head/strip-frames';
+import { governingCounts, sectionWork, worstFrames } from './glance-data';
 import { RatioOver } from './ratio-over';
 
 export const metadata: Metadata = { title: 'Glance' };
@@ -59,7 +60,7 @@ export default async function GlancePage({ params }: { readonly params: Promise<
       <Zone>
         <Strip frames={stripFrames(cells)} nearLimit={nearLimit} hrefPattern={`${pages.sheet(batch, letter, 'frames')}/{n}`} />
       </Zone>
-      <div className={first === undefined ? '' : 'zone-pair'}>
+      <div className={`border-hair grid border-t ${first === undefined ? '' : 'md:grid-cols-2'}`}>
         {first !== undefined && (
           <RatioOver
             batch={batch}
