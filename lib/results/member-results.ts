@@ -1,9 +1,10 @@
 /** What tables and filters need of each member: its extremes under every state, and the check that governs it. */
 import { memberExtremes } from '@/lib/analysis/member-extremes';
 import { valueAt } from '@/lib/analysis/value-at';
+import { spansOf, type SpanPiece } from '@/lib/checks/spans';
 import type { Frame } from '@/lib/model/frame';
-import type { Check, FrameEvaluation, MemberExtremes, MemberLine, Verdict } from '@/lib/results/result';
 import type { LineOf } from '@/lib/results/line-memo';
+import type { Check, FrameEvaluation, MemberExtremes, MemberLine, Verdict } from '@/lib/results/result';
 import { governingIndex } from '@/lib/results/verdict';
 
 /** A member's line in the members table; forces stand where its governing check does. */
@@ -21,24 +22,37 @@ export interface MemberGoverning {
   readonly verdict: Verdict;
 }
 
+/** A member under one state: its extremes, and the worst of its checks there; null where there is none. */
+export type MemberUnderState = MemberExtremes & { readonly ratio: number | null; readonly verdict: Verdict | null };
+
 export interface MemberResults {
   /** By member; [] for a frame that was not solved. */
   readonly members: readonly MemberGoverning[];
   /** By state of the evaluation, then by member. */
-  readonly extremes: readonly (readonly MemberExtremes[])[];
+  readonly extremes: readonly (readonly MemberUnderState[])[];
 }
 
-/** @param lineOf as used for the evaluation, so that no line is worked out twice */
+/**
+ * @param evaluation with every combination's checks, for the worst of each; without, these are null
+ * @param lineOf as used for the evaluation, so that no line is worked out twice
+ */
 export function memberResults(frame: Frame, evaluation: FrameEvaluation, lineOf: LineOf): MemberResults {
   if (evaluation.status !== 'solved') return { members: [], extremes: [] };
-  const lines = evaluation.states.map((state) => frame.members.map((_, i) => lineOf(state, i)));
-  const extremes = lines.map((ofState) => ofState.map((line) => memberExtremes(line)));
+  const pieces = piecesOf(frame);
+  const governing = byMember(frame, pieces, evaluation.checks);
+  const all = byMember(frame, pieces, evaluation.allChecks ?? []);
+  const extremes = evaluation.states.map((state) =>
+    frame.members.map((_, i): MemberUnderState => {
+      const checks = all[i]!.filter((check) => check.combination === state.name);
+      const worst = state.kind === 'combination' ? checks[governingIndex(checks)] : undefined;
+      return { ...memberExtremes(lineOf(state, i)), ratio: worst?.ratio ?? null, verdict: worst?.verdict ?? null };
+    }),
+  );
   const members = frame.members.map((_, i): MemberGoverning => {
-    const checks = evaluation.checks.filter((check) => concerns(frame, check, i));
-    const check = checks[governingIndex(checks)];
-    const state = check ? evaluation.states.findIndex((each) => each.name === check.combination) : -1;
-    const at = check?.subjectKind === 'member' ? check.at : null;
-    const forces = at !== null && state >= 0 ? forcesAt(lines[state]![i]!, at) : { N: null, V: null, M: null };
+    const check = governing[i]![governingIndex(governing[i]!)];
+    const state = check && evaluation.states.find((each) => each.kind === 'combination' && each.name === check.combination);
+    const at = check ? placeOn(check, pieces[i]!) : null;
+    const forces = at !== null && state ? forcesAt(lineOf(state, i), at) : { N: null, V: null, M: null };
     return {
       check: check?.check ?? null,
       combination: check?.combination ?? null,
@@ -52,10 +66,37 @@ export function memberResults(frame: Frame, evaluation: FrameEvaluation, lineOf:
   return { members, extremes };
 }
 
-/** A check of the member itself, or of the span that it is a piece of. */
-function concerns(frame: Frame, check: Check, member: number): boolean {
-  if (check.subjectKind === 'member') return check.subject === frame.members[member]!.id;
-  return check.subjectKind === 'span' && check.subject?.toLowerCase() === frame.members[member]!.span?.toLowerCase();
+type Piece = SpanPiece & { readonly span: string | null };
+
+/** Each member as a piece of its span, by member. */
+function piecesOf(frame: Frame): Piece[] {
+  const pieces: Piece[] = [];
+  for (const span of spansOf(frame))
+    for (const piece of span.pieces) pieces[piece.member] = { ...piece, span: span.kind === 'span' ? span.name : null };
+  return pieces;
+}
+
+/** The checks of each member itself and of the span that it is a piece of, in their order. */
+function byMember(frame: Frame, pieces: readonly Piece[], checks: readonly Check[]): Check[][] {
+  const subjects = new Map<string, number[]>();
+  frame.members.forEach((member, i) => {
+    subjects.set(`member ${member.id}`, [i]);
+    const { span } = pieces[i]!;
+    if (span !== null) subjects.set(`span ${span}`, [...(subjects.get(`span ${span}`) ?? []), i]);
+  });
+  const found: Check[][] = frame.members.map(() => []);
+  for (const check of checks)
+    for (const i of subjects.get(`${check.subjectKind} ${check.subject ?? ''}`) ?? []) found[i]!.push(check);
+  return found;
+}
+
+/** Where a check of a member or span stands on this member; null where it stands elsewhere on the span, or nowhere. */
+function placeOn(check: Check, { from_m, length_m, reversed, span }: Piece): number | null {
+  if (check.at === null || check.subjectKind === 'member' || span === null) return check.at;
+  const along = check.at - from_m;
+  const slack = 1e-9 * length_m;
+  if (along < -slack || along > length_m + slack) return null;
+  return reversed ? length_m - along : along;
 }
 
 /** N, V, M at x; of the two sides of a jump the one with the larger moment, then the larger shear. */
