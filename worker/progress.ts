@@ -1,5 +1,5 @@
 /** How far a run is: what pages show while it goes on. Counts are the database's, rate and last frames are kept in memory. */
-import { EventEmitter } from 'node:events';
+import type { EventEmitter } from 'node:events';
 import type { SolvedFrame } from '@/worker/threads/solve';
 
 export interface RunProgress {
