@@ -2,7 +2,7 @@ import { Fragment, type ReactNode } from 'react';
 import type { Verdict } from '@/lib/results/result';
 import { RatioText } from '../ui/ratio-text';
 import { VerdictMark } from '../ui/verdict-mark';
-import type { WorkingLine, WorkingPart } from './working-data';
+import type { WorkingLine, WorkingPart } from '@/lib/checks/working-parts';
 
 interface WorkingProps {
   /** "rafter BC, normal stress" */
