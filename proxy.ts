@@ -12,6 +12,10 @@ export function proxy(request: NextRequest): NextResponse {
   headers.set('x-nonce', nonce);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', policy);
+  // Over TLS only, which ends at the proxy in front.
+  if (request.headers.get('x-forwarded-proto') === 'https') {
+    response.headers.set('strict-transport-security', 'max-age=31536000; includeSubDomains');
+  }
   return response;
 }
 

@@ -38,7 +38,7 @@ export default defineConfig({
         test: {
           name: 'integration',
           environment: 'node',
-          include: ['tests/integration/**/*.test.ts'],
+          include: ['tests/integration/*.test.ts'],
           testTimeout: 180_000,
           hookTimeout: 180_000,
           fileParallelism: false,
@@ -49,7 +49,9 @@ export default defineConfig({
         test: {
           name: 'browser',
           environment: 'node',
-          include: ['tests/browser/**/*.test.ts'],
+          // One server for everything that asks a server.
+          include: ['tests/integration/web/**/*.test.ts', 'tests/browser/**/*.test.ts'],
+          globalSetup: ['tests/setup/server.ts'],
           testTimeout: 120_000,
           hookTimeout: 300_000,
           fileParallelism: false,

@@ -11,8 +11,8 @@ import { memberExtremes } from '@/lib/analysis/member-extremes';
 import { memberLine } from '@/lib/analysis/member-line';
 import { sampleLine } from '@/lib/analysis/sample-line';
 import type { Frame, Joint, MemberLoad, Restraint } from '@/lib/model/frame';
+import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, ResultState } from '@/lib/results/result';
-import { governingIndex } from '@/lib/results/verdict';
 
 /** Standard gravity, m/s² (ISO 80000-3; sheets §2). */
 const g = 9.80665;
@@ -22,6 +22,7 @@ const steps = 24;
 interface Drawn {
   readonly frame: Frame;
   readonly evaluation: FrameEvaluation | null;
+  readonly members: readonly MemberGoverning[];
   readonly units: 'metric' | 'us';
   readonly nearLimit: number;
   /** Name of the case or combination chosen; null = the governing one. */
@@ -29,7 +30,7 @@ interface Drawn {
 }
 
 /** A frame as the drawing takes it: geometry, and the states of the chosen result and of the movement view. */
-export function drawingData({ frame, evaluation, units, nearLimit, chosen }: Drawn): DrawingData {
+export function drawingData({ frame, evaluation, members, units, nearLimit, chosen }: Drawn): DrawingData {
   const states = evaluation?.states ?? [];
   const shown = states.find((state) => state.name === chosen) ?? governingState(evaluation);
   const moving = movementState(evaluation, shown);
@@ -47,7 +48,7 @@ export function drawingData({ frame, evaluation, units, nearLimit, chosen }: Dra
       role: member.role,
       startJoint: joint(member.startJoint),
       endJoint: joint(member.endJoint),
-      ...governing(evaluation?.checks ?? [], frame, index),
+      ...governing(members[index]),
     })),
     supports: frame.supports.map(({ node, ux, uy, rz, angle_rad }) => ({
       node,
@@ -120,18 +121,11 @@ function movementState(evaluation: FrameEvaluation | null, shown: ResultState | 
   return named ?? evaluation.states.find((state) => state.purpose === 'service') ?? shown;
 }
 
-/** The member's own worst check, or that of the span it is part of. */
-function governing(checks: readonly Check[], frame: Frame, index: number) {
-  const member = frame.members[index]!;
-  const own = checks.filter(
-    (check) =>
-      (check.subjectKind === 'member' && check.subject === member.id) ||
-      (check.subjectKind === 'span' && check.subject === member.span),
-  );
-  const worst = own[governingIndex(own)];
-  if (worst === undefined) return { ratio: null, verdict: 'not checked' as const, governs: null };
-  const governs = [worst.check, worst.combination].filter((word) => word !== null).join(' ');
-  return { ratio: worst.ratio, verdict: worst.verdict, governs };
+/** What governs a member, as the members table has it. */
+function governing(member: MemberGoverning | undefined) {
+  if (member === undefined) return { ratio: null, verdict: 'not checked' as const, governs: null };
+  const governs = [member.check, member.combination].filter((word) => word !== null).join(' ');
+  return { ratio: member.ratio, verdict: member.verdict, governs: governs === '' ? null : governs };
 }
 
 function loadsOf(frame: Frame, index: number, name: string, factor: number): DrawingLoad[] {

@@ -1,5 +1,6 @@
 import { TableSheet } from '@/app/_client/table-sheet';
 import { needResults, pageRevision, type RevisionParams } from '@/app/_server/page-revision';
+import { toParams, type SearchParams } from '@/app/_server/search-params';
 import { Cautions } from '@/components/ui/notice';
 import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
@@ -13,7 +14,7 @@ import { RevisionHead } from '../_head/revision-head';
 
 export interface TablePageProps {
   readonly params: Promise<RevisionParams>;
-  readonly searchParams: Promise<Readonly<Record<string, string | string[] | undefined>>>;
+  readonly searchParams: Promise<SearchParams>;
 }
 
 /** The page of one table: its first rows are read here, the rest by the browser. */
@@ -41,10 +42,4 @@ export async function TablePage({ params, searchParams, table }: TablePageProps 
       {table !== 'problems' && <Cautions {...checkedWords(revision)} />}
     </Sheet>
   );
-}
-
-function toParams(record: Readonly<Record<string, string | string[] | undefined>>): URLSearchParams {
-  const params = new URLSearchParams();
-  for (const [key, values] of Object.entries(record)) for (const value of [values ?? []].flat()) params.append(key, value);
-  return params;
 }

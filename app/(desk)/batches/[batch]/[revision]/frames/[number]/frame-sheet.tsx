@@ -1,0 +1,150 @@
+'use client';
+import { keepPreviousData, useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
+import { FrameDrawing } from '@/components/drawing/frame-drawing';
+import { Working } from '@/components/working/working';
+import { Empty, Notice } from '@/components/ui/notice';
+import { QuantityText } from '@/components/ui/quantity-text';
+import { Columns, Zone } from '@/components/ui/sheet';
+import type { FrameDetail } from '@/app/_server/frame-detail';
+import { api } from '@/lib/api/addresses';
+import { request } from '@/lib/api/fetch';
+import { ChecksTable } from './checks-table';
+import { MembersTable, MovementsTable, ReactionsTable } from './figures';
+
+interface FrameSheetProps {
+  readonly batch: number;
+  readonly letter: string;
+  readonly first: FrameDetail;
+}
+
+/** Drawing left, checks and one open working right, the chosen result's figures below. */
+export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
+  const [result, setResult] = useState(first.drawing?.chosen?.name ?? null);
+  const [open, setOpen] = useState<string | null>(first.checks[0]?.id ?? null);
+  const address = api.frame(batch, letter, first.number) + (result === null ? '' : `?result=${encodeURIComponent(result)}`);
+  const asked = useQuery({
+    queryKey: ['frame', address],
+    queryFn: ({ signal }) => request<{ frame: FrameDetail }>(address, { signal }),
+    initialData: result === (first.drawing?.chosen?.name ?? null) ? { frame: first } : undefined,
+    placeholderData: keepPreviousData,
+    staleTime: Infinity,
+  });
+  const frame = asked.data?.frame ?? first;
+  const { drawing, units, nearLimit } = frame;
+  const check = frame.checks.find((one) => one.id === open);
+  const main = (
+    <>
+      {asked.error && <Notice kind="error">{asked.error.message}</Notice>}
+      {drawing === null ? (
+        <Zone title="No drawing">
+          <Empty>
+            <p>
+              Errors in its sheets stop this frame, so there is nothing to draw. Mend them at their cells and bring the sheets in
+              again.
+            </p>
+          </Empty>
+        </Zone>
+      ) : (
+        <Zone flush>
+          <FrameDrawing data={drawing} onChoose={setResult} loading={asked.isPlaceholderData} />
+        </Zone>
+      )}
+      {drawing?.chosen && (
+        <>
+          <Zone title="Members" note={`${drawing.chosen.name}: forces and their places; ratio over all checks`} flush>
+            <MembersTable drawing={drawing} result={drawing.chosen} />
+          </Zone>
+          <div className="border-hair grid border-t md:grid-cols-2">
+            <Zone title="Movements of nodes" note={drawing.chosen.name} flush>
+              <MovementsTable drawing={drawing} result={drawing.chosen} />
+            </Zone>
+            <Zone title="Reactions" note={`${drawing.chosen.name}: what each support does to the frame`} flush>
+              <ReactionsTable drawing={drawing} result={drawing.chosen} />
+            </Zone>
+          </div>
+        </>
+      )}
+    </>
+  );
+  const side = (
+    <>
+      <Zone title="Checks" note={checkWords(frame)}>
+        {frame.failure && <Notice kind="error">{frame.failure}</Notice>}
+        {frame.status === 'waiting' && <Notice>This frame has not been run yet.</Notice>}
+        {frame.notChecked.map((reason) => (
+          <Notice key={reason} kind="near">
+            Not checked: {reason}
+          </Notice>
+        ))}
+        {frame.checks.length > 0 && (
+          <ChecksTable checks={frame.checks} units={units} nearLimit={nearLimit} open={open} onOpen={setOpen} />
+        )}
+      </Zone>
+      {check && (
+        <Zone>
+          <Working
+            title={`${check.where}, ${check.check}`}
+            reference={check.reference}
+            lines={check.working}
+            ratio={check.ratio}
+            verdict={check.verdict}
+            nearLimit={nearLimit}
+            reason={check.reason}
+          />
+        </Zone>
+      )}
+      <Zone title="Certificate and assumptions">
+        <dl className="facts">
+          <Fact name="mass of one frame">
+            <QuantityText value={frame.mass} quantity="mass" units={units} />
+            {frame.count !== 1 && `, ${frame.count} off`}
+          </Fact>
+          {frame.certificate && (
+            <>
+              <Fact name="residual of the solution">{small(frame.certificate.residual)}</Fact>
+              <Fact name="equilibrium of loads and reactions">{small(frame.certificate.equilibrium)}</Fact>
+              <Fact name="digits left">{frame.certificate.digits.toFixed(1)}</Fact>
+              <Fact name="second analysis">
+                {frame.certificate.second === null
+                  ? `not made${frame.certificate.secondReason === null ? '' : `: ${frame.certificate.secondReason}`}`
+                  : `agrees to ${small(frame.certificate.second)}`}
+              </Fact>
+            </>
+          )}
+        </dl>
+        {frame.assumptions.length > 0 && (
+          <ul className="list-disc pl-5">
+            {frame.assumptions.map((one) => (
+              <li key={one}>{one}</li>
+            ))}
+          </ul>
+        )}
+        {frame.note && <p>Note of the sheet: {frame.note}</p>}
+      </Zone>
+    </>
+  );
+  return <Columns main={main} side={side} />;
+}
+
+function Fact({ name, children }: { readonly name: string; readonly children: React.ReactNode }) {
+  return (
+    <div className="border-hair flex justify-between gap-4 border-b py-1">
+      <dt className="text-ink2">{name}</dt>
+      <dd>{children}</dd>
+    </div>
+  );
+}
+
+/** "3.1 · 10⁻¹⁵" */
+function small(value: number): string {
+  if (value === 0) return '0';
+  const [digits = '', power = ''] = value.toExponential(1).split('e');
+  const raised = [...String(Number(power))].map((letter) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(letter)] ?? '⁻').join('');
+  return `${digits} · 10${raised}`;
+}
+
+function checkWords({ checks }: FrameDetail): string {
+  if (checks.length === 0) return 'none';
+  return `${checks.length}, each with its governing combination; a row opens its working`;
+}

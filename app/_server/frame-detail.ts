@@ -1,0 +1,137 @@
+import 'server-only';
+import type { DrawingData } from '@/components/drawing/drawing-data';
+import type { WorkingLine } from '@/lib/checks/working-parts';
+import { db } from '@/db/client';
+import { findFrame } from '@/db/queries/frames';
+import type { RevisionRecord } from '@/db/queries/revisions';
+import { notFound } from '@/lib/api/error';
+import { frameNumberInput } from '@/lib/api/inputs';
+import type { MemberGoverning } from '@/lib/results/member-results';
+import { governingIndex } from '@/lib/results/verdict';
+import type { Certificate, Check, Verdict } from '@/lib/results/result';
+import { drawingData } from './drawing-data';
+import { workingLines } from './working-lines';
+
+/** A check as the frame page lists it, with its calculation. */
+export interface CheckLine {
+  readonly id: string;
+  /** "rafter BC", "node C" */
+  readonly where: string;
+  readonly check: string;
+  readonly combination: string | null;
+  readonly at: number | null;
+  readonly face: Check['face'];
+  readonly value: number | null;
+  readonly limit: number | null;
+  readonly quantity: Check['quantity'];
+  readonly ratio: number | null;
+  readonly verdict: Verdict;
+  readonly reason: string | null;
+  readonly reference: string;
+  readonly working: readonly WorkingLine[];
+}
+
+/** Everything the frame page and its route say of one frame; figures in SI. */
+export interface FrameDetail {
+  /** Place in sheet order from 1, and how many there are. */
+  readonly number: number;
+  readonly of: number;
+  readonly id: string;
+  readonly title: string | null;
+  readonly group: string | null;
+  readonly count: number;
+  readonly note: string | null;
+  readonly status: 'stopped' | 'waiting' | 'solved' | 'not solved';
+  /** Why it has no solution. */
+  readonly failure: string | null;
+  readonly verdict: Verdict;
+  readonly ratio: number | null;
+  readonly notChecked: readonly string[];
+  readonly assumptions: readonly string[];
+  readonly mass: number | null;
+  readonly certificate: Certificate | null;
+  readonly units: 'metric' | 'us';
+  readonly nearLimit: number;
+  /** By member of the drawing: its governing check; [] where it was not solved. */
+  readonly members: readonly MemberGoverning[];
+  /** Worst first. */
+  readonly checks: readonly CheckLine[];
+  /** Null where errors of its sheets stop the frame. */
+  readonly drawing: DrawingData | null;
+}
+
+/**
+ * One frame of a revision.
+ *
+ * @param number its place in sheet order from 1, as the address has it
+ * @param result the case or combination to draw; null = the governing one
+ * @throws {ApiError} not-found
+ */
+export async function frameDetail(revision: RevisionRecord, number: string, result: string | null): Promise<FrameDetail> {
+  const asked = frameNumberInput.safeParse(number);
+  const stored = asked.success ? await findFrame(db(), revision.office, revision.id, asked.data - 1) : undefined;
+  if (stored === undefined) throw notFound('frame');
+  const { frame, evaluation, status, id, title, group, count, note } = stored;
+  const { units, settings } = revision;
+  const nearLimit = settings?.nearLimit ?? 0.9;
+  const states = evaluation?.states ?? [];
+  if (result !== null && !states.some((state) => state.name === result)) throw notFound('load case or combination');
+  return {
+    number: stored.index + 1,
+    of: revision.frames,
+    id,
+    title,
+    group,
+    count,
+    note,
+    status,
+    failure: evaluation?.failure?.message ?? null,
+    verdict: evaluation?.verdict ?? 'not checked',
+    ratio: evaluation?.governing?.ratio ?? null,
+    notChecked: evaluation?.notChecked ?? [],
+    assumptions: evaluation?.assumptions ?? [],
+    mass: evaluation?.mass ?? null,
+    certificate: evaluation?.certificate ?? null,
+    units,
+    nearLimit,
+    members: stored.members,
+    checks: frame && settings ? worstFirst(evaluation?.checks ?? []).map((check, index) => line(check, index)) : [],
+    drawing: frame && drawingData({ frame, evaluation, members: stored.members, units, nearLimit, chosen: result }),
+  };
+
+  function line(check: Check, index: number): CheckLine {
+    return {
+      id: String(index),
+      where: whereOf(check),
+      check: check.check,
+      combination: check.combination,
+      at: check.at,
+      face: check.face,
+      value: check.value,
+      limit: check.limit,
+      quantity: check.quantity,
+      ratio: check.ratio,
+      verdict: check.verdict,
+      reason: check.reason,
+      reference: check.reference,
+      working: workingLines(check, revision),
+    };
+  }
+
+  function whereOf({ subjectKind, subject }: Check): string {
+    if (subjectKind === 'frame' || subject === null) return 'frame';
+    if (subjectKind === 'node') return `node ${subject}`;
+    if (subjectKind === 'spread') return `between ${subject}`;
+    const member = frame!.members.find((one) => (subjectKind === 'span' ? one.span === subject : one.id === subject));
+    const role = member?.role ?? null;
+    return role === null || role === 'other' || subject.toLowerCase() === role ? subject : `${role} ${subject}`;
+  }
+}
+
+/** By verdict, then by largest ratio, as the governing check is chosen. */
+function worstFirst(checks: readonly Check[]): Check[] {
+  const left = [...checks];
+  const sorted: Check[] = [];
+  while (left.length > 0) sorted.push(...left.splice(governingIndex(left), 1));
+  return sorted;
+}
