@@ -77,7 +77,9 @@ export function planOf(view: View, filters: ReadFilters, sizes: Sizes, limit: nu
   const ordered = all.filter((way) => way.ordered);
   // What is fetched page by page to its end is not sorted anew for every page.
   const ways = limit > mostSorted && ordered.length > 0 ? ordered : all;
-  const cost = (way: Way) => (way.ordered ? (way.rows / Math.max(sizes.matching, 1)) * limit + way.leads.length : way.rows);
+  // Rows read, and half as much again where they are sorted.
+  const cost = (way: Way) =>
+    way.ordered ? Math.min(way.rows, (way.rows / Math.max(sizes.matching, 1)) * limit) + way.leads.length : 1.5 * way.rows + 10;
   const best = ways.reduce((a, b) => (cost(b) < cost(a) ? b : a));
   const conditions = conditionsOf(filters, view, best.filter);
   return { order, leads: best.leads, conditions };

@@ -2,7 +2,7 @@ import { frameTotals } from '@/db/lists/count';
 import { columnOf, listTables, parameterOf } from '@/db/lists/columns';
 import { type Cursor, readCursor, writeCursor } from '@/db/lists/cursor';
 import { cellsOf, cursorOf, fetchRows, keysOf, type Read } from '@/db/lists/fetch';
-import { readFilters, type ReadFilters } from '@/db/lists/filters';
+import type { ReadFilters } from '@/db/lists/filters';
 import { planOf, type Sizes } from '@/db/lists/plan';
 import { tallyColumns } from '@/db/lists/tally';
 import { weigh } from '@/db/lists/weigh';

@@ -1,5 +1,5 @@
 import { instant } from '@/db/clock';
-import { packJson, packModel, packState, unpackJson, unpackModel, unpackState } from '@/db/encode';
+import { packJson, packState, unpackJson, unpackModel, unpackState } from '@/db/encode';
 import { ListWriter, type Solved, summaryOf } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { inShortTransactions } from '@/db/short-transactions';

@@ -27,7 +27,7 @@ export interface SummaryCell {
 export interface BatchSummary {
   readonly counts: VerdictCounts;
   readonly cells: readonly SummaryCell[];
-  /** Frames by ratio, in steps of `step` from 0; the last holds all above. Frames without a ratio are left out. */
+  /** Frames by ratio in steps up to 0.05, 0.10 … (1.00 in the one below 1.00); the last holds all above. Without a ratio: left out. */
   readonly spread: { readonly step: number; readonly frames: readonly number[] };
   /** Which check governs how many frames, and how many of these are over; the most frequent first. */
   readonly governing: readonly { readonly check: string; readonly frames: number; readonly over: number }[];
@@ -50,8 +50,8 @@ export interface SectionSummary {
   readonly over: number;
 }
 
-const step = 0.05;
-const steps = 26; // 0 to 1.25, and all above
+const perUnit = 20;
+const steps = 26; // up to 1.25, and all above
 
 /** A revision at a glance. @returns undefined where it is not the office's */
 export async function findSummary(db: Db, office: number, revision: number): Promise<BatchSummary | undefined> {
@@ -60,11 +60,15 @@ export async function findSummary(db: Db, office: number, revision: number): Pro
   const rows = readFrames(raw, revision);
   const cells = rows.map(cellOf);
   const frames = Array<number>(steps).fill(0);
-  for (const { ratio } of cells) if (ratio !== null) frames[Math.min(Math.floor(ratio / step), steps - 1)]! += 1;
+  for (const { ratio } of cells) {
+    if (ratio === null) continue;
+    const at = Math.max(Math.ceil(ratio * perUnit) - 1, 0);
+    frames[Math.min(at, steps - 1)]! += 1;
+  }
   return {
     counts: await countRevisionVerdicts(db, office, revision),
     cells,
-    spread: { step, frames },
+    spread: { step: 1 / perUnit, frames },
     governing: governingChecks(cells),
     sections: sectionsOf(raw, revision),
     worst: worstOf(raw, revision, cells),

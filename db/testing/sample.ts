@@ -187,3 +187,10 @@ export function run(raw: RawDatabase, revision: number, person: number, random: 
   const waiting = listWaiting(raw, revision, 100_000);
   return insertChunkResults(raw, waiting.map((one) => resultsOf(one.version, one.frame, random)), { person }).length; // prettier-ignore
 }
+
+/** All that an iteration gives. */
+export async function collected<T>(iteration: AsyncIterable<T>): Promise<T[]> {
+  const all: T[] = [];
+  for await (const one of iteration) all.push(one);
+  return all;
+}

@@ -1,0 +1,116 @@
+import { expect, it } from 'vitest';
+import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
+import { insertActivity, listActivity } from '@/db/queries/activity';
+import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
+import { insertIntake } from '@/db/queries/intake';
+import { findLatestJob, insertJob } from '@/db/queries/jobs';
+import { iterateRows, listFacets, listRows } from '@/db/queries/lists';
+import { findPerson, listPeople } from '@/db/queries/people';
+import { iterateInputRows, listInputRowsAround, listProblems, listSheets } from '@/db/queries/problems';
+import { findProject, listAssigned, listProjects, listProjectsOf, updateAssigned } from '@/db/queries/projects';
+import {
+  countRevisionVerdicts,
+  findRevision,
+  findRevisionById,
+  insertRevision,
+  listRevisions,
+  updateRevisionState,
+} from '@/db/queries/revisions';
+import { findSummary, listParameterRatios } from '@/db/queries/summary';
+import { insertUpload, listUploadedFiles, listUploads } from '@/db/queries/uploads';
+import type { OpenDatabase } from '@/db/open';
+import { newDatabase } from '@/db/testing/database';
+import { collected, intakeOf, type Office, office, portal, read, run, seeded } from '@/db/testing/sample';
+import type { View } from '@/lib/tables/view';
+
+/** A full office with a run batch, and another that is as full. */
+async function twoOffices() {
+  const database = await newDatabase();
+  const fill = async (name: string) => {
+    const own = await office(database.db, name);
+    const revision = await read(database, own, intakeOf([portal('F1', 10), portal('F2', 12)]));
+    run(database.raw, revision.id, own.person, seeded(1));
+    const upload = { name: 'shed.xlsx', size: 3, sha256: 'ab', bytes: Buffer.from('abc'), person: own.person };
+    await insertUpload(database.db, own.office, { ...upload, revision: revision.id });
+    await updateAssigned(database.db, own.office, own.project, [own.person]);
+    await insertActivity(database.db, own.office, { what: 'ran a revision', person: own.person, project: own.project });
+    await insertJob(database.db, own.office, { kind: 'run', revision: revision.id, person: own.person });
+    return { ...own, revision: revision.id };
+  };
+  return { ...database, own: await fill('Northlight'), other: await fill('Southgate') };
+}
+type Filled = Office & { readonly revision: number };
+
+const members: View = { table: 'members', filters: [], sort: null, columns: null };
+
+/** Every query that reads a thing of an office: what it gives of `of`'s things to someone of the office asking. */
+const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of: Filled) => Promise<unknown>>> = {
+  findPerson: ({ db }, asking, of) => findPerson(db, asking, of.person),
+  findProject: ({ db }, asking, of) => findProject(db, asking, of.project),
+  listAssigned: ({ db }, asking, of) => listAssigned(db, asking, of.project),
+  listProjectsOf: ({ db }, asking, of) => listProjectsOf(db, asking, of.person),
+  findBatch: ({ db }, asking, of) => findBatch(db, asking, of.batch),
+  listBatches: ({ db }, asking, of) => listBatches(db, asking, of.project),
+  findRevision: ({ db }, asking, of) => findRevision(db, asking, of.batch, 'A'),
+  findRevisionById: ({ db }, asking, of) => findRevisionById(db, asking, of.revision),
+  listRevisions: ({ db }, asking, of) => listRevisions(db, asking, of.batch),
+  countRevisionVerdicts: async ({ db }, asking, of) => {
+    const { over, near, within, notChecked } = await countRevisionVerdicts(db, asking, of.revision);
+    return Array(over + near + within + notChecked).fill('frame');
+  },
+  listUploads: ({ db }, asking, of) => listUploads(db, asking, of.revision),
+  listUploadedFiles: ({ db }, asking, of) => listUploadedFiles(db, asking, of.revision),
+  listProblems: ({ db }, asking, of) => listProblems(db, asking, of.revision),
+  listSheets: ({ db }, asking, of) => listSheets(db, asking, of.revision),
+  iterateInputRows: ({ db }, asking, of) => collected(iterateInputRows(db, asking, of.revision)),
+  listInputRowsAround: ({ db }, asking, of) =>
+    listInputRowsAround(db, asking, of.revision, { sheet: 'Members', row: 2, around: 2 }),
+  findFrame: ({ db }, asking, of) => findFrame(db, asking, of.revision, 0),
+  findFrameIndex: ({ db }, asking, of) => findFrameIndex(db, asking, of.revision, 'F2'),
+  iterateFrames: ({ db }, asking, of) => collected(iterateFrames(db, asking, of.revision)),
+  findNeighbours: async ({ db }, asking, of) =>
+    Array((await findNeighbours(db, asking, of.revision, 0, members)).of).fill('frame'),
+  listRows: ({ db }, asking, of) => listRows(db, asking, of.revision, members, { limit: 10 }),
+  iterateRows: ({ db }, asking, of) => collected(iterateRows(db, asking, of.revision, members)),
+  listFacets: ({ db }, asking, of) => listFacets(db, asking, of.revision, 'members', 'section'),
+  listFacetsOfParameters: ({ db }, asking, of) => listFacets(db, asking, of.revision, 'frames', 'p:span'),
+  findSummary: ({ db }, asking, of) => findSummary(db, asking, of.revision),
+  listParameterRatios: ({ db }, asking, of) => listParameterRatios(db, asking, of.revision, 'span'),
+  findLatestJob: ({ db }, asking, of) => findLatestJob(db, asking, of.revision, 'run'),
+  listActivityOfProject: ({ db }, asking, of) => listActivity(db, asking, { project: of.project }),
+};
+
+const nothing = (found: unknown) => found === undefined || (Array.isArray(found) && found.length === 0);
+
+it.each(Object.entries(queries))('%s finds its own office’s things and nothing of another’s', async (_, query) => {
+  const { own, other, ...database } = await twoOffices();
+  expect(nothing(await query(database, own.office, own))).toBe(false);
+  expect(nothing(await query(database, own.office, other))).toBe(true);
+});
+
+it('lists only the office’s own people, projects and activity', async () => {
+  const { db, own } = await twoOffices();
+  expect((await listPeople(db, own.office)).map((one) => one.name)).toEqual(['Northlight analyst']);
+  expect((await listProjects(db, own.office)).map((one) => one.id)).toEqual([own.project]);
+  expect((await listActivity(db, own.office)).map((one) => one.person)).toEqual(['Northlight analyst']);
+});
+
+it('changes nothing of another office', async () => {
+  const { db, raw, own, other } = await twoOffices();
+  const size = () => raw.prepare('select (select count(*) from batch) + (select count(*) from revision)').pluck().get();
+  const before = size();
+  expect(await insertBatch(db, own.office, { project: other.project, name: 'Mine', person: own.person })).toBeUndefined();
+  expect(await insertRevision(db, own.office, { batch: other.batch, person: own.person })).toBeUndefined();
+  expect(await updateRevisionState(db, own.office, other.revision, ['read'], 'running')).toBe(false);
+  expect(await updateAssigned(db, own.office, other.project, [])).toBe(false);
+  const upload = { revision: other.revision, name: 'x', size: 1, sha256: 'x', bytes: Buffer.from('x'), person: own.person };
+  await expect(insertUpload(db, own.office, upload)).rejects.toThrow(RangeError);
+  expect(() => insertIntake(raw, own.office, other.revision, intakeOf([]))).toThrow(RangeError);
+  expect(size()).toBe(before);
+  expect((await listAssigned(db, other.office, other.project)).length).toBe(1);
+});
+
+it('does not share results between offices, though their frames are the same', async () => {
+  const { raw } = await twoOffices();
+  expect(raw.prepare('select count(*), count(distinct hash) from frame_version').raw().get()).toEqual([4, 2]);
+});
