@@ -1,0 +1,176 @@
+/** Rows of the files → frames and problems: the rules of sheets §2, §3, §5 and §7. */
+import type { Batch } from '@/lib/intake/batch';
+import { FrameBuilder } from '@/lib/intake/build-frame';
+import { isReadable, VariantReader } from '@/lib/intake/families/variants';
+import type { RawSheet } from '@/lib/intake/files/raw-sheet';
+import { familiesInUse, FrameList } from '@/lib/intake/frames';
+import { nearest } from '@/lib/intake/distance';
+import type { FrameRead, InputIdentity, InputRow, Intake, SheetRead } from '@/lib/intake/intake';
+import { ProblemList } from '@/lib/intake/problem-list';
+import { Reader } from '@/lib/intake/reader';
+import { readTable } from '@/lib/intake/read-table';
+import { cellAddress } from '@/lib/intake/files/cell-address';
+import { sheetDefinitions, type SheetName, sheetNames } from '@/lib/intake/sheet-definitions';
+import { LoadCases } from '@/lib/intake/sheets/load-cases';
+import { Materials } from '@/lib/intake/sheets/materials';
+import { Sections } from '@/lib/intake/sheets/sections';
+import { readSetup } from '@/lib/intake/sheets/setup';
+import { absentPlace, type Part, partPlace, type Table } from '@/lib/intake/table';
+import { BatchWarnings } from '@/lib/intake/warnings';
+import { sheetKey } from '@/lib/intake/words';
+import type { Settings } from '@/lib/model/settings';
+import type { Problem } from '@/lib/problems/problem';
+import * as say from '@/lib/problems/wording';
+
+export interface RawInput {
+  readonly sheets: readonly RawSheet[];
+  readonly problems: readonly Problem[];
+  readonly identity: InputIdentity;
+}
+
+export interface IntakeOptions {
+  /** The office's own settings, where the Setup sheet is silent. */
+  readonly office?: Partial<Settings>;
+}
+
+const byKey = new Map(sheetNames.map((name) => [sheetKey(name), name]));
+
+/** Reads every sheet. Nothing throws on bad input: all that is wrong comes back as problems, and good frames come out. */
+export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
+  const problems = new ProblemList();
+  problems.take(raw.problems);
+  const reader = new Reader(problems);
+  const named = nameSheets(raw.sheets, problems);
+  const table = (name: SheetName, system: 'metric' | 'us'): Table | undefined => {
+    const sheet = named.get(name);
+    const definition = sheetDefinitions.get(name);
+    return sheet && definition ? readTable(sheet, definition, system, problems) : undefined;
+  };
+  const setupTable = table('Setup', 'metric');
+  const setup = readSetup(setupTable, options.office ?? {}, reader, problems);
+  const system = setup.settings.units;
+  const tables = new Map<SheetName, Table>();
+  for (const name of sheetNames) {
+    const found = name === 'Setup' ? setupTable : table(name, system);
+    if (found) tables.set(name, found);
+  }
+  tellMissingSheets(tables, raw.sheets, problems);
+
+  const sections = new Sections(tables.get('Sections'), reader, problems);
+  const materials = new Materials(tables.get('Materials'), reader, problems);
+  const families = familiesInUse(tables, system, reader, problems);
+  const frames = new FrameList(tables, families, reader, problems);
+  frames.read(new VariantReader(families, sections, materials, reader, problems));
+  const known = { framesByKey: frames.byKey, families };
+  const loads = [tables.get('Node loads'), tables.get('Member loads'), tables.get('Settlements')];
+  const cases = new LoadCases(tables.get('Load cases'), loads, known, [...families.values()], reader, problems);
+  const batch: Batch = {
+    problems, reader, system, settings: setup.settings, origins: setup.origins, settingPlaces: setup.places, tables, families,
+    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases,
+  }; // prettier-ignore
+
+  const read = readFrames(batch);
+  const { stopped } = problems;
+  return {
+    input: raw.identity,
+    settings: setup.settings,
+    origins: setup.origins,
+    frames: read.map((each) => (problems.stopsAll || stopped.has(each.id) ? { id: each.id, frame: null } : each)),
+    problems: problems.list(),
+    sheets: sheetsRead(raw.sheets, tables),
+    rows: rowsAsTyped(raw.sheets),
+  };
+}
+
+function readFrames(batch: Batch): FrameRead[] {
+  const { problems, settings, settingPlaces, materials } = batch;
+  const builder = new FrameBuilder(batch);
+  const warnings = new BatchWarnings(batch);
+  const read: FrameRead[] = [];
+  for (const entry of batch.frames) {
+    if (!entry.run) continue;
+    // a variant with a parameter wrong has said so at its cell
+    const frame = isReadable(entry) ? builder.build(entry) : null;
+    if (frame) warnings.look(frame);
+    read.push({ id: entry.id, frame: problems.stopped.has(entry.id) ? null : frame });
+  }
+  builder.finish();
+  if (read.length > 0) warnings.finish();
+  if (settings.material !== null) {
+    const found = materials.find(settings.material);
+    const place = settingPlaces.get('material');
+    if ('suggestion' in found && place) {
+      problems.add(place, { code: 'unknown-material', message: say.unknownMaterial(settings.material, found.suggestion) }, null);
+    }
+  }
+  return read;
+}
+
+/** Sheets by the contract's names; others are told and left alone. */
+function nameSheets(sheets: readonly RawSheet[], problems: ProblemList): Map<SheetName, RawSheet> {
+  const named = new Map<SheetName, RawSheet>();
+  for (const sheet of sheets) {
+    const name = byKey.get(sheetKey(sheet.name));
+    if (name) {
+      const before = named.get(name);
+      named.set(name, before ? { ...before, parts: [...before.parts, ...sheet.parts] } : sheet);
+      continue;
+    }
+    const near = nearest(sheetKey(sheet.name), [...byKey]);
+    for (const part of sheet.parts) {
+      if (part.rows.length === 0) continue;
+      const fault = near
+        ? ({ code: 'near-miss-column', message: say.nearMissSheet(part.name, near) } as const)
+        : ({ code: 'column-ignored', message: say.sheetIgnored(part.name) } as const);
+      problems.add(partPlace(part), fault, null);
+    }
+  }
+  return named;
+}
+
+/** Needed: Nodes, Members and Supports, or Variants. */
+function tellMissingSheets(tables: ReadonlyMap<SheetName, Table>, sheets: readonly RawSheet[], problems: ProblemList): void {
+  if (tables.has('Variants') || sheets.length === 0) return;
+  for (const name of ['Nodes', 'Members', 'Supports'] as const) {
+    const table = tables.get(name);
+    const empty = table?.parts.every((part) => part.raw.rows.length === 0) ?? true;
+    if (!empty) continue;
+    problems.add(
+      absentPlace(name),
+      { code: 'missing-sheet', message: say.missingSheet(name, table !== undefined), stopsAll: true },
+      null,
+    );
+  }
+}
+
+function sheetsRead(sheets: readonly RawSheet[], tables: ReadonlyMap<SheetName, Table>): SheetRead[] {
+  const parts = new Map<RawSheet['parts'][number], Part>();
+  for (const table of tables.values()) for (const part of table.parts) parts.set(part.raw, part);
+  return sheets
+    .flatMap((sheet) => sheet.parts)
+    .sort((a, b) => a.order - b.order)
+    .map((raw) => {
+      const part = parts.get(raw);
+      return {
+        name: raw.name,
+        file: raw.file,
+        known: part?.definition.name ?? null,
+        headingRow: part?.headingRow ?? null,
+        rows: part ? part.dataRows.length : raw.rows.length,
+        headings: (part?.columns ?? []).map((column) => ({
+          text: column.text,
+          cell: cellAddress(part?.headingRow ?? 1, column.index),
+          known: column.known,
+        })),
+      };
+    });
+}
+
+function rowsAsTyped(sheets: readonly RawSheet[]): InputRow[] {
+  return sheets
+    .flatMap((sheet) => sheet.parts)
+    .sort((a, b) => a.order - b.order)
+    .flatMap((part) =>
+      part.rows.map((row) => ({ sheet: part.name, row: row.row, cells: row.cells.map((cell) => cell?.text ?? null) })),
+    );
+}

@@ -1,0 +1,224 @@
+import type { FrameEntry } from '@/lib/intake/batch';
+import type { Draft } from '@/lib/intake/draft';
+import type { Family } from '@/lib/intake/families/family';
+import { idKey } from '@/lib/intake/ids';
+import type { ProblemList } from '@/lib/intake/problem-list';
+import type { Reader } from '@/lib/intake/reader';
+import { level, RowsByFrame } from '@/lib/intake/rows-by-frame';
+import type { Combinations } from '@/lib/intake/sheets/combinations';
+import { type LimitTarget, targetOf } from '@/lib/intake/sheets/limit-target';
+import { type Row, rawCell, type Table } from '@/lib/intake/table';
+import type { Limit, Measure } from '@/lib/model/frame';
+import type { SettingOrigin, Settings } from '@/lib/model/settings';
+import * as say from '@/lib/problems/wording';
+
+const measures = ['deflection', 'sway', 'displacement', 'spread'] as const;
+const directions = ['x', 'y', 'resultant'] as const;
+
+interface Given {
+  readonly limit: Limit;
+  readonly row: Row | null;
+}
+
+/** Limits on movement, as they apply to each frame; Setup's ratios are `*` rows. */
+export class Limits {
+  private readonly rows: RowsByFrame;
+  private readonly shared = new Map<string, readonly Limit[]>();
+  private readonly matched = new Set<Row>();
+  private readonly unmatched = new Map<Row, string[]>();
+
+  constructor(
+    private readonly table: Table | undefined,
+    known: { readonly framesByKey: ReadonlyMap<string, FrameEntry>; readonly families: ReadonlyMap<string, Family> },
+    private readonly settings: Settings,
+    private readonly origins: { readonly deflectionRatio: SettingOrigin; readonly swayRatio: SettingOrigin },
+    private readonly combinations: Combinations,
+    private readonly reader: Reader,
+    private readonly problems: ProblemList,
+  ) {
+    this.rows = new RowsByFrame('Limits', table, known, reader);
+  }
+
+  for(draft: Draft): readonly Limit[] {
+    const given: Given[] = [];
+    for (const { row, level: at } of this.rows.for(draft.entry)) {
+      if (at === level.all) this.rows.fits(row);
+      if (!this.reader.keeps(row, draft.reading)) continue;
+      given.push(...this.read(draft, row, at === level.named));
+    }
+    for (const each of this.fromSetup()) if (!given.some((other) => sets(other.limit, each.limit))) given.push(each);
+    this.tellEquals(draft, given);
+    const list = given.map((each) => each.limit);
+    const key = JSON.stringify(list);
+    const known = this.shared.get(key);
+    if (known) return known;
+    this.shared.set(key, list);
+    return list;
+  }
+
+  private fromSetup(): Given[] {
+    const of = (measure: Measure, n: number | 'none' | null, origin: SettingOrigin): Given[] => {
+      if (typeof n !== 'number') return [];
+      const source = origin.cell ?? origin.source;
+      const any = { direction: null, toNode: null, absolute_m: null, combination: null, namedFrame: false };
+      return [{ limit: { target: 'all', name: '*', measure, ratio: n, ...any, source }, row: null }];
+    };
+    return [
+      ...of('deflection', this.settings.deflectionRatio, this.origins.deflectionRatio),
+      ...of('sway', this.settings.swayRatio, this.origins.swayRatio),
+    ];
+  }
+
+  private read(draft: Draft, row: Row, namedFrame: boolean): Given[] {
+    const { reader } = this;
+    const { reading } = draft;
+    const name = reader.needId(row, 'applies to', reading);
+    const measure = reader.word<Measure>(row, 'measure', measures, reading);
+    if (measure === null)
+      reader.tell(row, 'measure', { code: 'unknown-word', message: say.unknownWord('measure', '', measures) }, reading);
+    const direction = reader.word(row, 'direction', directions, reading);
+    const ratio = this.positive(draft, row, 'ratio');
+    const absolute = this.positive(draft, row, 'absolute');
+    const toNode = reader.id(row, 'to node', reading);
+    const combinations = this.combinationsOf(draft, row);
+    if (
+      name === undefined ||
+      !measure ||
+      direction === undefined ||
+      ratio === undefined ||
+      absolute === undefined ||
+      toNode === undefined
+    )
+      return [];
+    if (combinations === undefined) return [];
+    const fault = this.faultOf(row, measure, ratio, absolute, toNode);
+    if (fault) {
+      reader.tell(row, fault.column, { code: fault.code, message: fault.message }, reading);
+      return [];
+    }
+    const target = targetOf(draft, name, measure);
+    if (!target) {
+      this.unmatched.set(row, [...(this.unmatched.get(row) ?? []), draft.entry.id]);
+      return [];
+    }
+    this.matched.add(row);
+    if (toNode !== null && measure === 'spread' && !draft.nodeIndex.has(idKey(toNode))) {
+      reader.tell(row, 'to node', { code: 'unknown-node', message: say.unknownNode(toNode, draft.entry.id) }, reading);
+      return [];
+    }
+    return combinations.map((combination) => ({
+      row,
+      limit: {
+        ...target,
+        measure,
+        direction,
+        toNode:
+          measure === 'spread' && toNode !== null ? (draft.nodes[draft.nodeIndex.get(idKey(toNode)) ?? -1]?.id ?? toNode) : null,
+        ratio,
+        absolute_m: absolute,
+        combination,
+        namedFrame,
+        source: `${row.part.raw.name} row ${row.raw.row}`,
+      },
+    }));
+  }
+
+  private faultOf(
+    row: Row,
+    measure: Measure,
+    ratio: number | null,
+    absolute: number | null,
+    toNode: string | null,
+  ): { column: string; code: 'out-of-range' | 'not-a-number' | 'unknown-node'; message: string } | null {
+    // prettier-ignore
+    if (measure === 'displacement' && ratio !== null) return { column: 'ratio', code: 'out-of-range', message: say.displacementIsAbsolute() };
+    if (ratio === null && absolute === null) {
+      const column =
+        measure === 'displacement' || (row.part.byName.has('absolute') && !row.part.byName.has('ratio')) ? 'absolute' : 'ratio';
+      return { column, code: 'not-a-number', message: say.limitNeedsFigure(measure) };
+    }
+    if (measure === 'spread' && toNode === null)
+      return { column: 'to node', code: 'unknown-node', message: say.spreadNeedsNode() };
+    return null;
+  }
+
+  private positive(draft: Draft, row: Row, column: 'ratio' | 'absolute'): number | null | undefined {
+    const value = this.reader.number(row, column, draft.reading);
+    if (value === null || value === undefined || value > 0) return value;
+    const text = rawCell(row, column)?.text ?? '';
+    this.reader.tell(row, column, { code: 'not-positive', message: say.notPositive(column, text) }, draft.reading);
+    return undefined;
+  }
+
+  /** The combination a row names, in all its signs; [null] for every service combination; undefined where unknown (told). */
+  private combinationsOf(draft: Draft, row: Row): (string | null)[] | undefined {
+    const id = this.reader.id(row, 'combination', draft.reading);
+    if (id === undefined) return undefined;
+    if (id === null || id === '*') return [null];
+    const named = this.combinations.names.get(idKey(id));
+    if (!named || named.purpose !== 'service') {
+      const message = named ? say.limitOnStrength(id) : say.unknownCombination(id);
+      this.reader.tell(row, 'combination', { code: 'unknown-word', message }, draft.reading);
+      return undefined;
+    }
+    const signed = [...this.combinations.names].filter(([key, each]) => each.base === named.base && key !== idKey(named.base));
+    const isBase = idKey(named.base) === idKey(id);
+    return isBase && signed.length > 0 ? draft.combinationNames.filter((name) => signed.some(([key]) => key === idKey(name))) : [isBase ? named.base : id]; // prettier-ignore
+  }
+
+  /** Two limits of equal standing for one thing that differ: which is meant nobody can say. */
+  private tellEquals(draft: Draft, given: readonly Given[]): void {
+    const first = new Map<string, Given>();
+    for (const each of given) {
+      const { limit } = each;
+      const key = standing(draft, limit);
+      const before = first.get(key);
+      if (!before) {
+        first.set(key, each);
+        continue;
+      }
+      const same = before.limit.ratio === limit.ratio && before.limit.absolute_m === limit.absolute_m;
+      const [row, other] = each.row ? [each.row, before] : [before.row, each];
+      if (!row) continue;
+      const where = other.row ? `row ${other.row.raw.row}` : other.limit.source;
+      const fault = same
+        ? ({ code: 'repeated-row', message: say.repeatedLimit(where) } as const)
+        : ({ code: 'conflicting-row', message: say.limitsDiffer(where) } as const);
+      this.reader.tell(row, 'applies to', fault, draft.reading);
+    }
+  }
+
+  /** Tells the rows that apply to nothing in any frame. */
+  tellUnmatched(frames: readonly FrameEntry[]): void {
+    if (this.table) this.rows.tellUnfit(this.reader, frames, this.problems);
+    for (const [row, touched] of this.unmatched) {
+      if (this.matched.has(row)) continue;
+      const message = say.limitFitsNothing(rawCell(row, 'applies to')?.text ?? '');
+      for (const frame of touched) this.reader.tell(row, 'applies to', { code: 'unknown-word', message }, { frame, parameters: null, variantPlace: null }); // prettier-ignore
+    }
+  }
+}
+
+/** True where a sheet's limit stands instead of the office's own ratio for the same measure. */
+function sets(given: Limit, other: Limit): boolean {
+  return other.source === 'office' && given.target === 'all' && given.measure === other.measure && given.combination === null;
+}
+
+const ranks: Readonly<Record<LimitTarget['target'], number>> = {
+  node: 1,
+  member: 1,
+  span: 1,
+  place: 2,
+  group: 2,
+  role: 3,
+  all: 4,
+};
+
+/** What makes two limits equals: the thing, its rank, measure, direction, combination, and whether the frame is named. */
+function standing(draft: Draft, limit: Limit): string {
+  let thing = limit.name;
+  // a piece of a span and the span are one subject
+  if (limit.target === 'member') thing = draft.members.find((m) => m.id === limit.name)?.span ?? limit.name;
+  const parts = [ranks[limit.target], thing, limit.measure, limit.direction ?? '', limit.toNode ?? '', limit.combination ?? '', limit.namedFrame]; // prettier-ignore
+  return parts.join('|').toLowerCase();
+}

@@ -1,0 +1,146 @@
+import { nearestAny } from '@/lib/intake/distance';
+import { idKey } from '@/lib/intake/ids';
+import { oneRowAKey } from '@/lib/intake/keyed-rows';
+import type { Entry, ProblemList } from '@/lib/intake/problem-list';
+import { forNobody, type Reader } from '@/lib/intake/reader';
+import { type Row, rawCell, type Table } from '@/lib/intake/table';
+import { gradeFor, type GradeProperties } from '@/lib/materials/grade-for';
+import type { Material, PropertySource } from '@/lib/model/frame';
+import * as say from '@/lib/problems/wording';
+
+const columns = {
+  E_Pa: 'E', G_Pa: 'G', fy_Pa: 'fy', fu_Pa: 'fu', density_kg_m3: 'density', expansion_perK: 'expansion',
+} as const; // prettier-ignore
+type Property = keyof typeof columns;
+const properties = Object.keys(columns) as Property[];
+
+interface MaterialRow {
+  readonly name: string;
+  readonly row: Row | null;
+  readonly grade: string | null;
+  readonly typed: Partial<Record<Property, number>>;
+}
+
+export interface FoundMaterial {
+  /** Null where its row is wrong. */
+  readonly source: MaterialRow | null;
+  readonly row: Row | null;
+  readonly entries: readonly Entry[];
+}
+
+/** The batch's materials: those of the Materials sheet, else grades by their name. */
+export class Materials {
+  private readonly bySheet = new Map<string, FoundMaterial>();
+  private readonly grades = new Map<string, FoundMaterial | { suggestion: string | null }>();
+  private readonly resolved = new Map<MaterialRow, Map<number | null, Material>>();
+
+  constructor(table: Table | undefined, reader: Reader, problems: ProblemList) {
+    const ided = (row: Row): { id: string; key: string } | undefined => {
+      if (!reader.keeps(row, forNobody)) return undefined;
+      const id = reader.needId(row, 'material', forNobody);
+      return id === undefined ? undefined : { id, key: idKey(id) };
+    };
+    const conflicts = new Map<string, Entry[]>();
+    const rows = (table?.rows ?? []).map((row) => ({ row, level: 0 }));
+    const kept = oneRowAKey(rows, ided, (row, first, same) => {
+      const told = problems.record(() => reader.tell(row, 'material', same
+        ? { code: 'repeated-row', message: say.repeatedRow(first.raw.row) }
+        : { code: 'conflicting-row', message: say.conflictingRow('material', first.raw.row) }, forNobody)); // prettier-ignore
+      const key = idKey(reader.id(row, 'material', forNobody) ?? '');
+      if (!same) conflicts.set(key, [...(conflicts.get(key) ?? []), ...told.entries]);
+    });
+    for (const { row, id, key } of kept) {
+      const { value, entries } = problems.record(() => readMaterial(row, id, reader));
+      this.bySheet.set(key, { source: value ?? null, row, entries: [...entries, ...(conflicts.get(key) ?? [])] });
+    }
+  }
+
+  find(name: string): FoundMaterial | { readonly suggestion: string | null } {
+    const own = this.bySheet.get(idKey(name));
+    if (own) return own;
+    let found = this.grades.get(name);
+    if (!found) {
+      const grade = gradeFor(name, null);
+      if ('properties' in grade) found = { source: { name, row: null, grade: name, typed: {} }, row: null, entries: [] };
+      else found = { suggestion: nearestAny(idKey(name), [...this.bySheet.keys()].map((key) => [key, key] as const)) ?? grade.suggestion }; // prettier-ignore
+      this.grades.set(name, found);
+    }
+    return found;
+  }
+
+  /** The material for a section's thickest part; the same object for the same thickness. */
+  resolve(source: MaterialRow, thickness_m: number | null): Material {
+    let byThickness = this.resolved.get(source);
+    if (!byThickness) this.resolved.set(source, (byThickness = new Map()));
+    let material = byThickness.get(thickness_m);
+    if (!material) byThickness.set(thickness_m, (material = materialOf(source, thickness_m)));
+    return material;
+  }
+}
+
+function materialOf({ name, grade, typed }: MaterialRow, thickness_m: number | null): Material {
+  const found = grade === null ? null : gradeFor(grade, thickness_m);
+  const held: GradeProperties | null = found && 'properties' in found ? found.properties : null;
+  const sources: Partial<Record<Property, PropertySource>> = {};
+  const value = (key: Property): number | null => {
+    const own = typed[key];
+    if (own !== undefined) sources[key] = 'typed';
+    else if (held && held[key] !== null) sources[key] = 'library';
+    return own ?? held?.[key] ?? null;
+  };
+  const E_Pa = value('E_Pa');
+  if (E_Pa === null) throw new RangeError(`Expected a grade or E for material ${name}`);
+  return {
+    name,
+    grade: held?.grade ?? null,
+    standard: held?.standard ?? null,
+    E_Pa,
+    G_Pa: value('G_Pa'),
+    fy_Pa: value('fy_Pa'),
+    fu_Pa: value('fu_Pa'),
+    density_kg_m3: value('density_kg_m3'),
+    expansion_perK: value('expansion_perK'),
+    sources,
+  };
+}
+
+function readMaterial(row: Row, name: string, reader: Reader): MaterialRow | undefined {
+  let sound = !reader.faulty(row, forNobody);
+  const grade = reader.id(row, 'grade', forNobody);
+  if (grade === undefined) sound = false;
+  const typed: Partial<Record<Property, number>> = {};
+  for (const key of properties) {
+    const value = reader.number(row, columns[key], forNobody);
+    if (value === undefined) sound = false;
+    else if (value !== null) {
+      if (value > 0 || (key === 'expansion_perK' && value === 0)) typed[key] = value;
+      else {
+        const text = rawCell(row, columns[key])?.text ?? '';
+        reader.tell(row, columns[key], { code: 'not-positive', message: say.notPositive(columns[key], text) }, forNobody);
+        sound = false;
+      }
+    }
+  }
+  if (grade) {
+    const found = gradeFor(grade, null);
+    if (!('properties' in found)) {
+      reader.tell(row, 'grade', { code: 'unknown-grade', message: say.unknownGrade(grade, found.suggestion) }, forNobody);
+      sound = false;
+    }
+  } else if (grade === null && typed.E_Pa === undefined && sound) {
+    reader.tell(row, row.part.byName.has('E') ? 'E' : 'grade', { code: 'not-a-number', message: say.gradeOrE() }, forNobody);
+    sound = false;
+  }
+  suspect(row, typed, reader);
+  return sound && grade !== undefined ? { name, row, grade, typed } : undefined;
+}
+
+function suspect(row: Row, typed: Partial<Record<Property, number>>, reader: Reader): void {
+  const ask = (key: Property, odd: (value: number) => boolean, message: string): void => {
+    const value = typed[key];
+    if (value !== undefined && odd(value)) reader.tell(row, columns[key], { code: 'suspect-unit', message }, forNobody);
+  };
+  ask('E_Pa', (E) => E < 50e9 || E > 250e9, say.suspectE());
+  ask('density_kg_m3', (density) => density < 2000 || density > 9000, say.suspectDensity());
+  ask('fy_Pa', (fy) => fy > 1000e6, say.suspectYield());
+}

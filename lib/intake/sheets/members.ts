@@ -1,0 +1,161 @@
+import type { Draft } from '@/lib/intake/draft';
+import { idKey } from '@/lib/intake/ids';
+import { oneRowAKey } from '@/lib/intake/keyed-rows';
+import type { Reading } from '@/lib/intake/reader';
+import { level, type RowsByFrame } from '@/lib/intake/rows-by-frame';
+import { resolveMaterial } from '@/lib/intake/sheets/member-material';
+import { nodeOf } from '@/lib/intake/sheets/node-loads';
+import { type Row, rawCell } from '@/lib/intake/table';
+import { wordKey } from '@/lib/intake/words';
+import { type Joint, type Member, roles, type Section } from '@/lib/model/frame';
+import * as say from '@/lib/problems/wording';
+
+const jointWords = ['rigid', 'pin'] as const;
+/** Words in a reserved column that mean it is not asked for. */
+const offWords = new Set(['', 'no', 'n', 'none', 'false', '0']);
+
+export function readMembers(draft: Draft, rows: RowsByFrame): void {
+  const { reader } = draft.batch;
+  const { reading } = draft;
+  const keyOf = (row: Row): { id: string; key: string } | undefined => {
+    if (!reader.keeps(row, reading)) return undefined;
+    const id = reader.needId(row, 'member', reading);
+    return id === undefined ? undefined : { id, key: idKey(id) };
+  };
+  const mine = rows.for(draft.entry).filter(({ row, level: at }) => {
+    if (at !== level.all) return true;
+    const here = ['start', 'end'].every((name) => draft.nodeIndex.has(idKey(rawCell(row, name)?.text ?? '')));
+    if (here) rows.fits(row);
+    return here;
+  });
+  const kept = oneRowAKey(mine, keyOf, (row, first, same) => {
+    const message = same
+      ? say.repeatedRow(first.raw.row)
+      : say.duplicateId('member', reader.id(row, 'member', reading) ?? '', first.raw.row);
+    reader.tell(row, 'member', { code: 'duplicate-id', message, severity: same ? 'warning' : 'error' }, reading);
+  });
+  for (const { row, id, key } of kept) {
+    const member = readMember(draft, row, id);
+    draft.memberIndex.set(key, member ? draft.members.length : -1);
+    if (!member) continue;
+    const [a, b] = [draft.nodes[member.start], draft.nodes[member.end]];
+    draft.members.push(member);
+    draft.memberRows.push(row);
+    draft.lengths.push(a && b ? Math.hypot(b.x_m - a.x_m, b.y_m - a.y_m) : 0);
+  }
+}
+
+function readMember(draft: Draft, row: Row, id: string): Member | undefined {
+  const { reader } = draft.batch;
+  const { reading } = draft;
+  let sound = !reader.faulty(row, reading);
+  const need = <T>(value: T | undefined): T | null => {
+    if (value === undefined) sound = false;
+    return value ?? null;
+  };
+  const start = need(nodeOf(draft, row, 'start')) ?? -1;
+  const end = need(nodeOf(draft, row, 'end')) ?? -1;
+  const found = sectionOf(draft, row);
+  const material = found ? need(resolveMaterial(draft, row, found)) : need(undefined);
+  const role = need(reader.word(row, 'role', roles, reading));
+  const axialOnly = need(reader.yesNo(row, 'axial only', reading)) ?? false;
+  const startJoint = need(joint(draft, row, 'start joint')) ?? 'rigid';
+  const endJoint = need(joint(draft, row, 'end joint')) ?? 'rigid';
+  const turned = need(reader.yesNo(row, 'turned', reading)) ?? false;
+  if (turned && found?.section && found.section.properties.Iminor_m4 === null) {
+    reader.tell(row, 'turned', { code: 'not-a-number', message: say.turnedNeedsMinor(found.section.name) }, reading);
+    sound = false;
+  }
+  refuse(draft, row);
+  const length = (name: string): number | null => need(positiveLength(draft, row, name));
+  const both = length('length LTB');
+  const top = length('length LTB top');
+  const bottom = length('length LTB bottom');
+  const major = length('length major');
+  const minor = length('length minor');
+  const span = need(reader.id(row, 'span', reading));
+  const group = need(reader.id(row, 'group', reading));
+  if (!sound || !found || start < 0 || end < 0 || typeof material !== 'number') return undefined;
+  const pinned = axialOnly || (startJoint === 'pin' && endJoint === 'pin');
+  return {
+    id,
+    start,
+    end,
+    section: indexIn(draft.sections, found.section),
+    material,
+    role,
+    startJoint: pinned ? 'pin' : startJoint,
+    endJoint: pinned ? 'pin' : endJoint,
+    axialOnly: pinned,
+    tensionOnly: false,
+    turned,
+    span,
+    lengthMajor_m: major,
+    lengthMinor_m: minor,
+    lengthLtbTop_m: top ?? both,
+    lengthLtbBottom_m: bottom ?? both,
+    group,
+  };
+}
+
+export function indexIn<T>(list: T[], item: T): number {
+  const at = list.indexOf(item);
+  return at >= 0 ? at : list.push(item) - 1;
+}
+
+interface Found {
+  readonly section: Section;
+  /** Its row of the Sections sheet, which may name a material. */
+  readonly row: Row | null;
+}
+
+function sectionOf(draft: Draft, row: Row): Found | undefined {
+  const { reader, sections, problems } = draft.batch;
+  const { reading } = draft;
+  const name = reader.id(row, 'section', reading);
+  if (name === undefined) return undefined;
+  if (name === null) {
+    reader.tell(row, 'section', { code: 'missing-id', message: say.missingId('section') }, reading);
+    return undefined;
+  }
+  const found = sections.find(name);
+  if ('suggestion' in found) {
+    reader.tell(row, 'section', { code: 'unknown-section', message: say.unknownSection(name, found.suggestion) }, reading);
+    return undefined;
+  }
+  for (const entry of found.entries) problems.touch(entry, draft.entry.id);
+  return found.section ? { section: found.section, row: found.row } : undefined;
+}
+
+function joint(draft: Draft, row: Row, name: string): Joint | null | undefined {
+  const { reader } = draft.batch;
+  const value = reader.wordOrNumber(row, name, jointWords, draft.reading);
+  if (typeof value !== 'number') return value;
+  if (value === 0) return 'pin';
+  if (value > 0) return value;
+  reader.tell(row, name, { code: 'not-positive', message: say.negativeSpring(rawCell(row, name)?.text ?? '') }, draft.reading);
+  return undefined;
+}
+
+function positiveLength(draft: Draft, row: Row, name: string): number | null | undefined {
+  const value = draft.batch.reader.number(row, name, draft.reading);
+  if (value === null || value === undefined || value > 0) return value;
+  const fault = { code: 'not-positive', message: say.notPositive(name, rawCell(row, name)?.text ?? '') } as const;
+  draft.batch.reader.tell(row, name, fault, draft.reading);
+  return undefined;
+}
+
+/** Columns of the contract that are not computed yet: a frame that uses them is refused. */
+function refuse(draft: Draft, row: Row): void {
+  const { reader } = draft.batch;
+  const reading: Reading = draft.reading;
+  if (rawCell(row, 'tension only') && reader.yesNo(row, 'tension only', reading)) {
+    reader.tell(row, 'tension only', { code: 'not-supported', message: say.columnNotSupported('tension only') }, reading);
+  }
+  for (const name of ['end section', 'offset']) {
+    const text = rawCell(row, name) ? reader.text(row, name, reading) : null;
+    if (text && !offWords.has(wordKey(text))) {
+      reader.tell(row, name, { code: 'not-supported', message: say.columnNotSupported(name) }, reading);
+    }
+  }
+}

@@ -1,0 +1,128 @@
+import { idKey } from '@/lib/intake/ids';
+import type { Entry, ProblemList } from '@/lib/intake/problem-list';
+import { forNobody, type Reader } from '@/lib/intake/reader';
+import { readProperties } from '@/lib/intake/sheets/section-properties';
+import { type Row, rawCell, type Table } from '@/lib/intake/table';
+import { oneRowAKey } from '@/lib/intake/keyed-rows';
+import type { Section, ShapeDimensions } from '@/lib/model/frame';
+import * as say from '@/lib/problems/wording';
+import { findDesignation } from '@/lib/sections/find-designation';
+import { sectionFromShape, shapeWords } from '@/lib/sections/section-from-shape';
+
+/** A section as found for a member: null where its row is wrong. */
+export interface FoundSection {
+  readonly section: Section | null;
+  /** Row of the Sections sheet; null = straight from the library. */
+  readonly row: Row | null;
+  /** What was told of the row: frames that use it are touched. */
+  readonly entries: readonly Entry[];
+}
+
+export const dimensionNames = ['h', 'b', 'tw', 'tf', 'r', 't', 'd'] as const;
+const propertyNames = ['A', 'I', 'W', 'W top', 'W bottom', 'depth', 'Av', 'Wpl', 'I minor', 'W minor', 'Wpl minor', 'It', 'Iw'];
+
+/** The batch's sections: those of the Sections sheet, else library designations. */
+export class Sections {
+  private readonly bySheet = new Map<string, FoundSection>();
+  private readonly fromLibrary = new Map<string, FoundSection | { suggestion: string | null }>();
+
+  constructor(table: Table | undefined, reader: Reader, problems: ProblemList) {
+    const ided = (row: Row): { id: string; key: string } | undefined => {
+      if (!reader.keeps(row, forNobody)) return undefined;
+      const id = reader.needId(row, 'section', forNobody);
+      return id === undefined ? undefined : { id, key: idKey(id) };
+    };
+    const twins: Entry[] = [];
+    const twinned = new Set<string>();
+    const rows = (table?.rows ?? []).map((row) => ({ row, level: 0 }));
+    const kept = oneRowAKey(rows, ided, (row, first, same) => {
+      const told = problems.record(() => reader.tell(row, 'section', same
+        ? { code: 'repeated-row', message: say.repeatedRow(first.raw.row) }
+        : { code: 'conflicting-row', message: say.conflictingRow('section', first.raw.row) }, forNobody)); // prettier-ignore
+      if (same) return;
+      twins.push(...told.entries);
+      twinned.add(idKey(reader.id(row, 'section', forNobody) ?? ''));
+    });
+    for (const { row, id, key } of kept) {
+      const { value, entries } = problems.record(() => readSection(row, id, reader));
+      const wrong = twinned.has(key) ? twins.filter((entry) => idKey(entry.place.found ?? '') === key) : [];
+      this.bySheet.set(key, { section: value ?? null, row, entries: [...entries, ...wrong] });
+    }
+  }
+
+  /** Finds a section by its name, or the nearest name for a hint. */
+  find(name: string): FoundSection | { readonly suggestion: string | null } {
+    const own = this.bySheet.get(idKey(name));
+    if (own) return own;
+    let found = this.fromLibrary.get(name);
+    if (!found) {
+      const designation = findDesignation(name);
+      found = 'section' in designation ? { section: designation.section, row: null, entries: [] } : designation;
+      this.fromLibrary.set(name, found);
+    }
+    return found;
+  }
+
+  /** Material that the Sections sheet names for this section. */
+  rows(): Iterable<FoundSection> {
+    return this.bySheet.values();
+  }
+}
+
+function readSection(row: Row, name: string, reader: Reader): Section | undefined {
+  if (reader.faulty(row, forNobody)) return undefined;
+  const designation = reader.id(row, 'designation', forNobody);
+  const shape = reader.word(row, 'shape', shapeWords, forNobody);
+  const typed = propertyNames.filter((each) => rawCell(row, each) !== null);
+  const dimensions = dimensionNames.filter((each) => rawCell(row, each) !== null);
+  if (designation === undefined || shape === undefined) return undefined;
+  const ways = [designation !== null && 'designation', shape !== null && 'shape', typed.length > 0 && 'properties'].filter((w) => w !== false); // prettier-ignore
+  if (ways.length > 1) {
+    const at = shape !== null && designation !== null ? 'shape' : (typed[0] ?? 'shape');
+    reader.tell(row, at, { code: 'conflicting-row', message: say.sectionTwoWays(ways) }, forNobody);
+    return undefined;
+  }
+  if (shape !== null) return fromShape(row, name, shape, reader);
+  if (typed.length > 0) return readProperties(row, name, reader);
+  if (designation === null && dimensions.length > 0) {
+    reader.tell(row, 'shape', { code: 'unknown-word', message: say.shapeMissing(shapeWords) }, forNobody);
+    return undefined;
+  }
+  const found = findDesignation(designation ?? name);
+  if ('section' in found) return { ...found.section, name };
+  const at = designation === null ? 'section' : 'designation';
+  reader.tell(
+    row,
+    at,
+    { code: 'unknown-section', message: say.unknownDesignation(designation ?? name, found.suggestion) },
+    forNobody,
+  );
+  return undefined;
+}
+
+function fromShape(row: Row, name: string, shape: (typeof shapeWords)[number], reader: Reader): Section | undefined {
+  const dims: Partial<Record<keyof ShapeDimensions, number>> = {};
+  let sound = true;
+  for (const each of dimensionNames) {
+    const value = reader.number(row, each, forNobody);
+    if (value === undefined) sound = false;
+    else if (value !== null && (each === 'r' ? value < 0 : value <= 0)) {
+      reader.tell(row, each, { code: 'not-positive', message: say.notPositive(each, rawCell(row, each)?.text ?? '') }, forNobody);
+      sound = false;
+    } else if (value !== null) dims[each] = value;
+  }
+  if (!sound) return undefined;
+  const made = sectionFromShape(shape, dims);
+  if ('trouble' in made) {
+    const { missing, impossible } = made.trouble;
+    for (const each of missing)
+      reader.tell(row, each, { code: 'not-a-number', message: say.dimensionMissing(shape, each) }, forNobody);
+    if (impossible) reader.tell(row, impossible.dimension, { code: 'out-of-range', message: say.impossibleShape(impossible.why) }, forNobody); // prettier-ignore
+    return undefined;
+  }
+  const { h, b } = dims;
+  if (shape === 'I' && h && b && (h / b < 0.5 || h / b > 6)) {
+    reader.tell(row, 'h', { code: 'suspect-unit', message: say.suspectProportion(h / b) }, forNobody);
+  }
+  return { ...made.section, name, designation: null };
+}

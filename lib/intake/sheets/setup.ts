@@ -1,0 +1,154 @@
+import { nearest } from '@/lib/intake/distance';
+import { idText } from '@/lib/intake/ids';
+import type { Place, ProblemList } from '@/lib/intake/problem-list';
+import { forNobody, type Reader } from '@/lib/intake/reader';
+import { placeOf, type Row, type Table } from '@/lib/intake/table';
+import { readYesNo, wordKey } from '@/lib/intake/words';
+import { cellAddress } from '@/lib/intake/files/cell-address';
+import {
+  defaultSettings,
+  type SettingName,
+  type SettingOrigin,
+  type SettingOrigins,
+  type Settings,
+  settingWords,
+} from '@/lib/model/settings';
+import * as say from '@/lib/problems/wording';
+
+export interface Setup {
+  readonly settings: Settings;
+  readonly origins: SettingOrigins;
+  readonly places: ReadonlyMap<SettingName, Place>;
+}
+
+const names = Object.keys(settingWords) as SettingName[];
+const byKey = new Map(names.map((name) => [wordKey(settingWords[name]), name]));
+
+type Values = { -readonly [K in SettingName]?: Settings[K] };
+
+/** Reads the Setup sheet. What it is silent about is the office's, else the default; it wins over the office. */
+export function readSetup(table: Table | undefined, office: Partial<Settings>, reader: Reader, problems: ProblemList): Setup {
+  const given = new Map<SettingName, Row>();
+  const values: Values = {};
+  for (const row of table?.rows ?? []) {
+    const typed = reader.text(row, 'setting', forNobody);
+    if (typed === undefined) continue;
+    if (typed === null) {
+      problems.add(placeOf(row, 'setting'), { code: 'missing-id', message: say.missingId('setting'), stopsAll: true }, null);
+      continue;
+    }
+    const name = byKey.get(wordKey(typed));
+    if (!name) {
+      const near = nearest(wordKey(typed), names.map((each) => [wordKey(settingWords[each]), settingWords[each]] as const)); // prettier-ignore
+      problems.add(placeOf(row, 'setting'), { code: 'near-miss-column', message: say.unknownSetting(typed, near) }, null);
+      continue;
+    }
+    const before = given.get(name);
+    if (before) {
+      const same = valueText(row) === valueText(before);
+      const fault = same
+        ? ({ code: 'repeated-row', message: say.repeatedRow(before.raw.row) } as const)
+        : ({ code: 'conflicting-row', message: say.settingTwice(settingWords[name], before.raw.row), stopsAll: true } as const);
+      problems.add(placeOf(row, 'value'), fault, null);
+      continue;
+    }
+    if (readValue(name, row, values, reader, problems)) given.set(name, row);
+  }
+  const places = new Map([...given].map(([name, row]) => [name, placeOf(row, 'value')] as const));
+  const origins = Object.fromEntries(names.map((name) => [name, originOf(name, given.get(name), office)])) as SettingOrigins;
+  const settings: Settings = { ...defaultSettings, ...definedOnly(office), ...values };
+  return { settings, origins, places };
+}
+
+const valueText = (row: Row): string =>
+  idText(row.raw.cells[row.part.byName.get('value')?.index ?? -1]?.text ?? '').toLowerCase();
+
+function definedOnly(office: Partial<Settings>): Partial<Settings> {
+  return Object.fromEntries(Object.entries(office).filter(([, value]) => value !== undefined && value !== null));
+}
+
+function originOf(name: SettingName, row: Row | undefined, office: Partial<Settings>): SettingOrigin {
+  if (row) {
+    const column = row.part.byName.get('value')?.index ?? 0;
+    return { source: 'sheet', cell: `${row.part.raw.name} ${cellAddress(row.raw.row, column)}` };
+  }
+  return { source: office[name] === undefined || office[name] === null ? 'default' : 'office', cell: null };
+}
+
+/** Reads one value; false where it is blank (silent) or wrong (told). */
+function readValue(name: SettingName, row: Row, values: Values, reader: Reader, problems: ProblemList): boolean {
+  const tell = (code: 'unknown-word' | 'not-supported' | 'not-positive' | 'out-of-range', message: string): false => {
+    problems.add(placeOf(row, 'value'), { code, message, stopsAll: true }, null);
+    return false;
+  };
+  const recorded = problems.record(() => reader.text(row, 'value', forNobody));
+  if (recorded.value === undefined) {
+    // an error value here leaves a setting unknown: nothing may run on a guess
+    problems.stopEverything(recorded.entries);
+    return false;
+  }
+  const text = recorded.value;
+  if (text === null) return false;
+  const word = <T extends string>(words: readonly T[]): T | null => {
+    const found = words.find((each) => wordKey(each) === wordKey(text)) ?? null;
+    if (!found) tell('unknown-word', say.unknownWord(settingWords[name], text, words));
+    return found;
+  };
+  const off = <T extends string>(words: readonly T[], allowed: T): T | null => {
+    const found = word(words);
+    if (found === null || found === allowed) return found;
+    tell('not-supported', say.settingNotSupported(settingWords[name], found));
+    return null;
+  };
+  const number = (): number | null => {
+    const { value, entries } = problems.record(() => reader.number(row, 'value', forNobody));
+    if (value !== undefined && value !== null) return value;
+    problems.stopEverything(entries);
+    return null;
+  };
+  const set = <K extends SettingName>(key: K, value: Settings[K] | null): boolean => {
+    if (value === null) return false;
+    values[key] = value;
+    return true;
+  };
+  switch (name) {
+    case 'title':
+    case 'material':
+      return set(name, text);
+    case 'units':
+      return set(name, word(['metric', 'us']));
+    case 'analysis':
+      return set(name, off(['first order', 'second order'], 'first order'));
+    case 'strengthCheck':
+      return set(name, off(['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1'], 'elastic stress'));
+    case 'stability':
+      return set(name, word(['screened', 'by others']));
+    case 'imperfections':
+      return set(name, off(['none', 'EN 1993-1-1', 'AISC 360'], 'none'));
+    case 'stiffnessReduction':
+      return set(name, off(['none', 'AISC 360'], 'none'));
+    case 'shearDeformation': {
+      const answer = readYesNo(text);
+      if (answer === null) return tell('unknown-word', say.unknownWord(settingWords[name], text, ['no', 'yes']));
+      return answer ? tell('not-supported', say.settingNotSupported(settingWords[name], 'yes')) : set(name, false);
+    }
+    case 'combinationSet':
+      return wordKey(text) === 'none' ? false : tell('not-supported', say.settingNotSupported(settingWords[name], text));
+    case 'stressFactor':
+    case 'nearLimit': {
+      const value = number();
+      if (value === null) return false;
+      if (value <= 0) return tell('not-positive', say.notPositive(settingWords[name], text));
+      if (value > 1) return tell('out-of-range', say.atMostOne(settingWords[name], text));
+      return set(name, value);
+    }
+    case 'deflectionRatio':
+    case 'swayRatio': {
+      if (wordKey(text) === 'none') return set(name, 'none');
+      const n = /^\s*[lh]\s*\/\s*(\d+(\.\d+)?)\s*$/i.exec(text)?.[1];
+      const value = n === undefined ? number() : Number(n);
+      if (value === null) return false;
+      return value > 0 ? set(name, value) : tell('not-positive', say.notPositive(settingWords[name], text));
+    }
+  }
+}

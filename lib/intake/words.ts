@@ -1,0 +1,37 @@
+/** How names and fixed words are matched: without regard to case, blanks, `_` and `-` (sheets §2). */
+
+const gaps = /[\s\u00a0\u2007\u2009\u202f_\-‐‑–—]+/g;
+const cache = new Map<string, string>();
+
+/** The form in which headings, settings and fixed words are compared. */
+export function wordKey(text: string): string {
+  const known = cache.get(text);
+  if (known !== undefined) return known;
+  const key = text.normalize('NFC').toLowerCase().replace(gaps, '');
+  if (cache.size > 5000) cache.clear();
+  cache.set(text, key);
+  return key;
+}
+
+/** A sheet's name: as a word, and without a plural s. */
+export function sheetKey(text: string): string {
+  const key = wordKey(text);
+  if (key === 'families') return 'family';
+  return key.length > 3 && key.endsWith('s') ? key.slice(0, -1) : key;
+}
+
+const yes = new Set(['yes', 'y', 'true', '1', 'x']);
+const no = new Set(['no', 'n', 'false', '0', '']);
+
+/** yes, no, or null where it is neither. */
+export function readYesNo(text: string): boolean | null {
+  const key = wordKey(text);
+  if (yes.has(key)) return true;
+  return no.has(key) ? false : null;
+}
+
+/** The one of `words` that the text means, or null. */
+export function readWord<T extends string>(text: string, words: readonly T[]): T | null {
+  const key = wordKey(text);
+  return words.find((word) => wordKey(word) === key) ?? null;
+}
