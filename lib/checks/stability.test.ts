@@ -26,9 +26,22 @@ describe('critical loads', () => {
     close(criticalMoment(200e9, 80e9, 1e-5, 0, 1e-6, 4), ((Math.PI ** 2 * 200e9) / 16) * Math.sqrt(1e-5 * 1e-6));
   });
 
-  it('M_cr of IPE 330 over 5.70 m in uniform moment is about 103 kN·m (from memory: worked by hand from the formula)', () => {
-    // Iz = 788.1 cm⁴, It = 28.15 cm⁴, Iw = 199100 cm⁶; π²EIz/L² = 502.7 kN, Iw/Iz = 0.02526 m², GIt/P = 0.04523 m²
-    close(criticalMoment(210e9, 80.77e9, 788.1e-8, 28.15e-8, 199100e-12, 5.7), 502.7e3 * Math.sqrt(0.02526 + 0.04523), 2e-3);
+  // CTICM and SCI, Steel Buildings in Europe, Multi-Storey Steel Buildings Part 4 (2010), Worked Example A.5, sheets 2–3: HE 300 B
+  it.each([
+    [25170e-8, 8, 8151.2e3],
+    [8560e-8, 5.6, 5657.4e3],
+  ])('N_cr of HE 300 B, I = %d m⁴ over %d m, is %d N as published', (I, L, published) =>
+    close(eulerLoad(210e9, I, L), published, 1e-4),
+  );
+
+  it('M_cr of an IPE 500 column over 3.8 m, with C1 = 1.77, gives M_b,Rd = 640 kN·m as published', () => {
+    // CTICM and SCI, Steel Buildings in Europe, Single-Storey Steel Buildings Part 4 (2010), Appendix D sheets 20–21;
+    // λ_LT = √(Wpl fy/M_cr), rolled sections: χ_LT with α = 0.49 (curve c), λ0 = 0.4, β = 0.75, f left out
+    const Mcr = 1.77 * criticalMoment(210e9, 81e9, 2142e-8, 89.3e-8, 1249e-9, 3.8);
+    const [plastic, slenderness] = [2194e-6 * 355e6, Math.sqrt((2194e-6 * 355e6) / Mcr)];
+    const phi = 0.5 * (1 + 0.49 * (slenderness - 0.4) + 0.75 * slenderness ** 2);
+    const chi = 1 / (phi + Math.sqrt(phi ** 2 - 0.75 * slenderness ** 2));
+    close(chi * plastic, 640e3, 0.01);
   });
 });
 
