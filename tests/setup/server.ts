@@ -26,7 +26,7 @@ export interface TestServer {
 const root = fileURLToPath(new URL('../..', import.meta.url));
 
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
-  if (process.env.TEST_SERVER_REBUILD === '1' || buildIsStale()) build();
+  if (process.env.TEST_SERVER_AS_BUILT !== '1' && buildIsStale()) build();
   const dataDir = mkdtempSync(join(tmpdir(), 'tallyframe-server-'));
   const people = await fillOffices(dataDir);
   const port = await freePort();

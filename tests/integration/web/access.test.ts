@@ -1,0 +1,176 @@
+/**
+ * Every route and page × method × role × own and other office × signed out. The list of addresses comes from the
+ * files under app/, so that a route without its line in the table fails the test.
+ */
+import { readdirSync, readFileSync } from 'node:fs';
+import { beforeAll, describe, expect, inject, it } from 'vitest';
+import { personRoles, type PersonRole } from '@/lib/access/may';
+import { errorShape } from '@/lib/api/error';
+import { bring, run, type Brought } from '../../setup/bring';
+import { officeKeys, type OfficeKey } from '../../setup/people';
+import { signedIn, Visitor } from '../../setup/visitor';
+
+const { url, people } = inject('server');
+
+const staff: readonly PersonRole[] = ['lead', 'analyst', 'checker'];
+const makers: readonly PersonRole[] = ['lead', 'analyst'];
+const lead: readonly PersonRole[] = ['lead'];
+const everybody = 'everybody';
+
+type Who = readonly PersonRole[] | typeof everybody;
+type Method = 'GET' | 'POST' | 'PUT' | 'DELETE';
+
+/** Who each address is for. `things` = its address names something of an office. */
+interface Line {
+  readonly who: Partial<Record<Method, Who>>;
+  readonly query?: string;
+  readonly body?: unknown;
+}
+
+const revision = 'api/batches/[batch]/revisions/[revision]';
+const page = '(desk)/batches/[batch]/[revision]';
+const reads = (query = ''): Line => ({ who: { GET: staff }, query });
+
+const table: Readonly<Record<string, Line>> = {
+  'api/ping': { who: { GET: everybody } },
+  'api/auth/[...nextauth]': { who: { GET: everybody, POST: everybody } },
+  'api/template': { who: { GET: staff } },
+  'api/people': { who: { GET: lead, POST: lead }, body: {} },
+  'api/projects': { who: { GET: staff, POST: makers }, body: {} },
+  'api/projects/[project]': reads(),
+  'api/projects/[project]/people': { who: { GET: lead, PUT: lead }, body: {} },
+  'api/projects/[project]/batches': { who: { GET: staff, POST: makers } },
+  'api/batches/[batch]': reads(),
+  'api/batches/[batch]/revisions': { who: { GET: staff, POST: makers } },
+  [revision]: reads(),
+  [`${revision}/cell`]: reads('?sheet=Members&cell=A1'),
+  [`${revision}/csv`]: reads(),
+  [`${revision}/frames/[number]`]: reads(),
+  [`${revision}/json`]: reads(),
+  [`${revision}/marked-copy`]: reads(),
+  [`${revision}/progress`]: reads(),
+  [`${revision}/run`]: { who: { POST: makers, DELETE: makers } },
+  [`${revision}/summary`]: reads(),
+  [`${revision}/tables/[table]`]: reads(),
+  [`${revision}/tables/[table]/export`]: reads('?format=csv'),
+  [`${revision}/tables/[table]/facets`]: reads(),
+  [`${revision}/workbook`]: reads(),
+  '': { who: { GET: everybody } },
+  'sign-in': { who: { GET: everybody } },
+  issued: { who: { GET: ['client'] } },
+  '(desk)/people': { who: { GET: lead } },
+  '(desk)/projects': reads(),
+  '(desk)/projects/[project]': reads(),
+  '(desk)/projects/[project]/bring': { who: { GET: makers } },
+  [page]: reads(),
+  [`${page}/bring`]: { who: { GET: makers } },
+  [`${page}/checks`]: reads(),
+  [`${page}/frames`]: reads(),
+  [`${page}/frames/[number]`]: reads(),
+  [`${page}/glance`]: reads(),
+  [`${page}/members`]: reads(),
+  [`${page}/movements`]: reads(),
+  [`${page}/problems`]: reads(),
+  [`${page}/reactions`]: reads(),
+  [`${page}/read`]: reads(),
+  [`${page}/run`]: reads(),
+};
+
+const files = readdirSync('app', { recursive: true, encoding: 'utf8' })
+  .filter((file) => /(^|\/)(route|page)\.tsx?$/.test(file))
+  .map((file) => `app/${file}`);
+const addresses = files.map((file) => ({ file, address: file.replace(/^app\//, '').replace(/\/?(route|page)\.tsx?$/, '') }));
+const isPage = (file: string): boolean => file.endsWith('page.tsx');
+
+/** The methods that a route's file offers; a page is read. */
+function methodsOf(file: string): Method[] {
+  if (isPage(file)) return ['GET'];
+  const text = readFileSync(file, 'utf8');
+  return (['GET', 'POST', 'PUT', 'DELETE'] as const).filter((method) =>
+    new RegExp(`export (const|function|async function) ${method}\\b`).test(text),
+  );
+}
+
+describe('access', () => {
+  const visitors = new Map<string, Visitor>();
+  const brought = new Map<OfficeKey, Brought>();
+
+  beforeAll(async () => {
+    for (const office of officeKeys) {
+      for (const role of personRoles) visitors.set(`${office} ${role}`, await signedIn(url, office, role));
+      const analyst = visitors.get(`${office} analyst`)!;
+      const made = await bring(analyst, `/api/projects/${people[office].project}/batches`, 'samples/pipe-rack-12.xlsx');
+      await run(analyst, made);
+      brought.set(office, made);
+    }
+  });
+
+  /** The address as it names the things of an office. */
+  function fill(address: string, office: OfficeKey): string {
+    const { batch, revision: letter } = brought.get(office)!;
+    const filled = address
+      .replace('(desk)/', '')
+      .replace('[project]', String(people[office].project))
+      .replace('[batch]', String(batch))
+      .replace('[revision]', letter)
+      .replace('[number]', '1')
+      .replace('[table]', 'members')
+      .replace('[...nextauth]', 'session');
+    return `/${filled}${table[address]?.query ?? ''}`;
+  }
+
+  async function ask(visitor: Visitor, file: string, address: string, method: Method, office: OfficeKey): Promise<Response> {
+    const body = method === 'GET' || method === 'DELETE' ? undefined : JSON.stringify(table[address]?.body ?? {});
+    const response = await visitor.fetch(fill(address, office), { method, body });
+    if (!isPage(file) && response.status >= 400 && !address.startsWith('api/auth')) {
+      expect(errorShape.strict().safeParse(await response.clone().json()).success, `${method} ${address}: shape`).toBe(true);
+    }
+    return response;
+  }
+
+  it('has a line for every route and page, and no line for one that is gone', () => {
+    expect(addresses.map(({ address }) => address).sort()).toEqual(Object.keys(table).sort());
+    for (const { file, address } of addresses) {
+      expect(methodsOf(file).sort(), address).toEqual(Object.keys(table[address]!.who).sort());
+    }
+  });
+
+  for (const { file, address } of addresses) {
+    for (const method of methodsOf(file)) {
+      const who = table[address]?.who[method];
+      it(`${method} /${address} is for ${typeof who === 'string' ? who : (who ?? []).join(', ')}`, async () => {
+        expect(who).toBeDefined();
+        const nobody = await ask(new Visitor(url), file, address, method, 'north');
+        if (who === everybody) expect(nobody.status).toBeLessThan(500);
+        else if (isPage(file)) {
+          expect(nobody.status).toBe(307);
+          expect(nobody.headers.get('location')).toMatch(/^\/sign-in\?next=/);
+        } else expect(nobody.status, 'signed out').toBe(401);
+        if (who === everybody || who === undefined) return;
+        for (const role of personRoles) {
+          const visitor = visitors.get(`north ${role}`)!;
+          const own = await ask(visitor, file, address, method, 'north');
+          const allowed = who.includes(role);
+          if (allowed) expect([own.status, role].join(' '), 'own office').not.toMatch(/^(401|403|404|5\d\d)/);
+          else expect([own.status, role], 'own office').toEqual([isPage(file) || role === 'client' ? 404 : 403, role]);
+          if (allowed && isPage(file) && own.status === 307) expect(own.headers.get('location')).not.toMatch(/sign-in/);
+          await own.body?.cancel();
+          if (!/\[(project|batch)\]/.test(address)) continue;
+          const other = await ask(visitor, file, address, method, 'south');
+          const text = await other.text();
+          expect([other.status, role], 'other office').toEqual([allowed || isPage(file) || role === 'client' ? 404 : 403, role]);
+          expect(text, 'other office').not.toMatch(/Sheds south|south office|pipe-rack/);
+        }
+      });
+    }
+  }
+
+  it('never shows one office a project or a person of the other in a list', async () => {
+    const north = visitors.get('north lead')!;
+    for (const path of ['/api/projects', '/api/people', '/projects', '/people']) {
+      const text = await (await north.fetch(path)).text();
+      expect(text).toMatch(/north/);
+      expect(text, path).not.toMatch(/south/);
+    }
+  });
+});
