@@ -32,7 +32,10 @@ export async function readCsv(name: string, source: Source, meter: Meter): Promi
     meter.keep(80 + text.length);
     marks.see(text);
     const made: RawCell = { kind: 'text', text: detached(text) };
-    if (known.size < cachedTexts && text.length < 64) known.set(made.text, made);
+    if (text.length < 64) {
+      if (known.size >= cachedTexts) known.clear();
+      known.set(made.text, made);
+    }
     return made;
   };
   const take = (record: readonly string[]): void => {
@@ -59,6 +62,9 @@ export async function readCsv(name: string, source: Source, meter: Meter): Promi
   return { decimalMark: shape.delimiter === ',' ? '.' : marks.most(), sheets: [{ name, rows }] };
 }
 
+/** Longest record: past it a quotation mark was left open, and looking for its end again and again would take for ever. */
+const longestRecord = 2_000_000;
+
 function eachRecord(
   name: string,
   source: Source,
@@ -67,43 +73,48 @@ function eachRecord(
   take: (record: readonly string[]) => void,
 ): Promise<void> {
   return new Promise((resolve, reject) => {
-    let failed: unknown = null;
     let row = 0;
-    const text = Readable.from(counted(decodedText(source, shape.encoding), meter));
+    let failed = false;
+    const unfinished = { characters: 0 };
+    const text = Readable.from(watched(name, decodedText(source, shape.encoding), meter, unfinished));
     const stop = (reason: unknown): void => {
-      failed ??= reason;
+      failed = true;
       text.destroy();
-      reject(failed instanceof Error ? failed : unreadable(`${name} could not be read.`));
+      reject(reason instanceof Error ? reason : unreadable(`${name} could not be read.`));
     };
-    text.on('error', stop);
     Papa.parse<string[]>(text, {
       delimiter: shape.delimiter,
       newline: '\n',
-      step(result, parser) {
-        row += 1;
-        if (failed !== null) return;
+      chunk({ data, errors }, parser) {
         try {
-          if (result.errors.some((e) => e.type === 'Quotes')) throw openQuote(name, row);
-          take(result.data);
+          const quote = errors.find((e) => e.type === 'Quotes');
+          if (quote) throw openQuote(name, row + (quote.row ?? 0) + 1);
+          row += data.length;
+          if (data.length > 0) unfinished.characters = 0;
+          data.forEach(take);
         } catch (error) {
-          parser.abort();
           stop(error);
+          parser.abort(); // ends by calling complete
         }
       },
-      complete: () => (failed === null ? resolve() : undefined),
+      complete: () => (failed ? undefined : resolve()),
       error: stop,
     });
   });
 }
 
-/** Asks now and then whether to go on, and refuses a text that runs on without a line end: one record cannot be that long. */
-async function* counted(pieces: AsyncIterable<string>, meter: Meter): AsyncGenerator<string> {
-  let sinceLineEnd = 0;
+async function* watched(
+  name: string,
+  pieces: AsyncIterable<string>,
+  meter: Meter,
+  unfinished: { characters: number },
+): AsyncGenerator<string> {
   for await (const piece of pieces) {
     meter.chunk(0);
-    sinceLineEnd = piece.includes('\n') ? 0 : sinceLineEnd + piece.length;
-    if (sinceLineEnd > limits.columns * limits.cellCharacters)
-      throw unreadable('A row runs on without an end. Save the file again.');
+    unfinished.characters += piece.length;
+    if (unfinished.characters > longestRecord) {
+      throw unreadable(`${name}: a row runs on for millions of characters. Is a quotation mark left open?`, name);
+    }
     yield piece;
   }
 }

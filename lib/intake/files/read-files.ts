@@ -71,7 +71,7 @@ async function readZipOfFiles(
   outcomes: FileOutcome[],
   problems: Problem[],
 ): Promise<void> {
-  const files = entries.filter((entry) => !/(^|\/)(__MACOSX\/|\.|~\$|thumbs\.db$)/i.test(entry.name));
+  const files = entries.filter((entry) => !/(^|\/)__MACOSX\/|(^|\/)(\.|~\$|thumbs\.db$|desktop\.ini$)[^/]*$/i.test(entry.name));
   let found = 0;
   for (const entry of files.sort((a, b) => byName(baseName(a.name), baseName(b.name)) || byName(a.name, b.name))) {
     const name = baseName(entry.name);

@@ -31,6 +31,7 @@ export async function readXlsx(parts: Parts, meter: Meter): Promise<FileSheets> 
     date1904: workbook.date1904,
     textCells: [],
     numberCells: new Map(),
+    inlineCells: new Map(),
     marks: new DecimalMarks(),
   };
   const sheets: { name: string; rows: readonly RawRow[] }[] = [];

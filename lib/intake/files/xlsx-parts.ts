@@ -54,13 +54,17 @@ export async function readWorkbook(parts: Parts, meter: Meter): Promise<Workbook
   });
   const sheets = listed.flatMap(({ name, id }) => {
     const relation = relations.get(id);
-    return relation?.type === 'worksheet' ? [{ name, path: relation.target }] : [];
+    if (!relation) throw unreadable(`Sheet ${name} is listed in the workbook but not in the file. Save it again as .xlsx.`);
+    return relation.type === 'worksheet' ? [{ name, path: relation.target }] : [];
   });
   const missing = sheets.find((s) => !parts.has(s.path));
   if (missing) throw unreadable(`Sheet ${missing.name} is listed in the workbook but not in the file. Save it again as .xlsx.`);
+  if (sheets.length === 0) throw unreadable('There is no sheet with cells in the workbook.');
   const ofType = (type: string): string | null => {
     const target = [...relations.values()].find((r) => r.type === type)?.target;
-    return target !== undefined && parts.has(target) ? target : null;
+    if (target !== undefined && !parts.has(target))
+      throw unreadable('A part of the workbook is missing. Save it again as .xlsx.');
+    return target ?? null;
   };
   return { path, sheets, date1904, sharedStrings: ofType('sharedstrings'), styles: ofType('styles') };
 }

@@ -18,10 +18,12 @@ export interface WorkbookValues {
   /** Cells made once for each shared string and for repeated numbers: most cells of a batch repeat. */
   readonly textCells: (RawCell | null | undefined)[];
   readonly numberCells: Map<number, RawCell>;
+  readonly inlineCells: Map<string, RawCell>;
   readonly marks: DecimalMarks;
 }
 
-const cachedNumbers = 100_000;
+/** Cells kept to be used again; when full they are let go, since what repeats stands close together. */
+const cached = 100_000;
 
 /**
  * Reads one worksheet as it is unpacked: stored values of formulas, merged blocks filled, blank rows left out.
@@ -163,7 +165,7 @@ function cellOf(
   switch (type) {
     case 'str':
     case 'inlineStr':
-      return textCell(plainText(value), values, meter);
+      return inlineText(value, values, meter);
     case 'b':
       return value === '1' || value === 'true' ? yes : no;
     case 'e':
@@ -189,6 +191,17 @@ function sharedText(index: number, values: WorkbookValues, meter: Meter, sheet: 
   return made;
 }
 
+function inlineText(stored: string, values: WorkbookValues, meter: Meter): RawCell | null {
+  const known = values.inlineCells.get(stored);
+  if (known) return known;
+  const made = textCell(plainText(stored), values, meter);
+  if (made && stored.length < 64) {
+    if (values.inlineCells.size >= cached) values.inlineCells.clear();
+    values.inlineCells.set(detached(stored), made);
+  }
+  return made;
+}
+
 function textCell(text: string, values: WorkbookValues, meter: Meter): RawCell | null {
   if (text.trim() === '') return null;
   meter.keep(80 + text.length);
@@ -207,6 +220,7 @@ function numberCell(stored: string, code: string | null, values: WorkbookValues,
     return shown ? { kind: 'date', ...shown } : { kind: 'number', value, text: String(value) };
   }
   const made: RawCell = { kind: 'number', value, text: String(value) };
-  if (values.numberCells.size < cachedNumbers) values.numberCells.set(value, made);
+  if (values.numberCells.size >= cached) values.numberCells.clear();
+  values.numberCells.set(value, made);
   return made;
 }

@@ -1,4 +1,4 @@
-import { SaxesParser, type SaxesTagPlain } from 'saxes';
+import { SaxesParser } from 'saxes';
 import { unreadable } from '@/lib/intake/files/refusal';
 
 export interface XmlHandlers {
@@ -10,6 +10,8 @@ export interface XmlHandlers {
 
 /** Characters without a tag beginning or ending: far above any cell, far below what a process can hold. */
 const longestRun = 4_000_000;
+/** Tags within tags: a workbook needs about ten. */
+const deepest = 60;
 const broken = 'A part of the workbook is not as a spreadsheet writes it. Open it in a spreadsheet, save it again as .xlsx.';
 
 /**
@@ -17,14 +19,18 @@ const broken = 'A part of the workbook is not as a spreadsheet writes it. Open i
  * entities can be nested into gigabytes), so is what is not well-formed.
  */
 export async function parseXml(chunks: AsyncIterable<Uint8Array>, handlers: XmlHandlers): Promise<void> {
-  const parser = new SaxesParser({ position: false });
+  const parser = new SaxesParser<{ xmlns: false; position: false }>({ xmlns: false, position: false });
   let run = 0;
-  parser.on('opentag', (tag: SaxesTagPlain) => {
+  let depth = 0;
+  parser.on('opentag', (tag) => {
     run = 0;
+    depth += 1;
+    if (depth > deepest) throw unreadable(broken);
     handlers.open(local(tag.name), tag.attributes);
   });
-  parser.on('closetag', (tag: SaxesTagPlain) => {
+  parser.on('closetag', (tag) => {
     run = 0;
+    depth -= 1;
     handlers.close(local(tag.name));
   });
   if (handlers.text) parser.on('text', handlers.text.bind(handlers));

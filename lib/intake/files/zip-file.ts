@@ -1,3 +1,4 @@
+import { crc32 } from 'node:zlib';
 import { type Entry, fromBufferPromise, type ZipFile } from 'yauzl';
 import { limits } from '@/lib/intake/files/limits';
 import { type Meter, unpackedTooLarge } from '@/lib/intake/files/meter';
@@ -47,10 +48,12 @@ async function* unpack(zip: ZipFile, entry: Entry, meter: Meter): AsyncGenerator
   if (entry.isEncrypted()) throw unreadable('The file is locked with a password. Save it without one and send it again.');
   if (!entry.canDecodeFileData()) throw unreadable('The zip is packed in a way that cannot be read. Pack it as a plain zip.');
   const stream = await openStream(zip, entry);
+  let sum = 0;
   try {
     for await (const chunk of stream) {
       const piece = chunk as Uint8Array;
       meter.chunk(piece.byteLength);
+      sum = crc32(piece, sum);
       yield piece;
     }
   } catch (error) {
@@ -58,6 +61,8 @@ async function* unpack(zip: ZipFile, entry: Entry, meter: Meter): AsyncGenerator
   } finally {
     stream.destroy();
   }
+  // a number changed on its way would be read without this
+  if (sum !== entry.crc32) throw unreadable(damaged);
 }
 
 async function openStream(zip: ZipFile, entry: Entry): Promise<Awaited<ReturnType<ZipFile['openReadStreamPromise']>>> {
