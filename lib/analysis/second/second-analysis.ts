@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import { LuDecomposition, Matrix } from 'ml-matrix';
-import { equivalentLoads, pointLoads, stretchLoad } from './second-loads';
-import { memberFacts, secondModel, type SecondModel, type Stretch } from './second-model';
+import { equivalentLoads } from './second-loads';
+import { secondModel, type MemberFacts, type SecondModel } from './second-model';
 
 /** What the second analysis finds for one case, laid out as in a ResultState. */
 export interface SecondState {
@@ -13,9 +13,9 @@ export interface SecondState {
 /**
  * The second, independent analysis (engine, Certificate 3): dense, by transformation matrices, in global axes.
  *
- * It shares nothing with the first beyond the model: the frame is cut at every load point so that each stretch carries
- * handbook loads only, ends that are not rigid have a rotation of their own, and supports are held by Lagrange
- * multipliers, which are the reactions. Solved by LU with row exchanges.
+ * It shares nothing with the first beyond the model: loads by the handbook's fixed-end formulas, ends that are not rigid
+ * have a rotation of their own, and supports are held by Lagrange multipliers, which are the reactions. Solved by LU
+ * with row exchanges.
  * @returns a state for each case; null where the equations are singular
  */
 export function secondAnalysis(frame: Frame): SecondState[] | null {
@@ -23,7 +23,7 @@ export function secondAnalysis(frame: Frame): SecondState[] | null {
   const constraints = heldDirections(frame);
   const n = model.size;
   const K = Matrix.zeros(n + constraints.length, n + constraints.length);
-  for (const stretch of model.stretches) spread(K, stretch.unknowns, globalStiffness(frame, stretch));
+  for (const member of model.members) spread(K, member.unknowns, globalStiffness(member));
   for (const [a, b, k] of model.springs)
     spread(
       K,
@@ -47,6 +47,8 @@ export function secondAnalysis(frame: Frame): SecondState[] | null {
   const lu = new LuDecomposition(K);
   if (lu.isSingular()) return null;
   const solution = lu.solve(F);
+  // one step of refinement: forces are differences of products of large stiffnesses
+  solution.add(lu.solve(Matrix.sub(F, K.mmul(solution))));
   return frame.cases.map((_, c) => stateOf(model, constraints, typical, solution.getColumn(c), c));
 }
 
@@ -121,11 +123,10 @@ function turning(ex: number, ey: number): Matrix {
   return T;
 }
 
-function globalStiffness(frame: Frame, stretch: Stretch): Matrix {
-  const { EA, EI, ex, ey } = memberFacts(frame, stretch.member);
+function globalStiffness({ EA, EI, L, ex, ey }: MemberFacts): Matrix {
   const T = turning(ex, ey);
   return T.transpose()
-    .mmul(localStiffness(EA, EI, stretch.to - stretch.from))
+    .mmul(localStiffness(EA, EI, L))
     .mmul(T);
 }
 
@@ -140,22 +141,11 @@ function fillLoads(F: Matrix, model: SecondModel, constraints: readonly Held[], 
     add(3 * load.node + 1, load.Fy_N);
     add(3 * load.node + 2, load.Mz_Nm);
   }
-  for (const stretch of model.stretches) {
-    const { EA, EI, ex, ey, L } = memberFacts(frame, stretch.member);
-    const p = equivalentLoads(stretchLoad(model, stretch, loadCase), stretch.to - stretch.from, EA, EI);
-    const global = turning(ex, ey).transpose().mmul(Matrix.columnVector(p));
-    stretch.unknowns.forEach((unknown, k) => add(unknown, global.get(k, 0)));
-    for (const load of pointLoads(model, stretch.member, loadCase)) {
-      // a point load belongs to the stretch that it begins, the last one's end to the last
-      const atStart = Math.abs(load.at - stretch.from) <= 1e-9 * L;
-      const atEnd = stretch.to === L && Math.abs(load.at - L) <= 1e-9 * L;
-      if (!atStart && !atEnd) continue;
-      const o = atStart ? 0 : 3;
-      add(stretch.unknowns[o]!, load.FX);
-      add(stretch.unknowns[o + 1]!, load.FY);
-      add(stretch.unknowns[o + 2]!, load.M);
-    }
-  }
+  model.members.forEach((member, i) => {
+    const p = equivalentLoads(model, i, loadCase);
+    const global = turning(member.ex, member.ey).transpose().mmul(Matrix.columnVector(p));
+    member.unknowns.forEach((unknown, k) => add(unknown, global.get(k, 0)));
+  });
   constraints.forEach((held, i) => {
     const support = frame.supports[held.support]!;
     for (const s of frame.settlements) {
@@ -183,26 +173,12 @@ function stateOf(model: SecondModel, constraints: readonly Held[], typical: numb
     for (let k = 0; k < 3; k++) reactions[3 * i + k] = reactions[3 * i + k]! - force.get(k, 0);
   });
   const endForces = new Float64Array(6 * frame.members.length);
-  for (const stretch of model.stretches) {
-    const { EA, EI, ex, ey, L } = memberFacts(frame, stretch.member);
-    const l = stretch.to - stretch.from;
-    const u = turning(ex, ey).mmul(Matrix.columnVector(stretch.unknowns.map((unknown) => d[unknown]!)));
-    const p = equivalentLoads(stretchLoad(model, stretch, loadCase), l, EA, EI);
-    const q = Matrix.sub(localStiffness(EA, EI, l).mmul(u), Matrix.columnVector(p)).getColumn(0);
-    const o = 6 * stretch.member;
-    const beside = pointLoads(model, stretch.member, loadCase);
-    if (stretch.from === 0) {
-      const here = beside.filter((load) => load.at <= 1e-9 * L);
-      endForces[o] = -q[0]! + here.reduce((sum, load) => sum + load.Px, 0);
-      endForces[o + 1] = q[1]! - here.reduce((sum, load) => sum + load.Py, 0);
-      endForces[o + 2] = -q[2]! + here.reduce((sum, load) => sum + load.M, 0);
-    }
-    if (stretch.to === L) {
-      const here = beside.filter((load) => load.at >= L * (1 - 1e-9));
-      endForces[o + 3] = q[3]! - here.reduce((sum, load) => sum + load.Px, 0);
-      endForces[o + 4] = -q[4]! + here.reduce((sum, load) => sum + load.Py, 0);
-      endForces[o + 5] = q[5]! - here.reduce((sum, load) => sum + load.M, 0);
-    }
-  }
+  model.members.forEach((member, i) => {
+    const { EA, EI, ex, ey, L } = member;
+    const u = turning(ex, ey).mmul(Matrix.columnVector(member.unknowns.map((unknown) => d[unknown]!)));
+    const p = equivalentLoads(model, i, loadCase);
+    const q = Matrix.sub(localStiffness(EA, EI, L).mmul(u), Matrix.columnVector(p)).getColumn(0);
+    endForces.set([-q[0]!, q[1]!, -q[2]!, q[3]!, -q[4]!, q[5]!], 6 * i);
+  });
   return { displacements, reactions, endForces };
 }
