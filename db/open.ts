@@ -15,7 +15,9 @@ export interface OpenDatabase {
   readonly close: () => Promise<void>;
 }
 
-const drivers = new WeakMap<Db, RawDatabase>();
+/** The server is several bundles, each with its own copy of this module: what one opens the others must know. */
+const holder = globalThis as typeof globalThis & { tallyframeDrivers?: WeakMap<Db, RawDatabase> };
+const drivers = (holder.tallyframeDrivers ??= new WeakMap<Db, RawDatabase>());
 
 /** The driver beneath an open database, for reads whose statements are kept prepared. @throws {RangeError} for a transaction */
 export function driverOf(db: Db): RawDatabase {
