@@ -46,7 +46,7 @@ export class FrameBuilder {
     const { batch } = this;
     const draft = newDraft(batch, entry);
     readNodes(draft, this.of('Nodes'));
-    if (draft.nodeIndex.size === 0) {
+    if (draft.nodeIndex.size === 0 && !batch.problems.stopped.has(entry.id)) {
       batch.problems.add(entry.place, { code: 'unknown-node', message: say.frameWithoutNodes(entry.id) }, entry.id);
     }
     readMembers(draft, this.of('Members'));

@@ -24,6 +24,8 @@ export interface Draft {
   readonly materialRows: (Row | null)[];
   readonly supports: Support[];
   readonly supportRows: Row[];
+  /** True where a row of its nodes or members is wrong (told): what seems loose may not be. */
+  shapeTrouble: boolean;
   /** True where a row of its supports is wrong (told). */
   supportTrouble: boolean;
   readonly nodeLoads: NodeLoad[];
@@ -51,6 +53,7 @@ export function newDraft(batch: Batch, entry: FrameEntry): Draft {
     materialRows: [],
     supports: [],
     supportRows: [],
+    shapeTrouble: false,
     supportTrouble: false,
     nodeLoads: [],
     memberLoads: [],

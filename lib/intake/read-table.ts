@@ -1,6 +1,6 @@
 import type { RawCell, RawPart, RawRow, RawSheet } from '@/lib/intake/files/raw-sheet';
 import { type HeadingMeaning, type HeadingText, meaningOf, splitHeading } from '@/lib/intake/headings';
-import type { ProblemList } from '@/lib/intake/problem-list';
+import type { Entry, ProblemList } from '@/lib/intake/problem-list';
 import type { SheetDefinition } from '@/lib/intake/sheet-definitions';
 import { type Column, headingPlace, type Part, partPlace, type Row, type Table } from '@/lib/intake/table';
 import { settleUnit, unitRowOf } from '@/lib/intake/unit-row';
@@ -30,6 +30,7 @@ function readPart(raw: RawPart, definition: SheetDefinition, system: System, pro
     headingRow: null,
     columns: [],
     byName: new Map(),
+    missing: new Map(),
     faulty: [],
     typed: !/\.(csv|txt)$/i.test(raw.file),
     dataRows: [],
@@ -40,14 +41,10 @@ function readPart(raw: RawPart, definition: SheetDefinition, system: System, pro
     return empty;
   }
   const headingRow = found.row.row;
-  const missing = missingColumns(found.headings, definition);
-  for (const names of missing) {
-    const place = { ...partPlace(raw), row: headingRow, heading: names.join(' or ') };
-    problems.add(place, { code: 'missing-column', message: say.missingColumn(names, definition.name), stopsAll: true }, null);
-  }
+  const missing = tellMissing(raw, headingRow, found.headings, definition, problems);
   const after = raw.rows.filter((row) => row.row > headingRow);
   const unitRow = after[0]?.row === headingRow + 1 ? unitRowOf(after[0], found.headings, definition) : null;
-  const part = { ...empty, headingRow };
+  const part = { ...empty, headingRow, missing };
   const columns = found.headings.map((heading) => columnFor(part, heading, definition, problems));
   for (const column of columns) settleUnit(part, column, unitRow, system, problems);
   const byName = new Map<string, Column>();
@@ -57,8 +54,7 @@ function readPart(raw: RawPart, definition: SheetDefinition, system: System, pro
     if (!first) byName.set(column.known, column);
     else problems.add(headingPlace(part, column), { code: 'conflicting-row', message: say.columnTwice(column.known, first.text), stopsAll: true }, null); // prettier-ignore
   }
-  // a sheet without a column it needs is not read on: each of its rows would only say so again
-  const dataRows = missing.length > 0 ? [] : dataRowsOf(part, columns, unitRow ? after.slice(1) : after, problems);
+  const dataRows = dataRowsOf(part, columns, unitRow ? after.slice(1) : after, problems);
   return { ...part, columns, byName, faulty: columns.filter((c) => c.known === null && c.problem), dataRows };
 }
 
@@ -89,9 +85,31 @@ function headingsOf(row: RawRow, definition: SheetDefinition, system: System): H
   });
 }
 
-function missingColumns(headings: readonly Heading[], definition: SheetDefinition): (readonly string[])[] {
+/** Columns without which the sheet's rows belong to nobody: then nothing of the batch can be trusted. */
+const vital = new Set(['frame', 'setting', 'value', 'case', 'combination', 'applies to']);
+
+/** Tells the columns that a sheet needs and has not: the frames with rows there are stopped, or all. */
+function tellMissing(
+  raw: RawPart,
+  headingRow: number,
+  headings: readonly Heading[],
+  definition: SheetDefinition,
+  problems: ProblemList,
+): Map<string, Entry> {
   const known = new Set(headings.flatMap((h) => (h.meaning.kind === 'column' ? [h.meaning.known] : [])));
-  return definition.required.filter((names) => !names.some((name) => known.has(name)));
+  const missing = new Map<string, Entry>();
+  for (const names of definition.required) {
+    if (names.some((name) => known.has(name))) continue;
+    const place = { ...partPlace(raw), row: headingRow, heading: names.join(' or ') };
+    const stopsAll = names.some((name) => vital.has(name));
+    const entry = problems.add(
+      place,
+      { code: 'missing-column', message: say.missingColumn(names, definition.name), stopsAll },
+      null,
+    );
+    for (const name of names) missing.set(name, entry);
+  }
+  return missing;
 }
 
 /** Columns of Variants (parameters) and of wide Combinations (cases) are told by their own sheets. */

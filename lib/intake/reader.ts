@@ -50,8 +50,8 @@ export class Reader {
 
   /** Text as typed, trimmed; an expression's text. */
   text(row: Row, name: string, reading: Reading): Read<string> {
-    const column = row.part.byName.get(name);
-    return column ? this.textAt(row, column, reading) : null;
+    const column = this.column(row, name, reading);
+    return column ? this.textAt(row, column, reading) : column;
   }
 
   textAt(row: Row, column: Column, reading: Reading): Read<string> {
@@ -120,8 +120,9 @@ export class Reader {
 
   /** A number in SI by its column's unit. Text that is none is told. */
   number(row: Row, name: string, reading: Reading): Read<number> {
-    const column = row.part.byName.get(name);
-    if (!column || !row.raw.cells[column.index]) return null;
+    const column = this.column(row, name, reading);
+    if (!column) return column;
+    if (!row.raw.cells[column.index]) return null;
     const quantity = column.quantity === null || column.quantity === 'load' ? 'number' : column.quantity;
     return this.numberAs(row, column, quantity, column.factor, reading);
   }
@@ -205,8 +206,19 @@ export class Reader {
   }
 
   private value(row: Row, name: string, reading: Reading): RawCell | Value | null | undefined {
+    const column = this.column(row, name, reading);
+    return column ? this.valueOf(row, column, reading) : column;
+  }
+
+  /** A row's column; null where the sheet has none; undefined where it needs one (told once, at the headings). */
+  private column(row: Row, name: string, reading: Reading): Column | null | undefined {
     const column = row.part.byName.get(name);
-    return column ? this.valueOf(row, column, reading) : null;
+    if (column) return column;
+    const missing = row.part.missing.get(name);
+    if (!missing) return null;
+    if (reading.frame !== null) this.problems.touch(missing, reading.frame);
+    else this.problems.add(missing.place, { ...missing }, null);
+    return undefined;
   }
 
   private valueOf(row: Row, column: Column, reading: Reading): RawCell | Value | null | undefined {

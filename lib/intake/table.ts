@@ -29,6 +29,8 @@ export interface Part {
   readonly headingRow: number | null;
   readonly columns: readonly Column[];
   readonly byName: ReadonlyMap<string, Column>;
+  /** Columns that the sheet needs and has not: whoever has a row here is touched. */
+  readonly missing: ReadonlyMap<string, Entry>;
   /** Columns that mean nothing known, but stop whoever fills them. */
   readonly faulty: readonly Column[];
   /** True where numbers stored as text are worth a note: not in CSV, where all is text. */

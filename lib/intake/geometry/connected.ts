@@ -1,4 +1,5 @@
 import type { Draft } from '@/lib/intake/draft';
+import type { SheetName } from '@/lib/intake/sheet-definitions';
 import * as say from '@/lib/problems/wording';
 
 /** Tells a frame without supports, and parts of it that hang on nothing. */
@@ -6,19 +7,22 @@ export function tellUnheld(draft: Draft): void {
   const { problems, reader } = draft.batch;
   const { entry } = draft;
   if (draft.nodes.length === 0) return;
+  // a sheet that is missing has been told once, for all frames
+  const missing = (name: SheetName): boolean => !entry.variant && (draft.batch.tables.get(name)?.parts.length ?? 0) === 0;
   if (draft.members.length === 0 && draft.memberIndex.size === 0) {
+    if (missing('Members')) return;
     problems.add(entry.place, { code: 'not-connected', message: say.noMembers(entry.id) }, entry.id);
     return;
   }
-  // where a row of this frame is wrong, what hangs loose is likely what it should have joined
-  const whole = [...draft.memberIndex.values(), ...draft.nodeIndex.values()].every((index) => index >= 0);
   const held = new Set(draft.supports.filter((s) => [s.ux, s.uy, s.rz].some((r) => r !== 'free')).map((s) => s.node));
   if (held.size === 0) {
     // a support whose row is wrong has said so
-    if (!draft.supportTrouble) problems.add(entry.place, { code: 'no-supports', message: say.noSupports(entry.id) }, entry.id);
+    if (!draft.supportTrouble && !missing('Supports'))
+      problems.add(entry.place, { code: 'no-supports', message: say.noSupports(entry.id) }, entry.id);
     return;
   }
-  if (!whole) return;
+  // where a row of this frame is wrong, what hangs loose is likely what it should have joined
+  if (draft.shapeTrouble) return;
   const part = parts(draft);
   const heldParts = new Set([...held].map((node) => part[node]));
   const joined = new Set(draft.members.flatMap((member) => [member.start, member.end]));

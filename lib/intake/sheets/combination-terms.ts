@@ -1,7 +1,7 @@
 import { splitSign } from '@/lib/combinations/expand-signs';
 import { nearestAny } from '@/lib/intake/distance';
 import { idKey } from '@/lib/intake/ids';
-import type { ProblemList } from '@/lib/intake/problem-list';
+import type { Entry, ProblemList } from '@/lib/intake/problem-list';
 import type { Read, Reader, Reading } from '@/lib/intake/reader';
 import type { LoadCases } from '@/lib/intake/sheets/load-cases';
 import { type Column, headingPlace, type Part, partPlace, placeAt, type Row, type Table } from '@/lib/intake/table';
@@ -29,7 +29,7 @@ interface CaseColumn {
   readonly caseKey: string;
   readonly caseName: string;
   /** Not a case of the batch, over numbers: whatever it factors is lost. */
-  readonly unknown: boolean;
+  readonly unknown: Entry | null;
 }
 
 /** Reads terms from both forms of the sheet: a row a term (case, factor), or a column a case. */
@@ -75,7 +75,7 @@ export class CombinationTerms {
         const first = seen.get(found.key);
         if (first) problems.add(headingPlace(part, column), { code: 'conflicting-row', message: say.columnTwice(column.text, first.text), stopsAll: true }, null); // prettier-ignore
         seen.set(found.key, column);
-        columns.push({ column, caseKey: found.key, caseName: found.name, unknown: false });
+        columns.push({ column, caseKey: found.key, caseName: found.name, unknown: null });
       } else if (filled) {
         const near = nearestAny(idKey(column.text), this.cases.names);
         const fault = {
@@ -83,8 +83,8 @@ export class CombinationTerms {
           message: say.headingIsNoCase(column.text, near),
           stops: false,
         } as const;
-        problems.add(headingPlace(part, column), fault, null);
-        columns.push({ column, caseKey: idKey(column.text), caseName: column.text, unknown: true });
+        const unknown = problems.add(headingPlace(part, column), fault, null);
+        columns.push({ column, caseKey: idKey(column.text), caseName: column.text, unknown });
       } else
         problems.add(
           headingPlace(part, column),
@@ -136,8 +136,11 @@ export class CombinationTerms {
       const factor = this.factor(row, column, reading);
       if (factor === undefined) sound = false;
       if (!factor) continue;
-      if (unknown && factor.value !== 0) unknownCase ??= caseName;
-      else terms.push({ caseKey, caseName, factor: factor.value, signed: factor.signed, row, column });
+      if (unknown) {
+        if (factor.value === 0) continue;
+        unknownCase ??= caseName;
+        this.problems.add(unknown.place, unknown, reading.frame);
+      } else terms.push({ caseKey, caseName, factor: factor.value, signed: factor.signed, row, column });
     }
     return { terms, unknownCase, sound };
   }

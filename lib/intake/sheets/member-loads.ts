@@ -1,4 +1,5 @@
 import type { Draft } from '@/lib/intake/draft';
+import { samePoint_m } from '@/lib/intake/geometry/check-geometry';
 import { idKey } from '@/lib/intake/ids';
 import { LoadFigures } from '@/lib/intake/sheets/load-figures';
 import { caseOf, loadRows } from '@/lib/intake/sheets/node-loads';
@@ -46,7 +47,9 @@ function readMemberLoad(draft: Draft, row: Row): void {
     reader.tell(row, 'axes', { code: 'unknown-word', message: say.projectedIsDistributed() }, reading);
     sound = false;
   }
-  const L = member === undefined || member < 0 ? null : (draft.lengths[member] ?? null);
+  // a member of no length has said so: what stands beyond its end would only say it again
+  const length = member === undefined || member < 0 ? 0 : (draft.lengths[member] ?? 0);
+  const L = length < samePoint_m ? null : length;
   const figures = new LoadFigures(draft, row, kind, L);
   if (kind === 'temperature') {
     const change = readTemperature(draft, row, member);

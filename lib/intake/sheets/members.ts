@@ -20,6 +20,7 @@ export function readMembers(draft: Draft, rows: RowsByFrame): void {
   const keyOf = (row: Row): { id: string; key: string } | undefined => {
     if (!reader.keeps(row, reading)) return undefined;
     const id = reader.needId(row, 'member', reading);
+    if (id === undefined) draft.shapeTrouble = true;
     return id === undefined ? undefined : { id, key: idKey(id) };
   };
   const mine = rows.for(draft.entry).filter(({ row, level: at }) => {
@@ -37,7 +38,10 @@ export function readMembers(draft: Draft, rows: RowsByFrame): void {
   for (const { row, id, key } of kept) {
     const member = readMember(draft, row, id);
     draft.memberIndex.set(key, member ? draft.members.length : -1);
-    if (!member) continue;
+    if (!member) {
+      draft.shapeTrouble = true;
+      continue;
+    }
     const [a, b] = [draft.nodes[member.start], draft.nodes[member.end]];
     draft.members.push(member);
     draft.memberRows.push(row);

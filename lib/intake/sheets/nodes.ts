@@ -14,6 +14,7 @@ export function readNodes(draft: Draft, rows: RowsByFrame): void {
   const keyOf = (row: Row): { id: string; key: string } | undefined => {
     if (!reader.keeps(row, reading)) return undefined;
     const id = reader.needId(row, 'node', reading);
+    if (id === undefined) draft.shapeTrouble = true;
     return id === undefined ? undefined : { id, key: idKey(id) };
   };
   const mine = rows.for(draft.entry);
@@ -38,6 +39,7 @@ export function readNodes(draft: Draft, rows: RowsByFrame): void {
     const place = reader.id(row, 'place', reading);
     if (x_m === undefined || y_m === undefined) {
       draft.nodeIndex.set(key, -1);
+      draft.shapeTrouble = true;
       continue;
     }
     draft.nodeIndex.set(key, draft.nodes.length);
