@@ -38,6 +38,8 @@ describe('the content address of a frame', () => {
 
 describe('canonical JSON', () => {
   it('orders keys, leaves out what is undefined and reads −0 as 0', () => {
-    expect(canonicalJson({ b: [-0, 1.5, null], a: { d: 'x', c: undefined } })).toBe('{"a":{"d":"x"},"b":[0,1.5,null]}');
+    expect(canonicalJson({ b: [-0, 1.5, null], a: { d: '"x"', c: undefined }, '"': {} })).toBe(
+      '{"\\"":{},"a":{"d":"\\"x\\""},"b":[0,1.5,null]}',
+    );
   });
 });

@@ -20,16 +20,18 @@ export function frameHash(frame: Frame, settings: Settings): string {
 
 /** JSON with keys in order of their names: the same text for the same content, however it was put together. */
 export function canonicalJson(value: unknown): string {
+  if (typeof value === 'number') return Number.isFinite(value) ? String(value) : 'null';
   if (value === null || typeof value !== 'object') return JSON.stringify(value) ?? 'null';
   if (Array.isArray(value)) {
     let text = '[';
     for (let i = 0; i < value.length; i++) text += (i ? ',' : '') + canonicalJson(value[i]);
     return `${text}]`;
   }
-  let text = '{';
-  for (const [key, field] of Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1))) {
-    if (field === undefined) continue;
-    text += `${text.length > 1 ? ',' : ''}${JSON.stringify(key)}:${canonicalJson(field)}`;
+  const fields = value as Readonly<Record<string, unknown>>;
+  let text = '';
+  for (const key of Object.keys(fields).sort()) {
+    const field = fields[key];
+    if (field !== undefined) text += `${text === '' ? '{' : ','}${JSON.stringify(key)}:${canonicalJson(field)}`;
   }
-  return `${text}}`;
+  return text === '' ? '{}' : `${text}}`;
 }

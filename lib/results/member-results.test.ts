@@ -6,7 +6,12 @@ import { evaluateFrame } from '@/lib/results/evaluate';
 import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults } from '@/lib/results/member-results';
 
-const settings = { ...defaultSettings, deflectionRatio: 'none' as const, swayRatio: 'none' as const, stability: 'by others' as const };
+const settings = {
+  ...defaultSettings,
+  deflectionRatio: 'none' as const,
+  swayRatio: 'none' as const,
+  stability: 'by others' as const,
+};
 
 function results(change: Parameters<typeof cantileverFrame>[1]) {
   const frame = cantileverFrame('K', change);

@@ -35,6 +35,11 @@ describe('the governing check', () => {
     expect(governingIndex([check('over', 1.01), ...checks, check('over', 1.3)])).toBe(5);
   });
 
+  it('is not chosen by rounding', () => {
+    expect(governingIndex([check('near', 0.97), check('near', 0.97 * (1 + 1e-12)), check('within', 0.3)])).toBe(0);
+    expect(governingIndex([check('near', 0.97), check('near', 0.97 * (1 + 1e-6))])).toBe(1);
+  });
+
   it('is none where there is no check', () => {
     expect(governingOf([])).toBeNull();
     expect(governingOf([check('over', 1.1, 'shear stress')])).toEqual({

@@ -3,6 +3,9 @@ import type { Check, Governing, Verdict } from '@/lib/results/result';
 
 const rank: Readonly<Record<Verdict, number>> = { over: 3, 'not checked': 2, near: 1, within: 0 };
 
+/** Ratios this close are equal, so that rounding never chooses between checks. */
+const same = 1e-9;
+
 /** The worse of two verdicts: over, then not checked, then near, then within. */
 export function worse(a: Verdict, b: Verdict): Verdict {
   return rank[b] > rank[a] ? b : a;
@@ -20,7 +23,7 @@ export function governingIndex(checks: readonly Pick<Check, 'verdict' | 'ratio'>
 
 function outranks(a: Pick<Check, 'verdict' | 'ratio'>, b: Pick<Check, 'verdict' | 'ratio'>): boolean {
   if (rank[a.verdict] !== rank[b.verdict]) return rank[a.verdict] > rank[b.verdict];
-  return (a.ratio ?? -1) > (b.ratio ?? -1);
+  return (a.ratio ?? -1) > (b.ratio === null ? -1 : b.ratio * (1 + same));
 }
 
 export function governingOf(checks: readonly Check[]): Governing | null {

@@ -1,6 +1,7 @@
 /** Evaluates every frame of an intake, over threads where that pays, and offers the results to the writers. */
 import { Piscina } from 'piscina';
 import { setImmediate as breathe } from 'node:timers/promises';
+import { deserialize, serialize } from 'node:v8';
 import type { Intake } from '@/lib/intake/intake';
 import { engineVersion } from '@/lib/analysis/engine-version';
 import { problemsWithFailures, type FrameFailure } from '@/lib/results/failure-problem';
@@ -8,13 +9,13 @@ import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-so
 import type { FrameEvaluation } from '@/lib/results/result';
 import { frameHash } from '@/lib/results/frame-hash';
 import { secondSample } from '@/lib/results/second-sample';
-import { evaluateChunk, readEvaluation, type ChunkTask } from '@/worker/threads/chunk';
+import { evaluateChunk, type ChunkTask } from '@/worker/threads/chunk';
 import { Spool } from './spool';
 
 /** Frames of one chunk, and the number from which a second thread pays for its start. */
 const chunkSize = 50;
 const worthThreads = 200;
-/** Bytes of results kept at hand; beyond it they go through a temporary file. */
+/** Bytes, about, of results kept at hand; beyond it they go through a temporary file. */
 const mostInMemory = 96e6;
 
 export interface EvaluatedBatch extends ReportSource {
@@ -42,15 +43,14 @@ export async function evaluateBatch(
   const chunks = Array.from({ length: Math.ceil(runnable.length / chunkSize) }, (_, i) =>
     runnable.slice(i * chunkSize, (i + 1) * chunkSize),
   );
-  const keep = (chunk: (typeof chunks)[number], results: readonly Uint8Array[]): void => {
+  const keep = (chunk: (typeof chunks)[number], results: readonly FrameEvaluation[]): void => {
     chunk.forEach(({ index, frame }, i) => {
-      const bytes = results[i]!;
-      const evaluation = readEvaluation(bytes);
+      const evaluation = results[i]!;
       if (evaluation.failure) failures.set(index, { frame: frame.id, failure: evaluation.failure });
       if (evaluation.status === 'solved') solved++;
-      kept += bytes.byteLength;
+      kept += sizeOf(evaluation);
       if (kept <= mostInMemory) held.set(index, evaluation);
-      else spool.put(index, bytes);
+      else spool.put(index, serialize(evaluation));
     });
     done += chunk.length;
     options.onDone?.(done);
@@ -71,7 +71,7 @@ export async function evaluateBatch(
     const pool = new Piscina({ filename, name: 'evaluateChunk', minThreads: 2, maxThreads: 2 });
     const waiting = chunks.values();
     const lane = async (): Promise<void> => {
-      for (const chunk of waiting) keep(chunk, (await pool.run(task(chunk))) as Uint8Array[]);
+      for (const chunk of waiting) keep(chunk, (await pool.run(task(chunk))) as FrameEvaluation[]);
     };
     try {
       await Promise.all([lane(), lane(), lane()]);
@@ -95,11 +95,17 @@ export async function evaluateBatch(
     *frames(): Generator<ReportFrame> {
       for (const [index, { id, frame }] of intake.frames.entries()) {
         const bytes = held.has(index) ? null : spool.get(index);
-        const evaluation = bytes ? readEvaluation(bytes) : (held.get(index) ?? null);
+        const evaluation = bytes ? (deserialize(bytes) as FrameEvaluation) : (held.get(index) ?? null);
         const { title, group, count, note } = frame ?? { title: null, group: null, count: 1, note: null };
         yield { number: index + 1, id, title, group, count, note, frame, evaluation };
       }
     },
     close: () => spool.close(),
   };
+}
+
+/** Bytes that an evaluation takes, about: its figures, and some hundreds for each row of a check. */
+function sizeOf({ states, checks, allChecks }: FrameEvaluation): number {
+  const figures = states.reduce((sum, s) => sum + s.displacements.length + s.reactions.length + s.endForces.length, 0);
+  return 8 * figures + 200 * states.length + 600 * (checks.length + (allChecks?.length ?? 0));
 }

@@ -26,7 +26,7 @@ export async function summarise(source: EvaluatedBatch): Promise<string> {
       verdict,
       ratio: g?.ratio ?? null,
       where: g ? [g.check, g.subject ?? '', g.combination ?? ''].filter(Boolean).join(' · ') : '',
-      reason: evaluation ? (evaluation.notChecked[0] ?? '') : 'errors in its sheets',
+      reason: verdict !== 'not checked' ? '' : evaluation ? (evaluation.notChecked[0] ?? '') : 'errors in its sheets',
     });
     // Keep the worst only, however many frames there are; the order of the sheet on a tie.
     if (worst.length > 200) keepWorst(worst);
@@ -55,8 +55,13 @@ function keepWorst(lines: Line[]): void {
 
 function table(lines: readonly Line[], nearLimit: number): string[] {
   const cells = [
-    ['frame', 'verdict', 'ratio', 'governed by'],
-    ...lines.map((line) => [line.frame, line.verdict, formatRatio(line.ratio, nearLimit), line.where || line.reason]),
+    ['frame', 'verdict', 'ratio', 'governed by, why not checked'],
+    ...lines.map((line) => [
+      line.frame,
+      line.verdict,
+      formatRatio(line.ratio, nearLimit),
+      [line.where, line.reason].filter(Boolean).join(': '),
+    ]),
   ];
   const widths = [0, 1, 2].map((column) => Math.max(...cells.map((row) => row[column]!.length)));
   return cells.map((row) => row.map((cell, i) => (i < 3 ? cell.padEnd(widths[i]!) : cell)).join('  ').trimEnd()); // prettier-ignore

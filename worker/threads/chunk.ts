@@ -1,5 +1,4 @@
 /** A chunk of frames evaluated away from the database: what the command line hands to its threads. */
-import { deserialize, serialize } from 'node:v8';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
@@ -15,11 +14,7 @@ export interface ChunkTask {
 /** One per thread: it keeps orderings from frame to frame. */
 const analyser = createAnalyser();
 
-/** Evaluations as bytes, in the order of the task's frames; every figure keeps its bits. */
-export function evaluateChunk(task: ChunkTask): Uint8Array[] {
-  return task.frames.map(({ frame, second }) =>
-    serialize(evaluateFrame(analyser, frame, task.settings, { second, all: task.all })),
-  );
+/** Evaluations in the order of the task's frames. */
+export function evaluateChunk(task: ChunkTask): FrameEvaluation[] {
+  return task.frames.map(({ frame, second }) => evaluateFrame(analyser, frame, task.settings, { second, all: task.all }));
 }
-
-export const readEvaluation = (bytes: Uint8Array): FrameEvaluation => deserialize(bytes) as FrameEvaluation;

@@ -37,8 +37,7 @@ export function solveChunk(task: SolveTask): SolvedFrame[] {
   const { raw } = openOnce(task.file);
   const results = listWaitingFrames(raw, task.revision, task.versions).map(({ version, frame }): FrameResults => {
     const lineOf = lineMemo(frame);
-    // Every combination's checks are asked for, for the worst of each member under each; they are not stored.
-    const options = { second: task.second.has(version), all: true, lineOf };
+    const options = { second: task.second.has(version), all: false, lineOf };
     const evaluation = evaluateFrame(analyser, frame, task.settings, options);
     return { version, frame, evaluation, ...memberResults(frame, evaluation, lineOf) };
   });

@@ -12,6 +12,9 @@ import { csvOf } from '@/lib/reports/workbook/write-csv';
 import { writeXlsx } from '@/lib/reports/workbook/write-xlsx';
 import { resultsJson } from '@/lib/results/json';
 
+// The workbook writer's zip library calls Buffer() in an old form; bundled, Node would warn of it at every workbook.
+process.noDeprecation = true;
+
 /** Entries of a zip carry no clock: the same results are the same bytes. */
 const fixedTime = new Date(2020, 0, 1);
 
