@@ -24,7 +24,9 @@ export function GoverningChecks({ counts, frames }: { readonly counts: readonly 
           const all = row.over + row.near + row.within + row.notChecked;
           return (
             <tr key={row.check}>
-              <th scope="row">{row.check}</th>
+              <th scope="row" className="tbl-plain">
+                {row.check}
+              </th>
               <td className="num">{all.toLocaleString('en-GB')}</td>
               <td className={`num ${row.over > 0 ? 'text-red font-semibold' : 'text-ink2'}`}>
                 {row.over.toLocaleString('en-GB')}

@@ -17,7 +17,7 @@ interface RatioAgainstProps {
 }
 
 /** Governing ratio against a parameter of the family; the worst frame's group is joined by a thin line in order of x. */
-export function RatioAgainst({ points, parameter, unit, nearLimit, height = 250 }: RatioAgainstProps) {
+export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226 }: RatioAgainstProps) {
   const [box, width] = useWidth<HTMLDivElement>(440);
   const [read, setRead] = useState<RatioPoint | null>(null);
   const drawn = points.filter((p): p is RatioPoint & { x: number } => typeof p.x === 'number' && Number.isFinite(p.ratio));

@@ -14,7 +14,7 @@ interface SpreadProps {
 const step = 0.025;
 
 /** How governing ratios are spread: frames in steps of 0.025, against the near limit and the limit at 1.00. */
-export function Spread({ ratios, nearLimit, height = 250 }: SpreadProps) {
+export function Spread({ ratios, nearLimit, height = 226 }: SpreadProps) {
   const id = useId();
   const [box, width] = useWidth<HTMLDivElement>(400);
   const { bins, low, high, above } = spread(ratios, nearLimit);

@@ -60,7 +60,7 @@ export function planDiagram(
   const { wishes, dots } = flat ? { wishes: [], dots: [] } : extremeWishes(scene, result, force, sign * k, most);
   const must = wishes.slice(0, 1);
   const labels = placeLabels(
-    [...must, ...nodeWishes(scene), ...wishes.slice(1), ...(large ? memberWishes(scene) : [])],
+    [...must, ...(large ? nodeWishes(scene) : []), ...wishes.slice(1), ...(large ? memberWishes(scene) : [])],
     scene.taken,
   );
   return { scene, shapes, dots, labels, bar: flat ? null : scaleBar(k, force, data.units) };
@@ -111,12 +111,16 @@ function extremeWishes(
     .sort((p, q) => Math.abs(q.value) - Math.abs(p.value));
   const kept = worth.slice(0, large ? 40 : 4);
   const dots: Point[] = [];
-  const wishes = kept.map(({ value, x, axis }, i): LabelWish => {
+  const tips: { tip: Point; text: string }[] = [];
+  const wishes = kept.flatMap(({ value, x, axis }, i): LabelWish[] => {
     const tip = along(axis, x, value * k);
     const out = Math.sign(value * k) || 1;
     dots.push(tip);
-    const text = formatQuantity(Math.abs(value) < most * 1e-9 ? 0 : value, forceQuantity[force], data.units);
-    return {
+    const text = formatQuantity(value, forceQuantity[force], data.units);
+    // two members that run on straight share their tip: one figure is enough
+    if (tips.some((one) => one.text === text && Math.hypot(one.tip.x - tip.x, one.tip.y - tip.y) < 12)) return [];
+    tips.push({ tip, text });
+    const wish: LabelWish = {
       key: `extreme-${axis.index}-${i}`,
       text,
       className: Math.abs(value) > most * (1 - 1e-6) ? 'd-extreme d-governing' : 'd-extreme',
@@ -125,6 +129,7 @@ function extremeWishes(
       must: i === 0,
       from: tip,
     };
+    return [wish];
   });
   return { wishes, dots };
 }

@@ -23,6 +23,18 @@ const distinct = (values: readonly number[]): number[] => {
   return sorted.filter((value, i) => i === 0 || value - (sorted[i - 1] ?? 0) > near);
 };
 
+/** Leaves out inner stops so near to the one before, or to the end, that their figures would run together. */
+function apart(stops: readonly number[]): number[] {
+  const last = stops[stops.length - 1] ?? 0;
+  const least = (last - (stops[0] ?? 0)) * 0.07;
+  const kept: number[] = [];
+  for (const stop of stops) {
+    const before = kept[kept.length - 1];
+    if (before === undefined || stop === last || (stop - before >= least && last - stop >= least)) kept.push(stop);
+  }
+  return kept;
+}
+
 /**
  * Dimensions of a frame: bays between supports and the ends along the foot, levels of nodes up the side. More than
  * seven bays or five levels are given as a whole, since the tables hold every coordinate.
@@ -33,8 +45,9 @@ export function dimensionChains(data: DrawingData): DimensionChain[] {
   if (xs.length === 0) return [];
   const ends = (values: readonly number[]) => [Math.min(...values), Math.max(...values)];
   const feet = data.supports.flatMap((support) => data.nodes[support.node]?.x ?? []);
-  const bays = distinct([...feet, ...ends(xs)]);
-  const levels = distinct(ys);
+  // a bracket hangs on one line of support, so its own nodes are dimensioned instead
+  const bays = apart(distinct(distinct(feet).length > 1 ? [...feet, ...ends(xs)] : xs));
+  const levels = apart(distinct(ys));
   const chain = (direction: 'x' | 'y', wanted: readonly number[], most: number): DimensionChain[] => {
     const stops = wanted.length > most ? [wanted[0]!, wanted[wanted.length - 1]!] : wanted;
     if (stops.length < 2) return [];

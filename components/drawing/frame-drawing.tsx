@@ -7,6 +7,7 @@ import type { Force } from './diagram-plan';
 import type { DrawingData, DrawingResult } from './drawing-data';
 import { DrawingReadout, type ReadPoint } from './drawing-readout';
 import { nearestPoint } from './nearest-point';
+import { boundsOf } from './paper';
 import { DeflectedView, DiagramView, LoadsView, RatioView } from './views';
 
 interface FrameDrawingProps {
@@ -42,10 +43,10 @@ export function FrameDrawing({
   const [looked, setLooked] = useState<ViewName | null>(null);
   const result = data.chosen;
   const phone = width < 640;
-  const height = phone ? Math.max(250, Math.round(width * 0.72)) : Math.round(Math.min(460, Math.max(340, width * 0.4)));
+  const height = phone ? Math.max(250, Math.round(width * 0.72)) : largeHeight(data, width);
   const small = viewNames.filter((name) => name !== large);
   const smallWidth = phone ? width : Math.floor((width - 2) / 3);
-  const smallHeight = phone ? 200 : Math.round(Math.max(150, smallWidth * 0.58));
+  const smallHeight = phone ? 200 : Math.round(Math.max(150, smallWidth * 0.62));
   useKeys({
     ...Object.fromEntries(viewNames.map((name, i) => [String(i + 1), () => setLarge(name)])),
     n: () => setForce('N'),
@@ -165,6 +166,13 @@ export function FrameDrawing({
   );
 }
 
+/** As tall as the frame's own proportions ask for, between 340 and 560 px. */
+function largeHeight(data: DrawingData, width: number): number {
+  const { minX, maxX, minY, maxY } = boundsOf(data.nodes);
+  const wanted = 170 + ((maxY - minY) / Math.max(maxX - minX, 1e-6)) * (width - 260);
+  return Math.round(Math.min(560, Math.max(340, wanted)));
+}
+
 function captionOf(name: ViewName, data: DrawingData, force: Force): { title: string; note: string } {
   const result = data.chosen;
   const told = (one: DrawingResult | null) => (one ? [one.name, one.description].filter(Boolean).join(', ') : 'not solved');
@@ -177,7 +185,7 @@ function captionOf(name: ViewName, data: DrawingData, force: Force): { title: st
     };
   if (name === 'loads') return { title: 'Loads and reactions', note: told(result) };
   if (name === 'deflected') return { title: 'Deflected line', note: told(data.movement ?? result) };
-  return { title: 'Ratio', note: 'filled to the limit, all checks and combinations' };
+  return { title: 'Ratio', note: 'each member filled to its governing ratio' };
 }
 
 /** 5 mm squares, behind drawings only. */

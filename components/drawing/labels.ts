@@ -3,6 +3,7 @@ import type { Point } from './paper';
 /** Text to be placed: where it would like to stand, best first. */
 export interface LabelWish {
   readonly key: string;
+  /** Several lines are parted by a line feed; they stay together. */
   readonly text: string;
   readonly className: string;
   /** Font size, px. */
@@ -85,13 +86,15 @@ export class Taken {
 }
 
 /** Width of a text in the condensed cut, near enough for keeping texts apart. */
-export const textWidth = (text: string, size: number): number => text.length * size * 0.5 + 2;
+export const textWidth = (text: string, size: number): number =>
+  Math.max(...text.split('\n').map((row) => row.length)) * size * 0.5 + 2;
+export const textHeight = (text: string, size: number): number => size * (1.05 * text.split('\n').length - 0.1);
 
 /** Places labels in order of importance, each at its cheapest place; one that would cover text is left out unless it must stand. */
 export function placeLabels(wishes: readonly LabelWish[], taken: Taken): PlacedLabel[] {
   const placed: PlacedLabel[] = [];
   for (const wish of wishes) {
-    const [width, height] = [textWidth(wish.text, wish.size), wish.size * 0.95];
+    const [width, height] = [textWidth(wish.text, wish.size), textHeight(wish.text, wish.size)];
     let best: { at: Point; turn: number; cost: number } | null = null;
     wish.places.forEach(({ at, turn = 0 }, rank) => {
       const cost = taken.cost(at, width, height, turn) + rank * 0.9;

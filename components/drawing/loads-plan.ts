@@ -2,7 +2,8 @@ import { formatQuantity } from '@/lib/units/format';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity } from '@/lib/units/quantity';
 import type { DrawingData, DrawingLoad, DrawingResult } from './drawing-data';
-import { around, placeLabels, type LabelWish, type PlacedLabel } from './labels';
+import { around, placeLabels, textHeight, textWidth, type LabelWish, type PlacedLabel } from './labels';
+import { awayFrom } from './ground-direction';
 import { along, type MemberAxis } from './member-axis';
 import { line, path, plus, type Point } from './paper';
 import { nodeWishes, setScene, type Scene } from './scene';
@@ -34,7 +35,9 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
   const tall = large ? 30 : 17;
   const scene = setScene(data, width, height, large, (axes) => {
     const corners = blocksOf(axes, data, result, tall).flatMap((block) => corner(block));
-    return [...corners, ...heads(axes, data, result, tall * 1.25)];
+    const under = axes.flatMap((axis) => [axis.a, axis.b]);
+    const lowest = Math.max(...under.map((p) => p.y), 0);
+    return [...corners, ...heads(axes, data, result, tall * 1.25), { x: under[0]?.x ?? 0, y: lowest + (large ? 40 : 34) }];
   });
   const { axes, paper, taken, font } = scene;
   const arrows: { key: string; d: string; className: string }[] = [];
@@ -71,7 +74,18 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
       must: i < 4,
     });
   });
-  wishes.push(...reactionWishes(scene, result));
+  data.supports.forEach((support, i) => {
+    const [node, Mz] = [data.nodes[support.node], result.reactions[i]?.Mz ?? 0];
+    if (large && node && Math.abs(Mz) > 1)
+      arrows.push({
+        key: `r${i}`,
+        d: turn(paper.at(node.x, node.y), large ? 10 : 7, Mz > 0),
+        className: 'd-load d-reaction-arc',
+      });
+  });
+  const told = new Set<string>();
+  const once = wishes.filter(({ text }) => !told.has(text) && told.add(text));
+  wishes.splice(0, wishes.length, ...once, ...reactionWishes(scene, result));
   if (large) wishes.push(...nodeWishes(scene));
   return { scene, arrows, labels: placeLabels(wishes, taken), besides: besides(data, result) };
 }
@@ -98,7 +112,7 @@ function blocksOf(axes: readonly MemberAxis[], data: DrawingData, result: Drawin
     const side = sideOf(force, along(axis, axis.length / 2), middle);
     const height = (q: number) => (q === 0 ? 0 : 6 + (tall - 6) * Math.sqrt((q * sign) / most));
     const [h1, h2] = [height(Math.max(load.q1 * sign, 0) * sign), height(Math.max(load.q2 * sign, 0) * sign)];
-    const stack = `${load.member}:${side.x.toFixed(2)}:${side.y.toFixed(2)}`;
+    const stack = `${load.member}:${side.x * axis.n.x + side.y * axis.n.y >= 0}`;
     const base = stacks.get(stack) ?? 4;
     stacks.set(stack, base + Math.max(h1, h2));
     return [{ axis, load, force, side, base, h1, h2 }];
@@ -121,7 +135,8 @@ function centre(data: DrawingData, axes: readonly MemberAxis[]): Point {
 }
 
 function corner({ axis, load, side, base, h1, h2 }: Block): Point[] {
-  return [plus(along(axis, load.from), side, base + h1 + 10), plus(along(axis, load.to), side, base + h2 + 10)];
+  const text = 12 + Math.abs(side.x) * 74;
+  return [plus(along(axis, load.from), side, base + h1 + text), plus(along(axis, load.to), side, base + h2 + text)];
 }
 
 function blockPath(block: Block): { d: string; outline: Point[] } {
@@ -232,66 +247,75 @@ const words = (si: number, quantity: Quantity, data: DrawingData): string => {
   return `${formatQuantity(si, quantity, data.units)}${unit ? ` ${unit}` : ''}`;
 };
 
-/** One text for all blocks of a case with the same load: on the longest of them. */
+/**
+ * One text for each stack of loads, outermost first ("snow 5.22 kN/m on plan, dead 2.48 kN/m"), beyond the outermost; stacks
+ * that say the same say it once, on the longest member.
+ */
 function blockWishes(scene: Scene, blocks: readonly Block[]): LabelWish[] {
   const { data, font } = scene;
-  const texts = new Map<string, Block[]>();
+  const stacks = new Map<string, Block[]>();
   for (const block of blocks) {
-    const { load } = block;
-    const [q1, q2] = [Math.abs(load.q1), Math.abs(load.q2)];
-    const value =
-      Math.abs(q1 - q2) < 1e-6 * Math.max(q1, q2)
-        ? words(q1, 'lineLoad', data)
-        : `${formatQuantity(q1, 'lineLoad', data.units)} to ${words(q2, 'lineLoad', data)}`;
-    const text = `${load.case} ${value}${load.axes === 'projected' ? (load.direction === 'y' ? ' on plan' : ' on height') : ''}`;
-    texts.set(text, [...(texts.get(text) ?? []), block]);
+    const key = `${block.axis.index}:${block.side.x * block.axis.n.x + block.side.y * block.axis.n.y >= 0}`;
+    stacks.set(key, [...(stacks.get(key) ?? []), block]);
+  }
+  const texts = new Map<string, Block[]>();
+  for (const stack of stacks.values()) {
+    const outermost = stack.reduce((a, b) => (b.base > a.base ? b : a));
+    const text = [...stack]
+      .sort((a, b) => b.base - a.base)
+      .map((block) => blockText(block.load, data))
+      .join(', ');
+    texts.set(text, [...(texts.get(text) ?? []), outermost]);
   }
   return [...texts].map(([text, same], i) => {
-    const sorted = [...same].sort((p, q) => q.axis.drawn - p.axis.drawn);
-    const places = sorted.slice(0, 4).flatMap((block) => {
-      const top = (share: number) =>
-        plus(
-          along(block.axis, block.load.from + (block.load.to - block.load.from) * share),
-          block.side,
-          block.base + block.h1 + (block.h2 - block.h1) * share,
-        );
-      return [0.5, 0.3, 0.7, 0.1, 0.9].flatMap((share) => around(top(share), block.side, text, font, 4).slice(0, 3));
-    });
+    const high = ({ axis }: Block) => axis.a.y + axis.b.y;
+    const sorted = [...same].sort((p, q) => Math.round(q.axis.drawn - p.axis.drawn) || high(p) - high(q));
+    const places = sorted.slice(0, 4).flatMap((block) =>
+      [0.5, 0.3, 0.7, 0.1, 0.9].flatMap((share) => {
+        const on = along(block.axis, block.load.from + (block.load.to - block.load.from) * share);
+        const top = plus(on, block.side, block.base + block.h1 + (block.h2 - block.h1) * share);
+        return around(top, block.side, text, font, 4).slice(0, 3);
+      }),
+    );
     return { key: `q-${i}`, text, className: 'd-load-text', size: font, places, must: i < 4 };
   });
 }
 
-/** "75.1 kN ↑" and "62.8 kN →" beside each support; a moment says its turn. */
+function blockText(load: Distributed, data: DrawingData): string {
+  const [q1, q2] = [Math.abs(load.q1), Math.abs(load.q2)];
+  const even = Math.abs(q1 - q2) < 1e-6 * Math.max(q1, q2);
+  const value = even
+    ? words(q1, 'lineLoad', data)
+    : `${formatQuantity(q1, 'lineLoad', data.units)} to ${words(q2, 'lineLoad', data)}`;
+  return `${load.case} ${value}${load.axes === 'projected' ? (load.direction === 'y' ? ' on plan' : ' on height') : ''}`;
+}
+
+/** "75.1 kN ↑" and "62.8 kN →" beside or under each support, together; on a small view of many, the upright ones. */
 function reactionWishes(scene: Scene, result: DrawingResult): LabelWish[] {
-  const { data, paper, font } = scene;
-  const largest = Math.max(...result.reactions.flatMap((one) => [Math.abs(one.Fx), Math.abs(one.Fy)]), 0);
+  const { data, paper, font, large, support: size } = scene;
+  const largest = Math.max(...result.reactions.flatMap((one) => [Math.abs(one.Fx), Math.abs(one.Fy)]), 1e-6);
+  const few = large || data.supports.length <= 3;
   return data.supports.flatMap((support, i) => {
     const [node, reaction] = [data.nodes[support.node], result.reactions[i]];
     if (!node || !reaction) return [];
     const p = paper.at(node.x, node.y);
+    const show = (value: number) => Math.abs(value) > largest * 1e-4;
     const rows = [
-      Math.abs(reaction.Fy) > largest * 1e-6
-        ? `${words(Math.abs(reaction.Fy), 'force', data)} ${reaction.Fy > 0 ? '↑' : '↓'}`
-        : null,
-      Math.abs(reaction.Fx) > largest * 1e-6
-        ? `${words(Math.abs(reaction.Fx), 'force', data)} ${reaction.Fx > 0 ? '→' : '←'}`
-        : null,
-      Math.abs(reaction.Mz) > 1e-3
-        ? `${words(Math.abs(reaction.Mz), 'moment', data)} ${reaction.Mz > 0 ? 'anticlockwise' : 'clockwise'}`
-        : null,
+      show(reaction.Fy) ? `${words(Math.abs(reaction.Fy), 'force', data)} ${reaction.Fy > 0 ? '↑' : '↓'}` : null,
+      few && show(reaction.Fx) ? `${words(Math.abs(reaction.Fx), 'force', data)} ${reaction.Fx > 0 ? '→' : '←'}` : null,
+      few && show(reaction.Mz) ? words(Math.abs(reaction.Mz), 'moment', data) : null,
     ].filter((row): row is string => row !== null);
-    return rows.map((text, row) => ({
-      key: `r-${i}-${row}`,
-      text,
-      className: 'd-reaction',
-      size: font,
-      places: [1, -1].flatMap((side) =>
-        [0, -font * 3, font * 3].map((lift) => ({
-          at: { x: p.x + side * (scene.support + 6 + text.length * font * 0.26), y: p.y - font * (rows.length - row) + 2 + lift },
-        })),
-      ),
-      must: data.supports.length <= 4,
-    }));
+    if (rows.length === 0) return [];
+    const text = rows.join('\n');
+    const ground = awayFrom(data, support);
+    const [w, h] = [textWidth(text, font) / 2, textHeight(text, font) / 2];
+    const sides = Math.abs(ground.x) > 0.7 ? [Math.sign(ground.x), -Math.sign(ground.x)] : [1, -1];
+    const clear = size * (Math.abs(ground.x) > 0.7 ? 1.9 : 1.2) + 4;
+    const beside = (lift: number) => sides.map((side) => ({ at: { x: p.x + side * (w + clear), y: p.y + lift } }));
+    const below = { at: { x: p.x, y: p.y + Math.max(ground.y, 0) * size * 1.9 + h + 3 } };
+    const corners = sides.map((side) => ({ at: { x: p.x + side * (w + 4), y: p.y - size - h } }));
+    const places = few ? [...beside(-h - 1), ...beside(h), below, ...corners] : [below, ...beside(-h - 1), ...beside(h)];
+    return [{ key: `r-${i}`, text, className: 'd-reaction', size: font, places, must: data.supports.length <= 4 }];
   });
 }
 

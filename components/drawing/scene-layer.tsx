@@ -111,7 +111,13 @@ export function Labels({ labels }: { readonly labels: readonly PlacedLabel[] }) 
             dominantBaseline="central"
             transform={`translate(${Math.round(label.at.x * 10) / 10} ${Math.round(label.at.y * 10) / 10})${label.turn ? `rotate(${Math.round(label.turn * 10) / 10})` : ''}`}
           >
-            {label.text}
+            {label.text.includes('\n')
+              ? label.text.split('\n').map((row, i, rows) => (
+                  <tspan key={row} x={0} y={(i - (rows.length - 1) / 2) * label.size * 1.05}>
+                    {row}
+                  </tspan>
+                ))
+              : label.text}
           </text>
         </g>
       ))}

@@ -1,8 +1,9 @@
 import { dimensionChains, type DimensionChain } from './dimensions';
 import type { DrawingData } from './drawing-data';
 import { along, memberAxes, type MemberAxis } from './member-axis';
+import { awayFrom } from './ground-direction';
 import { around, Taken, type LabelWish } from './labels';
-import { boundsOf, fitPaper, type Margins, type Paper, type Point } from './paper';
+import { boundsOf, fitPaper, plus, type Margins, type Paper, type Point } from './paper';
 
 /** The paper of one view with the frame on it: what every view shares. */
 export interface Scene {
@@ -37,8 +38,11 @@ export function setScene(data: DrawingData, width: number, height: number, large
     left: chains.some((c) => c.direction === 'y') ? 44 : 0,
     bottom: chains.some((c) => c.direction === 'x') ? 34 : 0,
   };
-  const ground = data.supports.length > 0 ? support * 1.9 : 0;
-  let extra: Margins = { left: 0, right: 0, top: 0, bottom: ground };
+  const feet = data.supports.flatMap((held) => {
+    const node = data.nodes[held.node];
+    return node ? [{ node, away: awayFrom(data, held) }] : [];
+  });
+  let extra: Margins = { left: 0, right: 0, top: 0, bottom: 0 };
   const fit = () =>
     fitPaper(world, width, height, {
       left: edge.left + dims.left + extra.left,
@@ -47,26 +51,24 @@ export function setScene(data: DrawingData, width: number, height: number, large
       bottom: edge.bottom + dims.bottom + extra.bottom,
     });
   let paper = fit();
-  for (let round = 0; round < 2 && reach; round++) {
+  for (let round = 0; round < 2; round++) {
     const [low, high] = [paper.at(world.minX, world.minY), paper.at(world.maxX, world.maxY)];
-    const drawn = boundsOf([...reach(memberAxes(data, paper), paper), low, high]);
+    const ground = feet.map(({ node, away }) => plus(paper.at(node.x, node.y), away, support * 1.9));
+    const drawn = boundsOf([...(reach?.(memberAxes(data, paper), paper) ?? []), ...ground, low, high]);
     extra = {
       left: low.x - drawn.minX,
       right: drawn.maxX - high.x,
       top: high.y - drawn.minY,
-      bottom: Math.max(ground, drawn.maxY - low.y),
+      bottom: drawn.maxY - low.y,
     };
     paper = fit();
   }
   const axes = memberAxes(data, paper);
   const taken = new Taken(width, height);
   for (const axis of axes) taken.line(axis.a, axis.b);
-  for (const held of data.supports) {
-    const node = data.nodes[held.node];
-    if (!node) continue;
-    const p = paper.at(node.x, node.y);
-    for (let i = -1; i <= 1; i += 0.5)
-      taken.line({ x: p.x - support, y: p.y + i * support }, { x: p.x + support, y: p.y + i * support });
+  for (const { node, away } of feet) {
+    const middle = plus(paper.at(node.x, node.y), away, support * 0.85);
+    taken.text(middle, support * 2, support * 1.6, Math.abs(away.x) > 0.7 ? 90 : 0);
   }
   const scene = { data, paper, axes, taken, large, font, support, dimensions: placeChains(chains, world, paper, extra) };
   for (const placed of scene.dimensions) {

@@ -1,3 +1,5 @@
+'use client';
+import { useLayoutEffect, useRef, useState } from 'react';
 import type { CellFragment as Fragment, FragmentRow } from './intake-data';
 
 interface CellFragmentProps {
@@ -9,6 +11,13 @@ interface CellFragmentProps {
 
 /** The very cell, in a piece of the sender's own sheet, ringed and noted in red pencil as in the marked copy. */
 export function CellFragment({ fragment, note, severity = 'error' }: CellFragmentProps) {
+  const ring = useRef<HTMLTableCellElement>(null);
+  const said = useRef<HTMLParagraphElement>(null);
+  const [under, setUnder] = useState(34);
+  useLayoutEffect(() => {
+    const [cell, text] = [ring.current, said.current];
+    if (cell && text) setUnder(Math.max(0, Math.min(cell.offsetLeft, text.parentElement!.clientWidth - 340)));
+  }, [fragment]);
   const ringed = /^([A-Z]+)(\d+)$/.exec(fragment.cell ?? '');
   const column = ringed?.[1] ?? null;
   const row = ringed ? Number(ringed[2]) : fragment.row;
@@ -21,7 +30,11 @@ export function CellFragment({ fragment, note, severity = 'error' }: CellFragmen
         const here = one.row === row && (column === null || letter === column);
         const text = one.cells[i] ?? '';
         return (
-          <td key={letter} className={here ? `fragment-ring fragment-ring-${severity}` : undefined}>
+          <td
+            key={letter}
+            ref={here && (column !== null || i === 0) ? ring : undefined}
+            className={here ? `fragment-ring fragment-ring-${severity}` : undefined}
+          >
             {text}
             {here && text === '' && <span className="sr-only">(blank)</span>}
           </td>
@@ -67,7 +80,7 @@ export function CellFragment({ fragment, note, severity = 'error' }: CellFragmen
           </tbody>
         </table>
       </div>
-      <p className={`pencil pencil-${severity}`}>
+      <p ref={said} className={`pencil pencil-${severity}`} style={{ marginLeft: under }}>
         <svg width="38" height="34" viewBox="0 0 38 34" aria-hidden="true">
           <path d="M36 29C20 32 8 22 6 4M1 10 6 3 13 8" />
         </svg>

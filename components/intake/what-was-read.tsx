@@ -1,3 +1,4 @@
+import { SeverityMark } from '../ui/severity-mark';
 import type { SheetLine } from './intake-data';
 
 interface WhatWasReadProps {
@@ -65,14 +66,15 @@ function headings(sheet: SheetLine) {
 function Counts({ sheet }: { readonly sheet: SheetLine }) {
   if (sheet.errors + sheet.warnings + sheet.notes === 0) return <span className="text-ink3">none</span>;
   const parts = [
-    { n: sheet.errors, look: 'severity-error', word: 'error' },
-    { n: sheet.warnings, look: 'severity-warning', word: 'warning' },
-    { n: sheet.notes, look: 'severity-note', word: 'note' },
-  ].filter((part) => part.n > 0);
-  return parts.map((part, i) => (
-    <span key={part.word} className={`severity ${part.look}`}>
-      {i > 0 && <span className="text-ink2">, </span>}
-      {part.n.toLocaleString('en-GB')} {part.n === 1 ? part.word : `${part.word}s`}
-    </span>
-  ));
+    { n: sheet.errors, severity: 'error' },
+    { n: sheet.warnings, severity: 'warning' },
+    { n: sheet.notes, severity: 'note' },
+  ] as const;
+  return parts
+    .filter((part) => part.n > 0)
+    .map(({ n, severity }) => (
+      <span key={severity} className={`sheet-count severity-${severity}`}>
+        <SeverityMark severity={severity} word={false} /> {n.toLocaleString('en-GB')}
+      </span>
+    ));
 }

@@ -16,7 +16,7 @@ export interface StripLayout {
 
 /** Extra space after each ten. */
 const tens = 5;
-const below = 3;
+const below = 2;
 
 /**
  * Rows of fifty (twenty-five under 600 px of strip), 48 px high up to 300 frames, 18 px at 1,000, so that
@@ -29,9 +29,9 @@ export function layOutStrip(count: number, width: number): StripLayout {
   const right = 62;
   const gaps = Math.ceil(columns / 10) - 1;
   const pitch = (width - left - right - gaps * tens) / columns;
-  const rowPitch = count <= 300 ? (columns === 50 ? 65 : 48) : Math.max(24, Math.min(65, Math.floor(500 / rows)));
-  const groups = rowPitch >= 44;
-  const gap = groups ? 14 : 3;
+  const rowPitch = count <= 300 ? (columns === 50 ? 61 : 46) : Math.max(24, Math.min(61, Math.floor(500 / rows)));
+  const groups = rowPitch >= 40;
+  const gap = groups ? 11 : 4;
   return {
     columns, width, left, right, pitch, cell: pitch * 0.78, gap, rowPitch, groups, height: rowPitch - gap - below,
   }; // prettier-ignore

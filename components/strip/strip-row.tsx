@@ -24,7 +24,8 @@ interface StripRowProps {
 export const StripRow = memo(function StripRow(props: StripRowProps) {
   const { frames, from, read, layout, only, idOf, hatch, nearLimit, count } = props;
   const foot = layout.gap + layout.height;
-  const end = columnX(layout, frames.length - 1) + layout.cell + 1;
+  const ran = frames.findLastIndex((frame) => frame.state !== 'waiting');
+  const end = ran < 0 ? layout.left : columnX(layout, ran) + layout.cell + 1;
   const start = layout.left;
   const one = foot - layout.height / stripTop;
   const tally = countVerdicts(frames);
@@ -39,12 +40,12 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
       <text className="strip-number" x={start - 6} y={foot} textAnchor="end">
         {from + 1}
       </text>
-      {groupStarts(frames, props.groupBefore).map(({ column, name }) => (
-        <text key={column} className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 3}>
+      {(layout.groups ? groupStarts(frames, props.groupBefore) : []).map(({ column, name }) => (
+        <text key={column} className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 1.5}>
           {name}
         </text>
       ))}
-      <path className="strip-one" d={`M${start} ${one}H${end}`} />
+      {ran >= 0 && <path className="strip-one" d={`M${start} ${one}H${end}`} />}
       {frames.map((frame, i) => (
         <StripCell
           key={from + i}
@@ -62,7 +63,7 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
           hatch={hatch}
         />
       ))}
-      <path className="strip-base" d={`M${start} ${foot}H${end}`} />
+      {ran >= 0 && <path className="strip-base" d={`M${start} ${foot}H${end}`} />}
       {(['over', 'near', 'not checked'] as const).map((verdict, i) =>
         tally[verdict] > 0 ? (
           <text

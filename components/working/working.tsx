@@ -112,7 +112,7 @@ function one(part: WorkingPart): ReactNode {
 
 function Figure({ text, unit }: { readonly text: string; readonly unit?: string }) {
   return (
-    <span className="whitespace-nowrap">
+    <span className="w-figure">
       {text}
       {unit && ` ${unit}`}
     </span>
