@@ -14,6 +14,9 @@ const log = (message: string, facts: Readonly<Record<string, unknown>>): void =>
   process.stderr.write(`${message} ${String(facts['error'])}\n`);
 };
 const queue = new WorkQueue({ database, file, pools, log, onChunk: () => say('chunk') });
+queue.events.on('progress', (revision) => {
+  if (queue.progress(revision).done > 0) say('solved');
+});
 await queue.start();
 say('started');
 await queue.idle();
