@@ -7,10 +7,10 @@ const builtIn: Readonly<Record<number, string>> = {
 /** The date code of a format, or null if it shows a plain number. @param code the format's own code, undefined = built in */
 export function dateCode(id: number, code: string | undefined): string | null {
   if (code === undefined) return builtIn[id] ?? ((id >= 27 && id <= 36) || (id >= 50 && id <= 58) ? 'yyyy-mm-dd' : null);
-  const bare = code
-    .split(';')[0]!
+  const bare = (code.split(';')[0] ?? '')
     .replace(/"[^"]*"/g, '')
-    .replace(/\\.|[_*]./g, '')
+    .replace(/[_*]./g, '')
+    .replace(/\\(.)/g, (_, c: string) => (/[-./, :]/.test(c) ? c : ''))
     .replace(/\[(?!h+\]|m+\]|s+\])[^\]]*\]/gi, '');
   return /[ymdhs]/i.test(bare) && !/general|standard/i.test(bare) ? bare : null;
 }

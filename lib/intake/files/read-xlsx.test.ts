@@ -59,7 +59,7 @@ describe('a worksheet', () => {
     );
     expect(rows[0]?.cells.map((c) => [c?.kind, c?.text])).toEqual([
       ['date', '1-Feb'],
-      ['date', '1Feb'],
+      ['date', '1-Feb'],
       ['date', '2026-02-01'],
       ['number', '5'],
       ['number', '5'],

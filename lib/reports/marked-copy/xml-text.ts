@@ -1,0 +1,37 @@
+/** Text for an XML element or attribute; characters that XML cannot hold are left out. */
+export function xmlText(text: string): string {
+  return text
+    .replace(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/g, '')
+    .replace(/&/g, '&amp;')
+    .replace(/</g, '&lt;')
+    .replace(/>/g, '&gt;')
+    .replace(/"/g, '&quot;');
+}
+
+/** Value of an attribute in the text of a tag, as written; null where it has none. */
+export function attribute(tag: string, name: string): string | null {
+  const match = new RegExp(`\\s${name}\\s*=\\s*(?:"([^"]*)"|'([^']*)')`).exec(tag);
+  return match ? (match[1] ?? match[2] ?? '') : null;
+}
+
+/** The tag with the attribute set. */
+export function withAttribute(tag: string, name: string, value: string): string {
+  const pattern = new RegExp(`(\\s${name}\\s*=\\s*)(?:"[^"]*"|'[^']*')`);
+  if (pattern.test(tag)) return tag.replace(pattern, (_, before: string) => `${before}"${value}"`);
+  return tag.replace(/\s*(\/?)>$/, (_, slash: string) => ` ${name}="${value}"${slash}>`);
+}
+
+/** Puts text before the last closing tag of an element, whatever its prefix; null where the element has none. */
+export function beforeEnd(xml: string, element: string, addition: string): string | null {
+  const empty = new RegExp(`<((?:\\w+:)?)${element}(\\s[^>]*)?/>`).exec(xml);
+  const end = [...xml.matchAll(new RegExp(`</(?:\\w+:)?${element}\\s*>`, 'g'))].at(-1);
+  if (end) return xml.slice(0, end.index) + addition + xml.slice(end.index);
+  if (!empty) return null;
+  const open = `<${empty[1] ?? ''}${element}${empty[2] ?? ''}>${addition}</${empty[1] ?? ''}${element}>`;
+  return xml.slice(0, empty.index) + open + xml.slice(empty.index + empty[0].length);
+}
+
+/** The prefix of a part's root element, with its colon: '' or 'x:'. */
+export function prefixOf(xml: string, root: string): string {
+  return new RegExp(`<((?:\\w+:)?)${root}[\\s>/]`).exec(xml)?.[1] ?? '';
+}
