@@ -1,6 +1,6 @@
 /** Fills a new database with an invented office: people, projects, and batches brought in and run as an office would. */
 import { createHash } from 'node:crypto';
-import { readdirSync, readFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { basename, join } from 'node:path';
 import { migrate } from '@/db/migrate';
 import { openDatabase, type Db, type OpenDatabase } from '@/db/open';
@@ -22,6 +22,7 @@ export { seedOffice, seedPeople } from './people';
 
 /**
  * Seeds the database at `file` unless an office is there already, and settles when every batch has been read and run.
+ * It is filled beside its place and moved there whole: a start that was cut short begins afresh.
  *
  * @param samples folder of the sample sheets   @param bundles folder of the threads' bundles
  * @returns false where the database was left as it is
@@ -32,27 +33,41 @@ export async function seed(options: {
   readonly bundles: string;
   readonly say?: (line: string) => void;
 }): Promise<boolean> {
-  const database = openDatabase(options.file);
-  const { db } = database;
-  await migrate(db);
-  if ((await countOffices(db)) > 0) {
-    await database.close();
-    return false;
-  }
+  if (await hasOffice(options.file)) return false;
+  const part = `${options.file}.part`;
+  removeDatabase(part);
+  const database = openDatabase(part);
+  await migrate(database.db);
   const pools = createPools(options.bundles);
   const faults: string[] = [];
   const log = (message: string): number => faults.push(message);
-  const queue = new WorkQueue({ database, file: options.file, pools, log });
+  const queue = new WorkQueue({ database, file: part, pools, log });
   try {
     await fill(database, queue, options.samples, options.say ?? (() => undefined));
-    await queue.idle();
   } finally {
     await queue.close();
     await pools.close();
+    database.raw.pragma('wal_checkpoint(TRUNCATE)');
     await database.close();
   }
   if (faults.length > 0) throw new Error(`The office was not filled completely: ${faults.join('; ')}`);
+  removeDatabase(options.file);
+  renameSync(part, options.file);
   return true;
+}
+
+async function hasOffice(file: string): Promise<boolean> {
+  if (!existsSync(file)) return false;
+  const database = openDatabase(file);
+  await migrate(database.db);
+  const offices = await countOffices(database.db);
+  await database.close();
+  return offices > 0;
+}
+
+/** A database with what SQLite keeps beside it. */
+function removeDatabase(file: string): void {
+  for (const end of ['', '-wal', '-shm']) rmSync(`${file}${end}`, { force: true });
 }
 
 async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, say: (line: string) => void): Promise<void> {
