@@ -46,11 +46,12 @@ export function checkDeflection(
   if (!span.whole) return keepGoverning(findings, [notCheckedRow(subject, null, 'pieces of the span do not form one line')]);
   const rule = deflectionRule(frame, span, findings);
   const measured = (c: number): Movement => {
-    const lines = span.pieces.map((piece) => lineOf(states[c]!, piece.member));
-    const { value, at } = deflectionOf(span, rule, lines);
-    return { value, at, inputs: { rule: rule.kind, root: rule.kind === 'cantilever' ? rule.root : null, x: at } };
+    const state = states[c]!;
+    const lines = span.pieces.map((piece) => lineOf(state, piece.member));
+    return deflectionOf(span, rule, lines);
   };
-  checkMovement(subject, 'deflection', limits, span.length_m, settings, states, measured, findings);
+  const inputs = { rule: rule.kind, root: rule.kind === 'cantilever' ? rule.root : null };
+  checkMovement(subject, 'deflection', limits, span.length_m, settings, states, measured, () => inputs, findings);
 }
 
 /**
@@ -77,7 +78,7 @@ const departure = new Float64Array(16);
 const points = new Float64Array(32);
 
 /** Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start. */
-export function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): { value: number; at: number } {
+export function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): Movement {
   const last = span.pieces.length - 1;
   const first = endDeflection(span, 0, lines, 'near');
   const final = endDeflection(span, last, lines, 'far');

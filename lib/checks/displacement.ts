@@ -3,7 +3,7 @@ import type { Settings } from '@/lib/model/settings';
 import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, type Findings } from './check-row';
 import { limitsOf, nodesNamed } from './limits';
-import { checkMovement, type Movement } from './movement';
+import { checkMovement } from './movement';
 
 type Direction = NonNullable<Limit['direction']>;
 
@@ -19,7 +19,12 @@ export function checkDisplacement(frame: Frame, settings: Settings, states: read
     const found: Findings = { ...findings, checks: [], all: [], notChecked: new Set() };
     for (const direction of directions) {
       const limits = mine.filter((limit) => directionOf(limit) === direction);
-      const measured = (c: number): Movement => displaced(states[c]!, node, direction);
+      const measured = (c: number) => ({ value: displaced(states[c]!, node, direction), at: null });
+      const inputs = (c: number) => ({
+        direction,
+        ux: states[c]!.displacements[3 * node]!,
+        uy: states[c]!.displacements[3 * node + 1]!,
+      });
       const subject = {
         subjectKind: 'node',
         subject: frame.nodes[node]!.id,
@@ -28,7 +33,7 @@ export function checkDisplacement(frame: Frame, settings: Settings, states: read
         reference: 'Limits',
         member: null,
       } as const;
-      checkMovement(subject, 'displacement', limits, NaN, settings, states, measured, found);
+      checkMovement(subject, 'displacement', limits, 0, settings, states, measured, inputs, found);
     }
     keepGoverning(findings, found.all ?? []);
   }
@@ -36,9 +41,8 @@ export function checkDisplacement(frame: Frame, settings: Settings, states: read
 
 const directionOf = (limit: Limit): Direction => limit.direction ?? 'resultant';
 
-function displaced(state: ResultState, node: number, direction: Direction): Movement {
+function displaced(state: ResultState, node: number, direction: Direction): number {
   const ux = state.displacements[3 * node]!;
   const uy = state.displacements[3 * node + 1]!;
-  const value = direction === 'x' ? Math.abs(ux) : direction === 'y' ? Math.abs(uy) : Math.hypot(ux, uy);
-  return { value, at: null, inputs: { direction, ux, uy } };
+  return direction === 'x' ? Math.abs(ux) : direction === 'y' ? Math.abs(uy) : Math.hypot(ux, uy);
 }

@@ -11,7 +11,6 @@ export interface Movement {
   /** In size, m. */
   readonly value: number;
   readonly at: number | null;
-  readonly inputs: Check['inputs'];
 }
 
 /** Setup's ratio as the `*` row that it is, where the frame's limits do not hold it already. */
@@ -47,6 +46,7 @@ export function withoutLimit(settings: Settings, measure: 'deflection' | 'sway',
  * @param limits most specific first; in a combination that none of them is for, the movement is not limited
  * @param length_m what a limit's ratio divides
  * @param measured the movement in a state, by its index
+ * @param inputsOf what it was made of, for the working
  */
 export function checkMovement(
   subject: Subject,
@@ -56,6 +56,7 @@ export function checkMovement(
   settings: Settings,
   states: readonly ResultState[],
   measured: (state: number) => Movement,
+  inputsOf: (state: number) => Check['inputs'],
   findings: Findings,
 ): void {
   const rows: Check[] = [];
@@ -75,10 +76,13 @@ export function checkMovement(
       );
       continue;
     }
-    const { value, at, inputs } = measured(c);
+    const { value, at } = measured(c);
     const ratio = value / allowed;
     if (!findings.all && largest >= 0 && ratio <= largest * (1 + SAME)) continue;
     largest = Math.max(largest, ratio);
+    const verdict = verdictOf(ratio, settings.nearLimit);
+    const put = { n: limit.ratio, absolute: limit.absolute_m, length: length_m, x: at, value, limit: allowed, ratio };
+    const inputs = { ...inputsOf(c), ...put };
     rows.push({
       ...subject,
       combination,
@@ -87,10 +91,10 @@ export function checkMovement(
       value,
       limit: allowed,
       ratio,
-      verdict: verdictOf(ratio, settings.nearLimit),
+      verdict,
       reason: null,
       reference: limit.source,
-      inputs: { ...inputs, n: limit.ratio, absolute: limit.absolute_m, length: length_m, value, limit: allowed, ratio },
+      inputs,
     });
   }
   if (rows.length === 0)

@@ -32,13 +32,14 @@ export function checkSpread(frame: Frame, settings: Settings, states: readonly R
     const to = frame.nodes[b]!;
     const [dx, dy] = [to.x_m - from.x_m, to.y_m - from.y_m];
     const distance = Math.hypot(dx, dy);
-    const measured = (c: number) => {
+    const apart = (c: number) => {
       const d = states[c]!.displacements;
-      const [ux, uy] = [d[3 * b]! - d[3 * a]!, d[3 * b + 1]! - d[3 * a + 1]!];
-      const change = distance > 0 ? (ux * dx + uy * dy) / distance : Math.hypot(ux, uy);
-      return { value: Math.abs(change), at: null, inputs: { dux: ux, duy: uy, dx, dy, change } };
+      const [dux, duy] = [d[3 * b]! - d[3 * a]!, d[3 * b + 1]! - d[3 * a + 1]!];
+      return { dux, duy, change: distance > 0 ? (dux * dx + duy * dy) / distance : Math.hypot(dux, duy) };
     };
-    checkMovement(subjectOf(`${from.id}–${to.id}`), 'spread', limits, distance, settings, states, measured, findings);
+    const measured = (c: number) => ({ value: Math.abs(apart(c).change), at: null });
+    const inputs = (c: number) => ({ ...apart(c), dx, dy });
+    checkMovement(subjectOf(`${from.id}–${to.id}`), 'spread', limits, distance, settings, states, measured, inputs, findings);
   }
 }
 

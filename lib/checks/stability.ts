@@ -58,7 +58,7 @@ export function checkStability(
   const buckling = spanBuckling(frame, span);
   note(span, buckling, findings);
   const rows: Check[] = [];
-  let largest = -1;
+  let best: { readonly screening: Screening; readonly state: ResultState } | null = null;
   for (let c = 0; c < states.length; c++) {
     const state = states[c]!;
     const found = screen(settings, buckling, state, lines[c]!);
@@ -66,11 +66,10 @@ export function checkStability(
       rows.push(refused(settings, span, subject, state, buckling, found));
       // a combination that is not checked governs all that follow
       if (!findings.all) break;
-    } else if (findings.all || largest < 0 || found.ratio > largest * (1 + SAME)) {
-      largest = Math.max(largest, found.ratio);
-      rows.push(negligible(settings, span, subject, state, buckling, found));
-    }
+    } else if (findings.all) rows.push(negligible(settings, span, subject, state, buckling, found));
+    else if (best === null || found.ratio > best.screening.ratio * (1 + SAME)) best = { screening: found, state };
   }
+  if (best && rows.length === 0) rows.push(negligible(settings, span, subject, best.state, buckling, best.screening));
   keepGoverning(findings, rows);
 }
 

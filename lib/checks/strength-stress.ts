@@ -1,35 +1,17 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import type { Check, MemberLine, ResultState } from '@/lib/results/result';
+import type { MemberLine, ResultState } from '@/lib/results/result';
 import { inPlane, type InPlane } from '@/lib/sections/in-plane';
-import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import { keepGoverning, notCheckedRow, type Findings } from './check-row';
 import { peakEquivalentStress } from './equivalent-stress';
 import { peakNormalStress } from './normal-stress';
-import { SAME, type Peak } from './peak';
 import { peakShearStress } from './shear-stress';
 import { plateProportions, slenderPlate, type PlateProportions } from './slender-plates';
-import { verdictOf } from './verdict';
-
-export type StressName = 'normal stress' | 'shear stress' | 'equivalent stress';
-const names: readonly StressName[] = ['normal stress', 'shear stress', 'equivalent stress'];
-const references: Readonly<Record<StressName, string>> = {
-  'normal stress': 'elastic stress, σ = N/A ∓ M/W ≤ f·fy (EN 1993-1-1 6.2.1(4))',
-  'shear stress': 'elastic stress, τ = V/Av ≤ f·fy/√3 (EN 1993-1-1 6.2.6(4))',
-  'equivalent stress': 'elastic stress, σ_v = √(σ² + 3τ²) ≤ f·fy (EN 1993-1-1 6.2.1(5))',
-};
-
-export const stressSubject = (frame: Frame, member: number, check: StressName): Subject => ({
-  subjectKind: 'member',
-  subject: frame.members[member]!.id,
-  check,
-  quantity: 'stress',
-  reference: references[check],
-  member,
-});
+import { StressRows, stressNames, stressSubject } from './stress-rows';
 
 /** A row for each stress check of a member that can't be made at all. */
 export function stressNotChecked(frame: Frame, member: number, reason: string, findings: Findings): void {
-  for (const check of names) keepGoverning(findings, [notCheckedRow(stressSubject(frame, member, check), null, reason)]);
+  for (const check of stressNames) keepGoverning(findings, [notCheckedRow(stressSubject(frame, member, check), null, reason)]);
 }
 
 /**
@@ -57,7 +39,7 @@ export function checkStress(
   const noAv = of.AvPeak_m2 === null ? 'needs Av' : null;
   if (fy === null || noYield !== null) return stressNotChecked(frame, member, noYield ?? 'needs fy', findings);
 
-  const gather = new Gather(frame, settings, member, of, fy, findings.all !== null);
+  const gather = new StressRows(frame, settings, member, of, fy, findings.all !== null);
   for (let c = 0; c < lines.length; c++) {
     const line = lines[c]!;
     const combination = states[c]!.name;
@@ -109,80 +91,4 @@ function notePlates(section: string, plates: PlateProportions, findings: Finding
     );
   if (plates.webBucklesInShear)
     findings.assumptions.add(`Section ${section}: clear web deeper than 72 ε tw; shear buckling of the web is not checked`);
-}
-
-/** Keeps, for each of the three checks of a member, what governs: few rows are made, however many combinations there are. */
-class Gather {
-  private readonly best: (Check | null)[] = [null, null, null];
-  private readonly largest = [-1, -1, -1];
-  private readonly refused: (Check | null)[] = [null, null, null];
-  private readonly reasons: Set<string>[] = [new Set(), new Set(), new Set()];
-  private readonly rows: Check[][] = [[], [], []];
-  private readonly limits: readonly number[];
-
-  constructor(
-    private readonly frame: Frame,
-    private readonly settings: Settings,
-    private readonly member: number,
-    private readonly of: InPlane,
-    private readonly fy: number,
-    private readonly all: boolean,
-  ) {
-    const f = settings.stressFactor;
-    this.limits = [f * fy, (f * fy) / Math.sqrt(3), f * fy];
-  }
-
-  /** Largest stress so far of a check; −1 where every row is wanted, so that each is exact. */
-  floor(check: number): number {
-    return this.all ? -1 : this.largest[check]!;
-  }
-
-  take(check: number, combination: string, peak: Peak): number {
-    const governs = this.largest[check]! < 0 || peak.value > this.largest[check]! * (1 + SAME);
-    if (!governs && !this.all) return peak.value;
-    const row = this.row(check, combination, peak);
-    if (this.all) this.rows[check]!.push(row);
-    if (governs) [this.largest[check], this.best[check]] = [peak.value, row];
-    return peak.value;
-  }
-
-  refuse(check: number, combination: string, reason: string): void {
-    if (!this.all && this.reasons[check]!.has(reason)) return;
-    this.reasons[check]!.add(reason);
-    const row = notCheckedRow(stressSubject(this.frame, this.member, names[check]!), combination, reason);
-    if (this.all) this.rows[check]!.push(row);
-    this.refused[check] ??= row;
-  }
-
-  finish(findings: Findings): void {
-    for (let check = 0; check < 3; check++) {
-      const rows = this.all ? this.rows[check]! : [this.best[check], this.refused[check]].filter((row): row is Check => !!row);
-      keepGoverning(findings, rows);
-      for (const reason of this.reasons[check]!) findings.notChecked.add(`${names[check]!}: ${reason}`);
-    }
-  }
-
-  private row(check: number, combination: string, peak: Peak): Check {
-    const name = names[check]!;
-    const limit = this.limits[check]!;
-    const ratio = peak.value / limit;
-    const { of, fy } = this;
-    const W = peak.face === 'top' ? of.Wtop_m3 : of.Wbottom_m3;
-    const section = this.frame.sections[this.frame.members[this.member]!.section]!.name;
-    const inputs: Record<string, number | string | null> = { section };
-    if (check !== 1) Object.assign(inputs, { N: peak.N, M: peak.M, A: of.A_m2, W, face: peak.face });
-    if (check !== 0) Object.assign(inputs, { V: peak.V, Av: of.AvPeak_m2 });
-    return {
-      ...stressSubject(this.frame, this.member, name),
-      combination,
-      at: peak.at,
-      face: check === 1 ? null : peak.face,
-      value: peak.value,
-      limit,
-      ratio,
-      verdict: verdictOf(ratio, this.settings.nearLimit),
-      reason: null,
-      inputs: { ...inputs, f: this.settings.stressFactor, fy, x: peak.at, value: peak.value, limit, ratio },
-    };
-  }
 }

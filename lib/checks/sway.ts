@@ -42,10 +42,8 @@ export function checkSway(
   const height = Math.abs(rise);
   if (height < 1e-3) return keepGoverning(findings, [notCheckedRow(subject, null, 'a column without height has no sway')]);
   const [top, bottom] = rise > 0 ? [span.endNode, span.startNode] : [span.startNode, span.endNode];
-  const measured = (c: number) => {
-    const d = states[c]!.displacements;
-    const [uxTop, uxBottom] = [d[3 * top]!, d[3 * bottom]!];
-    return { value: Math.abs(uxTop - uxBottom), at: null, inputs: { uxTop, uxBottom } };
-  };
-  checkMovement(subject, 'sway', limits, height, settings, states, measured, findings);
+  const ux = (c: number, node: number): number => states[c]!.displacements[3 * node]!;
+  const measured = (c: number) => ({ value: Math.abs(ux(c, top) - ux(c, bottom)), at: null });
+  const inputs = (c: number) => ({ uxTop: ux(c, top), uxBottom: ux(c, bottom) });
+  checkMovement(subject, 'sway', limits, height, settings, states, measured, inputs, findings);
 }
