@@ -38,6 +38,9 @@ export function openDatabase(file: string, { readonly = false }: { readonly?: bo
   if (!readonly) raw.pragma('journal_mode = WAL');
   raw.pragma('synchronous = NORMAL');
   raw.pragma('foreign_keys = ON');
+  // A run writes the same index pages over and over: fewer, larger checkpoints write each of them to the file once.
+  raw.pragma('wal_autocheckpoint = 16000');
+  raw.pragma('journal_size_limit = 67108864');
   raw.pragma('cache_size = -32000');
   raw.pragma('temp_store = MEMORY');
   const db = new Kysely<DB>({ dialect: new SqliteDialect({ database: raw }) });

@@ -6,8 +6,15 @@ const slice_ms = 20;
 /**
  * Does `work` for every item, in as many transactions as keep each short; an item is never divided.
  * Between two of them others may write.
+ *
+ * @param last what each transaction ends with, such as counts of what was written in it
  */
-export function inShortTransactions<T>(raw: RawDatabase, items: Iterable<T>, work: (item: T) => void): void {
+export function inShortTransactions<T>(
+  raw: RawDatabase,
+  items: Iterable<T>,
+  work: (item: T) => void,
+  last: () => void = () => undefined,
+): void {
   const iterator = items[Symbol.iterator]();
   // An item is fetched (and made, where items come from a generator) before its transaction begins.
   let item = iterator.next();
@@ -19,6 +26,7 @@ export function inShortTransactions<T>(raw: RawDatabase, items: Iterable<T>, wor
         work(item.value);
         item = iterator.next();
       } while (item.done !== true && performance.now() - began < slice_ms);
+      last();
       raw.exec('commit');
     } catch (fault) {
       if (raw.inTransaction) raw.exec('rollback');

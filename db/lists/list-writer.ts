@@ -42,6 +42,8 @@ function sectionOf(frame: Frame, check: Check | undefined): string | null {
 /** Prepared once for many frames; call inside a transaction. */
 export class ListWriter {
   private readonly tally: TallyWriter;
+  private readonly touched = new Set<number>();
+  private readonly stamp;
   private readonly frame;
   private readonly member;
   private readonly check;
@@ -50,6 +52,7 @@ export class ListWriter {
 
   constructor(raw: RawDatabase) {
     this.tally = new TallyWriter(raw);
+    this.stamp = raw.prepare('update revision set stamp = stamp + 1 where id = ?');
     this.frame = raw.prepare(
       `update revision_frame set status = ?, verdict = ?, ratio = ?, check_name = ?, subject = ?, section = ?, combination = ?,
        critical_load_factor = ?, mass = ?, reason = ?, run_by = ? where revision = ? and frame = ?`,
@@ -65,6 +68,7 @@ export class ListWriter {
   /** Adds a solved (or not solvable) frame's rows to a revision, where it has none yet. */
   write(revision: number, index: number, solved: Solved, runBy: number | null): void {
     const s = summaryOf(solved);
+    this.touched.add(revision);
     this.frame.run(
       s.status, s.verdict, orNone(s.ratio), s.check ?? '', s.subject, s.section ?? '', s.combination ?? '',
       orNoneHigh(s.criticalLoadFactor), orNone(s.mass), s.reason, runBy, revision, index,
@@ -75,9 +79,11 @@ export class ListWriter {
     this.writeStates(revision, index, solved);
   }
 
-  /** Brings the counts of what was written into the same transaction. */
+  /** Counts what was written, and puts a new stamp on the revisions it was written to: in the same transaction, as its last. */
   flush(): void {
     this.tally.flush();
+    for (const revision of this.touched) this.stamp.run(revision);
+    this.touched.clear();
   }
 
   private writeMembers(revision: number, index: number, { frame, members }: Solved): void {

@@ -78,11 +78,17 @@ export function insertProblems(raw: RawDatabase, revision: number, problems: rea
 }
 
 function insertFrames(raw: RawDatabase, of: { revision: number; batch: number; person: number }, intake: Intake): number {
-  const write = frameWriter(raw, of);
+  const lists = new ListWriter(raw);
+  const write = frameWriter(raw, lists, of);
   let carried = 0;
-  inShortTransactions(raw, prepared(intake.frames, intake.settings), (one) => {
-    if (write(one)) carried += 1;
-  });
+  inShortTransactions(
+    raw,
+    prepared(intake.frames, intake.settings),
+    (one) => {
+      if (write(one)) carried += 1;
+    },
+    () => lists.flush(),
+  );
   return carried;
 }
 
@@ -101,8 +107,11 @@ function* prepared(frames: readonly FrameRead[], settings: Settings): Generator<
 }
 
 /** @returns a function that stores one frame and says whether its results were carried over */
-function frameWriter(raw: RawDatabase, { revision, batch, person }: { revision: number; batch: number; person: number }) {
-  const lists = new ListWriter(raw);
+function frameWriter(
+  raw: RawDatabase,
+  lists: ListWriter,
+  { revision, batch, person }: { revision: number; batch: number; person: number },
+) {
   const add = raw.prepare(
     `insert into frame_version (batch, hash, engine, state, model) values (?, ?, ?, 'waiting', ?) on conflict do nothing`,
   );
@@ -138,7 +147,6 @@ function frameWriter(raw: RawDatabase, { revision, batch, person }: { revision: 
     if (!own.evaluation) return false;
     const stored = evaluationOf(own.evaluation, states.all(own.id));
     lists.write(revision, index, { frame, ...stored }, runBy.get(own.id, revision) ?? null);
-    lists.flush();
     return true;
   };
 }

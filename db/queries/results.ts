@@ -80,16 +80,21 @@ export function insertChunkResults(
   results: readonly FrameResults[],
   run: { readonly person: number | null },
 ): number[] {
-  const write = resultWriter(raw, run.person);
+  const lists = new ListWriter(raw);
+  const write = resultWriter(raw, lists, run.person);
   const stored: number[] = [];
-  inShortTransactions(raw, results, (result) => {
-    if (write(result)) stored.push(result.version);
-  });
+  inShortTransactions(
+    raw,
+    results,
+    (result) => {
+      if (write(result)) stored.push(result.version);
+    },
+    () => lists.flush(),
+  );
   return stored;
 }
 
-function resultWriter(raw: RawDatabase, person: number | null): (result: FrameResults) => boolean {
-  const lists = new ListWriter(raw);
+function resultWriter(raw: RawDatabase, lists: ListWriter, person: number | null): (result: FrameResults) => boolean {
   const solve = raw.prepare(
     `update frame_version set state = ?, evaluation = ?, verdict = ?, ratio = ?, check_name = ?, subject = ?, section = ?,
      combination = ?, critical_load_factor = ?, mass = ?, reason = ?, residual = ?, equilibrium = ?, condition = ?, digits = ?,
@@ -100,7 +105,6 @@ function resultWriter(raw: RawDatabase, person: number | null): (result: FrameRe
   const places = raw.prepare<[number], { revision: number; frame: number }>(
     'select revision, frame from revision_frame where version = ? order by revision, frame',
   );
-  const stamp = raw.prepare('update revision set stamp = stamp + 1 where id = ?');
   return ({ version, frame, evaluation, members, extremes }) => {
     const s = summaryOf({ frame, evaluation });
     const c = evaluation.certificate;
@@ -121,8 +125,6 @@ function resultWriter(raw: RawDatabase, person: number | null): (result: FrameRe
     });
     const where = places.all(version);
     for (const place of where) lists.write(place.revision, place.frame, { frame, evaluation, members }, person);
-    lists.flush();
-    for (const revision of new Set(where.map((place) => place.revision))) stamp.run(revision);
     return true;
   };
 }

@@ -1,6 +1,5 @@
 import { orNull } from '@/db/absent';
 import { type Db, driverOf, type RawDatabase } from '@/db/open';
-import { countRevisionVerdicts } from '@/db/queries/revisions';
 import { stampOf } from '@/db/queries/lists';
 import type { VerdictCounts } from '@/db/queries/verdict-counts';
 import type { FrameStatus } from '@/db/schema';
@@ -66,7 +65,7 @@ export async function findSummary(db: Db, office: number, revision: number): Pro
     frames[Math.min(at, steps - 1)]! += 1;
   }
   return {
-    counts: await countRevisionVerdicts(db, office, revision),
+    counts: countsOf(rows),
     cells,
     spread: { step: 1 / perUnit, frames },
     governing: governingChecks(cells),
@@ -183,14 +182,32 @@ function worstOf(raw: RawDatabase, revision: number, cells: readonly SummaryCell
 }
 
 function parametersOf(raw: RawDatabase, revision: number): BatchSummary['parameters'] {
-  // A family's variants have the same parameters, so one frame of each family is enough.
-  const rows = statement<{ name: string; quantity: string; numeric: number }>(
+  const families = statement<{ family: string }>(
     raw,
-    `select distinct p.name, p.quantity, p.number is not null as numeric from frame_parameter p where p.version in (
-       select min(version) from revision_frame where revision = ? and family <> '' and version is not null group by family)
-     order by p.name`,
-  ).all(revision);
-  return rows.map(({ name, quantity, numeric }) => ({ name, quantity, numeric: numeric === 1 }));
+    `with recursive step (family) as (
+       select min(family) from revision_frame where revision = ? and family > ''
+       union all
+       select (select min(family) from revision_frame where revision = ? and family > step.family) from step where family is not null)
+     select family from step where family is not null`,
+  ).all(revision, revision);
+  // A family's variants have the same parameters, so one frame of each is enough.
+  const ofOne = statement<{ name: string; quantity: string; numeric: number }>(
+    raw,
+    `select name, quantity, number is not null as numeric from frame_parameter where version =
+       (select version from revision_frame where revision = ? and family = ? and version is not null limit 1)`,
+  );
+  const found = new Map<string, BatchSummary['parameters'][number]>();
+  for (const { family } of families) {
+    for (const row of ofOne.all(revision, family)) found.set(row.name, { ...row, numeric: row.numeric === 1 });
+  }
+  return [...found.values()].sort((a, b) => (a.name < b.name ? -1 : 1));
+}
+
+function countsOf(rows: readonly Read[]): VerdictCounts {
+  const counts = { over: 0, notChecked: 0, near: 0, within: 0, waiting: 0, stopped: 0 };
+  const ranks = ['within', 'near', 'notChecked', 'over'] as const;
+  for (const { status, verdict } of rows) counts[status === 'stopped' ? 'stopped' : (ranks[verdict] ?? 'waiting')] += 1;
+  return counts;
 }
 
 function massOf(rows: readonly Read[]): number | null {
