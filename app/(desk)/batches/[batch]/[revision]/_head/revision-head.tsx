@@ -1,6 +1,8 @@
 import { SheetIndex } from '@/components/sheet-index/sheet-index';
 import { TitleBlock } from '@/components/title-block/title-block';
 import { day } from '@/app/_server/dates';
+import { db } from '@/db/client';
+import { listRows } from '@/db/queries/lists';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
 import type { TableName } from '@/lib/tables/view';
@@ -12,19 +14,18 @@ export type SheetName = 'read' | 'run' | 'glance' | TableName;
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
   readonly sheet: SheetName;
-  /** Rows of each table, where they are known. */
-  readonly counts?: Partial<Record<TableName, number>>;
 }
 
 /** The numbered sheets; compare (8) and marks (9) keep their numbers for when they come. */
 const sheets = ['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems'] as const;
 
 /** Title block and sheet index over every page of a revision. */
-export function RevisionHead({ revision, sheet, counts = {} }: RevisionHeadProps) {
+export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
   const { batch, letter, frames, errors, warnings, notes } = revision;
   const number = sheets.findIndex((name) => name === sheet) + 1;
-  const known: Partial<Record<SheetName, number>> = { frames, problems: errors + warnings + notes, ...counts };
   const hasResults = revision.runStartedAt !== null;
+  const counts = hasResults ? await rowCounts(revision) : {};
+  const known: Partial<Record<SheetName, number>> = { frames, problems: errors + warnings + notes, ...counts };
   return (
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
@@ -41,6 +42,16 @@ export function RevisionHead({ revision, sheet, counts = {} }: RevisionHeadProps
       )}
     </>
   );
+}
+
+/** Rows of the tables of results; the database keeps them tallied. */
+async function rowCounts({ office, id }: RevisionRecord): Promise<Partial<Record<SheetName, number>>> {
+  const names = ['members', 'checks', 'reactions', 'movements'] as const;
+  const counted = names.map(async (table) => {
+    const page = await listRows(db(), office, id, { table, filters: [], sort: null, columns: null }, { limit: 1 });
+    return [table, page?.total ?? 0] as const;
+  });
+  return Object.fromEntries(await Promise.all(counted));
 }
 
 /** What the title block says of a revision. */

@@ -29,7 +29,7 @@ export async function TablePage({ params, searchParams, table }: TablePageProps 
   const { batch, letter, units } = revision;
   return (
     <Sheet>
-      <RevisionHead revision={revision} sheet={table} counts={{ [table]: page.total }} />
+      <RevisionHead revision={revision} sheet={table} />
       <TableSheet
         batch={batch}
         letter={letter}

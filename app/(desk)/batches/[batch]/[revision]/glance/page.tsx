@@ -12,6 +12,8 @@ import { Columns, Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { findSummary, listParameterRatios } from '@/db/queries/summary';
 import { pages } from '@/lib/api/addresses';
+import type { RevisionRecord } from '@/db/queries/revisions';
+import type { ParameterColumn } from '@/lib/tables/shown-columns';
 import type { View } from '@/lib/tables/view';
 import { RevisionHead } from '../_head/revision-head';
 import { stripFrames } from '../_head/strip-frames';
@@ -30,7 +32,7 @@ export default async function GlancePage({ params }: { readonly params: Promise<
   const nearLimit = revision.settings?.nearLimit ?? 0.9;
   const { cells, counts } = summary;
   const numeric = summary.parameters.filter((one) => one.numeric);
-  const first = numeric[0] && (await listParameterRatios(db(), person.office, revision.id, numeric[0].name));
+  const first = await firstVarying(revision, numeric);
   const worst = worstFrames(batch, letter, summary.worst);
   const over: View = {
     table: 'frames',
@@ -89,3 +91,15 @@ export default async function GlancePage({ params }: { readonly params: Promise<
     </Sheet>
   );
 }
+
+/** The first parameter that differs between frames, a span before all others, with its values. */
+async function firstVarying(revision: RevisionRecord, parameters: readonly ParameterColumn[]) {
+  const spanFirst = [...parameters].sort((a, b) => Number(isSpan(b.name)) - Number(isSpan(a.name)));
+  for (const { name } of spanFirst.slice(0, 8)) {
+    const ratios = await listParameterRatios(db(), revision.office, revision.id, name);
+    if (ratios.some((one) => one.value !== ratios[0]?.value)) return { name, ratios };
+  }
+  return undefined;
+}
+
+const isSpan = (name: string): boolean => /^(span|reach)$/i.test(name);

@@ -27,19 +27,20 @@ interface RatioOverProps {
   readonly nearLimit: number;
   /** Numeric ones, at least one. */
   readonly parameters: readonly ParameterColumn[];
-  readonly first: readonly ParameterRatio[];
+  /** The one shown first. */
+  readonly first: { readonly name: string; readonly ratios: readonly ParameterRatio[] };
   /** Ids of the frames, in sheet order. */
   readonly frames: readonly string[];
 }
 
 /** Governing ratio against a parameter of the family, which may be chosen. */
 export function RatioOver({ batch, letter, units, nearLimit, parameters, first, frames }: RatioOverProps) {
-  const [name, setName] = useState(parameters[0]?.name ?? '');
+  const [name, setName] = useState(first.name);
   const ratios = useQuery({
     queryKey: ['over', batch, letter, name],
     queryFn: ({ signal }) =>
       request<{ ratios: ParameterRatio[] }>(`${api.part(batch, letter, 'summary')}?over=${encodeURIComponent(name)}`, { signal }),
-    initialData: name === parameters[0]?.name ? { ratios: [...first] } : undefined,
+    initialData: name === first.name ? { ratios: [...first.ratios] } : undefined,
     placeholderData: keepPreviousData,
   });
   const quantity = parameterQuantity(parameters.find((one) => one.name === name)?.quantity ?? '') ?? 'number';

@@ -6,7 +6,7 @@ import { DefaultsTaken } from '@/components/intake/defaults-taken';
 import { WhatWasRead } from '@/components/intake/what-was-read';
 import { ButtonLink } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
-import { Columns, Sheet, Zone } from '@/components/ui/sheet';
+import { Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { listUploads } from '@/db/queries/uploads';
@@ -103,7 +103,12 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
       />
     </>
   );
-  return <Columns main={side} side={main} className="columns-read" />;
+  return (
+    <div className="grid min-[1100px]:grid-cols-[minmax(0,378fr)_minmax(0,1020fr)]">
+      <div className="border-hair min-w-0 max-[1099px]:order-2 max-[1099px]:border-t">{side}</div>
+      <div className="border-hair min-w-0 min-[1100px]:border-l">{main}</div>
+    </div>
+  );
 }
 
 interface Counts {

@@ -5,6 +5,7 @@ import { LevelBar } from '@/components/ui/level-bar';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
+import { formatQuantity } from '@/lib/units/format';
 import type { System } from '@/lib/units/quantity';
 
 interface ChecksTableProps {
@@ -50,7 +51,6 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
             <th scope="col" className="num" aria-sort="descending">
               Ratio ↓
             </th>
-            <th scope="col">Verdict</th>
           </tr>
         </thead>
         <tbody>
@@ -73,9 +73,7 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
               </th>
               <td>{check.check}</td>
               <td>{check.combination ?? ''}</td>
-              <td className="num">
-                <QuantityText value={check.value} quantity={check.quantity} units={units} />
-              </td>
+              <td className="num">{formatQuantity(check.value, check.quantity, units)}</td>
               <td className="num">
                 <QuantityText value={check.limit} quantity={check.quantity} units={units} />
               </td>
@@ -83,10 +81,9 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
                 <span className="tbl-ratio">
                   <LevelBar ratio={check.ratio} verdict={check.verdict} />
                   <RatioText ratio={check.ratio} verdict={check.verdict} nearLimit={nearLimit} />
+                  <VerdictMark verdict={check.verdict} />
+                  <span className="sr-only">{check.verdict}</span>
                 </span>
-              </td>
-              <td>
-                <VerdictMark verdict={check.verdict} word />
               </td>
             </tr>
           ))}
