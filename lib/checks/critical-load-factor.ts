@@ -2,6 +2,7 @@ import type { Settings } from '@/lib/model/settings';
 import type { Check, ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { figure } from './figure';
+import { SAME } from './peak';
 import { verdictOf } from './verdict';
 
 /**
@@ -18,15 +19,24 @@ export function checkCriticalLoadFactor(settings: Settings, states: readonly Res
     member: null,
   };
   const f = settings.stressFactor;
-  const rows = states.map((state): Check => {
+  const rows: Check[] = [];
+  // lowest factor so far of those that are checked and not over: the others can't govern them
+  let lowest = Infinity;
+  let refused = false;
+  for (const state of states) {
     const alpha = state.criticalLoadFactor;
     const value = alpha === null ? null : alpha * f;
-    const ratio = value === null ? 0 : 1 / value;
-    if (value !== null && value >= 1 && value < 10 && state.order === 1) {
+    const tooLow = value !== null && value >= 1 && value < 10 && state.order === 1;
+    if (!findings.all && rows.length > 0 && (tooLow ? refused : (value ?? Infinity) >= lowest * (1 - SAME))) continue;
+    if (tooLow) {
+      refused = true;
       const reason = `second-order effects not negligible (α_cr ${figure(value, 'down')}${f === 1 ? '' : ', stress factor included'})`;
-      return notCheckedRow(subject, state.name, reason, { alpha, f, value });
+      rows.push(notCheckedRow(subject, state.name, reason, { alpha, f, value }));
+      continue;
     }
-    return {
+    lowest = Math.min(lowest, value ?? Infinity);
+    const ratio = value === null ? 0 : 1 / value;
+    rows.push({
       ...subject,
       combination: state.name,
       at: null,
@@ -37,7 +47,7 @@ export function checkCriticalLoadFactor(settings: Settings, states: readonly Res
       verdict: verdictOf(ratio, settings.nearLimit),
       reason: null,
       inputs: { alpha, f, value, limit: 1, ratio },
-    };
-  });
+    });
+  }
   keepGoverning(findings, rows);
 }

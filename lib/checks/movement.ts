@@ -60,43 +60,45 @@ export function checkMovement(
   findings: Findings,
 ): void {
   const rows: Check[] = [];
-  let largest = -1;
+  const row = (c: number, limit: Limit, allowed: number, { value, at }: Movement): Check => {
+    const ratio = value / allowed;
+    const put = { n: limit.ratio, absolute: limit.absolute_m, length: length_m, x: at, value, limit: allowed, ratio };
+    return {
+      subjectKind: subject.subjectKind,
+      subject: subject.subject,
+      check: subject.check,
+      combination: states[c]!.name,
+      at,
+      face: null,
+      value,
+      limit: allowed,
+      quantity: subject.quantity,
+      ratio,
+      verdict: verdictOf(ratio, settings.nearLimit),
+      reason: null,
+      reference: limit.source,
+      member: subject.member,
+      inputs: Object.assign(put, inputsOf(c)),
+    };
+  };
+  // what governs so far, where not every row is wanted
+  let best: { readonly c: number; readonly limit: Limit; readonly allowed: number; readonly movement: Movement } | null = null;
   for (let c = 0; c < states.length; c++) {
     const combination = states[c]!.name;
     const limit = limitIn(limits, combination);
     if (!limit) continue;
     const allowed = allowance(limit, length_m);
     if (allowed === null || !(allowed > 0)) {
-      rows.push(
-        notCheckedRow(
-          subject,
-          combination,
-          `needs ${measure === 'displacement' ? 'absolute' : 'ratio or absolute'} in ${limit.source}`,
-        ),
-      );
+      const needs = measure === 'displacement' ? 'absolute' : 'ratio or absolute';
+      rows.push(notCheckedRow(subject, combination, `needs ${needs} in ${limit.source}`));
       continue;
     }
-    const { value, at } = measured(c);
-    const ratio = value / allowed;
-    if (!findings.all && largest >= 0 && ratio <= largest * (1 + SAME)) continue;
-    largest = Math.max(largest, ratio);
-    const verdict = verdictOf(ratio, settings.nearLimit);
-    const put = { n: limit.ratio, absolute: limit.absolute_m, length: length_m, x: at, value, limit: allowed, ratio };
-    const inputs = { ...inputsOf(c), ...put };
-    rows.push({
-      ...subject,
-      combination,
-      at,
-      face: null,
-      value,
-      limit: allowed,
-      ratio,
-      verdict,
-      reason: null,
-      reference: limit.source,
-      inputs,
-    });
+    const movement = measured(c);
+    if (findings.all) rows.push(row(c, limit, allowed, movement));
+    else if (!best || movement.value / allowed > (best.movement.value / best.allowed) * (1 + SAME))
+      best = { c, limit, allowed, movement };
   }
+  if (best) rows.push(row(best.c, best.limit, best.allowed, best.movement));
   if (rows.length === 0)
     rows.push(notCheckedRow(subject, null, states.length === 0 ? findings.noService : whyNone(measure, limits)));
   keepGoverning(findings, rows);

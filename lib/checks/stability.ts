@@ -129,7 +129,7 @@ function refused(
   of: SpanBuckling,
   found: Screening,
 ): Check {
-  const inputs = inputsOf(settings, span, of, found);
+  const inputs = inputsOf(settings, span, of, found, null);
   if (found.needs.length > 0) return notCheckedRow(subject, state.name, `needs ${found.needs.join(', ')}`, inputs);
   const figures: string[] = [];
   if (found.major > NEGLIGIBLE_N) figures.push(`N/N_cr major ${figure(found.major, 'up')}`);
@@ -149,34 +149,60 @@ function negligible(
 ): Check {
   const { ratio } = found;
   return {
-    ...subject,
+    subjectKind: subject.subjectKind,
+    subject: subject.subject,
+    check: subject.check,
     combination: state.name,
     at: null,
     face: null,
     value: ratio,
     limit: 1,
+    quantity: subject.quantity,
     ratio,
     verdict: 'within',
     reason: null,
-    inputs: { ...inputsOf(settings, span, of, found), value: ratio, limit: 1, ratio },
+    reference: subject.reference,
+    member: subject.member,
+    inputs: inputsOf(settings, span, of, found, ratio),
   };
 }
 
-function inputsOf(settings: Settings, span: Span, of: SpanBuckling, found: Screening): Check['inputs'] {
-  const { E, Imajor, Iminor, Lmajor, Lminor, NcrMajor, NcrMinor, ltb } = of;
-  const inputs: Record<string, number | string | null> = { f: settings.stressFactor, E, L: span.length_m, N: found.N };
-  if (found.N > 0) {
-    Object.assign(inputs, { Imajor, Lmajor, NcrMajor, NNcrMajor: found.major });
-    if (Iminor !== null) Object.assign(inputs, { Iminor, Lminor, NcrMinor, NNcrMinor: found.minor });
-  }
-  if (found.positive === 0 && found.negative === 0) return { ...inputs, M: 0 };
-  if (ltb.kind === 'none') return { ...inputs, M: Math.max(found.positive, found.negative), noLtb: ltb.why };
-  if (ltb.kind === 'needs') return inputs;
+/** Everything the working puts in; what a combination does not bring about (no compression, no bending) is null. */
+function inputsOf(settings: Settings, span: Span, of: SpanBuckling, found: Screening, ratio: number | null): Check['inputs'] {
+  const { E, ltb } = of;
+  const { N } = found;
+  const pressed = N > 0;
+  const minor = pressed && of.Iminor !== null;
+  const bent = found.positive > 0 || found.negative > 0;
   const top = found.positive / of.McrTop >= found.negative / of.McrBottom;
-  const M = top ? found.positive : -found.negative;
-  const { Iz, It, Iw, G } = ltb;
-  const at = top ? { ltbFace: 'top', Lltb: of.Ltop, Mcr: of.McrTop } : { ltbFace: 'bottom', Lltb: of.Lbottom, Mcr: of.McrBottom };
-  return { ...inputs, M, ...at, Iz, It, Iw, G, MMcr: found.bending };
+  const formula = bent && ltb.kind === 'formula' ? ltb : null;
+  return {
+    f: settings.stressFactor,
+    E,
+    L: span.length_m,
+    N,
+    Imajor: pressed ? of.Imajor : null,
+    Lmajor: pressed ? of.Lmajor : null,
+    NcrMajor: pressed ? of.NcrMajor : null,
+    NNcrMajor: pressed ? found.major : null,
+    Iminor: minor ? of.Iminor : null,
+    Lminor: minor ? of.Lminor : null,
+    NcrMinor: minor ? of.NcrMinor : null,
+    NNcrMinor: minor ? found.minor : null,
+    M: (formula ? top : found.positive >= found.negative) ? found.positive : -found.negative,
+    noLtb: bent && ltb.kind === 'none' ? ltb.why : null,
+    ltbFace: formula ? (top ? 'top' : 'bottom') : null,
+    Lltb: formula ? (top ? of.Ltop : of.Lbottom) : null,
+    Mcr: formula ? (top ? of.McrTop : of.McrBottom) : null,
+    Iz: formula?.Iz ?? null,
+    It: formula?.It ?? null,
+    Iw: formula?.Iw ?? null,
+    G: formula?.G ?? null,
+    MMcr: formula ? found.bending : null,
+    value: ratio,
+    limit: ratio === null ? null : 1,
+    ratio,
+  };
 }
 
 const points = new Float64Array(32);
