@@ -126,7 +126,7 @@ function hardlyHeld(frame: Frame, t: Topology, angles: Float64Array, condition: 
     code: 'not-solved',
     node,
     message:
-      `Node ${node} can ${how} almost freely: stiffnesses differ so much that only ${Math.max(0, Math.floor(digits))} digits ` +
+      `Node ${node} can almost freely ${how}: stiffnesses differ so much that only ${Math.max(0, Math.floor(digits))} digits ` +
       `of the results would be right (6 are asked for). ${remedy}.`,
   };
 }

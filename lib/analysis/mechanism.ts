@@ -95,7 +95,7 @@ export function describeMovement(frame: Frame, t: Topology, angles: Float64Array
 /** The failure for a frame that can move without resistance. */
 export function freeToMove(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array): Failure {
   const { node, how, remedy } = describeMovement(frame, t, angles, z);
-  return { code: 'mechanism', node, message: `Node ${node} can ${how} freely, so the frame has no solution. ${remedy}.` };
+  return { code: 'mechanism', node, message: `Node ${node} can freely ${how}, so the frame has no solution. ${remedy}.` };
 }
 
 function remedy(hold: string, pins: readonly string[]): string {
