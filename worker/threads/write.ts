@@ -8,6 +8,8 @@ import { PortSink } from './port-sink';
 import { revisionSource } from './revision-source';
 import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 
+export { writeMarkedCopy } from './write-marked-copy';
+
 export type ResultFile = 'xlsx' | 'json' | 'csv';
 
 export interface WriteTask {

@@ -104,7 +104,7 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
     </>
   );
   return (
-    <div className="grid min-[1100px]:grid-cols-[minmax(0,378fr)_minmax(0,1020fr)]">
+    <div className="grid min-[1100px]:grid-cols-[minmax(0,418fr)_minmax(0,980fr)]">
       <div className="border-hair min-w-0 max-[1099px]:order-2 max-[1099px]:border-t">{side}</div>
       <div className="border-hair min-w-0 min-[1100px]:border-l">{main}</div>
     </div>

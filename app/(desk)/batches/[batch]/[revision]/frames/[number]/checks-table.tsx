@@ -35,7 +35,7 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
       aria-label="Checks; arrow keys open a working"
       onKeyDown={onKeyDown}
     >
-      <table className="tbl tbl-side">
+      <table className="tbl tbl-side [&_td]:px-1 [&_th]:px-1">
         <caption className="sr-only">Checks, the worst first</caption>
         <thead>
           <tr>
