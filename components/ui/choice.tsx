@@ -28,7 +28,7 @@ export function Choice({ label, options, value, onChange, several = false, text,
   const [open, setOpen] = useState(false);
   const [at, setAt] = useState(0);
   const root = useRef<HTMLSpanElement>(null);
-  const list = useRef<HTMLUListElement>(null);
+  const list = useRef<HTMLSpanElement>(null);
   const button = useRef<HTMLButtonElement>(null);
   const typed = useRef({ text: '', time: 0 });
   const chosen = options.filter((option) => value.includes(option.value)).map((option) => option.label);
@@ -111,7 +111,7 @@ export function Choice({ label, options, value, onChange, several = false, text,
         </svg>
       </button>
       {open && (
-        <ul
+        <span
           ref={list}
           className="choice-list"
           role="listbox"
@@ -122,7 +122,7 @@ export function Choice({ label, options, value, onChange, several = false, text,
           onKeyDown={onKeyDown}
         >
           {options.map((option, index) => (
-            <li
+            <span
               key={option.value}
               id={`${id}-${index}`}
               role="option"
@@ -133,14 +133,14 @@ export function Choice({ label, options, value, onChange, several = false, text,
             >
               <span>{option.label}</span>
               {option.count !== undefined && <span className="choice-count">{option.count.toLocaleString('en-GB')}</span>}
-            </li>
+            </span>
           ))}
           {options.length === 0 && (
-            <li role="option" aria-selected={false} aria-disabled="true" className="choice-none">
+            <span role="option" aria-selected={false} aria-disabled="true" className="choice-none">
               {loading ? 'reading the values' : 'no values here'}
-            </li>
+            </span>
           )}
-        </ul>
+        </span>
       )}
     </span>
   );

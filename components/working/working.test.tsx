@@ -1,0 +1,41 @@
+import { render, screen } from '@testing-library/react';
+import { describe, expect, it } from 'vitest';
+import { Working } from './working';
+
+describe('a working', () => {
+  it('sets out formula, numbers and result, with fractions as columns and the source at the end', () => {
+    render(
+      <Working
+        title="rafter BC, normal stress"
+        reference="elastic stress"
+        ratio={1.003}
+        verdict="over"
+        nearLimit={0.9}
+        lines={[
+          {
+            what: 'normal stress',
+            parts: [
+              { kind: 'symbol', symbol: 'σ' },
+              { kind: 'text', text: '=' },
+              { kind: 'fraction', over: [{ kind: 'symbol', symbol: 'N' }], under: [{ kind: 'symbol', symbol: 'A' }] },
+            ],
+          },
+          { what: 'limit', parts: [{ kind: 'result', text: '165.0', unit: 'MPa' }], source: 'Setup B6' },
+        ]}
+      />,
+    );
+    expect(screen.getByRole('region', { name: 'Working: rafter BC, normal stress' })).toBeInTheDocument();
+    const fraction = document.querySelector('.w-fraction')!;
+    expect(fraction.querySelector('.w-over')).toHaveTextContent('N');
+    expect(fraction).toHaveTextContent('N over A');
+    expect(screen.getByText('165.0 MPa').closest('b')).not.toBeNull();
+    expect(screen.getByText('Setup B6')).toBeInTheDocument();
+    expect(screen.getByText('1.01')).toBeInTheDocument();
+    expect(document.querySelector('.verdict-over')).toHaveTextContent('over');
+  });
+
+  it('gives the reason where a check was not made', () => {
+    render(<Working title="AB, shear stress" ratio={null} verdict="not checked" nearLimit={0.9} reason="needs Av" lines={[]} />);
+    expect(screen.getByText(/needs Av/)).toBeInTheDocument();
+  });
+});
