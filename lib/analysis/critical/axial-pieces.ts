@@ -77,6 +77,6 @@ function even(member: number, N: (s: number) => number, floor: number, most: num
 /** Pieces to a whole member's length; the error falls with their fourth power (README §4 gives it measured). */
 function piecesOf(compressed: boolean, variation: number): number {
   if (variation === 0) return compressed ? 2 : 1;
-  if (variation < 0.05) return 2;
-  return variation < 0.3 ? 4 : 8;
+  if (variation < 0.02) return 2;
+  return variation < 0.15 ? 4 : 12;
 }
