@@ -2,6 +2,7 @@ import { orNull } from '@/db/absent';
 import { type Db, driverOf, type RawDatabase } from '@/db/open';
 import { stampOf } from '@/db/queries/lists';
 import type { VerdictCounts } from '@/db/queries/verdict-counts';
+import { remembered } from '@/db/remembered';
 import type { FrameStatus } from '@/db/schema';
 import { statement } from '@/db/statements';
 import { verdictOf } from '@/db/verdict-rank';
@@ -55,25 +56,34 @@ const steps = 26; // up to 1.25, and all above
 /** A revision at a glance. @returns undefined where it is not the office's */
 export async function findSummary(db: Db, office: number, revision: number): Promise<BatchSummary | undefined> {
   const raw = driverOf(db);
-  if (stampOf(raw, office, revision) === undefined) return undefined;
+  const stamp = stampOf(raw, office, revision);
+  if (stamp === undefined) return undefined;
+  return remembered(raw, 'summary', `${revision} ${stamp}`, () => summarise(raw, revision));
+}
+
+function summarise(raw: RawDatabase, revision: number): BatchSummary {
   const rows = readFrames(raw, revision);
   const cells = rows.map(cellOf);
-  const frames = Array<number>(steps).fill(0);
-  for (const { ratio } of cells) {
-    if (ratio === null) continue;
-    const at = Math.max(Math.ceil(ratio * perUnit) - 1, 0);
-    frames[Math.min(at, steps - 1)]! += 1;
-  }
   return {
     counts: countsOf(rows),
     cells,
-    spread: { step: 1 / perUnit, frames },
+    spread: spreadOf(cells),
     governing: governingChecks(cells),
     sections: sectionsOf(raw, revision),
     worst: worstOf(raw, revision, cells),
     parameters: parametersOf(raw, revision),
     mass: massOf(rows),
   };
+}
+
+function spreadOf(cells: readonly SummaryCell[]): BatchSummary['spread'] {
+  const frames = Array<number>(steps).fill(0);
+  for (const { ratio } of cells) {
+    if (ratio === null) continue;
+    const at = Math.max(Math.ceil(ratio * perUnit) - 1, 0);
+    frames[Math.min(at, steps - 1)]! += 1;
+  }
+  return { step: 1 / perUnit, frames };
 }
 
 /** Values of one numeric parameter beside each frame's ratio, in sheet order: a picture over a parameter. */
