@@ -1,4 +1,4 @@
-import type { Extreme, MemberExtremes, MemberLine, Polynomial, Segment } from '@/lib/results/result';
+import type { Extreme, MemberExtremes, MemberLine, Polynomial } from '@/lib/results/result';
 import { derivative, evaluate, rootsWithin } from './polynomial';
 
 /** Values this close, relative to the largest, are equal: the one nearest the start is named. */
@@ -6,37 +6,38 @@ const equal = 1e-9;
 
 /** Extremes of N, V, M over a member, and its largest departure from the line between its moved ends (README §3). */
 export function memberExtremes(line: MemberLine): MemberExtremes {
-  return {
-    N: extremeOf(line, (segment) => segment.N),
-    V: extremeOf(line, (segment) => segment.V),
-    M: extremeOf(line, (segment) => segment.M),
-    deflection: departure(line),
-  };
+  return { N: extremeOf(line, 'N'), V: extremeOf(line, 'V'), M: extremeOf(line, 'M'), deflection: departure(line) };
 }
 
-/** Candidates: both ends of every segment (both sides of jumps) and the roots of the derivative. Ascending in x. */
-function candidates(line: MemberLine, pick: (segment: Segment) => Polynomial): { xs: number[]; values: number[] } {
-  const xs: number[] = [];
-  const values: number[] = [];
-  for (const segment of line.segments) {
-    const p = pick(segment);
-    const s = segment.to - segment.from;
-    xs.push(segment.from);
-    values.push(evaluate(p, 0));
-    if (s === 0) continue;
-    const largest = p.reduce((most, c, i) => Math.max(most, Math.abs(c) * s ** i), 0);
+/** Places where a quantity can be extreme, ascending, and its values there. */
+interface Candidates {
+  readonly xs: number[];
+  readonly values: number[];
+}
+
+/** Both ends of a segment (so both sides of jumps) and the roots of the derivative within it. */
+function addCandidates(p: Polynomial, from: number, to: number, { xs, values }: Candidates): void {
+  const s = to - from;
+  xs.push(from);
+  values.push(p[0]!);
+  if (s === 0) return;
+  if (p.length > 2) {
+    let largest = 0;
+    let power = 1;
+    for (let i = 0; i < p.length; i++, power *= s) largest = Math.max(largest, Math.abs(p[i]!) * power);
     for (const root of rootsWithin(derivative(p), s, (1e-13 * largest) / s)) {
-      xs.push(segment.from + root);
+      xs.push(from + root);
       values.push(evaluate(p, root));
     }
-    xs.push(segment.to);
-    values.push(evaluate(p, s));
   }
-  return { xs, values };
+  xs.push(to);
+  values.push(evaluate(p, s));
 }
 
-function extremeOf(line: MemberLine, pick: (segment: Segment) => Polynomial): Extreme {
-  const { xs, values } = candidates(line, pick);
+function extremeOf(line: MemberLine, quantity: 'N' | 'V' | 'M'): Extreme {
+  const found: Candidates = { xs: [], values: [] };
+  for (const segment of line.segments) addCandidates(segment[quantity], segment.from, segment.to, found);
+  const { xs, values } = found;
   let max = -Infinity;
   let min = Infinity;
   for (const value of values) {
@@ -44,35 +45,34 @@ function extremeOf(line: MemberLine, pick: (segment: Segment) => Polynomial): Ex
     if (value < min) min = value;
   }
   const near = equal * Math.max(Math.abs(max), Math.abs(min));
-  const maxAt = xs[values.findIndex((value) => value >= max - near)]!;
-  const minAt = xs[values.findIndex((value) => value <= min + near)]!;
-  return { max, maxAt, min, minAt };
+  let first = 0;
+  while (values[first]! < max - near) first++;
+  let last = 0;
+  while (values[last]! > min + near) last++;
+  return { max, maxAt: xs[first]!, min, minAt: xs[last]! };
 }
 
-/** v less the chord between the moved ends, as a polynomial of each segment. */
-export function departureLine(line: MemberLine): MemberLine {
-  const first = line.segments[0]!;
-  const last = line.segments[line.segments.length - 1]!;
-  const v1 = evaluate(first.v, 0);
-  const v2 = evaluate(last.v, last.to - last.from);
-  const turn = (v2 - v1) / line.length;
-  return {
-    length: line.length,
-    segments: line.segments.map((segment) => {
-      const v = [...segment.v];
-      v[0] = v[0]! - v1 - turn * segment.from;
-      if (v.length > 1) v[1] = v[1]! - turn;
-      return { ...segment, v };
-    }),
-  };
-}
-
+/** Largest of |v − chord|: what stands at the ends is rounding, for they are on the chord by definition. */
 function departure(line: MemberLine): { value: number; at: number } {
-  const { xs, values } = candidates(departureLine(line), (segment) => segment.v);
-  const largest = values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
-  const i = values.findIndex((value) => Math.abs(value) >= largest * (1 - equal));
-  // the ends are on the chord by definition: what is there is rounding
-  const x = xs[i]!;
-  if (x === 0 || x === line.length) return { value: 0, at: 0 };
-  return { value: values[i]!, at: x };
+  const { segments, length } = line;
+  const end = segments[segments.length - 1]!;
+  const v1 = segments[0]!.v[0]!;
+  const turn = (evaluate(end.v, end.to - end.from) - v1) / length;
+  const found: Candidates = { xs: [], values: [] };
+  let moved = 0;
+  for (const { v, from, to } of segments) {
+    const p = v.slice();
+    moved = Math.max(moved, Math.abs(p[0]!));
+    p[0] = p[0]! - v1 - turn * from;
+    if (p.length > 1) p[1] = p[1]! - turn;
+    addCandidates(p, from, to, found);
+  }
+  const { xs, values } = found;
+  let largest = 0;
+  for (const value of values) largest = Math.max(largest, Math.abs(value));
+  if (largest <= 1e-12 * moved) return { value: 0, at: 0 };
+  let i = 0;
+  while (Math.abs(values[i]!) < largest * (1 - equal)) i++;
+  if (xs[i] === 0 || xs[i] === length) return { value: 0, at: 0 };
+  return { value: values[i]!, at: xs[i]! };
 }

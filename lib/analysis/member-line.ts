@@ -75,14 +75,24 @@ function actingLoads(frame: Frame, state: ResultState, member: number): Acting {
   let curvature = 0;
   for (let c = 0; c < cases; c++) {
     const k = state.factors[c]!;
-    const loads = all[member * cases + c];
-    if (k === 0 || !loads) continue;
-    for (const q of loads.lines) lines.push({ a: q.a, b: q.b, qx1: k * q.qx1, qx2: k * q.qx2, qy1: k * q.qy1, qy2: k * q.qy2 });
+    const loads = k === 0 ? undefined : all[member * cases + c];
+    if (!loads) continue;
+    for (const q of loads.lines) {
+      const line = { a: q.a, b: q.b, qx1: k * q.qx1, qx2: k * q.qx2, qy1: k * q.qy1, qy2: k * q.qy2 };
+      const same = lines.findIndex((other) => other.a === q.a && other.b === q.b);
+      if (same < 0) lines.push(line);
+      else lines[same] = together(lines[same]!, line);
+    }
     for (const p of loads.places) places.push({ x: p.x, Px: k * p.Px, Py: k * p.Py, M: k * p.M });
     strain += k * loads.strain;
     curvature += k * loads.curvature;
   }
   return { lines, places, strain, curvature };
+}
+
+/** Two line loads over the same length as one. */
+function together(p: LineLoad, q: LineLoad): LineLoad {
+  return { a: p.a, b: p.b, qx1: p.qx1 + q.qx1, qx2: p.qx2 + q.qx2, qy1: p.qy1 + q.qy1, qy2: p.qy2 + q.qy2 };
 }
 
 /** Places along the member, ascending, those within rounding of one another (or of an end) taken as one. */

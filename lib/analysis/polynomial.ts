@@ -27,7 +27,11 @@ export function integral(p: Polynomial, constant: number): number[] {
  */
 export function rootsWithin(p: Polynomial, length: number, nothing: number): number[] {
   let degree = p.length - 1;
-  while (degree > 0 && Math.abs(p[degree]!) * length ** degree <= nothing) degree--;
+  let power = length ** degree;
+  while (degree > 0 && Math.abs(p[degree]!) * power <= nothing) {
+    degree--;
+    power /= length;
+  }
   if (degree <= 0) return [];
   if (degree === 1) return within([-p[0]! / p[1]!], length);
   if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length);

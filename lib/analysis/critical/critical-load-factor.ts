@@ -49,6 +49,8 @@ export function criticalLoadFactor(
   const reference = at(0).logSize;
   const signed = (lambda: number): number => {
     const { count, logSize } = at(lambda);
+    // exactly on a pole of some piece: a hair beside it says as much
+    if (!Number.isFinite(logSize)) return signed(lambda * (1 + 1e-13));
     const f = Math.exp(Math.min(700, logSize - reference));
     return count === 0 ? f : -Math.max(Number.MIN_VALUE, f ** (1 / count));
   };
