@@ -16,7 +16,7 @@ import {
   listRevisions,
   updateRevisionState,
 } from '@/db/queries/revisions';
-import { findSummary, listParameterRatios } from '@/db/queries/summary';
+import { findSummary, listParameterRatios, listParameters } from '@/db/queries/summary';
 import { insertUpload, listUploadedFiles, listUploads } from '@/db/queries/uploads';
 import type { OpenDatabase } from '@/db/open';
 import { newDatabase } from '@/db/testing/database';
@@ -75,6 +75,7 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
   listFacets: ({ db }, asking, of) => listFacets(db, asking, of.revision, 'members', 'section'),
   listFacetsOfParameters: ({ db }, asking, of) => listFacets(db, asking, of.revision, 'frames', 'p:span'),
   findSummary: ({ db }, asking, of) => findSummary(db, asking, of.revision),
+  listParameters: ({ db }, asking, of) => listParameters(db, asking, of.revision),
   listParameterRatios: ({ db }, asking, of) => listParameterRatios(db, asking, of.revision, 'span'),
   findLatestJob: ({ db }, asking, of) => findLatestJob(db, asking, of.revision, 'run'),
   listActivityOfProject: ({ db }, asking, of) => listActivity(db, asking, { project: of.project }),

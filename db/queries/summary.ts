@@ -86,6 +86,12 @@ function spreadOf(cells: readonly SummaryCell[]): BatchSummary['spread'] {
   return { step: 1 / perUnit, frames };
 }
 
+/** Parameters of the families of a revision's frames, by name. Empty for a revision that is not the office's. */
+export async function listParameters(db: Db, office: number, revision: number): Promise<BatchSummary['parameters']> {
+  const raw = driverOf(db);
+  return stampOf(raw, office, revision) === undefined ? [] : parametersOf(raw, revision);
+}
+
 /** Values of one numeric parameter beside each frame's ratio, in sheet order: a picture over a parameter. */
 export async function listParameterRatios(
   db: Db,
