@@ -22,7 +22,7 @@ export function integral(p: Polynomial, constant: number): number[] {
 
 /**
  * Roots of p strictly within (0, length), ascending, each to the last digit: between neighbouring roots of its
- * derivative p is monotonic, so one change of sign is one root, found by bisection with secant steps.
+ * derivative p is monotonic, so one change of sign is one root, found by Newton's steps kept inside it.
  * A polynomial that is nothing but rounding (every term at most `nothing` over the length) has none.
  */
 export function rootsWithin(p: Polynomial, length: number, nothing: number): number[] {
@@ -36,7 +36,8 @@ export function rootsWithin(p: Polynomial, length: number, nothing: number): num
   if (degree === 1) return within([-p[0]! / p[1]!], length);
   if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length);
   const q = p.slice(0, degree + 1);
-  const turns = [0, ...rootsWithin(derivative(q), length, nothing / length), length];
+  const slope = derivative(q);
+  const turns = [0, ...rootsWithin(slope, length, nothing / length), length];
   const roots: number[] = [];
   for (let i = 1; i < turns.length; i++) {
     const a = turns[i - 1]!;
@@ -44,7 +45,7 @@ export function rootsWithin(p: Polynomial, length: number, nothing: number): num
     const fa = evaluate(q, a);
     const fb = evaluate(q, b);
     if (fa === 0 && a > 0) roots.push(a);
-    else if (fa * fb < 0) roots.push(between(q, a, b, fa));
+    else if (fa * fb < 0) roots.push(between(q, slope, a, b, fa));
   }
   return within(roots, length);
 }
@@ -63,28 +64,21 @@ function quadratic(c: number, b: number, a: number, length: number): number[] {
   return within(roots[0] === roots[1] ? [roots[0]!] : roots, length);
 }
 
-/** The root in (a, b), where p changes sign once: regula falsi (Illinois), halved whenever it is slow. */
-function between(p: Polynomial, a: number, b: number, fa: number): number {
-  let fb = evaluate(p, b);
-  let side = 0;
-  for (let pass = 0; pass < 200; pass++) {
-    let x = pass % 3 === 2 ? (a + b) / 2 : (a * fb - b * fa) / (fb - fa);
-    if (!(x > a && x < b)) x = (a + b) / 2;
-    if (x <= a || x >= b) break;
+/** The root in (a, b), where p changes sign once: Newton's steps, halving wherever one would leave the bracket. */
+function between(p: Polynomial, slope: Polynomial, a: number, b: number, fa: number): number {
+  let x = (a + b) / 2;
+  for (let pass = 0; pass < 100; pass++) {
     const fx = evaluate(p, x);
     if (fx === 0) return x;
-    if (fx < 0 === fa < 0) {
-      a = x;
-      fa = fx;
-      if (side === -1) fb /= 2;
-      side = -1;
-    } else {
-      b = x;
-      fb = fx;
-      if (side === 1) fa /= 2;
-      side = 1;
-    }
-    if (b - a <= 2e-16 * Math.abs(b)) break;
+    if (fx < 0 === fa < 0) a = x;
+    else b = x;
+    const next = x - fx / evaluate(slope, x);
+    const inside = next > a && next < b;
+    const step = inside ? next : (a + b) / 2;
+    if (step === x || b - a <= 2e-16 * b) break;
+    const close = inside && Math.abs(step - x) <= 2e-16 * b;
+    x = step;
+    if (close) break;
   }
-  return (a + b) / 2;
+  return x;
 }
