@@ -1,9 +1,13 @@
 import { idText } from '@/lib/intake/ids';
+import { openEnded } from '@/lib/intake/sheet-definitions';
 import type { LeveledRow } from '@/lib/intake/rows-by-frame';
 import type { Row } from '@/lib/intake/table';
 
-/** True where two rows of one sheet say the same in every known column. */
+/** True where two rows of one sheet say the same in every column that is read. */
 export function sameContent(a: Row, b: Row): boolean {
+  if (a.part === b.part && openEnded.has(a.part.definition.name)) {
+    return a.part.columns.every(({ index }) => textKey(a, index) === textKey(b, index));
+  }
   const names = new Set([...a.part.byName.keys(), ...b.part.byName.keys()]);
   for (const name of names) if (cellKey(a, name) !== cellKey(b, name)) return false;
   return true;
@@ -18,7 +22,11 @@ export function contentKey(row: Row): string {
 
 function cellKey(row: Row, name: string): string {
   const column = row.part.byName.get(name);
-  const text = column && row.raw.cells[column.index]?.text;
+  return column ? textKey(row, column.index) : '';
+}
+
+function textKey(row: Row, index: number): string {
+  const text = row.raw.cells[index]?.text;
   return text === undefined ? '' : idText(text).toLowerCase();
 }
 

@@ -91,7 +91,7 @@ function readFrames(batch: Batch): FrameRead[] {
     if (!entry.run) continue;
     // a variant with a parameter wrong has said so at its cell
     const frame = isReadable(entry) ? builder.build(entry) : null;
-    if (frame) warnings.look(frame);
+    if (frame) warnings.look(frame, batch.cases.for(entry).sound);
     read.push({ id: entry.id, frame: problems.stopped.has(entry.id) ? null : frame });
   }
   builder.finish();

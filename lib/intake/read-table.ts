@@ -1,7 +1,7 @@
 import type { RawCell, RawPart, RawRow, RawSheet } from '@/lib/intake/files/raw-sheet';
 import { type HeadingMeaning, type HeadingText, meaningOf, splitHeading } from '@/lib/intake/headings';
 import type { Entry, ProblemList } from '@/lib/intake/problem-list';
-import type { SheetDefinition } from '@/lib/intake/sheet-definitions';
+import { openEnded, type SheetDefinition } from '@/lib/intake/sheet-definitions';
 import { type Column, headingPlace, type Part, partPlace, type Row, type Table } from '@/lib/intake/table';
 import { settleUnit, unitRowOf } from '@/lib/intake/unit-row';
 import { wordKey } from '@/lib/intake/words';
@@ -111,9 +111,6 @@ function tellMissing(
   }
   return missing;
 }
-
-/** Columns of Variants (parameters) and of wide Combinations (cases) are told by their own sheets. */
-const openEnded = new Set(['Variants', 'Combinations']);
 
 function columnFor(part: Part, heading: Heading, definition: SheetDefinition, problems: ProblemList): Column {
   const { meaning, index, text, name } = heading;

@@ -255,7 +255,9 @@ export class Reader {
     if (!node) return blame(say.badExpression(fault ?? ''), []);
     if (!reading.parameters && names.length > 0) return blame(say.expressionOutsideFamily(), []);
     try {
-      return evaluate(node, reading.parameters ?? none);
+      const value = evaluate(node, reading.parameters ?? none);
+      // −0 is 0
+      return value === 0 ? 0 : value;
     } catch (problem) {
       if (!(problem instanceof ExpressionFault)) throw problem;
       return blame(say.badExpression(problem.message), problem.names);

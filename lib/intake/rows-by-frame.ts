@@ -82,9 +82,11 @@ export class RowsByFrame {
 
   /** Tells the rows for all frames that fit none; to be asked when every frame is read. */
   tellUnfit(reader: Reader, frames: readonly FrameEntry[], problems: ProblemList): void {
-    if (!frames.some((frame) => frame.run) || problems.stopsAll) return;
+    const running = frames.filter((frame) => frame.run);
+    // a variant that could not be read may be the very frame it is for
+    if (running.length === 0 || problems.stopsAll || running.some((frame) => frame.variant?.complete === false)) return;
     for (const { row } of this.all) {
-      if (this.fitting.has(row)) continue;
+      if (this.fitting.has(row) || rawCell(row, 'frame') === null) continue;
       reader.tell(row, 'frame', { code: 'unknown-node', message: say.starFitsNone() }, forNobody);
     }
   }

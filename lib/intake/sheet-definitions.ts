@@ -79,3 +79,6 @@ const definitions: readonly SheetDefinition[] = [
 ];
 
 export const sheetDefinitions: ReadonlyMap<SheetName, SheetDefinition> = new Map(definitions.map((d) => [d.name, d]));
+
+/** Sheets with columns of the file's own: parameters in Variants, cases in wide Combinations. */
+export const openEnded: ReadonlySet<SheetName> = new Set(['Variants', 'Combinations']);

@@ -2,7 +2,7 @@ import type { RawRow } from '@/lib/intake/files/raw-sheet';
 import type { HeadingMeaning } from '@/lib/intake/headings';
 import { splitHeading } from '@/lib/intake/headings';
 import type { Fault, ProblemList } from '@/lib/intake/problem-list';
-import type { SheetDefinition } from '@/lib/intake/sheet-definitions';
+import { openEnded, type SheetDefinition } from '@/lib/intake/sheet-definitions';
 import { type Column, headingPlace, type Part } from '@/lib/intake/table';
 import * as say from '@/lib/problems/wording';
 import { batchUnit } from '@/lib/units/batch-unit';
@@ -33,7 +33,7 @@ export function unitRowOf(
     if (cell.kind !== 'text' || /^[\d.,+−]/.test(text) || !parseUnit(text)) return null;
     const heading = headings.find((h) => h.index === index);
     if (!heading) continue;
-    const open = heading.meaning.kind === 'unknown' && (definition.name === 'Variants' || definition.name === 'Combinations');
+    const open = heading.meaning.kind === 'unknown' && openEnded.has(definition.name);
     if (open || (heading.meaning.kind === 'column' && definition.columns.get(heading.meaning.known))) overNumbers = true;
   }
   return overNumbers ? row : null;

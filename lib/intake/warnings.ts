@@ -14,10 +14,10 @@ export class BatchWarnings {
 
   constructor(private readonly batch: Batch) {}
 
-  /** Looks at one frame that is read. */
-  look(frame: Frame): void {
-    this.weighed += 1;
-    if (!frame.cases.some((each) => each.selfWeight !== 0)) this.light.add(frame.id);
+  /** Looks at one frame that is read. @param casesSound false where a row of its load cases is wrong (told) */
+  look(frame: Frame, casesSound: boolean): void {
+    if (casesSound) this.weighed += 1;
+    if (casesSound && !frame.cases.some((each) => each.selfWeight !== 0)) this.light.add(frame.id);
     if (this.judged.has(frame.combinations)) return;
     this.judged.add(frame.combinations);
     for (const combination of frame.combinations) {

@@ -73,7 +73,11 @@ export class CombinationTerms {
           );
       } else if (found) {
         const first = seen.get(found.key);
-        if (first) problems.add(headingPlace(part, column), { code: 'conflicting-row', message: say.columnTwice(column.text, first.text), stopsAll: true }, null); // prettier-ignore
+        if (first) {
+          const message = say.columnTwice(column.text, first.text);
+          problems.add(headingPlace(part, column), { code: 'conflicting-row', message, stopsAll: true }, null);
+          continue;
+        }
         seen.set(found.key, column);
         columns.push({ column, caseKey: found.key, caseName: found.name, unknown: null });
       } else if (filled) {

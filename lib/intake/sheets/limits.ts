@@ -3,7 +3,7 @@ import type { Draft } from '@/lib/intake/draft';
 import type { Family } from '@/lib/intake/families/family';
 import { idKey } from '@/lib/intake/ids';
 import type { ProblemList } from '@/lib/intake/problem-list';
-import type { Reader } from '@/lib/intake/reader';
+import { forNobody, type Reader } from '@/lib/intake/reader';
 import { level, RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { Combinations } from '@/lib/intake/sheets/combinations';
 import { type LimitTarget, targetOf } from '@/lib/intake/sheets/limit-target';
@@ -25,7 +25,7 @@ export class Limits {
   private readonly rows: RowsByFrame;
   private readonly shared = new Map<string, readonly Limit[]>();
   private readonly matched = new Set<Row>();
-  private readonly unmatched = new Map<Row, string[]>();
+  private readonly unmatched = new Map<Row, { column: 'applies to' | 'to node'; frames: string[] }>();
 
   constructor(
     private readonly table: Table | undefined,
@@ -97,15 +97,10 @@ export class Limits {
       return [];
     }
     const target = targetOf(draft, name, measure);
-    if (!target) {
-      this.unmatched.set(row, [...(this.unmatched.get(row) ?? []), draft.entry.id]);
-      return [];
-    }
+    if (!target) return this.fitsNot(row, 'applies to', draft);
+    if (toNode !== null && measure === 'spread' && !draft.nodeIndex.has(idKey(toNode)))
+      return this.fitsNot(row, 'to node', draft);
     this.matched.add(row);
-    if (toNode !== null && measure === 'spread' && !draft.nodeIndex.has(idKey(toNode))) {
-      reader.tell(row, 'to node', { code: 'unknown-node', message: say.unknownNode(toNode, draft.entry.id) }, reading);
-      return [];
-    }
     return combinations.map((combination) => ({
       row,
       limit: {
@@ -121,6 +116,17 @@ export class Limits {
         source: `${row.part.raw.name} row ${row.raw.row}`,
       },
     }));
+  }
+
+  /** Notes that a row is not for this frame; if it is for none, that is told when every frame is read. */
+  private fitsNot(row: Row, column: 'applies to' | 'to node', draft: Draft): [] {
+    const before = this.unmatched.get(row);
+    if (!before) this.unmatched.set(row, { column, frames: [draft.entry.id] });
+    else {
+      if (column === 'to node') before.column = column;
+      before.frames.push(draft.entry.id);
+    }
+    return [];
   }
 
   private faultOf(
@@ -191,10 +197,11 @@ export class Limits {
   /** Tells the rows that apply to nothing in any frame. */
   tellUnmatched(frames: readonly FrameEntry[]): void {
     if (this.table) this.rows.tellUnfit(this.reader, frames, this.problems);
-    for (const [row, touched] of this.unmatched) {
+    for (const [row, { column, frames: touched }] of this.unmatched) {
       if (this.matched.has(row)) continue;
-      const message = say.limitFitsNothing(rawCell(row, 'applies to')?.text ?? '');
-      for (const frame of touched) this.reader.tell(row, 'applies to', { code: 'unknown-word', message }, { frame, parameters: null, variantPlace: null }); // prettier-ignore
+      const code = column === 'to node' ? 'unknown-node' : 'unknown-word';
+      const message = say.limitFitsNothing(rawCell(row, column)?.text ?? '', column === 'to node');
+      for (const frame of touched) this.reader.tell(row, column, { code, message }, { ...forNobody, frame });
     }
   }
 }

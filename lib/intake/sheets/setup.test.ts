@@ -1,0 +1,114 @@
+import { describe, expect, it, test } from 'vitest';
+import { lines, readSheets, sound, type TestCell } from '@/lib/intake/sheets-of';
+import { defaultSettings } from '@/lib/model/settings';
+
+const withSetup = (...rows: TestCell[][]): ReturnType<typeof sound> => ({
+  ...sound(),
+  Setup: [['setting', 'value'], ['material', 'S275'], ...rows],
+});
+
+describe('Setup', () => {
+  it('silent: metric, first order, elastic stress and the defaults, each known as such', () => {
+    const { settings, origins } = readSheets(withSetup());
+    expect(settings).toEqual({ ...defaultSettings, material: 'S275' });
+    expect(origins.stressFactor).toEqual({ source: 'default', cell: null });
+    expect(origins.material).toEqual({ source: 'sheet', cell: 'Setup B2' });
+  });
+
+  it('wins over the office, and the office over the default', () => {
+    const { settings, origins } = readSheets(withSetup(['near limit', 0.95]), {
+      office: { nearLimit: 0.8, deflectionRatio: 300 },
+    });
+    expect(settings).toMatchObject({ nearLimit: 0.95, deflectionRatio: 300 });
+    expect([origins.nearLimit.source, origins.deflectionRatio.source, origins.swayRatio.source]).toEqual([
+      'sheet',
+      'office',
+      'default',
+    ]);
+  });
+
+  it('reads every setting', () => {
+    const { settings, problems } = readSheets(
+      withSetup(
+        ['Title', 'Sheds'],
+        ['STRESS-FACTOR', '0.66'],
+        ['deflection ratio', 'L/250'],
+        ['sway ratio', 'none'],
+        ['stability', 'By Others'],
+      ),
+    );
+    expect(settings).toMatchObject({
+      title: 'Sheds',
+      stressFactor: 0.66,
+      deflectionRatio: 250,
+      swayRatio: 'none',
+      stability: 'by others',
+    });
+    expect(problems.filter((p) => p.severity === 'error')).toEqual([]);
+  });
+
+  test.each([
+    'analysis|first order',
+    'strength check|elastic stress',
+    'imperfections|none',
+    'stiffness reduction|none',
+    'shear deformation|no',
+    'combination set|none',
+  ])('%s means off and is never refused', (text) => {
+    expect(lines(readSheets(withSetup(text.split('|'))))).toEqual([]);
+  });
+
+  test.each([
+    'analysis|second order', 'strength check|AISC 360-22 LRFD', 'strength check|aisc 360-22 asd', 'strength check|EN 1993-1-1', 'imperfections|EN 1993-1-1',
+    'imperfections|AISC 360', 'stiffness reduction|AISC 360', 'shear deformation|yes', 'combination set|EN 1990',
+  ])('%s is refused and stops every frame', (text) => {
+    const intake = readSheets(withSetup(text.split('|')));
+    expect(lines(intake)).toEqual(['error not-supported Setup!B3 –']);
+    expect(intake.frames.map((f) => f.frame)).toEqual([null, null]);
+  }); // prettier-ignore
+
+  test.each<[string, TestCell[][], string[]]>([
+    ['a value that is none', [['analysis', 'third order']], ['error unknown-word Setup!B3 –']],
+    ['a stress factor of zero', [['stress factor', 0]], ['error not-positive Setup!B3 –']],
+    ['a stress factor above 1', [['stress factor', 1.5]], ['error out-of-range Setup!B3 –']],
+    ['a near limit that is a word', [['near limit', 'high']], ['error not-a-number Setup!B3 –']],
+    ['an error value', [['near limit', { error: '#N/A' }]], ['error error-value Setup!B3 –']],
+    [
+      'a setting twice with one value',
+      [
+        ['near limit', 0.9],
+        ['Near-limit', 0.9],
+      ],
+      ['warning repeated-row Setup!B4 –'],
+    ],
+    [
+      'a setting twice with two values',
+      [
+        ['near limit', 0.9],
+        ['near limit', 0.8],
+      ],
+      ['error conflicting-row Setup!B4 –'],
+    ],
+    ['a setting nobody knows', [['colour', 'red']], ['warning near-miss-column Setup!A3 –']],
+  ])('%s', (_, rows, problems) => {
+    const intake = readSheets(withSetup(...rows));
+    expect(lines(intake)).toEqual(problems);
+    const stopped = problems.some((p) => p.startsWith('error'));
+    expect(intake.frames.every((f) => (f.frame === null) === stopped)).toBe(true);
+  });
+
+  it('a blank value is silence', () => {
+    expect(readSheets(withSetup(['near limit', null])).origins.nearLimit.source).toBe('default');
+  });
+
+  it('a material that is nowhere is told at Setup, for the frames that lean on it', () => {
+    const sheets = {
+      ...sound(),
+      Setup: [
+        ['setting', 'value'],
+        ['material', 'S27S'],
+      ],
+    };
+    expect(lines(readSheets(sheets))).toEqual(['error unknown-material Setup!B2 F1,F2']);
+  });
+});
