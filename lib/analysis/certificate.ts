@@ -88,6 +88,8 @@ function compareWithSecond(
 
 /** What in a certificate is outside its tolerance, in words; null = nothing. */
 export function outsideTolerance(c: Certificate): string | null {
+  if (!Number.isFinite(c.residual + c.equilibrium))
+    return 'Its loads or stiffnesses are too large or too small for numbers to hold.';
   if (!(c.residual <= residualTolerance))
     return `The equations are not met closely enough: residual ${c.residual.toExponential(1)}, at most 1e-10 is asked for.`;
   if (!(c.equilibrium <= equilibriumTolerance))
