@@ -87,7 +87,12 @@ function checkStrength(
     return;
   }
   const byMember = frame.members.map((_, i) => states.map((state) => lineOf(state, i)));
-  for (let i = 0; i < frame.members.length; i++) checkStress(frame, settings, i, states, byMember[i]!, findings);
+  for (let i = 0; i < frame.members.length; i++) {
+    const pieces = likePieces(frame, spans, i);
+    const whole = (c: number): MemberLine =>
+      pieces.length === 1 ? byMember[i]![c]! : oneLine(pieces.map((p) => byMember[p]![c]!));
+    checkStress(frame, settings, i, states, byMember[i]!, whole, findings);
+  }
   findings.assumptions.add(
     'Equivalent stress: the larger face stress with the peak shear stress of the same place, on the safe side',
   );
@@ -97,3 +102,23 @@ function checkStrength(
   }
   checkCriticalLoadFactor(settings, states, findings);
 }
+
+/** The pieces of a member's span that have its section, turned as it is, of its material; itself among them. */
+function likePieces(frame: Frame, spans: readonly Span[], member: number): readonly number[] {
+  const m = frame.members[member]!;
+  if (m.span === null) return [member];
+  const span = spans.find((s) => s.pieces.some((piece) => piece.member === member));
+  if (!span?.whole) return [member];
+  return span.pieces
+    .map((piece) => piece.member)
+    .filter((i) => {
+      const other = frame.members[i]!;
+      return other.section === m.section && other.material === m.material && other.turned === m.turned;
+    });
+}
+
+/** Lines one after another: for what is looked for along a physical member, wherever it stands. */
+const oneLine = (lines: readonly MemberLine[]): MemberLine => ({
+  length: lines.reduce((sum, line) => sum + line.length, 0),
+  segments: lines.flatMap((line) => line.segments),
+});

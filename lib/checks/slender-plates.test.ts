@@ -161,6 +161,17 @@ describe('a slender plate in the checks', () => {
     expect(found.notChecked).toContain('normal stress: slender web');
   });
 
+  it('where M passes through zero at low stress, a web is judged by that stress: ε √(f·fy/σ_com), 5.5.2(9)', () => {
+    // S355, f = 0.6, web 35.0: in uniform compression 34.2 at full stress, 34.2 √(213/σ_com) below it
+    const column = (M: number) => line(10, { N: [-1e5], V: [M / 10], M: [0, M / 10] });
+    // W = 557 cm³: 60 kN·m is 107.7 + 18.6 = 126 of 213 MPa; 110 kN·m 216 MPa is over, so nothing is eased
+    const one = { ...frame, combinations: [combination('C1', 'strength')] };
+    expect(rowOf(check(one, { C1: { AB: column(60e3) } }), 'normal stress')).toMatchObject({ verdict: 'within', at: 10 });
+    expect(rowOf(check(one, { C1: { AB: column(110e3) } }), 'normal stress').reason).toBe('slender web');
+    // at the place that governs nothing is eased, however low the stress
+    expect(rowOf(check(one, { C1: { AB: line(10, { N: [-1e3] }) } }), 'normal stress').reason).toBe('slender web');
+  });
+
   it('is not looked for where the proportions are not known, and that is said', () => {
     expect(check(beamFrame(), { C1: { AB: bent } }).assumptions).toContain(
       'Section S: proportions not given, so its plates are taken as not slender (class 3 or better)',

@@ -169,6 +169,50 @@ export function slenderPlate(
   return null;
 }
 
+/**
+ * The plate that makes a member's elastic stress in one combination unsafe to state, or null.
+ *
+ * The cross-section that governs is judged by the limits as they stand. Elsewhere on the member the distribution may be
+ * less favourable (where M passes through zero, compression is uniform) but the stress is lower: there the limits are those of
+ * the member's largest compressive stress in place of yield, ε √(f·fy/σ_com) (EN 1993-1-1 5.5.2(9)). At full stress both are
+ * the same. ASTM grades have no such easing: any place on the member counts.
+ * @param peak where the normal stress is largest, with the forces there   @param f stress factor
+ */
+export function slenderInCombination(
+  section: Section,
+  turned: boolean,
+  material: Material,
+  watch: readonly SlenderPlate[],
+  line: MemberLine,
+  of: InPlane,
+  peak: { readonly N: number; readonly M: number },
+  f: number,
+): SlenderPlate['plate'] | null {
+  const fy = material.fy_Pa;
+  if (fy === null || watch.length === 0) return null;
+  if (material.standard === 'ASTM') return slenderPlate(watch, line, of, fy);
+  const there: MemberLine = { length: 0, segments: [{ from: 0, to: 0, N: [peak.N], V: [0], M: [peak.M], u: [0], v: [0] }] };
+  const governing = slenderPlate(watch, there, of, fy);
+  if (governing) return governing;
+  const pressed = largestCompression(line, of) / f;
+  if (!(pressed > NOTHING * fy)) return null;
+  const eased = pressed < fy ? plateProportions(section, turned, { ...material, fy_Pa: pressed }).watch : watch;
+  return slenderPlate(eased, line, of, fy);
+}
+
+/** Largest compressive stress at either face along a member, Pa; 0 where there is none. */
+function largestCompression(line: MemberLine, of: InPlane): number {
+  const perA = 1 / of.A_m2;
+  let most = 0;
+  for (const perW of [of.Wtop_m3 ? 1 / of.Wtop_m3 : 0, of.Wbottom_m3 ? -1 / of.Wbottom_m3 : 0])
+    for (const { N, M, from, to } of line.segments) {
+      const degree = combine(N, M, -perA, perW, stress);
+      const count = turningPoints(stress, degree, to - from, points);
+      for (let j = 0; j < count; j++) most = Math.max(most, valueAt(stress, degree, points[j]!));
+    }
+  return most;
+}
+
 function isSlender({ test, a, b }: SlenderPlate, line: MemberLine, of: InPlane, nothing: number): boolean {
   const perA = 1 / of.A_m2;
   const I = of.I_m4 ?? Infinity;

@@ -32,10 +32,10 @@ function checkable(frame: Frame): Frame {
   }; // prettier-ignore
 }
 
-function checked(frame: Frame): FrameChecks {
+function checked(frame: Frame, all = false): FrameChecks {
   const analysis = analyser.analyse(frame, { second: false });
   if (!analysis.ok) throw new Error(analysis.failure.message);
-  return checkFrame(frame, settings(), analysis.states, (state, member) => memberLine(frame, state, member), { all: false });
+  return checkFrame(frame, settings(), analysis.states, (state, member) => memberLine(frame, state, member), { all });
 }
 
 /** The frame with one member cut in two at a new node; the second piece may be drawn the other way where it has no loads. */
@@ -73,6 +73,7 @@ it('splitting a member of a span at a new node changes no check of it (seed 2026
     fc.property(randomFrame, fc.nat(), fc.integer({ min: 5, max: 95 }), (random, k, percent) => {
       const frame = checkable(random);
       const which = k % frame.members.length;
+      fc.pre(analyser.analyse(frame, { second: false }).ok);
       const whole = checked(frame);
       const cut = checked(split(frame, which, percent / 100));
       for (const member of frame.members)
@@ -85,6 +86,29 @@ it('splitting a member of a span at a new node changes no check of it (seed 2026
     }),
     { seed: 20261201, numRuns: 60 },
   );
+});
+
+it('nor whether its plates are slender: IPE 300 and HE 200 A of S420, high in stress (seed 20261203)', () => {
+  const slender = new Set<boolean>();
+  fc.assert(
+    fc.property(randomFrame, fc.nat(), fc.integer({ min: 5, max: 95 }), (random, k, percent) => {
+      const frame = { ...checkable(random), materials: [steel({ fy_Pa: 420e6, E_Pa: 210e9, G_Pa: 81e9 })] };
+      fc.pre(analyser.analyse(frame, { second: false }).ok);
+      const slenderIn = (found: FrameChecks, span: string): boolean[] =>
+        (found.allChecks ?? [])
+          .filter((c) => c.check === 'normal stress' && c.subject?.replace(/'$/, '') === span)
+          .map((c) => c.reason === 'slender web');
+      const [whole, cut] = [checked(frame, true), checked(split(frame, k % frame.members.length, percent / 100), true)];
+      for (const member of frame.members) {
+        const [before] = slenderIn(whole, member.id);
+        slender.add(before === true);
+        expect(new Set(slenderIn(cut, member.id)), member.id).toEqual(new Set([before]));
+      }
+    }),
+    { seed: 20261203, numRuns: 60 },
+  );
+  // a test in which nothing was slender, or everything, would show nothing
+  expect(slender.size).toBe(2);
 });
 
 it('asking for every row changes none that governs (seed 20261202)', () => {

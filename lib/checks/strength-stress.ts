@@ -1,4 +1,4 @@
-import type { Frame } from '@/lib/model/frame';
+import type { Frame, Material } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { MemberLine, ResultState } from '@/lib/results/result';
 import { inPlane, type InPlane } from '@/lib/sections/in-plane';
@@ -6,7 +6,7 @@ import { keepGoverning, notCheckedRow, type Findings } from './check-row';
 import { peakEquivalentStress } from './equivalent-stress';
 import { peakNormalStress } from './normal-stress';
 import { peakShearStress } from './shear-stress';
-import { plateProportions, slenderPlate, type PlateProportions } from './slender-plates';
+import { plateProportions, slenderInCombination, type PlateProportions } from './slender-plates';
 import { StressRows, stressNames, stressSubject } from './stress-rows';
 
 /** A row for each stress check of a member that can't be made at all. */
@@ -17,6 +17,8 @@ export function stressNotChecked(frame: Frame, member: number, reason: string, f
 /**
  * Elastic stress of one member over all strength combinations: normal, shear and equivalent stress.
  * @param lines the member's line in each of `states`
+ * @param whole the line of all pieces of its span of the same section, one after another, in a state: slender plates are looked
+ *   for along the physical member, so that a node on it changes nothing
  */
 export function checkStress(
   frame: Frame,
@@ -24,6 +26,7 @@ export function checkStress(
   member: number,
   states: readonly ResultState[],
   lines: readonly MemberLine[],
+  whole: (state: number) => MemberLine,
   findings: Findings,
 ): void {
   const m = frame.members[member]!;
@@ -31,7 +34,7 @@ export function checkStress(
   const material = frame.materials[m.material]!;
   const of = inPlane(section, m.turned);
   const plates = plateProportions(section, m.turned, material);
-  notePlates(section.name, plates, findings);
+  notePlates(section.name, plates, material.standard, findings);
 
   const fy = material.fy_Pa;
   const noYield =
@@ -39,33 +42,37 @@ export function checkStress(
   const noAv = of.AvPeak_m2 === null ? 'needs Av' : null;
   if (fy === null || noYield !== null) return stressNotChecked(frame, member, noYield ?? 'needs fy', findings);
 
-  const gather = new StressRows(frame, settings, member, of, fy, findings.all !== null);
+  const rows = new StressRows(frame, settings, member, of, fy, findings.all !== null);
   for (let c = 0; c < lines.length; c++) {
     const line = lines[c]!;
     const combination = states[c]!.name;
-    const slender = plates.watch.length > 0 ? slenderPlate(plates.watch, line, of, fy) : null;
     const noW = modulusMissing(of, line);
     const perTop = of.Wtop_m3 && !noW ? 1 / of.Wtop_m3 : 0;
     const perBottom = of.Wbottom_m3 && !noW ? 1 / of.Wbottom_m3 : 0;
-    const noNormal = slender ? `slender ${slender}` : noW;
-    let normal = 0;
-    if (noNormal) gather.refuse(0, combination, noNormal);
-    else normal = gather.take(0, combination, peakNormalStress(line, 1 / of.A_m2, perTop, perBottom));
+    let noNormal = noW;
+    if (!noW && plates.watch.length > 0) {
+      const all = whole(c);
+      const governing = peakNormalStress(all, 1 / of.A_m2, perTop, perBottom);
+      const slender = slenderInCombination(section, m.turned, material, plates.watch, all, of, governing, settings.stressFactor);
+      if (slender) noNormal = `slender ${slender}`;
+    }
+    const normal = noNormal ? 0 : rows.take(0, combination, peakNormalStress(line, 1 / of.A_m2, perTop, perBottom));
+    if (noNormal) rows.refuse(0, combination, noNormal);
     if (noAv) {
-      gather.refuse(1, combination, noAv);
-      gather.refuse(2, combination, noNormal ?? noAv);
+      rows.refuse(1, combination, noAv);
+      rows.refuse(2, combination, noNormal ?? noAv);
       continue;
     }
     const perAv = 1 / of.AvPeak_m2!;
-    const shear = gather.take(1, combination, peakShearStress(line, perAv));
-    if (noNormal) gather.refuse(2, combination, noNormal);
+    const shear = rows.take(1, combination, peakShearStress(line, perAv));
+    if (noNormal) rows.refuse(2, combination, noNormal);
     else {
       const bound = Math.sqrt(normal * normal + 3 * shear * shear);
-      const floor = gather.floor(2);
-      gather.take(2, combination, peakEquivalentStress(line, 1 / of.A_m2, perTop, perBottom, perAv, bound, floor));
+      const floor = rows.floor(2);
+      rows.take(2, combination, peakEquivalentStress(line, 1 / of.A_m2, perTop, perBottom, perAv, bound, floor));
     }
   }
-  gather.finish(findings);
+  rows.finish(findings);
 }
 
 /** Why bending stress can't be had: a modulus is missing though the member bends (moments of rounding's size count as none). */
@@ -84,7 +91,11 @@ function modulusMissing(of: InPlane, line: MemberLine): string | null {
   return of.Wtop_m3 === null ? 'needs W top' : 'needs W bottom';
 }
 
-function notePlates(section: string, plates: PlateProportions, findings: Findings): void {
+function notePlates(section: string, plates: PlateProportions, standard: Material['standard'], findings: Findings): void {
+  if (plates.watch.length > 0 && standard !== 'ASTM')
+    findings.assumptions.add(
+      'Slender plates: EN 1993-1-1 Table 5.2 where the normal stress governs, eased by 5.5.2(9) where it is lower',
+    );
   if (!plates.known)
     findings.assumptions.add(
       `Section ${section}: proportions not given, so its plates are taken as not slender (class 3 or better)`,

@@ -32,13 +32,14 @@ export function sectionFromShape(
   dims: Partial<ShapeDimensions>,
   made: Section['made'] = null,
 ): { readonly section: ShapedSection } | { readonly trouble: ShapeTrouble } {
+  const given = (name: DimensionName): boolean => typeof dims[name] === 'number';
   for (const name of ['h', 'b', 'tw', 'tf', 't', 'd', 'r'] as const) {
-    const value = dims[name];
-    if (value != null && !(Number.isFinite(value) && (name === 'r' ? value >= 0 : value > 0)))
+    const value = dims[name] ?? null;
+    if (value !== null && !(Number.isFinite(value) && (name === 'r' ? value >= 0 : value > 0)))
       throw new RangeError(`sectionFromShape: expected ${name} above zero in m, got ${value}`);
   }
-  const round = shape === 'bar' && dims.d != null && dims.h == null && dims.b == null;
-  const missing = needs(shape, round).filter((name) => dims[name] == null);
+  const round = shape === 'bar' && given('d') && !given('h') && !given('b');
+  const missing = needs(shape, round).filter((name) => !given(name));
   if (missing.length > 0) return { trouble: { missing, impossible: null } };
 
   const { h = 0, b = 0, tw = 0, tf = 0, t = 0, d = 0 } = dims as Record<DimensionName, number>;
