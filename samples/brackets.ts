@@ -3,7 +3,7 @@ import type { SampleCell, SampleSheet } from './write';
 
 export function brackets(): SampleSheet[] {
   const arms = ['IPE 120', 'IPE 140', 'IPE 160', 'IPE 180', 'IPE 200', 'IPE 220'];
-  const struts = ['HE 100 A', 'HE 100 A', 'HE 120 A'];
+  const struts = ['HE 100 A', 'HE 140 A', 'HE 180 A'];
   const rows: SampleCell[][] = [
     ['frame', 'family', 'reach [m]', 'rise [m]', 'drop [m]', 'strut at', 'arm restraint [m]', 'arm', 'strut', 'material', 'root', 'tip Fx [kN]', 'tip Fy [kN]', 'line load [kN/m]'], // prettier-ignore
   ];

@@ -11,11 +11,11 @@ export function canopiesUs(): SampleSheet[] {
   const pulls: SampleCell[][] = [['Frame', 'Case', 'Node', 'Fx (kip)', 'Fy (kip)']];
   for (let index = 0; index < 36; index += 1) {
     const frame = `K-${String(index + 1).padStart(2, '0')}`;
-    const reach = 6 + (index % 12);
+    const reach = 5 + (index % 12) * 0.5;
     const height = 11 + Math.floor(index / 12);
-    const beam = reach < 10 ? 'W8X18' : reach < 14 ? 'W10X26' : 'W12X35';
+    const beam = reach < 7 ? 'W8X18' : reach < 9 ? 'W10X26' : 'W12X40';
     nodes.push([frame, 'A', 0, 0, 'base'], [frame, 'B', 0, height, 'root'], [frame, 'C', reach, height + 0.5, 'tip']);
-    members.push([frame, 'AB', 'A', 'B', index % 2 === 0 ? 'W10X33' : 'W 10 x 39', 'column', 4, 4]);
+    members.push([frame, 'AB', 'A', 'B', index % 2 === 0 ? 'W10X45' : 'W 10 x 49', 'column', 4, 4]);
     members.push([frame, 'BC', 'B', 'C', beam, 'cantilever', 3, 3]);
     supports.push([frame, 'A', 'fixed', 'fixed', 'fixed']);
     loads.push([frame, 'dead', 'BC', 'distributed', 'global', 'y', -9, 12]);

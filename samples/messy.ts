@@ -166,7 +166,7 @@ export function messy(): SampleSheet[] {
       [frameName(33), 'dead', 'A', null, 2],
     ],
   };
-  const limits: SampleSheet = { name: 'Limits', rows: [['applies to', 'ratio'], ['beam', 300]] }; // prettier-ignore
+  const limits: SampleSheet = { name: 'Limits', rows: [['frame', 'applies to', 'ratio'], [frameName(34), 'beam', 300]] }; // prettier-ignore
   const families: SampleSheet = {
     name: 'Families',
     rows: [

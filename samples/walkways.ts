@@ -22,7 +22,7 @@ export function walkways(): SampleSheet[] {
     { name: 'Setup', rows: [['setting', 'value'], ['title', 'Fennmoor walkway brackets'], ['material', 'S235'], ['stress factor', 0.6], ['deflection ratio', 200], ['sway ratio', 'none']] }, // prettier-ignore
     { name: 'Nodes', rows: nodes },
     { name: 'Members', rows: members },
-    { name: 'Sections', rows: [['section', 'shape', 'h [mm]', 'b [mm]', 't [mm]', 'd [mm]'], ['ARM', 'rhs', 120, 80, 6.3, ''], ['STRUT', 'chs', '', '', 4, 60.3]] }, // prettier-ignore
+    { name: 'Sections', rows: [['section', 'shape', 'h [mm]', 'b [mm]', 't [mm]', 'd [mm]'], ['ARM', 'rhs', 120, 80, 6.3, ''], ['STRUT', 'chs', '', '', 5, 101.6]] }, // prettier-ignore
     { name: 'Supports', rows: supports },
     {
       name: 'Load cases',
