@@ -17,7 +17,7 @@ export function plainSection(name: string, A_m2: number, I_m4: number, depth_m: 
   };
 }
 
-export const plainSteel: Material = {
+const plainSteel: Material = {
   name: 'steel', grade: null, standard: null, E_Pa: 210e9, G_Pa: null, fy_Pa: null, fu_Pa: null, density_kg_m3: 7850,
   expansion_perK: 12e-6, sources: {},
 }; // prettier-ignore
