@@ -20,26 +20,34 @@ export function resolveMaterial(
     code: 'unknown-material',
     message: say.unknownMaterial(name, suggestion),
   });
-  if (own !== null) return use(draft, own, found.section, (s) => reader.tell(row, 'material', unknown(own, s), draft.reading));
+  if (own !== null)
+    return materialIndex(draft, own, found.section, (s) => reader.tell(row, 'material', unknown(own, s), draft.reading));
   const sectionRow = found.row;
   const ofSection = sectionRow && rawCell(sectionRow, 'material') ? reader.id(sectionRow, 'material', forNobody) : null;
   if (sectionRow && ofSection) {
     const reading = { ...forNobody, frame: draft.entry.id };
-    return use(draft, ofSection, found.section, (s) => reader.tell(sectionRow, 'material', unknown(ofSection, s), reading));
+    return materialIndex(draft, ofSection, found.section, (s) =>
+      reader.tell(sectionRow, 'material', unknown(ofSection, s), reading),
+    );
   }
   const byDefault = settings.material;
   if (byDefault === null) {
     reader.tell(row, 'material', { code: 'unknown-material', message: say.materialMissing() }, draft.reading);
     return undefined;
   }
-  return use(draft, byDefault, found.section, (s) => {
+  return materialIndex(draft, byDefault, found.section, (s) => {
     const place = settingPlaces.get('material');
     if (place) problems.add(place, unknown(byDefault, s), draft.entry.id);
     else reader.tell(row, 'material', unknown(byDefault, s), draft.reading);
   });
 }
 
-function use(draft: Draft, name: string, section: Section, tell: (suggestion: string | null) => void): number | undefined {
+function materialIndex(
+  draft: Draft,
+  name: string,
+  section: Section,
+  tell: (suggestion: string | null) => void,
+): number | undefined {
   const { materials, problems } = draft.batch;
   const found = materials.find(name);
   if ('suggestion' in found) {
