@@ -9,6 +9,11 @@ export class Spool {
   private readonly places: ({ readonly from: number; readonly size: number } | undefined)[] = [];
   private end = 0;
 
+  constructor() {
+    // Out of the folder at once: however the process ends, nothing is left behind.
+    rmSync(this.folder, { recursive: true, force: true });
+  }
+
   put(index: number, bytes: Uint8Array): void {
     for (let written = 0; written < bytes.byteLength;)
       written += writeSync(this.file, bytes, written, bytes.byteLength - written, this.end + written);
@@ -31,6 +36,5 @@ export class Spool {
   /** Removes the file. */
   close(): void {
     closeSync(this.file);
-    rmSync(this.folder, { recursive: true, force: true });
   }
 }
