@@ -53,7 +53,7 @@ export class Taken {
     let cost = 0;
     let outside = false;
     this.cover(at, width, height, turn, (column, row) => {
-      if (column < 0 || row < 0 || column >= this.columns || row >= this.rows) outside = true;
+      if (column < 1 || row < 1 || column >= this.columns - 1 || row >= this.rows - 1) outside = true;
       else {
         const taken = this.cells[row * this.columns + column] ?? 0;
         cost += taken === 2 ? 40 : taken;
@@ -87,7 +87,7 @@ export class Taken {
 
 /** Width of a text in the condensed cut, near enough for keeping texts apart. */
 export const textWidth = (text: string, size: number): number =>
-  Math.max(...text.split('\n').map((row) => row.length)) * size * 0.5 + 2;
+  Math.max(...text.split('\n').map((row) => row.length)) * size * 0.53 + 2;
 export const textHeight = (text: string, size: number): number => size * (1.05 * text.split('\n').length - 0.1);
 
 /** Places labels in order of importance, each at its cheapest place; one that would cover text is left out unless it must stand. */

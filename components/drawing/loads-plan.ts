@@ -45,6 +45,7 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
   blocks.forEach((block, i) => {
     const drawn = blockPath(block);
     taken.lines(drawn.outline);
+    for (const [from, to] of drawn.shafts) taken.line(from, to);
     arrows.push({ key: `d${i}`, d: drawn.d, className: 'd-load' });
   });
   const wishes: LabelWish[] = [...blockWishes(scene, blocks)];
@@ -139,20 +140,22 @@ function corner({ axis, load, side, base, h1, h2 }: Block): Point[] {
   return [plus(along(axis, load.from), side, base + h1 + text), plus(along(axis, load.to), side, base + h2 + text)];
 }
 
-function blockPath(block: Block): { d: string; outline: Point[] } {
+function blockPath(block: Block): { d: string; outline: Point[]; shafts: [Point, Point][] } {
   const { axis, load, force, side, base, h1, h2 } = block;
   const foot = (share: number) => plus(along(axis, load.from + (load.to - load.from) * share), side, base);
   const head = (share: number) => plus(foot(share), side, h1 + (h2 - h1) * share);
   const drawn = ((load.to - load.from) / axis.length) * axis.drawn;
   const count = Math.max(1, Math.round(drawn / 24));
   const leaving = side.x * force.x + side.y * force.y > 0;
+  const shafts: [Point, Point][] = [];
   let d = path([foot(0), head(0), head(1), foot(1)]);
   for (let i = 0; i <= count; i++) {
     const share = i / count;
     if (h1 + (h2 - h1) * share < 4) continue;
-    d += leaving ? arrow(foot(share), head(share), 4) : arrow(head(share), foot(share), 4);
+    shafts.push(leaving ? [foot(share), head(share)] : [head(share), foot(share)]);
   }
-  return { d, outline: [foot(0), head(0), head(1), foot(1)] };
+  for (const [from, to] of shafts) d += arrow(from, to, 4);
+  return { d, outline: [foot(0), head(0), head(1), foot(1)], shafts };
 }
 
 /** A line with an open head at its end. */

@@ -1,8 +1,8 @@
-import { dimensionChains, type DimensionChain } from './dimensions';
+import { dimensionChains, lengthText, type DimensionChain } from './dimensions';
 import type { DrawingData } from './drawing-data';
 import { along, memberAxes, type MemberAxis } from './member-axis';
 import { awayFrom } from './ground-direction';
-import { around, Taken, type LabelWish } from './labels';
+import { around, Taken, textWidth, type LabelWish } from './labels';
 import { boundsOf, fitPaper, plus, type Margins, type Paper, type Point } from './paper';
 
 /** The paper of one view with the frame on it: what every view shares. */
@@ -33,7 +33,11 @@ export function setScene(data: DrawingData, width: number, height: number, large
   const chains = large ? dimensionChains(data) : [];
   const font = large ? 12.5 : 11.5;
   const support = large ? 13 : 9;
-  const edge: Margins = large ? { left: 30, right: 30, top: 26, bottom: 26 } : { left: 16, right: 16, top: 20, bottom: 14 };
+  const edge: Margins = large
+    ? width < 500
+      ? { left: 12, right: 14, top: 22, bottom: 20 }
+      : { left: 30, right: 30, top: 26, bottom: 26 }
+    : { left: 16, right: 16, top: 20, bottom: 14 };
   const dims = {
     left: chains.some((c) => c.direction === 'y') ? 44 : 0,
     bottom: chains.some((c) => c.direction === 'x') ? 34 : 0,
@@ -70,7 +74,21 @@ export function setScene(data: DrawingData, width: number, height: number, large
     const middle = plus(paper.at(node.x, node.y), away, support * 0.85);
     taken.text(middle, support * 2, support * 1.6, Math.abs(away.x) > 0.7 ? 90 : 0);
   }
-  const scene = { data, paper, axes, taken, large, font, support, dimensions: placeChains(chains, world, paper, extra) };
+  const scene = {
+    data,
+    paper,
+    axes,
+    taken,
+    large,
+    font,
+    support,
+    dimensions: placeChains(
+      chains.map((chain) => thatFits(chain, data, paper.scale, font)),
+      world,
+      paper,
+      extra,
+    ),
+  };
   for (const placed of scene.dimensions) {
     taken.lines(placed.stops);
     placed.chain.texts.forEach((text, i) => {
@@ -79,6 +97,14 @@ export function setScene(data: DrawingData, width: number, height: number, large
     });
   }
   return scene;
+}
+
+/** A chain whose figures would run together is given as a whole. */
+function thatFits(chain: DimensionChain, data: DrawingData, scale: number, font: number): DimensionChain {
+  const tight = chain.texts.some((text, i) => (chain.stops[i + 1]! - chain.stops[i]!) * scale < textWidth(text, font));
+  if (!tight || chain.texts.length === 1) return chain;
+  const stops = [chain.stops[0]!, chain.stops[chain.stops.length - 1]!];
+  return { ...chain, stops, texts: [lengthText(stops[1]! - stops[0]!, data.units)] };
 }
 
 function placeChains(

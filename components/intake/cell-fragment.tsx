@@ -16,7 +16,11 @@ export function CellFragment({ fragment, note, severity = 'error' }: CellFragmen
   const [under, setUnder] = useState(34);
   useLayoutEffect(() => {
     const [cell, text] = [ring.current, said.current];
-    if (cell && text) setUnder(Math.max(0, Math.min(cell.offsetLeft, text.parentElement!.clientWidth - 340)));
+    const wrap = cell?.closest('.tbl-wrap');
+    if (!cell || !text || !wrap) return;
+    const room = wrap.clientWidth;
+    wrap.scrollLeft = Math.max(0, cell.offsetLeft + cell.offsetWidth - room + 24);
+    setUnder(Math.max(0, Math.min(cell.offsetLeft - wrap.scrollLeft, room - Math.min(340, room))));
   }, [fragment]);
   const ringed = /^([A-Z]+)(\d+)$/.exec(fragment.cell ?? '');
   const column = ringed?.[1] ?? null;
@@ -45,7 +49,7 @@ export function CellFragment({ fragment, note, severity = 'error' }: CellFragmen
   const first = fragment.rows[0]?.row ?? 0;
   return (
     <div className="fragment">
-      <div className="tbl-wrap">
+      <div className="tbl-wrap" role="region" tabIndex={0} aria-label={`Piece of ${fragment.sheet}`}>
         <table className="fragment-table">
           <caption className="sr-only">
             {fragment.sheet}, around {fragment.cell ?? `row ${fragment.row}`}

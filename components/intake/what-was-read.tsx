@@ -15,8 +15,8 @@ export function WhatWasRead({ sheets, summary, selected, onSelect }: WhatWasRead
   return (
     <>
       <p className="intake-summary">{summary}</p>
-      <div className="tbl-wrap">
-        <table className="tbl">
+      <div className="tbl-wrap" role="region" tabIndex={0} aria-label="Sheets as read">
+        <table className="tbl tbl-tight">
           <caption className="sr-only">Sheets as read</caption>
           <thead>
             <tr>

@@ -37,11 +37,11 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
       width="100%"
       data-from={from}
     >
-      <text className="strip-number" x={start - 6} y={foot} textAnchor="end">
+      <text aria-hidden="true" className="strip-number" x={start - 6} y={foot} textAnchor="end">
         {from + 1}
       </text>
       {(layout.groups ? groupStarts(frames, props.groupBefore) : []).map(({ column, name }) => (
-        <text key={column} className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 1.5}>
+        <text key={column} aria-hidden="true" className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 1.5}>
           {name}
         </text>
       ))}
@@ -68,6 +68,7 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
         tally[verdict] > 0 ? (
           <text
             key={verdict}
+            aria-hidden="true"
             className={`strip-tally strip-tally-${verdict.replace(' ', '-')}`}
             x={layout.width - layout.right + 20 + i * 19}
             y={foot}
