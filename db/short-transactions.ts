@@ -1,7 +1,7 @@
 import type { RawDatabase } from '@/db/open';
 
 /** A transaction takes no new item after this long, so that it ends well under the 50 ms it may last. */
-const slice_ms = 20;
+const slice_ms = 30;
 
 /**
  * Does `work` for every item, in as many transactions as keep each short; an item is never divided.
