@@ -4,7 +4,7 @@ import type { Quantity, System } from '@/lib/units/quantity';
 export type Rounding = { readonly decimals: number } | { readonly significant: number };
 
 /** What a value that does not exist prints as. */
-export const noValue = '–';
+const noValue = '–';
 
 /**
  * A number as screens and reports print it: a true minus, no minus before zero, no grouping, never an exponent

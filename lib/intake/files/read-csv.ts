@@ -7,7 +7,7 @@ import { limits } from '@/lib/intake/files/limits';
 import type { Meter } from '@/lib/intake/files/meter';
 import type { RawCell, RawRow } from '@/lib/intake/files/raw-sheet';
 import type { FileSheets } from '@/lib/intake/files/read-xlsx';
-import type { Refusal} from '@/lib/intake/files/refusal';
+import type { Refusal } from '@/lib/intake/files/refusal';
 import { tooLarge, unreadable } from '@/lib/intake/files/refusal';
 
 const cachedTexts = 100_000;

@@ -2,9 +2,11 @@ import ExcelJS from 'exceljs';
 import { strFromU8, unzipSync, zipSync } from 'fflate';
 import { describe, expect, it } from 'vitest';
 import { asText, craftedWorkbook } from '@/lib/intake/files/crafted-workbook';
+import { readIntake } from '@/lib/intake/read-intake';
 import { readFiles } from '@/lib/intake/files/read-files';
 import type { InputFile } from '@/lib/intake/intake';
 import type { Problem } from '@/lib/problems/problem';
+import { writeTemplate } from '@/lib/reports/template/write-template';
 import { markedCopy } from '@/lib/reports/marked-copy/marked-copy';
 
 const problem = (cell: string | null, more: Partial<Problem> = {}): Problem => ({
@@ -145,6 +147,26 @@ describe('the marked copy of a workbook', () => {
   });
 });
 
+describe('the marked copy, uploaded again', () => {
+  it('gives the same frames and the same problems', async () => {
+    const workbook = new ExcelJS.Workbook();
+    await workbook.xlsx.load(Buffer.from(await writeTemplate('metric')) as unknown as ArrayBuffer);
+    const members = workbook.getWorksheet('Members');
+    if (members) members.getCell('D4').value = 'N9';
+    const setup = workbook.getWorksheet('Setup');
+    if (setup) setup.getCell('A20').value = 'strenght check';
+    const file = { name: 'batch.xlsx', bytes: new Uint8Array(await workbook.xlsx.writeBuffer()) };
+    const before = await readIntake([file]);
+    const errors = before.problems.filter((p) => p.severity === 'error');
+    expect(errors.map((p) => `${p.sheet} ${p.cell} ${p.code}`)).toContain('Members D4 unknown-node');
+    const copy = await markedCopy([file], before.problems);
+    expect(Object.keys(await marksIn(copy.bytes, 'Members'))).toContain('D4');
+    const after = await readIntake([{ name: 'batch.xlsx', bytes: copy.bytes }]);
+    expect(after.frames).toEqual(before.frames);
+    expect(after.problems.filter((p) => p.sheet !== 'Problems found')).toEqual(before.problems);
+  });
+});
+
 describe('the marked copy of other uploads', () => {
   const csv = (name: string, text: string): InputFile => ({ name, bytes: new TextEncoder().encode(text) });
 
@@ -200,9 +222,9 @@ describe('the marked copy of other uploads', () => {
       (_, i) => `<row r="${i + 2}">${'<c t="str"><v>some text in a cell</v></c>'.repeat(6)}</row>`,
     );
     const data = `<sheetData><row r="1"><c t="str"><v>frame</v></c></row>${rows.join('')}</sheetData>`;
-    const copy = await markedCopy([craftedWorkbook({ sheets: { Members: data } })], [problem('B150000'), problem('C7')]);
+    const copy = await markedCopy([craftedWorkbook({ sheets: { Members: data } })], [problem('B50000'), problem('C7')]);
     const { Members } = await valuesOf({ name: 'b.xlsx', bytes: copy.bytes });
-    expect(Object.values(Members as Record<number, string[]>).map((r) => r[0])).toEqual(['row 1', 'row 7', 'row 150000']);
+    expect(Object.values(Members as Record<number, string[]>).map((r) => r[0])).toEqual(['row 1', 'row 7', 'row 50000']);
     expect(Object.keys(await marksIn(copy.bytes, 'Members'))).toEqual(['D2', 'C3']);
   });
 });

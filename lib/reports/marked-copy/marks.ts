@@ -14,7 +14,7 @@ export interface Mark {
 const word: Readonly<Record<Severity, string>> = { error: 'Error', warning: 'Warning', note: 'Note' };
 
 /** One problem as a line of a cell's note. */
-export const noteOf = (problem: Problem): string => `${word[problem.severity]}: ${problem.message}`;
+const noteOf = (problem: Problem): string => `${word[problem.severity]}: ${problem.message}`;
 
 /** What a spreadsheet can show in one cell's note. */
 const longestNote = 8_000;
