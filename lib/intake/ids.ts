@@ -3,13 +3,18 @@
 const outer = /^[\s\u00a0]+|[\s\u00a0]+$/g;
 const plainNumber = /^[+-]?\d+(\.\d*)?(e[+-]?\d+)?$/i;
 
+/** An id as it is shown: as typed, without outer blanks. */
+export function idShown(text: string): string {
+  return text.replace(outer, '');
+}
+
 /** A number used as an id is its shortest decimal text. */
 export function numberAsId(value: number): string {
   return String(Object.is(value, -0) ? 0 : value);
 }
 
 /**
- * An id as shown: outer blanks off, and text that reads as a number is that number (`1.0` is `1`) unless it
+ * An id as compared but for its case: outer blanks off, and text that reads as a number is that number (`1.0` is `1`) unless it
  * starts with a zero that the number would not have (`01` is another id).
  */
 export function idText(text: string): string {

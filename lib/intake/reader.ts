@@ -2,7 +2,7 @@ import { ExpressionFault } from '@/lib/intake/expressions/tokens';
 import { evaluate, type Parameters, type Value } from '@/lib/intake/expressions/evaluate';
 import { Expressions, isExpression } from '@/lib/intake/expressions/expression';
 import type { RawCell } from '@/lib/intake/files/raw-sheet';
-import { idText, numberAsId } from '@/lib/intake/ids';
+import { idShown, numberAsId } from '@/lib/intake/ids';
 import type { Fault, Place, ProblemList } from '@/lib/intake/problem-list';
 import { type Column, placeAt, placeOf, type Row } from '@/lib/intake/table';
 import { readWord, readYesNo } from '@/lib/intake/words';
@@ -66,13 +66,13 @@ export class Reader {
     if (value === null || value === undefined) return value;
     if (typeof value !== 'object') {
       const text = textOf(value);
-      return text === null ? null : idText(text);
+      return text === null ? null : idShown(text);
     }
     if (value.kind === 'date') {
       this.tell(row, name, { code: 'date-for-number', message: say.dateForId(value.text, value.iso) }, reading);
       return undefined;
     }
-    const text = idText(value.text);
+    const text = idShown(value.text);
     return text === '' ? null : text;
   }
 

@@ -161,6 +161,7 @@ export const shapeMissing = (shapes: readonly string[]): string => `dimensions n
 export const unknownDesignation = (name: string, near: string | null): string =>
   `${name} is no designation of the library, and neither shape nor properties are given.${hint(near)}`;
 export const dimensionMissing = (shape: string, dimension: string): string => `shape ${shape} needs ${dimension}`;
+export const dimensionUnused = (dimension: string): string => `${dimension} is not used for a section given this way`;
 export const impossibleShape = (why: string): string => `these dimensions make no section: ${why}`;
 export const propertyMissing = (name: string): string => `a section given by its properties needs ${name}`;
 export const symmetricModulus = (): string => 'W is taken from I and depth: the section is taken as symmetric';

@@ -145,6 +145,13 @@ describe('sections', () => {
     ['walls thicker than the section', ['shape', 'h', 'b', 't'], ['rhs', 100, 50, 30], ['error out-of-range Sections!E2 F1']],
     ['an area below zero', ['A', 'I'], [-28.5, 1943], ['error not-positive Sections!B2 F1']],
     ['no I', ['A', 'I'], [28.5, null], ['error not-a-number Sections!C2 F1']],
+    [
+      'a dimension that its shape has no use for',
+      ['shape', 'd', 't', 'b'],
+      ['chs', 60.3, 4, 50],
+      ['note column-ignored Sections!E2 F1'],
+    ],
+    ['dimensions beside a designation', ['designation', 'h'], ['IPE 300', 300], ['note column-ignored Sections!C2 F1']],
     ['a designation and properties', ['designation', 'A'], ['IPE 300', 50], ['error conflicting-row Sections!C2 F1']],
     ['nothing that gives it', ['A'], [null], ['error unknown-section Sections!A2 F1']],
     [

@@ -83,6 +83,11 @@ function readSection(row: Row, name: string, reader: Reader): Section | undefine
     return undefined;
   }
   if (shape !== null) return fromShape(row, name, shape, reader);
+  if (designation !== null || typed.length > 0) {
+    // t beside properties is the governing thickness
+    const unused = dimensions.filter((each) => designation !== null || each !== 't');
+    for (const each of unused) reader.tell(row, each, { code: 'column-ignored', message: say.dimensionUnused(each) }, forNobody);
+  }
   if (typed.length > 0) return readProperties(row, name, reader);
   if (designation === null && dimensions.length > 0) {
     reader.tell(row, 'shape', { code: 'unknown-word', message: say.shapeMissing(shapeWords) }, forNobody);
@@ -119,6 +124,10 @@ function fromShape(row: Row, name: string, shape: (typeof shapeWords)[number], r
       reader.tell(row, each, { code: 'not-a-number', message: say.dimensionMissing(shape, each) }, forNobody);
     if (impossible) reader.tell(row, impossible.dimension, { code: 'out-of-range', message: say.impossibleShape(impossible.why) }, forNobody); // prettier-ignore
     return undefined;
+  }
+  for (const each of dimensionNames) {
+    if (dims[each] === undefined || made.section.dimensions?.[each] !== null) continue;
+    reader.tell(row, each, { code: 'column-ignored', message: say.dimensionUnused(each) }, forNobody);
   }
   const { h, b } = dims;
   if (shape === 'I' && h && b && (h / b < 0.5 || h / b > 6)) {
