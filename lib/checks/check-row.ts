@@ -27,7 +27,7 @@ export function keepGoverning(findings: Findings, rows: readonly Check[]): void 
  * The row that governs: by verdict (over, not checked, near, within), then by largest ratio; the first on a tie, ratios
  * within 1e-9 of each other being equal, so that rounding never chooses between combinations.
  */
-export function governingRow(rows: readonly Check[]): Check | null {
+function governingRow(rows: readonly Check[]): Check | null {
   let best: Check | null = null;
   for (const row of rows) if (best === null || outranks(row, best)) best = row;
   return best;

@@ -12,7 +12,7 @@ import type { Span } from './spans';
 const onlyNamed: ReadonlySet<string | null> = new Set(['column', 'strut', 'tie', 'brace']);
 
 /** How a span's deflection is measured: from the line between its moved ends, or from its root. */
-export type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever'; readonly root: 'start' | 'end' };
+type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever'; readonly root: 'start' | 'end' };
 
 /**
  * Deflection of a span in every service combination. A span: largest departure, square to the line between its moved ends.
@@ -58,7 +58,7 @@ export function checkDeflection(
  * A cantilever is a span of that role, or an arm or beam with one end that has no other member and no support.
  * The root of a cantilever whose both ends are joined to something is its one supported end, else its start.
  */
-export function deflectionRule(frame: Frame, span: Span, findings: Findings): DeflectionRule {
+function deflectionRule(frame: Frame, span: Span, findings: Findings): DeflectionRule {
   const pieces = new Set(span.pieces.map((piece) => piece.member));
   const supported = (node: number): boolean =>
     frame.supports.some((s) => s.node === node && (s.ux !== 'free' || s.uy !== 'free' || s.rz !== 'free'));
@@ -78,7 +78,7 @@ const departure = new Float64Array(16);
 const points = new Float64Array(32);
 
 /** Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start. */
-export function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): Movement {
+function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): Movement {
   const last = span.pieces.length - 1;
   const first = endDeflection(span, 0, lines, 'near');
   const final = endDeflection(span, last, lines, 'far');

@@ -5,7 +5,7 @@ import { checkFrame, type FrameChecks } from './check-frame';
 
 /** For tests: sections, frames, states and member lines made by hand, so that every number of a check can be followed. */
 
-export const unknownProperties: SectionProperties = {
+const unknownProperties: SectionProperties = {
   A_m2: 0.01,
   I_m4: 1e-4,
   Wtop_m3: null,

@@ -177,6 +177,14 @@ describe('sway', () => {
     expect(sways(2.2, null)).toBe(0);
   });
 
+  it('a limit that names a member which is no column is not passed over', () => {
+    const named = column({
+      members: [member('AB', 0, 1, { role: 'brace' })],
+      limits: [limit({ measure: 'sway', ratio: 300, target: 'member', name: 'AB' })],
+    });
+    expect(rowOf(check(named, {}), 'sway').reason).toBe('sway is measured on columns only (role column)');
+  });
+
   it('has no limit: not checked; declared none: dropped; a column without height: not checked', () => {
     expect(rowOf(check(column({ limits: [] }), {}), 'sway').reason).toBe('no sway limit');
     expect(check(column({ limits: [] }), {}, { swayRatio: 'none' }).checks.some((row) => row.check === 'sway')).toBe(false);

@@ -11,7 +11,7 @@ import { rootsWithin, valueAt } from './polynomial';
  *   plate passes the ψ at which its c/t is the limit;
  * - axial, bent: any axial compression; any bending.
  */
-export interface SlenderPlate {
+interface SlenderPlate {
   readonly plate: 'web' | 'flange' | 'wall';
   readonly test: 'compressed' | 'gradient' | 'axial' | 'bent';
   readonly a: number;

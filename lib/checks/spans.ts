@@ -29,7 +29,7 @@ export interface Span {
 export const sameId = (a: string, b: string): boolean => a === b || a.trim().toLowerCase() === b.trim().toLowerCase();
 
 /** Length of a member between its nodes, m. */
-export function memberLength(frame: Frame, member: number): number {
+function memberLength(frame: Frame, member: number): number {
   const m = frame.members[member]!;
   const a = frame.nodes[m.start]!;
   const b = frame.nodes[m.end]!;

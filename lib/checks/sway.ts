@@ -7,7 +7,7 @@ import { checkMovement, limitsWithSetup, withoutLimit } from './movement';
 import type { Span } from './spans';
 
 /** A column: by its role, or without a role within 20° of vertical. */
-export function isColumn(frame: Frame, span: Span): boolean {
+function isColumn(frame: Frame, span: Span): boolean {
   if (span.role !== null) return span.role === 'column';
   const a = frame.nodes[span.startNode]!;
   const b = frame.nodes[span.endNode]!;
@@ -22,7 +22,6 @@ export function checkSway(
   states: readonly ResultState[],
   findings: Findings,
 ): void {
-  if (!isColumn(frame, span)) return;
   const subject: Subject = {
     subjectKind: span.kind,
     subject: span.name,
@@ -32,6 +31,12 @@ export function checkSway(
     member: span.pieces[0]!.member,
   };
   const limits = limitsWithSetup(frame, settings, 'sway').filter((limit) => namesSpan(limit, span, frame));
+  if (!isColumn(frame, span)) {
+    // a limit that names this very member is not passed over in silence
+    if (limits.some((limit) => limit.target === 'member' || limit.target === 'span'))
+      keepGoverning(findings, [notCheckedRow(subject, null, 'sway is measured on columns only (role column)')]);
+    return;
+  }
   if (limits.length === 0) {
     const why = withoutLimit(settings, 'sway', findings);
     if (why) keepGoverning(findings, [notCheckedRow(subject, null, why)]);

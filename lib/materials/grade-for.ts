@@ -34,8 +34,7 @@ const grades: Readonly<Record<string, Grade>> = {
   A992: { standard: 'ASTM', steps: [[Infinity, 50 * KSI]], fu: [[Infinity, 65 * KSI]] },
 }; // prettier-ignore
 
-/** The grades held, in the order a list shows them. */
-export const gradeNames: readonly string[] = Object.keys(grades);
+const gradeNames: readonly string[] = Object.keys(grades);
 
 /** What a grade fixes; typed values override one by one. */
 export interface GradeProperties {

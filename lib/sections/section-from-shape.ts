@@ -8,13 +8,13 @@ import { propertiesOfI } from './i-section';
 export const shapeWords = ['I', 'channel', 'rhs', 'chs', 'bar'] as const;
 export type ShapeWord = (typeof shapeWords)[number];
 
-export type DimensionName = keyof ShapeDimensions;
+type DimensionName = keyof ShapeDimensions;
 
 /** A section derived from its shape: everything but its name. */
 export type ShapedSection = Omit<Section, 'name' | 'designation'>;
 
 /** Why dimensions make no section: which are missing, or (all given) which one cannot be, in words with its name. */
-export interface ShapeTrouble {
+interface ShapeTrouble {
   readonly missing: readonly DimensionName[];
   readonly impossible: { readonly dimension: DimensionName; readonly why: string } | null;
 }
