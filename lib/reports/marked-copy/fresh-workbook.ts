@@ -31,7 +31,7 @@ export async function freshWorkbook(
   const stream = new PassThrough();
   const bytes = buffer(stream);
   const workbook = new ExcelJS.stream.xlsx.WorkbookWriter({ stream, useStyles: true, useSharedStrings: false });
-  // the writer stamps its own time otherwise: the same input gives the same bytes
+  // the writer stamps its own time otherwise
   workbook.created = new Date(0);
   workbook.modified = new Date(0);
   const problemsOf = bySheet(problems, file);

@@ -59,7 +59,8 @@ async function copyOf(
   const readable = parts.length > 0;
   const workbook = readable && isZip(file);
   if (workbook) {
-    const patched = await patchWorkbook(file.name, file.bytes, problems);
+    // a workbook that can be read but not followed part by part still gets its bad rows shown
+    const patched = await patchWorkbook(file.name, file.bytes, problems).catch(() => null);
     if (patched) return patched;
   }
   return freshWorkbook(file.name, parts, problems, { badRowsOnly: workbook, headingRows });
