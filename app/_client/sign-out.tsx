@@ -7,7 +7,8 @@ export function SignOut() {
       type="button"
       className="choice-plain"
       onClick={() => {
-        void signOut().finally(() => window.location.assign('/sign-in'));
+        // A whole new page, so that nothing read before stays in memory.
+        void signOut().finally(() => window.location.replace(new URL('/sign-in', window.location.href)));
       }}
     >
       Sign out

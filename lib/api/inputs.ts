@@ -70,3 +70,7 @@ export const idInput = z
   .transform(Number);
 export const frameNumberInput = z.coerce.number().int().min(1).max(20_000);
 export const letterInput = z.string().regex(/^[A-Z]{1,3}$/);
+
+export const templateInput = z.object({
+  units: z.enum(['metric', 'us'], { error: 'Choose the units: metric or us.' }).default('metric'),
+});

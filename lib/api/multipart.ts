@@ -92,7 +92,6 @@ function parameter(head: string, name: string): string | undefined {
 /** The last part of a name, whichever way its folders are written, without control characters. */
 export function baseName(name: string): string {
   const last = name.split(/[\\/]/).at(-1) ?? '';
-  // eslint-disable-next-line no-control-regex -- control characters are exactly what is taken out
   return last
     .replace(/[\u0000-\u001f\u007f]/g, '')
     .trim()
