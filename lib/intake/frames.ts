@@ -12,7 +12,7 @@ import * as say from '@/lib/problems/wording';
 import type { System } from '@/lib/units/quantity';
 
 /** Most frames of one batch (sheets §1). */
-export const mostFrames = 20_000;
+const mostFrames = 20_000;
 
 type Tables = ReadonlyMap<SheetName, Table>;
 

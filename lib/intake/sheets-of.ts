@@ -28,7 +28,7 @@ function rawCell(cell: TestCell | undefined): RawCell | null {
   return master && { ...master, mergedFrom: cell.merged };
 }
 
-export function rawSheets(sheets: TestSheets, kind: 'xlsx' | 'csv' = 'xlsx'): RawSheet[] {
+function rawSheets(sheets: TestSheets, kind: 'xlsx' | 'csv' = 'xlsx'): RawSheet[] {
   return Object.entries(sheets).map(([name, rows], order) => {
     const raw = rows.flatMap((cells, i) =>
       cells.some((c) => c !== null && c !== '') ? [{ row: i + 1, cells: cells.map(rawCell) }] : [],
@@ -45,7 +45,7 @@ export function readSheets(sheets: TestSheets, options: IntakeOptions & { csv?: 
 }
 
 /** `error unknown-node Members!D3 F1`: a problem in one line, for comparing whole lists. */
-export function line(problem: Problem): string {
+function line(problem: Problem): string {
   return `${problem.severity} ${problem.code} ${problem.sheet}!${problem.cell ?? problem.column ?? '–'} ${problem.frames.join(',') || '–'}`;
 }
 

@@ -190,11 +190,6 @@ export const noMembers = (frame: string): string => `frame ${frame} has no membe
 export const looseNode = (node: string): string =>
   `the part of the frame with node ${node} is joined neither to the rest nor to a support`;
 export const nodeWithoutMember = (node: string): string => `no member reaches node ${node}. Join it, or delete the row`;
-/** A node that moves freely: where, in which direction, what would hold it. */
-export const mechanism = (node: string, direction: 'x' | 'y' | 'rotation'): string =>
-  direction === 'rotation'
-    ? `node ${node} can turn freely, so the frame has no solution. Hold it in rz, or join one of its members rigidly`
-    : `node ${node} can move freely in ${direction}, so the frame has no solution. Hold it in ${direction}, or join a pinned joint next to it rigidly`;
 
 // --- loads
 

@@ -12,7 +12,7 @@ export type Node =
   | { readonly kind: 'call'; readonly function: string; readonly values: readonly Node[] };
 
 /** The functions there are, with the fewest and the most values each takes. */
-export const functions: Readonly<Record<string, readonly [fewest: number, most: number]>> = {
+const functions: Readonly<Record<string, readonly [fewest: number, most: number]>> = {
   sin: [1, 1],
   cos: [1, 1],
   tan: [1, 1],

@@ -1,4 +1,5 @@
 import { describe, expect, it, test } from 'vitest';
+import { builtInDescriptions } from '@/lib/intake/families/built-in';
 import { lines, readSheets, type TestCell, type TestSheets } from '@/lib/intake/sheets-of';
 import type { Intake } from '@/lib/intake/intake';
 import type { Frame } from '@/lib/model/frame';
@@ -519,5 +520,83 @@ describe('the built-in bracket', () => {
     ],
   ])('%s is told at its cell', (_, values, problem) => {
     expect(lines(readSheets(bracket(values)))).toEqual([problem]);
+  });
+});
+
+describe('the built-in families are families like any other', () => {
+  /** The sheets of a description as a person would send them, under another name. */
+  const asSheets = (name: string, own: string): TestSheets => {
+    const description = builtInDescriptions.find((each) => each.name === name);
+    const rename = (cell: string | number | null): TestCell => (cell === name ? own : cell);
+    return Object.fromEntries(
+      Object.entries(description?.sheets ?? {}).map(([sheet, rows]) => [sheet, rows.map((row) => row.map(rename))]),
+    );
+  };
+
+  test.each<[string, Record<string, TestCell>]>([
+    [
+      'portal',
+      {
+        span: 12,
+        eaves: 4,
+        rise: 1.5,
+        spacing: 5,
+        column: 'HE 200 A',
+        rafter: 'IPE 300',
+        snow: 0.7,
+        'wind left wall': 0.5,
+        'rafter restraint top': 1.2,
+      },
+    ],
+    [
+      'bracket',
+      { reach: 2, rise: 0.4, drop: 1, 'strut at': 0.5, arm: 'IPE 160', strut: 'HE 100 A', 'tip Fy': -4, 'line load': 1 },
+    ],
+  ])('%s written into a file gives the same frame', (name, values) => {
+    const batch = (family: string, more: TestSheets): TestSheets => ({
+      Setup: [['setting', 'value'], ['material', 'S275']],
+      Variants: [['frame', 'family', ...Object.keys(values)], ['V', family, ...Object.values(values)]],
+      ...more,
+    }); // prettier-ignore
+    const built = readSheets(batch(name, {}));
+    const own = readSheets(batch('own', asSheets(name, 'own')));
+    expect(lines(own)).toEqual([]);
+    expect({ ...first(own), family: null }).toEqual({ ...first(built), family: null });
+    expect(first(own).family?.parameters).toEqual(first(built).family?.parameters);
+  });
+
+  it('read a US batch in feet, psf and kip', () => {
+    const sheets: TestSheets = {
+      Setup: [['setting', 'value'], ['material', 'A992'], ['units', 'us']],
+      Variants: [
+        ['frame', 'family', 'span', 'eaves', 'rise', 'spacing', 'column', 'rafter', 'snow', 'rafter restraint top [in]'],
+        ['V', 'portal', 40, 14, 3, 20, 'W12X26', 'W12X26', 25, 60],
+      ],
+    }; // prettier-ignore
+    const intake = readSheets(sheets);
+    expect(lines(intake)).toEqual([]);
+    const frame = first(intake);
+    expect(frame.nodes[2]?.x_m).toBeCloseTo(20 * 0.3048, 12);
+    expect(frame.members[1]?.lengthLtbTop_m).toBeCloseTo(60 * 0.0254, 12);
+    // 25 psf × 20 ft, 1 psf × 1 ft = 14.5939 N/m (sheets §2)
+    const [snow] = frame.memberLoads;
+    expect(snow?.kind === 'distributed' ? snow.q1_N_m : NaN).toBeCloseTo(-25 * 20 * 14.5939, 1);
+  });
+
+  it('a row that names the family changes all its variants', () => {
+    const sheets = shed();
+    sheets.Supports = [['frame', 'node', 'ux', 'uy', 'rz'], ['portal', 'A', 'fixed', 'fixed', 'fixed'], ['P1', 'E', 'fixed', 'fixed', 2000]]; // prettier-ignore
+    expect(first(readSheets(sheets)).supports.map((s) => [s.node, s.rz])).toEqual([[0, 'fixed'], [4, 2e6]]); // prettier-ignore
+  });
+
+  it('tells what is wrong with a template row at the template, for the variants it touches', () => {
+    const sheets = {
+      ...shed(),
+      'Member loads': [
+        ['frame', 'case', 'member', 'load', 'value'],
+        ['portal', 'dead', 'XY', 'distributed', -1],
+      ],
+    };
+    expect(lines(readSheets(sheets))).toEqual(['error unknown-member Member loads!C2 P1']);
   });
 });

@@ -102,7 +102,7 @@ function readMember(draft: Draft, row: Row, id: string): Member | undefined {
   };
 }
 
-export function indexIn<T>(list: T[], item: T): number {
+function indexIn<T>(list: T[], item: T): number {
   const at = list.indexOf(item);
   return at >= 0 ? at : list.push(item) - 1;
 }

@@ -18,7 +18,7 @@ export interface FoundSection {
   readonly entries: readonly Entry[];
 }
 
-export const dimensionNames = ['h', 'b', 'tw', 'tf', 'r', 't', 'd'] as const;
+const dimensionNames = ['h', 'b', 'tw', 'tf', 'r', 't', 'd'] as const;
 const propertyNames = ['A', 'I', 'W', 'W top', 'W bottom', 'depth', 'Av', 'Wpl', 'I minor', 'W minor', 'Wpl minor', 'It', 'Iw'];
 
 /** The batch's sections: those of the Sections sheet, else library designations. */
@@ -61,11 +61,6 @@ export class Sections {
       this.fromLibrary.set(name, found);
     }
     return found;
-  }
-
-  /** Material that the Sections sheet names for this section. */
-  rows(): Iterable<FoundSection> {
-    return this.bySheet.values();
   }
 }
 
