@@ -2,16 +2,16 @@
 import { mkdir, readFile } from 'node:fs/promises';
 import { basename, dirname, resolve } from 'node:path';
 import { readIntake } from '@/lib/intake/read-intake';
-import type { InputFile, Intake } from '@/lib/intake/intake';
+import type { InputFile } from '@/lib/intake/intake';
 import { readArguments, usage, type BatchArguments } from '@/worker/command/arguments';
 import { evaluateBatch, type EvaluatedBatch } from '@/worker/command/evaluate-batch';
 import { ProgressBar } from '@/worker/command/progress-bar';
-import { summarise } from '@/worker/command/summary';
+import { errorLines, summarise } from '@/worker/command/summary';
 import { writeCsvFolder, writeJsonFile, writeWorkbookFile } from '@/worker/threads/write-files';
 
 /**
  * Runs the command with the words typed after `--`, paths relative to `folder`.
- * @returns 0 every frame solved · 1 some not · 2 nothing could be read, or the arguments make no sense
+ * @returns 0 every frame solved · 1 some not · 2 nothing could be read (not one frame was found), or the arguments make no sense
  */
 export async function runBatch(words: readonly string[], folder: string): Promise<0 | 1 | 2> {
   const wanted = readArguments(words);
@@ -27,8 +27,8 @@ export async function runBatch(words: readonly string[], folder: string): Promis
   bar.end();
   try {
     if (!(await writeOutputs(batch, wanted, folder))) return 2;
-    if (nothingRead(intake)) {
-      for (const line of problemLines(intake)) process.stderr.write(`${line}\n`);
+    if (intake.frames.length === 0) {
+      process.stderr.write(`${errorLines(intake.problems, 20).join('\n') || 'No frame was found in what was sent.'}\n`);
       return 2;
     }
     if (!wanted.json && !wanted.xlsx && !wanted.csv) process.stdout.write(await summarise(batch));
@@ -36,21 +36,6 @@ export async function runBatch(words: readonly string[], folder: string): Promis
   } finally {
     batch.close();
   }
-}
-
-/** Nothing could be read: no frame was found, or the whole batch is stopped by a problem with its files. */
-function nothingRead(intake: Intake): boolean {
-  return intake.frames.length === 0 || intake.problems.some((problem) => problem.stopsAll);
-}
-
-function* problemLines({ problems }: Intake): Generator<string> {
-  const worst = problems.filter((problem) => problem.severity === 'error');
-  for (const { file, sheet, cell, message } of worst.slice(0, 20)) {
-    const place = [sheet ?? file, cell].filter(Boolean).join(', ');
-    yield place ? `${place}: ${message}` : message;
-  }
-  if (worst.length > 20) yield `… and ${worst.length - 20} more. --json OUT writes them all.`;
-  if (worst.length === 0) yield 'No frame was found in what was sent.';
 }
 
 async function readFiles(names: readonly string[], folder: string): Promise<InputFile[] | null> {

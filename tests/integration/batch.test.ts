@@ -173,7 +173,13 @@ describe('the queue and the command line', () => {
         const json = Buffer.from(await new Response(stream).arrayBuffer());
         await batch(join(folder, name), '--json', join(out, 'same.json'));
         expect(json.toString()).toBe(readFileSync(join(out, 'same.json'), 'utf8'));
-        if (folder === samples) continue;
+        if (folder === samples) {
+          // Someone who goes away in the middle takes the thread with him and leaves the next one undisturbed.
+          const reader = resultStream(pools, { file: database.file, office, revision, as: 'json' }).getReader();
+          expect((await reader.read()).value?.byteLength).toBeGreaterThan(1000);
+          await reader.cancel();
+          continue;
+        }
         const book = new ExcelJS.Workbook();
         const workbook = resultStream(pools, { file: database.file, office, revision, as: 'xlsx' });
         await book.xlsx.load(await new Response(workbook).arrayBuffer());

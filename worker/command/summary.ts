@@ -1,7 +1,19 @@
 /** What the command line prints where no output is named. */
+import type { Problem } from '@/lib/problems/problem';
 import type { Verdict } from '@/lib/results/result';
 import { formatRatio } from '@/lib/units/format';
 import type { EvaluatedBatch } from './evaluate-batch';
+
+/** The first errors, a line each with its cell, and how many there are besides. */
+export function errorLines(problems: readonly Problem[], most: number): string[] {
+  const errors = problems.filter((problem) => problem.severity === 'error');
+  const lines = errors.slice(0, most).map(({ file, sheet, cell, message }) => {
+    const place = [sheet ?? file, cell].filter((part) => part !== null).join(', ');
+    return place ? `${place}: ${message}` : message;
+  });
+  const more = errors.length - lines.length;
+  return more > 0 ? [...lines, `… and ${more} more. --json OUT writes them all.`] : lines;
+}
 
 interface Line {
   readonly frame: string;
@@ -32,11 +44,15 @@ export async function summarise(source: EvaluatedBatch): Promise<string> {
     if (worst.length > 200) keepWorst(worst);
   }
   keepWorst(worst);
-  const by = (severity: string): number => source.problems.filter((problem) => problem.severity === severity).length;
+  const by = (severity: string): string => {
+    const count = source.problems.filter((problem) => problem.severity === severity).length;
+    return `${count} ${severity}${count === 1 ? '' : 's'}`;
+  };
   const lines = [
     `${source.input.name}  sha256 ${source.input.sha256.slice(0, 12)}…  ${source.engine}`,
     `${source.frameCount} frames: ${counts.over} over, ${counts['not checked']} not checked, ${counts.near} near, ${counts.within} within; ${unsolved} not solved`,
-    `Problems in the sheets: ${by('error')} errors, ${by('warning')} warnings, ${by('note')} notes`,
+    `Problems in the sheets: ${by('error')}, ${by('warning')}, ${by('note')}`,
+    ...errorLines(source.problems, 5).map((line) => `  ${line}`),
     '',
     'Worst first',
     ...table(worst, source.settings.nearLimit),
