@@ -5,7 +5,7 @@ import localFont from 'next/font/local';
  * The Latin cuts come from their packages; Greek and the signs of formulas (≤ ≥ → ▲ ⁴ …) stand in a small
  * subset of the full face, first in the stack and limited to its own range, so that no other face steps in mid-formula.
  */
-export const symbols = localFont({
+const symbols = localFont({
   src: [
     { path: '../components/fonts/fira-symbols-400.woff2', weight: '400' },
     { path: '../components/fonts/fira-symbols-600.woff2', weight: '600' },
@@ -21,7 +21,7 @@ export const symbols = localFont({
   ],
 });
 
-export const sans = localFont({
+const sans = localFont({
   src: [
     { path: '../node_modules/@fontsource/fira-sans/files/fira-sans-latin-400-normal.woff2', weight: '400' },
     { path: '../node_modules/@fontsource/fira-sans/files/fira-sans-latin-500-normal.woff2', weight: '500' },
@@ -30,7 +30,7 @@ export const sans = localFont({
   variable: '--font-fira-sans',
 });
 
-export const condensed = localFont({
+const condensed = localFont({
   src: [
     { path: '../node_modules/@fontsource/fira-sans-condensed/files/fira-sans-condensed-latin-400-normal.woff2', weight: '400' },
     { path: '../node_modules/@fontsource/fira-sans-condensed/files/fira-sans-condensed-latin-500-normal.woff2', weight: '500' },
@@ -39,7 +39,7 @@ export const condensed = localFont({
   variable: '--font-fira-condensed',
 });
 
-export const mono = localFont({
+const mono = localFont({
   src: [
     { path: '../node_modules/@fontsource/fira-mono/files/fira-mono-latin-400-normal.woff2', weight: '400' },
     { path: '../node_modules/@fontsource/fira-mono/files/fira-mono-latin-500-normal.woff2', weight: '500' },

@@ -7,7 +7,7 @@ import { line, path, type Point } from './paper';
 import { memberWishes, nodeWishes, setScene, type Scene } from './scene';
 
 export type Force = 'N' | 'V' | 'M';
-export const forceQuantity = { N: 'force', V: 'force', M: 'moment' } as const;
+const forceQuantity = { N: 'force', V: 'force', M: 'moment' } as const;
 
 export interface DiagramPlan {
   readonly scene: Scene;

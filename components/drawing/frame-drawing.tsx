@@ -20,7 +20,7 @@ interface FrameDrawingProps {
   readonly initialForce?: Force;
 }
 
-export const viewNames = ['diagram', 'loads', 'deflected', 'ratio'] as const;
+const viewNames = ['diagram', 'loads', 'deflected', 'ratio'] as const;
 export type ViewName = (typeof viewNames)[number];
 
 const forceTitles = { N: 'Axial force', V: 'Shear force', M: 'Bending moment' } as const;

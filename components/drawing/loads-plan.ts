@@ -34,7 +34,7 @@ interface Block {
 export function planLoads(data: DrawingData, result: DrawingResult, width: number, height: number, large: boolean): LoadsPlan {
   const tall = large ? 30 : 17;
   const scene = setScene(data, width, height, large, (axes) => {
-    const corners = blocksOf(axes, data, result, tall).flatMap((block) => corner(block));
+    const corners = blocksOf(axes, data, result, tall).flatMap((block) => corner(block, large));
     const under = axes.flatMap((axis) => [axis.a, axis.b]);
     const lowest = Math.max(...under.map((p) => p.y), 0);
     return [...corners, ...heads(axes, data, result, tall * 1.25), { x: under[0]?.x ?? 0, y: lowest + (large ? 40 : 34) }];
@@ -84,11 +84,14 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
         className: 'd-load d-reaction-arc',
       });
   });
+  const said = besides(data, result);
+  const saidWidth = textWidth(said.join('; '), 12);
+  if (said.length > 0) taken.text({ x: 8 + saidWidth / 2, y: height - 10 }, saidWidth, 14, 0);
   const told = new Set<string>();
   const once = wishes.filter(({ text }) => !told.has(text) && told.add(text));
   wishes.splice(0, wishes.length, ...once, ...reactionWishes(scene, result));
   if (large) wishes.push(...nodeWishes(scene));
-  return { scene, arrows, labels: placeLabels(wishes, taken), besides: besides(data, result) };
+  return { scene, arrows, labels: placeLabels(wishes, taken), besides: said };
 }
 
 /** Unit direction on paper of the force of a positive load. */
@@ -135,8 +138,8 @@ function centre(data: DrawingData, axes: readonly MemberAxis[]): Point {
   return { x: mean((p) => p.x), y: mean((p) => p.y) };
 }
 
-function corner({ axis, load, side, base, h1, h2 }: Block): Point[] {
-  const text = 12 + Math.abs(side.x) * 74;
+function corner({ axis, load, side, base, h1, h2 }: Block, large: boolean): Point[] {
+  const text = large ? 12 + Math.abs(side.x) * 74 : 8;
   return [plus(along(axis, load.from), side, base + h1 + text), plus(along(axis, load.to), side, base + h2 + text)];
 }
 
@@ -277,7 +280,8 @@ function blockWishes(scene: Scene, blocks: readonly Block[]): LabelWish[] {
       [0.5, 0.3, 0.7, 0.1, 0.9].flatMap((share) => {
         const on = along(block.axis, block.load.from + (block.load.to - block.load.from) * share);
         const top = plus(on, block.side, block.base + block.h1 + (block.h2 - block.h1) * share);
-        return around(top, block.side, text, font, 4).slice(0, 3);
+        const inside = plus(on, block.side, -(Math.abs(block.side.x) * textWidth(text, font) * 0.5 + font));
+        return [...around(top, block.side, text, font, 4).slice(0, 3), { at: inside }];
       }),
     );
     return { key: `q-${i}`, text, className: 'd-load-text', size: font, places, must: i < 4 };

@@ -49,10 +49,6 @@ export function fitPaper(world: Bounds, width: number, height: number, margins: 
 }
 
 export const plus = (p: Point, d: Point, by = 1): Point => ({ x: p.x + d.x * by, y: p.y + d.y * by });
-export const between = (p: Point, q: Point, share: number): Point => ({
-  x: p.x + (q.x - p.x) * share,
-  y: p.y + (q.y - p.y) * share,
-});
 const fixed = (value: number) => String(Math.round(value * 100) / 100);
 export const path = (points: readonly Point[], close = false): string =>
   points.length === 0 ? '' : `M${points.map((p) => `${fixed(p.x)} ${fixed(p.y)}`).join('L')}${close ? 'z' : ''}`;

@@ -27,11 +27,10 @@ export function planRatio(data: DrawingData, width: number, height: number, larg
     const lengths = axes.map((axis) => axis.drawn).sort((a, b) => a - b);
     return Math.max(3, Math.min(large ? 15 : 8, (lengths[Math.floor(lengths.length / 2)] ?? 100) * 0.09));
   };
-  const scene = setScene(data, width, height, large, (axes) =>
-    axes.flatMap((axis) =>
-      [-1, 1].flatMap((s) => [along(axis, 0, s * half(axes) * 1.3), along(axis, axis.length, s * half(axes) * 1.3)]),
-    ),
-  );
+  const scene = setScene(data, width, height, large, (axes) => {
+    const off = half(axes) * 1.3;
+    return axes.flatMap((axis) => [-off, off].flatMap((side) => [along(axis, 0, side), along(axis, axis.length, side)]));
+  });
   const w = half(scene.axes);
   const lines = data.chosen?.lines ?? [];
   const follows = lines.length > 0 && lines.every((one) => one.ratio !== null);
@@ -49,7 +48,7 @@ export function planRatio(data: DrawingData, width: number, height: number, larg
     }
     const ratios = follows ? lines[axis.index] : undefined;
     const stretches =
-      ratios?.ratio != null
+      ratios !== undefined && ratios.ratio !== null
         ? follow(ratios.x, ratios.ratio, from, to, data.nearLimit)
         : [{ verdict: member.verdict, points: [from, to].map((x) => ({ x, ratio: member.ratio ?? 1 })) }];
     stretches.forEach(({ verdict, points }, i) => {

@@ -19,7 +19,7 @@ interface TableCellProps {
 }
 
 const verdicts: readonly string[] = ['within', 'near', 'over', 'not checked'];
-export const verdictOf = (value: Cell | undefined): Verdict | null =>
+const verdictOf = (value: Cell | undefined): Verdict | null =>
   typeof value === 'string' && verdicts.includes(value) ? (value as Verdict) : null;
 
 /** One cell by its column's kind; a number at its column's decimals, its unit beside it only where rows differ. */

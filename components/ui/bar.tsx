@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
+import { KeysHelp, type KeyWord } from './keys-help';
 import { Mark } from './mark';
 
 export interface BarWord {
@@ -23,6 +24,17 @@ interface BarProps {
   readonly account?: ReactNode;
 }
 
+/** The keys that work in the office's pages, shown by `?`. */
+const keys: readonly KeyWord[] = [
+  { keys: ['1', '…', '9'], does: 'go to a sheet of the revision; on a frame, make a view large (1 to 4)' },
+  { keys: ['j', 'k'], does: 'next and previous frame of the list' },
+  { keys: ['u'], does: 'from a frame back to its list' },
+  { keys: ['n', 'v', 'm'], does: 'axial force, shear force, bending moment' },
+  { keys: ['↑', '↓', '←', '→'], does: 'read the next cell, row, or point of a member' },
+  { keys: ['Enter'], does: 'open what is read' },
+  { keys: ['?'], does: 'show these keys' },
+];
+
 /** Office-level navigation: mark, name, a few words, office, person. No icons. */
 export function Bar({ words, home = '/', office, person, role, search, account }: BarProps) {
   return (
@@ -43,6 +55,7 @@ export function Bar({ words, home = '/', office, person, role, search, account }
       </nav>
       <div className="bar-right">
         {search}
+        {person && <KeysHelp keys={keys} />}
         {office && <span className="bar-office">{office}</span>}
         {person && (
           <span className="bar-person">

@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { Mark } from './mark';
 
 /** The cautions of every page and sheet with results, in full. */
-export const cautions =
+const cautions =
   'Results are of a linear-elastic plane model of what the sheets say; they don’t check connections, foundations, out-of-plane ' +
   'stability beyond the lengths given, fatigue, fire or erection. They must be reviewed by a competent engineer, licensed where the ' +
   'law asks for it; local codes, national annexes and the authority having jurisdiction come first. An over or not checked is not ' +
