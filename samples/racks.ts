@@ -37,7 +37,7 @@ export function racks(count: number): SampleSheet[] {
         if (level > 0 && column < bays) {
           const beam = `B${'ABCDEF'[column] ?? 'Z'}${level}`;
           members.push([frame, beam, name, `${'ABCDEF'[column + 1] ?? 'Z'}${level}`, 'IPE 300', 'beam', 1, 1]);
-          memberLoads.push([frame, 'pipes', beam, 'distributed', 'global', 'y', -12, level === 1 ? null : -6, 0.5, bay - 0.5]);
+          memberLoads.push([frame, 'pipes', beam, 'distributed', 'global', 'y', -24, level === 1 ? null : -12, 0.5, bay - 0.5]);
           memberLoads.push([frame, 'test', beam, 'distributed', null, null, -5, null, null, null]);
           if (column === 0) memberLoads.push([frame, 'anchor', beam, 'point', 'global', 'x', 8, null, bay / 3, null]);
         }
