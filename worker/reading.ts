@@ -9,7 +9,7 @@ import type { ReadTask } from './threads/read';
 import { unreadIntake } from './unread-intake';
 
 /** After this time reading is given up. */
-export const readingDeadline_s = 120;
+const readingDeadline_s = 120;
 
 /**
  * Reads one revision. Its state afterwards is "read", with whatever problems were found, or "failed" where the program

@@ -12,7 +12,7 @@ import { resultsFormat, type FrameResult, type ProblemJson, type ResultsJson } f
 const notRead = 'not analysed: errors in its sheets';
 
 /** A frame that errors in its sheets stopped, or that has not been analysed yet, as published. */
-export function unsolvedFrameJson(id: string, reason: string): FrameResult {
+function unsolvedFrameJson(id: string, reason: string): FrameResult {
   return {
     frame: id,
     status: 'not solved',
@@ -123,7 +123,7 @@ function checkJson(frameId: string, check: Check): FrameResult['checks'][number]
 }
 
 /** Every setting in the words of the Setup sheet, with where it came from. */
-export function settingsJson(settings: Settings, origins: SettingOrigins): ResultsJson['settings'] {
+function settingsJson(settings: Settings, origins: SettingOrigins): ResultsJson['settings'] {
   const names = Object.keys(settingWords) as SettingName[];
   return Object.fromEntries(
     names.map((name) => {
@@ -135,7 +135,7 @@ export function settingsJson(settings: Settings, origins: SettingOrigins): Resul
   );
 }
 
-export function problemJson(problem: Problem): ProblemJson {
+function problemJson(problem: Problem): ProblemJson {
   return {
     severity: problem.severity,
     code: problem.code,

@@ -50,7 +50,7 @@ const certificate = z.strictObject({
   secondReason: z.string().nullable(),
 });
 
-export const frameResultSchema = z.strictObject({
+const frameResultSchema = z.strictObject({
   frame: z.string(),
   status: z.enum(['solved', 'not solved']),
   verdict,
@@ -71,7 +71,7 @@ export const frameResultSchema = z.strictObject({
 });
 export type FrameResult = z.infer<typeof frameResultSchema>;
 
-export const problemSchema = z.strictObject({
+const problemSchema = z.strictObject({
   severity: z.enum(['error', 'warning', 'note']),
   code: z.string(),
   file: z.string().nullable(),
@@ -87,7 +87,7 @@ export const problemSchema = z.strictObject({
 });
 export type ProblemJson = z.infer<typeof problemSchema>;
 
-export const settingSchema = z.strictObject({
+const settingSchema = z.strictObject({
   value: z.union([z.string(), z.number(), z.boolean()]).nullable(),
   defaulted: z.boolean(),
   source: z.enum(['sheet', 'office', 'default']),

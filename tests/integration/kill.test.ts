@@ -26,7 +26,7 @@ beforeAll(async () => {
   // The bundler runs as a program, since it is plain JavaScript without types.
   await ended(spawn(process.execPath, ['worker/build.mjs'], { cwd: root, stdio: 'inherit' }));
   await build({
-    entryPoints: [join(root, 'tests/integration/kill-child.ts')],
+    entryPoints: [join(root, 'tests/setup/kill-child.ts')],
     outfile: child,
     bundle: true,
     platform: 'node',
@@ -37,7 +37,10 @@ beforeAll(async () => {
     logLevel: 'warning',
   });
 });
-afterAll(() => rmSync(folder, { recursive: true, force: true }));
+afterAll(() => {
+  rmSync(folder, { recursive: true, force: true });
+  rmSync(child, { force: true });
+});
 
 interface Revision {
   readonly office: number;
