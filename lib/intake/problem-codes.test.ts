@@ -81,6 +81,10 @@ describe('every problem stands at its cell with its severity, and stops only the
     const sheets = withCells(changes);
     const intake = readSheets(sheets);
     expect(lines(intake)).toEqual(problems);
+    for (const { message } of intake.problems) {
+      expect(message).not.toMatch(/undefined|NaN|\[object|please|sorry|oops|invalid/i);
+      expect(message.length).toBeLessThan(260);
+    }
     expect(intake.frames.flatMap((f) => (f.frame ? [f.id] : []))).toEqual(running);
   });
 });

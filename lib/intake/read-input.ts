@@ -7,7 +7,7 @@ import { familiesInUse, FrameList } from '@/lib/intake/frames';
 import { nearest } from '@/lib/intake/distance';
 import type { FrameRead, InputIdentity, InputRow, Intake, SheetRead } from '@/lib/intake/intake';
 import { ProblemList } from '@/lib/intake/problem-list';
-import { Reader } from '@/lib/intake/reader';
+import { forNobody, Reader } from '@/lib/intake/reader';
 import { readTable } from '@/lib/intake/read-table';
 import { cellAddress } from '@/lib/intake/files/cell-address';
 import { sheetDefinitions, type SheetName, sheetNames } from '@/lib/intake/sheet-definitions';
@@ -15,7 +15,7 @@ import { LoadCases } from '@/lib/intake/sheets/load-cases';
 import { Materials } from '@/lib/intake/sheets/materials';
 import { Sections } from '@/lib/intake/sheets/sections';
 import { readSetup } from '@/lib/intake/sheets/setup';
-import { absentPlace, type Part, partPlace, type Table } from '@/lib/intake/table';
+import { absentPlace, type Part, partPlace, rawCell, type Table } from '@/lib/intake/table';
 import { BatchWarnings } from '@/lib/intake/warnings';
 import { sheetKey } from '@/lib/intake/words';
 import type { Settings } from '@/lib/model/settings';
@@ -54,7 +54,8 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
     const found = name === 'Setup' ? setupTable : table(name, system);
     if (found) tables.set(name, found);
   }
-  tellMissingSheets(tables, raw.sheets, problems);
+  // a file that could not be read may hold the sheet that seems missing
+  if (!raw.problems.some((problem) => problem.severity === 'error')) tellMissingSheets(tables, raw.sheets, problems);
 
   const sections = new Sections(tables.get('Sections'), reader, problems);
   const materials = new Materials(tables.get('Materials'), reader, problems);
@@ -83,7 +84,7 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
 }
 
 function readFrames(batch: Batch): FrameRead[] {
-  const { problems, settings, settingPlaces, materials } = batch;
+  const { problems } = batch;
   const builder = new FrameBuilder(batch);
   const warnings = new BatchWarnings(batch);
   const read: FrameRead[] = [];
@@ -96,6 +97,19 @@ function readFrames(batch: Batch): FrameRead[] {
   }
   builder.finish();
   if (read.length > 0) warnings.finish();
+  tellUnknownMaterials(batch);
+  return read;
+}
+
+/** Names of materials that are nowhere, in Setup and Sections, where no member leans on them. */
+function tellUnknownMaterials(batch: Batch): void {
+  const { problems, reader, settings, settingPlaces, materials, tables } = batch;
+  for (const row of tables.get('Sections')?.rows ?? []) {
+    const name = rawCell(row, 'material') ? reader.id(row, 'material', forNobody) : null;
+    const found = name ? materials.find(name) : null;
+    if (!name || !found || !('suggestion' in found)) continue;
+    reader.tell(row, 'material', { code: 'unknown-material', message: say.unknownMaterial(name, found.suggestion) }, forNobody);
+  }
   if (settings.material !== null) {
     const found = materials.find(settings.material);
     const place = settingPlaces.get('material');
@@ -103,7 +117,6 @@ function readFrames(batch: Batch): FrameRead[] {
       problems.add(place, { code: 'unknown-material', message: say.unknownMaterial(settings.material, found.suggestion) }, null);
     }
   }
-  return read;
 }
 
 /** Sheets by the contract's names; others are told and left alone. */

@@ -192,6 +192,15 @@ describe('sections', () => {
     expect(lines(intake)).toEqual(['error unknown-section Sections!B2 –']);
     expect(intake.frames.every((f) => f.frame)).toBe(true);
   });
+  it('a material that is nowhere is told, whether a member uses the section or not', () => {
+    const sheets = withCells({
+      'Sections+': ['section', 'designation', 'material'],
+      'Sections+2': ['S', 'IPE 300', 'S27S'],
+      'Sections+3': ['T', 'IPE 300', 'S27S'],
+      'Members!E2': 'S',
+    });
+    expect(lines(readSheets(sheets))).toEqual(['error unknown-material Sections!C2 F1', 'error unknown-material Sections!C3 –']);
+  });
   it('a turned member needs I minor', () => {
     const sheets = withCells({ 'Members!G1': 'turned', 'Members!G2': 'yes' }, withSection(['A', 'I'], 28.5, 1943));
     expect(lines(readSheets(sheets))).toEqual(['error not-a-number Members!G2 F1']);
