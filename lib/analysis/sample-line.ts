@@ -9,7 +9,9 @@ import { valueAt, type LineValue } from './value-at';
 export function sampleLine(line: MemberLine, n: number): LineValue[] {
   if (!(Number.isInteger(n) && n > 0)) throw new RangeError(`Expected n to be a whole number above zero, got ${n}`);
   const xs = new Set<number>();
-  for (let i = 0; i <= n; i++) xs.add((line.length * i) / n);
+  for (let i = 0; i < n; i++) xs.add((line.length * i) / n);
+  // not (L n) / n, which may stand an ulp beyond the end
+  xs.add(line.length);
   const { N, V, M, deflection } = memberExtremes(line);
   for (const { maxAt, minAt } of [N, V, M]) xs.add(maxAt).add(minAt);
   xs.add(deflection.at);
