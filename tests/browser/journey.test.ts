@@ -184,15 +184,17 @@ async function dropFile(page: Page, path: string): Promise<void> {
   await page.locator('.drop-zone').dispatchEvent('drop', { dataTransfer: data });
 }
 
-/** A sheet's rows by heading, units in brackets left off the frames' own columns. */
+/** A sheet's rows by heading. */
 function tableOf(book: ExcelJS.Workbook, name: string): Map<string, ExcelJS.CellValue>[] {
   const sheet = book.getWorksheet(name);
   if (!sheet) throw new Error(`The workbook has no sheet ${name}`);
-  const headings = (sheet.getRow(1).values as ExcelJS.CellValue[]).map((value) => String(value ?? ''));
+  const headings = Array.from({ length: sheet.columnCount }, (_, index) =>
+    String(sheet.getRow(1).getCell(index + 1).value ?? ''),
+  );
   const rows: Map<string, ExcelJS.CellValue>[] = [];
   for (let at = 2; at <= sheet.rowCount; at++) {
     const row = sheet.getRow(at);
-    rows.push(new Map(headings.map((heading, index) => [heading, row.getCell(Math.max(index, 1)).value])));
+    rows.push(new Map(headings.map((heading, index) => [heading, row.getCell(index + 1).value])));
   }
   return rows;
 }
