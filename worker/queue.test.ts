@@ -3,6 +3,7 @@ import { insertUpload } from '@/db/queries/uploads';
 import { countWaiting } from '@/db/queries/results';
 import { findLatestJob } from '@/db/queries/jobs';
 import { listProblems } from '@/db/queries/problems';
+import { cantileverFrame } from '@/lib/results/cantilever-frame';
 import { findRevisionById } from '@/db/queries/revisions';
 import { askForReading, askForRun, askToStop } from './ask';
 import type { Pools } from './pools';
@@ -159,6 +160,21 @@ describe('runs', () => {
     expect([await stateOf(a), await stateOf(b)]).toEqual(['run', 'run']);
     expect(solved).toHaveLength(3 * chunkSize);
     expect(new Set(solved).size).toBe(3 * chunkSize);
+  });
+
+  it('tell a frame that moves freely as an error, once, and solve the others', async () => {
+    const office = await testOffice(database, 'North');
+    const of = await readingRevision(database, office);
+    const intake = cantilevers(3);
+    const supports = [{ node: 0, ux: 'fixed' as const, uy: 'fixed' as const, rz: 'free' as const, angle_rad: 0 }];
+    const frames = [...intake.frames, { id: 'L', frame: cantileverFrame('L', { supports }) }];
+    insertIntake(database.raw, of.office, of.revision, { ...intake, frames });
+    const queue = queueOf(pretendPools(solving));
+    await askForRun(queue, database, of);
+    await queue.idle();
+    await tellFailures({ file: database.file, office: of.office, revision: of.revision });
+    expect(await findRevisionById(database.db, of.office, of.revision)).toMatchObject({ state: 'run', errors: 1 });
+    expect(await listProblems(database.db, of.office, of.revision)).toMatchObject([{ code: 'mechanism', frames: ['L'] }]);
   });
 
   it('tell how far they are while they go on', async () => {

@@ -57,6 +57,17 @@ export function listFailures(raw: RawDatabase, revision: number): FrameFailure[]
     });
 }
 
+/** Counts a revision's problems afresh, after some were added. */
+export function updateProblemCounts(raw: RawDatabase, revision: number): void {
+  const count = (severity: number): string =>
+    `(select count(*) from problem where problem.revision = revision.id and severity = ${severity})`;
+  raw
+    .prepare(
+      `update revision set errors = ${count(0)}, warnings = ${count(1)}, notes = ${count(2)}, stamp = stamp + 1 where id = ?`,
+    )
+    .run(revision);
+}
+
 /** Rows as typed, in order; reads a thousand at a time, and may be called again. */
 export function* inputRows(raw: RawDatabase, revision: number): Generator<InputRow> {
   const some = raw.prepare<[number, number], { ordinal: number; sheet: string; row: number; cells: string }>(

@@ -1,7 +1,7 @@
 /** In a thread: mechanisms and loose parts that a run has found, told as problems at their cells. */
 import { insertProblems } from '@/db/queries/intake';
 import { listProblems, listSheets } from '@/db/queries/problems';
-import { inputRows, listFailures } from '@/db/queries/waiting';
+import { inputRows, listFailures, updateProblemCounts } from '@/db/queries/waiting';
 import { failureProblems } from '@/lib/results/failure-problem';
 import { openOnce } from './open-once';
 
@@ -19,5 +19,7 @@ export async function tellFailures({ file, office, revision }: FailuresTask): Pr
   if (failures.length === 0) return;
   const [problems, sheets] = await Promise.all([listProblems(db, office, revision), listSheets(db, office, revision)]);
   const found = failureProblems({ problems, sheets, rows: inputRows(raw, revision) }, failures);
-  if (found.length > 0) insertProblems(raw, revision, found);
+  if (found.length === 0) return;
+  insertProblems(raw, revision, found);
+  updateProblemCounts(raw, revision);
 }
