@@ -34,5 +34,5 @@ export function expandSigns(name: string, terms: readonly ListedTerm[]): SignedV
 
 /** A factor as typed: `±1.5`, `+/-1.5`, `+-1.5`; null where no ± stands in front. */
 export function splitSign(text: string): string | null {
-  return /^\s*(?:±|\+\s*\/\s*[-−–]|\+[-−–])\s*(.+)$/.exec(text)?.[1] ?? null;
+  return /^\s*(?:±|\+\s*\/\s*[-−–]|\+[-−–])\s*(\S.*)$/s.exec(text)?.[1] ?? null;
 }

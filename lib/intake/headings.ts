@@ -10,8 +10,12 @@ export interface HeadingText {
   readonly unit: string | null;
 }
 
+const longest = 200;
+
 /** `x [m]`, `x (mm)`: the name, and the unit in the last brackets. */
 export function splitHeading(text: string): HeadingText {
+  // no heading with a unit is as long as that, and the search would take long on a text made to be slow
+  if (text.length > longest) return { text, name: text.trim(), unit: null };
   const match = /^(.*?\S)\s*(?:\[([^\]]*)\]|\(([^)]*(?:\([^)]*\)[^)]*)?)\))\s*$/s.exec(text.trim());
   if (!match) return { text, name: text.trim(), unit: null };
   return { text, name: match[1] ?? '', unit: (match[2] ?? match[3] ?? '').trim() };

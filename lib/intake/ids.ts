@@ -1,11 +1,10 @@
 /** Ids (frames, nodes, members, sections …) match without regard to case and outer blanks only (sheets §2). */
 
-const outer = /^[\s\u00a0]+|[\s\u00a0]+$/g;
 const plainNumber = /^[+-]?\d+(\.\d*)?(e[+-]?\d+)?$/i;
 
 /** An id as it is shown: as typed, without outer blanks. */
 export function idShown(text: string): string {
-  return text.replace(outer, '');
+  return text.trim();
 }
 
 /** A number used as an id is its shortest decimal text. */
@@ -18,7 +17,7 @@ export function numberAsId(value: number): string {
  * starts with a zero that the number would not have (`01` is another id).
  */
 export function idText(text: string): string {
-  const trimmed = text.replace(outer, '');
+  const trimmed = text.trim();
   if (!plainNumber.test(trimmed) || /^[+-]?0\d/.test(trimmed) || trimmed.length > 15) return trimmed;
   return numberAsId(Number(trimmed));
 }

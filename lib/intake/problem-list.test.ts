@@ -41,6 +41,13 @@ it('an error that lowers verdicts stops nothing; one of the whole batch stops al
   list.add(at(0, 1, 2), { code: 'missing-sheet', message: '', stopsAll: true }, null);
   expect(list.stopsAll).toBe(true);
 });
+it('a cell’s endless text is not repeated in full', () => {
+  const list = new ProblemList();
+  const text = 'x'.repeat(32_000);
+  list.add({ ...at(0, 1, 1), found: text }, { code: 'not-a-number', message: text }, null);
+  const [problem] = list.list();
+  expect([problem?.found?.length, problem?.message.length]).toEqual([301, 801]);
+});
 it('a flood of notes is counted, not listed; errors all stand', () => {
   const list = new ProblemList();
   for (let row = 1; row <= 6000; row += 1) list.add(at(0, row, 0), { code: 'text-number', message: '' }, 'F1');

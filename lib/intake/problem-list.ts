@@ -134,6 +134,9 @@ export class ProblemList {
 
 const compare = (a: number, b: number): number => (a === b ? 0 : a < b ? -1 : 1);
 
+/** A cell may hold 32,000 characters; a problem does not repeat them all. */
+const cut = (text: string, most: number): string => (text.length > most ? `${text.slice(0, most)}…` : text);
+
 function problemOf({ place, code, severity, message, frames, stopsAll }: Entry): Problem {
   return {
     severity,
@@ -144,8 +147,8 @@ function problemOf({ place, code, severity, message, frames, stopsAll }: Entry):
     column: place.heading,
     cell: place.row === null || place.column === null ? null : cellAddress(place.row, place.column),
     frames: [...frames],
-    found: place.found,
-    message,
+    found: place.found === null ? null : cut(place.found, 300),
+    message: cut(message, 800),
     stopsAll,
   };
 }

@@ -155,7 +155,7 @@ function bound(row: Row, column: string, quantity: Quantity | null, factor: numb
   const at = columnOf(row, column);
   const cell = rawCell(row, column);
   if (!at || !cell || quantity === null) return null;
-  const open = /^\s*[<>]\s*(.*)$/.exec(cell.text)?.[1];
+  const open = /^\s*[<>]\s*(.*)$/s.exec(cell.text)?.[1];
   const read = open === undefined ? row : withCell(row, at.index, open);
   const value = reader.numberAs(read, at, quantity, factor, forNobody);
   return value === null || value === undefined ? null : { value, open: open !== undefined };

@@ -185,5 +185,5 @@ export class CombinationTerms {
 }
 
 function looksLikeFactor(text: string): boolean {
-  return /^\s*[±+−–-]?[\s+/−–-]*[.,]?\d/.test(text) || text.startsWith('{');
+  return /^[±+−–\-\s/]*[.,]?\d/.test(text) || text.startsWith('{');
 }
