@@ -1,6 +1,6 @@
 /** Every frame of a revision with its results, for result files: read piece by piece on the raw driver, in a thread. */
 import type { RawDatabase } from '@/db/open';
-import { evaluationOf, frameOf, type NamedVersion, type StoredState } from '@/db/queries/results';
+import { evaluationOf, frameOf, statesOnly, type NamedVersion, type StoredState } from '@/db/queries/results';
 import type { Frame } from '@/lib/model/frame';
 import type { FrameEvaluation } from '@/lib/results/result';
 
@@ -23,15 +23,25 @@ type Row = Omit<NamedVersion, 'model'> & {
   readonly version: number | null;
   readonly model: Buffer | null;
   readonly evaluation: Buffer | null;
+  readonly state: 'waiting' | 'solved' | 'not solved' | null;
 };
 
 /** Frames read from the database at once. */
 const piece = 100;
 
-/** @param need without `states` an evaluation's states are left empty, and are not read */
-export function* frameRows(raw: RawDatabase, revision: number, need: { readonly states: boolean }): Generator<FrameRow> {
+/**
+ * @param need without `states` an evaluation's states are left empty; with `checks` false all but its states is: what is
+ *   not needed is not read
+ */
+export function* frameRows(
+  raw: RawDatabase,
+  revision: number,
+  need: { readonly states: boolean; readonly checks?: boolean },
+): Generator<FrameRow> {
   const some = raw.prepare<[number, number], Row>(
-    `select f.frame, f.frame_id, f.title, f.group_name, f.count, f.note, f.version, v.model, v.evaluation
+    `select f.frame, f.frame_id, f.title, f.group_name, f.count, f.note, f.version, v.model, ${
+      need.checks === false ? 'null as evaluation' : 'v.evaluation'
+    }, v.state
      from revision_frame f left join frame_version v on v.id = f.version
      where f.revision = ? and f.frame > ? order by f.frame limit ${piece}`,
   );
@@ -40,7 +50,10 @@ export function* frameRows(raw: RawDatabase, revision: number, need: { readonly 
     const rows = some.all(revision, last);
     for (const row of rows) {
       const { frame: index, frame_id: id, title, group_name, count, note, model, evaluation, version } = row;
-      const stored = evaluation && evaluationOf(evaluation, need.states && version !== null ? states.all(version) : []);
+      const found = need.states && version !== null ? states.all(version) : [];
+      const solved = version !== null && row.state !== 'waiting';
+      const stored =
+        need.checks === false ? (solved ? statesOnly(found) : null) : evaluation && evaluationOf(evaluation, found).evaluation;
       yield {
         index,
         id,
@@ -49,7 +62,7 @@ export function* frameRows(raw: RawDatabase, revision: number, need: { readonly 
         count,
         note,
         frame: model && frameOf({ ...row, model }),
-        evaluation: stored ? stored.evaluation : null,
+        evaluation: stored,
       };
     }
     if (rows.length < piece) return;

@@ -1,11 +1,10 @@
 /** What the frames are made of, as it was used: sections, materials, load cases, combinations, limits, load totals. */
-import { appliedTotals } from '@/lib/analysis/applied-totals';
-import type { Frame, Material, Section, SectionProperties } from '@/lib/model/frame';
+import type { Material, SectionProperties } from '@/lib/model/frame';
 import { cellOf, quantityColumn, text } from '@/lib/reports/workbook/report-sheet';
-import type { ReportCell, ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
-import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
 import { unitLabel } from '@/lib/units/batch-unit';
-import type { Quantity } from '@/lib/units/quantity';
+import type { Quantity, System } from '@/lib/units/quantity';
 
 const sectionRows: readonly (readonly [keyof SectionProperties, string, Quantity])[] = [
   ['A_m2', 'A', 'area'],
@@ -34,22 +33,7 @@ const materialRows: readonly (readonly [keyof Material['sources'], string, Quant
   ['expansion_perK', 'expansion', 'expansion'],
 ];
 
-/** Yields each thing of the frames once, by its content. */
-async function* distinct<T>(source: ReportSource, of: (frame: Frame) => Iterable<T>): AsyncIterable<T> {
-  const seen = new Set<string>();
-  for await (const each of source.frames({ states: false })) {
-    if (each.frame === null) continue;
-    for (const thing of of(each.frame)) {
-      const key = JSON.stringify(thing);
-      if (seen.has(key)) continue;
-      seen.add(key);
-      yield thing;
-    }
-  }
-}
-
-export function sectionsSheet(source: ReportSource): ReportSheet {
-  const system = source.settings.units;
+export function sectionsSheet({ parts }: BatchFacts, system: System): ReportSheet {
   const line = (kind: string, name: string, of: string, value: number | null, quantity: Quantity, from: string): ReportRow =>
     [kind, name, of, value === null ? 'not available' : cellOf(value, quantity, system), unitLabel(quantity, system), from]; // prettier-ignore
   return {
@@ -62,14 +46,14 @@ export function sectionsSheet(source: ReportSource): ReportSheet {
       text('unit', 8),
       text('source', 10),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const section of distinct<Section>(source, (frame) => frame.sections)) {
+    *rows(): Iterable<ReportRow> {
+      for (const section of parts.sections.values()) {
         for (const [key, word, quantity] of sectionRows) {
           const value = section.properties[key];
           yield line('section', section.name, word, value, quantity, value === null ? '' : (section.sources[key] ?? 'derived'));
         }
       }
-      for await (const material of distinct<Material>(source, (frame) => frame.materials)) {
+      for (const material of parts.materials.values()) {
         for (const [key, word, quantity] of materialRows) {
           const value = material[key];
           yield line(
@@ -86,7 +70,7 @@ export function sectionsSheet(source: ReportSource): ReportSheet {
   };
 }
 
-export function loadCasesSheet(source: ReportSource): ReportSheet {
+export function loadCasesSheet({ parts }: BatchFacts): ReportSheet {
   return {
     name: 'Load cases',
     columns: [
@@ -97,28 +81,23 @@ export function loadCasesSheet(source: ReportSource): ReportSheet {
       text('reversible'),
       text('note', 30),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of distinct(source, (frame) => frame.cases)) {
+    *rows(): Iterable<ReportRow> {
+      for (const each of parts.cases.values()) {
         yield [each.name, each.kind, each.selfWeight, each.alternative, each.reversible ? 'yes' : 'no', each.note];
       }
     },
   };
 }
 
-export function combinationsSheet(source: ReportSource): ReportSheet {
-  const named = (frame: Frame) =>
-    frame.combinations.flatMap((each) =>
-      each.terms.map((term) => [each.name, each.purpose, frame.cases[term.case]?.name ?? '', term.factor] satisfies ReportCell[]),
-    );
+export function combinationsSheet({ parts }: BatchFacts): ReportSheet {
   return {
     name: 'Combinations',
     columns: [text('combination', 16), text('purpose'), text('case'), { heading: 'factor', format: '0.000' }],
-    rows: () => distinct<ReportRow>(source, named),
+    rows: () => parts.terms.values(),
   };
 }
 
-export function limitsSheet(source: ReportSource): ReportSheet {
-  const system = source.settings.units;
+export function limitsSheet({ parts }: BatchFacts, system: System): ReportSheet {
   return {
     name: 'Limits',
     columns: [
@@ -132,17 +111,15 @@ export function limitsSheet(source: ReportSource): ReportSheet {
       text('combination', 16),
       text('source', 18),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of distinct(source, (frame) => frame.limits)) {
+    *rows(): Iterable<ReportRow> {
+      for (const each of parts.limits.values()) {
         yield [each.name, each.target, each.measure, each.direction, each.toNode, each.ratio, cellOf(each.absolute_m, 'displacement', system), each.combination ?? 'every service combination', each.source]; // prettier-ignore
       }
     },
   };
 }
 
-/** Sum of all applied loads of each case, about the origin: what a checker compares with a hand take-off. */
-export function loadTotalsSheet(source: ReportSource): ReportSheet {
-  const system = source.settings.units;
+export function loadTotalsSheet(facts: BatchFacts, system: System): ReportSheet {
   return {
     name: 'Applied load totals',
     columns: [
@@ -152,15 +129,6 @@ export function loadTotalsSheet(source: ReportSource): ReportSheet {
       quantityColumn('ΣFy', 'force', system),
       quantityColumn('ΣMz about the origin', 'moment', system),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: false })) {
-        if (each.frame === null) continue;
-        const totals = appliedTotals(each.frame);
-        for (const [index, loadCase] of each.frame.cases.entries()) {
-          const sum = totals[index];
-          yield [each.id, loadCase.name, cellOf(sum?.Fx_N, 'force', system), cellOf(sum?.Fy_N, 'force', system), cellOf(sum?.Mz_Nm, 'moment', system)]; // prettier-ignore
-        }
-      }
-    },
+    rows: () => facts.totalRows,
   };
 }

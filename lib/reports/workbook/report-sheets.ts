@@ -10,21 +10,22 @@ import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { displacementsSheet, membersByCombinationSheet, reactionsSheet } from '@/lib/reports/workbook/state-sheets';
 
 export async function reportSheets(source: ReportSource): Promise<ReportSheet[]> {
-  const facts = await gatherFacts(source.frames({ states: false }));
+  const facts = await gatherFacts(source);
+  const system = source.settings.units;
   return [
     coverSheet(source, facts),
-    framesSheet(source),
-    flagsSheet(source),
+    framesSheet(facts, system),
+    flagsSheet(facts),
     membersSheet(source),
     membersByCombinationSheet(source),
     reactionsSheet(source),
     displacementsSheet(source),
     movementsSheet(source),
-    sectionsSheet(source),
-    loadCasesSheet(source),
-    combinationsSheet(source),
-    limitsSheet(source),
-    loadTotalsSheet(source),
+    sectionsSheet(facts, system),
+    loadCasesSheet(facts),
+    combinationsSheet(facts),
+    limitsSheet(facts, system),
+    loadTotalsSheet(facts, system),
     inputSheet(source),
     problemsSheet(source),
   ];

@@ -30,6 +30,14 @@ export interface ReportFrame {
   readonly evaluation: FrameEvaluation | null;
 }
 
+/** What of an evaluation is looked at; the rest may be left empty, since fetching it costs. */
+export interface FrameNeed {
+  /** Displacements, reactions, end forces. */
+  readonly states: boolean;
+  /** Checks, verdict, certificate, mass and all else but the states. Default true. */
+  readonly checks?: boolean;
+}
+
 export interface ReportSource {
   readonly title: ReportTitle;
   readonly engine: string;
@@ -38,6 +46,6 @@ export interface ReportSource {
   readonly origins: SettingOrigins;
   readonly problems: readonly Problem[];
   readonly inputRows: () => Iterable<InputRow>;
-  /** Frames in sheet order; called once for each sheet that needs them. `states` says whether states are needed. */
-  readonly frames: (need: { readonly states: boolean }) => Iterable<ReportFrame> | AsyncIterable<ReportFrame>;
+  /** Frames in sheet order; called once for each sheet that needs them, with what that sheet looks at. */
+  readonly frames: (need: FrameNeed) => Iterable<ReportFrame> | AsyncIterable<ReportFrame>;
 }

@@ -40,7 +40,7 @@ export function membersByCombinationSheet(source: ReportSource): ReportSheet {
       length('deflection at'),
     ],
     async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true })) {
+      for await (const each of source.frames({ states: true, checks: false })) {
         const { frame, evaluation } = each;
         if (frame === null || evaluation === null) continue;
         for (const state of evaluation.states) {
@@ -94,7 +94,7 @@ export function reactionsSheet(source: ReportSource): ReportSheet {
       quantityColumn('Mz on the foundation', 'moment', system),
     ],
     async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true })) {
+      for await (const each of source.frames({ states: true, checks: false })) {
         const { frame, evaluation } = each;
         if (frame === null || evaluation === null) continue;
         for (const state of evaluation.states) {
@@ -127,7 +127,7 @@ export function displacementsSheet(source: ReportSource): ReportSheet {
       quantityColumn('rz', 'rotation', system),
     ],
     async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true })) {
+      for await (const each of source.frames({ states: true, checks: false })) {
         const { frame, evaluation } = each;
         if (frame === null || evaluation === null) continue;
         for (const state of evaluation.states) {

@@ -23,11 +23,13 @@ const headStyle: Partial<ExcelJS.Style> = {
 };
 const boldStyle: Partial<ExcelJS.Style> = { font: { bold: true, color: ink } };
 
-/** exceljs writes each style object once as long as it is the same object. */
-function columnStyles(columns: readonly ReportColumn[]): (Partial<ExcelJS.Style> | null)[] {
+/** What a cell without any style gets: exceljs looks up a style object it knows, and works out anew each one it does not. */
+const plainStyle: Partial<ExcelJS.Style> = {};
+
+function columnStyles(columns: readonly ReportColumn[]): Partial<ExcelJS.Style>[] {
   const shared = new Map<string, Partial<ExcelJS.Style>>();
   return columns.map(({ format }) => {
-    if (format === undefined) return null;
+    if (format === undefined) return plainStyle;
     const known = shared.get(format) ?? { numFmt: format };
     shared.set(format, known);
     return known;
@@ -79,7 +81,7 @@ function closePage(page: ExcelJS.Worksheet, sheet: ReportSheet, rows: number): v
 function addRow(
   page: ExcelJS.Worksheet,
   sheet: ReportSheet,
-  styles: readonly (Partial<ExcelJS.Style> | null)[],
+  styles: readonly Partial<ExcelJS.Style>[],
   cells: readonly ReportCell[],
 ): void {
   const row = page.addRow(cells);
@@ -90,12 +92,9 @@ function addRow(
   }
   for (let index = 0; index < sheet.columns.length; index += 1) {
     const value = cells[index];
-    const style = styles[index];
-    if (style && typeof value === 'number') row.getCell(index + 1).style = style;
-    else if (sheet.columns[index]?.verdict && typeof value === 'string') {
-      const filled = verdictStyles[value];
-      if (filled) row.getCell(index + 1).style = filled;
-    }
+    if (value === null || value === undefined) continue;
+    const filled = sheet.columns[index]?.verdict && typeof value === 'string' ? verdictStyles[value] : undefined;
+    row.getCell(index + 1).style = filled ?? (typeof value === 'number' ? styles[index] : undefined) ?? plainStyle;
   }
   row.commit();
 }

@@ -1,0 +1,49 @@
+/** Speed by ratio within one run: what is compared is measured in turn, warm, the median of at least five rounds. */
+import { writeFileSync } from 'node:fs';
+import { resolve } from 'node:path';
+import { chainAgainstBare } from './chain';
+import { profileChain } from './profile';
+import { twoThreadsAgainstOne } from './threads';
+
+/** What each key must reach. */
+const must: Readonly<Record<string, { readonly limit: number; readonly atLeast?: boolean }>> = {
+  'chain.1000.io': { limit: 1.5 },
+  'threads.2.1': { limit: 1.6, atLeast: true },
+  'query.page.bare': { limit: 5 },
+  'query.page.growth': { limit: 3 },
+  'query.summary.growth': { limit: 12 },
+  'ping.busy.idle': { limit: 3 },
+  'ping.busy2.idle': { limit: 3 },
+  'rss.20000.MB': { limit: 800 },
+};
+
+const groups: readonly (readonly [string, () => Promise<Record<string, number>>])[] = [
+  ['chain', () => chainAgainstBare(5)],
+  ['profile', async () => (await profileChain(), {})],
+  ['threads', () => twoThreadsAgainstOne(5)],
+];
+
+/** @param words `--json FILE` writes the figures as one object; other words name the groups to measure */
+export async function bench(words: readonly string[]): Promise<number> {
+  const at = words.indexOf('--json');
+  const file = at >= 0 ? words[at + 1] : undefined;
+  if (at >= 0 && file === undefined) {
+    console.error('--json needs the name of a file');
+    return 2;
+  }
+  const named = words.filter((word, index) => word !== '--json' && (at < 0 || index !== at + 1));
+  const figures: Record<string, number> = {};
+  for (const [name, measure] of groups) {
+    if (named.length > 0 && !named.includes(name)) continue;
+    console.log(`${name} …`);
+    Object.assign(figures, await measure());
+  }
+  for (const [key, value] of Object.entries(figures)) {
+    const target = must[key];
+    const met = target === undefined || (target.atLeast ? value >= target.limit : value <= target.limit);
+    const words = target ? `${target.atLeast ? 'at least' : 'at most'} ${target.limit}: ${met ? 'met' : 'MISSED'}` : '';
+    console.log(`${key.padEnd(22)} ${value.toPrecision(4).padStart(8)}   ${words}`);
+  }
+  if (file !== undefined) writeFileSync(resolve(process.env['INIT_CWD'] ?? '.', file), `${JSON.stringify(figures, null, 2)}\n`);
+  return 0;
+}
