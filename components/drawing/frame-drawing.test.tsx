@@ -45,6 +45,20 @@ describe('the drawing of a frame', () => {
     expect(chosen).toHaveBeenCalledWith('dead');
   });
 
+  it('offers many combinations in a list that opens', async () => {
+    const user = userEvent.setup();
+    const chosen = vi.fn();
+    const results = Array.from({ length: 30 }, (_, i) => ({
+      name: `C${i + 1}`,
+      kind: 'combination' as const,
+      purpose: 'strength' as const,
+    }));
+    render(<FrameDrawing data={{ ...simpleBeam(), results }} onChoose={chosen} />);
+    await user.click(screen.getByRole('button', { name: 'Load case or combination: C1' }));
+    await user.click(screen.getByRole('option', { name: 'C30' }));
+    expect(chosen).toHaveBeenCalledWith('C30');
+  });
+
   it('reads x, N, V, M and v along a member by keyboard', async () => {
     const user = userEvent.setup();
     render(<FrameDrawing data={simpleBeam()} />);

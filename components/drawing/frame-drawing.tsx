@@ -1,5 +1,6 @@
 'use client';
 import { useState, type KeyboardEvent, type PointerEvent, type ReactNode } from 'react';
+import { Choice } from '../ui/choice';
 import { Segments } from '../ui/segments';
 import { useKeys } from '../ui/use-keys';
 import { useWidth } from '../ui/use-width';
@@ -98,14 +99,7 @@ export function FrameDrawing({
                 setLarge('diagram');
               }}
             />
-            {onChoose && data.results.length > 0 && (
-              <Segments
-                label="Load case or combination"
-                options={data.results.map(({ name }) => ({ value: name, label: name }))}
-                value={result.name}
-                onChange={onChoose}
-              />
-            )}
+            {onChoose && data.results.length > 0 && <ResultChoice data={data} chosen={result.name} onChoose={onChoose} />}
           </div>
         )}
       </div>
@@ -163,6 +157,18 @@ export function FrameDrawing({
         })}
       </div>
     </div>
+  );
+}
+
+/** Every case and combination in sight; more than fourteen in a list that opens. */
+function ResultChoice({ data, chosen, onChoose }: { data: DrawingData; chosen: string; onChoose: (result: string) => void }) {
+  const options = data.results.map(({ name }) => ({ value: name, label: name }));
+  const label = 'Load case or combination';
+  if (options.length <= 14) return <Segments label={label} options={options} value={chosen} onChange={onChoose} />;
+  return (
+    <span className="choice-list-right">
+      <Choice label={label} options={options} value={[chosen]} onChange={([name]) => name && onChoose(name)} />
+    </span>
   );
 }
 

@@ -281,10 +281,11 @@ function blockWishes(scene: Scene, blocks: readonly Block[]): LabelWish[] {
         const on = along(block.axis, block.load.from + (block.load.to - block.load.from) * share);
         const top = plus(on, block.side, block.base + block.h1 + (block.h2 - block.h1) * share);
         const inside = plus(on, block.side, -(Math.abs(block.side.x) * textWidth(text, font) * 0.5 + font));
-        return [...around(top, block.side, text, font, 4).slice(0, 3), { at: inside }];
+        const outside = around(top, block.side, text, font, 4).slice(0, 3);
+        return Math.abs(block.side.x) > 0.7 ? [...outside, { at: inside }] : outside;
       }),
     );
-    return { key: `q-${i}`, text, className: 'd-load-text', size: font, places, must: i < 4 };
+    return { key: `q-${i}`, text, className: 'd-load-text', size: font, places, must: i < (scene.large ? 4 : 1) };
   });
 }
 

@@ -192,9 +192,11 @@ export function ResultTable(props: ResultTableProps) {
 
 const figures = (column: Column) => column.kind === 'number' || column.kind === 'ratio';
 const cellClass = (column: Column) =>
-  `tc-${column.kind} ${figures(column) ? 'num' : ''} ${wordy.has(column.key) ? 'tc-wordy' : ''}`;
+  `tc-${column.kind} ${figures(column) ? 'num' : ''} ${wordy.has(column.key) ? 'tc-wordy' : ''} ${asTyped.has(column.key) ? 'tc-cell-text' : ''}`;
 /** Columns of sentences: they may take two lines. */
 const wordy = new Set(['message', 'reason', 'title', 'frames']);
+/** Cell references, and what stands in the cell. */
+const asTyped = new Set(['cell', 'found']);
 /** The id that leads to the row's own page: the frame's, or a problem's cell. */
 const linked = (column: Column, columns: readonly Column[]) =>
   column.key === (columns.some((one) => one.key === 'frame') ? 'frame' : 'cell');

@@ -40,7 +40,10 @@ export function headUnit(column: Column, units: System): string {
 /** A number cell's text in the units of the page. */
 export function numberText(value: Cell, column: Column, row: Row | null, units: System): string {
   if (typeof value !== 'number') return value ?? '';
-  return formatQuantity(value, quantityOf(column, row), units, { decimals: column.decimals ?? 2 });
+  const quantity = quantityOf(column, row);
+  // a plain number among stresses and movements is a factor or a share, for which one decimal says too little
+  const decimals = column.quantity === 'byCheck' && quantity === 'number' ? 2 : (column.decimals ?? 2);
+  return formatQuantity(value, quantity, units, { decimals });
 }
 
 /** An SI number of a filter as a person writes it, and without noise from the conversion. */
