@@ -5,8 +5,9 @@ import type { System } from '@/lib/units/quantity';
 import type { Column, Row, RowPage, View } from '@/lib/tables/view';
 import { Empty, Notice } from '../ui/notice';
 import { FilterSentence, type FilterSentenceProps } from './filter-sentence';
+import { cellClass, HeadCell } from './head-cell';
 import { TableCell } from './table-cell';
-import { headUnit, numberText, sentenceOf, shownColumns, tableNouns } from './table-words';
+import { numberText, sentenceOf, shownColumns, tableNouns } from './table-words';
 
 interface ResultTableProps extends Pick<FilterSentenceProps, 'facets' | 'onFacets' | 'onView'> {
   readonly view: View;
@@ -190,47 +191,9 @@ export function ResultTable(props: ResultTableProps) {
   );
 }
 
-const figures = (column: Column) => column.kind === 'number' || column.kind === 'ratio';
-const cellClass = (column: Column) =>
-  `tc-${column.kind} ${figures(column) ? 'num' : ''} ${wordy.has(column.key) ? 'tc-wordy' : ''} ${asTyped.has(column.key) ? 'tc-cell-text' : ''}`;
-/** Columns of sentences: they may take two lines. */
-const wordy = new Set(['message', 'reason', 'title', 'frames']);
-/** Cell references, and what stands in the cell. */
-const asTyped = new Set(['cell', 'found']);
 /** The id that leads to the row's own page: the frame's, or a problem's cell. */
 const linked = (column: Column, columns: readonly Column[]) =>
   column.key === (columns.some((one) => one.key === 'frame') ? 'frame' : 'cell');
-
-interface HeadCellProps {
-  readonly column: Column;
-  readonly view: View;
-  readonly units: System;
-  readonly onView: (view: View) => void;
-}
-
-function HeadCell({ column, view, units, onView }: HeadCellProps) {
-  const sorted = view.sort?.column === column.key ? (view.sort.descending ? 'descending' : 'ascending') : null;
-  const unit = headUnit(column, units);
-  const first = figures(column);
-  const press = () => {
-    const descending = sorted === null ? first : sorted === 'ascending';
-    const off = sorted !== null && (sorted === 'descending') !== first;
-    onView({ ...view, sort: off ? null : { column: column.key, descending } });
-  };
-  return (
-    <th scope="col" className={cellClass(column)} aria-sort={sorted ?? undefined}>
-      {column.sort ? (
-        <button type="button" className="tbl-sort" onClick={press}>
-          {column.label}
-          {sorted && <span aria-hidden="true"> {sorted === 'descending' ? '↓' : '↑'}</span>}
-        </button>
-      ) : (
-        column.label
-      )}
-      {unit && <span className="unit">{unit}</span>}
-    </th>
-  );
-}
 
 function Totals({ page, shown, view, units }: { page: RowPage; shown: readonly Column[]; view: View; units: System }) {
   if (Object.keys(page.totals).length === 0) return null;
