@@ -3,6 +3,7 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { brackets } from './brackets';
 import { canopiesUs } from './canopies-us';
+import { familySamples } from './families';
 import { messy, mended, messyOnes } from './messy';
 import { portalSheds } from './portal-sheds';
 import { racks } from './racks';
@@ -21,6 +22,7 @@ export async function makeSamples(folder: string): Promise<void> {
   await writeWorkbook(folder, 'messy.xlsx', messy());
   await writeWorkbook(folder, 'messy-mended.xlsx', mended());
   for (const [name, sheets] of messyOnes()) await writeWorkbook(join(folder, 'problems'), `${name}.xlsx`, sheets);
+  for (const [name, sheets] of familySamples()) await writeWorkbook(join(folder, 'families'), `${name}.xlsx`, sheets);
   const whole = readFileSync(join(folder, 'messy-mended.xlsx'));
   writeFileSync(join(folder, 'problems', 'unreadable.xlsx'), whole.subarray(0, Math.floor(whole.length / 2)));
 }
