@@ -200,7 +200,7 @@ describe('a workbook by another writer, through to the published JSON', () => {
     expect(frame.results.map((each) => each.name)).toEqual(['dead', 'live', 'snow', 'wind', 'wind 2', 'inside', 'C1']);
     expect(total('snow')).toBeCloseTo(0.8e3 * 6 * 16, 5);
     const slope = Math.hypot(8, 3);
-    const steel = frame.mass * 9.80665;
+    const steel = (frame.mass ?? NaN) * 9.80665;
     expect(total('dead') - steel).toBeCloseTo(0.5e3 * 6 * 2 * slope, 4);
     expect(total('C1')).toBeCloseTo(total('dead') + total('snow'), 5);
   });

@@ -1,0 +1,80 @@
+/** The sample sheets: what each is there to show, through the same reading as everybody's. */
+import { readFileSync, readdirSync } from 'node:fs';
+import { join } from 'node:path';
+import { describe, expect, it } from 'vitest';
+import { createAnalyser } from '@/lib/analysis/analyser';
+import { readIntake } from '@/lib/intake/read-intake';
+import type { Intake } from '@/lib/intake/intake';
+import { errorCodes, noteCodes, warningCodes } from '@/lib/problems/problem';
+import { evaluateFrame } from '@/lib/results/evaluate';
+import { evaluateBatch } from '@/worker/command/evaluate-batch';
+
+const folder = new URL('../../samples/', import.meta.url).pathname;
+const read = (...names: string[]): Promise<Intake> =>
+  readIntake(names.map((name) => ({ name: name.split('/').at(-1) ?? name, bytes: readFileSync(join(folder, name)) })));
+
+function verdicts(intake: Intake): Record<string, number> {
+  const counts: Record<string, number> = {};
+  const analyser = createAnalyser();
+  for (const { frame } of intake.frames) {
+    const verdict = frame ? evaluateFrame(analyser, frame, intake.settings, { second: false, all: false }).verdict : 'stopped';
+    counts[verdict] = (counts[verdict] ?? 0) + 1;
+  }
+  return counts;
+}
+
+describe('samples', () => {
+  it.each([
+    ['portal-sheds-240.xlsx', 240],
+    ['brackets-150.xlsx', 150],
+    ['pipe-rack-24.xlsx', 24],
+    ['canopies-us-36.xlsx', 36],
+    ['messy-mended.xlsx', 36],
+    ['families/portal.xlsx', 2],
+    ['families/bracket.xlsx', 2],
+  ])('%s reads without an error or a warning, every frame of it', async (name, frames) => {
+    const intake = await read(name);
+    expect(intake.problems.filter((each) => each.severity !== 'note')).toEqual([]);
+    expect(intake.frames.map((each) => each.frame !== null)).toEqual(Array.from({ length: frames }, () => true));
+  });
+
+  it('the CSV set with semicolons and decimal commas reads as one batch', async () => {
+    const names = readdirSync(join(folder, 'walkways-csv')).map((name) => `walkways-csv/${name}`);
+    const intake = await read(...names);
+    expect(intake.problems.filter((each) => each.severity === 'error')).toEqual([]);
+    expect(intake.frames).toHaveLength(18);
+    const tip = intake.frames[1]?.frame?.nodes.find((node) => node.place === 'tip');
+    expect(tip?.x_m).toBeCloseTo(1.2625, 12);
+  });
+
+  it('the portals saved again by LibreOffice are the same frames', async () => {
+    const [ours, saved] = [await read('portal-sheds-240.xlsx'), await read('portal-sheds-240-saved-by-calc.xlsx')];
+    expect(saved.frames).toEqual(ours.frames);
+    expect(saved.settings).toEqual(ours.settings);
+  });
+
+  it('most portals come out within, near or over, and few not checked', async () => {
+    const counts = verdicts(await read('portal-sheds-240.xlsx'));
+    for (const verdict of ['within', 'near', 'over', 'not checked']) expect(counts[verdict]).toBeGreaterThan(0);
+    expect(counts['not checked']).toBeLessThan(24);
+  });
+
+  it('the messy workbook stops only the frames its slips touch', async () => {
+    const intake = await read('messy.xlsx');
+    const running = intake.frames.filter((each) => each.frame !== null).map((each) => each.id);
+    expect(running).toEqual(expect.arrayContaining(['Q23', 'Q25', 'Q27', 'Q28', 'Q29', 'Q31', 'Q35', 'Q36']));
+    expect(running).not.toEqual(expect.arrayContaining(['Q01']));
+  });
+
+  it('every problem code is met in the messy workbook or in a small file beside it', async () => {
+    const met = new Set<string>();
+    for (const name of ['messy.xlsx', ...readdirSync(join(folder, 'problems')).map((each) => `problems/${each}`)]) {
+      const intake = await read(name);
+      const batch = await evaluateBatch(intake, { all: false });
+      for (const problem of batch.problems) met.add(problem.code);
+      batch.close();
+    }
+    const missing = [...errorCodes, ...warningCodes, ...noteCodes].filter((code) => !met.has(code));
+    expect(missing).toEqual([]);
+  });
+});
