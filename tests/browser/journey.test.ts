@@ -126,6 +126,7 @@ describe('an analyst’s way through, from messy sheets to a result workbook', (
     const here = page.url();
     await page.keyboard.press('j');
     await page.waitForURL((to) => to.href !== here && /\/B\/frames\/\d+$/.test(to.pathname));
+    await page.getByRole('link', { name: `Previous frame, ${id}` }).waitFor();
     await page.keyboard.press('k');
     await page.waitForURL(here);
   });
