@@ -40,7 +40,13 @@ export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, on
   const link = useRef<HTMLAnchorElement>(null);
   const scroller = useRef<HTMLDivElement>(null);
   const layout = useMemo(() => layOutStrip(frames.length, width), [frames.length, width]);
-  const rows = Math.ceil(frames.length / layout.columns);
+  const { columns: inRow } = layout;
+  // the same arrays from render to render, so that reading a cell draws two rows again and not all of them
+  const slices = useMemo(
+    () => Array.from({ length: Math.ceil(frames.length / inRow) }, (_, i) => frames.slice(i * inRow, (i + 1) * inRow)),
+    [frames, inRow],
+  );
+  const rows = slices.length;
   const virtual = frames.length > virtualAbove;
   // eslint-disable-next-line react-hooks/incompatible-library -- the virtualizer's own object changes as it scrolls; nothing here is memoised on it
   const virtualizer = useVirtualizer({
@@ -95,7 +101,7 @@ export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, on
 
   const row = (number: number) => {
     const from = number * layout.columns;
-    const slice = frames.slice(from, from + layout.columns);
+    const slice = slices[number] ?? [];
     return (
       <StripRow
         key={number}
