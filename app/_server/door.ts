@@ -39,7 +39,7 @@ export function door<K extends string = never>(handler: Handler<K>): Handler<K> 
   };
 }
 
-export function refuseOtherOrigins(request: Request): void {
+function refuseOtherOrigins(request: Request): void {
   if (request.method === 'GET' || request.method === 'HEAD' || request.method === 'OPTIONS') return;
   if (isSameOrigin(request.headers, request.headers.get('host') ?? new URL(request.url).host)) return;
   throw new ApiError(

@@ -64,7 +64,7 @@ export function drawingData({ frame, evaluation, members, units, nearLimit, chos
 }
 
 /** One case or combination: loads times their factors, reactions, displacements, N V M and the deflected line sampled. */
-export function drawingResult(frame: Frame, state: ResultState): DrawingResult {
+function drawingResult(frame: Frame, state: ResultState): DrawingResult {
   return {
     name: state.name,
     kind: state.kind,

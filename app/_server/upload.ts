@@ -3,7 +3,7 @@ import { ApiError } from '@/lib/api/error';
 import { baseName, readBody, splitMultipart, tooLarge, type SentFile } from '@/lib/api/multipart';
 
 /** Of all files of one upload together, as sent (sheets §1). */
-export const uploadLimit = 25 * 1024 * 1024;
+const uploadLimit = 25 * 1024 * 1024;
 /** Boundaries, headings and names of a form beside its files. */
 const formLimit = 256 * 1024;
 /** Uploads held in memory at one time; more are asked to come again. */

@@ -5,7 +5,8 @@ import { findSummary } from '@/db/queries/summary';
 import { notFound } from '@/lib/api/error';
 import { strictView } from '@/lib/api/strict-view';
 import type { ParameterColumn } from '@/lib/tables/shown-columns';
-import { tableNames, type TableName, type View } from '@/lib/tables/view';
+import { tableNames, viewSchema, type TableName, type View } from '@/lib/tables/view';
+import { parse } from './input';
 
 export function isTable(name: string): name is TableName {
   return (tableNames as readonly string[]).includes(name);
@@ -14,7 +15,7 @@ export function isTable(name: string): name is TableName {
 /** @throws {ApiError} not-found for a table there is none of, bad-request for what the table doesn't offer */
 export function requireView(table: string, request: Request): View {
   if (!isTable(table)) throw notFound('table');
-  return strictView(table, new URL(request.url).searchParams);
+  return parse(viewSchema, strictView(table, new URL(request.url).searchParams));
 }
 
 /** The parameters of the batch's families, which tables offer as columns and filters. */

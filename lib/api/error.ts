@@ -12,7 +12,7 @@
  */
 import { z } from 'zod';
 
-export const errorStatus = {
+const errorStatus = {
   'bad-request': 400,
   'not-signed-in': 401,
   'not-allowed': 403,
@@ -27,7 +27,7 @@ export const errorStatus = {
 } as const;
 export type ErrorCode = keyof typeof errorStatus;
 
-export const problemShape = z.object({
+const problemShape = z.object({
   severity: z.enum(['error', 'warning', 'note']),
   code: z.string(),
   sheet: z.string().nullable(),

@@ -10,7 +10,7 @@ const text = (what: string, max: number) =>
     .min(1, `Enter ${what}.`)
     .max(max, `Keep ${what} to ${max} characters.`);
 
-export const emailInput = z
+const emailInput = z
   .string({ error: 'Enter an e-mail address.' })
   .trim()
   .toLowerCase()

@@ -60,7 +60,11 @@ function readFilters(column: string, texts: readonly string[]): Filter[] {
   return values.length > 0 ? [{ column, op: 'in', values: values.slice(0, 200) }, ...others] : others;
 }
 
-const bound = (text: string | undefined): number | null => (text === undefined || text === '' ? null : Number(text));
+/** An end left open, or too large for a number, is no end. */
+function bound(text: string | undefined): number | null {
+  const value = text === undefined || text === '' ? NaN : Number(text);
+  return Number.isFinite(value) ? value : null;
+}
 
 function readSort(table: TableName, text: string | null): View['sort'] {
   if (text === null) return null;

@@ -125,7 +125,7 @@ export const tables: Readonly<Record<TableName, readonly Column[]>> = {
 };
 
 /** One filter: any of the values, or a range of numbers; 'contains' for ids. */
-export const filterSchema = z.discriminatedUnion('op', [
+const filterSchema = z.discriminatedUnion('op', [
   z.object({ column: z.string().max(60), op: z.literal('in'), values: z.array(z.string().max(200)).min(1).max(200) }),
   z.object({ column: z.string().max(60), op: z.literal('range'), min: z.number().nullable(), max: z.number().nullable() }),
   z.object({ column: z.string().max(60), op: z.literal('contains'), text: z.string().min(1).max(200) }),
