@@ -71,6 +71,7 @@ describe('the edges of the application', () => {
 
   it('refuses an upload that is too large while it streams, and one without a file', async () => {
     const to = `/api/projects/${people.north.project}/batches`;
+    const before = await lead.json<unknown>(to);
     let sent = 0;
     const chunk = new Uint8Array(1024 * 1024);
     const body = new ReadableStream<Uint8Array>({
@@ -84,7 +85,7 @@ describe('the edges of the application', () => {
     expect([streamed.status, (await read(streamed)).code]).toEqual([413, 'too-large']);
     const empty = await lead.fetch(to, { method: 'POST', body: new FormData() });
     expect([empty.status, (await read(empty)).code]).toEqual([400, 'bad-request']);
-    expect((await lead.json<{ batches: unknown[] }>(to)).batches).toEqual([]);
+    expect(await lead.json<unknown>(to)).toEqual(before);
   });
 
   it('says that an address of the office is taken without saying whose it is', async () => {
