@@ -44,6 +44,7 @@ export function BringSheets({ to, named }: BringSheetsProps) {
     <>
       {named && (
         <Field
+          className="mb-4 max-w-[480px]"
           label="Name of the batch"
           hint="The file’s name if left blank."
           maxLength={120}

@@ -1,6 +1,6 @@
 import 'server-only';
 import { db } from '@/db/client';
-import { findRevision } from '@/db/queries/revisions';
+import { countRevisionVerdicts, findRevision } from '@/db/queries/revisions';
 import type { RunProgressData, RunState } from '@/components/run/run-data';
 import { notFound } from '@/lib/api/error';
 import { runProgress } from '@/worker/boot';
@@ -16,13 +16,16 @@ export interface Progress extends RunProgressData {
 export async function progressOf(office: number, batch: number, letter: string): Promise<Progress> {
   const revision = await findRevision(db(), office, batch, letter);
   if (revision === undefined) throw notFound('revision');
-  const { state: going, total, done, rate, secondsLeft, last } = runProgress(revision.id);
+  const { state: going, total: different, rate, secondsLeft, last } = runProgress(revision.id);
+  // The queue counts different frames; people count the frames of their sheets, of which several may be the same.
+  const { waiting } = await countRevisionVerdicts(db(), office, revision.id);
+  const total = revision.frames - revision.framesStopped;
   return {
     revisionState: revision.state,
     state: runState(revision.state, going),
     total,
-    done,
-    rate,
+    done: Math.max(0, total - waiting),
+    rate: rate === null || different === 0 ? null : (rate * total) / different,
     secondsLeft,
     started: revision.runStartedAt === null ? null : time(revision.runStartedAt),
     message: revision.state === 'failed' || revision.state === 'stopped' ? revision.reason : null,

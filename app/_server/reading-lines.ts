@@ -36,6 +36,8 @@ export function sheetLines(sheets: readonly SheetRead[], problems: readonly Prob
     const own = problems.filter(
       (problem) => problem.sheet === name && (!several || problem.file === null || problem.file === file),
     );
+    // Parameters of a family and load cases head columns of their own.
+    const ownNames = known !== null && /^(variants|combinations)$/i.test(known);
     const count = (severity: Severity) => own.filter((problem) => problem.severity === severity).length;
     return {
       name,
@@ -43,7 +45,8 @@ export function sheetLines(sheets: readonly SheetRead[], problems: readonly Prob
       known,
       rows,
       headings: headings.length,
-      headingsKnown: headings.filter((heading) => heading.known !== null).length,
+      headingsKnown: headings.filter(({ known: as, cell }) => as !== null || (ownNames && !own.some((one) => one.cell === cell)))
+        .length,
       errors: count('error'),
       warnings: count('warning'),
       notes: count('note'),

@@ -17,7 +17,7 @@ export default async function SignInPage({ searchParams }: SignInProps) {
   const { next } = await searchParams;
   if (person !== null) redirect(localPath(next) ?? homeOf(person.role));
   return (
-    <SignInSheet version={engineVersion}>
+    <SignInSheet version={engineVersion.split(' ').at(-1) ?? engineVersion}>
       <SignInForm next={localPath(next) ?? '/'} />
     </SignInSheet>
   );
