@@ -18,7 +18,7 @@ const lead: readonly PersonRole[] = ['lead'];
 const everybody = 'everybody';
 
 type Who = readonly PersonRole[] | typeof everybody;
-type Method = 'GET' | 'POST' | 'PUT' | 'DELETE';
+type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
 
 /** Who each address is for. `things` = its address names something of an office. */
 interface Line {
@@ -33,6 +33,9 @@ const reads = (query = ''): Line => ({ who: { GET: staff }, query });
 
 const table: Readonly<Record<string, Line>> = {
   'api/ping': { who: { GET: everybody } },
+  'api/[...rest]': {
+    who: { GET: everybody, POST: everybody, PUT: everybody, PATCH: everybody, DELETE: everybody },
+  },
   'api/auth/[...nextauth]': { who: { GET: everybody, POST: everybody } },
   'api/template': { who: { GET: staff } },
   'api/people': { who: { GET: lead, POST: lead }, body: {} },
@@ -86,8 +89,8 @@ const isPage = (file: string): boolean => file.endsWith('page.tsx');
 function methodsOf(file: string): Method[] {
   if (isPage(file)) return ['GET'];
   const text = readFileSync(file, 'utf8');
-  return (['GET', 'POST', 'PUT', 'DELETE'] as const).filter((method) =>
-    new RegExp(`export (const|function|async function) ${method}\\b`).test(text),
+  return (['GET', 'POST', 'PUT', 'PATCH', 'DELETE'] as const).filter((method) =>
+    new RegExp(`export (const |function |async function |\\{[^}]* as )${method}\\b`).test(text),
   );
 }
 
@@ -115,7 +118,8 @@ describe('access', () => {
       .replace('[revision]', letter)
       .replace('[number]', '1')
       .replace('[table]', 'members')
-      .replace('[...nextauth]', 'session');
+      .replace('[...nextauth]', 'session')
+      .replace('[...rest]', 'no/such/address');
     return `/${filled}${table[address]?.query ?? ''}`;
   }
 

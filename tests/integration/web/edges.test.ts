@@ -65,6 +65,8 @@ describe('the edges of the application', () => {
     expect([long.status, (await read(long)).code]).toEqual([413, 'too-large']);
     const missing = await lead.fetch('/api/projects/999999');
     expect([missing.status, (await read(missing)).code]).toEqual([404, 'not-found']);
+    const nowhere = await lead.fetch('/api/no/such/address');
+    expect([nowhere.status, (await read(nowhere)).code]).toEqual([404, 'not-found']);
     const odd = await lead.fetch('/api/projects/1e0');
     expect([odd.status, (await read(odd)).code]).toEqual([404, 'not-found']);
   });
