@@ -2,7 +2,7 @@
 import type { RawDatabase } from '@/db/open';
 import { evaluationOf, frameOf, statesOnly, type NamedVersion, type StoredState } from '@/db/queries/results';
 import type { Frame } from '@/lib/model/frame';
-import type { FrameEvaluation } from '@/lib/results/result';
+import type { FrameEvaluation, ResultState } from '@/lib/results/result';
 
 export interface FrameRow {
   /** Place in sheet order, from 0. */
@@ -16,6 +16,7 @@ export interface FrameRow {
   readonly frame: Frame | null;
   /** Null until run. */
   readonly evaluation: FrameEvaluation | null;
+  readonly version: number | null;
 }
 
 type Row = Omit<NamedVersion, 'model'> & {
@@ -25,6 +26,12 @@ type Row = Omit<NamedVersion, 'model'> & {
   readonly evaluation: Buffer | null;
   readonly state: 'waiting' | 'solved' | 'not solved' | null;
 };
+
+/** The states of one frame version, in their order. */
+export function readStates(raw: RawDatabase): (version: number) => readonly ResultState[] {
+  const states = raw.prepare<[number], StoredState>('select * from result_state where version = ? order by ordinal');
+  return (version) => statesOnly(states.all(version)).states;
+}
 
 /** Frames read from the database at once. */
 const piece = 100;
@@ -63,6 +70,7 @@ export function* frameRows(
         note,
         frame: model && frameOf({ ...row, model }),
         evaluation: stored,
+        version,
       };
     }
     if (rows.length < piece) return;

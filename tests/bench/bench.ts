@@ -18,7 +18,7 @@ const must: Readonly<Record<string, { readonly limit: number; readonly atLeast?:
 };
 
 const groups: readonly (readonly [string, () => Promise<Record<string, number>>])[] = [
-  ['chain', () => chainAgainstBare(5)],
+  ['chain', () => chainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
   ['profile', async () => (await profileChain(), {})],
   ['threads', () => twoThreadsAgainstOne(5)],
 ];

@@ -1,6 +1,6 @@
 import { countWaiting } from '@/db/queries/results';
-import type { OpenDatabase } from '@/db/open';
-import { frameRows } from '@/db/queries/frame-rows';
+import type { OpenDatabase, RawDatabase } from '@/db/open';
+import { frameRows, readStates, type FrameRow } from '@/db/queries/frame-rows';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { findRevisionById } from '@/db/queries/revisions';
 import { inputRows } from '@/db/queries/waiting';
@@ -31,8 +31,31 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
     origins: found.origins,
     problems: problemsInOrder(problems, sheets),
     inputRows: () => inputRows(raw, revision),
-    *frames(need): Generator<ReportFrame> {
-      for (const row of frameRows(raw, revision, need)) yield { number: row.index + 1, ...row };
-    },
+    frames: framesOf(raw, revision),
+  };
+}
+
+/** Frames of a revision up to this number are decoded once and kept for the passes of a workbook: about 60 MB. */
+const mostKept = 1_200;
+
+function framesOf(raw: RawDatabase, revision: number): ReportSource['frames'] {
+  const states = readStates(raw);
+  let kept: readonly FrameRow[] | null = null;
+  return function* (need): Generator<ReportFrame> {
+    if (kept === null) {
+      let seen: FrameRow[] | null = need.states || need.checks === false ? null : [];
+      for (const row of frameRows(raw, revision, need)) {
+        if (seen !== null && seen.length < mostKept) seen.push(row);
+        else seen = null;
+        yield { number: row.index + 1, ...row };
+      }
+      kept = seen;
+      return;
+    }
+    for (const row of kept) {
+      const { evaluation, version } = row;
+      const whole = need.states && evaluation && version !== null ? { ...evaluation, states: states(version) } : evaluation;
+      yield { number: row.index + 1, ...row, evaluation: whole };
+    }
   };
 }
