@@ -23,7 +23,11 @@ export function lateralTorsional(section: Section, turned: boolean, material: Ma
   const { shape } = section;
   if (shape === 'rhs' || shape === 'chs') return { kind: 'none', why: 'closed section' };
   if (shape === 'round') return { kind: 'none', why: 'same stiffness about every axis' };
-  if (shape === 'I' && turned) return { kind: 'none', why: 'bent about its minor axis' };
+  if (shape === 'I' && turned)
+    // flanges wide enough make the minor axis the stiffer one
+    return (p.Iminor_m4 ?? Infinity) <= p.I_m4
+      ? { kind: 'none', why: 'bent about its minor axis' }
+      : { kind: 'needs', needs: ['M_cr of an I turned onto its stiffer axis, which is not computed'] };
   if (shape === 'bar') {
     const weak = turned ? (p.Iminor_m4 ?? Infinity) <= p.I_m4 : p.I_m4 <= (p.Iminor_m4 ?? 0);
     if (weak) return { kind: 'none', why: 'bent about its weaker axis' };

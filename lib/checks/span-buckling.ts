@@ -24,6 +24,8 @@ export interface SpanBuckling {
   readonly blankInPlane: 'major' | 'minor' | null;
   /** Every length that was left blank and is taken as the span's. */
   readonly blank: readonly string[];
+  /** Pieces drawn both ways with unlike lengths of top and bottom: which face a length means is open, so the longer holds for both. */
+  readonly longerForBoth: boolean;
 }
 
 type LengthField = 'lengthMajor_m' | 'lengthMinor_m' | 'lengthLtbTop_m' | 'lengthLtbBottom_m';
@@ -52,12 +54,11 @@ export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
   const E = material.E_Pa;
   const blank = (Object.keys(words) as LengthField[]).filter((field) => typedLength(frame, span, field) === null);
   const length = (field: LengthField): number => typedLength(frame, span, field) ?? span.length_m;
-  const [Lmajor, Lminor, Ltop, Lbottom] = [
-    length('lengthMajor_m'),
-    length('lengthMinor_m'),
-    length('lengthLtbTop_m'),
-    length('lengthLtbBottom_m'),
-  ];
+  const [Lmajor, Lminor] = [length('lengthMajor_m'), length('lengthMinor_m')];
+  const ofFaces = [length('lengthLtbTop_m'), length('lengthLtbBottom_m')] as const;
+  // a piece drawn against the others has its top at their bottom
+  const longerForBoth = ofFaces[0] !== ofFaces[1] && span.pieces.some((piece) => piece.reversed);
+  const [Ltop, Lbottom] = longerForBoth ? [Math.max(...ofFaces), Math.max(...ofFaces)] : ofFaces;
   const ltb = lateralTorsional(section, member.turned, material);
   const Mcr = (L: number): number => (ltb.kind === 'formula' ? criticalMoment(E, ltb.G, ltb.Iz, ltb.It, ltb.Iw, L) : Infinity);
   const inPlane: LengthField = member.turned ? 'lengthMinor_m' : 'lengthMajor_m';
@@ -77,5 +78,6 @@ export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
     McrBottom: Mcr(Lbottom),
     blankInPlane: blank.includes(inPlane) ? (member.turned ? 'minor' : 'major') : null,
     blank: blank.map((field) => words[field]),
+    longerForBoth,
   };
 }

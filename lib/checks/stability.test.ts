@@ -167,6 +167,48 @@ describe('blank lengths', () => {
   });
 });
 
+describe('a span with pieces drawn both ways', () => {
+  const nodes = ['A', 'X', 'B'].map((id, i) => ({ id, x_m: 5 * i, y_m: 0, place: null }));
+  const roof = (reversed: boolean): Frame =>
+    frame({
+      nodes,
+      members: [
+        member('AX', 0, 1, { ...lengths, span: 'AB' }),
+        member('XB', ...(reversed ? ([2, 1] as const) : ([1, 2] as const)), { ...lengths, span: 'AB' }),
+      ],
+    });
+  const screened = (reversed: boolean) => {
+    // the same bending either way: the lower face of XB is compressed, which is the top of a piece drawn from B
+    const M = [(reversed ? 1 : -1) * 20e3];
+    return check(roof(reversed), { C1: { AX: line(5, {}), XB: line(5, { M }) } });
+  };
+
+  it('takes the longer of the lengths of top and bottom for both faces, so that the shorter is never put to the wrong one', () => {
+    const [alike, mixed] = [screened(false), screened(true)];
+    close(rowOf(mixed, 'stability').ratio, rowOf(alike, 'stability').ratio ?? NaN);
+    const said = 'AB: pieces drawn both ways, so the longer of length LTB top and bottom is taken for both faces';
+    expect(mixed.assumptions).toContain(said);
+    expect(alike.assumptions).not.toContain(said);
+  });
+});
+
+describe('an I turned', () => {
+  const turned = (b: number): string | null => {
+    const found = sectionFromShape('I', { h: 0.1, b, tw: 0.01, tf: 0.015, r: 0 });
+    if (!('section' in found)) throw new Error('no section');
+    const beam = frame({
+      sections: [{ name: 'I', designation: null, ...found.section }],
+      members: [member('AB', 0, 1, { ...lengths, turned: true })],
+    });
+    return rowOf(check(beam, { C1: { AB: line(10, { M: [20e3] }) } }), 'stability').reason;
+  };
+
+  it('does not buckle laterally about its weaker axis, but may where its flanges make the minor axis the stiffer', () => {
+    expect(turned(0.1)).toBeNull();
+    expect(turned(0.4)).toBe('needs M_cr of an I turned onto its stiffer axis, which is not computed');
+  });
+});
+
 describe('spans that can not be screened', () => {
   const nodes = ['A', 'X', 'B'].map((id, i) => ({ id, x_m: 5 * i, y_m: 0, place: null }));
 

@@ -87,6 +87,10 @@ function note(span: Span, buckling: SpanBuckling, findings: Findings): void {
   if (buckling.blank.length > 0)
     findings.assumptions.add(`${span.name}: length ${buckling.blank.join(', ')} taken as the length of the span`);
   if (buckling.ltb.kind !== 'formula') return;
+  if (buckling.longerForBoth)
+    findings.assumptions.add(
+      `${span.name}: pieces drawn both ways, so the longer of length LTB top and bottom is taken for both faces`,
+    );
   findings.assumptions.add('M_cr: uniform moment (C1 = 1), load at the shear centre');
   if (buckling.ltb.note) findings.assumptions.add(buckling.ltb.note);
 }
