@@ -78,6 +78,12 @@ export class FrameList {
     return frame;
   }
 
+  /** A frame with the name of a family is listed, and not run; rows that bear the name stay the family's. */
+  private refuse(id: string, row: Row): void {
+    this.reader.tell(row, 'frame', { code: 'duplicate-id', message: say.frameIsFamily(id) }, { ...forNobody, frame: id });
+    if (!this.byKey.has(idKey(id))) this.define(id, placeOf(row, 'frame'));
+  }
+
   private fromFrames(row: Row): void {
     if (!this.reader.keeps(row, forNobody)) return;
     const id = this.reader.needId(row, 'frame', forNobody);
@@ -88,7 +94,7 @@ export class FrameList {
     }
     const key = idKey(id);
     if (this.families.has(key)) {
-      this.reader.tell(row, 'frame', { code: 'duplicate-id', message: say.frameIsFamily(id) }, { ...forNobody, frame: id });
+      this.refuse(id, row);
       return;
     }
     const first = this.firstRows.get(key);
@@ -127,7 +133,7 @@ export class FrameList {
     if (id === undefined) return;
     const key = idKey(id);
     if (this.families.has(key)) {
-      this.reader.tell(row, 'frame', { code: 'duplicate-id', message: say.frameIsFamily(id) }, { ...forNobody, frame: id });
+      this.refuse(id, row);
       return;
     }
     const before = this.byKey.get(key);

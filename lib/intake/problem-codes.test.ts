@@ -38,6 +38,7 @@ const cases: Case[] = [
   ['a frame without supports', { 'Supports!A2': 'F2', 'Supports!B2': 'B', 'Supports!A3': 'F2', 'Supports!B3': 'C' }, ['error no-supports Nodes!A2 F1'], F2],
   ['a part joined to nothing', { 'Nodes+': ['F2', 'E', 20, 0, null], 'Nodes+2': ['F2', 'G', 22, 0, null], 'Members+': ['F2', 'EG', 'E', 'G', 'IPE 300', 'beam'] }, ['error not-connected Nodes!B8 F2'], F1],
   ['a node that no member reaches', { 'Nodes+': ['F2', 'E', 20, 0, null] }, ['error not-connected Nodes!B8 F2'], F1],
+  ['tension only that is none', { 'Members!G1': 'tension only', 'Members!G2': 'none', 'Supports!F1': 'pushes only', 'Supports!F2': 'none' }, [], both],
   ['tension only', { 'Members!G1': 'tension only', 'Members!G2': 'yes', 'Members!G3': 'no' }, ['error not-supported Members!G2 F1'], F2],
   ['a tapered member', { 'Members!G1': 'end section', 'Members!G2': 'IPE 200' }, ['error not-supported Members!G2 F1'], F2],
   ['an offset', { 'Members!G1': 'offset', 'Members!G2': '0.1', 'Members!G3': 'none' }, ['error not-supported Members!G2 F1'], F2],

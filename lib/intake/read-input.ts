@@ -90,8 +90,8 @@ function readFrames(batch: Batch): FrameRead[] {
   const read: FrameRead[] = [];
   for (const entry of batch.frames) {
     if (!entry.run) continue;
-    // a variant with a parameter wrong has said so at its cell
-    const frame = isReadable(entry) ? builder.build(entry) : null;
+    // a variant with a parameter wrong has said so at its cell, and so has a frame with a family's name
+    const frame = isReadable(entry) && !batch.families.has(entry.key) ? builder.build(entry) : null;
     if (frame) warnings.look(frame, batch.cases.for(entry).sound);
     read.push({ id: entry.id, frame: problems.stopped.has(entry.id) ? null : frame });
   }

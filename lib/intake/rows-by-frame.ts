@@ -52,8 +52,8 @@ export class RowsByFrame {
     }
     const key = idKey(id);
     const frame = known.framesByKey.get(key);
-    if (frame) add(this.named, frame.index, { row, level: level.named });
-    else if (known.families.has(key)) add(this.ofFamily, key, { row, level: level.family });
+    if (known.families.has(key)) add(this.ofFamily, key, { row, level: level.family });
+    else if (frame) add(this.named, frame.index, { row, level: level.named });
     else reader.tell(row, 'frame', { code: 'unknown-node', message: say.unknownFrame(id) }, { ...forNobody, frame: id });
   }
 

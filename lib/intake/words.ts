@@ -30,6 +30,17 @@ export function readYesNo(text: string): boolean | null {
   return no.has(key) ? false : null;
 }
 
+/** True for a word that asks for nothing: a setting or a reserved column may say so, and is never refused for it. */
+export function meansOff(text: string): boolean {
+  const key = wordKey(text);
+  return no.has(key) || key === 'none' || key === 'off';
+}
+
+/** `L/250`, `h/150`, `1/300`, `250` as typed for the n of a ratio: the text of n. */
+export function ratioText(text: string): string {
+  return /^\s*[lh1]\s*\/\s*(\d+(?:[.,]\d+)?)\s*$/i.exec(text)?.[1] ?? text;
+}
+
 /** The one of `words` that the text means, or null. */
 export function readWord<T extends string>(text: string, words: readonly T[]): T | null {
   const key = wordKey(text);

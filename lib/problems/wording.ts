@@ -44,7 +44,7 @@ export const numberMissing = (column: string): string => `${column} is blank, an
 export const notANumber = (found: string, column: string, quantity: string): string =>
   `“${found}” (${column}) is not a number. Write ${quantity} as a plain number, like 28.5`;
 export const ambiguousComma = (found: string): string =>
-  `“${found}” may be ${found.replace(',', '.')} or ${found.replace(',', '')}. Write it without the comma, or with a point`;
+  `“${found}” may be ${found.replace(',', '.')} or ${found.replace(/[.,]/, '')}. Write it without a mark for the thousands, or with all its decimals`;
 export const textNumber = (found: string): string => `“${found}” is a number stored as text; it is read as the number`;
 export const unitInCell = (unit: string): string => `the unit ${unit} in the cell is used in place of the heading's`;
 export const dateForNumber = (found: string, column: string): string =>

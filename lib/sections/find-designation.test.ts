@@ -36,6 +36,7 @@ describe('a near miss suggests, and nothing is guessed', () => {
   it.each([
     ['IPE 310', 'IPE 300'], ['HEA 310', 'HE 320 A'], ['W12X27', 'W12X26'], ['UB 305x165x41', 'UB 305x165x40'],
     ['305x165x40', 'UB 305x165x40'], ['IPR 300', 'IPE 300'], ['UC 305x305x97', null], ['HEM 300', null], ['UPN 200', null],
+    ['IPE 24O', 'IPE 240'], ['IPE 3OO', 'IPE 300'], ['HEA 2OO', 'HE 200 A'], ['lPE 300', 'IPE 300'], ['W12X2G', 'W12X26'],
     ['HE 300 M', null], ['beam', null], ['', null], ['300', null],
   ])('%s suggests %s', (typed, suggestion) => expect(suggested(typed)).toBe(suggestion)); // prettier-ignore
 });

@@ -78,14 +78,23 @@ function sectionOf({ row, range }: Entry): Section {
 /** Letters of the series, without the X between figures. */
 const lettersOf = (key: string): string => key.replace(/(?<=\d)X(?=\d)|[^A-Z]/g, '');
 
+/** Letters and the figures they are mistaken for, brought to one: `IPE24O` and `IPE240` look alike. */
+const likeness = (key: string): string =>
+  key.replace(/[OQILSBZG]/g, (letter) => '00115826'['OQILSBZG'.indexOf(letter)] ?? letter);
+
+const lookalikes = new Map([...byKey].map(([key, { row }]) => [likeness(key), row[0]]));
+
 /**
- * The designation whose text is nearest: up to two letters or figures apart, letters of the series counting double, since
- * a size is mistyped more often than a series; among those, the one whose figures are nearest. A size typed without
- * its series is compared as such.
+ * The designation that looks the same, a letter typed for a figure; else the one whose text is nearest: up to two
+ * letters or figures apart, letters of the series counting double, since a size is mistyped more often than a series;
+ * among those, the one whose figures are nearest. A size typed without its series is compared as such.
  */
 function nearest(key: string): string | null {
   const letters = lettersOf(key);
-  if (!/\d/.test(key) || notHeld.test(letters) || /^[\d.]+$/.test(key)) return null;
+  if (!/\d/.test(key)) return null;
+  const lookalike = lookalikes.get(likeness(key));
+  if (lookalike !== undefined) return lookalike;
+  if (notHeld.test(letters) || /^[\d.]+$/.test(key)) return null;
   let best: string | null = null;
   let least = Infinity;
   for (const [candidate, { row }] of byKey) {

@@ -583,6 +583,16 @@ describe('the built-in families are families like any other', () => {
     expect(snow?.kind === 'distributed' ? snow.q1_N_m : NaN).toBeCloseTo(-25 * 20 * 14.5939, 1);
   });
 
+  it('a frame with the name of a family is listed and not run, and the family’s rows stay the family’s', () => {
+    const sheets = shed();
+    sheets.Frames = [['frame'], ['P1'], ['Portal']];
+    sheets.Supports = [['frame', 'node', 'ux', 'uy', 'rz'], ['portal', 'A', 'fixed', 'fixed', 'fixed']];
+    const intake = readSheets(sheets);
+    expect(lines(intake)).toEqual(['error duplicate-id Frames!A3 Portal']);
+    expect(intake.frames.map((f) => [f.id, f.frame !== null])).toEqual([['P1', true], ['Portal', false]]);
+    expect(first(intake).supports[0]?.rz).toBe('fixed');
+  }); // prettier-ignore
+
   it('a row that names the family changes all its variants', () => {
     const sheets = shed();
     sheets.Supports = [['frame', 'node', 'ux', 'uy', 'rz'], ['portal', 'A', 'fixed', 'fixed', 'fixed'], ['P1', 'E', 'fixed', 'fixed', 2000]]; // prettier-ignore

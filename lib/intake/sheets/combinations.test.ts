@@ -82,6 +82,17 @@ describe('combinations', () => {
     ]);
   });
 
+  it('come in the order of the sheet, whichever frames they are for', () => {
+    const sheets = listed(
+      ['combination', 'purpose', 'dead', 'frame'],
+      ['C2', 'strength', 1, 'F2'],
+      ['C1', 'strength', 1, null],
+      ['C3', 'strength', 1.2, 'F2'],
+      ['C1', 'strength', 1.1, 'F2'],
+    );
+    expect(of(sheets, 1)?.map((c) => c.name)).toEqual(['C2', 'C1', 'C3']);
+  });
+
   it('frames with the same cases share their combinations', () => {
     const [a, b] = readSheets(sound()).frames;
     expect(a?.frame?.combinations).toBe(b?.frame?.combinations);

@@ -39,6 +39,8 @@ export class Combinations {
   private readonly rows: RowsByFrame;
   private readonly terms: CombinationTerms;
   private readonly once = new Map<Row, Once>();
+  /** A row's place in the sheet: combinations come in the sheet's order, whichever frames they are for. */
+  private readonly places: ReadonlyMap<Row, number>;
   private readonly shared = new Map<FrameCases, Map<string, FrameCombinations & { entries: readonly Entry[] }>>();
   /** Every listed name (base and with signs) by its key, with its purpose. */
   readonly names = new Map<string, { base: string; purpose: Purpose }>();
@@ -51,6 +53,7 @@ export class Combinations {
     private readonly problems: ProblemList,
   ) {
     this.rows = new RowsByFrame('Combinations', table, known, reader);
+    this.places = new Map((table?.rows ?? []).map((row, i) => [row, i]));
     this.terms = new CombinationTerms(table, cases, reader, problems);
     for (const row of table?.rows ?? []) {
       const id = reader.id(row, 'combination', forNobody);
@@ -78,20 +81,22 @@ export class Combinations {
   }
 
   private read(entry: FrameEntry, cases: FrameCases): FrameCombinations {
-    const groups = new Map<string, { level: number; rows: Row[] }>();
+    const groups = new Map<string, { level: number; place: number; rows: Row[] }>();
     for (const { row, level } of this.rows.for(entry)) {
       if (level === 0) this.rows.fits(row);
       if (!this.reader.keeps(row, entry.reading)) continue;
       const id = this.reader.needId(row, 'combination', { ...forNobody, frame: entry.id });
       if (id === undefined) continue;
       const group = groups.get(idKey(id));
-      if (!group || group.level < level) groups.set(idKey(id), { level, rows: [row] });
+      const place = Math.min(this.places.get(row) ?? 0, group?.place ?? Infinity);
+      if (!group || group.level < level) groups.set(idKey(id), { level, place, rows: [row] });
       else group.rows.push(row);
     }
+    const inOrder = [...groups.values()].sort((a, b) => a.place - b.place);
     const list: Combination[] = [];
     const notChecked: string[] = [];
     const taken = new Set<string>();
-    for (const { rows } of groups.values()) {
+    for (const { rows } of inOrder) {
       const listed = this.listed(rows, entry.reading);
       if (!listed) continue;
       if (listed.unknownCase !== null) {

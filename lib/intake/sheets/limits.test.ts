@@ -54,6 +54,13 @@ describe('limits', () => {
     expect(of(sheets)).toMatchObject([expected]);
   });
 
+  it('a ratio may be typed as L/n', () => {
+    expect(of(withLimits({ 'applies to': '*', measure: 'deflection', ratio: 'L/300' }))).toMatchObject([{ ratio: 300 }]);
+    expect(lines(readSheets(withLimits({ 'applies to': '*', measure: 'deflection', ratio: 'L/0' })))).toEqual([
+      'error not-positive Limits!E2 F1,F2',
+    ]);
+  });
+
   it('reach only frames that have what they apply to', () => {
     expect(of(withLimits({ 'applies to': 'BC', measure: 'deflection', ratio: 300 }), 0)).toEqual([]);
   });

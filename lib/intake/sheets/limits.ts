@@ -8,6 +8,7 @@ import { level, RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { Combinations } from '@/lib/intake/sheets/combinations';
 import { type LimitTarget, targetOf } from '@/lib/intake/sheets/limit-target';
 import { type Row, rawCell, type Table } from '@/lib/intake/table';
+import { ratioText } from '@/lib/intake/words';
 import type { Limit, Measure } from '@/lib/model/frame';
 import type { SettingOrigin, Settings } from '@/lib/model/settings';
 import * as say from '@/lib/problems/wording';
@@ -149,7 +150,7 @@ export class Limits {
   }
 
   private positive(draft: Draft, row: Row, column: 'ratio' | 'absolute'): number | null | undefined {
-    const value = this.reader.number(row, column, draft.reading);
+    const value = ratioIn(row, column) ?? this.reader.number(row, column, draft.reading);
     if (value === null || value === undefined || value > 0) return value;
     const text = rawCell(row, column)?.text ?? '';
     this.reader.tell(row, column, { code: 'not-positive', message: say.notPositive(column, text) }, draft.reading);
@@ -204,6 +205,13 @@ export class Limits {
       for (const frame of touched) this.reader.tell(row, column, { code, message }, { ...forNobody, frame });
     }
   }
+}
+
+/** n of a cell typed as `L/250`; null for every other. */
+function ratioIn(row: Row, column: 'ratio' | 'absolute'): number | null {
+  const cell = column === 'ratio' ? rawCell(row, column) : null;
+  const n = cell?.kind === 'text' ? ratioText(cell.text) : cell?.text;
+  return cell && n !== undefined && n !== cell.text ? Number(n.replace(',', '.')) : null;
 }
 
 /** True where a sheet's limit stands instead of the office's own ratio for the same measure. */

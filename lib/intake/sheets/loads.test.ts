@@ -192,6 +192,11 @@ describe('settlements', () => {
       { case: 0, node: 0, dx_m: null, dy_m: -0.01, rz_rad: 0.002 },
     ]);
   });
+  it('of 0 ask nothing, of a free direction either', () => {
+    expect(frame(settle(['F1', 'dead', 'B', 0, -5, 0])).settlements).toEqual([
+      { case: 0, node: 1, dx_m: null, dy_m: -0.005, rz_rad: null },
+    ]);
+  });
   test.each<[string, TestCell[][], string]>([
     ['on a direction that is free', [['F1', 'dead', 'B', 3, null, null]], 'error out-of-range Settlements!D2 F1'],
     [

@@ -6,13 +6,11 @@ import { level, type RowsByFrame } from '@/lib/intake/rows-by-frame';
 import { resolveMaterial } from '@/lib/intake/sheets/member-material';
 import { nodeOf } from '@/lib/intake/sheets/node-loads';
 import { type Row, rawCell } from '@/lib/intake/table';
-import { wordKey } from '@/lib/intake/words';
+import { meansOff } from '@/lib/intake/words';
 import { type Joint, type Member, roles, type Section } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
 const jointWords = ['rigid', 'pin'] as const;
-/** Words in a reserved column that mean it is not asked for. */
-const offWords = new Set(['', 'no', 'n', 'none', 'false', '0']);
 
 export function readMembers(draft: Draft, rows: RowsByFrame): void {
   const { reader } = draft.batch;
@@ -153,12 +151,12 @@ function positiveLength(draft: Draft, row: Row, name: string): number | null | u
 function refuse(draft: Draft, row: Row): void {
   const { reader } = draft.batch;
   const reading: Reading = draft.reading;
-  if (rawCell(row, 'tension only') && reader.yesNo(row, 'tension only', reading)) {
+  if (!meansOff(rawCell(row, 'tension only')?.text ?? '') && reader.yesNo(row, 'tension only', reading)) {
     reader.tell(row, 'tension only', { code: 'not-supported', message: say.columnNotSupported('tension only') }, reading);
   }
   for (const name of ['end section', 'offset']) {
     const text = rawCell(row, name) ? reader.text(row, name, reading) : null;
-    if (text && !offWords.has(wordKey(text))) {
+    if (text && !meansOff(text)) {
       reader.tell(row, name, { code: 'not-supported', message: say.columnNotSupported(name) }, reading);
     }
   }

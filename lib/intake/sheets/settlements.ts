@@ -44,7 +44,9 @@ function readSettlement(draft: Draft, row: Row, loadCase: number, node: number):
   const support = draft.supports.find((each) => each.node === node);
   const read = (name: keyof typeof along): number | null | undefined => {
     const value = reader.number(row, name, draft.reading);
-    if (value === null || value === undefined || node < 0) return value;
+    if (value === undefined || node < 0) return value;
+    // 0 asks nothing of a direction, fixed or not
+    if (value === null || value === 0) return null;
     if (support?.[along[name]] === 'fixed') return value;
     reader.tell(
       row,

@@ -54,8 +54,31 @@ describe('Setup', () => {
     'stiffness reduction|none',
     'shear deformation|no',
     'combination set|none',
+    'imperfections|No',
+    'stiffness reduction|no',
+    'shear deformation|none',
+    'combination set|no',
+    'combination set|As listed',
+    'sway ratio|no',
+    'deflection ratio|none',
   ])('%s means off and is never refused', (text) => {
     expect(lines(readSheets(withSetup(text.split('|'))))).toEqual([]);
+  });
+
+  it('none in the sheet is the sheet’s word, and wins over the office', () => {
+    const { settings, origins } = readSheets(withSetup(['combination set', 'none'], ['sway ratio', 'no']), {
+      office: { combinationSet: 'EN 1990', swayRatio: 150 },
+    });
+    expect(settings).toMatchObject({ combinationSet: null, swayRatio: 'none' });
+    expect([origins.combinationSet.source, origins.swayRatio.source]).toEqual(['sheet', 'sheet']);
+  });
+
+  test.each([
+    ['L/250', 250],
+    ['1/300', 300],
+    ['h / 150', 150],
+  ])('the ratio %s is %d', (typed, n) => {
+    expect(readSheets(withSetup(['deflection ratio', typed])).settings.deflectionRatio).toBe(n);
   });
 
   test.each([

@@ -3,7 +3,7 @@ import { idText } from '@/lib/intake/ids';
 import type { Place, ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
 import { placeOf, type Row, type Table } from '@/lib/intake/table';
-import { readYesNo, wordKey } from '@/lib/intake/words';
+import { meansOff, ratioText, readYesNo, wordKey } from '@/lib/intake/words';
 import { cellAddress } from '@/lib/intake/files/cell-address';
 import {
   defaultSettings,
@@ -95,7 +95,7 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     return found;
   };
   const off = <T extends string>(words: readonly T[], allowed: T): T | null => {
-    const found = word(words);
+    const found = allowed === 'none' && meansOff(text) ? allowed : word(words);
     if (found === null || found === allowed) return found;
     tell('not-supported', say.settingNotSupported(settingWords[name], found));
     return null;
@@ -128,12 +128,16 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     case 'stiffnessReduction':
       return set(name, off(['none', 'AISC 360'], 'none'));
     case 'shearDeformation': {
-      const answer = readYesNo(text);
+      const answer = meansOff(text) ? false : readYesNo(text);
       if (answer === null) return tell('unknown-word', say.unknownWord(settingWords[name], text, ['no', 'yes']));
       return answer ? tell('not-supported', say.settingNotSupported(settingWords[name], 'yes')) : set(name, false);
     }
     case 'combinationSet':
-      return wordKey(text) === 'none' ? false : tell('not-supported', say.settingNotSupported(settingWords[name], text));
+      if (!meansOff(text) && wordKey(text) !== 'aslisted') {
+        return tell('not-supported', say.settingNotSupported(settingWords[name], text));
+      }
+      values.combinationSet = null;
+      return true;
     case 'stressFactor':
     case 'nearLimit': {
       const value = number();
@@ -144,9 +148,9 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     }
     case 'deflectionRatio':
     case 'swayRatio': {
-      if (wordKey(text) === 'none') return set(name, 'none');
-      const n = /^\s*[lh]\s*\/\s*(\d+(\.\d+)?)\s*$/i.exec(text)?.[1];
-      const value = n === undefined ? number() : Number(n);
+      if (meansOff(text) && text !== '0') return set(name, 'none');
+      const n = ratioText(text);
+      const value = n === text ? number() : Number(n.replace(',', '.'));
       if (value === null) return false;
       return value > 0 ? set(name, value) : tell('not-positive', say.notPositive(settingWords[name], text));
     }

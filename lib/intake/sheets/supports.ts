@@ -5,7 +5,7 @@ import type { ProblemList } from '@/lib/intake/problem-list';
 import { isBuiltIn, type Reader, type Reading } from '@/lib/intake/reader';
 import { level, type RowsByFrame } from '@/lib/intake/rows-by-frame';
 import { placeOf, type Row, rawCell, type Table } from '@/lib/intake/table';
-import { readWord, wordKey } from '@/lib/intake/words';
+import { meansOff, readWord, wordKey } from '@/lib/intake/words';
 import type { Restraint } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
@@ -76,7 +76,7 @@ export function readSupports(draft: Draft, rows: RowsByFrame, refused: ZerosAndO
     if (refused && tellRefused(row, refused, problems, reading)) return;
     const [ux, uy, rz] = directions.map((name) => restraint(row, name, reader, reading));
     const angle = reader.number(row, 'angle', reading);
-    if (reader.yesNo(row, 'pushes only', reading)) {
+    if (!meansOff(rawCell(row, 'pushes only')?.text ?? '') && reader.yesNo(row, 'pushes only', reading)) {
       reader.tell(row, 'pushes only', { code: 'not-supported', message: say.columnNotSupported('pushes only') }, reading);
     }
     if (node < 0 || ux === undefined || uy === undefined || rz === undefined || angle === undefined) return;
