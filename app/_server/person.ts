@@ -38,7 +38,8 @@ export async function requirePerson(request: Request, act: Act): Promise<Person>
 function readCookie(header: string | null, name: string): string | undefined {
   for (const pair of header?.split(';') ?? []) {
     const [key, ...value] = pair.split('=');
-    if (key?.trim() === name) return decodeURIComponent(value.join('=').trim());
+    // A token is made of letters that need no escape.
+    if (key?.trim() === name) return value.join('=').trim();
   }
   return undefined;
 }

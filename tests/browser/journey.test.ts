@@ -88,13 +88,20 @@ describe('an analyst’s way through, from messy sheets to a result workbook', (
     };
     const strip = page.getByRole('listbox', { name: `${summary.cells.length} frames in sheet order` });
     await strip.waitFor();
-    const drawn = await strip
-      .getByRole('option')
-      .evaluateAll((cells) => cells.map((cell) => cell.getAttribute('aria-label') ?? ''));
+    const drawn = await strip.getByRole('option').evaluateAll((cells) =>
+      cells.map((cell) => ({
+        label: cell.getAttribute('aria-label') ?? '',
+        height: cell.querySelector<SVGGraphicsElement>('.cell-body')?.getBBox().height ?? NaN,
+        full: Number(cell.getAttribute('data-full')),
+      })),
+    );
     expect(drawn.length).toBe(summary.cells.length);
-    summary.cells.forEach(({ id, verdict }, index) => {
-      expect(drawn[index]).toContain(id);
-      expect(drawn[index]).toContain(verdict);
+    summary.cells.forEach(({ id, verdict, ratio }, index) => {
+      const { label, height, full } = drawn[index]!;
+      expect(label).toContain(id);
+      expect(label).toContain(verdict);
+      // A cell's whole height is 1.25.
+      if (ratio !== null && verdict !== 'not checked') expect((1.25 * height) / full, id).toBeCloseTo(Math.min(ratio, 1.25), 3);
     });
   });
 
