@@ -1,40 +1,53 @@
+import { endianness } from 'node:os';
 import { deflateRawSync, inflateRawSync } from 'node:zlib';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 
 /** The numbers of a state; its name, kind, purpose, order and α_cr stand in columns beside them. */
-export type StateNumbers = Pick<ResultState, 'factors' | 'displacements' | 'reactions' | 'endForces'>;
+export type StateNumbers = Pick<ResultState, 'factors' | 'displacements' | 'reactions' | 'endForces' | 'extremes'>;
 
 const layout = 1;
 const headBytes = 24;
+const turned = endianness() === 'BE';
+const nothing = new Float64Array(0);
 
 /**
- * A state's numbers as one blob: a head of little-endian uint32 (layout, then the four lengths, then 0), and the
- * Float64 little-endian of factors, displacements, reactions and end forces in this order. Exact, −0 and NaN included.
+ * A state's numbers as one blob: a head of little-endian uint32 (layout, then the five lengths), and the Float64
+ * little-endian of factors, displacements, reactions, end forces and extremes in this order. Exact, −0 and NaN included.
  */
 export function packState(state: StateNumbers): Buffer {
-  const parts = [state.factors, state.displacements, state.reactions, state.endForces];
-  const bytes = Buffer.allocUnsafe(headBytes + 8 * parts.reduce((sum, part) => sum + part.length, 0));
-  bytes.writeUInt32LE(layout, 0);
-  parts.forEach((part, i) => bytes.writeUInt32LE(part.length, 4 + 4 * i));
-  bytes.writeUInt32LE(0, 20);
+  const parts = [state.factors, state.displacements, state.reactions, state.endForces, state.extremes ?? nothing];
+  let numbers = 0;
+  for (const part of parts) numbers += part.length;
+  const whole = new ArrayBuffer(headBytes + 8 * numbers);
+  const head = new DataView(whole);
+  head.setUint32(0, layout, true);
   let at = headBytes;
-  for (const part of parts) for (let i = 0; i < part.length; i++, at += 8) bytes.writeDoubleLE(part[i]!, at);
-  return bytes;
+  for (let i = 0; i < parts.length; i++) {
+    const part = parts[i]!;
+    head.setUint32(4 + 4 * i, part.length, true);
+    new Float64Array(whole, at, part.length).set(part);
+    at += 8 * part.length;
+  }
+  if (turned) Buffer.from(whole, headBytes).swap64();
+  return Buffer.from(whole);
 }
 
 /** @throws {RangeError} where the bytes are not what packState writes */
 export function unpackState(bytes: Uint8Array): StateNumbers {
   const buffer = Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   if (buffer.length < headBytes || buffer.readUInt32LE(0) !== layout) throw new RangeError('Expected a packed state of layout 1');
-  let at = headBytes;
-  const next = (i: number): Float64Array => {
-    const part = new Float64Array(buffer.readUInt32LE(4 + 4 * i));
-    if (at + 8 * part.length > buffer.length) throw new RangeError(`Expected a whole packed state, got ${buffer.length} bytes`);
-    for (let k = 0; k < part.length; k++, at += 8) part[k] = buffer.readDoubleLE(at);
-    return part;
-  };
-  return { factors: next(0), displacements: next(1), reactions: next(2), endForces: next(3) };
+  const lengths = [4, 8, 12, 16, 20].map((at) => buffer.readUInt32LE(at));
+  const numbers = lengths.reduce((sum, length) => sum + length, 0);
+  if (headBytes + 8 * numbers > buffer.length) throw new RangeError(`Expected a whole packed state, got ${buffer.length} bytes`);
+  const copy = new Float64Array(numbers);
+  const raw = Buffer.from(copy.buffer);
+  buffer.copy(raw, 0, headBytes, headBytes + 8 * numbers);
+  if (turned) raw.swap64();
+  let at = 0;
+  const [factors, displacements, reactions, endForces, extremes] = lengths.map((length) => copy.subarray(at, (at += length)));
+  const state = { factors: factors!, displacements: displacements!, reactions: reactions!, endForces: endForces! };
+  return extremes!.length > 0 ? { ...state, extremes: extremes! } : state;
 }
 
 /** What a frame is without what only names it: what a frame version keeps. */
@@ -49,16 +62,35 @@ export const unpackModel = (bytes: Uint8Array): FrameModel => unpackJson(bytes) 
 
 /** JSON, deflated; numbers that JSON has no word for come back as they were. */
 export function packJson(value: unknown): Buffer {
-  const text = JSON.stringify(value, (_, field: unknown) =>
-    typeof field === 'number' && !Number.isFinite(field) ? { notFinite: String(field) } : field,
-  );
-  return deflateRawSync(text, { level: 1 });
+  // asked for each value, a replacer costs more than all the rest: it is only used where there is something to replace
+  const text = hasNotFinite(value)
+    ? JSON.stringify(value, (_, field: unknown) =>
+        typeof field === 'number' && !Number.isFinite(field) ? { notFinite: String(field) } : field,
+      )
+    : JSON.stringify(value);
+  return deflateRawSync(text, fast);
+}
+
+/** Texts of some 10 kB: a small window, whose room costs less to get ready than the text to deflate. */
+const fast = { level: 1, windowBits: 13, memLevel: 6, chunkSize: 32_768 };
+
+function hasNotFinite(value: unknown): boolean {
+  if (typeof value === 'number') return !Number.isFinite(value);
+  if (typeof value !== 'object' || value === null) return false;
+  if (Array.isArray(value)) {
+    for (let i = 0; i < value.length; i++) if (hasNotFinite(value[i])) return true;
+    return false;
+  }
+  for (const key in value) if (hasNotFinite((value as Record<string, unknown>)[key])) return true;
+  return false;
 }
 
 export function unpackJson(bytes: Uint8Array): unknown {
-  const text = inflateRawSync(bytes).toString('utf8');
+  const text = inflateRawSync(bytes, wide).toString();
   if (!text.includes('"notFinite"')) return JSON.parse(text);
   return JSON.parse(text, (_, field: unknown) =>
     typeof field === 'object' && field !== null && 'notFinite' in field ? Number(field.notFinite) : field,
   );
 }
+
+const wide = { chunkSize: 65_536 };

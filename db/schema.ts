@@ -78,7 +78,6 @@ export interface DB {
     critical_load_factor: number | null;
     packed: Buffer;
   };
-  member_result: MemberResultTable;
   revision_frame: RevisionFrameTable;
   member_row: MemberRowTable;
   check_row: CheckRowTable;
@@ -94,6 +93,8 @@ export interface DB {
     fy: number;
     mz: number;
   };
+  frame_result: { revision: number; result_name: string; frame: number; result: number };
+  frame_peak: { revision: number; frame: number } & Record<`${'fx' | 'fy' | 'mz' | 'ux' | 'uy' | 'rz'}_${'max' | 'min'}`, number>;
   movement_row: {
     revision: number;
     frame: number;
@@ -271,28 +272,6 @@ export interface CheckRowTable {
   verdict: VerdictRank;
   reason: string | null;
   reference: string;
-}
-
-export interface MemberResultTable {
-  version: number;
-  result: number;
-  member: number;
-  n_max: number;
-  n_max_at: number;
-  n_min: number;
-  n_min_at: number;
-  v_max: number;
-  v_max_at: number;
-  v_min: number;
-  v_min_at: number;
-  m_max: number;
-  m_max_at: number;
-  m_min: number;
-  m_min_at: number;
-  deflection: number;
-  deflection_at: number;
-  ratio: number | null;
-  verdict: VerdictRank | null;
 }
 
 export interface JobTable {

@@ -21,6 +21,11 @@ export interface ListIndex {
   readonly sort: string | null;
   /** How `sort` stands in it, while the key that ends it ascends. */
   readonly direction: 'asc' | 'desc';
+  /**
+   * How it is one where it is none of the table's own: `result`, by way of frame_result, a row a frame and result;
+   * `peak`, by way of frame_peak: the largest and smallest of each frame say which frames a page's rows are of.
+   */
+  readonly way: 'own' | 'result' | 'peak';
 }
 
 export interface ListTable {
@@ -54,8 +59,13 @@ const kind = words('t.kind', ['case', 'combination']);
 const frameId = text('(select f.frame_id from revision_frame f where f.revision = t.revision and f.frame = t.frame)');
 
 const index = (name: string, by: string | null, sort: string | null, direction: 'asc' | 'desc' = 'asc'): ListIndex => ({
-  name, by, sort, direction,
+  name, by, sort, direction, way: 'own',
 }); // prettier-ignore
+const byResult: readonly ListIndex[] = [
+  { ...index('frame_result', null, 'result'), way: 'result' },
+  { ...index('frame_result', 'result', null), way: 'result' },
+];
+const peak = (sort: string): ListIndex => ({ ...index(`frame_peak_${sort}`, null, sort, 'desc'), way: 'peak' });
 
 export const listTables: Readonly<Record<TableName, ListTable>> = {
   frames: {
@@ -174,11 +184,7 @@ export const listTables: Readonly<Record<TableName, ListTable>> = {
       fy: number('t.fy'),
       mz: number('t.mz'),
     },
-    indexes: [
-      index('reaction_row_result', null, 'result'),
-      index('reaction_row_result', 'result', null),
-      ...['fx', 'fy', 'mz'].map((sort) => index(`reaction_row_${sort}`, null, sort, 'desc')),
-    ],
+    indexes: [...byResult, ...['fx', 'fy', 'mz'].map(peak)],
   },
   movements: {
     table: 'movement_row',
@@ -195,11 +201,7 @@ export const listTables: Readonly<Record<TableName, ListTable>> = {
       uy: number('t.uy'),
       rz: number('t.rz'),
     },
-    indexes: [
-      index('movement_row_result', null, 'result'),
-      index('movement_row_result', 'result', null),
-      ...['ux', 'uy', 'rz'].map((sort) => index(`movement_row_${sort}`, null, sort, 'desc')),
-    ],
+    indexes: [...byResult, ...['ux', 'uy', 'rz'].map(peak)],
   },
   problems: {
     table: 'problem',

@@ -2,7 +2,7 @@
 import type { Cursor } from '@/db/lists/cursor';
 import { listTables } from '@/db/lists/columns';
 import type { Value } from '@/db/lists/filters';
-import { mirrored, type Order, type Plan, queriesOf } from '@/db/lists/plan';
+import { mirrored, type Order, peakQueriesOf, type Plan, queriesOf } from '@/db/lists/plan';
 import type { RawDatabase } from '@/db/open';
 import { statement } from '@/db/statements';
 import type { View } from '@/lib/tables/view';
@@ -29,6 +29,7 @@ export interface FetchPage {
 export function fetchRows(raw: RawDatabase, { revision, view, plan }: Fetched, page: FetchPage): Read[] {
   const turned = page.backwards ? { ...plan, order: mirrored(plan.order) } : plan;
   const lists = plan.leads.map((lead) => {
+    if (lead.way === 'peak') return fetchByPeak(raw, { revision, view, plan: turned }, page);
     const rows: Read[] = [];
     for (const { sql, values } of queriesOf(view, revision, turned, lead, page)) {
       if (rows.length < page.limit) rows.push(...statement<Read>(raw, sql).all(...values));
@@ -37,6 +38,13 @@ export function fetchRows(raw: RawDatabase, { revision, view, plan }: Fetched, p
   });
   if (lists.length === 1) return lists[0]!.slice(0, page.limit);
   return lists.flat().sort(comparison(view, turned.order)).slice(0, page.limit);
+}
+
+function fetchByPeak(raw: RawDatabase, { revision, view, plan }: Fetched, page: FetchPage): Read[] {
+  const { bound, rows } = peakQueriesOf(view, revision, plan, page);
+  const found = statement<{ bound: number }>(raw, bound.sql).get(...bound.values);
+  const { sql, values } = rows(found?.bound ?? null);
+  return statement<Read>(raw, sql).all(...values);
 }
 
 function comparison(view: View, order: Order): (a: Read, b: Read) => number {

@@ -49,6 +49,8 @@ export class ListWriter {
   private readonly check;
   private readonly reaction;
   private readonly movement;
+  private readonly result;
+  private readonly peak;
 
   constructor(raw: RawDatabase) {
     this.tally = new TallyWriter(raw);
@@ -63,6 +65,8 @@ export class ListWriter {
     this.check = insert('check_row', 17);
     this.reaction = insert('reaction_row', 10);
     this.movement = insert('movement_row', 11);
+    this.result = insert('frame_result', 4);
+    this.peak = insert('frame_peak', 14);
   }
 
   /** Adds a solved (or not solvable) frame's rows to a revision, where it has none yet. */
@@ -121,22 +125,31 @@ export class ListWriter {
   }
 
   private writeStates(revision: number, index: number, { frame, evaluation }: Solved): void {
+    // fx, fy, mz, ux, uy, rz: the largest and the smallest of each
+    const peaks = [0, 1, 2, 3, 4, 5].flatMap(() => [-Infinity, Infinity]);
+    const met = (which: number, value: number): number => {
+      const stored = orNone(value);
+      if (stored > peaks[2 * which]!) peaks[2 * which] = stored;
+      if (stored < peaks[2 * which + 1]!) peaks[2 * which + 1] = stored;
+      return stored;
+    };
     evaluation.states.forEach((state, result) => {
       const kind = state.kind === 'case' ? 0 : 1;
+      const { reactions: R, displacements: d } = state;
+      this.result.run(revision, state.name, index, result);
       frame.supports.forEach((support, i) => {
         const node = frame.nodes[support.node]!.id;
-        const [fx, fy, mz] = state.reactions.subarray(3 * i, 3 * i + 3);
-        this.reaction.run(revision, index, result, i, node, state.name, kind, orNone(fx!), orNone(fy!), orNone(mz!));
+        const [fx, fy, mz] = [met(0, R[3 * i]!), met(1, R[3 * i + 1]!), met(2, R[3 * i + 2]!)];
+        this.reaction.run(revision, index, result, i, node, state.name, kind, fx, fy, mz);
         this.tally.add(revision, 'reactions', node, state.name, String(kind), '', '');
       });
       frame.nodes.forEach((node, i) => {
-        const [ux, uy, rz] = state.displacements.subarray(3 * i, 3 * i + 3);
+        const [ux, uy, rz] = [met(3, d[3 * i]!), met(4, d[3 * i + 1]!), met(5, d[3 * i + 2]!)];
         const place = node.place ?? '';
-        this.movement.run(
-          revision, index, result, i, node.id, place, state.name, kind, orNone(ux!), orNone(uy!), orNone(rz!),
-        ); // prettier-ignore
+        this.movement.run(revision, index, result, i, node.id, place, state.name, kind, ux, uy, rz);
         this.tally.add(revision, 'movements', node.id, place, state.name, String(kind), '');
       });
     });
+    if (evaluation.states.length > 0) this.peak.run(revision, index, ...peaks.map((one) => orNone(one)));
   }
 }

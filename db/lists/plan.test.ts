@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { listTables } from '@/db/lists/columns';
 import { cellsOf } from '@/db/lists/fetch';
-import { planOf, queriesOf, type Sizes } from '@/db/lists/plan';
+import { peakQueriesOf, planOf, queriesOf, type Sizes } from '@/db/lists/plan';
 import { readFilters } from '@/db/lists/filters';
 import { newDatabase } from '@/db/testing/database';
 import { type Column, type Filter, type TableName, tables, type View } from '@/lib/tables/view';
@@ -15,7 +15,11 @@ async function explained(view: View, matching = 100_000): Promise<string> {
   const { key } = listTables[view.table];
   const cursor = { sort: 1, key: key.map(() => 1) };
   const page = { cursor, limit: 101, selected: cellsOf(view, plan.order) };
-  const queries = plan.leads.flatMap((lead) => queriesOf(view, 1, plan, lead, page));
+  const queries = plan.leads.flatMap((lead) => {
+    if (lead.way !== 'peak') return queriesOf(view, 1, plan, lead, page);
+    const { bound, rows } = peakQueriesOf(view, 1, plan, page);
+    return [bound, rows(1)];
+  });
   return queries
     .flatMap(({ sql, values }) => raw.prepare<unknown[], { detail: string }>(`explain query plan ${sql}`).all(...values))
     .map((row) => row.detail)
@@ -40,7 +44,21 @@ const every = (which: 'filter' | 'sort') =>
     tables[table].filter((column) => column[which]).map((column) => [table, column.key, column] as const),
   );
 
-it.each(every('sort'))('%s sorted by %s follow an index, and nothing is sorted', async (table, key) => {
+const byPeak = ['fx', 'fy', 'mz', 'ux', 'uy', 'rz'];
+const bySize = every('sort').filter(([, key]) => byPeak.includes(key));
+const byIndex = every('sort').filter(([, key]) => !byPeak.includes(key));
+
+it.each(bySize)('%s sorted by %s are rows of the frames with the largest, found through an index', async (table, key) => {
+  for (const descending of [false, true]) {
+    const plan = await explained(view(table, [], { column: key, descending }));
+    const index = `frame_peak_${key}_${descending ? 'max' : 'min'}`;
+    expect(plan).toMatch(new RegExp(`SEARCH p USING .*INDEX ${index} \\(revision=\\? AND`));
+    expect(plan).toMatch(/SEARCH t USING PRIMARY KEY \(revision=\? AND frame=\?\)/);
+    expect(plan).not.toMatch(/SCAN [tp]/);
+  }
+});
+
+it.each(byIndex)('%s sorted by %s follow an index, and nothing is sorted', async (table, key) => {
   for (const descending of [false, true]) {
     const plan = await explained(view(table, [], { column: key, descending }));
     expect(plan).toMatch(/SEARCH t USING/);

@@ -15,6 +15,7 @@ export interface Order {
 export interface Lead {
   /** Index to follow; null = the primary key. */
   readonly index: string | null;
+  readonly way: ListIndex['way'];
   readonly condition: Condition | null;
 }
 
@@ -22,6 +23,8 @@ export interface Plan {
   readonly order: Order;
   readonly leads: readonly Lead[];
   readonly conditions: readonly Condition[];
+  /** False: what leads there is sorted for every page. */
+  readonly ordered: boolean;
 }
 
 /** More rows than this are not asked for at once by a page. */
@@ -82,7 +85,7 @@ export function planOf(view: View, filters: ReadFilters, sizes: Sizes, limit: nu
     way.ordered ? Math.min(way.rows, (way.rows / Math.max(sizes.matching, 1)) * limit) + way.leads.length : 1.5 * way.rows + 10;
   const best = ways.reduce((a, b) => (cost(b) < cost(a) ? b : a));
   const conditions = conditionsOf(filters, view, best.filter);
-  return { order, leads: best.leads, conditions };
+  return { order, leads: best.leads, conditions, ordered: best.ordered && best.leads.every((lead) => lead.way !== 'peak') };
 }
 
 interface Way {
@@ -95,9 +98,16 @@ interface Way {
 function waysOf(view: View, filters: ReadFilters, sizes: Sizes): Way[] {
   const { indexes, tally, frame } = listTables[view.table];
   const sort = view.sort?.column === 'frame' ? null : (view.sort?.column ?? null);
-  const walk = sort === null ? null : (sortIndex(view)?.name ?? null);
+  const found = sort === null ? undefined : sortIndex(view);
+  // peaks are of all rows of a frame: with a filter they say nothing
+  const walk = found?.way === 'peak' && view.filters.length > 0 ? undefined : found;
   const ways: Way[] = [
-    { ordered: sort === null || walk !== null, rows: sizes.total, leads: [{ index: walk, condition: null }], filter: null },
+    {
+      ordered: sort === null || walk !== undefined,
+      rows: sizes.total,
+      leads: [{ index: walk?.name ?? null, way: walk?.way ?? 'own', condition: null }],
+      filter: null,
+    },
   ];
   for (const filter of filters.byValues) {
     const rows = sizes.of(filter);
@@ -106,23 +116,29 @@ function waysOf(view: View, filters: ReadFilters, sizes: Sizes): Way[] {
     const within = sort === filter.column ? null : sort;
     const fitting = indexes.find((one) => one.by === filter.column && one.sort === within);
     if (fitting && filter.values.length <= mostLeads) {
-      const leads = filter.values.map((value) => ({ index: fitting.name, condition: isIn(sql, [value]) }));
+      const leads = filter.values.map((value) => ({ index: fitting.name, way: fitting.way, condition: isIn(sql, [value]) }));
       ways.push({ ordered: true, rows, leads, filter });
     }
     const any = indexes.find((one) => one.by === filter.column);
-    if (any) ways.push({ ordered: false, rows, leads: [{ index: any.name, condition: isIn(sql, filter.values) }], filter });
+    if (any)
+      ways.push({
+        ordered: false,
+        rows,
+        leads: [{ index: any.name, way: any.way, condition: isIn(sql, filter.values) }],
+        filter,
+      });
   }
   for (const { column, condition } of filters.ranges) {
-    const found = indexes.find((one) => one.by === null && one.sort === column);
-    if (found && column !== sort && filters.byValues.length === 0 && !filters.frames) {
-      ways.push({ ordered: false, rows: sizes.matching, leads: [{ index: found.name, condition }], filter: null });
+    const led = indexes.find((one) => one.by === null && one.sort === column);
+    if (led && column !== sort && filters.byValues.length === 0 && !filters.frames) {
+      ways.push({ ordered: false, rows: sizes.matching, leads: [{ index: led.name, way: led.way, condition }], filter: null });
     }
   }
   if (filters.frames && view.table !== 'problems') {
     const condition = { sql: `${frame} in (select value from json_each(?))`, values: [JSON.stringify(filters.frames)] };
     // Every frame has about as many rows as any other.
     const rows = tally === null ? filters.frames.length : sizes.matching * Math.max(1, filters.byValues.length * 4);
-    ways.push({ ordered: false, rows, leads: [{ index: null, condition }], filter: null });
+    ways.push({ ordered: false, rows, leads: [{ index: null, way: 'own', condition }], filter: null });
   }
   return ways;
 }
@@ -145,12 +161,22 @@ export function queriesOf(
 ): Query[] {
   const { table, key } = listTables[view.table];
   const { order } = plan;
-  const keys = key.map((one) => `t.${one}`);
-  const orderBy = [...(order.sql === null ? [] : [`${order.sql} ${order.sort}`]), ...keys.map((one) => `${one} ${order.key}`)];
+  // by way of frame_result, what leads is its own columns
+  const led = (sql: string): string => (lead.way === 'result' ? sql.replace(/\bt\.(result_name|frame|result)\b/g, 's.$1') : sql);
+  const keys = key.map((one) => led(`t.${one}`));
+  const sort = order.sql === null ? null : led(order.sql);
+  const orderBy = [...(sort === null ? [] : [`${sort} ${order.sort}`]), ...keys.map((one) => `${one} ${order.key}`)];
+  const from =
+    lead.way === 'result'
+      ? `frame_result s cross join ${table} t on t.revision = s.revision and t.frame = s.frame and t.result = s.result`
+      : `${table} t${lead.index === null ? '' : ` indexed by ${lead.index}`}`;
   const build = (beyond: Condition | null): Query => {
-    const all = [...(lead.condition ? [lead.condition] : []), ...(beyond ? [beyond] : []), ...plan.conditions];
-    const where = ['t.revision = ?', ...all.map((one) => one.sql)].join(' and ');
-    const from = `${table} t${lead.index === null ? '' : ` indexed by ${lead.index}`}`;
+    const all = [
+      ...(lead.condition ? [{ ...lead.condition, sql: led(lead.condition.sql) }] : []),
+      ...(beyond ? [beyond] : []),
+      ...plan.conditions,
+    ];
+    const where = [lead.way === 'result' ? 's.revision = ?' : 't.revision = ?', ...all.map((one) => one.sql)].join(' and ');
     return {
       sql: `select ${selected} from ${from} where ${where} order by ${orderBy.join(', ')} limit ?`,
       values: [revision, ...all.flatMap((one) => one.values), limit],
@@ -159,11 +185,60 @@ export function queriesOf(
   if (cursor === null) return [build(null)];
   const further = (direction: 'asc' | 'desc') => (direction === 'asc' ? '>' : '<');
   const tail = `(${keys.join(', ')}) ${further(order.key)} (${keys.map(() => '?').join(', ')})`;
-  if (order.sql === null) return [build({ sql: tail, values: cursor.key })];
+  const within = lead.way === 'result' ? ` and s.frame ${further(order.key)}= ?` : '';
+  const end = within === '' ? cursor.key : [...cursor.key, cursor.key[0]!];
+  if (sort === null) return [build({ sql: tail + within, values: end })];
   return [
-    build({ sql: `${order.sql} = ? and ${tail}`, values: [cursor.sort, ...cursor.key] }),
-    build({ sql: `${order.sql} ${further(order.sort)} ?`, values: [cursor.sort] }),
+    build({ sql: `${sort} = ? and ${tail}${within}`, values: [cursor.sort, ...end] }),
+    build({ sql: `${sort} ${further(order.sort)} ?`, values: [cursor.sort] }),
   ];
+}
+
+/**
+ * What gives a page of the rows that are largest (or smallest), by the largest of each frame: as many frames as the page
+ * has rows have each a row beyond the cursor at least as large as the smallest of their peaks, so no smaller one is on the
+ * page, and only frames whose peak is no smaller have any. Deep in the list that is most of them, and all rows are read.
+ */
+export function peakQueriesOf(
+  view: View,
+  revision: number,
+  plan: Plan,
+  { cursor, limit, selected }: { readonly cursor: Cursor | null; readonly limit: number; readonly selected: string },
+): { readonly bound: Query; readonly rows: (bound: number | null) => Query } {
+  const { table, key } = listTables[view.table];
+  const { order } = plan;
+  const column = view.sort!.column;
+  const [near, far, beyond] = order.sort === 'desc' ? ['max', 'min', '<'] : ['min', 'max', '>'];
+  const peak = `p.${column}_${near}`;
+  const index = `frame_peak p indexed by frame_peak_${column}_${near}`;
+  const past = cursor ? ` and ${peak} ${beyond} ?` : '';
+  const keys = key.map((one) => `t.${one}`);
+  return {
+    bound: {
+      sql: `select ${peak} as bound from ${index} where p.revision = ?${past} order by ${peak} ${order.sort} limit 1 offset ?`,
+      values: [revision, ...(cursor ? [cursor.sort] : []), limit - 1],
+    },
+    rows: (bound) => {
+      const conditions: Condition[] = [{ sql: 't.revision = ?', values: [revision] }];
+      if (bound !== null) {
+        const reach = cursor ? ` and p.${column}_${far} ${beyond}= ?` : '';
+        const frames = `select p.frame from ${index} where p.revision = ? and ${peak} ${beyond === '<' ? '>' : '<'}= ?${reach}`;
+        conditions.push({ sql: `t.frame in (${frames})`, values: [revision, bound, ...(cursor ? [cursor.sort] : [])] });
+        conditions.push({ sql: `+${order.sql!} ${beyond === '<' ? '>' : '<'}= ?`, values: [bound] });
+      }
+      if (cursor) {
+        const tail = `(${keys.join(', ')}) ${order.key === 'asc' ? '>' : '<'} (${keys.map(() => '?').join(', ')})`;
+        const sql = `(+${order.sql!} ${beyond} ? or (+${order.sql!} = ? and ${tail}))`;
+        conditions.push({ sql, values: [cursor.sort, cursor.sort, ...cursor.key] });
+      }
+      const orderBy = [`${order.sql!} ${order.sort}`, ...keys.map((one) => `${one} ${order.key}`)].join(', ');
+      const where = conditions.map((one) => one.sql).join(' and ');
+      return {
+        sql: `select ${selected} from ${table} t where ${where} order by ${orderBy} limit ?`,
+        values: [...conditions.flatMap((one) => one.values), limit],
+      };
+    },
+  };
 }
 
 /** The same rows from the other end. */

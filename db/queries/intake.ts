@@ -154,7 +154,7 @@ function frameWriter(
 /** Takes away what a reading that was cut short left behind. */
 function clear(raw: RawDatabase, revision: number): void {
   const tables = [
-    'input_row', 'sheet_read', 'problem', 'member_row', 'check_row', 'reaction_row', 'movement_row', 'tally', 'revision_frame',
+    'input_row', 'sheet_read', 'problem', 'member_row', 'check_row', 'reaction_row', 'movement_row', 'frame_result', 'frame_peak', 'tally', 'revision_frame',
   ]; // prettier-ignore
   inShortTransactions(raw, tables, (table) => raw.prepare(`delete from ${table} where revision = ?`).run(revision));
 }

@@ -77,6 +77,17 @@ it('gives every table in every order it offers, page by page as at once, and rev
   }
 });
 
+it('gives reactions and movements by size in pages of fewer rows than frames, equal ones among them, as at once', async () => {
+  const given = await batch();
+  for (const [table, key] of [['reactions', 'fy'], ['movements', 'ux'], ['movements', 'rz']] as const) {
+    for (const descending of [true, false]) {
+      const view = given.view(table, [], { column: key, descending });
+      const whole = (await given.page(view, 100_000)).rows.map((row) => row.id);
+      expect((await paged(given, view, 3)).map((row) => row.id)).toEqual(whole);
+    }
+  }
+}); // prettier-ignore
+
 it('stands equal rows in sheet order where verdicts or ratios are sorted worst first', async () => {
   const given = await batch();
   const place = new Map((await given.page(given.view('checks'))).rows.map((row, i) => [row.id, i]));

@@ -73,9 +73,11 @@ export async function* iterateRows(db: Db, office: number, revision: number, vie
   const { matching } = sizes;
   const plan = planOf(view, filters, sizes, matching);
   const selected = cellsOf(view, plan.order);
+  // where rows are sorted for every page, few large pages
+  const limit = plan.ordered ? exportPage : 40 * exportPage;
   let cursor: Cursor | null = null;
-  for (let left = matching; left > 0; left -= exportPage) {
-    const rows: Read[] = fetchRows(raw, { revision, view, plan }, { cursor, backwards: false, limit: exportPage, selected });
+  for (let left = matching; left > 0; left -= limit) {
+    const rows: Read[] = fetchRows(raw, { revision, view, plan }, { cursor, backwards: false, limit, selected });
     yield* readRows(raw, revision, view, rows);
     const last = rows.at(-1);
     if (!last) return;

@@ -3,10 +3,9 @@ import { packJson, packState, unpackJson, unpackModel, unpackState } from '@/db/
 import { ListWriter, type Solved, summaryOf } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { inShortTransactions } from '@/db/short-transactions';
-import { rankOf } from '@/db/verdict-rank';
 import type { Frame, Purpose } from '@/lib/model/frame';
 import type { MemberGoverning } from '@/lib/results/member-results';
-import type { FrameEvaluation, MemberExtremes, ResultState, Verdict } from '@/lib/results/result';
+import type { FrameEvaluation, ResultState } from '@/lib/results/result';
 
 /** A frame version that waits to be run, under the name of the first frame that has it. */
 export interface WaitingFrame {
@@ -15,17 +14,14 @@ export interface WaitingFrame {
   readonly frame: Frame;
 }
 
-/** Ratio and verdict of a member under one result, where they were asked for. */
-export type MemberUnderResult = MemberExtremes & { readonly ratio?: number | null; readonly verdict?: Verdict | null };
-
 export interface FrameResults {
   readonly version: number;
   readonly frame: Frame;
   readonly evaluation: FrameEvaluation;
   /** By member; [] for a frame that was not solved. */
   readonly members: readonly MemberGoverning[];
-  /** By state of the evaluation, then by member. */
-  readonly extremes: readonly (readonly MemberUnderResult[])[];
+  /** By state of the evaluation: 14 numbers a member (lib/analysis/member-extremes.ts). */
+  readonly extremes: readonly Float64Array[];
 }
 
 /** What stands in frame_version.evaluation: all but the states, which have rows of their own. */
@@ -101,7 +97,6 @@ function resultWriter(raw: RawDatabase, lists: ListWriter, person: number | null
      second = ?, second_reason = ?, solved_at = ? where id = ? and state = 'waiting'`,
   );
   const state = raw.prepare('insert into result_state values (?, ?, ?, ?, ?, ?, ?, ?)');
-  const member = raw.prepare(`insert into member_result values (${Array(19).fill('?').join(',')})`);
   const places = raw.prepare<[number], { revision: number; frame: number }>(
     'select revision, frame from revision_frame where version = ? order by revision, frame',
   );
@@ -115,13 +110,8 @@ function resultWriter(raw: RawDatabase, lists: ListWriter, person: number | null
     ); // prettier-ignore
     if (changes === 0) return false;
     evaluation.states.forEach((one, i) => {
-      state.run(version, i, one.name, one.kind, one.purpose, one.order, one.criticalLoadFactor, packState(one));
-      (extremes[i] ?? []).forEach(({ N, V, M, deflection, ratio, verdict }, m) => {
-        member.run(
-          version, i, m, N.max, N.maxAt, N.min, N.minAt, V.max, V.maxAt, V.min, V.minAt, M.max, M.maxAt, M.min, M.minAt,
-          deflection.value, deflection.at, ratio ?? null, verdict ? rankOf(verdict) : null,
-        ); // prettier-ignore
-      });
+      const packed = packState({ ...one, extremes: extremes[i] });
+      state.run(version, i, one.name, one.kind, one.purpose, one.order, one.criticalLoadFactor, packed);
     });
     const where = places.all(version);
     for (const place of where) lists.write(place.revision, place.frame, { frame, evaluation, members }, person);

@@ -142,10 +142,7 @@ export function resultsOf(version: number, frame: Frame, random: () => number): 
     const { check, combination, at, ratio, verdict } = worst(checks.filter((one) => one.member === i));
     return { check, combination, at, N: random(), V: random(), M: random(), deflection: random(), ratio, verdict };
   });
-  const extreme = () => ({ max: random(), maxAt: random(), min: random(), minAt: random() });
-  const extremes = states.map(() =>
-    frame.members.map(() => ({ N: extreme(), V: extreme(), M: extreme(), deflection: { value: random(), at: random() } })),
-  );
+  const extremes = states.map(() => numbers(14 * frame.members.length));
   const { subject, check, combination, ratio, verdict } = governing;
   return {
     version,

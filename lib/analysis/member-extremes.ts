@@ -1,46 +1,100 @@
-import type { Extreme, MemberExtremes, MemberLine, Polynomial } from '@/lib/results/result';
-import { derivative, evaluate, rootsWithin } from './polynomial';
+import type { Extreme, MemberExtremes, MemberLine, Segment } from '@/lib/results/result';
+import { evaluate, rootsWithin, valueOf } from './polynomial';
 
 /** Values this close, relative to the largest, are equal: the one nearest the start is named. */
 const equal = 1e-9;
 
+/** Numbers of one member in `writeExtremes`: max, maxAt, min, minAt of N, V and M, then deflection and where. */
+export const extremeNumbers = 14;
+
 /** Extremes of N, V, M over a member, and its largest departure from the line between its moved ends (README §3). */
 export function memberExtremes(line: MemberLine): MemberExtremes {
-  return { N: extremeOf(line, 'N'), V: extremeOf(line, 'V'), M: extremeOf(line, 'M'), deflection: departure(line) };
+  return readExtremes(writeExtremes(line, new Float64Array(extremeNumbers), 0), 0);
 }
 
-/** Places where a quantity can be extreme, ascending, and its values there. */
-interface Candidates {
-  readonly xs: number[];
-  readonly values: number[];
+/** The same numbers in a row, as they are stored. @param at where in `out` they begin */
+export function writeExtremes(line: MemberLine, out: Float64Array, at: number): Float64Array {
+  const { segments } = line;
+  candidates = 0;
+  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.N, segments[i]!);
+  writeExtreme(out, at);
+  candidates = 0;
+  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.V, segments[i]!);
+  writeExtreme(out, at + 4);
+  candidates = 0;
+  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.M, segments[i]!);
+  writeExtreme(out, at + 8);
+  writeDeparture(line, out, at + 12);
+  return out;
 }
+
+/** What `writeExtremes` wrote. */
+export function readExtremes(numbers: Float64Array, at: number): MemberExtremes {
+  const extreme = (i: number): Extreme => ({
+    max: numbers[i]!,
+    maxAt: numbers[i + 1]!,
+    min: numbers[i + 2]!,
+    minAt: numbers[i + 3]!,
+  });
+  return {
+    N: extreme(at),
+    V: extreme(at + 4),
+    M: extreme(at + 8),
+    deflection: { value: numbers[at + 12]!, at: numbers[at + 13]! },
+  };
+}
+
+// places where a quantity can be extreme, ascending, and its values there
+let xs = new Float64Array(64);
+let values = new Float64Array(64);
+let candidates = 0;
+
+const slope = new Float64Array(8);
+const roots = new Float64Array(8);
+// the deflected line of a segment from its chord: six terms, one where it has no length
+const departed = [new Float64Array(1), new Float64Array(6)] as const;
 
 /** Both ends of a segment (so both sides of jumps) and the roots of the derivative within it. */
-function addCandidates(p: Polynomial, from: number, to: number, { xs, values }: Candidates): void {
+function addCandidates(p: ArrayLike<number>, { from, to }: Segment): void {
+  if (candidates + 16 > xs.length) {
+    [xs, values] = [longer(xs), longer(values)];
+  }
   const s = to - from;
-  xs.push(from);
-  values.push(p[0]!);
+  xs[candidates] = from;
+  values[candidates++] = p[0]!;
   if (s === 0) return;
-  if (p.length > 2) {
+  let degree = p.length - 1;
+  while (degree > 1 && p[degree] === 0) degree--;
+  if (degree > 1) {
     let largest = 0;
     let power = 1;
-    for (let i = 0; i < p.length; i++, power *= s) largest = Math.max(largest, Math.abs(p[i]!) * power);
-    for (const root of rootsWithin(derivative(p), s, (1e-13 * largest) / s)) {
-      xs.push(from + root);
-      values.push(evaluate(p, root));
+    for (let i = 0; i <= degree; i++, power *= s) {
+      const size = Math.abs(p[i]!) * power;
+      if (size > largest) largest = size;
+    }
+    for (let i = 1; i <= degree; i++) slope[i - 1] = i * p[i]!;
+    const count = rootsWithin(slope, degree - 1, s, (1e-13 * largest) / s, roots);
+    for (let i = 0; i < count; i++) {
+      const root = roots[i]!;
+      xs[candidates] = from + root;
+      values[candidates++] = valueOf(p, degree, root);
     }
   }
-  xs.push(to);
-  values.push(evaluate(p, s));
+  xs[candidates] = to;
+  values[candidates++] = valueOf(p, degree, s);
 }
 
-function extremeOf(line: MemberLine, quantity: 'N' | 'V' | 'M'): Extreme {
-  const found: Candidates = { xs: [], values: [] };
-  for (const segment of line.segments) addCandidates(segment[quantity], segment.from, segment.to, found);
-  const { xs, values } = found;
+function longer(numbers: Float64Array): Float64Array {
+  const more = new Float64Array(2 * numbers.length);
+  more.set(numbers);
+  return more;
+}
+
+function writeExtreme(out: Float64Array, at: number): void {
   let max = -Infinity;
   let min = Infinity;
-  for (const value of values) {
+  for (let i = 0; i < candidates; i++) {
+    const value = values[i]!;
     if (value > max) max = value;
     if (value < min) min = value;
   }
@@ -49,30 +103,37 @@ function extremeOf(line: MemberLine, quantity: 'N' | 'V' | 'M'): Extreme {
   while (values[first]! < max - near) first++;
   let last = 0;
   while (values[last]! > min + near) last++;
-  return { max, maxAt: xs[first]!, min, minAt: xs[last]! };
+  out[at] = max;
+  out[at + 1] = xs[first]!;
+  out[at + 2] = min;
+  out[at + 3] = xs[last]!;
 }
 
 /** Largest of |v − chord|: what stands at the ends is rounding, for they are on the chord by definition. */
-function departure(line: MemberLine): { value: number; at: number } {
-  const { segments, length } = line;
+function writeDeparture({ segments, length }: MemberLine, out: Float64Array, at: number): void {
   const end = segments[segments.length - 1]!;
   const v1 = segments[0]!.v[0]!;
   const turn = (evaluate(end.v, end.to - end.from) - v1) / length;
-  const found: Candidates = { xs: [], values: [] };
-  let moved = 0;
-  for (const { v, from, to } of segments) {
-    const p = v.slice();
-    moved = Math.max(moved, Math.abs(p[0]!));
-    p[0] = p[0]! - v1 - turn * from;
+  candidates = 0;
+  let size = 0;
+  for (let k = 0; k < segments.length; k++) {
+    const segment = segments[k]!;
+    const { v } = segment;
+    const p = departed[v.length > 1 ? 1 : 0];
+    for (let i = 0; i < p.length; i++) p[i] = v[i] ?? 0;
+    size = Math.max(size, Math.abs(p[0]!));
+    p[0] = p[0]! - v1 - turn * segment.from;
     if (p.length > 1) p[1] = p[1]! - turn;
-    addCandidates(p, from, to, found);
+    addCandidates(p, segment);
   }
-  const { xs, values } = found;
   let largest = 0;
-  for (const value of values) largest = Math.max(largest, Math.abs(value));
-  if (largest <= 1e-12 * moved) return { value: 0, at: 0 };
+  for (let i = 0; i < candidates; i++) largest = Math.max(largest, Math.abs(values[i]!));
+  out[at] = 0;
+  out[at + 1] = 0;
+  if (largest <= 1e-12 * size) return;
   let i = 0;
   while (Math.abs(values[i]!) < largest * (1 - equal)) i++;
-  if (xs[i] === 0 || xs[i] === length) return { value: 0, at: 0 };
-  return { value: values[i]!, at: xs[i]! };
+  if (xs[i] === 0 || xs[i] === length) return;
+  out[at] = values[i]!;
+  out[at + 1] = xs[i]!;
 }

@@ -7,72 +7,103 @@ export function evaluate(p: Polynomial, s: number): number {
   return value;
 }
 
-export function derivative(p: Polynomial): number[] {
-  const d: number[] = [];
-  for (let i = 1; i < p.length; i++) d.push(i * p[i]!);
-  return d;
-}
-
-/** Antiderivative with the constant c₀. */
-export function integral(p: Polynomial, constant: number): number[] {
-  const out = [constant];
-  for (let i = 0; i < p.length; i++) out.push(p[i]! / (i + 1));
-  return out;
-}
+/** Highest degree whose roots are looked for: the deflected line under a linear load has degree 5. */
+const most = 8;
+// a row of coefficients and one of roots for each derivative, so that nothing is allocated while looking
+const rows = Array.from({ length: most + 1 }, () => new Float64Array(most + 1));
+const found = Array.from({ length: most + 1 }, () => new Float64Array(most + 2));
 
 /**
  * Roots of p strictly within (0, length), ascending, each to the last digit: between neighbouring roots of its
  * derivative p is monotonic, so one change of sign is one root, found by Newton's steps kept inside it.
  * A polynomial that is nothing but rounding (every term at most `nothing` over the length) has none.
+ *
+ * @param p coefficients up to `degree`, at most 8   @param out the roots   @returns how many there are
  */
-export function rootsWithin(p: Polynomial, length: number, nothing: number): number[] {
-  let degree = p.length - 1;
+export function rootsWithin(p: ArrayLike<number>, degree: number, length: number, nothing: number, out: Float64Array): number {
+  if (degree > most) throw new RangeError(`Expected a degree up to ${most}, got ${degree}`);
   let power = length ** degree;
   while (degree > 0 && Math.abs(p[degree]!) * power <= nothing) {
     degree--;
     power /= length;
   }
-  if (degree <= 0) return [];
-  if (degree === 1) return within([-p[0]! / p[1]!], length);
-  if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length);
-  const q = p.slice(0, degree + 1);
-  const slope = derivative(q);
-  const turns = [0, ...rootsWithin(slope, length, nothing / length), length];
-  const roots: number[] = [];
-  for (let i = 1; i < turns.length; i++) {
-    const a = turns[i - 1]!;
-    const b = turns[i]!;
-    const fa = evaluate(q, a);
-    const fb = evaluate(q, b);
-    if (fa === 0 && a > 0) roots.push(a);
-    else if (fa * fb < 0) roots.push(between(q, slope, a, b, fa));
+  if (degree <= 0) return 0;
+  if (degree === 1) {
+    out[0] = -p[0]! / p[1]!;
+    return within(out, 1, length);
   }
-  return within(roots, length);
+  if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length, out);
+  const q = rows[degree]!;
+  for (let i = 0; i <= degree; i++) q[i] = p[i]!;
+  const count = higher(degree, length, nothing);
+  const roots = found[degree]!;
+  for (let i = 0; i < count; i++) out[i] = roots[i]!;
+  return count;
 }
 
-function within(roots: readonly number[], length: number): number[] {
-  return roots.filter((root) => root > 0 && root < length);
+/** Roots of rows[degree] into found[degree], by way of its derivative's in the rows below. */
+function higher(degree: number, length: number, nothing: number): number {
+  const q = rows[degree]!;
+  const slope = rows[degree - 1]!;
+  for (let i = 1; i <= degree; i++) slope[i - 1] = i * q[i]!;
+  const turns = found[degree - 1]!;
+  const turnCount =
+    degree - 1 > 2 && Math.abs(slope[degree - 1]!) * length ** (degree - 1) > nothing / length
+      ? higher(degree - 1, length, nothing / length)
+      : rootsWithin(slope, degree - 1, length, nothing / length, turns);
+  const roots = found[degree]!;
+  let count = 0;
+  let a = 0;
+  let fa = q[0]!;
+  for (let i = 0; i <= turnCount; i++) {
+    const b = i < turnCount ? turns[i]! : length;
+    const fb = valueOf(q, degree, b);
+    if (fa === 0 && a > 0) roots[count++] = a;
+    else if (fa * fb < 0) roots[count++] = between(q, degree, slope, a, b, fa);
+    a = b;
+    fa = fb;
+  }
+  return within(roots, count, length);
+}
+
+export function valueOf(p: ArrayLike<number>, degree: number, s: number): number {
+  let value = 0;
+  for (let i = degree; i >= 0; i--) value = value * s + p[i]!;
+  return value;
+}
+
+/** Leaves of ascending roots those within (0, length). */
+function within(roots: Float64Array, count: number, length: number): number {
+  let kept = 0;
+  for (let i = 0; i < count; i++) {
+    const root = roots[i]!;
+    if (root > 0 && root < length) roots[kept++] = root;
+  }
+  return kept;
 }
 
 /** Both roots without cancellation. */
-function quadratic(c: number, b: number, a: number, length: number): number[] {
+function quadratic(c: number, b: number, a: number, length: number, out: Float64Array): number {
   const square = b * b - 4 * a * c;
-  if (square < 0) return [];
+  if (square < 0) return 0;
   const t = -0.5 * (b + (b < 0 ? -1 : 1) * Math.sqrt(square));
-  if (t === 0) return [];
-  const roots = [t / a, c / t].sort((p, q) => p - q);
-  return within(roots[0] === roots[1] ? [roots[0]!] : roots, length);
+  if (t === 0) return 0;
+  const first = t / a;
+  const second = c / t;
+  out[0] = first < second ? first : second;
+  out[1] = first < second ? second : first;
+  return within(out, first === second ? 1 : 2, length);
 }
 
 /** The root in (a, b), where p changes sign once: Newton's steps, halving wherever one would leave the bracket. */
-function between(p: Polynomial, slope: Polynomial, a: number, b: number, fa: number): number {
+function between(p: Float64Array, degree: number, slope: Float64Array, a: number, b: number, fa: number): number {
   let x = (a + b) / 2;
   for (let pass = 0; pass < 100; pass++) {
-    const fx = evaluate(p, x);
+    const fx = valueOf(p, degree, x);
     if (fx === 0) return x;
     if (fx < 0 === fa < 0) a = x;
     else b = x;
-    const next = x - fx / evaluate(slope, x);
+    const next = x - fx / valueOf(slope, degree - 1, x);
     const inside = next > a && next < b;
     const step = inside ? next : (a + b) / 2;
     if (step === x || b - a <= 2e-16 * b) break;

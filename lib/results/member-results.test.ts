@@ -3,6 +3,7 @@ import { createAnalyser } from '@/lib/analysis/analyser';
 import { defaultSettings } from '@/lib/model/settings';
 import { cantileverFrame } from '@/lib/results/cantilever-frame';
 import { evaluateFrame } from '@/lib/results/evaluate';
+import { extremesOf } from '@/lib/results/extremes-of';
 import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults } from '@/lib/results/member-results';
 
@@ -16,8 +17,8 @@ const settings = {
 function results(change: Parameters<typeof cantileverFrame>[1]) {
   const frame = cantileverFrame('K', change);
   const lineOf = lineMemo(frame);
-  const evaluation = evaluateFrame(createAnalyser(), frame, settings, { second: false, all: true, lineOf });
-  return { evaluation, ...memberResults(frame, evaluation, lineOf) };
+  const evaluation = evaluateFrame(createAnalyser(), frame, settings, { second: false, all: false, lineOf });
+  return { frame, evaluation, ...memberResults(frame, evaluation, lineOf) };
 }
 
 describe('a member in the members table', () => {
@@ -29,12 +30,14 @@ describe('a member in the members table', () => {
     expect(members[0]!.deflection).toBeNull();
   });
 
-  it('is judged under each combination by its own checks there, and under no load case', () => {
+  it('has its extremes kept under every case and combination, as they are recovered from its line', () => {
     const strength = (name: string, factor: number) => ({ name, purpose: 'strength' as const, terms: [{ case: 1, factor }] });
-    const { evaluation, extremes } = results({ combinations: [strength('C1', 1), strength('C2', 2)] });
+    const { evaluation, extremes, frame } = results({ combinations: [strength('C1', 1), strength('C2', 2)] });
     expect(evaluation.states.map((state) => state.name)).toEqual(['dead', 'tip', 'C1', 'C2']);
-    expect(extremes.slice(0, 2).map((ofState) => ofState[0]!.verdict)).toEqual([null, null]);
-    expect(extremes[3]![0]!.ratio! / extremes[2]![0]!.ratio!).toBeCloseTo(2, 9);
+    const kept = evaluation.states.map((state, i) => extremesOf(frame, { ...state, extremes: extremes[i]! }, 0));
+    expect(kept).toEqual(evaluation.states.map((state) => extremesOf(frame, state, 0)));
+    expect(kept[3]!.M.min / kept[2]!.M.min).toBeCloseTo(2, 12);
+    expect(kept[2]!.M.minAt).toBe(0);
   });
 
   it('that is a piece of a span takes the span’s check where that stands', () => {

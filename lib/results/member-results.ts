@@ -1,10 +1,10 @@
 /** What tables and filters need of each member: its extremes under every state, and the check that governs it. */
-import { memberExtremes } from '@/lib/analysis/member-extremes';
+import { extremeNumbers, writeExtremes } from '@/lib/analysis/member-extremes';
 import { valueAt } from '@/lib/analysis/value-at';
 import { spansOf, type SpanPiece } from '@/lib/checks/spans';
 import type { Frame } from '@/lib/model/frame';
 import type { LineOf } from '@/lib/results/line-memo';
-import type { Check, FrameEvaluation, MemberExtremes, MemberLine, Verdict } from '@/lib/results/result';
+import type { Check, FrameEvaluation, MemberLine, Verdict } from '@/lib/results/result';
 import { governingIndex } from '@/lib/results/verdict';
 
 /** A member's line in the members table; forces stand where its governing check does. */
@@ -22,32 +22,23 @@ export interface MemberGoverning {
   readonly verdict: Verdict;
 }
 
-/** A member under one state: its extremes, and the worst of its checks there; null where there is none. */
-export type MemberUnderState = MemberExtremes & { readonly ratio: number | null; readonly verdict: Verdict | null };
-
 export interface MemberResults {
   /** By member; [] for a frame that was not solved. */
   readonly members: readonly MemberGoverning[];
-  /** By state of the evaluation, then by member. */
-  readonly extremes: readonly (readonly MemberUnderState[])[];
+  /** By state of the evaluation: 14 numbers a member (lib/analysis/member-extremes.ts). */
+  readonly extremes: readonly Float64Array[];
 }
 
-/**
- * @param evaluation with every combination's checks, for the worst of each; without, these are null
- * @param lineOf as used for the evaluation, so that no line is worked out twice
- */
+/** @param lineOf as used for the evaluation, so that no line is worked out twice */
 export function memberResults(frame: Frame, evaluation: FrameEvaluation, lineOf: LineOf): MemberResults {
   if (evaluation.status !== 'solved') return { members: [], extremes: [] };
   const pieces = piecesOf(frame);
   const governing = byMember(frame, pieces, evaluation.checks);
-  const all = byMember(frame, pieces, evaluation.allChecks ?? []);
-  const extremes = evaluation.states.map((state) =>
-    frame.members.map((_, i): MemberUnderState => {
-      const checks = all[i]!.filter((check) => check.combination === state.name);
-      const worst = state.kind === 'combination' ? checks[governingIndex(checks)] : undefined;
-      return { ...memberExtremes(lineOf(state, i)), ratio: worst?.ratio ?? null, verdict: worst?.verdict ?? null };
-    }),
-  );
+  const extremes = evaluation.states.map((state) => {
+    const numbers = new Float64Array(extremeNumbers * frame.members.length);
+    for (let i = 0; i < frame.members.length; i++) writeExtremes(lineOf(state, i), numbers, extremeNumbers * i);
+    return numbers;
+  });
   const members = frame.members.map((_, i): MemberGoverning => {
     const check = governing[i]![governingIndex(governing[i]!)];
     const state = check && evaluation.states.find((each) => each.kind === 'combination' && each.name === check.combination);
@@ -112,7 +103,7 @@ function largestDeflection(evaluation: FrameEvaluation, extremes: MemberResults[
   let largest: number | null = null;
   evaluation.states.forEach((state, i) => {
     if (state.purpose !== 'service') return;
-    const { value } = extremes[i]![member]!.deflection;
+    const value = extremes[i]![extremeNumbers * member + 12]!;
     if (largest === null || Math.abs(value) > Math.abs(largest)) largest = value;
   });
   return largest;

@@ -24,6 +24,11 @@ export interface ResultState {
   readonly reactions: Float64Array;
   /** N, V, M at the start (before a load exactly there) and N, V, M at the end (after it), by member: 6 each. */
   readonly endForces: Float64Array;
+  /**
+   * Extremes of each member as they were stored with the state, 14 numbers a member (lib/analysis/member-extremes.ts);
+   * undefined straight from the analysis. lib/results/extremes-of.ts gives them either way.
+   */
+  readonly extremes?: Float64Array;
 }
 
 /** Coefficients c₀ + c₁ s + c₂ s² …, s = x − from, of one stretch of a member between load points. */

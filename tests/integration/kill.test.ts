@@ -95,7 +95,6 @@ async function live(file: string, { office, revision, person }: Revision, kill?:
 const tables = [
   ['frame_version', 'id'],
   ['result_state', 'version, ordinal'],
-  ['member_result', 'version, result, member'],
   ['revision_frame', 'revision, frame'],
   ['member_row', 'revision, frame, member'],
   ['check_row', 'revision, frame, ordinal'],

@@ -1,8 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
-import type { ResultState } from '@/lib/results/result';
+import type { Polynomial, ResultState } from '@/lib/results/result';
 import { memberData } from '../member-data';
-import { memberLine } from '../member-line';
-import { memberLoads } from '../member-loads';
+import { stretchesOf } from '../member-stretches';
 import { evaluate } from '../polynomial';
 
 /** A length of a member over which the axial force is N + slope × (x − middle), tension positive, first order. */
@@ -17,61 +16,113 @@ const nothing = 1e-8;
 /** And so are forces below this share of axial stiffness × movement. */
 const rounding = 1e-11;
 
-/**
- * Pieces of each member for the buckling analysis of one combination (README §4): a compressed member is at least two,
- * so that its own buckling between its nodes is among the unknowns; where the axial force varies, more, by how much it
- * varies against the member's largest. An uncompressed member with a constant force is one.
- */
-export function axialPieces(frame: Frame, state: ResultState): AxialPiece[][] {
+/** The axial forces of one combination, before members are divided. */
+export interface AxialForces {
+  /** By member, one after the other, between places where loads of the combination begin, end or stand. */
+  readonly stretches: readonly (readonly Stretch[])[];
+  /** Forces below it are rounding, N. */
+  readonly floor: number;
+}
+interface Stretch {
+  readonly length: number;
+  readonly N: Polynomial;
+}
+
+/** Axial forces along the members of a state, exactly. */
+export function axialForces(frame: Frame, state: ResultState): AxialForces {
   const data = memberData(frame);
-  const loads = memberLoads(frame);
-  const cases = frame.cases.length;
   let largest = 0;
-  data.forEach((m, i) => {
-    for (let r = 0; r < 6; r++) largest = Math.max(largest, Math.abs(state.endForces[6 * i + r]!) / (r % 3 === 2 ? m.length : 1));
-  });
+  let stiffest = 0;
+  for (let i = 0; i < data.length; i++) {
+    const { EA, length } = data[i]!;
+    stiffest = Math.max(stiffest, EA / length);
+    for (let r = 0; r < 6; r++) largest = Math.max(largest, Math.abs(state.endForces[6 * i + r]!) / (r % 3 === 2 ? length : 1));
+  }
   let moved = 0;
   for (let i = 0; i < state.displacements.length; i++)
     if (i % 3 !== 2) moved = Math.max(moved, Math.abs(state.displacements[i]!));
-  const stiffest = data.reduce((most, m) => Math.max(most, m.EA / m.length), 0);
-  const floor = Math.max(nothing * largest, rounding * stiffest * moved);
-  return data.map((m, i) => {
-    let constant = true;
-    for (let c = 0; c < cases && constant; c++) {
-      const acting = state.factors[c] === 0 ? undefined : loads[i * cases + c];
-      if (acting) constant = acting.lines.every((q) => q.qx1 === 0 && q.qx2 === 0) && acting.places.every((p) => p.Px === 0);
+  const stretches = data.map((m, i) => stretchesAlong(frame, state, i, m.length));
+  return { stretches, floor: Math.max(nothing * largest, rounding * stiffest * moved) };
+}
+
+function stretchesAlong(frame: Frame, state: ResultState, member: number, length: number): Stretch[] {
+  const { places, cases } = stretchesOf(frame, member);
+  let N = state.endForces[6 * member]!;
+  if (cases.every((acting, c) => !acting?.axial || state.factors[c] === 0)) return [{ length, N: [N] }];
+  const stretches: Stretch[] = [];
+  for (let i = 0; i + 1 < places.length; i++) {
+    let n1 = 0;
+    let n2 = 0;
+    for (let c = 0; c < cases.length; c++) {
+      const k = state.factors[c]!;
+      const acting = k === 0 ? undefined : cases[c];
+      if (!acting) continue;
+      if (acting.jumps) N -= k * acting.Px[i]!;
+      n1 -= k * acting.lines[4 * i]!;
+      n2 -= (k * acting.lines[4 * i + 1]!) / 2;
     }
-    const start = state.endForces[6 * i]!;
-    if (constant) return even(m.length, () => start, floor, Math.abs(start), 0, m.length);
-    const line = memberLine(frame, state, i);
-    const most = line.segments.reduce(
-      (size, segment) =>
-        Math.max(size, Math.abs(evaluate(segment.N, 0)), Math.abs(evaluate(segment.N, segment.to - segment.from))),
-      0,
-    );
-    return line.segments.flatMap((segment) =>
-      even(m.length, (s) => evaluate(segment.N, s), floor, most, 0, segment.to - segment.from),
-    );
+    const l = places[i + 1]! - places[i]!;
+    stretches.push({ length: l, N: [N, n1, n2] });
+    N += l * (n1 + l * n2);
+  }
+  return stretches;
+}
+
+/**
+ * Pieces of each member for the buckling analysis of one combination (README §4): a compressed member is at least two,
+ * so that its own buckling between its nodes is among the unknowns; where the axial force varies, more, by how much it
+ * varies against the member's largest and how near this is to buckling the member. An uncompressed member with a constant
+ * force is one.
+ *
+ * @param lambda about what the critical load factor is; 0 = not known yet: as few pieces as may be
+ */
+export function axialPieces(frame: Frame, { stretches, floor }: AxialForces, lambda: number): AxialPiece[][] {
+  const data = memberData(frame);
+  return stretches.map((along, i) => {
+    const { length, EI } = data[i]!;
+    const [first] = along;
+    if (along.length === 1 && first!.N.length === 1) {
+      const N = Math.abs(first!.N[0]!) > floor ? first!.N[0]! : 0;
+      if (N >= 0) return [{ length, N, slope: 0 }];
+      const half = { length: length / 2, N, slope: 0 };
+      return [half, half];
+    }
+    let most = 0;
+    for (const { N, length: l } of along) most = Math.max(most, Math.abs(N[0]!), Math.abs(evaluate(N, l)));
+    // the error grows with the square of the force against Euler’s: far from it, fewer pieces are as good
+    const nearness = Math.min(1, (Math.sqrt((lambda * most) / EI) * length) / Math.PI);
+    const pieces: AxialPiece[] = [];
+    for (const { N, length: l } of along) even(length, N, l, floor, most, nearness, pieces);
+    return pieces;
   });
 }
 
-/** One stretch without jumps, cut evenly. */
-function even(member: number, N: (s: number) => number, floor: number, most: number, from: number, to: number): AxialPiece[] {
-  const length = to - from;
-  if (!(length > 0)) return [];
-  const first = N(from);
-  const last = N(to);
+/** One stretch without jumps, cut evenly. @param nearness √(λ N / Euler's load), at most 1 */
+function even(
+  member: number,
+  N: Polynomial,
+  length: number,
+  floor: number,
+  most: number,
+  nearness: number,
+  pieces: AxialPiece[],
+): void {
+  if (!(length > 0)) return;
+  const first = N[0]!;
+  const last = evaluate(N, length);
   const compressed = Math.min(first, last) < -floor;
   const varies = Math.abs(last - first) > floor;
-  const count = Math.max(1, Math.ceil((piecesOf(compressed, varies ? Math.abs(last - first) / most : 0) * length) / member));
+  const whole = piecesOf(compressed, varies ? Math.abs(last - first) / most : 0);
+  const count = Math.max(1, Math.ceil((Math.max(Math.min(2, whole), Math.ceil(whole * nearness)) * length) / member));
   const l = length / count;
-  return Array.from({ length: count }, (_, i) => {
-    const s = from + i * l;
-    const a = N(s);
-    const b = N(s + l);
-    const mean = (a + 4 * N(s + l / 2) + b) / 6;
-    return { length: l, N: Math.abs(mean) > floor ? mean : 0, slope: varies ? (b - a) / l : 0 };
-  });
+  let a = first;
+  for (let i = 0; i < count; i++) {
+    const s = i * l;
+    const b = evaluate(N, s + l);
+    const mean = (a + 4 * evaluate(N, s + l / 2) + b) / 6;
+    pieces.push({ length: l, N: Math.abs(mean) > floor ? mean : 0, slope: varies ? (b - a) / l : 0 });
+    a = b;
+  }
 }
 
 /** Pieces to a whole member's length; the error falls with their fourth power (README §4 gives it measured). */

@@ -5,11 +5,23 @@ import { stabilityFunctions, type StabilityFunctions } from './stability-functio
 
 /**
  * How the unknowns inside members stand at a load factor: pivots below zero and clamped pieces already buckled (together
- * the members' share of the Wittrick–Williams count), and ln of the product of the pivots' sizes.
+ * the members' share of the Wittrick–Williams count), and the product of the pivots' sizes: e^logSize × size.
  */
 export interface InnerCount {
   negative: number;
   logSize: number;
+  size: number;
+}
+
+/** Counts a pivot; a logarithm is taken only where the product would leave the numbers. */
+export function pass(pivot: number, count: InnerCount): void {
+  if (pivot < 0) count.negative++;
+  const size = count.size * Math.abs(pivot);
+  if (size > 1e-140 && size < 1e140) count.size = size;
+  else {
+    count.logSize += Math.log(count.size) + Math.log(Math.abs(pivot));
+    count.size = 1;
+  }
 }
 
 const functions: StabilityFunctions = { s: 0, sc: 0 };
@@ -27,9 +39,12 @@ export function bucklingMember(
   out: MemberStiffness,
   count: InnerCount,
 ): void {
-  pieceStiffness(m.EI, pieces[0]!, lambda, out, count);
+  let passed = pieceStiffness(m.EI, pieces[0]!, lambda, piece);
+  copyStiffness(piece, out);
+  count.negative += passed;
   for (let i = 1; i < pieces.length; i++) {
-    pieceStiffness(m.EI, pieces[i]!, lambda, piece, count);
+    if (pieces[i] !== pieces[i - 1]) passed = pieceStiffness(m.EI, pieces[i]!, lambda, piece);
+    count.negative += passed;
     joinPiece(out, piece, count);
   }
   if (m.startSpring !== Infinity) releaseStart(out, m.startSpring, count);
@@ -37,16 +52,24 @@ export function bucklingMember(
   out.ka = m.EA / m.length;
 }
 
-/** Stability functions for the mean force; its linear part by the consistent geometric stiffness of cubic shapes. */
-function pieceStiffness(EI: number, p: AxialPiece, lambda: number, out: MemberStiffness, count: InnerCount): void {
+function copyStiffness(from: MemberStiffness, to: MemberStiffness): void {
+  to.kvv = from.kvv;
+  to.kv1 = from.kv1;
+  to.kv2 = from.kv2;
+  to.S11 = from.S11;
+  to.S12 = from.S12;
+  to.S22 = from.S22;
+}
+
+/**
+ * Stability functions for the mean force; its linear part by the consistent geometric stiffness of cubic shapes.
+ * @returns critical loads of the clamped piece passed
+ */
+function pieceStiffness(EI: number, p: AxialPiece, lambda: number, out: MemberStiffness): number {
   const l = p.length;
   const P = -lambda * p.N;
   const x = (P * l * l) / EI;
   const { s, sc } = stabilityFunctions(x, functions);
-  if (x > 9) {
-    // clamped buckling loads passed = pinned ones passed − negative eigenvalues s ± sc of the end rotations
-    count.negative += Math.floor(Math.sqrt(x) / Math.PI) - (s + sc < 0 ? 1 : 0) - (s - sc < 0 ? 1 : 0);
-  }
   const a = (s * EI) / l;
   const b = (sc * EI) / l;
   const tilt = lambda * p.slope * l;
@@ -56,11 +79,8 @@ function pieceStiffness(EI: number, p: AxialPiece, lambda: number, out: MemberSt
   out.S11 = a - (tilt * l) / 30;
   out.S12 = b;
   out.S22 = a + (tilt * l) / 30;
-}
-
-function pass(pivot: number, count: InnerCount): void {
-  if (pivot < 0) count.negative++;
-  count.logSize += Math.log(Math.abs(pivot));
+  // clamped buckling loads passed = pinned ones passed − negative eigenvalues s ± sc of the end rotations
+  return x > 9 ? Math.floor(Math.sqrt(x) / Math.PI) - (s + sc < 0 ? 1 : 0) - (s - sc < 0 ? 1 : 0) : 0;
 }
 
 /** Joins piece B to the end of A, eliminating v and θ between them; the result stands in A. */

@@ -4,8 +4,8 @@ import { addMember, addSupports, emptyMemberStiffness } from '../assemble';
 import { factor } from '../factor';
 import { memberData } from '../member-data';
 import type { Topology } from '../topology';
-import { axialPieces, type AxialPiece } from './axial-pieces';
-import { bucklingMember, type InnerCount } from './buckling-member';
+import { axialForces, axialPieces, type AxialPiece } from './axial-pieces';
+import { bucklingMember, pass, type InnerCount } from './buckling-member';
 
 /** Room for K(λ), kept for one topology. */
 export interface BucklingSpace {
@@ -22,8 +22,9 @@ export function bucklingSpace(t: Topology): BucklingSpace {
   };
 }
 
-/** The load factor is found to this relative width. */
+/** The load factor is found to this relative width; roughly, where it only decides how finely members are divided. */
 const closeness = 1e-12;
+const roughly = 1e-3;
 
 /**
  * α_cr: the smallest positive λ at which the frame, under λ times the axial forces of the first-order analysis, has an
@@ -42,33 +43,80 @@ export function criticalLoadFactor(
   state: ResultState,
   space: BucklingSpace,
 ): number | null {
-  const pieces = axialPieces(frame, state);
-  const { cap, guess } = startingPoint(frame, pieces);
+  const forces = axialForces(frame, state);
+  const few = axialPieces(frame, forces, 0);
+  const { cap, guess } = startingPoint(frame, few);
   if (cap === Infinity) return null;
-  const at = (lambda: number): Trial => trial(frame, t, angles, diagonal, pieces, lambda, space);
-  const reference = at(0).logSize;
-  const signed = (lambda: number): number => {
+  const at = (lambda: number, pieces: readonly (readonly AxialPiece[])[]): Trial =>
+    trial(frame, t, angles, diagonal, pieces, lambda, space);
+  const coarse = signed((lambda) => at(lambda, few), at(0, few).logSize);
+  const rough = firstEnclosed(coarse, guess, cap);
+  if (rough === null) return null;
+  const near = enclosed(coarse, rough, roughly);
+  const pieces = axialPieces(frame, forces, (near.a + near.b) / 2);
+  if (pieces.every((one, i) => one.length === few[i]!.length)) return middle(enclosed(coarse, near, closeness));
+  const fine = signed((lambda) => at(lambda, pieces), at((near.a + near.b) / 2, pieces).logSize);
+  const around = enclosedAround(fine, (near.a + near.b) / 2, cap);
+  return around && middle(enclosed(fine, around, closeness));
+}
+
+/** λ either side of a change of sign, and f there. */
+interface Enclosure {
+  readonly a: number;
+  readonly fa: number;
+  readonly b: number;
+  readonly fb: number;
+}
+type Signed = (lambda: number) => number;
+
+/** f(λ) above zero below the first critical load, below zero beyond it; many critical loads passed weigh by their root. */
+function signed(at: (lambda: number) => Trial, reference: number): Signed {
+  return function f(lambda: number): number {
     const { count, logSize } = at(lambda);
     // exactly on a pole of some piece: a hair beside it says as much
-    if (!Number.isFinite(logSize)) return signed(lambda * (1 + 1e-13));
-    const f = Math.exp(Math.min(700, logSize - reference));
-    return count === 0 ? f : -Math.max(Number.MIN_VALUE, f ** (1 / count));
+    if (!Number.isFinite(logSize)) return f(lambda * (1 + 1e-13));
+    const size = Math.exp(Math.min(700, logSize - reference));
+    return count === 0 ? size : -Math.max(Number.MIN_VALUE, size ** (1 / count));
   };
-  // enclose the first: below it the count is 0
-  let low = 0;
-  let fLow = 1;
-  let high = guess;
-  let fHigh = signed(high);
-  while (fHigh > 0) {
-    const straight = low + ((high - low) * fLow) / (fLow - fHigh);
-    low = high;
-    fLow = fHigh;
-    if (high > 2 * cap) return null;
-    high = straight > low && straight < 3 * low ? Math.max(1.02 * straight, 1.05 * low) : 3 * low;
-    fHigh = signed(high);
-  }
-  return enclosed(signed, low, fLow, high, fHigh);
 }
+
+/** The first critical load from nothing: below `a` the count is 0. Null where there is none to be found. */
+function firstEnclosed(f: Signed, guess: number, cap: number): Enclosure | null {
+  let a = 0;
+  let fa = 1;
+  let b = guess;
+  let fb = f(b);
+  while (fb > 0) {
+    const straight = a + ((b - a) * fa) / (fa - fb);
+    a = b;
+    fa = fb;
+    if (b > 2 * cap) return null;
+    b = straight > a && straight < 3 * a ? Math.max(1.02 * straight, 1.05 * a) : 3 * a;
+    fb = f(b);
+  }
+  return { a, fa, b, fb };
+}
+
+/** The first critical load from a λ that is near it. */
+function enclosedAround(f: Signed, near: number, cap: number): Enclosure | null {
+  let [a, b] = [near, near];
+  let fa = f(near);
+  let fb = fa;
+  for (let step = 0.002; fb > 0; step *= 3) {
+    if (b > 2 * cap) return null;
+    [a, fa] = [b, fb];
+    b = near * (1 + step);
+    fb = f(b);
+  }
+  for (let step = 0.002; fa <= 0; step *= 3) {
+    [b, fb] = [a, fa];
+    a = Math.max(0, near * (1 - step));
+    fa = f(a);
+  }
+  return { a, fa, b, fb };
+}
+
+const middle = ({ a, b, fa, fb }: Enclosure): number => (Math.abs(fa) < Math.abs(fb) ? a : b);
 
 /** λ above which some piece has buckled between held ends, and a first guess from the members' Euler loads. */
 function startingPoint(frame: Frame, pieces: readonly (readonly AxialPiece[])[]): { cap: number; guess: number } {
@@ -101,7 +149,7 @@ function trial(
 ): Trial {
   const { K, inner, pivots } = space;
   const data = memberData(frame);
-  const count: InnerCount = { negative: 0, logSize: 0 };
+  const count: InnerCount = { negative: 0, logSize: 0, size: 1 };
   const k = emptyMemberStiffness();
   K.fill(0);
   for (let i = 0; i < data.length; i++) {
@@ -110,24 +158,19 @@ function trial(
   }
   addSupports(K, t, frame);
   factor(K, t, diagonal, inner, pivots, 0);
-  for (let i = 0; i < 3 * t.size; i++) {
-    const pivot = pivots[i]!;
-    if (pivot < 0) count.negative++;
-    count.logSize += Math.log(Math.abs(pivot));
-  }
-  return { count: count.negative, logSize: count.logSize };
+  for (let i = 0; i < 3 * t.size; i++) pass(pivots[i]!, count);
+  return { count: count.negative, logSize: count.logSize + Math.log(count.size) };
 }
 
-/** Root of f in (a, b) where it changes sign: inverse quadratic where that is safe, else halving (Chandrupatla 1997). */
-function enclosed(f: (x: number) => number, a: number, fa: number, b: number, fb: number): number {
+/** Closes in on the root of f, where it changes sign: inverse quadratic where that is safe, else halving (Chandrupatla 1997). */
+function enclosed(f: Signed, { a, fa, b, fb }: Enclosure, within: number): Enclosure {
   let x1 = b;
   let f1 = fb;
   let x2 = a;
   let f2 = fa;
   let x3 = a;
   let f3 = fa;
-  let t = fa / (fa - fb);
-  t = 1 - t;
+  let t = fb / (fb - fa);
   for (let pass = 0; pass < 120; pass++) {
     const x = x1 + t * (x2 - x1);
     const fx = f(x);
@@ -143,9 +186,8 @@ function enclosed(f: (x: number) => number, a: number, fa: number, b: number, fb
     x1 = x;
     f1 = fx;
     const best = Math.abs(f1) < Math.abs(f2) ? x1 : x2;
-    const width = Math.abs(x2 - x1);
-    const tolerance = (0.5 * closeness * Math.abs(best)) / width;
-    if (tolerance > 0.5 || f1 === 0) return best;
+    const tolerance = (0.5 * within * Math.abs(best)) / Math.abs(x2 - x1);
+    if (tolerance > 0.5 || f1 === 0) break;
     const xi = (x1 - x2) / (x3 - x2);
     const phi = (f1 - f2) / (f3 - f2);
     if (phi * phi < xi && (1 - phi) * (1 - phi) < 1 - xi)
@@ -153,5 +195,5 @@ function enclosed(f: (x: number) => number, a: number, fa: number, b: number, fb
     else t = 0.5;
     t = Math.min(Math.max(t, tolerance), 1 - tolerance);
   }
-  return (x1 + x2) / 2;
+  return f1 > 0 ? { a: x1, fa: f1, b: x2, fb: f2 } : { a: x2, fa: f2, b: x1, fb: f1 };
 }
