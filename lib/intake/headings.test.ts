@@ -118,11 +118,19 @@ describe('units', () => {
     expect(lines(readSheets(bracketed))).toEqual([]);
   });
 
-  it('an unknown unit in the unit row makes it a row of data, told cell by cell', () => {
-    const sheets = sound();
+  it('an unknown unit in a unit row is told there, and stops the frames that fill the column', () => {
+    const sheets = withCells({ 'Nodes!C1': 'x' });
     sheets.Nodes.splice(1, 0, [null, null, 'furlong', 'm', null]);
-    expect(lines(readSheets(sheets))).toContain('error missing-id Nodes!A2 –');
+    expect(lines(readSheets(sheets))).toEqual(['error unknown-unit Nodes!C2 F1,F2']);
   });
+
+  it('a row with an id, or without a unit at all, is data', () => {
+    for (const row of [['F1', 'C', 'm', 'furlong', null], [null, null, 'furlong', 'league', null]]) {
+      const sheets = sound();
+      sheets.Nodes.splice(1, 0, row);
+      expect(lines(readSheets(sheets)).some((line) => /(not-a-number Nodes!C2|missing-id Nodes!A2)/.test(line))).toBe(true);
+    }
+  }); // prettier-ignore
 
   it('a US batch reads feet, kip, inches and psf where nothing else is said', () => {
     const sheets = withCells({

@@ -98,6 +98,19 @@ describe('what the whole batch lacks', () => {
     expect(good(rest)).toEqual([]);
   });
 
+  it('what leans on a sheet that is missing, or on a frame without nodes or members, does not say so again', () => {
+    const without = (name: string, more: TestSheets = {}): string[] => {
+      const { [name]: _, ...rest } = sound();
+      return lines(readSheets({ ...rest, ...more }));
+    };
+    expect(without('Nodes')).toEqual(['error missing-sheet Nodes!– –']);
+    expect(without('Members')).toEqual(['error missing-sheet Members!– –']);
+    const bare = sound();
+    bare.Nodes.length = 3;
+    bare.Frames = [['frame'], ['F1'], ['F2']];
+    expect(lines(readSheets(bare))).toEqual(['error unknown-node Frames!A3 F2']);
+  });
+
   it('says once that Supports are missing, not for every frame', () => {
     const { Supports: _, ...rest } = sound();
     expect(lines(readSheets(rest))).toEqual(['error missing-sheet Supports!– –']);

@@ -54,6 +54,8 @@ export class RowsByFrame {
     const frame = known.framesByKey.get(key);
     if (known.families.has(key)) add(this.ofFamily, key, { row, level: level.family });
     else if (frame) add(this.named, frame.index, { row, level: level.named });
+    // the sheet that would name the frames is missing, and has been told
+    else if (known.framesByKey.size === 0 && reader.problems.stopsAll) return;
     else reader.tell(row, 'frame', { code: 'unknown-node', message: say.unknownFrame(id) }, { ...forNobody, frame: id });
   }
 

@@ -19,7 +19,8 @@ function unitText(text: string): string {
 
 /**
  * The row if it is a unit row: every filled cell is a unit and at least one of them stands over numbers.
- * A row of ids such as `m`, `k` over text columns only is data.
+ * A row of ids such as `m`, `k` over text columns only is data. A row with a unit over numbers, no figure, and nothing
+ * under the headings of texts is meant as one too: a word in it that is no unit is told, and not passed over.
  */
 export function unitRowOf(
   row: RawRow,
@@ -27,16 +28,22 @@ export function unitRowOf(
   definition: SheetDefinition,
 ): RawRow | null {
   let overNumbers = false;
+  let allUnits = true;
+  let overTexts = false;
   for (const [index, cell] of row.cells.entries()) {
     if (!cell) continue;
     const text = unitText(cell.text);
-    if (cell.kind !== 'text' || /^[\d.,+−]/.test(text) || !parseUnit(text)) return null;
+    if (cell.kind !== 'text' || /^[\d.,+−]/.test(text)) return null;
+    const unit = parseUnit(text);
+    if (!unit) allUnits = false;
     const heading = headings.find((h) => h.index === index);
     if (!heading) continue;
     const open = heading.meaning.kind === 'unknown' && openEnded.has(definition.name);
-    if (open || (heading.meaning.kind === 'column' && definition.columns.get(heading.meaning.known))) overNumbers = true;
+    const numbers = open || (heading.meaning.kind === 'column' && definition.columns.get(heading.meaning.known) !== null);
+    if (numbers && unit) overNumbers = true;
+    if (!numbers && heading.meaning.kind === 'column' && !/^[-–—−]$/.test(text)) overTexts = true;
   }
-  return overNumbers ? row : null;
+  return overNumbers && (allUnits || !overTexts) ? row : null;
 }
 
 /** Finds a column's unit: its heading's, else the unit row's, else the batch's; tells an unknown one or one of the wrong kind. */

@@ -87,7 +87,8 @@ function memberOf(draft: Draft, row: Row): number | undefined {
   const id = reader.needId(row, 'member', draft.reading);
   if (id === undefined) return undefined;
   const index = draft.memberIndex.get(idKey(id));
-  if (index === undefined) {
+  // a frame without any members has been told so
+  if (index === undefined && draft.memberIndex.size > 0) {
     reader.tell(row, 'member', { code: 'unknown-member', message: say.unknownMember(id, draft.entry.id) }, draft.reading);
   }
   return index;

@@ -56,7 +56,8 @@ export function nodeOf(draft: Draft, row: Row, column: string): number | undefin
   const id = reader.needId(row, column, draft.reading);
   if (id === undefined) return undefined;
   const index = draft.nodeIndex.get(idKey(id));
-  if (index === undefined)
+  // a frame without any nodes has been told so
+  if (index === undefined && draft.nodeIndex.size > 0)
     reader.tell(row, column, { code: 'unknown-node', message: say.unknownNode(id, draft.entry.id) }, draft.reading);
   return index;
 }

@@ -70,6 +70,8 @@ export function readSupports(draft: Draft, rows: RowsByFrame, refused: ZerosAndO
   }
   function readSupport(node: number | undefined, row: Row, id: string): void {
     if (node === undefined) {
+      // a frame without any nodes has been told so
+      if (draft.nodeIndex.size === 0) return;
       reader.tell(row, 'node', { code: 'unknown-node', message: say.unknownNode(id, draft.entry.id) }, reading);
       return;
     }
