@@ -3,6 +3,7 @@ import { writeFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { chainAgainstBare } from './chain';
 import { profileChain } from './profile';
+import { queries } from './queries';
 import { twoThreadsAgainstOne } from './threads';
 
 /** What each key must reach. */
@@ -20,6 +21,7 @@ const must: Readonly<Record<string, { readonly limit: number; readonly atLeast?:
 const groups: readonly (readonly [string, () => Promise<Record<string, number>>])[] = [
   ['chain', () => chainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
   ['profile', async () => (await profileChain(), {})],
+  ['queries', () => queries(5)],
   ['threads', () => twoThreadsAgainstOne(5)],
 ];
 
