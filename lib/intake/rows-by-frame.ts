@@ -53,7 +53,11 @@ export class RowsByFrame {
     const key = idKey(id);
     const frame = known.framesByKey.get(key);
     if (known.families.has(key)) add(this.ofFamily, key, { row, level: level.family });
-    else if (frame) add(this.named, frame.index, { row, level: level.named });
+    else if (frame) {
+      add(this.named, frame.index, { row, level: level.named });
+      // the note on a merged frame cell concerns that frame
+      if (cell?.mergedFrom) reader.id(row, 'frame', { ...forNobody, frame: frame.id });
+    }
     // the sheet that would name the frames is missing, and has been told
     else if (known.framesByKey.size === 0 && reader.problems.stopsAll) return;
     else reader.tell(row, 'frame', { code: 'unknown-node', message: say.unknownFrame(id) }, { ...forNobody, frame: id });

@@ -10,9 +10,9 @@ export interface Expression {
   readonly names: readonly string[];
 }
 
-/** True where a cell's text is an expression in braces. */
+/** True where a cell's text is, or was to be, an expression in braces. */
 export function isExpression(text: string): boolean {
-  return text.charCodeAt(0) === 123 ? text.endsWith('}') || /^\{.*\}\s*$/s.test(text) : /^\s+\{.*\}\s*$/s.test(text);
+  return text.charCodeAt(0) === 123 || text.trimStart().charCodeAt(0) === 123;
 }
 
 /** Reads expressions, each text once: a template of a family is read for every variant. */
@@ -29,9 +29,10 @@ export class Expressions {
 }
 
 function compile(text: string): Expression {
-  const inner = text.trim().slice(1, -1);
+  const whole = text.trim();
   try {
-    const node = parse(inner);
+    if (!whole.endsWith('}')) throw new ExpressionFault('its closing brace must end the cell');
+    const node = parse(whole.slice(1, -1));
     return { text, node, fault: null, names: [...new Set(namesIn(node))] };
   } catch (fault) {
     if (!(fault instanceof ExpressionFault)) throw fault;

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it, test } from 'vitest';
 import { evaluate, type Value } from '@/lib/intake/expressions/evaluate';
-import { isExpression } from '@/lib/intake/expressions/expression';
+import { Expressions, isExpression } from '@/lib/intake/expressions/expression';
 import { type Node, parse } from '@/lib/intake/expressions/parse';
 import { ExpressionFault } from '@/lib/intake/expressions/tokens';
 
@@ -103,16 +103,10 @@ describe('expressions', () => {
     expect.fail('a division by zero went through');
   });
 
-  it('only a whole cell in braces is one', () => {
-    expect(['{span}', ' {span} ', '{a}{b}', 'B{span}', '{span', 'span'].map(isExpression)).toEqual([
-      true,
-      true,
-      true,
-      false,
-      false,
-      false,
-    ]);
-  });
+  it('only a cell that begins with a brace is one, and its closing brace must end it', () => {
+    expect(['{span}', ' {span} ', '{a}{b}', '{span', 'B{span}', 'span'].map(isExpression)).toEqual([true, true, true, true, false, false]);
+    for (const text of ['{span', '{span} mm']) expect(new Expressions().read(text).fault).toBe('its closing brace must end the cell');
+  }); // prettier-ignore
 });
 
 /** A random tree of arithmetic with the value that JavaScript gives the same thing. */

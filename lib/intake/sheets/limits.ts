@@ -121,6 +121,8 @@ export class Limits {
 
   /** Notes that a row is not for this frame; if it is for none, that is told when every frame is read. */
   private fitsNot(row: Row, column: 'applies to' | 'to node', draft: Draft): [] {
+    // what it names may be the very row of this frame that is wrong, and told
+    if (draft.shapeTrouble) this.matched.add(row);
     const before = this.unmatched.get(row);
     if (!before) this.unmatched.set(row, { column, frames: [draft.entry.id] });
     else {
