@@ -1,5 +1,5 @@
 import { endianness } from 'node:os';
-import { deflateRawSync, inflateRawSync } from 'node:zlib';
+import { pack, unpack } from '@/db/pack';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 
@@ -55,42 +55,7 @@ export type FrameModel = Omit<Frame, 'id' | 'title' | 'group' | 'count' | 'note'
 
 export function packModel(frame: Frame): Buffer {
   const { id: _id, title: _title, group: _group, count: _count, note: _note, ...model } = frame;
-  return packJson(model);
+  return pack(model);
 }
 
-export const unpackModel = (bytes: Uint8Array): FrameModel => unpackJson(bytes) as FrameModel;
-
-/** JSON, deflated; numbers that JSON has no word for come back as they were. */
-export function packJson(value: unknown): Buffer {
-  // asked for each value, a replacer costs more than all the rest: it is only used where there is something to replace
-  const text = hasNotFinite(value)
-    ? JSON.stringify(value, (_, field: unknown) =>
-        typeof field === 'number' && !Number.isFinite(field) ? { notFinite: String(field) } : field,
-      )
-    : JSON.stringify(value);
-  return deflateRawSync(text, fast);
-}
-
-/** Texts of some 10 kB: a small window, whose room costs less to get ready than the text to deflate. */
-const fast = { level: 1, windowBits: 13, memLevel: 6, chunkSize: 32_768 };
-
-function hasNotFinite(value: unknown): boolean {
-  if (typeof value === 'number') return !Number.isFinite(value);
-  if (typeof value !== 'object' || value === null) return false;
-  if (Array.isArray(value)) {
-    for (let i = 0; i < value.length; i++) if (hasNotFinite(value[i])) return true;
-    return false;
-  }
-  for (const key in value) if (hasNotFinite((value as Record<string, unknown>)[key])) return true;
-  return false;
-}
-
-export function unpackJson(bytes: Uint8Array): unknown {
-  const text = inflateRawSync(bytes, wide).toString();
-  if (!text.includes('"notFinite"')) return JSON.parse(text);
-  return JSON.parse(text, (_, field: unknown) =>
-    typeof field === 'object' && field !== null && 'notFinite' in field ? Number(field.notFinite) : field,
-  );
-}
-
-const wide = { chunkSize: 65_536 };
+export const unpackModel = (bytes: Uint8Array): FrameModel => unpack(bytes) as FrameModel;

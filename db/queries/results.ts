@@ -1,5 +1,6 @@
 import { instant } from '@/db/clock';
-import { packJson, packState, unpackJson, unpackModel, unpackState } from '@/db/encode';
+import { packState, unpackModel, unpackState } from '@/db/encode';
+import { pack, unpack } from '@/db/pack';
 import { ListWriter, type Solved, summaryOf } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { inShortTransactions } from '@/db/short-transactions';
@@ -121,7 +122,7 @@ function resultWriter(raw: RawDatabase, lists: ListWriter, person: number | null
 
 function packEvaluation({ evaluation, members }: Solved): Buffer {
   const { states: _states, allChecks: _all, ...rest } = evaluation;
-  return packJson({ evaluation: rest, members } satisfies StoredEvaluation);
+  return pack({ evaluation: rest, members } satisfies StoredEvaluation);
 }
 
 export interface NamedVersion {
@@ -167,7 +168,7 @@ export function statesOnly(states: readonly StoredState[]): FrameEvaluation {
 }
 
 export function evaluationOf(stored: Buffer, states: readonly StoredState[]): Omit<Solved, 'frame'> {
-  const { evaluation, members } = unpackJson(stored) as StoredEvaluation;
+  const { evaluation, members } = unpack(stored) as StoredEvaluation;
   return { evaluation: { ...evaluation, states: states.map(stateOf), allChecks: null }, members };
 }
 

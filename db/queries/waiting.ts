@@ -1,6 +1,6 @@
 /** What a run still has to do, in a form that costs the server little: ids here, models only where they are solved. */
 import { frameOf, type NamedVersion, type WaitingFrame } from '@/db/queries/results';
-import { unpackJson } from '@/db/encode';
+import { unpack } from '@/db/pack';
 import type { RawDatabase } from '@/db/open';
 import type { InputRow } from '@/lib/intake/intake';
 import type { FrameEvaluation } from '@/lib/results/result';
@@ -52,7 +52,7 @@ export function listFailures(raw: RawDatabase, revision: number): FrameFailure[]
     )
     .all(revision)
     .flatMap(({ frame_id, evaluation }) => {
-      const { failure } = (unpackJson(evaluation) as { evaluation: Pick<FrameEvaluation, 'failure'> }).evaluation;
+      const { failure } = (unpack(evaluation) as { evaluation: Pick<FrameEvaluation, 'failure'> }).evaluation;
       return failure ? [{ frame: frame_id, failure }] : [];
     });
 }

@@ -1,3 +1,5 @@
+import { createHash } from 'node:crypto';
+import { engineVersion } from '@/lib/analysis/engine-version';
 import { describe, expect, it } from 'vitest';
 import { defaultSettings } from '@/lib/model/settings';
 import { canonicalJson, frameHash } from '@/lib/results/frame-hash';
@@ -15,6 +17,14 @@ describe('the content address of a frame', () => {
   it('does not depend on the order in which the model was put together', () => {
     const turned = Object.fromEntries(Object.entries(frame).reverse()) as unknown as typeof frame;
     expect(frameHash(turned, defaultSettings)).toBe(address);
+  });
+
+  it('is the SHA-256 of the canonical JSON of engine, model and settings', () => {
+    const { id: _id, title: _title, group: _group, count: _count, note: _note, ...model } = frame;
+    const { title: _heading, material: _material, ...settings } = defaultSettings;
+    const text = canonicalJson({ model, settings, engine: engineVersion });
+    expect(address).toBe(createHash('sha256').update(text).digest('hex'));
+    expect(frameHash({ ...frame }, { ...defaultSettings })).toBe(address);
   });
 
   it.each([
@@ -37,6 +47,11 @@ describe('the content address of a frame', () => {
 });
 
 describe('canonical JSON', () => {
+  it('takes keys for what they are, line ends included', () => {
+    expect(canonicalJson({ a: 1, 'b\nc': 2 })).toBe('{"a":1,"b\\nc":2}');
+    expect(canonicalJson({ 'a\nb': 1, c: 2 })).toBe('{"a\\nb":1,"c":2}');
+  });
+
   it('orders keys, leaves out what is undefined and reads −0 as 0', () => {
     expect(canonicalJson({ b: [-0, 1.5, null], a: { d: '"x"', c: undefined }, '"': {} })).toBe(
       '{"\\"":{},"a":{"d":"\\"x\\""},"b":[0,1.5,null]}',
