@@ -120,7 +120,7 @@ describe('units', () => {
 
   it('an unknown unit in a unit row is told there, and stops the frames that fill the column', () => {
     const sheets = withCells({ 'Nodes!C1': 'x' });
-    sheets.Nodes.splice(1, 0, [null, null, 'furlong', 'm', null]);
+    sheets.Nodes?.splice(1, 0, [null, null, 'furlong', 'm', null]);
     expect(lines(readSheets(sheets))).toEqual(['error unknown-unit Nodes!C2 F1,F2']);
   });
 

@@ -1,6 +1,7 @@
 import { ExpressionFault } from '@/lib/intake/expressions/tokens';
 import { evaluate, type Parameters, type Value } from '@/lib/intake/expressions/evaluate';
 import { Expressions, isExpression } from '@/lib/intake/expressions/expression';
+import { looksLikeDate } from '@/lib/intake/date-text';
 import type { RawCell } from '@/lib/intake/files/raw-sheet';
 import { idShown, numberAsId } from '@/lib/intake/ids';
 import type { Fault, Place, ProblemList } from '@/lib/intake/problem-list';
@@ -156,6 +157,7 @@ export class Reader {
     if (cell.text.trim() === '') return null;
     const found = cell.kind === 'text' ? readNumber(cell.text, { decimalMark: row.part.raw.decimalMark }) : null;
     if (!found || found.kind === 'not-a-number') {
+      if (looksLikeDate(cell.text)) return tell({ code: 'date-for-number', message: say.dateForNumber(cell.text, column.text) });
       return tell({ code: 'not-a-number', message: say.notANumber(cell.text, column.text, quantityWords[quantity]) });
     }
     if (found.kind === 'ambiguous') return tell({ code: 'not-a-number', message: say.ambiguousComma(cell.text) });

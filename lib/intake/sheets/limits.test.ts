@@ -108,6 +108,14 @@ describe('limits', () => {
       'error conflicting-row Limits!A3 F1,F2',
     ],
     [
+      'a displacement without a direction beside its resultant',
+      [
+        { 'applies to': 'C', measure: 'displacement', 'absolute [mm]': 10 },
+        { 'applies to': 'C', measure: 'displacement', 'absolute [mm]': 20, direction: 'resultant' },
+      ],
+      'error conflicting-row Limits!A3 F2',
+    ],
+    [
       'equals that agree',
       [
         { 'applies to': 'beam', measure: 'deflection', ratio: 200 },

@@ -236,6 +236,8 @@ function standing(draft: Draft, limit: Limit): string {
   let thing = limit.name;
   // a piece of a span and the span are one subject
   if (limit.target === 'member') thing = draft.members.find((m) => m.id === limit.name)?.span ?? limit.name;
-  const parts = [ranks[limit.target], thing, limit.measure, limit.direction ?? '', limit.toNode ?? '', limit.combination ?? '', limit.namedFrame]; // prettier-ignore
+  // only a displacement has a direction, and without one it is the resultant
+  const direction = limit.measure === 'displacement' ? (limit.direction ?? 'resultant') : '';
+  const parts = [ranks[limit.target], thing, limit.measure, direction, limit.toNode ?? '', limit.combination ?? '', limit.namedFrame]; // prettier-ignore
   return parts.join('|').toLowerCase();
 }
