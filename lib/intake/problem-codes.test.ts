@@ -61,6 +61,8 @@ const cases: Case[] = [
   ['a unit typed in the cell', { 'Nodes!C3': '6000 mm' }, ['note text-number Nodes!C3 F1'], both],
   ['a unit of the wrong kind in the cell', { 'Nodes!C3': '6 kN' }, ['error wrong-unit-kind Nodes!C3 F1'], F2],
   ['an unknown unit in the cell', { 'Nodes!C3': '6 furlongs' }, ['error unknown-unit Nodes!C3 F1'], F2],
+  ['a node load without a figure', { 'Node loads+': ['F2', 'wind', 'C', null, null, null] }, ['note default-used Node loads!D3 F2'], both],
+  ['node loads without a column of figures', { 'Node loads!D1': 'Px', 'Node loads!E1': 'Py', 'Node loads!F1': 'Pm' }, ['error missing-column Node loads!Fx or Fy or Mz F2', 'note column-ignored Node loads!D1 –', 'note column-ignored Node loads!E1 –', 'note column-ignored Node loads!F1 –'], F1],
   ['a merged cell', { 'Nodes!A3': { merged: 'A2', value: 'F1' } }, ['note derived Nodes!A3 F1'], both],
   ['a limit on a node whose row is wrong', { 'Nodes!C3': 'six', 'Limits+': ['applies to', 'measure', 'absolute'], 'Limits+2': ['B', 'displacement', 5], 'Nodes!B5': 'Q', 'Members!D3': 'Q', 'Members!C4': 'Q', 'Node loads!C2': 'Q' }, ['error not-a-number Nodes!C3 F1'], F2],
   ['a row of totals', { 'Members+': ['Total', null, 4] }, ['error unknown-word Members!A6 –'], both],

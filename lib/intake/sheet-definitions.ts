@@ -55,14 +55,14 @@ const definitions: readonly SheetDefinition[] = [
   define('Load cases', ['case'], {
     case: null, kind: null, 'self weight': 'number', alternative: null, reversible: null, note: null, frame: null,
   }), // prettier-ignore
-  define('Node loads', ['frame', 'case', 'node'], {
+  define('Node loads', ['frame', 'case', 'node', ['Fx', 'Fy', 'Mz']], {
     frame: null, case: null, node: null, Fx: 'force', Fy: 'force', Mz: 'moment',
   }), // prettier-ignore
   define('Member loads', ['frame', 'case', 'member', 'load'], {
     frame: null, case: null, member: null, load: null, axes: null, direction: null, value: 'load', 'end value': 'load',
     from: 'length', to: 'length', width: 'length', dT: 'temperature', 'dT across': 'temperature',
   }), // prettier-ignore
-  define('Settlements', ['frame', 'case', 'node'], {
+  define('Settlements', ['frame', 'case', 'node', ['dx', 'dy', 'rz']], {
     frame: null, case: null, node: null, dx: 'displacement', dy: 'displacement', rz: 'rotation',
   }), // prettier-ignore
   define('Combinations', ['combination', 'purpose'], {

@@ -202,6 +202,7 @@ export const momentOnPins = (node: string): string =>
   `every member end at node ${node} is pinned, so nothing there can take a moment. Join a member rigidly, or move the moment`;
 export const mustBeBlank = (column: string, load: string): string =>
   `${column} has no meaning for a ${load} load. Clear the cell`;
+export const loadsNothing = (): string => 'no force or moment stands in this row, so it loads nothing';
 export const projectedIsDistributed = (): string => 'projected is for distributed loads. Write global or local';
 export const pointNeedsFrom = (load: string): string => `a ${load} load needs from: its distance from the member's start`;
 export const fromAfterTo = (equal: boolean): string =>

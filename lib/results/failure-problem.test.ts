@@ -70,6 +70,19 @@ describe('what the analysis finds wrong', () => {
     expect(problems[0]).toMatchObject({ code: 'mechanism', sheet: null, cell: null, frames: ['F9'] });
   });
 
+  it('stands at a row for all frames where the frame has none of its own, and at Frames where no other row names it', () => {
+    const forAll = { ...intake, rows: [...intake.rows, row('Supports', 6, 'B', '*')] };
+    const problems = problemsWithFailures(forAll, [
+      { frame: 'F9', failure: mechanism },
+      { frame: 'F8', failure: mechanism },
+      { frame: 'F1', failure: mechanism },
+    ]);
+    const found = problems.filter((p) => p.code === 'mechanism');
+    expect(found.map((p) => [p.cell, p.frames])).toEqual([['B4', ['F1']], ['B6', ['F9', 'F8']]]);
+    const listed = { ...intake, sheets: [...intake.sheets, sheet('Frames', ['Frame'])], rows: [row('Frames', 3, 'F9')] };
+    expect(problemsWithFailures(listed, [{ frame: 'F9', failure: mechanism }]).at(-1)).toMatchObject({ sheet: 'Frames', cell: 'A3' });
+  }); // prettier-ignore
+
   it('names a cell once, with every frame it stops', () => {
     const failures = [{ frame: 'F1', failure: mechanism }, { frame: 'f1', failure: mechanism }]; // prettier-ignore
     expect(problemsWithFailures(intake, failures).filter((p) => p.code === 'mechanism')).toMatchObject([

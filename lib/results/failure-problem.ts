@@ -81,9 +81,11 @@ interface Place {
 }
 
 /** Sheets where a frame that moves freely or hangs apart can be mended. */
-const mending: ReadonlySet<string> = new Set(['supports', 'members', 'nodes', 'variants']);
+const mending: ReadonlySet<string> = new Set(['supports', 'members', 'nodes', 'variants', 'frames']);
+/** In a frame column: every frame. */
+const everyFrame = '*';
 
-/** Finds a frame's first row on the sheets that can mend it: Supports, else Members or Nodes, else Variants. */
+/** Finds a frame's first row on the sheets that can mend it: Supports, else Members or Nodes, else Variants, else Frames. */
 class RowFinder {
   private readonly sheets: readonly { sheet: SheetRead; rows: Map<string, RowAt[]> }[];
 
@@ -95,7 +97,7 @@ class RowFinder {
       for (const { sheet, rows } of wanted) {
         if (sheet.name !== name || (sheet.headingRow !== null && row <= sheet.headingRow)) continue;
         const id = idKey(cells[columnOf(sheet, 'frame')] ?? null);
-        if (id === null || !frames.has(id)) continue;
+        if (id === null || (id !== everyFrame && !frames.has(id))) continue;
         const list = rows.get(id);
         if (list) list.push({ row, cells });
         else rows.set(id, [{ row, cells }]);
@@ -104,11 +106,12 @@ class RowFinder {
 
   find(frame: string, failure: Failure): Place | null {
     const nodeColumns = ['node', 'start', 'end'];
-    const kinds = failure.code === 'mechanism' ? ['supports', 'variants', 'nodes'] : ['members', 'nodes', 'variants'];
+    const kinds =
+      failure.code === 'mechanism' ? ['supports', 'variants', 'nodes', 'frames'] : ['members', 'nodes', 'variants', 'frames'];
     for (const kind of kinds)
       for (const { sheet, rows } of this.sheets) {
         if (sheet.known?.toLowerCase() !== kind) continue;
-        const own = rows.get(idKey(frame) ?? '') ?? [];
+        const own = rows.get(idKey(frame) ?? '') ?? (kind === 'frames' ? [] : (rows.get(everyFrame) ?? []));
         const named =
           kind === 'members' || kind === 'nodes' ? own.find((row) => this.names(sheet, row, failure, nodeColumns)) : own[0];
         const row = named ?? own[0];

@@ -72,6 +72,10 @@ export function readNodeLoads(draft: Draft, rows: RowsByFrame, withoutRotation: 
     const Mz = reader.number(row, 'Mz', draft.reading);
     if (loadCase === undefined || node === undefined || node < 0) continue;
     if (Fx === undefined || Fy === undefined || Mz === undefined) continue;
+    if (Fx === null && Fy === null && Mz === null) {
+      const at = (['Fx', 'Fy', 'Mz'] as const).find((name) => row.part.byName.has(name)) ?? 'Fx';
+      reader.tell(row, at, { code: 'default-used', message: say.loadsNothing() }, draft.reading);
+    }
     if (Mz && withoutRotation.has(node)) {
       const message = say.momentOnPins(draft.nodes[node]?.id ?? '');
       reader.tell(row, 'Mz', { code: 'mechanism', message }, draft.reading);
