@@ -21,7 +21,7 @@ import {
 import { tellFailures } from './threads/failures';
 import { solveChunk, type SolveTask } from './threads/solve';
 import { insertIntake } from '@/db/queries/intake';
-import type { ReadTask } from './threads/read';
+import { recordUnread, type ReadTask } from './threads/read';
 
 let database: TestDatabase;
 let logged: string[] = [];
@@ -217,10 +217,10 @@ describe('readings', () => {
 
   it.each([
     ['memory', Object.assign(new Error('heap'), { code: 'ERR_WORKER_OUT_OF_MEMORY' }), 'too-large', /more than 400 MB of memory/],
-    ['time', Object.assign(new Error('late'), { name: 'AbortError' }), 'unreadable', /given up after 120 s/],
+    ['time', Object.assign(new Error('late'), { name: 'AbortError' }), 'unreadable', /given up after 150 s/],
   ])('that run out of %s end as read, with a problem that says so', async (_what, error, code, message) => {
     const of = await bring('North');
-    const queue = queueOf(pretendPools({ readRevision: () => Promise.reject(error) }));
+    const queue = queueOf(pretendPools({ readRevision: () => Promise.reject(error), recordUnread }));
     await askForReading(queue, database, of);
     await queue.idle();
     expect(await stateOf(of)).toBe('read');

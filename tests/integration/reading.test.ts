@@ -7,7 +7,7 @@ import { listProblems } from '@/db/queries/problems';
 import { findRevisionById } from '@/db/queries/revisions';
 import { insertUpload } from '@/db/queries/uploads';
 import { createPools, type Pools } from '@/worker/pools';
-import { readOneRevision } from '@/worker/reading';
+import { readOneRevision, type ReadingLimits } from '@/worker/reading';
 import { readingRevision, testDatabase, testOffice, type TestDatabase, type TestOffice } from '@/worker/test-office';
 import { sha256 } from './sha256';
 
@@ -27,7 +27,7 @@ afterAll(async () => {
 });
 
 /** Brings a sample in and has it read in a thread. */
-async function read(name: string, deadline_s?: number) {
+async function read(name: string, limits?: ReadingLimits) {
   const { revision, person } = await readingRevision(database, office);
   const bytes = readFileSync(join(root, 'samples', name));
   const upload = { revision, name, size: bytes.length, sha256: sha256(bytes), bytes, person };
@@ -36,7 +36,7 @@ async function read(name: string, deadline_s?: number) {
   const job = (await findLatestJob(database.db, office.office, revision, 'read'))!;
   const faults: unknown[] = [];
   const log = (_: string, facts: Readonly<Record<string, unknown>>): number => faults.push(facts['error']);
-  await readOneRevision({ database, file: database.file, pools, log }, job, deadline_s);
+  await readOneRevision({ database, file: database.file, pools, log }, job, limits);
   return {
     faults,
     revision: await findRevisionById(database.db, office.office, revision),
@@ -46,11 +46,20 @@ async function read(name: string, deadline_s?: number) {
 }
 
 describe('reading in a thread', () => {
-  it('is given up at its deadline, with a problem that says so, and the next file is read', async () => {
-    const late = await read('portal-sheds-1000.xlsx', 0.15);
+  it('stops itself at its deadline, with a problem that names it', async () => {
+    const late = await read('portal-sheds-1000.xlsx', { deadline_s: 0.001, grace_s: 60 });
+    expect(late.faults).toEqual([]);
+    expect(late.revision).toMatchObject({ state: 'read', frames: 0 });
+    expect(late.problems.filter(({ severity }) => severity === 'error')).toMatchObject([{ code: 'too-large', stopsAll: true }]);
+    expect(late.problems[0]?.message).toContain('given up after 0.001 s');
+    expect(late.job?.state).toBe('done');
+  });
+
+  it('is ended where it does not stop itself, with a problem that says so, and the next file is read', async () => {
+    const late = await read('portal-sheds-1000.xlsx', { deadline_s: 0.1, grace_s: 0.05 });
     expect(late.faults).toEqual([]);
     expect(late.revision).toMatchObject({ state: 'read', frames: 0, errors: 1 });
-    expect(late.problems).toMatchObject([{ code: 'unreadable', severity: 'error', stopsAll: true }]);
+    expect(late.problems).toMatchObject([{ severity: 'error', stopsAll: true }]);
     expect(late.job?.state).toBe('done');
 
     const next = await read('pipe-rack-12.xlsx');

@@ -1,7 +1,8 @@
 /** In a thread of its own with bounded memory: a revision's uploaded files → what they say, stored. */
 import { insertIntake, type IntakeStored } from '@/db/queries/intake';
-import { listUploadedFiles } from '@/db/queries/uploads';
+import { listUploadedFiles, listUploads } from '@/db/queries/uploads';
 import { readIntake } from '@/lib/intake/read-intake';
+import { unreadIntake } from '../unread-intake';
 import { openOnce } from './open-once';
 
 export interface ReadTask {
@@ -9,11 +10,27 @@ export interface ReadTask {
   readonly file: string;
   readonly office: number;
   readonly revision: number;
+  /** Reading of the files' bytes stops itself after this time, with a problem that says so. */
+  readonly deadline_s: number;
 }
 
 export async function readRevision(task: ReadTask): Promise<IntakeStored> {
+  const until = performance.now() + 1000 * task.deadline_s;
   const { db, raw } = openOnce(task.file);
   const files = await listUploadedFiles(db, task.office, task.revision);
-  const intake = await readIntake(files);
+  const intake = await readIntake(files, {
+    shouldStop: () => performance.now() > until,
+    stopsAfter: `${task.deadline_s} s`,
+  });
   return insertIntake(raw, task.office, task.revision, intake);
+}
+
+export interface UnreadTask extends Omit<ReadTask, 'deadline_s'> {
+  readonly why: Parameters<typeof unreadIntake>[1];
+}
+
+/** Records that a reading was given up; takes away, beside the pages, what it had stored. */
+export async function recordUnread({ file, office, revision, why }: UnreadTask): Promise<IntakeStored> {
+  const { db, raw } = openOnce(file);
+  return insertIntake(raw, office, revision, unreadIntake(await listUploads(db, office, revision), why));
 }
