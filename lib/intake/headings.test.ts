@@ -39,6 +39,15 @@ describe('the heading row', () => {
     expect(lines(readSheets(sheets))).toEqual([]);
   });
 
+  it('a column without one is told once, if a row of data has something in it', () => {
+    const sheets = withCells({
+      'Members!H3': 'see drawing',
+      'Members!H4': 3,
+      'Nodes+': [null, null, null, null, null, 'beside'],
+    });
+    expect(lines(readSheets(sheets))).toEqual(['note column-ignored Members!H1 –']);
+  });
+
   it('two columns with one heading are refused', () => {
     const sheets = withCells({ 'Members!G1': 'Section', 'Members!G2': 'IPE 200' });
     expect(lines(readSheets(sheets))).toEqual(['error conflicting-row Members!G1 –']);

@@ -1,3 +1,4 @@
+import { cellAddress } from '@/lib/intake/files/cell-address';
 import type { RawCell, RawPart, RawRow, RawSheet } from '@/lib/intake/files/raw-sheet';
 import { type HeadingMeaning, type HeadingText, meaningOf, splitHeading } from '@/lib/intake/headings';
 import type { Entry, ProblemList } from '@/lib/intake/problem-list';
@@ -55,6 +56,7 @@ function readPart(raw: RawPart, definition: SheetDefinition, system: System, pro
     else problems.add(headingPlace(part, column), { code: 'conflicting-row', message: say.columnTwice(column.known, first.text), stopsAll: true }, null); // prettier-ignore
   }
   const dataRows = dataRowsOf(part, columns, unitRow ? after.slice(1) : after, problems);
+  tellUnheaded(part, columns, dataRows, problems);
   return { ...part, columns, byName, faulty: columns.filter((c) => c.known === null && c.problem), dataRows };
 }
 
@@ -146,6 +148,20 @@ function dataRowsOf(part: Part, columns: readonly Column[], rows: readonly RawRo
     }
     return true;
   });
+}
+
+/** Tells columns with something in data rows and no heading above, once each. */
+function tellUnheaded(part: Part, columns: readonly Column[], rows: readonly RawRow[], problems: ProblemList): void {
+  const known = new Set(columns.map((column) => column.index));
+  for (const { cells } of rows) {
+    for (let index = 0; index < cells.length; index += 1) {
+      if (!cells[index] || known.has(index)) continue;
+      known.add(index);
+      const letters = cellAddress(1, index).replace(/\d+$/, '');
+      const place = { ...headingPlace(part, { index, text: '' }), heading: null, found: null };
+      problems.add(place, { code: 'column-ignored', message: say.columnUnheaded(letters) }, null);
+    }
+  }
 }
 
 function isComment(row: RawRow, firstColumn: number): boolean {

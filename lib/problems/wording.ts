@@ -24,6 +24,7 @@ export const missingColumn = (names: readonly string[], sheet: string): string =
   `${sheet} needs a column headed ${list(names)}. Add it, or name the column so`;
 export const columnTwice = (known: string, first: string): string =>
   `two columns are headed ${known} (the other is “${first}”). Keep one`;
+export const columnUnheaded = (letters: string): string => `column ${letters} has no heading, so what stands in it is not read`;
 export const columnIgnored = (text: string, sheet: string): string =>
   `“${text}” is no column of ${sheet}, so what stands below it is not read`;
 export const nearMissColumn = (text: string, near: string): string =>
