@@ -4,6 +4,7 @@ import { resolve } from 'node:path';
 import { chainAgainstBare } from './chain';
 import { profileChain } from './profile';
 import { queries } from './queries';
+import { serverUnderLoad } from './server';
 import { twoThreadsAgainstOne } from './threads';
 
 /** What each key must reach. */
@@ -23,6 +24,7 @@ const groups: readonly (readonly [string, () => Promise<Record<string, number>>]
   ['profile', async () => (await profileChain(), {})],
   ['queries', () => queries(5)],
   ['threads', () => twoThreadsAgainstOne(5)],
+  ['server', () => serverUnderLoad(Number(process.env['BENCH_FRAMES'] ?? 20_000))],
 ];
 
 /** @param words `--json FILE` writes the figures as one object; other words name the groups to measure */
