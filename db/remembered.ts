@@ -1,7 +1,7 @@
 import type { RawDatabase } from '@/db/open';
 
 /** How many answers of each sort are kept. Orders and frames are long, counts a few words. */
-const most = { count: 2000, frames: 20, order: 8, summary: 4 } as const;
+const most = { count: 2000, frames: 20, order: 8, summary: 4, certificate: 20 } as const;
 
 const kept = new WeakMap<RawDatabase, Map<keyof typeof most, Map<string, unknown>>>();
 

@@ -23,7 +23,9 @@ export function countRows(raw: RawDatabase, revision: number, stamp: number, vie
 
 /** Rows that fit one filter by values alone; all of the table where that isn't known without counting them. */
 export function countOf(raw: RawDatabase, revision: number, view: View, filter: ByValues, otherwise: number): number {
-  return countByTally(raw, revision, view, { byValues: [filter], ranges: [], contains: [], frames: null }) ?? otherwise;
+  return (
+    countByTally(raw, revision, view, { byValues: [filter], ranges: [], contains: [], frames: null, picked: '' }) ?? otherwise
+  );
 }
 
 function countByTally(raw: RawDatabase, revision: number, view: View, filters: ReadFilters): number | null {

@@ -34,6 +34,7 @@ export function fetchRows(raw: RawDatabase, { revision, view, plan }: Fetched, p
     for (const { sql, values } of queriesOf(view, revision, turned, lead, page)) {
       if (rows.length < page.limit) rows.push(...statement<Read>(raw, sql).all(...values));
     }
+    if (plan.keysFirst) rows.sort(comparison(view, turned.order));
     return rows;
   });
   if (lists.length === 1) return lists[0]!.slice(0, page.limit);

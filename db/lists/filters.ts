@@ -1,5 +1,6 @@
 import { noneHigh, noneLow } from '@/db/absent';
 import { columnOf, listTables, parameterOf } from '@/db/lists/columns';
+import { pickedFrames } from '@/db/lists/picked';
 import type { RawDatabase } from '@/db/open';
 import { remembered } from '@/db/remembered';
 import { statement } from '@/db/statements';
@@ -26,6 +27,8 @@ export interface ReadFilters {
   readonly contains: readonly { readonly column: string; readonly condition: Condition }[];
   /** Frames that the filters on frames and on their parameters leave, in sheet order; null = all. */
   readonly frames: readonly number[] | null;
+  /** SQL that gives these frames; '' where all are left. */
+  readonly picked: string;
 }
 
 /** @throws {RangeError} for a filter on a column that does not offer one */
@@ -34,11 +37,15 @@ export function readFilters(raw: RawDatabase, revision: number, stamp: number, v
   const ranges: { column: string; condition: Condition }[] = [];
   const contains: { column: string; condition: Condition }[] = [];
   let frames: readonly number[] | null = null;
+  const names: string[] = [];
   for (const filter of view.filters) {
     const { column } = filter;
     if (parameterOf(column) !== null || (column === 'frame' && view.table !== 'problems')) {
       const found = framesOf(raw, revision, stamp, filter);
-      frames = frames === null ? found : intersection(frames, found);
+      const before: readonly number[] | null = frames;
+      names.push(JSON.stringify(filter));
+      const key = `${revision} ${stamp} ${names.join(' ')}`;
+      frames = before === null ? found : remembered(raw, 'frames', key, () => intersection(before, found));
       continue;
     }
     if (!tables[view.table].some((one) => one.key === column && one.filter)) {
@@ -50,7 +57,7 @@ export function readFilters(raw: RawDatabase, revision: number, stamp: number, v
     } else if (filter.op === 'range') ranges.push({ column, condition: range(sql, filter.min, filter.max) });
     else contains.push({ column, condition: { sql: `${sql} like ? escape '\\'`, values: [like(filter.text)] } });
   }
-  return { byValues, ranges, contains, frames };
+  return { byValues, ranges, contains, frames, picked: frames ? pickedFrames(raw, frames) : '' };
 }
 
 /** Every filter as a condition that no index is chosen for (a unary + before the column). */
@@ -65,10 +72,7 @@ export function conditionsOf(filters: ReadFilters, view: View, but: ByValues | n
     list.push({ sql: condition.sql.replaceAll(columnOf(view.table, column).sql, (sql) => held + sql), values: condition.values });
   }
   for (const one of filters.contains) list.push(one.condition);
-  if (filters.frames) {
-    const values = [JSON.stringify(filters.frames)];
-    list.push({ sql: `+${listTables[view.table].frame} in (select value from json_each(?))`, values });
-  }
+  if (filters.frames) list.push({ sql: `+${listTables[view.table].frame} in (${filters.picked})`, values: [] });
   return list;
 }
 

@@ -25,6 +25,11 @@ export interface Plan {
   readonly conditions: readonly Condition[];
   /** False: what leads there is sorted for every page. */
   readonly ordered: boolean;
+  /**
+   * Rows are passed by for their frame, which the index holds: keys are found in it alone, and rows fetched of those on
+   * the page only, in no order that is warranted.
+   */
+  readonly keysFirst: boolean;
 }
 
 /** More rows than this are not asked for at once by a page. */
@@ -85,7 +90,14 @@ export function planOf(view: View, filters: ReadFilters, sizes: Sizes, limit: nu
     way.ordered ? Math.min(way.rows, (way.rows / Math.max(sizes.matching, 1)) * limit) + way.leads.length : 1.5 * way.rows + 10;
   const best = ways.reduce((a, b) => (cost(b) < cost(a) ? b : a));
   const conditions = conditionsOf(filters, view, best.filter);
-  return { order, leads: best.leads, conditions, ordered: best.ordered && best.leads.every((lead) => lead.way !== 'peak') };
+  const keysFirst = filters.frames !== null && best.leads.every((lead) => lead.way === 'own' && lead.index !== null);
+  return {
+    order,
+    leads: best.leads,
+    conditions,
+    ordered: best.ordered && best.leads.every((lead) => lead.way !== 'peak'),
+    keysFirst,
+  };
 }
 
 interface Way {
@@ -135,7 +147,7 @@ function waysOf(view: View, filters: ReadFilters, sizes: Sizes): Way[] {
     }
   }
   if (filters.frames && view.table !== 'problems') {
-    const condition = { sql: `${frame} in (select value from json_each(?))`, values: [JSON.stringify(filters.frames)] };
+    const condition = { sql: `${frame} in (${filters.picked})`, values: [] };
     // Every frame has about as many rows as any other.
     const rows = tally === null ? filters.frames.length : sizes.matching * Math.max(1, filters.byValues.length * 4);
     ways.push({ ordered: false, rows, leads: [{ index: null, way: 'own', condition }], filter: null });
@@ -177,8 +189,13 @@ export function queriesOf(
       ...plan.conditions,
     ];
     const where = [lead.way === 'result' ? 's.revision = ?' : 't.revision = ?', ...all.map((one) => one.sql)].join(' and ');
+    const inOrder = `from ${from} where ${where} order by ${orderBy.join(', ')} limit ?`;
+    const same = ['revision', ...key].map((one) => `t.${one} = k.${one}`).join(' and ');
+    const kept = `select t.revision, ${keys.join(', ')} ${inOrder}`;
     return {
-      sql: `select ${selected} from ${from} where ${where} order by ${orderBy.join(', ')} limit ?`,
+      sql: plan.keysFirst
+        ? `select ${selected} from (${kept}) k cross join ${table} t on ${same}`
+        : `select ${selected} ${inOrder}`,
       values: [revision, ...all.flatMap((one) => one.values), limit],
     };
   };

@@ -4,7 +4,7 @@ import type { Sizes } from '@/db/lists/plan';
 import type { RawDatabase } from '@/db/open';
 import type { View } from '@/lib/tables/view';
 
-const none: ReadFilters = { byValues: [], ranges: [], contains: [], frames: null };
+const none: ReadFilters = { byValues: [], ranges: [], contains: [], frames: null, picked: '' };
 
 /** A view's filters as the database takes them, and how many rows fit. */
 export function weigh(raw: RawDatabase, revision: number, stamp: number, view: View): { filters: ReadFilters; sizes: Sizes } {

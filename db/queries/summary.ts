@@ -62,17 +62,16 @@ export async function findSummary(db: Db, office: number, revision: number): Pro
 }
 
 function summarise(raw: RawDatabase, revision: number): BatchSummary {
-  const rows = readFrames(raw, revision);
-  const cells = rows.map(cellOf);
+  const { cells, counts, mass } = readFrames(raw, revision);
   return {
-    counts: countsOf(rows),
+    counts,
     cells,
     spread: spreadOf(cells),
     governing: governingChecks(cells),
     sections: sectionsOf(raw, revision),
     worst: worstOf(raw, revision, cells),
     parameters: parametersOf(raw, revision),
-    mass: massOf(rows),
+    mass,
   };
 }
 
@@ -119,42 +118,59 @@ export async function listParameterRatios(
   return rows.map((row) => ({ ...row, ratio: orNull(row.ratio), verdict: verdictOf(row.verdict), group: row.group || null }));
 }
 
-interface Read {
-  index: number;
-  id: string;
-  status: FrameStatus;
-  verdict: number;
-  ratio: number;
-  check_name: string;
-  subject: string | null;
-  section: string;
-  combination: string;
-  group_name: string;
-  reason: string | null;
-  mass: number;
-  count: number;
+/** What is counted over all frames while they are read. */
+interface Frames {
+  readonly cells: SummaryCell[];
+  readonly counts: { -readonly [K in keyof VerdictCounts]: VerdictCounts[K] };
+  mass: number | null;
 }
 
-function readFrames(raw: RawDatabase, revision: number): Read[] {
-  return statement<Read>(
-    raw,
-    `select frame as "index", frame_id as id, status, verdict, ratio, check_name, subject, section, combination, group_name,
-     reason, mass, count from revision_frame where revision = ? order by frame`,
-  ).all(revision);
-}
+const columns = `frame, frame_id, status, verdict, ratio, check_name, subject, section, combination, group_name, reason, mass, count`;
+type Read = [
+  index: number, id: string, status: FrameStatus, verdict: number, ratio: number, check: string, subject: string | null,
+  section: string, combination: string, group: string, reason: string | null, mass: number, count: number,
+]; // prettier-ignore
+/** Rows read at once, so that they are gone before they are many. */
+const piece = 500;
+const ranks = ['within', 'near', 'notChecked', 'over'] as const;
 
-function cellOf(row: Read): SummaryCell {
-  const { index, id, status, reason } = row;
-  const check = row.check_name || null;
-  return {
-    index, id, status, reason, check,
-    verdict: verdictOf(row.verdict),
-    ratio: orNull(row.ratio),
-    subject: check === null ? null : (row.subject ?? id),
-    section: row.section || null,
-    combination: row.combination || null,
-    group: row.group_name || null,
-  }; // prettier-ignore
+function readFrames(raw: RawDatabase, revision: number): Frames {
+  const some = raw
+    .prepare<[number, number], Read>(
+      `select ${columns} from revision_frame where revision = ? and frame > ? order by frame limit ${piece}`,
+    )
+    .raw();
+  const counts = { over: 0, notChecked: 0, near: 0, within: 0, waiting: 0, stopped: 0 };
+  const found: Frames = { cells: [], counts, mass: null };
+  // few words stand in many frames: each is kept once
+  const words = new Map<string, string>();
+  const once = (word: string | null): string | null => {
+    if (word === null || word === '') return null;
+    const known = words.get(word);
+    if (known === undefined) words.set(word, word);
+    return known ?? word;
+  };
+  for (let last = -1; ;) {
+    const rows = some.all(revision, last);
+    for (const [index, id, status, rank, ratio, checkName, subject, section, combination, group, reason, mass, count] of rows) {
+      const check = once(checkName);
+      found.cells.push({
+        index, id, check,
+        status: once(status) as FrameStatus,
+        reason: once(reason),
+        verdict: verdictOf(rank),
+        ratio: orNull(ratio),
+        subject: check === null ? null : (once(subject) ?? id),
+        section: once(section),
+        combination: once(combination),
+        group: once(group),
+      }); // prettier-ignore
+      counts[status === 'stopped' ? 'stopped' : (ranks[rank] ?? 'waiting')] += 1;
+      if (orNull(mass) !== null) found.mass = (found.mass ?? 0) + mass * count;
+    }
+    if (rows.length < piece) return found;
+    last = rows.at(-1)![0];
+  }
 }
 
 function governingChecks(cells: readonly SummaryCell[]): BatchSummary['governing'] {
@@ -178,12 +194,14 @@ function sectionsOf(raw: RawDatabase, revision: number): SectionSummary[] {
   ).all(revision);
   const ratios = 'from member_row indexed by member_row_section_ratio where revision = ? and section = ? and ratio >= 0';
   const withRatio = statement<{ n: number }>(raw, `select count(*) as n ${ratios}`);
-  const nth = statement<{ ratio: number }>(raw, `select ratio ${ratios} order by ratio desc limit 1 offset ?`);
+  const nth = statement<{ ratio: number }>(raw, `select ratio ${ratios} order by ratio desc limit 2 offset ?`);
   const found = counted.map(({ section, members, over }): SectionSummary => {
     const { n } = withRatio.get(revision, section)!;
     if (n === 0) return { section, members, median: null, worst: null, over };
-    const at = (offset: number) => nth.get(revision, section, offset)!.ratio;
-    return { section, members, median: (at((n - 1) >> 1) + at(n >> 1)) / 2, worst: at(0), over };
+    const at = (offset: number) => nth.all(revision, section, offset);
+    const [low, high] = at((n - 1) >> 1);
+    const median = n % 2 === 1 ? low!.ratio : (low!.ratio + high!.ratio) / 2;
+    return { section, members, median, worst: at(0)[0]!.ratio, over };
   });
   return found.sort((a, b) => (b.worst ?? -1) - (a.worst ?? -1) || (a.section < b.section ? -1 : 1));
 }
@@ -217,16 +235,4 @@ function parametersOf(raw: RawDatabase, revision: number): BatchSummary['paramet
     for (const row of ofOne.all(revision, family)) found.set(row.name, { ...row, numeric: row.numeric === 1 });
   }
   return [...found.values()].sort((a, b) => (a.name < b.name ? -1 : 1));
-}
-
-function countsOf(rows: readonly Read[]): VerdictCounts {
-  const counts = { over: 0, notChecked: 0, near: 0, within: 0, waiting: 0, stopped: 0 };
-  const ranks = ['within', 'near', 'notChecked', 'over'] as const;
-  for (const { status, verdict } of rows) counts[status === 'stopped' ? 'stopped' : (ranks[verdict] ?? 'waiting')] += 1;
-  return counts;
-}
-
-function massOf(rows: readonly Read[]): number | null {
-  const known = rows.filter((row) => orNull(row.mass) !== null);
-  return known.length === 0 ? null : known.reduce((sum, row) => sum + row.mass * row.count, 0);
 }
