@@ -169,14 +169,11 @@ describe('blank lengths', () => {
 
 describe('a span with pieces drawn both ways', () => {
   const nodes = ['A', 'X', 'B'].map((id, i) => ({ id, x_m: 5 * i, y_m: 0, place: null }));
-  const roof = (reversed: boolean): Frame =>
-    frame({
-      nodes,
-      members: [
-        member('AX', 0, 1, { ...lengths, span: 'AB' }),
-        member('XB', ...(reversed ? ([2, 1] as const) : ([1, 2] as const)), { ...lengths, span: 'AB' }),
-      ],
-    });
+  const roof = (reversed: boolean): Frame => {
+    const piece = { ...lengths, span: 'AB' };
+    const second = reversed ? member('XB', 2, 1, piece) : member('XB', 1, 2, piece);
+    return frame({ nodes, members: [member('AX', 0, 1, piece), second] });
+  };
   const screened = (reversed: boolean) => {
     // the same bending either way: the lower face of XB is compressed, which is the top of a piece drawn from B
     const M = [(reversed ? 1 : -1) * 20e3];
