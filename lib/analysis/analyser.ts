@@ -8,7 +8,7 @@ import { unheldPart } from './connected';
 import { bucklingSpace, criticalLoadFactor } from './critical/critical-load-factor';
 import { factor } from './factor';
 import { loadVectors } from './load-vectors';
-import { describeMovement, freeToMove, nullVector } from './mechanism';
+import { describeMovement, freeToMove, nullVector, strains } from './mechanism';
 import { memberData } from './member-data';
 import { recover, type Recovered } from './recover';
 import { refusal } from './refusals';
@@ -65,10 +65,10 @@ function analyse(frame: Frame, t: Topology, options: AnalyseOptions): Analysis {
   const norm = scaledNorm(K, t, diagonal);
   const inner = new Float64Array(6 * t.size);
   const unheld = factor(K, t, diagonal, inner, new Float64Array(3 * t.size), pivotTolerance); // K = Uᵀ D U
-  if (unheld >= 0) return { ok: false, failure: freeToMove(frame, t, angles, nullVector(K, t, inner, unheld)) };
+  if (unheld >= 0) return { ok: false, failure: freeOrHardlyHeld(frame, t, angles, nullVector(K, t, inner, unheld)) };
   const condition = conditionEstimate(K, t, inner, diagonal, norm);
   const digits = digitsOf(condition.condition);
-  if (!(digits >= leastDigits)) return { ok: false, failure: hardlyHeld(frame, t, angles, condition, digits) };
+  if (!(digits >= leastDigits)) return { ok: false, failure: lowDigits(frame, t, angles, condition, digits) };
   const loads = loadVectors(frame, t, angles); // a column a case
   const d = loads.f.slice();
   solve(K, t, inner, d, frame.cases.length); // K d = f
@@ -118,15 +118,34 @@ function caseState(frame: Frame, recovered: Recovered, index: number): ResultSta
   };
 }
 
-function hardlyHeld(frame: Frame, t: Topology, angles: Float64Array, condition: Condition, digits: number): Failure {
+function lowDigits(frame: Frame, t: Topology, angles: Float64Array, condition: Condition, digits: number): Failure {
   // singular to working precision although each pivot passed: a mechanism all the same
-  if (!(condition.condition < 1e14)) return freeToMove(frame, t, angles, condition.weakest);
-  const { node, how, remedy } = describeMovement(frame, t, angles, condition.weakest);
+  if (!(condition.condition < 1e14)) return freeOrHardlyHeld(frame, t, angles, condition.weakest);
+  return hardlyHeld(frame, t, angles, condition.weakest, digits);
+}
+
+/** A movement that strains no member is a mechanism; one that does is lost beside something far stiffer. */
+function freeOrHardlyHeld(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array): Failure {
+  return strains(frame, t, angles, z) ? hardlyHeld(frame, t, angles, z, 0) : freeToMove(frame, t, angles, z);
+}
+
+function hardlyHeld(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array, digits: number): Failure {
+  const { node, how, remedy } = describeMovement(frame, t, angles, z);
   return {
     code: 'not-solved',
     node,
     message:
       `Node ${node} can almost freely ${how}: stiffnesses differ so much that only ${Math.max(0, Math.floor(digits))} digits ` +
-      `of the results would be right (6 are asked for). ${remedy}.`,
+      `of the results would be right (6 are asked for). ${stubRemedy(frame) ?? remedy}.`,
   };
+}
+
+/** A member far shorter than the rest is what makes stiffnesses differ so much: its nodes are better one. */
+function stubRemedy(frame: Frame): string | null {
+  const lengths = memberData(frame).map((m) => m.length);
+  const shortest = Math.min(...lengths);
+  if (!(shortest < 0.02 * Math.max(...lengths))) return null;
+  const { id, start, end } = frame.members[lengths.indexOf(shortest)]!;
+  const nodes = `${frame.nodes[start]!.id} and ${frame.nodes[end]!.id}`;
+  return `Member ${id} is ${Number((1000 * shortest).toPrecision(3))} mm long, far stiffer than the rest: make its nodes ${nodes} one`;
 }

@@ -3,7 +3,7 @@ import type { Frame, Restraint, Support } from '@/lib/model/frame';
 import { createAnalyser } from './analyser';
 import { nodeAngles } from './assemble';
 import { describeMovement } from './mechanism';
-import { plainFrame, plainMember } from './plain-frame';
+import { plainFrame, plainMember, plainSection } from './plain-frame';
 import { buildTopology } from './topology';
 
 const support = (node: number, ux: Restraint, uy: Restraint, rz: Restraint = 'free', angle_rad = 0): Support => ({
@@ -192,4 +192,20 @@ describe('a frame that is not one', () => {
     }); // prettier-ignore
     expect(createAnalyser().analyse(frame).ok).toBe(true);
   });
+});
+
+it('a sound frame with a stub far stiffer than the rest is no mechanism: what makes it so is named', () => {
+  const frame = plainFrame({
+    nodes: [['A', 0, 0], ['B', 15, 2], ['B2', 15.001, 2], ['C', 30, 0]],
+    sections: [plainSection('HE 1000 B', 400e-4, 644_700e-8), plainSection('IPE 80', 7.64e-4, 80.1e-8)],
+    members: [plainMember('AB', 0, 1, { section: 1 }), plainMember('BB', 1, 2), plainMember('BC', 2, 3, { section: 1 })],
+    supports: [
+      { node: 0, ux: 'fixed', uy: 'fixed', rz: 'fixed', angle_rad: 0 },
+      { node: 3, ux: 'free', uy: 'fixed', rz: 'fixed', angle_rad: 0 },
+    ],
+  }); // prettier-ignore
+  const analysis = createAnalyser().analyse(frame);
+  if (analysis.ok) throw new Error('solved');
+  expect(analysis.failure.code).toBe('not-solved');
+  expect(analysis.failure.message).toContain('Member BB is 1 mm long, far stiffer than the rest: make its nodes B and B2 one');
 });

@@ -2,6 +2,8 @@ import type { Frame, Restraint } from '@/lib/model/frame';
 import type { Failure } from '@/lib/results/result';
 import { bounds } from './bounds';
 import { list } from './connected';
+import { emptyMemberStiffness, memberStiffness } from './assemble';
+import { endForces, toLocal } from './load-vectors';
 import { memberData } from './member-data';
 import type { Topology } from './topology';
 
@@ -46,6 +48,38 @@ function byNode(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array
     moves[3 * node + 2] = at(2);
   }
   return moves;
+}
+
+/** Strain energy below this share of what a member would take if its ends moved alone is the rounding of none. */
+const unstrained = 1e-11;
+
+/** Whether a movement bends or stretches some member: energy taken member by member, where no other's stiffness drowns it. */
+export function strains(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array): boolean {
+  const moved = new Float64Array(3 * frame.nodes.length);
+  let most = 0;
+  for (let p = 0; p < t.size; p++)
+    for (let r = 0; r < 3; r++) {
+      const node = t.nodeAt[p]!;
+      moved[3 * node + r] = t.free[3 * node + r] ? z[3 * p + r]! : 0;
+      most = Math.max(most, Math.abs(moved[3 * node + r]!));
+    }
+  const k = emptyMemberStiffness();
+  const u = new Float64Array(6);
+  const q = new Float64Array(6);
+  return memberData(frame).some((m) => {
+    memberStiffness(m, k);
+    toLocal(m, angles, moved, 3 * m.start, 3 * m.end, u);
+    // a pinned end turns for nothing; what hardly moves beside the rest is rounding itself
+    if (k.S11 === 0) u[2] = 0;
+    if (k.S22 === 0) u[5] = 0;
+    if (u.every((value) => Math.abs(value) <= 1e-6 * most)) return false;
+    endForces(k, u, q);
+    // the size of what cancels where a member only rides along: as if its ends moved that far apart
+    const apart = u[0]! ** 2 + u[1]! ** 2 + u[3]! ** 2 + u[4]! ** 2;
+    const each = (k.ka + k.kvv) * apart + k.S11 * u[2]! ** 2 + k.S22 * u[5]! ** 2;
+    const energy = u.reduce((sum, value, i) => sum + value * q[i]!, 0);
+    return energy > unstrained * each;
+  });
 }
 
 /** What moves most in a movement, and the words for it: which node, which way, and what would hold it. */

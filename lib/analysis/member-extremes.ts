@@ -45,8 +45,8 @@ export function readExtremes(numbers: Float64Array, at: number): MemberExtremes 
 }
 
 // places where a quantity can be extreme, ascending, and its values there
-let xs = new Float64Array(64);
-let values = new Float64Array(64);
+let xs: Float64Array = new Float64Array(64);
+let values: Float64Array = new Float64Array(64);
 let candidates = 0;
 
 const slope = new Float64Array(8);

@@ -5,23 +5,21 @@ import { stretchesOf } from './member-stretches';
 
 // what acts on each stretch in the state at hand, and which of the member's places divide it
 let room = 16;
-let qx0 = new Float64Array(room);
-let qx1 = new Float64Array(room);
-let qy0 = new Float64Array(room);
-let qy1 = new Float64Array(room);
-let Px = new Float64Array(room);
-let Py = new Float64Array(room);
-let M0 = new Float64Array(room);
+let [qx0, qx1, qy0, qy1, Px, Py, M0] = numbers();
 let divides = new Uint8Array(room);
 let jumps = new Uint8Array(room);
+
+function numbers() {
+  const row = (): Float64Array => new Float64Array(room);
+  return [row(), row(), row(), row(), row(), row(), row()] as const;
+}
 
 function makeRoom(places: number): void {
   if (places > room) {
     room = 2 * places;
-    [qx0, qx1, qy0, qy1, Px, Py, M0] = Array.from({ length: 7 }, () => new Float64Array(room)) as unknown as [
-      Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array,
-    ]; // prettier-ignore
-    [divides, jumps] = [new Uint8Array(room), new Uint8Array(room)];
+    [qx0, qx1, qy0, qy1, Px, Py, M0] = numbers();
+    divides = new Uint8Array(room);
+    jumps = new Uint8Array(room);
   }
   for (let i = 0; i < places; i++) {
     qx0[i] = qx1[i] = qy0[i] = qy1[i] = Px[i] = Py[i] = M0[i] = 0;

@@ -4,6 +4,9 @@ import { memberData } from './member-data';
 
 const noSolution = (message: string, node: string | null = null): Failure => ({ code: 'not-solved', message, node });
 
+/** No section and material has EA or EI above this, or below its inverse, N and N·m²: products of several must not overflow. */
+const most = 1e30;
+
 /**
  * What the analysis cannot do for this frame, said before it is tried: it never computes something simpler instead.
  * The reader has met most of these at their cells; a frame made otherwise meets them here.
@@ -20,6 +23,8 @@ export function refusal(frame: Frame, noRotation: Uint8Array): Failure | null {
       return noSolution(`Member ${member.id} is turned: section ${section.name} needs I minor.`);
     if (!(m.EA > 0 && m.EI > 0 && Number.isFinite(m.EA) && Number.isFinite(m.EI)))
       return noSolution(`Member ${member.id}: E, A and I of its section and material must be numbers above zero.`);
+    if (Math.max(m.EA, m.EI) > most || Math.min(m.EA, m.EI) < 1 / most)
+      return noSolution(`Member ${member.id}: E, A and I of its section and material are out of all proportion: look at their units.`);
     if (!(m.startSpring >= 0 && m.endSpring >= 0))
       return noSolution(`Member ${member.id}: a joint's stiffness can't be negative.`);
   }

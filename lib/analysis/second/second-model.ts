@@ -1,5 +1,4 @@
 import type { Frame } from '@/lib/model/frame';
-import { inPlane } from '@/lib/sections/in-plane';
 
 /** Length, direction, stiffness and what self-weight and temperature need of a member, taken from the model anew. */
 export interface MemberFacts {
@@ -32,7 +31,9 @@ export function secondModel(frame: Frame): SecondModel {
     const to = frame.nodes[member.end]!;
     const L = Math.sqrt((to.x_m - from.x_m) ** 2 + (to.y_m - from.y_m) ** 2);
     const material = frame.materials[member.material]!;
-    const plane = inPlane(frame.sections[member.section]!, member.turned);
+    const section = frame.sections[member.section]!.properties;
+    // read anew: which second moment and which depth lie in the plane of a turned section
+    const [I, depth] = member.turned ? [section.Iminor_m4, section.width_m] : [section.I_m4, section.depth_m];
     const endRotation = (node: number, joint: number | 'rigid' | 'pin'): number => {
       if (!member.axialOnly && joint === 'rigid') return 3 * node + 2;
       const own = size++;
@@ -43,11 +44,11 @@ export function secondModel(frame: Frame): SecondModel {
       L,
       ex: (to.x_m - from.x_m) / L,
       ey: (to.y_m - from.y_m) / L,
-      EA: material.E_Pa * plane.A_m2,
-      EI: material.E_Pa * plane.I_m4!,
-      weight: 9.80665 * (material.density_kg_m3 ?? NaN) * plane.A_m2,
+      EA: material.E_Pa * section.A_m2,
+      EI: material.E_Pa * I!,
+      weight: 9.80665 * (material.density_kg_m3 ?? NaN) * section.A_m2,
       alpha: material.expansion_perK ?? NaN,
-      depth: plane.depth_m ?? NaN,
+      depth: depth ?? NaN,
       unknowns: [
         3 * member.start, 3 * member.start + 1, endRotation(member.start, member.startJoint),
         3 * member.end, 3 * member.end + 1, endRotation(member.end, member.endJoint),
