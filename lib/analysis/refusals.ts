@@ -24,7 +24,9 @@ export function refusal(frame: Frame, noRotation: Uint8Array): Failure | null {
     if (!(m.EA > 0 && m.EI > 0 && Number.isFinite(m.EA) && Number.isFinite(m.EI)))
       return noSolution(`Member ${member.id}: E, A and I of its section and material must be numbers above zero.`);
     if (Math.max(m.EA, m.EI) > most || Math.min(m.EA, m.EI) < 1 / most)
-      return noSolution(`Member ${member.id}: E, A and I of its section and material are out of all proportion: look at their units.`);
+      return noSolution(
+        `Member ${member.id}: E, A and I of its section and material are out of all proportion: look at their units.`,
+      );
     if (!(m.startSpring >= 0 && m.endSpring >= 0))
       return noSolution(`Member ${member.id}: a joint's stiffness can't be negative.`);
   }
