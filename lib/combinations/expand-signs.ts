@@ -36,3 +36,11 @@ export function expandSigns(name: string, terms: readonly ListedTerm[]): SignedV
 export function splitSign(text: string): string | null {
   return /^\s*(?:±|\+\s*\/\s*[-−–]|\+[-−–])\s*(\S.*)$/s.exec(text)?.[1] ?? null;
 }
+
+/** A combination's name with its signs as they are written: `C1 (+-)` on a keyboard is `C1 (+ −)`. */
+export function signedName(name: string): string {
+  return name.replace(/\s*\(([-+−–\s]+)\)$/, (_, signs: string) => {
+    const each = [...signs.replace(/\s/g, '')].map((sign) => (sign === '+' ? '+' : '−'));
+    return ` (${each.join(' ')})`;
+  });
+}

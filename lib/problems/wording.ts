@@ -248,8 +248,11 @@ export const stressFactorLow = (f: number, combination: string, largest: number)
   `stress factor ${figure(f)} is that of unfactored loads, but ${combination} holds a factor of ${figure(largest)}: is safety counted twice?`;
 export const stressFactorHigh = (f: number, combination: string): string =>
   `stress factor ${figure(f)} is that of factored loads, but all factors of ${combination} are 1 or less: is safety left out?`;
-export const limitFitsNothing = (name: string, node: boolean): string =>
-  node ? `“${name}” is no node of these frames` : `“${name}” is no role, group, member, span, node or place of these frames`;
+export const limitFitsNothing = (name: string, what: 'to node' | 'nodes' | 'members'): string => {
+  const names = { 'to node': 'node', nodes: 'node, place, group or role', members: 'member, span, group or role' };
+  return `“${name}” is no ${names[what]} of these frames`;
+};
+export const spreadOfOneNode = (): string => 'spread is between two nodes, and these are one';
 export const limitNeedsFigure = (measure: string): string =>
   measure === 'displacement' ? 'a limit on displacement needs absolute' : 'a limit needs ratio or absolute';
 export const displacementIsAbsolute = (): string =>

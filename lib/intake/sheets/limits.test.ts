@@ -74,7 +74,21 @@ describe('limits', () => {
     expect(of(sheets)?.map((l) => l.combination)).toEqual(['S1 (+)', 'S1 (−)']);
   });
 
+  it('a sign may be typed as the keyboard has it', () => {
+    const of1 = (combination: string): (string | null)[] | undefined => {
+      const sheets = withLimits({ 'applies to': '*', measure: 'deflection', ratio: 200, combination });
+      sheets.Combinations = [['combination', 'purpose', 'dead', 'wind'], ['S1', 'service', 1, '±1'], ['S2', 'service', '±1', '±1']];
+      return of(sheets)?.map((l) => l.combination);
+    };
+    expect([of1('S1 (-)'), of1('s1(−)'), of1('S2 (+-)')]).toEqual([['S1 (−)'], ['s1 (−)'], ['S2 (+ −)']]);
+  }); // prettier-ignore
+
   test.each<[string, Row[], string]>([
+    [
+      'a spread from a node to itself',
+      [{ 'applies to': 'B', 'to node': 'b', measure: 'spread', 'absolute [mm]': 5 }],
+      'error unknown-node Limits!D2 F1,F2',
+    ],
     ['what no frame has', [{ 'applies to': 'purlins', measure: 'deflection', ratio: 200 }], 'error unknown-word Limits!A2 F1,F2'],
     ['a measure that is none', [{ 'applies to': '*', measure: 'droop', ratio: 200 }], 'error unknown-word Limits!B2 F1,F2'],
     ['neither ratio nor absolute', [{ 'applies to': '*', measure: 'deflection' }], 'error not-a-number Limits!E2 F1,F2'],

@@ -1,3 +1,4 @@
+import { signedName } from '@/lib/combinations/expand-signs';
 import type { FrameEntry } from '@/lib/intake/batch';
 import type { Draft } from '@/lib/intake/draft';
 import type { Family } from '@/lib/intake/families/family';
@@ -92,7 +93,7 @@ export class Limits {
     )
       return [];
     if (combinations === undefined) return [];
-    const fault = this.faultOf(row, measure, ratio, absolute, toNode);
+    const fault = this.faultOf(row, name, measure, ratio, absolute, toNode);
     if (fault) {
       reader.tell(row, fault.column, { code: fault.code, message: fault.message }, reading);
       return [];
@@ -134,6 +135,7 @@ export class Limits {
 
   private faultOf(
     row: Row,
+    name: string,
     measure: Measure,
     ratio: number | null,
     absolute: number | null,
@@ -148,6 +150,8 @@ export class Limits {
     }
     if (measure === 'spread' && toNode === null)
       return { column: 'to node', code: 'unknown-node', message: say.spreadNeedsNode() };
+    if (measure === 'spread' && toNode !== null && idKey(toNode) === idKey(name))
+      return { column: 'to node', code: 'unknown-node', message: say.spreadOfOneNode() };
     return null;
   }
 
@@ -161,18 +165,19 @@ export class Limits {
 
   /** The combination a row names, in all its signs; [null] for every service combination; undefined where unknown (told). */
   private combinationsOf(draft: Draft, row: Row): (string | null)[] | undefined {
-    const id = this.reader.id(row, 'combination', draft.reading);
-    if (id === undefined) return undefined;
-    if (id === null || id === '*') return [null];
+    const typed = this.reader.id(row, 'combination', draft.reading);
+    if (typed === undefined) return undefined;
+    if (typed === null || typed === '*') return [null];
+    const id = signedName(typed);
     const named = this.combinations.names.get(idKey(id));
     if (!named || named.purpose !== 'service') {
       const message = named ? say.limitOnStrength(id) : say.unknownCombination(id);
       this.reader.tell(row, 'combination', { code: 'unknown-word', message }, draft.reading);
       return undefined;
     }
-    const signed = [...this.combinations.names].filter(([key, each]) => each.base === named.base && key !== idKey(named.base));
+    const signs = [...this.combinations.names].filter(([key, each]) => each.base === named.base && key !== idKey(named.base));
     const isBase = idKey(named.base) === idKey(id);
-    return isBase && signed.length > 0 ? draft.combinationNames.filter((name) => signed.some(([key]) => key === idKey(name))) : [isBase ? named.base : id]; // prettier-ignore
+    return isBase && signs.length > 0 ? draft.combinationNames.filter((name) => signs.some(([key]) => key === idKey(name))) : [isBase ? named.base : id]; // prettier-ignore
   }
 
   /** Two limits of equal standing for one thing that differ: which is meant nobody can say. */
@@ -203,7 +208,11 @@ export class Limits {
     for (const [row, { column, frames: touched }] of this.unmatched) {
       if (this.matched.has(row)) continue;
       const code = column === 'to node' ? 'unknown-node' : 'unknown-word';
-      const message = say.limitFitsNothing(rawCell(row, column)?.text ?? '', column === 'to node');
+      const ofNodes = column === 'to node' || /displacement|spread/i.test(rawCell(row, 'measure')?.text ?? '');
+      const message = say.limitFitsNothing(
+        rawCell(row, column)?.text ?? '',
+        column === 'to node' ? 'to node' : ofNodes ? 'nodes' : 'members',
+      );
       for (const frame of touched) this.reader.tell(row, column, { code, message }, { ...forNobody, frame });
     }
   }
