@@ -13,16 +13,19 @@ import { deflateRawSync, inflateRawSync } from 'node:zlib';
 export function pack(value: unknown): Buffer {
   begin();
   put(value);
-  const plain = Buffer.from(`[${JSON.stringify(sorts)},${JSON.stringify([...words.keys()])},${text}]`);
-  const long = plain.length > mostPlain;
-  const rest = long ? deflateRawSync(plain, { level: 1 }) : plain;
-  const bytes = Buffer.allocUnsafe(headBytes + 8 * filled + rest.length);
+  // only words may be beyond ASCII: the rest, most of it, is written as it is
+  const named = Buffer.from(`[${JSON.stringify(sorts)},${JSON.stringify([...words.keys()])},`);
+  const begins = headBytes + 8 * filled;
+  const whole = Buffer.allocUnsafe(begins + named.length + text.length + 1);
+  whole.set(named, begins);
+  whole.write(`${text}]`, begins + named.length, 'latin1');
+  const long = whole.length - begins > mostPlain;
+  const bytes = long ? Buffer.concat([whole.subarray(0, begins), deflateRawSync(whole.subarray(begins), { level: 1 })]) : whole;
   bytes.writeUInt32LE(long ? deflatedMark : mark, 0);
   bytes.writeUInt32LE(filled, 4);
-  const numbers = bytes.subarray(headBytes, headBytes + 8 * filled);
+  const numbers = bytes.subarray(headBytes, begins);
   numbers.set(new Uint8Array(block.buffer, 0, 8 * filled));
   if (turned) numbers.swap64();
-  bytes.set(rest, headBytes + 8 * filled);
   return bytes;
 }
 

@@ -16,7 +16,7 @@ export const tallyColumns: Readonly<Record<Tallied, readonly string[]>> = {
  * of each filter, are read from the tally and not from the rows.
  */
 export class TallyWriter {
-  private readonly counts = new Map<string, number>();
+  private counts: Counts = new Map();
   private readonly upsert;
 
   constructor(raw: RawDatabase) {
@@ -27,16 +27,28 @@ export class TallyWriter {
   }
 
   add(revision: number, list: Tallied, a: string, b: string, c: string, d: string, e: string): void {
-    const key = `${revision}\u0000${list}\u0000${a}\u0000${b}\u0000${c}\u0000${d}\u0000${e}`;
-    this.counts.set(key, (this.counts.get(key) ?? 0) + 1);
+    const ofList = within(within(this.counts, revision), list);
+    const last = within(within(within(within(ofList, a), b), c), d);
+    last.set(e, (last.get(e) ?? 0) + 1);
   }
 
   /** Adds what was counted since the last time; call in the transaction that wrote the rows. */
   flush(): void {
-    for (const [key, rows] of this.counts) {
-      const [revision, ...rest] = key.split('\u0000');
-      this.upsert.run(Number(revision), ...rest, rows);
-    }
-    this.counts.clear();
+    for (const [revision, lists] of this.counts)
+      for (const [list, as] of lists)
+        for (const [a, bs] of as)
+          for (const [b, cs] of bs)
+            for (const [c, ds] of cs)
+              for (const [d, es] of ds) for (const [e, rows] of es) this.upsert.run(revision, list, a, b, c, d, e, rows);
+    this.counts = new Map();
   }
+}
+
+/** By revision, list and each of the keys a to e: looked up word by word, since putting them together costs more. */
+type Counts = Map<number, Map<Tallied, Map<string, Map<string, Map<string, Map<string, Map<string, number>>>>>>>;
+
+function within<K, K2, V>(counts: Map<K, Map<K2, V>>, key: K): Map<K2, V> {
+  let found = counts.get(key);
+  if (!found) counts.set(key, (found = new Map<K2, V>()));
+  return found;
 }
