@@ -66,6 +66,30 @@ describe('result workbook writer', () => {
     expect(page?.autoFilter).toBe('A1:C2');
   });
 
+  it('takes no more rows while nobody reads, and goes on when somebody does', async () => {
+    const most = 100_000;
+    let taken = 0;
+    let spread = 1;
+    const digits = (): number => (spread = (spread * 48_271) % 2_147_483_647);
+    function* rows(): Generator<ReportRow> {
+      for (; taken < most; taken += 1) {
+        // Figures at random, which hardly compress.
+        yield [Array.from({ length: 20 }, digits).join(''), digits() / 1e9, 'within'];
+      }
+    }
+    const sink = new PassThrough();
+    const written = writeXlsx([{ ...sheetOf([]), rows }], sink);
+    for (let before = -1; before !== taken;) {
+      before = taken;
+      await new Promise((resolve) => setTimeout(resolve, 400));
+    }
+    expect(taken).toBeGreaterThan(0);
+    expect(taken).toBeLessThan(most / 2);
+    sink.resume();
+    await written;
+    expect(taken).toBe(most);
+  });
+
   it('ends with an error when the reader goes away', async () => {
     const sink = new PassThrough();
     const many = function* (): Iterable<ReportRow> {

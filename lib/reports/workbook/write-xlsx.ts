@@ -37,7 +37,7 @@ function columnStyles(columns: readonly ReportColumn[]): Partial<ExcelJS.Style>[
 }
 
 interface Piped {
-  readonly pipes?: readonly { readonly writableLength?: number }[];
+  readonly pipes?: readonly { readonly _writableState?: { readonly length: number } }[];
 }
 
 const wentAway = (): Error => new Error('The reader of the workbook went away before it was complete');
@@ -50,7 +50,8 @@ function closedEarly(sink: Writable): Promise<boolean> {
 /** Waits until what the sheet has handed on is compressed and the sink has taken it. */
 async function keepPace(page: ExcelJS.Worksheet, sink: Writable): Promise<void> {
   const { stream } = page as unknown as { stream?: Piped };
-  const waiting = (): number => (stream?.pipes?.[0]?.writableLength ?? 0) + sink.writableLength;
+  // The zip library's streams are of a kind that does not offer writableLength yet.
+  const waiting = (): number => (stream?.pipes?.[0]?._writableState?.length ?? 0) + sink.writableLength;
   await new Promise((resolve) => setImmediate(resolve));
   while (!sink.destroyed && waiting() > mostWaiting) await new Promise((resolve) => setTimeout(resolve, 2));
   if (sink.destroyed) throw wentAway();
