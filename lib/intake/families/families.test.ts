@@ -599,6 +599,15 @@ describe('the built-in families are families like any other', () => {
     expect(first(readSheets(sheets)).supports.map((s) => [s.node, s.rz])).toEqual([[0, 'fixed'], [4, 2e6]]); // prettier-ignore
   });
 
+  it('a limit on the family takes the place of one for all, and one on the variant of both', () => {
+    const sheets = shed();
+    sheets.Limits = [['applies to', 'measure', 'ratio', 'frame'], ['rafter', 'deflection', 200, null], ['rafter', 'deflection', 300, 'portal']];
+    expect(lines(readSheets(sheets))).toEqual([]);
+    expect(first(readSheets(sheets)).limits.map((l) => [l.ratio, l.namedFrame])).toEqual([[300, false]]);
+    sheets.Limits.push(['rafter', 'deflection', 400, 'P1']);
+    expect(first(readSheets(sheets)).limits.filter((l) => l.namedFrame).map((l) => l.ratio)).toEqual([400]);
+  }); // prettier-ignore
+
   it('tells what is wrong with a template row at the template, for the variants it touches', () => {
     const sheets = {
       ...shed(),

@@ -20,6 +20,8 @@ const directions = ['x', 'y', 'resultant'] as const;
 interface Given {
   readonly limit: Limit;
   readonly row: Row | null;
+  /** How closely the row names the frame: one for its family takes the place of one for all. */
+  readonly level: number;
 }
 
 /** Limits on movement, as they apply to each frame; Setup's ratios are `*` rows. */
@@ -46,11 +48,12 @@ export class Limits {
     for (const { row, level: at } of this.rows.for(draft.entry)) {
       if (at === level.all) this.rows.fits(row);
       if (!this.reader.keeps(row, draft.reading)) continue;
-      given.push(...this.read(draft, row, at === level.named));
+      given.push(...this.read(draft, row, at));
     }
     for (const each of this.fromSetup()) if (!given.some((other) => sets(other.limit, each.limit))) given.push(each);
-    this.tellEquals(draft, given);
-    const list = given.map((each) => each.limit);
+    const closest = closestOf(draft, given);
+    this.tellEquals(draft, closest);
+    const list = closest.map((each) => each.limit);
     const key = JSON.stringify(list);
     const known = this.shared.get(key);
     if (known) return known;
@@ -63,7 +66,7 @@ export class Limits {
       if (typeof n !== 'number') return [];
       const source = origin.cell ?? origin.source;
       const any = { direction: null, toNode: null, absolute_m: null, combination: null, namedFrame: false };
-      return [{ limit: { target: 'all', name: '*', measure, ratio: n, ...any, source }, row: null }];
+      return [{ limit: { target: 'all', name: '*', measure, ratio: n, ...any, source }, row: null, level: level.all }];
     };
     return [
       ...of('deflection', this.settings.deflectionRatio, this.origins.deflectionRatio),
@@ -71,7 +74,7 @@ export class Limits {
     ];
   }
 
-  private read(draft: Draft, row: Row, namedFrame: boolean): Given[] {
+  private read(draft: Draft, row: Row, at: number): Given[] {
     const { reader } = this;
     const { reading } = draft;
     const name = reader.needId(row, 'applies to', reading);
@@ -105,6 +108,7 @@ export class Limits {
     this.matched.add(row);
     return combinations.map((combination) => ({
       row,
+      level: at,
       limit: {
         ...target,
         measure,
@@ -114,7 +118,7 @@ export class Limits {
         ratio,
         absolute_m: absolute,
         combination,
-        namedFrame,
+        namedFrame: at === level.named,
         source: `${row.part.raw.name} row ${row.raw.row}`,
       },
     }));
@@ -228,6 +232,16 @@ function ratioIn(row: Row, column: 'ratio' | 'absolute'): number | null {
 /** True where a sheet's limit stands instead of the office's own ratio for the same measure. */
 function sets(given: Limit, other: Limit): boolean {
   return other.source === 'office' && given.target === 'all' && given.measure === other.measure && given.combination === null;
+}
+
+/** Without limits that a row closer to the frame says again. */
+function closestOf(draft: Draft, given: readonly Given[]): readonly Given[] {
+  const levels = new Map<string, number>();
+  for (const each of given) {
+    const key = standing(draft, each.limit);
+    levels.set(key, Math.max(each.level, levels.get(key) ?? each.level));
+  }
+  return given.filter((each) => each.level === levels.get(standing(draft, each.limit)));
 }
 
 const ranks: Readonly<Record<LimitTarget['target'], number>> = {
