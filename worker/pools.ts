@@ -1,4 +1,4 @@
-/** The threads: two that solve, one that reads, two that write files, all at lowered priority. */
+/** The threads: two that solve, one that reads, two that write result files and two that write tables, all at lowered priority. */
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import type { MessagePort } from 'node:worker_threads';
@@ -10,6 +10,7 @@ const niceIncrement = 10;
 const solveHeap_MB = 512;
 const readHeap_MB = 400;
 const writeHeap_MB = 512;
+const tableHeap_MB = 256;
 
 /** What of a pool is used: a function of a bundle, run in a thread. */
 export interface ThreadPool {
@@ -28,6 +29,7 @@ export interface Pools {
   readonly solve: ThreadPool;
   readonly read: ThreadPool;
   readonly write: ThreadPool;
+  readonly tables: ThreadPool;
   /** Address of a bundle of dist-worker. */
   readonly bundle: (name: 'read' | 'solve' | 'write') => string;
   close(): Promise<void>;
@@ -58,13 +60,21 @@ export function createPools(folder = join(/* turbopackIgnore: true */ process.cw
     idleTimeout,
     resourceLimits: { maxOldGenerationSizeMb: writeHeap_MB },
   });
+  const tables = new Piscina({
+    minThreads: 0,
+    maxThreads: 2,
+    niceIncrement,
+    idleTimeout,
+    resourceLimits: { maxOldGenerationSizeMb: tableHeap_MB },
+  });
   return {
     solve,
     read,
     write,
-    bundle: (name) => pathToFileURL(join(folder, `${name}.mjs`)).href,
+    tables,
+    bundle: (name) => pathToFileURL(join(/* turbopackIgnore: true */ folder, `${name}.mjs`)).href,
     close: async () => {
-      await Promise.all([solve, read, write].map((pool) => pool.destroy()));
+      await Promise.all([solve, read, write, tables].map((pool) => pool.destroy()));
     },
   };
 }

@@ -1,16 +1,31 @@
-/** A result file as a stream of bytes, made in a thread while it is read. */
-import { MessageChannel } from 'node:worker_threads';
-import type { Pools } from './pools';
+/** A result file, or a table of it, as a stream of bytes, made in a thread while it is read. */
+import { MessageChannel, type MessagePort } from 'node:worker_threads';
+import type { Pools, ThreadPool } from './pools';
 import type { PortMessage } from './threads/port-sink';
 import type { ResultFile, WriteTask } from './threads/write';
+import type { WriteTableTask } from './threads/write-table';
 
-/**
- * Streams the result workbook, JSON, or a zip of CSV of a revision whose office the caller has made sure of.
- * The thread waits for a slow reader and ends with one that goes away. Errors of the thread error the stream.
- */
+/** Streams the result workbook, JSON, or a zip of CSV of a revision whose office the caller has made sure of. */
 export function resultStream(
   pools: Pools,
   of: { readonly file: string; readonly office: number; readonly revision: number; readonly as: ResultFile },
+): ReadableStream<Uint8Array> {
+  return threadStream(pools.write, { filename: pools.bundle('write'), name: 'writeResult' }, (port): WriteTask => ({
+    ...of,
+    port,
+  }));
+}
+
+/** Streams the rows of one view of a table. Threads of its own: a view need not wait until a large workbook is taken away. */
+export function tableStream(pools: Pools, of: Omit<WriteTableTask, 'port'>): ReadableStream<Uint8Array> {
+  return threadStream(pools.tables, { filename: pools.bundle('write'), name: 'writeTable' }, (port): WriteTableTask => ({ ...of, port })); // prettier-ignore
+}
+
+/** The thread waits for a slow reader and ends with one that goes away. Errors of the thread error the stream. */
+function threadStream(
+  pool: ThreadPool,
+  call: { readonly filename: string; readonly name: string },
+  taskOf: (port: MessagePort) => unknown,
 ): ReadableStream<Uint8Array> {
   const { port1, port2 } = new MessageChannel();
   const gone = new AbortController();
@@ -29,13 +44,10 @@ export function resultStream(
             port1.close();
           }
         });
-        const task: WriteTask = { ...of, port: port2 };
-        pools.write
-          .run(task, { filename: pools.bundle('write'), name: 'writeResult', transferList: [port2], signal: gone.signal })
-          .catch((error: unknown) => {
-            if (!ended && !gone.signal.aborted) controller.error(error);
-            port1.close();
-          });
+        pool.run(taskOf(port2), { ...call, transferList: [port2], signal: gone.signal }).catch((error: unknown) => {
+          if (!ended && !gone.signal.aborted) controller.error(error);
+          port1.close();
+        });
       },
       pull() {
         if (!answer) return;

@@ -84,5 +84,5 @@ export function pretendPools(tasks: Readonly<Record<string, (task: never, signal
       return work(task as never, signal);
     },
   };
-  return { solve: pool, read: pool, write: pool, bundle: (name) => name, close: () => Promise.resolve() };
+  return { solve: pool, read: pool, write: pool, tables: pool, bundle: (name) => name, close: () => Promise.resolve() };
 }

@@ -1,7 +1,4 @@
 import 'server-only';
-import { PassThrough, Readable } from 'node:stream';
-import type { ReportSheet } from '@/lib/reports/workbook/report-sheet';
-import { writeXlsx } from '@/lib/reports/workbook/write-xlsx';
 
 const kinds: Readonly<Record<string, string>> = {
   csv: 'text/csv; charset=utf-8',
@@ -24,16 +21,3 @@ export function attachment(name: string, content: ReadableStream<Uint8Array> | U
   if (content instanceof Uint8Array) headers.set('content-length', String(content.byteLength));
   return new Response(content, { headers });
 }
-
-/** Sheets as one XLSX, written while it is read. */
-export function xlsxStream(sheets: Iterable<ReportSheet>): ReadableStream<Uint8Array> {
-  const sink = new PassThrough();
-  writeXlsx(sheets, sink).catch((fault: unknown) => sink.destroy(fault instanceof Error ? fault : new Error(String(fault))));
-  return bytesOf(sink);
-}
-
-/** Pieces of text as bytes. */
-export const textStream = (pieces: Iterable<string> | AsyncIterable<string>): ReadableStream<Uint8Array> =>
-  bytesOf(Readable.from(pieces, { objectMode: false }));
-
-const bytesOf = (stream: Readable) => Readable.toWeb(stream) as ReadableStream<Uint8Array>;

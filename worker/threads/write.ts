@@ -9,6 +9,7 @@ import { revisionSource } from './revision-source';
 import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 
 export { writeMarkedCopy } from './write-marked-copy';
+export { writeTable } from './write-table';
 
 export type ResultFile = 'xlsx' | 'json' | 'csv';
 

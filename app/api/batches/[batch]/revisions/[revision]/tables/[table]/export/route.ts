@@ -1,26 +1,27 @@
 import { atRevision } from '@/app/_server/at-revision';
 import { door } from '@/app/_server/door';
-import { attachment, textStream, xlsxStream } from '@/app/_server/download';
+import { attachment } from '@/app/_server/download';
 import { parse, queryOf } from '@/app/_server/input';
 import { requireView, viewParameters } from '@/app/_server/view';
-import { db } from '@/db/client';
-import { iterateRows } from '@/db/queries/lists';
+import { databaseFile } from '@/db/client';
 import { exportInput } from '@/lib/api/inputs';
-import { viewSheet } from '@/lib/api/view-sheet';
-import { csvOf } from '@/lib/reports/workbook/write-csv';
+import { pools } from '@/worker/boot';
+import { tableStream } from '@/worker/result-stream';
 
-/** Exactly the view that the query describes, as CSV or XLSX: its rows, columns and order, in the batch's units. */
+/** Exactly the view that the query describes, as CSV or XLSX: its rows, columns and order, in the batch's units, written in a thread. */
 export const GET = door(
   atRevision<'table'>('take results away', async ({ request, person, revision, params }) => {
     const view = requireView(params.table, request);
     const { format } = parse(exportInput, queryOf(request));
-    const sheet = viewSheet({
+    const content = tableStream(pools(), {
+      file: databaseFile(),
+      office: person.office,
+      revision: revision.id,
       view,
       units: revision.units,
       parameters: await viewParameters(revision, view),
-      rows: () => iterateRows(db(), person.office, revision.id, view),
+      as: format,
     });
-    const name = `${revision.batchName} ${revision.letter} ${view.table}.${format}`;
-    return attachment(name, format === 'csv' ? textStream(csvOf(sheet)) : xlsxStream([sheet]));
+    return attachment(`${revision.batchName} ${revision.letter} ${view.table}.${format}`, content);
   }),
 );
