@@ -18,7 +18,7 @@ export function checkedWords(settings: Settings): { readonly checked: string; re
     settings.deflectionRatio === 'none' ? null : 'deflection',
     settings.swayRatio === 'none' ? null : 'sway',
     'other movements where Limits ask for them',
-    screened ? 'critical load factor of the plane frame' : null,
+    'critical load factor of the plane frame (whether first-order results hold)',
   ].filter((each) => each !== null);
   const left = [
     screened ? null : 'member and frame stability (by others): this is a check of stress and movement only',

@@ -134,6 +134,16 @@ describe('the results file', () => {
     expect(Object.keys(results.settings)).toHaveLength(14);
   });
 
+  it('says what was checked and what was not', async () => {
+    const from = source([cantileverFrame('K')]);
+    const results = resultsSchema.parse(JSON.parse(await written(from)));
+    expect(results.checked).toContain('whether buckling is negligible');
+    const byOthers = { ...from, settings: { ...settings, stability: 'by others' as const } };
+    const alone = resultsSchema.parse(JSON.parse(await written(byOthers)));
+    expect(alone.checked).not.toContain('buckling');
+    expect(alone.notChecked).toContain('stress and movement only');
+  });
+
   it('is the same bytes each time', async () => {
     expect(await written(source([cantileverFrame('K')]))).toBe(await written(source([cantileverFrame('K')])));
   });

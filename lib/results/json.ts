@@ -4,6 +4,7 @@ import { memberLine } from '@/lib/analysis/member-line';
 import type { Frame } from '@/lib/model/frame';
 import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
+import { checkedWords } from '@/lib/reports/cautions';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
 import type { Check, Extreme, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { resultsFormat, type FrameResult, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
@@ -157,7 +158,9 @@ export async function* resultsJson(source: ReportSource, options: { readonly all
   const files = input.files.map(({ name, sha256, size }) => ({ name, sha256, size }));
   yield `{"format":${JSON.stringify(resultsFormat)},"engine":${JSON.stringify(source.engine)},\n`;
   yield `"input":${JSON.stringify({ name: input.name, sha256: input.sha256, files })},\n`;
-  yield `"settings":${JSON.stringify(settingsJson(source.settings, source.origins))},\n"problems":[`;
+  yield `"settings":${JSON.stringify(settingsJson(source.settings, source.origins))},\n`;
+  const { checked, notChecked } = checkedWords(source.settings);
+  yield `"checked":${JSON.stringify(checked)},\n"notChecked":${JSON.stringify(notChecked)},\n"problems":[`;
   let comma = '\n';
   for (const problem of source.problems) {
     yield comma + JSON.stringify(problemJson(problem));

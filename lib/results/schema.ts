@@ -102,6 +102,9 @@ export const resultsSchema = z.strictObject({
     files: z.array(z.strictObject({ name: z.string(), sha256: z.string(), size: z.number().int() })),
   }),
   settings: z.record(z.string(), settingSchema),
+  /** What these settings have checked and what they leave out, in the words of cover and screens. */
+  checked: z.string(),
+  notChecked: z.string(),
   problems: z.array(problemSchema),
   frames: z.array(frameResultSchema),
 });
