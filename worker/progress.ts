@@ -12,6 +12,8 @@ export interface RunProgress {
   /** Frames a second over the last seconds; null until known. */
   readonly rate: number | null;
   readonly secondsLeft: number | null;
+  /** Different frames that a thread has in hand now. */
+  readonly inHand: readonly number[];
   /** The frames solved last, newest first. */
   readonly last: readonly Omit<SolvedFrame, 'version'>[];
 }

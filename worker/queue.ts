@@ -87,6 +87,7 @@ export class WorkQueue {
       done,
       rate,
       secondsLeft: rate && run ? Math.ceil(waiting / rate) : null,
+      inHand: run?.versionsInHand ?? [],
       last: run?.meter?.last ?? [],
     };
   }

@@ -1,6 +1,6 @@
 /** One run in the queue: which frame versions are left, which are in hand, and how it ends. */
 import { finishJob, leaseJob, updateJobProgress, type JobRecord } from '@/db/queries/jobs';
-import { findRevisionById, updateRevisionState } from '@/db/queries/revisions';
+import { countRevisionVerdicts, findRevisionById, updateRevisionState } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
 import { listVersions } from '@/db/queries/waiting';
 import type { Settings } from '@/lib/model/settings';
@@ -31,6 +31,7 @@ export class RunWork {
   private total = 0;
   private left = 0;
   private chunksInHand = 0;
+  private readonly ownInHand = new Set<number>();
   private stopped = false;
   private failure: string | null = null;
 
@@ -51,6 +52,11 @@ export class RunWork {
   /** Different frames of the revision and those not solved yet; null before the run has begun. */
   get counts(): { readonly total: number; readonly waiting: number } | null {
     return this.waiting && { total: this.total, waiting: this.left };
+  }
+
+  /** Versions of this run that a thread has in hand. */
+  get versionsInHand(): readonly number[] {
+    return [...this.ownInHand];
   }
 
   /** Nothing more to give, nothing in hand. */
@@ -81,7 +87,10 @@ export class RunWork {
     // What another run has in hand comes later; the thread leaves alone what is solved by then.
     if (versions.length === 0) return null;
     this.waiting = left;
-    for (const version of versions) this.inHand.add(version);
+    for (const version of versions) {
+      this.inHand.add(version);
+      this.ownInHand.add(version);
+    }
     this.chunksInHand++;
     return { run: this, versions };
   }
@@ -106,7 +115,10 @@ export class RunWork {
     } catch (error) {
       this.fail(error);
     } finally {
-      for (const version of versions) this.inHand.delete(version);
+      for (const version of versions) {
+        this.inHand.delete(version);
+        this.ownInHand.delete(version);
+      }
       this.chunksInHand--;
     }
   }
@@ -115,8 +127,8 @@ export class RunWork {
   async finish(): Promise<void> {
     const { database, file, pools } = this.options;
     const { db, raw } = database;
-    const { total, waiting } = countWaiting(raw, this.revision);
-    const kept = `${(total - waiting).toLocaleString('en-GB')} of ${total.toLocaleString('en-GB')} frames are kept`;
+    const { waiting } = countWaiting(raw, this.revision);
+    const kept = `${await this.keptWords()} are kept`;
     if (waiting === 0 && this.failure === null) {
       const task: FailuresTask = { file, office: this.office, revision: this.revision };
       await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'tellFailures' });
@@ -130,6 +142,17 @@ export class RunWork {
       await updateRevisionState(db, this.office, this.revision, ['running'], 'stopped', { reason: `Stopped. ${kept}.` });
       await finishJob(db, this.job.id, 'stopped');
     }
+  }
+
+  /** "140 of 1,000 frames": those of the sheets, of which several may be the same and are solved once. */
+  private async keptWords(): Promise<string> {
+    const { over, near, within, notChecked, waiting } = await countRevisionVerdicts(
+      this.options.database.db,
+      this.office,
+      this.revision,
+    );
+    const done = over + near + within + notChecked;
+    return `${done.toLocaleString('en-GB')} of ${(done + waiting).toLocaleString('en-GB')} frames`;
   }
 
   private async begin(): Promise<number[]> {

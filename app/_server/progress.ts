@@ -1,5 +1,6 @@
 import 'server-only';
 import { db } from '@/db/client';
+import { listPlacesOf } from '@/db/queries/run-certificate';
 import { countRevisionVerdicts, findRevision } from '@/db/queries/revisions';
 import type { RunProgressData, RunState } from '@/components/run/run-data';
 import { notFound } from '@/lib/api/error';
@@ -9,6 +10,8 @@ import { time } from './dates';
 /** How far a run is, with the revision's state read anew. */
 export interface Progress extends RunProgressData {
   readonly revisionState: string;
+  /** Places, from 0, of the frames that are being solved now. */
+  readonly inHand: readonly number[];
   /** The frames solved last, newest first. */
   readonly last: readonly { readonly frame: string; readonly verdict: string; readonly ratio: number | null }[];
 }
@@ -16,7 +19,7 @@ export interface Progress extends RunProgressData {
 export async function progressOf(office: number, batch: number, letter: string): Promise<Progress> {
   const revision = await findRevision(db(), office, batch, letter);
   if (revision === undefined) throw notFound('revision');
-  const { state: going, total: different, rate, secondsLeft, last } = runProgress(revision.id);
+  const { state: going, total: different, rate, secondsLeft, inHand, last } = runProgress(revision.id);
   // The queue counts different frames; people count the frames of their sheets, of which several may be the same.
   const { waiting } = await countRevisionVerdicts(db(), office, revision.id);
   const total = revision.frames - revision.framesStopped;
@@ -29,6 +32,7 @@ export async function progressOf(office: number, batch: number, letter: string):
     secondsLeft,
     started: revision.runStartedAt === null ? null : time(revision.runStartedAt),
     message: revision.state === 'failed' || revision.state === 'stopped' ? revision.reason : null,
+    inHand: await listPlacesOf(db(), office, revision.id, inHand),
     last: last.map(({ frame, verdict, ratio }) => ({ frame, verdict, ratio })),
   };
 }

@@ -18,17 +18,23 @@ export interface GlanceCell {
 /** Above this many frames the strip's readout names verdict and ratio only, to keep the page light. */
 const longStrip = 3000;
 
-/** A frame that errors stop, or that was not run, is not checked; during a run it waits. */
-export function stripFrames(cells: readonly GlanceCell[], running = false): StripFrame[] {
-  return cells.map(({ id, status, verdict, ratio, group, check, subject, section, combination }) => {
+/**
+ * A frame that errors stop, or that was not run, is not checked; during a run it waits, or is in hand.
+ *
+ * @param inHand places, from 0, of the frames being solved
+ */
+export function stripFrames(cells: readonly GlanceCell[], running = false, inHand: readonly number[] = []): StripFrame[] {
+  const held = new Set(inHand);
+  return cells.map(({ index, id, status, verdict, ratio, group, check, subject, section, combination }) => {
     const waiting = running && status === 'waiting';
-    const reason = status === 'stopped' ? 'stopped by errors in its sheets' : status === 'waiting' ? 'not run yet' : null;
+    const reason =
+      status === 'stopped' ? 'stopped by errors in its sheets' : status === 'waiting' && !waiting ? 'not run yet' : null;
     const cell: StripFrame = {
       id,
       verdict: verdict ?? 'not checked',
       ratio,
       group,
-      ...(waiting && { state: 'waiting' as const }),
+      ...(waiting && { state: held.has(index) ? ('in hand' as const) : ('waiting' as const) }),
     };
     return cells.length > longStrip ? cell : { ...cell, check, subject, section, combination, reason };
   });

@@ -11,12 +11,13 @@ interface OverSoFarProps {
   readonly nearLimit: number;
   readonly batch: number;
   readonly letter: string;
+  readonly going: boolean;
 }
 
 const most = 12;
 
 /** Frames over their limits, the newest first: in the order in which they came to be known. */
-export function OverSoFar({ cells, nearLimit, batch, letter }: OverSoFarProps) {
+export function OverSoFar({ cells, nearLimit, batch, letter, going }: OverSoFarProps) {
   const [seen, setSeen] = useState<readonly number[]>([]);
   const over = cells.filter((cell) => cell.verdict === 'over').map((cell) => cell.index);
   const known = new Set(seen);
@@ -24,9 +25,9 @@ export function OverSoFar({ cells, nearLimit, batch, letter }: OverSoFarProps) {
   if (fresh.length > 0) setSeen([...fresh.reverse(), ...seen]);
   const rows = [...fresh, ...seen].slice(0, most).flatMap((index) => cells[index] ?? []);
   return (
-    <Zone title="Over, newest first" note={`${over.length.toLocaleString('en-GB')} so far`}>
+    <Zone title="Over, newest first" note={noteOf(over.length, rows.length, going)}>
       {rows.length === 0 ? (
-        <p className="text-ink2">No frame is over its limits so far.</p>
+        <p className="text-ink2">No frame is over its limits{going ? ' so far' : ''}.</p>
       ) : (
         <table className="tbl tbl-side">
           <caption className="sr-only">Frames over their limits, the newest first</caption>
@@ -62,4 +63,9 @@ export function OverSoFar({ cells, nearLimit, batch, letter }: OverSoFarProps) {
       )}
     </Zone>
   );
+}
+
+function noteOf(over: number, shown: number, going: boolean): string {
+  const count = `${over.toLocaleString('en-GB')}${going ? ' so far' : ''}`;
+  return shown < over ? `${count}, the last ${shown} shown` : count;
 }

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { redirect } from 'next/navigation';
 import { pageRevision, type RevisionParams } from '@/app/_server/page-revision';
+import { certificateSoFar } from '@/app/_server/certificate';
 import { progressOf } from '@/app/_server/progress';
 import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
@@ -17,9 +18,10 @@ export default async function RunPage({ params }: { readonly params: Promise<Rev
   const { person, revision } = await pageRevision(params, 'run');
   const { batch, letter, runStartedAt } = revision;
   if (runStartedAt === null) redirect(pages.sheet(batch, letter, 'read'));
-  const [summary, progress] = await Promise.all([
+  const [summary, progress, certificate] = await Promise.all([
     findSummary(db(), person.office, revision.id),
     progressOf(person.office, batch, letter),
+    certificateSoFar(revision),
   ]);
   if (summary === undefined) throw new Error(`Expected a summary of revision ${revision.id}`);
   return (
@@ -33,7 +35,7 @@ export default async function RunPage({ params }: { readonly params: Promise<Rev
         letter={letter}
         nearLimit={revision.settings?.nearLimit ?? 0.9}
         may={may(person, 'run')}
-        first={{ progress, cells: summary.cells }}
+        first={{ progress, cells: summary.cells, certificate }}
       />
     </Sheet>
   );

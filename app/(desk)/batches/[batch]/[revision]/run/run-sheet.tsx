@@ -1,8 +1,9 @@
 'use client';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
-import { useEffect, useState } from 'react';
+import { useEffect } from 'react';
 import type { RunProgressData } from '@/components/run/run-data';
+import { RunCertificate, type RunCertificateData } from '@/components/run/run-certificate';
 import { RunProgress } from '@/components/run/run-progress';
 import { Strip } from '@/components/strip/strip';
 import { Button, ButtonLink } from '@/components/ui/button';
@@ -15,6 +16,12 @@ import { OverSoFar } from './over-so-far';
 
 interface Told extends RunProgressData {
   readonly revisionState: string;
+  readonly inHand: readonly number[];
+}
+
+interface Summed {
+  readonly cells: readonly GlanceCell[];
+  readonly certificate: RunCertificateData | null;
 }
 
 interface RunSheetProps {
@@ -22,7 +29,7 @@ interface RunSheetProps {
   readonly letter: string;
   readonly nearLimit: number;
   readonly may: boolean;
-  readonly first: { readonly progress: Told; readonly cells: readonly GlanceCell[] };
+  readonly first: Summed & { readonly progress: Told };
 }
 
 const going: readonly string[] = ['waiting', 'running', 'stopping'];
@@ -44,8 +51,11 @@ export function RunSheet({ batch, letter, nearLimit, may, first }: RunSheetProps
   const strip = useQuery({
     // The last count of a run that has ended is asked for once more, so that the strip ends complete.
     queryKey: ['strip', batch, letter, goes ? 'going' : `${run.state} ${run.done}`],
-    queryFn: ({ signal }) => request<{ summary: { cells: GlanceCell[] } }>(api.part(batch, letter, 'summary'), { signal }),
-    placeholderData: (before) => before ?? { summary: { cells: [...first.cells] } },
+    queryFn: ({ signal }) =>
+      request<{ summary: Pick<Summed, 'cells'>; certificate: Summed['certificate'] }>(api.part(batch, letter, 'summary'), {
+        signal,
+      }),
+    placeholderData: (before) => before ?? { summary: { cells: first.cells }, certificate: first.certificate },
     staleTime: 0,
     refetchInterval: goes ? Math.max(1000, first.cells.length) : false,
   });
@@ -53,12 +63,13 @@ export function RunSheet({ batch, letter, nearLimit, may, first }: RunSheetProps
     mutationFn: (method: 'POST' | 'DELETE') => request<{ run: Told }>(api.part(batch, letter, 'run'), { method }),
     onSuccess: (answer) => client.setQueryData(progressKey, answer),
   });
-  const [begun] = useState(goes);
+  const drawn = first.progress.state;
   useEffect(() => {
     // The title block's state and the sheet index come from the server.
-    if (begun && !goes) router.refresh();
-  }, [begun, goes, router]);
+    if (run.state !== drawn) router.refresh();
+  }, [run.state, drawn, router]);
   const cells = strip.data?.summary.cells ?? first.cells;
+  const certificate = strip.data?.certificate ?? first.certificate;
   const acts = (
     <>
       {may && (run.state === 'running' || run.state === 'waiting') && (
@@ -81,7 +92,7 @@ export function RunSheet({ batch, letter, nearLimit, may, first }: RunSheetProps
   const main = (
     <Zone>
       <Strip
-        frames={stripFrames(cells, goes)}
+        frames={stripFrames(cells, goes, run.inHand)}
         nearLimit={nearLimit}
         title={goes ? 'The strip so far' : undefined}
         note={goes ? 'a cell appears when its frame is solved, checked and kept' : undefined}
@@ -91,7 +102,10 @@ export function RunSheet({ batch, letter, nearLimit, may, first }: RunSheetProps
   );
   const side = (
     <>
-      <OverSoFar cells={cells} nearLimit={nearLimit} batch={batch} letter={letter} />
+      <OverSoFar cells={cells} nearLimit={nearLimit} batch={batch} letter={letter} going={goes} />
+      <Zone title={goes ? 'Certificate so far' : 'Certificate'} note="the worst of all frames">
+        <RunCertificate certificate={certificate} />
+      </Zone>
       {goes && (
         <Zone>
           <p>

@@ -3,7 +3,9 @@ import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { Working } from '@/components/working/working';
+import { Fact } from '@/components/ui/fact';
 import { Empty, Notice } from '@/components/ui/notice';
+import { powerText } from '@/components/ui/power-text';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { Columns, Zone } from '@/components/ui/sheet';
 import type { FrameDetail } from '@/app/_server/frame-detail';
@@ -85,7 +87,7 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
         <Zone>
           <Working
             title={`${check.where}, ${check.check}`}
-            reference={check.reference}
+            reference={check.working.some((line) => line.what === 'reference') ? null : check.reference}
             lines={check.working}
             ratio={check.ratio}
             verdict={check.verdict}
@@ -97,18 +99,18 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
       <Zone title="Certificate and assumptions">
         <dl className="facts">
           <Fact name="mass of one frame">
-            <QuantityText value={frame.mass} quantity="mass" units={units} />
+            {frame.mass === null ? 'not known' : <QuantityText value={frame.mass} quantity="mass" units={units} />}
             {frame.count !== 1 && `, ${frame.count} off`}
           </Fact>
           {frame.certificate && (
             <>
-              <Fact name="residual of the solution">{small(frame.certificate.residual)}</Fact>
-              <Fact name="equilibrium of loads and reactions">{small(frame.certificate.equilibrium)}</Fact>
+              <Fact name="residual of the solution">{powerText(frame.certificate.residual)}</Fact>
+              <Fact name="equilibrium of loads and reactions">{powerText(frame.certificate.equilibrium)}</Fact>
               <Fact name="digits left">{frame.certificate.digits.toFixed(1)}</Fact>
               <Fact name="second analysis">
                 {frame.certificate.second === null
                   ? `not made${frame.certificate.secondReason === null ? '' : `: ${frame.certificate.secondReason}`}`
-                  : `agrees to ${small(frame.certificate.second)}`}
+                  : `agrees to ${powerText(frame.certificate.second)}`}
               </Fact>
             </>
           )}
@@ -125,23 +127,6 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
     </>
   );
   return <Columns main={main} side={side} />;
-}
-
-function Fact({ name, children }: { readonly name: string; readonly children: React.ReactNode }) {
-  return (
-    <div className="border-hair flex justify-between gap-4 border-b py-1">
-      <dt className="text-ink2">{name}</dt>
-      <dd>{children}</dd>
-    </div>
-  );
-}
-
-/** "3.1 · 10⁻¹⁵" */
-function small(value: number): string {
-  if (value === 0) return '0';
-  const [digits = '', power = ''] = value.toExponential(1).split('e');
-  const raised = [...String(Number(power))].map((letter) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(letter)] ?? '⁻').join('');
-  return `${digits} · 10${raised}`;
 }
 
 function checkWords({ checks }: FrameDetail): string {

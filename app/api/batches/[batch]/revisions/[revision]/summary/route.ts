@@ -3,6 +3,7 @@ import { door } from '@/app/_server/door';
 import { queryOf } from '@/app/_server/input';
 import { db } from '@/db/client';
 import { findSummary, listParameterRatios } from '@/db/queries/summary';
+import { certificateSoFar } from '@/app/_server/certificate';
 import { notFound } from '@/lib/api/error';
 
 /**
@@ -17,6 +18,7 @@ export const GET = door(
     }
     const summary = await findSummary(db(), person.office, revision.id);
     if (summary === undefined) throw notFound('revision');
-    return Response.json({ state: revision.state, summary });
+    const certificate = await certificateSoFar(revision);
+    return Response.json({ state: revision.state, summary, certificate });
   }),
 );
