@@ -5,7 +5,7 @@ import { ResultTable } from '@/components/tables/result-table';
 import { api, pages } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 import { rowsAddress } from '@/lib/api/rows-address';
-import { viewToSearch } from '@/lib/api/view-address';
+import { listToSearch } from '@/lib/api/view-address';
 import { offeredColumns, type ParameterColumn } from '@/lib/tables/shown-columns';
 import type { Row, RowPage, TableName } from '@/lib/tables/view';
 import type { System } from '@/lib/units/quantity';
@@ -44,8 +44,8 @@ export function TableSheet({ batch, letter, table, units, nearLimit, parameters,
     enabled: facetsWanted,
   });
   const [columns] = useState(() => offeredColumns(table, parameters));
-  const list = table === 'frames' ? view : undefined;
-  const listSearch = list === undefined ? '' : viewToSearch({ ...list, columns: null });
+  // A frame opened from here walks through the frames of this view, in its order; problems stand in no such order.
+  const listSearch = table === 'problems' ? '' : listToSearch(view);
   const hrefOf = useCallback(
     (row: Row) => (row.frameIndex === null ? null : `${pages.frame(batch, letter, row.frameIndex + 1)}${listSearch}`),
     [batch, letter, listSearch],

@@ -1,7 +1,7 @@
 import 'server-only';
 import { db } from '@/db/client';
 import type { RevisionRecord } from '@/db/queries/revisions';
-import { findSummary } from '@/db/queries/summary';
+import { listParameters } from '@/db/queries/summary';
 import { notFound } from '@/lib/api/error';
 import { strictView } from '@/lib/api/strict-view';
 import type { ParameterColumn } from '@/lib/tables/shown-columns';
@@ -20,7 +20,7 @@ export function requireView(table: string, request: Request): View {
 
 /** The parameters of the batch's families, which tables offer as columns and filters. */
 export async function parametersOf(revision: RevisionRecord): Promise<readonly ParameterColumn[]> {
-  return (await findSummary(db(), revision.office, revision.id))?.parameters ?? [];
+  return listParameters(db(), revision.office, revision.id);
 }
 
 /** The same, where the view shows any. */

@@ -17,7 +17,7 @@ interface CautionsProps {
 /** Cautions, once a page, plainly: what was checked, what was not, and what no result here is. */
 export function Cautions({ checked, notChecked }: CautionsProps) {
   return (
-    <aside className="cautions" aria-label="Cautions">
+    <aside className="cautions" id="cautions" aria-label="Cautions">
       {checked && (
         <p>
           <b>Checked:</b> {checked}.
@@ -31,6 +31,22 @@ export function Cautions({ checked, notChecked }: CautionsProps) {
       )}
       <p>{cautions}</p>
     </aside>
+  );
+}
+
+/** At the head of a page of one frame: what was checked and what was not, with the way to the cautions in full at its foot. */
+export function CheckedAtOnce({ checked, notChecked }: CautionsProps) {
+  return (
+    <p className="checked-at-once">
+      {checked ? (
+        <>
+          <b>Checked:</b> {checked}. <b>Not checked:</b> {notChecked}.{' '}
+        </>
+      ) : (
+        'Nothing was checked. '
+      )}
+      A linear-elastic plane model of what the sheets say. <a href="#cautions">Cautions</a>
+    </p>
   );
 }
 

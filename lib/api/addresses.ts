@@ -1,6 +1,6 @@
 /** Addresses of pages and of the API, written once. Revisions are named by their letter within a batch. */
 import type { TableName, View } from '@/lib/tables/view';
-import { viewToSearch } from './view-address';
+import { listToSearch, viewToSearch } from './view-address';
 
 const e = encodeURIComponent;
 
@@ -18,7 +18,7 @@ export const pages = {
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>
-    `/batches/${batch}/${e(letter)}/frames/${number}${list === undefined ? '' : viewToSearch({ ...list, columns: null })}`,
+    `/batches/${batch}/${e(letter)}/frames/${number}${list === undefined ? '' : listToSearch(list)}`,
 } as const;
 
 export const api = {

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { View } from '@/lib/tables/view';
-import { viewFromParams, viewToParams, viewToSearch } from './view-address';
+import { listFromParams, listToSearch, viewFromParams, viewToParams, viewToSearch } from './view-address';
 
 const read = (table: View['table'], text: string) => viewFromParams(table, new URLSearchParams(text));
 
@@ -65,5 +65,21 @@ describe('the address of a view', () => {
       }),
       { seed: 20261201 },
     );
+  });
+
+  it('names the table whose list a frame is walked through, where that is not the frames’', () => {
+    const list: View = {
+      table: 'members',
+      filters: [{ column: 'verdict', op: 'in', values: ['over'] }],
+      sort: { column: 'ratio', descending: true },
+      columns: null,
+    };
+    expect(listToSearch(list)).toBe('?list=members&verdict=over&sort=-ratio');
+    expect(listFromParams(new URLSearchParams(listToSearch(list)))).toEqual(list);
+    const frames: View = { ...list, table: 'frames' };
+    expect(listToSearch(frames)).toBe('?verdict=over&sort=-ratio');
+    expect(listFromParams(new URLSearchParams(listToSearch(frames)))).toEqual(frames);
+    expect(listFromParams(new URLSearchParams('list=problems')).table).toBe('frames');
+    expect(listFromParams(new URLSearchParams('list=nothing')).table).toBe('frames');
   });
 });

@@ -6,10 +6,10 @@
  * A repeated key is a list of values, `a..b` (either end open) a range in SI, `~text` text contained; a plain
  * value that would read as one of these is written after `=`. A leading `-` sorts downwards; no sort = sheet order.
  */
-import { tables, type Filter, type TableName, type View } from '@/lib/tables/view';
+import { tableNames, tables, type Filter, type TableName, type View } from '@/lib/tables/view';
 
 /** Keys that are not columns. */
-const reserved = new Set(['sort', 'columns', 'after', 'before', 'size', 'format', 'frame-of']);
+const reserved = new Set(['sort', 'columns', 'after', 'before', 'size', 'format', 'list']);
 
 const number = String.raw`[-+]?(?:\d+\.?\d*|\.\d+)(?:e[-+]?\d+)?`;
 const range = new RegExp(`^(${number})?\\.\\.(${number})?$`, 'i');
@@ -24,6 +24,19 @@ export function viewToParams(view: View): URLSearchParams {
   if (view.sort) params.set('sort', (view.sort.descending ? '-' : '') + view.sort.column);
   if (view.columns) params.set('columns', view.columns.map(listItem).join(','));
   return params;
+}
+
+/** The list that a frame's page walks through: that of frames where the address names no other. */
+export function listFromParams(params: URLSearchParams): View {
+  const named = tableNames.find((table) => table === params.get('list') && table !== 'problems');
+  return { ...viewFromParams(named ?? 'frames', params), columns: null };
+}
+
+/** The same list, in the address of a frame's page. */
+export function listToSearch(list: View): string {
+  const search = viewToSearch({ ...list, columns: null });
+  if (list.table === 'frames') return search;
+  return `?list=${list.table}${search === '' ? '' : `&${search.slice(1)}`}`;
 }
 
 /** Reads an address as far as it makes sense: what names no column of the table is left out. */

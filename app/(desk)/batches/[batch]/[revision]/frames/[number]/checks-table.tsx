@@ -71,15 +71,15 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
                   {check.where}
                 </button>
               </th>
-              <td>{check.check}</td>
-              <td>{check.combination ?? ''}</td>
+              <td className="tbl-wraps">{check.check}</td>
+              <td className="tbl-wraps">{check.combination ?? ''}</td>
               <td className="num">{formatQuantity(check.value, check.quantity, units)}</td>
               <td className="num">
                 <QuantityText value={check.limit} quantity={check.quantity} units={units} />
               </td>
               <td className="num">
                 <span className="tbl-ratio">
-                  <LevelBar ratio={check.ratio} verdict={check.verdict} />
+                  <LevelBar ratio={check.ratio} verdict={check.verdict} width={46} />
                   <RatioText ratio={check.ratio} verdict={check.verdict} nearLimit={nearLimit} />
                   <VerdictMark verdict={check.verdict} />
                   <span className="sr-only">{check.verdict}</span>

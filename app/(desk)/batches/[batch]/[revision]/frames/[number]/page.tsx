@@ -8,14 +8,15 @@ import { parametersOf } from '@/app/_server/view';
 import { FrameWalk } from '@/components/sheet-index/frame-walk';
 import { sentenceOf } from '@/components/tables/table-words';
 import { TitleBlock } from '@/components/title-block/title-block';
-import { Cautions } from '@/components/ui/notice';
+import { Cautions, CheckedAtOnce } from '@/components/ui/notice';
 import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
-import { findFrame, findNeighbours } from '@/db/queries/frames';
+import { findFrame, findNeighbours, type Neighbours } from '@/db/queries/frames';
 import { api, pages } from '@/lib/api/addresses';
-import { viewFromParams } from '@/lib/api/view-address';
+import { listFromParams } from '@/lib/api/view-address';
 import { offeredColumns } from '@/lib/tables/shown-columns';
 import { titleOf } from '../../_head/revision-head';
+import type { View } from '@/lib/tables/view';
 import { FrameSheet } from './frame-sheet';
 
 export const metadata: Metadata = { title: 'Frame' };
@@ -31,12 +32,14 @@ export default async function FramePage({ params, searchParams }: FramePageProps
   const { person, revision } = await pageRevision(params, `frames/${number}`);
   const asked = toParams(await searchParams);
   const detail = await pageThing(frameDetail(revision, number, null));
-  const view = { ...viewFromParams('frames', asked), columns: null };
+  const view = listFromParams(asked);
   const around = await findNeighbours(db(), person.office, revision.id, detail.number - 1, view);
   const { batch, letter, units } = revision;
-  const filtered = view.filters.length > 0 || view.sort !== null;
+  const filtered = view.filters.length > 0 || view.sort !== null || view.table !== 'frames';
   const parameters = filtered ? await parametersOf(revision) : [];
-  const sentence = filtered ? sentenceOf(view, offeredColumns('frames', parameters), units) : 'Frames, in sheet order';
+  const sentence = filtered
+    ? listWords(sentenceOf(view, offeredColumns(view.table, parameters), units), view)
+    : 'frames, in sheet order';
   const neighbour = async (index: number | null) => {
     const frame = index === null ? undefined : await findFrame(db(), person.office, revision.id, index);
     return frame === undefined ? null : { id: frame.id, href: pages.frame(batch, letter, frame.index + 1, view) };
@@ -51,7 +54,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
       <FrameWalk
         previous={await neighbour(around.previous)}
         next={await neighbour(around.next)}
-        list={`in ${around.of.toLocaleString('en-GB')} ${sentence[0]!.toLowerCase()}${sentence.slice(1)}`}
+        list={placeWords(around, sentence)}
         listHref={pages.table(batch, letter, view)}
         tools={
           <a href={api.part(batch, letter, 'workbook')} download>
@@ -59,11 +62,25 @@ export default async function FramePage({ params, searchParams }: FramePageProps
           </a>
         }
       />
+      <CheckedAtOnce {...(detail.checks.length > 0 ? checkedWords(revision) : {})} />
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
       </h1>
       <FrameSheet batch={batch} letter={letter} first={detail} />
-      <Cautions {...checkedWords(revision)} />
+      <Cautions />
     </Sheet>
   );
+}
+
+/** "frames where verdict is over, sorted by ratio"; of another table, "frames of members where role is rafter, sorted by …" */
+function listWords(sentence: string, { table }: View): string {
+  const small = `${sentence[0]!.toLowerCase()}${sentence.slice(1)}`;
+  return table === 'frames' ? small : `frames of ${small}`;
+}
+
+/** "3rd of 19 …" is left to the numbers: "3 of 19 frames where …". */
+function placeWords({ place, of }: Neighbours, words: string): string {
+  const count = of.toLocaleString('en-GB');
+  const told = of === 1 ? words.replace(/^frames/, 'frame') : words;
+  return place === null ? `not among the ${count} ${told}` : `${place.toLocaleString('en-GB')} of ${count} ${told}`;
 }
