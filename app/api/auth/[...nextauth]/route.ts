@@ -1,13 +1,12 @@
 import NextAuth from 'next-auth';
 import { authOptions } from '@/app/_server/auth';
-import { door, type Params } from '@/app/_server/door';
+import { door } from '@/app/_server/door';
 
-type NextAuthHandler = (request: Request, context: { params: Promise<{ nextauth: string[] }> }) => Promise<Response>;
+interface AuthContext {
+  readonly params: Promise<{ nextauth: string[] }>;
+}
 
-const handle = (request: Request, { params }: Params<'nextauth'>) => {
-  const handler = NextAuth(authOptions()) as NextAuthHandler;
-  return handler(request, { params: params.then(({ nextauth }) => ({ nextauth: [nextauth].flat() })) });
-};
+const handle = (request: Request, context: AuthContext): Promise<Response> =>
+  door(() => (NextAuth(authOptions()) as typeof handle)(request, context))(request, { params: Promise.resolve({}) });
 
-export const GET = door<'nextauth'>(handle);
-export const POST = door<'nextauth'>(handle);
+export { handle as GET, handle as POST };
