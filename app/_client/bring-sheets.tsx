@@ -46,7 +46,7 @@ export function BringSheets({ to, named }: BringSheetsProps) {
         <Field
           className="mb-4 max-w-[480px]"
           label="Name of the batch"
-          hint="The file’s name if left blank."
+          hint="The file’s name if left blank; a set of several files is called that."
           maxLength={120}
           value={name}
           disabled={sending !== null}

@@ -90,5 +90,5 @@ export function readSummary(files: readonly { readonly name: string; readonly si
   const size = files.reduce((sum, file) => sum + file.size, 0);
   const name = files.length === 1 ? (files[0]?.name ?? '') : `${files.length} files`;
   const weight = size >= 1e6 ? `${(size / 1e6).toFixed(1)} MB` : `${Math.max(1, Math.round(size / 1e3))} kB`;
-  return `${name}, ${weight}, ${sheets} ${sheets === 1 ? 'sheet' : 'sheets'}`;
+  return sheets === 0 ? `${name}, ${weight}` : `${name}, ${weight}, ${sheets} ${sheets === 1 ? 'sheet' : 'sheets'}`;
 }

@@ -42,7 +42,7 @@ export function planDeflected(
   const times = timesFor(scale);
   const lines = (share: number) => scene.axes.map((axis) => path(moved(axis, scale, times, share)));
   for (const axis of scene.axes) scene.taken.lines(moved(axis, scale, times, 1));
-  const wishes = still ? [] : movementWishes(scene, result, times);
+  const wishes = still ? [] : [...bendingWish(scene, result, moved, times), ...movementWishes(scene, result, times)];
   return {
     scene,
     lines,
@@ -56,6 +56,35 @@ function roundDown(value: number): number {
   const power = 10 ** Math.floor(Math.log10(value));
   const step = [5, 2, 1].find((one) => one * power <= value * (1 + 1e-9)) ?? 1;
   return step * power;
+}
+
+/**
+ * The member that bends most off the line between its moved ends, named where that is the largest movement on the sheet:
+ * the nodes of a stiff bent hardly move while its beam sags.
+ */
+function bendingWish(
+  { axes, data, paper, font }: Scene,
+  result: DrawingResult,
+  moved: (axis: MemberAxis, scale: number, times: number, share: number) => Point[],
+  times: number,
+): LabelWish[] {
+  const bent = axes
+    .flatMap((axis) => {
+      const deflection = result.lines[axis.index]?.extremes.deflection;
+      return deflection ? [{ axis, ...deflection }] : [];
+    })
+    .sort((p, q) => Math.abs(q.value) - Math.abs(p.value))[0];
+  const node = Math.max(0, ...result.displacements.flatMap((one) => [Math.abs(one.ux), Math.abs(one.uy)]));
+  if (!bent || Math.abs(bent.value) <= node) return [];
+  const { axis, value, at } = bent;
+  const xs = result.lines[axis.index]?.x ?? [];
+  const nearest = xs.reduce((best, x, i) => (Math.abs(x - at) < Math.abs((xs[best] ?? 0) - at) ? i : best), 0);
+  const point = moved(axis, paper.scale, times, 1)[nearest];
+  if (!point) return [];
+  const text = `${data.members[axis.index]?.id ?? ''} deflects ${formatQuantity(Math.abs(value), 'displacement', data.units)} ${unitLabel('displacement', data.units)}`;
+  const out = Math.sign(value) || 1;
+  const places = around(point, { x: axis.n.x * out, y: axis.n.y * out }, text, font, 7);
+  return [{ key: 'bend', text, className: 'd-extreme', size: font, places, must: true, from: point }];
 }
 
 /** The largest movement along x and along y of any node, and on a large view the next ones too. */

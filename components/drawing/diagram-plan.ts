@@ -44,8 +44,9 @@ export function planDiagram(
   const tall = (axes: readonly MemberAxis[]) => tallest(axes, height, large);
   const scene = setScene(data, width, height, large, (axes) => {
     const k = flat ? 0 : tall(axes) / most;
-    const room = large ? 16 : 4;
     return axes.flatMap((axis) => {
+      // figures are wider than they are high
+      const room = large ? 16 + 22 * Math.abs(axis.n.x) : 4;
       const one = result.lines[axis.index];
       if (!one) return [];
       return one.x.flatMap((x, i) => {

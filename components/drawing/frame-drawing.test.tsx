@@ -79,7 +79,9 @@ describe('the drawing of a frame', () => {
 
   it('draws geometry and says why there is nothing else where a frame is not solved', () => {
     render(<FrameDrawing data={{ ...simpleBeam(), chosen: null }} />);
-    expect(texts(large())).toContain('not solved, so there is nothing to draw here');
-    expect(document.querySelectorAll('[data-view="ratio"] path[data-member]')).toHaveLength(1);
+    expect(large().dataset.view).toBe('ratio');
+    expect(large().querySelectorAll('path[data-member]')).toHaveLength(1);
+    const diagram = document.querySelector('.d-small [data-view="diagram"]')!;
+    expect(texts(diagram)).toContain('not solved, so there is nothing to draw here');
   });
 });

@@ -5,6 +5,7 @@ import { Segments } from '../ui/segments';
 import { useKeys } from '../ui/use-keys';
 import { useWidth } from '../ui/use-width';
 import type { Force } from './diagram-plan';
+import { unitLabel } from '@/lib/units/batch-unit';
 import type { DrawingData, DrawingResult } from './drawing-data';
 import { DrawingReadout, type ReadPoint } from './drawing-readout';
 import { nearestPoint } from './nearest-point';
@@ -34,7 +35,8 @@ export function FrameDrawing({
   data,
   onChoose,
   loading = false,
-  initialView = 'diagram',
+  // without a solution its members are all there is to see
+  initialView = data.chosen ? 'diagram' : 'ratio',
   initialForce = 'M',
 }: FrameDrawingProps) {
   const [box, width] = useWidth<HTMLDivElement>(905);
@@ -123,7 +125,7 @@ export function FrameDrawing({
         {draw(large, width, height, true)}
         <Pointed data={data} point={point} />
       </svg>
-      <DrawingReadout data={data} result={result} point={point} />
+      {result && <DrawingReadout data={data} result={result} point={point} />}
       <div className="d-small">
         {small.map((name) => {
           const { title, note } = caption(name);
@@ -186,12 +188,12 @@ function captionOf(name: ViewName, data: DrawingData, force: Force): { title: st
     return {
       title: forceTitles[force],
       note: result
-        ? `${told(result)}${force === 'M' ? '; drawn on the tension side' : force === 'N' ? '; tension positive' : ''}`
+        ? `${told(result)}; ${unitLabel(force === 'M' ? 'moment' : 'force', data.units)}${force === 'M' ? ', drawn on the tension side' : force === 'N' ? ', tension positive' : ''}`
         : told(null),
     };
   if (name === 'loads') return { title: 'Loads and reactions', note: told(result) };
   if (name === 'deflected') return { title: 'Deflected line', note: told(data.movement ?? result) };
-  return { title: 'Ratio', note: 'each member filled to its governing ratio' };
+  return { title: 'Ratio', note: result ? 'each member filled to its governing ratio' : 'nothing is checked yet' };
 }
 
 /** 5 mm squares, behind drawings only. */

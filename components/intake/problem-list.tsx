@@ -63,7 +63,9 @@ export function ProblemList({ problems, selected, onSelect }: ProblemListProps) 
                 {several && problem.sheet && problem.file && <span className="unit block">{problem.file}</span>}
               </th>
               <td className="mono">{problem.cell ?? ''}</td>
-              <td className="mono problem-found">{problem.found ?? <span className="text-ink3">(blank)</span>}</td>
+              <td className="mono problem-found">
+                {problem.found ?? (problem.cell !== null && <span className="text-ink3">(blank)</span>)}
+              </td>
               <td className="tc-wordy problem-message">{problem.message}</td>
               <td className="tc-wordy problem-frames">{frameWords(problem)}</td>
             </tr>

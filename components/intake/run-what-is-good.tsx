@@ -16,6 +16,7 @@ export function RunWhatIsGood({ letter, good, stopped, children }: RunWhatIsGood
       <div>
         <h2>{good === 0 ? 'No frame can run yet' : stopped > 0 ? 'Run what is good' : 'Every frame can run'}</h2>
         <p>
+          {good === 0 && 'Mend the errors where they stand, then bring the mended sheets in as the next revision. '}
           {good > 0 && `${frames(good)} ${good === 1 ? 'runs' : 'run'} now as revision ${letter}. `}
           {stopped > 0 &&
             `The ${stopped === 1 ? 'stopped frame stays' : `${stopped.toLocaleString('en-GB')} stopped frames stay`} in the batch, not checked, until a mended upload becomes the next revision.`}

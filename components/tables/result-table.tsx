@@ -2,11 +2,12 @@
 import { createColumnHelper, rowSortingFeature, tableFeatures, useTable } from '@tanstack/react-table';
 import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import type { System } from '@/lib/units/quantity';
-import type { Column, Row, RowPage, View } from '@/lib/tables/view';
+import type { Cell, Column, Row, RowPage, View } from '@/lib/tables/view';
 import { Empty, Notice } from '../ui/notice';
 import { FilterSentence, type FilterSentenceProps } from './filter-sentence';
 import { cellClass, HeadCell } from './head-cell';
 import { TableCell } from './table-cell';
+import { formatRatio } from '@/lib/units/format';
 import { numberText, sentenceOf, shownColumns, tableNouns } from './table-words';
 
 interface ResultTableProps extends Pick<FilterSentenceProps, 'facets' | 'onFacets' | 'onView'> {
@@ -143,7 +144,7 @@ export function ResultTable(props: ResultTableProps) {
               </tr>
             ))}
           </tbody>
-          {page && rows.length > 0 && <Totals page={page} shown={shown} view={view} units={units} />}
+          {page && rows.length > 0 && <Totals page={page} shown={shown} view={view} units={units} nearLimit={nearLimit} />}
         </table>
         {page === undefined && !error && <p className="tbl-reading">Reading {tableNouns[view.table].toLowerCase()} …</p>}
         {page && rows.length === 0 && <NoRows page={page} view={view} onView={onView} />}
@@ -195,20 +196,30 @@ export function ResultTable(props: ResultTableProps) {
 const linked = (column: Column, columns: readonly Column[]) =>
   column.key === (columns.some((one) => one.key === 'frame') ? 'frame' : 'cell');
 
-function Totals({ page, shown, view, units }: { page: RowPage; shown: readonly Column[]; view: View; units: System }) {
+interface TotalsProps {
+  readonly page: RowPage;
+  readonly shown: readonly Column[];
+  readonly view: View;
+  readonly units: System;
+  readonly nearLimit: number;
+}
+
+/** Sums, and the worst ratio, over every row of the view. */
+function Totals({ page, shown, view, units, nearLimit }: TotalsProps) {
   if (Object.keys(page.totals).length === 0) return null;
   return (
     <tfoot>
       <tr>
         {shown.map((column, i) => {
           const total = page.totals[column.key];
-          const text = typeof total === 'number' ? numberText(total, column, null, units) : (total ?? '');
+          const text = totalText(total ?? null, column, units, nearLimit);
           return i === 0 ? (
             <th key={column.key} scope="row">
               {text || `${page.matching.toLocaleString('en-GB')} ${tableNouns[view.table].toLowerCase()}`}
             </th>
           ) : (
             <td key={column.key} className={cellClass(column)}>
+              {column.kind === 'ratio' && text !== '' && <span className="tbl-worst">worst </span>}
               {text}
             </td>
           );
@@ -216,6 +227,12 @@ function Totals({ page, shown, view, units }: { page: RowPage; shown: readonly C
       </tr>
     </tfoot>
   );
+}
+
+/** A ratio keeps on its side of the limit here too. */
+function totalText(total: Cell, column: Column, units: System, nearLimit: number): string {
+  if (typeof total !== 'number') return total ?? '';
+  return column.kind === 'ratio' ? formatRatio(total, nearLimit) : numberText(total, column, null, units);
 }
 
 function NoRows({ page, view, onView }: { page: RowPage; view: View; onView: (view: View) => void }) {

@@ -43,7 +43,9 @@ export function numberText(value: Cell, column: Column, row: Row | null, units: 
   const quantity = quantityOf(column, row);
   // a plain number among stresses and movements is a factor or a share, for which one decimal says too little
   const decimals = column.quantity === 'byCheck' && quantity === 'number' ? 2 : (column.decimals ?? 2);
-  return formatQuantity(value, quantity, units, { decimals });
+  const text = formatQuantity(value, quantity, units, { decimals });
+  // whole numbers run to a batch's mass, which nobody reads without its thousands apart
+  return decimals === 0 ? text.replace(/\B(?=(\d{3})+$)/g, ',') : text;
 }
 
 /** An SI number of a filter as a person writes it, and without noise from the conversion. */

@@ -25,7 +25,7 @@ export function Working({ title, reference, lines, ratio, verdict, nearLimit, re
     <section className="working" aria-label={`Working: ${title}`}>
       <div className="zone-head">
         <h2>Working: {title}</h2>
-        {reference && <span className="zone-note zone-aside">{reference}</span>}
+        {reference && <span className="zone-note zone-aside">{withSubscripts(reference)}</span>}
       </div>
       <dl className="working-lines">
         {lines.map((line, i) => (
@@ -68,7 +68,7 @@ const needsSpace = (_before: WorkingPart | undefined, part: WorkingPart): boolea
 function one(part: WorkingPart): ReactNode {
   switch (part.kind) {
     case 'text':
-      return part.text;
+      return withSubscripts(part.text);
     case 'symbol':
       return (
         <span className="w-symbol">
@@ -108,6 +108,13 @@ function one(part: WorkingPart): ReactNode {
         </span>
       );
   }
+}
+
+/** A symbol within a sentence as it is written by hand: "σ_v" with its v below. */
+function withSubscripts(text: string): ReactNode {
+  const pieces = text.split(/(?<=[\p{L}])_(\p{L}+)/u);
+  if (pieces.length === 1) return text;
+  return <span>{pieces.map((piece, i) => (i % 2 === 1 ? <sub key={i}>{piece}</sub> : piece))}</span>;
 }
 
 function Figure({ text, unit }: { readonly text: string; readonly unit?: string }) {

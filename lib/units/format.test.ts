@@ -28,6 +28,8 @@ describe('formatRatio', () => {
     expect(formatRatio(1.003, 0.9)).toBe('1.01');
     expect(formatRatio(1 + 1e-12, 0.9)).toBe('1.01');
     expect(formatRatio(0.897, 0.9)).toBe('0.89');
+    expect(formatRatio(999.994, 0.9)).toBe('999.99');
+    expect(formatRatio(3.015e9, 0.9)).toBe('> 999');
     expect(formatRatio(0.9, 0.9)).toBe('0.90');
     expect(formatRatio(0.904, 0.9)).toBe('0.90');
     expect(formatRatio(0.456, 0.9)).toBe('0.46');

@@ -37,12 +37,14 @@ const typographic = (text: string): string => (/^-[0.]+$/.test(text) ? text.slic
 
 /**
  * A ratio with two decimals that never crosses a boundary of its verdict (engine, Verdicts):
- * 0.997 → 1.00 (near), 1.003 → 1.01 (over), 0.897 → 0.89 (within, near limit 0.9).
+ * 0.997 → 1.00 (near), 1.003 → 1.01 (over), 0.897 → 0.89 (within, near limit 0.9); from 1000 on it is "> 999".
  * @param nearLimit from which a ratio is near, up to 1 inclusive
  */
 export function formatRatio(ratio: number | null, nearLimit: number): string {
   if (ratio === null || Number.isNaN(ratio)) return noValue;
   if (ratio === Infinity) return '∞';
+  // what nobody could mend by degrees; its digits would say nothing and break every column
+  if (ratio >= 1000) return '> 999';
   const band = (r: number): number => (r > 1 ? 2 : r >= nearLimit ? 1 : 0);
   const nearest = Number(ratio.toFixed(2));
   if (band(nearest) === band(ratio)) return nearest.toFixed(2);

@@ -57,9 +57,13 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
   const side = (
     <>
       <Zone title="What was read" aside={mayBring && <Link href={pages.next(batch, letter)}>Bring mended sheets in</Link>}>
-        <WhatWasRead sheets={sheetLines(sheets, problems)} summary={readSummary(files, sheets.length)} />
+        {sheets.length === 0 ? (
+          <p>{readSummary(files, 0)}: nothing of it could be read.</p>
+        ) : (
+          <WhatWasRead sheets={sheetLines(sheets, problems)} summary={readSummary(files, sheets.length)} />
+        )}
       </Zone>
-      {defaults.length > 0 && (
+      {defaults.length > 0 && revision.frames > 0 && (
         <Zone title="Taken as default" note="Setup is silent">
           <DefaultsTaken defaults={defaults} />
         </Zone>
