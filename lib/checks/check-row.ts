@@ -20,7 +20,9 @@ export function keepGoverning(findings: Findings, rows: readonly Check[]): void 
   if (!governing) return;
   findings.checks.push(governing);
   findings.all?.push(...rows);
-  if (governing.verdict === 'not checked') findings.notChecked.add(`${governing.check}: ${governing.reason ?? 'not checked'}`);
+  // also where another combination is over: what was not checked there must not go unsaid
+  const refused = rows.find((row) => row.verdict === 'not checked');
+  if (refused) findings.notChecked.add(`${refused.check}: ${refused.reason ?? 'not a number'}`);
 }
 
 /**

@@ -6,7 +6,7 @@ import { namesSpan } from './limits';
 import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
 import { SAME, turningPoints } from './peak';
 import { valueAt } from './polynomial';
-import type { Span } from './spans';
+import { freeEnds, supported, type Span } from './spans';
 
 /** Roles whose deflection is only limited where Limits name them; `*` does not bring them in. */
 const onlyNamed: ReadonlySet<string | null> = new Set(['column', 'strut', 'tie', 'brace']);
@@ -59,17 +59,14 @@ export function checkDeflection(
  * The root of a cantilever whose both ends are joined to something is its one supported end, else its start.
  */
 function deflectionRule(frame: Frame, span: Span, findings: Findings): DeflectionRule {
-  const pieces = new Set(span.pieces.map((piece) => piece.member));
-  const supported = (node: number): boolean =>
-    frame.supports.some((s) => s.node === node && (s.ux !== 'free' || s.uy !== 'free' || s.rz !== 'free'));
-  const loose = (node: number): boolean =>
-    !supported(node) && !frame.members.some((m, i) => !pieces.has(i) && (m.start === node || m.end === node));
-  const start = loose(span.startNode);
-  const end = loose(span.endNode);
+  const { start, end } = freeEnds(frame, span);
   if (start !== end && (span.role === 'cantilever' || span.role === 'arm' || span.role === 'beam'))
     return { kind: 'cantilever', root: start ? 'end' : 'start' };
-  if (span.role !== 'cantilever') return { kind: 'span' };
-  const root = supported(span.endNode) && !supported(span.startNode) ? 'end' : 'start';
+  if (span.role !== 'cantilever') {
+    if (start !== end) findings.assumptions.add(`${span.name}: its end is free, but deflection is measured from the line between its ends; for that from its root, give it the role cantilever`); // prettier-ignore
+    return { kind: 'span' };
+  }
+  const root = supported(frame, span.endNode) && !supported(frame, span.startNode) ? 'end' : 'start';
   findings.assumptions.add(`${span.name}: a cantilever with no free end; its ${root} is taken as the root`);
   return { kind: 'cantilever', root };
 }

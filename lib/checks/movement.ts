@@ -86,7 +86,12 @@ export function checkMovement(
   for (let c = 0; c < states.length; c++) {
     const combination = states[c]!.name;
     const limit = limitIn(limits, combination);
-    if (!limit) continue;
+    if (!limit) {
+      findings.assumptions.add(
+        `${subject.subject ?? subject.check}: ${measure} has no limit in ${combination}, since limits name other combinations`,
+      );
+      continue;
+    }
     const allowed = allowance(limit, length_m);
     if (allowed === null || !(allowed > 0)) {
       const needs = measure === 'displacement' ? 'absolute' : 'ratio or absolute';

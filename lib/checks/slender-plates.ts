@@ -22,8 +22,8 @@ interface SlenderPlate {
 export interface PlateProportions {
   readonly known: boolean;
   readonly watch: readonly SlenderPlate[];
-  /** Clear web over its thickness where shear buckling would start (72 ε, EN 1993-1-1 6.2.6(6)) is passed. */
-  readonly webBucklesInShear: boolean;
+  /** Why the web's shear resistance is not known: it may buckle in shear before it yields. Null = it does not. */
+  readonly shear: string | null;
 }
 
 /** Stress below this part of yield counts as none: what is left of zero after rounding. */
@@ -36,14 +36,25 @@ const NOTHING = 1e-6;
 export function plateProportions(section: Section, turned: boolean, material: Material): PlateProportions {
   const { shape, dimensions: dims } = section;
   const fy = material.fy_Pa;
-  if (fy === null || shape === 'bar' || shape === 'round') return { known: true, watch: [], webBucklesInShear: false };
-  if (shape === null || dims === null) return { known: false, watch: [], webBucklesInShear: false };
+  if (fy === null || shape === 'bar' || shape === 'round') return { known: true, watch: [], shear: null };
+  if (shape === null || dims === null) return { known: false, watch: [], shear: null };
   const watch = material.standard === 'ASTM' ? byAisc(section, turned, material.E_Pa / fy) : byEurocode(section, turned, fy);
-  const { h, tw, tf, t } = dims;
-  const epsilon = Math.sqrt(235e6 / fy);
-  const web =
-    tw !== null && h !== null && tf !== null ? (h - 2 * tf) / tw : shape === 'rhs' && h !== null && t ? (h - 2 * t) / t : 0;
-  return { known: true, watch, webBucklesInShear: !turned && web > 72 * epsilon };
+  return { known: true, watch, shear: shearBuckling(section, turned, material, fy) };
+}
+
+/**
+ * Whether a web without stiffeners may buckle in shear: clear depth over thickness above 72 ε (EN 1993-1-1 6.2.6(6) with η = 1),
+ * for ASTM grades above 1.10 √(kv E/Fy), kv = 5.34 (AISC 360-22 G2.1). What it then carries is not computed.
+ */
+function shearBuckling(section: Section, turned: boolean, material: Material, fy: number): string | null {
+  const { h, b, tw, tf, t } = dimensionsOf(section);
+  const open = section.shape === 'I' || section.shape === 'channel';
+  if ((open && turned) || (!open && section.shape !== 'rhs')) return null;
+  const slenderness = open ? (h - 2 * tf) / tw : ((turned ? b : h) - 2 * t) / t;
+  const astm = material.standard === 'ASTM';
+  const limit = astm ? 1.1 * Math.sqrt((5.34 * material.E_Pa) / fy) : 72 * Math.sqrt(235e6 / fy);
+  if (slenderness <= limit) return null;
+  return `shear buckling of the web (h/t ${slenderness.toFixed(1)} > ${limit.toFixed(1)}), which is not computed`;
 }
 
 function byEurocode(section: Section, turned: boolean, fy: number): readonly SlenderPlate[] {

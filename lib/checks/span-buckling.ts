@@ -1,6 +1,6 @@
 import type { Frame, Member } from '@/lib/model/frame';
 import { criticalMoment, eulerLoad, lateralTorsional, type LateralTorsional } from './lateral-torsional';
-import type { Span } from './spans';
+import { freeEnds, type Span } from './spans';
 
 /** Buckling of a span as far as it does not depend on the combination, SI. */
 export interface SpanBuckling {
@@ -26,6 +26,10 @@ export interface SpanBuckling {
   readonly blank: readonly string[];
   /** Pieces drawn both ways with unlike lengths of top and bottom: which face a length means is open, so the longer holds for both. */
   readonly longerForBoth: boolean;
+  /** A blank length out of the plane of a span with a free end is twice the span's (Euler's strut, fixed and free). */
+  readonly twiceForFreeEnd: boolean;
+  /** An open section of one axis of symmetry buckles by twisting too; that load is not computed. */
+  readonly twists: boolean;
 }
 
 type LengthField = 'lengthMajor_m' | 'lengthMinor_m' | 'lengthLtbTop_m' | 'lengthLtbBottom_m';
@@ -45,7 +49,10 @@ function typedLength(frame: Frame, span: Span, field: LengthField): number | nul
   return null;
 }
 
-/** Critical loads and moments of a span, all of one section; blank lengths are the length of the span, never of a piece. */
+/**
+ * Critical loads and moments of a span, all of one section. Blank lengths are the length of the span, never of a piece; where
+ * an end of it is free, out of the plane twice that.
+ */
 export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
   const member = frame.members[span.pieces[0]!.member]!;
   const section = frame.sections[member.section]!;
@@ -54,14 +61,18 @@ export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
   const E = material.E_Pa;
   const blank = (Object.keys(words) as LengthField[]).filter((field) => typedLength(frame, span, field) === null);
   const length = (field: LengthField): number => typedLength(frame, span, field) ?? span.length_m;
-  const [Lmajor, Lminor] = [length('lengthMajor_m'), length('lengthMinor_m')];
+  const inPlane: LengthField = member.turned ? 'lengthMinor_m' : 'lengthMajor_m';
+  const outOfPlane: LengthField = member.turned ? 'lengthMajor_m' : 'lengthMinor_m';
+  const ends = freeEnds(frame, span);
+  const twiceForFreeEnd = blank.includes(outOfPlane) && (ends.start || ends.end);
+  const buckling = (field: LengthField): number => (twiceForFreeEnd && field === outOfPlane ? 2 : 1) * length(field);
+  const [Lmajor, Lminor] = [buckling('lengthMajor_m'), buckling('lengthMinor_m')];
   const ofFaces = [length('lengthLtbTop_m'), length('lengthLtbBottom_m')] as const;
   // a piece drawn against the others has its top at their bottom
   const longerForBoth = ofFaces[0] !== ofFaces[1] && span.pieces.some((piece) => piece.reversed);
   const [Ltop, Lbottom] = longerForBoth ? [Math.max(...ofFaces), Math.max(...ofFaces)] : ofFaces;
   const ltb = lateralTorsional(section, member.turned, material);
   const Mcr = (L: number): number => (ltb.kind === 'formula' ? criticalMoment(E, ltb.G, ltb.Iz, ltb.It, ltb.Iw, L) : Infinity);
-  const inPlane: LengthField = member.turned ? 'lengthMinor_m' : 'lengthMajor_m';
   return {
     A: p.A_m2,
     E,
@@ -79,5 +90,7 @@ export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
     blankInPlane: blank.includes(inPlane) ? (member.turned ? 'minor' : 'major') : null,
     blank: blank.map((field) => words[field]),
     longerForBoth,
+    twiceForFreeEnd,
+    twists: section.shape === 'channel',
   };
 }

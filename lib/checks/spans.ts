@@ -100,3 +100,16 @@ function joined(frame: Frame, among: ReadonlySet<number>, node: number): number 
   }
   return -1;
 }
+
+/** Which ends of a span are free: no other member, and no support that holds or springs it. */
+export function freeEnds(frame: Frame, span: Span): { readonly start: boolean; readonly end: boolean } {
+  const pieces = new Set(span.pieces.map((piece) => piece.member));
+  const free = (node: number): boolean =>
+    !supported(frame, node) && !frame.members.some((m, i) => !pieces.has(i) && (m.start === node || m.end === node));
+  return { start: free(span.startNode), end: free(span.endNode) };
+}
+
+/** Whether a support holds or springs a node in any direction. */
+export function supported(frame: Frame, node: number): boolean {
+  return frame.supports.some((s) => s.node === node && (s.ux !== 'free' || s.uy !== 'free' || s.rz !== 'free'));
+}

@@ -158,12 +158,36 @@ describe('blank lengths', () => {
         { id: 'B', x_m: 10, y_m: 0, place: null },
       ],
       members: [member('AX', 0, 1, { span: 'AB' }), member('BX', 2, 1, { span: 'ab' })],
-      supports: [],
+      supports: [0, 2].map((node) => ({ node, ux: 'fixed' as const, uy: 'fixed' as const, rz: 'free' as const, angle_rad: 0 })),
     });
     const found = check(two, { C1: { AX: line(4, { N: [-1e3] }), BX: line(6, { N: [-2e3] }) } });
     const row = rowOf(found, 'stability');
     expect(row.subjectKind).toBe('span');
     close(row.ratio, 2e3 / 0.6 / ((Math.PI ** 2 * 200e9 * 1e-5) / 100) / 0.04);
+  });
+
+  it('out of the plane are twice the length of a span with a free end: a strut fixed at its foot only', () => {
+    const post = (lengthMinor_m: number | null) =>
+      frame({
+        members: [member('AB', 0, 1, { lengthMinor_m })],
+        supports: [{ node: 0, ux: 'fixed', uy: 'fixed', rz: 'fixed', angle_rad: 0 }],
+      });
+    const ratioOf = (length: number | null) => {
+      const found = check(post(length), { C1: { AB: line(10, { N: [-1e3] }) } });
+      return { ratio: rowOf(found, 'stability').ratio, said: found.assumptions.join() };
+    };
+    const { ratio, said } = ratioOf(null);
+    close(ratio, ratioOf(20).ratio ?? NaN);
+    expect(said).toContain('AB: out of the plane twice the length of the span, since an end of it is free');
+    expect(ratioOf(20).said).not.toContain('twice');
+  });
+
+  it('do not make a channel a strut that is checked: it twists as it buckles', () => {
+    const channel = frame({ sections: [{ ...typedSection({ Iminor_m4: 4e-6 }), shape: 'channel' as const }] });
+    const row = rowOf(check(channel, { C1: { AB: line(10, { N: [-1e3] }) } }), 'stability');
+    expect(row).toMatchObject({ verdict: 'not checked', ratio: null });
+    expect(row.reason).toContain('torsional-flexural buckling of a channel');
+    expect(rowOf(check(channel, { C1: { AB: line(10, { N: [1e3] }) } }), 'stability').verdict).toBe('within');
   });
 });
 
@@ -262,5 +286,7 @@ describe('critical load factor', () => {
     const two = frame({ combinations: [combination('C1', 'strength'), combination('C2', 'strength')] });
     const states = [state('C1', 'strength', [], 7), state('C2', 'strength', [], 1.2)];
     expect(rowOf(check(two, {}, {}, states), 'critical load factor', null)).toMatchObject({ combination: 'C2', verdict: 'over' });
+    const unsaid = check(two, {}, {}, states).notChecked.filter((reason) => reason.startsWith('critical load factor'));
+    expect(unsaid).toEqual(['critical load factor: second-order effects not negligible (α_cr 4.2, stress factor included)']);
   });
 });

@@ -86,6 +86,7 @@ function whyNotOneMember(frame: Frame, span: Span): string | null {
 function note(span: Span, buckling: SpanBuckling, findings: Findings): void {
   if (buckling.blank.length > 0)
     findings.assumptions.add(`${span.name}: length ${buckling.blank.join(', ')} taken as the length of the span`);
+  if (buckling.twiceForFreeEnd) findings.assumptions.add(`${span.name}: out of the plane twice the length of the span, since an end of it is free`); // prettier-ignore
   if (buckling.ltb.kind !== 'formula') return;
   if (buckling.longerForBoth)
     findings.assumptions.add(
@@ -113,9 +114,10 @@ function screen(settings: Settings, of: SpanBuckling, state: ResultState, lines:
 
   let needs = NONE;
   if (N > 0 && of.NcrMinor === null) needs = ['I minor'];
+  if (N > 0 && of.twists) needs = [...needs, 'N_cr of torsional-flexural buckling of a channel, which is not computed'];
   if (N > 0 && of.blankInPlane !== null && !(state.order === 2 && settings.imperfections !== 'none')) {
     const amplified = state.criticalLoadFactor === null ? Infinity : state.criticalLoadFactor * f;
-    if (amplified < 10)
+    if (!(amplified >= 10))
       needs = [...needs, `length ${of.blankInPlane} (blank in plane, with α_cr × f = ${figure(amplified, 'down')} below 10)`];
   }
   if ((positive > 0 || negative > 0) && of.ltb.kind === 'needs') {

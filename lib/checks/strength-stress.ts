@@ -9,6 +9,9 @@ import { peakShearStress } from './shear-stress';
 import { plateProportions, slenderInCombination, type PlateProportions } from './slender-plates';
 import { StressRows, stressNames, stressSubject } from './stress-rows';
 
+/** Shear stress below this part of yield is what rounding leaves of none. */
+const NO_SHEAR = 1e-6;
+
 /** A row for each stress check of a member that can't be made at all. */
 export function stressNotChecked(frame: Frame, member: number, reason: string, findings: Findings): void {
   for (const check of stressNames) keepGoverning(findings, [notCheckedRow(stressSubject(frame, member, check), null, reason)]);
@@ -46,7 +49,7 @@ export function checkStress(
   for (let c = 0; c < lines.length; c++) {
     const line = lines[c]!;
     const combination = states[c]!.name;
-    const noW = modulusMissing(of, line);
+    const noW = modulusMissing(of, m.turned, line);
     const perTop = of.Wtop_m3 && !noW ? 1 / of.Wtop_m3 : 0;
     const perBottom = of.Wbottom_m3 && !noW ? 1 / of.Wbottom_m3 : 0;
     let noNormal = noW;
@@ -64,7 +67,13 @@ export function checkStress(
       continue;
     }
     const perAv = 1 / of.AvPeak_m2!;
-    const shear = rows.take(1, combination, peakShearStress(line, perAv));
+    const peak = peakShearStress(line, perAv);
+    if (plates.shear !== null && peak.value > NO_SHEAR * fy) {
+      rows.refuse(1, combination, plates.shear);
+      rows.refuse(2, combination, noNormal ?? plates.shear);
+      continue;
+    }
+    const shear = rows.take(1, combination, peak);
     if (noNormal) rows.refuse(2, combination, noNormal);
     else {
       const bound = Math.sqrt(normal * normal + 3 * shear * shear);
@@ -76,7 +85,7 @@ export function checkStress(
 }
 
 /** Why bending stress can't be had: a modulus is missing though the member bends (moments of rounding's size count as none). */
-function modulusMissing(of: InPlane, line: MemberLine): string | null {
+function modulusMissing(of: InPlane, turned: boolean, line: MemberLine): string | null {
   if (of.Wtop_m3 !== null && of.Wbottom_m3 !== null) return null;
   let moment = 0;
   let force = 0;
@@ -87,6 +96,7 @@ function modulusMissing(of: InPlane, line: MemberLine): string | null {
     for (let k = 0; k < V.length; k++) force += Math.abs(V[k]!) * h ** k;
   }
   if (moment <= 1e-9 * force * line.length) return null;
+  if (turned) return 'needs W minor';
   if (of.Wtop_m3 === null && of.Wbottom_m3 === null) return 'needs W top, W bottom';
   return of.Wtop_m3 === null ? 'needs W top' : 'needs W bottom';
 }
@@ -100,6 +110,4 @@ function notePlates(section: string, plates: PlateProportions, standard: Materia
     findings.assumptions.add(
       `Section ${section}: proportions not given, so its plates are taken as not slender (class 3 or better)`,
     );
-  if (plates.webBucklesInShear)
-    findings.assumptions.add(`Section ${section}: clear web deeper than 72 ε tw; shear buckling of the web is not checked`);
 }

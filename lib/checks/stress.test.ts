@@ -185,6 +185,8 @@ describe('what is missing is not checked', () => {
   it('without W a member that does not bend is checked all the same', () => {
     const frame = beamFrame({ sections: [typedSection({ Wtop_m3: null, Wbottom_m3: null })] });
     expect(reasons(frame)['normal stress']).toBe('needs W top, W bottom');
+    const turned = { ...frame, sections: [typedSection({ Iminor_m4: 1e-5 })], members: [member('AB', 0, 1, { turned: true })] };
+    expect(reasons(turned)['normal stress']).toBe('needs W minor');
     expect(rowOf(check(frame, { C1: { AB: line(10, { N: [1e6] }) } }), 'normal stress').value).toBe(1e8);
   });
 

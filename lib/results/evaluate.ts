@@ -24,6 +24,16 @@ export interface EvaluateOptions {
  * @returns status "not solved" with its failure where the frame moves freely, hangs apart or fails its certificate
  */
 export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
+  try {
+    return evaluate(analyser, frame, settings, options);
+  } catch (fault) {
+    // a fault met with one frame stops that frame, never the thousands beside it
+    const message = `The analysis met a fault with this frame: ${fault instanceof Error ? fault.message : String(fault)}`;
+    return unsolved(frame, { code: 'not-solved', message, node: null });
+  }
+}
+
+function evaluate(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
   const analysis = analyser.analyse(frame, { second: options.second, settings });
   if (!analysis.ok) return unsolved(frame, analysis.failure);
   const bad = analysis.states.find((state) => !finite(state));
@@ -70,6 +80,7 @@ function finite(state: ResultState): boolean {
   return (
     state.displacements.every((d, i) => Number.isFinite(d) || (i % 3 === 2 && Number.isNaN(d))) &&
     state.reactions.every(Number.isFinite) &&
-    state.endForces.every(Number.isFinite)
+    state.endForces.every(Number.isFinite) &&
+    (state.criticalLoadFactor === null || Number.isFinite(state.criticalLoadFactor))
   );
 }
