@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process';
+import { createHash } from 'node:crypto';
 import { copyFileSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -11,6 +12,8 @@ import { countWaiting } from '@/db/queries/results';
 import { findRevisionById } from '@/db/queries/revisions';
 import { insertUpload } from '@/db/queries/uploads';
 import { resultsJson } from '@/lib/results/json';
+import { portalSheds } from '@/samples/portal-sheds';
+import { writeWorkbook } from '@/samples/write';
 import { chunkSize } from '@/worker/run-work';
 import { readingRevision, testOffice } from '@/worker/test-office';
 import { revisionSource } from '@/worker/threads/revision-source';
@@ -48,11 +51,15 @@ interface Revision {
   readonly person: number;
 }
 
-/** An office with the thousand portals brought in and waiting to be read. */
+/** Enough for ten lives that each do a chunk or two. */
+const frames = 600;
+
+/** An office with portals brought in and waiting to be read. */
 async function prepare(file: string): Promise<Revision> {
   const database = openDatabase(file);
   await migrate(database.db);
-  const bytes = readFileSync(join(root, 'samples/portal-sheds-1000.xlsx'));
+  await writeWorkbook(folder, 'sheds.xlsx', portalSheds(frames / 20));
+  const bytes = readFileSync(join(folder, 'sheds.xlsx'));
   const { office, revision, person } = await readingRevision(database, await testOffice(database, 'North'));
   const upload = { revision, name: 'sheds.xlsx', size: bytes.length, sha256: sha256(bytes), bytes, person };
   await insertUpload(database.db, office, upload);
@@ -100,6 +107,8 @@ const tables = [
   ['check_row', 'revision, frame, ordinal'],
   ['reaction_row', 'revision, frame, result, support'],
   ['movement_row', 'revision, frame, result, node_index'],
+  ['frame_result', 'revision, frame, result'],
+  ['frame_peak', 'revision, frame'],
   ['tally', 'revision, list, a, b, c, d, e'],
   ['problem', 'revision, ordinal'],
   ['input_row', 'revision, ordinal'],
@@ -109,11 +118,15 @@ const tables = [
 function contents({ raw }: OpenDatabase): Record<string, string> {
   return Object.fromEntries(
     tables.map(([table, order]) => {
-      const rows = raw.prepare<[], Record<string, unknown>>(`select * from ${table} order by ${order}`).all();
-      const text = rows.map(({ solved_at: _moment, ...row }) =>
-        JSON.stringify(row, (_, value: unknown) => (Buffer.isBuffer(value) ? value.toString('base64') : value)),
-      );
-      return [table, `${rows.length} rows ${sha256(Buffer.from(text.join('\n')))}`];
+      const rows = raw.prepare<[], Record<string, unknown>>(`select * from ${table} order by ${order}`).iterate();
+      const hash = createHash('sha256');
+      let count = 0;
+      for (const { solved_at: _moment, ...row } of rows) {
+        count += 1;
+        for (const value of Object.values(row))
+          hash.update(Buffer.isBuffer(value) ? value : `${typeof value} ${String(value)}\n`);
+      }
+      return [table, `${count} rows ${hash.digest('hex')}`];
     }),
   );
 }
@@ -143,7 +156,7 @@ describe(`a process killed in mid-work (seed ${seed})`, () => {
     copyFileSync(calm, troubled);
     const { ms } = await live(calm, revision);
     // Moments are drawn in shares of the time that this machine takes for a chunk, so that they fall in mid-run on any.
-    const chunk = ms / (1000 / chunkSize);
+    const chunk = ms / (frames / chunkSize);
 
     const next = random(seed);
     const moments = [
@@ -166,7 +179,7 @@ describe(`a process killed in mid-work (seed ${seed})`, () => {
     expect(await json(other, revision)).toBe(await json(one, revision));
     expect(contents(other)).toEqual(contents(one));
     // Kills fell between frames that were kept and frames that were not, several times over.
-    expect(new Set(leftAfter.filter((left) => left > 0 && left < 1000)).size).toBeGreaterThan(3);
+    expect(new Set(leftAfter.filter((left) => left > 0 && left < frames)).size).toBeGreaterThan(3);
     await one.close();
     await other.close();
   }, 180_000);
