@@ -42,6 +42,7 @@ const cases: Case[] = [
   ['tension only', { 'Members!G1': 'tension only', 'Members!G2': 'yes', 'Members!G3': 'no' }, ['error not-supported Members!G2 F1'], F2],
   ['a tapered member', { 'Members!G1': 'end section', 'Members!G2': 'IPE 200' }, ['error not-supported Members!G2 F1'], F2],
   ['an offset', { 'Members!G1': 'offset', 'Members!G2': '0.1', 'Members!G3': 'none' }, ['error not-supported Members!G2 F1'], F2],
+  ['a support that is TRUE', { 'Supports!D2': true }, ['error unknown-word Supports!D2 F1'], F2],
   ['a support that only pushes', { 'Supports!F1': 'pushes only', 'Supports!F2': 'x' }, ['error not-supported Supports!F2 F1'], F2],
   ['a negative spring', { 'Supports!E2': -3 }, ['error not-positive Supports!E2 F1'], F2],
   ['a kind of support in place of its directions', { 'Supports!C4': 'roller' }, ['error unknown-word Supports!C4 F2'], F1],

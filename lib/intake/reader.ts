@@ -100,7 +100,8 @@ export class Reader {
     const word = readWord(text, words);
     if (word) return word;
     const cell = cellOf(row, name);
-    if (cell?.kind === 'text' && !isExpression(cell.text) && !/^[\s+\-−–]*[.,]?\d/.test(cell.text)) {
+    const wordy = cell?.kind === 'text' && !isExpression(cell.text) && !/^[\s+\-−–]*[.,]?\d/.test(cell.text);
+    if (wordy || cell?.kind === 'boolean') {
       this.tell(row, name, { code: 'unknown-word', message: say.unknownWordOrNumber(name, text, words) }, reading);
       return undefined;
     }
