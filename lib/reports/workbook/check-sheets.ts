@@ -22,7 +22,7 @@ function checkSheet(source: ReportSource, name: string, wanted: (check: string) 
       { heading: 'value (in unit)', format: '0.000', width: 12 },
       { heading: 'limit (in unit)', format: '0.000', width: 12 },
       text('unit', 7),
-      ratioColumn(),
+      ratioColumn(source.settings.nearLimit),
       verdictColumn(),
       text('not checked', 50),
       text('reference', 30),

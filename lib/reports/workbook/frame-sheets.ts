@@ -1,11 +1,12 @@
 /** Frames (one row each) and Flags (what is not plainly within, worst first). */
 import { quantityColumn, ratioColumn, text, verdictColumn, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
-import type { System } from '@/lib/units/quantity';
+import type { Settings } from '@/lib/model/settings';
 
 const power = '0.0E+00';
 
-export function framesSheet(facts: BatchFacts, system: System): ReportSheet {
+export function framesSheet(facts: BatchFacts, settings: Settings): ReportSheet {
+  const system = settings.units;
   return {
     name: 'Frames',
     columns: [
@@ -16,11 +17,11 @@ export function framesSheet(facts: BatchFacts, system: System): ReportSheet {
       { heading: 'number off', format: '0', width: 10 },
       text('status'),
       verdictColumn(),
-      ratioColumn(),
+      ratioColumn(settings.nearLimit),
       text('governs', 20),
       text('where'),
       text('combination'),
-      ratioColumn('α cr'),
+      { heading: 'α cr', format: '0.000', width: 8 },
       quantityColumn('mass of one', 'mass', system),
       quantityColumn('mass of all', 'mass', system),
       text('not checked', 50),
@@ -35,12 +36,12 @@ export function framesSheet(facts: BatchFacts, system: System): ReportSheet {
   };
 }
 
-export function flagsSheet(facts: BatchFacts): ReportSheet {
+export function flagsSheet(facts: BatchFacts, settings: Settings): ReportSheet {
   return {
     name: 'Flags',
     columns: [
       verdictColumn(),
-      ratioColumn(),
+      ratioColumn(settings.nearLimit),
       text('frame'),
       text('where'),
       text('check', 20),

@@ -14,6 +14,8 @@ export interface ReportColumn {
   readonly width?: number;
   /** Filled by its word (over, near, not checked). */
   readonly verdict?: boolean;
+  /** A ratio, with the near limit: printed with more digits where three would cross a boundary of its verdict. */
+  readonly nearLimit?: number;
 }
 
 export interface ReportSheet {
@@ -51,9 +53,15 @@ export function quantityColumn(heading: string, quantity: Quantity, system: Syst
   return { heading: unit === '' ? heading : `${heading} [${unit}]`, format: formats[quantity] ?? '0.000', width: 12 };
 }
 
-/** Ratios carry three decimals, so that 1.003 is never shown as 1.00. */
-export function ratioColumn(heading = 'ratio'): ReportColumn {
-  return { heading, format: '0.000', width: 8 };
+/** A ratio: three decimals are shown, or as many as keep it on its side of the near limit and of 1 (1.0003 is over). */
+export function ratioColumn(nearLimit: number, heading = 'ratio'): ReportColumn {
+  return { heading, format: '0.000', width: 8, nearLimit };
+}
+
+/** Whether a ratio shown with three decimals would stand on another side of the near limit or of 1. */
+export function crossesAsShown(ratio: number, nearLimit: number): boolean {
+  const band = (value: number): number => (value > 1 ? 2 : value >= nearLimit ? 1 : 0);
+  return band(Number(ratio.toFixed(3))) !== band(ratio);
 }
 
 /** An SI value in the batch's unit; null and not-a-number stay empty. */

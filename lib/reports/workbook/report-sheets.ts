@@ -14,8 +14,8 @@ export async function reportSheets(source: ReportSource): Promise<ReportSheet[]>
   const system = source.settings.units;
   return [
     coverSheet(source, facts),
-    framesSheet(facts, system),
-    flagsSheet(facts),
+    framesSheet(facts, source.settings),
+    flagsSheet(facts, source.settings),
     membersSheet(source),
     membersByCombinationSheet(source),
     reactionsSheet(source),

@@ -6,7 +6,7 @@ import { ratioColumn, text, verdictColumn, type ReportRow, type ReportSheet } fr
 import { writeXlsx } from './write-xlsx';
 
 function sheetOf(rows: ReportRow[], name = 'Flags'): ReportSheet {
-  return { name, columns: [text('frame'), ratioColumn(), verdictColumn()], rows: () => rows };
+  return { name, columns: [text('frame'), ratioColumn(0.9), verdictColumn()], rows: () => rows };
 }
 
 async function readBack(sheets: ReportSheet[], rowLimit?: number): Promise<ExcelJS.Workbook> {
@@ -24,6 +24,17 @@ describe('result workbook writer', () => {
     const cell = book.getWorksheet('Flags')?.getCell('B2');
     expect(cell?.value).toBe(1.00345678901234);
     expect(cell?.numFmt).toBe('0.000');
+  });
+
+  it('never shows a ratio on another side of a boundary than its verdict', async () => {
+    const rows = [1.0003, 0.89996, 0.9999, 0.5].map((ratio): ReportRow => ['F', ratio, 'x']);
+    const page = (await readBack([sheetOf(rows)])).getWorksheet('Flags');
+    expect([2, 3, 4, 5].map((row) => page?.getCell(row, 2).numFmt)).toEqual([
+      '0.000############',
+      '0.000############',
+      '0.000',
+      '0.000',
+    ]);
   });
 
   it('marks over, near and not checked by fill and word, and leaves within plain', async () => {

@@ -1,7 +1,7 @@
 /** Sheets → one XLSX, streamed: a row is gone from memory once it is written, and the sink's pace is kept. */
 import type { Writable } from 'node:stream';
 import ExcelJS from 'exceljs';
-import type { ReportCell, ReportColumn, ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import { crossesAsShown, type ReportCell, type ReportColumn, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 
 /** Rows of one sheet that the format allows. */
 const mostRows = 1_048_576;
@@ -21,6 +21,8 @@ const headStyle: Partial<ExcelJS.Style> = {
   border: { bottom: { style: 'thin', color: ink } },
   alignment: { wrapText: true, vertical: 'bottom' },
 };
+/** A ratio that three decimals would round across a boundary: every digit it has. */
+const everyDigit: Partial<ExcelJS.Style> = { numFmt: '0.000############' };
 const boldStyle: Partial<ExcelJS.Style> = { font: { bold: true, color: ink } };
 
 /** What a cell without any style gets: exceljs looks up a style object it knows, and works out anew each one it does not. */
@@ -79,6 +81,16 @@ function closePage(page: ExcelJS.Worksheet, sheet: ReportSheet, rows: number): v
   page.commit();
 }
 
+function styleOf(
+  value: string | number,
+  column: ReportColumn | undefined,
+  style: Partial<ExcelJS.Style>,
+): Partial<ExcelJS.Style> {
+  if (typeof value === 'string') return (column?.verdict ? verdictStyles[value] : undefined) ?? plainStyle;
+  const { nearLimit } = column ?? {};
+  return nearLimit !== undefined && crossesAsShown(value, nearLimit) ? everyDigit : style;
+}
+
 function addRow(
   page: ExcelJS.Worksheet,
   sheet: ReportSheet,
@@ -94,8 +106,7 @@ function addRow(
   for (let index = 0; index < sheet.columns.length; index += 1) {
     const value = cells[index];
     if (value === null || value === undefined) continue;
-    const filled = sheet.columns[index]?.verdict && typeof value === 'string' ? verdictStyles[value] : undefined;
-    row.getCell(index + 1).style = filled ?? (typeof value === 'number' ? styles[index] : undefined) ?? plainStyle;
+    row.getCell(index + 1).style = styleOf(value, sheet.columns[index], styles[index] ?? plainStyle);
   }
   row.commit();
 }
