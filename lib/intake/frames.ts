@@ -46,6 +46,7 @@ export class FrameList {
     for (const row of this.tables.get('Variants')?.rows ?? []) this.fromVariants(row, variants);
     for (const row of this.tables.get('Nodes')?.rows ?? []) this.fromNodes(row);
     if (this.all) for (const frame of this.list) if (!this.inFrames.has(frame.key)) this.fill(frame, this.all);
+    for (const frame of this.list) frame.spacing_m ??= spacingParameter(frame);
     if (this.list.length > mostFrames) {
       const place = this.list[mostFrames]?.place;
       if (place)
@@ -173,4 +174,11 @@ export class FrameList {
       { ...forNobody, frame: frame.id },
     );
   }
+}
+
+/** A variant's own parameter `spacing`, where its family has one: the width that its area loads take unless Frames says another. */
+function spacingParameter({ variant }: FrameEntry): number | null {
+  const parameter = variant?.family.parameters.get('spacing');
+  const value = parameter && variant?.origin.parameters[parameter.name]?.value;
+  return parameter?.quantity === 'length' && typeof value === 'number' ? value : null;
 }

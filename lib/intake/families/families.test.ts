@@ -599,6 +599,19 @@ describe('the built-in families are families like any other', () => {
     expect(first(readSheets(sheets)).supports.map((s) => [s.node, s.rz])).toEqual([[0, 'fixed'], [4, 2e6]]); // prettier-ignore
   });
 
+  it('an area load added to a variant takes the spacing of its parameter, or of Frames', () => {
+    const sheets = shed();
+    sheets['Member loads'] = [['frame', 'case', 'member', 'load', 'value [kN/m²]'], ['P1', 'snow', 'AB', 'distributed', -1]];
+    const added = (): number => {
+      const load = first(readSheets(sheets)).memberLoads.at(-1);
+      return load?.kind === 'distributed' ? load.q1_N_m : NaN;
+    };
+    const frame = first(readSheets(sheets));
+    expect(added()).toBeCloseTo(-1000 * Number(frame.family?.parameters['spacing']?.value), 6);
+    sheets.Frames = [['frame', 'spacing'], ['P1', 7]];
+    expect(added()).toBeCloseTo(-7000, 6);
+  }); // prettier-ignore
+
   it('a limit on the family takes the place of one for all, and one on the variant of both', () => {
     const sheets = shed();
     sheets.Limits = [['applies to', 'measure', 'ratio', 'frame'], ['rafter', 'deflection', 200, null], ['rafter', 'deflection', 300, 'portal']];
