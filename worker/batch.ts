@@ -2,7 +2,7 @@
 import { mkdir, readFile } from 'node:fs/promises';
 import { basename, dirname, resolve } from 'node:path';
 import { readIntake } from '@/lib/intake/read-intake';
-import type { InputFile } from '@/lib/intake/intake';
+import type { InputFile, Intake } from '@/lib/intake/intake';
 import { readArguments, usage, type BatchArguments } from '@/worker/command/arguments';
 import { evaluateBatch, type EvaluatedBatch } from '@/worker/command/evaluate-batch';
 import { ProgressBar } from '@/worker/command/progress-bar';
@@ -27,6 +27,10 @@ export async function runBatch(words: readonly string[], folder: string): Promis
   bar.end();
   try {
     if (!(await writeOutputs(batch, wanted, folder))) return 2;
+    if (intake.frames.length === 0 && noneIsToRun(intake)) {
+      process.stderr.write('Every frame in Frames has no in run, so there was nothing to solve.\n');
+      return 0;
+    }
     if (intake.frames.length === 0) {
       process.stderr.write(`${errorLines(intake.problems, 20).join('\n') || 'No frame was found in what was sent.'}\n`);
       return 2;
@@ -36,6 +40,12 @@ export async function runBatch(words: readonly string[], folder: string): Promis
   } finally {
     batch.close();
   }
+}
+
+/** True where the sheets list frames and hold no error, and yet none is left to solve. */
+function noneIsToRun({ sheets, problems }: Intake): boolean {
+  const listed = sheets.some(({ known, rows }) => known === 'Frames' && rows > 0);
+  return listed && !problems.some((problem) => problem.severity === 'error');
 }
 
 async function readFiles(names: readonly string[], folder: string): Promise<InputFile[] | null> {

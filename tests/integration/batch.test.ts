@@ -108,6 +108,23 @@ describe('the command line', () => {
     expect(results('walkways.json').input.files).toHaveLength(files.length);
   });
 
+  it('ends with 0 where the list of frames leaves none to solve', async () => {
+    const sheets = {
+      Frames: 'frame,run\nF1,no\n',
+      Nodes: 'frame,node,x,y\nF1,A,0,0\nF1,B,3,0\n',
+      Members: 'frame,member,start,end,section\nF1,AB,A,B,IPE 200\n',
+      Supports: 'frame,node,ux,uy,rz\nF1,A,fixed,fixed,fixed\n',
+    };
+    const files = Object.entries(sheets).map(([name, text]) => {
+      const path = join(out, `${name}.csv`);
+      writeFileSync(path, text);
+      return path;
+    });
+    const ended = await batch(...files, '--json', join(out, 'none.json'));
+    expect(ended).toMatchObject({ code: 0, stderr: expect.stringContaining('nothing to solve') as string });
+    expect(results('none.json').frames).toEqual([]);
+  });
+
   it('prints a summary where no output is named', async () => {
     const { code, stdout } = await batch('pipe-rack-12.xlsx');
     expect(code).toBe(0);
