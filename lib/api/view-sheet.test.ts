@@ -15,6 +15,7 @@ async function csv(
   const sheet = viewSheet({
     view: one,
     units,
+    nearLimit: 0.9,
     parameters,
     async *rows() {
       yield* rows;

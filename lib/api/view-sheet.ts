@@ -10,14 +10,15 @@ import type { System } from '@/lib/units/quantity';
 interface Exported {
   readonly view: View;
   readonly units: System;
+  readonly nearLimit: number;
   readonly parameters: readonly ParameterColumn[];
   readonly rows: () => AsyncIterable<Row>;
 }
 
-export function viewSheet({ view, units, parameters, rows }: Exported): ReportSheet {
+export function viewSheet({ view, units, nearLimit, parameters, rows }: Exported): ReportSheet {
   const columns = shownColumns(view, parameters);
   const unitPlace = columns.findLastIndex((column) => column.quantity === 'byCheck');
-  const heads = columns.map((column) => head(column, units));
+  const heads = columns.map((column) => head(column, units, nearLimit));
   if (unitPlace >= 0) heads.splice(unitPlace + 1, 0, text('unit', 8));
   return {
     name: view.table,
@@ -32,8 +33,8 @@ export function viewSheet({ view, units, parameters, rows }: Exported): ReportSh
   };
 }
 
-function head(column: Column, units: System): ReportColumn {
-  if (column.kind === 'ratio') return ratioColumn(column.label);
+function head(column: Column, units: System, nearLimit: number): ReportColumn {
+  if (column.kind === 'ratio') return ratioColumn(nearLimit, column.label);
   if (column.kind === 'verdict') return verdictColumn(column.label);
   if (column.kind !== 'number') return text(column.label, column.kind === 'id' ? 14 : 18);
   const quantity = columnQuantity(column);

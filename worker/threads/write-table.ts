@@ -19,15 +19,17 @@ export interface WriteTableTask {
   readonly revision: number;
   readonly view: View;
   readonly units: System;
+  readonly nearLimit: number;
   readonly parameters: readonly ParameterColumn[];
   readonly as: 'csv' | 'xlsx';
   readonly port: MessagePort;
 }
 
 /** Writes the view's rows, columns and order, in the batch's units. */
-export async function writeTable({ file, office, revision, view, units, parameters, as, port }: WriteTableTask): Promise<void> {
+export async function writeTable({ file, office, revision, as, port, ...shown }: WriteTableTask): Promise<void> {
   const { db } = openOnce(file);
-  const sheet = viewSheet({ view, units, parameters, rows: () => iterateRows(db, office, revision, view) });
+  const { view } = shown;
+  const sheet = viewSheet({ ...shown, rows: () => iterateRows(db, office, revision, view) });
   const sink = new PortSink(port);
   const sent = new Promise<void>((resolve, reject) => sink.on('finish', resolve).on('error', reject));
   if (as === 'csv') await pipeline(Readable.from(csvOf(sheet)), sink);

@@ -5,6 +5,7 @@ import { parse, queryOf } from '@/app/_server/input';
 import { requireView, viewParameters } from '@/app/_server/view';
 import { databaseFile } from '@/db/client';
 import { exportInput } from '@/lib/api/inputs';
+import { defaultSettings } from '@/lib/model/settings';
 import { pools } from '@/worker/boot';
 import { tableStream } from '@/worker/result-stream';
 
@@ -19,6 +20,7 @@ export const GET = door(
       revision: revision.id,
       view,
       units: revision.units,
+      nearLimit: revision.settings?.nearLimit ?? defaultSettings.nearLimit,
       parameters: await viewParameters(revision, view),
       as: format,
     });
