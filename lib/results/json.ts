@@ -1,6 +1,5 @@
 /** The published results file (lib/results/schema.ts), written frame by frame: the same input gives the same bytes. */
-import { memberExtremes } from '@/lib/analysis/member-extremes';
-import { memberLine } from '@/lib/analysis/member-line';
+import { extremesOf } from '@/lib/results/extremes-of';
 import type { Frame } from '@/lib/model/frame';
 import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
@@ -85,7 +84,7 @@ function stateJson(frame: Frame, state: ResultState): FrameResult['results'][num
     })),
     members: frame.members.map((member, i) => {
       const [N0, V0, M0, N1, V1, M1] = state.endForces.subarray(6 * i, 6 * i + 6);
-      const extremes = memberExtremes(memberLine(frame, state, i));
+      const extremes = extremesOf(frame, state, i);
       return {
         member: member.id,
         start: { N: plain(N0!), V: plain(V0!), M: plain(M0!) },

@@ -1,6 +1,5 @@
 /** Members by combination, Reactions and Displacements: the numbers of every case and combination. */
-import { memberExtremes } from '@/lib/analysis/member-extremes';
-import { memberLine } from '@/lib/analysis/member-line';
+import { extremesOf } from '@/lib/results/extremes-of';
 import { cellOf, quantityColumn, text } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
@@ -46,7 +45,7 @@ export function membersByCombinationSheet(source: ReportSource): ReportSheet {
         for (const state of evaluation.states) {
           for (const [index, member] of frame.members.entries()) {
             const ends = state.endForces.subarray(6 * index, 6 * index + 6);
-            const { N, V, M, deflection } = memberExtremes(memberLine(frame, state, index));
+            const { N, V, M, deflection } = extremesOf(frame, state, index);
             yield [
               each.id,
               member.id,
