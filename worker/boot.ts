@@ -39,6 +39,8 @@ export const runProgress = (revision: number): RunProgress => queue().progress(r
 export function boot(): Promise<void> {
   const here = work();
   return (here.booted ??= (async () => {
+    // Threads that store results write the log back into the file; here that would keep pages waiting, so only where it grew far.
+    raw().pragma('wal_autocheckpoint = 64000');
     const ran = await migrate(db());
     for (const migration of ran) log('migration', { migration });
     await here.queue.start();

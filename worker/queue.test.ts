@@ -19,6 +19,7 @@ import {
   type TestDatabase,
 } from './test-office';
 import { tellFailures } from './threads/failures';
+import { listRun } from './threads/list-run';
 import { solveChunk, type SolveTask } from './threads/solve';
 import { insertIntake } from '@/db/queries/intake';
 import { recordUnread, type ReadTask } from './threads/read';
@@ -31,7 +32,7 @@ beforeEach(async () => {
 });
 afterEach(() => database.remove());
 
-const solving = { solveChunk, tellFailures };
+const solving = { listRun, solveChunk, tellFailures };
 function queueOf(pools: Pools, onChunk?: (chunk: { office: number; revision: number; frames: number }) => void): WorkQueue {
   const log = (message: string): number => logged.push(message);
   return new WorkQueue({ database, file: database.file, pools, log, ...(onChunk ? { onChunk } : {}) });

@@ -2,12 +2,11 @@
 import { finishJob, leaseJob, updateJobProgress, type JobRecord } from '@/db/queries/jobs';
 import { countRevisionVerdicts, findRevisionById, updateRevisionState } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
-import { listVersions } from '@/db/queries/waiting';
 import type { Settings } from '@/lib/model/settings';
-import { secondSample } from '@/lib/results/second-sample';
 import { RunMeter } from './progress';
 import type { QueueOptions } from './queue';
 import type { FailuresTask } from './threads/failures';
+import type { ListRunTask, RunListed } from './threads/list-run';
 import type { SolvedFrame, SolveTask } from './threads/solve';
 
 /** Frames handed to a thread at once: about a tenth of a second's work, so that offices alternate and a kill loses little. */
@@ -25,7 +24,7 @@ export class RunWork {
   readonly office: number;
   readonly revision: number;
   meter: RunMeter | null = null;
-  private waiting: number[] | null = null;
+  private waiting: readonly number[] | null = null;
   private settings: Settings | null = null;
   private second: ReadonlySet<number> = new Set();
   private total = 0;
@@ -155,19 +154,20 @@ export class RunWork {
     return `${done.toLocaleString('en-GB')} of ${(done + waiting).toLocaleString('en-GB')} frames`;
   }
 
-  private async begin(): Promise<number[]> {
-    const { db, raw } = this.options.database;
+  private async begin(): Promise<readonly number[]> {
+    const { database, file, pools } = this.options;
+    const { db } = database;
     const until = new Date(Date.now() + lease_ms).toISOString();
     const job = await leaseJob(db, { owner: `${process.pid}`, until, job: this.job.id });
     const revision = await findRevisionById(db, this.office, this.revision);
     if (!job || !revision?.settings) throw new Error('The revision of this run is not there any more');
     this.settings = revision.settings;
-    const versions = listVersions(raw, this.revision);
-    const chosen = secondSample(versions.map((each) => each.hash));
-    this.second = new Set(versions.filter((each) => chosen.has(each.hash)).map((each) => each.version));
-    const waiting = versions.filter((each) => each.waiting).map((each) => each.version);
-    this.total = versions.length;
-    await updateJobProgress(db, this.job.id, { done: this.total - waiting.length, total: this.total });
+    const task: ListRunTask = { file, revision: this.revision };
+    const listed = (await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'listRun' })) as RunListed;
+    const { total, waiting, second } = listed;
+    this.second = second;
+    this.total = total;
+    await updateJobProgress(db, this.job.id, { done: total - waiting.length, total });
     this.left = waiting.length;
     this.meter = new RunMeter();
     return waiting;

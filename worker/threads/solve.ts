@@ -11,6 +11,7 @@ import { openOnce } from './open-once';
 
 export { evaluateChunk } from './chunk';
 export { tellFailures } from './failures';
+export { listRun } from './list-run';
 
 export interface SolveTask {
   /** The database's file. */
