@@ -62,7 +62,7 @@ function fresh() {
 /** Builds the bundles unless they are fresh. A bundle in use is replaced whole, never half written. */
 export async function buildWorker() {
   if (fresh()) return;
-  const { build } = await import('esbuild');
+  const { build, stop } = await import('esbuild');
   const part = join(out, `.part-${process.pid}`);
   mkdirSync(part, { recursive: true });
   try {
@@ -79,6 +79,8 @@ export async function buildWorker() {
     renameSync(join(part, 'inputs.json'), record);
   } finally {
     rmSync(part, { recursive: true, force: true });
+    // Else the bundler's own process would stand beside the server for as long as that runs, with some 300 MB.
+    await stop();
   }
 }
 

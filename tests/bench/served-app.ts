@@ -58,13 +58,12 @@ function freePort(): Promise<number> {
   });
 }
 
-/** The last of the chain of processes below one: a starter has one child, the server has none. */
-function servingProcess(pid: number): number {
-  for (let at = pid; ;) {
-    const [child] = readFileSync(`/proc/${at}/task/${at}/children`, 'utf8').trim().split(' ');
-    if (!child) return at;
-    at = Number(child);
-  }
+/** The process below the starter that serves; a bundler that the starter called may stand beside it. */
+function servingProcess(starter: number): number {
+  const children = readFileSync(`/proc/${starter}/task/${starter}/children`, 'utf8').trim().split(' ');
+  const serving = children.find((child) => readFileSync(`/proc/${child}/cmdline`, 'utf8').includes('next'));
+  if (serving === undefined) throw new Error('Expected npm start to have a process that serves');
+  return Number(serving);
 }
 
 /** Memory of a process that is resident now, MB. Linux only. */

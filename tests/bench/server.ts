@@ -78,7 +78,7 @@ async function stretch(app: ServedApp, watch: MemoryWatch, name: string, work: (
 /** @param frames 20,000, the most a batch may hold; fewer only to try this out */
 export async function serverUnderLoad(frames: number): Promise<Record<string, number>> {
   const began = performance.now();
-  console.log(`  serves .next as it is built; some five minutes for ${frames} frames on two idle cores`);
+  console.log(`  serves .next as it is built; some six minutes for ${frames} frames on two idle cores`);
   const bytes = await shedWorkbook(frames);
   const app = await serveApp();
   const watch = new MemoryWatch(app.pid);
