@@ -23,6 +23,12 @@ export async function serveApp(): Promise<ServedApp> {
   const url = `http://localhost:${port}`;
   const env = { ...process.env, PORT: String(port), DATA_DIR: dataDir, NEXTAUTH_URL: url, LOG_LEVEL: 'warn', TRUST_PROXY: '1' };
   const child = spawn(process.execPath, ['worker/start.mjs'], { stdio: ['ignore', 'ignore', 'inherit'], env });
+  // A bench that is broken off takes its server along.
+  for (const signal of ['SIGINT', 'SIGTERM'] as const)
+    process.once(signal, () => {
+      child.kill('SIGTERM');
+      process.exit(1);
+    });
   const close = async (): Promise<void> => {
     const ended = new Promise((resolve) => child.once('exit', resolve));
     if (child.exitCode === null && child.kill('SIGTERM')) await ended;
