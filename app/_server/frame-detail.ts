@@ -88,7 +88,8 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
     failure: evaluation?.failure?.message ?? null,
     verdict: evaluation?.verdict ?? 'not checked',
     ratio: evaluation?.governing?.ratio ?? null,
-    notChecked: evaluation?.notChecked ?? [],
+    // why it has no solution is said once, above
+    notChecked: (evaluation?.notChecked ?? []).filter((reason) => !evaluation?.failure || !reason.startsWith('not solved')),
     assumptions: evaluation?.assumptions ?? [],
     mass: evaluation?.mass ?? null,
     certificate: evaluation?.certificate ?? null,

@@ -108,7 +108,7 @@ function extremeWishes(
     return (same ? [{ value: extreme.max, x: axis.length / 2 }] : both).map((one) => ({ ...one, axis }));
   });
   const worth = found
-    .filter((one) => Math.abs(one.value) > most * (large ? 0.03 : 0.25))
+    .filter((one) => Math.abs(one.value) > most * (large ? 0.06 : 0.25))
     .sort((p, q) => Math.abs(q.value) - Math.abs(p.value));
   const kept = worth.slice(0, large ? 40 : 4);
   const dots: Point[] = [];

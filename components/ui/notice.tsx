@@ -45,7 +45,10 @@ export function CheckedAtOnce({ checked, notChecked }: CautionsProps) {
       ) : (
         'Nothing was checked. '
       )}
-      A linear-elastic plane model of what the sheets say. <a href="#cautions">Cautions</a>
+      A linear-elastic plane model of what the sheets say.{' '}
+      <a className="link" href="#cautions">
+        Cautions
+      </a>
     </p>
   );
 }

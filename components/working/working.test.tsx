@@ -38,4 +38,26 @@ describe('a working', () => {
     render(<Working title="AB, shear stress" ratio={null} verdict="not checked" nearLimit={0.9} reason="needs Av" lines={[]} />);
     expect(screen.getByText(/needs Av/)).toBeInTheDocument();
   });
+
+  it('parts a section’s name from its first property, and never breaks a property from its figure', () => {
+    const lines = [
+      {
+        what: 'section',
+        parts: [
+          { kind: 'text', text: 'HE 200 A' },
+          { kind: 'symbol', symbol: 'A' },
+          { kind: 'text', text: '=' },
+          { kind: 'number', text: '53.8', unit: 'cm²' },
+        ],
+      },
+      {
+        what: 'reference',
+        parts: [{ kind: 'text', text: 'elastic stress, σ_v ≤ f·fy' }],
+      },
+    ] as const;
+    render(<Working title="AB" lines={lines} ratio={0.5} verdict="within" nearLimit={0.9} />);
+    expect(screen.getByText('HE 200 A,', { exact: false }).textContent).toBe('HE 200 A, A = 53.8 cm²');
+    expect(document.querySelector('.w-whole')?.textContent).toBe('A = 53.8 cm²');
+    expect(screen.getByText('v').tagName).toBe('SUB');
+  });
 });

@@ -53,17 +53,38 @@ export function Working({ title, reference, lines, ratio, verdict, nearLimit, re
 }
 
 function Parts({ parts }: { readonly parts: readonly WorkingPart[] }) {
-  return parts.map((part, i) => (
-    <Fragment key={i}>
-      {i > 0 && needsSpace(parts[i - 1], part) ? ' ' : ''}
-      {one(part)}
-    </Fragment>
-  ));
+  const shown: ReactNode[] = [];
+  for (let i = 0; i < parts.length; i++) {
+    const part = parts[i]!;
+    const gap = i === 0 ? '' : between(parts[i - 1]!, part);
+    const [equals, value] = [parts[i + 1], parts[i + 2]];
+    // "A = 53.8 cm²" is never broken between two lines
+    const whole = part.kind === 'symbol' && equals?.kind === 'text' && equals.text === '=' && value?.kind === 'number';
+    shown.push(
+      <Fragment key={i}>
+        {gap}
+        {whole ? (
+          <span className="w-whole">
+            {one(part)} = {one(value)}
+          </span>
+        ) : (
+          one(part)
+        )}
+      </Fragment>,
+    );
+    if (whole) i += 2;
+  }
+  return shown;
 }
 
-/** Units and signs stand a space apart; nothing needs one before a comma. */
-const needsSpace = (_before: WorkingPart | undefined, part: WorkingPart): boolean =>
-  part.kind !== 'text' || !/^[,;:)]/.test(part.text);
+/** Units and signs stand a space apart; a name and the letter of its first property, a comma, lest they read as one. */
+function between(before: WorkingPart, part: WorkingPart): string {
+  if (part.kind === 'text' && /^[,;:)]/.test(part.text)) return '';
+  if (before.kind === 'text' && /\($/.test(before.text)) return '';
+  const named = before.kind === 'text' && part.kind === 'symbol' && /[\p{L}\d]$/u.test(before.text);
+  const placed = before.kind === 'number' && part.kind === 'text' && /^(top|bottom) face/.test(part.text);
+  return named || placed ? ', ' : ' ';
+}
 
 function one(part: WorkingPart): ReactNode {
   switch (part.kind) {
