@@ -97,7 +97,8 @@ function addRow(
   styles: readonly Partial<ExcelJS.Style>[],
   cells: readonly ReportCell[],
 ): void {
-  const row = page.addRow(cells);
+  // An absent value makes no cell at all; a null would make an empty one, with a style to be worked out.
+  const row = page.addRow(cells.map((cell) => cell ?? undefined));
   if (sheet.columns.length === 0) {
     if (sheet.boldFirst && cells.length > 0) row.getCell(1).style = boldStyle;
     row.commit();
