@@ -19,7 +19,7 @@ export interface Progress extends RunProgressData {
 export async function progressOf(office: number, batch: number, letter: string): Promise<Progress> {
   const revision = await findRevision(db(), office, batch, letter);
   if (revision === undefined) throw notFound('revision');
-  const { state: going, total: different, rate, secondsLeft, inHand, last } = runProgress(revision.id);
+  const { state: going, total: different, done: differentDone, rate, secondsLeft, inHand, last } = runProgress(revision.id);
   // The queue counts different frames; people count the frames of their sheets, of which several may be the same.
   const total = revision.frames - revision.framesStopped;
   // Where all differ the running queue knows; counting 20,000 rows at every asking would keep other requests waiting.
