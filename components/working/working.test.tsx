@@ -54,10 +54,19 @@ describe('a working', () => {
         what: 'reference',
         parts: [{ kind: 'text', text: 'elastic stress, σ_v ≤ f·fy' }],
       },
+      {
+        what: 'equivalent stress',
+        parts: [
+          { kind: 'symbol', symbol: 'σ', sup: '2' },
+          { kind: 'text', text: '+ 3' },
+          { kind: 'symbol', symbol: 'τ', sup: '2' },
+        ],
+      },
     ] as const;
     render(<Working title="AB" lines={lines} ratio={0.5} verdict="within" nearLimit={0.9} />);
     expect(screen.getByText('HE 200 A,', { exact: false }).textContent).toBe('HE 200 A, A = 53.8 cm²');
     expect(document.querySelector('.w-whole')?.textContent).toBe('A = 53.8 cm²');
     expect(screen.getByText('v').tagName).toBe('SUB');
+    expect(screen.getByText('equivalent stress').nextSibling?.textContent).toBe('σ2 + 3 τ2');
   });
 });

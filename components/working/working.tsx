@@ -56,7 +56,7 @@ function Parts({ parts }: { readonly parts: readonly WorkingPart[] }) {
   const shown: ReactNode[] = [];
   for (let i = 0; i < parts.length; i++) {
     const part = parts[i]!;
-    const gap = i === 0 ? '' : between(parts[i - 1]!, part);
+    const gap = i === 0 ? '' : between(parts[i - 1]!, part, i === 1);
     const [equals, value] = [parts[i + 1], parts[i + 2]];
     // "A = 53.8 cm²" is never broken between two lines
     const whole = part.kind === 'symbol' && equals?.kind === 'text' && equals.text === '=' && value?.kind === 'number';
@@ -77,13 +77,15 @@ function Parts({ parts }: { readonly parts: readonly WorkingPart[] }) {
   return shown;
 }
 
-/** Units and signs stand a space apart; a name and the letter of its first property, a comma, lest they read as one. */
-function between(before: WorkingPart, part: WorkingPart): string {
+/**
+ * Units and signs stand a space apart. A line that opens with a section's name has a comma before the letter of its first
+ * property, lest they read as one; within a formula no comma is ever added.
+ */
+function between(before: WorkingPart, part: WorkingPart, opens: boolean): string {
   if (part.kind === 'text' && /^[,;:)]/.test(part.text)) return '';
   if (before.kind === 'text' && /\($/.test(before.text)) return '';
-  const named = before.kind === 'text' && part.kind === 'symbol' && /[\p{L}\d]$/u.test(before.text);
-  const placed = before.kind === 'number' && part.kind === 'text' && /^(top|bottom) face/.test(part.text);
-  return named || placed ? ', ' : ' ';
+  const named = opens && before.kind === 'text' && part.kind === 'symbol' && /^\p{L}.*[\p{L}\d]$/u.test(before.text);
+  return named ? ', ' : ' ';
 }
 
 function one(part: WorkingPart): ReactNode {
