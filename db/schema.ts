@@ -2,9 +2,8 @@
 import type { Generated } from 'kysely';
 import type { Purpose } from '@/lib/model/frame';
 
-export const memberRoles = ['lead', 'analyst', 'checker', 'client'] as const;
 /** A person's role in an office. */
-export type OfficeRole = (typeof memberRoles)[number];
+export type OfficeRole = 'lead' | 'analyst' | 'checker' | 'client';
 
 export type RevisionState =
   | 'reading' | 'read' | 'running' | 'run' | 'to check' | 'checked' | 'issued'

@@ -87,7 +87,7 @@ function range(sql: string, min: number | null, max: number | null): Condition {
   return { sql: parts.join(' and '), values: [min, max].filter((end) => end !== null) };
 }
 
-export const like = (part: string): string => `%${part.replace(/[\\%_]/g, '\\$&')}%`;
+const like = (part: string): string => `%${part.replace(/[\\%_]/g, '\\$&')}%`;
 
 /** Frames that a filter on the frame's name or on a parameter of its family leaves. */
 function framesOf(raw: RawDatabase, revision: number, stamp: number, filter: Filter): readonly number[] {

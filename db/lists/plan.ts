@@ -41,7 +41,7 @@ const mostLeads = 12;
  * Each sort has a natural direction, in which equal rows stand in sheet order (worst first for ratios and verdicts,
  * largest first for forces); the other direction is its exact mirror, so that one index serves both.
  */
-export function orderOf(view: View): Order {
+function orderOf(view: View): Order {
   const { sort } = view;
   if (sort === null || sort.column === 'frame') {
     const direction = sort?.descending ? 'desc' : 'asc';

@@ -1,7 +1,6 @@
 import type { RawDatabase } from '@/db/open';
 
-export const tallied = ['members', 'checks', 'reactions', 'movements'] as const;
-export type Tallied = (typeof tallied)[number];
+export type Tallied = 'members' | 'checks' | 'reactions' | 'movements';
 
 /** Which list column each key of a tally counts by, in the order of its columns a to e. */
 export const tallyColumns: Readonly<Record<Tallied, readonly string[]>> = {
