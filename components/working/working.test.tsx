@@ -55,6 +55,17 @@ describe('a working', () => {
         parts: [{ kind: 'text', text: 'elastic stress, σ_v ≤ f·fy' }],
       },
       {
+        what: 'limit',
+        parts: [
+          { kind: 'symbol', symbol: 'f' },
+          { kind: 'symbol', symbol: 'f', sub: 'y' },
+          { kind: 'text', text: '=' },
+          { kind: 'number', text: '0.6000' },
+          { kind: 'text', text: '·' },
+          { kind: 'number', text: '275.0', unit: 'MPa' },
+        ],
+      },
+      {
         what: 'equivalent stress',
         parts: [
           { kind: 'symbol', symbol: 'σ', sup: '2' },
@@ -66,6 +77,7 @@ describe('a working', () => {
     render(<Working title="AB" lines={lines} ratio={0.5} verdict="within" nearLimit={0.9} />);
     expect(screen.getByText('HE 200 A,', { exact: false }).textContent).toBe('HE 200 A, A = 53.8 cm²');
     expect(document.querySelector('.w-whole')?.textContent).toBe('A = 53.8 cm²');
+    expect(document.querySelectorAll('.w-whole')).toHaveLength(1);
     expect(screen.getByText('v').tagName).toBe('SUB');
     expect(screen.getByText('equivalent stress').nextSibling?.textContent).toBe('σ2 + 3 τ2');
   });

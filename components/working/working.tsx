@@ -59,7 +59,9 @@ function Parts({ parts }: { readonly parts: readonly WorkingPart[] }) {
     const gap = i === 0 ? '' : between(parts[i - 1]!, part, i === 1);
     const [equals, value] = [parts[i + 1], parts[i + 2]];
     // "A = 53.8 cm²" is never broken between two lines
-    const whole = part.kind === 'symbol' && equals?.kind === 'text' && equals.text === '=' && value?.kind === 'number';
+    const given = part.kind === 'symbol' && equals?.kind === 'text' && equals.text === '=' && value?.kind === 'number';
+    // a product or a sum that goes on is no single property
+    const whole = given && parts[i - 1]?.kind !== 'symbol' && [undefined, 'symbol'].includes(parts[i + 3]?.kind);
     shown.push(
       <Fragment key={i}>
         {gap}
