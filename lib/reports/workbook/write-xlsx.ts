@@ -38,6 +38,22 @@ function columnStyles(columns: readonly ReportColumn[]): Partial<ExcelJS.Style>[
   });
 }
 
+interface StyleTable {
+  addStyleModel: (style: object, cellType?: number) => number;
+}
+
+/** The writer asks for a style's number at every cell, and neighbours mostly share theirs: the last answer is kept at hand. */
+function keepLastStyle(book: ExcelJS.stream.xlsx.WorkbookWriter): void {
+  const { styles } = book as unknown as { styles: StyleTable };
+  const ask = styles.addStyleModel.bind(styles);
+  let last: object | null = null;
+  let number = 0;
+  styles.addStyleModel = (style, cellType) => {
+    if (style !== last) [last, number] = [style, ask(style, cellType)];
+    return number;
+  };
+}
+
 interface Piped {
   readonly pipes?: readonly { readonly _writableState?: { readonly length: number } }[];
 }
@@ -130,6 +146,7 @@ function options(sink: Writable): Partial<ExcelJS.stream.xlsx.WorkbookStreamWrit
  */
 export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, rowLimit = mostRows): Promise<void> {
   const book = new ExcelJS.stream.xlsx.WorkbookWriter(options(sink));
+  keepLastStyle(book);
   for (const sheet of sheets) {
     const styles = columnStyles(sheet.columns);
     let part = 1;
