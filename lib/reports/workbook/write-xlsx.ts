@@ -38,21 +38,7 @@ function columnStyles(columns: readonly ReportColumn[]): Partial<ExcelJS.Style>[
   });
 }
 
-interface StyleTable {
-  addStyleModel: (style: object, cellType?: number) => number;
-}
-
-/** The writer asks for a style's number at every cell, and neighbours mostly share theirs: the last answer is kept at hand. */
-function keepLastStyle(book: ExcelJS.stream.xlsx.WorkbookWriter): void {
-  const { styles } = book as unknown as { styles: StyleTable };
-  const ask = styles.addStyleModel.bind(styles);
-  let last: object | null = null;
-  let number = 0;
-  styles.addStyleModel = (style, cellType) => {
-    if (style !== last) [last, number] = [style, ask(style, cellType)];
-    return number;
-  };
-}
+type StyledRow = ExcelJS.Row & { style: Partial<ExcelJS.Style> };
 
 interface Piped {
   readonly pipes?: readonly { readonly _writableState?: { readonly length: number } }[];
@@ -84,7 +70,8 @@ function openPage(book: ExcelJS.stream.xlsx.WorkbookWriter, sheet: ReportSheet, 
     return page;
   }
   page.columns = sheet.columns.map(({ width }) => ({ width: width ?? 12 }));
-  const head = page.addRow(sheet.columns.map(({ heading }) => heading));
+  const head = page.addRow(sheet.columns.map(({ heading }) => heading)) as StyledRow;
+  head.style = plainStyle;
   for (let index = 1; index <= sheet.columns.length; index += 1) head.getCell(index).style = headStyle;
   head.commit();
   return page;
@@ -114,16 +101,18 @@ function addRow(
   cells: readonly ReportCell[],
 ): void {
   // An absent value makes no cell at all; a null would make an empty one, with a style to be worked out.
-  const row = page.addRow(cells.map((cell) => cell ?? undefined));
-  if (sheet.columns.length === 0) {
-    if (sheet.boldFirst && cells.length > 0) row.getCell(1).style = boldStyle;
-    row.commit();
-    return;
-  }
-  for (let index = 0; index < sheet.columns.length; index += 1) {
+  const row = page.addRow(cells.map((cell) => cell ?? undefined)) as StyledRow;
+  row.style = plainStyle;
+  const free = sheet.columns.length === 0;
+  for (let index = 0; index < cells.length; index += 1) {
     const value = cells[index];
     if (value === null || value === undefined) continue;
-    row.getCell(index + 1).style = styleOf(value, sheet.columns[index], styles[index] ?? plainStyle);
+    const style = free
+      ? index === 0 && sheet.boldFirst
+        ? boldStyle
+        : plainStyle
+      : styleOf(value, sheet.columns[index], styles[index] ?? plainStyle);
+    row.getCell(index + 1).style = style;
   }
   row.commit();
 }
@@ -146,7 +135,6 @@ function options(sink: Writable): Partial<ExcelJS.stream.xlsx.WorkbookStreamWrit
  */
 export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, rowLimit = mostRows): Promise<void> {
   const book = new ExcelJS.stream.xlsx.WorkbookWriter(options(sink));
-  keepLastStyle(book);
   for (const sheet of sheets) {
     const styles = columnStyles(sheet.columns);
     let part = 1;
