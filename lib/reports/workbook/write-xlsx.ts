@@ -117,7 +117,7 @@ function addRow(
   row.commit();
 }
 
-/** Light compression: a workbook of a thousand frames takes a third longer at the usual level, and is a tenth smaller. */
+/** Light compression: at the usual level a workbook takes about a sixth longer to write, and is about a fifth smaller (300 portals). */
 function options(sink: Writable): Partial<ExcelJS.stream.xlsx.WorkbookStreamWriterOptions> {
   const zip = { zlib: { level: 1 } };
   return {
