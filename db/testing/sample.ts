@@ -121,6 +121,7 @@ export function resultsOf(version: number, frame: Frame, random: () => number): 
       factors: numbers(frame.cases.length),
       order: 1,
       criticalLoadFactor: purpose === 'strength' && random() > 0.3 ? 3 + 20 * random() : null,
+      method: null,
       displacements,
       reactions: numbers(3 * frame.supports.length),
       endForces: numbers(6 * frame.members.length),

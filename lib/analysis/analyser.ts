@@ -112,6 +112,7 @@ function caseState(frame: Frame, recovered: Recovered, index: number): ResultSta
     factors,
     order: 1,
     criticalLoadFactor: null,
+    method: null,
     displacements,
     reactions,
     endForces,

@@ -27,6 +27,7 @@ export function superpose(frame: Frame, cases: readonly ResultState[], index: nu
     factors,
     order: 1,
     criticalLoadFactor: null,
+    method: null,
     displacements,
     reactions: sum((state) => state.reactions, 3 * frame.supports.length),
     endForces: sum((state) => state.endForces, 6 * frame.members.length),

@@ -137,6 +137,7 @@ export function state(
     factors: new Float64Array([1]),
     order: 1,
     criticalLoadFactor: alpha,
+    method: null,
     displacements: Float64Array.from(displacements),
     reactions: new Float64Array(),
     endForces: new Float64Array(),

@@ -5,6 +5,29 @@
 import type { Purpose } from '@/lib/model/frame';
 
 /**
+ * What sets a state apart from the plain first-order one of Euler–Bernoulli members. The lines of its members, its
+ * certificate and its drawings are recovered with it, so it is stored with the state.
+ */
+export interface StateMethod {
+  /** Members shear as well as bend. */
+  readonly shearDeformation: boolean;
+  /** Which way the imperfections of this state lean (the arrow of its name), or none. */
+  readonly imperfection: 'right' | 'left' | null;
+  /** Forces that stand for the imperfections: Fx, Fy by node, N, global, as they act at `loadScale` times the loads; null = none. */
+  readonly notional: Float64Array | null;
+  /** Second order was analysed under this many times the loads and its results divided by it (AISC 360-22 C2.1(d): 1.6 for ASD). */
+  readonly loadScale: number;
+  /** Factors on EA and EI by member, 2 each (AISC 360-22 C2.3); null = all 1. */
+  readonly stiffness: Float64Array | null;
+  /** Tension-only members (index) that are slack. */
+  readonly slack: readonly number[];
+  /** Passes until equilibrium stood still, all sets of slack members counted; 1 where none was needed. */
+  readonly iterations: number;
+  /** Largest relative change of the last pass; 0 where none was needed. */
+  readonly change: number;
+}
+
+/**
  * State of the frame under one load case or combination. Order: cases in frame order, then combinations.
  * Everything else (diagrams, extremes, deflected line) is recovered exactly from this and the frame.
  */
@@ -18,6 +41,8 @@ export interface ResultState {
   readonly order: 1 | 2;
   /** α_cr; null = none (no positive root) or not asked for. Set for strength combinations. */
   readonly criticalLoadFactor: number | null;
+  /** Null = plain first order. */
+  readonly method: StateMethod | null;
   /** ux, uy, rz by node, global, m and rad; NaN where a node has no rotation of its own. */
   readonly displacements: Float64Array;
   /** Fx, Fy, Mz by support (order of frame.supports), global, N and N·m. */
