@@ -1,0 +1,56 @@
+import { describe, expect, it } from 'vitest';
+import { settleTies, type TieTrial } from './settle-ties';
+
+const forces = (...values: number[]): TieTrial<string> => ({
+  ok: true,
+  solution: 'found',
+  forces: Float64Array.from(values),
+  nothing: 1e-6,
+});
+
+describe('which ties are slack', () => {
+  it('are none where all are pulled', () => {
+    expect(settleTies([2, 5], () => forces(3, 4))).toEqual({ ok: true, solution: 'found', slack: [], passes: 1 });
+  });
+
+  it('are those pressed, and those without force', () => {
+    const found = settleTies([2, 5, 7], (slack) => (slack.length ? forces(3, -4, -0.1) : forces(3, -4, 1e-7)));
+    expect(found).toMatchObject({ ok: true, slack: [5, 7], passes: 2 });
+  });
+
+  it('take up again what would be stretched once another has let go', () => {
+    const found = settleTies([0, 1], (slack) => {
+      if (slack.length === 0) return forces(-10, -2);
+      return slack.includes(1) ? forces(-8, 5) : forces(-8, 5);
+    });
+    expect(found).toMatchObject({ ok: true, slack: [0] });
+  });
+
+  it('change one by one where the frame can’t stand with all that are pressed let go at once', () => {
+    const tried: string[] = [];
+    const found = settleTies([0, 1], (slack) => {
+      tried.push(slack.join());
+      if (slack.length === 2) return { ok: false, why: 'it can move' };
+      return slack.length === 0 ? forces(-10, -2) : forces(-8, 5);
+    });
+    expect(found).toMatchObject({ ok: true, slack: [0], passes: 4 });
+    expect(tried).toEqual(['', '0,1', '', '0']);
+  });
+
+  it('find no set that settles: one met before, with the members that kept changing', () => {
+    const found = settleTies([0, 3], (slack) => (slack.includes(3) ? forces(1, 1) : forces(1, -1)));
+    expect(found).toMatchObject({ ok: false, members: [3], why: 'repeated' });
+  });
+
+  it('stop after 50 passes', () => {
+    const ties = Array.from({ length: 60 }, (_, i) => i);
+    // each pass lets one more go
+    const found = settleTies(ties, (slack) => forces(...ties.map((i) => (i < slack.length ? -1 : i === slack.length ? -1 : 1))));
+    expect(found).toMatchObject({ ok: false, passes: 50, why: 'passes' });
+  });
+
+  it('say why a set could not be analysed', () => {
+    const found = settleTies([4], (slack) => (slack.length ? { ok: false, why: 'node B can slide' } : forces(-1)));
+    expect(found).toEqual({ ok: false, members: [4], passes: 4, why: { trial: 'node B can slide' } });
+  });
+});
