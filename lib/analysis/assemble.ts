@@ -22,7 +22,7 @@ const joints = emptyJointStiffness();
 /** First-order stiffness of a member. README (2.2), (2.3). */
 export function memberStiffness(m: MemberData, out: MemberStiffness): MemberStiffness {
   const L = m.length;
-  const { S11, S12, S22 } = jointStiffness(m.EI, L, m.startSpring, m.endSpring, joints);
+  const { S11, S12, S22 } = jointStiffness(m, joints);
   out.ka = m.EA / L;
   out.kvv = (S11 + 2 * S12 + S22) / (L * L);
   out.kv1 = (S11 + S12) / L;

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { fixedEndForces } from './fixed-end-forces';
-import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
+import { emptyJointStiffness, jointStiffness, type JointStiffness } from './joint-stiffness';
 import type { MemberData } from './member-data';
 import type { LocalLoads } from './member-loads';
 
@@ -10,10 +10,12 @@ const EA = 2e9;
 const none: LocalLoads = { lines: [], places: [], strain: 0, curvature: 0 };
 const across = (a: number, b: number, q1: number, q2: number): LocalLoads => ({ ...none, lines: [{ a, b, qx1: 0, qx2: 0, qy1: q1, qy2: q2 }] }); // prettier-ignore
 
-function forces(loads: LocalLoads, k1 = Infinity, k2 = Infinity): number[] {
-  const m: MemberData = { start: 0, end: 1, length: L, cos: 1, sin: 0, EA, EI, startSpring: k1, endSpring: k2, weight: 0, expansion: 0, depth: 1 }; // prettier-ignore
+const member = (k1: number, k2: number, GAv: number): MemberData => ({ start: 0, end: 1, length: L, cos: 1, sin: 0, EA, EI, GAv, startSpring: k1, endSpring: k2, weight: 0, expansion: 0, depth: 1 }); // prettier-ignore
+const stiffness = (k1: number, k2: number, GAv = Infinity): JointStiffness => jointStiffness(member(k1, k2, GAv), emptyJointStiffness()); // prettier-ignore
+
+function forces(loads: LocalLoads, k1 = Infinity, k2 = Infinity, GAv = Infinity): number[] {
   const out = new Float64Array(6);
-  fixedEndForces(m, loads, jointStiffness(EI, L, k1, k2, emptyJointStiffness()), out, 0);
+  fixedEndForces(member(k1, k2, GAv), loads, stiffness(k1, k2, GAv), out, 0);
   return [...out];
 }
 function expectForces(found: number[], wanted: number[]): void {
@@ -79,14 +81,69 @@ describe('fixed-end forces', () => {
 describe('a member’s stiffness between its nodes', () => {
   it('is 4EI/L and 2EI/L rigid, 3EI/L with the far end pinned, nothing with its own end pinned', () => {
     const a = (4 * EI) / L;
-    expect(jointStiffness(EI, L, Infinity, Infinity, emptyJointStiffness())).toMatchObject({ S11: a, S12: a / 2, S22: a });
-    expect(jointStiffness(EI, L, 0, Infinity, emptyJointStiffness())).toMatchObject({ S11: 0, S12: 0, S22: (3 * EI) / L });
-    expect(jointStiffness(EI, L, Infinity, 0, emptyJointStiffness())).toMatchObject({ S11: (3 * EI) / L, S12: 0, S22: 0 });
+    expect(stiffness(Infinity, Infinity)).toMatchObject({ S11: a, S12: a / 2, S22: a });
+    expect(stiffness(0, Infinity)).toMatchObject({ S11: 0, S12: 0, S22: (3 * EI) / L });
+    expect(stiffness(Infinity, 0)).toMatchObject({ S11: (3 * EI) / L, S12: 0, S22: 0 });
   });
 
   it('puts joints and member one after another: 1/k + L/3EI at one end, the other pinned', () => {
     const k = 5e6;
-    const { S11 } = jointStiffness(EI, L, k, 0, emptyJointStiffness());
+    const { S11 } = stiffness(k, 0);
     expect(1 / S11).toBeCloseTo(1 / k + L / (3 * EI), 15);
+  });
+
+  it('loses by shear what 1/GAvL adds to the flexibility', () => {
+    // unit moments at both ends: L/3EI + 1/GAvL, −L/6EI + 1/GAvL (Przemieniecki, Theory of Matrix Structural Analysis, ch. 5)
+    const GAv = 4e6;
+    const { S11, S12, S22 } = stiffness(Infinity, Infinity, GAv);
+    const near = L / (3 * EI) + 1 / (GAv * L);
+    const far = -L / (6 * EI) + 1 / (GAv * L);
+    expect(S11 * near + S12 * far).toBeCloseTo(1, 12);
+    expect(S11 * far + S12 * near).toBeCloseTo(0, 12);
+    expect(S22).toBe(S11);
+    const k = 5e6;
+    expect(1 / stiffness(k, 0, GAv).S11 / (1 / k + near)).toBeCloseTo(1, 12);
+  });
+});
+
+describe('fixed-end forces of a member that shears', () => {
+  const GAv = 4e6;
+  const shear = (12 * EI) / (GAv * L * L);
+
+  it('of a uniform load are those of one that does not', () => {
+    expectForces(forces(across(0, L, -5, -5), Infinity, Infinity, GAv), [0, 20, (5 * 64) / 12, 0, 20, (-5 * 64) / 12]);
+  });
+
+  it('of a force at a are P a b (b + ½ΦL)/(1 + Φ)L², Φ = 12EI/GAvL²', () => {
+    // by the moments of a cantilever closed to its far end; from memory, checked by integration below
+    const [P, a] = [7, 3];
+    const b = L - a;
+    const m1 = (P * a * b * (b + (shear * L) / 2)) / ((1 + shear) * L * L);
+    const m2 = (-P * a * b * (a + (shear * L) / 2)) / ((1 + shear) * L * L);
+    const loads: LocalLoads = { ...none, places: [{ x: a, Px: 0, Py: -P, M: 0 }] };
+    const Y = (m1 + m2) / L;
+    expectForces(forces(loads, Infinity, Infinity, GAv), [0, (P * b) / L + Y, m1, 0, (P * a) / L - Y, m2]);
+  });
+
+  it('close both ends: slopes from M/EI and V/GAv come back to nothing, for partial linear loads, forces and moments', () => {
+    const loads: LocalLoads = { lines: [{ a: 1, b: 6, qx1: 0, qx2: 0, qy1: -3, qy2: 9 }], places: [{ x: 2.5, Px: 0, Py: 4, M: 11 }], strain: 0, curvature: 0 }; // prettier-ignore
+    const [, Y1, m1] = forces(loads, Infinity, Infinity, GAv);
+    let [psi, v, V, M] = [0, 0, Y1!, -m1!];
+    const n = 400000;
+    for (let i = 0; i < n; i++) {
+      // midpoint rule; the load point stands between two steps
+      const x = ((i + 0.5) * L) / n;
+      if (i === (2.5 / L) * n) [V, M] = [V + 4, M - 11];
+      const h = L / n;
+      const q = x > 1 && x < 6 ? -3 + (12 * (x - 1)) / 5 : 0;
+      const Vm = V + (q * h) / 2;
+      const Mm = M + (V * h) / 2;
+      v += h * (psi + (Mm * h) / EI / 2 - Vm / GAv);
+      psi += (h * Mm) / EI;
+      M += h * Vm;
+      V += h * q;
+    }
+    expect(Math.abs(psi)).toBeLessThan(1e-8 * Math.abs((m1! * L) / EI));
+    expect(Math.abs(v)).toBeLessThan(1e-8 * Math.abs((m1! * L * L) / EI));
   });
 });

@@ -17,8 +17,12 @@ export interface LoadVectors {
 }
 
 /** f = node loads − Σ Tᵀ q_F − K_fs d_s, a column a case. README (2.7). */
-export function loadVectors(frame: Frame, t: Topology, angles: Float64Array): LoadVectors {
-  const data = memberData(frame);
+export function loadVectors(
+  frame: Frame,
+  t: Topology,
+  angles: Float64Array,
+  data: readonly MemberData[] = memberData(frame),
+): LoadVectors {
   const loads = memberLoads(frame);
   const cases = frame.cases.length;
   const n = 3 * t.size;
@@ -32,7 +36,7 @@ export function loadVectors(frame: Frame, t: Topology, angles: Float64Array): Lo
     for (let c = 0; c < cases; c++) {
       const acting = loads[i * cases + c];
       if (!acting) continue;
-      if (!ready) jointStiffness(m.EI, m.length, m.startSpring, m.endSpring, joints);
+      if (!ready) jointStiffness(m, joints);
       ready = true;
       const at = (c * data.length + i) * 6;
       fixedEndForces(m, acting, joints, fixedEnd, at);

@@ -14,6 +14,8 @@ export interface MemberData {
   readonly sin: number;
   readonly EA: number;
   readonly EI: number;
+  /** Shear stiffness G Av, N; Infinity = the member does not shear. */
+  readonly GAv: number;
   /** Rotational stiffness between the node and the member's end: Infinity rigid, 0 pinned. */
   readonly startSpring: number;
   readonly endSpring: number;
@@ -29,7 +31,17 @@ export function springOf(joint: Joint): number {
   return joint === 'rigid' ? Infinity : joint === 'pin' ? 0 : joint;
 }
 
+/** What changes members from plain Euler–Bernoulli ones; a `StateMethod` says as much. */
+export interface MemberMethod {
+  /** Members shear as well as bend: G Av, a typed Av as given, else by shape (lib/sections/in-plane.ts). */
+  readonly shearDeformation: boolean;
+  /** Factors on EA (and G Av) and EI by member, 2 each (AISC 360-22 C2.3); null = all 1. */
+  readonly stiffness: Float64Array | null;
+}
+
 const known = new WeakMap<Frame, readonly MemberData[]>();
+const shearing = new WeakMap<Frame, readonly MemberData[]>();
+const reduced = new WeakMap<readonly MemberData[], WeakMap<Float64Array, readonly MemberData[]>>();
 
 /** Members of a frame in its own order; computed once a frame. */
 export function memberData(frame: Frame): readonly MemberData[] {
@@ -53,6 +65,7 @@ export function memberData(frame: Frame): readonly MemberData[] {
       sin: dy / length,
       EA: material.E_Pa * A,
       EI: material.E_Pa * (plane.I_m4 ?? NaN),
+      GAv: Infinity,
       startSpring: member.axialOnly ? 0 : springOf(member.startJoint),
       endSpring: member.axialOnly ? 0 : springOf(member.endJoint),
       weight: (material.density_kg_m3 ?? NaN) * A * gravity,
@@ -61,5 +74,36 @@ export function memberData(frame: Frame): readonly MemberData[] {
     };
   });
   known.set(frame, data);
+  return data;
+}
+
+/** Members as one state is analysed; plain ones are `memberData(frame)` itself. NaN as G Av where G or Av is not known. */
+export function memberDataFor(frame: Frame, as: MemberMethod | null): readonly MemberData[] {
+  const data = as?.shearDeformation ? shearData(frame) : memberData(frame);
+  const factors = as?.stiffness;
+  if (!factors) return data;
+  let kept = reduced.get(data);
+  if (!kept) reduced.set(data, (kept = new WeakMap()));
+  const before = kept.get(factors);
+  if (before) return before;
+  const less = data.map((m, i) => ({
+    ...m,
+    EA: m.EA * factors[2 * i]!,
+    EI: m.EI * factors[2 * i + 1]!,
+    GAv: m.GAv * factors[2 * i]!,
+  }));
+  kept.set(factors, less);
+  return less;
+}
+
+function shearData(frame: Frame): readonly MemberData[] {
+  const before = shearing.get(frame);
+  if (before) return before;
+  const data = memberData(frame).map((m, i) => {
+    const member = frame.members[i]!;
+    const Av = inPlane(frame.sections[member.section]!, member.turned).AvShear_m2;
+    return { ...m, GAv: (frame.materials[member.material]!.G_Pa ?? NaN) * (Av ?? NaN) };
+  });
+  shearing.set(frame, data);
   return data;
 }

@@ -1,6 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 import type { MemberLine, ResultState, Segment } from '@/lib/results/result';
-import { memberData } from './member-data';
+import { memberDataFor, type MemberData } from './member-data';
 import { stretchesOf } from './member-stretches';
 
 // what acts on each stretch in the state at hand, and which of the member's places divide it
@@ -31,12 +31,17 @@ function makeRoom(places: number): void {
  * Internal forces and deflected line of a member, exactly: polynomials between load points, from the forces at its
  * start and the loads along it (README §3).
  *
- * dN/dx = −q_x, dV/dx = q_y, dM/dx = V; u′ = N/EA + ε₀, v″ = M/EI + κ₀, with v at both ends and u at the start given
- * by the nodes. A point load stands between two segments; one exactly at an end stands beside a segment of no length
+ * dN/dx = −q_x, dV/dx = q_y, dM/dx = V; u′ = N/EA + ε₀, v″ = M/EI + κ₀ − (V/GAv)′, with v at both ends and u at the start
+ * given by the nodes. A point load stands between two segments; one exactly at an end stands beside a segment of no length
  * there, so that both sides of its jump count.
  */
 export function memberLine(frame: Frame, state: ResultState, member: number): MemberLine {
-  const m = memberData(frame)[member]!;
+  const m = memberDataFor(frame, state.method)[member]!;
+  if (state.method?.slack.includes(member)) return slackLine(m, state);
+  return firstOrderLine(frame, state, member, m);
+}
+
+function firstOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData): MemberLine {
   const { places, cases } = stretchesOf(frame, member);
   const last = places.length - 1;
   makeRoom(places.length);
@@ -76,6 +81,7 @@ export function memberLine(frame: Frame, state: ResultState, member: number): Me
   let u = d[a]! * m.cos + d[a + 1]! * m.sin;
   let v = 0;
   let slope = 0;
+  const shears = m.GAv !== Infinity;
   const segments: { from: number; to: number; N: number[]; V: number[]; M: number[]; u: number[]; v: number[] }[] = [];
   const flat = (x: number) => ({ from: x, to: x, N: [N], V: [V], M: [M], u: [u], v: [v] });
   if (jumps[0]) segments.push(flat(0));
@@ -85,6 +91,7 @@ export function memberLine(frame: Frame, state: ResultState, member: number): Me
       N -= Px[i]!;
       V += Py[i]!;
       M -= M0[i]!;
+      if (shears) slope -= Py[i]! / m.GAv;
     }
     const from = places[i]!;
     // a place that nothing of this state begins, ends or stands at divides nothing
@@ -98,8 +105,12 @@ export function memberLine(frame: Frame, state: ResultState, member: number): Me
     const m2 = w0 / 2;
     const m3 = w1 / 3;
     const e0 = N / m.EA + strain;
-    const k0 = M / m.EI + curvature;
-    const k1 = V / m.EI;
+    let k0 = M / m.EI + curvature;
+    let k1 = V / m.EI;
+    if (shears) {
+      k0 -= w0 / m.GAv;
+      k1 -= qy1[i]! / m.GAv;
+    }
     const k2 = m2 / m.EI;
     const k3 = m3 / m.EI;
     const segment = {
@@ -134,4 +145,16 @@ export function memberLine(frame: Frame, state: ResultState, member: number): Me
     if (line.length > 1) line[1] = line[1]! + turn;
   }
   return { length: m.length, segments: segments as readonly Segment[] };
+}
+
+/** A slack member: no forces, straight between its nodes. */
+function slackLine(m: MemberData, state: ResultState): MemberLine {
+  const d = state.displacements;
+  const [a, b] = [3 * m.start, 3 * m.end];
+  const u1 = d[a]! * m.cos + d[a + 1]! * m.sin;
+  const v1 = -d[a]! * m.sin + d[a + 1]! * m.cos;
+  const u2 = d[b]! * m.cos + d[b + 1]! * m.sin;
+  const v2 = -d[b]! * m.sin + d[b + 1]! * m.cos;
+  const L = m.length;
+  return { length: L, segments: [{ from: 0, to: L, N: [0], V: [0], M: [0], u: [u1, (u2 - u1) / L], v: [v1, (v2 - v1) / L] }] };
 }

@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import { emptyMemberStiffness, memberStiffness } from './assemble';
 import { endForces, endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
-import { memberData } from './member-data';
+import { memberData, type MemberData } from './member-data';
 import type { Topology } from './topology';
 
 /** A case as recovered: what a ResultState holds of it, and how far its nodes are out of balance. */
@@ -23,8 +23,8 @@ export function recover(
   loads: LoadVectors,
   d: Float64Array,
   loadCase: number,
+  data: readonly MemberData[] = memberData(frame),
 ): Recovered {
-  const data = memberData(frame);
   const nodes = frame.nodes.length;
   const all = loads.prescribed.slice(loadCase * nodes * 3, (loadCase + 1) * nodes * 3);
   for (let p = 0; p < t.size; p++) {
