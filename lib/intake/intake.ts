@@ -17,6 +17,12 @@ export interface InputRow {
   readonly row: number;
   /** Text of each cell as typed, by column from A; null = empty. Formula cells: the stored value. */
   readonly cells: readonly (string | null)[];
+  /** Place among `sheets` of the sheet it stands on; missing in what was stored before rows could be read again. */
+  readonly part?: number;
+  /** What its cells are where their text does not say so (rows/cell-marks.ts); null = nothing of the kind. */
+  readonly marks?: string | null;
+  /** Who typed or changed the row on screen; null = it stands so in the files. */
+  readonly changedBy?: string | null;
 }
 
 /** What was recognised of one sheet, for the page that brings sheets in. */
@@ -30,6 +36,8 @@ export interface SheetRead {
   /** Data rows read (titles, headings, units, comments, blanks left out). */
   readonly rows: number;
   readonly headings: readonly { readonly text: string; readonly cell: string; readonly known: string | null }[];
+  /** What the numbers of its file settle the decimal mark to. */
+  readonly decimalMark?: '.' | ',' | null;
 }
 
 export interface InputIdentity {

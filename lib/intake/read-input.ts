@@ -5,10 +5,11 @@ import { isReadable, VariantReader } from '@/lib/intake/families/variants';
 import type { RawSheet } from '@/lib/intake/files/raw-sheet';
 import { familiesInUse, FrameList } from '@/lib/intake/frames';
 import { nearest } from '@/lib/intake/distance';
-import type { FrameRead, InputIdentity, InputRow, Intake, SheetRead } from '@/lib/intake/intake';
+import type { FrameRead, InputIdentity, Intake, SheetRead } from '@/lib/intake/intake';
 import { ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, Reader } from '@/lib/intake/reader';
 import { readTable } from '@/lib/intake/read-table';
+import { inputRows } from '@/lib/intake/rows/input-rows';
 import { cellAddress } from '@/lib/intake/files/cell-address';
 import { sheetDefinitions, type SheetName, sheetNames } from '@/lib/intake/sheet-definitions';
 import { LoadCases } from '@/lib/intake/sheets/load-cases';
@@ -79,7 +80,7 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
     frames: read.map((each) => (problems.stopsAll || stopped.has(each.id) ? { id: each.id, frame: null } : each)),
     problems: problems.list(),
     sheets: sheetsRead(raw.sheets, tables),
-    rows: rowsAsTyped(raw.sheets),
+    rows: inputRows(raw.sheets),
   };
 }
 
@@ -170,6 +171,7 @@ function sheetsRead(sheets: readonly RawSheet[], tables: ReadonlyMap<SheetName, 
         known: part?.definition.name ?? null,
         headingRow: part?.headingRow ?? null,
         rows: part ? part.dataRows.length : raw.rows.length,
+        decimalMark: raw.decimalMark,
         headings: (part?.columns ?? []).map((column) => ({
           text: column.text,
           cell: cellAddress(part?.headingRow ?? 1, column.index),
@@ -177,13 +179,4 @@ function sheetsRead(sheets: readonly RawSheet[], tables: ReadonlyMap<SheetName, 
         })),
       };
     });
-}
-
-function rowsAsTyped(sheets: readonly RawSheet[]): InputRow[] {
-  return sheets
-    .flatMap((sheet) => sheet.parts)
-    .sort((a, b) => a.order - b.order)
-    .flatMap((part) =>
-      part.rows.map((row) => ({ sheet: part.name, row: row.row, cells: row.cells.map((cell) => cell?.text ?? null) })),
-    );
 }

@@ -59,5 +59,7 @@ export interface SettingOrigin {
   readonly source: 'sheet' | 'office' | 'default';
   /** "Setup B6" where the sheet gave it. */
   readonly cell: string | null;
+  /** Who chose it on screen; the cell is then that of the revision's own input workbook. */
+  readonly changedBy?: string;
 }
 export type SettingOrigins = Readonly<Record<SettingName, SettingOrigin>>;

@@ -31,6 +31,8 @@ export interface RawRow {
   readonly row: number;
   /** By column from A; trailing blanks left out. Blank rows are left out of `rows` altogether. */
   readonly cells: readonly (RawCell | null)[];
+  /** Who typed or changed it on screen, where it does not stand so in the files. */
+  readonly changedBy?: string;
 }
 
 /** One sheet of one file. Its heading row is its own: columns may stand in another order than in another part. */
