@@ -2,7 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { bounds } from '../bounds';
 import { memberData } from '../member-data';
-import type { SecondState } from './second-analysis';
+import type { SecondState } from './second-state';
 
 /**
  * Largest difference between both analyses of one case, relative to the largest value of its sort: movements (rotations

@@ -1,0 +1,47 @@
+import type { Acting } from './second-loads';
+import type { Given, Setup } from './second-setup';
+import { equationsOf, solveFor } from './second-solve';
+import { onNodes, rightSide, stateFrom, type SecondState } from './second-state';
+
+/** Most passes, and the change of axial forces, relative to the largest force, that counts as none. */
+const mostPasses = 100;
+const still = 1e-10;
+
+/**
+ * One state in equilibrium, by solving and taking the axial forces found for the geometry of the next pass until they
+ * stand still. First order (`axial` null): one pass.
+ *
+ * @returns null where it cannot be solved, does not stand still, or stands beyond its lowest critical load
+ */
+export function solveState(setup: Setup, given: Given, acting: readonly Acting[]): SecondState | null {
+  let axial = given.axial;
+  for (let pass = 0; pass < mostPasses; pass++) {
+    const now = { ...given, axial };
+    const equations = equationsOf(setup, now, acting);
+    if (!equations) return null;
+    const nodes = onNodes(setup, now, acting);
+    const [d] = solveFor(equations, [rightSide(setup, equations, equations.ends, nodes)]);
+    const state = stateFrom(setup, now, equations, equations.ends, nodes, d!);
+    if (axial === null) return state;
+    const found = Float64Array.from(setup.members, (_, i) => state.endForces[6 * i]!);
+    if (!found.every(Number.isFinite)) return null;
+    let off = 0;
+    for (let i = 0; i < found.length; i++) off = Math.max(off, Math.abs(found[i]! - axial[i]!));
+    // an even number of ways in which it gives way goes unseen here: the first analysis counts them
+    if (off <= still * largestForce(setup, state)) return equations.sign < 0 ? null : state;
+    axial = found;
+  }
+  return null;
+}
+
+/** Largest of N, V, M/L at members' ends and of reactions, N. */
+function largestForce(setup: Setup, { endForces, reactions }: SecondState): number {
+  let most = 0;
+  endForces.forEach((force, i) => {
+    most = Math.max(most, Math.abs(force) / (i % 3 === 2 ? setup.members[Math.floor(i / 6)]!.L : 1));
+  });
+  reactions.forEach((force, i) => {
+    if (i % 3 !== 2) most = Math.max(most, Math.abs(force));
+  });
+  return most;
+}
