@@ -4,6 +4,7 @@ import type {
   DrawingJoint,
   DrawingLine,
   DrawingLoad,
+  DrawingMethod,
   DrawingRestraint,
   DrawingResult,
 } from '@/components/drawing/drawing-data';
@@ -57,7 +58,8 @@ export function drawingData({ frame, evaluation, members, units, nearLimit, chos
       rz: restraint(rz),
       angle: angle_rad,
     })),
-    results: states.map(({ name, kind, purpose }) => ({ name, kind, purpose })),
+    results: states.map(({ name, kind, purpose, criticalLoadFactor }) => ({ name, kind, purpose, criticalLoadFactor })),
+    notApplicable: notApplicable(frame, states),
     chosen: shown === null ? null : drawingResult(frame, shown),
     movement: moving === null || moving === shown ? null : drawingResult(frame, moving),
   };
@@ -70,7 +72,10 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
     kind: state.kind,
     purpose: state.purpose,
     description: state.kind === 'case' ? null : describe(frame, state),
-    loads: frame.cases.flatMap((one, index) => loadsOf(frame, index, one.name, state.factors[index] ?? 0)),
+    loads: [
+      ...frame.cases.flatMap((one, index) => loadsOf(frame, index, one.name, state.factors[index] ?? 0)),
+      ...notionalForces(frame, state),
+    ],
     reactions: frame.supports.map((_, index) => ({
       Fx: state.reactions[3 * index] ?? 0,
       Fy: state.reactions[3 * index + 1] ?? 0,
@@ -82,7 +87,39 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
       rz: finite(state.displacements[3 * index + 2]),
     })),
     lines: frame.members.map((_, index) => drawingLine(frame, state, index)),
+    slack: state.method?.slack ?? [],
+    method: methodOf(state),
+    buckled: null,
   };
+}
+
+function methodOf({ order, criticalLoadFactor, method }: ResultState): DrawingMethod {
+  return {
+    order,
+    criticalLoadFactor,
+    imperfection: method?.imperfection ?? null,
+    shearDeformation: method?.shearDeformation ?? false,
+    reducedStiffness: (method?.stiffness ?? null) !== null,
+    loadScale: method?.loadScale ?? 1,
+    iterations: method?.iterations ?? 1,
+    change: method?.change ?? 0,
+  };
+}
+
+/** Load cases that have no result of their own where others have one. */
+function notApplicable(frame: Frame, states: readonly ResultState[]): string[] {
+  const own = new Set(states.filter((state) => state.kind === 'case').map((state) => state.name));
+  return states.length === 0 ? [] : frame.cases.flatMap(({ name }) => (own.has(name) ? [] : [name]));
+}
+
+/** Forces that stand for the imperfections, as they act beside the loads of the combination. */
+function notionalForces(frame: Frame, { method }: ResultState): DrawingLoad[] {
+  const forces = method?.notional;
+  if (!forces) return [];
+  return frame.nodes.flatMap((_, node): DrawingLoad[] => {
+    const [Fx, Fy] = [forces[2 * node]! / method.loadScale, forces[2 * node + 1]! / method.loadScale];
+    return Fx === 0 && Fy === 0 ? [] : [{ case: 'imperfection', kind: 'node', node, Fx, Fy, Mz: 0 }];
+  });
 }
 
 function drawingLine(frame: Frame, state: ResultState, member: number): DrawingLine {

@@ -4,7 +4,7 @@ import type { DrawingData, DrawingResult } from './drawing-data';
 import { around, placeLabels, type LabelWish, type PlacedLabel } from './labels';
 import { type MemberAxis } from './member-axis';
 import { path, plus, type Point } from './paper';
-import { nodeWishes, setScene, type Scene } from './scene';
+import { nodeWishes, setScene, slackWishes, type Scene } from './scene';
 
 export interface DeflectedPlan {
   readonly scene: Scene;
@@ -46,7 +46,7 @@ export function planDeflected(
   return {
     scene,
     lines,
-    labels: placeLabels([...wishes, ...(large ? nodeWishes(scene) : [])], scene.taken),
+    labels: placeLabels([...wishes, ...(large ? nodeWishes(scene) : []), ...slackWishes(scene, result.slack)], scene.taken),
     times: still ? null : times,
   };
 }

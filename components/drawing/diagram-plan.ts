@@ -4,7 +4,7 @@ import type { DrawingData, DrawingResult } from './drawing-data';
 import { around, placeLabels, type LabelWish, type PlacedLabel } from './labels';
 import { along, valueAt, type MemberAxis } from './member-axis';
 import { line, path, type Point } from './paper';
-import { memberWishes, nodeWishes, setScene, type Scene } from './scene';
+import { memberWishes, nodeWishes, setScene, slackWishes, type Scene } from './scene';
 
 export type Force = 'N' | 'V' | 'M';
 const forceQuantity = { N: 'force', V: 'force', M: 'moment' } as const;
@@ -61,7 +61,13 @@ export function planDiagram(
   const { wishes, dots } = flat ? { wishes: [], dots: [] } : extremeWishes(scene, result, force, sign * k, most);
   const must = wishes.slice(0, 1);
   const labels = placeLabels(
-    [...must, ...(large ? nodeWishes(scene) : []), ...wishes.slice(1), ...(large ? memberWishes(scene) : [])],
+    [
+      ...must,
+      ...slackWishes(scene, result.slack),
+      ...(large ? nodeWishes(scene) : []),
+      ...wishes.slice(1),
+      ...(large ? memberWishes(scene, result.slack) : []),
+    ],
     scene.taken,
   );
   return { scene, shapes, dots, labels, bar: flat ? null : scaleBar(k, force, data.units) };

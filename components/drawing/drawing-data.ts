@@ -13,12 +13,22 @@ export interface DrawingData {
   readonly nodes: readonly DrawingNode[];
   readonly members: readonly DrawingMember[];
   readonly supports: readonly DrawingSupport[];
-  /** Every load case and combination, in order: what may be chosen. */
-  readonly results: readonly { readonly name: string; readonly kind: 'case' | 'combination'; readonly purpose: Purpose | null }[];
+  /** Every load case and combination that has a result, in order: what may be chosen. */
+  readonly results: readonly ResultName[];
+  /** Load cases without a result of their own: tension-only members make sums of cases meaningless. */
+  readonly notApplicable: readonly string[];
   /** Views 1 and 2: the chosen case or combination; null = not solved, geometry only. */
   readonly chosen: DrawingResult | null;
   /** View 3, deflected line: usually the governing service combination; null = take the chosen one. */
   readonly movement: DrawingResult | null;
+}
+
+export interface ResultName {
+  readonly name: string;
+  readonly kind: 'case' | 'combination';
+  readonly purpose: Purpose | null;
+  /** α_cr where the combination has one. */
+  readonly criticalLoadFactor: number | null;
 }
 
 export interface DrawingNode {
@@ -69,6 +79,35 @@ export interface DrawingResult {
   readonly displacements: readonly { readonly ux: number; readonly uy: number; readonly rz: number | null }[];
   /** By member. */
   readonly lines: readonly DrawingLine[];
+  /** Members (index) that are slack: tension only, and not pulled in this result. */
+  readonly slack: readonly number[];
+  /** How it was analysed. */
+  readonly method: DrawingMethod;
+  /** How the frame would buckle under a multiple of these loads; null where there is no such multiple. */
+  readonly buckled: DrawingBuckled | null;
+}
+
+/** What is told of how a result was found. */
+export interface DrawingMethod {
+  readonly order: 1 | 2;
+  readonly criticalLoadFactor: number | null;
+  readonly imperfection: 'right' | 'left' | null;
+  readonly shearDeformation: boolean;
+  readonly reducedStiffness: boolean;
+  /** Analysed under this many times the loads, its results divided by it. */
+  readonly loadScale: number;
+  readonly iterations: number;
+  /** Largest relative change of the last pass. */
+  readonly change: number;
+}
+
+/** A shape without a size: movements are shares of the largest one. */
+export interface DrawingBuckled {
+  /** α_cr */
+  readonly factor: number;
+  readonly kind: 'sway' | 'member';
+  /** By member: points along it, 4 numbers each: x, y of the unmoved point (m) and its movement in x and y (largest of all = 1). */
+  readonly members: readonly (readonly number[])[];
 }
 
 /**
@@ -88,7 +127,7 @@ export interface DrawingLine {
   readonly ratio: readonly number[] | null;
 }
 
-/** `case`: the load case it comes from, for its name and its place in the stack (in order of cases). */
+/** `case`: the load case it comes from, for its name and its place in the stack (in order of cases); `imperfection` for forces that stand for one. */
 interface LoadOf {
   readonly case: string;
 }

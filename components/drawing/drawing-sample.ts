@@ -1,5 +1,16 @@
 import type { MemberExtremes } from '@/lib/results/result';
-import type { DrawingData, DrawingLine, DrawingResult } from './drawing-data';
+import type { DrawingData, DrawingLine, DrawingMethod, DrawingResult } from './drawing-data';
+
+export const plainMethod: DrawingMethod = {
+  order: 1,
+  criticalLoadFactor: null,
+  imperfection: null,
+  shearDeformation: false,
+  reducedStiffness: false,
+  loadScale: 1,
+  iterations: 1,
+  change: 0,
+};
 
 /** Frames small enough to check a drawing by hand, for tests. */
 
@@ -36,6 +47,9 @@ export function simpleBeam(): DrawingData {
       { ux: 0, uy: 0, rz: 0.005 },
     ],
     lines: [line],
+    slack: [],
+    method: plainMethod,
+    buckled: null,
   };
   return {
     frame: 'B1',
@@ -65,9 +79,10 @@ export function simpleBeam(): DrawingData {
       { node: 1, ux: 'free', uy: 'fixed', rz: 'free', angle: 0 },
     ],
     results: [
-      { name: 'dead', kind: 'case', purpose: null },
-      { name: 'C1', kind: 'combination', purpose: 'strength' },
+      { name: 'dead', kind: 'case', purpose: null, criticalLoadFactor: null },
+      { name: 'C1', kind: 'combination', purpose: 'strength', criticalLoadFactor: null },
     ],
+    notApplicable: [],
     chosen,
     movement: null,
   };

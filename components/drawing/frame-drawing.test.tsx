@@ -1,7 +1,8 @@
 import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
-import { simpleBeam } from './drawing-sample';
+import type { DrawingBuckled, DrawingData, DrawingMethod, DrawingResult } from './drawing-data';
+import { plainMethod, simpleBeam } from './drawing-sample';
 import { FrameDrawing } from './frame-drawing';
 
 const large = () => document.querySelector<SVGSVGElement>('.d-view-large')!;
@@ -52,6 +53,7 @@ describe('the drawing of a frame', () => {
       name: `C${i + 1}`,
       kind: 'combination' as const,
       purpose: 'strength' as const,
+      criticalLoadFactor: null,
     }));
     render(<FrameDrawing data={{ ...simpleBeam(), results }} onChoose={chosen} />);
     await user.click(screen.getByRole('button', { name: 'Load case or combination: C1' }));
@@ -84,4 +86,58 @@ describe('the drawing of a frame', () => {
     const diagram = document.querySelector('.d-small [data-view="diagram"]')!;
     expect(texts(diagram)).toContain('not solved, so there is nothing to draw here');
   });
+
+  it('draws the buckled shape where the result has a critical load factor, and says what it is', async () => {
+    const user = userEvent.setup();
+    const { rerender } = render(<FrameDrawing data={withResult({ name: 'C3 →', buckled: swayed })} />);
+    await user.click(screen.getByRole('radio', { name: 'Buckled' }));
+    expect(screen.getByRole('heading', { name: /^1 Buckled shape/ })).toHaveTextContent(
+      'at 4.21 times the loads of C3 → the frame would sway so; in its plane, elastic, out of plane not looked at',
+    );
+    expect(texts(large())).toEqual(expect.arrayContaining(['αcr 4.21 for C3 →', 'a shape, of no size']));
+    expect(large().querySelector('.d-buckled')?.getAttribute('d')).toMatch(/^M/);
+    // no movement is named: there is none to name
+    expect(texts(large()).filter((text) => /mm/.test(text ?? ''))).toEqual([]);
+    rerender(<FrameDrawing data={withResult({ name: 'S1' })} />);
+    expect(screen.queryByRole('radio', { name: 'Buckled' })).toBeNull();
+    expect(screen.getByRole('heading', { name: /^1 Bending moment/ })).toBeInTheDocument();
+  });
+
+  it('draws a slack member dashed and named, whatever is looked at', () => {
+    render(<FrameDrawing data={withResult({ slack: [0] })} />);
+    for (const view of ['diagram', 'loads', 'deflected']) {
+      const drawn = document.querySelector(`[data-view="${view}"]`)!;
+      expect(drawn.querySelector('path[data-member="AB"]')).toHaveClass('d-member-slack');
+      expect(texts(drawn)).toContain('AB slack');
+    }
+    expect(screen.getByRole('note')).toHaveTextContent('slack, drawn dashed: AB');
+  });
+
+  it('says how a result was found', () => {
+    const method: DrawingMethod = {
+      ...plainMethod, order: 2, imperfection: 'left', reducedStiffness: true, loadScale: 1.6, iterations: 5, change: 3.1e-11,
+    }; // prettier-ignore
+    render(<FrameDrawing data={{ ...withResult({ name: 'C1 ←', method }), notApplicable: ['dead', 'wind'] }} />);
+    const note = screen.getByRole('note');
+    expect(note).toHaveTextContent(
+      'C1 ← second order: equilibrium on the deformed shape, settled in 5 passes, last change 3.1 · 10⁻¹¹',
+    );
+    expect(note).toHaveTextContent('imperfection to the left ←');
+    expect(note).toHaveTextContent('analysed under 1.6 times the loads, results divided by 1.6');
+    expect(note).toHaveTextContent('load cases alone not applicable (dead, wind)');
+  });
+
+  it('draws the forces that stand for an imperfection among the loads', () => {
+    const loads = [{ case: 'imperfection', kind: 'node' as const, node: 1, Fx: 2300, Fy: 0, Mz: 0 }];
+    render(<FrameDrawing data={withResult({ loads })} initialView="loads" />);
+    expect(texts(large())).toContain('imperfection 2.30 kN');
+  });
 });
+
+/** The simple beam with something else said of its result. */
+function withResult(other: Partial<DrawingResult>): DrawingData {
+  const data = simpleBeam();
+  return { ...data, chosen: { ...data.chosen!, ...other } };
+}
+
+const swayed: DrawingBuckled = { factor: 4.213, kind: 'sway', members: [[0, 0, 0, 0, 3, 0, 0.5, 1, 6, 0, 0, 0]] };

@@ -1,16 +1,17 @@
 'use client';
 import { useState, type KeyboardEvent, type PointerEvent, type ReactNode } from 'react';
-import { Choice } from '../ui/choice';
 import { Segments } from '../ui/segments';
 import { useKeys } from '../ui/use-keys';
 import { useWidth } from '../ui/use-width';
-import type { Force } from './diagram-plan';
-import { unitLabel } from '@/lib/units/batch-unit';
-import type { DrawingData, DrawingResult } from './drawing-data';
+import { captionOf, viewNames, type Diagram, type ViewName } from './captions';
+import type { DrawingData } from './drawing-data';
 import { DrawingReadout, type ReadPoint } from './drawing-readout';
 import { nearestPoint } from './nearest-point';
 import { boundsOf } from './paper';
-import { DeflectedView, DiagramView, LoadsView, RatioView } from './views';
+import { readStep } from './read-step';
+import { ResultChoice } from './result-choice';
+import { ResultFacts } from './result-facts';
+import { BuckledView, DeflectedView, DiagramView, LoadsView, RatioView } from './views';
 
 interface FrameDrawingProps {
   readonly data: DrawingData;
@@ -19,13 +20,10 @@ interface FrameDrawingProps {
   /** The result being brought. */
   readonly loading?: boolean;
   readonly initialView?: ViewName;
-  readonly initialForce?: Force;
+  readonly initialDiagram?: Diagram;
 }
 
-const viewNames = ['diagram', 'loads', 'deflected', 'ratio'] as const;
-export type ViewName = (typeof viewNames)[number];
-
-const forceTitles = { N: 'Axial force', V: 'Shear force', M: 'Bending moment' } as const;
+const forces = (['N', 'V', 'M'] as const).map((value) => ({ value, label: value }));
 
 /**
  * A frame on four numbered views, all in sight: the chosen diagram, loads and reactions, deflected line, ratio. Pressing
@@ -37,14 +35,17 @@ export function FrameDrawing({
   loading = false,
   // without a solution its members are all there is to see
   initialView = data.chosen ? 'diagram' : 'ratio',
-  initialForce = 'M',
+  initialDiagram = 'M',
 }: FrameDrawingProps) {
   const [box, width] = useWidth<HTMLDivElement>(905);
   const [large, setLarge] = useState<ViewName>(initialView);
-  const [force, setForce] = useState<Force>(initialForce);
+  const [wanted, setDiagram] = useState<Diagram>(initialDiagram);
   const [point, setPoint] = useState<ReadPoint | null>(null);
   const [looked, setLooked] = useState<ViewName | null>(null);
   const result = data.chosen;
+  const buckled = result?.buckled ?? null;
+  // kept for the next result that has a buckled shape; meanwhile moments
+  const diagram = wanted === 'B' && !buckled ? 'M' : wanted;
   const phone = width < 640;
   const height = phone ? Math.max(250, Math.round(width * 0.72)) : largeHeight(data, width);
   const small = viewNames.filter((name) => name !== large);
@@ -52,9 +53,10 @@ export function FrameDrawing({
   const smallHeight = phone ? 200 : Math.round(Math.max(150, smallWidth * 0.62));
   useKeys({
     ...Object.fromEntries(viewNames.map((name, i) => [String(i + 1), () => setLarge(name)])),
-    n: () => setForce('N'),
-    v: () => setForce('V'),
-    m: () => setForce('M'),
+    n: () => setDiagram('N'),
+    v: () => setDiagram('V'),
+    m: () => setDiagram('M'),
+    ...(buckled ? { b: () => setDiagram('B') } : {}),
   });
 
   const draw = (name: ViewName, w: number, h: number, isLarge: boolean): ReactNode => {
@@ -62,11 +64,13 @@ export function FrameDrawing({
     if (name === 'ratio') return <RatioView {...view} />;
     const shown = name === 'deflected' ? (data.movement ?? result) : result;
     if (!shown) return <NotSolved width={w} />;
-    if (name === 'diagram') return <DiagramView {...view} result={shown} force={force} />;
+    if (name === 'diagram' && diagram === 'B' && buckled)
+      return <BuckledView {...view} result={shown} shape={buckled} breathing={looked === 'diagram'} />;
+    if (name === 'diagram') return <DiagramView {...view} result={shown} force={diagram === 'B' ? 'M' : diagram} />;
     if (name === 'loads') return <LoadsView {...view} result={shown} />;
     return <DeflectedView {...view} result={shown} breathing={looked === 'deflected'} />;
   };
-  const caption = (name: ViewName) => captionOf(name, data, force);
+  const caption = (name: ViewName) => captionOf(name, data, diagram);
   const onPointer = (event: PointerEvent<SVGSVGElement>) => {
     const bounds = event.currentTarget.getBoundingClientRect();
     const at = {
@@ -77,7 +81,7 @@ export function FrameDrawing({
     if (found) setPoint(found);
   };
   const onKeyDown = (event: KeyboardEvent) => {
-    const moved = step(event.key, data, point);
+    const moved = readStep(event.key, data, point);
     if (!moved) return;
     event.preventDefault();
     setPoint(moved);
@@ -94,14 +98,16 @@ export function FrameDrawing({
           <div className="d-choices">
             <Segments
               label="Diagram"
-              options={(['N', 'V', 'M'] as const).map((value) => ({ value, label: value }))}
-              value={force}
+              options={[...forces, ...(buckled ? [{ value: 'B', label: 'Buckled' }] : [])]}
+              value={diagram}
               onChange={(value) => {
-                setForce(value as Force);
+                setDiagram(value as Diagram);
                 setLarge('diagram');
               }}
             />
-            {onChoose && data.results.length > 0 && <ResultChoice data={data} chosen={result.name} onChoose={onChoose} />}
+            {onChoose && data.results.length > 0 && (
+              <ResultChoice results={data.results} notApplicable={data.notApplicable} chosen={result.name} onChoose={onChoose} />
+            )}
           </div>
         )}
       </div>
@@ -125,6 +131,7 @@ export function FrameDrawing({
         {draw(large, width, height, true)}
         <Pointed data={data} point={point} />
       </svg>
+      {result && <ResultFacts data={data} result={result} />}
       {result && <DrawingReadout data={data} result={result} point={point} />}
       <div className="d-small">
         {small.map((name) => {
@@ -162,38 +169,11 @@ export function FrameDrawing({
   );
 }
 
-/** Every case and combination in sight; more than fourteen in a list that opens. */
-function ResultChoice({ data, chosen, onChoose }: { data: DrawingData; chosen: string; onChoose: (result: string) => void }) {
-  const options = data.results.map(({ name }) => ({ value: name, label: name }));
-  const label = 'Load case or combination';
-  if (options.length <= 14) return <Segments label={label} options={options} value={chosen} onChange={onChoose} />;
-  return (
-    <span className="choice-list-right">
-      <Choice label={label} options={options} value={[chosen]} onChange={([name]) => name && onChoose(name)} />
-    </span>
-  );
-}
-
 /** As tall as the frame's own proportions ask for, between 340 and 560 px. */
 function largeHeight(data: DrawingData, width: number): number {
   const { minX, maxX, minY, maxY } = boundsOf(data.nodes);
   const wanted = 170 + ((maxY - minY) / Math.max(maxX - minX, 1e-6)) * (width - 260);
   return Math.round(Math.min(560, Math.max(340, wanted)));
-}
-
-function captionOf(name: ViewName, data: DrawingData, force: Force): { title: string; note: string } {
-  const result = data.chosen;
-  const told = (one: DrawingResult | null) => (one ? [one.name, one.description].filter(Boolean).join(', ') : 'not solved');
-  if (name === 'diagram')
-    return {
-      title: forceTitles[force],
-      note: result
-        ? `${told(result)}; ${unitLabel(force === 'M' ? 'moment' : 'force', data.units)}${force === 'M' ? ', drawn on the tension side' : force === 'N' ? ', tension positive' : ''}`
-        : told(null),
-    };
-  if (name === 'loads') return { title: 'Loads and reactions', note: told(result) };
-  if (name === 'deflected') return { title: 'Deflected line', note: told(data.movement ?? result) };
-  return { title: 'Ratio', note: result ? 'each member filled to its governing ratio' : 'nothing is checked yet' };
 }
 
 /** 5 mm squares, behind drawings only. */
@@ -216,24 +196,4 @@ function NotSolved({ width }: { readonly width: number }) {
 function Pointed({ data, point }: { readonly data: DrawingData; readonly point: ReadPoint | null }) {
   const name = point ? data.members[point.member]?.id : null;
   return name ? <desc>{`${name} is being read`}</desc> : null;
-}
-
-/** Arrow left and right walk along the member in twentieths, up and down go to the next one. */
-function step(key: string, data: DrawingData, point: ReadPoint | null): ReadPoint | null {
-  const count = data.members.length;
-  const lengthOf = (index: number) => {
-    const member = data.members[index]!;
-    const [p, q] = [data.nodes[member.start]!, data.nodes[member.end]!];
-    return Math.hypot(q.x - p.x, q.y - p.y);
-  };
-  if (count === 0 || !['ArrowLeft', 'ArrowRight', 'ArrowUp', 'ArrowDown', 'Home', 'End'].includes(key)) return null;
-  if (!point) return { member: 0, x: 0 };
-  const length = lengthOf(point.member);
-  if (key === 'Home' || key === 'End') return { ...point, x: key === 'Home' ? 0 : length };
-  if (key === 'ArrowLeft' || key === 'ArrowRight') {
-    const x = point.x + ((key === 'ArrowRight' ? 1 : -1) * length) / 20;
-    return { ...point, x: Math.min(Math.max(x, 0), length) };
-  }
-  const member = (point.member + (key === 'ArrowDown' ? 1 : -1) + count) % count;
-  return { member, x: (point.x / length) * lengthOf(member) };
 }

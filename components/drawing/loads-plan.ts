@@ -6,7 +6,7 @@ import { blockWishes, reactionWishes } from './load-labels';
 import { heads, pointed, turning } from './load-points';
 import { besides } from './load-words';
 import { plus } from './paper';
-import { nodeWishes, setScene, type Scene } from './scene';
+import { nodeWishes, setScene, slackWishes, type Scene } from './scene';
 
 export interface LoadsPlan {
   readonly scene: Scene;
@@ -77,5 +77,6 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
   const once = wishes.filter(({ text }) => !told.has(text) && told.add(text));
   wishes.splice(0, wishes.length, ...once, ...reactionWishes(scene, result));
   if (large) wishes.push(...nodeWishes(scene));
+  wishes.push(...slackWishes(scene, result.slack));
   return { scene, arrows, labels: placeLabels(wishes, taken), besides: said };
 }

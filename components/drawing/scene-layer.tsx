@@ -48,10 +48,12 @@ interface FrameLinesProps {
   readonly scene: Scene;
   readonly thin?: boolean;
   readonly pointed?: number | null;
+  /** Members (index) drawn dashed: they carry nothing. */
+  readonly slack?: readonly number[];
 }
 
 /** Supports, members and nodes; pinned ends as small open circles drawn back from the node, springs as a filled one. */
-export function FrameLines({ scene, thin = false, pointed = null }: FrameLinesProps) {
+export function FrameLines({ scene, thin = false, pointed = null, slack = [] }: FrameLinesProps) {
   const { data, paper, axes, support } = scene;
   const dense = data.members.length > 120;
   return (
@@ -60,7 +62,8 @@ export function FrameLines({ scene, thin = false, pointed = null }: FrameLinesPr
       {axes.map((axis) => (
         <path
           key={axis.index}
-          className={`d-member ${pointed === axis.index ? 'd-member-pointed' : ''} ${dense ? 'd-member-dense' : ''}`}
+          className={`d-member ${pointed === axis.index ? 'd-member-pointed' : ''} ${dense ? 'd-member-dense' : ''} ${slack.includes(axis.index) ? 'd-member-slack' : ''}`}
+          data-slack={slack.includes(axis.index) || undefined}
           d={line(axis.a, axis.b)}
           data-member={data.members[axis.index]?.id}
         />

@@ -170,7 +170,7 @@ function widestGap(angles: readonly number[]): Point {
 }
 
 /** "BC IPE 360" along each member, on whichever side and place is free; names alone are left off where there are many. */
-export function memberWishes(scene: Scene): LabelWish[] {
+export function memberWishes(scene: Scene, but: readonly number[] = []): LabelWish[] {
   const { data, axes, font } = scene;
   const many = data.members.length > 40;
   return [...axes]
@@ -178,16 +178,31 @@ export function memberWishes(scene: Scene): LabelWish[] {
     .flatMap((axis): LabelWish[] => {
       const member = data.members[axis.index]!;
       const text = many ? member.section : `${member.id} ${member.section}`;
-      if (axis.drawn < text.length * font * 0.5 + 10) return [];
-      const steep = Math.abs(axis.t.x) < 0.05;
-      let turn = (Math.atan2(axis.t.y, axis.t.x) * 180) / Math.PI;
-      if (turn > 90.01) turn -= 180;
-      if (turn < -89.99) turn += 180;
-      if (steep) turn = -90;
-      const off = font * 0.85;
-      const places = [0.5, 0.32, 0.68, 0.2, 0.8].flatMap((share) =>
-        [-off, off].map((side) => ({ at: along(axis, axis.length * share, side), turn })),
-      );
-      return [{ key: `member-${axis.index}`, text, className: 'd-member-name', size: font - 1, places }];
+      if (but.includes(axis.index) || axis.drawn < text.length * font * 0.5 + 10) return [];
+      return [{ key: `member-${axis.index}`, text, className: 'd-member-name', size: font - 1, places: placesAlong(axis, font) }];
     });
+}
+
+/** "BD slack" along each member that is slack, ahead of other names: dashes alone might be overlooked. */
+export function slackWishes(scene: Scene, slack: readonly number[]): LabelWish[] {
+  const { data, axes, font } = scene;
+  return slack.flatMap((index) => {
+    const axis = axes[index];
+    const places = axis ? placesAlong(axis, font) : [];
+    const text = `${data.members[index]?.id ?? ''} slack`;
+    return [{ key: `slack-${index}`, text, className: 'd-slack-name', size: font - 1, places, must: slack.length <= 8 }];
+  });
+}
+
+/** Beside a member, turned as it is and never upside down. */
+function placesAlong(axis: MemberAxis, font: number): { at: Point; turn: number }[] {
+  const steep = Math.abs(axis.t.x) < 0.05;
+  let turn = (Math.atan2(axis.t.y, axis.t.x) * 180) / Math.PI;
+  if (turn > 90.01) turn -= 180;
+  if (turn < -89.99) turn += 180;
+  if (steep) turn = -90;
+  const off = font * 0.85;
+  return [0.5, 0.32, 0.68, 0.2, 0.8].flatMap((share) =>
+    [-off, off].map((side) => ({ at: along(axis, axis.length * share, side), turn })),
+  );
 }

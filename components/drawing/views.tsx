@@ -1,9 +1,11 @@
 'use client';
 import { useEffect, useId, useMemo, useState } from 'react';
+import { formatNumber } from '@/lib/units/format';
 import { HatchPattern } from '../charts/spread';
+import { planBuckled } from './buckled-plan';
 import { planDeflected } from './deflected-plan';
 import { planDiagram, type Force } from './diagram-plan';
-import type { DrawingData, DrawingResult } from './drawing-data';
+import type { DrawingBuckled, DrawingData, DrawingResult } from './drawing-data';
 import { planLoads } from './loads-plan';
 import { planRatio } from './ratio-plan';
 import { Dimensions, FrameLines, Labels } from './scene-layer';
@@ -36,7 +38,7 @@ export function DiagramView({
           <path className="d-outline" d={shape.outline} />
         </g>
       ))}
-      <FrameLines scene={plan.scene} pointed={pointed} />
+      <FrameLines scene={plan.scene} pointed={pointed} slack={result.slack} />
       {plan.dots.map((dot, i) => (
         <circle key={i} className="d-dot" cx={dot.x} cy={dot.y} r={large ? 2.2 : 1.6} />
       ))}
@@ -67,7 +69,7 @@ export function LoadsView({ data, result, pointed, width, height, large }: ViewP
       {plan.arrows.map((arrow) => (
         <path key={arrow.key} className={arrow.className} d={arrow.d} />
       ))}
-      <FrameLines scene={plan.scene} pointed={pointed} />
+      <FrameLines scene={plan.scene} pointed={pointed} slack={result.slack} />
       <Dimensions scene={plan.scene} />
       <Labels labels={plan.labels} />
       {plan.besides.length > 0 && (
@@ -92,7 +94,7 @@ export function DeflectedView({
   const share = useBreath(breathing && plan.times !== null);
   return (
     <>
-      <FrameLines scene={plan.scene} thin />
+      <FrameLines scene={plan.scene} thin slack={result.slack} />
       <path className="d-deflected" d={plan.lines(share).join('')} />
       <Dimensions scene={plan.scene} />
       <Labels labels={plan.labels} />
@@ -103,6 +105,39 @@ export function DeflectedView({
         textAnchor={large ? 'end' : 'start'}
       >
         {plan.times === null ? 'nothing moves' : `movements × ${factorText(plan.times)}`}
+      </text>
+    </>
+  );
+}
+
+interface BuckledViewProps extends ViewProps {
+  readonly result: DrawingResult;
+  readonly shape: DrawingBuckled;
+  readonly breathing: boolean;
+}
+
+/** The shape in which the frame would buckle under α_cr times the loads: drawn as a shape, with no movement named. */
+export function BuckledView({ data, result, shape, breathing, width, height, large }: BuckledViewProps) {
+  const plan = useMemo(
+    () => planBuckled(data, shape, result.slack, width, height, large),
+    [data, shape, result.slack, width, height, large],
+  );
+  const share = useBreath(breathing);
+  return (
+    <>
+      <FrameLines scene={plan.scene} thin slack={result.slack} />
+      <path className="d-buckled" d={plan.lines(share).join('')} />
+      <Dimensions scene={plan.scene} />
+      <Labels labels={plan.labels} />
+      <text className="d-extreme d-governing d-alpha" x={large ? width - 10 : 8} y={18} textAnchor={large ? 'end' : 'start'}>
+        α
+        <tspan className="d-sub" dy={3}>
+          cr
+        </tspan>
+        <tspan dy={-3}>{` ${formatNumber(shape.factor, { significant: 3 })} for ${result.name}`}</tspan>
+      </text>
+      <text className="d-nothing" x={large ? width - 10 : 8} y={height - 8} textAnchor={large ? 'end' : 'start'}>
+        a shape, of no size
       </text>
     </>
   );

@@ -1,0 +1,40 @@
+import { powerText } from '../ui/power-text';
+import type { DrawingData, DrawingResult } from './drawing-data';
+
+interface ResultFactsProps {
+  readonly data: DrawingData;
+  readonly result: DrawingResult;
+}
+
+/** One line under the drawing: how the chosen result was found, and what it leaves out. */
+export function ResultFacts({ data, result }: ResultFactsProps) {
+  return (
+    <p className="d-facts" aria-label="How this result was found" role="note">
+      <b>{result.name}</b> {methodWords(data, result).join(' · ')}
+    </p>
+  );
+}
+
+/** "second order, 5 passes, last change 3.1 · 10⁻¹¹", "imperfection to the right →", "slack: BD, CE" … */
+export function methodWords({ members, notApplicable }: DrawingData, { kind, method, slack, name }: DrawingResult): string[] {
+  const { order, iterations, change, imperfection, shearDeformation, reducedStiffness, loadScale } = method;
+  const passes = iterations === 1 ? 'settled in one pass' : `settled in ${iterations} passes, last change ${powerText(change)}`;
+  const words = [
+    order === 2
+      ? `second order: equilibrium on the deformed shape, ${passes}`
+      : `first order${iterations > 1 ? `, ${passes}` : ''}`,
+  ];
+  if (imperfection !== null) words.push(`imperfection to the ${imperfection} ${imperfection === 'right' ? '→' : '←'}`);
+  if (shearDeformation) words.push('members shear as well as bend');
+  if (reducedStiffness) words.push('stiffness reduced (AISC 360)');
+  if (loadScale !== 1) words.push(`analysed under ${loadScale} times the loads, results divided by ${loadScale}`);
+  if (slack.length > 0) {
+    const names = slack.map((index) => members[index]?.id ?? '').join(', ');
+    words.push(`slack, drawn dashed: ${names}`);
+  }
+  if (notApplicable.length > 0 && kind === 'combination')
+    words.push(
+      `load cases alone not applicable (${notApplicable.join(', ')}): members that only pull make ${name} no sum of them`,
+    );
+  return words;
+}
