@@ -22,7 +22,7 @@ function bents(): Bents {
     frames: [['frame', 'title', 'group']],
     nodes: [['frame', 'node', 'x [m]', 'y [m]', 'place']],
     members: [
-      ['frame', 'member', 'start', 'end', 'section', 'role', 'length z [m]', 'length LTB [m]', 'tension only', 'end joint'],
+      ['frame', 'member', 'start', 'end', 'section', 'role', 'length z [m]', 'length LTB [m]', 'offset', 'end joint'],
     ],
     supports: [['frame', 'node', 'ux', 'uy', 'rz']],
     nodeLoads: [['frame', 'case', 'node', 'Fx [kN]', 'Fy [kN]']],
@@ -128,7 +128,7 @@ export function messy(): SampleSheet[] {
   slip(b.supports, 17, 'D', 2, 'free');
   b.nodes.push([frameName(18), 'E', 20, 0, ''], [frameName(18), 'F', 22, 0, '']); // not-connected
   b.members.push([frameName(18), 'EF', 'E', 'F', 'IPE 200', 'beam', 1, 1, '', 'rigid']);
-  slip(b.members, 19, 'CD', 8, 'yes'); // not-supported until tension only is computed
+  slip(b.members, 19, 'CD', 8, 0.1); // not-supported until offsets are computed
   slip(b.members, 20, 'BC', 4, 'TUBE'); // not-positive in Sections
   slip(b.members, 21, 'BC', 4, 'PLATE'); // unknown-material from Sections
   slip(b.members, 22, 'BC', 4, 'GIRDER'); // unknown-grade from Materials
@@ -212,13 +212,13 @@ export function messyOnes(): [string, SampleSheet[]][] {
         }
       : sheet,
   );
-  const second = good.map((sheet) =>
-    sheet.name === 'Setup' ? { ...sheet, rows: [...sheet.rows, ['analysis', 'second order']] } : sheet,
+  const code = good.map((sheet) =>
+    sheet.name === 'Setup' ? { ...sheet, rows: [...sheet.rows, ['strength check', 'EN 1993-1-1']] } : sheet,
   );
   return [
     ['missing-sheet', without('Supports')],
     ['missing-column', noCoordinate],
     ['too-large', wide],
-    ['not-supported', second],
+    ['not-supported', code],
   ];
 }

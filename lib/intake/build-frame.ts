@@ -5,6 +5,7 @@ import { tellUnheld } from '@/lib/intake/geometry/connected';
 import { nodesWithoutRotation } from '@/lib/intake/geometry/joints';
 import { RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { SheetName } from '@/lib/intake/sheet-definitions';
+import { tellAnalysisNeeds } from '@/lib/intake/sheets/analysis-needs';
 import { Combinations } from '@/lib/intake/sheets/combinations';
 import { Limits } from '@/lib/intake/sheets/limits';
 import { readMemberLoads } from '@/lib/intake/sheets/member-loads';
@@ -57,6 +58,7 @@ export class FrameBuilder {
     checkGeometry(draft);
     tellUnheld(draft);
     tellWeight(draft);
+    tellAnalysisNeeds(draft);
     const { list: combinations, notChecked } = this.combinations.for(entry, draft.cases);
     draft.combinationNames.push(...combinations.map((each) => each.name));
     const limits = this.limits.for(draft);

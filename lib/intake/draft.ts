@@ -19,6 +19,8 @@ export interface Draft {
   /** m, by member. */
   readonly lengths: number[];
   readonly sections: Section[];
+  /** Row of the Sections sheet by section of the frame; null = straight from the library. */
+  readonly sectionRows: (Row | null)[];
   readonly materials: Material[];
   /** Row of the Materials sheet by material of the frame; null = a grade by its name. */
   readonly materialRows: (Row | null)[];
@@ -49,6 +51,7 @@ export function newDraft(batch: Batch, entry: FrameEntry): Draft {
     memberIndex: new Map(),
     lengths: [],
     sections: [],
+    sectionRows: [],
     materials: [],
     materialRows: [],
     supports: [],

@@ -88,6 +88,9 @@ export const settingNotSupported = (name: string, value: string): string =>
 export const columnNotSupported = (column: string): string =>
   `${column} is not computed by this version, so the frame is not run. Nothing simpler is run in its place`;
 
+export const firstOrderTaken = (name: string): string =>
+  `analysis is not given, so ${name} ${name.endsWith('s') ? 'act' : 'acts'} in a first-order analysis. For second order, add the setting analysis second order`;
+
 // --- frames, families, variants
 
 export const tooManyFrames = (count: number, most: number): string =>
@@ -139,6 +142,10 @@ export const unknownMaterial = (name: string, near: string | null): string =>
 export const materialMissing = (): string => 'no material is given here, in Sections or in Setup. Give one';
 export const turnedNeedsMinor = (section: string): string =>
   `a turned member bends about the section's minor axis: section ${section} needs I minor`;
+export const tensionOnlyIsPinned = (): string =>
+  'a tension-only member is pinned at both ends. Write pin, or leave the joint blank';
+export const tensionOnlyInSpan = (span: string): string =>
+  `span ${span} has pieces that are tension only and others that are not, so it is no one physical member`;
 export const coincident = (node: string, other: string): string =>
   `nodes ${node} and ${other} are less than 1 mm apart and not joined. If they are one joint, use one node`;
 export const zeroLength = (member: string, sameNode: boolean): string =>
@@ -180,6 +187,15 @@ export const suspectYield = (): string => 'fy is above 1,000 MPa. Is it in the u
 export const densityMissing = (material: string, loadCase: string): string =>
   `case ${loadCase} has self-weight, so material ${material} needs a density`;
 
+export const shearAreaMissing = (section: string, turned: boolean): string =>
+  `shear deformation needs the shear area of section ${section}${turned ? ', which is turned' : ''}: give Av`;
+export const shearModulusMissing = (material: string): string =>
+  `shear deformation needs G of material ${material}. Give it, or a grade`;
+export const reductionNeedsYield = (material: string): string =>
+  `the stiffness reduction of AISC 360 (τb) needs fy of material ${material}`;
+export const reductionNeedsThickness = (section: string, grade: string): string =>
+  `the stiffness reduction of AISC 360 (τb) needs fy, and that of ${grade} depends on the thickness: give t of section ${section}, or fy`;
+
 // --- supports
 
 export const supportKind = (found: string): string =>
@@ -204,6 +220,8 @@ export const momentOnPins = (node: string): string =>
 export const mustBeBlank = (column: string, load: string): string =>
   `${column} has no meaning for a ${load} load. Clear the cell`;
 export const loadsNothing = (): string => 'no force or moment stands in this row, so it loads nothing';
+export const loadOnTensionOnly = (): string =>
+  'loads between the ends of a tension-only member are not computed: once slack it cannot carry them. Put the load on its nodes';
 export const projectedIsDistributed = (): string => 'projected is for distributed loads. Write global or local';
 export const pointNeedsFrom = (load: string): string => `a ${load} load needs from: its distance from the member's start`;
 export const fromAfterTo = (equal: boolean): string =>

@@ -147,8 +147,8 @@ describe('a workbook by another writer, through to the published JSON', () => {
     expect(frame.results[0]?.reactions[0]?.mz).toBeCloseTo(40e3, 6);
   });
 
-  it('refuses second order at its cell instead of running first order', async () => {
-    const intake = await read(cantilever({ Setup: [['setting', 'value'], ['analysis', 'second order']] })); // prettier-ignore
+  it('refuses a design code that it does not check at its cell instead of checking elastic stress', async () => {
+    const intake = await read(cantilever({ Setup: [['setting', 'value'], ['strength check', 'EN 1993-1-1']] })); // prettier-ignore
     expect(intake.frames.every((each) => each.frame === null)).toBe(true);
     expect(intake.problems.find((each) => each.code === 'not-supported')).toMatchObject({
       sheet: 'Setup',

@@ -22,11 +22,14 @@ export function tellCrossings(draft: Draft): void {
   });
   const sorted = [...pieces].sort((p, q) => Math.min(p.x1, p.x2) - Math.min(q.x1, q.x2));
   const told = new Map<number, number>();
+  // the two rods of a braced panel pass each other: a node there would let the slack one hold the other
+  const tensionOnly = ({ index }: Piece): boolean => draft.members[index]?.tensionOnly ?? false;
   let open: Piece[] = [];
   for (const piece of sorted) {
     const left = Math.min(piece.x1, piece.x2);
     open = open.filter((other) => Math.max(other.x1, other.x2) >= left - touch_m);
     for (const other of open) {
+      if (tensionOnly(piece) && tensionOnly(other)) continue;
       if (!cross(piece, other)) continue;
       const [first, later] = piece.index < other.index ? [piece.index, other.index] : [other.index, piece.index];
       told.set(later, Math.min(told.get(later) ?? Infinity, first));

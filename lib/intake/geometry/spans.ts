@@ -40,6 +40,8 @@ function tellSpan(draft: Draft, pieces: readonly number[]): void {
         draft.reading,
       );
     }
+    if (member.tensionOnly !== lead.tensionOnly)
+      reader.tell(row, 'span', { code: 'conflicting-row', message: say.tensionOnlyInSpan(member.span ?? '') }, draft.reading);
     for (const [key, column] of lengths) {
       if (member[key] === lead[key]) continue;
       const at = row.part.byName.has(column) || !column.startsWith('length LTB') ? column : 'length LTB';

@@ -63,6 +63,10 @@ function readMemberLoad(draft: Draft, row: Row): void {
   const end = kind === 'distributed' ? figures.endValue() : null;
   if (!sound || value === undefined || end === undefined || !ends || loadCase === undefined || member === undefined || member < 0)
     return;
+  if ((value !== 0 || end) && draft.members[member]?.tensionOnly) {
+    reader.tell(row, 'member', { code: 'not-supported', message: say.loadOnTensionOnly() }, reading);
+    return;
+  }
   const way = direction ?? 'y';
   if (kind === 'distributed') {
     draft.memberLoads.push({

@@ -18,12 +18,30 @@ describe('members', () => {
     ['end joint', 2500, { endJoint: 2.5e6 }],
     ['axial only', 'x', { startJoint: 'pin', endJoint: 'pin', axialOnly: true }],
     ['axial only', 0, { startJoint: 'rigid', axialOnly: false }],
+    ['tension only', 'none', { tensionOnly: false, startJoint: 'rigid', axialOnly: false }],
     ['turned', true, { turned: true }],
     ['length LTB', 2, { lengthLtbTop_m: 2, lengthLtbBottom_m: 2 }],
     ['group', 'north', { group: 'north' }],
     ['span', 'long', { span: 'long' }],
   ])('%s %s', (heading, value, expected) => {
     expect(frame(withColumn(heading, value)).members[0]).toMatchObject(expected);
+  });
+
+  it('tension only is pinned at both ends, in a family by an expression too', () => {
+    const rod = ['F2', 'AC', 'A', 'C', 'IPE 300', 'brace', 'yes'];
+    const expected = { tensionOnly: true, startJoint: 'pin', endJoint: 'pin', axialOnly: true };
+    const sheets = withCells({ 'Members!G1': 'tension only', 'Members+': rod });
+    expect(frame(sheets, 'F2').members[3]).toMatchObject(expected);
+    const family: TestSheets = {
+      Families: [['family', 'parameter', 'quantity', 'choices', 'default'], ['bay', 'rods', 'choice', 'yes, no', 'yes']],
+      Variants: [['frame', 'family', 'rods'], ['V1', 'bay', 'yes'], ['V2', 'bay', 'no']],
+      Nodes: [['frame', 'node', 'x', 'y'], ['bay', 'A', 0, 0], ['bay', 'B', 3, 0], ['bay', 'C', 3, 3]],
+      Members: [['frame', 'member', 'start', 'end', 'section', 'tension only'], ['bay', 'AB', 'A', 'B', 'IPE 300', null], ['bay', 'BC', 'B', 'C', 'IPE 300', null], ['bay', 'AC', 'A', 'C', 'IPE 300', '{rods}']],
+      Supports: [['frame', 'node', 'ux', 'uy', 'rz'], ['bay', 'A', 'fixed', 'fixed', 'fixed']],
+      Setup: [['setting', 'value'], ['material', 'S275']],
+    }; // prettier-ignore
+    expect(frame(family, 'V1').members[2]).toMatchObject(expected);
+    expect(frame(family, 'V2').members[2]).toMatchObject({ tensionOnly: false, startJoint: 'rigid' });
   });
 
   it('the face’s own LTB length wins over the common one', () => {
@@ -35,6 +53,7 @@ describe('members', () => {
     ['start joint', 'hinge', 'error unknown-word Members!G2 F1'],
     ['start joint', -5, 'error not-positive Members!G2 F1'],
     ['axial only', 'maybe', 'error unknown-word Members!G2 F1'],
+    ['tension only', 'cable', 'error unknown-word Members!G2 F1'],
     ['length minor', 0, 'error not-positive Members!G2 F1'],
     ['length minor', 'long', 'error not-a-number Members!G2 F1'],
   ])('%s %s is told', (heading, value, problem) => {

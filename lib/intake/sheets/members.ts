@@ -61,8 +61,9 @@ function readMember(draft: Draft, row: Row, id: string): Member | undefined {
   const material = found ? need(resolveMaterial(draft, row, found)) : need(undefined);
   const role = need(reader.word(row, 'role', roles, reading));
   const axialOnly = need(reader.yesNo(row, 'axial only', reading)) ?? false;
-  const startJoint = need(joint(draft, row, 'start joint')) ?? 'rigid';
-  const endJoint = need(joint(draft, row, 'end joint')) ?? 'rigid';
+  const tensionOnly = need(isTensionOnly(draft, row)) ?? false;
+  const startJoint = need(joint(draft, row, 'start joint', tensionOnly)) ?? 'rigid';
+  const endJoint = need(joint(draft, row, 'end joint', tensionOnly)) ?? 'rigid';
   const turned = need(reader.yesNo(row, 'turned', reading)) ?? false;
   if (turned && found?.section && found.section.properties.Iminor_m4 === null) {
     reader.tell(row, 'turned', { code: 'not-a-number', message: say.turnedNeedsMinor(found.section.name) }, reading);
@@ -78,18 +79,19 @@ function readMember(draft: Draft, row: Row, id: string): Member | undefined {
   const span = need(reader.id(row, 'span', reading));
   const group = need(reader.id(row, 'group', reading));
   if (!sound || !found || start < 0 || end < 0 || typeof material !== 'number') return undefined;
-  const pinned = axialOnly || (startJoint === 'pin' && endJoint === 'pin');
+  // a rod that goes slack holds nothing at its ends
+  const pinned = axialOnly || tensionOnly || (startJoint === 'pin' && endJoint === 'pin');
   return {
     id,
     start,
     end,
-    section: indexIn(draft.sections, found.section),
+    section: sectionIndex(draft, found),
     material,
     role,
     startJoint: pinned ? 'pin' : startJoint,
     endJoint: pinned ? 'pin' : endJoint,
     axialOnly: pinned,
-    tensionOnly: false,
+    tensionOnly,
     turned,
     span,
     lengthMajor_m: major,
@@ -100,9 +102,11 @@ function readMember(draft: Draft, row: Row, id: string): Member | undefined {
   };
 }
 
-function indexIn<T>(list: T[], item: T): number {
-  const at = list.indexOf(item);
-  return at >= 0 ? at : list.push(item) - 1;
+function sectionIndex({ sections, sectionRows }: Draft, { section, row }: Found): number {
+  const at = sections.indexOf(section);
+  if (at >= 0) return at;
+  sectionRows.push(row);
+  return sections.push(section) - 1;
 }
 
 interface Found {
@@ -129,11 +133,19 @@ function sectionOf(draft: Draft, row: Row): Found | undefined {
   return found.section ? { section: found.section, row: found.row } : undefined;
 }
 
-function joint(draft: Draft, row: Row, name: string): Joint | null | undefined {
+function isTensionOnly({ batch, reading }: Draft, row: Row): boolean | undefined {
+  return meansOff(rawCell(row, 'tension only')?.text ?? '') ? false : batch.reader.yesNo(row, 'tension only', reading);
+}
+
+function joint(draft: Draft, row: Row, name: string, tensionOnly: boolean): Joint | null | undefined {
   const { reader } = draft.batch;
   const value = reader.wordOrNumber(row, name, jointWords, draft.reading);
-  if (typeof value !== 'number') return value;
   if (value === 0) return 'pin';
+  if (tensionOnly && value !== undefined && value !== null && value !== 'pin') {
+    reader.tell(row, name, { code: 'unknown-word', message: say.tensionOnlyIsPinned() }, draft.reading);
+    return undefined;
+  }
+  if (typeof value !== 'number') return value;
   if (value > 0) return value;
   reader.tell(row, name, { code: 'not-positive', message: say.negativeSpring(rawCell(row, name)?.text ?? '') }, draft.reading);
   return undefined;
@@ -151,9 +163,6 @@ function positiveLength(draft: Draft, row: Row, name: string): number | null | u
 function refuse(draft: Draft, row: Row): void {
   const { reader } = draft.batch;
   const reading: Reading = draft.reading;
-  if (!meansOff(rawCell(row, 'tension only')?.text ?? '') && reader.yesNo(row, 'tension only', reading)) {
-    reader.tell(row, 'tension only', { code: 'not-supported', message: say.columnNotSupported('tension only') }, reading);
-  }
   for (const name of ['end section', 'offset']) {
     const text = rawCell(row, name) ? reader.text(row, name, reading) : null;
     if (text && !meansOff(text)) {

@@ -82,13 +82,35 @@ describe('Setup', () => {
   });
 
   test.each([
-    'analysis|second order', 'strength check|AISC 360-22 LRFD', 'strength check|aisc 360-22 asd', 'strength check|EN 1993-1-1', 'imperfections|EN 1993-1-1',
-    'imperfections|AISC 360', 'stiffness reduction|AISC 360', 'shear deformation|yes', 'combination set|EN 1990',
+    'strength check|AISC 360-22 LRFD', 'strength check|aisc 360-22 asd', 'strength check|EN 1993-1-1', 'combination set|EN 1990',
   ])('%s is refused and stops every frame', (text) => {
     const intake = readSheets(withSetup(text.split('|')));
     expect(lines(intake)).toEqual(['error not-supported Setup!B3 –']);
     expect(intake.frames.map((f) => f.frame)).toEqual([null, null]);
   }); // prettier-ignore
+
+  test.each([
+    ['analysis|Second-order', { analysis: 'second order' }],
+    ['imperfections|EN 1993-1-1', { imperfections: 'EN 1993-1-1' }],
+    ['imperfections|aisc 360', { imperfections: 'AISC 360' }],
+    ['stiffness reduction|AISC 360', { stiffnessReduction: 'AISC 360' }],
+    ['shear deformation|Yes', { shearDeformation: true }],
+    ['shear deformation|1', { shearDeformation: true }],
+  ])('%s is read, and every frame runs', (text, expected) => {
+    const analysis = text.startsWith('analysis') ? [] : [['analysis', 'second order']];
+    const intake = readSheets(withSetup(...analysis, text.split('|')));
+    expect(intake.settings).toMatchObject(expected);
+    expect(lines(intake)).toEqual([]);
+    expect(intake.frames.every((f) => f.frame !== null)).toBe(true);
+  });
+
+  it('says so where imperfections or a reduction meet an analysis that nobody chose', () => {
+    const chosen = [['imperfections', 'EN 1993-1-1'], ['stiffness reduction', 'AISC 360']]; // prettier-ignore
+    const intake = readSheets(withSetup(...chosen));
+    expect(lines(intake)).toEqual(['note default-used Setup!B3 –', 'note default-used Setup!B4 –']);
+    expect(intake.problems[0]?.message).toContain('imperfections act in a first-order analysis');
+    expect(lines(readSheets(withSetup(...chosen, ['analysis', 'second order'])))).toEqual([]);
+  });
 
   test.each<[string, TestCell[][], string[]]>([
     ['a value that is none', [['analysis', 'third order']], ['error unknown-word Setup!B3 –']],

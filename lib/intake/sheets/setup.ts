@@ -57,7 +57,23 @@ export function readSetup(table: Table | undefined, office: Partial<Settings>, r
   const places = new Map([...given].map(([name, row]) => [name, placeOf(row, 'value')] as const));
   const origins = Object.fromEntries(names.map((name) => [name, originOf(name, given.get(name), office)])) as SettingOrigins;
   const settings: Settings = { ...defaultSettings, ...definedOnly(office), ...values };
+  tellFirstOrder(settings, origins, places, problems);
   return { settings, origins, places };
+}
+
+/** Imperfections or a stiffness reduction where nobody said that the analysis is of the first order: allowed, and said. */
+function tellFirstOrder(
+  settings: Settings,
+  origins: SettingOrigins,
+  places: ReadonlyMap<SettingName, Place>,
+  problems: ProblemList,
+): void {
+  if (settings.analysis !== 'first order' || origins.analysis.source === 'sheet') return;
+  for (const name of ['imperfections', 'stiffnessReduction'] as const) {
+    const place = places.get(name);
+    if (!place || settings[name] === 'none') continue;
+    problems.add(place, { code: 'default-used', message: say.firstOrderTaken(settingWords[name]) }, null);
+  }
 }
 
 const valueText = (row: Row): string =>
@@ -70,7 +86,9 @@ function definedOnly(office: Partial<Settings>): Partial<Settings> {
 function originOf(name: SettingName, row: Row | undefined, office: Partial<Settings>): SettingOrigin {
   if (row) {
     const column = row.part.byName.get('value')?.index ?? 0;
-    return { source: 'sheet', cell: `${row.part.raw.name} ${cellAddress(row.raw.row, column)}` };
+    const { changedBy } = row.raw;
+    const cell = `${row.part.raw.name} ${cellAddress(row.raw.row, column)}`;
+    return { source: 'sheet', cell, ...(changedBy === undefined ? {} : { changedBy }) };
   }
   return { source: office[name] === undefined || office[name] === null ? 'default' : 'office', cell: null };
 }
@@ -94,12 +112,7 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     if (!found) tell('unknown-word', say.unknownWord(settingWords[name], text, words));
     return found;
   };
-  const off = <T extends string>(words: readonly T[], allowed: T): T | null => {
-    const found = allowed === 'none' && meansOff(text) ? allowed : word(words);
-    if (found === null || found === allowed) return found;
-    tell('not-supported', say.settingNotSupported(settingWords[name], found));
-    return null;
-  };
+  const orNone = <T extends string>(words: readonly T[]): T | 'none' | null => (meansOff(text) ? 'none' : word(words));
   const number = (): number | null => {
     const { value, entries } = problems.record(() => reader.number(row, 'value', forNobody));
     if (value !== undefined && value !== null) return value;
@@ -118,19 +131,22 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     case 'units':
       return set(name, word(['metric', 'us']));
     case 'analysis':
-      return set(name, off(['first order', 'second order'], 'first order'));
-    case 'strengthCheck':
-      return set(name, off(['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1'], 'elastic stress'));
+      return set(name, word(['first order', 'second order']));
+    case 'strengthCheck': {
+      const found = word(['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1']);
+      if (found === null || found === 'elastic stress') return set(name, found);
+      return tell('not-supported', say.settingNotSupported(settingWords[name], found));
+    }
     case 'stability':
       return set(name, word(['screened', 'by others']));
     case 'imperfections':
-      return set(name, off(['none', 'EN 1993-1-1', 'AISC 360'], 'none'));
+      return set(name, orNone(['none', 'EN 1993-1-1', 'AISC 360']));
     case 'stiffnessReduction':
-      return set(name, off(['none', 'AISC 360'], 'none'));
+      return set(name, orNone(['none', 'AISC 360']));
     case 'shearDeformation': {
       const answer = meansOff(text) ? false : readYesNo(text);
       if (answer === null) return tell('unknown-word', say.unknownWord(settingWords[name], text, ['no', 'yes']));
-      return answer ? tell('not-supported', say.settingNotSupported(settingWords[name], 'yes')) : set(name, false);
+      return set(name, answer);
     }
     case 'combinationSet':
       if (!meansOff(text) && wordKey(text) !== 'aslisted') {

@@ -30,6 +30,12 @@ describe.each(['metric', 'us'] as const)('the template in %s units', (units) => 
       formulae: [expect.stringContaining('rafter')],
     });
     expect(workbook.getWorksheet('Setup')?.getCell('B4').dataValidation).toMatchObject({ formulae: ['"metric,us"'] });
+    const [setup, members] = [workbook.getWorksheet('Setup'), workbook.getWorksheet('Members')];
+    expect(setup?.getCell('A5').value).toBe('analysis');
+    expect(setup?.getCell('A5').note).toContain('deformed shape');
+    expect(setup?.getCell('B5').dataValidation).toMatchObject({ formulae: ['"first order,second order"'] });
+    expect(members?.getCell('K2').value).toBe('tension only');
+    expect(members?.getCell('K3').dataValidation).toMatchObject({ formulae: ['"yes,no"'] });
     for (const name of sheetNames) {
       workbook
         .getWorksheet(name)

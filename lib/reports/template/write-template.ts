@@ -18,6 +18,17 @@ const settingChoices: Readonly<Record<string, readonly string[]>> = {
   'shear deformation': ['no', 'yes'],
 };
 
+/** What a setting does, as a note on its name. */
+const settingNotes: Readonly<Record<string, string>> = {
+  analysis:
+    'second order: every combination in equilibrium on its deformed shape, P-Δ and P-δ. Load cases alone stay first order.',
+  imperfections: 'Strength combinations are analysed leaning right and left, as two results: C1 → and C1 ←.',
+  'stiffness reduction': 'Of strength combinations: 0.8 on EA and EI, τb on EI where it applies (direct analysis).',
+  'shear deformation': 'yes: members shear as well as bend. Sections given by their properties then need Av.',
+  stability: 'by others: member and frame stability is not screened, and every result says so.',
+  'stress factor': 'Allowable stress divided by yield: about 0.6 with unfactored loads, 0.9 to 1 with factored ones.',
+};
+
 /**
  * A workbook to begin with: every sheet of the contract, its headings with their units and a note on each, example rows that
  * read without errors, drop-downs for words.
@@ -52,6 +63,8 @@ function writeSheet(workbook: ExcelJS.Workbook, sheet: TemplateSheet, units: Sys
       if (value !== null) page.getCell(r + 3, i + 1).value = value;
       const choices = sheet.name === 'Setup' && i === 1 ? settingChoices[String(row[0])] : undefined;
       if (choices) page.getCell(r + 3, 2).dataValidation = validation(choices, true);
+      const note = sheet.name === 'Setup' && i === 0 ? settingNotes[String(value)] : undefined;
+      if (note) page.getCell(r + 3, 1).note = note;
     }),
   );
   if (sheet.name === 'Setup') {
