@@ -7,12 +7,12 @@ import { largestDifference } from './second/compare-states';
 import { secondAnalysis } from './second/second-analysis';
 import type { Topology } from './topology';
 
-const residualTolerance = 1e-10;
-const equilibriumTolerance = 1e-8;
+export const residualTolerance = 1e-10;
+export const equilibriumTolerance = 1e-8;
 export const leastDigits = 6;
-const secondTolerance = 1e-6;
+export const secondTolerance = 1e-6;
 /** The second analysis is dense: above this number of unknowns it would cost more than all the rest. */
-const secondUnknowns = 300;
+export const secondUnknowns = 300;
 /** Share of the forces met on the way below which a result is taken for their rounding. */
 const rounding = 1e-4;
 
