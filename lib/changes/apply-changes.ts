@@ -1,0 +1,20 @@
+import type { Change } from '@/lib/changes/change';
+import { changeSetting } from '@/lib/changes/change-setting';
+import type { StoredInput } from '@/lib/intake/rows/input-rows';
+
+/**
+ * An input with changes made to its rows, one after the other; rows that no change touches stay the very same.
+ *
+ * @param by who made the changes: their rows say so
+ * @throws {RangeError} for a change whose value its sheet would refuse: it is asked for before (`readSetting`)
+ */
+export function applyChanges(input: StoredInput, changes: readonly Change[], by: string): StoredInput {
+  return changes.reduce((rows, change) => applyOne(rows, change, by), input);
+}
+
+function applyOne(input: StoredInput, change: Change, by: string): StoredInput {
+  switch (change.kind) {
+    case 'setting':
+      return changeSetting(input, change, by);
+  }
+}
