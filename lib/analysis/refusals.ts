@@ -1,6 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
 import { memberData } from './member-data';
+import { shearRefusal } from './shear-refusal';
 
 const noSolution = (message: string, node: string | null = null): Failure => ({ code: 'not-solved', message, node });
 
@@ -11,13 +13,14 @@ const most = 1e30;
  * What the analysis cannot do for this frame, said before it is tried: it never computes something simpler instead.
  * The reader has met most of these at their cells; a frame made otherwise meets them here.
  */
-export function refusal(frame: Frame, noRotation: Uint8Array): Failure | null {
+export function refusal(frame: Frame, noRotation: Uint8Array, settings: Settings): Failure | null {
   const data = memberData(frame);
   for (let i = 0; i < data.length; i++) {
     const m = data[i]!;
     const member = frame.members[i]!;
     const section = frame.sections[member.section]!;
-    if (member.tensionOnly) return noSolution(`Member ${member.id} is tension only, which this version does not analyse.`);
+    if (member.tensionOnly && !(m.startSpring === 0 && m.endSpring === 0))
+      return noSolution(`Member ${member.id} is tension only: its joints must be pinned at both ends.`);
     if (!(m.length > 0)) return noSolution(`Member ${member.id} has no length: its ends are at one place.`);
     if (member.turned && section.properties.Iminor_m4 === null)
       return noSolution(`Member ${member.id} is turned: section ${section.name} needs I minor.`);
@@ -30,7 +33,19 @@ export function refusal(frame: Frame, noRotation: Uint8Array): Failure | null {
     if (!(m.startSpring >= 0 && m.endSpring >= 0))
       return noSolution(`Member ${member.id}: a joint's stiffness can't be negative.`);
   }
-  return loadRefusal(frame) ?? supportRefusal(frame, noRotation);
+  return settingRefusal(frame, settings) ?? loadRefusal(frame) ?? supportRefusal(frame, noRotation);
+}
+
+/** What a setting needs and the frame does not give. */
+function settingRefusal(frame: Frame, settings: Settings): Failure | null {
+  if (settings.stiffnessReduction !== 'none') {
+    const member = frame.members.find(({ tensionOnly, material }) => !tensionOnly && !(frame.materials[material]!.fy_Pa! > 0));
+    if (member)
+      return noSolution(
+        `Stiffness reduction is on: material ${frame.materials[member.material]!.name} of member ${member.id} needs fy (τ_b, AISC 360-22 C2.3).`,
+      );
+  }
+  return settings.shearDeformation ? shearRefusal(frame) : null;
 }
 
 function loadRefusal(frame: Frame): Failure | null {

@@ -1,11 +1,17 @@
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 
+/** Factor on each case, by case: a case named twice counts twice. */
+export function factorsOf(frame: Frame, index: number): Float64Array {
+  const factors = new Float64Array(frame.cases.length);
+  for (const term of frame.combinations[index]!.terms) factors[term.case] = factors[term.case]! + term.factor;
+  return factors;
+}
+
 /** A combination as the sum of its cases times their factors (first order: everything is linear in the loads). */
 export function superpose(frame: Frame, cases: readonly ResultState[], index: number): ResultState {
   const combination = frame.combinations[index]!;
-  const factors = new Float64Array(frame.cases.length);
-  for (const term of combination.terms) factors[term.case] = factors[term.case]! + term.factor;
+  const factors = factorsOf(frame, index);
   const sum = (pick: (state: ResultState) => Float64Array, length: number): Float64Array => {
     const total = new Float64Array(length);
     cases.forEach((state, c) => {
@@ -27,7 +33,8 @@ export function superpose(frame: Frame, cases: readonly ResultState[], index: nu
     factors,
     order: 1,
     criticalLoadFactor: null,
-    method: null,
+    // a combination of cases whose members shear has its own shear
+    method: first?.method ?? null,
     displacements,
     reactions: sum((state) => state.reactions, 3 * frame.supports.length),
     endForces: sum((state) => state.endForces, 6 * frame.members.length),

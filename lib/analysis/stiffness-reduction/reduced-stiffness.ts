@@ -25,10 +25,14 @@ export function firstReduction(frame: Frame): Float64Array {
 export function reduce(endForces: Float64Array, squash: Float64Array, alpha: number, out: Float64Array): number {
   let change = 0;
   for (let i = 0; i < squash.length; i++) {
-    const P = Math.max(0, -endForces[6 * i]!, -endForces[6 * i + 3]!);
-    const EI = generalReduction * tauB((alpha * P) / squash[i]!);
+    const EI = generalReduction * tauB(shareOf(endForces, i, alpha, squash[i]!));
     change = Math.max(change, Math.abs(EI - out[2 * i + 1]!) / generalReduction);
     out[2 * i + 1] = EI;
   }
   return change;
+}
+
+/** α P_r/P_ns of a member, by the larger compression of its ends; 0 where neither is compressed. */
+export function shareOf(endForces: Float64Array, member: number, alpha: number, squash: number): number {
+  return (alpha * Math.max(0, -endForces[6 * member]!, -endForces[6 * member + 3]!)) / squash;
 }

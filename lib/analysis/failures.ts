@@ -1,0 +1,92 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Failure } from '@/lib/results/result';
+import type { Condition } from './condition';
+import { memberData } from './member-data';
+import { describeMovement, freeToMove, strains } from './mechanism';
+import type { Topology } from './topology';
+
+/** Why a frame's stiffness matrix could not be trusted to the digits asked for. */
+export function lowDigits(frame: Frame, t: Topology, angles: Float64Array, condition: Condition, digits: number): Failure {
+  // singular to working precision although each pivot passed: a mechanism all the same
+  if (!(condition.condition < 1e14)) return freeOrHardlyHeld(frame, t, angles, condition.weakest);
+  return hardlyHeld(frame, t, angles, condition.weakest, digits);
+}
+
+/** A movement that strains no member is a mechanism; one that does is lost beside something far stiffer. */
+export function freeOrHardlyHeld(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array): Failure {
+  return strains(frame, t, angles, z) ? hardlyHeld(frame, t, angles, z, 0) : freeToMove(frame, t, angles, z);
+}
+
+function hardlyHeld(frame: Frame, t: Topology, angles: Float64Array, z: Float64Array, digits: number): Failure {
+  const { node, how, remedy } = describeMovement(frame, t, angles, z);
+  return {
+    code: 'not-solved',
+    node,
+    message:
+      `Node ${node} can almost freely ${how}: stiffnesses differ so much that only ${Math.max(0, Math.floor(digits))} digits ` +
+      `of the results would be right (6 are asked for). ${stubRemedy(frame) ?? remedy}.`,
+  };
+}
+
+/** A member far shorter than the rest is what makes stiffnesses differ so much: its nodes are better one. */
+function stubRemedy(frame: Frame): string | null {
+  const lengths = memberData(frame).map((m) => m.length);
+  const shortest = Math.min(...lengths);
+  if (!(shortest < 0.02 * Math.max(...lengths))) return null;
+  const { id, start, end } = frame.members[lengths.indexOf(shortest)]!;
+  const nodes = `${frame.nodes[start]!.id} and ${frame.nodes[end]!.id}`;
+  return `Member ${id} is ${Number((1000 * shortest).toPrecision(3))} mm long, far stiffer than the rest: make its nodes ${nodes} one`;
+}
+
+/** Why one state has no position of equilibrium. */
+export type StateTrouble =
+  /** Followed in stable equilibrium up to this share of its loads; α_cr, null = none or not known. */
+  | { readonly kind: 'unstable'; readonly reached: number; readonly criticalLoadFactor: number | null }
+  | { readonly kind: 'not settled'; readonly reached: number }
+  /** A member (index) whose axial force reaches what its section can carry, so that nothing of its stiffness is left. */
+  | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
+  | { readonly kind: 'free'; readonly movement: string };
+
+/** @param name of the state as it is in the results; @param scale times which the loads were applied */
+export function stateFailure(frame: Frame, name: string, scale: number, reduced: boolean, trouble: StateTrouble): Failure {
+  return { code: 'not-solved', node: null, message: `${name}: ${troubleWords(frame, scale, reduced, trouble)}` };
+}
+
+export function troubleWords(frame: Frame, scale: number, reduced: boolean, trouble: StateTrouble): string {
+  const loads = scale === 1 ? 'its loads' : `${scale} times its loads`;
+  switch (trouble.kind) {
+    case 'unstable': {
+      const alpha = trouble.criticalLoadFactor;
+      const critical = alpha === null ? '' : `; its critical load factor is ${figure(alpha)}`;
+      const softened = reduced ? ' with the stiffness reduced (AISC 360-22 C2.3)' : '';
+      return `unstable at this load${softened}: it stood up to ${figure(trouble.reached)} of ${loads}${critical}. Stiffen or brace the frame, or reduce the load.`;
+    }
+    case 'not settled':
+      return `the second-order analysis did not settle: it could be followed up to ${figure(trouble.reached)} of ${loads}.`;
+    case 'squashed': {
+      const id = frame.members[trouble.member]!.id;
+      return `unstable at this load: member ${id} is pressed to ${figure(trouble.share)} of fy × A, which leaves it no stiffness (τ_b, AISC 360-22 C2.3(b)).`;
+    }
+    case 'free':
+      return trouble.movement;
+  }
+}
+
+/** Rounded down, so that a load that was not reached is never printed as reached. */
+function figure(value: number): string {
+  return String(Math.floor(value * 1000) / 1000);
+}
+
+/** A state whose tension-only members find no set. */
+export function tieFailure(frame: Frame, name: string, members: readonly number[], why: 'repeated' | 'passes' | string): Failure {
+  const ids = members.map((member) => frame.members[member]!.id);
+  const one = ids.length === 1;
+  const named = `its tension-only member${one ? '' : 's'} ${ids.join(', ')}`;
+  const reason =
+    why === 'repeated'
+      ? `${named} never ${one ? 'settles' : 'settle'} as taut or slack`
+      : why === 'passes'
+        ? `${named} did not settle as taut or slack in 50 passes`
+        : `${named} ${one ? 'is' : 'are'} slack, and without ${one ? 'it' : 'them'}: ${why}`;
+  return { code: 'not-solved', node: null, message: `${name}: ${reason}` };
+}
