@@ -21,9 +21,7 @@ function bents(): Bents {
   const sheets: Bents = {
     frames: [['frame', 'title', 'group']],
     nodes: [['frame', 'node', 'x [m]', 'y [m]', 'place']],
-    members: [
-      ['frame', 'member', 'start', 'end', 'section', 'role', 'length z [m]', 'length LTB [m]', 'offset', 'end joint'],
-    ],
+    members: [['frame', 'member', 'start', 'end', 'section', 'role', 'length z [m]', 'length LTB [m]', 'offset', 'end joint']],
     supports: [['frame', 'node', 'ux', 'uy', 'rz']],
     nodeLoads: [['frame', 'case', 'node', 'Fx [kN]', 'Fy [kN]']],
     memberLoads: [['frame', 'case', 'member', 'load', 'axes', 'direction', 'value [kN/m]', 'from [m]', 'to [m]']],

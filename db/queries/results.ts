@@ -174,5 +174,5 @@ export function evaluationOf(stored: Buffer, states: readonly StoredState[]): Om
 
 function stateOf(row: StoredState): ResultState {
   const { name, kind, purpose, order_of: order, critical_load_factor: criticalLoadFactor } = row;
-  return { name, kind, purpose, order, criticalLoadFactor, method: null, ...unpackState(row.packed) };
+  return { name, kind, purpose, order, criticalLoadFactor, ...unpackState(row.packed) };
 }
