@@ -53,7 +53,19 @@ export interface DB {
     created_by: number;
     created_at: string;
   };
-  input_row: { revision: number; ordinal: number; sheet: string; row: number; cells: string };
+  input_row: {
+    revision: number;
+    ordinal: number;
+    sheet: string;
+    row: number;
+    cells: string;
+    /** Ordinal of its sheet in sheet_read; null in rows kept before they could be read again. */
+    part: number | null;
+    /** What cells are where their text does not say so (lib/intake/rows/cell-marks.ts). */
+    marks: string | null;
+    /** Name of who changed the row on screen. */
+    changed_by: string | null;
+  };
   sheet_read: {
     revision: number;
     ordinal: number;
@@ -63,8 +75,25 @@ export interface DB {
     heading_row: number | null;
     rows: number;
     headings: string;
+    decimal_mark: '.' | ',' | null;
   };
   problem: ProblemTable;
+  change: {
+    id: Generated<number>;
+    office: number;
+    /** The revision that was made by it. */
+    revision: number;
+    ordinal: number;
+    kind: string;
+    what: string;
+    from_text: string;
+    to_text: string;
+    /** The change itself (lib/changes/change.ts) as JSON. */
+    record: string;
+    reason: string;
+    person: number;
+    at: string;
+  };
   frame_version: FrameVersionTable;
   frame_parameter: { version: number; name: string; number: number | null; text: string | null; quantity: string };
   result_state: {
@@ -162,6 +191,8 @@ export interface RevisionTable {
   run_by: number | null;
   run_started_at: string | null;
   run_finished_at: string | null;
+  /** The revision it was made from by changes; null = its files were brought in. */
+  made_from: number | null;
 }
 
 export interface ProblemTable {

@@ -30,22 +30,42 @@ const severities = ['error', 'warning', 'note'] as const;
  */
 export function insertIntake(raw: RawDatabase, office: number, revision: number, intake: Intake): IntakeStored {
   const found = raw
-    .prepare<[number, number], { batch: number; state: string; person: number }>(
-      'select batch, state, created_by as person from revision where id = ? and office = ?',
+    .prepare<[number, number], Owner & { state: string }>(
+      'select batch, state, created_by as person, made_from as madeFrom from revision where id = ? and office = ?',
     )
     .get(revision, office);
   if (found?.state !== 'reading') throw new RangeError(`Expected revision ${revision} of office ${office} in state "reading"`);
   clear(raw, revision);
-  const row = raw.prepare('insert into input_row values (?, ?, ?, ?, ?)');
-  inShortTransactions(raw, intake.rows.entries(), ([i, one]) =>
-    row.run(revision, i, one.sheet, one.row, JSON.stringify(one.cells)),
+  const row = raw.prepare(
+    'insert into input_row (revision, ordinal, sheet, row, cells, part, marks, changed_by) values (?, ?, ?, ?, ?, ?, ?, ?)',
   );
-  const sheet = raw.prepare('insert into sheet_read values (?, ?, ?, ?, ?, ?, ?, ?)');
+  inShortTransactions(
+    raw,
+    intake.rows.entries(),
+    ([i, one]) =>
+    row.run(
+      revision, i, one.sheet, one.row, JSON.stringify(one.cells), one.part ?? null, one.marks ?? null, one.changedBy ?? null,
+    ), // prettier-ignore
+  );
+  const sheet = raw.prepare(
+    `insert into sheet_read (revision, ordinal, name, file, known, heading_row, rows, headings, decimal_mark)
+     values (?, ?, ?, ?, ?, ?, ?, ?, ?)`,
+  );
   inShortTransactions(raw, intake.sheets.entries(), ([i, one]) =>
-    sheet.run(revision, i, one.name, one.file, one.known, one.headingRow, one.rows, JSON.stringify(one.headings)),
+    sheet.run(
+      revision,
+      i,
+      one.name,
+      one.file,
+      one.known,
+      one.headingRow,
+      one.rows,
+      JSON.stringify(one.headings),
+      one.decimalMark ?? null,
+    ),
   );
   insertProblems(raw, revision, intake.problems);
-  const carried = insertFrames(raw, { revision, batch: found.batch, person: found.person }, intake);
+  const carried = insertFrames(raw, revision, found, intake);
   const stopped = intake.frames.filter((one) => one.frame === null).length;
   const count = (severity: string) => intake.problems.filter((one) => one.severity === severity).length;
   const { input, settings } = intake;
@@ -77,9 +97,16 @@ export function insertProblems(raw: RawDatabase, revision: number, problems: rea
   ); // prettier-ignore
 }
 
-function insertFrames(raw: RawDatabase, of: { revision: number; batch: number; person: number }, intake: Intake): number {
+interface Owner {
+  readonly batch: number;
+  readonly person: number;
+  /** The revision it was made from by changes. */
+  readonly madeFrom: number | null;
+}
+
+function insertFrames(raw: RawDatabase, revision: number, owner: Owner, intake: Intake): number {
   const lists = new ListWriter(raw);
-  const write = frameWriter(raw, lists, of);
+  const write = frameWriter(raw, lists, revision, owner);
   let carried = 0;
   inShortTransactions(
     raw,
@@ -107,11 +134,8 @@ function* prepared(frames: readonly FrameRead[], settings: Settings): Generator<
 }
 
 /** @returns a function that stores one frame and says whether its results were carried over */
-function frameWriter(
-  raw: RawDatabase,
-  lists: ListWriter,
-  { revision, batch, person }: { revision: number; batch: number; person: number },
-) {
+function frameWriter(raw: RawDatabase, lists: ListWriter, revision: number, owner: Owner) {
+  const { batch } = owner;
   const add = raw.prepare(
     `insert into frame_version (batch, hash, engine, state, model) values (?, ?, ?, 'waiting', ?) on conflict do nothing`,
   );
@@ -121,9 +145,10 @@ function frameWriter(
   const parameter = raw.prepare('insert or ignore into frame_parameter values (?, ?, ?, ?, ?)');
   const place = raw.prepare(
     `insert into revision_frame (revision, frame, frame_id, title, group_name, family, count, note, version, status, verdict,
-     ratio, check_name, section, combination, critical_load_factor, mass, uploaded_by)
-     values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, -1, ${noneLow}, '', '', '', ${noneHigh}, ${noneLow}, ?)`,
+     ratio, check_name, section, combination, critical_load_factor, mass, uploaded_by, changed_by)
+     values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, -1, ${noneLow}, '', '', '', ${noneHigh}, ${noneLow}, ?, ?)`,
   );
+  const whose = whoseWork(raw, owner);
   const runBy = raw
     .prepare<[number, number], number | null>(
       'select run_by from revision_frame where version = ? and revision <> ? and run_by is not null limit 1',
@@ -133,7 +158,7 @@ function frameWriter(
   return ({ index, read, hash, model }: Prepared): boolean => {
     const { frame } = read;
     if (!frame || !model) {
-      place.run(revision, index, read.id, null, '', '', 1, null, null, 'stopped', person);
+      place.run(revision, index, read.id, null, '', '', 1, null, null, 'stopped', ...whose(read.id, null));
       return false;
     }
     const isNew = add.run(batch, hash, engineVersion, model).changes === 1;
@@ -142,12 +167,29 @@ function frameWriter(
       parameter.run(own.id, name, typeof value === 'number' ? value : null, typeof value === 'string' ? value : null, quantity);
     place.run(
       revision, index, read.id, frame.title, frame.group ?? '', frame.family?.name ?? '', frame.count, frame.note, own.id,
-      'waiting', person,
+      'waiting', ...whose(read.id, own.id),
     ); // prettier-ignore
     if (!own.evaluation) return false;
     const stored = evaluationOf(own.evaluation, states.all(own.id));
     lists.write(revision, index, { frame, ...stored }, runBy.get(own.id, revision) ?? null);
     return true;
+  };
+}
+
+/**
+ * Who uploaded a frame and who changed it. In a revision made by changes a frame is still theirs who uploaded it; one whose
+ * content moved was changed by who made the revision, another is carried over with whoever changed it before.
+ */
+function whoseWork(raw: RawDatabase, { person, madeFrom }: Owner) {
+  const earlier = raw.prepare<[number, string], { version: number | null; uploaded: number | null; changed: number | null }>(
+    `select version, uploaded_by as uploaded, changed_by as changed from revision_frame
+     where revision = ? and frame_id = ? order by frame limit 1`,
+  );
+  return (frame: string, version: number | null): [uploaded: number | null, changed: number | null] => {
+    if (madeFrom === null) return [person, null];
+    const before = earlier.get(madeFrom, frame);
+    if (!before) return [person, person];
+    return [before.uploaded, before.version === version ? before.changed : person];
   };
 }
 

@@ -2,6 +2,7 @@ import { expect, it } from 'vitest';
 import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
 import { insertActivity, listActivity } from '@/db/queries/activity';
 import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
+import { findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
 import { insertIntake } from '@/db/queries/intake';
 import { findLatestJob, insertJob } from '@/db/queries/jobs';
 import { iterateRows, listFacets, listRows } from '@/db/queries/lists';
@@ -17,7 +18,7 @@ import {
   updateRevisionState,
 } from '@/db/queries/revisions';
 import { findSummary, listParameterRatios, listParameters } from '@/db/queries/summary';
-import { insertUpload, listUploadedFiles, listUploads } from '@/db/queries/uploads';
+import { deleteUploads, insertUpload, listUploadedFiles, listUploads } from '@/db/queries/uploads';
 import type { OpenDatabase } from '@/db/open';
 import { newDatabase } from '@/db/testing/database';
 import { collected, intakeOf, type Office, office, portal, read, run, seeded } from '@/db/testing/sample';
@@ -34,12 +35,16 @@ async function twoOffices() {
     await insertUpload(database.db, own.office, { ...upload, revision: revision.id });
     await updateAssigned(database.db, own.office, own.project, [own.person]);
     await insertActivity(database.db, own.office, { what: 'ran a revision', person: own.person, project: own.project });
+    const change = { kind: 'setting', setting: 'nearLimit', value: '0.8' } as const;
+    const words = { what: 'near limit', from: '0.90', to: '0.80' };
+    const made = { from: revision.id, person: own.person, changes: [{ change, ...words }], reason: 'asked for', run: false };
+    const changed = (await insertChangedRevision(database.db, own.office, made))!.id;
     await insertJob(database.db, own.office, { kind: 'run', revision: revision.id, person: own.person });
-    return { ...own, revision: revision.id };
+    return { ...own, revision: revision.id, changed };
   };
   return { ...database, own: await fill('Northlight'), other: await fill('Southgate') };
 }
-type Filled = Office & { readonly revision: number };
+type Filled = Office & { readonly revision: number; readonly changed: number };
 
 const members: View = { table: 'members', filters: [], sort: null, columns: null };
 
@@ -65,6 +70,8 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
   iterateInputRows: ({ db }, asking, of) => collected(iterateInputRows(db, asking, of.revision)),
   listInputRowsAround: ({ db }, asking, of) =>
     listInputRowsAround(db, asking, of.revision, { sheet: 'Members', row: 2, around: 2 }),
+  listChanges: ({ db }, asking, of) => listChanges(db, asking, of.changed),
+  findMaking: async ({ raw }, asking, of) => findMaking(raw, asking, of.changed),
   findFrame: ({ db }, asking, of) => findFrame(db, asking, of.revision, 0),
   findFrameIndex: ({ db }, asking, of) => findFrameIndex(db, asking, of.revision, 'F2'),
   iterateFrames: ({ db }, asking, of) => collected(iterateFrames(db, asking, of.revision)),
@@ -93,7 +100,7 @@ it('lists only the office’s own people, projects and activity', async () => {
   const { db, own } = await twoOffices();
   expect((await listPeople(db, own.office)).map((one) => one.name)).toEqual(['Northlight analyst']);
   expect((await listProjects(db, own.office)).map((one) => one.id)).toEqual([own.project]);
-  expect((await listActivity(db, own.office)).map((one) => one.person)).toEqual(['Northlight analyst']);
+  expect(new Set((await listActivity(db, own.office)).map((one) => one.person))).toEqual(new Set(['Northlight analyst']));
 });
 
 it('changes nothing of another office', async () => {
@@ -102,9 +109,13 @@ it('changes nothing of another office', async () => {
   const before = size();
   expect(await insertBatch(db, own.office, { project: other.project, name: 'Mine', person: own.person })).toBeUndefined();
   expect(await insertRevision(db, own.office, { batch: other.batch, person: own.person })).toBeUndefined();
+  const made = { from: other.revision, person: own.person, changes: [], reason: 'none', run: false };
+  expect(await insertChangedRevision(db, own.office, made)).toBeUndefined();
   expect(await updateRevisionState(db, own.office, other.revision, ['read'], 'running')).toBe(false);
   expect(await updateAssigned(db, own.office, other.project, [])).toBe(false);
   const upload = { revision: other.revision, name: 'x', size: 1, sha256: 'x', bytes: Buffer.from('x'), person: own.person };
+  await deleteUploads(db, own.office, other.revision);
+  expect(await listUploads(db, other.office, other.revision)).toHaveLength(1);
   await expect(insertUpload(db, own.office, upload)).rejects.toThrow(RangeError);
   expect(() => insertIntake(raw, own.office, other.revision, intakeOf([]))).toThrow(RangeError);
   expect(size()).toBe(before);

@@ -1,5 +1,5 @@
 import type { Db } from '@/db/open';
-import type { ProblemTable } from '@/db/schema';
+import type { DB, ProblemTable } from '@/db/schema';
 import type { InputRow, SheetRead } from '@/lib/intake/intake';
 import type { Problem, ProblemCode } from '@/lib/problems/problem';
 
@@ -35,6 +35,7 @@ export async function listSheets(db: Db, office: number, revision: number): Prom
     headingRow: row.heading_row,
     rows: row.rows,
     headings: JSON.parse(row.headings) as SheetRead['headings'],
+    decimalMark: row.decimal_mark,
   }));
 }
 
@@ -73,13 +74,14 @@ function inputRows(db: Db, office: number, revision: number) {
   return db
     .selectFrom('input_row')
     .innerJoin('revision', 'revision.id', 'input_row.revision')
-    .select(['input_row.ordinal', 'input_row.sheet', 'input_row.row', 'input_row.cells'])
+    .selectAll('input_row')
     .where('revision.office', '=', office)
     .where('input_row.revision', '=', revision);
 }
 
-function inputRow({ sheet, row, cells }: { sheet: string; row: number; cells: string }): InputRow {
-  return { sheet, row, cells: JSON.parse(cells) as InputRow['cells'] };
+function inputRow({ sheet, row, cells, part, marks, changed_by: changedBy }: DB['input_row']): InputRow {
+  const kept = { sheet, row, cells: JSON.parse(cells) as InputRow['cells'], marks, changedBy };
+  return part === null ? kept : { ...kept, part };
 }
 
 function problemOf(row: ProblemTable): Problem {

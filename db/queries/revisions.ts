@@ -36,6 +36,8 @@ export interface RevisionRecord {
   readonly runBy: { readonly id: number; readonly name: string } | null;
   readonly runStartedAt: string | null;
   readonly runFinishedAt: string | null;
+  /** Letter of the revision it was made from by changes (queries/changes.ts); null = its files were brought in. */
+  readonly madeFrom: string | null;
 }
 
 /**
@@ -48,33 +50,45 @@ export async function insertRevision(
   office: number,
   revision: { readonly batch: number; readonly person: number },
 ): Promise<{ id: number; letter: string } | undefined> {
-  return db.transaction().execute(async (within) => {
-    const batch = await within
-      .selectFrom('batch')
-      .leftJoin('revision', 'revision.batch', 'batch.id')
-      .select((eb) => ['batch.id', eb.fn.max('revision.ordinal').as('last')])
-      .where('batch.id', '=', revision.batch)
-      .where('batch.office', '=', office)
-      .groupBy('batch.id')
-      .executeTakeFirst();
-    if (!batch) return undefined;
-    const ordinal = (batch.last ?? -1) + 1;
-    const now = instant();
-    return within
-      .insertInto('revision')
-      .values({
-        office,
-        batch: batch.id,
-        ordinal,
-        letter: letterOf(ordinal),
-        state: 'reading',
-        created_by: revision.person,
-        created_at: now,
-        changed_at: now,
-      }) // prettier-ignore
-      .returning(['id', 'letter'])
-      .executeTakeFirstOrThrow();
-  });
+  return db.transaction().execute((within) => insertRevisionWithin(within, office, { ...revision, madeFrom: null }));
+}
+
+/**
+ * The same as a step of a transaction.
+ *
+ * @param revision `madeFrom`: the revision it is made from by changes; null = files are brought in
+ */
+export async function insertRevisionWithin(
+  within: Db,
+  office: number,
+  revision: { readonly batch: number; readonly person: number; readonly madeFrom: number | null },
+): Promise<{ id: number; letter: string } | undefined> {
+  const batch = await within
+    .selectFrom('batch')
+    .leftJoin('revision', 'revision.batch', 'batch.id')
+    .select((eb) => ['batch.id', eb.fn.max('revision.ordinal').as('last')])
+    .where('batch.id', '=', revision.batch)
+    .where('batch.office', '=', office)
+    .groupBy('batch.id')
+    .executeTakeFirst();
+  if (!batch) return undefined;
+  const ordinal = (batch.last ?? -1) + 1;
+  const now = instant();
+  return within
+    .insertInto('revision')
+    .values({
+      office,
+      batch: batch.id,
+      ordinal,
+      letter: letterOf(ordinal),
+      state: 'reading',
+      created_by: revision.person,
+      created_at: now,
+      changed_at: now,
+      made_from: revision.madeFrom,
+    })
+    .returning(['id', 'letter'])
+    .executeTakeFirstOrThrow();
 }
 
 /** Letters of revisions: 0 is A, 25 Z, 26 AA. */
@@ -149,6 +163,7 @@ function revisions(db: Db, office: number) {
     .innerJoin('project', 'project.id', 'batch.project')
     .innerJoin('person as maker', 'maker.id', 'revision.created_by')
     .leftJoin('person as runner', 'runner.id', 'revision.run_by')
+    .leftJoin('revision as earlier', 'earlier.id', 'revision.made_from')
     .selectAll('revision')
     .select([
       'batch.name as batch_name',
@@ -157,6 +172,7 @@ function revisions(db: Db, office: number) {
       'project.number as project_number',
       'maker.name as maker_name',
       'runner.name as runner_name',
+      'earlier.letter as earlier_letter',
     ])
     .where('revision.office', '=', office);
 }
@@ -197,5 +213,6 @@ function record(row: Read): RevisionRecord {
     runBy: row.run_by === null ? null : { id: row.run_by, name: row.runner_name ?? '' },
     runStartedAt: row.run_started_at,
     runFinishedAt: row.run_finished_at,
+    madeFrom: row.earlier_letter,
   };
 }

@@ -44,6 +44,11 @@ export async function insertUpload(
   if (changes !== 1) throw new RangeError(`Expected revision ${revision} to be of office ${office}`);
 }
 
+/** Takes away what a reading that was cut short had kept of a revision that is made by changes. */
+export async function deleteUploads(db: Db, office: number, revision: number): Promise<void> {
+  await db.deleteFrom('upload').where('office', '=', office).where('revision', '=', revision).execute();
+}
+
 export async function listUploads(db: Db, office: number, revision: number): Promise<UploadRecord[]> {
   return db
     .selectFrom('upload')

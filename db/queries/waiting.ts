@@ -68,14 +68,28 @@ export function updateProblemCounts(raw: RawDatabase, revision: number): void {
     .run(revision);
 }
 
+interface RowKept {
+  readonly ordinal: number;
+  readonly sheet: string;
+  readonly row: number;
+  readonly cells: string;
+  readonly part: number | null;
+  readonly marks: string | null;
+  readonly changedBy: string | null;
+}
+
 /** Rows as typed, in order; reads a thousand at a time, and may be called again. */
 export function* inputRows(raw: RawDatabase, revision: number): Generator<InputRow> {
-  const some = raw.prepare<[number, number], { ordinal: number; sheet: string; row: number; cells: string }>(
-    'select ordinal, sheet, row, cells from input_row where revision = ? and ordinal > ? order by ordinal limit 1000',
+  const some = raw.prepare<[number, number], RowKept>(
+    `select ordinal, sheet, row, cells, part, marks, changed_by as changedBy from input_row
+     where revision = ? and ordinal > ? order by ordinal limit 1000`,
   );
   for (let last = -1; ;) {
     const rows = some.all(revision, last);
-    for (const { sheet, row, cells } of rows) yield { sheet, row, cells: JSON.parse(cells) as (string | null)[] };
+    for (const { sheet, row, cells, part, marks, changedBy } of rows) {
+      const kept = { sheet, row, cells: JSON.parse(cells) as (string | null)[], marks, changedBy };
+      yield part === null ? kept : { ...kept, part };
+    }
     if (rows.length < 1000) return;
     last = rows.at(-1)!.ordinal;
   }

@@ -97,8 +97,10 @@ export function intakeOf(frames: readonly (Frame | null)[], more: Partial<Intake
     origins,
     frames: read,
     problems: [problem(), problem({ severity: 'note', code: 'default-used', sheet: null, cell: null, frames: [] })],
-    sheets: [{ name: 'Members', file: 'shed.xlsx', known: 'Members', headingRow: 1, rows: 4, headings: [] }],
-    rows: [1, 2, 3].map((row) => ({ sheet: 'Members', row, cells: ['F1', null, `row ${row}`] })),
+    sheets: [{ name: 'Members', file: 'shed.xlsx', known: 'Members', headingRow: 1, rows: 4, headings: [], decimalMark: null }],
+    rows: [1, 2, 3].map((row) => ({
+      sheet: 'Members', row, cells: ['F1', null, `row ${row}`], part: 0, marks: row === 2 ? '{"0":"text"}' : null, changedBy: null,
+    })), // prettier-ignore
     ...more,
   };
 }
