@@ -98,6 +98,8 @@ describe('flanges and walls by EN 1993-1-1 Table 5.2', () => {
     expect(plate(shaped('rhs', { h: 100, b: 200, t: 4.4 }), S235, pushed)).toBe('flange');
     expect(plate(shaped('rhs', { h: 200, b: 100, t: 4.4 }), S235, pushed)).toBe('web');
     expect(plate(shaped('rhs', { h: 200, b: 100, t: 4.4 }), S235, pushed, true)).toBe('flange');
+    // rounder corners than 1.5 t do not make a wall narrower
+    expect(plate(shaped('rhs', { h: 100, b: 200, t: 4.4, r: 13.2 }), S235, pushed)).toBe('flange');
   });
 
   it('a channel turned counts a plate as compressed as soon as one face is', () => {

@@ -84,7 +84,9 @@ function byEurocode(section: Section, turned: boolean, fy: number): readonly Sle
 function dimensionsOf(section: Section) {
   const dims = section.dimensions;
   const of = (name: 'h' | 'b' | 'tw' | 'tf' | 'r' | 't' | 'd'): number => dims?.[name] ?? 0;
-  return { h: of('h'), b: of('b'), tw: of('tw'), tf: of('tf'), r: of('r'), t: of('t'), d: of('d') };
+  // the flat of a wall is never taken narrower than outside − 3t (EN 1993-1-1 Table 5.2; AISC 360-22 B4.1b): real corners vary
+  const r = section.shape === 'rhs' ? Math.min(of('r'), 1.5 * of('t')) : of('r');
+  return { h: of('h'), b: of('b'), tw: of('tw'), tf: of('tf'), r, t: of('t'), d: of('d') };
 }
 
 function uniform(

@@ -26,6 +26,34 @@ describe('yield by thickness', () => {
   });
 });
 
+describe('grades of hollow sections and of ASTM standards', () => {
+  // EN 10025-2:2004 table 7 for S450; EN 10210-1 from memory
+  it.each([['S450', 16, 450], ['S450', 40, 430], ['S450', 63, 410], ['S450', 80, 390], ['S450', 150, 380], ['S355J2H', 16, 355], ['S355J0H', 40, 345], ['S275J0H', 63, 255], ['S235JRH', 120, 195]])(
+    '%s at %d mm yields at %d MPa', (name, t, expected) => expect(fy(name, t)).toBe(expected)); // prettier-ignore
+
+  it('S355J2H is held up to 120 mm, S450 up to 150 mm', () => {
+    expect(fy('S355J2H', 121)).toBeNull();
+    expect(fy('S450', 151)).toBeNull();
+  });
+
+  // Materials for Civil and Construction Engineers (Mamlouk, Zaniewski), Table 3.2; A572 42, 55, 60, 65 from memory
+  it.each([
+    ['A572 Gr. 50', null, 50, 65], ['ASTM A572-50', null, 50, 65], ['A572 Grade 42', null, 42, 60], ['A572 55', null, 55, 70], ['A572 60', null, 60, 75], ['A572 65', null, 65, 80],
+    ['A500 B', 'chs', 42, 58], ['A500 Gr. B', 'rhs', 46, 58], ['A500 Grade C', 'chs', 46, 62], ['A500C', 'rhs', 50, 62], ['A53', 'chs', 35, 60], ['A53 Gr. B', 'chs', 35, 60],
+  ] as const)('%s (%s) yields at %d ksi and breaks at %d ksi', (name, shape, yields, breaks) => {
+    const result = gradeFor(name, 0.01, shape);
+    if ('suggestion' in result) throw new Error(`no grade ${name}`);
+    expect((result.properties.fy_Pa ?? NaN) / 6.894757293168361e6).toBeCloseTo(yields, 9);
+    expect((result.properties.fu_Pa ?? NaN) / 6.894757293168361e6).toBeCloseTo(breaks, 9);
+    expect(result.properties.standard).toBe('ASTM');
+  }); // prettier-ignore
+
+  it('A500 of a section whose shape is not known yields as in a tube, the lower', () =>
+    expect(gradeFor('A500 B', null, null)).toMatchObject({ properties: { fy_Pa: 42 * 6.894757293168361e6 } }));
+
+  it('A572 60 and 65 are not known for flanges above 2 in', () => expect(fy('A572 65', 51)).toBeNull());
+});
+
 describe('a grade', () => {
   it('fixes E, G, density and expansion', () => {
     expect(gradeFor('S355', 0.01)).toMatchObject({
@@ -38,11 +66,11 @@ describe('a grade', () => {
     expect(result.properties.density_kg_m3).toBeCloseTo(7849.05, 2);
   });
 
-  it.each([['s355', 'S355'], ['S 355 J2', 'S355'], ['S275JR', 'S275'], ['ASTM A36', 'A36'], ['a992', 'A992']])(
+  it.each([['s355', 'S355'], ['S 355 J2', 'S355'], ['S275JR', 'S275'], ['ASTM A36', 'A36'], ['a992', 'A992'], ['S355K2H', 'S355H']])(
     '%s is %s', (typed, grade) => expect(gradeFor(typed, 0.01)).toMatchObject({ properties: { grade } }),
   ); // prettier-ignore
 
-  it.each([['S365', 'S355'], ['A993', 'A992'], ['S460', null], ['steel', null], ['', null]])('%s suggests %s', (typed, suggestion) =>
+  it.each([['S365', 'S355'], ['A993', 'A992'], ['A572', 'A572 Gr. 50'], ['A500', 'A500 Gr. B'], ['S460', null], ['steel', null], ['', null]])('%s suggests %s', (typed, suggestion) =>
     expect(gradeFor(typed, 0.01)).toEqual({ suggestion }),
   ); // prettier-ignore
 });

@@ -168,6 +168,7 @@ export const sectionTwoWays = (ways: readonly string[]): string =>
 export const shapeMissing = (shapes: readonly string[]): string => `dimensions need a shape: ${list(shapes)}`;
 export const unknownDesignation = (name: string, near: string | null): string =>
   `${name} is no designation of the library, and neither shape nor properties are given.${hint(near)}`;
+export const designationTaken = (note: string): string => `taken as ${note}`;
 export const dimensionMissing = (shape: string, dimension: string): string => `shape ${shape} needs ${dimension}`;
 export const dimensionUnused = (dimension: string): string => `${dimension} is not used for a section given this way`;
 export const impossibleShape = (why: string): string => `these dimensions make no section: ${why}`;

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { designationsOf, findDesignation, ranges, type RangeName } from './find-designation';
+import { findDesignation } from './find-designation';
+import { designationsOf, rangeNames } from './library';
 
 const found = (text: string): string | null => {
   const result = findDesignation(text);
@@ -17,11 +18,18 @@ describe('a library designation is found however it is typed', () => {
     ['HEA 300', 'HE 300 A'], ['HE 300 A', 'HE 300 A'], ['HE300A', 'HE 300 A'], ['he a 300', 'HE 300 A'], ['HE-B 240', 'HE 240 B'],
     ['UB 305x165x40', 'UB 305x165x40'], ['305 x 165 x 40 UB', 'UB 305x165x40'], ['305×165×40UB', 'UB 305x165x40'], ['UB305X165X40', 'UB 305x165x40'],
     ['W12X26', 'W12X26'], ['w 12 x 26', 'W12X26'], ['W6×8.5', 'W6X8.5'],
+    ['HEM 300', 'HE 300 M'], ['HE 300 M', 'HE 300 M'], ['HEAA 200', 'HE 200 AA'], ['HE200AA', 'HE 200 AA'],
+    ['UC 305x305x97', 'UC 305x305x97'], ['305x305x97 UC', 'UC 305x305x97'], ['UKC 305x305x97', 'UC 305x305x97'], ['457x191x67 UKB', 'UB 457x191x67'],
+    ['upn200', 'UPN 200'], ['UNP 200', 'UPN 200'], ['UPE-200', 'UPE 200'], ['PFC 200x75x23', 'PFC 200x75x23'], ['200 x 75 x 23 PFC', 'PFC 200x75x23'],
+    ['HFRHS 200x100x6.3', 'HFRHS 200x100x6.3'], ['rhs 200 x 100 x 6,3 hf', 'HFRHS 200x100x6.3'], ['CF SHS 100x100x5', 'CFSHS 100x100x5'],
+    ['HFCHS 273.0x10', 'HFCHS 273x10'], ['C15X50', 'C15X50'], ['mc 18 x 42.7', 'MC18X42.7'], ['S24x121', 'S24X121'], ['HP14X117', 'HP14X117'],
+    ['HSS 8 x 4 x 1/4', 'HSS8X4X1/4'], ['HSS8X4X.25', 'HSS8X4X1/4'], ['HSS8x4x0.250', 'HSS8X4X1/4'], ['HSS 3 1/2 x 2-1/2 x 3/16', 'HSS3-1/2X2-1/2X3/16'],
+    ['HSS 3½ X 2½ X ⅜', 'HSS3-1/2X2-1/2X3/8'], ['HSS6X6X5/16', 'HSS6X6X5/16'], ['HSS6X6X.313', 'HSS6X6X5/16'], ['HSS6X6X0.312', 'HSS6X6X5/16'],
+    ['HSS 10 x 0.312', 'HSS10.000X0.312'], ['HSS10X5/16', 'HSS10.000X0.312'], ['HSS10.000X0.188', 'HSS10.000X0.188'], ['pipe 3 1/2 std', 'Pipe3-1/2STD'], ['Pipe8XXS', 'Pipe8XXS'],
   ])('%s is %s', (typed, designation) => expect(found(typed)).toBe(designation)); // prettier-ignore
 
   it('no designation of any range hides another', () => {
-    for (const range of Object.keys(ranges) as RangeName[])
-      for (const designation of designationsOf(range)) expect(found(designation)).toBe(designation);
+    for (const range of rangeNames) for (const designation of designationsOf(range)) expect(found(designation)).toBe(designation);
   });
 
   it('says that its properties come from the library and that it is rolled', () => {
@@ -32,12 +40,37 @@ describe('a library designation is found however it is typed', () => {
   });
 });
 
+describe('a hollow section typed without how it is made', () => {
+  const note = (text: string): string | null => {
+    const result = findDesignation(text);
+    return 'section' in result ? result.note : 'not found';
+  };
+
+  it('is the cold formed one, whose properties are the smaller, and says which the other is', () => {
+    for (const typed of ['RHS 200x100x8', 'rhs 200 x 100 x 8']) {
+      expect(found(typed)).toBe('CFRHS 200x100x8');
+      expect(note(typed)).toContain('HFRHS 200x100x8 is the hot finished one');
+    }
+    expect(found('SHS 100x5')).toBe('CFSHS 100x100x5');
+    expect(found('RHS 100x100x5')).toBe('CFSHS 100x100x5');
+    expect(found('CHS 114.3x5')).toBe('CFCHS 114.3x5');
+  });
+
+  it('is the hot finished one where no other is held', () => {
+    for (const wall of ['6.3', '7.1']) expect(found(`RHS 200x100x${wall}`)).toBe(`HFRHS 200x100x${wall}`);
+    expect(note('RHS 200x100x7.1')).toBe('HFRHS 200x100x7.1, hot finished (EN 10210-2)');
+  });
+
+  it('has nothing to be said of where it is typed in full', () => expect(note('HFRHS 200x100x6.3')).toBeNull());
+});
+
 describe('a near miss suggests, and nothing is guessed', () => {
   it.each([
     ['IPE 310', 'IPE 300'], ['HEA 310', 'HE 320 A'], ['W12X27', 'W12X26'], ['UB 305x165x41', 'UB 305x165x40'],
-    ['305x165x40', 'UB 305x165x40'], ['IPR 300', 'IPE 300'], ['UC 305x305x97', null], ['HEM 300', null], ['UPN 200', null],
+    ['305x165x40', 'UB 305x165x40'], ['IPR 300', 'IPE 300'], ['UC 305x305x98', 'UC 305x305x97'], ['HEM 310', 'HE 320 M'], ['UPN 210', 'UPN 220'], ['IPN 200', null], ['WT5X6', null],
+    ['RHS 200x100x6.4', 'HFRHS 200x100x6.3'], ['HSS8X4X9/32', 'HSS8X4X5/16'],
     ['IPE 24O', 'IPE 240'], ['IPE 3OO', 'IPE 300'], ['HEA 2OO', 'HE 200 A'], ['lPE 300', 'IPE 300'], ['W12X2G', 'W12X26'],
-    ['HE 300 M', null], ['beam', null], ['', null], ['300', null],
+    ['beam', null], ['', null], ['300', null],
   ])('%s suggests %s', (typed, suggestion) => expect(suggested(typed)).toBe(suggestion)); // prettier-ignore
 });
 

@@ -1,78 +1,54 @@
 import type { Section } from '@/lib/model/frame';
+import { designationKey, keysOf, plainHollowKeys } from './designation-keys';
 import { editDistance } from './edit-distance';
-import { heA } from './ranges/he-a';
-import { heB } from './ranges/he-b';
-import { ipe } from './ranges/ipe';
-import type { Range, RangeRow } from './ranges/range';
-import { ub } from './ranges/ub';
-import { w } from './ranges/w';
-import { sectionFromShape, sourcesOf } from './section-from-shape';
-
-/** The standard ranges held, in the order a list shows them. */
-export const ranges = { IPE: ipe, 'HE A': heA, 'HE B': heB, UB: ub, W: w } as const satisfies Record<string, Range>;
-export type RangeName = keyof typeof ranges;
+import { librarySection, rangeNames, ranges, type RangeName } from './library';
+import type { RangeRow } from './ranges/range';
 
 /** Other standard ranges that a person may type: never taken for a near miss of one that is held. */
-const notHeld = /^(HEM|HEAA|HEC|HEX|UC|UKC|UBP|IPN|INP|UPN|UPE|UNP|PFC|SHS|RHS|CHS|HSS|PIPE|HP|S|M|C|MC|L|WT|RHSH)$/;
+const notHeld = /^(HEC|HEX|UBP|IPN|INP|UAP|M|L|LL|MT|ST|WT|RHSH|T|EA|UA|RSA)$/;
 
 interface Entry {
   readonly row: RangeRow;
   readonly range: RangeName;
+  /** What was taken as understood, for the reader. */
+  readonly note: string | null;
 }
 
 const byKey = new Map<string, Entry>();
-for (const range of Object.keys(ranges) as RangeName[])
-  for (const row of ranges[range].rows) for (const key of keysOf(row[0])) byKey.set(key, { row, range });
-const made = new Map<string, Section>();
+for (const range of rangeNames)
+  for (const row of ranges[range].rows)
+    for (const key of keysOf(row.designation, range)) byKey.set(key, { row, range, note: null });
+for (const range of ['HFSHS', 'HFRHS', 'HFCHS', 'CFSHS', 'CFRHS', 'CFCHS'] as const)
+  for (const row of ranges[range].rows) addPlain(range, row);
+
+/** A hollow section typed without how it is made: cold formed where that is held, whose properties are the smaller. */
+function addPlain(range: RangeName, row: RangeRow): void {
+  const size = designationKey(row.designation).replace(/^[A-Z]+/, '');
+  const { standard, made } = ranges[range];
+  const other = range.startsWith('CF') ? byKey.get(`HF${range.slice(2)}${size}`) : undefined;
+  const instead = other ? `, the smaller properties; ${other.row.designation} is the hot finished one` : '';
+  const note = `${row.designation}, ${made ?? ''} (${standard})${instead}`;
+  // cold formed ranges come last, and so take the place of hot finished ones
+  for (const key of plainHollowKeys(range.slice(2), size)) byKey.set(key, { row, range, note });
+}
+
+export interface FoundDesignation {
+  readonly section: Section;
+  /** What was understood where the designation leaves it open ("CFRHS 200x100x6.3, cold formed (EN 10219-2) …"); else null. */
+  readonly note: string | null;
+}
 
 /**
  * Finds a library section by its designation, however typed: `IPE300`, `ipe 300`, `HEA 300`, `HE 300 A`,
- * `305 x 165 x 40 UB`, `w 12 x 26`. The section's name is the designation as the standard writes it.
+ * `305 x 165 x 40 UB`, `w 12 x 26`, `RHS 200x100x6.3`, `HSS 8 x 4 x 1/4`. The section's name is the designation as the
+ * standard writes it.
  *
  * Not found: the nearest designation, if one is near, as a suggestion; null if none is.
  */
-export function findDesignation(text: string): { readonly section: Section } | { readonly suggestion: string | null } {
-  const key = keyOf(text);
+export function findDesignation(text: string): FoundDesignation | { readonly suggestion: string | null } {
+  const key = designationKey(text);
   const entry = byKey.get(key);
-  return entry ? { section: sectionOf(entry) } : { suggestion: nearest(key) };
-}
-
-/** Every designation of a range, in the order of its table. */
-export function designationsOf(range: RangeName): readonly string[] {
-  return ranges[range].rows.map((row) => row[0]);
-}
-
-/** Capitals without blanks, dashes and signs between the figures: `305 × 165 x 40` → `305X165X40`. */
-function keyOf(text: string): string {
-  return text
-    .normalize('NFKC')
-    .toUpperCase()
-    .replace(/[×*]/g, 'X')
-    .replace(/(\d),(\d)/g, '$1.$2')
-    .replace(/[\s_\-–—/]/g, '');
-}
-
-/** How a designation may be typed: letters of its series before or after the size. */
-function keysOf(designation: string): string[] {
-  const key = keyOf(designation);
-  const [, letters = '', size = '', after = ''] = /^([A-Z]+?)(\d[\dX.]*?)([A-Z]*)$/.exec(key) ?? [];
-  if (letters === 'UB' || letters === 'W') return [key, `${size}${letters}`];
-  if (letters === 'HE') return [key, `HE${after}${size}`];
-  const variant = letters.slice('IPE'.length);
-  return variant === '' ? [key] : [key, `IPE${size}${variant}`, `${variant}IPE${size}`];
-}
-
-function sectionOf({ row, range }: Entry): Section {
-  const [designation, h, b, tw, tf, r] = row;
-  const known = made.get(designation);
-  if (known) return known;
-  const unit = ranges[range].unit === 'mm' ? 0.001 : 0.0254;
-  const result = sectionFromShape('I', { h: h * unit, b: b * unit, tw: tw * unit, tf: tf * unit, r: r * unit }, 'rolled');
-  if ('trouble' in result) throw new RangeError(`the dimensions held for ${designation} make no section`);
-  const sources = sourcesOf(result.section.properties, 'library');
-  const section: Section = { ...result.section, name: designation, designation, sources };
-  made.set(designation, section);
-  return section;
+  return entry ? { section: librarySection(entry.range, entry.row), note: entry.note } : { suggestion: nearest(key) };
 }
 
 /** Letters of the series, without the X between figures. */
@@ -82,7 +58,7 @@ const lettersOf = (key: string): string => key.replace(/(?<=\d)X(?=\d)|[^A-Z]/g,
 const likeness = (key: string): string =>
   key.replace(/[OQILSBZG]/g, (letter) => '00115826'['OQILSBZG'.indexOf(letter)] ?? letter);
 
-const lookalikes = new Map([...byKey].map(([key, { row }]) => [likeness(key), row[0]]));
+const lookalikes = new Map([...byKey].map(([key, { row }]) => [likeness(key), row.designation]));
 
 /**
  * The designation that looks the same, a letter typed for a figure; else the one whose text is nearest: up to two
@@ -105,7 +81,7 @@ function nearest(key: string): string | null {
     const distance = apart + Math.min(0.99, sizeApart(candidate, key));
     if (apart <= 2 && distance < least) {
       least = distance;
-      best = row[0];
+      best = row.designation;
     }
   }
   return best;

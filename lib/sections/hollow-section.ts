@@ -3,11 +3,10 @@ import { filletArea, filletCentroid, filletInertia } from './fillet';
 
 /**
  * Properties of a rectangular hollow section from its dimensions in m: h × b outside, wall t, outer corner radius r,
- * inner r − t (not below 0). Formulas of EN 10210-2, annex A. Closed: warping is negligible, Iw is left null.
+ * inner ri (r − t, not below 0, unless a product standard calculates with another). Formulas of EN 10210-2, annex A. Closed: warping is negligible, Iw is left null.
  * Shear: peak I·2t/S, for deformation 2·h·t (2·b·t turned).
  */
-export function propertiesOfRhs(h: number, b: number, t: number, r: number): SectionProperties {
-  const ri = Math.max(0, r - t);
+export function propertiesOfRhs(h: number, b: number, t: number, r: number, ri = Math.max(0, r - t)): SectionProperties {
   const major = aboutAxis(h, b, t, r, ri);
   const minor = aboutAxis(b, h, t, r, ri);
   const A = 2 * t * (h + b - 2 * t) - 4 * filletArea(r) + 4 * filletArea(ri);

@@ -87,7 +87,13 @@ function whatCannotBe(shape: ShapeWord, of: Record<DimensionName, number>): Shap
   return null;
 }
 
-function derived(shape: Shape, dimensions: ShapeDimensions, properties: SectionProperties, made: Section['made']): ShapedSection {
+/** A section with properties derived from its dimensions. */
+export function derived(
+  shape: Shape,
+  dimensions: ShapeDimensions,
+  properties: SectionProperties,
+  made: Section['made'],
+): ShapedSection {
   return { shape, made, dimensions, properties, sources: sourcesOf(properties, 'derived') };
 }
 

@@ -5,7 +5,7 @@ import type { Entry, ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
 import { type Row, rawCell, type Table } from '@/lib/intake/table';
 import { gradeFor, type GradeProperties } from '@/lib/materials/grade-for';
-import type { Material, PropertySource } from '@/lib/model/frame';
+import type { Material, PropertySource, Shape } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
 const columns = {
@@ -32,7 +32,7 @@ export interface FoundMaterial {
 export class Materials {
   private readonly bySheet = new Map<string, FoundMaterial>();
   private readonly grades = new Map<string, FoundMaterial | { suggestion: string | null }>();
-  private readonly resolved = new Map<MaterialRow, Map<number | null, Material>>();
+  private readonly resolved = new Map<MaterialRow, Map<string, Material>>();
 
   constructor(table: Table | undefined, reader: Reader, problems: ProblemList) {
     const ided = (row: Row): { id: string; key: string } | undefined => {
@@ -68,18 +68,27 @@ export class Materials {
     return found;
   }
 
-  /** The material for a section's thickest part; the same object for the same thickness. */
-  resolve(source: MaterialRow, thickness_m: number | null): Material {
-    let byThickness = this.resolved.get(source);
-    if (!byThickness) this.resolved.set(source, (byThickness = new Map()));
-    let material = byThickness.get(thickness_m);
-    if (!material) byThickness.set(thickness_m, (material = materialOf(source, thickness_m)));
+  /** The material for a section's thickest part and shape; the same object for the same. */
+  resolve(source: MaterialRow, thickness_m: number | null, shape: Shape | null): Material {
+    const plain = this.kept(source, thickness_m, null);
+    if (shape !== 'rhs') return plain;
+    // only some grades yield otherwise in a box
+    const box = this.kept(source, thickness_m, 'rhs');
+    return box.fy_Pa === plain.fy_Pa ? plain : box;
+  }
+
+  private kept(source: MaterialRow, thickness_m: number | null, shape: Shape | null): Material {
+    let bySection = this.resolved.get(source);
+    if (!bySection) this.resolved.set(source, (bySection = new Map()));
+    const key = `${thickness_m} ${shape}`;
+    let material = bySection.get(key);
+    if (!material) bySection.set(key, (material = materialOf(source, thickness_m, shape)));
     return material;
   }
 }
 
-function materialOf({ name, grade, typed }: MaterialRow, thickness_m: number | null): Material {
-  const found = grade === null ? null : gradeFor(grade, thickness_m);
+function materialOf({ name, grade, typed }: MaterialRow, thickness_m: number | null, shape: Shape | null): Material {
+  const found = grade === null ? null : gradeFor(grade, thickness_m, shape);
   const held: GradeProperties | null = found && 'properties' in found ? found.properties : null;
   const sources: Partial<Record<Property, PropertySource>> = {};
   const value = (key: Property): number | null => {

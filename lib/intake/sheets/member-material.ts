@@ -56,7 +56,7 @@ function materialIndex(
   }
   for (const entry of found.entries) problems.touch(entry, draft.entry.id);
   if (!found.source) return undefined;
-  const material = materials.resolve(found.source, section.properties.t_m);
+  const material = materials.resolve(found.source, section.properties.t_m, section.shape);
   const at = draft.materials.indexOf(material);
   if (at >= 0) return at;
   draft.materialRows.push(found.row);

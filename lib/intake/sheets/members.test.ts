@@ -172,6 +172,8 @@ describe('sections', () => {
     ],
     ['dimensions beside a designation', ['designation', 'h'], ['IPE 300', 300], ['note column-ignored Sections!C2 F1']],
     ['a designation and properties', ['designation', 'A'], ['IPE 300', 50], ['error conflicting-row Sections!C2 F1']],
+    ['a hollow section that may be made either way', ['designation'], ['RHS 200x100x8'], ['note derived Sections!B2 F1']],
+    ['a hollow section typed in full', ['designation'], ['HFRHS 200x100x8'], []],
     ['nothing that gives it', ['A'], [null], ['error unknown-section Sections!A2 F1']],
     [
       'I that no such depth can have',
@@ -196,6 +198,20 @@ describe('sections', () => {
     expect(lines(readSheets(withSection(headings, ...values))).sort()).toEqual([...problems].sort());
   });
 
+  it('a hollow section straight from the library says once how it was taken', () => {
+    const sheets = withCells({ 'Members!E2': 'SHS 100x5', 'Members!E3': 'SHS 100x5' });
+    expect(lines(readSheets(sheets))).toEqual(['note derived Members!E2 F1']);
+    expect(frame(sheets).sections[0]).toMatchObject({ designation: 'CFSHS 100x100x5', made: 'cold formed' });
+  });
+  it('A500 yields higher in a box than in a tube, other grades do not', () => {
+    const fy = (designation: string, material: string): number => {
+      const read = frame(withCells({ 'Members!E2': 'S', 'Sections+': ['section', 'designation', 'material'], 'Sections+2': ['S', designation, material] })); // prettier-ignore
+      return (read.materials[0]?.fy_Pa ?? NaN) / 6.894757293168361e6;
+    };
+    expect(fy('HSS6X6X3/8', 'A500 B')).toBeCloseTo(46, 9);
+    expect(fy('HSS6.625X0.280', 'A500 B')).toBeCloseTo(42, 9);
+    expect(fy('HSS6X6X3/8', 'A992')).toBeCloseTo(50, 9);
+  });
   it('a section twice with other content stops the frames that use it', () => {
     const sheets = withCells({
       'Sections+': ['section', 'designation'],

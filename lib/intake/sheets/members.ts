@@ -130,6 +130,8 @@ function sectionOf(draft: Draft, row: Row): Found | undefined {
     return undefined;
   }
   for (const entry of found.entries) problems.touch(entry, draft.entry.id);
+  const taken = sections.noteOnce(name);
+  if (taken) reader.tell(row, 'section', { code: 'derived', message: say.designationTaken(taken) }, reading);
   return found.section ? { section: found.section, row: found.row } : undefined;
 }
 

@@ -24,6 +24,7 @@ const propertyNames = ['A', 'I', 'W', 'W top', 'W bottom', 'depth', 'Av', 'Wpl',
 /** The batch's sections: those of the Sections sheet, else library designations. */
 export class Sections {
   private readonly bySheet = new Map<string, FoundSection>();
+  private readonly notes = new Map<string, string>();
   private readonly fromLibrary = new Map<string, FoundSection | { suggestion: string | null }>();
 
   constructor(table: Table | undefined, reader: Reader, problems: ProblemList) {
@@ -50,6 +51,13 @@ export class Sections {
     }
   }
 
+  /** What was understood by a designation that leaves something open, the first time it is asked for; else null. */
+  noteOnce(name: string): string | null {
+    const note = this.notes.get(name) ?? null;
+    this.notes.delete(name);
+    return note;
+  }
+
   /** Finds a section by its name, or the nearest name for a hint. */
   find(name: string): FoundSection | { readonly suggestion: string | null } {
     const own = this.bySheet.get(idKey(name));
@@ -58,6 +66,7 @@ export class Sections {
     if (!found) {
       const designation = findDesignation(name);
       found = 'section' in designation ? { section: designation.section, row: null, entries: [] } : designation;
+      if ('section' in designation && designation.note) this.notes.set(name, designation.note);
       this.fromLibrary.set(name, found);
     }
     return found;
@@ -89,8 +98,11 @@ function readSection(row: Row, name: string, reader: Reader): Section | undefine
     return undefined;
   }
   const found = findDesignation(designation ?? name);
-  if ('section' in found) return { ...found.section, name };
   const at = designation === null ? 'section' : 'designation';
+  if ('section' in found) {
+    if (found.note) reader.tell(row, at, { code: 'derived', message: say.designationTaken(found.note) }, forNobody);
+    return { ...found.section, name };
+  }
   reader.tell(
     row,
     at,

@@ -1,9 +1,11 @@
-import type { Range } from './range';
+import { iRows, type Range } from './range';
 
 /** HE A: nominal dimensions of EN 10365: h b tw tf r. */
 export const heA: Range = {
+  standard: 'EN 10365',
   unit: 'mm',
-  rows: [
+  made: 'rolled',
+  rows: iRows([
     ['HE 100 A', 96, 100, 5, 8, 12],
     ['HE 120 A', 114, 120, 5, 8, 12],
     ['HE 140 A', 133, 140, 5.5, 8.5, 12],
@@ -28,5 +30,5 @@ export const heA: Range = {
     ['HE 800 A', 790, 300, 15, 28, 30],
     ['HE 900 A', 890, 300, 16, 30, 30],
     ['HE 1000 A', 990, 300, 16.5, 31, 30],
-  ],
+  ]),
 };

@@ -1,9 +1,11 @@
-import type { Range } from './range';
+import { iRows, type Range } from './range';
 
 /** HE B: nominal dimensions of EN 10365: h b tw tf r. */
 export const heB: Range = {
+  standard: 'EN 10365',
   unit: 'mm',
-  rows: [
+  made: 'rolled',
+  rows: iRows([
     ['HE 100 B', 100, 100, 6, 10, 12],
     ['HE 120 B', 120, 120, 6.5, 11, 12],
     ['HE 140 B', 140, 140, 7, 12, 12],
@@ -28,5 +30,5 @@ export const heB: Range = {
     ['HE 800 B', 800, 300, 17.5, 33, 30],
     ['HE 900 B', 900, 300, 18.5, 35, 30],
     ['HE 1000 B', 1000, 300, 19, 36, 30],
-  ],
+  ]),
 };

@@ -1,9 +1,11 @@
-import type { Range } from './range';
+import { iRows, type Range } from './range';
 
 /** IPE, IPE A, AA, O and V: nominal dimensions of EN 10365 (and mill practice for AA, V): h b tw tf r. */
 export const ipe: Range = {
+  standard: 'EN 10365',
   unit: 'mm',
-  rows: [
+  made: 'rolled',
+  rows: iRows([
     ['IPE AA 80', 78, 46, 3.2, 4.2, 5],
     ['IPE A 80', 78, 46, 3.3, 4.2, 5],
     ['IPE 80', 80, 46, 3.8, 5.2, 5],
@@ -66,5 +68,5 @@ export const ipe: Range = {
     ['IPE 600', 600, 220, 12, 19, 24],
     ['IPE O 600', 610, 224, 15, 24, 24],
     ['IPE V 600', 618, 228, 18, 28, 24],
-  ],
+  ]),
 };

@@ -1,9 +1,11 @@
-import type { Range } from './range';
+import { iRows, type Range } from './range';
 
 /** UB: nominal dimensions of EN 10365: h b tw tf r. */
 export const ub: Range = {
+  standard: 'EN 10365',
   unit: 'mm',
-  rows: [
+  made: 'rolled',
+  rows: iRows([
     ['UB 1016x305x584', 1056, 314, 36, 64, 30],
     ['UB 1016x305x494', 1036, 309, 31, 54, 30],
     ['UB 1016x305x438', 1026, 305, 26.9, 49, 30],
@@ -111,5 +113,5 @@ export const ub: Range = {
     ['UB 178x102x19', 177.8, 101.2, 4.8, 7.9, 7.6],
     ['UB 152x89x16', 152.4, 88.7, 4.5, 7.7, 7.6],
     ['UB 127x76x13', 127, 76, 4, 7.6, 7.6],
-  ],
+  ]),
 };

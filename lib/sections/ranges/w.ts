@@ -1,9 +1,11 @@
-import type { Range } from './range';
+import { iRows, type Range } from './range';
 
 /** W: nominal dimensions of ASTM A6: d bf tw tf, and the root radius r = k − tf of the design k. */
 export const w: Range = {
+  standard: 'ASTM A6',
   unit: 'in',
-  rows: [
+  made: 'rolled',
+  rows: iRows([
     ['W44X335', 44, 15.9, 1.03, 1.77, 0.79],
     ['W44X290', 43.6, 15.8, 0.865, 1.58, 0.78],
     ['W44X262', 43.3, 15.8, 0.785, 1.42, 0.78],
@@ -287,5 +289,5 @@ export const w: Range = {
     ['W5X19', 5.15, 5.03, 0.27, 0.43, 0.3],
     ['W5X16', 5.01, 5, 0.24, 0.36, 0.3],
     ['W4X13', 4.16, 4.06, 0.28, 0.345, 0.25],
-  ],
+  ]),
 };
