@@ -1,22 +1,23 @@
 import type { Frame } from '@/lib/model/frame';
+import { defaultSettings, type Settings } from '@/lib/model/settings';
 import type { Certificate, ResultState } from '@/lib/results/result';
-import { globalEquilibrium } from './equilibrium';
+import { nodeAngles } from './assemble';
+import { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns } from './certificate-tolerances';
+import { globalEquilibrium, stateEquilibrium } from './equilibrium';
 import type { LoadVectors } from './load-vectors';
 import type { Recovered } from './recover';
+import { caseResidual, stateResidual } from './residual';
 import { largestDifference } from './second/compare-states';
 import { secondAnalysis } from './second/second-analysis';
 import type { Topology } from './topology';
+import { worse } from './worse';
 
-export const residualTolerance = 1e-10;
-export const equilibriumTolerance = 1e-8;
-export const leastDigits = 6;
-export const secondTolerance = 1e-6;
-/** The second analysis is dense: above this number of unknowns it would cost more than all the rest. */
-export const secondUnknowns = 300;
+export { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns };
+
 /** Share of the forces met on the way below which a result is taken for their rounding. */
 const rounding = 1e-4;
 
-/** Everything about a solved frame that its certificate is made from. */
+/** Everything about a plain frame (first order, Euler–Bernoulli, combinations by superposition) that its certificate is made from. */
 export interface Solved {
   readonly frame: Frame;
   readonly t: Topology;
@@ -27,18 +28,64 @@ export interface Solved {
   readonly d: Float64Array;
   readonly recovered: readonly Recovered[];
   readonly cases: readonly ResultState[];
+  /** Its combinations, so that the second analysis may compare them as well. */
+  readonly combinations?: readonly ResultState[];
 }
 
-/** Certificate of a frame (engine, Certificate; README §5). @param second whether to make the second analysis */
+/** The same of a frame with states that are no sums of cases. */
+export interface SolvedStates {
+  readonly frame: Frame;
+  readonly settings: Settings;
+  readonly t: Topology;
+  /** Of K with all members, unreduced: what residuals are scaled by. */
+  readonly diagonal: Float64Array;
+  readonly norm: number;
+  /** The worst of all factored systems that gave results. */
+  readonly condition: number;
+  /** Every state handed on, in order. */
+  readonly solved: readonly SolvedState[];
+}
+export interface SolvedState {
+  readonly state: ResultState;
+  /** By node and direction, node axes, ÷ loadScale as the state; null for a sum of cases. */
+  readonly outOfBalance: Float64Array | null;
+  /** Largest force met on the way before stiffness × movement cancels, N; 0 for a sum of cases. */
+  readonly handled: number;
+}
+
+/** Certificate of a plain frame (engine, Certificate; README §5). @param second whether to make the second analysis */
 export function certify(solved: Solved, second: boolean): Certificate {
-  const { frame, recovered } = solved;
+  const { frame, recovered, cases, combinations } = solved;
   const floors = recovered.map((r) => rounding * r.handled);
+  const compared = combinations ? frame : { ...frame, combinations: [] };
   return {
-    residual: largestResidual(solved),
+    residual: caseResidual(solved),
     equilibrium: recovered.reduce((most, r, c) => worse(most, globalEquilibrium(frame, c, r.reactions, floors[c]!)), 0),
     condition: solved.condition,
     digits: digitsOf(solved.condition),
-    ...compareWithSecond(solved, floors, second),
+    ...compareWithSecond(compared, defaultSettings, solved.t, [...cases, ...(combinations ?? [])], floors, second),
+  };
+}
+
+/** Certificate of any other frame: the same items for every state as it stands (README §5). */
+export function certifyStates(input: SolvedStates, second: boolean): Certificate {
+  const { frame, settings, t, solved, condition } = input;
+  const cases = solved.filter(({ state }) => state.kind === 'case').map(({ handled }) => rounding * handled);
+  const floors = solved.map(({ state, handled }) => Math.max(rounding * handled, floorOf(state, cases)));
+  return {
+    residual: stateResidual(input, nodeAngles(frame)),
+    equilibrium: solved.reduce((most, { state }, i) => worse(most, stateEquilibrium(frame, state, floors[i]!)), 0),
+    condition,
+    digits: digitsOf(condition),
+    ...compareWithSecond(
+      frame,
+      settings,
+      t,
+      solved.map(({ state }) => state),
+      cases,
+      second,
+      floors,
+    ),
   };
 }
 
@@ -47,43 +94,28 @@ export function digitsOf(condition: number): number {
   return -Math.log10(Number.EPSILON * condition);
 }
 
-/** NaN is worst of all. */
-function worse(a: number, b: number): number {
-  return a >= b ? a : b > a ? b : NaN;
+/** A sum of cases has the rounding of each. @param cases floors of the cases, N; none where there are no cases */
+function floorOf(state: ResultState, cases: readonly number[]): number {
+  return cases.reduce((sum, floor, c) => sum + Math.abs(state.factors[c]!) * floor, 0);
 }
 
-/** ‖K̂ d̂ − f̂‖∞ / (‖K̂‖₁‖d̂‖∞ + ‖f̂‖∞), scaled to a unit diagonal so that metres and radians may stand side by side. */
-function largestResidual({ t, diagonal, norm, loads, d, recovered }: Solved): number {
-  let largest = 0;
-  for (let c = 0; c < recovered.length; c++) {
-    let off = 0;
-    let moved = 0;
-    let loaded = 0;
-    for (let i = 0; i < 3 * t.size; i++) {
-      const scale = Math.sqrt(diagonal[i]!);
-      const node = 3 * t.nodeAt[Math.floor(i / 3)]! + (i % 3);
-      off = worse(off, Math.abs(recovered[c]!.outOfBalance[node]!) / scale);
-      moved = worse(moved, Math.abs(d[c * 3 * t.size + i]!) * scale);
-      loaded = worse(loaded, Math.abs(loads.f[c * 3 * t.size + i]!) / scale);
-    }
-    const size = norm * moved + loaded;
-    if (size !== 0) largest = worse(largest, off / size);
-  }
-  return largest;
-}
-
-/** Certificate item 3. */
+/** Certificate item 3. @param cases floors of the cases, N   @param floors of every state; undefined = as sums of cases */
 function compareWithSecond(
-  { frame, t, cases }: Solved,
-  floors: readonly number[],
+  frame: Frame,
+  settings: Settings,
+  t: Topology,
+  states: readonly ResultState[],
+  cases: readonly number[],
   wanted: boolean,
+  floors?: readonly number[],
 ): Pick<Certificate, 'second' | 'secondReason'> {
   if (!wanted) return { second: null, secondReason: 'sampled' };
   if (t.free.reduce((sum, free) => sum + free, 0) > secondUnknowns) return { second: null, secondReason: 'too large' };
-  const states = secondAnalysis(frame);
-  if (!states) return { second: Infinity, secondReason: null };
-  const second = states.reduce((most, state, c) => worse(most, largestDifference(frame, cases[c]!, state, floors[c]!)), 0);
-  return { second, secondReason: null };
+  const others = secondAnalysis(frame, settings, states);
+  if (!others) return { second: Infinity, secondReason: null };
+  const difference = (most: number, state: ResultState, i: number): number =>
+    worse(most, largestDifference(frame, state, others[i]!, floors?.[i] ?? floorOf(state, cases)));
+  return { second: states.reduce(difference, 0), secondReason: null };
 }
 
 /** What in a certificate is outside its tolerance, in words; null = nothing. */

@@ -51,7 +51,7 @@ export function onNodes(setup: Setup, given: Given, acting: readonly Acting[]): 
 }
 
 /** Sum of what acts along a member, and the share of it that a simple beam hands to its end; local x and y. */
-function resultants(acting: Acting, L: number): { total: [number, number]; atEnd: [number, number] } {
+export function resultants(acting: Acting, L: number): { total: [number, number]; atEnd: [number, number] } {
   const total: [number, number] = [0, 0];
   const atEnd: [number, number] = [0, 0];
   let x = 0;
