@@ -1,5 +1,6 @@
 /** What pages, routes and the demo's seed ask of the queue: each records the wish in the database, then wakes the pump. */
 import type { OpenDatabase } from '@/db/open';
+import { insertChangedRevision } from '@/db/queries/changes';
 import { findLatestJob, finishJob, insertJob } from '@/db/queries/jobs';
 import { updateRevisionState } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
@@ -14,6 +15,22 @@ export async function askForReading(
   const job = await insertJob(db, of.office, { kind: 'read', revision: of.revision, person: of.person });
   queue.wake();
   return job !== undefined;
+}
+
+/**
+ * Makes a batch's next revision from an earlier one by changes: it is read, and run where that is asked, in the queue.
+ *
+ * @returns undefined where the earlier one is not the office's, or nothing of it was read
+ */
+export async function askForChange(
+  queue: WorkQueue,
+  { db }: Pick<OpenDatabase, 'db'>,
+  office: number,
+  made: Parameters<typeof insertChangedRevision>[2],
+): Promise<{ id: number; letter: string } | undefined> {
+  const revision = await insertChangedRevision(db, office, made);
+  if (revision) queue.wake();
+  return revision;
 }
 
 /**

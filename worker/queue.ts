@@ -5,9 +5,12 @@
 import { EventEmitter } from 'node:events';
 import PQueue from 'p-queue';
 import type { OpenDatabase } from '@/db/open';
+import { insertActivity } from '@/db/queries/activity';
 import { listUnfinishedJobs, requeueJobs, type JobRecord } from '@/db/queries/jobs';
+import { findRevisionById } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
 import { failStrandedReadings } from '@/db/queries/waiting';
+import { askForRun } from './ask';
 import type { Pools } from './pools';
 import type { ProgressEvents, RunProgress } from './progress';
 import { readOneRevision } from './reading';
@@ -136,6 +139,7 @@ export class WorkQueue {
     void this.reading.add(async () => {
       try {
         await readOneRevision(this.options, work.job);
+        await this.runIfAsked(work.job);
       } catch (error) {
         this.options.log('a reading could not be recorded', { error, job: work.job.id });
       }
@@ -143,6 +147,16 @@ export class WorkQueue {
       this.moved(work.job.revision);
     });
     return true;
+  }
+
+  /** A revision made on screen may be asked for with its run: that begins once its rows are read. */
+  private async runIfAsked({ payload, revision, office, person }: JobRecord): Promise<void> {
+    if (payload['run'] !== true || revision === null || person === null) return;
+    const { database } = this.options;
+    if (!(await askForRun(this, database, { office, revision, person }))) return;
+    const found = await findRevisionById(database.db, office, revision);
+    const { project, batch } = found ?? {};
+    await insertActivity(database.db, office, { what: 'started a run', revision, person, ...(found && { project, batch }) });
   }
 
   private async handOutChunk(): Promise<boolean> {

@@ -1,7 +1,9 @@
-/** In a thread of its own with bounded memory: a revision's uploaded files → what they say, stored. */
+/** In a thread of its own with bounded memory: a revision's uploaded files, or an earlier one's changed rows → what they say, stored. */
 import { insertIntake, type IntakeStored } from '@/db/queries/intake';
+import { findMaking } from '@/db/queries/changes';
 import { listUploadedFiles, listUploads } from '@/db/queries/uploads';
 import { readIntake } from '@/lib/intake/read-intake';
+import { makeChanged } from './make-changed';
 import { unreadIntake } from '../unread-intake';
 import { openOnce } from './open-once';
 
@@ -16,7 +18,11 @@ export interface ReadTask {
 
 export async function readRevision(task: ReadTask): Promise<IntakeStored> {
   const until = performance.now() + 1000 * task.deadline_s;
-  const { db, raw } = openOnce(task.file);
+  const database = openOnce(task.file);
+  const { db, raw } = database;
+  const making = findMaking(raw, task.office, task.revision);
+  if (making)
+    return insertIntake(raw, task.office, task.revision, await makeChanged(database, task.office, task.revision, making));
   const files = await listUploadedFiles(db, task.office, task.revision);
   const intake = await readIntake(files, {
     shouldStop: () => performance.now() > until,
