@@ -10,6 +10,9 @@ import { freeEnds, supported, type Span } from './spans';
 
 /** Roles whose deflection is only limited where Limits name them; `*` does not bring them in. */
 const onlyNamed: ReadonlySet<string | null> = new Set(['column', 'strut', 'tie', 'brace']);
+/** A rod's sag is no one's concern either, whatever its role. */
+const onlyWhereNamed = (frame: Frame, span: Span): boolean =>
+  onlyNamed.has(span.role) || span.pieces.some((piece) => frame.members[piece.member]!.tensionOnly);
 
 /** How a span's deflection is measured: from the line between its moved ends, or from its root. */
 type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever'; readonly root: 'start' | 'end' };
@@ -28,7 +31,8 @@ export function checkDeflection(
   findings: Findings,
 ): void {
   const named = limitsWithSetup(frame, settings, 'deflection').filter((limit) => namesSpan(limit, span, frame));
-  const limits = onlyNamed.has(span.role) ? named.filter((limit) => limit.target !== 'all') : named;
+  const byName = onlyWhereNamed(frame, span);
+  const limits = byName ? named.filter((limit) => limit.target !== 'all') : named;
   const subject: Subject = {
     subjectKind: span.kind,
     subject: span.name,
@@ -38,7 +42,7 @@ export function checkDeflection(
     member: span.pieces[0]!.member,
   };
   if (limits.length === 0) {
-    if (onlyNamed.has(span.role)) return;
+    if (byName) return;
     const why = withoutLimit(settings, 'deflection', findings);
     if (why) keepGoverning(findings, [notCheckedRow(subject, null, why)]);
     return;

@@ -1,6 +1,6 @@
 import type { Combination, Frame, Limit, Material, Member, Section, SectionProperties } from '@/lib/model/frame';
 import { defaultSettings, type Settings } from '@/lib/model/settings';
-import type { Check, MemberLine, ResultState, Segment } from '@/lib/results/result';
+import type { Check, MemberLine, ResultState, Segment, StateMethod } from '@/lib/results/result';
 import { checkFrame, type FrameChecks } from './check-frame';
 
 /** For tests: sections, frames, states and member lines made by hand, so that every number of a check can be followed. */
@@ -142,6 +142,12 @@ export function state(
     reactions: new Float64Array(),
     endForces: new Float64Array(),
   };
+}
+
+/** Of second order without more, converged in four passes. */
+export function method(change: Partial<StateMethod> = {}): StateMethod {
+  const plain = { shearDeformation: false, imperfection: null, notional: null, loadScale: 1, stiffness: null, slack: [] };
+  return { ...plain, iterations: 4, change: 1e-10, ...change };
 }
 
 export function segment(from: number, to: number, forces: { N?: number[]; V?: number[]; M?: number[]; v?: number[] }): Segment {

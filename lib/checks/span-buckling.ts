@@ -30,6 +30,8 @@ export interface SpanBuckling {
   readonly twiceForFreeEnd: boolean;
   /** An open section of one axis of symmetry buckles by twisting too; that load is not computed. */
   readonly twists: boolean;
+  /** Slack where it would be pressed: no compression of its to be screened. */
+  readonly tensionOnly: boolean;
 }
 
 type LengthField = 'lengthMajor_m' | 'lengthMinor_m' | 'lengthLtbTop_m' | 'lengthLtbBottom_m';
@@ -92,5 +94,6 @@ export function spanBuckling(frame: Frame, span: Span): SpanBuckling {
     longerForBoth,
     twiceForFreeEnd,
     twists: section.shape === 'channel',
+    tensionOnly: member.tensionOnly,
   };
 }

@@ -3,7 +3,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { findDesignation } from '@/lib/sections/find-designation';
 import { sectionFromShape } from '@/lib/sections/section-from-shape';
-import { beamFrame, check, combination, line, member, rowOf, state, steel, typedSection } from './hand-made';
+import { beamFrame, check, combination, limit, line, member, method, rowOf, state, steel, typedSection } from './hand-made';
 import { criticalMoment, eulerLoad } from './lateral-torsional';
 
 const close = (actual: number | null, expected: number, tolerance = 1e-9): void =>
@@ -127,6 +127,48 @@ describe('stability screening', () => {
   });
 });
 
+describe('a tension-only member', () => {
+  const rod = frame({ members: [member('AB', 0, 1, { tensionOnly: true, role: null })] });
+
+  it('is not pressed, so nothing of it buckles, whatever its own weight does along it', () => {
+    const found = check(rod, { C1: { AB: line(10, { N: [900, -100] }) } }, {}, withAlpha(2));
+    expect(rowOf(found, 'stability')).toMatchObject({ verdict: 'within', ratio: 0 });
+    expect(found.assumptions).toContain('Tension-only members: not pressed, so no buckling of theirs is screened');
+    expect(found.assumptions.filter((each) => each.includes('length'))).toEqual([]);
+  });
+
+  it('is still screened for what bends it', () => {
+    const bent = rowOf(check(rod, { C1: { AB: line(10, { M: [30e3] }) } }), 'stability');
+    expect(bent.verdict).toBe('not checked');
+    expect(bent.reason).toContain('M/M_cr');
+  });
+
+  it('has its sag limited only where Limits name it', () => {
+    const sag = { S1: { AB: line(10, { v: [0, 0.1, -0.01] }) } };
+    const rows = check(rod, sag, { deflectionRatio: 200 }).checks.filter((row) => row.check === 'deflection');
+    expect(rows).toEqual([]);
+    const limited = { ...rod, limits: [limit({ measure: 'deflection', target: 'member', name: 'AB', ratio: 200 })] };
+    expect(rowOf(check(limited, sag), 'deflection').verdict).toBe('over');
+  });
+});
+
+describe('states of one combination in both directions', () => {
+  const both = [...withAlpha(30, { name: 'C1 →', order: 2 as const }), ...withAlpha(30, { name: 'C1 ←', order: 2 as const })];
+
+  it('count as two combinations: the worse governs, under its own name', () => {
+    const found = check(frame(), { 'C1 →': { AB: line(10, { M: [10e3] }) }, 'C1 ←': { AB: line(10, { M: [-12e3] }) } }, {}, both);
+    expect(rowOf(found, 'normal stress')).toMatchObject({ combination: 'C1 ←', face: 'top' });
+    const all = check(frame(), { 'C1 →': { AB: line(10, { M: [10e3] }) } }, {}, both, true).allChecks ?? [];
+    expect(all.filter((row) => row.check === 'normal stress').map((row) => row.combination)).toEqual(['C1 →', 'C1 ←']);
+  });
+
+  it('have one α_cr, told of the first', () =>
+    expect(rowOf(check(frame(), {}, {}, both), 'critical load factor', null)).toMatchObject({
+      combination: 'C1 →',
+      reference: 'EN 1993-1-1 5.2.1: second-order analysis, α_cr ≥ 1',
+    }));
+});
+
 describe('blank lengths', () => {
   const blank = (change: Partial<Frame> = {}) => frame({ members: [member('AB', 0, 1)], ...change });
   const pushed = { C1: { AB: line(10, { N: [-1e3] }) } };
@@ -138,13 +180,15 @@ describe('blank lengths', () => {
   });
 
   it('in plane need second order with imperfections, or α_cr × f of 10', () => {
-    const reason = (states: ResultState[], imperfections: 'none' | 'EN 1993-1-1' = 'none') =>
-      rowOf(check(blank(), pushed, { imperfections }, states), 'stability').reason;
+    const reason = (states: ResultState[]) => rowOf(check(blank(), pushed, {}, states), 'stability').reason;
+    const leaning = { method: method({ imperfection: 'right' }) } as const;
     expect(reason(withAlpha(20))).toBeNull();
     expect(reason(withAlpha(null))).toBeNull();
     expect(reason(withAlpha(16.6))).toBe('needs length major (blank in plane, with α_cr × f = 9.9 below 10)');
     expect(reason(withAlpha(5, { order: 2 }))).toContain('needs length major');
-    expect(reason(withAlpha(5, { order: 2 }), 'EN 1993-1-1')).toBeNull();
+    expect(reason(withAlpha(5, { order: 2, method: method() }))).toContain('needs length major');
+    expect(reason(withAlpha(5, { order: 1, ...leaning }))).toContain('needs length major');
+    expect(reason(withAlpha(5, { order: 2, ...leaning }))).toBeNull();
     const turned = blank({ members: [member('AB', 0, 1, { turned: true, lengthMajor_m: 10 })] });
     expect(rowOf(check(turned, pushed, {}, withAlpha(5)), 'stability').reason).toContain('needs length minor');
     expect(rowOf(check(frame(), pushed, {}, withAlpha(5)), 'stability').reason).toBeNull();

@@ -84,9 +84,10 @@ function whyNotOneMember(frame: Frame, span: Span): string | null {
 }
 
 function note(span: Span, buckling: SpanBuckling, findings: Findings): void {
-  if (buckling.blank.length > 0)
+  if (buckling.tensionOnly) findings.assumptions.add('Tension-only members: not pressed, so no buckling of theirs is screened');
+  else if (buckling.blank.length > 0)
     findings.assumptions.add(`${span.name}: length ${buckling.blank.join(', ')} taken as the length of the span`);
-  if (buckling.twiceForFreeEnd) findings.assumptions.add(`${span.name}: out of the plane twice the length of the span, since an end of it is free`); // prettier-ignore
+  if (buckling.twiceForFreeEnd && !buckling.tensionOnly) findings.assumptions.add(`${span.name}: out of the plane twice the length of the span, since an end of it is free`); // prettier-ignore
   if (buckling.ltb.kind !== 'formula') return;
   if (buckling.longerForBoth)
     findings.assumptions.add(
@@ -104,7 +105,8 @@ function screen(settings: Settings, of: SpanBuckling, state: ResultState, lines:
   // what rounding leaves of zero: a stress of E/10⁹
   const noForce = 1e-9 * of.E * of.A;
   const noMoment = noForce * Math.sqrt(of.Imajor / of.A);
-  const N = compression > noForce ? compression / f : 0;
+  // a tension-only member goes slack before it is pressed; what is left is its own weight along it
+  const N = !of.tensionOnly && compression > noForce ? compression / f : 0;
   const positive = sagging > noMoment ? sagging / f : 0;
   const negative = hogging > noMoment ? hogging / f : 0;
   const major = N / of.NcrMajor;
@@ -115,7 +117,8 @@ function screen(settings: Settings, of: SpanBuckling, state: ResultState, lines:
   let needs = NONE;
   if (N > 0 && of.NcrMinor === null) needs = ['I minor'];
   if (N > 0 && of.twists) needs = [...needs, 'N_cr of torsional-flexural buckling of a channel, which is not computed'];
-  if (N > 0 && of.blankInPlane !== null && !(state.order === 2 && settings.imperfections !== 'none')) {
+  const swayed = state.order === 2 && state.method !== null && state.method.imperfection !== null;
+  if (N > 0 && of.blankInPlane !== null && !swayed) {
     const amplified = state.criticalLoadFactor === null ? Infinity : state.criticalLoadFactor * f;
     if (!(amplified >= 10))
       needs = [...needs, `length ${of.blankInPlane} (blank in plane, with α_cr × f = ${figure(amplified, 'down')} below 10)`];

@@ -1,3 +1,4 @@
+import { isColumn } from '@/lib/analysis/imperfections/columns';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { ResultState } from '@/lib/results/result';
@@ -5,14 +6,6 @@ import { keepGoverning, notCheckedRow, type Findings, type Subject } from './che
 import { namesSpan } from './limits';
 import { checkMovement, limitsWithSetup, withoutLimit } from './movement';
 import type { Span } from './spans';
-
-/** A column: by its role, or without a role within 20° of vertical. */
-function isColumn(frame: Frame, span: Span): boolean {
-  if (span.role !== null) return span.role === 'column';
-  const a = frame.nodes[span.startNode]!;
-  const b = frame.nodes[span.endNode]!;
-  return Math.abs(b.x_m - a.x_m) <= Math.abs(b.y_m - a.y_m) * Math.tan((20 * Math.PI) / 180) * (1 + 1e-9);
-}
 
 /** Sway of a column in every service combination: |ux(top) − ux(bottom)| against its height |Δy|. */
 export function checkSway(
