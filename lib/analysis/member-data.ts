@@ -35,7 +35,7 @@ export function springOf(joint: Joint): number {
 export interface MemberMethod {
   /** Members shear as well as bend: G Av, a typed Av as given, else by shape (lib/sections/in-plane.ts). */
   readonly shearDeformation: boolean;
-  /** Factors on EA (and G Av) and EI by member, 2 each (AISC 360-22 C2.3); null = all 1. */
+  /** Factors on EA (and G Av and the member's sprung joints) and EI by member, 2 each (AISC 360-22 C2.3); null = all 1. */
   readonly stiffness: Float64Array | null;
 }
 
@@ -91,6 +91,8 @@ export function memberDataFor(frame: Frame, as: MemberMethod | null): readonly M
     EA: m.EA * factors[2 * i]!,
     EI: m.EI * factors[2 * i + 1]!,
     GAv: m.GAv * factors[2 * i]!,
+    startSpring: m.startSpring * factors[2 * i]!,
+    endSpring: m.endSpring * factors[2 * i]!,
   }));
   kept.set(factors, less);
   return less;
@@ -102,7 +104,9 @@ function shearData(frame: Frame): readonly MemberData[] {
   const data = memberData(frame).map((m, i) => {
     const member = frame.members[i]!;
     const Av = inPlane(frame.sections[member.section]!, member.turned).AvShear_m2;
-    return { ...m, GAv: (frame.materials[member.material]!.G_Pa ?? NaN) * (Av ?? NaN) };
+    const GAv = (frame.materials[member.material]!.G_Pa ?? NaN) * (Av ?? NaN);
+    // a tie by its use is not asked for a shear area
+    return { ...m, GAv: member.tensionOnly && !(GAv > 0) ? Infinity : GAv };
   });
   shearing.set(frame, data);
   return data;

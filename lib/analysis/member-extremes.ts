@@ -51,8 +51,8 @@ let candidates = 0;
 
 const slope = new Float64Array(8);
 const roots = new Float64Array(8);
-// the deflected line of a segment from its chord: six terms, one where it has no length
-const departed = [new Float64Array(1), new Float64Array(6)] as const;
+// the deflected line of a segment from its chord, by its number of terms (one where it has no length)
+const departed = Array.from({ length: 10 }, (_, terms) => new Float64Array(terms));
 
 /** Both ends of a segment (so both sides of jumps) and the roots of the derivative within it. */
 function addCandidates(p: ArrayLike<number>, { from, to }: Segment): void {
@@ -119,8 +119,8 @@ function writeDeparture({ segments, length }: MemberLine, out: Float64Array, at:
   for (let k = 0; k < segments.length; k++) {
     const segment = segments[k]!;
     const { v } = segment;
-    const p = departed[v.length > 1 ? 1 : 0];
-    for (let i = 0; i < p.length; i++) p[i] = v[i] ?? 0;
+    const p = departed[v.length]!;
+    for (let i = 0; i < p.length; i++) p[i] = v[i]!;
     size = Math.max(size, Math.abs(p[0]!));
     p[0] = p[0]! - v1 - turn * segment.from;
     if (p.length > 1) p[1] = p[1]! - turn;

@@ -2,6 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { MemberLine, ResultState, Segment } from '@/lib/results/result';
 import { memberDataFor, type MemberData } from './member-data';
 import { stretchesOf } from './member-stretches';
+import { secondOrderLine } from './second-order/second-order-line';
 
 // what acts on each stretch in the state at hand, and which of the member's places divide it
 let room = 16;
@@ -38,6 +39,7 @@ function makeRoom(places: number): void {
 export function memberLine(frame: Frame, state: ResultState, member: number): MemberLine {
   const m = memberDataFor(frame, state.method)[member]!;
   if (state.method?.slack.includes(member)) return slackLine(m, state);
+  if (state.order === 2) return secondOrderLine(frame, state, member, m);
   return firstOrderLine(frame, state, member, m);
 }
 

@@ -73,6 +73,21 @@ export function recover(
     asked[o + 1] = asked[o + 1]! - (load.Fy_N * ca - load.Fx_N * sa);
     asked[o + 2] = asked[o + 2]! - load.Mz_Nm;
   }
+  const reactions = takeReactions(frame, t, angles, all, asked);
+  return { displacements: all, reactions, endForces: forces, outOfBalance: asked, handled };
+}
+
+/**
+ * Reactions in global axes, Fx, Fy, Mz by support: what nodes ask beyond the loads on them. Takes them out of `asked`
+ * (3 a node, node axes), so that what is left is out of balance, and turns the displacements `all` to global axes.
+ */
+export function takeReactions(
+  frame: Frame,
+  t: Topology,
+  angles: Float64Array,
+  all: Float64Array,
+  asked: Float64Array,
+): Float64Array {
   const reactions = new Float64Array(3 * frame.supports.length);
   frame.supports.forEach((support, i) => {
     const o = 3 * support.node;
@@ -88,7 +103,7 @@ export function recover(
     reactions[3 * i + 1] = held[0]! * sa + held[1]! * ca + 0;
     reactions[3 * i + 2] = held[2]! + 0;
   });
-  for (let i = 0; i < nodes; i++) {
+  for (let i = 0; i < frame.nodes.length; i++) {
     for (let r = 0; r < 3; r++) if (!t.free[3 * i + r]) asked[3 * i + r] = 0;
     const ca = Math.cos(angles[i]!);
     const sa = Math.sin(angles[i]!);
@@ -98,5 +113,5 @@ export function recover(
     all[3 * i + 1] = x * sa + y * ca;
     if (t.noRotation[i]) all[3 * i + 2] = NaN;
   }
-  return { displacements: all, reactions, endForces: forces, outOfBalance: asked, handled };
+  return reactions;
 }

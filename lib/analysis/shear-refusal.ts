@@ -5,7 +5,7 @@ import { memberDataFor } from './member-data';
 /** What shear deformation needs and this frame does not give: G and a shear area of every member; null = nothing. */
 export function shearRefusal(frame: Frame): Failure | null {
   const data = memberDataFor(frame, { shearDeformation: true, stiffness: null });
-  const i = data.findIndex((m) => !(m.GAv > 0 && Number.isFinite(m.GAv)));
+  const i = data.findIndex((m) => !(m.GAv > 0));
   if (i < 0) return null;
   const member = frame.members[i]!;
   const G = frame.materials[member.material]!.G_Pa;

@@ -1,0 +1,190 @@
+import { addMember, addSupports, diagonalOf, emptyMemberStiffness, memberStiffness } from '../assemble';
+import { factor } from '../factor';
+import type { MemberData } from '../member-data';
+import { solve } from '../solve';
+import { memberChain, type Buckled } from './member-chain';
+import { combineLoading } from './member-loading';
+import { emptyPiece } from './piece';
+import { slackReactions } from './slack-reactions';
+import type { SecondOrderInput } from './solve-second-order';
+
+/** One combination at work. */
+export interface Work {
+  readonly input: SecondOrderInput;
+  /** 2 = axial forces bend; 1 = they don't. */
+  readonly order: 1 | 2;
+  /** Node axes differ from global ones somewhere; supports are moved. */
+  readonly settled: boolean;
+  passes: number;
+  /** Largest axial stiffness × movement of the last pass, N. */
+  handled: number;
+}
+
+/** A pivot below this share of its own diagonal is none. */
+const pivotTolerance = 1e-12;
+
+/** Loads of the combination, by member and by node. */
+export function prepare(input: SecondOrderInput): Work {
+  const { frame, angles, data, slack, factors, loadScale, notional, space } = input;
+  const { nodeForces, all, loadings, held } = space;
+  nodeForces.fill(0);
+  all.fill(0);
+  const push = (node: number, Fx: number, Fy: number, Mz: number): void => {
+    const ca = Math.cos(angles[node]!);
+    const sa = Math.sin(angles[node]!);
+    const o = 3 * node;
+    nodeForces[o] = nodeForces[o]! + Fx * ca + Fy * sa;
+    nodeForces[o + 1] = nodeForces[o + 1]! - Fx * sa + Fy * ca;
+    nodeForces[o + 2] = nodeForces[o + 2]! + Mz;
+  };
+  for (const load of frame.nodeLoads) {
+    const k = factors[load.case]! * loadScale;
+    if (k !== 0) push(load.node, k * load.Fx_N, k * load.Fy_N, k * load.Mz_Nm);
+  }
+  if (notional) for (let i = 0; i < frame.nodes.length; i++) push(i, notional[2 * i]!, notional[2 * i + 1]!, 0);
+  let settled = false;
+  for (const s of frame.settlements) {
+    const k = factors[s.case]! * loadScale;
+    if (k === 0) continue;
+    const o = 3 * s.node;
+    all[o] = all[o]! + k * (s.dx_m ?? 0);
+    all[o + 1] = all[o + 1]! + k * (s.dy_m ?? 0);
+    all[o + 2] = all[o + 2]! + k * (s.rz_rad ?? 0);
+    settled = true;
+  }
+  const ends = new Float64Array(6);
+  for (let i = 0; i < data.length; i++) {
+    const loading = loadings[i]!;
+    combineLoading(frame, i, factors, loadScale, loading);
+    const m = data[i]!;
+    held[i] = -slackReactions(m, loading, ends)[0]! - m.EA * loading.strain;
+    if (slack?.[i]) {
+      push(m.start, ends[1]! * m.sin - ends[0]! * m.cos, -ends[0]! * m.sin - ends[1]! * m.cos, 0);
+      push(m.end, ends[4]! * m.sin - ends[3]! * m.cos, -ends[3]! * m.sin - ends[4]! * m.cos, 0);
+      held[i] = 0;
+    }
+  }
+  return { input, order: 2, settled, passes: 0, handled: 0 };
+}
+
+/** Whether first-order stiffness alone holds the frame. */
+export function standsWithoutForces({ input }: Work): boolean {
+  const { frame, t, angles, data, slack, space } = input;
+  const k = emptyMemberStiffness();
+  space.K.fill(0);
+  for (let i = 0; i < data.length; i++) if (!slack?.[i]) addMember(space.K, t, data[i]!, memberStiffness(data[i]!, k), angles);
+  addSupports(space.K, t, frame);
+  return factored(input);
+}
+
+function factored({ t, space }: SecondOrderInput): boolean {
+  diagonalOf(space.K, t, space.diagonal);
+  return factor(space.K, t, space.diagonal, space.inner, space.pivots, pivotTolerance) < 0;
+}
+
+const piece = emptyPiece();
+const buckled: Buckled = { yes: false };
+const u = new Float64Array(6);
+
+/**
+ * One pass: K(N) d = f(N) for the axial forces in `space.N`; movements into `space.all`, axial forces into `space.answer`.
+ * @returns false where K(N) is not positive definite, members between their nodes included
+ */
+export function respond(work: Work): boolean {
+  const { input, order, settled } = work;
+  const { frame, t, angles, data, slack, space } = input;
+  const { K, d, N, nodeForces, all, loadings, answer, held, inner } = space;
+  work.passes++;
+  K.fill(0);
+  for (let p = 0; p < t.size; p++) {
+    const o = 3 * t.nodeAt[p]!;
+    d[3 * p] = nodeForces[o]!;
+    d[3 * p + 1] = nodeForces[o + 1]!;
+    d[3 * p + 2] = nodeForces[o + 2]!;
+  }
+  buckled.yes = false;
+  for (let i = 0; i < data.length; i++) {
+    if (slack?.[i]) continue;
+    const m = data[i]!;
+    const loading = loadings[i]!;
+    memberChain(m, loading, order === 2 ? N[i]! : 0, true, piece, buckled);
+    if (buckled.yes) return false;
+    addMember(K, t, m, piece, angles);
+    let X1 = -held[i]!;
+    let { Y1, m1, Y2, m2 } = piece;
+    let X2 = held[i]! + loading.endN;
+    if (settled) {
+      localMovement(m, angles, t.free, all);
+      const axial = piece.ka * (u[0]! - u[3]!);
+      const v = u[1]! - u[4]!;
+      const shear = piece.kvv * v + piece.kv1 * u[2]! + piece.kv2 * u[5]!;
+      X1 += axial;
+      X2 -= axial;
+      Y1 += shear;
+      Y2 -= shear;
+      m1 += piece.kv1 * v + piece.S11 * u[2]! + piece.S12 * u[5]!;
+      m2 += piece.kv2 * v + piece.S12 * u[2]! + piece.S22 * u[5]!;
+    }
+    take(d, t.positionOf[m.start]!, angles[m.start]!, m, X1, Y1, m1);
+    take(d, t.positionOf[m.end]!, angles[m.end]!, m, X2, Y2, m2);
+  }
+  addSupports(K, t, frame);
+  for (let p = 0; p < t.size; p++) for (let r = 0; r < 3; r++) if (!t.free[3 * t.nodeAt[p]! + r]) d[3 * p + r] = 0;
+  if (!factored(input)) return false;
+  solve(K, t, inner, d, 1);
+  for (let p = 0; p < t.size; p++) {
+    const o = 3 * t.nodeAt[p]!;
+    for (let r = 0; r < 3; r++) if (t.free[o + r]) all[o + r] = d[3 * p + r]!;
+  }
+  work.handled = 0;
+  for (let i = 0; i < data.length; i++) {
+    const m = data[i]!;
+    if (slack?.[i]) answer[i] = 0;
+    else {
+      localMovement(m, angles, null, all);
+      const ka = m.EA / m.length;
+      answer[i] = ka * (u[3]! - u[0]!) + held[i]!;
+      work.handled = Math.max(work.handled, ka * Math.abs(u[3]!), ka * Math.abs(u[0]!));
+    }
+  }
+  return true;
+}
+
+/** Movements of a member's ends in local axes into `u`; with `held`, of what is not among the unknowns only. */
+function localMovement(m: MemberData, angles: Float64Array, free: Uint8Array | null, all: Float64Array): void {
+  for (let end = 0; end < 2; end++) {
+    const node = end === 0 ? m.start : m.end;
+    const o = 3 * node;
+    let x = free?.[o] ? 0 : all[o]!;
+    let y = free?.[o + 1] ? 0 : all[o + 1]!;
+    const angle = angles[node]!;
+    if (angle !== 0) {
+      const ca = Math.cos(angle);
+      const sa = Math.sin(angle);
+      const turned = x * ca - y * sa;
+      y = x * sa + y * ca;
+      x = turned;
+    }
+    u[3 * end] = x * m.cos + y * m.sin;
+    u[3 * end + 1] = y * m.cos - x * m.sin;
+    u[3 * end + 2] = free?.[o + 2] ? 0 : all[o + 2]!;
+  }
+}
+
+/** d −= Tᵀ q at one end. */
+function take(d: Float64Array, p: number, angle: number, m: MemberData, X: number, Y: number, M: number): void {
+  if (p < 0) return;
+  let x = X * m.cos - Y * m.sin;
+  let y = X * m.sin + Y * m.cos;
+  if (angle !== 0) {
+    const ca = Math.cos(angle);
+    const sa = Math.sin(angle);
+    const turned = x * ca + y * sa;
+    y = y * ca - x * sa;
+    x = turned;
+  }
+  const o = 3 * p;
+  d[o] = d[o]! - x;
+  d[o + 1] = d[o + 1]! - y;
+  d[o + 2] = d[o + 2]! - M;
+}

@@ -1,0 +1,178 @@
+import type { Frame } from '@/lib/model/frame';
+import type { MemberLine, ResultState, Segment } from '@/lib/results/result';
+import type { MemberData } from '../member-data';
+import { economise } from './economise';
+import { cut, emptyPieces, givenStride, series, terms, type LinePieces, type PieceEnd } from './line-pieces';
+import { combineLoading, emptyLoading, type MemberLoading } from './member-loading';
+import { tieStarts } from './tie-line';
+
+/** The lines' error against their largest value: a tenth of what is promised (1e-9). */
+const close = 1e-10;
+/** Degrees that are not gone beyond: N, V, M and v. */
+const mostForces = 6;
+const mostDeflection = 8;
+/** A tie that damps what comes in at its ends by more than e to this is not followed from one end to the other. */
+const dampest = 6;
+
+const loading: MemberLoading = emptyLoading();
+let pieces: LinePieces = emptyPieces(16);
+let turned: LinePieces = emptyPieces(16);
+const at: PieceEnd = { v: 0, psi: 0, M: 0, Q: 0 };
+
+/**
+ * Internal forces and deflected line of a member of a second-order state, as polynomials between load points (more where
+ * the axial force is large): power series of EI ψ′ = M + EI κ₀, M′ = V = Q + N v′, Q′ = q, v′ = ψ − V/GAv, their degree
+ * lowered within 1e-9 of their largest value, both ends exactly. README §5.
+ */
+export function secondOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData): MemberLine {
+  const scale = state.method?.loadScale ?? 1;
+  const e = 6 * member;
+  const N0 = state.endForces[e]!;
+  combineLoading(frame, member, state.factors, 1, loading);
+  pieces = cut(m, loading, scale * N0, scale, pieces);
+  const d = state.displacements;
+  const [a, b] = [3 * m.start, 3 * m.end];
+  const v1 = d[a + 1]! * m.cos - d[a]! * m.sin;
+  const v2 = d[b + 1]! * m.cos - d[b]! * m.sin;
+  const ends = { v1, v2, phi1: d[a + 2]!, phi2: d[b + 2]!, V: state.endForces[e + 1]!, M: state.endForces[e + 2]! };
+  if (damping(m) > dampest) along(m, tieStarts(m, loading, pieces, ends));
+  else follow(m, scale * N0, ends);
+  const u1 = d[a]! * m.cos + d[a + 1]! * m.sin;
+  return written(m, state.endForces, e, u1, v2, scale);
+}
+
+export interface LineEnds {
+  readonly v1: number;
+  readonly v2: number;
+  /** The nodes' rotations, NaN where there is none. */
+  readonly phi1: number;
+  readonly phi2: number;
+  /** At the start, before a load exactly there. */
+  readonly V: number;
+  readonly M: number;
+}
+
+function damping(m: MemberData): number {
+  let sum = 0;
+  for (let k = 0; k < pieces.count; k++) {
+    const N = pieces.given[givenStride * k + 2]!;
+    if (N > 0) sum += Math.sqrt(N / m.EI) * pieces.given[givenStride * k + 1]!;
+  }
+  return sum;
+}
+
+/** From piece to piece, from the forces and the rotation at the start. */
+function follow(m: MemberData, N: number, ends: LineEnds): void {
+  const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
+  const known = m.startSpring > 0;
+  const psi = !known
+    ? (ends.v2 - ends.v1) / m.length
+    : m.startSpring === Infinity
+      ? ends.phi1
+      : ends.phi1 + ends.M / m.startSpring;
+  at.v = ends.v1;
+  at.psi = psi;
+  at.M = ends.M;
+  at.Q = ends.V - N * (psi - ends.V * slip);
+  run(m, slip, pieces, 1);
+  let off = ends.v2 - at.v;
+  if (!known && varies()) {
+    // the start's rotation from where its line must end
+    turned = turned.given.length < pieces.given.length ? emptyPieces(pieces.given.length / givenStride) : turned;
+    turned.count = pieces.count;
+    turned.given.set(pieces.given.subarray(0, givenStride * pieces.count));
+    at.v = at.M = 0;
+    at.psi = 1;
+    at.Q = -N;
+    run(m, slip, turned, 0);
+    const share = off / at.v;
+    for (let i = 0; i < terms * pieces.count; i++) {
+      pieces.M[i] = pieces.M[i]! + share * turned.M[i]!;
+      pieces.V[i] = pieces.V[i]! + share * turned.V[i]!;
+      pieces.v[i] = pieces.v[i]! + share * turned.v[i]!;
+    }
+    off = 0;
+  }
+  for (let k = 0; k < pieces.count; k++) {
+    const o = terms * k;
+    const [from, l] = [pieces.given[givenStride * k]!, pieces.given[givenStride * k + 1]!];
+    pieces.v[o] = pieces.v[o]! + (off * from) / m.length;
+    pieces.v[o + 1] = pieces.v[o + 1]! + (off * l) / m.length;
+  }
+}
+
+function varies(): boolean {
+  const first = pieces.given[2]!;
+  for (let k = 0; k < pieces.count; k++) {
+    const g = givenStride * k;
+    if (pieces.given[g + 2] !== first || pieces.given[g + 3] !== 0 || pieces.given[g + 4] !== 0) return true;
+  }
+  return false;
+}
+
+function run(m: MemberData, slip: number, into: LinePieces, loaded: number): void {
+  for (let k = 0; k < into.count; k++) {
+    const g = givenStride * k;
+    at.Q += loaded * into.given[g + 7]!;
+    at.M -= loaded * into.given[g + 8]!;
+    series(m, slip, loading.curvature, into, k, at, loaded);
+  }
+}
+
+/** Each piece from its own start: v, ψ, M, Q one after another. */
+function along(m: MemberData, starts: Float64Array): void {
+  const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
+  for (let k = 0; k < pieces.count; k++) {
+    at.v = starts[4 * k]!;
+    at.psi = starts[4 * k + 1]!;
+    at.M = starts[4 * k + 2]!;
+    at.Q = starts[4 * k + 3]!;
+    series(m, slip, loading.curvature, pieces, k, at, 1);
+  }
+}
+
+/** Largest of some coefficients of all pieces. */
+function largest(c: Float64Array, first: number): number {
+  let most = 0;
+  for (let k = 0; k < pieces.count; k++) for (let i = first; i < 4; i++) most = Math.max(most, Math.abs(c[terms * k + i]!));
+  return most;
+}
+
+/** Coefficients in powers of s, of as low a degree as may be. */
+function lowered(c: Float64Array, k: number, allowed: number, cap: number): number[] {
+  const o = terms * k;
+  const degree = economise(c, o, terms - 1, allowed, cap);
+  const out: number[] = [c[o]!];
+  const per = 1 / pieces.given[givenStride * k + 1]!;
+  for (let i = 1, power = per; i <= degree; i++, power *= per) out.push(c[o + i]! * power);
+  return out;
+}
+
+function written(m: MemberData, forces: Float64Array, e: number, u1: number, v2: number, scale: number): MemberLine {
+  const [ofV, ofM, ofv] = [close * largest(pieces.V, 0), close * largest(pieces.M, 0), close * largest(pieces.v, 2)];
+  const segments: Segment[] = [];
+  const flat = (x: number, at: number, u: number, v: number): Segment => ({
+    from: x, to: x, N: [forces[e + at]!], V: [forces[e + at + 1]!], M: [forces[e + at + 2]!], u: [u], v: [v],
+  }); // prettier-ignore
+  let u = u1;
+  if (loading.startJump) segments.push(flat(0, 0, u, pieces.v[0]!));
+  for (let k = 0; k < pieces.count; k++) {
+    const g = givenStride * k;
+    const from = pieces.given[g]!;
+    const l = pieces.given[g + 1]!;
+    const [n0, n1, n2] = [pieces.given[g + 2]! / scale, pieces.given[g + 3]! / scale, pieces.given[g + 4]! / scale];
+    const stretch = [u, n0 / m.EA + loading.strain, n1 / m.EA / 2, n2 / m.EA / 3] as const;
+    segments.push({
+      from,
+      to: k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length,
+      N: [n0, n1, n2],
+      V: lowered(pieces.V, k, ofV, mostForces),
+      M: lowered(pieces.M, k, ofM, mostForces),
+      u: stretch,
+      v: lowered(pieces.v, k, ofv, mostDeflection),
+    });
+    u += l * (stretch[1] + l * (stretch[2] + l * stretch[3]));
+  }
+  if (loading.endJump) segments.push(flat(m.length, 3, u, v2));
+  return { length: m.length, segments };
+}

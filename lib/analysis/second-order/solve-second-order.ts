@@ -1,0 +1,131 @@
+import type { Frame } from '@/lib/model/frame';
+import type { MemberData } from '../member-data';
+import type { Topology } from '../topology';
+import { prepare, respond, standsWithoutForces, type Work } from './equilibrium-pass';
+import { recoverSecondOrder } from './recover-second-order';
+import type { SecondOrderSpace } from './second-order-space';
+
+/** One combination, and how its members are taken. */
+export interface SecondOrderInput {
+  readonly frame: Frame;
+  readonly t: Topology;
+  readonly angles: Float64Array;
+  /** memberDataFor(frame, method). */
+  readonly data: readonly MemberData[];
+  /** By member, 1 = slack: left out, its loads act on its nodes as a simple beam's; null = none. */
+  readonly slack: Uint8Array | null;
+  /** By case, as the combination has them. */
+  readonly factors: Float64Array;
+  /** Analysed under this many times the loads; results come back divided by it. */
+  readonly loadScale: number;
+  /** Fx, Fy by node, global, N, as they act at `loadScale` times the loads; null = none. */
+  readonly notional: Float64Array | null;
+  /** First-order N at each member's start under the combination as it is, to begin with; null = from nothing. */
+  readonly guess: Float64Array | null;
+  readonly space: SecondOrderSpace;
+}
+
+export type SecondOrderResult = SecondOrderState | SecondOrderFailure;
+/** As in a `ResultState`; `outOfBalance` and `handled` as recover.ts has them. */
+export interface SecondOrderState {
+  readonly ok: true;
+  readonly displacements: Float64Array;
+  readonly reactions: Float64Array;
+  readonly endForces: Float64Array;
+  readonly outOfBalance: Float64Array;
+  readonly handled: number;
+  /** Passes until the axial forces stood still, and their last change against the largest of them. */
+  readonly iterations: number;
+  readonly change: number;
+}
+export interface SecondOrderFailure {
+  readonly ok: false;
+  /** Share of the combination's load up to which stable equilibrium was followed, 0 to 1. */
+  readonly reached: number;
+  /** unstable: past a critical load · mechanism: not held even without axial forces · not settled: axial forces went on changing. */
+  readonly why: 'unstable' | 'mechanism' | 'not settled';
+}
+
+/** Axial forces stand still when none changes by more than this share of the largest. */
+const still = 1e-10;
+/** What stiffness × movement loses by rounding counts as still too. */
+const rounding = 4e-15;
+const mostPasses = 60;
+/** The share of the load at which equilibrium is lost is closed in on to this. */
+const closeness = 1e-3;
+
+/**
+ * Second-order elastic equilibrium of one combination (README §5): members exactly under their axial forces, P-Δ and P-δ,
+ * repeated until the axial forces stand still.
+ *
+ * K(N) must be positive definite, members between their nodes too, at every load share taken, so that an equilibrium beyond
+ * a critical load is never given: where the whole load can't be reached from the first-order forces, it is put on in steps.
+ */
+export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
+  const work = prepare(input);
+  if (input.slack && !standsWithoutForces(work)) return { ok: false, reached: 0, why: 'mechanism' };
+  const { N } = input.space;
+  if (input.guess) for (let i = 0; i < N.length; i++) N[i] = input.guess[i]! * input.loadScale;
+  else N.fill(0);
+  const straight = settle(work, 1);
+  if (straight.how === 'still') return recoverSecondOrder(work, straight.change);
+  return inSteps(work);
+}
+
+/** First-order equilibrium of one combination where cases can't be summed: slack members, reduced stiffness, notional forces. */
+export function firstOrderCombination(input: SecondOrderInput): SecondOrderResult {
+  const work = prepare(input);
+  if (!standsWithoutForces(work)) return { ok: false, reached: 0, why: 'mechanism' };
+  input.space.N.fill(0);
+  if (!respond(work)) return { ok: false, reached: 0, why: 'mechanism' };
+  return recoverSecondOrder({ ...work, order: 1 }, 0);
+}
+
+interface Settled {
+  readonly how: 'still' | 'unstable' | 'moving';
+  readonly change: number;
+}
+
+/** Repeats N ← share × (answer to N) from the N at hand until it stands still. */
+function settle(work: Work, share: number): Settled {
+  const { N, answer, loadings } = work.input.space;
+  let change = Infinity;
+  for (let pass = 0; pass < mostPasses; pass++) {
+    if (!respond(work)) return { how: 'unstable', change };
+    let size = 0;
+    let moved = 0;
+    for (let i = 0; i < N.length; i++) {
+      const next = share * answer[i]!;
+      size = Math.max(size, Math.abs(next), Math.abs(next + share * loadings[i]!.endN));
+      moved = Math.max(moved, Math.abs(next - N[i]!));
+      N[i] = next;
+    }
+    if (!Number.isFinite(moved)) return { how: 'unstable', change };
+    change = size > 0 ? moved / size : 0;
+    if (moved <= still * size + rounding * share * work.handled) return { how: 'still', change };
+  }
+  return { how: 'moving', change };
+}
+
+/** The load put on in steps, each from the equilibrium before it, halved where it is too long. */
+function inSteps(work: Work): SecondOrderResult {
+  const { N } = work.input.space;
+  const kept = new Float64Array(N.length);
+  let reached = 0;
+  let why: SecondOrderFailure['why'] = 'unstable';
+  for (let step = 0.5; step >= closeness;) {
+    const share = Math.min(1, reached + step);
+    for (let i = 0; i < N.length; i++) N[i] = reached > 0 ? (kept[i]! * share) / reached : 0;
+    const { how, change } = settle(work, share);
+    if (how === 'still') {
+      if (share === 1) return recoverSecondOrder(work, change);
+      kept.set(N);
+      reached = share;
+    } else {
+      step /= 2;
+      why = how === 'unstable' ? 'unstable' : 'not settled';
+    }
+  }
+  if (reached === 0 && !standsWithoutForces(work)) why = 'mechanism';
+  return { ok: false, reached, why };
+}
