@@ -1,6 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import { standingLines } from './second-imperfections';
 
 /** A state as sheets and settings ask for it, read anew: nothing of it comes from the first analysis. */
 export interface AskedState {
@@ -26,7 +25,7 @@ export function askedStates(frame: Frame, settings: Settings): AskedState[] {
   const cases = frame.members.some((m) => m.tensionOnly)
     ? []
     : frame.cases.map(({ name }, c) => ({ ...plain, name, factors: frame.cases.map((_, i) => (i === c ? 1 : 0)) }));
-  const leans = settings.imperfections !== 'none' && standingLines(frame).length > 0;
+  const leans = settings.imperfections !== 'none';
   const combinations = frame.combinations.flatMap(({ name, purpose, terms }): AskedState[] => {
     const factors = frame.cases.map(() => 0);
     for (const { case: c, factor } of terms) factors[c]! += factor;
