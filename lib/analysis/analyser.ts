@@ -1,7 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type Settings } from '@/lib/model/settings';
 import type { Certificate, Failure, ResultState } from '@/lib/results/result';
-import { certify, outsideTolerance } from './certificate';
+import { certify, certifyStates, outsideTolerance, type SolvedState } from './certificate';
+import { combinationStates } from './combination-states';
 import { unheldPart } from './connected';
 import { bucklingSpace, criticalLoadFactor } from './critical/critical-load-factor';
 import { solveCases, type SolvedCases } from './first-order-cases';
@@ -53,25 +54,41 @@ function analyse(frame: Frame, t: Topology, options: AnalyseOptions): Analysis {
   if (refused) return { ok: false, failure: refused };
   const solved = solveCases(frame, t, settings.shearDeformation);
   if ('code' in solved) return { ok: false, failure: solved };
-  if (!isPlain(frame, settings))
-    return { ok: false, failure: { code: 'not-solved', message: 'The settings of analysis ask for what this version does not analyse.', node: null } };
-  const found = plainCombinations(frame, t, solved);
-  const certificate = certify({ frame, t, ...solved }, options.second ?? true);
-  const doubt = outsideTolerance(certificate);
+  const second = options.second ?? true;
+  const found = isPlain(frame, settings)
+    ? plainStates(frame, t, solved, second)
+    : statesAsAsked(frame, t, settings, solved, second);
+  if ('code' in found) return { ok: false, failure: found };
+  const doubt = outsideTolerance(found.certificate);
   if (doubt) return { ok: false, failure: { code: 'not-solved', message: doubt, node: null } };
-  const combinations = found.map((one) => one.state);
-  // what a tie does under one case alone says nothing about any combination
-  const cases = frame.members.some((member) => member.tensionOnly) ? [] : solved.cases;
-  return { ok: true, states: [...cases, ...combinations], certificate };
+  return { ok: true, ...found };
 }
 
-/** Combinations as sums of their cases (first order, members that only bend). */
-function plainCombinations(frame: Frame, t: Topology, solved: SolvedCases): { readonly state: ResultState }[] {
+interface Certified {
+  readonly states: ResultState[];
+  readonly certificate: Certificate;
+}
+
+/** First order, members that only bend: cases, and combinations as their sums. */
+function plainStates(frame: Frame, t: Topology, solved: SolvedCases, second: boolean): Certified {
   const space = bucklingSpace(t);
-  return frame.combinations.map((_, i) => {
+  const combinations = frame.combinations.map((_, i) => {
     const state = superpose(frame, solved.cases, i);
-    if (state.purpose !== 'strength') return { state };
-    const alpha = criticalLoadFactor(frame, t, solved.angles, solved.diagonal, state, space);
-    return { state: { ...state, criticalLoadFactor: alpha } };
+    if (state.purpose !== 'strength') return state;
+    return { ...state, criticalLoadFactor: criticalLoadFactor(frame, t, solved.angles, solved.diagonal, state, space) };
   });
+  return { states: [...solved.cases, ...combinations], certificate: certify({ frame, t, ...solved }, second) };
+}
+
+/** Whatever the settings ask for (README §6). */
+function statesAsAsked(frame: Frame, t: Topology, settings: Settings, solved: SolvedCases, second: boolean): Certified | Failure {
+  const found = combinationStates(frame, t, settings, solved);
+  if ('code' in found) return found;
+  // what a tie does under one case alone says nothing about any combination
+  const ties = frame.members.some((member) => member.tensionOnly);
+  const cases = ties ? [] : solved.cases.map((state, c): SolvedState => ({ ...solved.recovered[c]!, state }));
+  const all = [...cases, ...found.states];
+  const { diagonal, norm } = solved;
+  const certificate = certifyStates({ frame, settings, t, diagonal, norm, condition: found.condition, solved: all }, second);
+  return { states: all.map(({ state }) => state), certificate };
 }

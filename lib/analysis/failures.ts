@@ -87,6 +87,6 @@ export function tieFailure(frame: Frame, name: string, members: readonly number[
       ? `${named} never ${one ? 'settles' : 'settle'} as taut or slack`
       : why === 'passes'
         ? `${named} did not settle as taut or slack in 50 passes`
-        : `${named} ${one ? 'is' : 'are'} slack, and without ${one ? 'it' : 'them'}: ${why}`;
+        : `${named} ${one ? 'is' : 'are'} slack, and without ${one ? 'it' : 'them'} ${why}`;
   return { code: 'not-solved', node: null, message: `${name}: ${reason}` };
 }

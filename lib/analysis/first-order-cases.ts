@@ -6,7 +6,7 @@ import { conditionEstimate, scaledNorm } from './condition';
 import { factor } from './factor';
 import { freeOrHardlyHeld, lowDigits } from './failures';
 import { loadVectors, type LoadVectors } from './load-vectors';
-import { nullVector } from './mechanism';
+import { describeMovement, nullVector } from './mechanism';
 import { memberDataFor, type MemberData } from './member-data';
 import { recover, type Recovered } from './recover';
 import { solve } from './solve';
@@ -85,5 +85,6 @@ export function movementWithout(frame: Frame, t: Topology, solved: SolvedCases, 
   // judged against K with all members: a direction that only they held has nothing of its own left
   const unheld = factor(K, t, solved.diagonal, inner, new Float64Array(3 * t.size), pivotTolerance);
   if (unheld < 0) return null;
-  return freeOrHardlyHeld(frame, t, solved.angles, nullVector(K, t, inner, unheld)).message;
+  const { node, how, remedy } = describeMovement(frame, t, solved.angles, nullVector(K, t, inner, unheld));
+  return `node ${node} can freely ${how}. ${remedy}.`;
 }

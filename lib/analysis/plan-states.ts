@@ -1,6 +1,5 @@
 import type { Frame, Purpose } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import { columnsOf } from './imperfections/columns';
 
 /** One state that a combination is analysed as. */
 export interface PlannedState {
@@ -21,11 +20,12 @@ export const asdScale = 1.6;
 
 /**
  * The states of a frame's combinations, in order: one each, or two for a strength combination with imperfections.
- * Imperfections and reduced stiffness are for strength; a frame without columns has no imperfections.
+ * Imperfections and reduced stiffness are for strength. A frame without columns has both directions too, without forces, so
+ * that the states of a batch have the same names.
  */
 export function planStates(frame: Frame, settings: Settings): readonly PlannedState[] {
   const order = settings.analysis === 'second order' ? 2 : 1;
-  const leans = settings.imperfections !== 'none' && columnsOf(frame).length > 0;
+  const leans = settings.imperfections !== 'none';
   const asd = order === 2 && settings.strengthCheck === 'AISC 360-22 ASD';
   return frame.combinations.flatMap(({ name, purpose }, combination): PlannedState[] => {
     const strength = purpose === 'strength';

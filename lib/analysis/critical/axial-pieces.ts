@@ -1,6 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Polynomial, ResultState } from '@/lib/results/result';
-import { memberData } from '../member-data';
+import { memberDataFor, type MemberData } from '../member-data';
 import { stretchesOf } from '../member-stretches';
 import { evaluate } from '../polynomial';
 
@@ -28,9 +28,10 @@ interface Stretch {
   readonly N: Polynomial;
 }
 
-/** Axial forces along the members of a state, exactly. */
+/** Axial forces along the members of a state, exactly; slack members have none. */
 export function axialForces(frame: Frame, state: ResultState): AxialForces {
-  const data = memberData(frame);
+  const data = memberDataFor(frame, state.method);
+  const slack = state.method?.slack ?? [];
   let largest = 0;
   let stiffest = 0;
   for (let i = 0; i < data.length; i++) {
@@ -41,7 +42,9 @@ export function axialForces(frame: Frame, state: ResultState): AxialForces {
   let moved = 0;
   for (let i = 0; i < state.displacements.length; i++)
     if (i % 3 !== 2) moved = Math.max(moved, Math.abs(state.displacements[i]!));
-  const stretches = data.map((m, i) => stretchesAlong(frame, state, i, m.length));
+  const stretches = data.map((m, i) =>
+    slack.includes(i) ? [{ length: m.length, N: [0] }] : stretchesAlong(frame, state, i, m.length),
+  );
   return { stretches, floor: Math.max(nothing * largest, rounding * stiffest * moved) };
 }
 
@@ -76,8 +79,7 @@ function stretchesAlong(frame: Frame, state: ResultState, member: number, length
  *
  * @param lambda about what the critical load factor is; 0 = not known yet: as few pieces as may be
  */
-export function axialPieces(frame: Frame, { stretches, floor }: AxialForces, lambda: number): AxialPiece[][] {
-  const data = memberData(frame);
+export function axialPieces(data: readonly MemberData[], { stretches, floor }: AxialForces, lambda: number): AxialPiece[][] {
   return stretches.map((along, i) => {
     const { length, EI } = data[i]!;
     const [first] = along;
@@ -113,9 +115,20 @@ function even(
   const compressed = Math.min(first, last) < -floor;
   const varies = Math.abs(last - first) > floor;
   const whole = piecesOf(compressed, varies ? Math.abs(last - first) / most : 0);
-  const count = Math.max(1, Math.ceil((Math.max(Math.min(2, whole), Math.ceil(whole * nearness)) * length) / member));
+  cut(
+    length,
+    N,
+    Math.max(1, Math.ceil((Math.max(Math.min(2, whole), Math.ceil(whole * nearness)) * length) / member)),
+    floor,
+    pieces,
+  );
+}
+
+/** Pieces of one length with the mean and the slope of N in each. */
+function cut(length: number, N: Polynomial, count: number, floor: number, pieces: AxialPiece[]): void {
+  const varies = Math.abs(evaluate(N, length) - N[0]!) > floor;
   const l = length / count;
-  let a = first;
+  let a = N[0]!;
   for (let i = 0; i < count; i++) {
     const s = i * l;
     const b = evaluate(N, s + l);
@@ -130,4 +143,13 @@ function piecesOf(compressed: boolean, variation: number): number {
   if (variation === 0) return compressed ? 2 : 1;
   if (variation < 0.02) return 2;
   return variation < 0.15 ? 4 : 12;
+}
+
+/** A member in about `count` even pieces, one at least between places where its axial force jumps. */
+export function evenPieces({ stretches, floor }: AxialForces, member: number, count: number): AxialPiece[] {
+  const along = stretches[member]!;
+  const L = along.reduce((sum, stretch) => sum + stretch.length, 0);
+  const pieces: AxialPiece[] = [];
+  for (const { N, length } of along) if (length > 0) cut(length, N, Math.max(1, Math.round((count * length) / L)), floor, pieces);
+  return pieces;
 }

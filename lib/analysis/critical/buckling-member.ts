@@ -1,7 +1,7 @@
 import type { MemberStiffness } from '../assemble';
 import type { MemberData } from '../member-data';
 import type { AxialPiece } from './axial-pieces';
-import { stabilityFunctions, type StabilityFunctions } from './stability-functions';
+import { shearLoss, shearStabilityFunctions, stabilityFunctions, type StabilityFunctions } from './stability-functions';
 
 /**
  * How the unknowns inside members stand at a load factor: pivots below zero and clamped pieces already buckled (together
@@ -39,11 +39,11 @@ export function bucklingMember(
   out: MemberStiffness,
   count: InnerCount,
 ): void {
-  let passed = pieceStiffness(m.EI, pieces[0]!, lambda, piece);
+  let passed = pieceStiffness(m, pieces[0]!, lambda, piece);
   copyStiffness(piece, out);
   count.negative += passed;
   for (let i = 1; i < pieces.length; i++) {
-    if (pieces[i] !== pieces[i - 1]) passed = pieceStiffness(m.EI, pieces[i]!, lambda, piece);
+    if (pieces[i] !== pieces[i - 1]) passed = pieceStiffness(m, pieces[i]!, lambda, piece);
     count.negative += passed;
     joinPiece(out, piece, count);
   }
@@ -65,11 +65,14 @@ function copyStiffness(from: MemberStiffness, to: MemberStiffness): void {
  * Stability functions for the mean force; its linear part by the consistent geometric stiffness of cubic shapes.
  * @returns critical loads of the clamped piece passed
  */
-function pieceStiffness(EI: number, p: AxialPiece, lambda: number, out: MemberStiffness): number {
+function pieceStiffness({ EI, GAv }: MemberData, p: AxialPiece, lambda: number, out: MemberStiffness): number {
   const l = p.length;
   const P = -lambda * p.N;
   const x = (P * l * l) / EI;
-  const { s, sc } = stabilityFunctions(x, functions);
+  const shear = GAv === Infinity ? 0 : (12 * EI) / (GAv * l * l);
+  if (shear === 0) stabilityFunctions(x, functions);
+  else shearStabilityFunctions(x, shear, functions);
+  const { s, sc } = functions;
   const a = (s * EI) / l;
   const b = (sc * EI) / l;
   const tilt = lambda * p.slope * l;
@@ -80,7 +83,8 @@ function pieceStiffness(EI: number, p: AxialPiece, lambda: number, out: MemberSt
   out.S12 = b;
   out.S22 = a + (tilt * l) / 30;
   // clamped buckling loads passed = pinned ones passed − negative eigenvalues s ± sc of the end rotations
-  return x > 9 ? Math.floor(Math.sqrt(x) / Math.PI) - (s + sc < 0 ? 1 : 0) - (s - sc < 0 ? 1 : 0) : 0;
+  const y = shear === 0 ? x : x / shearLoss(x, shear);
+  return y > 9 ? Math.floor(Math.sqrt(y) / Math.PI) - (s + sc < 0 ? 1 : 0) - (s - sc < 0 ? 1 : 0) : 0;
 }
 
 /** Joins piece B to the end of A, eliminating v and θ between them; the result stands in A. */

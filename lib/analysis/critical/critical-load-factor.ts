@@ -2,7 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { addMember, addSupports, emptyMemberStiffness } from '../assemble';
 import { factor } from '../factor';
-import { memberData } from '../member-data';
+import { memberDataFor, type MemberData } from '../member-data';
 import type { Topology } from '../topology';
 import { axialForces, axialPieces, type AxialPiece } from './axial-pieces';
 import { bucklingMember, pass, type InnerCount } from './buckling-member';
@@ -34,6 +34,7 @@ const roughly = 1e-3;
  * first is then enclosed and closed in upon by the determinant, f(λ) = det K(λ)/det K(0).
  *
  * @param diagonal K's own diagonal without load, 3 a position
+ * @param state of the combination to first order; its slack members are left out, its members shear if they do there
  */
 export function criticalLoadFactor(
   frame: Frame,
@@ -44,16 +45,18 @@ export function criticalLoadFactor(
   space: BucklingSpace,
 ): number | null {
   const forces = axialForces(frame, state);
-  const few = axialPieces(frame, forces, 0);
-  const { cap, guess } = startingPoint(frame, few);
+  const data = memberDataFor(frame, state.method);
+  const few = axialPieces(data, forces, 0);
+  const { cap, guess } = startingPoint(data, few);
   if (cap === Infinity) return null;
+  const slack = state.method?.slack ?? [];
   const at = (lambda: number, pieces: readonly (readonly AxialPiece[])[]): Trial =>
-    trial(frame, t, angles, diagonal, pieces, lambda, space);
+    trial({ frame, t, angles, diagonal, data, slack }, pieces, lambda, space);
   const coarse = signed((lambda) => at(lambda, few), at(0, few).logSize);
   const rough = firstEnclosed(coarse, guess, cap);
   if (rough === null) return null;
   const near = enclosed(coarse, rough, roughly);
-  const pieces = axialPieces(frame, forces, (near.a + near.b) / 2);
+  const pieces = axialPieces(data, forces, (near.a + near.b) / 2);
   if (pieces.every((one, i) => one.length === few[i]!.length)) return middle(enclosed(coarse, near, closeness));
   const fine = signed((lambda) => at(lambda, pieces), at((near.a + near.b) / 2, pieces).logSize);
   const around = enclosedAround(fine, (near.a + near.b) / 2, cap);
@@ -119,17 +122,29 @@ function enclosedAround(f: Signed, near: number, cap: number): Enclosure | null 
 const middle = ({ a, b, fa, fb }: Enclosure): number => (Math.abs(fa) < Math.abs(fb) ? a : b);
 
 /** λ above which some piece has buckled between held ends, and a first guess from the members' Euler loads. */
-function startingPoint(frame: Frame, pieces: readonly (readonly AxialPiece[])[]): { cap: number; guess: number } {
+function startingPoint(data: readonly MemberData[], pieces: readonly (readonly AxialPiece[])[]): { cap: number; guess: number } {
   let cap = Infinity;
   let euler = Infinity;
-  memberData(frame).forEach((m, i) => {
+  data.forEach((m, i) => {
     for (const piece of pieces[i]!) {
       if (!(piece.N < 0)) continue;
-      cap = Math.min(cap, (4 * Math.PI ** 2 * m.EI) / (-piece.N * piece.length ** 2));
-      euler = Math.min(euler, (Math.PI ** 2 * m.EI) / (-piece.N * m.length ** 2));
+      // shear takes a critical load P to P/(1 + P/GAv)
+      const sheared = (P: number): number => (m.GAv === Infinity ? P : P / (1 - (P * piece.N) / m.GAv));
+      cap = Math.min(cap, sheared((4 * Math.PI ** 2 * m.EI) / (-piece.N * piece.length ** 2)));
+      euler = Math.min(euler, sheared((Math.PI ** 2 * m.EI) / (-piece.N * m.length ** 2)));
     }
   });
   return { cap, guess: Math.min(cap, 0.25 * euler) };
+}
+
+/** The frame without load. */
+interface Buckling {
+  readonly frame: Frame;
+  readonly t: Topology;
+  readonly angles: Float64Array;
+  readonly diagonal: Float64Array;
+  readonly data: readonly MemberData[];
+  readonly slack: readonly number[];
 }
 
 interface Trial {
@@ -139,20 +154,17 @@ interface Trial {
 
 /** Number of critical loads below λ, and ln|det K(λ)| with the unknowns inside members. */
 function trial(
-  frame: Frame,
-  t: Topology,
-  angles: Float64Array,
-  diagonal: Float64Array,
+  { frame, t, angles, diagonal, data, slack }: Buckling,
   pieces: readonly (readonly AxialPiece[])[],
   lambda: number,
   space: BucklingSpace,
 ): Trial {
   const { K, inner, pivots } = space;
-  const data = memberData(frame);
   const count: InnerCount = { negative: 0, logSize: 0, size: 1 };
   const k = emptyMemberStiffness();
   K.fill(0);
   for (let i = 0; i < data.length; i++) {
+    if (slack.includes(i)) continue;
     bucklingMember(data[i]!, pieces[i]!, lambda, k, count);
     addMember(K, t, data[i]!, k, angles);
   }

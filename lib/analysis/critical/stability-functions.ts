@@ -45,3 +45,53 @@ export function stabilityFunctions(x: number, out: StabilityFunctions): Stabilit
   }
   return out;
 }
+
+/** (2 − 2cos φ − φ sin φ)/φ⁴ in φ²: its own series near φ = 0. */
+const seriesD = [1 / 12, -1 / 180, 1 / 6720, -1 / 453600, 1 / 47900160] as const;
+
+/**
+ * The same for a member that shears, the shear force square to the deflected axis (Engesser 1891): φ² = x/β, β = 1 − P/GAv,
+ * s = φ(sin φ − βφ cos φ)/D, sc = φ(βφ − sin φ)/D, D = 2 − 2cos φ − βφ sin φ; without axial force s = (4 + Φ)/(1 + Φ),
+ * sc = (2 − Φ)/(1 + Φ), Φ = 12EI/(GAv L²). From EI ψ″ + Pψ/β = Q/β and v′ = (ψ − Q/GAv)/β with ends that do not move apart.
+ *
+ * @param x P L²/EI   @param shear Φ
+ */
+export function shearStabilityFunctions(x: number, shear: number, out: StabilityFunctions): StabilityFunctions {
+  const beta = shearLoss(x, shear);
+  const y = x / beta;
+  stabilityFunctions(y, out);
+  // all divided by φ⁴, where nothing cancels near φ = 0
+  const phi = Math.sqrt(Math.abs(y));
+  const less = (beta * shear) / 12;
+  let d = 0;
+  let sinc: number;
+  let cos: number;
+  if (Math.abs(y) < nearZero) {
+    for (let i = 4; i >= 0; i--) d = d * y + seriesD[i]!;
+    sinc = 1 - (y / 6) * (1 - (y / 20) * (1 - (y / 42) * (1 - y / 72)));
+    cos = 1 - (y / 2) * (1 - (y / 12) * (1 - (y / 30) * (1 - (y / 56) * (1 - y / 90))));
+  } else if (y > 0) {
+    cos = Math.cos(phi);
+    sinc = Math.sin(phi) / phi;
+    d = (2 - 2 * cos - y * sinc) / (y * y);
+  } else {
+    // all by cosh φ, which divides out
+    const sech = 1 / Math.cosh(phi);
+    cos = 1;
+    sinc = Math.tanh(phi) / phi;
+    d = (2 * sech - 2 - y * sinc) / (y * y);
+    const divisor = d + less * sinc;
+    out.s = (out.s * d + less) / divisor;
+    out.sc = (out.sc * d - less * sech) / divisor;
+    return out;
+  }
+  const divisor = d + less * sinc;
+  out.s = (out.s * d + less * cos) / divisor;
+  out.sc = (out.sc * d - less) / divisor;
+  return out;
+}
+
+/** β = 1 − P/GAv; kept above nought, beyond which the member has long buckled. @param x P L²/EI  @param shear Φ */
+export function shearLoss(x: number, shear: number): number {
+  return Math.max(1e-6, 1 - (x * shear) / 12);
+}

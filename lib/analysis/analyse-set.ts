@@ -1,0 +1,200 @@
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import type { ResultState, StateMethod } from '@/lib/results/result';
+import type { SolvedState } from './certificate';
+import { criticalLoadFactor, type BucklingSpace } from './critical/critical-load-factor';
+import { movementWithout, type SolvedCases } from './first-order-cases';
+import type { StateTrouble } from './failures';
+import type { ImperfectionForces } from './imperfections/imperfection-forces';
+import { memberDataFor } from './member-data';
+import { strengthScale, type PlannedState } from './plan-states';
+import type { SecondOrderSpace } from './second-order/second-order-space';
+import { firstOrderCombination, solveSecondOrder } from './second-order/solve-second-order';
+import { firstReduction, reduce, shareOf, squashLoads } from './stiffness-reduction/reduced-stiffness';
+import { factorsOf, superpose } from './superpose';
+import type { Topology } from './topology';
+
+/** What all states of one frame are analysed with. */
+export interface SetJob {
+  readonly frame: Frame;
+  readonly t: Topology;
+  readonly settings: Settings;
+  readonly solved: SolvedCases;
+  readonly ties: readonly number[];
+  readonly space: SecondOrderSpace;
+  readonly buckling: BucklingSpace;
+  readonly forces: ImperfectionForces | null;
+  /** First-order states of the combination at hand, by its slack members. */
+  readonly firsts: Map<string, FirstOrder>;
+  reductions: { readonly squash: Float64Array; readonly general: Float64Array } | null;
+}
+
+/** A combination to first order without imperfections, stiffness as it is: where N and α_cr come from. */
+interface FirstOrder extends SolvedState {
+  alpha: number | null | undefined;
+}
+
+export type SetResult = (SolvedState & { readonly ok: true }) | { readonly ok: false; readonly trouble: StateTrouble };
+
+/** Changes of a stiffness below this share are none; and how often it may change. */
+const settled = 1e-9;
+const mostPasses = 50;
+
+/** One state with one set of slack members. README §6. */
+export function analyseSet(job: SetJob, planned: PlannedState, slack: readonly number[]): SetResult {
+  const { frame } = job;
+  const first = firstOrder(job, planned.combination, slack);
+  if (!first) return { ok: false, trouble: { kind: 'free', movement: withoutThem(job, slack) } };
+  const notional = planned.imperfection && job.forces ? leaning(job.forces, first.state, planned) : null;
+  const plain = planned.order === 1 && !notional && !planned.reduced && !planned.imperfection;
+  const found = plain ? { ok: true as const, ...first, alpha: undefined } : solved(job, planned, slack, first, notional);
+  if (!found.ok) return found;
+  const state = {
+    ...found.state,
+    name: planned.name,
+    criticalLoadFactor: planned.purpose === 'strength' ? alphaOf(job, first) : null,
+  };
+  return { ok: true, state, outOfBalance: found.outOfBalance, handled: found.handled };
+}
+
+/** The forces of the imperfections, the way that the state leans. */
+function leaning(forces: ImperfectionForces, first: ResultState, planned: PlannedState): Float64Array {
+  const towardsRight = forces(first.endForces, first.factors, planned.loadScale);
+  if (planned.imperfection === 'left') for (let i = 0; i < towardsRight.length; i++) towardsRight[i] = 0 - towardsRight[i]!;
+  return towardsRight;
+}
+
+/** Equilibrium with the stiffness that goes with its own forces. */
+function solved(
+  job: SetJob,
+  planned: PlannedState,
+  slack: readonly number[],
+  first: FirstOrder,
+  notional: Float64Array | null,
+): SetResult {
+  const { frame, t, space, settings } = job;
+  const factors = first.state.factors;
+  const guess = Float64Array.from(frame.members, (_, i) => first.state.endForces[6 * i]!);
+  const analyse = planned.order === 2 ? solveSecondOrder : firstOrderCombination;
+  let stiffness = planned.reduced ? reductions(job).general : null;
+  let iterations = 0;
+  for (let pass = 0; pass < mostPasses; pass++) {
+    const method = { shearDeformation: settings.shearDeformation, stiffness };
+    const data = memberDataFor(frame, method);
+    const { loadScale } = planned;
+    const input = {
+      frame,
+      t,
+      angles: job.solved.angles,
+      data,
+      slack: flags(frame, slack),
+      factors,
+      loadScale,
+      notional,
+      guess,
+      space,
+    };
+    const result = analyse(input);
+    if (!result.ok) return { ok: false, trouble: troubleOf(job, first, slack, result) };
+    iterations += result.iterations;
+    const next = stiffness && softened(job, stiffness, result.endForces);
+    if (next && 'member' in next) return { ok: false, trouble: { kind: 'squashed', ...next } };
+    if (next) {
+      stiffness = next;
+      for (let i = 0; i < guess.length; i++) guess[i] = result.endForces[6 * i]!;
+      continue;
+    }
+    const { change, displacements, reactions, endForces, outOfBalance, handled } = result;
+    const whole: StateMethod = {
+      ...method, imperfection: planned.imperfection, notional, loadScale, slack, iterations, change,
+    }; // prettier-ignore
+    const state: ResultState = { ...first.state, order: planned.order, method: whole, displacements, reactions, endForces };
+    return { ok: true, state, outOfBalance, handled };
+  }
+  return { ok: false, trouble: { kind: 'not settled', reached: 1 } };
+}
+
+/**
+ * Stiffness factors that go with these forces; null where they are the ones used, or the member (index) that is pressed to
+ * its squash load.
+ */
+function softened(
+  job: SetJob,
+  before: Float64Array,
+  endForces: Float64Array,
+): Float64Array | { readonly member: number; readonly share: number } | null {
+  const { squash } = reductions(job);
+  const alpha = strengthScale(job.settings);
+  // arrays are not changed once members have been made with them
+  const next = before.slice();
+  if (!(reduce(endForces, squash, alpha, next) > settled)) return null;
+  for (let i = 0; i < squash.length; i++)
+    if (!(next[2 * i + 1]! > 0)) return { member: i, share: shareOf(endForces, i, alpha, squash[i]!) };
+  return next;
+}
+
+function reductions(job: SetJob): NonNullable<SetJob['reductions']> {
+  return (job.reductions ??= { squash: squashLoads(job.frame), general: firstReduction(job.frame) });
+}
+
+function flags(frame: Frame, slack: readonly number[]): Uint8Array | null {
+  if (slack.length === 0) return null;
+  const out = new Uint8Array(frame.members.length);
+  for (const member of slack) out[member] = 1;
+  return out;
+}
+
+/** A combination to first order: the sum of its cases, or with its slack members left out; null where it can move freely. */
+function firstOrder(job: SetJob, combination: number, slack: readonly number[]): FirstOrder | null {
+  const key = slack.join();
+  const before = job.firsts.get(key);
+  if (before) return before;
+  const { frame, solved } = job;
+  const found = slack.length === 0 ? sum(frame, solved, combination) : without(job, combination, slack);
+  if (found) job.firsts.set(key, found);
+  return found;
+}
+
+function sum(frame: Frame, solved: SolvedCases, combination: number): FirstOrder {
+  const state = superpose(frame, solved.cases, combination);
+  return { state, outOfBalance: null, handled: 0, alpha: undefined };
+}
+
+function without(job: SetJob, combination: number, slack: readonly number[]): FirstOrder | null {
+  const { frame, t, solved, space, settings } = job;
+  const { name, purpose } = frame.combinations[combination]!;
+  const factors = factorsOf(frame, combination);
+  const input = { frame, t, angles: solved.angles, data: solved.data, slack: flags(frame, slack), factors, loadScale: 1, notional: null, guess: null, space }; // prettier-ignore
+  const result = firstOrderCombination(input);
+  if (!result.ok) return null;
+  const { displacements, reactions, endForces, outOfBalance, handled } = result;
+  const method: StateMethod = {
+    shearDeformation: settings.shearDeformation, imperfection: null, notional: null, loadScale: 1, stiffness: null, slack,
+    iterations: 1, change: 0,
+  }; // prettier-ignore
+  const rest = { kind: 'combination' as const, order: 1 as const, criticalLoadFactor: null };
+  const state: ResultState = { name, purpose, factors, method, ...rest, displacements, reactions, endForces };
+  return { state, outOfBalance, handled, alpha: undefined };
+}
+
+/** α_cr of the combination with its slack members left out; the same for both directions of its imperfections. */
+function alphaOf({ frame, t, solved, buckling }: SetJob, first: FirstOrder): number | null {
+  if (first.alpha === undefined)
+    first.alpha = criticalLoadFactor(frame, t, solved.angles, solved.diagonal, first.state, buckling);
+  return first.alpha;
+}
+
+function troubleOf(
+  job: SetJob,
+  first: FirstOrder,
+  slack: readonly number[],
+  { why, reached }: { readonly why: 'unstable' | 'mechanism' | 'not settled'; readonly reached: number },
+): StateTrouble {
+  if (why === 'mechanism') return { kind: 'free', movement: withoutThem(job, slack) };
+  if (why === 'not settled') return { kind: why, reached };
+  return { kind: why, reached, criticalLoadFactor: alphaOf(job, first) };
+}
+
+function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): string {
+  return movementWithout(frame, t, solved, slack) ?? 'the frame can move freely.';
+}
