@@ -14,6 +14,7 @@ import { sampleLine } from '@/lib/analysis/sample-line';
 import type { Frame, Joint, MemberLoad, Restraint } from '@/lib/model/frame';
 import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { describeState } from './describe-state';
 
 /** Standard gravity, m/s² (ISO 80000-3; sheets §2). */
 const g = 9.80665;
@@ -71,7 +72,7 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
     name: state.name,
     kind: state.kind,
     purpose: state.purpose,
-    description: state.kind === 'case' ? null : describe(frame, state),
+    description: state.kind === 'case' ? null : describeState(frame, state),
     loads: [
       ...frame.cases.flatMap((one, index) => loadsOf(frame, index, one.name, state.factors[index] ?? 0)),
       ...notionalForces(frame, state),
@@ -93,7 +94,7 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
   };
 }
 
-function methodOf({ order, criticalLoadFactor, method }: ResultState): DrawingMethod {
+export function methodOf({ order, criticalLoadFactor, method }: ResultState): DrawingMethod {
   return {
     order,
     criticalLoadFactor,
@@ -107,7 +108,7 @@ function methodOf({ order, criticalLoadFactor, method }: ResultState): DrawingMe
 }
 
 /** Load cases that have no result of their own where others have one. */
-function notApplicable(frame: Frame, states: readonly ResultState[]): string[] {
+export function notApplicable(frame: Frame, states: readonly ResultState[]): string[] {
   const own = new Set(states.filter((state) => state.kind === 'case').map((state) => state.name));
   return states.length === 0 ? [] : frame.cases.flatMap(({ name }) => (own.has(name) ? [] : [name]));
 }
@@ -138,7 +139,7 @@ function drawingLine(frame: Frame, state: ResultState, member: number): DrawingL
 }
 
 /** The combination of the frame's governing check, else the first strength combination, else the first result. */
-function governingState(evaluation: FrameEvaluation | null): ResultState | null {
+export function governingState(evaluation: FrameEvaluation | null): ResultState | null {
   if (evaluation === null) return null;
   const { states, governing: worst } = evaluation;
   return (
@@ -221,21 +222,6 @@ function memberLoad(load: MemberLoad, k: number, name: string): DrawingLoad {
     case 'temperature':
       return { case: name, kind: load.kind, member, dT: load.dT_K * k, dTAcross: load.dTAcross_K * k };
   }
-}
-
-/** "1.35 dead + 1.5 snow" */
-function describe(frame: Frame, state: ResultState): string {
-  const terms = frame.cases.flatMap((one, index) => {
-    const factor = state.factors[index] ?? 0;
-    return factor === 0 ? [] : [{ factor, name: one.name }];
-  });
-  return terms
-    .map(({ factor, name }, index) => {
-      const size = Number(Math.abs(factor).toPrecision(6));
-      const sign = factor < 0 ? '−' : index === 0 ? '' : '+';
-      return `${sign}${index === 0 ? '' : ' '}${size === 1 ? '' : `${size} `}${name}`;
-    })
-    .join(' ');
 }
 
 const joint = (one: Joint): DrawingJoint => (typeof one === 'number' ? 'spring' : one);

@@ -1,15 +1,18 @@
 import 'server-only';
+import type { CertificateData } from '@/components/certificate/certificate';
 import type { DrawingData } from '@/components/drawing/drawing-data';
 import type { WorkingLine } from '@/lib/checks/working-parts';
 import { db } from '@/db/client';
 import { findFrame } from '@/db/queries/frames';
 import type { RevisionRecord } from '@/db/queries/revisions';
+import { certificateLines } from '@/lib/analysis/certificate-lines';
 import { notFound } from '@/lib/api/error';
 import { frameNumberInput } from '@/lib/api/inputs';
 import type { MemberGoverning } from '@/lib/results/member-results';
 import { governingIndex } from '@/lib/results/verdict';
 import type { Certificate, Check, Verdict } from '@/lib/results/result';
 import { drawingData } from './drawing-data';
+import { settingLines } from './setting-lines';
 import { workingLines } from './working-lines';
 
 /** A check as the frame page lists it, with its calculation. */
@@ -50,6 +53,8 @@ export interface FrameDetail {
   readonly assumptions: readonly string[];
   readonly mass: number | null;
   readonly certificate: Certificate | null;
+  /** The same in words, with engine, hashes and settings. */
+  readonly vouched: CertificateData;
   readonly units: 'metric' | 'us';
   readonly nearLimit: number;
   /** By member of the drawing: its governing check; [] where it was not solved. */
@@ -93,6 +98,13 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
     assumptions: evaluation?.assumptions ?? [],
     mass: evaluation?.mass ?? null,
     certificate: evaluation?.certificate ?? null,
+    vouched: {
+      lines: evaluation?.certificate ? certificateLines(evaluation.certificate) : [],
+      engine: evaluation === null ? null : stored.engine,
+      inputHash: revision.input?.sha256 ?? null,
+      frameHash: stored.hash,
+      settings: settingLines(revision),
+    },
     units,
     nearLimit,
     members: stored.members,

@@ -16,7 +16,10 @@ export function ResultFacts({ data, result }: ResultFactsProps) {
 }
 
 /** "second order, 5 passes, last change 3.1 · 10⁻¹¹", "imperfection to the right →", "slack: BD, CE" … */
-export function methodWords({ members, notApplicable }: DrawingData, { kind, method, slack, name }: DrawingResult): string[] {
+export function methodWords(
+  { members, notApplicable }: { readonly members: readonly { readonly id: string }[]; readonly notApplicable: readonly string[] },
+  { kind, method, slack, name }: Pick<DrawingResult, 'kind' | 'method' | 'slack' | 'name'>,
+): string[] {
   const { order, iterations, change, imperfection, shearDeformation, reducedStiffness, loadScale } = method;
   const passes = iterations === 1 ? 'settled in one pass' : `settled in ${iterations} passes, last change ${powerText(change)}`;
   const words = [

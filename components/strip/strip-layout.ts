@@ -30,8 +30,9 @@ export function layOutStrip(count: number, width: number): StripLayout {
   const gaps = Math.ceil(columns / 10) - 1;
   const pitch = (width - left - right - gaps * tens) / columns;
   const rowPitch = count <= 300 ? (columns === 50 ? 61 : 46) : Math.max(24, Math.min(61, Math.floor(500 / rows)));
-  const groups = rowPitch >= 40;
-  const gap = groups ? 11 : 4;
+  const groups = rowPitch >= 44;
+  // a name's own height and a little air above and below it
+  const gap = groups ? 14 : 4;
   return {
     columns, width, left, right, pitch, cell: pitch * 0.78, gap, rowPitch, groups, height: rowPitch - gap - below,
   }; // prettier-ignore

@@ -40,8 +40,8 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
       <text aria-hidden="true" className="strip-number" x={start - 6} y={foot} textAnchor="end">
         {from + 1}
       </text>
-      {(layout.groups ? groupStarts(frames, props.groupBefore) : []).map(({ column, name }) => (
-        <text key={column} aria-hidden="true" className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 1.5}>
+      {(layout.groups ? groupStarts(frames, props.groupBefore, layout) : []).map(({ column, name }) => (
+        <text key={column} aria-hidden="true" className="strip-group" x={columnX(layout, column)} y={foot - layout.height - 3}>
           {name}
         </text>
       ))}
@@ -89,16 +89,25 @@ function label(frame: StripFrame, nearLimit: number): string {
   return `${frame.id}, ${frame.verdict ?? 'waiting'}${ratio}`;
 }
 
-/** Where a group begins; a name is left out where the one before would run into it. */
-function groupStarts(frames: readonly StripFrame[], before: string | null): { column: number; name: string }[] {
+/** Width of a group's name in the condensed cut, and what keeps it from the next, px. */
+const nameWidth = (name: string): number => name.length * 5.6 + 12;
+
+/** Where a group begins; a name is left out where the one before would run into it, or it into the row's tallies. */
+function groupStarts(
+  frames: readonly StripFrame[],
+  before: string | null,
+  layout: StripLayout,
+): { column: number; name: string }[] {
   const starts: { column: number; name: string }[] = [];
   let last = before;
   let free = 0;
   frames.forEach((frame, column) => {
     const group = frame.group ?? null;
-    if (group !== null && (group !== last || column === 0) && column >= free) {
+    const x = columnX(layout, column);
+    const end = group === null ? x : x + nameWidth(group);
+    if (group !== null && (group !== last || column === 0) && x >= free && end <= layout.width - layout.right + 12) {
       starts.push({ column, name: group });
-      free = column + Math.ceil((group.length * 6 + 8) / 15);
+      free = end;
     }
     last = group;
   });

@@ -91,6 +91,19 @@ describe('the strip', () => {
     expect(screen.getByTestId('strip-readout')).toHaveTextContent('4 of 5F4');
   });
 
+  it('keeps names of groups apart and out of the tallies, however short the groups are', () => {
+    const frames = Array.from({ length: 50 }, (_, i) => frame(i, 0.5, { group: `Depot ${Math.floor(i / 3)}` }));
+    render(<Strip frames={frames} nearLimit={0.9} />);
+    const names = [...document.querySelectorAll('.strip-group')].map((text) => ({
+      from: Number(text.getAttribute('x')),
+      // a condensed letter of this size is some 5 px wide
+      to: Number(text.getAttribute('x')) + (text.textContent?.length ?? 0) * 5,
+    }));
+    expect(names.length).toBeGreaterThan(5);
+    names.slice(1).forEach(({ from }, i) => expect(from).toBeGreaterThan(names[i]!.to + 6));
+    expect(names.at(-1)!.to).toBeLessThan(884 - 50);
+  });
+
   it('tallies each row and writes a group where it begins', () => {
     const { container } = strip(
       Array.from({ length: 60 }, (_, i) => frame(i, i < 3 ? 1.1 : 0.5, { group: i < 20 ? 'D01' : 'D02' })),

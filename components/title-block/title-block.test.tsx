@@ -75,7 +75,7 @@ describe('numbered sheets and the walk through frames', () => {
 
   it('go to the next and previous frame by j and k', async () => {
     const user = userEvent.setup();
-    render(<FrameWalk previous={null} next={{ id: 'D05-15', href: '/frames/95' }} list="in 19 frames over" />);
+    render(<FrameWalk here="/frames/90" previous={null} next={{ id: 'D05-15', href: '/frames/95' }} list="in 19 frames over" />);
     await user.keyboard('kj');
     expect(push.mock.calls).toEqual([['/frames/95']]);
     expect(screen.getByText(/first/)).toBeInTheDocument();

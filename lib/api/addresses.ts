@@ -12,13 +12,26 @@ export const pages = {
   project: (project: number) => `/projects/${project}`,
   bring: (project: number) => `/projects/${project}/bring`,
   revision: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}`,
-  sheet: (batch: number, letter: string, sheet: 'read' | 'run' | 'glance' | TableName) =>
+  sheet: (batch: number, letter: string, sheet: 'read' | 'settings' | 'run' | 'glance' | TableName) =>
     `/batches/${batch}/${e(letter)}/${sheet}`,
   next: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/bring`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>
     `/batches/${batch}/${e(letter)}/frames/${number}${list === undefined ? '' : listToSearch(list)}`,
+  /** The numbers behind a member of it in one result; `search` is kept of the frame's page, so that one comes back to its list. */
+  numbers: (
+    batch: number,
+    letter: string,
+    number: number,
+    chosen: { readonly of?: string; readonly show?: string; readonly in?: string },
+    search = '',
+  ) => {
+    const params = new URLSearchParams(search);
+    for (const [key, value] of Object.entries(chosen)) params.set(key, value);
+    const text = params.toString();
+    return `/batches/${batch}/${e(letter)}/frames/${number}/numbers${text === '' ? '' : `?${text}`}`;
+  },
 } as const;
 
 export const api = {
@@ -35,7 +48,7 @@ export const api = {
   part: (
     batch: number,
     letter: string,
-    part: 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'workbook' | 'json' | 'csv',
+    part: 'changes' | 'input' | 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'workbook' | 'json' | 'csv',
   ) => `/api/batches/${batch}/revisions/${e(letter)}/${part}`,
   table: (batch: number, letter: string, view: View, more: Readonly<Record<string, string | number>> = {}) =>
     tableAddress(batch, letter, view, '', more),

@@ -9,7 +9,7 @@
 import { tableNames, tables, type Filter, type TableName, type View } from '@/lib/tables/view';
 
 /** Keys that are not columns. */
-const reserved = new Set(['sort', 'columns', 'after', 'before', 'size', 'format', 'list']);
+const reserved = new Set(['sort', 'columns', 'after', 'before', 'size', 'format', 'list', 'show', 'of', 'in']);
 
 const number = String.raw`[-+]?(?:\d+\.?\d*|\.\d+)(?:e[-+]?\d+)?`;
 const range = new RegExp(`^(${number})?\\.\\.(${number})?$`, 'i');

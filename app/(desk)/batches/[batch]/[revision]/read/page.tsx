@@ -36,7 +36,7 @@ export default async function ReadPage({ params }: ReadPageProps) {
       <h1 className="sr-only">What was read of {revision.batchName}</h1>
       {revision.state === 'reading' ? (
         <Zone title="Reading">
-          <Reading batch={revision.batch} letter={revision.letter} />
+          <Reading batch={revision.batch} letter={revision.letter} madeFrom={revision.madeFrom} />
         </Zone>
       ) : (
         <WasRead person={person} revision={revision} />
@@ -64,7 +64,11 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
         )}
       </Zone>
       {defaults.length > 0 && revision.frames > 0 && (
-        <Zone title="Taken as default" note="Setup is silent">
+        <Zone
+          title="Taken as default"
+          note="Setup is silent"
+          aside={<Link href={pages.sheet(batch, letter, 'settings')}>Settings</Link>}
+        >
           <DefaultsTaken defaults={defaults} />
         </Zone>
       )}
@@ -76,7 +80,9 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
         title="Problems by cell"
         note={countWords({ errors, warnings, notes, framesStopped })}
         aside={
-          problems.length > 0 && (
+          // of a file that could not be opened there is nothing to mark
+          problems.length > 0 &&
+          sheets.length > 0 && (
             <ButtonLink href={api.part(batch, letter, 'marked-copy')} download>
               Download the marked copy
             </ButtonLink>

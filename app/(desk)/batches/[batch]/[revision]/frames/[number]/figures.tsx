@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import type { ReactNode } from 'react';
 import type { DrawingData, DrawingResult } from '@/components/drawing/drawing-data';
 import { RatioText } from '@/components/ui/ratio-text';
@@ -18,7 +19,7 @@ interface Head {
 }
 
 /** N, V, M of each member under the chosen result, with the places of the extremes. */
-export function MembersTable({ drawing, result }: FiguresProps) {
+export function MembersTable({ drawing, result, numbers }: FiguresProps & { readonly numbers: (member: string) => string }) {
   const { units, members, nodes, nearLimit } = drawing;
   const heads: Head[] = [
     { label: 'Member' },
@@ -45,7 +46,12 @@ export function MembersTable({ drawing, result }: FiguresProps) {
         const length = a && b ? Math.hypot(b.x - a.x, b.y - a.y) : null;
         return (
           <tr key={member.id}>
-            <th scope="row">{member.id}</th>
+            <th scope="row">
+              <Link href={numbers(member.id)} prefetch={false} title={`The numbers behind ${member.id}`}>
+                {member.id}
+              </Link>
+              {result.slack.includes(index) && <span className="unit"> slack</span>}
+            </th>
             <td>{member.role ?? ''}</td>
             <td>{member.section}</td>
             <Num value={length} quantity="length" units={units} decimals={2} />

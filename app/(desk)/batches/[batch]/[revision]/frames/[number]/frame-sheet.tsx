@@ -1,15 +1,15 @@
 'use client';
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
+import { Certificate } from '@/components/certificate/certificate';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { Working } from '@/components/working/working';
 import { Fact } from '@/components/ui/fact';
 import { Empty, Notice } from '@/components/ui/notice';
-import { powerText } from '@/components/ui/power-text';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { Columns, Zone } from '@/components/ui/sheet';
 import type { FrameDetail } from '@/app/_server/frame-detail';
-import { api } from '@/lib/api/addresses';
+import { api, pages } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 import { ChecksTable } from './checks-table';
 import { MembersTable, MovementsTable, ReactionsTable } from './figures';
@@ -18,10 +18,12 @@ interface FrameSheetProps {
   readonly batch: number;
   readonly letter: string;
   readonly first: FrameDetail;
+  /** The list that the frame was opened from, as its address has it. */
+  readonly list: string;
 }
 
 /** Drawing left, checks and one open working right, the chosen result's figures below. */
-export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
+export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
   const [result, setResult] = useState(first.drawing?.chosen?.name ?? null);
   const [open, setOpen] = useState<string | null>(first.checks[0]?.id ?? null);
   const address = api.frame(batch, letter, first.number) + (result === null ? '' : `?result=${encodeURIComponent(result)}`);
@@ -34,6 +36,15 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
   });
   const frame = asked.data?.frame ?? first;
   const { drawing, units, nearLimit } = frame;
+  // a colleague who is sent the address sees the same result
+  const choose = (name: string) => {
+    setResult(name);
+    const params = new URLSearchParams(window.location.search);
+    params.set('show', name);
+    window.history.replaceState(null, '', `?${params.toString()}`);
+  };
+  const numbers = (of: string) =>
+    pages.numbers(batch, letter, frame.number, { of, ...(result === null ? {} : { show: result }) }, list);
   const check = frame.checks.find((one) => one.id === open);
   const main = (
     <>
@@ -49,13 +60,17 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
         </Zone>
       ) : (
         <Zone flush>
-          <FrameDrawing data={drawing} onChoose={setResult} loading={asked.isPlaceholderData} />
+          <FrameDrawing data={drawing} onChoose={choose} loading={asked.isPlaceholderData} />
         </Zone>
       )}
       {drawing?.chosen && (
         <>
-          <Zone title="Members" note={`${drawing.chosen.name}: forces and their places; ratio over all checks`} flush>
-            <MembersTable drawing={drawing} result={drawing.chosen} />
+          <Zone
+            title="Members"
+            note={`${drawing.chosen.name}: forces and their places; ratio over all checks; a member’s name leads to the numbers behind it`}
+            flush
+          >
+            <MembersTable drawing={drawing} result={drawing.chosen} numbers={numbers} />
           </Zone>
           <div className="border-hair grid border-t md:grid-cols-2">
             <Zone title="Movements of nodes" note={drawing.chosen.name} flush>
@@ -96,24 +111,15 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
           />
         </Zone>
       )}
-      <Zone title="Certificate and assumptions">
+      <Zone title="Certificate" note={certificateWords(frame)}>
+        <Certificate {...frame.vouched} />
+      </Zone>
+      <Zone title="Mass and assumptions">
         <dl className="facts">
           <Fact name="mass of one frame">
             {frame.mass === null ? 'not known' : <QuantityText value={frame.mass} quantity="mass" units={units} />}
             {frame.count !== 1 && `, ${frame.count} off`}
           </Fact>
-          {frame.certificate && (
-            <>
-              <Fact name="residual of the solution">{powerText(frame.certificate.residual)}</Fact>
-              <Fact name="equilibrium of loads and reactions">{powerText(frame.certificate.equilibrium)}</Fact>
-              <Fact name="digits left">{frame.certificate.digits.toFixed(1)}</Fact>
-              <Fact name="second analysis">
-                {frame.certificate.second === null
-                  ? `not made${frame.certificate.secondReason === null ? '' : `: ${frame.certificate.secondReason}`}`
-                  : `agrees to ${powerText(frame.certificate.second)}`}
-              </Fact>
-            </>
-          )}
         </dl>
         {frame.assumptions.length > 0 && (
           <ul className="list-disc pl-5">
@@ -132,4 +138,13 @@ export function FrameSheet({ batch, letter, first }: FrameSheetProps) {
 function checkWords({ checks }: FrameDetail): string {
   if (checks.length === 0) return 'none';
   return `${checks.length}, each with its governing combination; a row opens its working`;
+}
+
+/** "all passed", "second analysis not made" … */
+function certificateWords({ vouched: { lines } }: FrameDetail): string {
+  if (lines.length === 0) return 'no solution, so there is nothing to vouch for';
+  if (lines.some((line) => line.outcome === 'outside')) return 'outside its tolerances';
+  return lines.every((line) => line.outcome === 'passed')
+    ? 'what vouches for these figures: all passed'
+    : 'what vouches for these figures: all that was made passed';
 }

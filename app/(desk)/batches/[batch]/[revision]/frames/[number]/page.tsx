@@ -13,7 +13,7 @@ import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { findFrame, findNeighbours, type Neighbours } from '@/db/queries/frames';
 import { api, pages } from '@/lib/api/addresses';
-import { listFromParams } from '@/lib/api/view-address';
+import { listFromParams, listToSearch } from '@/lib/api/view-address';
 import { offeredColumns } from '@/lib/tables/shown-columns';
 import { titleOf } from '../../_head/revision-head';
 import type { View } from '@/lib/tables/view';
@@ -31,7 +31,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
   const { number } = await params;
   const { person, revision } = await pageRevision(params, `frames/${number}`);
   const asked = toParams(await searchParams);
-  const detail = await pageThing(frameDetail(revision, number, null));
+  const detail = await pageThing(frameDetail(revision, number, asked.get('show')));
   const view = listFromParams(asked);
   const around = await findNeighbours(db(), person.office, revision.id, detail.number - 1, view);
   const { batch, letter, units } = revision;
@@ -52,6 +52,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
         verdict={{ verdict: detail.verdict, ratio: detail.ratio, nearLimit: detail.nearLimit }}
       />
       <FrameWalk
+        here={pages.frame(batch, letter, detail.number, view)}
         previous={await neighbour(around.previous)}
         next={await neighbour(around.next)}
         list={placeWords(around, sentence)}
@@ -66,7 +67,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
       </h1>
-      <FrameSheet batch={batch} letter={letter} first={detail} />
+      <FrameSheet batch={batch} letter={letter} first={detail} list={listToSearch(view)} />
       <Cautions />
     </Sheet>
   );

@@ -1,0 +1,57 @@
+import { formatNumber } from '@/lib/units/format';
+import { powerText } from '../ui/power-text';
+import type { NumberCell, NumberTable } from './numbers-data';
+
+/**
+ * Decimals for numbers of one kind: six figures of the largest, and three of the smallest that is no rounding of it, so that
+ * decimal points stand under one another and nothing that matters reads 0.
+ */
+export function decimalsFor(values: readonly number[]): number {
+  const sizes = values.map(Math.abs).filter((size) => size > 0 && Number.isFinite(size));
+  if (sizes.length === 0) return 0;
+  const most = Math.max(...sizes);
+  const least = Math.min(...sizes.filter((size) => size > most * 1e-7));
+  const wanted = Math.max(4 - power(most), 2 - power(least));
+  return Math.max(0, Math.min(wanted, 12));
+}
+
+const power = (size: number): number => Math.floor(Math.log10(size));
+
+/** How the numbers of each column of a table are shown. */
+export function columnText({ columns, rows, mixed }: NumberTable): ((cell: NumberCell) => string)[] {
+  const numbers = (column: number) => rows.flatMap(({ cells }) => (typeof cells[column] === 'number' ? [cells[column]] : []));
+  const together = columns.flatMap((column, i) => (column.apart || column.power ? [] : numbers(i)));
+  const decimals = decimalsFor(together);
+  return columns.map((column, i) => {
+    const own = column.apart ? decimalsFor(numbers(i)) : decimals;
+    return (cell) => {
+      if (cell === null) return '';
+      if (typeof cell === 'string') return cell;
+      if (cell === 0 || column.power) return powerText(cell);
+      return formatNumber(cell, mixed ? { significant: 6 } : { decimals: own });
+    };
+  });
+}
+
+/**
+ * A table as tab-separated text that pastes into a spreadsheet: a heading row and a heading column with units, numbers with
+ * every digit they have.
+ */
+export function tableText({ title, corner, columns, rows }: NumberTable): string {
+  const headed = (label: string, unit: string | null | undefined) => (unit ? `${label} [${unit}]` : label);
+  const lines = [
+    [plain(`${title}: ${corner}`), ...columns.map(({ label, unit }) => plain(headed(label, unit)))],
+    ...rows.map(({ label, unit, cells }) => [plain(headed(label, unit)), ...cells.map(copied)]),
+  ];
+  return lines.map((line) => line.join('\t')).join('\n');
+}
+
+/** Every digit; text that a spreadsheet would take for a formula is kept text. */
+function copied(cell: NumberCell): string {
+  return typeof cell === 'number' ? String(cell) : plain(cell ?? '');
+}
+
+function plain(text: string): string {
+  const single = text.replace(/[\t\r\n]+/g, ' ');
+  return /^[=+\-@]/.test(single) ? `'${single}` : single;
+}
