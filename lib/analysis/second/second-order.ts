@@ -5,7 +5,7 @@ import { onNodes, rightSide, stateFrom, type SecondState } from './second-state'
 
 /** Most passes, and the change of axial forces, relative to the largest force, that counts as none. */
 const mostPasses = 100;
-const still = 1e-10;
+const still = 1e-9;
 
 /**
  * One state in equilibrium, by solving and taking the axial forces found for the geometry of the next pass until they
@@ -23,10 +23,13 @@ export function solveState(setup: Setup, given: Given, acting: readonly Acting[]
     const [d] = solveFor(equations, [rightSide(setup, equations, equations.ends, nodes)]);
     const state = stateFrom(setup, now, equations, equations.ends, nodes, d!);
     if (axial === null) return state;
-    const found = Float64Array.from(setup.members, (_, i) => state.endForces[6 * i]!);
-    if (!found.every(Number.isFinite)) return null;
+    const found = new Float64Array(setup.members.length);
     let off = 0;
-    for (let i = 0; i < found.length; i++) off = Math.max(off, Math.abs(found[i]! - axial[i]!));
+    for (let i = 0; i < found.length; i++) {
+      found[i] = state.endForces[6 * i]!;
+      off = Math.max(off, Math.abs(found[i]! - axial[i]!));
+    }
+    if (!Number.isFinite(off)) return null;
     // an even number of ways in which it gives way goes unseen here: the first analysis counts them
     if (off <= still * largestForce(setup, state)) return equations.sign < 0 ? null : state;
     axial = found;

@@ -75,31 +75,36 @@ export function resultants(acting: Acting, L: number): { total: [number, number]
 }
 
 /** Movements of a member's ends along its own axes, from those along the nodes'. */
-function endMovements(setup: Setup, i: number, d: ArrayLike<number>): number[] {
+function endMovements(setup: Setup, i: number, d: ArrayLike<number>): Float64Array {
   const { start, end } = setup.members[i]!;
-  const turns = turningOf(setup, i);
-  return [start, end].flatMap((node, half) => {
-    const [c, s] = turns[half]!;
-    const [x, y] = [d[3 * node]!, d[3 * node + 1]!];
-    return [c * x + s * y, c * y - s * x, d[3 * node + 2]!];
-  });
+  const [c1, s1, c2, s2] = turningOf(setup, i);
+  const u = new Float64Array(6);
+  u[0] = c1 * d[3 * start]! + s1 * d[3 * start + 1]!;
+  u[1] = c1 * d[3 * start + 1]! - s1 * d[3 * start]!;
+  u[2] = d[3 * start + 2]!;
+  u[3] = c2 * d[3 * end]! + s2 * d[3 * end + 1]!;
+  u[4] = c2 * d[3 * end + 1]! - s2 * d[3 * end]!;
+  u[5] = d[3 * end + 2]!;
+  return u;
 }
 
-function times(k: Float64Array, u: readonly number[], q0: Float64Array | null): number[] {
-  return u.map((_, r) => u.reduce((sum, value, c) => sum + k[6 * r + c]! * value, q0 ? q0[r]! : 0));
+/** q = k u + q₀. */
+function endActions({ k, q0 }: TwoEnds, u: Float64Array): Float64Array {
+  const q = q0.slice();
+  for (let r = 0; r < 6; r++) for (let c = 0; c < 6; c++) q[r]! += k[6 * r + c]! * u[c]!;
+  return q;
 }
 
 /** Adds what a member's ends ask of its nodes, q, along the nodes' axes. */
-function addAsked(setup: Setup, i: number, q: readonly number[], factor: number, into: Float64Array): void {
+function addAsked(setup: Setup, i: number, q: Float64Array, factor: number, into: Float64Array): void {
   const { start, end } = setup.members[i]!;
-  const turns = turningOf(setup, i);
-  [start, end].forEach((node, half) => {
-    const [c, s] = turns[half]!;
-    const [X, Y, m] = q.slice(3 * half, 3 * half + 3) as [number, number, number];
-    into[3 * node]! += factor * (c * X - s * Y);
-    into[3 * node + 1]! += factor * (s * X + c * Y);
-    into[3 * node + 2]! += factor * m;
-  });
+  const [c1, s1, c2, s2] = turningOf(setup, i);
+  into[3 * start]! += factor * (c1 * q[0]! - s1 * q[1]!);
+  into[3 * start + 1]! += factor * (s1 * q[0]! + c1 * q[1]!);
+  into[3 * start + 2]! += factor * q[2]!;
+  into[3 * end]! += factor * (c2 * q[3]! - s2 * q[4]!);
+  into[3 * end + 1]! += factor * (s2 * q[3]! + c2 * q[4]!);
+  into[3 * end + 2]! += factor * q[5]!;
 }
 
 /** f = loads on the nodes − Σ Tᵀ(q₀ + k T d of the settlements), by number. */
@@ -111,9 +116,9 @@ export function rightSide(
 ): Float64Array {
   const f = loads.slice();
   ends.forEach((two, i) => {
-    if (two) addAsked(setup, i, times(two.k, endMovements(setup, i, prescribed), two.q0), -1, f);
+    if (two) addAsked(setup, i, endActions(two, endMovements(setup, i, prescribed)), -1, f);
   });
-  const side = new Float64Array(equations.K.length);
+  const side = new Float64Array(equations.count);
   equations.number.forEach((n, u) => {
     if (n >= 0) side[n] = f[u]!;
   });
@@ -139,7 +144,7 @@ export function stateFrom(
   ends.forEach((two, i) => {
     if (!two) return;
     const u = endMovements(setup, i, d);
-    const q = times(two.k, u, two.q0);
+    const q = endActions(two, u);
     addAsked(setup, i, q, 1, asked);
     endForces.set(innerForces(setup, given, i, two, u, q), 6 * i);
   });
@@ -163,13 +168,13 @@ export function stateFrom(
 }
 
 /** N, V, M at both ends from what the nodes do to them; V = M′ = T + N v′ stands square to the moved axis. */
-function innerForces(setup: Setup, given: Given, i: number, two: TwoEnds, u: readonly number[], q: readonly number[]): number[] {
+function innerForces(setup: Setup, given: Given, i: number, two: TwoEnds, u: Float64Array, q: Float64Array): number[] {
   const slip = setup.members[i]!.slip / (given.stiffness ? given.stiffness[2 * i]! : 1);
   const square = (N: number, T: number, phi: Float64Array): number => {
     if (!given.axial) return T;
     const turn = phi[0]! * u[1]! + phi[1]! * u[2]! + phi[2]! * u[4]! + phi[3]! * u[5]! + phi[4]!;
     return T + (N * (turn - slip * T)) / (1 + slip * N);
   };
-  const [X1, Y1, m1, X2, Y2, m2] = q as [number, number, number, number, number, number];
-  return [-X1, square(-X1, Y1, two.phiStart), -m1, X2, square(X2, -Y2, two.phiEnd), m2];
+  const [N1, N2] = [-q[0]!, q[3]!];
+  return [N1, square(N1, q[1]!, two.phiStart), -q[2]!, N2, square(N2, -q[4]!, two.phiEnd), q[5]!];
 }
