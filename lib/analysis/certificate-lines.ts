@@ -1,5 +1,5 @@
 import type { Certificate } from '@/lib/results/result';
-import { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns } from './certificate';
+import { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns } from './certificate-tolerances';
 
 /** One figure of a certificate with its bound, in words that a checker follows. */
 export interface CertificateLine {

@@ -1,8 +1,10 @@
 import type { Frame, Restraint } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { nodeAngles } from '../assemble';
-import { endForces, endInNodeAxes, loadVectors, toLocal } from '../load-vectors';
-import { memberDataFor } from '../member-data';
+import { endForces, endInNodeAxes, toLocal } from '../load-vectors';
+import type { MemberData } from '../member-data';
+import { combineLoading, emptyLoading } from '../second-order/member-loading';
+import { slackReactions } from '../second-order/slack-reactions';
 import { buildTopology } from '../topology';
 import { memberInState } from './member-in-state';
 import { nodeDisplacements } from './node-displacements';
@@ -40,8 +42,8 @@ export function behindFrame(frame: Frame, state: ResultState): BehindFrame {
   const t = buildTopology(frame);
   const angles = nodeAngles(frame);
   const d = nodeDisplacements(frame, state);
-  const f = loadVector(frame, state);
-  const left = outOfBalance(frame, state, d);
+  const f = loadVector(frame, state, t.free, d);
+  const Kd = stiffnessTimes(frame, state, d.map((value, i) => (t.free[i] ? value : 0))); // prettier-ignore
   const supports = new Map(frame.supports.map((support) => [support.node, support]));
   let unknowns = 0;
   const directions = frame.nodes.flatMap((_, node) =>
@@ -60,58 +62,69 @@ export function behindFrame(frame: Frame, state: ResultState): BehindFrame {
         kind: sprung ? 'sprung' : free ? 'unknown' : none ? 'none' : 'held',
         load: free ? f[i]! + 0 : null,
         displacement: d[i]! + 0,
-        left: free ? left[i]! + 0 : null,
+        left: free ? Kd[i]! - f[i]! + 0 : null,
       };
     }),
   );
   return { directions, angles, unknowns };
 }
 
-/** f of a state by node and direction: the cases' load vectors times their factors. */
-function loadVector(frame: Frame, state: ResultState): Float64Array {
-  const t = buildTopology(frame);
-  const { f } = loadVectors(frame, t, nodeAngles(frame), memberDataFor(frame, state.method));
-  const sum = new Float64Array(3 * frame.nodes.length);
-  for (let c = 0; c < frame.cases.length; c++) {
+/** f of a state: loads on nodes (imperfections and slack members' among them) − Σ Tᵀ q_F − K_fs d_s, 3 a node. */
+function loadVector(frame: Frame, state: ResultState, free: Uint8Array, d: Float64Array): Float64Array {
+  const angles = nodeAngles(frame);
+  const prescribed = d.map((value, i) => (free[i] ? 0 : value));
+  const f = stiffnessTimes(frame, state, prescribed).map((value) => -value);
+  const push = (node: number, Fx: number, Fy: number, Mz: number) => {
+    const [ca, sa] = [Math.cos(angles[node]!), Math.sin(angles[node]!)];
+    add(f, 3 * node, Fx * ca + Fy * sa, Fy * ca - Fx * sa, Mz);
+  };
+  for (const { node, case: c, Fx_N, Fy_N, Mz_Nm } of frame.nodeLoads) {
     const factor = state.factors[c]!;
-    if (factor === 0) continue;
-    for (let p = 0; p < t.size; p++)
-      for (let r = 0; r < 3; r++) {
-        const at = 3 * t.nodeAt[p]! + r;
-        sum[at] = sum[at]! + factor * f[(c * t.size + p) * 3 + r]!;
-      }
+    push(node, factor * Fx_N, factor * Fy_N, factor * Mz_Nm);
   }
-  return sum;
+  const { notional, loadScale } = state.method ?? { notional: null, loadScale: 1 };
+  if (notional) frame.nodes.forEach((_, i) => push(i, notional[2 * i]! / loadScale, notional[2 * i + 1]! / loadScale, 0));
+  frame.members.forEach((_, i) => {
+    const { data: m, fixedEnd, slack } = memberInState(frame, state, i);
+    takeEnds(f, m, angles, slack ? onNodes(frame, state, i, m) : fixedEnd, -1);
+  });
+  return f;
 }
 
-/** Σ Tᵀ q + springs × d − loads on the nodes: zero at every unknown of a solution. */
-function outOfBalance(frame: Frame, state: ResultState, d: Float64Array): Float64Array {
+/** What a slack member asks of its nodes, as a simple beam would. */
+function onNodes(frame: Frame, state: ResultState, member: number, m: MemberData): Float64Array {
+  const loading = emptyLoading();
+  combineLoading(frame, member, state.factors, 1, loading);
+  return slackReactions(m, loading, new Float64Array(6));
+}
+
+/** Σ Tᵀ k T d + springs × d, 3 a node. */
+function stiffnessTimes(frame: Frame, state: ResultState, d: Float64Array): Float64Array {
   const angles = nodeAngles(frame);
-  const left = new Float64Array(3 * frame.nodes.length);
+  const product = new Float64Array(3 * frame.nodes.length);
   const u = new Float64Array(6);
   const q = new Float64Array(6);
   frame.members.forEach((_, i) => {
-    const { data: m, k, fixedEnd } = memberInState(frame, state, i);
+    const { data: m, k } = memberInState(frame, state, i);
     toLocal(m, angles, d, 3 * m.start, 3 * m.end, u);
     endForces(k, u, q);
-    for (let r = 0; r < 6; r++) q[r] = q[r]! + fixedEnd[r]!;
-    for (let end = 0; end < 2; end++) {
-      const node = end === 0 ? m.start : m.end;
-      const [x, y] = endInNodeAxes(m, angles[node]!, q[3 * end]!, q[3 * end + 1]!);
-      add(left, 3 * node, x, y, q[3 * end + 2]!);
-    }
+    takeEnds(product, m, angles, q, 1);
   });
-  for (const load of frame.nodeLoads) {
-    const factor = -state.factors[load.case]!;
-    const [ca, sa] = [Math.cos(angles[load.node]!), Math.sin(angles[load.node]!)];
-    add(left, 3 * load.node, factor * (load.Fx_N * ca + load.Fy_N * sa), factor * (load.Fy_N * ca - load.Fx_N * sa), factor * load.Mz_Nm); // prettier-ignore
-  }
+  const stiffness = (restraint: Restraint) => (typeof restraint === 'number' ? restraint : 0);
   for (const { node, ux, uy, rz } of frame.supports) {
-    const stiffness = (restraint: Restraint) => (typeof restraint === 'number' ? restraint : 0);
     const o = 3 * node;
-    add(left, o, stiffness(ux) * d[o]!, stiffness(uy) * d[o + 1]!, stiffness(rz) * d[o + 2]!);
+    add(product, o, stiffness(ux) * d[o]!, stiffness(uy) * d[o + 1]!, stiffness(rz) * d[o + 2]!);
   }
-  return left;
+  return product;
+}
+
+/** to += sign × Tᵀ q. */
+function takeEnds(to: Float64Array, m: MemberData, angles: Float64Array, q: Float64Array, sign: 1 | -1): void {
+  for (let end = 0; end < 2; end++) {
+    const node = end === 0 ? m.start : m.end;
+    const [x, y] = endInNodeAxes(m, angles[node]!, q[3 * end]!, q[3 * end + 1]!);
+    add(to, 3 * node, sign * x, sign * y, sign * q[3 * end + 2]!);
+  }
 }
 
 function add(to: Float64Array, at: number, x: number, y: number, m: number): void {

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { createAnalyser } from '../analyser';
+import { analyseCombination, stateOf } from '../second-order/analyse-combination';
 import { plainCase, plainFrame, plainMember, plainSection } from '../plain-frame';
 import { randomFrame } from '../random-frame';
 import { behindFrame } from './behind-frame';
@@ -26,6 +27,11 @@ const times = (matrix: readonly number[], vector: readonly number[]): number[] =
 const sizes = (matrix: readonly number[], vector: readonly number[]): number[] =>
   [0, 1, 2, 3, 4, 5].map((row) => vector.reduce((sum, value, column) => sum + Math.abs(matrix[6 * row + column]! * value), 0));
 
+function sizesOf(frame: Frame, state: ResultState, member: number): number[] {
+  const { local, localDisplacements } = behindMember(frame, state, member);
+  return sizes(local, localDisplacements);
+}
+
 describe('the numbers behind a member', () => {
   it('give the end forces that are stored: k T d + q_F = q, in every state of any frame', () => {
     fc.assert(
@@ -44,6 +50,73 @@ describe('the numbers behind a member', () => {
       }),
       seeded,
     );
+  });
+
+  it('give them in second order, with shear, joints, reduced stiffness, notional forces and a load scale', () => {
+    let asked = 0;
+    fc.assert(
+      fc.property(randomFrame, fc.boolean(), fc.constantFrom(1, 1.6), (frame, shearDeformation, loadScale) => {
+        const state = analyseCombination(frame, 0, {
+          shearDeformation,
+          loadScale,
+          stiffness: Float64Array.from({ length: 2 * frame.members.length }, (_, i) => (i % 2 ? 0.72 : 0.8)),
+          notional: Float64Array.from({ length: 2 * frame.nodes.length }, (_, i) => (i % 2 ? 0 : 900)),
+        });
+        fc.pre('name' in state);
+        if (!('name' in state)) return;
+        asked += 1;
+        const { directions } = behindFrame(frame, state);
+        const handled = Math.max(1, ...directions.map(({ load }) => Math.abs(load ?? 0)));
+        frame.members.forEach(({ id }, index) => {
+          const behind = behindMember(frame, state, index);
+          const size = Math.max(handled, ...sizes(behind.local, behind.localDisplacements), ...behind.fixedEnd.map(Math.abs));
+          for (let r = 0; r < 6; r++)
+            expect(Math.abs(behind.endForces[r]! - behind.stored[r]!) / size, `${id} row ${r}`).toBeLessThan(1e-9);
+        });
+        const forces = [handled, ...frame.members.flatMap((_, i) => sizesOf(frame, state, i))];
+        for (const { left } of directions) expect(Math.abs(left ?? 0) / Math.max(...forces)).toBeLessThan(1e-9);
+      }),
+      seeded,
+    );
+    expect(asked).toBeGreaterThan(20);
+  });
+
+  it('are those of stability functions under a constant axial force (s, sc: Livesley and Chandler 1956)', () => {
+    const frame = {
+      ...cantilever(),
+      combinations: [{ name: 'C1', purpose: 'strength' as const, terms: [{ case: 0, factor: 1 }] }],
+    };
+    const pressed = { ...frame, nodeLoads: [{ case: 0, node: 1, Fx_N: -4e6, Fy_N: -5000, Mz_Nm: 0 }] };
+    const { bent, k, data } = behindMember(pressed, stateOf(pressed), 0);
+    const phi = data.length * Math.sqrt(4e6 / data.EI);
+    const [sin, cos] = [Math.sin(phi), Math.cos(phi)];
+    expect(bent!.N[0]).toBeCloseTo(-4e6, 3);
+    expect(bent!.phi).toBeCloseTo(phi, 9);
+    expect(bent!.s).toBeCloseTo((phi * (sin - phi * cos)) / (2 - 2 * cos - phi * sin), 9);
+    expect(bent!.sc).toBeCloseTo((phi * (phi - sin)) / (2 - 2 * cos - phi * sin), 9);
+    const L = data.length;
+    expect(k.kvv / ((k.S11 + 2 * k.S12 + k.S22) / L ** 2 - 4e6 / L)).toBeCloseTo(1, 9);
+  });
+
+  it('leave a slack tie without stiffness, its weight on its nodes', () => {
+    const frame: Frame = {
+      ...cantilever(),
+      nodes: [...cantilever().nodes, { id: 'C', x_m: 0, y_m: -2, place: null }],
+      members: [
+        plainMember('AB', 0, 1),
+        plainMember('CB', 2, 1, { startJoint: 'pin', endJoint: 'pin', axialOnly: true, tensionOnly: true }),
+      ],
+      supports: [0, 2].map((node) => ({ node, ux: 'fixed' as const, uy: 'fixed' as const, rz: 'fixed' as const, angle_rad: 0 })),
+      cases: [plainCase('live', 1)],
+      combinations: [{ name: 'C1', purpose: 'strength', terms: [{ case: 0, factor: 1 }] }],
+    };
+    for (const order of [1, 2] as const) {
+      const state = stateOf(frame, 0, { slack: [1] }, order);
+      const tie = behindMember(frame, state, 1);
+      expect(tie.slack).toBe(true);
+      expect([...tie.local, ...tie.endForces].every((value) => value === 0)).toBe(true);
+      for (const { left } of behindFrame(frame, state).directions) expect(Math.abs(left ?? 0)).toBeLessThan(1e-5);
+    }
   });
 
   it('write the stiffness between the nodes as Tᵀ k T, symmetric, and the movement as T d', () => {

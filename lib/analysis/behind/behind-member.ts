@@ -3,6 +3,7 @@ import type { ResultState } from '@/lib/results/result';
 import { nodeAngles } from '../assemble';
 import { endForces, endInNodeAxes, toLocal } from '../load-vectors';
 import type { MemberData } from '../member-data';
+import { squareToAxis } from './bent-member';
 import { memberInState, type MemberInState } from './member-in-state';
 import { nodeDisplacements } from './node-displacements';
 
@@ -26,7 +27,10 @@ export interface BehindMember extends MemberInState {
   readonly toLoadVector: readonly number[];
   /** q = k u + q_F. */
   readonly endForces: readonly number[];
-  /** The end forces of the result as q, from N, V, M at both ends: X₁ = −N₁, Y₁ = V₁, m₁ = −M₁, X₂ = N₂, Y₂ = −V₂, m₂ = M₂. */
+  /**
+   * The end forces of the result as q, from N, V, M at both ends: X₁ = −N₁, Y₁ = Q₁, m₁ = −M₁, X₂ = N₂, Y₂ = −Q₂, m₂ = M₂;
+   * Q = V in first order, V (1 + N/GAv) − N ψ in second.
+   */
   readonly stored: readonly number[];
 }
 
@@ -56,6 +60,8 @@ export function behindMember(frame: Frame, state: ResultState, member: number): 
   endForces(k, u, q);
   const byDisplacements = [...q].map(plain);
   const e = state.endForces.subarray(6 * member, 6 * member + 6);
+  const V = [e[1]!, e[4]!] as const;
+  const Q = inState.bent ? squareToAxis(inState.bent, data, V) : V;
   return {
     ...inState,
     angles: [angles[data.start]!, angles[data.end]!],
@@ -67,7 +73,7 @@ export function behindMember(frame: Frame, state: ResultState, member: number): 
     byDisplacements,
     toLoadVector: intoNodeAxes(data, angles, fixedEnd).map((value) => plain(-value)),
     endForces: byDisplacements.map((value, r) => value + fixedEnd[r]!),
-    stored: [-e[0]!, e[1]!, -e[2]!, e[3]!, -e[4]!, e[5]!].map(plain),
+    stored: [-e[0]!, Q[0], -e[2]!, e[3]!, -Q[1], e[5]!].map(plain),
   };
 }
 
