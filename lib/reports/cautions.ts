@@ -18,7 +18,9 @@ export function checkedWords(settings: Settings): { readonly checked: string; re
     settings.deflectionRatio === 'none' ? null : 'deflection',
     settings.swayRatio === 'none' ? null : 'sway',
     'other movements where Limits ask for them',
-    'critical load factor of the plane frame (whether first-order results hold)',
+    settings.analysis === 'second order'
+      ? 'critical load factor of the plane frame'
+      : 'critical load factor of the plane frame (whether first-order results hold)',
   ].filter((each) => each !== null);
   const left = [
     screened ? null : 'member and frame stability (by others): this is a check of stress and movement only',

@@ -1,4 +1,5 @@
 /** Analysis, checks, mass and verdict of one frame: what a run does with each frame, wherever it runs. */
+import { analysisAssumptions } from '@/lib/analysis/analysis-assumptions';
 import type { Analyser } from '@/lib/analysis/analyser';
 import { checkFrame } from '@/lib/checks/check-frame';
 import type { Frame } from '@/lib/model/frame';
@@ -6,6 +7,7 @@ import type { Settings } from '@/lib/model/settings';
 import { lineMemo, type LineOf } from '@/lib/results/line-memo';
 import { frameMass } from '@/lib/results/mass';
 import type { Failure, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { slackAssumptions } from '@/lib/results/state-facts';
 import { frameVerdict, governingOf } from '@/lib/results/verdict';
 
 export interface EvaluateOptions {
@@ -42,7 +44,12 @@ function evaluate(analyser: Analyser, frame: Frame, settings: Settings, options:
     return unsolved(frame, { code: 'not-solved', message, node: null });
   }
   const lineOf = options.lineOf ?? lineMemo(frame);
-  const { checks, allChecks, assumptions, ...found } = checkFrame(frame, settings, analysis.states, lineOf, { all: options.all });
+  const { checks, allChecks, ...found } = checkFrame(frame, settings, analysis.states, lineOf, { all: options.all });
+  const assumptions = [
+    ...analysisAssumptions(frame, settings),
+    ...slackAssumptions(frame, analysis.states),
+    ...found.assumptions,
+  ];
   const notChecked = checks.length === 0 && found.notChecked.length === 0 ? ['nothing to check'] : found.notChecked;
   return {
     status: 'solved',

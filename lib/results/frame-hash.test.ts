@@ -30,6 +30,7 @@ describe('the content address of a frame', () => {
   it.each([
     ['a load', cantileverFrame('F1', { nodeLoads: [{ case: 1, node: 1, Fx_N: 0, Fy_N: -2001, Mz_Nm: 0 }] })],
     ['a support', cantileverFrame('F1', { supports: [{ node: 0, ux: 'fixed', uy: 'fixed', rz: 1e9, angle_rad: 0 }] })],
+    ['a tension-only member', { ...frame, members: frame.members.map((one) => ({ ...one, tensionOnly: true })) }],
     ['a combination', cantileverFrame('F1', { combinations: [] })],
     ['what the sheets leave unchecked', cantileverFrame('F1', { notChecked: ['no combinations'] })],
   ])('changes with %s', (_what, changed) => {
@@ -41,6 +42,12 @@ describe('the content address of a frame', () => {
     { nearLimit: 0.95 },
     { stability: 'by others' as const },
     { deflectionRatio: 'none' as const },
+    { analysis: 'second order' as const },
+    { imperfections: 'EN 1993-1-1' as const },
+    { imperfections: 'AISC 360' as const },
+    { stiffnessReduction: 'AISC 360' as const },
+    { shearDeformation: true },
+    { strengthCheck: 'AISC 360-22 ASD' as const },
   ])('changes with the setting %j', (change) => {
     expect(frameHash(frame, { ...defaultSettings, ...change })).not.toBe(address);
   });

@@ -5,7 +5,8 @@ import { settingWords, type SettingName, type SettingOrigins, type Settings } fr
 import type { Problem } from '@/lib/problems/problem';
 import { checkedWords } from '@/lib/reports/cautions';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
-import type { Check, Extreme, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { imperfectionForces, noCasesAlone, slackMembers } from '@/lib/results/state-facts';
+import type { Check, Extreme, FrameEvaluation, ResultState, StateMethod } from '@/lib/results/result';
 import { resultsFormat, type FrameResult, type ProblemJson, type ResultsJson } from '@/lib/results/schema';
 
 /** Reason given for a frame that its sheets do not let run. */
@@ -35,6 +36,7 @@ export function frameResultJson(
   const solved = evaluation.status === 'solved';
   const checks = solved ? ((options.all ? evaluation.allChecks : null) ?? evaluation.checks) : [];
   const { governing, certificate } = evaluation;
+  const noCases = solved ? noCasesAlone(frame) : null;
   return {
     frame: frame.id,
     status: evaluation.status,
@@ -46,6 +48,7 @@ export function frameResultJson(
       ratio: maybe(governing.ratio),
     },
     notChecked: [...evaluation.notChecked],
+    ...(noCases === null ? {} : { notApplicable: [noCases] }),
     mass: maybe(evaluation.mass),
     results: solved ? evaluation.states.map((state) => stateJson(frame, state)) : [],
     checks: checks.map((check) => checkJson(frame.id, check)),
@@ -70,6 +73,7 @@ function stateJson(frame: Frame, state: ResultState): FrameResult['results'][num
     purpose: state.purpose,
     order: state.order,
     criticalLoadFactor: maybe(state.criticalLoadFactor),
+    ...(state.method === null ? {} : { method: methodJson(frame, state, state.method) }),
     displacements: frame.nodes.map((node, i) => ({
       node: node.id,
       ux: plain(state.displacements[3 * i]!),
@@ -93,6 +97,23 @@ function stateJson(frame: Frame, state: ResultState): FrameResult['results'][num
         deflection: { value: plain(extremes.deflection.value), at: plain(extremes.deflection.at) },
       };
     }),
+  };
+}
+
+function methodJson(frame: Frame, state: ResultState, of: StateMethod): NonNullable<FrameResult['results'][number]['method']> {
+  const stiffness = frame.members.flatMap((member, i) => {
+    const [EA, EI] = [of.stiffness?.[2 * i] ?? 1, of.stiffness?.[2 * i + 1] ?? 1];
+    return EA === 1 && EI === 1 ? [] : [{ member: member.id, EA: plain(EA), EI: plain(EI) }];
+  });
+  return {
+    imperfection: of.imperfection,
+    shearDeformation: of.shearDeformation,
+    loadScale: of.loadScale,
+    iterations: of.iterations,
+    change: plain(of.change),
+    slack: slackMembers(frame, state),
+    notional: imperfectionForces(frame, state).map(({ node, Fx_N, Fy_N }) => ({ node, fx: plain(Fx_N), fy: plain(Fy_N) })),
+    stiffness,
   };
 }
 

@@ -16,12 +16,32 @@ const memberResult = z.strictObject({
   deflection: z.strictObject({ value: z.number(), at: z.number() }),
 });
 
+/** How a state was found that is not of plain first order. */
+const method = z.strictObject({
+  /** Which way the imperfections lean. */
+  imperfection: z.enum(['right', 'left']).nullable(),
+  shearDeformation: z.boolean(),
+  /** Analysed under this many times the loads, and the results divided by it. */
+  loadScale: z.number(),
+  /** Passes until equilibrium stood still, and the largest relative change of the last. */
+  iterations: z.number().int(),
+  change: z.number(),
+  /** Tension-only members that are slack. */
+  slack: z.array(z.string()),
+  /** Forces that stand for the imperfections, where they are not zero. */
+  notional: z.array(z.strictObject({ node: z.string(), fx: z.number(), fy: z.number() })),
+  /** Factors on EA and EI of members, where they are not 1. */
+  stiffness: z.array(z.strictObject({ member: z.string(), EA: z.number(), EI: z.number() })),
+});
+
 const result = z.strictObject({
   name: z.string(),
   kind: z.enum(['case', 'combination']),
   purpose: z.enum(['strength', 'service']).nullable(),
   order: z.union([z.literal(1), z.literal(2)]),
   criticalLoadFactor: z.number().nullable(),
+  /** Absent: plain first order. */
+  method: method.optional(),
   displacements: z.array(z.strictObject({ node: z.string(), ux: z.number(), uy: z.number(), rz: z.number().nullable() })),
   reactions: z.array(z.strictObject({ node: z.string(), fx: z.number(), fy: z.number(), mz: z.number() })),
   members: z.array(memberResult),
@@ -63,6 +83,8 @@ const frameResultSchema = z.strictObject({
     })
     .nullable(),
   notChecked: z.array(z.string()),
+  /** Results that such a frame has not, and why (load cases alone of tension-only members). Absent: none. */
+  notApplicable: z.array(z.string()).optional(),
   /** kg of one frame; null where a density is missing or the frame could not be read. */
   mass: z.number().nullable(),
   results: z.array(result),

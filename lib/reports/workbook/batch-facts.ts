@@ -24,6 +24,8 @@ export interface BatchFacts {
   readonly flagRows: readonly ReportRow[];
   readonly totalRows: readonly ReportRow[];
   readonly parts: DistinctParts;
+  /** Some frame has tension-only members. */
+  readonly tied: boolean;
 }
 
 export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
@@ -35,6 +37,7 @@ export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
   const totalRows: ReportRow[] = [];
   const parts = new DistinctParts();
   let notSolved = 0;
+  let tied = false;
   const take = (each: ReportFrame): void => {
     counts[verdictOf(each)] += 1;
     if (each.evaluation?.status !== 'solved') notSolved += 1;
@@ -43,6 +46,7 @@ export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
     flags.push(...flagsOf(each));
     if (each.frame === null) return;
     parts.add(each.frame);
+    tied ||= each.frame.members.some((member) => member.tensionOnly);
     totalRows.push(...loadTotals(each.id, each.frame, system));
   };
   for await (const each of source.frames({ states: false })) take(each);
@@ -61,5 +65,6 @@ export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
     flagRows: flags.map((flag) => flag.row),
     totalRows,
     parts,
+    tied,
   };
 }

@@ -2,6 +2,7 @@
 import { cellOf, quantityColumn, ratioColumn, text, verdictColumn } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import { rowsOfFrames } from '@/lib/reports/workbook/rows-of-frames';
 import { unitLabel } from '@/lib/units/batch-unit';
 
 const movements = new Set(['deflection', 'sway', 'displacement', 'spread']);
@@ -27,8 +28,8 @@ function checkSheet(source: ReportSource, name: string, wanted: (check: string) 
       text('not checked', 50),
       text('reference', 30),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: false })) {
+    rows: () =>
+      rowsOfFrames(source, { states: false }, function* (each): Iterable<ReportRow> {
         for (const check of each.evaluation?.checks ?? []) {
           if (!wanted(check.check)) continue;
           const member = check.member === null ? undefined : each.frame?.members[check.member];
@@ -50,8 +51,7 @@ function checkSheet(source: ReportSource, name: string, wanted: (check: string) 
             check.reference,
           ];
         }
-      }
-    },
+      }),
   };
 }
 

@@ -1,6 +1,7 @@
 /** The first sheet: what was analysed, by what, under which assumptions, and what must not be concluded from it. */
 import { settingWords, type SettingName } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
+import { methodWords } from '@/lib/reports/method-words';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
@@ -44,6 +45,10 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
   ];
   if (facts.notSolved > 0)
     yield ['', `${facts.notSolved} of the frames not checked have no solution or were stopped by errors in the sheets`];
+  const [analysed = '', ...further] = methodWords(settings);
+  yield ['analysed', analysed];
+  for (const line of further) yield ['', line];
+  if (facts.tied) yield ['', 'tension-only members: which are slack is settled combination by combination (sheet Analysis)'];
   const words = checkedWords(settings);
   yield ['checked', words.checked];
   yield ['not checked', words.notChecked];
@@ -58,7 +63,7 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
     yield [
       settingWords[name],
       value === null ? 'silent' : typeof value === 'boolean' ? (value ? 'yes' : 'no') : value,
-      origin.cell ?? originWords[origin.source],
+      origin.changedBy ? `changed on screen by ${origin.changedBy}` : (origin.cell ?? originWords[origin.source]),
     ];
   }
   if (facts.assumptions.length > 0) {

@@ -2,6 +2,8 @@
 import type { Material, SectionProperties } from '@/lib/model/frame';
 import { cellOf, quantityColumn, text } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import { imperfectionTotals, loadTotals } from '@/lib/reports/workbook/load-totals';
+import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity, System } from '@/lib/units/quantity';
@@ -119,16 +121,25 @@ export function limitsSheet({ parts }: BatchFacts, system: System): ReportSheet 
   };
 }
 
-export function loadTotalsSheet(facts: BatchFacts, system: System): ReportSheet {
+/** By frame: each case, then the imperfection forces of each combination, where there are any. */
+export function loadTotalsSheet(facts: BatchFacts, source: ReportSource): ReportSheet {
+  const system = source.settings.units;
+  const together = async function* (): AsyncIterable<ReportRow> {
+    for await (const { id, frame, evaluation } of source.frames({ states: true, checks: false })) {
+      if (frame === null) continue;
+      yield* loadTotals(id, frame, system);
+      yield* imperfectionTotals(id, frame, evaluation?.states ?? [], system);
+    }
+  };
   return {
     name: 'Applied load totals',
     columns: [
       text('frame'),
-      text('case'),
+      text('case', 18),
       quantityColumn('ΣFx', 'force', system),
       quantityColumn('ΣFy', 'force', system),
       quantityColumn('ΣMz about the origin', 'moment', system),
     ],
-    rows: () => facts.totalRows,
+    rows: () => (source.settings.imperfections === 'none' ? facts.totalRows : together()),
   };
 }

@@ -1,4 +1,5 @@
 /** The sheets of a result workbook, in their order (sheets §6). The CSV set is made of the same ones. */
+import { analysisSheet, beyondPlain } from '@/lib/reports/workbook/analysis-sheet';
 import { gatherFacts } from '@/lib/reports/workbook/batch-facts';
 import { membersSheet, movementsSheet } from '@/lib/reports/workbook/check-sheets';
 import { coverSheet } from '@/lib/reports/workbook/cover-sheet';
@@ -21,11 +22,12 @@ export async function reportSheets(source: ReportSource): Promise<ReportSheet[]>
     reactionsSheet(source),
     displacementsSheet(source),
     movementsSheet(source),
+    ...(facts.tied || beyondPlain(source.settings) ? [analysisSheet(source)] : []),
     sectionsSheet(facts, system),
     loadCasesSheet(facts),
     combinationsSheet(facts),
     limitsSheet(facts, system),
-    loadTotalsSheet(facts, system),
+    loadTotalsSheet(facts, source),
     inputSheet(source),
     problemsSheet(source),
   ];

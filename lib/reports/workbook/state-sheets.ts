@@ -1,8 +1,10 @@
 /** Members by combination, Reactions and Displacements: the numbers of every case and combination. */
 import { extremesOf } from '@/lib/results/extremes-of';
+import { noCasesAlone } from '@/lib/results/state-facts';
 import { cellOf, quantityColumn, text } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import { rowsOfFrames } from '@/lib/reports/workbook/rows-of-frames';
 
 export function membersByCombinationSheet(source: ReportSource): ReportSheet {
   const system = source.settings.units;
@@ -38,13 +40,13 @@ export function membersByCombinationSheet(source: ReportSource): ReportSheet {
       quantityColumn('deflection', 'displacement', system),
       length('deflection at'),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true, checks: false })) {
+    rows: () =>
+      rowsOfFrames(source, { states: true, checks: false }, function* (each): Iterable<ReportRow> {
         const { frame, evaluation } = each;
-        if (frame === null || evaluation === null) continue;
+        if (frame === null || evaluation === null) return;
         for (const state of evaluation.states) {
           for (const [index, member] of frame.members.entries()) {
-            const ends = state.endForces.subarray(6 * index, 6 * index + 6);
+            const ends = state.endForces;
             const { N, V, M, deflection } = extremesOf(frame, state, index);
             yield [
               each.id,
@@ -52,7 +54,12 @@ export function membersByCombinationSheet(source: ReportSource): ReportSheet {
               state.name,
               state.kind,
               state.purpose,
-              ...[0, 1, 2, 3, 4, 5].map((at) => cellOf(ends[at], at % 3 === 2 ? 'moment' : 'force', system)),
+              cellOf(ends[6 * index], 'force', system),
+              cellOf(ends[6 * index + 1], 'force', system),
+              cellOf(ends[6 * index + 2], 'moment', system),
+              cellOf(ends[6 * index + 3], 'force', system),
+              cellOf(ends[6 * index + 4], 'force', system),
+              cellOf(ends[6 * index + 5], 'moment', system),
               cellOf(N.max, 'force', system),
               cellOf(N.maxAt, 'length', system),
               cellOf(N.min, 'force', system),
@@ -70,8 +77,7 @@ export function membersByCombinationSheet(source: ReportSource): ReportSheet {
             ];
           }
         }
-      }
-    },
+      }),
   };
 }
 
@@ -92,10 +98,23 @@ export function reactionsSheet(source: ReportSource): ReportSheet {
       quantityColumn('Fy on the foundation', 'force', system),
       quantityColumn('Mz on the foundation', 'moment', system),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true, checks: false })) {
+    rows: () =>
+      rowsOfFrames(source, { states: true, checks: false }, function* (each): Iterable<ReportRow> {
         const { frame, evaluation } = each;
-        if (frame === null || evaluation === null) continue;
+        if (frame === null || evaluation === null) return;
+        if (evaluation.status === 'solved' && noCasesAlone(frame) !== null)
+          yield [
+            each.id,
+            null,
+            'load cases alone',
+            'not applicable: members are tension only',
+            null,
+            null,
+            null,
+            null,
+            null,
+            null,
+          ];
         for (const state of evaluation.states) {
           for (const [index, support] of frame.supports.entries()) {
             const fx = cellOf(state.reactions[3 * index], 'force', system);
@@ -106,8 +125,7 @@ export function reactionsSheet(source: ReportSource): ReportSheet {
             yield [each.id, node, state.name, state.kind === 'case' ? 'unfactored case' : 'combination', fx, fy, mz, reverse(fx), reverse(fy), reverse(mz)]; // prettier-ignore
           }
         }
-      }
-    },
+      }),
   };
 }
 
@@ -125,17 +143,16 @@ export function displacementsSheet(source: ReportSource): ReportSheet {
       quantityColumn('uy', 'displacement', system),
       quantityColumn('rz', 'rotation', system),
     ],
-    async *rows(): AsyncIterable<ReportRow> {
-      for await (const each of source.frames({ states: true, checks: false })) {
+    rows: () =>
+      rowsOfFrames(source, { states: true, checks: false }, function* (each): Iterable<ReportRow> {
         const { frame, evaluation } = each;
-        if (frame === null || evaluation === null) continue;
+        if (frame === null || evaluation === null) return;
         for (const state of evaluation.states) {
           for (const [index, node] of frame.nodes.entries()) {
-            const [ux, uy, rz] = state.displacements.subarray(3 * index, 3 * index + 3);
-            yield [each.id, node.id, node.place, state.name, state.kind, cellOf(ux, 'displacement', system), cellOf(uy, 'displacement', system), cellOf(rz, 'rotation', system)]; // prettier-ignore
+            const { displacements: d } = state;
+            yield [each.id, node.id, node.place, state.name, state.kind, cellOf(d[3 * index], 'displacement', system), cellOf(d[3 * index + 1], 'displacement', system), cellOf(d[3 * index + 2], 'rotation', system)]; // prettier-ignore
           }
         }
-      }
-    },
+      }),
   };
 }

@@ -1,7 +1,13 @@
 /** Sheets → one XLSX, streamed: a row is gone from memory once it is written, and the sink's pace is kept. */
 import type { Writable } from 'node:stream';
 import ExcelJS from 'exceljs';
-import { crossesAsShown, type ReportCell, type ReportColumn, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
+import {
+  crossesAsShown,
+  type ReportCell,
+  type ReportColumn,
+  type ReportRow,
+  type ReportSheet,
+} from '@/lib/reports/workbook/report-sheet';
 
 /** Rows of one sheet that the format allows. */
 const mostRows = 1_048_576;
@@ -101,7 +107,7 @@ function addRow(
   cells: readonly ReportCell[],
 ): void {
   // An absent value makes no cell at all; a null would make an empty one, with a style to be worked out.
-  const row = page.addRow(cells.map((cell) => cell ?? undefined)) as StyledRow;
+  const row = page.addRow(cells.includes(null) ? cells.map((cell) => cell ?? undefined) : cells) as StyledRow;
   row.style = plainStyle;
   const free = sheet.columns.length === 0;
   for (let index = 0; index < cells.length; index += 1) {
@@ -141,7 +147,8 @@ export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, r
     let page = openPage(book, sheet, part);
     let rows = 1;
     let since = 0;
-    for await (const cells of sheet.rows()) {
+    /** Whether it is time to look at the sink. */
+    const add = (cells: ReportRow): boolean => {
       if (rows >= rowLimit) {
         closePage(page, sheet, rows);
         part += 1;
@@ -150,11 +157,15 @@ export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, r
       }
       addRow(page, sheet, styles, cells);
       rows += 1;
-      since += 1;
-      if (since === breath) {
-        since = 0;
-        await keepPace(page, sink);
-      }
+      since = (since + 1) % breath;
+      return since === 0;
+    };
+    const given = sheet.rows();
+    // Rows that are at hand are not waited for one by one.
+    if (Symbol.asyncIterator in given) {
+      for await (const cells of given) if (add(cells)) await keepPace(page, sink);
+    } else {
+      for (const cells of given) if (add(cells)) await keepPace(page, sink);
     }
     closePage(page, sheet, rows);
   }
