@@ -1,4 +1,5 @@
 import { LuDecomposition, Matrix } from 'ml-matrix';
+import { inPieces, piecesFor } from './in-pieces';
 import { numberingOf } from './numbering';
 import type { Acting } from './second-loads';
 import { restraintOf, type Given, type Setup } from './second-setup';
@@ -26,8 +27,13 @@ export function endsOf({ members }: Setup, given: Given, i: number, acting: Acti
   const a = given.stiffness ? given.stiffness[2 * i]! : 1;
   const EA = m.EA * a;
   const EI = given.stiffness ? m.EI * given.stiffness[2 * i + 1]! : m.EI;
-  const t = transferOf({ EA, EI, slip: m.slip / a }, acting, given.axial ? given.axial[i]! : null);
-  return t && twoEnds(t, m.L, EA, EI, { start: m.startGive / a, end: m.endGive / a });
+  const stiffness = { EA, EI, slip: m.slip / a };
+  const joints = { start: m.startGive / a, end: m.endGive / a };
+  const axial = given.axial ? given.axial[i]! : null;
+  const pieces = axial === null ? 1 : piecesFor(stiffness, acting, axial);
+  if (pieces > 1) return inPieces(stiffness, acting, axial!, joints, pieces);
+  const t = transferOf(stiffness, acting, axial);
+  return t && twoEnds(t, m.L, EA, EI, joints);
 }
 
 /**
