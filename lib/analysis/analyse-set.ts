@@ -3,7 +3,7 @@ import type { Settings } from '@/lib/model/settings';
 import type { ResultState, StateMethod } from '@/lib/results/result';
 import type { SolvedState } from './certificate';
 import { criticalLoadFactor, type BucklingSpace } from './critical/critical-load-factor';
-import { movementWithout, type SolvedCases } from './first-order-cases';
+import type { SolvedCases } from './first-order-cases';
 import type { StateTrouble } from './failures';
 import type { ImperfectionForces } from './imperfections/imperfection-forces';
 import { memberDataFor } from './member-data';
@@ -12,6 +12,7 @@ import type { SecondOrderSpace } from './second-order/second-order-space';
 import { firstOrderCombination, solveSecondOrder } from './second-order/solve-second-order';
 import { firstReduction, reduce, shareOf, squashLoads } from './stiffness-reduction/reduced-stiffness';
 import { factorsOf, superpose } from './superpose';
+import { movementWithout } from './tension-only/movement-without';
 import type { Topology } from './topology';
 
 /** What all states of one frame are analysed with. */
@@ -44,7 +45,7 @@ const mostPasses = 50;
 export function analyseSet(job: SetJob, planned: PlannedState, slack: readonly number[]): SetResult {
   const { frame } = job;
   const first = firstOrder(job, planned.combination, slack);
-  if (!first) return { ok: false, trouble: { kind: 'free', movement: withoutThem(job, slack) } };
+  if (!first) return { ok: false, trouble: withoutThem(job, slack) };
   const notional = planned.imperfection && job.forces ? leaning(job.forces, first.state, planned) : null;
   const plain = planned.order === 1 && !notional && !planned.reduced && !planned.imperfection;
   const found = plain ? { ok: true as const, ...first, alpha: undefined } : solved(job, planned, slack, first, notional);
@@ -190,11 +191,12 @@ function troubleOf(
   slack: readonly number[],
   { why, reached }: { readonly why: 'unstable' | 'mechanism' | 'not settled'; readonly reached: number },
 ): StateTrouble {
-  if (why === 'mechanism') return { kind: 'free', movement: withoutThem(job, slack) };
+  if (why === 'mechanism') return withoutThem(job, slack);
   if (why === 'not settled') return { kind: why, reached };
   return { kind: why, reached, criticalLoadFactor: alphaOf(job, first) };
 }
 
-function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): string {
-  return movementWithout(frame, t, solved, slack) ?? 'the frame can move freely.';
+function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): StateTrouble {
+  const movement = movementWithout(frame, t, solved, slack);
+  return { kind: 'free', movement: movement?.words ?? 'the frame can move freely.', caught: movement?.caught ?? false };
 }

@@ -77,7 +77,7 @@ function plainStates(frame: Frame, t: Topology, solved: SolvedCases, second: boo
     if (state.purpose !== 'strength') return state;
     return { ...state, criticalLoadFactor: criticalLoadFactor(frame, t, solved.angles, solved.diagonal, state, space) };
   });
-  return { states: [...solved.cases, ...combinations], certificate: certify({ frame, t, ...solved }, second) };
+  return { states: [...solved.cases, ...combinations], certificate: certify({ frame, t, ...solved, combinations }, second) };
 }
 
 /** Whatever the settings ask for (README §6). */

@@ -69,7 +69,9 @@ function withTies(job: SetJob, planned: PlannedState): SolvedState | Failure {
     const result = analyseSet(job, planned, slack);
     if (!result.ok) {
       failed = result;
-      return { ok: false, why: troubleWords(frame, planned.loadScale, planned.reduced, result.trouble) };
+      const { trouble } = result;
+      const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
+      return { ok: false, why, caught: trouble.kind === 'free' && trouble.caught };
     }
     iterations += result.state.method?.iterations ?? 1;
     return { ok: true, solution: result, ...tieForces(frame, result.state, ties) };

@@ -45,7 +45,8 @@ export type StateTrouble =
   | { readonly kind: 'not settled'; readonly reached: number }
   /** A member (index) whose axial force reaches what its section can carry, so that nothing of its stiffness is left. */
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
-  | { readonly kind: 'free'; readonly movement: string };
+  /** `caught`: whichever way it moves, some tie is stretched. */
+  | { readonly kind: 'free'; readonly movement: string; readonly caught: boolean };
 
 /** @param name of the state as it is in the results; @param scale times which the loads were applied */
 export function stateFailure(frame: Frame, name: string, scale: number, reduced: boolean, trouble: StateTrouble): Failure {
@@ -74,7 +75,7 @@ export function troubleWords(frame: Frame, scale: number, reduced: boolean, trou
 
 /** Rounded down, so that a load that was not reached is never printed as reached. */
 function figure(value: number): string {
-  return String(Math.floor(value * 1000) / 1000);
+  return String(Math.floor(value * 1000 * (1 + 1e-9)) / 1000);
 }
 
 /** A state whose tension-only members find no set. */

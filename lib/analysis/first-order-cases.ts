@@ -6,7 +6,7 @@ import { conditionEstimate, scaledNorm } from './condition';
 import { factor } from './factor';
 import { freeOrHardlyHeld, lowDigits } from './failures';
 import { loadVectors, type LoadVectors } from './load-vectors';
-import { describeMovement, nullVector } from './mechanism';
+import { nullVector } from './mechanism';
 import { memberDataFor, type MemberData } from './member-data';
 import { recover, type Recovered } from './recover';
 import { solve } from './solve';
@@ -32,7 +32,7 @@ const shears: StateMethod = {
 }; // prettier-ignore
 
 /** A pivot below this share of its own original diagonal is a mechanism. */
-const pivotTolerance = 1e-12;
+export const pivotTolerance = 1e-12;
 
 /** K d = f for all cases at once (README §1), or why the frame has no solution. */
 export function solveCases(frame: Frame, t: Topology, shearDeformation: boolean): SolvedCases | Failure {
@@ -73,18 +73,4 @@ function caseState(frame: Frame, recovered: Recovered, index: number, method: St
     reactions,
     endForces,
   };
-}
-
-/** The movement that costs nothing once some members are left out, in words. @param slack members left out */
-export function movementWithout(frame: Frame, t: Topology, solved: SolvedCases, slack: readonly number[]): string | null {
-  const K = new Float64Array(9 * t.blocks);
-  const out = new Set(slack);
-  const data = solved.data.map((m, i) => (out.has(i) ? { ...m, EA: 0 } : m));
-  assemble(K, t, frame, data, solved.angles);
-  const inner = new Float64Array(6 * t.size);
-  // judged against K with all members: a direction that only they held has nothing of its own left
-  const unheld = factor(K, t, solved.diagonal, inner, new Float64Array(3 * t.size), pivotTolerance);
-  if (unheld < 0) return null;
-  const { node, how, remedy } = describeMovement(frame, t, solved.angles, nullVector(K, t, inner, unheld));
-  return `node ${node} can freely ${how}. ${remedy}.`;
 }

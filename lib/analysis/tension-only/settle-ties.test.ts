@@ -30,7 +30,7 @@ describe('which ties are slack', () => {
     const tried: string[] = [];
     const found = settleTies([0, 1], (slack) => {
       tried.push(slack.join());
-      if (slack.length === 2) return { ok: false, why: 'it can move' };
+      if (slack.length === 2) return { ok: false, why: 'it can move', caught: true };
       return slack.length === 0 ? forces(-10, -2) : forces(-8, 5);
     });
     expect(found).toMatchObject({ ok: true, slack: [0], passes: 4 });
@@ -50,7 +50,22 @@ describe('which ties are slack', () => {
   });
 
   it('say why a set could not be analysed', () => {
-    const found = settleTies([4], (slack) => (slack.length ? { ok: false, why: 'node B can slide' } : forces(-1)));
+    const found = settleTies([4], (slack) => (slack.length ? { ok: false, why: 'node B can slide', caught: false } : forces(-1)));
     expect(found).toEqual({ ok: false, members: [4], passes: 4, why: { trial: 'node B can slide' } });
+  });
+
+  it('keep one without force where the frame would move freely, and some tie would catch it either way', () => {
+    const without = (caught: boolean) =>
+      settleTies([0, 1], (slack) => {
+        if (slack.length === 2) return { ok: false, why: 'it can move', caught };
+        return slack.length === 0 ? forces(-10, -10) : forces(-10, 0);
+      });
+    expect(without(true)).toMatchObject({ ok: true, slack: [0] });
+    expect(without(false)).toMatchObject({ ok: false, members: [0, 1], why: { trial: 'it can move' } });
+  });
+
+  it('never keep one that is pressed', () => {
+    const found = settleTies([0], (slack) => (slack.length ? { ok: false, why: 'it can move', caught: true } : forces(-1)));
+    expect(found).toMatchObject({ ok: false, members: [0] });
   });
 });

@@ -8,7 +8,12 @@ export type TieTrial<T> =
       /** Forces up to this size are none: a tie without force is slack. */
       readonly nothing: number;
     }
-  | { readonly ok: false; readonly why: string };
+  | {
+      readonly ok: false;
+      readonly why: string;
+      /** The frame moves freely, and whichever way it does, some tie is stretched. */
+      readonly caught: boolean;
+    };
 
 export type SettledTies<T> =
   | { readonly ok: true; readonly solution: T; readonly slack: readonly number[]; readonly passes: number }
@@ -29,50 +34,84 @@ const mostPasses = 50;
  * up again, from all taut, until none changes.
  *
  * All of them change at once first, which settles almost every frame in two or three passes; where a set comes up again, or
- * the frame can't stand with one, it is begun anew with only the worst changing in each pass.
+ * the frame can't stand with one, it is begun anew with only the worst changing in each pass. There a tie without any force
+ * stays taut if the frame could move freely without it and yet some tie would catch it either way: a braced bay under
+ * gravity alone.
  *
  * @param ties members, ascending   @param analyse one set of slack members, ascending
  */
 export function settleTies<T>(ties: readonly number[], analyse: (slack: readonly number[]) => TieTrial<T>): SettledTies<T> {
   let passes = 0;
-  for (const one of [false, true]) {
-    const seen = new Set<string>();
-    const changed = new Set<number>();
-    let slack: readonly number[] = [];
-    for (;;) {
-      if (seen.has(slack.join())) {
-        if (!one) break;
-        return { ok: false, members: ascending(changed), passes, why: 'repeated' };
-      }
-      if (passes === mostPasses) return { ok: false, members: ascending(changed), passes, why: 'passes' };
-      seen.add(slack.join());
-      passes++;
-      const trial = analyse(slack);
-      if (!trial.ok) {
-        if (!one && slack.length > 0) break;
-        return { ok: false, members: slack, passes, why: { trial: trial.why } };
-      }
-      const turning = wrong(ties, slack, trial.forces, trial.nothing, one);
-      if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes };
-      for (const member of turning) changed.add(member);
-      slack = ties.filter((member) => slack.includes(member) !== turning.includes(member));
-    }
-  }
-  throw new RangeError('Expected the one-by-one search to end');
+  const trial = (slack: readonly number[]): TieTrial<T> => {
+    passes++;
+    return analyse(slack);
+  };
+  return allAtOnce(ties, trial, () => passes) ?? oneByOne(ties, trial, () => passes);
 }
 
-const ascending = (members: ReadonlySet<number>): number[] => [...members].sort((a, b) => a - b);
+const ascending = (members: Iterable<number>): number[] => [...members].sort((a, b) => a - b);
 
-/** Ties that are on the wrong side; `one`: only the one most so (the first of equals). */
-function wrong(
-  ties: readonly number[],
-  slack: readonly number[],
-  forces: Float64Array,
-  nothing: number,
-  one: boolean,
-): readonly number[] {
-  const wrongly = ties.filter((member, i) => (slack.includes(member) ? forces[i]! > nothing : forces[i]! <= nothing));
-  if (!one || wrongly.length < 2) return wrongly;
-  const size = (member: number): number => Math.abs(forces[ties.indexOf(member)]!);
-  return [wrongly.reduce((worst, member) => (size(member) > size(worst) * (1 + 1e-9) ? member : worst))];
+type Analyse<T> = (slack: readonly number[]) => TieTrial<T>;
+
+/** Null where one by one must be tried. */
+function allAtOnce<T>(ties: readonly number[], analyse: Analyse<T>, passes: () => number): SettledTies<T> | null {
+  const seen = new Set<string>();
+  const changed = new Set<number>();
+  let slack: readonly number[] = [];
+  while (!seen.has(slack.join())) {
+    if (passes() >= mostPasses) return { ok: false, members: ascending(changed), passes: passes(), why: 'passes' };
+    seen.add(slack.join());
+    const trial = analyse(slack);
+    if (!trial.ok && slack.length > 0) return null;
+    if (!trial.ok) return { ok: false, members: [], passes: passes(), why: { trial: trial.why } };
+    const turning = wrong(ties, slack, trial.forces, trial.nothing);
+    if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes: passes() };
+    for (const member of turning) changed.add(member);
+    slack = turned(ties, slack, turning);
+  }
+  return null;
+}
+
+function oneByOne<T>(ties: readonly number[], analyse: Analyse<T>, passes: () => number): SettledTies<T> {
+  const seen = new Set<string>(['']);
+  const changed = new Set<number>();
+  const kept = new Set<number>();
+  let slack: readonly number[] = [];
+  let trial = analyse(slack);
+  const stopped = (why: 'repeated' | 'passes' | { trial: string }, members: Iterable<number>): SettledTies<T> => ({
+    ok: false,
+    members: ascending(members),
+    passes: passes(),
+    why,
+  });
+  for (;;) {
+    if (!trial.ok) return stopped({ trial: trial.why }, slack);
+    const { forces, nothing } = trial;
+    const force = (member: number): number => Math.abs(forces[ties.indexOf(member)]!);
+    const turning = wrong(ties, slack, forces, nothing).filter((member) => !(kept.has(member) && force(member) <= nothing));
+    if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes: passes() };
+    if (passes() >= mostPasses) return stopped('passes', changed);
+    // the worst, the first of equals
+    const worst = turning.reduce((most, member) => (force(member) > force(most) * (1 + 1e-9) ? member : most));
+    const next = turned(ties, slack, [worst]);
+    changed.add(worst);
+    if (seen.has(next.join())) return stopped('repeated', changed);
+    seen.add(next.join());
+    const without = analyse(next);
+    if (!without.ok && without.caught && force(worst) <= nothing) {
+      kept.add(worst);
+      continue;
+    }
+    slack = next;
+    trial = without;
+  }
+}
+
+/** Ties that are on the wrong side. */
+function wrong(ties: readonly number[], slack: readonly number[], forces: Float64Array, nothing: number): readonly number[] {
+  return ties.filter((member, i) => (slack.includes(member) ? forces[i]! > nothing : forces[i]! <= nothing));
+}
+
+function turned(ties: readonly number[], slack: readonly number[], turning: readonly number[]): readonly number[] {
+  return ties.filter((member) => slack.includes(member) !== turning.includes(member));
 }
