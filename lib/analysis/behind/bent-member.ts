@@ -4,8 +4,8 @@ import { nodeAngles, type MemberStiffness } from '../assemble';
 import { toLocal } from '../load-vectors';
 import type { MemberData } from '../member-data';
 import { clampedTurns } from '../second-order/joint-turns';
-import { memberChain, piecesOf } from '../second-order/member-chain';
-import { combineLoading, emptyLoading, stride, type MemberLoading } from '../second-order/member-loading';
+import { memberChain, piecesAlong } from '../second-order/member-chain';
+import { combineLoading, emptyLoading, type MemberLoading } from '../second-order/member-loading';
 import { emptyPiece } from '../second-order/piece';
 import { slackReactions } from '../second-order/slack-reactions';
 import { nodeDisplacements } from './node-displacements';
@@ -54,7 +54,7 @@ export function bentMember(frame: Frame, state: ResultState, member: number, m: 
     phi: m.length * Math.sqrt(most / m.EI),
     s: (clamped.S11 * m.length) / m.EI,
     sc: (clamped.S12 * m.length) / m.EI,
-    pieces: countPieces(m, loading, N),
+    pieces: piecesAlong(m, loading, N),
     loadScale,
     turns: [turns.start / loadScale, turns.end / loadScale],
   };
@@ -64,20 +64,6 @@ function released(m: MemberData, loading: MemberLoading, N: number) {
   const piece = emptyPiece();
   memberChain(m, loading, N, true, piece, { yes: false });
   return piece;
-}
-
-/** As member-chain.ts divides each stretch. */
-function countPieces(m: MemberData, { count, stretches }: MemberLoading, N: number): number {
-  let pieces = 0;
-  for (let i = 0; i < count; i++) {
-    const o = stride * i;
-    const [l, n1, n2] = [stretches[o]!, stretches[o + 2]!, stretches[o + 3]!];
-    const a = N + stretches[o + 1]!;
-    const b = a + l * (n1 + l * n2);
-    const bulge = 0.25 * Math.abs(n2) * l * l;
-    pieces += piecesOf(m, l, Math.max(Math.abs(a), Math.abs(b)) + bulge, Math.min(a, b) - bulge);
-  }
-  return pieces;
 }
 
 /** Force square to the original axis at the start and end, from V square to the deflected one: Q = V (1 + N/GAv) − N ψ. */

@@ -13,7 +13,7 @@ export interface Work {
   readonly input: SecondOrderInput;
   /** 2 = axial forces bend; 1 = they don't. */
   readonly order: 1 | 2;
-  /** Node axes differ from global ones somewhere; supports are moved. */
+  /** Supports are moved. */
   readonly settled: boolean;
   passes: number;
   /** Largest axial stiffness × movement of the last pass, N. */
@@ -24,7 +24,7 @@ export interface Work {
 const pivotTolerance = 1e-12;
 
 /** Loads of the combination, by member and by node. */
-export function prepare(input: SecondOrderInput): Work {
+export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
   const { frame, angles, data, slack, factors, loadScale, notional, space } = input;
   const { nodeForces, all, loadings, held } = space;
   nodeForces.fill(0);
@@ -64,7 +64,7 @@ export function prepare(input: SecondOrderInput): Work {
       held[i] = 0;
     }
   }
-  return { input, order: 2, settled, passes: 0, handled: 0 };
+  return { input, order, settled, passes: 0, handled: 0 };
 }
 
 /** Whether first-order stiffness alone holds the frame. */
@@ -107,7 +107,7 @@ export function respond(work: Work): boolean {
     if (slack?.[i]) continue;
     const m = data[i]!;
     const loading = loadings[i]!;
-    memberChain(m, loading, order === 2 ? N[i]! : 0, true, piece, buckled);
+    memberChain(m, loading, order === 2 ? N[i]! : null, true, piece, buckled);
     if (buckled.yes) return false;
     addMember(K, t, m, piece, angles);
     let X1 = -held[i]!;

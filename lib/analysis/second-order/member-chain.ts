@@ -1,91 +1,124 @@
 import type { MemberData } from '../member-data';
 import { stride, type MemberLoading } from './member-loading';
-import { emptyPiece, fillPiece, longest, type Piece } from './piece';
+import { closed, emptyPiece, emptyTransfer, follow, jump, type Piece } from './piece';
+import { longest, transferAlong } from './transfer';
 
 /** Where the axial force leaves a member no stiffness, so that the frame is past its critical load. */
 export interface Buckled {
   yes: boolean;
 }
 
-const next = emptyPiece();
+/** Followed from start to end a length up to this √(|N| l²/EI) keeps its digits, and is stable clamped (2π). */
+const longestGroup = 4;
 
-/** Number of pieces of a stretch: none longer than √(|N| l²/EI) = `longest`, N at most `most` in size. */
-export function piecesOf(m: MemberData, length: number, most: number, least: number): number {
-  const per = m.GAv === Infinity || least >= 0 ? 1 : Math.max(1e-3, 1 + least / m.GAv);
-  return Math.max(1, Math.ceil((Math.sqrt(most / (m.EI * per)) * length) / longest));
-}
+const group = emptyPiece();
+const whole = emptyTransfer();
+const one = emptyTransfer();
 
 /**
  * Exact stiffness and clamped end forces of a member under the axial force N + (n of its loading), pieces and joints
- * condensed. README §5.
+ * condensed. README §5. Pieces follow one another from start to end; where the force is large they are joined in groups by
+ * elimination, so that short pieces cost no digits and long ties don't overflow.
  *
- * @param N at its start, before a force exactly there, N, tension positive
+ * @param N at its start, before a force exactly there, N, tension positive; null = first order: no axial force bends it
  * @param released false: with its ends clamped to the nodes, whatever its joints
  * @param out overwritten   @param buckled set where it has no stiffness left between its nodes
  */
 export function memberChain(
   m: MemberData,
   loading: MemberLoading,
-  N: number,
+  N: number | null,
   released: boolean,
   out: Piece,
   buckled: Buckled,
 ): void {
   const { count, stretches } = loading;
   const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
-  let first = true;
+  const bends = N === null ? 0 : 1;
+  const start = N ?? 0;
+  let total = 0;
+  if (bends) for (let i = 0; i < count; i++) total += slenderness(m, loading, i, start, slip, buckled);
+  const groups = Math.max(1, Math.ceil(total / longestGroup));
+  const finest = groups > 1 ? 1 : longest;
+  let done = 0;
+  let before = 0;
+  let fresh = true;
   for (let i = 0; i < count; i++) {
     const o = stride * i;
-    const l = stretches[o]!;
-    const a = N + stretches[o + 1]!;
-    const n1 = stretches[o + 2]!;
-    const n2 = stretches[o + 3]!;
-    const b = a + l * (n1 + l * n2);
-    const bulge = 0.25 * Math.abs(n2) * l * l;
-    const least = Math.min(a, b) - bulge;
-    if (!(1 + least * slip > 1e-3)) buckled.yes = true;
-    const pieces = piecesOf(m, l, Math.max(Math.abs(a), Math.abs(b)) + bulge, least);
-    const h = l / pieces;
+    const n1 = bends * stretches[o + 2]!;
+    const n2 = bends * stretches[o + 3]!;
+    const q1 = stretches[o + 5]!;
+    const a = start + bends * stretches[o + 1]!;
+    const slender = count === 1 || !bends ? total : slenderness(m, loading, i, start, slip, buckled);
+    const pieces = Math.max(1, Math.ceil(slender / finest));
+    const h = stretches[o]! / pieces;
     for (let j = 0; j < pieces; j++) {
       const s = j * h;
-      const to = first ? out : next;
-      fillPiece(
-        m.EI,
-        slip,
-        h,
-        a + s * (n1 + s * n2),
-        n1 + 2 * s * n2,
-        n2,
-        stretches[o + 4]! + s * stretches[o + 5]!,
-        stretches[o + 5]!,
-        loading.curvature,
-        to,
-      );
-      const Py = j === 0 ? stretches[o + 6]! : 0;
-      const M0 = j === 0 ? stretches[o + 7]! : 0;
-      if (first) {
-        out.Y1 -= Py;
-        out.m1 -= M0;
-      } else join(out, next, Py, M0, buckled);
-      first = false;
+      const T = fresh ? whole : one;
+      const q0 = stretches[o + 4]! + s * q1;
+      transferAlong(m.EI, slip, h, a + s * (n1 + s * n2), n1 + 2 * s * n2, n2, q0, q1, loading.curvature, T);
+      if (j === 0) jump(T, stretches[o + 6]!, stretches[o + 7]!);
+      if (!fresh) follow(whole, one);
+      done += slender / pieces;
+      fresh = before < groups - 1 && done >= (total * (before + 1)) / groups;
+      if (fresh) closeGroup(before++, out, buckled);
     }
   }
-  out.Y2 -= loading.endPy;
-  out.m2 -= loading.endM;
+  whole.Q_p += loading.endPy;
+  whole.M_p -= loading.endM;
+  closeGroup(before, out, buckled);
   out.ka = m.EA / m.length;
   if (!released) return;
   if (m.startSpring !== Infinity) releaseStart(out, m.startSpring, buckled);
   if (m.endSpring !== Infinity) releaseEnd(out, m.endSpring, buckled);
 }
 
-/** Joins B to the end of A, eliminating v and ψ between them, where P and M₀ act; the result stands in A. */
-function join(A: Piece, B: Piece, Py: number, M0: number, buckled: Buckled): void {
+/** Number of pieces that `memberChain` divides a member into. */
+export function piecesAlong(m: MemberData, loading: MemberLoading, N: number): number {
+  const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
+  let total = 0;
+  for (let i = 0; i < loading.count; i++) total += slenderness(m, loading, i, N, slip, { yes: false });
+  let pieces = 0;
+  for (let i = 0; i < loading.count; i++)
+    pieces += Math.max(1, Math.ceil(slenderness(m, loading, i, N, slip, { yes: false }) / (total > longestGroup ? 1 : longest)));
+  return pieces;
+}
+
+/** √(|N| l²/EI) of one stretch, N its largest. */
+function slenderness(m: MemberData, { stretches }: MemberLoading, i: number, N: number, slip: number, buckled: Buckled): number {
+  const o = stride * i;
+  const l = stretches[o]!;
+  const n2 = stretches[o + 3]!;
+  const a = N + stretches[o + 1]!;
+  const b = a + l * (stretches[o + 2]! + l * n2);
+  const bulge = 0.25 * Math.abs(n2) * l * l;
+  const size = Math.max(Math.abs(a), Math.abs(b)) + bulge;
+  let per = 1;
+  if (slip > 0) {
+    per = Math.min(1, 1 + (Math.min(a, b) - bulge) * slip);
+    // no stiffness is left at P = GAv
+    if (!(per > 1e-3)) {
+      buckled.yes = true;
+      per = 1e-3;
+    }
+  }
+  return Math.sqrt(size / (m.EI * per)) * l;
+}
+
+function closeGroup(before: number, out: Piece, buckled: Buckled): void {
+  if (before === 0) return closed(whole, out);
+  closed(whole, group);
+  join(out, group, buckled);
+}
+
+/** Joins B to the end of A, eliminating v and ψ between them; the result stands in A. */
+function join(A: Piece, B: Piece, buckled: Buckled): void {
   const p = A.kvv + B.kvv;
   const r = B.kv1 - A.kv2;
   const q = A.S22 + B.S11 - (r * r) / p;
   if (!(p > 0 && q > 0)) buckled.yes = true;
-  const g = A.Y2 + B.Y1 - Py;
-  const gt = A.m2 + B.m1 - M0 - (r * g) / p;
+  const g = A.Y2 + B.Y1;
+  const gt = A.m2 + B.m1 - (r * g) / p;
   // columns of v₁, θ₁, θ₂ in the rows of v between and, after it, of ψ between
   const v1 = -A.kvv;
   const t1 = -A.kv1;
@@ -100,7 +133,7 @@ function join(A: Piece, B: Piece, Py: number, M0: number, buckled: Buckled): voi
   A.S11 = S11 - (t1 * t1) / p - (w1 * w1) / q;
   A.S12 = -(t1 * t2) / p - (w1 * w2) / q;
   A.S22 = B.S22 - (t2 * t2) / p - (w2 * w2) / q;
-  const all = A.Y1 + A.Y2 + B.Y1 + B.Y2 - Py;
+  const all = A.Y1 + A.Y2 + B.Y1 + B.Y2;
   A.Y1 -= (v1 * g) / p + (wv * gt) / q;
   A.m1 -= (t1 * g) / p + (w1 * gt) / q;
   A.m2 = B.m2 - (t2 * g) / p - (w2 * gt) / q;

@@ -1,8 +1,8 @@
 import type { MemberStiffness } from '../assemble';
 
 /**
- * A piece of a member, or a whole one, under axial force: its stiffness across and the end forces of its loads with both
- * ends clamped, what the nodes do to it: across Y₁, Y₂ (square to the original axis) and moments m₁, m₂.
+ * A member under axial force between its ends: its stiffness across and the end forces of its loads with both ends clamped,
+ * what the nodes do to it: across Y₁, Y₂ (square to the original axis) and moments m₁, m₂.
  */
 export interface Piece extends MemberStiffness {
   Y1: number;
@@ -15,178 +15,70 @@ export function emptyPiece(): Piece {
   return { ka: 0, kvv: 0, kv1: 0, kv2: 0, S11: 0, S12: 0, S22: 0, Y1: 0, m1: 0, Y2: 0, m2: 0 };
 }
 
-/** A piece is at most this √(|N| l²/EI) long: its series then converge at once and it is far from buckling clamped (2π). */
-export const longest = 2;
-
-// 1/(2k + 4)! and 1/(2k + 5)!; 1/(k + 1)
-const even = [1 / 24];
-const odd = [1 / 120];
-for (let k = 1; k < 12; k++) {
-  even.push(even[k - 1]! / ((2 * k + 3) * (2 * k + 4)));
-  odd.push(odd[k - 1]! / ((2 * k + 4) * (2 * k + 5)));
-}
-const share = Float64Array.from({ length: 32 }, (_, k) => 1 / (k + 1));
-
-/**
- * Exact stiffness and clamped end forces of a prismatic piece: EI ψ′ = M (+ EI κ₀), M′ = Q + N v′, Q′ = q, v′ = ψ − M′/GAv
- * (shear square to the deflected axis: Engesser 1891). README §5.
- *
- * @param slip 1/GAv, 0 = no shear   @param N at its start, tension positive; N + n1 s + n2 s²   @param q0, q1 q = q0 + q1 s
- * @param l m, √(|N| l²/EI) at most `longest`   @param kappa κ₀, free curvature
- */
-export function fillPiece(
-  EI: number,
-  slip: number,
-  l: number,
-  N: number,
-  n1: number,
-  n2: number,
-  q0: number,
-  q1: number,
-  kappa: number,
-  out: Piece,
-): void {
-  if (n1 === 0 && n2 === 0) constant(EI, slip, l, N, q0, q1, kappa, out);
-  else varying(EI, slip, l, N, n1, n2, q0, q1, kappa, out);
+/** What the start of a piece does at its end: v, ψ, M there of ψ, M, Q at its start and of what acts along it (p). */
+export interface Transfer {
+  v_psi: number;
+  v_M: number;
+  v_Q: number;
+  v_p: number;
+  psi_psi: number;
+  psi_M: number;
+  psi_Q: number;
+  psi_p: number;
+  M_psi: number;
+  M_M: number;
+  M_Q: number;
+  M_p: number;
+  Q_p: number;
 }
 
-// a: v, b: ψ, c: M at the end from ψ, M, Q at the start and from the loads
-let [a_psi, a_M, a_Q, a_p, b_psi, b_M, b_Q, b_p, c_M, c_Q, c_p] = [0, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0];
-
-/** N constant: M″ = ωM + …, ω = N/(EI μ), μ = 1 + N/GAv, in C_k = Σ zⁱ/(2i + k)!, z = ωl² (Stumpff 1959): C_k = 1/k! + z C_{k+2}. */
-function constant(EI: number, slip: number, l: number, N: number, q0: number, q1: number, kappa: number, out: Piece): void {
-  const mu = 1 + N * slip;
-  const bend = N / mu;
-  const z = (bend * l * l) / EI;
-  const size = z < 0 ? -z : z;
-  let C4 = 0;
-  let C5 = 0;
-  for (let k = size < 0.05 ? 5 : size < 1 ? 7 : 11; k >= 0; k--) {
-    C4 = C4 * z + even[k]!;
-    C5 = C5 * z + odd[k]!;
-  }
-  const C3 = 1 / 6 + z * C5;
-  const C2 = 0.5 + z * C4;
-  const C1 = 1 + z * C3;
-  const r0 = bend * kappa + q0 / mu;
-  const r1 = q1 / mu;
-  const b = l / EI;
-  const ll = l * l;
-  a_M = b * l * C2 - z * C2 * slip;
-  const a_V = b * ll * C3 - l * C1 * slip;
-  b_M = b * C1;
-  const b_V = b * l * C2;
-  a_Q = a_V / mu;
-  b_Q = b_V / mu;
-  a_psi = l + bend * a_V;
-  b_psi = 1 + bend * b_V;
-  c_M = 1 + z * C2;
-  c_Q = (l * C1) / mu;
-  c_p = ll * (r0 * C2 + r1 * l * C3);
-  b_p = kappa * l + b * ll * (r0 * C3 + r1 * l * C4);
-  a_p = 0.5 * kappa * ll + b * ll * l * (r0 * C4 + r1 * l * C5) - c_p * slip;
-  close(l, q0, q1, out);
+export function emptyTransfer(): Transfer {
+  return {
+    v_psi: 0, v_M: 0, v_Q: 0, v_p: 0, psi_psi: 0, psi_M: 0, psi_Q: 0, psi_p: 0, M_psi: 0, M_M: 0, M_Q: 0, M_p: 0, Q_p: 0,
+  }; // prettier-ignore
 }
 
-/** N varies: the same by power series in s/l, term from term, with N as it is. */
-function varying(
-  EI: number,
-  slip: number,
-  l: number,
-  N: number,
-  n1: number,
-  n2: number,
-  q0: number,
-  q1: number,
-  kappa: number,
-  out: Piece,
-): void {
-  const a1 = n1 * l;
-  const a2 = n2 * l * l;
-  const b = l / EI;
-  const per = 1 / (1 + N * slip);
-  const terms = termsFor(((Math.abs(N) + Math.abs(a1) + Math.abs(a2)) * per * l * l) / EI);
-  // w = v′, w before it, M and V = M′ of each column: ψ, M, Q at the start and the loads
-  let w = per, x = 0, M = 0, V = N * per; // prettier-ignore
-  let wM = 0, xM = 0, MM = 1, VM = 0; // prettier-ignore
-  let wQ = -slip * per, xQ = 0, MQ = 0, VQ = per; // prettier-ignore
-  let wp = 0, xp = 0, Mp = 0, Vp = 0; // prettier-ignore
-  let v = 0, vM = 0, vQ = 0, vp = 0; // prettier-ignore
-  let psi = 1, psiM = 0, psiQ = 0, psip = 0; // prettier-ignore
-  let eM = 1, eQ = 0, ep = 0; // prettier-ignore
-  for (let k = 0; k < terms; k++) {
-    const part = share[k]!;
-    const lp = l * part;
-    const bp = b * part;
-    const B = bp * M;
-    const BM = bp * MM;
-    const BQ = bp * MQ;
-    let Bp = bp * Mp;
-    let Q = 0;
-    if (k === 0) {
-      Bp += kappa * l;
-      Q = q0 * l;
-    } else if (k === 1) Q = 0.5 * q1 * l * l;
-    psi += B;
-    psiM += BM;
-    psiQ += BQ;
-    psip += Bp;
-    v += lp * w;
-    vM += lp * wM;
-    vQ += lp * wQ;
-    vp += lp * wp;
-    M = lp * V;
-    MM = lp * VM;
-    MQ = lp * VQ;
-    Mp = lp * Vp;
-    eM += MM;
-    eQ += MQ;
-    ep += Mp;
-    V = per * (N * B + a1 * w + a2 * x);
-    VM = per * (N * BM + a1 * wM + a2 * xM);
-    VQ = per * (N * BQ + a1 * wQ + a2 * xQ);
-    Vp = per * (Q + N * Bp + a1 * wp + a2 * xp);
-    x = w;
-    xM = wM;
-    xQ = wQ;
-    xp = wp;
-    w = B - V * slip;
-    wM = BM - VM * slip;
-    wQ = BQ - VQ * slip;
-    wp = Bp - Vp * slip;
-  }
-  a_psi = v;
-  a_M = vM;
-  a_Q = vQ;
-  a_p = vp;
-  b_psi = psi;
-  b_M = psiM;
-  b_Q = psiQ;
-  b_p = psip;
-  c_M = eM;
-  c_Q = eQ;
-  c_p = ep;
-  close(l, q0, q1, out);
+/** T followed by `next`; the result stands in T. */
+export function follow(T: Transfer, next: Transfer): void {
+  const { psi_psi, psi_M, psi_Q, psi_p, M_psi, M_M, M_Q, M_p, Q_p } = T;
+  T.v_psi += next.v_psi * psi_psi + next.v_M * M_psi;
+  T.v_M += next.v_psi * psi_M + next.v_M * M_M;
+  T.v_Q += next.v_psi * psi_Q + next.v_M * M_Q + next.v_Q;
+  T.v_p += next.v_psi * psi_p + next.v_M * M_p + next.v_Q * Q_p + next.v_p;
+  T.psi_psi = next.psi_psi * psi_psi + next.psi_M * M_psi;
+  T.psi_M = next.psi_psi * psi_M + next.psi_M * M_M;
+  T.psi_Q = next.psi_psi * psi_Q + next.psi_M * M_Q + next.psi_Q;
+  T.psi_p = next.psi_psi * psi_p + next.psi_M * M_p + next.psi_Q * Q_p + next.psi_p;
+  T.M_psi = next.M_psi * psi_psi + next.M_M * M_psi;
+  T.M_M = next.M_psi * psi_M + next.M_M * M_M;
+  T.M_Q = next.M_psi * psi_Q + next.M_M * M_Q + next.M_Q;
+  T.M_p = next.M_psi * psi_p + next.M_M * M_p + next.M_Q * Q_p + next.M_p;
+  T.Q_p = Q_p + next.Q_p;
 }
 
-/** Terms after which z^(k/2)/k! is below 1e-18. */
-function termsFor(z: number): number {
-  return z < 0.04 ? 12 : z < 0.13 ? 14 : z < 0.34 ? 16 : z < 0.73 ? 18 : z < 3.6 ? 24 : 30;
+/** A force and a moment where a piece begins. */
+export function jump(T: Transfer, Py: number, M0: number): void {
+  if (Py === 0 && M0 === 0) return;
+  T.v_p += T.v_Q * Py - T.v_M * M0;
+  T.psi_p += T.psi_Q * Py - T.psi_M * M0;
+  T.M_p += T.M_Q * Py - T.M_M * M0;
+  T.Q_p += Py;
 }
 
-/** Turns what the start does at the end into what both ends ask for. */
-function close(l: number, q0: number, q1: number, out: Piece): void {
-  const D = 1 / (a_M * b_Q - a_Q * b_M);
-  out.kvv = b_M * D;
-  out.kv1 = b_Q * D;
-  out.kv2 = a_M * D;
-  out.S11 = (a_psi * b_Q - b_psi * a_Q) * D;
-  out.S12 = a_Q * D;
-  out.S22 = (c_Q * a_M - c_M * a_Q) * D;
-  const M = (b_p * a_Q - a_p * b_Q) * D;
-  const Q = (b_M * a_p - a_M * b_p) * D;
+/** Turns what the start does at the end into what both ends ask for; all but the axial stiffness. */
+export function closed(T: Transfer, out: Piece): void {
+  const { v_psi, v_M, v_Q, v_p, psi_psi, psi_M, psi_Q, psi_p } = T;
+  const D = 1 / (v_M * psi_Q - v_Q * psi_M);
+  out.kvv = psi_M * D;
+  out.kv1 = psi_Q * D;
+  out.kv2 = v_M * D;
+  out.S11 = (v_psi * psi_Q - psi_psi * v_Q) * D;
+  out.S12 = v_Q * D;
+  out.S22 = (T.M_Q * v_M - T.M_M * v_Q) * D;
+  const M = (psi_p * v_Q - v_p * psi_Q) * D;
+  const Q = (psi_M * v_p - v_M * psi_p) * D;
   out.m1 = -M;
   out.Y1 = Q;
-  out.m2 = c_M * M + c_Q * Q + c_p;
-  out.Y2 = -(Q + l * (q0 + 0.5 * l * q1));
+  out.m2 = T.M_M * M + T.M_Q * Q + T.M_p;
+  out.Y2 = -(Q + T.Q_p);
 }

@@ -29,7 +29,7 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
     const m = data[i]!;
     const loading = loadings[i]!;
     const bend = order === 2 ? N[i]! : 0;
-    memberChain(m, loading, bend, false, piece, { yes: false });
+    memberChain(m, loading, order === 2 ? bend : null, false, piece, { yes: false });
     toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
     clampedTurns(m, piece, u, turns);
     u[2] = turns.start;

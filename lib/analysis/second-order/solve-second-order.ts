@@ -51,6 +51,8 @@ const still = 1e-10;
 /** What stiffness × movement loses by rounding counts as still too. */
 const rounding = 4e-15;
 const mostPasses = 60;
+/** … and where they go on flickering by no more than this. */
+const enough = 1e-8;
 /** The share of the load at which equilibrium is lost is closed in on to this. */
 const closeness = 1e-3;
 
@@ -62,7 +64,7 @@ const closeness = 1e-3;
  * a critical load is never given: where the whole load can't be reached from the first-order forces, it is put on in steps.
  */
 export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
-  const work = prepare(input);
+  const work = prepare(input, 2);
   if (input.slack && !standsWithoutForces(work)) return { ok: false, reached: 0, why: 'mechanism' };
   const { N } = input.space;
   if (input.guess) for (let i = 0; i < N.length; i++) N[i] = input.guess[i]! * input.loadScale;
@@ -74,11 +76,10 @@ export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
 
 /** First-order equilibrium of one combination where cases can't be summed: slack members, reduced stiffness, notional forces. */
 export function firstOrderCombination(input: SecondOrderInput): SecondOrderResult {
-  const work = prepare(input);
+  const work = prepare(input, 1);
   if (!standsWithoutForces(work)) return { ok: false, reached: 0, why: 'mechanism' };
-  input.space.N.fill(0);
   if (!respond(work)) return { ok: false, reached: 0, why: 'mechanism' };
-  return recoverSecondOrder({ ...work, order: 1 }, 0);
+  return recoverSecondOrder(work, 0);
 }
 
 interface Settled {
@@ -104,7 +105,8 @@ function settle(work: Work, share: number): Settled {
     change = size > 0 ? moved / size : 0;
     if (moved <= still * size + rounding * share * work.handled) return { how: 'still', change };
   }
-  return { how: 'moving', change };
+  // what is left is rounding that equilibrium near a critical load makes more of
+  return { how: change <= enough ? 'still' : 'moving', change };
 }
 
 /** The load put on in steps, each from the equilibrium before it, halved where it is too long. */

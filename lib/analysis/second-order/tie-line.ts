@@ -1,7 +1,8 @@
 import type { MemberData } from '../member-data';
 import { givenStride, type LinePieces } from './line-pieces';
 import type { MemberLoading } from './member-loading';
-import { emptyPiece, fillPiece, type Piece } from './piece';
+import { closed, emptyPiece, emptyTransfer, type Piece } from './piece';
+import { transferAlong } from './transfer';
 import type { LineEnds } from './second-order-line';
 
 /**
@@ -12,10 +13,12 @@ export function tieStarts(m: MemberData, loading: MemberLoading, pieces: LinePie
   const { count, given } = pieces;
   const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
   const all: Piece[] = [];
+  const transfer = emptyTransfer();
   for (let k = 0; k < count; k++) {
     const [l, N, n1, n2, q0, q1] = [1, 2, 3, 4, 5, 6].map((r) => given[givenStride * k + r]!) as [number, number, number, number, number, number]; // prettier-ignore
     const piece = emptyPiece();
-    fillPiece(m.EI, slip, l, N, n1, n2, q0, q1, loading.curvature, piece);
+    transferAlong(m.EI, slip, l, N, n1, n2, q0, q1, loading.curvature, transfer);
+    closed(transfer, piece);
     all.push(piece);
   }
   // rows of v and ψ where piece k begins; C carries the next place's, solved from the far end back
