@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Frame, MemberLoad, NodeLoad, Restraint, Support } from '@/lib/model/frame';
+import { defaultSettings } from '@/lib/model/settings';
 import { createAnalyser } from '../analyser';
 import { plainCase, plainFrame, plainMember, plainSection } from '../plain-frame';
 
@@ -138,5 +139,27 @@ describe('the critical load factor', () => {
     const [one, two, minus] = analysis.states.slice(1).map((state) => state.criticalLoadFactor);
     near(two!, one! / 2, 1e-10);
     expect(minus).toBeNull();
+  });
+
+  it('with shear is Engesser’s P/(1 + P/GAv): columns between pins, on one foot, fixed at both ends', () => {
+    // Timoshenko and Gere, Theory of Elastic Stability, 2nd ed., 2.17 (from memory)
+    const GAv = 2e6;
+    const sheared = (frame: Frame): number => {
+      const properties = { ...frame.sections[0]!.properties, AvShear_m2: GAv / 81e9 };
+      const of = {
+        ...frame,
+        sections: [{ ...frame.sections[0]!, properties }],
+        materials: [{ ...frame.materials[0]!, G_Pa: 81e9 }],
+      };
+      const analysis = createAnalyser().analyse(of, { settings: { ...defaultSettings, shearDeformation: true } });
+      if (!analysis.ok) throw new Error(analysis.failure.message);
+      return analysis.states[1]!.criticalLoadFactor!;
+    };
+    const lost = (P: number): number => P / (1 + P / GAv) / 1e3;
+    const euler = (Math.PI ** 2 * EI) / L ** 2;
+    near(sheared(column('free', support(1, 'fixed', 'free'))), lost(euler), 1e-9);
+    near(sheared(column('fixed', support(1, 'free', 'free'))), lost(euler / 4), 1e-9);
+    near(sheared(column('fixed', support(1, 'fixed', 'free', 'fixed'))), lost(4 * euler), 1e-9);
+    near(sheared(column('fixed', support(1, 'free', 'free', 'fixed'))), lost(euler), 1e-9);
   });
 });
