@@ -62,7 +62,9 @@ export function swayByLean(frame: Frame, endForces: ArrayLike<number>): Float64A
   const h = Math.max(...pieces.map((p) => y(p.top))) - Math.min(...pieces.map((p) => y(p.foot)));
   const onGround = columns.filter((column) => frame.supports.some((s) => s.node === column.foot));
   const row = onGround.length > 0 ? onGround : columns.filter((c) => !pieces.some((p) => p.top === c.foot));
-  const loads = row.map((c) => pressed(c.pieces.find((p) => p.foot === c.foot)!.member)).filter((N) => N > 0);
+  const all = row.map((c) => pressed(c.pieces.find((p) => p.foot === c.foot)!.member));
+  // what rounding leaves of a force is none
+  const loads = all.filter((N) => N > 1e-6 * Math.max(...all));
   const half = loads.reduce((sum, N) => sum + N, 0) / (2 * loads.length);
   const m = Math.max(1, loads.filter((N) => N >= half * (1 - 1e-9)).length);
   const alphaH = Math.max(2 / 3, Math.min(2 / Math.sqrt(h), 1));
