@@ -26,6 +26,7 @@ export function publicRevision(revision: RevisionRecord) {
     runBy: revision.runBy?.name ?? null,
     runStartedAt,
     runFinishedAt,
+    madeFrom: revision.madeFrom,
   };
 }
 export type PublicRevision = ReturnType<typeof publicRevision>;

@@ -1,5 +1,6 @@
 import 'server-only';
 import type { DefaultLine, ProblemLine, SheetLine } from '@/components/intake/intake-data';
+import { settingText } from '@/lib/changes/setting-text';
 import type { SheetRead } from '@/lib/intake/intake';
 import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem, Severity } from '@/lib/problems/problem';
@@ -61,28 +62,6 @@ export function defaultLines(settings: Settings, origins: SettingOrigins): Defau
     const value = settingText(name, settings);
     return source === 'sheet' || value === null ? [] : [{ setting: settingWords[name], value, source }];
   });
-}
-
-function settingText(name: SettingName, settings: Settings): string | null {
-  const value = settings[name];
-  switch (name) {
-    case 'title':
-    case 'material':
-      return value === null ? null : String(value);
-    case 'stressFactor':
-    case 'nearLimit':
-      return typeof value === 'number' ? value.toFixed(2) : null;
-    case 'deflectionRatio':
-      return value === null ? 'no limit given' : value === 'none' ? 'none' : `L/${String(value)}`;
-    case 'swayRatio':
-      return value === null ? 'no limit given' : value === 'none' ? 'none' : `h/${String(value)}`;
-    case 'combinationSet':
-      return value === null ? 'as listed' : String(value);
-    case 'shearDeformation':
-      return value === true ? 'yes' : 'no';
-    default:
-      return String(value);
-  }
 }
 
 /** "saltmere_frames.xlsx, 1.9 MB, 10 sheets" */

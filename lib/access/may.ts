@@ -19,6 +19,7 @@ const table = {
   'add a project': ['lead', 'analyst'],
   'read a batch': staff,
   'bring sheets in': ['lead', 'analyst'],
+  'change a revision': ['lead', 'analyst'],
   run: ['lead', 'analyst'],
   'take results away': staff,
   'read people': ['lead'],

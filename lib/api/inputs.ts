@@ -2,6 +2,7 @@
 import { z } from 'zod';
 import { passwordLength } from '@/lib/access/password-length';
 import { personRoles } from '@/lib/access/may';
+import { changeSchema } from '@/lib/changes/change';
 
 const text = (what: string, max: number) =>
   z
@@ -38,6 +39,17 @@ export const personInput = z.object({
 });
 
 export const assignedInput = z.object({ people: z.array(z.number().int().positive()).max(500) });
+
+/** Changes from which the next revision is made. */
+export const changesInput = z.object({
+  changes: z
+    .array(changeSchema, { error: 'List the changes.' })
+    .min(1, 'Change at least one setting.')
+    .max(50, 'Make at most 50 changes at once.')
+    .refine((list) => new Set(list.map((one) => one.setting)).size === list.length, 'Change each setting once.'),
+  reason: text('why it is changed', 500),
+  run: z.boolean().default(false),
+});
 
 export const batchNameInput = text('the batch’s name', 120);
 

@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
-import { bring, run } from '../setup/bring';
+import { bring, run, stateBecomes } from '../setup/bring';
 import { signedIn } from '../setup/visitor';
 import { openBrowser, signInAs } from './browser';
 
@@ -22,6 +22,9 @@ describe('every page by axe', () => {
     await run(analyst, good);
     batch = good.batch;
     messy = (await bring(analyst, to, 'samples/messy.xlsx')).batch;
+    const next = { changes: [{ kind: 'setting', setting: 'nearLimit', value: '0.8' }], reason: 'for a look', run: true };
+    await analyst.send(`/api/batches/${batch}/revisions/A/changes`, next);
+    await stateBecomes(analyst, { batch, revision: 'B' }, (state) => state === 'run');
     browser = await openBrowser();
   });
   afterAll(() => browser.close());
@@ -41,6 +44,7 @@ describe('every page by axe', () => {
     `/batches/${messy}/A/read`,
     `/batches/${messy}/A/problems`,
     `/batches/${messy}/A/bring`,
+    `/batches/${batch}/B/settings`,
     ...['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'run', 'frames/1'].map(
       (sheet) => `/batches/${batch}/A/${sheet}`,
     ),
@@ -56,6 +60,12 @@ describe('every page by axe', () => {
       expect(found).toEqual([]);
     });
   }
+
+  it('finds nothing where settings are chosen on a phone', async () => {
+    const page = await (await browser.newContext({ viewport: { width: 390, height: 844 } })).newPage();
+    await signInAs(page, url, 'north', 'analyst');
+    expect(await look(page, `/batches/${batch}/B/settings`)).toEqual([]);
+  });
 
   it('finds nothing on a client’s page, nor on a phone', async () => {
     const page = await (await browser.newContext({ viewport: { width: 390, height: 844 } })).newPage();

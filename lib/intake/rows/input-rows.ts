@@ -43,7 +43,7 @@ export function partOf({ name, file, decimalMark }: InputSheet, place: number, r
     decimalMark: decimalMark ?? null,
     rows: rows.map(({ row, cells, marks, changedBy }): RawRow => {
       const raw = { row, cells: cellsOf(cells, marks ?? null, make) };
-      return changedBy == null ? raw : { ...raw, changedBy };
+      return changedBy === undefined || changedBy === null ? raw : { ...raw, changedBy };
     }),
   };
 }

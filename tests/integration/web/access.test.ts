@@ -47,8 +47,10 @@ const table: Readonly<Record<string, Line>> = {
   'api/batches/[batch]/revisions': { who: { GET: staff, POST: makers } },
   [revision]: reads(),
   [`${revision}/cell`]: reads('?sheet=Members&cell=A1'),
+  [`${revision}/changes`]: { who: { GET: staff, POST: makers }, body: {} },
   [`${revision}/csv`]: reads(),
   [`${revision}/frames/[number]`]: reads(),
+  [`${revision}/input`]: reads(),
   [`${revision}/json`]: reads(),
   [`${revision}/marked-copy`]: reads(),
   [`${revision}/progress`]: reads(),
@@ -77,6 +79,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${page}/reactions`]: reads(),
   [`${page}/read`]: reads(),
   [`${page}/run`]: reads(),
+  [`${page}/settings`]: reads(),
 };
 
 const files = readdirSync('app', { recursive: true, encoding: 'utf8' })

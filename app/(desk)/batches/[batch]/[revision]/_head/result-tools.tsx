@@ -26,6 +26,7 @@ export function ResultTools({ batch, letter, ready }: ResultToolsProps) {
       ) : (
         <Link href={pages.sheet(batch, letter, 'run')}>Run</Link>
       )}
+      <Link href={pages.sheet(batch, letter, 'settings')}>Settings</Link>
       <Link href={pages.sheet(batch, letter, 'read')}>What was read</Link>
     </>
   );

@@ -6,10 +6,11 @@ import { listRows } from '@/db/queries/lists';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
 import type { TableName } from '@/lib/tables/view';
+import { MadeFrom } from './made-from';
 import { stateWords } from './state-words';
 import { ResultTools } from './result-tools';
 
-export type SheetName = 'read' | 'run' | 'glance' | TableName;
+export type SheetName = 'read' | 'settings' | 'run' | 'glance' | TableName;
 
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
@@ -29,6 +30,7 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
   return (
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
+      <MadeFrom revision={revision} />
       {(hasResults || number > 0) && (
         <SheetIndex
           sheets={sheets.map((name) => ({

@@ -1,0 +1,58 @@
+import 'server-only';
+import type { z } from 'zod';
+import type { RevisionRecord } from '@/db/queries/revisions';
+import type { Person } from '@/lib/access/may';
+import { ApiError, notFound } from '@/lib/api/error';
+import type { changesInput } from '@/lib/api/inputs';
+import type { Change } from '@/lib/changes/change';
+import { changeWords } from '@/lib/changes/change-words';
+import { settingText } from '@/lib/changes/setting-text';
+import { readSetting, saysTheSame } from '@/lib/changes/setting-value';
+import { settingWords, type Settings } from '@/lib/model/settings';
+import { askForChange } from '@/worker/ask';
+import { queue, serverDatabase } from '@/worker/boot';
+
+/**
+ * Makes the next revision of a batch from one that was read, whatever became of that since: it stays as it is.
+ *
+ * @returns the new revision's letter; it is in state "reading" until its rows are read
+ * @throws {ApiError} bad-request naming the settings that are refused or stand so already; conflict where nothing was read
+ */
+export async function makeChange(
+  person: Person,
+  revision: RevisionRecord,
+  { changes, reason, run }: z.output<typeof changesInput>,
+): Promise<string> {
+  const settings = requireRead(revision);
+  refuse(changes, settings);
+  const made = await askForChange(queue(), serverDatabase(), person.office, {
+    from: revision.id,
+    person: person.id,
+    changes: changes.map((change) => ({ change, ...changeWords(change, settings) })),
+    reason,
+    run,
+  });
+  if (made === undefined) throw notFound('revision');
+  return made.letter;
+}
+
+/** @throws {ApiError} conflict where a revision is still being read, or nothing of it could be */
+export function requireRead({ state, settings, input, frames }: RevisionRecord): Settings {
+  if (state === 'reading') throw new ApiError('conflict', 'The sheets are still being read. Ask again in a moment.');
+  if (settings === null || input === null || frames === 0) {
+    throw new ApiError('conflict', 'No frame of this revision could be read. Mend its sheets and bring them in again.');
+  }
+  return settings;
+}
+
+function refuse(changes: readonly Change[], settings: Settings): void {
+  const fields: Record<string, string[]> = {};
+  for (const { setting, value } of changes) {
+    const { refused } = readSetting(setting, value);
+    const already = `${settingWords[setting]} is ${settingText(setting, settings) ?? value} already. Choose another value, or leave it out.`;
+    const sentence = refused ?? (saysTheSame(settings, setting, value) ? already : null);
+    if (sentence !== null) fields[setting] = [sentence];
+  }
+  const [first] = Object.values(fields);
+  if (first) throw new ApiError('bad-request', first[0] ?? '', { fields });
+}
