@@ -1,5 +1,6 @@
 import type { NumberStep, NumberTable } from '@/components/numbers/numbers-data';
 import type { BehindMember } from '@/lib/analysis/behind/behind-member';
+import type { BentMember } from '@/lib/analysis/behind/bent-member';
 import { memberLoads } from '@/lib/analysis/member-loads';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
@@ -15,7 +16,7 @@ export function loadsStep(
   labels: { readonly q: readonly string[]; readonly d: readonly string[] },
   units: NumberUnits,
 ): NumberStep {
-  const { fixedEnd, fixedEndByCase, toLoadVector } = behind;
+  const { fixedEnd, fixedEndByCase, toLoadVector, bent } = behind;
   const columns = fixedEndByCase.map(({ case: c, factor }) => ({ label: `${factorText(factor)} ${frame.cases[c]!.name}` }));
   const asked: NumberTable = {
     id: 'fixed-end',
@@ -38,12 +39,23 @@ export function loadsStep(
   const acting = actingTables(frame, state, index, units);
   return {
     title: 'Its loads, with the ends held',
-    words:
-      acting.length === 0
-        ? ['Nothing acts along it in this result: q_F is 0.']
-        : ['Loads as typed, turned into local axes, before their factor; self-weight among them. q_F = −∫ Nᵀ q dx with the shape functions of the member, joints put in.'], // prettier-ignore
-    tables: acting.length === 0 ? [] : [...acting, asked, share],
+    words: [
+      acting.length === 0 ? 'Nothing acts along it in this result.' : actingWords(behind),
+      ...(bent ? [bentWords(bent)] : []),
+    ],
+    tables: acting.length === 0 ? [] : [...acting, ...(behind.slack ? [] : [asked, share])],
   };
+}
+
+function actingWords({ bent, slack }: BehindMember): string {
+  const typed = 'Loads as typed, turned into local axes, before their factor; self-weight among them.';
+  if (slack) return `${typed} It is slack, so they stand on its nodes.`;
+  return bent ? typed : `${typed} q_F = −∫ Nᵀ q dx with the shape functions of the member, joints put in.`;
+}
+
+function bentWords({ loadScale }: BentMember): string {
+  const divided = loadScale === 1 ? '' : `, worked out under ${loadScale} times the loads and divided by ${loadScale}`;
+  return `q_F is that of the member under its axial force${divided}: it can’t be parted by cases. X and Y stand along and square to the undeformed axis.`;
 }
 
 function actingTables(frame: Frame, { factors }: ResultState, index: number, units: NumberUnits): NumberTable[] {

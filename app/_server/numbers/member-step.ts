@@ -1,5 +1,8 @@
 import type { NumberStep, NumberTable } from '@/components/numbers/numbers-data';
 import type { BehindMember } from '@/lib/analysis/behind/behind-member';
+import type { BentMember } from '@/lib/analysis/behind/bent-member';
+import type { JointStiffness } from '@/lib/analysis/joint-stiffness';
+import type { MemberData } from '@/lib/analysis/member-data';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { inPlane } from '@/lib/sections/in-plane';
@@ -18,7 +21,7 @@ export function memberStep(
   units: NumberUnits,
 ): NumberStep {
   const member = frame.members[index]!;
-  const { data, k, joints } = behind;
+  const { data, k, joints, bent } = behind;
   const section = frame.sections[member.section]!;
   const material = frame.materials[member.material]!;
   const plane = inPlane(section, member.turned);
@@ -52,25 +55,16 @@ export function memberStep(
     ['start joint', '', jointWords(data.startSpring, units)],
     ['end joint', '', jointWords(data.endSpring, units)],
   ];
-  const rigid = joints.f1 === 1 && joints.f2 === 1 && joints.shear === 0;
-  const terms: Line[] = [
-    ...(shears ? [['Φ', '12EI/(GAv L²)', joints.shear] as const] : []),
-    ...(rigid
-      ? []
-      : ([
-          ['f₁', 'fixity of the start: 1 rigid, 0 pinned; k/(k + a)', joints.f1],
-          ['f₂', 'fixity of the end', joints.f2],
-          ['c', 'carry-over, S₁₂/a with rigid ends', joints.carry],
-          ['D', '1 − c²(1 − f₁)(1 − f₂)', joints.D],
-        ] as const)),
-    made('S₁₁', rigid ? '4EI/L' : 'a f₁(1 − c²(1 − f₂))/D, a with rigid ends', k.S11, 1, 1),
-    made('S₁₂', rigid ? '2EI/L' : 'c a f₁ f₂/D', k.S12, 1, 1),
-    made('S₂₂', rigid ? '4EI/L' : 'a f₂(1 − c²(1 − f₁))/D', k.S22, 1, 1),
+  const terms: Line[] = bent ? bentTerms(bent, data, made) : plainTerms(joints, shears);
+  terms.push(
     made('k_a', 'EA/L', k.ka, 1, -1),
-    made('k_vv', '(S₁₁ + 2S₁₂ + S₂₂)/L²', k.kvv, 1, -1),
-    made('k_v1', '(S₁₁ + S₁₂)/L', k.kv1, 1, 0),
-    made('k_v2', '(S₁₂ + S₂₂)/L', k.kv2, 1, 0),
-  ];
+    made('k_vv', bent ? 'across, under N' : '(S₁₁ + 2S₁₂ + S₂₂)/L²', k.kvv, 1, -1),
+    made('k_v1', bent ? 'across, for a turn of the start, under N' : '(S₁₁ + S₁₂)/L', k.kv1, 1, 0),
+    made('k_v2', bent ? 'across, for a turn of the end, under N' : '(S₁₂ + S₂₂)/L', k.kv2, 1, 0),
+    made('S₁₁', bent ? 'with its joints, under N' : rotational(joints, '4EI/L', 'a f₁(1 − c²(1 − f₂))/D'), k.S11, 1, 1),
+    made('S₁₂', bent ? 'with its joints, under N' : rotational(joints, '2EI/L', 'c a f₁ f₂/D'), k.S12, 1, 1),
+    made('S₂₂', bent ? 'with its joints, under N' : rotational(joints, '4EI/L', 'a f₂(1 − c²(1 − f₁))/D'), k.S22, 1, 1),
+  );
   return {
     title: 'The member',
     words: [],
@@ -80,6 +74,50 @@ export function memberStep(
     ],
   };
 }
+
+type Made = (symbol: string, what: string, si: number, forces: 0 | 1, lengths: number) => Line;
+
+/** Stability-function terms of a member under its axial force (README §5). */
+function bentTerms(bent: BentMember, data: MemberData, made: Made): Line[] {
+  const { N, phi, s, sc, pieces, loadScale } = bent;
+  const scaled = loadScale === 1 ? '' : `, ${loadScale} times the result’s`;
+  const [first, last] = N;
+  const forces: Line[] =
+    Math.abs(first - last) <= 1e-9 * Math.max(Math.abs(first), Math.abs(last))
+      ? [made('N', `axial force it is bent under, tension positive${scaled}`, first, 1, 0)]
+      : [
+          made('N₁', `axial force at the start, tension positive${scaled}; it varies to`, first, 1, 0),
+          made('N₂', 'at the end', last, 1, 0),
+        ];
+  return [
+    ...forces,
+    ['φ', 'L √(|N|/EI), the larger N', phi],
+    ['s', 'S₁₁L/EI with rigid ends: 4 without axial force', s],
+    ['s c', 'S₁₂L/EI with rigid ends: 2 without axial force', sc],
+    ['pieces', pieces === 1 ? 'exact in one' : 'exact pieces, put together by elimination', pieces],
+    ...(Number.isFinite(data.GAv)
+      ? [['1 + N/GAv', 'share by which shear changes what N does', 1 + first / data.GAv] as const]
+      : []),
+  ];
+}
+
+function plainTerms(joints: JointStiffness, shears: boolean): Line[] {
+  return [
+    ...(shears ? [['Φ', '12EI/(GAv L²)', joints.shear] as const] : []),
+    ...(isRigid(joints)
+      ? []
+      : ([
+          ['f₁', 'fixity of the start: 1 rigid, 0 pinned; k/(k + a)', joints.f1],
+          ['f₂', 'fixity of the end', joints.f2],
+          ['c', 'carry-over S₁₂/S₁₁ with rigid ends', joints.carry],
+          ['D', '1 − c²(1 − f₁)(1 − f₂)', joints.D],
+        ] as const)),
+  ];
+}
+
+const isRigid = ({ f1, f2, shear }: JointStiffness): boolean => f1 === 1 && f2 === 1 && shear === 0;
+const rotational = (joints: JointStiffness, rigid: string, jointed: string): string =>
+  isRigid(joints) ? rigid : `${jointed}, a = (4 + Φ)/(1 + Φ) EI/L`;
 
 const table = (id: string, title: string, lines: readonly Line[]): NumberTable => ({
   id,

@@ -1,5 +1,5 @@
 import 'server-only';
-import type { NumbersData, NumberStep } from '@/components/numbers/numbers-data';
+import type { NumbersData, NumberStep, NumberTable } from '@/components/numbers/numbers-data';
 import { behindFrame } from '@/lib/analysis/behind/behind-frame';
 import { behindMember, type BehindMember } from '@/lib/analysis/behind/behind-member';
 import type { Frame } from '@/lib/model/frame';
@@ -76,7 +76,7 @@ export function numbersData(frame: Frame, state: ResultState, index: number, uni
       loadsStep(frame, state, index, behind, { q, d }, units),
       movesStep(behind, d, units),
       forcesStep(behind, units),
-      internalStep(state, index, units),
+      internalStep(state, index, behind, units),
     ],
     frame: frameStep(frame, whole, [start, end], units),
   };
@@ -120,22 +120,40 @@ function forcesStep({ byDisplacements, fixedEnd, endForces, stored }: BehindMemb
 }
 
 /** The same as N, V and M at both ends. */
-function internalStep({ endForces }: ResultState, index: number, units: NumberUnits): NumberStep {
+function internalStep({ endForces }: ResultState, index: number, { bent }: BehindMember, units: NumberUnits): NumberStep {
   const at = (place: number) => endForces[6 * index + place]!;
+  const V = bent ? (['(Y₁ + N ψ₁)/(1 + N/GAv)', '(−Y₂ + N ψ₂)/(1 + N/GAv)'] as const) : (['Y₁', '−Y₂'] as const);
   const lines = [
     ['N', 0, '−X₁', 'X₂', 'tension positive'],
-    ['V', 0, 'Y₁', '−Y₂', 'V = dM/dx'],
+    ['V', 0, ...V, 'V = dM/dx'],
     ['M', 1, '−m₁', 'm₂', 'positive where it pulls the local −y face'],
   ] as const;
+  const turned: NumberTable = {
+    id: 'turns',
+    title: 'Rotations ψ of its own ends, within its joints',
+    corner: 'rotation',
+    columns: [
+      { label: 'start', unit: 'rad' },
+      { label: 'end', unit: 'rad' },
+    ],
+    rows: [{ label: 'ψ', cells: bent?.turns ?? [] }],
+  };
   return {
     title: 'The same as internal forces',
-    words: [],
+    words: bent ? ['Second order: V stands square to the deflected axis, Y square to the undeformed one.'] : [],
     tables: [
+      ...(bent ? [turned] : []),
       {
         id: 'internal',
         title: 'N, V, M at its ends',
         corner: 'force',
-        columns: [{ label: 'at the start is', words: true }, { label: 'start' }, { label: 'at the end is', words: true }, { label: 'end' }, { label: 'sign', words: true }], // prettier-ignore
+        columns: [
+          { label: 'at the start is', words: true },
+          { label: 'start' },
+          { label: 'at the end is', words: true },
+          { label: 'end' },
+          { label: 'sign', words: true },
+        ],
         rows: lines.map(([label, lengths, first, last, sign], i) => ({
           label,
           unit: unitText(units, 1, lengths),
