@@ -1,11 +1,13 @@
 /** Which samples there are. Invented projects of an invented office. */
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { bracedBents } from './braced-bents';
 import { brackets } from './brackets';
 import { canopiesUs } from './canopies-us';
+import { directAnalysis } from './direct-analysis';
 import { familySamples } from './families';
 import { messy, mended, messyOnes } from './messy';
-import { portalSheds } from './portal-sheds';
+import { portalSheds, slenderSheds } from './portal-sheds';
 import { racks } from './racks';
 import { walkways } from './walkways';
 import { writeSemicolonCsv, writeWorkbook } from './write';
@@ -18,6 +20,9 @@ export async function makeSamples(folder: string): Promise<void> {
   await writeWorkbook(folder, 'pipe-rack-24.xlsx', racks(24));
   await writeWorkbook(folder, 'pipe-rack-12.xlsx', racks(12));
   await writeWorkbook(folder, 'canopies-us-36.xlsx', canopiesUs());
+  await writeWorkbook(folder, 'slender-sheds-24.xlsx', slenderSheds());
+  await writeWorkbook(folder, 'braced-bents-12.xlsx', bracedBents());
+  await writeWorkbook(folder, 'direct-analysis-us-9.xlsx', directAnalysis());
   writeSemicolonCsv(join(folder, 'walkways-csv'), walkways());
   await writeWorkbook(folder, 'messy.xlsx', messy());
   await writeWorkbook(folder, 'messy-mended.xlsx', mended());

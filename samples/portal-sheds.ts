@@ -67,7 +67,7 @@ const headings = [
 const round = (value: number, digits: number): number => Number(value.toFixed(digits));
 
 /** Depots of twenty sheds each: spans grow within a depot, snow and wind differ between depots. */
-function variant(depot: number, shed: number): SampleCell[] {
+function variant(depot: number, shed: number, base: 'fixed' | 'pinned' = 'fixed'): SampleCell[] {
   const span = 10 + shed * 0.5;
   const eaves = [4.2, 4.8, 5.4, 4.5, 5.0, 6.0][depot % 6] ?? 5;
   const rise = round((span / 2) * Math.tan(((6 + (depot % 4)) * Math.PI) / 180), 3);
@@ -84,10 +84,32 @@ function variant(depot: number, shed: number): SampleCell[] {
   const bottom = depot % 12 === 6 && shed > 15 ? 3 : 1;
   return [
     `T${String(depot + 1).padStart(2, '0')}-${String(shed + 1).padStart(2, '0')}`, 'portal', span, eaves, rise, spacing, column, rafter,
-    'fixed', 0.15, 0.25, 0.6, snow, round(0.7 * pressure, 3), round(-0.5 * pressure, 3), round(-0.4 * pressure, 3),
+    base, 0.15, 0.25, 0.6, snow, round(0.7 * pressure, 3), round(-0.5 * pressure, 3), round(-0.4 * pressure, 3),
     round(-0.3 * pressure, 3), round(-0.3 * pressure, 3), round(-0.4 * pressure, 3), round(-0.5 * pressure, 3),
     round(0.7 * pressure, 3), 1, 1, bottom, 0.15,
   ]; // prettier-ignore
+}
+
+/**
+ * Two dozen sheds on pinned bases, soft enough for second order: each combination on its deformed shape, strength leaning
+ * both ways, members that shear.
+ */
+export function slenderSheds(): SampleSheet[] {
+  const more: SampleCell[][] = [['analysis', 'second order'], ['imperfections', 'EN 1993-1-1'], ['shear deformation', 'yes']]; // prettier-ignore
+  const rows = setup.rows.map((row) => (row[0] === 'title' ? ['title', 'Tarnwick depots, sheds on pinned bases'] : row));
+  const lighter = (list: readonly string[], section: SampleCell, by: number): string =>
+    list[Math.max(0, list.indexOf(String(section)) - by)] ?? '';
+  const picked = Array.from({ length: 24 }, (_, i) => {
+    const row = variant(i % 4, 2 + Math.floor(i / 2), 'pinned');
+    row[3] = round(1.3 * Number(row[3]), 2);
+    row[6] = lighter(columns, row[6] ?? '', 2);
+    row[7] = lighter(families, row[7] ?? '', 1);
+    return row;
+  });
+  const softer = { ...limits, rows: [limits.rows[0] ?? [], ['apex', 'displacement', 'y', 110, null]] };
+  const limit = setup.rows.findIndex((row) => row[0] === 'sway ratio');
+  rows[limit] = ['sway ratio', 70];
+  return [{ ...setup, rows: [...rows, ...more] }, { name: 'Variants', rows: [headings, ...picked] }, combinations, softer];
 }
 
 /** @param depots 12 depots make the sample of 240, 50 the batch of 1,000 */

@@ -29,6 +29,9 @@ describe('samples', () => {
     ['brackets-150.xlsx', 150],
     ['pipe-rack-24.xlsx', 24],
     ['canopies-us-36.xlsx', 36],
+    ['slender-sheds-24.xlsx', 24],
+    ['braced-bents-12.xlsx', 12],
+    ['direct-analysis-us-9.xlsx', 9],
     ['messy-mended.xlsx', 36],
     ['families/portal.xlsx', 2],
     ['families/bracket.xlsx', 2],
@@ -57,6 +60,26 @@ describe('samples', () => {
     const counts = verdicts(await read('portal-sheds-240.xlsx'));
     for (const verdict of ['within', 'near', 'over', 'not checked']) expect(counts[verdict]).toBeGreaterThan(0);
     expect(counts['not checked']).toBeLessThan(24);
+  });
+
+  it.each([
+    ['slender-sheds-24.xlsx', { imperfections: 'EN 1993-1-1', shearDeformation: true }],
+    ['direct-analysis-us-9.xlsx', { imperfections: 'AISC 360', stiffnessReduction: 'AISC 360' }],
+  ] as const)('%s is solved in second order, leaning both ways, and most of it checked', async (name, settings) => {
+    const intake = await read(name);
+    expect(intake.settings).toMatchObject({ analysis: 'second order', ...settings });
+    const analyser = createAnalyser();
+    let checked = 0;
+    for (const { id, frame } of intake.frames) {
+      const { status, failure, states, verdict } = evaluateFrame(analyser, frame!, intake.settings, { second: true, all: false });
+      expect(status, `${id}: ${failure?.message}`).toBe('solved');
+      const strength = states.filter((state) => state.purpose === 'strength');
+      expect(strength.map((state) => [state.order, state.name.endsWith('→'), state.method?.imperfection])).toEqual(
+        strength.map((_, i) => (i % 2 === 0 ? [2, true, 'right'] : [2, false, 'left'])),
+      );
+      if (verdict !== 'not checked') checked += 1;
+    }
+    expect(checked).toBeGreaterThan(0.7 * intake.frames.length);
   });
 
   it('the messy workbook stops only the frames its slips touch', async () => {
