@@ -1,10 +1,10 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
-import { analyseSet, type SetJob, type SetResult } from './analyse-set';
+import { analyseSet, type SetJob } from './analyse-set';
 import type { SolvedState } from './certificate';
 import { bucklingSpace } from './critical/critical-load-factor';
-import { stateFailure, tieFailure, troubleWords } from './failures';
+import { stateFailure, tieFailure, troubleWords, type StateTrouble } from './failures';
 import type { SolvedCases } from './first-order-cases';
 import { imperfectionForces } from './imperfections/imperfection-forces';
 import { planStates, type PlannedState } from './plan-states';
@@ -61,29 +61,45 @@ function alone(job: SetJob, planned: PlannedState): SolvedState | Failure {
 }
 
 function withTies(job: SetJob, planned: PlannedState): SolvedState | Failure {
+  const first = settled(job, { ...planned, order: 1, reduced: false }, []);
+  if ('code' in first || (planned.order === 1 && !planned.reduced)) return 'code' in first ? first : first.found;
+  // to second order from the set found to first order: thin ties that are pressed at first would buckle before they are let go
+  const found = settled(job, planned, first.slack);
+  return 'code' in found ? found : found.found;
+}
+
+/** One state, its ties settled from a first set. */
+function settled(
+  job: SetJob,
+  planned: PlannedState,
+  start: readonly number[],
+): { readonly found: SolvedState; readonly slack: readonly number[] } | Failure {
   const { frame, ties } = job;
   // passes of sets that were left again count too
   let iterations = 0;
-  let failed: Extract<SetResult, { ok: false }> | null = null;
-  const settled = settleTies(ties, (slack) => {
-    const result = analyseSet(job, planned, slack);
-    if (!result.ok) {
-      failed = result;
-      const { trouble } = result;
-      const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
-      return { ok: false, why, caught: trouble.kind === 'free' && trouble.caught };
-    }
-    iterations += result.state.method?.iterations ?? 1;
-    return { ok: true, solution: result, ...tieForces(frame, result.state, ties) };
-  });
-  if (settled.ok) {
-    const { state, ...rest } = settled.solution;
-    return { ...rest, state: { ...state, method: state.method && { ...state.method, iterations } } };
+  let trouble: StateTrouble | null = null;
+  const result = settleTies<SolvedState>(
+    ties,
+    (slack) => {
+      const trial = analyseSet(job, planned, slack);
+      if (!trial.ok) {
+        trouble = trial.trouble;
+        const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
+        return { ok: false, why, caught: trouble.kind === 'free' && trouble.caught };
+      }
+      iterations += trial.state.method?.iterations ?? 1;
+      return { ok: true, solution: trial, ...tieForces(frame, trial.state, ties) };
+    },
+    start,
+  );
+  if (result.ok) {
+    const { state, outOfBalance, handled } = result.solution;
+    const method = state.method && { ...state.method, iterations };
+    return { found: { state: { ...state, method }, outOfBalance, handled }, slack: result.slack };
   }
-  if (typeof settled.why === 'string') return tieFailure(frame, planned.name, settled.members, settled.why);
-  if (settled.members.length === 0 && failed !== null) {
-    const { trouble } = failed as Extract<SetResult, { ok: false }>;
-    return stateFailure(frame, planned.name, planned.loadScale, planned.reduced, trouble);
-  }
-  return tieFailure(frame, planned.name, settled.members, settled.why.trial);
+  if (typeof result.why === 'string') return tieFailure(frame, planned.name, result.members, result.why);
+  const kept: StateTrouble | null = trouble;
+  if (kept !== null && (kept as StateTrouble).kind !== 'free')
+    return stateFailure(frame, planned.name, planned.loadScale, planned.reduced, kept);
+  return tieFailure(frame, planned.name, result.members, result.why.trial);
 }

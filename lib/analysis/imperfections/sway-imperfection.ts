@@ -50,7 +50,8 @@ export function swayImperfection(frame: Frame, columns: readonly Column[], endFo
     const lowest = pieces.find((piece) => piece.foot === foot) ?? pieces[0]!;
     return compression(endForces, lowest.member);
   });
-  const compressed = carried.filter((N) => N > 0);
+  // what rounding leaves on a column that carries nothing is no compression
+  const compressed = carried.filter((N) => N > 1e-6 * Math.max(...carried));
   const mean = compressed.reduce((sum, N) => sum + N, 0) / compressed.length;
   const m = compressed.filter((N) => N >= 0.5 * mean * (1 - 1e-9)).length;
   return initialSway(high - low, Math.max(1, m));

@@ -31,22 +31,26 @@ const mostPasses = 50;
 
 /**
  * Which tension-only members are slack: taut ones without tension are let go, slack ones that would be stretched are taken
- * up again, from all taut, until none changes.
+ * up again, from a first set, until none changes.
  *
  * All of them change at once first, which settles almost every frame in two or three passes; where a set comes up again, or
  * the frame can't stand with one, it is begun anew with only the worst changing in each pass. There a tie without any force
  * stays taut if the frame could move freely without it and yet some tie would catch it either way: a braced bay under
  * gravity alone.
  *
- * @param ties members, ascending   @param analyse one set of slack members, ascending
+ * @param ties members, ascending   @param analyse one set of slack members, ascending   @param start slack at first
  */
-export function settleTies<T>(ties: readonly number[], analyse: (slack: readonly number[]) => TieTrial<T>): SettledTies<T> {
+export function settleTies<T>(
+  ties: readonly number[],
+  analyse: (slack: readonly number[]) => TieTrial<T>,
+  start: readonly number[] = [],
+): SettledTies<T> {
   let passes = 0;
   const trial = (slack: readonly number[]): TieTrial<T> => {
     passes++;
     return analyse(slack);
   };
-  return allAtOnce(ties, trial, () => passes) ?? oneByOne(ties, trial, () => passes);
+  return allAtOnce(ties, start, trial, () => passes) ?? oneByOne(ties, start, trial, () => passes);
 }
 
 const ascending = (members: Iterable<number>): number[] => [...members].sort((a, b) => a - b);
@@ -54,16 +58,21 @@ const ascending = (members: Iterable<number>): number[] => [...members].sort((a,
 type Analyse<T> = (slack: readonly number[]) => TieTrial<T>;
 
 /** Null where one by one must be tried. */
-function allAtOnce<T>(ties: readonly number[], analyse: Analyse<T>, passes: () => number): SettledTies<T> | null {
+function allAtOnce<T>(
+  ties: readonly number[],
+  start: readonly number[],
+  analyse: Analyse<T>,
+  passes: () => number,
+): SettledTies<T> | null {
   const seen = new Set<string>();
   const changed = new Set<number>();
-  let slack: readonly number[] = [];
+  let slack = start;
   while (!seen.has(slack.join())) {
     if (passes() >= mostPasses) return { ok: false, members: ascending(changed), passes: passes(), why: 'passes' };
     seen.add(slack.join());
     const trial = analyse(slack);
-    if (!trial.ok && slack.length > 0) return null;
-    if (!trial.ok) return { ok: false, members: [], passes: passes(), why: { trial: trial.why } };
+    if (!trial.ok && slack !== start) return null;
+    if (!trial.ok) return { ok: false, members: slack, passes: passes(), why: { trial: trial.why } };
     const turning = wrong(ties, slack, trial.forces, trial.nothing);
     if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes: passes() };
     for (const member of turning) changed.add(member);
@@ -72,11 +81,16 @@ function allAtOnce<T>(ties: readonly number[], analyse: Analyse<T>, passes: () =
   return null;
 }
 
-function oneByOne<T>(ties: readonly number[], analyse: Analyse<T>, passes: () => number): SettledTies<T> {
-  const seen = new Set<string>(['']);
+function oneByOne<T>(
+  ties: readonly number[],
+  start: readonly number[],
+  analyse: Analyse<T>,
+  passes: () => number,
+): SettledTies<T> {
+  const seen = new Set<string>([start.join()]);
   const changed = new Set<number>();
   const kept = new Set<number>();
-  let slack: readonly number[] = [];
+  let slack = start;
   let trial = analyse(slack);
   const stopped = (why: 'repeated' | 'passes' | { trial: string }, members: Iterable<number>): SettledTies<T> => ({
     ok: false,
