@@ -12,6 +12,14 @@ export interface PublishedCase {
   readonly supports: Readonly<Record<string, PublishedSupport>>;
   readonly loads: readonly PublishedLoad[];
   readonly expected: readonly Expected[];
+  /** Printed formulas that ask nothing of a solution. */
+  readonly formulas?: readonly PrintedFormula[];
+}
+export interface PrintedFormula {
+  readonly what: string;
+  readonly formula: string;
+  readonly value: number;
+  readonly relative: number;
 }
 interface PublishedMember {
   readonly ends: readonly string[];
@@ -20,6 +28,9 @@ interface PublishedMember {
   readonly I: number;
   readonly joints?: readonly string[];
   readonly axialOnly?: boolean;
+  /** Shear modulus and area, where shear deformation is asked for. */
+  readonly G?: number;
+  readonly Av?: number;
 }
 interface PublishedSupport {
   readonly ux?: string | number;
@@ -64,6 +75,8 @@ export interface Ask {
   readonly end?: string;
   readonly quantity?: string;
   readonly sign?: number;
+  /** With shear deformation. */
+  readonly shear?: boolean;
 }
 
 const metres: Readonly<Record<string, number>> = { m: 1, mm: 1e-3, in: 0.0254, ft: 0.3048 };
@@ -92,8 +105,18 @@ export function publishedFrame(published: PublishedCase): Frame {
   const members = memberNames.map((id, i): Member => {
     const m = published.members[id]!;
     const heat = thermal.find((load) => load.member === id);
-    sections.push(section(id, m.A * length ** 2, m.I * length ** 4, heat?.depth === undefined ? null : heat.depth * length));
-    materials.push(material(id, (m.E * force) / length ** 2, heat?.expansion ?? null));
+    sections.push(
+      section(
+        id,
+        m.A * length ** 2,
+        m.I * length ** 4,
+        heat?.depth === undefined ? null : heat.depth * length,
+        m.Av === undefined ? null : m.Av * length ** 2,
+      ),
+    );
+    materials.push(
+      material(id, (m.E * force) / length ** 2, heat?.expansion ?? null, m.G === undefined ? null : (m.G * force) / length ** 2),
+    );
     return {
       id,
       start: nodeNames.indexOf(m.ends[0]!),
@@ -210,7 +233,7 @@ function memberLoad(
   return { ...on, kind: 'temperature', dT_K: load.dT!, dTAcross_K: load.dTAcross ?? 0 };
 }
 
-function section(name: string, A_m2: number, I_m4: number, depth_m: number | null): Section {
+function section(name: string, A_m2: number, I_m4: number, depth_m: number | null, AvTyped_m2: number | null): Section {
   return {
     name,
     designation: null,
@@ -218,7 +241,7 @@ function section(name: string, A_m2: number, I_m4: number, depth_m: number | nul
     made: null,
     dimensions: null,
     properties: {
-      A_m2, I_m4, depth_m, Wtop_m3: null, Wbottom_m3: null, width_m: null, AvTyped_m2: null, AvPeak_m2: null,
+      A_m2, I_m4, depth_m, Wtop_m3: null, Wbottom_m3: null, width_m: null, AvTyped_m2, AvPeak_m2: null,
       AvPeakTurned_m2: null, AvShear_m2: null, AvShearTurned_m2: null, Wpl_m3: null, Iminor_m4: null, Wminor_m3: null,
       WplMinor_m3: null, It_m4: null, Iw_m6: null, t_m: null,
     }, // prettier-ignore
@@ -226,9 +249,9 @@ function section(name: string, A_m2: number, I_m4: number, depth_m: number | nul
   };
 }
 
-function material(name: string, E_Pa: number, expansion_perK: number | null): Material {
+function material(name: string, E_Pa: number, expansion_perK: number | null, G_Pa: number | null): Material {
   return {
-    name, grade: null, standard: null, E_Pa, G_Pa: null, fy_Pa: null, fu_Pa: null, density_kg_m3: null, expansion_perK,
+    name, grade: null, standard: null, E_Pa, G_Pa, fy_Pa: null, fu_Pa: null, density_kg_m3: null, expansion_perK,
     sources: {},
   }; // prettier-ignore
 }

@@ -22,18 +22,21 @@ for (let n = 0; n <= most; n++) {
 
 /**
  * Lowers the degree of c₀ + c₁ t + …, 0 ≤ t ≤ 1, as far as it changes by no more than `allowed` anywhere, and by nothing at
- * both ends (economisation, Lanczos 1938); to at most `cap` whatever that changes.
+ * both ends (economisation, Lanczos 1938).
  *
- * @param c coefficients from `at` on, changed   @returns the degree left
+ * @param c coefficients from `at` on, changed   @returns the degree left, or −1 where going down to `cap` changes more than `beyond`
  */
-export function economise(c: Float64Array, at: number, degree: number, allowed: number, cap: number): number {
+export function economise(c: Float64Array, at: number, degree: number, allowed: number, cap: number, beyond: number): number {
   let spent = 0;
   let n = degree;
   for (; n > 1; n--) {
     const last = c[at + n]!;
     if (last === 0) continue;
     spent += Math.abs(last) * least[n]!;
-    if (spent > allowed && n <= cap) break;
+    if (spent > allowed) {
+      if (n <= cap) break;
+      if (spent > beyond) return -1;
+    }
     const shape = shapes[n]!;
     for (let i = 1; i < n; i++) c[at + i] = c[at + i]! - last * shape[i]!;
   }

@@ -31,11 +31,22 @@ function piecesIn(m: MemberData, length: number, size: number, low: number): num
   return Math.max(1, Math.ceil((Math.sqrt(size / (m.EI * per)) * length) / longest));
 }
 
-/** Cuts a member's stretches into pieces. @param N axial force at its start, as it bends  @param scale of the loading's n to it */
-export function cut(m: MemberData, loading: MemberLoading, N: number, scale: number, into: LinePieces): LinePieces {
+/**
+ * Cuts a member's stretches into pieces.
+ *
+ * @param N axial force at its start, as it bends   @param scale of the loading's n to it   @param finer times as many pieces
+ */
+export function cut(
+  m: MemberData,
+  loading: MemberLoading,
+  N: number,
+  scale: number,
+  finer: number,
+  into: LinePieces,
+): LinePieces {
   const { stretches, count } = loading;
   let total = 0;
-  for (let i = 0; i < count; i++) total += numberOf(m, loading, i, N, scale);
+  for (let i = 0; i < count; i++) total += finer * numberOf(m, loading, i, N, scale);
   const out = total * givenStride <= into.given.length ? into : emptyPieces(2 * total);
   let from = 0;
   let k = 0;
@@ -44,7 +55,7 @@ export function cut(m: MemberData, loading: MemberLoading, N: number, scale: num
     const l = stretches[o]!;
     const n1 = scale * stretches[o + 2]!;
     const n2 = scale * stretches[o + 3]!;
-    const pieces = numberOf(m, loading, i, N, scale);
+    const pieces = finer * numberOf(m, loading, i, N, scale);
     const h = l / pieces;
     for (let j = 0; j < pieces; j++) {
       const s = j * h;

@@ -29,16 +29,20 @@ export function secondOrderLine(frame: Frame, state: ResultState, member: number
   const e = 6 * member;
   const N0 = state.endForces[e]!;
   combineLoading(frame, member, state.factors, 1, loading);
-  pieces = cut(m, loading, scale * N0, scale, pieces);
   const d = state.displacements;
   const [a, b] = [3 * m.start, 3 * m.end];
   const v1 = d[a + 1]! * m.cos - d[a]! * m.sin;
   const v2 = d[b + 1]! * m.cos - d[b]! * m.sin;
   const ends = { v1, v2, phi1: d[a + 2]!, phi2: d[b + 2]!, V: state.endForces[e + 1]!, M: state.endForces[e + 2]! };
-  if (damping(m) > dampest) along(m, tieStarts(m, loading, pieces, ends));
-  else follow(m, scale * N0, ends);
   const u1 = d[a]! * m.cos + d[a + 1]! * m.sin;
-  return written(m, state.endForces, e, u1, v2, scale);
+  // where an axial force that varies brings in higher powers than are gone to, pieces are halved until they don't matter
+  for (let finer = 1; ; finer *= 2) {
+    pieces = cut(m, loading, scale * N0, scale, finer, pieces);
+    if (damping(m) > dampest) along(m, tieStarts(m, loading, pieces, ends));
+    else follow(m, scale * N0, ends);
+    const segments = written(m, state.endForces, e, u1, v2, scale, finer < 16);
+    if (segments) return { length: m.length, segments };
+  }
 }
 
 export interface LineEnds {
@@ -138,17 +142,28 @@ function largest(c: Float64Array, first: number): number {
   return most;
 }
 
-/** Coefficients in powers of s, of as low a degree as may be. */
-function lowered(c: Float64Array, k: number, allowed: number, cap: number): number[] {
+/** Coefficients in powers of s, of as low a degree as may be; null where that is above `cap`. */
+function lowered(c: Float64Array, k: number, allowed: number, beyond: number, cap: number): number[] | null {
   const o = terms * k;
-  const degree = economise(c, o, terms - 1, allowed, cap);
+  const degree = economise(c, o, terms - 1, allowed, cap, beyond === Infinity ? beyond : beyond * allowed);
+  if (degree < 0) return null;
   const out: number[] = [c[o]!];
   const per = 1 / pieces.given[givenStride * k + 1]!;
   for (let i = 1, power = per; i <= degree; i++, power *= per) out.push(c[o + i]! * power);
   return out;
 }
 
-function written(m: MemberData, forces: Float64Array, e: number, u1: number, v2: number, scale: number): MemberLine {
+/** The segments; null where a piece asks for a higher degree than may be, if `strict`. */
+function written(
+  m: MemberData,
+  forces: Float64Array,
+  e: number,
+  u1: number,
+  v2: number,
+  scale: number,
+  strict: boolean,
+): Segment[] | null {
+  const beyond = strict ? 4 : Infinity;
   const [ofV, ofM, ofv] = [close * largest(pieces.V, 0), close * largest(pieces.M, 0), close * largest(pieces.v, 2)];
   const segments: Segment[] = [];
   const flat = (x: number, at: number, u: number, v: number): Segment => ({
@@ -162,17 +177,14 @@ function written(m: MemberData, forces: Float64Array, e: number, u1: number, v2:
     const l = pieces.given[g + 1]!;
     const [n0, n1, n2] = [pieces.given[g + 2]! / scale, pieces.given[g + 3]! / scale, pieces.given[g + 4]! / scale];
     const stretch = [u, n0 / m.EA + loading.strain, n1 / m.EA / 2, n2 / m.EA / 3] as const;
-    segments.push({
-      from,
-      to: k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length,
-      N: [n0, n1, n2],
-      V: lowered(pieces.V, k, ofV, mostForces),
-      M: lowered(pieces.M, k, ofM, mostForces),
-      u: stretch,
-      v: lowered(pieces.v, k, ofv, mostDeflection),
-    });
+    const V = lowered(pieces.V, k, ofV, beyond, mostForces);
+    const M = V && lowered(pieces.M, k, ofM, beyond, mostForces);
+    const v = M && lowered(pieces.v, k, ofv, beyond, mostDeflection);
+    if (!V || !M || !v) return null;
+    const to = k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length;
+    segments.push({ from, to, N: [n0, n1, n2], V, M, u: stretch, v });
     u += l * (stretch[1] + l * (stretch[2] + l * stretch[3]));
   }
   if (loading.endJump) segments.push(flat(m.length, 3, u, v2));
-  return { length: m.length, segments };
+  return segments;
 }
