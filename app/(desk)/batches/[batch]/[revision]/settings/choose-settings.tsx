@@ -44,6 +44,8 @@ export function ChooseSettings({ batch, letter, next, frames, offered }: ChooseS
     onSuccess: ({ revision }) => router.push(pages.sheet(batch, revision, 'read')),
   });
   const fields = make.error instanceof RequestError ? (make.error.body.fields ?? {}) : {};
+  // the sentence stands at the field it is about, where that is in sight
+  const atField = Object.keys(fields).some((name) => name === 'reason' || offered.some(({ setting }) => setting === name));
   const busy = make.isPending || make.isSuccess;
   const ready = changed.length > 0 && !busy;
   const all = frames.toLocaleString('en-GB');
@@ -88,7 +90,7 @@ export function ChooseSettings({ batch, letter, next, frames, offered }: ChooseS
           disabled={busy}
           onChange={(event) => setReason(event.target.value)}
         />
-        {make.error && <Notice kind="error">{make.error.message}</Notice>}
+        {make.error && !atField && <Notice kind="error">{make.error.message}</Notice>}
         <div className="make-change-acts">
           <Button look="filled" disabled={!ready} onClick={() => make.mutate(true)}>
             Make revision {next} and run {frames === 1 ? 'its frame' : `${all} frames`}

@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import { pageRevision, type RevisionParams } from '@/app/_server/page-revision';
 import { settingsOffered, settingsShown } from '@/app/_server/settings-shown';
 import { SettingTable } from '@/components/changes/setting-table';
-import { ButtonLink } from '@/components/ui/button';
+import { Notice } from '@/components/ui/notice';
 import { Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { letterOf, listRevisions } from '@/db/queries/revisions';
@@ -13,52 +13,72 @@ import { ChooseSettings } from './choose-settings';
 
 export const metadata: Metadata = { title: 'Settings' };
 
+const stillReading = 'The sheets are still being read. Open this page again in a moment.';
+const nothingRead = 'No frame of this revision could be read, so it has no settings. Mend its sheets and bring them in again.';
+
 /** How a revision is analysed and checked, where each setting comes from, and the next revision with others. */
 export default async function SettingsPage({ params }: { readonly params: Promise<RevisionParams> }) {
   const { person, revision } = await pageRevision(params, 'settings');
   const { office, batch, letter, settings, origins, frames, framesStopped } = revision;
-  const canRun = frames - framesStopped;
-  const next = letterOf((await listRevisions(db(), office, batch)).length);
-  const read = settings !== null && origins !== null && frames > 0;
+  const revisions = await listRevisions(db(), office, batch);
+  const latest = revisions.at(-1)?.letter ?? letter;
+  const next = letterOf(revisions.length);
+  const mayChange = may(person, 'change a revision');
+  if (settings === null || origins === null || frames === 0) {
+    return (
+      <Sheet>
+        <RevisionHead revision={revision} sheet="settings" />
+        <Zone title="Settings" level={1}>
+          <p>{revision.state === 'reading' ? stillReading : nothingRead}</p>
+        </Zone>
+      </Sheet>
+    );
+  }
+  const shown = (
+    <Zone
+      title={`Settings of revision ${letter}`}
+      level={1}
+      aside={
+        <a className="link" href={api.part(batch, letter, 'input')} download>
+          Input workbook
+        </a>
+      }
+    >
+      <SettingTable settings={settingsShown(settings, origins)} />
+      <p className="setting-note">
+        The input workbook holds the sheets with every change made on screen. Brought in anew it gives the same frames.
+      </p>
+    </Zone>
+  );
+  const choose = (
+    <Zone title={`Choose others for revision ${next}`} note={`${letter} stays as it is, with its results`}>
+      {latest !== letter && (
+        <Notice>
+          The latest revision is {latest}. What is chosen here starts from {letter}: what was changed or brought in after it is
+          not in {next}.
+        </Notice>
+      )}
+      <ChooseSettings
+        // a form of its own for each revision: what was typed for one is nothing to another
+        key={`${batch} ${letter}`}
+        batch={batch}
+        letter={letter}
+        next={next}
+        frames={frames - framesStopped}
+        offered={settingsOffered(settings)}
+      />
+    </Zone>
+  );
   return (
     <Sheet>
       <RevisionHead revision={revision} sheet="settings" />
-      {!read ? (
-        <Zone title="Settings" level={1}>
-          <p>
-            {revision.state === 'reading'
-              ? 'The sheets are still being read. Open this page again in a moment.'
-              : 'No frame of this revision could be read, so it has no settings. Mend its sheets and bring them in again.'}
-          </p>
-        </Zone>
+      {mayChange ? (
+        <div className="grid min-[1100px]:grid-cols-[minmax(0,480fr)_minmax(0,920fr)]">
+          <div className="min-w-0">{shown}</div>
+          <div className="border-hair min-w-0 max-[1099px]:border-t min-[1100px]:border-l">{choose}</div>
+        </div>
       ) : (
-        <>
-          <Zone
-            title={`Settings of revision ${letter}`}
-            note="how its frames are analysed and checked"
-            level={1}
-            aside={
-              <ButtonLink href={api.part(batch, letter, 'input')} download>
-                Download the input workbook
-              </ButtonLink>
-            }
-          >
-            <SettingTable settings={settingsShown(settings, origins)} />
-          </Zone>
-          {may(person, 'change a revision') && (
-            <Zone title={`Choose others for revision ${next}`} note={`${letter} stays as it is, with its results`}>
-              <ChooseSettings
-                // a form of its own for each revision: what was typed for one is nothing to another
-                key={`${batch} ${letter}`}
-                batch={batch}
-                letter={letter}
-                next={next}
-                frames={canRun}
-                offered={settingsOffered(settings)}
-              />
-            </Zone>
-          )}
-        </>
+        shown
       )}
     </Sheet>
   );
