@@ -2,7 +2,8 @@ import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { ResultState, StateMethod } from '@/lib/results/result';
 import type { SolvedState } from './certificate';
-import { criticalLoadFactor, type BucklingSpace } from './critical/critical-load-factor';
+import type { BucklingSpace } from './critical/buckling-trial';
+import { nextCriticalLoadFactor, type CriticalMemory } from './critical/neighbour-critical';
 import type { SolvedCases } from './first-order-cases';
 import type { StateTrouble } from './failures';
 import type { ImperfectionForces } from './imperfections/imperfection-forces';
@@ -24,6 +25,7 @@ export interface SetJob {
   readonly ties: readonly number[];
   readonly space: SecondOrderSpace;
   readonly buckling: BucklingSpace;
+  readonly critical: CriticalMemory;
   readonly forces: ImperfectionForces | null;
   /** First-order states of the combination at hand, by its slack members. */
   readonly firsts: Map<string, FirstOrder>;
@@ -179,9 +181,9 @@ function without(job: SetJob, combination: number, slack: readonly number[]): Fi
 }
 
 /** α_cr of the combination with its slack members left out; the same for both directions of its imperfections. */
-function alphaOf({ frame, t, solved, buckling }: SetJob, first: FirstOrder): number | null {
+function alphaOf({ frame, t, solved, buckling, critical }: SetJob, first: FirstOrder): number | null {
   if (first.alpha === undefined)
-    first.alpha = criticalLoadFactor(frame, t, solved.angles, solved.diagonal, first.state, buckling);
+    first.alpha = nextCriticalLoadFactor(frame, t, solved.angles, solved.diagonal, first.state, buckling, critical);
   return first.alpha;
 }
 

@@ -3,7 +3,8 @@ import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
 import { analyseSet, type SetJob } from './analyse-set';
 import type { SolvedState } from './certificate';
-import { bucklingSpace } from './critical/critical-load-factor';
+import { bucklingSpace } from './critical/buckling-trial';
+import { criticalMemory } from './critical/neighbour-critical';
 import { stateFailure, tieFailure, troubleWords, type StateTrouble } from './failures';
 import type { SolvedCases } from './first-order-cases';
 import { imperfectionForces } from './imperfections/imperfection-forces';
@@ -39,6 +40,7 @@ export function combinationStates(
     ties,
     space: secondOrderSpace(frame, t),
     buckling: bucklingSpace(t),
+    critical: criticalMemory(frame, t),
     forces: imperfectionForces(frame, settings),
     firsts: new Map(),
     reductions: null,

@@ -1,26 +1,10 @@
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
-import { addMember, addSupports, emptyMemberStiffness } from '../assemble';
-import { factor } from '../factor';
 import { memberDataFor, type MemberData } from '../member-data';
 import type { Topology } from '../topology';
 import { axialForces, axialPieces, type AxialPiece } from './axial-pieces';
-import { bucklingMember, pass, type InnerCount } from './buckling-member';
-
-/** Room for K(λ), kept for one topology. */
-export interface BucklingSpace {
-  readonly K: Float64Array;
-  readonly inner: Float64Array;
-  readonly pivots: Float64Array;
-}
-
-export function bucklingSpace(t: Topology): BucklingSpace {
-  return {
-    K: new Float64Array(9 * t.blocks),
-    inner: new Float64Array(6 * t.size),
-    pivots: new Float64Array(3 * t.size),
-  };
-}
+import { trial, type BucklingSpace, type Trial } from './buckling-trial';
+import { enclosed, enclosedAround, middle, signed, type Enclosure, type Signed } from './enclosure';
 
 /** The load factor is found to this relative width; roughly, where it only decides how finely members are divided. */
 const closeness = 1e-12;
@@ -63,26 +47,6 @@ export function criticalLoadFactor(
   return around && middle(enclosed(fine, around, closeness));
 }
 
-/** λ either side of a change of sign, and f there. */
-interface Enclosure {
-  readonly a: number;
-  readonly fa: number;
-  readonly b: number;
-  readonly fb: number;
-}
-type Signed = (lambda: number) => number;
-
-/** f(λ) above zero below the first critical load, below zero beyond it; many critical loads passed weigh by their root. */
-function signed(at: (lambda: number) => Trial, reference: number): Signed {
-  return function f(lambda: number): number {
-    const { count, logSize } = at(lambda);
-    // exactly on a pole of some piece: a hair beside it says as much
-    if (!Number.isFinite(logSize)) return f(lambda * (1 + 1e-13));
-    const size = Math.exp(Math.min(700, logSize - reference));
-    return count === 0 ? size : -Math.max(Number.MIN_VALUE, size ** (1 / count));
-  };
-}
-
 /** The first critical load from nothing: below `a` the count is 0. Null where there is none to be found. */
 function firstEnclosed(f: Signed, guess: number, cap: number): Enclosure | null {
   let a = 0;
@@ -100,27 +64,6 @@ function firstEnclosed(f: Signed, guess: number, cap: number): Enclosure | null 
   return { a, fa, b, fb };
 }
 
-/** The first critical load from a λ that is near it. */
-function enclosedAround(f: Signed, near: number, cap: number): Enclosure | null {
-  let [a, b] = [near, near];
-  let fa = f(near);
-  let fb = fa;
-  for (let step = 0.002; fb > 0; step *= 3) {
-    if (b > 2 * cap) return null;
-    [a, fa] = [b, fb];
-    b = near * (1 + step);
-    fb = f(b);
-  }
-  for (let step = 0.002; fa <= 0; step *= 3) {
-    [b, fb] = [a, fa];
-    a = Math.max(0, near * (1 - step));
-    fa = f(a);
-  }
-  return { a, fa, b, fb };
-}
-
-const middle = ({ a, b, fa, fb }: Enclosure): number => (Math.abs(fa) < Math.abs(fb) ? a : b);
-
 /** λ above which some piece has buckled between held ends, and a first guess from the members' Euler loads. */
 function startingPoint(data: readonly MemberData[], pieces: readonly (readonly AxialPiece[])[]): { cap: number; guess: number } {
   let cap = Infinity;
@@ -135,77 +78,4 @@ function startingPoint(data: readonly MemberData[], pieces: readonly (readonly A
     }
   });
   return { cap, guess: Math.min(cap, 0.25 * euler) };
-}
-
-/** The frame without load. */
-interface Buckling {
-  readonly frame: Frame;
-  readonly t: Topology;
-  readonly angles: Float64Array;
-  readonly diagonal: Float64Array;
-  readonly data: readonly MemberData[];
-  readonly slack: readonly number[];
-}
-
-interface Trial {
-  readonly count: number;
-  readonly logSize: number;
-}
-
-/** Number of critical loads below λ, and ln|det K(λ)| with the unknowns inside members. */
-function trial(
-  { frame, t, angles, diagonal, data, slack }: Buckling,
-  pieces: readonly (readonly AxialPiece[])[],
-  lambda: number,
-  space: BucklingSpace,
-): Trial {
-  const { K, inner, pivots } = space;
-  const count: InnerCount = { negative: 0, logSize: 0, size: 1 };
-  const k = emptyMemberStiffness();
-  K.fill(0);
-  for (let i = 0; i < data.length; i++) {
-    if (slack.includes(i)) continue;
-    bucklingMember(data[i]!, pieces[i]!, lambda, k, count);
-    addMember(K, t, data[i]!, k, angles);
-  }
-  addSupports(K, t, frame);
-  factor(K, t, diagonal, inner, pivots, 0);
-  for (let i = 0; i < 3 * t.size; i++) pass(pivots[i]!, count);
-  return { count: count.negative, logSize: count.logSize + Math.log(count.size) };
-}
-
-/** Closes in on the root of f, where it changes sign: inverse quadratic where that is safe, else halving (Chandrupatla 1997). */
-function enclosed(f: Signed, { a, fa, b, fb }: Enclosure, within: number): Enclosure {
-  let x1 = b;
-  let f1 = fb;
-  let x2 = a;
-  let f2 = fa;
-  let x3 = a;
-  let f3 = fa;
-  let t = fb / (fb - fa);
-  for (let pass = 0; pass < 120; pass++) {
-    const x = x1 + t * (x2 - x1);
-    const fx = f(x);
-    if (fx > 0 === f1 > 0) {
-      x3 = x1;
-      f3 = f1;
-    } else {
-      x3 = x2;
-      f3 = f2;
-      x2 = x1;
-      f2 = f1;
-    }
-    x1 = x;
-    f1 = fx;
-    const best = Math.abs(f1) < Math.abs(f2) ? x1 : x2;
-    const tolerance = (0.5 * within * Math.abs(best)) / Math.abs(x2 - x1);
-    if (tolerance > 0.5 || f1 === 0) break;
-    const xi = (x1 - x2) / (x3 - x2);
-    const phi = (f1 - f2) / (f3 - f2);
-    if (phi * phi < xi && (1 - phi) * (1 - phi) < 1 - xi)
-      t = (f1 / (f2 - f1)) * (f3 / (f2 - f3)) + ((x3 - x1) / (x2 - x1)) * (f1 / (f3 - f1)) * (f2 / (f3 - f2));
-    else t = 0.5;
-    t = Math.min(Math.max(t, tolerance), 1 - tolerance);
-  }
-  return f1 > 0 ? { a: x1, fa: f1, b: x2, fb: f2 } : { a: x2, fa: f2, b: x1, fb: f1 };
 }
