@@ -1,5 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Topology } from '../topology';
+import { emptyPasses, type Passes } from './next-guess';
 import { emptyLoading, type MemberLoading } from './member-loading';
 
 /** Room for second-order analyses of one frame, used again by every combination. */
@@ -18,6 +19,7 @@ export interface SecondOrderSpace {
   readonly N: Float64Array;
   readonly answer: Float64Array;
   readonly held: Float64Array;
+  readonly passes: Passes;
 }
 
 export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
@@ -35,5 +37,6 @@ export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
     N: row(members),
     answer: row(members),
     held: row(members),
+    passes: emptyPasses(members),
   };
 }

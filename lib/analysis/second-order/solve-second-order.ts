@@ -2,6 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { MemberData } from '../member-data';
 import type { Topology } from '../topology';
 import { prepare, respond, standsWithoutForces, type Work } from './equilibrium-pass';
+import { forget, nextGuess } from './next-guess';
 import { recoverSecondOrder } from './recover-second-order';
 import type { SecondOrderSpace } from './second-order-space';
 
@@ -87,24 +88,41 @@ interface Settled {
   readonly change: number;
 }
 
-/** Repeats N ← share × (answer to N) from the N at hand until it stands still. */
+/**
+ * Repeats N ← share × (answer to N) from the N at hand until it stands still, each time with what the last passes say of the
+ * next, so that a slow or swinging approach is a short one.
+ */
 function settle(work: Work, share: number): Settled {
-  const { N, answer, loadings } = work.input.space;
+  const { N, answer, loadings, passes } = work.input.space;
   let change = Infinity;
+  let ahead = false;
+  forget(passes);
   for (let pass = 0; pass < mostPasses; pass++) {
-    if (!respond(work)) return { how: 'unstable', change };
+    if (!respond(work)) {
+      if (!ahead) return { how: 'unstable', change };
+      // too far ahead: on from the answer itself
+      N.set(passes.answer);
+      forget(passes);
+      ahead = false;
+      continue;
+    }
     let size = 0;
     let moved = 0;
     for (let i = 0; i < N.length; i++) {
       const next = share * answer[i]!;
       size = Math.max(size, Math.abs(next), Math.abs(next + share * loadings[i]!.endN));
       moved = Math.max(moved, Math.abs(next - N[i]!));
-      N[i] = next;
+      answer[i] = next;
     }
     if (!Number.isFinite(moved)) return { how: 'unstable', change };
     change = size > 0 ? moved / size : 0;
-    if (moved <= still * size + rounding * share * work.handled) return { how: 'still', change };
+    if (moved <= still * size + rounding * share * work.handled) {
+      N.set(answer);
+      return { how: 'still', change };
+    }
+    ahead = nextGuess(N, answer, passes);
   }
+  N.set(answer);
   // what is left is rounding that equilibrium near a critical load makes more of
   return { how: change <= enough ? 'still' : 'moving', change };
 }
@@ -125,7 +143,8 @@ function inSteps(work: Work): SecondOrderResult {
       reached = share;
     } else {
       step /= 2;
-      why = how === 'unstable' ? 'unstable' : 'not settled';
+      // axial forces that find no equilibrium at all have none: the load they can carry is passed
+      why = how === 'unstable' || change > 1e-6 ? 'unstable' : 'not settled';
     }
   }
   if (reached === 0 && !standsWithoutForces(work)) why = 'mechanism';
