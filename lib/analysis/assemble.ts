@@ -1,6 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
 import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
 import type { MemberData } from './member-data';
+import { blockAt } from './member-places';
+import { packedMembers, packedSize } from './packed-members';
 import type { Topology } from './topology';
 
 /**
@@ -18,6 +20,7 @@ export interface MemberStiffness {
 }
 
 const joints = emptyJointStiffness();
+const general = emptyMemberStiffness();
 
 /** First-order stiffness of a member. README (2.2), (2.3). */
 export function memberStiffness(m: MemberData, out: MemberStiffness): MemberStiffness {
@@ -76,7 +79,7 @@ function addEnd(
   const fx = t.free[3 * node]!;
   const fy = t.free[3 * node + 1]!;
   const fz = t.free[3 * node + 2]!;
-  const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+  const at = blockAt(t, p, p);
   const xy = fx * fy * c * s * (ka - kvv);
   const xt = fx * fz * -s * kvt;
   const yt = fy * fz * c * kvt;
@@ -132,7 +135,7 @@ function addCoupling(
   block[8] = S12;
   const i = Math.min(pa, pb);
   const j = Math.max(pa, pb);
-  const at = 9 * (t.columnStart[j]! + i - t.firstRow[j]!);
+  const at = blockAt(t, i, j);
   for (let r = 0; r < 3; r++) {
     const fr = t.free[3 * m.start + r]!;
     for (let q = 0; q < 3; q++) {
@@ -145,33 +148,83 @@ function addCoupling(
 
 /** Adds the supports' springs, and 1 on the diagonal of everything that is not an unknown (its own equation: 1·d = 0). */
 export function addSupports(K: Float64Array, t: Topology, frame: Frame): void {
-  for (let p = 0; p < t.size; p++) {
-    const node = t.nodeAt[p]!;
-    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
-    for (let r = 0; r < 3; r++) if (!t.free[3 * node + r]) K[at + 4 * r] = 1;
-  }
+  const { zeros, ones } = t.places;
+  for (let i = 0; i < zeros.length; i++) K[zeros[i]!] = 0;
   for (const support of frame.supports) {
     const p = t.positionOf[support.node]!;
     if (p < 0) continue;
-    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+    const at = blockAt(t, p, p);
     if (typeof support.ux === 'number') K[at] = K[at]! + support.ux;
     if (typeof support.uy === 'number') K[at + 4] = K[at + 4]! + support.uy;
-    if (typeof support.rz === 'number' && t.free[3 * support.node + 2]) K[at + 8] = K[at + 8]! + support.rz;
+    if (typeof support.rz === 'number') K[at + 8] = K[at + 8]! + support.rz;
   }
+  for (let i = 0; i < ones.length; i++) K[ones[i]!] = 1;
 }
 
 /** K = Σ Tᵀ k T + springs, with one element a member. README (2.6). @param K 9 × blocks, overwritten */
 export function assemble(K: Float64Array, t: Topology, frame: Frame, data: readonly MemberData[], angles: Float64Array): void {
+  const { blocks, turned } = t.places;
+  const numbers = packedMembers(data, angles);
   K.fill(0);
-  const k = emptyMemberStiffness();
-  for (const m of data) addMember(K, t, m, memberStiffness(m, k), angles);
+  for (let i = 0, o = 0; i < data.length; i++, o += packedSize) {
+    if (numbers[o + 5] === 0) {
+      addMember(K, t, data[i]!, memberStiffness(data[i]!, general), angles);
+      continue;
+    }
+    // the same for a member whose joints are rigid, that does not shear and whose nodes have global axes
+    const L = numbers[o]!;
+    const c = numbers[o + 1]!;
+    const s = numbers[o + 2]!;
+    const a = (4 * numbers[o + 4]!) / L;
+    const b = 0.5 * a;
+    const ka = numbers[o + 3]! / L;
+    const kv = (a + 2 * b + a) / (L * L);
+    const kt = (a + b) / L;
+    const xx = c * c * ka + s * s * kv;
+    const xy = c * s * (ka - kv);
+    const yy = s * s * ka + c * c * kv;
+    let xt = s * kt;
+    let yt = c * kt;
+    const start = blocks[3 * i]!;
+    const end = blocks[3 * i + 1]!;
+    if (start >= 0) {
+      K[start] = K[start]! + xx;
+      K[start + 1] = K[start + 1]! + xy;
+      K[start + 2] = K[start + 2]! - xt;
+      K[start + 4] = K[start + 4]! + yy;
+      K[start + 5] = K[start + 5]! + yt;
+      K[start + 8] = K[start + 8]! + a;
+    }
+    if (end < 0) continue;
+    K[end] = K[end]! + xx;
+    K[end + 1] = K[end + 1]! + xy;
+    K[end + 2] = K[end + 2]! + xt;
+    K[end + 4] = K[end + 4]! + yy;
+    K[end + 5] = K[end + 5]! - yt;
+    K[end + 8] = K[end + 8]! + a;
+    if (start < 0) continue;
+    const at = blocks[3 * i + 2]!;
+    if (turned[i] !== 0) {
+      xt = -xt;
+      yt = -yt;
+    }
+    K[at] = K[at]! - xx;
+    K[at + 1] = K[at + 1]! - xy;
+    K[at + 2] = K[at + 2]! - xt;
+    K[at + 3] = K[at + 3]! - xy;
+    K[at + 4] = K[at + 4]! - yy;
+    K[at + 5] = K[at + 5]! + yt;
+    K[at + 6] = K[at + 6]! + xt;
+    K[at + 7] = K[at + 7]! - yt;
+    K[at + 8] = K[at + 8]! + b;
+  }
   addSupports(K, t, frame);
 }
 
 /** The diagonal of K, 3 a position. */
 export function diagonalOf(K: Float64Array, t: Topology, out: Float64Array): Float64Array {
   for (let p = 0; p < t.size; p++) {
-    const at = 9 * (t.columnStart[p]! + p - t.firstRow[p]!);
+    const at = blockAt(t, p, p);
     out[3 * p] = K[at]!;
     out[3 * p + 1] = K[at + 4]!;
     out[3 * p + 2] = K[at + 8]!;

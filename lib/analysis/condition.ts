@@ -10,7 +10,9 @@ export function scaledNorm(K: Float64Array, t: Topology, diagonal: Float64Array)
       const at = 9 * (t.columnStart[j]! + i - t.firstRow[j]!);
       for (let r = 0; r < 3; r++)
         for (let c = 0; c < 3; c++) {
-          const size = Math.abs(K[at + 3 * r + c]!) * scale[3 * i + r]! * scale[3 * j + c]!;
+          // of a block on the diagonal only the upper half need be there
+          const entry = i === j && r > c ? 3 * c + r : 3 * r + c;
+          const size = Math.abs(K[at + entry]!) * scale[3 * i + r]! * scale[3 * j + c]!;
           sums[3 * j + c] = sums[3 * j + c]! + size;
           if (i !== j) sums[3 * i + r] = sums[3 * i + r]! + size;
         }

@@ -12,6 +12,9 @@ function seeded(seed: number): () => number {
   return () => (state = (state * 16807) % 2147483647) / 2147483647;
 }
 
+const none = new Int32Array(0);
+const noMembers = { rows: none, blocks: none, turned: new Uint8Array(0), heldRows: none, zeros: none, ones: none };
+
 /** A random symmetric matrix on a skyline of blocks, positive definite where `shift` is large, and its dense twin. */
 function randomSystem(size: number, seed: number, shift: number): { t: Topology; K: Float64Array; dense: Matrix } {
   const random = seeded(seed);
@@ -25,7 +28,7 @@ function randomSystem(size: number, seed: number, shift: number): { t: Topology;
   const order = Int32Array.from({ length: size }, (_, i) => i);
   const t: Topology = {
     key: '', size, nodeAt: order, positionOf: order, firstRow, columnStart, blocks,
-    free: new Uint8Array(3 * size).fill(1), noRotation: new Uint8Array(size),
+    free: new Uint8Array(3 * size).fill(1), noRotation: new Uint8Array(size), places: noMembers,
   }; // prettier-ignore
   const K = new Float64Array(9 * blocks);
   const dense = Matrix.zeros(3 * size, 3 * size);

@@ -66,43 +66,54 @@ export function factor(
       const at = 9 * (baseJ + i);
       const q = 6 * i;
       const p0 = inner[q]!, l10 = inner[q + 1]!, l20 = inner[q + 2]!, p1 = inner[q + 3]!, l21 = inner[q + 4]!, p2 = inner[q + 5]!; // prettier-ignore
-      for (let c = 0; c < 3; c++) {
-        // U_ij = D_i⁻¹ G_ij, column by column; D_j −= G_ijᵀ U_ij
-        const a0 = K[at + c]!;
-        const a1 = K[at + 3 + c]!;
-        const a2 = K[at + 6 + c]!;
-        const y1 = a1 - l10 * a0;
-        const x2 = p2 * (a2 - l20 * a0 - l21 * y1);
-        const x1 = p1 * y1 - l21 * x2;
-        const x0 = p0 * a0 - l10 * x1 - l20 * x2;
-        if (c === 0) {
-          d00 -= a0 * x0 + a1 * x1 + a2 * x2;
-          d01 -= K[at + 1]! * x0 + K[at + 4]! * x1 + K[at + 7]! * x2;
-          d02 -= K[at + 2]! * x0 + K[at + 5]! * x1 + K[at + 8]! * x2;
-        } else if (c === 1) {
-          d11 -= a0 * x0 + a1 * x1 + a2 * x2;
-          d12 -= K[at + 2]! * x0 + K[at + 5]! * x1 + K[at + 8]! * x2;
-        } else d22 -= a0 * x0 + a1 * x1 + a2 * x2;
-        K[at + c] = x0;
-        K[at + 3 + c] = x1;
-        K[at + 6 + c] = x2;
-      }
+      // U_ij = D_i⁻¹ G_ij, column by column; D_j −= G_ijᵀ U_ij
+      const a0 = K[at]!, a1 = K[at + 1]!, a2 = K[at + 2]!, a3 = K[at + 3]!, a4 = K[at + 4]!; // prettier-ignore
+      const a5 = K[at + 5]!, a6 = K[at + 6]!, a7 = K[at + 7]!, a8 = K[at + 8]!; // prettier-ignore
+      let y = a3 - l10 * a0;
+      let x2 = p2 * (a6 - l20 * a0 - l21 * y);
+      let x1 = p1 * y - l21 * x2;
+      let x0 = p0 * a0 - l10 * x1 - l20 * x2;
+      d00 -= a0 * x0 + a3 * x1 + a6 * x2;
+      d01 -= a1 * x0 + a4 * x1 + a7 * x2;
+      d02 -= a2 * x0 + a5 * x1 + a8 * x2;
+      K[at] = x0;
+      K[at + 3] = x1;
+      K[at + 6] = x2;
+      y = a4 - l10 * a1;
+      x2 = p2 * (a7 - l20 * a1 - l21 * y);
+      x1 = p1 * y - l21 * x2;
+      x0 = p0 * a1 - l10 * x1 - l20 * x2;
+      d11 -= a1 * x0 + a4 * x1 + a7 * x2;
+      d12 -= a2 * x0 + a5 * x1 + a8 * x2;
+      K[at + 1] = x0;
+      K[at + 4] = x1;
+      K[at + 7] = x2;
+      y = a5 - l10 * a2;
+      x2 = p2 * (a8 - l20 * a2 - l21 * y);
+      x1 = p1 * y - l21 * x2;
+      x0 = p0 * a2 - l10 * x1 - l20 * x2;
+      d22 -= a2 * x0 + a5 * x1 + a8 * x2;
+      K[at + 2] = x0;
+      K[at + 5] = x1;
+      K[at + 8] = x2;
     }
     const r = 3 * j;
+    const q = 6 * j;
     const p0 = pivot(d00, diagonal[r]!, tolerance);
     if (p0 !== p0) return r;
-    const l10 = d01 / p0;
-    const l20 = d02 / p0;
-    const p1 = pivot(d11 - l10 * d01, diagonal[r + 1]!, tolerance);
-    const e = d12 - l10 * d02;
-    const q = 6 * j;
-    inner[q] = 1 / p0;
+    const i0 = 1 / p0;
+    const l10 = d01 * i0;
+    const l20 = d02 * i0;
+    inner[q] = i0;
     inner[q + 1] = l10;
     inner[q + 2] = l20;
     pivots[r] = p0;
+    const p1 = pivot(d11 - l10 * d01, diagonal[r + 1]!, tolerance);
     if (p1 !== p1) return r + 1;
-    const l21 = e / p1;
-    inner[q + 3] = 1 / p1;
+    const i1 = 1 / p1;
+    const e = d12 - l10 * d02;
+    const l21 = e * i1;
+    inner[q + 3] = i1;
     inner[q + 4] = l21;
     pivots[r + 1] = p1;
     const p2 = pivot(d22 - l20 * d02 - l21 * e, diagonal[r + 2]!, tolerance);

@@ -3,7 +3,7 @@ import { emptyMemberStiffness, memberStiffness, type MemberStiffness } from './a
 import { fixedEndForces } from './fixed-end-forces';
 import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
 import { memberData, type MemberData } from './member-data';
-import { memberLoads } from './member-loads';
+import { packedLoads } from './packed-loads';
 import type { Topology } from './topology';
 
 /** Right-hand sides and what stands behind them. */
@@ -16,57 +16,101 @@ export interface LoadVectors {
   readonly fixedEnd: Float64Array;
 }
 
-/** f = node loads − Σ Tᵀ q_F − K_fs d_s, a column a case. README (2.7). */
+const joints = emptyJointStiffness();
+const ends = new Float64Array(6);
+
+/** f = node loads − Σ Tᵀ q_F − K_fs d_s, a column a case, and q_F. README (2.7). */
 export function loadVectors(
   frame: Frame,
   t: Topology,
   angles: Float64Array,
   data: readonly MemberData[] = memberData(frame),
 ): LoadVectors {
-  const loads = memberLoads(frame);
   const cases = frame.cases.length;
+  const f = new Float64Array(3 * t.size * cases);
+  addLoads(frame, t, angles, data, f);
+  return { f, prescribed: packedLoads(frame, angles).prescribed, fixedEnd: fixedEnds(frame, angles, data) };
+}
+
+/** The columns of f alone. @param f 3 × size × cases, overwritten */
+export function addLoads(frame: Frame, t: Topology, angles: Float64Array, data: readonly MemberData[], f: Float64Array): void {
   const n = 3 * t.size;
-  const nodes = frame.nodes.length;
-  const f = new Float64Array(cases * n);
-  const fixedEnd = new Float64Array(cases * data.length * 6);
-  const prescribed = new Float64Array(cases * nodes * 3);
-  const joints = emptyJointStiffness();
-  data.forEach((m, i) => {
-    let ready = false;
-    for (let c = 0; c < cases; c++) {
-      const acting = loads[i * cases + c];
-      if (!acting) continue;
-      if (!ready) jointStiffness(m, joints);
-      ready = true;
-      const at = (c * data.length + i) * 6;
-      fixedEndForces(m, acting, joints, fixedEnd, at);
-      takeEnds(f, c * n, t, m, fixedEnd, at, angles);
+  const packed = packedLoads(frame, angles);
+  const { stream, others, members } = packed;
+  const { rows, heldRows } = t.places;
+  f.fill(0);
+  let k = 0;
+  for (let i = 0; i < members; i++) {
+    // even loads over whole members: q_F = −(q_x L/2, q_y L/2, q_y L²/12, q_x L/2, q_y L/2, −q_y L²/12)
+    const count = stream[k]! | 0;
+    const L = stream[k + 1]!;
+    const cos = stream[k + 2]!;
+    const sin = stream[k + 3]!;
+    const a = rows[2 * i]!;
+    const b = rows[2 * i + 1]!;
+    k += 4;
+    for (const last = k + 3 * count; k < last; k += 3) {
+      const column = Math.imul(n, stream[k]! | 0);
+      const X = -0.5 * L * stream[k + 1]!;
+      const Y = -0.5 * L * stream[k + 2]!;
+      const m = (Y * L) / 6;
+      const x = X * cos - Y * sin;
+      const y = X * sin + Y * cos;
+      if (a >= 0) {
+        const o = column + a;
+        f[o] = f[o]! - x;
+        f[o + 1] = f[o + 1]! - y;
+        f[o + 2] = f[o + 2]! - m;
+      }
+      if (b >= 0) {
+        const o = column + b;
+        f[o] = f[o]! - x;
+        f[o + 1] = f[o + 1]! - y;
+        f[o + 2] = f[o + 2]! + m;
+      }
     }
-  });
-  for (const load of frame.nodeLoads) {
-    const p = t.positionOf[load.node]!;
+  }
+  for (; k < stream.length; k += 5) {
+    const p = t.positionOf[stream[k]!]!;
     if (p < 0) continue;
-    const o = load.case * n + 3 * p;
-    const angle = angles[load.node]!;
-    const ca = angle === 0 ? 1 : Math.cos(angle);
-    const sa = angle === 0 ? 0 : Math.sin(angle);
-    f[o] = f[o]! + load.Fx_N * ca + load.Fy_N * sa;
-    f[o + 1] = f[o + 1]! - load.Fx_N * sa + load.Fy_N * ca;
-    f[o + 2] = f[o + 2]! + load.Mz_Nm;
+    const o = n * stream[k + 1]! + 3 * p;
+    f[o] = f[o]! + stream[k + 2]!;
+    f[o + 1] = f[o + 1]! + stream[k + 3]!;
+    f[o + 2] = f[o + 2]! + stream[k + 4]!;
   }
-  for (const s of frame.settlements) {
-    const o = (s.case * nodes + s.node) * 3;
-    prescribed[o] = prescribed[o]! + (s.dx_m ?? 0);
-    prescribed[o + 1] = prescribed[o + 1]! + (s.dy_m ?? 0);
-    prescribed[o + 2] = prescribed[o + 2]! + (s.rz_rad ?? 0);
+  for (let i = 0; i < others.length; i++) {
+    const { member, loadCase, acting } = others[i]!;
+    const m = data[member]!;
+    fixedEndForces(m, acting, jointStiffness(m, joints), ends, 0);
+    takeEnds(f, loadCase * n, t, m, ends, 0, angles);
   }
-  if (frame.settlements.length > 0) addSettlements(frame, t, data, angles, prescribed, f);
-  for (let p = 0; p < t.size; p++)
-    for (let r = 0; r < 3; r++) {
-      if (t.free[3 * t.nodeAt[p]! + r]) continue;
-      for (let c = 0; c < cases; c++) f[c * n + 3 * p + r] = 0;
+  if (packed.settled) addSettlements(frame, t, data, angles, packed.prescribed, f);
+  for (let i = 0; i < heldRows.length; i++) for (let o = heldRows[i]!; o < f.length; o += n) f[o] = 0;
+}
+
+/** q_F of every case and member. */
+export function fixedEnds(frame: Frame, angles: Float64Array, data: readonly MemberData[]): Float64Array {
+  const { stream, others, members } = packedLoads(frame, angles);
+  const fixedEnd = new Float64Array(frame.cases.length * members * 6);
+  for (let i = 0, k = 0; i < members; i++) {
+    const last = k + 4 + 3 * stream[k]!;
+    const L = stream[k + 1]!;
+    for (k += 4; k < last; k += 3) {
+      const at = 6 * (stream[k]! * members + i);
+      const X = -0.5 * L * stream[k + 1]!;
+      const Y = -0.5 * L * stream[k + 2]!;
+      const m = (Y * L) / 6;
+      fixedEnd[at] = fixedEnd[at + 3] = X;
+      fixedEnd[at + 1] = fixedEnd[at + 4] = Y;
+      fixedEnd[at + 2] = m;
+      fixedEnd[at + 5] = -m;
     }
-  return { f, prescribed, fixedEnd };
+  }
+  for (const { member, loadCase, acting } of others) {
+    const m = data[member]!;
+    fixedEndForces(m, acting, jointStiffness(m, joints), fixedEnd, 6 * (loadCase * members + member));
+  }
+  return fixedEnd;
 }
 
 function addSettlements(

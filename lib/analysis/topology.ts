@@ -1,5 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 import { springOf } from './member-data';
+import { memberPlaces, type MemberPlaces } from './member-places';
 import { reverseCuthillMcKee } from './ordering';
 
 /**
@@ -23,6 +24,7 @@ export interface Topology {
   readonly free: Uint8Array;
   /** 1 = the node turns with no member and no support: it has no rotation of its own. */
   readonly noRotation: Uint8Array;
+  readonly places: MemberPlaces;
 }
 
 /** Which displacements of each node are unknown, and which nodes have no rotation of their own (sheets §4). */
@@ -88,5 +90,6 @@ export function buildTopology(frame: Frame): Topology {
     columnStart[j] = blocks;
     blocks += j - first + 1;
   }
-  return { key, size, nodeAt, positionOf, firstRow, columnStart, blocks, free, noRotation };
+  const shape = { key, size, nodeAt, positionOf, firstRow, columnStart, blocks, free, noRotation };
+  return { ...shape, places: memberPlaces(frame, shape) };
 }
