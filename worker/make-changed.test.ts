@@ -9,6 +9,7 @@ import { listUploadedFiles, listUploads, insertUpload } from '@/db/queries/uploa
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { changeWords } from '@/lib/changes/change-words';
 import type { Change } from '@/lib/changes/change';
+import { reportSheets } from '@/lib/reports/workbook/report-sheets';
 import { resultsJson } from '@/lib/results/json';
 import { askForChange, askForReading, askForRun } from './ask';
 import { WorkQueue } from './queue';
@@ -137,6 +138,18 @@ describe('a revision made by a setting', () => {
     expect(copy.name).toBe('Brackets B marked.xlsx');
     const parts = Object.keys(unzipSync(new Uint8Array(copy.bytes)));
     expect(parts.filter((path) => /comments\d*\.xml$/.test(path)).length).toBeGreaterThan(1);
+  });
+
+  it('is told on the cover of its results', async () => {
+    const a = await bring(samples('pipe-rack-12.xlsx'));
+    const b = await change(a, [{ kind: 'setting', setting: 'nearLimit', value: '0.8' }], false);
+    const cover = (await reportSheets(await revisionSource(database, office.office, b.id)))[0]!;
+    const lines: string[] = [];
+    for await (const row of cover.rows()) lines.push(row.join(' '));
+    expect(lines).toEqual(
+      expect.arrayContaining(['near limit 0.8 changed on screen by Ana Lyst', ' near limit: 0.90 → 0.80', ' why: to see']),
+    );
+    expect(lines.join('\n')).toMatch(/made by a change from revision A by Ana Lyst/);
   });
 
   it('is known by its own input workbook', async () => {

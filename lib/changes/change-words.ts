@@ -23,11 +23,3 @@ export function changeWords(change: Change, before: Settings): ChangeWords {
 
 /** "analysis: first order → second order" */
 export const changeLine = ({ what, from, to }: ChangeWords): string => `${what}: ${from} → ${to}`;
-
-/** Settings that say nothing more about a frame once it is read: to change only these leaves every result as it is. */
-const outsideResults: ReadonlySet<string> = new Set(['title']);
-
-/** Whether every frame has to be analysed and checked again after these changes, or none. */
-export function touches(changes: readonly Change[]): 'every frame' | 'no frame' {
-  return changes.every((change) => outsideResults.has(change.setting)) ? 'no frame' : 'every frame';
-}

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { changeLine, changeWords, touches } from '@/lib/changes/change-words';
+import { changeLine, changeWords } from '@/lib/changes/change-words';
 import { changeSchema } from '@/lib/changes/change';
 import { settingChoices } from '@/lib/changes/setting-choices';
 import { settingText } from '@/lib/changes/setting-text';
@@ -58,16 +58,6 @@ describe('a change in words', () => {
 
   it('shows a factor with every figure that matters', () => {
     expect(settingText('stressFactor', { ...defaultSettings, stressFactor: 0.667 })).toBe('0.667');
-  });
-
-  it('touches every frame, but a title none', () => {
-    expect(touches([{ kind: 'setting', setting: 'title', value: 'Sheds' }])).toBe('no frame');
-    expect(
-      touches([
-        { kind: 'setting', setting: 'title', value: 'Sheds' },
-        { kind: 'setting', setting: 'nearLimit', value: '1' },
-      ]),
-    ).toBe('every frame');
   });
 
   it('is taken only in its own shape', () => {

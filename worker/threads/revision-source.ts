@@ -1,9 +1,11 @@
 import { countWaiting } from '@/db/queries/results';
 import type { OpenDatabase, RawDatabase } from '@/db/open';
 import { frameRows, readStates, type FrameRow } from '@/db/queries/frame-rows';
+import { type ChangeRecord, listChanges } from '@/db/queries/changes';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { findRevisionById } from '@/db/queries/revisions';
 import { inputRows } from '@/db/queries/waiting';
+import { changeLine } from '@/lib/changes/change-words';
 import { engineVersion } from '@/lib/analysis/engine-version';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
 import { problemsInOrder } from '@/lib/results/failure-problem';
@@ -13,7 +15,11 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
   const found = await findRevisionById(db, office, revision);
   if (!found?.settings || !found.origins || !found.input)
     throw new RangeError(`Expected revision ${revision} of office ${office} to be read`);
-  const [problems, sheets] = await Promise.all([listProblems(db, office, revision), listSheets(db, office, revision)]);
+  const [problems, sheets, changes] = await Promise.all([
+    listProblems(db, office, revision),
+    listSheets(db, office, revision),
+    listChanges(db, office, revision),
+  ]);
   const unfinished = countWaiting(raw, revision).waiting > 0;
   return {
     title: {
@@ -24,6 +30,7 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
       prepared: `${(found.runBy ?? found.createdBy).name}, ${(found.runFinishedAt ?? found.createdAt).slice(0, 10)}`,
       checked: null,
       issued: null,
+      madeBy: madeBy(found.madeFrom, changes),
     },
     engine: found.engine ?? engineVersion,
     input: found.input,
@@ -33,6 +40,17 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
     inputRows: () => inputRows(raw, revision),
     frames: framesOf(raw, revision),
   };
+}
+
+/** What the cover says of a revision made on screen. */
+function madeBy(from: string | null, changes: readonly ChangeRecord[]): string[] {
+  const [first] = changes;
+  if (from === null || !first) return [];
+  return [
+    `from revision ${from} by ${first.person}, ${first.at.slice(0, 10)}`,
+    ...changes.map(changeLine),
+    `why: ${first.reason}`,
+  ];
 }
 
 /** Frames of a revision up to this number are decoded once and kept for the passes of a workbook: about 60 MB. */

@@ -28,6 +28,7 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
   yield ['revision', title.revision ?? ''];
   yield ['state', title.state ?? ''];
   yield ['prepared', title.prepared ?? ''];
+  for (const [index, line] of (title.madeBy ?? []).entries()) yield [index === 0 ? 'made by a change' : '', line];
   yield ['checked', title.checked ?? notYet];
   yield ['issued', title.issued ?? notYet];
   yield ['input', input.name];

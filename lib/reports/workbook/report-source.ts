@@ -14,6 +14,8 @@ export interface ReportTitle {
   readonly prepared: string | null;
   readonly checked: string | null;
   readonly issued: string | null;
+  /** Of a revision made on screen: from which, by whom, what and why, a line each. */
+  readonly madeBy?: readonly string[];
 }
 
 export interface ReportFrame {
