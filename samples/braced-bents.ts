@@ -47,10 +47,7 @@ export function bracedBents(): SampleSheet[] {
     { name: 'Setup', rows: setup },
     { name: 'Nodes', rows: nodes },
     { name: 'Members', rows: members },
-    {
-      name: 'Sections',
-      rows: [['section', 'A [cm2]', 'I [cm4]', 'W top [cm3]', 'W bottom [cm3]', 'Av [cm2]', 't [mm]'], ...rods()],
-    },
+    { name: 'Sections', rows: [['section', 'shape', 'd [mm]'], ['rod 24', 'bar', 24], ['rod 30', 'bar', 30]] }, // prettier-ignore
     { name: 'Supports', rows: supports },
     {
       name: 'Load cases',
@@ -75,13 +72,4 @@ export function bracedBents(): SampleSheet[] {
       ],
     },
   ];
-}
-
-/** Round bars by their properties: A = πd²/4, I = πd⁴/64, W = πd³/32, shear area 3A/4. */
-function rods(): SampleCell[][] {
-  const shown = (value: number): number => Number(value.toPrecision(6));
-  return [2.4, 3].map((d) => {
-    const [A, I] = [(Math.PI * d ** 2) / 4, (Math.PI * d ** 4) / 64];
-    return [`rod ${10 * d}`, shown(A), shown(I), shown((2 * I) / d), shown((2 * I) / d), shown(0.75 * A), 10 * d];
-  });
 }

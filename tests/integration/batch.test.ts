@@ -193,6 +193,7 @@ describe('the queue and the command line', () => {
         ['portal-sheds-240.xlsx', samples],
         ['slender-sheds-24.xlsx', samples],
         ['direct-analysis-us-9.xlsx', samples],
+        ['braced-bents-12.xlsx', samples],
         ['slip.xlsx', out],
       ] as const) {
         const of = await readingRevision(database, await testOffice(database, name));

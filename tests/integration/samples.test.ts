@@ -82,6 +82,31 @@ describe('samples', () => {
     expect(checked).toBeGreaterThan(0.7 * intake.frames.length);
   });
 
+  it('bents braced by rods: one of each pair is slack under wind, the other one with the wind turned', async () => {
+    const intake = await read('braced-bents-12.xlsx');
+    const analyser = createAnalyser();
+    for (const { id, frame } of intake.frames) {
+      const { status, failure, states } = evaluateFrame(analyser, frame!, intake.settings, { second: true, all: false });
+      expect(status, `${id}: ${failure?.message}`).toBe('solved');
+      expect(states.every((state) => state.kind === 'combination')).toBe(true);
+      const slackIn = (name: string): string[] =>
+        states.find((state) => state.name === name)!.method!.slack.map((member) => frame!.members[member]!.id);
+      for (const lean of ['→', '←']) {
+        const [right, left] = [slackIn(`C3 (+) ${lean}`), slackIn(`C3 (−) ${lean}`)];
+        // R rises to the right and is pulled by wind to the right; L is its mirror
+        expect(right.length, id).toBeGreaterThan(0);
+        expect(
+          right.every((member) => member.startsWith('L')),
+          `${id} ${right.join()}`,
+        ).toBe(true);
+        expect(
+          left.every((member) => member.startsWith('R')),
+          `${id} ${left.join()}`,
+        ).toBe(true);
+      }
+    }
+  });
+
   it('the messy workbook stops only the frames its slips touch', async () => {
     const intake = await read('messy.xlsx');
     const running = intake.frames.filter((each) => each.frame !== null).map((each) => each.id);

@@ -38,6 +38,7 @@ export const seedProjects: readonly SeedProject[] = [
     batches: [
       { name: 'Pipe rack, line 1', by: 'analyst', revisions: [ran('pipe-rack-12.xlsx')] },
       { name: 'Pipe rack, lines 2 and 3', by: 'analyst', revisions: [ran('pipe-rack-24.xlsx')] },
+      { name: 'Bents braced by rods', by: 'analyst', revisions: [ran('braced-bents-12.xlsx')] },
       { name: 'Equipment brackets', by: 'secondAnalyst', revisions: [ran('brackets-150.xlsx')] },
     ],
   },
