@@ -16,7 +16,8 @@ export function percentile(values: readonly number[], share: number): number {
   return sorted[Math.min(sorted.length - 1, Math.ceil(share * sorted.length) - 1)] ?? NaN;
 }
 
-function cpuSeconds(): number {
+/** CPU time of this process, s. */
+export function cpuSeconds(): number {
   const { user, system } = process.cpuUsage();
   return (user + system) / 1e6;
 }
