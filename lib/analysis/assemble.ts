@@ -40,10 +40,15 @@ export function emptyMemberStiffness(): MemberStiffness {
   return { ka: 0, kvv: 0, kv1: 0, kv2: 0, S11: 0, S12: 0, S22: 0 };
 }
 
-/** Angle of each node's axes from global X: its support's, else 0. Radians, by node. */
+const knownAngles = new WeakMap<Frame, Float64Array>();
+
+/** Angle of each node's axes from global X: its support's, else 0. Radians, by node; worked out once a frame, not to be changed. */
 export function nodeAngles(frame: Frame): Float64Array {
+  const before = knownAngles.get(frame);
+  if (before) return before;
   const angles = new Float64Array(frame.nodes.length);
   for (const support of frame.supports) angles[support.node] = support.angle_rad;
+  knownAngles.set(frame, angles);
   return angles;
 }
 

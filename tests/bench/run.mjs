@@ -1,4 +1,4 @@
-/** `npm run bench [-- --json FILE]`: bundles bench.ts and runs it. */
+/** `npm run bench [-- --json FILE] [--peers] [GROUP …]`: bundles bench.ts and runs it. */
 import { build } from 'esbuild';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
@@ -20,5 +20,6 @@ await build({
   tsconfig: join(root, 'tsconfig.json'),
   logLevel: 'warning',
 });
+process.env['TALLYFRAME_BENCH'] = here;
 const { bench } = await import(pathToFileURL(join(outdir, 'bench.mjs')).href);
 process.exitCode = await bench(process.argv.slice(2));

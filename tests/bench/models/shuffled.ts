@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 
 /** A seeded generator (Park and Miller): the same models every time. */
-export function seeded(seed: number): () => number {
+function seeded(seed: number): () => number {
   let state = seed;
   return () => (state = (state * 16807) % 2147483647) / 2147483647;
 }
