@@ -103,7 +103,7 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
       engine: evaluation === null ? null : stored.engine,
       inputHash: revision.input?.sha256 ?? null,
       frameHash: stored.hash,
-      settings: settingLines(revision),
+      settings: await settingLines(revision),
     },
     units,
     nearLimit,

@@ -1,20 +1,23 @@
 import 'server-only';
 import type { SettingLine } from '@/components/certificate/certificate';
+import { db } from '@/db/client';
+import { listChanges } from '@/db/queries/changes';
 import type { RevisionRecord } from '@/db/queries/revisions';
+import { originWords } from '@/lib/changes/origin-words';
 import { settingText } from '@/lib/changes/setting-text';
-import { settingWords, type SettingName, type SettingOrigin } from '@/lib/model/settings';
+import { settingWords, type SettingName } from '@/lib/model/settings';
+import { day } from './dates';
 
-/** Every setting of a revision's run with where it was given; one that none gave is left out. */
-export function settingLines({ settings, origins }: Pick<RevisionRecord, 'settings' | 'origins'>): SettingLine[] {
+/** Every setting of a revision's run with where it was given, one changed on screen with what it was and when. */
+export async function settingLines({ id, office, settings, origins }: RevisionRecord): Promise<SettingLine[]> {
   if (settings === null) return [];
+  const changes = await listChanges(db(), office, id);
   return (Object.keys(settingWords) as SettingName[]).flatMap((name) => {
     const value = settingText(name, settings);
-    return name === 'title' || value === null ? [] : [{ name: settingWords[name], value, source: sourceWords(origins?.[name]) }];
+    if (name === 'title' || value === null) return [];
+    const given = origins ? originWords(origins[name]) : 'not kept';
+    const change = changes.findLast(({ change: one }) => one.kind === 'setting' && one.setting === name);
+    const before = change ? `, ${day(change.at)} (was ${change.from})` : '';
+    return [{ name: settingWords[name], value, source: `${given}${before}` }];
   });
-}
-
-function sourceWords(origin: SettingOrigin | undefined): string {
-  if (origin === undefined) return 'not kept';
-  if (origin.source === 'default') return 'default, Setup is silent';
-  return origin.cell ?? (origin.source === 'office' ? 'the office’s own' : 'Setup');
 }

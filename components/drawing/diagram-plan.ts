@@ -57,7 +57,9 @@ export function planDiagram(
     });
   });
   const k = flat ? 0 : tall(scene.axes) / most;
-  const shapes = flat ? [] : scene.axes.map((axis) => shape(axis, result, force, sign * k, scene));
+  // a slack member carries nothing: a line of zeros would hide its dashes
+  const carrying = scene.axes.filter((axis) => !result.slack.includes(axis.index));
+  const shapes = flat ? [] : carrying.map((axis) => shape(axis, result, force, sign * k, scene));
   const { wishes, dots } = flat ? { wishes: [], dots: [] } : extremeWishes(scene, result, force, sign * k, most);
   const must = wishes.slice(0, 1);
   const labels = placeLabels(

@@ -1,6 +1,6 @@
 import type { DrawingData, DrawingResult } from './drawing-data';
 import { direction } from './load-blocks';
-import { words } from './load-words';
+import { imperfection, words } from './load-words';
 import { along, type MemberAxis } from './member-axis';
 import { plus, type Point } from './paper';
 
@@ -8,6 +8,8 @@ interface Pointed {
   readonly at: Point;
   readonly force: Point;
   readonly text: string;
+  /** It stands for an imperfection. */
+  readonly standsFor?: boolean;
 }
 
 export function pointed(
@@ -42,6 +44,7 @@ export function pointed(
               at: p,
               force: { x: unit.x * Math.sign(value), y: unit.y * Math.sign(value) },
               text: `${load.case} ${words(Math.abs(value), 'force', data)}`,
+              standsFor: load.case === imperfection,
             },
           ];
     return [...one(load.Fx, { x: 1, y: 0 }), ...one(load.Fy, { x: 0, y: -1 })];

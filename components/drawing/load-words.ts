@@ -4,6 +4,9 @@ import type { Quantity } from '@/lib/units/quantity';
 import type { DrawingData, DrawingResult } from './drawing-data';
 import type { Distributed } from './load-blocks';
 
+/** The name under which forces that stand for imperfections are drawn. */
+export const imperfection = 'imperfection';
+
 /** An SI value with its unit, three figures. */
 export const words = (si: number, quantity: Quantity, data: DrawingData): string => {
   const unit = unitLabel(quantity, data.units);
@@ -23,6 +26,9 @@ export function blockText(load: Distributed, data: DrawingData): string {
 export function besides(data: DrawingData, result: DrawingResult): string[] {
   const out: string[] = [];
   if (result.loads.some((one) => one.kind === 'distributed' && one.selfWeight)) out.push('self-weight acts too');
+  const stand = result.loads.flatMap((one) => (one.kind === 'node' && one.case === imperfection ? [one.Fx, one.Fy] : []));
+  const most = Math.max(0, ...stand.map(Math.abs));
+  if (most > 0) out.push(`forces up to ${words(most, 'force', data)} stand for imperfections`);
   const warm = result.loads.filter((one) => one.kind === 'temperature');
   const sizes = new Set(
     warm.map((one) =>

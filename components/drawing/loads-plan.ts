@@ -35,11 +35,13 @@ export function planLoads(data: DrawingData, result: DrawingResult, width: numbe
     arrows.push({ key: `d${i}`, d: drawn.d, className: 'd-load' });
   });
   const wishes: LabelWish[] = [...blockWishes(scene, blocks)];
-  pointed(data, result, axes, paper.at).forEach(({ at, force, text }, i) => {
+  pointed(data, result, axes, paper.at).forEach(({ at, force, text, standsFor }, i) => {
     const inward = { x: -force.x, y: -force.y };
     const tail = plus(at, inward, tall * 1.25);
     taken.line(tail, at);
     arrows.push({ key: `p${i}`, d: arrow(tail, plus(at, inward, 3), 5), className: 'd-load d-load-point' });
+    // a small view has no room for the many of them: their sizes are said beside it
+    if (standsFor && !large) return;
     wishes.push({
       key: `p${i}`,
       text,

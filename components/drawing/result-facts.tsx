@@ -18,7 +18,7 @@ export function ResultFacts({ data, result }: ResultFactsProps) {
 /** "second order, 5 passes, last change 3.1 · 10⁻¹¹", "imperfection to the right →", "slack: BD, CE" … */
 export function methodWords(
   { members, notApplicable }: { readonly members: readonly { readonly id: string }[]; readonly notApplicable: readonly string[] },
-  { kind, method, slack, name }: Pick<DrawingResult, 'kind' | 'method' | 'slack' | 'name'>,
+  { kind, method, slack }: Pick<DrawingResult, 'kind' | 'method' | 'slack'>,
 ): string[] {
   const { order, iterations, change, imperfection, shearDeformation, reducedStiffness, loadScale } = method;
   const passes = iterations === 1 ? 'settled in one pass' : `settled in ${iterations} passes, last change ${powerText(change)}`;
@@ -37,7 +37,7 @@ export function methodWords(
   }
   if (notApplicable.length > 0 && kind === 'combination')
     words.push(
-      `load cases alone not applicable (${notApplicable.join(', ')}): members that only pull make ${name} no sum of them`,
+      `load cases alone (${notApplicable.join(', ')}) not applicable: with tension-only members a combination is no sum of them`,
     );
   return words;
 }

@@ -95,7 +95,7 @@ export function DeflectedView({
   return (
     <>
       <FrameLines scene={plan.scene} thin slack={result.slack} />
-      <path className="d-deflected" d={plan.lines(share).join('')} />
+      <MovedLines className="d-deflected" lines={plan.lines(share)} slack={result.slack} />
       <Dimensions scene={plan.scene} />
       <Labels labels={plan.labels} />
       <text
@@ -106,6 +106,24 @@ export function DeflectedView({
       >
         {plan.times === null ? 'nothing moves' : `movements × ${factorText(plan.times)}`}
       </text>
+    </>
+  );
+}
+
+interface MovedLinesProps {
+  readonly className: string;
+  /** By member. */
+  readonly lines: readonly string[];
+  readonly slack: readonly number[];
+}
+
+/** The moved lines of all members, slack ones dotted as they are unmoved. */
+function MovedLines({ className, lines, slack }: MovedLinesProps) {
+  const of = (loose: boolean) => lines.filter((_, i) => slack.includes(i) === loose).join('');
+  return (
+    <>
+      <path className={className} d={of(false)} />
+      {slack.length > 0 && <path className="d-moved-slack" d={of(true)} />}
     </>
   );
 }
@@ -126,7 +144,7 @@ export function BuckledView({ data, result, shape, breathing, width, height, lar
   return (
     <>
       <FrameLines scene={plan.scene} thin slack={result.slack} />
-      <path className="d-buckled" d={plan.lines(share).join('')} />
+      <MovedLines className="d-buckled" lines={plan.lines(share)} slack={result.slack} />
       <Dimensions scene={plan.scene} />
       <Labels labels={plan.labels} />
       <text className="d-extreme d-governing d-alpha" x={large ? width - 10 : 8} y={18} textAnchor={large ? 'end' : 'start'}>

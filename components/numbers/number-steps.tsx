@@ -11,9 +11,11 @@ export function NumberSteps({ steps, from = 1 }: { readonly steps: readonly Numb
           {sentence}
         </p>
       ))}
-      {tables.map((table) => (
-        <NumberTable key={table.id} table={table} />
-      ))}
+      <div className="numbers-tables">
+        {tables.map((table) => (
+          <NumberTable key={table.id} table={table} />
+        ))}
+      </div>
     </Zone>
   ));
 }

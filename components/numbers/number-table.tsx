@@ -6,6 +6,7 @@ import type { NumberTable as NumberTableData } from './numbers-data';
 export function NumberTable({ table }: { readonly table: NumberTableData }) {
   const { id, title, corner, columns, rows, long } = table;
   const text = columnText(table);
+  const units = columns.some(({ unit }) => unit);
   return (
     <div className="numbers-table" id={id}>
       <div className="numbers-head">
@@ -21,7 +22,7 @@ export function NumberTable({ table }: { readonly table: NumberTableData }) {
               {columns.map(({ label, unit, words }, i) => (
                 <th key={`${label}${i}`} scope="col" className={words ? undefined : 'num'}>
                   {label}
-                  <span className="unit">{unit ?? ''}</span>
+                  {units && <span className="unit">{unit ?? ''}</span>}
                 </th>
               ))}
             </tr>

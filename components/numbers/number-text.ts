@@ -3,16 +3,26 @@ import { powerText } from '../ui/power-text';
 import type { NumberCell, NumberTable } from './numbers-data';
 
 /**
- * Decimals for numbers of one kind: six figures of the largest, and three of the smallest that is no rounding of it, so that
+ * Decimals for numbers of one kind: six figures of the largest, and four of the smallest that is no rounding of it, so that
  * decimal points stand under one another and nothing that matters reads 0.
  */
 export function decimalsFor(values: readonly number[]): number {
   const sizes = values.map(Math.abs).filter((size) => size > 0 && Number.isFinite(size));
   if (sizes.length === 0) return 0;
   const most = Math.max(...sizes);
-  const least = Math.min(...sizes.filter((size) => size > most * 1e-7));
-  const wanted = Math.max(4 - power(most), 2 - power(least));
-  return Math.max(0, Math.min(wanted, 12));
+  const counted = sizes.filter((size) => size > most * 1e-7);
+  const least = Math.min(...counted);
+  const wanted = Math.max(0, Math.min(Math.max(5 - power(most), 3 - power(least)), 12));
+  // what was typed with fewer has no more: 1.35 is not 1.35000
+  const needed = counted.reduce((sum, size) => Math.max(sum, placesOf(size)), 0);
+  return Math.min(wanted, needed);
+}
+
+/** Decimals of a number to nine figures. */
+function placesOf(size: number): number {
+  const [digits = '', exponent = '0'] = size.toPrecision(9).split('e');
+  const places = digits.includes('.') ? digits.replace(/0+$/, '').split('.')[1]!.length : 0;
+  return Math.max(0, places - Number(exponent));
 }
 
 const power = (size: number): number => Math.floor(Math.log10(size));
@@ -28,7 +38,7 @@ export function columnText({ columns, rows, mixed }: NumberTable): ((cell: Numbe
       if (cell === null) return '';
       if (typeof cell === 'string') return cell;
       if (cell === 0 || column.power) return powerText(cell);
-      return formatNumber(cell, mixed ? { significant: 6 } : { decimals: own });
+      return formatNumber(cell, mixed && !Number.isInteger(cell) ? { significant: 6 } : { decimals: mixed ? 0 : own });
     };
   });
 }

@@ -102,7 +102,19 @@ describe('a desk with a large batch', () => {
     const phone = await (await browser.newContext({ viewport: { width: 390, height: 844 }, isMobile: true })).newPage();
     await signInAs(phone, url, 'north', 'lead');
     const wide: string[] = [];
-    const sheets = ['read', 'run', 'glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems', 'frames/1'];
+    const sheets = [
+      'read',
+      'run',
+      'glance',
+      'frames',
+      'members',
+      'checks',
+      'reactions',
+      'movements',
+      'problems',
+      'frames/1',
+      'frames/1/numbers',
+    ];
     const paths = [
       '/projects',
       '/people',

@@ -80,7 +80,7 @@ function memberAsked({ members }: Frame, evaluation: FrameEvaluation | null, of:
 }
 
 function methodOfResult(frame: Frame, states: readonly ResultState[], state: ResultState): string {
-  const told = { name: state.name, kind: state.kind, method: methodOf(state), slack: state.method?.slack ?? [] };
+  const told = { kind: state.kind, method: methodOf(state), slack: state.method?.slack ?? [] };
   return `${state.name}: ${methodWords({ members: frame.members, notApplicable: notApplicable(frame, states) }, told).join(' · ')}.`;
 }
 

@@ -82,6 +82,9 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
           </div>
         </>
       )}
+      <Zone title="Certificate" note={certificateWords(frame)}>
+        <Certificate {...frame.vouched} />
+      </Zone>
     </>
   );
   const side = (
@@ -111,9 +114,6 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
           />
         </Zone>
       )}
-      <Zone title="Certificate" note={certificateWords(frame)}>
-        <Certificate {...frame.vouched} />
-      </Zone>
       <Zone title="Mass and assumptions">
         <dl className="facts">
           <Fact name="mass of one frame">

@@ -15,6 +15,7 @@ import { findFrame, findNeighbours, type Neighbours } from '@/db/queries/frames'
 import { api, pages } from '@/lib/api/addresses';
 import { listFromParams, listToSearch } from '@/lib/api/view-address';
 import { offeredColumns } from '@/lib/tables/shown-columns';
+import { MadeFrom } from '../../_head/made-from';
 import { titleOf } from '../../_head/revision-head';
 import type { View } from '@/lib/tables/view';
 import { FrameSheet } from './frame-sheet';
@@ -63,6 +64,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
           </a>
         }
       />
+      <MadeFrom revision={revision} />
       <CheckedAtOnce {...(detail.checks.length > 0 ? checkedWords(revision) : {})} />
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
