@@ -7,6 +7,7 @@ import type { Settings } from '@/lib/model/settings';
 import { lineMemo, type LineOf } from '@/lib/results/line-memo';
 import { frameMass } from '@/lib/results/mass';
 import type { Failure, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { methodAssumptions } from '@/lib/results/method-assumptions';
 import { slackAssumptions } from '@/lib/results/state-facts';
 import { frameVerdict, governingOf } from '@/lib/results/verdict';
 
@@ -46,6 +47,7 @@ function evaluate(analyser: Analyser, frame: Frame, settings: Settings, options:
   const lineOf = options.lineOf ?? lineMemo(frame);
   const { checks, allChecks, ...found } = checkFrame(frame, settings, analysis.states, lineOf, { all: options.all });
   const assumptions = [
+    ...methodAssumptions(settings),
     ...analysisAssumptions(frame, settings),
     ...slackAssumptions(frame, analysis.states),
     ...found.assumptions,

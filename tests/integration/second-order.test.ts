@@ -5,10 +5,13 @@
 import { describe, expect, it } from 'vitest';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import { readIntake } from '@/lib/intake/read-intake';
+import { reportSheets } from '@/lib/reports/workbook/report-sheets';
+import type { ReportRow } from '@/lib/reports/workbook/report-sheet';
 import { evaluateFrame } from '@/lib/results/evaluate';
 import { frameResultJson } from '@/lib/results/json';
 import type { FrameEvaluation } from '@/lib/results/result';
 import type { FrameResult } from '@/lib/results/schema';
+import { evaluateBatch } from '@/worker/command/evaluate-batch';
 import { writtenElsewhere, type WrittenCell, type WrittenSheets } from '@/tests/setup/second-writer';
 
 type Rows = readonly (readonly WrittenCell[])[];
@@ -207,5 +210,56 @@ describe('tension-only members from the sheets', () => {
     const { json } = await solve(sheets);
     expect(json).toMatchObject({ status: 'solved', verdict: 'not checked', results: [] });
     expect(json.notApplicable).toHaveLength(1);
+  });
+});
+
+describe('the result workbook of such sheets', () => {
+  async function workbook(sheets: WrittenSheets): Promise<ReadonlyMap<string, readonly ReportRow[]>> {
+    const intake = await readIntake([{ name: 'input.xlsx', bytes: await writtenElsewhere(sheets) }]);
+    const batch = await evaluateBatch(intake, { all: false });
+    const found = new Map<string, readonly ReportRow[]>();
+    for (const { name, columns, rows } of await reportSheets(batch)) {
+      const all: ReportRow[] = [columns.map((column) => column.heading)];
+      for await (const row of rows()) all.push(row);
+      found.set(name, all);
+    }
+    batch.close();
+    return found;
+  }
+  const byHeading = (rows: readonly ReportRow[] | undefined, row: number): Record<string, unknown> =>
+    Object.fromEntries((rows?.[0] ?? []).map((heading, i) => [heading, rows?.[row]?.[i]]));
+
+  it('says how each result was found, in kN, and certifies every frame', async () => {
+    const settings: Rows = [['analysis', 'second order'], ['imperfections', 'EN 1993-1-1'], ['stiffness reduction', 'AISC 360'], ['shear deformation', 'yes']]; // prettier-ignore
+    const book = await workbook(column(settings));
+    const analysis = book.get('Analysis');
+    // the cases shear too, so they have rows
+    expect(analysis?.slice(1).map((row) => row[1])).toEqual(['weight', 'push', 'C1 →', 'C1 ←', 'S1']);
+    const right = byHeading(analysis, 3);
+    expect(right).toMatchObject({
+      order: 2,
+      'imperfections lean': 'right →',
+      'slack members': null,
+      'smallest factor on EI': 0.8,
+    });
+    expect(right['imperfection forces [kN]']).toBe('Fx A −2, B 2');
+    near(right['initial sway φ'] as number, 1 / 200, 1e-12);
+    expect(right['passes']).toBeGreaterThan(0);
+    expect(right['change of the last pass']).toBeLessThan(1e-6);
+    const totals = book.get('Applied load totals') ?? [];
+    const pair = totals.find((row) => row[1] === 'imperfections of C1 →');
+    // +2 kN at 4 m, −2 kN at the base: no sum, −8 kN·m about the origin
+    expect(pair?.slice(2, 4)).toEqual([0, 0]);
+    near(pair?.[4] as number, -8, 1e-9);
+    const frames = byHeading(book.get('Frames'), 1);
+    expect(frames['residual']).toBeLessThan(1e-10);
+    expect(frames['equilibrium']).toBeLessThan(1e-8);
+    expect(frames['digits']).toBeGreaterThan(6);
+    expect(frames['second analysis']).toBeLessThan(1e-6);
+    const cover = (book.get('Cover') ?? []).map((row) => row.join(' '));
+    for (const said of ['analysed second order', 'leaning right (→) and left (←)', 'AISC 360-22 C2.3', 'shear as well as bend', 'engine tallyframe-engine', 'input SHA-256', 'shear areas as typed'])
+      expect(cover.some((line) => line.includes(said)), said).toBe(true); // prettier-ignore
+    for (const name of ['Members by combination', 'Reactions', 'Displacements'])
+      expect(new Set((book.get(name) ?? []).slice(1).map((row) => row[2] === 'C1 →' || row[3] === 'C1 →')).has(true), name).toBe(true); // prettier-ignore
   });
 });

@@ -5,6 +5,7 @@ import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { ResultState, StateMethod } from '@/lib/results/result';
+import { initialSwayOf } from '@/lib/results/method-assumptions';
 import { imperfectionForces, noCasesAlone, slackMembers } from '@/lib/results/state-facts';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { System } from '@/lib/units/quantity';
@@ -26,6 +27,7 @@ export function analysisSheet(source: ReportSource): ReportSheet {
       text('purpose'),
       { heading: 'order', format: '0', width: 7 },
       text('imperfections lean', 12),
+      { heading: 'initial sway φ', format: '0.00000', width: 10 },
       { heading: 'analysed under × loads', format: '0.0', width: 10 },
       { heading: 'passes', format: '0', width: 8 },
       { heading: 'change of the last pass', format: '0.0E+00', width: 12 },
@@ -41,15 +43,31 @@ export function analysisSheet(source: ReportSource): ReportSheet {
         const none = noCasesAlone(frame);
         if (none !== null && evaluation.status === 'solved') {
           const [what = '', ...why] = none.split(': ');
-          yield [id, what, ...Array<null>(10).fill(null), why.join(': ')];
+          yield [id, what, ...Array<null>(11).fill(null), why.join(': ')];
         }
-        for (const state of evaluation.states) if (state.method !== null) yield stateRow(id, frame, state, state.method, system);
+        for (const state of evaluation.states)
+          if (state.method !== null)
+            yield stateRow(
+              id,
+              frame,
+              state,
+              state.method,
+              initialSwayOf(frame, source.settings, evaluation.states, state),
+              system,
+            );
       }
     },
   };
 }
 
-function stateRow(id: string, frame: Frame, state: ResultState, method: StateMethod, system: System): ReportRow {
+function stateRow(
+  id: string,
+  frame: Frame,
+  state: ResultState,
+  method: StateMethod,
+  sway: number | null,
+  system: System,
+): ReportRow {
   const leans = { right: 'right →', left: 'left ←' } as const;
   const smallest = method.stiffness?.reduce((least, factor, i) => (i % 2 === 1 ? Math.min(least, factor) : least), 1) ?? null;
   return [
@@ -58,6 +76,7 @@ function stateRow(id: string, frame: Frame, state: ResultState, method: StateMet
     state.purpose,
     state.order,
     method.imperfection && leans[method.imperfection],
+    sway,
     method.loadScale === 1 ? null : method.loadScale,
     method.iterations,
     method.change,
