@@ -27,9 +27,9 @@ interface BarProps {
 /** The keys that work in the office's pages, shown by `?`. */
 const keys: readonly KeyWord[] = [
   { keys: ['1', '…', '9'], does: 'go to a sheet of the revision; on a frame, make a view large (1 to 4)' },
-  { keys: ['j', 'k'], does: 'next and previous frame of the list' },
-  { keys: ['u'], does: 'from a frame back to its list' },
-  { keys: ['n', 'v', 'm'], does: 'axial force, shear force, bending moment' },
+  { keys: ['j', 'k'], does: 'next and previous frame of the list, or member of the frame' },
+  { keys: ['u'], does: 'from a frame back to its list, from a member’s numbers back to the frame' },
+  { keys: ['n', 'v', 'm', 'b'], does: 'axial force, shear force, bending moment, buckled shape' },
   { keys: ['↑', '↓', '←', '→'], does: 'read the next cell, row, or point of a member' },
   { keys: ['Enter'], does: 'open what is read' },
   { keys: ['?'], does: 'show these keys' },
