@@ -45,7 +45,6 @@ const mostPasses = 50;
 
 /** One state with one set of slack members. README §6. */
 export function analyseSet(job: SetJob, planned: PlannedState, slack: readonly number[]): SetResult {
-  const { frame } = job;
   const first = firstOrder(job, planned.combination, slack);
   if (!first) return { ok: false, trouble: withoutThem(job, slack) };
   const notional = planned.imperfection && job.forces ? leaning(job.forces, first.state, planned) : null;

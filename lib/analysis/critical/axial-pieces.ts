@@ -42,10 +42,17 @@ export function axialForces(frame: Frame, state: ResultState): AxialForces {
   let moved = 0;
   for (let i = 0; i < state.displacements.length; i++)
     if (i % 3 !== 2) moved = Math.max(moved, Math.abs(state.displacements[i]!));
-  const stretches = data.map((m, i) =>
-    slack.includes(i) ? [{ length: m.length, N: [0] }] : stretchesAlong(frame, state, i, m.length),
-  );
+  const stretches = data.map((m, i) => {
+    if (slack.length > 0 && slack.includes(i)) return [{ length: m.length, N: [0] }];
+    // pulled by the imperfections alone, a taut tie is pressed here: it never buckles, it would let go
+    if (frame.members[i]!.tensionOnly) return [{ length: m.length, N: [Math.max(0, meanOf(state, i))] }];
+    return stretchesAlong(frame, state, i, m.length);
+  });
   return { stretches, floor: Math.max(nothing * largest, rounding * stiffest * moved) };
+}
+
+function meanOf({ endForces }: ResultState, member: number): number {
+  return (endForces[6 * member]! + endForces[6 * member + 3]!) / 2;
 }
 
 function stretchesAlong(frame: Frame, state: ResultState, member: number, length: number): Stretch[] {
