@@ -31,7 +31,14 @@ export class FrameBuilder {
   constructor(private readonly batch: Batch) {
     const { tables, reader, problems } = batch;
     this.rows = new Map(frameSheets.map((name) => [name, new RowsByFrame(name, tables.get(name), batch, reader)]));
-    this.combinations = new Combinations(tables.get('Combinations'), batch, batch.cases, reader, problems);
+    this.combinations = new Combinations(
+      tables.get('Combinations'),
+      batch,
+      batch.cases,
+      reader,
+      problems,
+      batch.settings.imperfections !== 'none',
+    );
     this.limits = new Limits(tables.get('Limits'), batch, batch.settings, batch.origins, this.combinations, reader, problems);
     this.refusedSupports = zerosAndOnes(tables.get('Supports'));
   }

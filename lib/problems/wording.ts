@@ -259,6 +259,8 @@ export const termTwice = (name: string): string =>
 export const tooManySigns = (most: number): string => `more than ${most} terms with ±. List the patterns that matter`;
 export const combinationNameTaken = (name: string): string =>
   `the signs of ± give a combination ${name}, and one is listed by that name`;
+export const directionNameTaken = (name: string): string =>
+  `with imperfections, ${name} is the name of a direction of the strength combination before the arrow. Name this one otherwise`;
 export const noSelfWeight = (all: boolean): string =>
   all ? 'no load case carries self-weight. Give it in self weight, usually 1 in the dead case' : 'no load case of these frames carries self-weight'; // prettier-ignore
 export const twoSelfWeights = (combination: string, cases: readonly string[]): string =>

@@ -42,6 +42,14 @@ describe('combinations', () => {
     expect(lines(readSheets(wide(['C1', 'strength', 1, '±1'])))).toEqual([]);
   });
 
+  it('a service combination may not have the name of a direction, where there are directions', () => {
+    const rows: TestCell[][] = [['C1', 'strength', 1, 1], ['c1 →', 'service', 1, null], ['C1 ← ←', 'service', 1, null]]; // prettier-ignore
+    expect(lines(readSheets(wide(...rows)))).toEqual([]);
+    const leaning = wide(...rows);
+    leaning['Setup'] = [...(leaning['Setup'] ?? []), ['analysis', 'second order'], ['imperfections', 'AISC 360']];
+    expect(lines(readSheets(leaning))).toEqual(['error conflicting-row Combinations!A3 F1,F2']);
+  });
+
   it('none at all: every frame is at best not checked', () => {
     const { Combinations: _, ...sheets } = sound();
     const intake = readSheets(sheets);

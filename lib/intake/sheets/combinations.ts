@@ -51,6 +51,8 @@ export class Combinations {
     cases: LoadCases,
     private readonly reader: Reader,
     private readonly problems: ProblemList,
+    /** With imperfections a strength combination has two results, `C1 →` and `C1 ←`. */
+    private readonly leans: boolean,
   ) {
     this.rows = new RowsByFrame('Combinations', table, known, reader);
     this.places = new Map((table?.rows ?? []).map((row, i) => [row, i]));
@@ -95,7 +97,7 @@ export class Combinations {
     const inOrder = [...groups.values()].sort((a, b) => a.place - b.place);
     const list: Combination[] = [];
     const notChecked: string[] = [];
-    const taken = new Set<string>();
+    const taken = new Map<string, Row | undefined>();
     for (const { rows } of inOrder) {
       const listed = this.listed(rows, entry.reading);
       if (!listed) continue;
@@ -115,12 +117,24 @@ export class Combinations {
             );
           continue;
         }
-        taken.add(idKey(each.name));
+        taken.set(idKey(each.name), rows[0]);
         list.push(each);
       }
     }
+    if (this.leans) this.tellDirections(list, taken, entry);
     if (groups.size === 0) notChecked.push('no combinations');
     return { list, notChecked };
+  }
+
+  /** A service combination with the name that a direction of a strength combination gets. */
+  private tellDirections(list: readonly Combination[], rows: ReadonlyMap<string, Row | undefined>, entry: FrameEntry): void {
+    const leaning = new Set(list.filter(({ purpose }) => purpose === 'strength').flatMap(({ name }) => [idKey(`${name} →`), idKey(`${name} ←`)])); // prettier-ignore
+    for (const { name, purpose } of list) {
+      const row = rows.get(idKey(name));
+      if (purpose === 'strength' || !row || !leaning.has(idKey(name))) continue;
+      const fault = { code: 'conflicting-row', message: say.directionNameTaken(name) } as const;
+      this.reader.tell(row, 'combination', fault, { ...forNobody, frame: entry.id });
+    }
   }
 
   /** Reads the rows of one combination, once for all frames that they are for. */
