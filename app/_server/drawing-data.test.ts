@@ -95,7 +95,7 @@ describe('a frame as the drawing takes it', () => {
   });
 
   describe('where combinations are analysed both ways, with ties that only pull', () => {
-    const bent = evaluateFrame(createAnalyser(), braced, settings, { second: false });
+    const bent = evaluateFrame(createAnalyser(), braced, settings, { second: false, all: false });
     const show = (chosen: string) =>
       drawingData({ frame: braced, evaluation: bent, members: [], units: 'metric', nearLimit: 0.9, chosen });
 

@@ -16,6 +16,7 @@ import { sampleLine } from '@/lib/analysis/sample-line';
 import type { Frame, Joint, MemberLoad, Restraint } from '@/lib/model/frame';
 import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, ResultState } from '@/lib/results/result';
+import { imperfectionForces, noCasesAlone } from '@/lib/results/state-facts';
 import { describeState } from './describe-state';
 
 /** Standard gravity, m/s² (ISO 80000-3; sheets §2). */
@@ -63,6 +64,7 @@ export function drawingData({ frame, evaluation, members, units, nearLimit, chos
     })),
     results: states.map(({ name, kind, purpose, criticalLoadFactor }) => ({ name, kind, purpose, criticalLoadFactor })),
     notApplicable: notApplicable(frame, states),
+    noCasesAlone: noCasesAlone(frame),
     chosen: shown === null ? null : drawingResult(frame, shown),
     movement: moving === null || moving === shown ? null : drawingResult(frame, moving),
   };
@@ -124,12 +126,10 @@ export function notApplicable(frame: Frame, states: readonly ResultState[]): str
 }
 
 /** Forces that stand for the imperfections, as they act beside the loads of the combination. */
-function notionalForces(frame: Frame, { method }: ResultState): DrawingLoad[] {
-  const forces = method?.notional;
-  if (!forces) return [];
-  return frame.nodes.flatMap((_, node): DrawingLoad[] => {
-    const [Fx, Fy] = [forces[2 * node]! / method.loadScale, forces[2 * node + 1]! / method.loadScale];
-    return Fx === 0 && Fy === 0 ? [] : [{ case: 'imperfection', kind: 'node', node, Fx, Fy, Mz: 0 }];
+function notionalForces(frame: Frame, state: ResultState): DrawingLoad[] {
+  return imperfectionForces(frame, state).map(({ node: id, Fx_N, Fy_N }) => {
+    const node = frame.nodes.findIndex((one) => one.id === id);
+    return { case: 'imperfection', kind: 'node', node, Fx: Fx_N, Fy: Fy_N, Mz: 0 };
   });
 }
 

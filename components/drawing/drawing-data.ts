@@ -17,6 +17,8 @@ export interface DrawingData {
   readonly results: readonly ResultName[];
   /** Load cases without a result of their own: tension-only members make sums of cases meaningless. */
   readonly notApplicable: readonly string[];
+  /** Why, in a sentence; null where every case has a result. */
+  readonly noCasesAlone: string | null;
   /** Views 1 and 2: the chosen case or combination; null = not solved, geometry only. */
   readonly chosen: DrawingResult | null;
   /** View 3, deflected line: usually the governing service combination; null = take the chosen one. */

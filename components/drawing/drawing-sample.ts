@@ -83,6 +83,7 @@ export function simpleBeam(): DrawingData {
       { name: 'C1', kind: 'combination', purpose: 'strength', criticalLoadFactor: null },
     ],
     notApplicable: [],
+    noCasesAlone: null,
     chosen,
     movement: null,
   };

@@ -117,14 +117,14 @@ describe('the drawing of a frame', () => {
     const method: DrawingMethod = {
       ...plainMethod, order: 2, imperfection: 'left', reducedStiffness: true, loadScale: 1.6, iterations: 5, change: 3.1e-11,
     }; // prettier-ignore
-    render(<FrameDrawing data={{ ...withResult({ name: 'C1 ←', method }), notApplicable: ['dead', 'wind'] }} />);
+    render(<FrameDrawing data={{ ...withResult({ name: 'C1 ←', method }), noCasesAlone: 'load cases alone: not applicable' }} />);
     const note = screen.getByRole('note');
     expect(note).toHaveTextContent(
       'C1 ← second order: equilibrium on the deformed shape, settled in 5 passes, last change 3.1 · 10⁻¹¹',
     );
     expect(note).toHaveTextContent('imperfection to the left ←');
     expect(note).toHaveTextContent('analysed under 1.6 times the loads, results divided by 1.6');
-    expect(note).toHaveTextContent('load cases alone (dead, wind) not applicable');
+    expect(note).toHaveTextContent('load cases alone: not applicable');
   });
 
   it('draws the forces that stand for an imperfection among the loads', () => {

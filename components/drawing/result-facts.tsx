@@ -17,8 +17,8 @@ export function ResultFacts({ data, result }: ResultFactsProps) {
 
 /** "second order, 5 passes, last change 3.1 · 10⁻¹¹", "imperfection to the right →", "slack: BD, CE" … */
 export function methodWords(
-  { members, notApplicable }: { readonly members: readonly { readonly id: string }[]; readonly notApplicable: readonly string[] },
-  { kind, method, slack }: Pick<DrawingResult, 'kind' | 'method' | 'slack'>,
+  { members, noCasesAlone }: Pick<DrawingData, 'noCasesAlone'> & { readonly members: readonly { readonly id: string }[] },
+  { method, slack }: Pick<DrawingResult, 'method' | 'slack'>,
 ): string[] {
   const { order, iterations, change, imperfection, shearDeformation, reducedStiffness, loadScale } = method;
   const passes = iterations === 1 ? 'settled in one pass' : `settled in ${iterations} passes, last change ${powerText(change)}`;
@@ -35,9 +35,6 @@ export function methodWords(
     const names = slack.map((index) => members[index]?.id ?? '').join(', ');
     words.push(`slack, drawn dashed: ${names}`);
   }
-  if (notApplicable.length > 0 && kind === 'combination')
-    words.push(
-      `load cases alone (${notApplicable.join(', ')}) not applicable: with tension-only members a combination is no sum of them`,
-    );
+  if (noCasesAlone !== null) words.push(noCasesAlone);
   return words;
 }

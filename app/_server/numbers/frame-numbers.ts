@@ -9,6 +9,7 @@ import { notFound } from '@/lib/api/error';
 import { frameNumberInput } from '@/lib/api/inputs';
 import type { Frame } from '@/lib/model/frame';
 import type { FrameEvaluation, ResultState, Verdict } from '@/lib/results/result';
+import { noCasesAlone } from '@/lib/results/state-facts';
 import { governingState, methodOf, notApplicable } from '../drawing-data';
 import { numberUnits } from './number-units';
 import { numbersData } from './numbers-data';
@@ -66,7 +67,7 @@ export async function frameNumbers(revision: RevisionRecord, number: string, ask
     result: state?.name ?? null,
     si,
     unitWords: `${units.force}, ${units.length} and radians`,
-    methodWords: there ? methodOfResult(frame, states, state) : '',
+    methodWords: there ? methodOfResult(frame, state) : '',
     data: there ? numbersData(frame, state, member, units) : null,
     why: whyNone(stored),
   };
@@ -79,9 +80,9 @@ function memberAsked({ members }: Frame, evaluation: FrameEvaluation | null, of:
   return Math.max(0, members.findIndex(({ id, span }) => id === governing || (span !== null && span === governing))); // prettier-ignore
 }
 
-function methodOfResult(frame: Frame, states: readonly ResultState[], state: ResultState): string {
-  const told = { kind: state.kind, method: methodOf(state), slack: state.method?.slack ?? [] };
-  return `${state.name}: ${methodWords({ members: frame.members, notApplicable: notApplicable(frame, states) }, told).join(' · ')}.`;
+function methodOfResult(frame: Frame, state: ResultState): string {
+  const told = { method: methodOf(state), slack: state.method?.slack ?? [] };
+  return `${state.name}: ${methodWords({ members: frame.members, noCasesAlone: noCasesAlone(frame) }, told).join(' · ')}.`;
 }
 
 function whyNone({ status, evaluation }: FrameStored): string {

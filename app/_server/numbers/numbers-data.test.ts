@@ -9,8 +9,8 @@ import { numbersData } from './numbers-data';
 
 const frame = cantileverFrame('F1');
 const settings = { ...defaultSettings, analysis: 'second order' as const };
-const first = evaluateFrame(createAnalyser(), frame, defaultSettings, { second: false });
-const second = evaluateFrame(createAnalyser(), frame, settings, { second: false });
+const first = evaluateFrame(createAnalyser(), frame, defaultSettings, { second: false, all: false });
+const second = evaluateFrame(createAnalyser(), frame, settings, { second: false, all: false });
 
 const table = ({ steps, frame: whole }: NumbersData, id: string) => {
   const found = [...steps, whole].flatMap(({ tables }) => tables).find((one) => one.id === id);
