@@ -34,10 +34,26 @@ export function noCasesAlone(frame: Frame): string | null {
   return `load cases alone: not applicable, since with tension-only members (${some}) results of cases do not add up`;
 }
 
-/** Which members are slack where, a line a member. */
+/** Results named of a slack member; of more they are counted. */
+const mostNamed = 6;
+
+/** Which members are slack where: a line for all that are slack in the same results. */
 export function slackAssumptions(frame: Frame, states: readonly ResultState[]): string[] {
-  const slack = new Map<string, string[]>();
+  const slackIn = new Map<string, string[]>();
   for (const state of states)
-    for (const member of slackMembers(frame, state)) slack.set(member, [...(slack.get(member) ?? []), state.name]);
-  return [...slack].map(([member, names]) => `${member}: tension only, slack in ${names.join(', ')}`);
+    for (const member of slackMembers(frame, state)) slackIn.set(member, [...(slackIn.get(member) ?? []), state.name]);
+  const together = new Map<string, { readonly names: readonly string[]; readonly members: string[] }>();
+  for (const [member, names] of slackIn) {
+    const key = names.join('\n');
+    const same = together.get(key);
+    if (same) same.members.push(member);
+    else together.set(key, { names, members: [member] });
+  }
+  return [...together.values()].map(({ names, members }) => {
+    const where =
+      names.length <= mostNamed
+        ? names.join(', ')
+        : `${names.length} of ${states.length} results (${names.slice(0, mostNamed - 1).join(', ')} …)`;
+    return `${members.join(', ')}: tension only, slack in ${where}`;
+  });
 }
