@@ -1,9 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
 import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
 import type { MemberData } from './member-data';
-import { blockAt } from './member-places';
 import { packedMembers, packedSize } from './packed-members';
-import type { Topology } from './topology';
+import { blockAt, type Topology } from './topology';
 
 /**
  * Stiffness of a member between its nodes in the terms that matter: axial, and bending with the joints condensed.

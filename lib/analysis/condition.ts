@@ -5,9 +5,10 @@ import type { Topology } from './topology';
 export function scaledNorm(K: Float64Array, t: Topology, diagonal: Float64Array): number {
   const scale = Float64Array.from(diagonal, (d) => 1 / Math.sqrt(d));
   const sums = new Float64Array(3 * t.size);
-  for (let j = 0; j < t.size; j++)
-    for (let i = t.firstRow[j]!; i <= j; i++) {
-      const at = 9 * (t.columnStart[j]! + i - t.firstRow[j]!);
+  for (let i = 0; i < t.size; i++)
+    for (let b = t.rowStart[i]!; b < t.rowStart[i + 1]!; b++) {
+      const j = t.columns[b]!;
+      const at = 9 * b;
       for (let r = 0; r < 3; r++)
         for (let c = 0; c < 3; c++) {
           // of a block on the diagonal only the upper half need be there

@@ -2,9 +2,9 @@ import { EigenvalueDecomposition, inverse, Matrix } from 'ml-matrix';
 import { describe, expect, it } from 'vitest';
 import { conditionEstimate, scaledNorm } from './condition';
 import { factor } from './factor';
-import { reverseCuthillMcKee } from './ordering';
+import { minimumDegree } from './ordering';
 import { solve } from './solve';
-import type { Topology } from './topology';
+import { patternOf, type Topology } from './topology';
 
 /** A seeded generator (Park and Miller), so that a failure can be met again. */
 function seeded(seed: number): () => number {
@@ -15,31 +15,32 @@ function seeded(seed: number): () => number {
 const none = new Int32Array(0);
 const noMembers = { rows: none, blocks: none, turned: new Uint8Array(0), heldRows: none, zeros: none, ones: none };
 
-/** A random symmetric matrix on a skyline of blocks, positive definite where `shift` is large, and its dense twin. */
+function join(joined: readonly Set<number>[], a: number, b: number): void {
+  joined[a]!.add(b);
+  joined[b]!.add(a);
+}
+
+/** A random symmetric matrix on a pattern of blocks, positive definite where `shift` is large, and its dense twin. */
 function randomSystem(size: number, seed: number, shift: number): { t: Topology; K: Float64Array; dense: Matrix } {
   const random = seeded(seed);
-  const firstRow = Int32Array.from({ length: size }, (_, j) => Math.max(0, j - Math.floor(random() * 4)));
-  const columnStart = new Int32Array(size);
-  let blocks = 0;
-  for (let j = 0; j < size; j++) {
-    columnStart[j] = blocks;
-    blocks += j - firstRow[j]! + 1;
-  }
+  const joined = Array.from({ length: size }, () => new Set<number>());
+  for (let i = 1; i < size; i++) for (let j = 0; j < i; j++) if (random() < 0.4) join(joined, i, j);
+  const { rows } = minimumDegree(joined);
   const order = Int32Array.from({ length: size }, (_, i) => i);
   const t: Topology = {
-    key: '', size, nodeAt: order, positionOf: order, firstRow, columnStart, blocks,
+    key: '', size, nodeAt: order, positionOf: order, ...patternOf(rows),
     free: new Uint8Array(3 * size).fill(1), noRotation: new Uint8Array(size), places: noMembers,
   }; // prettier-ignore
-  const K = new Float64Array(9 * blocks);
+  const K = new Float64Array(9 * t.blocks);
   const dense = Matrix.zeros(3 * size, 3 * size);
-  for (let j = 0; j < size; j++)
-    for (let i = firstRow[j]!; i <= j; i++)
+  for (let i = 0; i < size; i++)
+    for (let b = t.rowStart[i]!; b < t.rowStart[i + 1]!; b++)
       for (let r = 0; r < 3; r++)
-        for (let c = i === j ? r : 0; c < 3; c++) {
+        for (let c = t.columns[b] === i ? r : 0; c < 3; c++) {
+          const j = t.columns[b]!;
           const value = random() - 0.5 + (i === j && r === c ? shift : 0);
-          const at = 9 * (columnStart[j]! + i - firstRow[j]!);
-          K[at + 3 * r + c] = value;
-          if (i === j) K[at + 3 * c + r] = value;
+          K[9 * b + 3 * r + c] = value;
+          if (i === j) K[9 * b + 3 * c + r] = value;
           dense.set(3 * i + r, 3 * j + c, value);
           dense.set(3 * j + c, 3 * i + r, value);
         }
@@ -109,19 +110,26 @@ describe('the condition estimate', () => {
 });
 
 describe('the ordering', () => {
-  it('numbers a shuffled chain from end to end, so that the profile is one block wide', () => {
+  const around = (pairs: readonly (readonly [number, number])[], count: number): Set<number>[] => {
+    const joined = Array.from({ length: count }, () => new Set<number>());
+    for (const [a, b] of pairs) join(joined, a, b);
+    return joined;
+  };
+
+  it('eliminates a shuffled chain from both ends in turn, so that nothing fills in', () => {
     const chain = [3, 0, 4, 1, 5, 2];
-    const neighbours = chain.map(() => [] as number[]);
-    for (let i = 1; i < chain.length; i++) {
-      neighbours[chain[i - 1]!]!.push(chain[i]!);
-      neighbours[chain[i]!]!.push(chain[i - 1]!);
-    }
-    const order = [...reverseCuthillMcKee(neighbours)];
-    for (let i = 1; i < order.length; i++) expect(neighbours[order[i]!]).toContain(order[i - 1]);
+    const { order, rows } = minimumDegree(around(chain.slice(1).map((v, i) => [chain[i]!, v] as const), 6)); // prettier-ignore
+    expect([...order].slice(0, 4)).toEqual([2, 3, 0, 5]);
+    expect(rows.map((row) => row.length)).toEqual([1, 1, 1, 1, 1, 0]);
+  });
+
+  it('joins what an eliminated vertex stood between: a ring leaves one fill-in a vertex', () => {
+    const { rows } = minimumDegree(around([[0, 1], [1, 2], [2, 3], [3, 4], [4, 0]], 5)); // prettier-ignore
+    expect(rows.map((row) => row.length)).toEqual([2, 2, 2, 1, 0]);
   });
 
   it('takes every vertex once, parts that do not hang together included', () => {
-    const order = reverseCuthillMcKee([[1], [0], [], [4], [3]]);
+    const { order } = minimumDegree(around([[0, 1], [3, 4]], 5)); // prettier-ignore
     expect([...order].sort()).toEqual([0, 1, 2, 3, 4]);
   });
 });

@@ -1,12 +1,14 @@
 import type { Topology } from './topology';
 
 /**
- * K = Uᵀ D U in place, by 3 × 3 node blocks on a skyline (active columns, after Jennings 1977).
+ * K = Uᵀ D U in place, by 3 × 3 node blocks, row after row: each row is divided by its block on the diagonal, and its products
+ * are taken from the rows to come (George and Liu 1981, ch. 5). Where they go is looked up in the topology.
  *
- * U is block unit upper triangular and takes K's place above the diagonal; the diagonal blocks are factored
+ * U is block unit upper triangular and takes K's place beyond the diagonal; the diagonal blocks are factored
  * LDLᵀ one by one into `inner`: [1/p₀, l₁₀, l₂₀, 1/p₁, l₂₁, 1/p₂] a position, their pivots into `pivots`.
  *
- * @param K blocks of topology.ts, overwritten   @param diagonal K's own diagonal before, 3 a position
+ * @param K blocks of topology.ts, overwritten; of those on the diagonal the upper half is read
+ * @param diagonal K's own diagonal before, 3 a position
  * @param tolerance a pivot not above tolerance × its own original diagonal stops the work; 0 = never
  *   (for an indefinite K: the number of negative pivots is then the number of negative eigenvalues)
  * @returns −1, or the row (3 × position + direction) whose pivot is not positive: the frame can move
@@ -19,87 +21,16 @@ export function factor(
   pivots: Float64Array,
   tolerance: number,
 ): number {
-  const { size, firstRow, columnStart } = t;
-  for (let j = 0; j < size; j++) {
-    const hj = firstRow[j]!;
-    const baseJ = columnStart[j]! - hj;
-    for (let i = hj; i < j; i++) {
-      const hi = firstRow[i]!;
-      const baseI = columnStart[i]! - hi;
-      let at = 9 * (baseJ + i);
-      let g0 = K[at]!, g1 = K[at + 1]!, g2 = K[at + 2]!; // prettier-ignore
-      let g3 = K[at + 3]!, g4 = K[at + 4]!, g5 = K[at + 5]!; // prettier-ignore
-      let g6 = K[at + 6]!, g7 = K[at + 7]!, g8 = K[at + 8]!; // prettier-ignore
-      // G_ij = K_ij − Σ U_kiᵀ G_kj
-      let u = 9 * (baseI + (hi > hj ? hi : hj));
-      let g = 9 * (baseJ + (hi > hj ? hi : hj));
-      for (; g < at; g += 9, u += 9) {
-        const u0 = K[u]!, u1 = K[u + 1]!, u2 = K[u + 2]!; // prettier-ignore
-        const u3 = K[u + 3]!, u4 = K[u + 4]!, u5 = K[u + 5]!; // prettier-ignore
-        const u6 = K[u + 6]!, u7 = K[u + 7]!, u8 = K[u + 8]!; // prettier-ignore
-        const a0 = K[g]!, a1 = K[g + 1]!, a2 = K[g + 2]!; // prettier-ignore
-        const a3 = K[g + 3]!, a4 = K[g + 4]!, a5 = K[g + 5]!; // prettier-ignore
-        const a6 = K[g + 6]!, a7 = K[g + 7]!, a8 = K[g + 8]!; // prettier-ignore
-        g0 -= u0 * a0 + u3 * a3 + u6 * a6;
-        g1 -= u0 * a1 + u3 * a4 + u6 * a7;
-        g2 -= u0 * a2 + u3 * a5 + u6 * a8;
-        g3 -= u1 * a0 + u4 * a3 + u7 * a6;
-        g4 -= u1 * a1 + u4 * a4 + u7 * a7;
-        g5 -= u1 * a2 + u4 * a5 + u7 * a8;
-        g6 -= u2 * a0 + u5 * a3 + u8 * a6;
-        g7 -= u2 * a1 + u5 * a4 + u8 * a7;
-        g8 -= u2 * a2 + u5 * a5 + u8 * a8;
-      }
-      K[at] = g0;
-      K[++at] = g1;
-      K[++at] = g2;
-      K[++at] = g3;
-      K[++at] = g4;
-      K[++at] = g5;
-      K[++at] = g6;
-      K[++at] = g7;
-      K[++at] = g8;
-    }
-    const d = 9 * (baseJ + j);
-    let d00 = K[d]!, d01 = K[d + 1]!, d02 = K[d + 2]!, d11 = K[d + 4]!, d12 = K[d + 5]!, d22 = K[d + 8]!; // prettier-ignore
-    for (let i = hj; i < j; i++) {
-      const at = 9 * (baseJ + i);
-      const q = 6 * i;
-      const p0 = inner[q]!, l10 = inner[q + 1]!, l20 = inner[q + 2]!, p1 = inner[q + 3]!, l21 = inner[q + 4]!, p2 = inner[q + 5]!; // prettier-ignore
-      // U_ij = D_i⁻¹ G_ij, column by column; D_j −= G_ijᵀ U_ij
-      const a0 = K[at]!, a1 = K[at + 1]!, a2 = K[at + 2]!, a3 = K[at + 3]!, a4 = K[at + 4]!; // prettier-ignore
-      const a5 = K[at + 5]!, a6 = K[at + 6]!, a7 = K[at + 7]!, a8 = K[at + 8]!; // prettier-ignore
-      let y = a3 - l10 * a0;
-      let x2 = p2 * (a6 - l20 * a0 - l21 * y);
-      let x1 = p1 * y - l21 * x2;
-      let x0 = p0 * a0 - l10 * x1 - l20 * x2;
-      d00 -= a0 * x0 + a3 * x1 + a6 * x2;
-      d01 -= a1 * x0 + a4 * x1 + a7 * x2;
-      d02 -= a2 * x0 + a5 * x1 + a8 * x2;
-      K[at] = x0;
-      K[at + 3] = x1;
-      K[at + 6] = x2;
-      y = a4 - l10 * a1;
-      x2 = p2 * (a7 - l20 * a1 - l21 * y);
-      x1 = p1 * y - l21 * x2;
-      x0 = p0 * a1 - l10 * x1 - l20 * x2;
-      d11 -= a1 * x0 + a4 * x1 + a7 * x2;
-      d12 -= a2 * x0 + a5 * x1 + a8 * x2;
-      K[at + 1] = x0;
-      K[at + 4] = x1;
-      K[at + 7] = x2;
-      y = a5 - l10 * a2;
-      x2 = p2 * (a8 - l20 * a2 - l21 * y);
-      x1 = p1 * y - l21 * x2;
-      x0 = p0 * a2 - l10 * x1 - l20 * x2;
-      d22 -= a2 * x0 + a5 * x1 + a8 * x2;
-      K[at + 2] = x0;
-      K[at + 5] = x1;
-      K[at + 8] = x2;
-    }
-    const r = 3 * j;
-    const q = 6 * j;
-    const p0 = pivot(d00, diagonal[r]!, tolerance);
+  const { size, rowStart, targets } = t;
+  let update = 0;
+  for (let i = 0; i < size; i++) {
+    const first = 9 * rowStart[i]!;
+    const end = 9 * rowStart[i + 1]!;
+    const r = 3 * i;
+    const q = 6 * i;
+    const d01 = K[first + 1]!;
+    const d02 = K[first + 2]!;
+    const p0 = pivot(K[first]!, diagonal[r]!, tolerance);
     if (p0 !== p0) return r;
     const i0 = 1 / p0;
     const l10 = d01 * i0;
@@ -108,18 +39,69 @@ export function factor(
     inner[q + 1] = l10;
     inner[q + 2] = l20;
     pivots[r] = p0;
-    const p1 = pivot(d11 - l10 * d01, diagonal[r + 1]!, tolerance);
+    const p1 = pivot(K[first + 4]! - l10 * d01, diagonal[r + 1]!, tolerance);
     if (p1 !== p1) return r + 1;
     const i1 = 1 / p1;
-    const e = d12 - l10 * d02;
+    const e = K[first + 5]! - l10 * d02;
     const l21 = e * i1;
     inner[q + 3] = i1;
     inner[q + 4] = l21;
     pivots[r + 1] = p1;
-    const p2 = pivot(d22 - l20 * d02 - l21 * e, diagonal[r + 2]!, tolerance);
+    const p2 = pivot(K[first + 8]! - l20 * d02 - l21 * e, diagonal[r + 2]!, tolerance);
     if (p2 !== p2) return r + 2;
-    inner[q + 5] = 1 / p2;
+    const i2 = 1 / p2;
+    inner[q + 5] = i2;
     pivots[r + 2] = p2;
+    const begin = first + 9;
+    for (let at = begin; at < end; at += 9) {
+      // U_ij = D_i⁻¹ G_ij, column by column
+      const a0 = K[at]!, a1 = K[at + 1]!, a2 = K[at + 2]!, a3 = K[at + 3]!, a4 = K[at + 4]!; // prettier-ignore
+      const a5 = K[at + 5]!, a6 = K[at + 6]!, a7 = K[at + 7]!, a8 = K[at + 8]!; // prettier-ignore
+      const y0 = a3 - l10 * a0;
+      const y1 = a4 - l10 * a1;
+      const y2 = a5 - l10 * a2;
+      const u6 = i2 * (a6 - l20 * a0 - l21 * y0);
+      const u7 = i2 * (a7 - l20 * a1 - l21 * y1);
+      const u8 = i2 * (a8 - l20 * a2 - l21 * y2);
+      const u3 = i1 * y0 - l21 * u6;
+      const u4 = i1 * y1 - l21 * u7;
+      const u5 = i1 * y2 - l21 * u8;
+      const u0 = i0 * a0 - l10 * u3 - l20 * u6;
+      const u1 = i0 * a1 - l10 * u4 - l20 * u7;
+      const u2 = i0 * a2 - l10 * u5 - l20 * u8;
+      K[at] = u0;
+      K[at + 1] = u1;
+      K[at + 2] = u2;
+      K[at + 3] = u3;
+      K[at + 4] = u4;
+      K[at + 5] = u5;
+      K[at + 6] = u6;
+      K[at + 7] = u7;
+      K[at + 8] = u8;
+      // K_ab −= U_iaᵀ G_ib for the row's blocks a before b
+      for (let u = begin; u < at; u += 9) {
+        const to = targets[update++]!;
+        const v0 = K[u]!, v1 = K[u + 1]!, v2 = K[u + 2]!, v3 = K[u + 3]!, v4 = K[u + 4]!; // prettier-ignore
+        const v5 = K[u + 5]!, v6 = K[u + 6]!, v7 = K[u + 7]!, v8 = K[u + 8]!; // prettier-ignore
+        K[to] = K[to]! - (v0 * a0 + v3 * a3 + v6 * a6);
+        K[to + 1] = K[to + 1]! - (v0 * a1 + v3 * a4 + v6 * a7);
+        K[to + 2] = K[to + 2]! - (v0 * a2 + v3 * a5 + v6 * a8);
+        K[to + 3] = K[to + 3]! - (v1 * a0 + v4 * a3 + v7 * a6);
+        K[to + 4] = K[to + 4]! - (v1 * a1 + v4 * a4 + v7 * a7);
+        K[to + 5] = K[to + 5]! - (v1 * a2 + v4 * a5 + v7 * a8);
+        K[to + 6] = K[to + 6]! - (v2 * a0 + v5 * a3 + v8 * a6);
+        K[to + 7] = K[to + 7]! - (v2 * a1 + v5 * a4 + v8 * a7);
+        K[to + 8] = K[to + 8]! - (v2 * a2 + v5 * a5 + v8 * a8);
+      }
+      // … and for b itself, of which the upper half is enough
+      const to = targets[update++]!;
+      K[to] = K[to]! - (u0 * a0 + u3 * a3 + u6 * a6);
+      K[to + 1] = K[to + 1]! - (u0 * a1 + u3 * a4 + u6 * a7);
+      K[to + 2] = K[to + 2]! - (u0 * a2 + u3 * a5 + u6 * a8);
+      K[to + 4] = K[to + 4]! - (u1 * a1 + u4 * a4 + u7 * a7);
+      K[to + 5] = K[to + 5]! - (u1 * a2 + u4 * a5 + u7 * a8);
+      K[to + 8] = K[to + 8]! - (u2 * a2 + u5 * a5 + u8 * a8);
+    }
   }
   return -1;
 }

@@ -9,7 +9,7 @@ import type { Topology } from './topology';
 
 /**
  * The movement that costs nothing, from the factors of the rows before the one that failed: K z = 0 with z = 1
- * at that row and 0 after it (back substitution with the column of U).
+ * at that row and 0 after it (back substitution).
  *
  * @param row as `factor` returned it   @returns 3 a position
  */
@@ -24,14 +24,15 @@ export function nullVector(K: Float64Array, t: Topology, inner: Float64Array, ro
     z[row - 1] = -inner[q + 4]!;
     z[row - 2] = -inner[q + 2]! - inner[q + 1]! * z[row - 1]!;
   }
-  for (let j = last; j >= 0; j--) {
-    const base = t.columnStart[j]! - t.firstRow[j]!;
-    for (let i = t.firstRow[j]!; i < j; i++)
+  for (let i = last - 1; i >= 0; i--)
+    for (let b = t.rowStart[i]! + 1; b < t.rowStart[i + 1]!; b++) {
+      const j = t.columns[b]!;
+      if (j > last) break;
       for (let r = 0; r < 3; r++) {
-        const u = 9 * (base + i) + 3 * r;
+        const u = 9 * b + 3 * r;
         z[3 * i + r] = z[3 * i + r]! - (K[u]! * z[3 * j]! + K[u + 1]! * z[3 * j + 1]! + K[u + 2]! * z[3 * j + 2]!);
       }
-  }
+    }
   return z;
 }
 

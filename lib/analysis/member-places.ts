@@ -1,5 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
-import type { Topology } from './topology';
+import { blockAt, type Topology } from './topology';
 
 /** Where the numbers of members and supports go among those of a frame's equations: looked up once for all frames of one shape. */
 export interface MemberPlaces {
@@ -14,11 +14,6 @@ export interface MemberPlaces {
   /** What is 0 in K for their sake, and what is 1 (their own equation: 1·d = 0). */
   readonly zeros: Int32Array;
   readonly ones: Int32Array;
-}
-
-/** Index in K of the block at node positions i ≤ j. */
-export function blockAt(t: Pick<Topology, 'columnStart' | 'firstRow'>, i: number, j: number): number {
-  return 9 * (t.columnStart[j]! + i - t.firstRow[j]!);
 }
 
 export function memberPlaces(frame: Frame, t: Omit<Topology, 'places'>): MemberPlaces {
@@ -47,12 +42,13 @@ function heldEntries(t: Omit<Topology, 'places'>, heldRows: readonly number[]): 
   const zeros: number[] = [];
   const ones: number[] = [];
   if (held.size > 0)
-    for (let j = 0; j < t.size; j++)
-      for (let i = t.firstRow[j]!; i <= j; i++)
+    for (let i = 0; i < t.size; i++)
+      for (let b = t.rowStart[i]!; b < t.rowStart[i + 1]!; b++)
         for (let r = 0; r < 3; r++)
           for (let c = 0; c < 3; c++) {
+            const j = t.columns[b]!;
             if (!held.has(3 * i + r) && !held.has(3 * j + c)) continue;
-            (i === j && r === c ? ones : zeros).push(blockAt(t, i, j) + 3 * r + c);
+            (i === j && r === c ? ones : zeros).push(9 * b + 3 * r + c);
           }
   return { zeros: Int32Array.from(zeros), ones: Int32Array.from(ones) };
 }

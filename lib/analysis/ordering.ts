@@ -1,60 +1,58 @@
+/** An order of elimination, and what it leaves to be done. */
+export interface Elimination {
+  /** order[position] = vertex. */
+  readonly order: Int32Array;
+  /** Positions later than each that it is joined to when its turn comes, ascending: the pattern of its row of U. */
+  readonly rows: readonly Int32Array[];
+}
+
 /**
- * Reverse Cuthill–McKee ordering of a graph, part by part: neighbours get near numbers, so that the profile is narrow.
+ * Minimum degree ordering of a graph (Tinney and Walker 1967): always the vertex with the fewest neighbours left, whose neighbours
+ * are then joined to one another. Ties go to the vertex with the fewest eliminations before it, so that independent parts come in
+ * turn and a processor can work at both, then to the lowest number.
  *
  * Depends on the numbering of its input and on nothing else, so a cached order is the order computed anew.
  *
  * @param neighbours neighbours[v] = the vertices joined to v
- * @returns order[position] = vertex
- * Cuthill and McKee 1969; start vertex after George and Liu 1979.
  */
-export function reverseCuthillMcKee(neighbours: readonly (readonly number[])[]): Int32Array {
+export function minimumDegree(neighbours: readonly Iterable<number>[]): Elimination {
   const count = neighbours.length;
+  const joined = neighbours.map((each) => new Set(each));
+  const level = new Int32Array(count);
   const order = new Int32Array(count);
-  const done = new Uint8Array(count);
-  let filled = 0;
-  for (let seed = 0; seed < count; seed++) {
-    if (done[seed]) continue;
-    const start = farEnd(neighbours, seed);
-    done[start] = 1;
-    order[filled++] = start;
-    for (let head = filled - 1; head < filled; head++) {
-      const next = neighbours[order[head]!]!.filter((w) => !done[w]);
-      next.sort((p, q) => neighbours[p]!.length - neighbours[q]!.length || p - q);
-      for (const w of next) {
-        if (done[w]) continue;
-        done[w] = 1;
-        order[filled++] = w;
-      }
+  const positionOf = new Int32Array(count).fill(-1);
+  const left = Array.from({ length: count }, (_, v) => v);
+  for (let position = 0; position < count; position++) {
+    const v = takeNext(left, joined, level);
+    order[position] = v;
+    positionOf[v] = position;
+    const around = joined[v]!;
+    for (const w of around) {
+      const others = joined[w]!;
+      others.delete(v);
+      for (const x of around) if (x !== w) others.add(x);
+      level[w] = Math.max(level[w]!, level[v]! + 1);
     }
   }
-  return order.reverse();
+  const rows = Array.from(order, (v) => Int32Array.from(joined[v]!, (w) => positionOf[w]!).sort());
+  return { order, rows };
 }
 
-/** A vertex at the end of a longest shortest path found by repeated breadth-first search. */
-function farEnd(neighbours: readonly (readonly number[])[], seed: number): number {
-  let start = seed;
-  let depth = -1;
-  for (;;) {
-    const layers = layersFrom(neighbours, start);
-    if (layers.length <= depth) return start;
-    depth = layers.length;
-    const last = layers[layers.length - 1]!;
-    start = last.reduce((best, v) => (neighbours[v]!.length < neighbours[best]!.length ? v : best), last[0]!);
+/** The next vertex out of those left, removed from them. */
+function takeNext(left: number[], joined: readonly ReadonlySet<number>[], level: Int32Array): number {
+  let best = 0;
+  let degree = Infinity;
+  for (let i = 0; i < left.length; i++) {
+    const v = left[i]!;
+    const size = joined[v]!.size;
+    if (size > degree) continue;
+    const b = left[best]!;
+    if (size === degree && (level[v]! > level[b]! || (level[v] === level[b] && v > b))) continue;
+    best = i;
+    degree = size;
   }
-}
-
-function layersFrom(neighbours: readonly (readonly number[])[], start: number): number[][] {
-  const seen = new Set([start]);
-  const layers: number[][] = [[start]];
-  for (;;) {
-    const next: number[] = [];
-    for (const v of layers[layers.length - 1]!)
-      for (const w of neighbours[v]!)
-        if (!seen.has(w)) {
-          seen.add(w);
-          next.push(w);
-        }
-    if (next.length === 0) return layers;
-    layers.push(next);
-  }
+  const v = left[best]!;
+  left[best] = left[left.length - 1]!;
+  left.pop();
+  return v;
 }

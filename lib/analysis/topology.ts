@@ -1,14 +1,14 @@
 import type { Frame } from '@/lib/model/frame';
 import { springOf } from './member-data';
 import { memberPlaces, type MemberPlaces } from './member-places';
-import { reverseCuthillMcKee } from './ordering';
+import { minimumDegree } from './ordering';
 
 /**
  * What the factorisation needs to know about a frame apart from its numbers: which nodes have unknowns, their order,
- * and the profile of K. Frames of one shape share it.
+ * and the pattern of K and U. Frames of one shape share it.
  *
- * K is kept as the upper triangle in 3 × 3 node blocks, column by column, each column from its first block row
- * down to the diagonal: block (i, j) starts at 9 × (columnStart[j] + i − firstRow[j]).
+ * K is kept as the upper triangle in 3 × 3 node blocks, row by row, the block on the diagonal first: those of row i are
+ * rowStart[i] … rowStart[i + 1] − 1, block b begins at 9 b, its column is columns[b].
  */
 export interface Topology {
   readonly key: string;
@@ -17,9 +17,11 @@ export interface Topology {
   /** nodeAt[position] = node; positionOf[node] = position, −1 where all is held. */
   readonly nodeAt: Int32Array;
   readonly positionOf: Int32Array;
-  readonly firstRow: Int32Array;
-  readonly columnStart: Int32Array;
+  readonly rowStart: Int32Array;
+  readonly columns: Int32Array;
   readonly blocks: number;
+  /** Where each update of the factorisation goes, in its order: by row i, by its blocks b, by its blocks a ≤ b: block (column a, column b). */
+  readonly targets: Int32Array;
   /** 1 = unknown, 0 = held or (rotation) not there: 3 a node. */
   readonly free: Uint8Array;
   /** 1 = the node turns with no member and no support: it has no rotation of its own. */
@@ -72,7 +74,7 @@ export function buildTopology(frame: Frame): Topology {
     joined[a]!.add(b);
     joined[b]!.add(a);
   }
-  const order = reverseCuthillMcKee(joined.map((set) => [...set]));
+  const { order, rows } = minimumDegree(joined);
   const size = active.length;
   const nodeAt = new Int32Array(size);
   const positionOf = new Int32Array(frame.nodes.length).fill(-1);
@@ -80,16 +82,44 @@ export function buildTopology(frame: Frame): Topology {
     nodeAt[position] = active[vertex]!;
     positionOf[active[vertex]!] = position;
   });
-  const firstRow = new Int32Array(size);
-  const columnStart = new Int32Array(size);
-  let blocks = 0;
-  for (let j = 0; j < size; j++) {
-    let first = j;
-    for (const vertex of joined[order[j]!]!) first = Math.min(first, positionOf[active[vertex]!]!);
-    firstRow[j] = first;
-    columnStart[j] = blocks;
-    blocks += j - first + 1;
-  }
-  const shape = { key, size, nodeAt, positionOf, firstRow, columnStart, blocks, free, noRotation };
+  const pattern = patternOf(rows);
+  const shape = { key, size, nodeAt, positionOf, ...pattern, free, noRotation };
   return { ...shape, places: memberPlaces(frame, shape) };
+}
+
+/** Blocks of K and U, and where updates go. @param rows columns of each row beyond its own, ascending, fill included */
+export function patternOf(rows: readonly Int32Array[]): Pick<Topology, 'rowStart' | 'columns' | 'blocks' | 'targets'> {
+  const rowStart = new Int32Array(rows.length + 1);
+  rows.forEach((row, i) => (rowStart[i + 1] = rowStart[i]! + row.length + 1));
+  const blocks = rowStart[rows.length]!;
+  const columns = new Int32Array(blocks);
+  let updates = 0;
+  rows.forEach((row, i) => {
+    columns[rowStart[i]!] = i;
+    columns.set(row, rowStart[i]! + 1);
+    updates += (row.length * (row.length + 1)) / 2;
+  });
+  const targets = new Int32Array(updates);
+  let k = 0;
+  for (const row of rows)
+    for (let b = 0; b < row.length; b++)
+      for (let a = 0; a <= b; a++) targets[k++] = 9 * find({ rowStart, columns }, row[a]!, row[b]!);
+  return { rowStart, columns, blocks, targets };
+}
+
+/** Number of the block at node positions i ≤ j, which must be there. */
+function find({ rowStart, columns }: Pick<Topology, 'rowStart' | 'columns'>, i: number, j: number): number {
+  let low = rowStart[i]!;
+  let high = rowStart[i + 1]! - 1;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (columns[middle]! < j) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+/** Index in K of the block at node positions i ≤ j. */
+export function blockAt(t: Pick<Topology, 'rowStart' | 'columns'>, i: number, j: number): number {
+  return 9 * (i === j ? t.rowStart[i]! : find(t, i, j));
 }
