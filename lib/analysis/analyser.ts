@@ -1,6 +1,6 @@
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type Settings } from '@/lib/model/settings';
-import type { Certificate, Failure, ResultState } from '@/lib/results/result';
+import type { Certificate, Failure, MemberLine, ResultState } from '@/lib/results/result';
 import { certify, certifyStates, outsideTolerance, type SolvedState } from './certificate';
 import { combinationStates } from './combination-states';
 import { unheldPart } from './connected';
@@ -16,6 +16,8 @@ export interface AnalyseOptions {
   /** False: no second, independent analysis of this frame ("sampled" in its certificate). Default true. */
   readonly second?: boolean;
   readonly settings?: Settings;
+  /** Lines of members that the caller goes on to use, so that each is worked out once. */
+  readonly lineOf?: (state: ResultState, member: number) => MemberLine;
 }
 export type Analysis =
   | { readonly ok: true; readonly states: ResultState[]; readonly certificate: Certificate }
@@ -58,7 +60,7 @@ function analyse(frame: Frame, t: Topology, options: AnalyseOptions): Analysis {
   const second = options.second ?? true;
   const found = isPlain(frame, settings)
     ? plainStates(frame, t, solved, second)
-    : statesAsAsked(frame, t, settings, solved, second);
+    : statesAsAsked(frame, t, settings, solved, { ...options, second });
   if ('code' in found) return { ok: false, failure: found };
   const doubt = outsideTolerance(found.certificate);
   if (doubt) return { ok: false, failure: { code: 'not-solved', message: doubt, node: null } };
@@ -82,7 +84,13 @@ function plainStates(frame: Frame, t: Topology, solved: SolvedCases, second: boo
 }
 
 /** Whatever the settings ask for (README §6). */
-function statesAsAsked(frame: Frame, t: Topology, settings: Settings, solved: SolvedCases, second: boolean): Certified | Failure {
+function statesAsAsked(
+  frame: Frame,
+  t: Topology,
+  settings: Settings,
+  solved: SolvedCases,
+  { second = true, lineOf }: AnalyseOptions,
+): Certified | Failure {
   const found = combinationStates(frame, t, settings, solved);
   if ('code' in found) return found;
   // what a tie does under one case alone says nothing about any combination
@@ -90,6 +98,7 @@ function statesAsAsked(frame: Frame, t: Topology, settings: Settings, solved: So
   const cases = ties ? [] : solved.cases.map((state, c): SolvedState => ({ ...solved.recovered[c]!, state }));
   const all = [...cases, ...found.states];
   const { diagonal, norm } = solved;
-  const certificate = certifyStates({ frame, settings, t, diagonal, norm, condition: found.condition, solved: all }, second);
+  const { condition } = found;
+  const certificate = certifyStates({ frame, settings, t, diagonal, norm, condition, solved: all, lineOf }, second);
   return { states: all.map(({ state }) => state), certificate };
 }

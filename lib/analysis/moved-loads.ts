@@ -20,8 +20,13 @@ const gauss = [
  *
  * With it, the moments of everything about any point sum to none; without a member's P-δ, or with the wrong sway, they don't.
  * Loads as in the state (÷ loadScale); movements as analysed (× loadScale).
+ * @param lineOf where lines are kept for who comes after
  */
-export function momentOfMovement(frame: Frame, state: ResultState): number {
+export function momentOfMovement(
+  frame: Frame,
+  state: ResultState,
+  lineOf: (state: ResultState, member: number) => MemberLine = (one, member) => memberLine(frame, one, member),
+): number {
   const scale = state.method?.loadScale ?? 1;
   const d = state.displacements;
   let sum = 0;
@@ -44,7 +49,7 @@ export function momentOfMovement(frame: Frame, state: ResultState): number {
       sum += unloaded(frame, state, i, scale);
       return;
     }
-    const line = memberLine(frame, state, i);
+    const line = lineOf(state, i);
     sum += shortening(line, scale);
     sum += ofMember(frame, state, i, line, rows[i]!, heavy);
   });

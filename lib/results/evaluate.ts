@@ -37,14 +37,14 @@ export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settin
 }
 
 function evaluate(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
-  const analysis = analyser.analyse(frame, { second: options.second, settings });
+  const lineOf = options.lineOf ?? lineMemo(frame);
+  const analysis = analyser.analyse(frame, { second: options.second, settings, lineOf });
   if (!analysis.ok) return unsolved(frame, analysis.failure);
   const bad = analysis.states.find((state) => !finite(state));
   if (bad) {
     const message = `the results of ${bad.name} are not finite numbers: the frame's stiffness or loads are out of all proportion`;
     return unsolved(frame, { code: 'not-solved', message, node: null });
   }
-  const lineOf = options.lineOf ?? lineMemo(frame);
   const { checks, allChecks, ...found } = checkFrame(frame, settings, analysis.states, lineOf, { all: options.all });
   const assumptions = [
     ...methodAssumptions(settings),
