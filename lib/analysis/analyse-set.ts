@@ -76,7 +76,7 @@ function solved(
 ): SetResult {
   const { frame, t, space, settings } = job;
   const factors = first.state.factors;
-  const guess = Float64Array.from(frame.members, (_, i) => first.state.endForces[6 * i]!);
+  const guess = startForces(first.state.endForces);
   const analyse = planned.order === 2 ? solveSecondOrder : firstOrderCombination;
   let stiffness = planned.reduced ? reductions(job).general : null;
   let iterations = 0;
@@ -114,6 +114,13 @@ function solved(
     return { ok: true, state, outOfBalance, handled };
   }
   return { ok: false, trouble: { kind: 'not settled', reached: 1 } };
+}
+
+/** N at each member's start. */
+function startForces(endForces: Float64Array): Float64Array {
+  const N = new Float64Array(endForces.length / 6);
+  for (let i = 0; i < N.length; i++) N[i] = endForces[6 * i]!;
+  return N;
 }
 
 /**
