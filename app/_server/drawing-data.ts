@@ -1,6 +1,5 @@
 import 'server-only';
 import type {
-  DrawingBuckled,
   DrawingData,
   DrawingJoint,
   DrawingLine,
@@ -9,7 +8,6 @@ import type {
   DrawingRestraint,
   DrawingResult,
 } from '@/components/drawing/drawing-data';
-import { buckledShape } from '@/lib/analysis/buckled-shape/buckled-shape';
 import { memberExtremes } from '@/lib/analysis/member-extremes';
 import { memberLine } from '@/lib/analysis/member-line';
 import { sampleLine } from '@/lib/analysis/sample-line';
@@ -94,7 +92,6 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
     lines: frame.members.map((_, index) => drawingLine(frame, state, index)),
     slack: state.method?.slack ?? [],
     method: methodOf(state),
-    buckled: buckled(frame, state),
   };
 }
 
@@ -109,14 +106,6 @@ export function methodOf({ order, criticalLoadFactor, method }: ResultState): Dr
     iterations: method?.iterations ?? 1,
     change: method?.change ?? 0,
   };
-}
-
-/** Numbers of a shape that has no size: four figures draw it. */
-function buckled(frame: Frame, state: ResultState): DrawingBuckled | null {
-  const shape = buckledShape(frame, state);
-  if (shape === null) return null;
-  const short = (value: number) => Number(value.toPrecision(6));
-  return { factor: shape.factor, kind: shape.kind, members: shape.members.map((points) => Array.from(points, short)) };
 }
 
 /** Load cases that have no result of their own where others have one. */

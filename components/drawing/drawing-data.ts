@@ -85,13 +85,12 @@ export interface DrawingResult {
   readonly slack: readonly number[];
   /** How it was analysed. */
   readonly method: DrawingMethod;
-  /** How the frame would buckle under a multiple of these loads; null where there is no such multiple. */
-  readonly buckled: DrawingBuckled | null;
 }
 
 /** What is told of how a result was found. */
 export interface DrawingMethod {
   readonly order: 1 | 2;
+  /** α_cr: where there is one, the buckled shape can be asked for. */
   readonly criticalLoadFactor: number | null;
   readonly imperfection: 'right' | 'left' | null;
   readonly shearDeformation: boolean;

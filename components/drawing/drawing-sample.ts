@@ -49,7 +49,6 @@ export function simpleBeam(): DrawingData {
     lines: [line],
     slack: [],
     method: plainMethod,
-    buckled: null,
   };
   return {
     frame: 'B1',

@@ -89,8 +89,13 @@ describe('the drawing of a frame', () => {
 
   it('draws the buckled shape where the result has a critical load factor, and says what it is', async () => {
     const user = userEvent.setup();
-    const { rerender } = render(<FrameDrawing data={withResult({ name: 'C3 →', buckled: swayed })} />);
+    const looked = vi.fn();
+    const data = withResult({ name: 'C3 →', method: { ...plainMethod, criticalLoadFactor: 4.213 } });
+    const { rerender } = render(<FrameDrawing data={data} onDiagram={looked} />);
     await user.click(screen.getByRole('radio', { name: 'Buckled' }));
+    expect(looked).toHaveBeenCalledExactlyOnceWith('B');
+    expect(texts(large())).toContain('working out the shape');
+    rerender(<FrameDrawing data={data} buckled={swayed} />);
     expect(screen.getByRole('heading', { name: /^1 Buckled shape/ })).toHaveTextContent(
       'at 4.21 times the loads of C3 → the frame would sway so; in its plane, elastic, out of plane not looked at',
     );

@@ -4,7 +4,7 @@ import { Segments } from '../ui/segments';
 import { useKeys } from '../ui/use-keys';
 import { useWidth } from '../ui/use-width';
 import { captionOf, viewNames, type Diagram, type ViewName } from './captions';
-import type { DrawingData } from './drawing-data';
+import type { DrawingBuckled, DrawingData } from './drawing-data';
 import { DrawingReadout, type ReadPoint } from './drawing-readout';
 import { nearestPoint } from './nearest-point';
 import { boundsOf } from './paper';
@@ -19,6 +19,10 @@ interface FrameDrawingProps {
   readonly onChoose?: (result: string) => void;
   /** The result being brought. */
   readonly loading?: boolean;
+  /** The buckled shape of the chosen result; null until it has been brought. */
+  readonly buckled?: DrawingBuckled | null;
+  /** Another diagram is looked at: B asks for the buckled shape. */
+  readonly onDiagram?: (diagram: Diagram) => void;
   readonly initialView?: ViewName;
   readonly initialDiagram?: Diagram;
 }
@@ -33,6 +37,8 @@ export function FrameDrawing({
   data,
   onChoose,
   loading = false,
+  buckled = null,
+  onDiagram,
   // without a solution its members are all there is to see
   initialView = data.chosen ? 'diagram' : 'ratio',
   initialDiagram = 'M',
@@ -43,34 +49,40 @@ export function FrameDrawing({
   const [point, setPoint] = useState<ReadPoint | null>(null);
   const [looked, setLooked] = useState<ViewName | null>(null);
   const result = data.chosen;
-  const buckled = result?.buckled ?? null;
+  const buckles = (result?.method.criticalLoadFactor ?? null) !== null;
   // kept for the next result that has a buckled shape; meanwhile moments
-  const diagram = wanted === 'B' && !buckled ? 'M' : wanted;
+  const diagram = wanted === 'B' && !buckles ? 'M' : wanted;
   const phone = width < 640;
   const height = phone ? Math.max(250, Math.round(width * 0.72)) : largeHeight(data, width);
   const small = viewNames.filter((name) => name !== large);
   const smallWidth = phone ? width : Math.floor((width - 2) / 3);
   const smallHeight = phone ? 200 : Math.round(Math.max(150, smallWidth * 0.62));
+  const choose = (one: Diagram) => {
+    setDiagram(one);
+    onDiagram?.(one);
+  };
   useKeys({
     ...Object.fromEntries(viewNames.map((name, i) => [String(i + 1), () => setLarge(name)])),
-    n: () => setDiagram('N'),
-    v: () => setDiagram('V'),
-    m: () => setDiagram('M'),
-    ...(buckled ? { b: () => setDiagram('B') } : {}),
+    n: () => choose('N'),
+    v: () => choose('V'),
+    m: () => choose('M'),
+    ...(buckles ? { b: () => choose('B') } : {}),
   });
 
   const draw = (name: ViewName, w: number, h: number, isLarge: boolean): ReactNode => {
     const view = { data, width: w, height: h, large: isLarge, pointed: point?.member ?? null };
     if (name === 'ratio') return <RatioView {...view} />;
     const shown = name === 'deflected' ? (data.movement ?? result) : result;
-    if (!shown) return <NotSolved width={w} />;
-    if (name === 'diagram' && diagram === 'B' && buckled)
+    if (!shown) return <Said width={w}>not solved, so there is nothing to draw here</Said>;
+    if (name === 'diagram') {
+      if (diagram !== 'B') return <DiagramView {...view} result={shown} force={diagram} />;
+      if (!buckled) return <Said width={w}>working out the shape</Said>;
       return <BuckledView {...view} result={shown} shape={buckled} breathing={looked === 'diagram'} />;
-    if (name === 'diagram') return <DiagramView {...view} result={shown} force={diagram === 'B' ? 'M' : diagram} />;
+    }
     if (name === 'loads') return <LoadsView {...view} result={shown} />;
     return <DeflectedView {...view} result={shown} breathing={looked === 'deflected'} />;
   };
-  const caption = (name: ViewName) => captionOf(name, data, diagram);
+  const caption = (name: ViewName) => captionOf(name, data, diagram, buckled);
   const onPointer = (event: PointerEvent<SVGSVGElement>) => {
     const bounds = event.currentTarget.getBoundingClientRect();
     const at = {
@@ -98,10 +110,10 @@ export function FrameDrawing({
           <div className="d-choices">
             <Segments
               label="Diagram"
-              options={[...forces, ...(buckled ? [{ value: 'B', label: 'Buckled' }] : [])]}
+              options={[...forces, ...(buckles ? [{ value: 'B', label: 'Buckled' }] : [])]}
               value={diagram}
               onChange={(value) => {
-                setDiagram(value as Diagram);
+                choose(value as Diagram);
                 setLarge('diagram');
               }}
             />
@@ -184,10 +196,11 @@ function Grid({ width, height }: { readonly width: number; readonly height: numb
   return <path className="d-grid" d={d} />;
 }
 
-function NotSolved({ width }: { readonly width: number }) {
+/** A sentence in place of a drawing. */
+function Said({ width, children }: { readonly width: number; readonly children: string }) {
   return (
     <text className="d-nothing" x={width / 2} y={30} textAnchor="middle">
-      not solved, so there is nothing to draw here
+      {children}
     </text>
   );
 }

@@ -56,6 +56,8 @@ export const api = {
   exported: (batch: number, letter: string, view: View, format: 'csv' | 'xlsx') =>
     tableAddress(batch, letter, view, '/export', { format }),
   frame: (batch: number, letter: string, number: number) => `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}`,
+  buckled: (batch: number, letter: string, number: number, result: string) =>
+    `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}/buckled?result=${e(result)}`,
 } as const;
 
 function tableAddress(

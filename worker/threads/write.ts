@@ -8,6 +8,7 @@ import { PortSink } from './port-sink';
 import { revisionSource } from './revision-source';
 import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 
+export { drawBuckled } from './draw-buckled';
 export { writeInput } from './write-input';
 export { writeMarkedCopy } from './write-marked-copy';
 export { writeTable } from './write-table';

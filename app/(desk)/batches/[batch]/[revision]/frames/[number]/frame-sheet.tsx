@@ -2,6 +2,8 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Certificate } from '@/components/certificate/certificate';
+import type { Diagram } from '@/components/drawing/captions';
+import type { DrawingBuckled } from '@/components/drawing/drawing-data';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { Working } from '@/components/working/working';
 import { Fact } from '@/components/ui/fact';
@@ -27,6 +29,7 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
   const [result, setResult] = useState(first.drawing?.chosen?.name ?? null);
   const [open, setOpen] = useState<string | null>(first.checks[0]?.id ?? null);
   const address = api.frame(batch, letter, first.number) + (result === null ? '' : `?result=${encodeURIComponent(result)}`);
+  const [lookedAt, setLookedAt] = useState<Diagram>('M');
   const asked = useQuery({
     queryKey: ['frame', address],
     queryFn: ({ signal }) => request<{ frame: FrameDetail }>(address, { signal }),
@@ -45,10 +48,20 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
   };
   const numbers = (of: string) =>
     pages.numbers(batch, letter, frame.number, { of, ...(result === null ? {} : { show: result }) }, list);
+  const chosen = drawing?.chosen ?? null;
+  const buckles = chosen !== null && chosen.method.criticalLoadFactor !== null;
+  const shape = useQuery({
+    queryKey: ['buckled', batch, letter, frame.number, chosen?.name],
+    queryFn: ({ signal }) =>
+      request<{ shape: DrawingBuckled }>(api.buckled(batch, letter, frame.number, chosen?.name ?? ''), { signal }),
+    enabled: lookedAt === 'B' && buckles,
+    staleTime: Infinity,
+  });
   const check = frame.checks.find((one) => one.id === open);
   const main = (
     <>
       {asked.error && <Notice kind="error">{asked.error.message}</Notice>}
+      {shape.error && <Notice kind="error">The buckled shape was not brought: {shape.error.message}</Notice>}
       {drawing === null ? (
         <Zone title="No drawing">
           <Empty>
@@ -60,7 +73,13 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
         </Zone>
       ) : (
         <Zone flush>
-          <FrameDrawing data={drawing} onChoose={choose} loading={asked.isPlaceholderData} />
+          <FrameDrawing
+            data={drawing}
+            onChoose={choose}
+            loading={asked.isPlaceholderData}
+            buckled={shape.data?.shape ?? null}
+            onDiagram={setLookedAt}
+          />
         </Zone>
       )}
       {drawing?.chosen && (
