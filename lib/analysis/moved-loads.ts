@@ -5,13 +5,8 @@ import { memberLine } from './member-line';
 import { evaluate } from './polynomial';
 
 /** Five Gauss points on −1 … 1 with their weights: exact to degree 9. */
-const gauss = [
-  [0, 128 / 225],
-  [-0.5384693101056831, 0.47862867049936647],
-  [0.5384693101056831, 0.47862867049936647],
-  [-0.906179845938664, 0.23692688505618908],
-  [0.906179845938664, 0.23692688505618908],
-] as const;
+const gaussAt = [0, -0.5384693101056831, 0.5384693101056831, -0.906179845938664, 0.906179845938664] as const;
+const gaussWeight = [128 / 225, 0.47862867049936647, 0.47862867049936647, 0.23692688505618908, 0.23692688505618908] as const;
 
 /**
  * What moving does to the moment of all loads and reactions of a second-order state, N·m: Σ (u_x F_y − u_y F_x) where loads
@@ -38,22 +33,85 @@ export function momentOfMovement(
     if (k !== 0) take(load.node, k * load.Fx_N, k * load.Fy_N);
   }
   const notional = state.method?.notional;
-  if (notional) frame.nodes.forEach((_, i) => take(i, notional[2 * i]! / scale, notional[2 * i + 1]! / scale));
+  if (notional) for (let i = 0; i < frame.nodes.length; i++) take(i, notional[2 * i]! / scale, notional[2 * i + 1]! / scale);
   frame.supports.forEach(({ node }, i) => take(node, state.reactions[3 * i]!, state.reactions[3 * i + 1]!));
-  const rows: MemberLoad[][] = frame.members.map(() => []);
-  for (const load of frame.memberLoads) if (state.factors[load.case] !== 0) rows[load.member]!.push(load);
-  let heavy = 0;
-  frame.cases.forEach((loadCase, c) => (heavy += state.factors[c]! * loadCase.selfWeight));
-  frame.members.forEach((_, i) => {
-    if (heavy === 0 && rows[i]!.length === 0) {
+  const typed = typedAlong(frame);
+  for (let i = 0; i < typed.length; i++) {
+    const along = typed[i]!;
+    if (!acts(along, state.factors)) {
       sum += unloaded(frame, state, i, scale);
-      return;
+      continue;
     }
     const line = lineOf(state, i);
-    sum += shortening(line, scale);
-    sum += ofMember(frame, state, i, line, rows[i]!, heavy);
-  });
+    sum += shortening(line, scale) + ofMember(along, line, state.factors);
+  }
   return scale * sum;
+}
+
+/** Loads of one member as typed that share where they begin and end and which way they point, global. */
+interface SpreadLoads {
+  readonly from: number;
+  readonly to: number;
+  /** Work on u and v along the member of a force of 1 that way: (e_x d_y − e_y d_x) and −(e_y d_y + e_x d_x). */
+  readonly onU: number;
+  readonly onV: number;
+  /** By load: case, q at `from`, q at `to`. */
+  readonly rows: number[];
+}
+interface TypedAlong {
+  readonly spread: readonly SpreadLoads[];
+  /** By force: case, P, place, onU, onV. */
+  readonly forces: readonly number[];
+}
+
+const known = new WeakMap<Frame, readonly TypedAlong[]>();
+
+/** Loads straight from the sheets' rows, by member; once a frame. */
+function typedAlong(frame: Frame): readonly TypedAlong[] {
+  const before = known.get(frame);
+  if (before) return before;
+  const all = frame.members.map((member, i) => {
+    const [a, b] = [frame.nodes[member.start]!, frame.nodes[member.end]!];
+    const L = Math.hypot(b.x_m - a.x_m, b.y_m - a.y_m);
+    const [ex, ey] = [(b.x_m - a.x_m) / L, (b.y_m - a.y_m) / L];
+    const spread: SpreadLoads[] = [];
+    const forces: number[] = [];
+    const add = (from: number, to: number, dx: number, dy: number, row: readonly [number, number, number]): void => {
+      const [onU, onV] = [ex * dy - ey * dx, -(ey * dy + ex * dx)];
+      let same = spread.find((one) => one.from === from && one.to === to && one.onU === onU && one.onV === onV);
+      if (!same) spread.push((same = { from, to, onU, onV, rows: [] }));
+      same.rows.push(...row);
+    };
+    const density = frame.materials[member.material]!.density_kg_m3 ?? NaN;
+    const weight = density * frame.sections[member.section]!.properties.A_m2 * gravity;
+    frame.cases.forEach(({ selfWeight }, c) => {
+      if (selfWeight !== 0) add(0, L, 0, 1, [c, -selfWeight * weight, -selfWeight * weight]);
+    });
+    const way = (load: { axes: string; direction: 'x' | 'y' }): readonly [number, number] => {
+      if (load.axes !== 'local') return load.direction === 'x' ? [1, 0] : [0, 1];
+      return load.direction === 'x' ? [ex, ey] : [-ey, ex];
+    };
+    const take = (load: MemberLoad): void => {
+      if (load.kind === 'temperature' || load.kind === 'moment') return;
+      const [dx, dy] = way(load);
+      if (load.kind === 'point') {
+        forces.push(load.case, load.P_N, load.at_m, ex * dy - ey * dx, -(ey * dy + ex * dx));
+        return;
+      }
+      const share = load.axes === 'projected' ? Math.abs(load.direction === 'y' ? ex : ey) : 1;
+      if (load.to_m > load.from_m) add(load.from_m, load.to_m, dx, dy, [load.case, share * load.q1_N_m, share * load.q2_N_m]);
+    };
+    for (const load of frame.memberLoads) if (load.member === i) take(load);
+    return { spread, forces };
+  });
+  known.set(frame, all);
+  return all;
+}
+
+function acts({ spread, forces }: TypedAlong, factors: Float64Array): boolean {
+  for (const { rows } of spread) for (let i = 0; i < rows.length; i += 3) if (factors[rows[i]!] !== 0) return true;
+  for (let i = 0; i < forces.length; i += 5) if (factors[forces[i]!] !== 0) return true;
+  return false;
 }
 
 /** ∫ Q u′ dx of a member without loads along it: u′ is even, and ∫ Q dx = M₂ − M₁ − N (v₂ − v₁). */
@@ -61,69 +119,68 @@ function unloaded(frame: Frame, state: ResultState, member: number, scale: numbe
   const { start, end, cos, sin, length } = memberData(frame)[member]!;
   const d = state.displacements;
   const [x, y] = [d[3 * end]! - d[3 * start]!, d[3 * end + 1]! - d[3 * start + 1]!];
-  const [N, , M1, , , M2] = state.endForces.subarray(6 * member, 6 * member + 6);
-  return ((x * cos + y * sin) / length) * (M2! - M1! - scale * N! * (y * cos - x * sin));
+  const e = 6 * member;
+  const bend = state.endForces[e + 5]! - state.endForces[e + 2]!;
+  return ((x * cos + y * sin) / length) * (bend - scale * state.endForces[e]! * (y * cos - x * sin));
 }
 
 /** ∫ Q u′ dx, Q = V − N v′ (movements as analysed: × scale). */
 function shortening({ segments }: MemberLine, scale: number): number {
   let sum = 0;
   for (const { from, to, N, V, u, v } of segments) {
-    if (!(to > from)) continue;
-    sum += integral(to - from, 0, to - from, (s) => {
-      const Q = evaluate(V, s) - scale * evaluate(N, s) * slopeOf(v, s);
-      return Q * slopeOf(u, s);
-    });
+    const half = (to - from) / 2;
+    if (!(half > 0)) continue;
+    for (let g = 0; g < 5; g++) {
+      const s = half * (1 + gaussAt[g]!);
+      sum += half * gaussWeight[g]! * (evaluate(V, s) - scale * evaluate(N, s) * slopeOf(v, s)) * slopeOf(u, s);
+    }
   }
   return sum;
 }
 
-/** Σ ∫ (u_x q_y − u_y q_x) of one member's loads as typed, with movements as in the state. */
-function ofMember(
-  frame: Frame,
-  state: ResultState,
-  member: number,
-  { segments, length }: MemberLine,
-  rows: readonly MemberLoad[],
-  heavy: number,
-): number {
-  const { start, end, section, material } = frame.members[member]!;
-  const [a, b] = [frame.nodes[start]!, frame.nodes[end]!];
-  const [ex, ey] = [(b.x_m - a.x_m) / length, (b.y_m - a.y_m) / length];
-  // lever of a unit force (dx, dy), global, at s of a segment
-  const lever = ({ u, v }: Segment, s: number, dx: number, dy: number): number => {
-    const [along, across] = [evaluate(u, s), evaluate(v, s)];
-    return (ex * along - ey * across) * dy - (ey * along + ex * across) * dx;
-  };
-  const line = (from: number, to: number, q: (x: number) => number, dx: number, dy: number): number => {
-    let sum = 0;
-    for (const segment of segments) {
-      const [p, r] = [Math.max(from, segment.from), Math.min(to, segment.to)];
-      if (r > p)
-        sum += integral(r - p, p - segment.from, r - segment.from, (s) => q(segment.from + s) * lever(segment, s, dx, dy));
-    }
-    return sum;
-  };
+/** Σ ∫ (u_x q_y − u_y q_x) and Σ (u_x P_y − u_y P_x) of one member's loads as typed, with movements as in the state. */
+function ofMember({ spread, forces }: TypedAlong, { segments }: MemberLine, factors: Float64Array): number {
   let sum = 0;
-  if (heavy !== 0) {
-    const q = heavy * gravity * frame.sections[section]!.properties.A_m2 * (frame.materials[material]!.density_kg_m3 ?? NaN);
-    sum += line(0, length, () => -q, 0, 1);
-  }
-  for (const load of rows) {
-    if (load.kind === 'temperature' || load.kind === 'moment') continue;
-    const k = state.factors[load.case]!;
-    const local = load.axes === 'local';
-    const dx = local ? (load.direction === 'x' ? ex : -ey) : load.direction === 'x' ? 1 : 0;
-    const dy = local ? (load.direction === 'x' ? ey : ex) : load.direction === 'x' ? 0 : 1;
-    if (load.kind === 'point') {
-      const at = segments.find(({ to }) => load.at_m <= to) ?? segments[segments.length - 1]!;
-      sum += k * load.P_N * lever(at, load.at_m - at.from, dx, dy);
-      continue;
+  for (const { from, to, onU, onV, rows } of spread) {
+    let q1 = 0;
+    let q2 = 0;
+    for (let i = 0; i < rows.length; i += 3) {
+      const k = factors[rows[i]!]!;
+      q1 += k * rows[i + 1]!;
+      q2 += k * rows[i + 2]!;
     }
-    const { from_m, to_m, q1_N_m, q2_N_m } = load;
-    if (!(to_m > from_m)) continue;
-    const share = load.axes === 'projected' ? Math.abs(load.direction === 'y' ? ex : ey) : 1;
-    sum += k * share * line(from_m, to_m, (x) => q1_N_m + ((q2_N_m - q1_N_m) * (x - from_m)) / (to_m - from_m), dx, dy);
+    if (q1 === 0 && q2 === 0) continue;
+    const c1 = (q2 - q1) / (to - from);
+    for (const segment of segments) {
+      const p = from > segment.from ? from - segment.from : 0;
+      const r = (to < segment.to ? to : segment.to) - segment.from;
+      if (!(r > p)) continue;
+      // q = c₀ + c₁ s along the segment
+      const c0 = q1 + c1 * (segment.from - from);
+      sum += worked(segment, onU, onV, c0, c1, r);
+      if (p > 0) sum -= worked(segment, onU, onV, c0, c1, p);
+    }
+  }
+  for (let i = 0; i < forces.length; i += 5) {
+    const k = factors[forces[i]!]!;
+    if (k === 0) continue;
+    const at = forces[i + 2]!;
+    const segment = segments.find(({ to }) => at <= to) ?? segments[segments.length - 1]!;
+    const s = at - segment.from;
+    sum += k * forces[i + 1]! * (forces[i + 3]! * evaluate(segment.u, s) + forces[i + 4]! * evaluate(segment.v, s));
+  }
+  return sum;
+}
+
+/** ∫₀ˢ (c₀ + c₁ x)(onU u + onV v) dx, term by term. */
+function worked({ u, v }: Segment, onU: number, onV: number, c0: number, c1: number, s: number): number {
+  let sum = 0;
+  let power = s;
+  const terms = u.length > v.length ? u.length : v.length;
+  for (let i = 0; i < terms; i++) {
+    const coefficient = onU * (i < u.length ? u[i]! : 0) + onV * (i < v.length ? v[i]! : 0);
+    sum += coefficient * power * (c0 / (i + 1) + (c1 * s) / (i + 2));
+    power *= s;
   }
   return sum;
 }
@@ -132,10 +189,4 @@ function slopeOf(p: Polynomial, s: number): number {
   let slope = 0;
   for (let k = p.length - 1; k > 0; k--) slope = slope * s + k * p[k]!;
   return slope;
-}
-
-function integral(length: number, from: number, to: number, f: (s: number) => number): number {
-  let sum = 0;
-  for (const [at, weight] of gauss) sum += weight * f((from + to + at * (to - from)) / 2);
-  return (length * sum) / 2;
 }
