@@ -31,7 +31,7 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
       <MadeFrom revision={revision} />
-      {(hasResults || number > 0) && (
+      {(hasResults || number > 0 || sheet === 'settings') && (
         <SheetIndex
           sheets={sheets.map((name) => ({
             label: name[0]!.toUpperCase() + name.slice(1),

@@ -56,7 +56,19 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
   const mayBring = may(person, 'bring sheets in');
   const side = (
     <>
-      <Zone title="What was read" aside={mayBring && <Link href={pages.next(batch, letter)}>Bring mended sheets in</Link>}>
+      <Zone
+        title="What was read"
+        aside={
+          <>
+            {revision.frames > 0 && <Link href={pages.sheet(batch, letter, 'settings')}>Settings</Link>}
+            {mayBring && (
+              <Link className="ml-4" href={pages.next(batch, letter)}>
+                Bring mended sheets in
+              </Link>
+            )}
+          </>
+        }
+      >
         {sheets.length === 0 ? (
           <p>{readSummary(files, 0)}: nothing of it could be read.</p>
         ) : (
@@ -64,11 +76,7 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
         )}
       </Zone>
       {defaults.length > 0 && revision.frames > 0 && (
-        <Zone
-          title="Taken as default"
-          note="Setup is silent"
-          aside={<Link href={pages.sheet(batch, letter, 'settings')}>Settings</Link>}
-        >
+        <Zone title="Taken as default" note="Setup is silent">
           <DefaultsTaken defaults={defaults} />
         </Zone>
       )}

@@ -51,7 +51,7 @@ export default async function SettingsPage({ params }: { readonly params: Promis
     </Zone>
   );
   const choose = (
-    <Zone title={`Choose others for revision ${next}`} note={`${letter} stays as it is, with its results`}>
+    <Zone title={`Choose others for revision ${next}`} note={`${letter} stays as it is`}>
       {latest !== letter && (
         <Notice>
           The latest revision is {latest}. What is chosen here starts from {letter}: what was changed or brought in after it is
