@@ -28,7 +28,7 @@ export function besides(data: DrawingData, result: DrawingResult): string[] {
   if (result.loads.some((one) => one.kind === 'distributed' && one.selfWeight)) out.push('self-weight acts too');
   const stand = result.loads.flatMap((one) => (one.kind === 'node' && one.case === imperfection ? [one.Fx, one.Fy] : []));
   const most = Math.max(0, ...stand.map(Math.abs));
-  if (most > 0) out.push(`forces up to ${words(most, 'force', data)} stand for imperfections`);
+  if (most > 0) out.push(`imperfection up to ${words(most, 'force', data)}`);
   const warm = result.loads.filter((one) => one.kind === 'temperature');
   const sizes = new Set(
     warm.map((one) =>

@@ -2,10 +2,10 @@ import { Zone } from '../ui/sheet';
 import { NumberTable } from './number-table';
 import type { NumberStep } from './numbers-data';
 
-/** The calculation step by step, numbered from `from`. */
-export function NumberSteps({ steps, from = 1 }: { readonly steps: readonly NumberStep[]; readonly from?: number }) {
+/** The calculation step by step, numbered. */
+export function NumberSteps({ steps }: { readonly steps: readonly NumberStep[] }) {
   return steps.map(({ title, words, tables }, i) => (
-    <Zone key={title} className="numbers-step" title={`${from + i}  ${title}`}>
+    <Zone key={title} className="numbers-step" title={`${i + 1}  ${title}`}>
       {words.map((sentence) => (
         <p key={sentence} className="numbers-words">
           {sentence}

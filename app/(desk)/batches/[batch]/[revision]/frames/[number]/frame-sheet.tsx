@@ -101,7 +101,7 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
           </div>
         </>
       )}
-      <Zone title="Certificate" note={certificateWords(frame)}>
+      <Zone title="Certificate" className="zone-late" note={certificateWords(frame)}>
         <Certificate {...frame.vouched} />
       </Zone>
     </>

@@ -8,7 +8,7 @@ import { NumberSteps } from '@/components/numbers/number-steps';
 import { FrameWalk } from '@/components/sheet-index/frame-walk';
 import { TitleBlock } from '@/components/title-block/title-block';
 import { Cautions, Empty } from '@/components/ui/notice';
-import { Columns, Sheet, Zone } from '@/components/ui/sheet';
+import { Sheet, Zone } from '@/components/ui/sheet';
 import { pages } from '@/lib/api/addresses';
 import { listFromParams, listToSearch } from '@/lib/api/view-address';
 import { titleOf } from '../../../_head/revision-head';
@@ -88,11 +88,9 @@ export default async function NumbersPage({ params, searchParams }: NumbersPageP
             </p>
             <p className="numbers-words">{found.methodWords}</p>
           </Zone>
-          <Columns
-            className="numbers-page"
-            main={<NumberSteps steps={found.data.steps} />}
-            side={<NumberSteps steps={[found.data.frame]} from={found.data.steps.length + 1} />}
-          />
+          <div className="numbers-page">
+            <NumberSteps steps={[...found.data.steps, found.data.frame]} />
+          </div>
         </>
       )}
       <Cautions />
