@@ -31,7 +31,11 @@ export function economise(c: Float64Array, at: number, degree: number, allowed: 
   let n = degree;
   for (; n > 1; n--) {
     const last = c[at + n]!;
-    if (last === 0) continue;
+    // rounding of the others, not worth a change of shape
+    if (Math.abs(last) <= 1e-6 * allowed) {
+      c[at + n] = 0;
+      continue;
+    }
     spent += Math.abs(last) * least[n]!;
     if (spent > allowed) {
       if (n <= cap) break;

@@ -1,5 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
-import { stretchesOf } from '../member-stretches';
+import { stretchesOf, type CaseStretches } from '../member-stretches';
 
 /**
  * What acts on one member in one combination: stretches without jumps one after another, `stride` numbers each
@@ -44,28 +44,44 @@ export function combineLoading(frame: Frame, member: number, factors: Float64Arr
     sums = new Float64Array(7 * room);
     flags = new Uint8Array(2 * room);
   }
-  sums.fill(0, 0, 7 * places.length);
-  flags.fill(0, 0, 2 * places.length);
+  for (let i = 7 * places.length - 1; i >= 0; i--) sums[i] = 0;
+  for (let i = 2 * places.length - 1; i >= 0; i--) flags[i] = 0;
   let strain = 0;
   let curvature = 0;
   for (let c = 0; c < cases.length; c++) {
     const k = factors[c]! * scale;
     const acting = k === 0 ? undefined : cases[c];
     if (!acting) continue;
-    const { lines, divides, jumps, Px, Py, M } = acting;
-    for (let i = 0; i <= last; i++) {
-      if (divides[i]) flags[2 * i] = 1;
-      for (let r = 0; r < 4; r++) sums[7 * i + r] = sums[7 * i + r]! + k * lines[4 * i + r]!;
-      if (!jumps?.[i]) continue;
-      flags[2 * i + 1] = 1;
-      sums[7 * i + 4] = sums[7 * i + 4]! + k * Px[i]!;
-      sums[7 * i + 5] = sums[7 * i + 5]! + k * Py[i]!;
-      sums[7 * i + 6] = sums[7 * i + 6]! + k * M[i]!;
-    }
     strain += k * acting.strain;
     curvature += k * acting.curvature;
+    add(acting, k, last);
   }
   if (out.stretches.length < stride * last) out.stretches = new Float64Array(stride * 2 * last);
+  write(places, last, out);
+  out.strain = strain;
+  out.curvature = curvature;
+}
+
+function add({ lines, divides, jumps, Px, Py, M }: CaseStretches, k: number, last: number): void {
+  for (let i = 0, o = 0, s = 0; i < last; i++, o += 4, s += 7) {
+    if (divides[i]) flags[2 * i] = 1;
+    sums[s] = sums[s]! + k * lines[o]!;
+    sums[s + 1] = sums[s + 1]! + k * lines[o + 1]!;
+    sums[s + 2] = sums[s + 2]! + k * lines[o + 2]!;
+    sums[s + 3] = sums[s + 3]! + k * lines[o + 3]!;
+  }
+  if (!jumps) return;
+  for (let i = 0, s = 0; i <= last; i++, s += 7) {
+    if (!jumps[i]) continue;
+    flags[2 * i + 1] = 1;
+    sums[s + 4] = sums[s + 4]! + k * Px[i]!;
+    sums[s + 5] = sums[s + 5]! + k * Py[i]!;
+    sums[s + 6] = sums[s + 6]! + k * M[i]!;
+  }
+}
+
+/** The sums as stretches. */
+function write(places: Float64Array, last: number, out: MemberLoading): void {
   const table = out.stretches;
   let count = 0;
   let N = 0;
@@ -95,6 +111,4 @@ export function combineLoading(frame: Frame, member: number, factors: Float64Arr
   out.endN = N - sums[7 * last + 4]!;
   out.startJump = flags[1] === 1;
   out.endJump = flags[2 * last + 1] === 1;
-  out.strain = strain;
-  out.curvature = curvature;
 }

@@ -147,9 +147,13 @@ function lowered(c: Float64Array, k: number, allowed: number, beyond: number, ca
   const o = terms * k;
   const degree = economise(c, o, terms - 1, allowed, cap, beyond === Infinity ? beyond : beyond * allowed);
   if (degree < 0) return null;
-  const out: number[] = [c[o]!];
+  const out = new Array<number>(degree + 1);
   const per = 1 / pieces.given[givenStride * k + 1]!;
-  for (let i = 1, power = per; i <= degree; i++, power *= per) out.push(c[o + i]! * power);
+  let power = 1;
+  for (let i = 0; i <= degree; i++) {
+    out[i] = c[o + i]! * power;
+    power *= per;
+  }
   return out;
 }
 
