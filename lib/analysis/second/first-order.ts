@@ -1,6 +1,6 @@
 import { actingUnder, type Acting } from './second-loads';
 import type { Given, Setup } from './second-setup';
-import { endsOf, equationsOf, solveFor } from './second-solve';
+import { endsOf, equationsOf, factored, solveFor } from './second-solve';
 import { onNodes, rightSide, stateFrom, type SecondState } from './second-state';
 
 /**
@@ -17,13 +17,15 @@ export function firstOrderStates(
   const given = (f: ArrayLike<number>): Given => ({ ...as, factors: f, notional: null, axial: null });
   const acting = factors.map((f): Acting[] => setup.along.map((along) => actingUnder(along, f)));
   const equations = equationsOf(setup, given(first), acting[0]!);
-  if (!equations) return null;
+  const solver = equations && factored(equations);
+  if (!equations || !solver) return null;
   const ends = factors.map((f, s) =>
     setup.members.map((_, i) => (as.slack.has(i) ? undefined : (endsOf(setup, given(f), i, acting[s]![i]!) ?? undefined))),
   );
   const nodes = factors.map((f, s) => onNodes(setup, given(f), acting[s]!));
   const d = solveFor(
     equations,
+    solver,
     nodes.map((on, s) => rightSide(setup, equations, ends[s]!, on)),
   );
   return factors.map((f, s) => stateFrom(setup, given(f), equations, ends[s]!, nodes[s]!, d[s]!));

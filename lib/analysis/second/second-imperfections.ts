@@ -12,11 +12,19 @@ interface Standing {
   readonly foot: number;
 }
 
+const known = new WeakMap<Frame, Standing[]>();
+
 /**
  * Columns found anew: members that share a span word are one; role column, or no role and within 20° of vertical from
  * the line's one free end to the other. Pieces that lie flat are left out.
  */
 export function standingLines(frame: Frame): Standing[] {
+  const before = known.get(frame) ?? standing(frame);
+  known.set(frame, before);
+  return before;
+}
+
+function standing(frame: Frame): Standing[] {
   const lines = new Map<string, number[]>();
   frame.members.forEach((m, i) => {
     const key = m.span === null ? `member ${i}` : `span ${m.span.trim().toLowerCase()}`;

@@ -1,6 +1,7 @@
+import { conjugate } from './conjugate';
 import type { Acting } from './second-loads';
 import type { Given, Setup } from './second-setup';
-import { equationsOf, solveFor } from './second-solve';
+import { equationsOf, factored, firstOrderInverse, solveFor, type Equations } from './second-solve';
 import { onNodes, rightSide, stateFrom, type SecondState } from './second-state';
 
 /** Most passes, and the change of axial forces, relative to the largest force, that counts as none. */
@@ -20,8 +21,9 @@ export function solveState(setup: Setup, given: Given, acting: readonly Acting[]
     const equations = equationsOf(setup, now, acting);
     if (!equations) return null;
     const nodes = onNodes(setup, now, acting);
-    const [d] = solveFor(equations, [rightSide(setup, equations, equations.ends, nodes)]);
-    const state = stateFrom(setup, now, equations, equations.ends, nodes, d!);
+    const d = movements(setup, now, acting, equations, rightSide(setup, equations, equations.ends, nodes));
+    if (!d) return null;
+    const state = stateFrom(setup, now, equations, equations.ends, nodes, d.movements);
     if (axial === null) return state;
     const found = new Float64Array(setup.members.length);
     let off = 0;
@@ -31,10 +33,25 @@ export function solveState(setup: Setup, given: Given, acting: readonly Acting[]
     }
     if (!Number.isFinite(off)) return null;
     // an even number of ways in which it gives way goes unseen here: the first analysis counts them
-    if (off <= still * largestForce(setup, state)) return equations.sign < 0 ? null : state;
+    if (off <= still * largestForce(setup, state)) return d.past ? null : state;
     axial = found;
   }
   return null;
+}
+
+/** K d = f from the first-order inverse, which is near; else, and where that meets a direction that gives way, factored. */
+function movements(
+  setup: Setup,
+  given: Given,
+  acting: readonly Acting[],
+  equations: Equations,
+  side: Float64Array,
+): { readonly movements: Float64Array; readonly past: boolean } | null {
+  const inverse = firstOrderInverse(setup, given, acting);
+  const near = inverse && conjugate(equations.K, inverse, side);
+  if (near) return { movements: near, past: false };
+  const factors = factored(equations);
+  return factors && { movements: solveFor(equations, factors, [side])[0]!, past: factors.sign < 0 };
 }
 
 /** Largest of N, V, M/L at members' ends and of reactions, N. */

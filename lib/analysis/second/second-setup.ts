@@ -1,4 +1,5 @@
 import type { Frame, Support } from '@/lib/model/frame';
+import type { Numbering } from './numbering';
 import { loadsAlong, type AlongMember } from './second-loads';
 import { memberFacts, type MemberFacts } from './second-model';
 
@@ -10,6 +11,9 @@ export interface Setup {
   /** The axes a node's unknowns are along: cos and sin of its support's angle, 2 a node. */
   readonly axes: Float64Array;
   readonly supportAt: readonly (Support | undefined)[];
+  /** What is worked out once for each set of slack members. */
+  readonly numberings: Map<string, Numbering>;
+  readonly inverses: Map<string, Float64Array | null>;
 }
 
 /** @param shear whether members shear as well as bend */
@@ -23,7 +27,8 @@ export function setUp(frame: Frame, shear: boolean): Setup {
     axes[2 * node] = Math.cos(angle);
     axes[2 * node + 1] = Math.sin(angle);
   });
-  return { frame, members, along: loadsAlong(frame, members), axes, supportAt };
+  const along = loadsAlong(frame, members);
+  return { frame, members, along, axes, supportAt, numberings: new Map(), inverses: new Map() };
 }
 
 /** What makes a state: its loads, what the members are made of in it, and the forces that bend it further. */

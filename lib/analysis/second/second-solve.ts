@@ -6,7 +6,7 @@ import { restraintOf, type Given, type Setup } from './second-setup';
 import { transferOf } from './transfer';
 import { twoEnds, type TwoEnds } from './two-ends';
 
-/** The equations of one stiffness, factored, with the numbers of its unknowns. */
+/** The equations of one stiffness, with the numbers of their unknowns. */
 export interface Equations {
   /** By node and direction: its unknown, or −1 where held or without a stiffness. */
   readonly number: Int32Array;
@@ -15,6 +15,10 @@ export interface Equations {
   readonly ends: readonly (TwoEnds | undefined)[];
   /** count × count, row by row. */
   readonly K: Float64Array;
+}
+
+/** … factored, scaled to a unit diagonal. */
+export interface Factored {
   readonly scale: Float64Array;
   readonly lu: LuDecomposition;
   /** Sign of the determinant; 0 where it is too small to tell. */
@@ -36,12 +40,12 @@ export function endsOf({ members }: Setup, given: Given, i: number, acting: Acti
   return t && twoEnds(t, m.L, EA, EI, joints);
 }
 
-/**
- * Sums up and factors K (dense, LU with row exchanges, scaled to a unit diagonal), unknowns along the supports' axes.
- * @returns null where it is singular
- */
+/** Sums up K (dense), unknowns along the supports' axes. @returns null where a member buckles between its nodes */
 export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[]): Equations | null {
-  const { number, count: n } = numberingOf(setup, given.slack);
+  const key = [...given.slack].join();
+  const known = setup.numberings.get(key) ?? numberingOf(setup, given.slack);
+  setup.numberings.set(key, known);
+  const { number, count: n } = known;
   const K = new Float64Array(n * n);
   const ends: (TwoEnds | undefined)[] = [];
   for (let i = 0; i < setup.members.length; i++) {
@@ -56,6 +60,11 @@ export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[
       const u = number[3 * support.node + r]!;
       if (typeof spring === 'number' && u >= 0) K[u * n + u]! += spring;
     }
+  return { number, count: n, ends, K };
+}
+
+/** LU with row exchanges. @returns null where K is singular */
+export function factored({ K, count: n }: Equations): Factored | null {
   const scale = new Float64Array(n);
   for (let i = 0; i < n; i++) {
     scale[i] = 1 / Math.sqrt(Math.abs(K[i * n + i]!));
@@ -65,11 +74,33 @@ export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[
   for (let i = 0; i < n; i++) for (let j = 0; j < n; j++) scaled.set(i, j, K[i * n + j]! * scale[i]! * scale[j]!);
   const lu = new LuDecomposition(n === 0 ? Matrix.eye(1) : scaled);
   if (lu.isSingular()) return null;
-  return { number, count: n, ends, K, scale, lu, sign: Math.sign(lu.determinant) };
+  return { scale, lu, sign: Math.sign(lu.determinant) };
+}
+
+/**
+ * K⁻¹ to first order of a frame without its slack members, row by row; worked out once for each set of these.
+ * @returns null where it cannot stand
+ */
+export function firstOrderInverse(setup: Setup, given: Given, acting: readonly Acting[]): Float64Array | null {
+  const key = [...given.slack].join();
+  const before = setup.inverses.get(key);
+  if (before !== undefined) return before;
+  const equations = equationsOf(setup, { ...given, axial: null, stiffness: null }, acting);
+  const factors = equations && factored(equations);
+  let inverse: Float64Array | null = null;
+  if (factors) {
+    const { lu, scale } = factors;
+    const n = scale.length;
+    inverse = new Float64Array(n * n);
+    const columns = n === 0 ? Matrix.zeros(0, 0) : lu.solve(Matrix.eye(n));
+    for (let i = 0; i < n; i++) for (let j = 0; j < n; j++) inverse[i * n + j] = columns.get(i, j) * scale[i]! * scale[j]!;
+  }
+  setup.inverses.set(key, inverse);
+  return inverse;
 }
 
 /** d for some right-hand sides, each by number; with one step of refinement, for forces are differences of large products. */
-export function solveFor({ K, count: n, scale, lu }: Equations, sides: readonly Float64Array[]): Float64Array[] {
+export function solveFor({ K, count: n }: Equations, { scale, lu }: Factored, sides: readonly Float64Array[]): Float64Array[] {
   if (n === 0) return sides.map(() => new Float64Array(0));
   const solve = (right: readonly Float64Array[], into: readonly Float64Array[]): void => {
     const B = Matrix.zeros(n, right.length);
