@@ -10,7 +10,7 @@ import { emptyPiece } from '../second-order/piece';
 import { slackReactions } from '../second-order/slack-reactions';
 import { nodeDisplacements } from './node-displacements';
 
-/** A member in second-order equilibrium: stiffness and fixed-end forces under its axial force (README §5). */
+/** A member in second-order equilibrium: stiffness and fixed-end forces under its axial force (README §8). */
 export interface BentMember {
   readonly k: MemberStiffness;
   /** q_F as results have it (the analysis ÷ its load scale), X and Y along and square to the original axis. */

@@ -94,7 +94,7 @@ export interface PieceEnd {
 }
 
 /**
- * Power series of one piece from what stands just after its start; `from` becomes its end. README §5.
+ * Power series of one piece from what stands just after its start; `from` becomes its end. README §8.
  * @param slip 1/GAv   @param kappa free curvature   @param loaded 0: as if nothing acted along it
  */
 export function series(

@@ -17,7 +17,7 @@ const one = emptyTransfer();
 
 /**
  * Exact stiffness and clamped end forces of a member under the axial force N + (n of its loading), pieces and joints
- * condensed. README §5. Pieces follow one another from start to end; where the force is large they are joined in groups by
+ * condensed. README §8. Pieces follow one another from start to end; where the force is large they are joined in groups by
  * elimination, so that short pieces cost no digits and long ties don't overflow.
  *
  * @param N at its start, before a force exactly there, N, tension positive; null = first order: no axial force bends it

@@ -10,7 +10,7 @@ const turns: Turns = { start: 0, end: 0 };
 
 /**
  * End forces, reactions and displacements of the pass at hand, divided by the load scale. Members ask their nodes for X, Y
- * along and square to their original axes; V = dM/dx is square to the deflected one: V = (Q + N ψ)/(1 + N/GAv). README §5.
+ * along and square to their original axes; V = dM/dx is square to the deflected one: V = (Q + N ψ)/(1 + N/GAv). README §8.
  */
 export function recoverSecondOrder(work: Work, change: number): SecondOrderState {
   const { input, order } = work;

@@ -22,7 +22,7 @@ const at: PieceEnd = { v: 0, psi: 0, M: 0, Q: 0 };
 /**
  * Internal forces and deflected line of a member of a second-order state, as polynomials between load points (more where
  * the axial force is large): power series of EI ψ′ = M + EI κ₀, M′ = V = Q + N v′, Q′ = q, v′ = ψ − V/GAv, their degree
- * lowered within 1e-9 of their largest value, both ends exactly. README §5.
+ * lowered within 1e-9 of their largest value, both ends exactly. README §8.
  */
 export function secondOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData): MemberLine {
   const scale = state.method?.loadScale ?? 1;

@@ -58,7 +58,7 @@ const enough = 1e-8;
 const closeness = 1e-3;
 
 /**
- * Second-order elastic equilibrium of one combination (README §5): members exactly under their axial forces, P-Δ and P-δ,
+ * Second-order elastic equilibrium of one combination (README §8): members exactly under their axial forces, P-Δ and P-δ,
  * repeated until the axial forces stand still.
  *
  * K(N) must be positive definite, members between their nodes too, at every load share taken, so that an equilibrium beyond

@@ -14,7 +14,7 @@ const share = Float64Array.from({ length: 32 }, (_, k) => 1 / (k + 1));
 
 /**
  * Exact transfer along a prismatic piece: EI ψ′ = M (+ EI κ₀), M′ = Q + N v′, Q′ = q, v′ = ψ − M′/GAv (shear square to the
- * deflected axis: Engesser 1891). README §5.
+ * deflected axis: Engesser 1891). README §8.
  *
  * @param slip 1/GAv, 0 = no shear   @param N at its start, tension positive; N + n1 s + n2 s²   @param q0 q = q0 + q1 s
  * @param l m, √(|N| l²/EI) at most `longest`   @param kappa κ₀, free curvature
