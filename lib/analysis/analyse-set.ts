@@ -51,11 +51,7 @@ export function analyseSet(job: SetJob, planned: PlannedState, slack: readonly n
   const plain = planned.order === 1 && !notional && !planned.reduced && !planned.imperfection;
   const found = plain ? { ok: true as const, ...first, alpha: undefined } : solved(job, planned, slack, first, notional);
   if (!found.ok) return found;
-  const state = {
-    ...found.state,
-    name: planned.name,
-    criticalLoadFactor: planned.purpose === 'strength' ? alphaOf(job, first) : null,
-  };
+  const state = { ...found.state, name: planned.name };
   return { ok: true, state, outOfBalance: found.outOfBalance, handled: found.handled };
 }
 
@@ -184,6 +180,12 @@ function without(job: SetJob, combination: number, slack: readonly number[]): Fi
   const rest = { kind: 'combination' as const, order: 1 as const, criticalLoadFactor: null };
   const state: ResultState = { name, purpose, factors, method, ...rest, displacements, reactions, endForces };
   return { state, outOfBalance, handled, alpha: undefined };
+}
+
+/** α_cr of a combination that stands with these members slack. */
+export function criticalOf(job: SetJob, combination: number, slack: readonly number[]): number | null {
+  const first = firstOrder(job, combination, slack);
+  return first && alphaOf(job, first);
 }
 
 /** α_cr of the combination with its slack members left out; the same for both directions of its imperfections. */

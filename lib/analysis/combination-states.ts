@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
-import { analyseSet, type SetJob } from './analyse-set';
+import { analyseSet, criticalOf, type SetJob } from './analyse-set';
 import type { SolvedState } from './certificate';
 import { bucklingSpace } from './critical/buckling-trial';
 import { criticalMemory } from './critical/neighbour-critical';
@@ -59,26 +59,33 @@ export function combinationStates(
 
 function alone(job: SetJob, planned: PlannedState): SolvedState | Failure {
   const result = analyseSet(job, planned, []);
-  return result.ok ? result : stateFailure(job.frame, planned.name, planned.loadScale, planned.reduced, result.trouble);
+  if (!result.ok) return stateFailure(job.frame, planned.name, planned.loadScale, planned.reduced, result.trouble);
+  return withCritical(job, planned, result, []);
 }
 
 function withTies(job: SetJob, planned: PlannedState): SolvedState | Failure {
   const first = settled(job, { ...planned, order: 1, reduced: false }, []);
-  if ('code' in first || (planned.order === 1 && !planned.reduced)) return 'code' in first ? first : first.found;
+  if ('code' in first) return first;
+  if (planned.order === 1 && !planned.reduced) return withCritical(job, planned, first.found, first.slack);
   // to second order from the set found to first order: thin ties that are pressed at first would buckle before they are let go
-  const found = settled(job, planned, first.slack);
-  return 'code' in found ? found : found.found;
+  const found = settled(job, planned, first.slack, first.iterations);
+  return 'code' in found ? found : withCritical(job, planned, found.found, found.slack);
 }
 
-/** One state, its ties settled from a first set. */
+/** α_cr of strength combinations, once their slack ties are known. */
+function withCritical(job: SetJob, planned: PlannedState, found: SolvedState, slack: readonly number[]): SolvedState {
+  if (planned.purpose !== 'strength') return found;
+  return { ...found, state: { ...found.state, criticalLoadFactor: criticalOf(job, planned.combination, slack) } };
+}
+
+/** One state, its ties settled from a first set. @param iterations passes made before */
 function settled(
   job: SetJob,
   planned: PlannedState,
   start: readonly number[],
-): { readonly found: SolvedState; readonly slack: readonly number[] } | Failure {
+  iterations = 0,
+): { readonly found: SolvedState; readonly slack: readonly number[]; readonly iterations: number } | Failure {
   const { frame, ties } = job;
-  // passes of sets that were left again count too
-  let iterations = 0;
   let trouble: StateTrouble | null = null;
   const result = settleTies<SolvedState>(
     ties,
@@ -89,6 +96,7 @@ function settled(
         const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
         return { ok: false, why, caught: trouble.kind === 'free' && trouble.caught };
       }
+      // passes of sets that are left again count too
       iterations += trial.state.method?.iterations ?? 1;
       return { ok: true, solution: trial, ...tieForces(frame, trial.state, ties) };
     },
@@ -97,7 +105,7 @@ function settled(
   if (result.ok) {
     const { state, outOfBalance, handled } = result.solution;
     const method = state.method && { ...state.method, iterations };
-    return { found: { state: { ...state, method }, outOfBalance, handled }, slack: result.slack };
+    return { found: { state: { ...state, method }, outOfBalance, handled }, slack: result.slack, iterations };
   }
   if (typeof result.why === 'string') return tieFailure(frame, planned.name, result.members, result.why);
   const kept: StateTrouble | null = trouble;
