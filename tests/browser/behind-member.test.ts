@@ -107,7 +107,7 @@ describe('a member followed by hand', () => {
     await page.getByRole('link', { name: 'AB', exact: true }).click();
     await page.waitForURL(/\/frames\/1\/numbers\?of=AB&show=/);
     await page.getByRole('heading', { name: 'The numbers behind AB under C17 →' }).waitFor();
-    await page.getByRole('radio', { name: 'N, m' }).click();
+    await page.getByRole('radio', { name: 'N, m', exact: true }).click();
     await page.waitForURL(/in=si/);
     await page.getByText('Units multiply out: N, m and radians').waitFor();
     const k = await copied('k, local axes');
