@@ -90,6 +90,15 @@ describe('a member between pins under compression P', () => {
     }
     expect(stateOf(member(-0.999 * euler, [load(-q)])).order).toBe(2);
   });
+
+  it('is unstable beyond Euler’s load with the pins in its own ends too, where no node feels it', () => {
+    const pins = { axialOnly: true, startJoint: 'pin', endJoint: 'pin' };
+    for (const factor of [1.001, 2, 4.1, 9.1, 50])
+      expect(analyseCombination(member(-factor * euler, [load(-q)], ['free', 'free'], [], pins))).toMatchObject({ ok: false, why: 'unstable' }); // prettier-ignore
+    const P = 0.98 * euler;
+    const frame = member(-P, [load(-q)], ['free', 'free'], [], pins);
+    near(at(frame, stateOf(frame), L / 2).M, ((q * EI) / P) * (1 / Math.cos((L / 2) * Math.sqrt(P / EI)) - 1), 1e-8);
+  });
 });
 
 describe('a member under tension T', () => {
