@@ -150,10 +150,8 @@ function addCoupling(
   }
 }
 
-/** Adds the supports' springs, and 1 on the diagonal of everything that is not an unknown (its own equation: 1·d = 0). */
+/** Adds the supports' springs, and 1 on the diagonal of everything that is not an unknown. */
 export function addSupports(K: Float64Array, t: Topology, frame: Frame): void {
-  const { zeros, ones } = t.places;
-  for (let i = 0; i < zeros.length; i++) K[zeros[i]!] = 0;
   for (const support of frame.supports) {
     const p = t.positionOf[support.node]!;
     if (p < 0) continue;
@@ -162,13 +160,20 @@ export function addSupports(K: Float64Array, t: Topology, frame: Frame): void {
     if (typeof support.uy === 'number') K[at + 4] = K[at + 4]! + support.uy;
     if (typeof support.rz === 'number') K[at + 8] = K[at + 8]! + support.rz;
   }
+  addHeld(K, t);
+}
+
+/** What is not an unknown has its own equation: 1·d = 0. */
+function addHeld(K: Float64Array, t: Topology): void {
+  const { zeros, ones } = t.places;
+  for (let i = 0; i < zeros.length; i++) K[zeros[i]!] = 0;
   for (let i = 0; i < ones.length; i++) K[ones[i]!] = 1;
 }
 
 /** K = Σ Tᵀ k T + springs, with one element a member. README (2.6). @param K 9 × blocks, overwritten */
 export function assemble(K: Float64Array, t: Topology, frame: Frame, data: readonly MemberData[], angles: Float64Array): void {
   const { blocks, turned } = t.places;
-  const numbers = packedMembers(data, angles);
+  const { numbers, sprung } = packedMembers(frame, data, angles);
   K.fill(0);
   for (let i = 0, o = 0; i < data.length; i++, o += packedSize) {
     if (numbers[o + 5] === 0) {
@@ -222,7 +227,8 @@ export function assemble(K: Float64Array, t: Topology, frame: Frame, data: reado
     K[at + 7] = K[at + 7]! - yt;
     K[at + 8] = K[at + 8]! + b;
   }
-  addSupports(K, t, frame);
+  if (sprung) addSupports(K, t, frame);
+  else addHeld(K, t);
 }
 
 /** The diagonal of K, 3 a position. */

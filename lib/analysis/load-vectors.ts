@@ -3,7 +3,7 @@ import { emptyMemberStiffness, memberStiffness, type MemberStiffness } from './a
 import { fixedEndForces } from './fixed-end-forces';
 import { emptyJointStiffness, jointStiffness } from './joint-stiffness';
 import { memberData, type MemberData } from './member-data';
-import { packedLoads } from './packed-loads';
+import { packedLoads, type PackedLoads } from './packed-loads';
 import type { Topology } from './topology';
 
 /** Right-hand sides and what stands behind them. */
@@ -29,21 +29,28 @@ export function loadVectors(
   const cases = frame.cases.length;
   const f = new Float64Array(3 * t.size * cases);
   addLoads(frame, t, angles, data, f);
+  const { heldRows } = t.places;
+  for (let i = 0; i < heldRows.length; i++) for (let o = heldRows[i]!; o < f.length; o += 3 * t.size) f[o] = 0;
   return { f, prescribed: packedLoads(frame, angles).prescribed, fixedEnd: fixedEnds(frame, angles, data) };
 }
 
-/** The columns of f alone. @param f 3 × size × cases, overwritten */
+/** The columns of f alone, with whatever acts where a node is held. @param f 3 × size × cases, overwritten */
 export function addLoads(frame: Frame, t: Topology, angles: Float64Array, data: readonly MemberData[], f: Float64Array): void {
-  const n = 3 * t.size;
   const packed = packedLoads(frame, angles);
-  const { stream, others, members } = packed;
-  const { rows, heldRows } = t.places;
   f.fill(0);
+  addEven(packed.stream, packed.members, t, f);
+  if (packed.rest) addRest(packed, frame, t, angles, data, f);
+}
+
+/** Even loads over whole members: q_F = −(q_x L/2, q_y L/2, q_y L²/12, q_x L/2, q_y L/2, −q_y L²/12). */
+function addEven(stream: Float64Array, members: number, t: Topology, f: Float64Array): void {
+  const { rows } = t.places;
+  const n = 3 * t.size;
   let k = 0;
   for (let i = 0; i < members; i++) {
-    // even loads over whole members: q_F = −(q_x L/2, q_y L/2, q_y L²/12, q_x L/2, q_y L/2, −q_y L²/12)
     const count = stream[k]! | 0;
-    const L = stream[k + 1]!;
+    const half = -0.5 * stream[k + 1]!;
+    const sixth = stream[k + 1]! / 6;
     const cos = stream[k + 2]!;
     const sin = stream[k + 3]!;
     const a = rows[2 * i]!;
@@ -51,9 +58,9 @@ export function addLoads(frame: Frame, t: Topology, angles: Float64Array, data: 
     k += 4;
     for (const last = k + 3 * count; k < last; k += 3) {
       const column = Math.imul(n, stream[k]! | 0);
-      const X = -0.5 * L * stream[k + 1]!;
-      const Y = -0.5 * L * stream[k + 2]!;
-      const m = (Y * L) / 6;
+      const X = half * stream[k + 1]!;
+      const Y = half * stream[k + 2]!;
+      const m = Y * sixth;
       const x = X * cos - Y * sin;
       const y = X * sin + Y * cos;
       if (a >= 0) {
@@ -70,10 +77,22 @@ export function addLoads(frame: Frame, t: Topology, angles: Float64Array, data: 
       }
     }
   }
-  for (; k < stream.length; k += 5) {
+}
+
+/** Loads on nodes, all others on members, settlements. */
+function addRest(
+  { stream, nodesFrom, others, settled, prescribed }: PackedLoads,
+  frame: Frame,
+  t: Topology,
+  angles: Float64Array,
+  data: readonly MemberData[],
+  f: Float64Array,
+): void {
+  const n = 3 * t.size;
+  for (let k = nodesFrom; k < stream.length; k += 5) {
     const p = t.positionOf[stream[k]!]!;
     if (p < 0) continue;
-    const o = n * stream[k + 1]! + 3 * p;
+    const o = Math.imul(n, stream[k + 1]! | 0) + 3 * p;
     f[o] = f[o]! + stream[k + 2]!;
     f[o + 1] = f[o + 1]! + stream[k + 3]!;
     f[o + 2] = f[o + 2]! + stream[k + 4]!;
@@ -84,8 +103,7 @@ export function addLoads(frame: Frame, t: Topology, angles: Float64Array, data: 
     fixedEndForces(m, acting, jointStiffness(m, joints), ends, 0);
     takeEnds(f, loadCase * n, t, m, ends, 0, angles);
   }
-  if (packed.settled) addSettlements(frame, t, data, angles, packed.prescribed, f);
-  for (let i = 0; i < heldRows.length; i++) for (let o = heldRows[i]!; o < f.length; o += n) f[o] = 0;
+  if (settled) addSettlements(frame, t, data, angles, prescribed, f);
 }
 
 /** q_F of every case and member. */
@@ -99,7 +117,7 @@ export function fixedEnds(frame: Frame, angles: Float64Array, data: readonly Mem
       const at = 6 * (stream[k]! * members + i);
       const X = -0.5 * L * stream[k + 1]!;
       const Y = -0.5 * L * stream[k + 2]!;
-      const m = (Y * L) / 6;
+      const m = Y * (L / 6);
       fixedEnd[at] = fixedEnd[at + 3] = X;
       fixedEnd[at + 1] = fixedEnd[at + 4] = Y;
       fixedEnd[at + 2] = m;

@@ -11,6 +11,10 @@ export interface PackedLoads {
    * the node's axes.
    */
   readonly stream: Float64Array;
+  /** Where in the stream the loads on nodes begin. */
+  readonly nodesFrom: number;
+  /** There are loads on nodes, other loads on members, or settlements. */
+  readonly rest: boolean;
   /** All that else acts on members, by member, then case. */
   readonly others: readonly { readonly member: number; readonly loadCase: number; readonly acting: LocalLoads }[];
   /** Movements prescribed by settlements, by case: 3 a node, in node axes; whether there are any. */
@@ -53,12 +57,14 @@ function pack(frame: Frame, angles: Float64Array): PackedLoads {
       );
     }
   });
+  const nodesFrom = stream.length;
   for (const load of frame.nodeLoads) {
     const ca = Math.cos(angles[load.node]!);
     const sa = Math.sin(angles[load.node]!);
     stream.push(load.node, load.case, load.Fx_N * ca + load.Fy_N * sa, load.Fy_N * ca - load.Fx_N * sa, load.Mz_Nm);
   }
-  return { members: data.length, stream: Float64Array.from(stream), others, ...prescribedBy(frame) };
+  const rest = frame.nodeLoads.length + others.length + frame.settlements.length > 0;
+  return { members: data.length, stream: Float64Array.from(stream), nodesFrom, rest, others, ...prescribedBy(frame) };
 }
 
 function isEven(acting: LocalLoads, length: number): boolean {

@@ -57,19 +57,18 @@ function demandAgreement(name: string, peer: string, worst: number): void {
   console.log(`  ${name}: displacements agree with ${peer} to ${worst.toExponential(1)}`);
 }
 
-/** Rounds in turn, after one to warm up: CPU seconds of ours and of theirs, which measure themselves. */
-async function inTurn(rounds: number, ours: () => void, theirs: () => Promise<number>): Promise<readonly [number[], number[]]> {
-  const own: number[] = [];
-  const other: number[] = [];
+/** Rounds in turn, after one to warm up: CPU seconds of ours, and of peers, which measure themselves. */
+async function inTurn(rounds: number, ours: () => void, ...peers: (() => Promise<number>)[]): Promise<number[][]> {
+  const times: number[][] = [[], ...peers.map(() => [])];
   for (let round = 0; round <= rounds; round += 1) {
-    const took = await theirs();
+    const took = [0];
+    for (const peer of peers) took.push(await peer());
     const before = cpuSeconds();
     ours();
-    if (round === 0) continue;
-    own.push(cpuSeconds() - before);
-    other.push(took);
+    took[0] = cpuSeconds() - before;
+    if (round > 0) took.forEach((seconds, index) => times[index]?.push(seconds));
   }
-  return [own, other];
+  return times;
 }
 
 interface Model {
@@ -109,16 +108,24 @@ async function solveModel(model: Model, peers: EigenPeers | null, rounds: number
     ((median(seconds) * 1e6) / (count * frames.length)).toPrecision(3);
   if (peers) {
     const peer = peers.holding(name, frames);
+    const ordered = peers.holding(name, frames, 'ordered');
     const theirs = await peer.displacements();
     const width = 3 * first.nodes.length;
     const worst = frames.map((frame, k) =>
       difference(t, cases, engine(frame), (c, at) => theirs[(k * cases + c) * width + at] ?? NaN),
     );
     demandAgreement(name, 'Eigen', Math.max(...worst));
-    const [own, other] = await inTurn(rounds, all(times), () => peer.solve(times));
+    const [own = [], other = [], best = []] = await inTurn(
+      rounds,
+      all(times),
+      () => peer.solve(times),
+      () => ordered.solve(times),
+    );
     peer.close();
+    ordered.close();
     figures[`solve.${name}.eigen`] = ratio(own, other);
     console.log(`  ${name}: engine ${us(own, times)} µs a frame, Eigen ${us(other, times)} µs`);
+    console.log(`    (${us(best, times)} µs, ratio ${ratio(own, best).toPrecision(3)}, with unknowns ordered for it beforehand)`);
   }
   if (denseTimes > 0) {
     const unknownOf = denseUnknowns(t.free);
@@ -128,7 +135,7 @@ async function solveModel(model: Model, peers: EigenPeers | null, rounds: number
       return difference(t, cases, engine(frame), (c, at) => theirs.get(unknownOf[at] ?? -1, c));
     });
     demandAgreement(name, 'ml-matrix', Math.max(...worst));
-    const [own, other] = await inTurn(rounds, all(20 * denseTimes), async () => {
+    const [own = [], other = []] = await inTurn(rounds, all(20 * denseTimes), async () => {
       const before = cpuSeconds();
       for (let n = 0; n < denseTimes; n += 1) for (const frame of frames) denseSolve(frame, unknownOf, size);
       return cpuSeconds() - before;

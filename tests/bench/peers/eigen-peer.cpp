@@ -1,13 +1,14 @@
 // The peer of the solve.* and chain.W.* measurements: the same frames by Eigen's SimplicialLDLT.
 //
-// usage: eigen-peer FRAMES, FRAMES as write-frames.ts writes it. Then, line by line on standard input:
+// usage: eigen-peer FRAMES [ordered], FRAMES as write-frames.ts writes it. Then, line by line on standard input:
 //   solve N   all frames N times: stiffness + load vectors + factor + all load cases; answers CPU seconds
 //   bare N    all frames N times: K as it stands factored, one load case solved; answers CPU seconds
 //   write F   displacements of the frames to file F: by frame, case, node, 3 doubles (0 where held)
 //
-// As the engine does, what frames of one shape share is done once: the order of the unknowns (Eigen's own approximate
-// minimum degree), the pattern of K, where each member's numbers go, analyzePattern. The unknowns are numbered in that
-// order, so that neither matrix nor right-hand sides are permuted or copied in the loop; no storage is made there.
+// As the engine does, what frames of one shape share is done once: the pattern of K, where each member's numbers go, and
+// analyzePattern, which orders the unknowns (Eigen's approximate minimum degree) as the documentation has it used. K is the upper
+// triangle, which that needs; its storage, the right-hand sides' and the solutions' are made once.
+// ordered: the unknowns are numbered in Eigen's order beforehand, so that nothing is permuted in the loop at all.
 #include <Eigen/Sparse>
 #include <cmath>
 #include <cstdint>
@@ -20,7 +21,8 @@
 #include <vector>
 
 using Matrix = Eigen::SparseMatrix<double, Eigen::ColMajor, int>;
-using Factors = Eigen::SimplicialLDLT<Matrix, Eigen::Upper, Eigen::NaturalOrdering<int>>;
+using Factors = Eigen::SimplicialLDLT<Matrix, Eigen::Upper>;
+using OrderedFactors = Eigen::SimplicialLDLT<Matrix, Eigen::Upper, Eigen::NaturalOrdering<int>>;
 
 struct Member { double length, cos, sin, EA, EI; };
 // linear along local x and y from a to b
@@ -43,6 +45,8 @@ static std::vector<int> slots;      // 21 a member: where k's upper triangle goe
 static std::vector<Frame> frames;
 static Matrix K;
 static Factors factors;
+static OrderedFactors orderedFactors;
+static bool ordered;
 static Eigen::MatrixXd f, d;
 
 template <class T> static void read(std::ifstream& in, std::vector<T>& to, size_t count) {
@@ -97,16 +101,20 @@ static Matrix pattern(bool whole) {
   return made;
 }
 
-static void shareWork() {
-  setDofs();
+static void orderUnknowns() {
   Eigen::PermutationMatrix<Eigen::Dynamic, Eigen::Dynamic, int> order;
   Eigen::AMDOrdering<int>()(pattern(true), order);  // order.indices()[new] = old
   std::vector<int> newOf(unknowns);
   for (int i = 0; i < unknowns; i++) newOf[order.indices()[i]] = i;
   for (int& u : unknownOf) if (u >= 0) u = newOf[u];
   setDofs();
+}
+
+static void shareWork() {
+  setDofs();
+  if (ordered) orderUnknowns();
   K = pattern(false);
-  factors.analyzePattern(K);
+  if (ordered) orderedFactors.analyzePattern(K); else factors.analyzePattern(K);
   slots.assign(21 * members, -1);
   for (int m = 0; m < members; m++)
     for (int r = 0, at = 0; r < 6; r++)
@@ -184,11 +192,20 @@ static void loadVectors(const Frame& frame) {
   }
 }
 
+template <class A, class B, class X> static void factorAndSolve(const A& stiffness, const B& load, X& x) {
+  if (ordered) {
+    orderedFactors.factorize(stiffness);
+    x = orderedFactors.solve(load);
+  } else {
+    factors.factorize(stiffness);
+    x = factors.solve(load);
+  }
+}
+
 static void solveFrame(const Frame& frame) {
   assemble(frame);
   loadVectors(frame);
-  factors.factorize(K);
-  d = factors.solve(f);
+  factorAndSolve(K, f, d);
 }
 
 static double cpuSeconds() {
@@ -222,15 +239,13 @@ static double bare(int times) {
   Eigen::VectorXd x(unknowns);
   const double before = cpuSeconds();
   for (size_t i = 0; i < frames.size(); i++)
-    for (int n = 0; n < times; n++) {
-      factors.factorize(stiffness[i]);
-      x = factors.solve(load.col(i));
-    }
+    for (int n = 0; n < times; n++) factorAndSolve(stiffness[i], load.col(i), x);
   return cpuSeconds() - before;
 }
 
 int main(int count, char** words) {
   if (count < 2) return 2;
+  ordered = count > 2 && std::string(words[2]) == "ordered";
   readFrames(words[1]);
   shareWork();
   std::string what, rest;

@@ -54,11 +54,14 @@ export class EigenPeers {
     return new EigenPeers(folder, program);
   }
 
-  /** A process that holds these frames, ready to be timed. */
-  holding(name: string, frames: readonly Frame[]): EigenPeer {
-    const file = join(this.folder, `${name}.frames`);
+  /**
+   * A process that holds these frames, ready to be timed.
+   * @param how 'ordered': the unknowns come in Eigen's order already, which spares it every permutation
+   */
+  holding(name: string, frames: readonly Frame[], how: 'shuffled' | 'ordered' = 'shuffled'): EigenPeer {
+    const file = join(this.folder, `${name}-${how}.frames`);
     writeFrames(file, frames);
-    return new EigenPeer(this.program, file);
+    return new EigenPeer(this.program, file, how);
   }
 
   close(): void {
@@ -71,9 +74,9 @@ export class EigenPeer {
   private readonly lines;
   private readonly file: string;
 
-  constructor(program: string, file: string) {
+  constructor(program: string, file: string, how: string) {
     this.file = file;
-    this.child = spawn(program, [file], { stdio: ['pipe', 'pipe', 'inherit'] });
+    this.child = spawn(program, [file, how], { stdio: ['pipe', 'pipe', 'inherit'] });
     this.lines = createInterface({ input: this.child.stdout })[Symbol.asyncIterator]();
   }
 
