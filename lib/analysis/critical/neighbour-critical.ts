@@ -20,7 +20,9 @@ export interface CriticalMemory {
   readonly shape: Float64Array;
   /** By member: ∫v′² dx in the shape, which its compression works on, m. */
   readonly stretch: Float64Array;
+  /** The same by unknown, 3 a position, and what the last inverse iteration was asked for. */
   readonly z: Float64Array;
+  readonly asked: Float64Array;
   lambda: number;
   /** Σ compression × stretch of the combination that it comes from. */
   work: number;
@@ -32,6 +34,7 @@ export function criticalMemory(frame: Frame, t: Topology): CriticalMemory {
     shape: new Float64Array(3 * frame.nodes.length),
     stretch: new Float64Array(frame.members.length),
     z: new Float64Array(3 * t.size),
+    asked: new Float64Array(3 * t.size),
     lambda: 0,
     work: 0,
     slack: [],
@@ -62,7 +65,7 @@ export function nextCriticalLoadFactor(
   const work = workOf(state, memory);
   if (memory.lambda > 0 && slack.join() === memory.slack.join() && work > 0) {
     const forces = axialForces(frame, state);
-    const found = polish(frameNow, forces, (memory.lambda * memory.work) / work, space, memory);
+    const found = polish(frameNow, state, forces, (memory.lambda * memory.work) / work, space, memory);
     if (found !== null) {
       keep(frameNow, state, memory, found);
       return found;
@@ -82,6 +85,7 @@ export function nextCriticalLoadFactor(
 /** α_cr from a guess; null where it can't be proved to be the first. */
 function polish(
   now: Buckling,
+  state: ResultState,
   forces: AxialForces,
   guess: number,
   space: BucklingSpace,
@@ -91,12 +95,13 @@ function polish(
   const pieces = axialPieces(now.data, forces, guess);
   const first = trial(now, pieces, guess, space);
   if (!Number.isFinite(first.logSize)) return null;
-  iterate(now, space, memory);
+  const h0 = iterate(now, space, memory);
   spread(now, memory);
-  const estimate = rayleigh(now, pieces, guess, memory);
+  alongShape(now, memory);
+  const estimate = rayleigh(now, pieces, guess, h0, workOf(state, memory), memory);
   if (!(estimate > 0.2 * guess && estimate < 5 * guess)) return null;
   // members are divided as finely as the λ found asks for
-  if (!again && Math.abs(estimate / guess - 1) > 0.01) return polish(now, forces, estimate, space, memory, true);
+  if (!again && Math.abs(estimate / guess - 1) > 0.01) return polish(now, state, forces, estimate, space, memory, true);
   const f = signed((lambda) => trial(now, pieces, lambda, space), first.logSize);
   let a = estimate * (1 - hair);
   let b = estimate * (1 + hair);
@@ -111,13 +116,23 @@ function polish(
   return middle(enclosed(f, { a, fa, b, fb }, 1e-11));
 }
 
-/** z ← K⁻¹ D z with K as last factored, its largest movement 1. */
-function iterate({ t, diagonal }: Buckling, { K, inner }: BucklingSpace, { z }: CriticalMemory): void {
-  for (let i = 0; i < z.length; i++) z[i] = t.free[3 * t.nodeAt[(i / 3) | 0]! + (i % 3)] ? diagonal[i]! * z[i]! : 0;
+/** z ← K⁻¹ D z with K as last factored, its largest movement 1. @returns zᵀ K z */
+function iterate({ t, diagonal }: Buckling, { K, inner }: BucklingSpace, { z, asked }: CriticalMemory): number {
+  for (let p = 0; p < t.size; p++)
+    for (let r = 0; r < 3; r++) {
+      const i = 3 * p + r;
+      z[i] = t.free[3 * t.nodeAt[p]! + r] ? diagonal[i]! * z[i]! : 0;
+    }
+  asked.set(z);
   solve(K, t, inner, z, 1);
   let largest = 0;
   for (let i = 0; i < z.length; i++) largest = Math.max(largest, Math.abs(z[i]!));
-  for (let i = 0; i < z.length; i++) z[i] = z[i]! / largest;
+  let energy = 0;
+  for (let i = 0; i < z.length; i++) {
+    z[i] = z[i]! / largest;
+    energy += (z[i]! * asked[i]!) / largest;
+  }
+  return energy;
 }
 
 /** The shape as all nodes have it. */
@@ -130,20 +145,26 @@ const q = new Float64Array(6);
 const k = emptyMemberStiffness();
 const ignored = { negative: 0, logSize: 0, size: 1 };
 
-/** The λ near `guess` at which zᵀK(λ)z is nought, by a secant through `guess` and a λ beside it, and one more. */
-function rayleigh(now: Buckling, pieces: readonly (readonly AxialPiece[])[], guess: number, memory: CriticalMemory): number {
-  let [l0, l1] = [guess, guess * (1 + 1e-3)];
-  let h0 = energy(now, pieces, l0, memory);
-  let h1 = energy(now, pieces, l1, memory);
-  for (let pass = 0; pass < 2; pass++) {
-    const next = l1 - (h1 * (l1 - l0)) / (h1 - h0);
-    if (!(Math.abs(next - l1) > 1e-7 * l1)) return next;
-    if (pass === 1) return next;
-    [l0, h0] = [l1, h1];
-    l1 = next;
-    h1 = energy(now, pieces, l1, memory);
-  }
-  return l1;
+/**
+ * The λ near `guess` at which zᵀK(λ)z is nought: by what the axial forces do along z to begin with, then a secant.
+ * @param h0 zᵀK(guess)z
+ */
+function rayleigh(
+  now: Buckling,
+  pieces: readonly (readonly AxialPiece[])[],
+  guess: number,
+  h0: number,
+  work: number,
+  memory: CriticalMemory,
+): number {
+  const l1 = guess + h0 / work;
+  if (Math.abs(l1 / guess - 1) < 1e-9) return l1;
+  const h1 = energy(now, pieces, l1, memory);
+  const l2 = l1 - (h1 * (l1 - guess)) / (h1 - h0);
+  // the secant's error is about a tenth of the product of both distances
+  if (Math.abs(l2 / guess - 1) * Math.abs(l2 / l1 - 1) < 1e-6) return l2;
+  const h2 = energy(now, pieces, l2, memory);
+  return l2 - (h2 * (l2 - l1)) / (h2 - h1);
 }
 
 /** zᵀ K(λ) z, member by member. */
@@ -167,11 +188,8 @@ function energy(now: Buckling, pieces: readonly (readonly AxialPiece[])[], lambd
   return sum;
 }
 
-/** Leaves the shape at hand for the next combination. */
-function keep(now: Buckling, state: ResultState, memory: CriticalMemory, lambda: number): void {
-  spread(now, memory);
-  const { data, angles } = now;
-  const { stretch, shape } = memory;
+/** ∫v′² dx of each member in the shape. */
+function alongShape({ data, angles }: Buckling, { stretch, shape }: CriticalMemory): void {
   for (let i = 0; i < data.length; i++) {
     const m = data[i]!;
     toLocal(m, angles, shape, 3 * m.start, 3 * m.end, u);
@@ -183,10 +201,15 @@ function keep(now: Buckling, state: ResultState, memory: CriticalMemory, lambda:
     if (m.endSpring === 0) b = m.startSpring === 0 ? 0 : -a / 2;
     stretch[i] = m.length * (turn * turn + (2 * a * a - a * b + 2 * b * b) / 15);
   }
-  memory.lambda = lambda;
+}
+
+/** Leaves the shape at hand for the next combination. */
+function keep(now: Buckling, state: ResultState, memory: CriticalMemory, lambda: number): void {
+  spread(now, memory);
+  alongShape(now, memory);
   memory.slack = now.slack;
   memory.work = workOf(state, memory);
-  if (!(memory.work > 0)) memory.lambda = 0;
+  memory.lambda = memory.work > 0 ? lambda : 0;
 }
 
 /** Σ mean compression × stretch. */
