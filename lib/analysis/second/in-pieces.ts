@@ -6,17 +6,20 @@ import { twoEnds, type Joints, type TwoEnds } from './two-ends';
 const mostPull = 4;
 
 /** How many pieces a member under tension is carried in. @param axial N at its start */
-export function piecesFor({ EI }: Stiffness, { lengths, qx, growX, Px }: Acting, axial: number): number {
+export function piecesFor({ EI }: Stiffness, { lengths, lines, places }: Acting, axial: number): number {
   let N = axial;
   let most = N;
   let length = 0;
-  lengths.forEach((l, i) => {
-    N -= Px[i]!;
-    most = Math.max(most, N, N - (l / 2) * (qx[i]! + (l * growX[i]!) / 4));
-    N -= l * (qx[i]! + (l * growX[i]!) / 2);
+  for (let i = 0; i < lengths.length; i++) {
+    const l = lengths[i]!;
+    const q = lines[4 * i]!;
+    const grow = lines[4 * i + 2]!;
+    if (places.length > 0) N -= places[3 * i]!;
+    most = Math.max(most, N, N - (l / 2) * (q + (l * grow) / 4));
+    N -= l * (q + (l * grow) / 2);
     most = Math.max(most, N);
     length += l;
-  });
+  }
   return most > 0 ? Math.max(1, Math.ceil((length * Math.sqrt(most / EI)) / mostPull)) : 1;
 }
 
@@ -59,20 +62,13 @@ function cut(acting: Acting, count: number): Acting[] {
     const parts = Math.max(1, Math.ceil(l / most));
     const h = l / parts;
     for (let p = 0; p < parts; p++) {
-      const at = (values: Float64Array): Float64Array =>
-        Float64Array.of(p === 0 && i === 0 ? values[0]! : 0, p === parts - 1 ? values[i + 1]! : 0);
-      pieces.push({
-        lengths: [h],
-        qx: Float64Array.of(acting.qx[i]! + p * h * acting.growX[i]!),
-        qy: Float64Array.of(acting.qy[i]! + p * h * acting.growY[i]!),
-        growX: acting.growX.subarray(i, i + 1),
-        growY: acting.growY.subarray(i, i + 1),
-        Px: at(acting.Px),
-        Py: at(acting.Py),
-        M0: at(acting.M0),
-        strain: acting.strain,
-        curvature: acting.curvature,
-      });
+      const { lines, strain, curvature } = acting;
+      const [qx, qy, growX, growY] = [lines[4 * i]!, lines[4 * i + 1]!, lines[4 * i + 2]!, lines[4 * i + 3]!];
+      const places = new Float64Array(acting.places.length > 0 ? 6 : 0);
+      if (acting.places.length > 0 && p === 0 && i === 0) places.set(acting.places.subarray(0, 3), 0);
+      if (acting.places.length > 0 && p === parts - 1) places.set(acting.places.subarray(3 * i + 3, 3 * i + 6), 3);
+      const cut = Float64Array.of(qx + p * h * growX, qy + p * h * growY, growX, growY);
+      pieces.push({ lengths: [h], lines: cut, places, strain, curvature });
     }
   });
   return pieces;

@@ -2,24 +2,18 @@ import type { Frame, MemberLoad } from '@/lib/model/frame';
 import type { MemberFacts } from './second-model';
 
 /**
- * What acts along one member, local axes, between the places where any load of any case begins, ends or stands.
- * Numbers of a stretch are by case: index case × stretches + stretch.
+ * What acts along one member, local axes, between the places where any load of any case begins, ends or stands: numbers of
+ * all cases one after the other.
  */
 export interface AlongMember {
   /** Lengths of the stretches, m. */
   readonly lengths: readonly number[];
-  /** Line loads at the start of each stretch, N/m, and how they grow, N/m². */
-  readonly qx: Float64Array;
-  readonly qy: Float64Array;
-  readonly growX: Float64Array;
-  readonly growY: Float64Array;
-  /** Forces and moments at the places before each stretch and at the end: index case × (stretches + 1) + place. */
-  readonly Px: Float64Array;
-  readonly Py: Float64Array;
-  readonly M0: Float64Array;
-  /** By case: free strain and free curvature. */
-  readonly strain: Float64Array;
-  readonly curvature: Float64Array;
+  /** 4 a stretch: q_x, q_y at its start, N/m, and how they grow, N/m². */
+  readonly lines: Float64Array;
+  /** 3 a place (before each stretch and at the end): P_x, P_y, N, and M₀, N·m; empty where nothing stands anywhere. */
+  readonly places: Float64Array;
+  /** 2 a case: free strain and free curvature. */
+  readonly free: Float64Array;
 }
 
 /** The loads along every member, resolved from the sheet's rows (sheets §3, Member loads). */
@@ -38,45 +32,49 @@ function alongOne(frame: Frame, facts: MemberFacts, rows: readonly MemberLoad[])
   const at = [...new Set(places.map((x) => Math.min(x, facts.L)))].sort((a, b) => a - b);
   const stretches = at.length - 1;
   const cases = frame.cases.length;
-  const row = (): Float64Array => new Float64Array(cases * stretches);
-  const place = (): Float64Array => new Float64Array(cases * at.length);
-  const along = {
+  const stands = rows.some((row) => row.kind === 'point' || row.kind === 'moment');
+  const along: AlongMember = {
     lengths: at.slice(1).map((x, k) => x - at[k]!),
-    qx: row(), qy: row(), growX: row(), growY: row(), Px: place(), Py: place(), M0: place(),
-    strain: new Float64Array(cases), curvature: new Float64Array(cases),
-  }; // prettier-ignore
-  frame.cases.forEach((loadCase, c) => {
-    if (loadCase.selfWeight === 0) return;
-    for (let k = c * stretches; k < (c + 1) * stretches; k++) {
-      along.qx[k]! -= loadCase.selfWeight * facts.weight * facts.ey;
-      along.qy[k]! -= loadCase.selfWeight * facts.weight * facts.ex;
-    }
+    lines: new Float64Array(4 * cases * stretches),
+    places: new Float64Array(stands ? 3 * cases * at.length : 0),
+    free: new Float64Array(2 * cases),
+  };
+  const line = (c: number, k: number, qx: number, qy: number, growX: number, growY: number): void => {
+    const o = 4 * (c * stretches + k);
+    along.lines[o]! += qx;
+    along.lines[o + 1]! += qy;
+    along.lines[o + 2]! += growX;
+    along.lines[o + 3]! += growY;
+  };
+  const place = (c: number, x: number, Px: number, Py: number, M0: number): void => {
+    const o = 3 * (c * at.length + at.indexOf(Math.min(x, facts.L)));
+    along.places[o]! += Px;
+    along.places[o + 1]! += Py;
+    along.places[o + 2]! += M0;
+  };
+  frame.cases.forEach(({ selfWeight }, c) => {
+    const w = selfWeight === 0 ? 0 : -selfWeight * facts.weight;
+    for (let k = 0; k < stretches; k++) line(c, k, w * facts.ey, w * facts.ex, 0, 0);
   });
   for (const load of rows) {
     const c = load.case;
     if (load.kind === 'temperature') {
-      if (load.dT_K !== 0) along.strain[c]! += facts.alpha * load.dT_K;
-      if (load.dTAcross_K !== 0) along.curvature[c]! -= (facts.alpha * load.dTAcross_K) / facts.depth;
+      if (load.dT_K !== 0) along.free[2 * c]! += facts.alpha * load.dT_K;
+      if (load.dTAcross_K !== 0) along.free[2 * c + 1]! -= (facts.alpha * load.dTAcross_K) / facts.depth;
     } else if (load.kind === 'moment') {
-      along.M0[c * at.length + at.indexOf(Math.min(load.at_m, facts.L))]! += load.M_Nm;
+      place(c, load.at_m, 0, 0, load.M_Nm);
     } else if (load.kind === 'point') {
       const [dx, dy] = directionOf(load.axes === 'local', load.direction, facts);
-      const k = c * at.length + at.indexOf(Math.min(load.at_m, facts.L));
-      along.Px[k]! += load.P_N * dx;
-      along.Py[k]! += load.P_N * dy;
+      place(c, load.at_m, load.P_N * dx, load.P_N * dy, 0);
     } else {
       const { from_m: a, q1_N_m: q1, q2_N_m: q2 } = load;
       const b = Math.min(load.to_m, facts.L);
       const shadow = load.axes !== 'projected' ? 1 : Math.abs(load.direction === 'y' ? facts.ex : facts.ey);
-      const [dx, dy] = directionOf(load.axes === 'local', load.direction, facts).map((d) => d * shadow) as [number, number];
-      const grow = b > a ? (q2 - q1) / (b - a) : 0;
+      const [dx, dy] = directionOf(load.axes === 'local', load.direction, facts);
+      const grow = b > a ? (shadow * (q2 - q1)) / (b - a) : 0;
       for (let k = at.indexOf(a); k < at.indexOf(b); k++) {
-        const q = q1 + grow * (at[k]! - a);
-        const o = c * stretches + k;
-        along.qx[o]! += q * dx;
-        along.qy[o]! += q * dy;
-        along.growX[o]! += grow * dx;
-        along.growY[o]! += grow * dy;
+        const q = shadow * q1 + grow * (at[k]! - a);
+        line(c, k, q * dx, q * dy, grow * dx, grow * dy);
       }
     }
   }
@@ -92,37 +90,24 @@ function directionOf(local: boolean, direction: 'x' | 'y', { ex, ey }: MemberFac
 /** The loads along one member under factors × cases: the sum of what {@link AlongMember} holds by case. */
 export interface Acting {
   readonly lengths: readonly number[];
-  readonly qx: Float64Array;
-  readonly qy: Float64Array;
-  readonly growX: Float64Array;
-  readonly growY: Float64Array;
-  readonly Px: Float64Array;
-  readonly Py: Float64Array;
-  readonly M0: Float64Array;
+  readonly lines: Float64Array;
+  readonly places: Float64Array;
   readonly strain: number;
   readonly curvature: number;
 }
 
-export function actingUnder(along: AlongMember, factors: ArrayLike<number>): Acting {
-  const stretches = along.lengths.length;
-  const sum = (values: Float64Array, width: number): Float64Array => {
-    const total = new Float64Array(width);
-    for (let c = 0; c < factors.length; c++) {
-      const k = factors[c]!;
-      if (k !== 0) for (let i = 0; i < width; i++) total[i]! += k * values[c * width + i]!;
-    }
-    return total;
-  };
-  return {
-    lengths: along.lengths,
-    qx: sum(along.qx, stretches),
-    qy: sum(along.qy, stretches),
-    growX: sum(along.growX, stretches),
-    growY: sum(along.growY, stretches),
-    Px: sum(along.Px, stretches + 1),
-    Py: sum(along.Py, stretches + 1),
-    M0: sum(along.M0, stretches + 1),
-    strain: sum(along.strain, 1)[0]!,
-    curvature: sum(along.curvature, 1)[0]!,
-  };
+export function actingUnder({ lengths, lines, places, free }: AlongMember, factors: ArrayLike<number>): Acting {
+  const cases = factors.length;
+  const [q, P] = [new Float64Array(4 * lengths.length), places.length === 0 ? places : new Float64Array(3 * lengths.length + 3)];
+  let strain = 0;
+  let curvature = 0;
+  for (let c = 0; c < cases; c++) {
+    const k = factors[c]!;
+    if (k === 0) continue;
+    for (let i = 0, o = c * q.length; i < q.length; i++) q[i]! += k * lines[o + i]!;
+    for (let i = 0, o = c * P.length; i < P.length; i++) P[i]! += k * places[o + i]!;
+    strain += k * free[2 * c]!;
+    curvature += k * free[2 * c + 1]!;
+  }
+  return { lengths, lines: q, places: P, strain, curvature };
 }

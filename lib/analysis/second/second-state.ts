@@ -59,16 +59,19 @@ export function resultants(acting: Acting, L: number): { total: [number, number]
     total[axis] += force;
     atEnd[axis] += (force * x + first) / L;
   };
-  for (let i = 0; i <= acting.lengths.length; i++) {
-    take(0, acting.Px[i]!, 0);
-    take(1, acting.Py[i]!, 0);
-    if (i === acting.lengths.length) break;
-    const l = acting.lengths[i]!;
-    for (const [axis, q, grow] of [
-      [0, acting.qx[i]!, acting.growX[i]!],
-      [1, acting.qy[i]!, acting.growY[i]!],
-    ] as const)
+  const { lengths, lines, places } = acting;
+  for (let i = 0; i <= lengths.length; i++) {
+    if (places.length > 0) {
+      take(0, places[3 * i]!, 0);
+      take(1, places[3 * i + 1]!, 0);
+    }
+    if (i === lengths.length) break;
+    const l = lengths[i]!;
+    for (const axis of [0, 1] as const) {
+      const q = lines[4 * i + axis]!;
+      const grow = lines[4 * i + 2 + axis]!;
       take(axis, l * (q + (l * grow) / 2), l * l * (q / 2 + (l * grow) / 3));
+    }
     x += l;
   }
   return { total, atEnd };

@@ -38,38 +38,43 @@ export function transferOf(k: Stiffness, acting: Acting, axial: number | null): 
   const bending = new Float64Array(3 * columns);
   bending[columns] = 1; // φ₀
   bending[2 * columns + 2] = 1; // M₀
-  const T = new Float64Array(columns);
-  T[1] = 1;
+  let T = 0; // of the loads
   let along = 0; // N − N₀
   let stretched = 0;
-  const { lengths } = acting;
+  let length = 0;
+  const { lengths, lines, places } = acting;
   for (let i = 0; i <= lengths.length; i++) {
-    along -= acting.Px[i]!;
-    T[3]! += acting.Py[i]!;
-    bending[2 * columns + 3]! -= acting.M0[i]!;
+    if (places.length > 0) {
+      along -= places[3 * i]!;
+      T += places[3 * i + 1]!;
+      bending[2 * columns + 3]! -= places[3 * i + 2]!;
+    }
     if (i === lengths.length) break;
     const l = lengths[i]!;
-    const [n1, n2] = [-acting.qx[i]!, -acting.growX[i]! / 2];
-    const [q0, q1] = [acting.qy[i]!, acting.growY[i]!];
-    const straight = axial === null;
-    const steps = straight ? 1 : stepsFor(k, axial + along, n1, n2, l);
+    const n1 = -lines[4 * i]!;
+    const n2 = -lines[4 * i + 2]! / 2;
+    const q0 = lines[4 * i + 1]!;
+    const q1 = lines[4 * i + 3]!;
+    const steps = axial === null ? 1 : stepsFor(k, axial + along, n1, n2, l);
     if (!(steps <= mostSteps)) return null;
     const h = l / steps;
     for (let step = 0; step < steps; step++) {
       const s = step * h;
-      const N = straight ? [0, 0, 0] : [axial + along + s * (n1 + s * n2), n1 + 2 * s * n2, n2];
-      const terms = straight ? 5 : termsFor(k, N, h);
-      for (let c = 0; c < columns; c++) {
-        const loaded = c === 3;
-        series(bending, c, k, h, N, [T[c]!, loaded ? q0 + s * q1 : 0, loaded ? q1 / 2 : 0], loaded ? acting.curvature : 0, terms);
-      }
-      T[3]! += h * (q0 + s * q1 + (h * q1) / 2);
+      const N0 = axial === null ? 0 : axial + along + s * (n1 + s * n2);
+      const N1 = axial === null ? 0 : n1 + 2 * s * n2;
+      const N2 = axial === null ? 0 : n2;
+      const terms = axial === null ? 5 : termsFor(k, N0, N1, N2, h);
+      series(bending, 0, k, h, N0, N1, N2, 0, 0, 0, 0, terms);
+      series(bending, 1, k, h, N0, N1, N2, 1, 0, 0, 0, terms);
+      series(bending, 2, k, h, N0, N1, N2, 0, 0, 0, 0, terms);
+      series(bending, 3, k, h, N0, N1, N2, T, q0 + s * q1, q1 / 2, acting.curvature, terms);
+      T += h * (q0 + s * q1 + (h * q1) / 2);
     }
     stretched += (l * (along + l * (n1 / 2 + (l * n2) / 3))) / k.EA;
     along += l * (n1 + l * n2);
+    length += l;
   }
-  const length = lengths.reduce((sum, l) => sum + l, 0);
-  return { bending, gainT: T[3]!, gainN: along, gainU: stretched + acting.strain * length };
+  return { bending, gainT: T, gainN: along, gainU: stretched + acting.strain * length };
 }
 
 /** Steps so short that √(N/EI) × step is at most 1. */
@@ -80,8 +85,8 @@ function stepsFor({ EI, slip }: Stiffness, n0: number, n1: number, n2: number, l
 }
 
 /** Terms until (step × √(N/EI))ᵏ/k! is below rounding. */
-function termsFor({ EI }: Stiffness, [n0, n1, n2]: readonly number[], h: number): number {
-  const most = Math.abs(n0!) + h * (Math.abs(n1!) + h * Math.abs(n2!));
+function termsFor({ EI }: Stiffness, n0: number, n1: number, n2: number, h: number): number {
+  const most = Math.abs(n0) + h * (Math.abs(n1) + h * Math.abs(n2));
   const z = h * Math.sqrt((2 * most) / EI);
   let size = 1;
   let terms = 0;
@@ -89,34 +94,46 @@ function termsFor({ EI }: Stiffness, [n0, n1, n2]: readonly number[], h: number)
   return terms;
 }
 
-/** One step of one column: v, φ, M at its end from those at its start. */
+/** One step of one column: v, φ, M at its end from those at its start; N and T as polynomials of the step. */
 function series(
   y: Float64Array,
   column: number,
-  { EI, slip }: Stiffness,
+  k: Stiffness,
   h: number,
-  [n0, n1, n2]: readonly number[],
-  T: readonly number[],
+  n0: number,
+  n1: number,
+  n2: number,
+  t0: number,
+  t1: number,
+  t2: number,
   curvature: number,
   terms: number,
 ): void {
+  const slip = k.slip;
+  const soft = 1 / k.EI;
+  const stiff = 1 / (1 + slip * n0);
   let phi = y[columns + column]!;
   let M = y[2 * columns + column]!;
   let v = y[column]!;
-  let [phiEnd, MEnd] = [phi, M];
-  let [w1, w2] = [0, 0]; // the slope’s coefficients before this one
+  let phiEnd = phi;
+  let MEnd = M;
+  // the slope’s coefficients before this one
+  let w1 = 0;
+  let w2 = 0;
   let power = 1;
-  for (let k = 0; k < terms; k++) {
-    const t = (k < 3 ? T[k]! : 0) + n1! * w1 + n2! * w2;
-    const w = (phi - slip * t) / (1 + slip * n0!);
+  for (let i = 0; i < terms; i++) {
+    const t = (i === 0 ? t0 : i === 1 ? t1 : i === 2 ? t2 : 0) + n1 * w1 + n2 * w2;
+    const w = (phi - slip * t) * stiff;
+    const by = 1 / (i + 1);
+    const next = (t + n0 * w) * by;
     power *= h;
-    const nextM = (t + n0! * w) / (k + 1);
-    phi = (M / EI + (k === 0 ? curvature : 0)) / (k + 1);
-    M = nextM;
-    v += (w * power) / (k + 1);
+    phi = (M * soft + (i === 0 ? curvature : 0)) * by;
+    M = next;
+    v += w * power * by;
     phiEnd += phi * power;
     MEnd += M * power;
-    [w2, w1] = [w1, w];
+    w2 = w1;
+    w1 = w;
   }
   y[column] = v;
   y[columns + column] = phiEnd;

@@ -28,70 +28,89 @@ export interface Joints {
 export function twoEnds(t: Transfer, L: number, EA: number, EI: number, joints: Joints): TwoEnds | null {
   const B = t.bending;
   // unknowns φₛ, T L²/EI, M L/EI; right-hand sides v₁ φ₁ v₂ φ₂ 1
-  const [sT, sM] = [EI / L ** 2, EI / L];
-  const row = (phi: number, T: number, M: number, right: readonly number[]): number[] => [phi, T * sT, M * sM, ...right];
+  const sT = EI / L ** 2;
+  const sM = EI / L;
   const a = joints.start;
   const b = joints.end;
-  const phiEnd = [B[4]!, B[5]!, B[6]!, B[7]!] as const;
-  const MEnd = [B[8]!, B[9]!, B[10]!, B[11]!] as const;
-  // a joint’s equation divided by what is larger of 1 and its flexibility against the member’s
-  const [wa, wb] = [1 / Math.max(1, a * sM), 1 / Math.max(1, b * sM)];
-  const equations = [
-    a === Infinity ? row(0, 0, 1 / sM, [0, 0, 0, 0, 0]) : row(wa, 0, -a * wa, [0, wa, 0, 0, 0]),
-    row(B[0]! / L, B[1]! / L, B[2]! / L, [-1 / L, 0, 1 / L, 0, -B[3]! / L]),
-    b === Infinity
-      ? row(MEnd[0] / sM, MEnd[1] / sM, MEnd[2] / sM, [0, 0, 0, 0, -MEnd[3] / sM])
-      : row(wb * (phiEnd[0] + b * MEnd[0]), wb * (phiEnd[1] + b * MEnd[1]), wb * (phiEnd[2] + b * MEnd[2]), [
-          0,
-          0,
-          0,
-          wb,
-          -wb * (phiEnd[3] + b * MEnd[3]),
-        ]),
-  ];
-  if (!eliminate(equations)) return null;
+  const rows = equations;
+  rows.fill(0);
+  // a joint’s equation divided by the larger of 1 and its flexibility against the member’s
+  if (a === Infinity) rows[2] = 1;
+  else {
+    const w = 1 / Math.max(1, a * sM);
+    rows[0] = w;
+    rows[2] = -a * w * sM;
+    rows[4] = w;
+  }
+  rows[8] = B[0]! / L;
+  rows[9] = (B[1]! * sT) / L;
+  rows[10] = (B[2]! * sM) / L;
+  rows[11] = -1 / L;
+  rows[13] = 1 / L;
+  rows[15] = -B[3]! / L;
+  const pinned = b === Infinity;
+  const w = pinned ? 1 / sM : 1 / Math.max(1, b * sM);
+  for (let c = 0; c < 4; c++) {
+    const by = c === 1 ? sT : c === 2 ? sM : 1;
+    const value = w * by * (pinned ? B[8 + c]! : B[4 + c]! + b * B[8 + c]!);
+    if (c < 3) rows[16 + c] = value;
+    else rows[23] = -value;
+  }
+  if (!pinned) rows[22] = w;
+  if (!eliminate(rows)) return null;
   const k = new Float64Array(36);
   const q0 = new Float64Array(6);
-  const [phiS, phiE] = [new Float64Array(5), new Float64Array(5)];
+  const phiStart = new Float64Array(5);
+  const phiEnd = new Float64Array(5);
   const axial = EA / L;
   k[0] = k[21] = axial;
   k[3] = k[18] = -axial;
   q0[0] = axial * t.gainU; // N₀ = (EA/L)(u₂ − u₁ − gain), X₁ = −N₀
   q0[3] = t.gainN - axial * t.gainU;
-  const places = [1, 2, 4, 5, -1];
-  places.forEach((place, c) => {
-    const phi = equations[0]![3 + c]!;
-    const T = equations[1]![3 + c]! * sT;
-    const M = equations[2]![3 + c]! * sM;
-    const one = place < 0 ? 1 : 0;
-    const out = [T, -M, -(T + one * t.gainT), MEnd[0] * phi + MEnd[1] * T + MEnd[2] * M + one * MEnd[3]];
-    phiS[c] = phi;
-    phiE[c] = phiEnd[0] * phi + phiEnd[1] * T + phiEnd[2] * M + one * phiEnd[3];
+  for (let c = 0; c < 5; c++) {
+    const phi = rows[3 + c]!;
+    const T = rows[11 + c]! * sT;
+    const M = rows[19 + c]! * sM;
+    const loads = c === 4 ? 1 : 0;
+    phiStart[c] = phi;
+    phiEnd[c] = B[4]! * phi + B[5]! * T + B[6]! * M + loads * B[7]!;
     // a pinned end’s moment is none, not the rounding of what cancels
-    if (a === Infinity) out[1] = 0;
-    if (b === Infinity) out[3] = 0;
-    [1, 2, 4, 5].forEach((r, i) => {
-      if (place < 0) q0[r] = out[i]!;
-      else k[6 * r + place] = out[i]!;
-    });
-  });
-  return { k, q0, phiStart: phiS, phiEnd: phiE };
+    const m1 = a === Infinity ? 0 : -M;
+    const m2 = pinned ? 0 : B[8]! * phi + B[9]! * T + B[10]! * M + loads * B[11]!;
+    const into = c === 4 ? q0 : k;
+    const step = c === 4 ? 1 : 6;
+    const o = c === 4 ? 0 : outer[c]!;
+    into[step + o] = T;
+    into[2 * step + o] = m1;
+    into[4 * step + o] = -(T + loads * t.gainT);
+    into[5 * step + o] = m2;
+  }
+  return { k, q0, phiStart, phiEnd };
 }
 
+/** v₁ φ₁ v₂ φ₂ among the six movements of a member’s ends. */
+const outer = [1, 2, 4, 5] as const;
+/** Three equations, 8 numbers each. */
+const equations = new Float64Array(24);
+
 /** Gauss and Jordan with row exchanges: three equations, solved in place. */
-function eliminate(rows: number[][]): boolean {
+function eliminate(rows: Float64Array): boolean {
   for (let c = 0; c < 3; c++) {
     let p = c;
-    for (let r = c + 1; r < 3; r++) if (Math.abs(rows[r]![c]!) > Math.abs(rows[p]![c]!)) p = r;
-    [rows[c], rows[p]] = [rows[p]!, rows[c]!];
-    const pivot = rows[c]!;
-    const value = pivot[c]!;
+    for (let r = c + 1; r < 3; r++) if (Math.abs(rows[8 * r + c]!) > Math.abs(rows[8 * p + c]!)) p = r;
+    if (p !== c)
+      for (let j = 0; j < 8; j++) {
+        const kept = rows[8 * c + j]!;
+        rows[8 * c + j] = rows[8 * p + j]!;
+        rows[8 * p + j] = kept;
+      }
+    const value = rows[8 * c + c]!;
     if (!(Math.abs(value) > 1e-13)) return false;
-    for (let j = c; j < pivot.length; j++) pivot[j]! /= value;
-    rows.forEach((row, r) => {
-      const factor = row[c]!;
-      if (r !== c && factor !== 0) for (let j = c; j < row.length; j++) row[j]! -= factor * pivot[j]!;
-    });
+    for (let j = c; j < 8; j++) rows[8 * c + j]! /= value;
+    for (let r = 0; r < 3; r++) {
+      const factor = rows[8 * r + c]!;
+      if (r !== c && factor !== 0) for (let j = c; j < 8; j++) rows[8 * r + j]! -= factor * rows[8 * c + j]!;
+    }
   }
   return true;
 }
