@@ -109,3 +109,12 @@ export function failStrandedReadings(raw: RawDatabase, reason: string): number[]
     .pluck()
     .all(reason);
 }
+
+/** Cells of the widest row as typed; 0 where there is none. */
+export function inputWidth(raw: RawDatabase, revision: number): number {
+  return raw
+    .prepare<[number], { widest: number }>(
+      'select coalesce(max(json_array_length(cells)), 0) as widest from input_row where revision = ?',
+    )
+    .get(revision)!.widest;
+}

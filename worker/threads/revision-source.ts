@@ -4,11 +4,12 @@ import { frameRows, readStates, type FrameRow } from '@/db/queries/frame-rows';
 import { type ChangeRecord, listChanges } from '@/db/queries/changes';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { findRevisionById } from '@/db/queries/revisions';
-import { inputRows } from '@/db/queries/waiting';
+import { inputRows, inputWidth } from '@/db/queries/waiting';
 import { changeLine } from '@/lib/changes/change-words';
 import { engineVersion } from '@/lib/analysis/engine-version';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
 import { problemsInOrder } from '@/lib/results/failure-problem';
+import type { ResultState } from '@/lib/results/result';
 
 /** What result files of a stored revision are made from. @throws {RangeError} where the revision is not read */
 export async function revisionSource({ db, raw }: OpenDatabase, office: number, revision: number): Promise<ReportSource> {
@@ -38,6 +39,7 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
     origins: found.origins,
     problems: problemsInOrder(problems, sheets),
     inputRows: () => inputRows(raw, revision),
+    inputWidth: () => inputWidth(raw, revision),
     frames: framesOf(raw, revision),
   };
 }
@@ -55,9 +57,29 @@ function madeBy(from: string | null, changes: readonly ChangeRecord[]): string[]
 
 /** Frames of a revision up to this number are decoded once and kept for the passes of a workbook: about 60 MB. */
 const mostKept = 1_200;
+/** Numbers of their states that are kept as well, as many as fit: four or five sheets are made from the same ones. */
+const mostStateBytes = 32 * 2 ** 20;
+
+/** A version's states, read once where they fit into what may be kept, else each time. */
+function statesOnce(raw: RawDatabase): (version: number) => readonly ResultState[] {
+  const read = readStates(raw);
+  const kept = new Map<number, readonly ResultState[]>();
+  let bytes = 0;
+  return (version) => {
+    const known = kept.get(version);
+    if (known) return known;
+    const states = read(version);
+    const size = states.reduce((sum, { displacements }) => sum + displacements.buffer.byteLength, 0);
+    if (bytes + size <= mostStateBytes) {
+      bytes += size;
+      kept.set(version, states);
+    }
+    return states;
+  };
+}
 
 function framesOf(raw: RawDatabase, revision: number): ReportSource['frames'] {
-  const states = readStates(raw);
+  const states = statesOnce(raw);
   let kept: readonly FrameRow[] | null = null;
   return function* (need): Generator<ReportFrame> {
     if (kept === null) {

@@ -4,8 +4,7 @@ import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 
 export function inputSheet(source: ReportSource): ReportSheet {
-  let widest = 1;
-  for (const row of source.inputRows()) widest = Math.max(widest, row.cells.length);
+  const widest = Math.max(1, source.inputWidth ? source.inputWidth() : widestOf(source.inputRows()));
   return {
     name: 'Input as read',
     columns: [
@@ -17,6 +16,12 @@ export function inputSheet(source: ReportSource): ReportSheet {
       for (const row of source.inputRows()) yield [row.sheet, row.row, ...row.cells];
     },
   };
+}
+
+function widestOf(rows: ReturnType<ReportSource['inputRows']>): number {
+  let widest = 0;
+  for (const row of rows) widest = Math.max(widest, row.cells.length);
+  return widest;
 }
 
 export function problemsSheet(source: ReportSource): ReportSheet {

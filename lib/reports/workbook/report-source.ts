@@ -48,6 +48,8 @@ export interface ReportSource {
   readonly origins: SettingOrigins;
   readonly problems: readonly Problem[];
   readonly inputRows: () => Iterable<InputRow>;
+  /** Cells of the widest of them, where that is known without going through them. */
+  readonly inputWidth?: () => number;
   /** Frames in sheet order; called once for each sheet that needs them, with what that sheet looks at. */
   readonly frames: (need: FrameNeed) => Iterable<ReportFrame> | AsyncIterable<ReportFrame>;
 }
