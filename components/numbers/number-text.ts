@@ -38,7 +38,7 @@ export function columnText({ columns, rows, mixed }: NumberTable): ((cell: Numbe
       if (cell === null) return '';
       if (typeof cell === 'string') return cell;
       if (cell === 0 || column.power) return powerText(cell);
-      return formatNumber(cell, mixed && !Number.isInteger(cell) ? { significant: 6 } : { decimals: mixed ? 0 : own });
+      return formatNumber(cell, { decimals: mixed ? decimalsFor([Number(cell.toPrecision(6))]) : own });
     };
   });
 }

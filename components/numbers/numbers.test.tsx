@@ -40,6 +40,12 @@ describe('a matrix that a checker follows', () => {
     ).toEqual(['force on, for unit of', 'u₁m', 'v₁m']);
   });
 
+  it('shows figures of several kinds with six figures each, and no idle zeros', () => {
+    const mixed = { ...k, mixed: true, columns: [{ label: 'value' }], rows: [188335.00000000003, 0.8, 144, 0.000117669123].map((value) => ({ label: 'x', cells: [value] })) }; // prettier-ignore
+    render(<NumberTable table={mixed} />);
+    expect(screen.getAllByRole('cell').map((cell) => cell.textContent)).toEqual(['188335', '0.8', '144', '0.000117669']);
+  });
+
   it('copies every digit as tab-separated text with its headings', async () => {
     const user = userEvent.setup();
     render(<NumberTable table={k} />);

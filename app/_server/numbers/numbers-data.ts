@@ -120,9 +120,13 @@ function forcesStep({ byDisplacements, fixedEnd, endForces, stored }: BehindMemb
 }
 
 /** The same as N, V and M at both ends. */
-function internalStep({ endForces }: ResultState, index: number, { bent }: BehindMember, units: NumberUnits): NumberStep {
+function internalStep({ endForces }: ResultState, index: number, { bent, data }: BehindMember, units: NumberUnits): NumberStep {
   const at = (place: number) => endForces[6 * index + place]!;
-  const V = bent ? (['(Y₁ + N ψ₁)/(1 + N/GAv)', '(−Y₂ + N ψ₂)/(1 + N/GAv)'] as const) : (['Y₁', '−Y₂'] as const);
+  const shears = Number.isFinite(data.GAv);
+  const square = shears
+    ? (['(Y₁ + N ψ₁)/(1 + N/GAv)', '(−Y₂ + N ψ₂)/(1 + N/GAv)'] as const)
+    : (['Y₁ + N ψ₁', '−Y₂ + N ψ₂'] as const);
+  const V = bent ? square : (['Y₁', '−Y₂'] as const);
   const lines = [
     ['N', 0, '−X₁', 'X₂', 'tension positive'],
     ['V', 0, ...V, 'V = dM/dx'],
