@@ -27,7 +27,7 @@ export function initialSway(height: number, m: number): SwayImperfection {
  * Compression of a piece of a column, N: the larger of its ends; 0 where neither is compressed.
  * @param endForces N, V, M at start and end by member, 6 each (first order)
  */
-export function compression(endForces: Float64Array, member: number): number {
+function compression(endForces: Float64Array, member: number): number {
   return Math.max(0, -endForces[6 * member]!, -endForces[6 * member + 3]!);
 }
 
