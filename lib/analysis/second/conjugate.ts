@@ -1,7 +1,7 @@
 /** Rounds after which the equations are better factored. */
 const mostRounds = 40;
-/** Energy of what is left against that of the first guess's error at which the solution stands: 1e-14 of the movements. */
-const nothing = 1e-28;
+/** Energy of what is left against that of the first guess's error at which the solution stands: 1e-13 of the movements, before refinement. */
+const nothing = 1e-26;
 
 /**
  * K d = f by conjugate gradients, K not far from a matrix whose inverse is known (Hestenes and Stiefel 1952, preconditioned):
