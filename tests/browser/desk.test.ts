@@ -96,6 +96,8 @@ describe('a desk with a large batch', () => {
     await page.getByText('holiday.xlsx is not a workbook').waitFor({ timeout: 60_000 });
     await page.getByRole('heading', { name: 'No frame can run yet' }).waitFor();
     expect(await page.getByRole('button', { name: /^Run/ }).count()).toBe(0);
+    // of a file that could not be opened there is nothing to mark
+    expect(await page.getByRole('link', { name: 'Download the marked copy' }).count()).toBe(0);
   });
 
   it('is never wider than a phone', async () => {

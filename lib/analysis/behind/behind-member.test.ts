@@ -4,6 +4,9 @@ import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
 import { createAnalyser } from '../analyser';
 import { analyseCombination, stateOf } from '../second-order/analyse-combination';
+import { nodeAngles } from '../assemble';
+import { loadVectors } from '../load-vectors';
+import { buildTopology } from '../topology';
 import { plainCase, plainFrame, plainMember, plainSection } from '../plain-frame';
 import { randomFrame } from '../random-frame';
 import { behindFrame } from './behind-frame';
@@ -152,6 +155,23 @@ describe('the numbers behind a member', () => {
           const forces = [...state.endForces, ...directions.flatMap(({ load }) => load ?? [])].map(Math.abs);
           for (const { left } of directions) expect(Math.abs(left ?? 0)).toBeLessThan(1e-8 * Math.max(1, ...forces));
         }
+      }),
+      { ...seeded, numRuns: 30 },
+    );
+  });
+
+  it('show the load vector that was solved', () => {
+    fc.assert(
+      fc.property(randomFrame, (frame) => {
+        const states = statesOf(frame);
+        const t = buildTopology(frame);
+        const { f } = loadVectors(frame, t, nodeAngles(frame));
+        frame.cases.forEach((_, c) => {
+          const column = f.subarray(3 * t.size * c, 3 * t.size * (c + 1));
+          const size = Math.max(1, ...column.map(Math.abs));
+          for (const { row, load } of behindFrame(frame, states[c]!).directions)
+            if (row !== null) expect(Math.abs(load! - column[row - 1]!) / size, `row ${row}`).toBeLessThan(1e-9);
+        });
       }),
       { ...seeded, numRuns: 30 },
     );
