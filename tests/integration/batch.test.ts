@@ -38,6 +38,13 @@ function typed(folder: string, program: string, words: readonly string[]): Promi
 }
 const batch = (...words: string[]): Promise<Ended> =>
   typed(samples, process.execPath, [join(root, 'worker/batch.mjs'), ...words]);
+/** Where two texts part, with what stands round it in each; null where they are the same. Megabytes of JSON are no message. */
+function firstDifference(one: string, other: string): readonly string[] | null {
+  if (one === other) return null;
+  let at = 0;
+  while (one[at] === other[at]) at++;
+  return [one, other].map((text) => text.slice(Math.max(0, at - 120), at + 60));
+}
 const sheetValues = (book: ExcelJS.Workbook, name: string): unknown => book.getWorksheet(name)?.getSheetValues();
 const results = (name: string): ResultsJson => resultsSchema.parse(JSON.parse(readFileSync(join(out, name), 'utf8')));
 
@@ -210,7 +217,7 @@ describe('the queue and the command line', () => {
         const stream = resultStream(pools, { file: database.file, office, revision, as: 'json' });
         const json = Buffer.from(await new Response(stream).arrayBuffer());
         await batch(join(folder, name), '--json', join(out, 'same.json'));
-        expect(json.toString()).toBe(readFileSync(join(out, 'same.json'), 'utf8'));
+        expect(firstDifference(json.toString(), readFileSync(join(out, 'same.json'), 'utf8')), name).toBeNull();
         if (name === 'portal-sheds-240.xlsx') {
           // Someone who goes away in the middle takes the thread with him and leaves the next one undisturbed.
           const reader = resultStream(pools, { file: database.file, office, revision, as: 'json' }).getReader();
