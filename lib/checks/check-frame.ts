@@ -8,7 +8,7 @@ import { checkDisplacement } from './displacement';
 import { spansOf, type Span } from './spans';
 import { checkSpread } from './spread';
 import { checkStability, stabilitySubject } from './stability';
-import { checkStress, stressNotChecked } from './strength-stress';
+import { checkStress, stressNotChecked, type SlenderIn } from './strength-stress';
 import { checkSway } from './sway';
 
 export interface FrameChecks {
@@ -87,11 +87,19 @@ function checkStrength(
     return;
   }
   const byMember = frame.members.map((_, i) => states.map((state) => lineOf(state, i)));
+  const slender = new Map<number, ReturnType<SlenderIn>[]>();
   for (let i = 0; i < frame.members.length; i++) {
     const pieces = likePieces(frame, spans, i);
-    const whole = (c: number): MemberLine =>
-      pieces.length === 1 ? byMember[i]![c]! : oneLine(pieces.map((p) => byMember[p]![c]!));
-    checkStress(frame, settings, i, states, byMember[i]!, whole, findings);
+    // pieces of one physical member share what is found along it
+    let known = slender.get(pieces[0]!);
+    if (!known) slender.set(pieces[0]!, (known = []));
+    const found = known;
+    const slenderIn: SlenderIn = (c, find) => {
+      if (found[c] === undefined)
+        found[c] = find(pieces.length === 1 ? byMember[i]![c]! : oneLine(pieces.map((p) => byMember[p]![c]!)));
+      return found[c];
+    };
+    checkStress(frame, settings, i, states, byMember[i]!, slenderIn, findings);
   }
   findings.assumptions.add(
     'Equivalent stress: the larger face stress with the peak shear stress of the same place, on the safe side',

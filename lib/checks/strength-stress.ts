@@ -4,10 +4,15 @@ import type { MemberLine, ResultState } from '@/lib/results/result';
 import { inPlane, type InPlane } from '@/lib/sections/in-plane';
 import { keepGoverning, notCheckedRow, type Findings } from './check-row';
 import { peakEquivalentStress } from './equivalent-stress';
+import { lineBounds } from './line-bounds';
 import { peakNormalStress } from './normal-stress';
 import { peakShearStress } from './shear-stress';
 import { plateProportions, slenderInCombination, type PlateProportions } from './slender-plates';
 import { StressRows, stressNames, stressSubject } from './stress-rows';
+
+/** A slender plate of a physical member in a state: `find` is asked once for all of its pieces. */
+export type SlenderIn = (state: number, find: (whole: MemberLine) => SlenderFound) => SlenderFound;
+type SlenderFound = ReturnType<typeof slenderInCombination>;
 
 /** Shear stress below this part of yield is what rounding leaves of none. */
 const NO_SHEAR = 1e-6;
@@ -20,8 +25,8 @@ export function stressNotChecked(frame: Frame, member: number, reason: string, f
 /**
  * Elastic stress of one member over all strength combinations: normal, shear and equivalent stress.
  * @param lines the member's line in each of `states`
- * @param whole the line of all pieces of its span of the same section, one after another, in a state: slender plates are looked
- *   for along the physical member, so that a node on it changes nothing
+ * @param slenderIn what is found of slender plates along the line of all pieces of its span of the same section, in a state: along
+ *   the physical member, so that a node on it changes nothing; looked for once for all of them
  */
 export function checkStress(
   frame: Frame,
@@ -29,7 +34,7 @@ export function checkStress(
   member: number,
   states: readonly ResultState[],
   lines: readonly MemberLine[],
-  whole: (state: number) => MemberLine,
+  slenderIn: SlenderIn,
   findings: Findings,
 ): void {
   const m = frame.members[member]!;
@@ -54,11 +59,13 @@ export function checkStress(
     const perBottom = of.Wbottom_m3 && !noW ? 1 / of.Wbottom_m3 : 0;
     let noNormal = noW;
     if (!noW && plates.watch.length > 0) {
-      const all = whole(c);
-      const governing = peakNormalStress(all, 1 / of.A_m2, perTop, perBottom);
-      const slender = slenderInCombination(section, m.turned, material, plates.watch, all, of, governing, settings.stressFactor);
+      const slender = slenderIn(c, (whole) => {
+        const governing = peakNormalStress(whole, 1 / of.A_m2, perTop, perBottom);
+        return slenderInCombination(section, m.turned, material, plates.watch, whole, of, governing, settings.stressFactor);
+      });
       if (slender) noNormal = `slender ${slender}`;
     }
+    if (!noNormal && !noAv && plates.shear === null && rows.staysBelow(lineBounds(line), perTop, perBottom)) continue;
     const normal = noNormal ? 0 : rows.take(0, combination, peakNormalStress(line, 1 / of.A_m2, perTop, perBottom));
     if (noNormal) rows.refuse(0, combination, noNormal);
     if (noAv) {

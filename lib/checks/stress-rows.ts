@@ -3,6 +3,7 @@ import type { Settings } from '@/lib/model/settings';
 import type { Check } from '@/lib/results/result';
 import type { InPlane } from '@/lib/sections/in-plane';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
+import type { LineBounds } from './line-bounds';
 import { noPeak, SAME, type Peak } from './peak';
 import { verdictOf } from './verdict';
 
@@ -47,6 +48,14 @@ export class StressRows {
   /** Largest stress so far of a check; −1 where every row is wanted, so that each is exact. */
   floor(check: number): number {
     return this.all ? -1 : this.best[check]!.value;
+  }
+
+  /** Whether no stress within these bounds could govern, so that a combination need not be looked at more closely. */
+  staysBelow({ N, V, M }: LineBounds, perTop: number, perBottom: number): boolean {
+    const normal = N / this.of.A_m2 + M * Math.max(perTop, perBottom);
+    if (!(normal <= this.floor(0))) return false;
+    const shear = this.of.AvPeak_m2 === null ? Infinity : V / this.of.AvPeak_m2;
+    return shear <= this.floor(1) && Math.sqrt(normal * normal + 3 * shear * shear) <= this.floor(2);
   }
 
   /** Takes a combination's peak and returns its stress. */
