@@ -46,7 +46,12 @@ export type Subject = Pick<Check, 'subjectKind' | 'subject' | 'check' | 'quantit
 /** A row that says why nothing was checked. */
 export function notCheckedRow(subject: Subject, combination: string | null, reason: string, inputs: Check['inputs'] = {}): Check {
   return {
-    ...subject,
+    subjectKind: subject.subjectKind,
+    subject: subject.subject,
+    check: subject.check,
+    quantity: subject.quantity,
+    reference: subject.reference,
+    member: subject.member,
     combination,
     at: null,
     face: null,
