@@ -48,7 +48,7 @@ function movements(
   side: Float64Array,
 ): { readonly movements: Float64Array; readonly past: boolean } | null {
   const inverse = firstOrderInverse(setup, given, acting);
-  const near = inverse && conjugate(equations.K, inverse, side);
+  const near = inverse && conjugate(equations.K, equations.numbering, inverse, side);
   if (near) return { movements: near, past: false };
   const factors = factored(equations);
   return factors && { movements: solveFor(equations, factors, [side])[0]!, past: factors.sign < 0 };

@@ -1,6 +1,6 @@
 import { LuDecomposition, Matrix } from 'ml-matrix';
 import { inPieces, piecesFor } from './in-pieces';
-import { numberingOf } from './numbering';
+import { numberingOf, type Numbering } from './numbering';
 import type { Acting } from './second-loads';
 import { restraintOf, type Given, type Setup } from './second-setup';
 import { transferOf } from './transfer';
@@ -8,7 +8,7 @@ import { twoEnds, type TwoEnds } from './two-ends';
 
 /** The equations of one stiffness, with the numbers of their unknowns. */
 export interface Equations {
-  /** By node and direction: its unknown, or −1 where held or without a stiffness. */
+  readonly numbering: Numbering;
   readonly number: Int32Array;
   readonly count: number;
   /** Undefined for slack members. */
@@ -60,7 +60,7 @@ export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[
       const u = number[3 * support.node + r]!;
       if (typeof spring === 'number' && u >= 0) K[u * n + u]! += spring;
     }
-  return { number, count: n, ends, K };
+  return { numbering: known, number, count: n, ends, K };
 }
 
 /** LU with row exchanges. @returns null where K is singular */
