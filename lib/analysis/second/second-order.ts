@@ -18,7 +18,7 @@ export function solveState(setup: Setup, given: Given, acting: readonly Acting[]
   let axial = given.axial;
   for (let pass = 0; pass < mostPasses; pass++) {
     const now = { ...given, axial };
-    const equations = equationsOf(setup, now, acting);
+    const equations = equationsOf(setup, now, acting, true);
     if (!equations) return null;
     const nodes = onNodes(setup, now, acting);
     const d = movements(setup, now, acting, equations, rightSide(setup, equations, equations.ends, nodes));

@@ -14,6 +14,7 @@ export interface Setup {
   /** What is worked out once for each set of slack members. */
   readonly numberings: Map<string, Numbering>;
   readonly inverses: Map<string, Float64Array | null>;
+  readonly room: { K: Float64Array };
 }
 
 /** @param shear whether members shear as well as bend */
@@ -28,7 +29,7 @@ export function setUp(frame: Frame, shear: boolean): Setup {
     axes[2 * node + 1] = Math.sin(angle);
   });
   const along = loadsAlong(frame, members);
-  return { frame, members, along, axes, supportAt, numberings: new Map(), inverses: new Map() };
+  return { frame, members, along, axes, supportAt, numberings: new Map(), inverses: new Map(), room: { K: new Float64Array(0) } };
 }
 
 /** What makes a state: its loads, what the members are made of in it, and the forces that bend it further. */

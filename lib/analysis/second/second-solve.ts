@@ -40,13 +40,17 @@ export function endsOf({ members }: Setup, given: Given, i: number, acting: Acti
   return t && twoEnds(t, m.L, EA, EI, joints);
 }
 
-/** Sums up K (dense), unknowns along the supports' axes. @returns null where a member buckles between its nodes */
-export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[]): Equations | null {
+/**
+ * Sums up K (dense), unknowns along the supports' axes.
+ * @param again K may stand where that of the call before stood   @returns null where a member buckles between its nodes
+ */
+export function equationsOf(setup: Setup, given: Given, acting: readonly Acting[], again = false): Equations | null {
   const key = [...given.slack].join();
   const known = setup.numberings.get(key) ?? numberingOf(setup, given.slack);
   setup.numberings.set(key, known);
   const { number, count: n } = known;
-  const K = new Float64Array(n * n);
+  const K = again && setup.room.K.length === n * n ? setup.room.K.fill(0) : new Float64Array(n * n);
+  if (again) setup.room.K = K;
   const ends: (TwoEnds | undefined)[] = [];
   for (let i = 0; i < setup.members.length; i++) {
     const two = given.slack.has(i) ? undefined : endsOf(setup, given, i, acting[i]!);
