@@ -12,7 +12,7 @@ import { secondAnalysis } from './second/second-analysis';
 import type { Topology } from './topology';
 import { worse } from './worse';
 
-export { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns };
+export { leastDigits };
 
 /** Share of the forces met on the way below which a result is taken for their rounding. */
 const rounding = 1e-4;
