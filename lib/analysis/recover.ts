@@ -1,4 +1,4 @@
-import type { Frame } from '@/lib/model/frame';
+import type { Frame, Restraint } from '@/lib/model/frame';
 import { emptyMemberStiffness, memberStiffness } from './assemble';
 import { endForces, endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
 import { memberData, type MemberData } from './member-data';
@@ -14,6 +14,10 @@ export interface Recovered {
   /** Largest force met on the way before stiffness × movement cancels, N: results far below it are its rounding. */
   readonly handled: number;
 }
+
+const k = emptyMemberStiffness();
+const u = new Float64Array(6);
+const q = new Float64Array(6);
 
 /** q = k T d + q_F and R = what the members ask of the supports − loads put straight on them. README (2.8). */
 export function recover(
@@ -34,11 +38,9 @@ export function recover(
   const forces = new Float64Array(6 * data.length);
   // what the nodes must do to the members, node axes
   const asked = new Float64Array(3 * nodes);
-  const k = emptyMemberStiffness();
-  const u = new Float64Array(6);
-  const q = new Float64Array(6);
   let handled = 0;
-  data.forEach((m, i) => {
+  for (let i = 0; i < data.length; i++) {
+    const m = data[i]!;
     toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
     endForces(memberStiffness(m, k), u, q);
     handled = Math.max(
@@ -63,7 +65,7 @@ export function recover(
     forces[6 * i + 3] = q[3]! + 0;
     forces[6 * i + 4] = -q[4]! + 0;
     forces[6 * i + 5] = q[5]! + 0;
-  });
+  }
   for (const load of frame.nodeLoads) {
     if (load.case !== loadCase) continue;
     const ca = Math.cos(angles[load.node]!);
@@ -91,27 +93,35 @@ export function takeReactions(
   const reactions = new Float64Array(3 * frame.supports.length);
   frame.supports.forEach((support, i) => {
     const o = 3 * support.node;
-    const held = [support.ux, support.uy, support.rz].map((restraint, r) => {
-      if (restraint === 'free') return 0;
-      const R = restraint === 'fixed' ? asked[o + r]! : -restraint * all[o + r]!;
-      asked[o + r] = asked[o + r]! - R;
-      return R;
-    });
-    const ca = Math.cos(support.angle_rad);
-    const sa = Math.sin(support.angle_rad);
-    reactions[3 * i] = held[0]! * ca - held[1]! * sa + 0;
-    reactions[3 * i + 1] = held[0]! * sa + held[1]! * ca + 0;
-    reactions[3 * i + 2] = held[2]! + 0;
+    const x = takeReaction(support.ux, all, asked, o);
+    const y = takeReaction(support.uy, all, asked, o + 1);
+    const angle = support.angle_rad;
+    const ca = angle === 0 ? 1 : Math.cos(angle);
+    const sa = angle === 0 ? 0 : Math.sin(angle);
+    reactions[3 * i] = x * ca - y * sa + 0;
+    reactions[3 * i + 1] = x * sa + y * ca + 0;
+    reactions[3 * i + 2] = takeReaction(support.rz, all, asked, o + 2) + 0;
   });
   for (let i = 0; i < frame.nodes.length; i++) {
     for (let r = 0; r < 3; r++) if (!t.free[3 * i + r]) asked[3 * i + r] = 0;
-    const ca = Math.cos(angles[i]!);
-    const sa = Math.sin(angles[i]!);
-    const x = all[3 * i]!;
-    const y = all[3 * i + 1]!;
-    all[3 * i] = x * ca - y * sa;
-    all[3 * i + 1] = x * sa + y * ca;
+    const angle = angles[i]!;
+    if (angle !== 0) {
+      const ca = Math.cos(angle);
+      const sa = Math.sin(angle);
+      const x = all[3 * i]!;
+      const y = all[3 * i + 1]!;
+      all[3 * i] = x * ca - y * sa;
+      all[3 * i + 1] = x * sa + y * ca;
+    }
     if (t.noRotation[i]) all[3 * i + 2] = NaN;
   }
   return reactions;
+}
+
+/** What one direction of a support does to its node, out of what is asked of it there. */
+function takeReaction(restraint: Restraint, all: Float64Array, asked: Float64Array, at: number): number {
+  if (restraint === 'free') return 0;
+  const R = restraint === 'fixed' ? asked[at]! : -restraint * all[at]!;
+  asked[at] = asked[at]! - R;
+  return R;
 }

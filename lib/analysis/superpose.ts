@@ -12,20 +12,24 @@ export function factorsOf(frame: Frame, index: number): Float64Array {
 export function superpose(frame: Frame, cases: readonly ResultState[], index: number): ResultState {
   const combination = frame.combinations[index]!;
   const factors = factorsOf(frame, index);
-  const sum = (pick: (state: ResultState) => Float64Array, length: number): Float64Array => {
-    const total = new Float64Array(length);
-    cases.forEach((state, c) => {
-      const factor = factors[c]!;
-      if (factor === 0) return;
-      const values = pick(state);
-      for (let i = 0; i < length; i++) total[i] = total[i]! + factor * values[i]!;
-    });
-    return total;
-  };
-  const displacements = sum((state) => state.displacements, 3 * frame.nodes.length);
+  const displacements = new Float64Array(3 * frame.nodes.length);
+  const reactions = new Float64Array(3 * frame.supports.length);
+  const endForces = new Float64Array(6 * frame.members.length);
+  for (let c = 0; c < cases.length; c++) {
+    const factor = factors[c]!;
+    if (factor === 0) continue;
+    const state = cases[c]!;
+    addTimes(displacements, factor, state.displacements);
+    addTimes(reactions, factor, state.reactions);
+    addTimes(endForces, factor, state.endForces);
+  }
   // a node without rotation has none here either, whatever the factors
   const first = cases[0];
-  if (first) for (let i = 2; i < displacements.length; i += 3) if (Number.isNaN(first.displacements[i]!)) displacements[i] = NaN;
+  if (first)
+    for (let i = 2; i < displacements.length; i += 3) {
+      const turn = first.displacements[i]!;
+      if (turn !== turn) displacements[i] = NaN;
+    }
   return {
     name: combination.name,
     kind: 'combination',
@@ -36,7 +40,11 @@ export function superpose(frame: Frame, cases: readonly ResultState[], index: nu
     // a combination of cases whose members shear has its own shear
     method: first?.method ?? null,
     displacements,
-    reactions: sum((state) => state.reactions, 3 * frame.supports.length),
-    endForces: sum((state) => state.endForces, 6 * frame.members.length),
+    reactions,
+    endForces,
   };
+}
+
+function addTimes(total: Float64Array, factor: number, values: Float64Array): void {
+  for (let i = 0; i < total.length; i++) total[i] = total[i]! + factor * values[i]!;
 }

@@ -36,11 +36,19 @@ function memberLength(frame: Frame, member: number): number {
   return Math.hypot(b.x_m - a.x_m, b.y_m - a.y_m);
 }
 
+const known = new WeakMap<Frame, readonly Span[]>();
+
 /**
  * The spans of a frame, in the order of their first member; positions run in the direction in which that member is drawn.
- * Members of one span may be drawn in any order and direction.
+ * Members of one span may be drawn in any order and direction. Worked out once a frame.
  */
 export function spansOf(frame: Frame): readonly Span[] {
+  let spans = known.get(frame);
+  if (!spans) known.set(frame, (spans = findSpans(frame)));
+  return spans;
+}
+
+function findSpans(frame: Frame): readonly Span[] {
   const spans: Span[] = [];
   const byWord = new Map<string, number[]>();
   frame.members.forEach((member, i) => {
