@@ -128,6 +128,7 @@ export function outsideTolerance(c: Certificate): string | null {
     return `The equations are not met closely enough: residual ${c.residual.toExponential(1)}, at most 1e-10 is asked for.`;
   if (!(c.equilibrium <= equilibriumTolerance))
     return `Loads and reactions are not in balance: ${c.equilibrium.toExponential(1)} of their size, at most 1e-8 is asked for.`;
+  if (c.second === Infinity) return 'A second, independent analysis finds no such state: another set of slack members, or none.';
   if (c.secondReason === null && !((c.second ?? NaN) <= secondTolerance))
     return `Two independent analyses differ by ${(c.second ?? NaN).toExponential(1)} of the largest value, at most 1e-6 is allowed.`;
   return null;
