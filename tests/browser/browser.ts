@@ -18,6 +18,8 @@ export function openBrowser(): Promise<Browser> {
 export function complaintsOf(page: Page): string[] {
   const complaints: string[] = [];
   page.on('console', (message) => {
+    // Chromium asks for this by itself where a page is left before its own icon is read
+    if (message.location().url.endsWith('/favicon.ico')) return;
     if (message.type() === 'error') complaints.push(message.text());
   });
   page.on('pageerror', (error) => complaints.push(String(error)));
