@@ -52,7 +52,7 @@ export function certificateLines(certificate: Certificate): CertificateLine[] {
     {
       item: 2,
       name: 'Digits left',
-      meaning: `Of the 16 digits a number holds, those that solving leaves right; judged by how unlike the frame’s stiffnesses are (condition ${condition.toPrecision(2)} of K scaled to a unit diagonal).`,
+      meaning: `Of the 16 digits a number holds, those that solving leaves right; judged by how unlike the frame’s stiffnesses are (condition ${Number(condition.toPrecision(2)).toLocaleString('en-GB')} of K scaled to a unit diagonal).`,
       figure: digits,
       bound: 'at least',
       tolerance: leastDigits,
