@@ -16,6 +16,15 @@ export interface Settings {
   readonly imperfections: 'none' | 'EN 1993-1-1' | 'AISC 360';
   readonly stiffnessReduction: 'none' | 'AISC 360';
   readonly shearDeformation: boolean;
+  /** Partial factors of EN 1993-1-1: resistance of cross-sections, and of members to instability. */
+  readonly gammaM0: number;
+  readonly gammaM1: number;
+  /** Of the national annex, as words for the reader: it changes nothing by itself. */
+  readonly nationalAnnex: string | null;
+  /** Interaction factors of EN 1993-1-1 6.3.3. */
+  readonly interaction: 'Annex A' | 'Annex B';
+  /** Where loads across a member act, for lateral-torsional buckling. */
+  readonly loadHeight: 'shear centre' | 'top flange' | 'bottom flange';
 }
 
 export type SettingName = keyof Settings;
@@ -36,6 +45,11 @@ export const settingWords: Readonly<Record<SettingName, string>> = {
   imperfections: 'imperfections',
   stiffnessReduction: 'stiffness reduction',
   shearDeformation: 'shear deformation',
+  gammaM0: 'gamma M0',
+  gammaM1: 'gamma M1',
+  nationalAnnex: 'national annex',
+  interaction: 'interaction',
+  loadHeight: 'load height',
 };
 
 export const defaultSettings: Settings = {
@@ -53,6 +67,11 @@ export const defaultSettings: Settings = {
   imperfections: 'none',
   stiffnessReduction: 'none',
   shearDeformation: false,
+  gammaM0: 1,
+  gammaM1: 1,
+  nationalAnnex: null,
+  interaction: 'Annex B',
+  loadHeight: 'shear centre',
 };
 
 export interface SettingOrigin {

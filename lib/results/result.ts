@@ -125,7 +125,7 @@ export interface Check {
   readonly value: number | null;
   readonly limit: number | null;
   /** What value and limit are in. */
-  readonly quantity: 'stress' | 'displacement' | 'number';
+  readonly quantity: 'stress' | 'displacement' | 'number' | 'force' | 'moment';
   readonly ratio: number | null;
   readonly verdict: Verdict;
   readonly reason: string | null;

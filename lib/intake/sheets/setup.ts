@@ -127,7 +127,18 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
   switch (name) {
     case 'title':
     case 'material':
+    case 'nationalAnnex':
       return set(name, text);
+    case 'gammaM0':
+    case 'gammaM1': {
+      const value = number();
+      if (value === null) return false;
+      return value > 0 ? set(name, value) : tell('not-positive', say.notPositive(settingWords[name], text));
+    }
+    case 'interaction':
+      return set(name, word(['Annex B', 'Annex A']));
+    case 'loadHeight':
+      return set(name, word(['shear centre', 'top flange', 'bottom flange']));
     case 'units':
       return set(name, word(['metric', 'us']));
     case 'analysis':
