@@ -1,4 +1,11 @@
 /** Interleaved rounds: what is compared is measured in turn, so that a drifting machine drifts for both. */
+import { setFlagsFromString } from 'node:v8';
+import { runInNewContext } from 'node:vm';
+
+setFlagsFromString('--expose-gc');
+/** Collects what earlier work left, so that its collection is not counted as later work's. */
+export const sweep = runInNewContext('gc') as () => void;
+
 export interface Contender {
   readonly name: string;
   readonly work: () => Promise<void> | void;
@@ -30,6 +37,7 @@ export function cpuSeconds(): number {
 export async function interleaved(contenders: readonly Contender[], rounds: number, clock: 'cpu' | 'wall'): Promise<number[][]> {
   const now = clock === 'cpu' ? cpuSeconds : (): number => performance.now() / 1e3;
   const times: number[][] = contenders.map(() => []);
+  sweep();
   for (let round = 0; round <= rounds; round += 1) {
     for (const [index, contender] of contenders.entries()) {
       const before = now();
