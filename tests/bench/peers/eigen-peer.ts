@@ -7,6 +7,7 @@ import { createInterface } from 'node:readline';
 import type { Frame } from '@/lib/model/frame';
 import { writeFrames } from './write-frames';
 
+const compiler = 'g++';
 const headers = ['/usr/include/eigen3', '/usr/local/include/eigen3', '/opt/homebrew/include/eigen3'];
 const source = join(process.env['TALLYFRAME_BENCH'] ?? '.', 'peers', 'eigen-peer.cpp');
 
@@ -46,7 +47,9 @@ export class EigenPeers {
     if (eigenMissing() !== null || include === undefined) return null;
     const folder = mkdtempSync(join(tmpdir(), 'tallyframe-eigen-'));
     const program = join(folder, 'eigen-peer');
-    const made = spawnSync('g++', ['-O3', '-DNDEBUG', '-std=c++17', '-I', include, source, '-o', program], { encoding: 'utf8' });
+    const made = spawnSync(compiler, ['-O3', '-DNDEBUG', '-std=c++17', '-I', include, source, '-o', program], {
+      encoding: 'utf8',
+    });
     if (made.status !== 0) {
       rmSync(folder, { recursive: true, force: true });
       throw new Error(`eigen-peer.cpp does not compile: ${made.stderr}`);
