@@ -4,6 +4,8 @@ import type { Check, MemberLine, ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings } from './check-row';
 import { checkCriticalLoadFactor } from './critical-load-factor';
 import { checkDeflection } from './deflection';
+import { checkByCode, refuseMember } from './design-code/code-checks';
+import { designCodeOf } from './design-code/design-codes';
 import { checkDisplacement } from './displacement';
 import { spansOf, type Span } from './spans';
 import { checkSpread } from './spread';
@@ -23,7 +25,7 @@ export interface FrameChecks {
 }
 
 /**
- * Every check of one frame (engine.md, "Checks"): elastic stress of members, stability of spans and the critical load factor in
+ * Every check of one frame (engine.md, "Checks"): elastic stress of members, stability of spans (or a design code's clauses) and the critical load factor in
  * strength combinations; deflection, sway, displacement and spread in service combinations. Order of rows: stress by member,
  * stability by span, critical load factor, then movements.
  *
@@ -73,14 +75,25 @@ function checkStrength(
   findings: Findings,
 ): void {
   const screened = settings.stability === 'screened' ? spans : [];
+  const code = designCodeOf(settings.strengthCheck);
   const none =
-    settings.strengthCheck !== 'elastic stress'
-      ? `strength check ${settings.strengthCheck} is not available`
-      : states.length === 0
-        ? others
-          ? 'no strength combinations'
-          : 'no combinations'
+    states.length === 0
+      ? others
+        ? 'no strength combinations'
+        : 'no combinations'
+      : settings.strengthCheck !== 'elastic stress' && code === null
+        ? `strength check ${settings.strengthCheck} is not available`
         : null;
+  if (settings.strengthCheck !== 'elastic stress') {
+    if (code === null || none !== null)
+      for (const span of spans) refuseMember(span, settings.strengthCheck, states, none ?? 'not available', findings);
+    else {
+      checkByCode(frame, settings, code, spans, states, (c, member) => lineOf(states[c]!, member), findings);
+      // a code works on factored loads: the stress factor has no part in it
+      checkCriticalLoadFactor({ ...settings, stressFactor: 1 }, states, findings);
+    }
+    return;
+  }
   if (none) {
     frame.members.forEach((_, i) => stressNotChecked(frame, i, none, findings));
     for (const span of screened) keepGoverning(findings, [notCheckedRow(stabilitySubject(span), null, none)]);
