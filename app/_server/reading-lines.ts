@@ -2,7 +2,7 @@ import 'server-only';
 import type { DefaultLine, ProblemLine, SheetLine } from '@/components/intake/intake-data';
 import { settingText } from '@/lib/changes/setting-text';
 import type { SheetRead } from '@/lib/intake/intake';
-import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
+import { settingWords, statedSettings, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem, Severity } from '@/lib/problems/problem';
 
 /** Frames named at one problem; the rest are counted. */
@@ -57,7 +57,7 @@ export function sheetLines(sheets: readonly SheetRead[], problems: readonly Prob
 
 /** What the Setup sheet is silent about, and what was taken. */
 export function defaultLines(settings: Settings, origins: SettingOrigins): DefaultLine[] {
-  return (Object.keys(settingWords) as SettingName[]).flatMap((name) => {
+  return statedSettings(settings, origins).flatMap((name) => {
     const { source } = origins[name];
     const value = settingText(name, settings);
     return source === 'sheet' || value === null ? [] : [{ setting: settingWords[name], value, source }];

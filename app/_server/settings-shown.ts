@@ -4,11 +4,11 @@ import type { SettingShown } from '@/components/changes/setting-table';
 import { originWords } from '@/lib/changes/origin-words';
 import { settingChoices } from '@/lib/changes/setting-choices';
 import { settingText, typedSetting } from '@/lib/changes/setting-text';
-import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
+import { settingWords, statedSettings, type SettingOrigins, type Settings } from '@/lib/model/settings';
 
 /** Every setting with its value and where that comes from, in the order of the sheet's contract. */
 export function settingsShown(settings: Settings, origins: SettingOrigins): SettingShown[] {
-  return (Object.keys(settingWords) as SettingName[]).map((name) => ({
+  return statedSettings(settings, origins).map((name) => ({
     setting: settingWords[name],
     value: settingText(name, settings) ?? 'none given',
     source: originWords(origins[name]),

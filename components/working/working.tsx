@@ -2,6 +2,7 @@ import { Fragment, type ReactNode } from 'react';
 import type { Verdict } from '@/lib/results/result';
 import { RatioText } from '../ui/ratio-text';
 import { VerdictMark } from '../ui/verdict-mark';
+import { Typeset } from './typeset';
 import type { WorkingLine, WorkingPart } from '@/lib/checks/working-parts';
 
 interface WorkingProps {
@@ -17,10 +18,13 @@ interface WorkingProps {
   readonly reason?: string | null;
   /** Ends with the ratio and its verdict; off where the lines already do. */
   readonly conclude?: boolean;
+  /** Set as mathematics: the clauses of a design code. */
+  readonly typeset?: boolean;
 }
 
 /** The calculation of one check, as an engineer would set it out: what, formula, numbers put in, limit, ratio. */
-export function Working({ title, reference, lines, ratio, verdict, nearLimit, reason, conclude = true }: WorkingProps) {
+export function Working(props: WorkingProps) {
+  const { title, reference, lines, ratio, verdict, nearLimit, reason, conclude = true, typeset = false } = props;
   return (
     <section className="working" aria-label={`Working: ${title}`}>
       <div className="zone-head">
@@ -32,7 +36,13 @@ export function Working({ title, reference, lines, ratio, verdict, nearLimit, re
           <div key={i} className="working-line">
             <dt>{line.what}</dt>
             <dd>
-              <Parts parts={line.parts} />
+              {typeset ? (
+                <Typeset parts={line.parts}>
+                  <Parts parts={line.parts} />
+                </Typeset>
+              ) : (
+                <Parts parts={line.parts} />
+              )}
               {line.source && <span className="working-source"> {line.source}</span>}
             </dd>
           </div>

@@ -42,6 +42,22 @@ const offered: readonly SettingChoice[] = [
     'What members are checked against in strength combinations.',
   ),
   number('stressFactor', 'above 0, at most 1', 'Allowable stress ÷ yield stress. With factored loads it is usually 0.9 to 1.'),
+  number(
+    'gammaM0',
+    'above 0, like 1.0',
+    'EN 1993-1-1: partial factor for the resistance of cross-sections; the national annex gives it.',
+  ),
+  number(
+    'gammaM1',
+    'above 0, like 1.0',
+    'EN 1993-1-1: partial factor for members against buckling; the national annex gives it.',
+  ),
+  choice('interaction', ['Annex B', 'Annex A'], 'EN 1993-1-1: which annex gives the interaction factors of 6.3.3.'),
+  choice(
+    'loadHeight',
+    ['shear centre', 'top flange', 'bottom flange'],
+    'Where loads across a member act, for lateral-torsional buckling under a design code. On the flange that is pressed they push it over.',
+  ),
   number('nearLimit', 'above 0, at most 1', 'From this ratio on a check is near. It changes verdicts, not figures.'),
   choice(
     'stability',

@@ -13,9 +13,12 @@ export function settingText(name: SettingName, settings: Settings): string | nul
   switch (name) {
     case 'title':
     case 'material':
+    case 'nationalAnnex':
       return value === null ? null : String(value);
     case 'stressFactor':
     case 'nearLimit':
+    case 'gammaM0':
+    case 'gammaM1':
       // never two figures where the third would tell them apart
       return typeof value === 'number' ? (Number(value.toFixed(2)) === value ? value.toFixed(2) : String(value)) : null;
     case 'deflectionRatio':

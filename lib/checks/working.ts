@@ -1,4 +1,5 @@
 import type { Check } from '@/lib/results/result';
+import { codeWorking } from './design-code/design-codes';
 import { criticalLoadFactorWorking, movementWorking } from './working-movement';
 import { fraction, printer, symbol, text, type Printer, type WorkingFormat, type WorkingLine } from './working-parts';
 import { stabilityWorking } from './working-stability';
@@ -21,6 +22,8 @@ export function workingOf(check: Check, format: WorkingFormat): readonly Working
 function linesOf(check: Check, print: Printer): readonly WorkingLine[] {
   if (check.check === 'stability') return check.inputs.N === undefined ? [] : stabilityWorking(check, print);
   if (check.check === 'critical load factor') return check.inputs.f === undefined ? [] : criticalLoadFactorWorking(check, print);
+  const clause = codeWorking(check, print);
+  if (clause !== null) return clause;
   if (check.verdict === 'not checked') return [];
   return check.quantity === 'stress' ? stressWorking(check, print) : movementWorking(check, print);
 }

@@ -82,3 +82,22 @@ export interface SettingOrigin {
   readonly changedBy?: string;
 }
 export type SettingOrigins = Readonly<Record<SettingName, SettingOrigin>>;
+
+/** Settings that only a design code reads. */
+const ofDesignCodes: ReadonlySet<SettingName> = new Set(['gammaM0', 'gammaM1', 'nationalAnnex', 'interaction', 'loadHeight']);
+const ofEurocode: ReadonlySet<SettingName> = new Set(['gammaM0', 'gammaM1', 'nationalAnnex', 'interaction']);
+
+/** Whether a setting has a part in the results under the strength check chosen. */
+export function settingMatters(name: SettingName, settings: Settings): boolean {
+  if (settings.strengthCheck === 'EN 1993-1-1') return true;
+  return !(settings.strengthCheck === 'elastic stress' ? ofDesignCodes : ofEurocode).has(name);
+}
+
+/** The settings that cover, screens and results list, in order: those with a part in the results, and any that was given. */
+export function statedSettings(settings: Settings, origins: SettingOrigins): readonly SettingName[] {
+  const given = (name: SettingName): boolean => (origins[name] as SettingOrigin | undefined)?.source !== 'default';
+  return (Object.keys(settingWords) as SettingName[]).filter(
+    // a revision kept from before a setting was known has no word of it
+    (name) => settings[name] !== undefined && (settingMatters(name, settings) || given(name)),
+  );
+}

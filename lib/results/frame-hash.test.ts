@@ -21,7 +21,8 @@ describe('the content address of a frame', () => {
 
   it('is the SHA-256 of the canonical JSON of engine, model and settings', () => {
     const { id: _id, title: _title, group: _group, count: _count, note: _note, ...model } = frame;
-    const { title: _heading, material: _material, ...settings } = defaultSettings;
+    const { title: _heading, material: _material, ...elastic } = defaultSettings;
+    const { gammaM0: _0, gammaM1: _1, nationalAnnex: _annex, interaction: _factors, loadHeight: _height, ...settings } = elastic;
     const text = canonicalJson({ model, settings, engine: engineVersion });
     expect(address).toBe(createHash('sha256').update(text).digest('hex'));
     expect(frameHash({ ...frame }, { ...defaultSettings })).toBe(address);
@@ -35,6 +36,14 @@ describe('the content address of a frame', () => {
     ['what the sheets leave unchecked', cantileverFrame('F1', { notChecked: ['no combinations'] })],
   ])('changes with %s', (_what, changed) => {
     expect(frameHash(changed, defaultSettings)).not.toBe(address);
+  });
+
+  it('takes the partial factors in only where EN 1993-1-1 reads them', () => {
+    const eurocode = { ...defaultSettings, strengthCheck: 'EN 1993-1-1' as const };
+    const factored = { gammaM1: 1.1, interaction: 'Annex A' as const };
+    expect(frameHash(frame, { ...defaultSettings, ...factored })).toBe(address);
+    expect(frameHash(frame, { ...eurocode, ...factored })).not.toBe(frameHash(frame, eurocode));
+    expect(frameHash(frame, { ...eurocode, nationalAnnex: 'NA' })).toBe(frameHash(frame, eurocode));
   });
 
   it.each([

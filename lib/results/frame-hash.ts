@@ -1,7 +1,7 @@
 /** Content address of a frame: what decides its results, and nothing else. */
 import { createHash } from 'node:crypto';
 import type { Frame } from '@/lib/model/frame';
-import type { Settings } from '@/lib/model/settings';
+import { settingMatters, type SettingName, type Settings } from '@/lib/model/settings';
 import { engineVersion } from '@/lib/analysis/engine-version';
 
 /**
@@ -16,9 +16,11 @@ export function frameHash(frame: Frame, settings: Settings): string {
     .digest('hex');
 }
 
-/** Title and default material say nothing more about a resolved frame. */
-function matterJson({ title: _title, material: _material, ...matter }: Settings): string {
-  return canonicalJson(matter);
+/** Title and default material say nothing more about a resolved frame, nor do a design code's settings without that code. */
+function matterJson(settings: Settings): string {
+  const { title: _title, material: _material, nationalAnnex: _annex, ...rest } = settings;
+  const matter = Object.entries(rest).filter(([name]) => settingMatters(name as SettingName, settings));
+  return canonicalJson(Object.fromEntries(matter));
 }
 
 /** Canonical JSON of a model; what frames of a batch share (sections, cases, combinations …) is written once for all. */

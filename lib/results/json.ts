@@ -1,7 +1,7 @@
 /** The published results file (lib/results/schema.ts), written frame by frame: the same input gives the same bytes. */
 import { extremesOf } from '@/lib/results/extremes-of';
 import type { Frame } from '@/lib/model/frame';
-import { settingWords, type SettingName, type SettingOrigins, type Settings } from '@/lib/model/settings';
+import { settingWords, statedSettings, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
 import { checkedWords } from '@/lib/reports/cautions';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
@@ -145,9 +145,8 @@ function checkJson(frameId: string, check: Check): FrameResult['checks'][number]
 
 /** Every setting in the words of the Setup sheet, with where it came from. */
 function settingsJson(settings: Settings, origins: SettingOrigins): ResultsJson['settings'] {
-  const names = Object.keys(settingWords) as SettingName[];
   return Object.fromEntries(
-    names.map((name) => {
+    statedSettings(settings, origins).map((name) => {
       const value = settings[name];
       const { source } = origins[name];
       const word = typeof value === 'boolean' ? (value ? 'yes' : 'no') : value;

@@ -1,5 +1,5 @@
 /** The first sheet: what was analysed, by what, under which assumptions, and what must not be concluded from it. */
-import { settingWords, type SettingName } from '@/lib/model/settings';
+import { settingWords, statedSettings } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
 import { methodWords } from '@/lib/reports/method-words';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
@@ -58,7 +58,7 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
   for (const line of sign.slice(1)) yield ['', line];
   yield [];
   yield ['settings', '', 'given by'];
-  for (const name of Object.keys(settingWords) as SettingName[]) {
+  for (const name of statedSettings(settings, source.origins)) {
     const value = settings[name];
     const origin = source.origins[name];
     yield [

@@ -11,6 +11,7 @@ import { Empty, Notice } from '@/components/ui/notice';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { Columns, Zone } from '@/components/ui/sheet';
 import type { FrameDetail } from '@/app/_server/frame-detail';
+import { isClause } from '@/lib/checks/design-code/clause-name';
 import { api, pages } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 import { ChecksTable } from './checks-table';
@@ -130,6 +131,7 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
             verdict={check.verdict}
             nearLimit={nearLimit}
             reason={check.reason}
+            typeset={isClause(check.check)}
           />
         </Zone>
       )}
