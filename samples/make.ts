@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { bracedBents } from './braced-bents';
 import { brackets } from './brackets';
 import { canopiesUs } from './canopies-us';
+import { codeHalls, codeSheds } from './design-codes';
 import { directAnalysis } from './direct-analysis';
 import { familySamples } from './families';
 import { messy, mended, messyOnes } from './messy';
@@ -23,6 +24,8 @@ export async function makeSamples(folder: string): Promise<void> {
   await writeWorkbook(folder, 'slender-sheds-24.xlsx', slenderSheds());
   await writeWorkbook(folder, 'braced-bents-12.xlsx', bracedBents());
   await writeWorkbook(folder, 'direct-analysis-us-9.xlsx', directAnalysis());
+  await writeWorkbook(folder, 'code-sheds-24.xlsx', codeSheds());
+  await writeWorkbook(folder, 'code-halls-us-9.xlsx', codeHalls());
   writeSemicolonCsv(join(folder, 'walkways-csv'), walkways());
   await writeWorkbook(folder, 'messy.xlsx', messy());
   await writeWorkbook(folder, 'messy-mended.xlsx', mended());

@@ -210,13 +210,18 @@ export function messyOnes(): [string, SampleSheet[]][] {
         }
       : sheet,
   );
-  const code = good.map((sheet) =>
-    sheet.name === 'Setup' ? { ...sheet, rows: [...sheet.rows, ['strength check', 'EN 1993-1-1']] } : sheet,
+  const tapered = good.map((sheet) =>
+    sheet.name === 'Members'
+      ? {
+          ...sheet,
+          rows: sheet.rows.map((cells, index) => [...cells, index === 0 ? 'end section' : index === 1 ? 'IPE 200' : null]),
+        }
+      : sheet,
   );
   return [
     ['missing-sheet', without('Supports')],
     ['missing-column', noCoordinate],
     ['too-large', wide],
-    ['not-supported', code],
+    ['not-supported', tapered],
   ];
 }

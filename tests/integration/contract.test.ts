@@ -147,14 +147,11 @@ describe('a workbook by another writer, through to the published JSON', () => {
     expect(frame.results[0]?.reactions[0]?.mz).toBeCloseTo(40e3, 6);
   });
 
-  it('refuses a design code that it does not check at its cell instead of checking elastic stress', async () => {
-    const intake = await read(cantilever({ Setup: [['setting', 'value'], ['strength check', 'EN 1993-1-1']] })); // prettier-ignore
-    expect(intake.frames.every((each) => each.frame === null)).toBe(true);
-    expect(intake.problems.find((each) => each.code === 'not-supported')).toMatchObject({
-      sheet: 'Setup',
-      cell: 'B2',
-      severity: 'error',
-    });
+  it('checks by the design code that is asked for, never by elastic stress instead', async () => {
+    const frame = await solve(cantilever({ Setup: [['setting', 'value'], ['strength check', 'EN 1993-1-1']] })); // prettier-ignore
+    const names = frame.checks.filter((each) => each.subject === 'AB').map((each) => each.check);
+    expect(names).not.toContain('normal stress');
+    expect(names.some((each) => /^(EN 1993-1-1|6\.|5\.5)/.test(each))).toBe(true);
   });
 
   it('expands ± to two combinations', async () => {

@@ -81,13 +81,38 @@ describe('Setup', () => {
     expect(readSheets(withSetup(['deflection ratio', typed])).settings.deflectionRatio).toBe(n);
   });
 
-  test.each([
-    'strength check|AISC 360-22 LRFD', 'strength check|aisc 360-22 asd', 'strength check|EN 1993-1-1', 'combination set|EN 1990',
-  ])('%s is refused and stops every frame', (text) => {
+  test.each(['combination set|EN 1990'])('%s is refused and stops every frame', (text) => {
     const intake = readSheets(withSetup(text.split('|')));
     expect(lines(intake)).toEqual(['error not-supported Setup!B3 –']);
     expect(intake.frames.map((f) => f.frame)).toEqual([null, null]);
-  }); // prettier-ignore
+  });
+
+  test.each([
+    ['strength check|AISC 360-22 LRFD', { strengthCheck: 'AISC 360-22 LRFD' }],
+    ['strength check|aisc 360-22 asd', { strengthCheck: 'AISC 360-22 ASD' }],
+    ['strength check|EN 1993-1-1', { strengthCheck: 'EN 1993-1-1' }],
+    ['gamma M0|1.05', { gammaM0: 1.05 }],
+    ['Gamma_M1|1,1', { gammaM1: 1.1 }],
+    ['national annex|DIN EN 1993-1-1/NA', { nationalAnnex: 'DIN EN 1993-1-1/NA' }],
+    ['interaction|annex a', { interaction: 'Annex A' }],
+    ['load height|Top flange', { loadHeight: 'top flange' }],
+  ])('%s is read as a setting of design codes', (text, expected) => {
+    const intake = readSheets(withSetup(text.split('|')));
+    expect(intake.settings).toMatchObject(expected);
+    expect(intake.frames.every((f) => f.frame !== null)).toBe(true);
+  });
+
+  test.each([
+    ['strength check|EN 1993-1-3', 'unknown-word'],
+    ['gamma M0|0', 'not-positive'],
+    ['gamma M1|-1', 'not-positive'],
+    ['interaction|Annex C', 'unknown-word'],
+    ['load height|on top', 'unknown-word'],
+  ])('%s is refused at its cell and stops every frame', (text, code) => {
+    const intake = readSheets(withSetup(text.split('|')));
+    expect(lines(intake).filter((each) => each.startsWith('error'))).toEqual([`error ${code} Setup!B3 –`]);
+    expect(intake.frames.map((f) => f.frame)).toEqual([null, null]);
+  });
 
   test.each([
     ['analysis|Second-order', { analysis: 'second order' }],

@@ -143,11 +143,8 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
       return set(name, word(['metric', 'us']));
     case 'analysis':
       return set(name, word(['first order', 'second order']));
-    case 'strengthCheck': {
-      const found = word(['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1']);
-      if (found === null || found === 'elastic stress') return set(name, found);
-      return tell('not-supported', say.settingNotSupported(settingWords[name], found));
-    }
+    case 'strengthCheck':
+      return set(name, word(['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1']));
     case 'stability':
       return set(name, word(['screened', 'by others']));
     case 'imperfections':
