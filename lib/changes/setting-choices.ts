@@ -1,4 +1,5 @@
 /** The settings that are chosen on screen, each with its choices and a plain word on what it does. */
+import { ruleSetNames } from '@/lib/combinations/read-rule-set';
 import { readSetting } from '@/lib/changes/setting-value';
 import type { SettingName } from '@/lib/model/settings';
 
@@ -24,6 +25,11 @@ const offered: readonly SettingChoice[] = [
     'analysis',
     ['first order', 'second order'],
     'Second order finds equilibrium on the deformed shape: what axial forces add to sway and to bending is in the results of every combination.',
+  ),
+  number(
+    'combinationSet',
+    `as listed, ${ruleSetNames.join(', ')}; behind a comma, as in “EN 1990 6.10, live B, snow to 1000 m”, what differs from the largest recommended factors`,
+    'Combinations made from the kinds of the load cases by a published rule set, beside those that are listed.',
   ),
   choice(
     'imperfections',

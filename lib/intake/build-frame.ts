@@ -1,3 +1,4 @@
+import { readRuleSet } from '@/lib/combinations/read-rule-set';
 import type { Batch, FrameEntry } from '@/lib/intake/batch';
 import { type Draft, newDraft } from '@/lib/intake/draft';
 import { checkGeometry } from '@/lib/intake/geometry/check-geometry';
@@ -7,6 +8,7 @@ import { RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { SheetName } from '@/lib/intake/sheet-definitions';
 import { tellAnalysisNeeds } from '@/lib/intake/sheets/analysis-needs';
 import { Combinations } from '@/lib/intake/sheets/combinations';
+import { type ChosenSet, GeneratedCombinations } from '@/lib/intake/sheets/generated-combinations';
 import { Limits } from '@/lib/intake/sheets/limits';
 import { readMemberLoads } from '@/lib/intake/sheets/member-loads';
 import { readMembers } from '@/lib/intake/sheets/members';
@@ -14,6 +16,7 @@ import { readNodeLoads } from '@/lib/intake/sheets/node-loads';
 import { readNodes } from '@/lib/intake/sheets/nodes';
 import { readSettlements } from '@/lib/intake/sheets/settlements';
 import { readSupports, zerosAndOnes } from '@/lib/intake/sheets/supports';
+import { absentPlace } from '@/lib/intake/table';
 import type { Frame, Material, Section } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
@@ -38,6 +41,7 @@ export class FrameBuilder {
       reader,
       problems,
       batch.settings.imperfections !== 'none',
+      new GeneratedCombinations(chosenSet(batch), problems),
     );
     this.limits = new Limits(tables.get('Limits'), batch, batch.settings, batch.origins, this.combinations, reader, problems);
     this.refusedSupports = zerosAndOnes(tables.get('Supports'));
@@ -99,6 +103,14 @@ export class FrameBuilder {
     this.combinations.tellUnfit(frames);
     this.limits.tellUnmatched(frames);
   }
+}
+
+/** The rule set that Setup or the office chose; null = only combinations that are listed. */
+function chosenSet({ settings, settingPlaces }: Batch): ChosenSet | null {
+  if (settings.combinationSet === null) return null;
+  const { set } = readRuleSet(settings.combinationSet);
+  if (!set) throw new RangeError(`Expected a combination set that was read, got ${settings.combinationSet}`);
+  return { set, place: settingPlaces.get('combinationSet') ?? absentPlace('Setup') };
 }
 
 /** A material without density where a case has self-weight. */

@@ -1,3 +1,5 @@
+import { readRuleSet } from '@/lib/combinations/read-rule-set';
+import type { RuleSet } from '@/lib/combinations/rule-set';
 import type { Batch } from '@/lib/intake/batch';
 import type { Place } from '@/lib/intake/problem-list';
 import { absentPlace, headingPlace, partPlace, placeOf, rawCell, type Row } from '@/lib/intake/table';
@@ -12,7 +14,13 @@ export class BatchWarnings {
   private readonly judged = new Set<readonly Combination[]>();
   private readonly stressTold = new Set<string>();
 
-  constructor(private readonly batch: Batch) {}
+  /** Of the batch's rule set; null = none is chosen. */
+  private readonly setLevel: RuleSet['level'] | null;
+
+  constructor(private readonly batch: Batch) {
+    const { combinationSet } = batch.settings;
+    this.setLevel = combinationSet === null ? null : (readRuleSet(combinationSet).set?.level ?? null);
+  }
 
   /** Looks at one frame that is read. @param casesSound false where a row of its load cases is wrong (told) */
   look(frame: Frame, casesSound: boolean): void {
@@ -53,9 +61,10 @@ export class BatchWarnings {
       .filter((term) => frame.cases[term.case]?.selfWeight)
       .map((term) => frame.cases[term.case]?.name ?? '');
     const row = this.rowOf(combination);
-    if (heavy.length < 2 || !row) return;
+    const place = row ? placeOf(row, 'combination') : this.batch.settingPlaces.get('combinationSet');
+    if (heavy.length < 2 || !place) return;
     const message = say.twoSelfWeights(combination.name, heavy);
-    this.batch.problems.add(placeOf(row, 'combination'), { code: 'no-self-weight', message }, null);
+    this.batch.problems.add(place, { code: 'no-self-weight', message }, null);
   }
 
   private stressFactor(combination: Combination): void {
@@ -67,7 +76,13 @@ export class BatchWarnings {
     const plain = f >= 0.9 && combination.terms.length > 0 && largest <= 1;
     if (!factored && !plain) return;
     const row = this.rowOf(combination);
-    const place: Place | null = settingPlaces.get('stressFactor') ?? (row ? placeOf(row, 'combination') : null);
+    // one of a rule set may hold small factors only and still be of factored loads: the set says which it is
+    if (!row && this.setLevel !== null && (factored ? this.setLevel !== 'factored' : this.setLevel !== 'allowable')) return;
+    const place: Place | null =
+      settingPlaces.get('stressFactor') ??
+      (row ? placeOf(row, 'combination') : null) ??
+      settingPlaces.get('combinationSet') ??
+      null;
     const key = factored ? 'factored' : 'plain';
     if (!place || this.stressTold.has(key)) return;
     this.stressTold.add(key);

@@ -261,6 +261,17 @@ export const combinationNameTaken = (name: string): string =>
   `the signs of ± give a combination ${name}, and one is listed by that name`;
 export const directionNameTaken = (name: string): string =>
   `with imperfections, ${name} is the name of a direction of the strength combination before the arrow. Name this one otherwise`;
+export const tooManyCombinations = (set: string, count: number): string =>
+  `${set} would make ${count.toLocaleString('en-GB')} combinations of one frame’s cases, and 1,000 are the most. Give cases that never act together the same word in alternative, write “, kinds together” after the set’s name where all cases of a kind act at once, or list combinations`;
+export const setTakes = (set: string, words: readonly string[]): string => `${set}: ${words.join('; ')}`;
+export const listedInstead = (name: string): string =>
+  `the set makes a combination ${name} too; this listed one stands in its place`;
+export const noRuleForKind = (name: string, kind: string, set: string): string =>
+  `case ${name} is in no generated combination: ${set} has no rule for kind ${kind}`;
+export const setOfAnotherLevel = (set: string, check: string, needs: 'allowable' | 'factored'): string =>
+  needs === 'factored'
+    ? `${set} combines unfactored loads, and ${check} checks resistance against factored ones. Take a set of factored loads`
+    : `${set} combines factored loads, and ${check} checks against allowable strength: safety is counted twice`;
 export const noSelfWeight = (all: boolean): string =>
   all ? 'no load case carries self-weight. Give it in self weight, usually 1 in the dead case' : 'no load case of these frames carries self-weight'; // prettier-ignore
 export const twoSelfWeights = (combination: string, cases: readonly string[]): string =>

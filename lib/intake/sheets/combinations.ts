@@ -6,6 +6,7 @@ import type { Entry, ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader, type Reading } from '@/lib/intake/reader';
 import { RowsByFrame } from '@/lib/intake/rows-by-frame';
 import { CombinationTerms, type Term } from '@/lib/intake/sheets/combination-terms';
+import type { GeneratedCombinations } from '@/lib/intake/sheets/generated-combinations';
 import type { FrameCases, LoadCases } from '@/lib/intake/sheets/load-cases';
 import { placeAt, type Row, type Table } from '@/lib/intake/table';
 import type { Combination, Purpose } from '@/lib/model/frame';
@@ -53,6 +54,7 @@ export class Combinations {
     private readonly problems: ProblemList,
     /** With imperfections a strength combination has two results, `C1 →` and `C1 ←`. */
     private readonly leans: boolean,
+    private readonly generated: GeneratedCombinations,
   ) {
     this.rows = new RowsByFrame('Combinations', table, known, reader);
     this.places = new Map((table?.rows ?? []).map((row, i) => [row, i]));
@@ -121,8 +123,16 @@ export class Combinations {
         list.push(each);
       }
     }
+    const made = this.generated.beside(list, cases, entry.id, (name) => {
+      const row = taken.get(idKey(name));
+      const fault = { code: 'default-used', message: say.listedInstead(name) } as const;
+      if (row) this.reader.tell(row, 'combination', fault, { ...forNobody, frame: entry.id });
+    });
+    list.push(...made.list);
+    notChecked.push(...made.notChecked);
+    for (const { name, purpose } of made.list) this.names.set(idKey(name), { base: name, purpose });
     if (this.leans) this.tellDirections(list, taken, entry);
-    if (groups.size === 0) notChecked.push('no combinations');
+    if (groups.size === 0 && list.length === 0) notChecked.push('no combinations');
     return { list, notChecked };
   }
 

@@ -81,12 +81,6 @@ describe('Setup', () => {
     expect(readSheets(withSetup(['deflection ratio', typed])).settings.deflectionRatio).toBe(n);
   });
 
-  test.each(['combination set|EN 1990'])('%s is refused and stops every frame', (text) => {
-    const intake = readSheets(withSetup(text.split('|')));
-    expect(lines(intake)).toEqual(['error not-supported Setup!B3 –']);
-    expect(intake.frames.map((f) => f.frame)).toEqual([null, null]);
-  });
-
   test.each([
     ['strength check|AISC 360-22 LRFD', { strengthCheck: 'AISC 360-22 LRFD' }],
     ['strength check|aisc 360-22 asd', { strengthCheck: 'AISC 360-22 ASD' }],
@@ -137,7 +131,19 @@ describe('Setup', () => {
     expect(lines(readSheets(withSetup(...chosen, ['analysis', 'second order'])))).toEqual([]);
   });
 
+  test.each([
+    ['EN 1990 6.10', 'EN 1990 6.10'],
+    ['en 1990', 'EN 1990 6.10'],
+    ['EN-1990 6.10a/b, LIVE b, snow to 1000 m', 'EN 1990 6.10a/b, live B, snow to 1000 m'],
+    ['ASCE 7-22 LRFD', 'ASCE 7-22 LRFD'],
+    ['asce 7-16 asd; kinds together', 'ASCE 7-16 ASD, kinds together'],
+  ])('the combination set %s is read as %s', (typed, name) => {
+    expect(readSheets(withSetup(['combination set', typed])).settings.combinationSet).toBe(name);
+  });
+
   test.each<[string, TestCell[][], string[]]>([
+    ['a combination set that nobody published', [['combination set', 'EN 1991']], ['error unknown-word Setup!B3 –']],
+    ['a set with a word that it does not know', [['combination set', 'EN 1990 6.10, live Z']], ['error unknown-word Setup!B3 –']],
     ['a value that is none', [['analysis', 'third order']], ['error unknown-word Setup!B3 –']],
     ['a stress factor of zero', [['stress factor', 0]], ['error not-positive Setup!B3 –']],
     ['a stress factor above 1', [['stress factor', 1.5]], ['error out-of-range Setup!B3 –']],

@@ -1,8 +1,9 @@
+import { readRuleSet } from '@/lib/combinations/read-rule-set';
 import { nearest } from '@/lib/intake/distance';
 import { idText } from '@/lib/intake/ids';
 import type { Place, ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
-import { placeOf, type Row, type Table } from '@/lib/intake/table';
+import { absentPlace, placeOf, type Row, type Table } from '@/lib/intake/table';
 import { meansOff, ratioText, readYesNo, wordKey } from '@/lib/intake/words';
 import { cellAddress } from '@/lib/intake/files/cell-address';
 import {
@@ -58,6 +59,7 @@ export function readSetup(table: Table | undefined, office: Partial<Settings>, r
   const origins = Object.fromEntries(names.map((name) => [name, originOf(name, given.get(name), office)])) as SettingOrigins;
   const settings: Settings = { ...defaultSettings, ...definedOnly(office), ...values };
   tellFirstOrder(settings, origins, places, problems);
+  tellLevel(settings, places, problems);
   return { settings, origins, places };
 }
 
@@ -74,6 +76,19 @@ function tellFirstOrder(
     if (!place || settings[name] === 'none') continue;
     problems.add(place, { code: 'default-used', message: say.firstOrderTaken(settingWords[name]) }, null);
   }
+}
+
+/** A design code with combinations of another level of safety: factored loads it needs and has not, or has and counts twice. */
+function tellLevel(settings: Settings, places: ReadonlyMap<SettingName, Place>, problems: ProblemList): void {
+  const { strengthCheck, combinationSet } = settings;
+  if (combinationSet === null || strengthCheck === 'elastic stress') return;
+  const level = readRuleSet(combinationSet).set?.level ?? 'factored';
+  const needs = strengthCheck === 'AISC 360-22 ASD' ? 'allowable' : 'factored';
+  if (level === needs) return;
+  const place = places.get('combinationSet') ?? places.get('strengthCheck') ?? absentPlace('Setup');
+  const message = say.setOfAnotherLevel(combinationSet, strengthCheck, needs);
+  if (needs === 'factored') problems.add(place, { code: 'conflicting-row', message, stopsAll: true }, null);
+  else problems.add(place, { code: 'stress-factor', message }, null);
 }
 
 const valueText = (row: Row): string =>
@@ -95,7 +110,7 @@ function originOf(name: SettingName, row: Row | undefined, office: Partial<Setti
 
 /** Reads one value; false where it is blank (silent) or wrong (told). */
 function readValue(name: SettingName, row: Row, values: Values, reader: Reader, problems: ProblemList): boolean {
-  const tell = (code: 'unknown-word' | 'not-supported' | 'not-positive' | 'out-of-range', message: string): false => {
+  const tell = (code: 'unknown-word' | 'not-positive' | 'out-of-range', message: string): false => {
     problems.add(placeOf(row, 'value'), { code, message, stopsAll: true }, null);
     return false;
   };
@@ -158,7 +173,8 @@ function readValue(name: SettingName, row: Row, values: Values, reader: Reader, 
     }
     case 'combinationSet':
       if (!meansOff(text) && wordKey(text) !== 'aslisted') {
-        return tell('not-supported', say.settingNotSupported(settingWords[name], text));
+        const read = readRuleSet(text);
+        return read.set ? set(name, read.set.name) : tell('unknown-word', read.wrong);
       }
       values.combinationSet = null;
       return true;

@@ -52,6 +52,7 @@ export function templateSheets(system: System): readonly TemplateSheet[] {
         ['deflection ratio', 200],
         ['sway ratio', 150],
         ['stability', 'screened'],
+        ['combination set', 'as listed'],
         ['imperfections', 'none'],
         ['stiffness reduction', 'none'],
         ['shear deformation', 'no'],

@@ -1,4 +1,5 @@
 import ExcelJS from 'exceljs';
+import { ruleSetNames } from '@/lib/combinations/read-rule-set';
 import { templateSheets, type TemplateColumn, type TemplateSheet } from '@/lib/reports/template/template-sheets';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { System } from '@/lib/units/quantity';
@@ -13,6 +14,7 @@ const settingChoices: Readonly<Record<string, readonly string[]>> = {
   analysis: ['first order', 'second order'],
   'strength check': ['elastic stress', 'AISC 360-22 LRFD', 'AISC 360-22 ASD', 'EN 1993-1-1'],
   stability: ['screened', 'by others'],
+  'combination set': ['as listed', ...ruleSetNames],
   imperfections: ['none', 'EN 1993-1-1', 'AISC 360'],
   'stiffness reduction': ['none', 'AISC 360'],
   'shear deformation': ['no', 'yes'],
@@ -24,6 +26,8 @@ const settingNotes: Readonly<Record<string, string>> = {
     'second order: every combination in equilibrium on its deformed shape, P-Δ and P-δ. Load cases alone stay first order.',
   imperfections: 'Strength combinations are analysed leaning right and left, as two results: C1 → and C1 ←.',
   'stiffness reduction': 'Of strength combinations: 0.8 on EA and EI, τb on EI where it applies (direct analysis).',
+  'combination set':
+    'as listed: those of Combinations only. A set makes combinations from the kinds of the load cases, beside the listed ones.',
   'shear deformation': 'yes: members shear as well as bend. Sections given by their properties then need Av.',
   stability: 'by others: member and frame stability is not screened, and every result says so.',
   'stress factor': 'Allowable stress divided by yield: about 0.6 with unfactored loads, 0.9 to 1 with factored ones.',
