@@ -14,7 +14,12 @@ describe('who may do what', () => {
   });
 
   it('lets a checker read everything and change nothing', () => {
-    expect(acts.filter((act) => may(of('checker'), act))).toEqual(['read projects', 'read a batch', 'take results away']);
+    expect(acts.filter((act) => may(of('checker'), act))).toEqual([
+      'read projects',
+      'read sections',
+      'read a batch',
+      'take results away',
+    ]);
   });
 
   it('lets an analyst prepare and run batches but not add people', () => {

@@ -16,6 +16,7 @@ const staff = ['lead', 'analyst', 'checker'] as const;
 
 const table = {
   'read projects': staff,
+  'read sections': staff,
   'add a project': ['lead', 'analyst'],
   'read a batch': staff,
   'bring sheets in': ['lead', 'analyst'],

@@ -1,0 +1,49 @@
+import { PassThrough, Readable } from 'node:stream';
+import { door } from '@/app/_server/door';
+import { attachment } from '@/app/_server/download';
+import { requirePerson } from '@/app/_server/person';
+import { ApiError } from '@/lib/api/error';
+import { libraryColumns } from '@/lib/library/library-columns';
+import { librarySheet } from '@/lib/library/library-sheet';
+import { libraryRows, libraryViewFrom } from '@/lib/library/library-view';
+import { csvOf } from '@/lib/reports/workbook/write-csv';
+import { writeXlsx } from '@/lib/reports/workbook/write-xlsx';
+import { ranges } from '@/lib/sections/library';
+
+const formats = ['json', 'csv', 'xlsx'];
+
+/** The library's sections of a view, in its order: as JSON in SI, or with `format=csv` or `xlsx` as a file in the view's units. */
+export const GET = door(async (request) => {
+  await requirePerson(request, 'read sections');
+  const params = new URL(request.url).searchParams;
+  const { view, wrong } = libraryViewFrom(params);
+  const format = params.get('format') ?? 'json';
+  const fields: Record<string, string[]> = Object.fromEntries(Object.entries(wrong).map(([key, says]) => [key, [says]]));
+  if (!formats.includes(format)) fields['format'] = ['Choose the format: json, csv or xlsx.'];
+  const first = Object.values(fields)[0]?.[0];
+  if (first !== undefined) throw new ApiError('bad-request', first, { fields });
+  const { rows, note, suggestion } = libraryRows(view);
+  if (format === 'json') {
+    const sections = rows.map(({ range, section }) => ({
+      designation: section.designation,
+      range,
+      standard: ranges[range].standard,
+      shape: section.shape,
+      made: section.made,
+      properties: Object.fromEntries(libraryColumns.map(({ key, value }) => [key, value(section)])),
+      source: 'derived',
+    }));
+    return Response.json({ sections, note, suggestion });
+  }
+  const sheet = librarySheet(rows, view.units);
+  const name = `Tallyframe sections${view.range === null ? '' : ` ${view.range}`}.${format}`;
+  if (format === 'csv') return attachment(name, bytesOf(Readable.from(csvOf(sheet))));
+  const sink = new PassThrough();
+  writeXlsx([sheet], sink).then(
+    () => (sink.writableEnded ? undefined : sink.end()),
+    (error: unknown) => sink.destroy(error instanceof Error ? error : new Error('The workbook could not be written')),
+  );
+  return attachment(name, bytesOf(sink));
+});
+
+const bytesOf = (stream: Readable): ReadableStream<Uint8Array> => Readable.toWeb(stream.map((piece: unknown) => typeof piece === 'string' ? new TextEncoder().encode(piece) : piece)) as ReadableStream<Uint8Array>; // prettier-ignore
