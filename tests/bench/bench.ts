@@ -1,7 +1,7 @@
 /** Speed by ratio within one run: what is compared is measured in turn, warm, the median of at least five rounds. */
 import { writeFileSync } from 'node:fs';
 import { resolve } from 'node:path';
-import { chainAgainstBare } from './chain';
+import { chainAgainstBare, codeChainAgainstBare } from './chain';
 import { installPeers } from './peers/eigen-peer';
 import { profileChain } from './profile';
 import { queries } from './queries';
@@ -23,6 +23,7 @@ const must: Readonly<Record<string, { readonly limit: number; readonly atLeast?:
   'second.P.first': { limit: 15 },
   'chain.W.eigen': { limit: 50 },
   'chain.1000.io': { limit: 1.5 },
+  'chain.1000.code.io': { limit: 3 },
   'threads.2.1': { limit: 1.6, atLeast: true },
   'query.page.bare': { limit: 5 },
   'query.page.growth': { limit: 3 },
@@ -38,6 +39,7 @@ const groups: readonly (readonly [string, () => Promise<Record<string, number>>]
   ['second', () => secondAgainstFirst(5)],
   ['everyday', () => everydayAgainstBare(5)],
   ['chain', () => chainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
+  ['code', () => codeChainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
   ['profile', async () => (await profileChain(), {})],
   ['queries', () => queries(5)],
   ['threads', () => twoThreadsAgainstOne(5)],

@@ -1,4 +1,7 @@
-/** chain.1000.io: sheets to workbook for 1,000 portals, against reading the same file and writing the same rows bare. */
+/**
+ * chain.1000.io: sheets to workbook for 1,000 portals, against reading the same file and writing the same rows bare;
+ * chain.1000.code.io: the same with a design code and sixty combinations.
+ */
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -42,8 +45,16 @@ async function writeBare(sheets: Rows): Promise<void> {
   await book.commit();
 }
 
-export async function chainAgainstBare(rounds: number): Promise<Record<string, number>> {
-  const bytes = await portalWorkbook(1000);
+export const chainAgainstBare = async (rounds: number): Promise<Record<string, number>> => ({
+  'chain.1000.io': await wholeAgainstBare(rounds, false),
+});
+
+export const codeChainAgainstBare = async (rounds: number): Promise<Record<string, number>> => ({
+  'chain.1000.code.io': await wholeAgainstBare(rounds, true),
+});
+
+async function wholeAgainstBare(rounds: number, code: boolean): Promise<number> {
+  const bytes = await portalWorkbook(1000, code);
   const folder = mkdtempSync(join(tmpdir(), 'tallyframe-bench-'));
   try {
     const rows = await storedChain(bytes, folder, true);
@@ -62,7 +73,7 @@ export async function chainAgainstBare(rounds: number): Promise<Record<string, n
       'cpu',
     );
     console.log(`  chain ${median(whole).toFixed(2)} s, bare ${median(bare).toFixed(2)} s CPU`);
-    return { 'chain.1000.io': ratio(whole, bare) };
+    return ratio(whole, bare);
   } finally {
     rmSync(folder, { recursive: true, force: true });
   }

@@ -79,19 +79,51 @@ const combinationRows: Cells[] = [
 ];
 const setupRows: Cells[] = [['setting', 'value'], ['title', 'Model P'], ['material', 'S275'], ['deflection ratio', 200], ['sway ratio', 150]]; // prettier-ignore
 
-/** The workbook of `count` portals as bytes, written streaming. */
-export async function portalWorkbook(count: number): Promise<Uint8Array> {
+/** Sixty factored combinations of the five cases, as a generator would list them: 48 of strength, 12 of service. */
+function codeCombinationRows(): Cells[] {
+  const rows: Cells[] = [['combination', 'purpose', 'dead', 'snow', 'live', 'wind', 'wind 2']];
+  const none = [null, null] as const;
+  const winds = (factor: number): readonly (readonly [number | null, number | null])[] => [none, [factor, null], [null, factor]];
+  const name = (kind: string): string => `${kind} ${rows.length}`;
+  for (const dead of [1.35, 1])
+    for (const [snow, live] of [
+      [1.5, null],
+      [null, 1.5],
+      [1.5, 1.05],
+      [0.75, 1.5],
+    ] as const)
+      // prettier-ignore
+      for (const psi of [0.9, 1.5])
+        for (const wind of winds(psi)) rows.push([name('C'), 'strength', dead, snow, live, ...wind]);
+  for (const [snow, live] of [
+    [1, null],
+    [null, 1],
+    [1, 0.7],
+    [0.5, 1],
+  ] as const)
+    // prettier-ignore
+    for (const wind of winds(0.6)) rows.push([name('S'), 'service', 1, snow, live, ...wind]);
+  return rows;
+}
+
+const codeSetup: Cells[] = [['strength check', 'EN 1993-1-1'], ['gamma M1', 1.1]]; // prettier-ignore
+
+/**
+ * The workbook of `count` portals as bytes, written streaming.
+ * @param code members checked by EN 1993-1-1 under sixty combinations
+ */
+export async function portalWorkbook(count: number, code = false): Promise<Uint8Array> {
   const sink = new PassThrough();
   const bytes = buffer(sink);
   const book = new ExcelJS.stream.xlsx.WorkbookWriter({ stream: sink, useStyles: false, useSharedStrings: true });
   const sheets: [string, Iterable<Cells>][] = [
-    ['Setup', setupRows],
+    ['Setup', code ? [...setupRows, ...codeSetup] : setupRows],
     ['Nodes', nodeRows(count)],
     ['Members', memberRows(count)],
     ['Supports', supportRows(count)],
     ['Load cases', caseRows],
     ['Member loads', loadRows(count)],
-    ['Combinations', combinationRows],
+    ['Combinations', code ? codeCombinationRows() : combinationRows],
   ];
   for (const [name, rows] of sheets) {
     const page = book.addWorksheet(name);
