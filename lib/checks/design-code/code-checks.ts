@@ -2,7 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Check, MemberLine, ResultState } from '@/lib/results/result';
 import { worse } from '@/lib/results/verdict';
-import type { Findings, Subject } from '../check-row';
+import type { Findings } from '../check-row';
 import { SAME } from '../peak';
 import type { Span } from '../spans';
 import { verdictOf } from '../verdict';
@@ -50,7 +50,9 @@ export function checkByCode(
 /** One row, under the code's own name, that says why a member was not checked. */
 export function refuseMember(span: Span, name: string, states: readonly ResultState[], reason: string, findings: Findings): void {
   const row = (state: ResultState | undefined): Check => ({
-    ...subjectOf(span, span.pieces[0]!.member),
+    subjectKind: span.kind,
+    subject: span.name,
+    member: span.pieces[0]!.member,
     check: name,
     combination: state?.name ?? null,
     at: null,
@@ -68,12 +70,6 @@ export function refuseMember(span: Span, name: string, states: readonly ResultSt
   findings.all?.push(...(states.length > 0 ? states.map(row) : [row(undefined)]));
   findings.notChecked.add(`${name}: ${reason}`);
 }
-
-const subjectOf = (span: Span, member: number): Pick<Subject, 'subjectKind' | 'subject' | 'member'> => ({
-  subjectKind: span.kind,
-  subject: span.name,
-  member,
-});
 
 /** The governing row of each clause, in the order in which the code first names them. */
 function keepRows(span: Span, member: number, rows: readonly ClauseRow[], nearLimit: number, findings: Findings): void {
@@ -105,7 +101,9 @@ function checkOf(span: Span, member: number, row: ClauseRow, nearLimit: number):
   const verdict = row.ratio === null ? 'not checked' : verdictOf(row.ratio, nearLimit);
   const open = verdict === 'not checked';
   return {
-    ...subjectOf(span, member),
+    subjectKind: span.kind,
+    subject: span.name,
+    member,
     check: row.check,
     combination: row.combination,
     at: row.at,

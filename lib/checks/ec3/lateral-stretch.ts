@@ -66,7 +66,10 @@ export function lateralStretch(
   const curve = lateral.curve ?? (lateral.kind === 'rolled' ? rolledCurve(made, h, b) : generalCurve(made, h, b));
   const kc = byDiagram ? correctionFactor(isStraight(stretch), endRatio(stretch), C1) : 1;
   const found = lateral.kind === 'rolled' ? rolledCase(W, fy, Mcr, curve, kc, gammaM1) : generalCase(W, fy, Mcr, curve, gammaM1);
-  return { ...found, stretch, face, M, L, C1, C2, zg, Mcr, W, curve, by: lateral.kind, ratio: M / found.MbRd };
+  const { lambda, phi, chi, f, chiMod, MbRd } = found;
+  const by = lateral.kind;
+  // written out: a spread of so many fields costs more than the sums themselves
+  return { lambda, phi, chi, kc: found.kc, f, chiMod, MbRd, stretch, face, M, L, C1, C2, zg, Mcr, W, curve, by, ratio: M / MbRd };
 }
 
 /** C2 and z_g of loads on a flange; none where they act at the shear centre, away from it, or only at the ends. Null = not known. */
