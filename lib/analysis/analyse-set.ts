@@ -9,6 +9,7 @@ import type { StateTrouble } from './failures';
 import type { ImperfectionForces } from './imperfections/imperfection-forces';
 import { memberDataFor } from './member-data';
 import { strengthScale, type PlannedState } from './plan-states';
+import { ropeAmong } from './second-order/ropes';
 import type { SecondOrderSpace } from './second-order/second-order-space';
 import { firstOrderCombination, solveSecondOrder } from './second-order/solve-second-order';
 import { firstReduction, reduce, shareOf, squashLoads } from './stiffness-reduction/reduced-stiffness';
@@ -80,6 +81,8 @@ function solved(
     const method = { shearDeformation: settings.shearDeformation, stiffness };
     const data = memberDataFor(frame, method);
     const { loadScale } = planned;
+    const rope = planned.order === 2 && ropeAmong(frame, data, first.state.endForces, loadScale, slack, { sum: 0 });
+    if (rope) return { ok: false, trouble: { kind: 'rope', ...rope } };
     const input = {
       frame,
       t,

@@ -9,6 +9,8 @@ import { stateFailure, tieFailure, troubleWords, type StateTrouble } from './fai
 import type { SolvedCases } from './first-order-cases';
 import { imperfectionForces } from './imperfections/imperfection-forces';
 import { planStates, type PlannedState } from './plan-states';
+import { memberDataFor } from './member-data';
+import { ropeAmong, type RopeCount } from './second-order/ropes';
 import { secondOrderSpace } from './second-order/second-order-space';
 import { tieForces } from './tension-only/tie-forces';
 import { settleTies } from './tension-only/settle-ties';
@@ -46,15 +48,25 @@ export function combinationStates(
     reductions: null,
   };
   const states: SolvedState[] = [];
+  const ropes: RopeCount = { sum: 0 };
   let combination = -1;
   for (const planned of planStates(frame, settings)) {
     if (planned.combination !== combination) job.firsts.clear();
     combination = planned.combination;
     const found = ties.length === 0 ? alone(job, planned) : withTies(job, planned);
     if ('code' in found) return found;
+    const rope = planned.order === 2 && ropeIn(job, planned, found, ropes);
+    if (rope) return rope;
     states.push(found);
   }
   return { states, condition: worstCondition(job, states) };
+}
+
+/** Ropes under the forces found, and so many of them that their lines would fill the memory. */
+function ropeIn({ frame }: SetJob, planned: PlannedState, { state }: SolvedState, ropes: RopeCount): Failure | null {
+  const data = memberDataFor(frame, state.method);
+  const rope = ropeAmong(frame, data, state.endForces, planned.loadScale, state.method?.slack ?? [], ropes);
+  return rope && stateFailure(frame, planned.name, planned.loadScale, planned.reduced, { kind: 'rope', ...rope });
 }
 
 function alone(job: SetJob, planned: PlannedState): SolvedState | Failure {

@@ -45,6 +45,8 @@ export type StateTrouble =
   | { readonly kind: 'not settled'; readonly reached: number }
   /** A member (index) whose axial force reaches what its section can carry, so that nothing of its stiffness is left. */
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
+  /** A member (index) pulled so hard for its I, m⁴, that it is a rope (second-order/ropes.ts). */
+  | { readonly kind: 'rope'; readonly member: number; readonly slenderness: number; readonly leastI_m4: number }
   /** `caught`: whichever way it moves, some tie is stretched. */
   | { readonly kind: 'free'; readonly movement: string; readonly caught: boolean };
 
@@ -67,6 +69,14 @@ export function troubleWords(frame: Frame, scale: number, reduced: boolean, trou
     case 'squashed': {
       const id = frame.members[trouble.member]!.id;
       return `unstable at this load: member ${id} is pressed to ${figure(trouble.share)} of fy × A, which leaves it no stiffness (τ_b, AISC 360-22 C2.3(b)).`;
+    }
+    case 'rope': {
+      const id = frame.members[trouble.member]!.id;
+      const least = `${Number((trouble.leastI_m4 * 1e8).toPrecision(2))} cm⁴`;
+      return (
+        `member ${id} is pulled so hard for its I that it is a rope, not a bar: √(N/EI) × length is ` +
+        `${Math.ceil(trouble.slenderness)}. With an I of ${least} or more it can be followed (a round bar has π d⁴/64).`
+      );
     }
     case 'free':
       return trouble.movement;
