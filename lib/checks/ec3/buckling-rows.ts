@@ -11,17 +11,14 @@ import { lateralStretch, type LateralStretch } from './lateral-stretch';
 
 /** Class for 6.3: at the place of the largest |N|/N_pl + |M|/M_el, without the easing of ε (5.5.2(10)). */
 function governingClass(of: Ec3Member, demand: Demand): Classified {
-  let most = -1;
-  let found = classify(of.plates, of.fy, 0, 0, of.Wel);
+  let [most, N, M] = [-1, 0, 0];
   for (const place of demand.places) {
-    const N = of.of.tensionOnly ? Math.max(0, place.N) : place.N;
-    const M = demand.moment > 0 ? place.M : 0;
-    const used = Math.max(0, -N) / of.A + Math.abs(M) / of.Wel;
-    if (used <= most) continue;
-    most = used;
-    found = classify(of.plates, of.fy, N, M, of.Wel);
+    const axial = of.of.tensionOnly ? Math.max(0, place.N) : place.N;
+    const moment = demand.moment > 0 ? place.M : 0;
+    const used = Math.max(0, -axial) / of.A + Math.abs(moment) / of.Wel;
+    if (used > most) [most, N, M] = [used, axial, moment];
   }
-  return found;
+  return classify(of.plates, of.fy, N, M, of.Wel);
 }
 
 /** Rows of 6.3 for one state. */

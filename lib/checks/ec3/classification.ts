@@ -84,3 +84,39 @@ export function classify(plates: Plates, fy: number, N: number, M: number, Wel: 
   }
   return worst;
 }
+
+/** How far a section is surely of class 1 or 2: what spares classing every place of every state. */
+export interface PlasticRange {
+  /** Flanges and walls are, whatever presses them. */
+  readonly always: boolean;
+  /** The web is even when uniformly pressed. */
+  readonly uniform: boolean;
+  /** Compression up to which a web that is bent is, N. */
+  readonly compression: number;
+}
+
+/** The range of `classify` in which its answer is class 1 or 2: 456ε/(13α − 1) turned round for N (Table 5.2). */
+export function plasticRange(plates: Plates, fy: number): PlasticRange {
+  const epsilon = epsilonOf(fy);
+  const { web, flange, wall, webOnAxis } = plates;
+  const flat = flange === null || flange.slenderness <= (flange.outstand ? outstandPressed : internalPressed)(epsilon)[1];
+  const round = wall === null || wall <= tube(epsilon)[1];
+  if (web === null) return { always: round, uniform: true, compression: Infinity };
+  const uniform = web.slenderness <= internalPressed(epsilon)[1];
+  const alpha = ((456 * epsilon) / web.slenderness + 1) / 13;
+  // a shade less: places at the edge are classed one by one
+  const most = (2 * alpha - 1) * web.area * fy * (1 - 1e-9);
+  return {
+    always: flat && (uniform || !plates.webAsFlange),
+    uniform,
+    compression: webOnAxis ? 0 : Math.max(0, alpha > 0.5 ? most : 0),
+  };
+}
+
+/** Whether a place is surely of class 1 or 2 (N tension positive). */
+export function surelyPlastic(range: PlasticRange, plates: Plates, N: number, M: number, Wel: number): boolean {
+  if (!range.always) return false;
+  if (range.uniform) return true;
+  if (N >= 0) return range.compression > 0 || plates.webOnAxis;
+  return -N <= range.compression && -N / plates.A < Math.abs(M) / Wel;
+}

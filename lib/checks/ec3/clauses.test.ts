@@ -4,7 +4,7 @@ import { kyyB, kyzB, kzyStiff, kzySoft, kzzB } from './annex-b';
 import { longitudinalStress, momentLeft } from './bending-axial';
 import { bendingResistance } from './bending';
 import { reducedByWeb, shearReduction } from './bending-shear';
-import { classify, platesOf } from './classification';
+import { classify, plasticRange, platesOf, surelyPlastic, type CoveredShape } from './classification';
 import { criticalMoment, endRatio, isStraight, loadHeightFactor, momentFactor, type MomentDiagram } from './critical-moment';
 import { momentFactorA, momentFactorB } from './equivalent-moment';
 import { bucklingCurve, bucklingResistance, criticalForce, torsionalForce } from './flexural-buckling';
@@ -97,6 +97,29 @@ describe('classes of sections, Table 5.2', () => {
     expect(inside.web!.slenderness).toBeCloseTo((200 - 18) / 6, 9);
     expect(inside.flange!.slenderness).toBeCloseTo((100 - 18) / 6, 9);
     expect(platesOf('rhs', rhs.dimensions!, true, 1).flange!.slenderness).toBeCloseTo((200 - 18) / 6, 9);
+  });
+
+  it('what is surely plastic is of class 1 or 2, and the range is not so narrow as to say nothing', () => {
+    const thin = shaped('I', { h: 700, b: 200, tw: 8, tf: 20, r: 0 }, 'welded');
+    const sections = [ipe300, heb300, thin, shaped('rhs', { h: 300, b: 100, t: 7 }), shaped('chs', { d: 219.1, t: 5 }), shaped('channel', { h: 300, b: 90, tw: 7, tf: 15, r: 10 })]; // prettier-ignore
+    let sure = 0;
+    let more = 0;
+    for (const { shape, dimensions, properties } of sections)
+      for (const turned of [false, true])
+        for (const fy of [235e6, 460e6]) {
+          const of = platesOf(shape as CoveredShape, dimensions!, turned, properties.A_m2);
+          const range = plasticRange(of, fy);
+          for (let n = -1; n <= 1; n += 0.05)
+            for (const m of [0, 0.02, 0.3, 1]) {
+              const [N, M] = [n * properties.A_m2 * fy, m * W * fy];
+              const found = classify(of, fy, N, M, W).class;
+              if (surelyPlastic(range, of, N, M, W)) {
+                sure++;
+                expect(found).toBeLessThanOrEqual(2);
+              } else if (found <= 2) more++;
+            }
+        }
+    expect(sure).toBeGreaterThan(5 * more);
   });
 
   it('turned: the web of an I is only pressed, that of a channel may be the pressed face', () => {
@@ -291,6 +314,8 @@ describe('interaction, 6.3.3', () => {
     // largest at neither: outside the table
     expect(momentFactorB(diagram(0, 1, 0.5, 0.2, 0, true))).toBe(1);
     expect(momentFactorB(straight(0, 0))).toBe(1);
+    // the larger at the far end
+    expect(momentFactorB(uniform(0, -1, 1))).toBeCloseTo(0.5, 12);
   });
 
   it('C_m,0 of Table A.2', () => {

@@ -3,35 +3,38 @@ import type { Demand, Place } from '../design-code/demand';
 import { bendingResistance } from './bending';
 import { longitudinalStress, momentLeft } from './bending-axial';
 import { reducedByWeb, shearReduction } from './bending-shear';
-import { classify, type Classified } from './classification';
+import { classify, surelyPlastic, type Classified } from './classification';
 import { compressionResistance } from './compression';
 import type { Ec3Member } from './ec3-member';
 import { basics, checkedRow, clauses, refusedRow, type Inputs } from './ec3-rows';
 import { tensionResistance } from './tension';
+import type { SectionClass } from './width-limits';
 
-/** A place with what it is classed as; N and M without what a tension-only member is not pressed by. */
-interface Section {
-  readonly x: number;
-  readonly N: number;
-  readonly V: number;
-  readonly M: number;
-  readonly class: Classified;
+/** Places of a state with what each is classed as; null where all are surely of class 1 or 2. */
+interface Sections {
+  readonly places: readonly Place[];
+  readonly classes: readonly Classified[] | null;
 }
 
 /** The words of a class 4 section: which plate, its c/t and the limit, never looking safer than it is. */
 export const slenderWords = ({ plate, slenderness, limit }: Classified): string =>
   `class 4: slender ${plate ?? 'plate'} (c/t ${slenderness.toFixed(1)} > ${(Math.floor(limit * 10) / 10).toFixed(1)})`;
 
-/** Class at a place; a class 4 section counts as class 3 where ε eased by its own compression allows (5.5.2(9)). */
-function sectionAt(of: Ec3Member, place: Place, bent: boolean): Section {
-  const N = of.of.tensionOnly ? Math.max(0, place.N) : place.N;
-  const M = bent ? place.M : 0;
+/** N at a place; a tension-only member is not pressed. */
+const axial = (of: Ec3Member, N: number): number => (of.of.tensionOnly ? Math.max(0, N) : N);
+
+/** Class under N and M; a class 4 section counts as class 3 where ε eased by its own compression allows (5.5.2(9)). */
+function classAt(of: Ec3Member, N: number, M: number): Classified {
   const strict = classify(of.plates, of.fy, N, M, of.Wel);
-  if (strict.class < 4) return { x: place.x, N, V: place.V, M, class: strict };
+  if (strict.class < 4) return strict;
   const pressed = -N / of.A + Math.abs(M) / of.Wel;
   const eased = classify(of.plates, of.fy, N, M, of.Wel, of.fy / of.gammaM0 / pressed);
-  const found = eased.class < 4 ? { ...strict, class: 3 as const, limit: eased.limit } : strict;
-  return { x: place.x, N, V: place.V, M, class: found };
+  return eased.class < 4 ? { ...strict, class: 3, limit: eased.limit } : strict;
+}
+
+function sectionsOf(of: Ec3Member, places: readonly Place[], bent: boolean): Sections {
+  const plastic = places.every(({ N, M }) => surelyPlastic(of.plasticRange, of.plates, axial(of, N), bent ? M : 0, of.Wel));
+  return { places, classes: plastic ? null : places.map(({ N, M }) => classAt(of, axial(of, N), bent ? M : 0)) };
 }
 
 /**
@@ -43,20 +46,18 @@ export function crossSectionRows(of: Ec3Member, demand: Demand, rows: ClauseRow[
   const bent = demand.moment > 0;
   const compression = of.of.tensionOnly ? 0 : demand.compression;
   if (!bent && compression === 0) return;
-  const sections = demand.places.map((place) => sectionAt(of, place, bent));
-  const slender = sections.find((section) => section.class.class === 4);
+  const sections = sectionsOf(of, demand.places, bent);
+  const slender = sections.classes?.find((found) => found.class === 4);
   if (slender) {
-    rows.push(refusedRow(clauses.class, demand, slenderWords(slender.class)));
+    rows.push(refusedRow(clauses.class, demand, slenderWords(slender)));
     return;
   }
   if (compression > 0) {
     const NcRd = compressionResistance(of.A, of.fy, of.gammaM0);
-    const at = sections.find((section) => section.x === demand.compressionAt && section.N < 0)?.class.class ?? 3;
     rows.push(
       checkedRow(clauses.compression, demand, 'force', compression, NcRd, demand.compressionAt, null, () => ({
         ...basics(of),
         N: compression,
-        class: at,
         NcRd,
       })),
     );
@@ -87,40 +88,39 @@ function tensionAndShear(of: Ec3Member, demand: Demand, rows: ClauseRow[]): void
   );
 }
 
-const resistance = (of: Ec3Member, { class: found }: Section): number =>
-  bendingResistance(found.class, of.Wpl, of.Wel, of.fy, of.gammaM0);
+const classOf = ({ classes }: Sections, i: number): SectionClass => classes?.[i]?.class ?? 2;
 
-/** M_Ed/M of the section where that is largest. */
-function worst(sections: readonly Section[], ratioOf: (section: Section) => number): { section: Section; ratio: number } | null {
-  let best: { section: Section; ratio: number } | null = null;
-  for (const section of sections) {
-    const ratio = ratioOf(section);
-    if (ratio > (best?.ratio ?? 0)) best = { section, ratio };
+const resistance = (of: Ec3Member, found: SectionClass): number => bendingResistance(found, of.Wpl, of.Wel, of.fy, of.gammaM0);
+
+/** The place where a ratio is largest; -1 where it is nowhere above nil. */
+function worst(sections: Sections, ratioOf: (place: Place, found: SectionClass) => number): number {
+  let [best, most] = [-1, 0];
+  for (let i = 0; i < sections.places.length; i++) {
+    const ratio = ratioOf(sections.places[i]!, classOf(sections, i));
+    if (ratio > most) [best, most] = [i, ratio];
   }
   return best;
 }
 
 const faceOf = (M: number): 'top' | 'bottom' => (M > 0 ? 'top' : 'bottom');
 
-const classInputs = (of: Ec3Member, { class: found }: Section): Inputs => ({
-  class: found.class,
-  plate: found.plate,
-  ct: found.slenderness,
-  W: found.class <= 2 ? of.Wpl : of.Wel,
-  Wname: found.class <= 2 ? 'pl' : 'el',
-});
+function classInputs(of: Ec3Member, N: number, M: number): Inputs {
+  const found = classAt(of, N, M);
+  const plastic = found.class <= 2;
+  const W = plastic ? { W: of.Wpl, Wname: 'pl' } : { W: of.Wel, Wname: 'el' };
+  return { class: found.class, plate: found.plate, ct: found.slenderness, ...W };
+}
 
-function bending(of: Ec3Member, demand: Demand, sections: readonly Section[], rows: ClauseRow[]): void {
-  const found = worst(sections, (section) => Math.abs(section.M) / resistance(of, section));
-  if (!found) return;
-  const { section } = found;
-  const McRd = resistance(of, section);
-  const M = Math.abs(section.M);
+function bending(of: Ec3Member, demand: Demand, sections: Sections, rows: ClauseRow[]): void {
+  const i = worst(sections, ({ M }, found) => Math.abs(M) / resistance(of, found));
+  if (i < 0) return;
+  const { x, N, M } = sections.places[i]!;
+  const McRd = resistance(of, classOf(sections, i));
   rows.push(
-    checkedRow(clauses.bending, demand, 'moment', M, McRd, section.x, faceOf(section.M), () => ({
+    checkedRow(clauses.bending, demand, 'moment', Math.abs(M), McRd, x, faceOf(M), () => ({
       ...basics(of),
-      ...classInputs(of, section),
-      M,
+      ...classInputs(of, axial(of, N), M),
+      M: Math.abs(M),
       McRd,
     })),
   );
@@ -129,90 +129,95 @@ function bending(of: Ec3Member, demand: Demand, sections: readonly Section[], ro
 /** 1 − ρ; above nil, so that where shear alone is over (6.2.6) ratios stay numbers. */
 const kept = (rho: number): number => Math.max(1e-6, 1 - rho);
 
-/** M_V,Rd of a section: (6.30) for an I of class 1 or 2 bent about its major axis, else (1 − ρ) M_c,Rd. */
-function besideShear(of: Ec3Member, section: Section, rho: number): number {
-  const McRd = resistance(of, section);
-  return of.interaction === 'I major' && section.class.class <= 2
-    ? Math.max(1e-6 * McRd, reducedByWeb(of.Wpl, rho, of.Aw, of.tw, of.fy, of.gammaM0, McRd))
-    : kept(rho) * McRd;
+/** (6.30) is for an I of class 1 or 2 bent about its major axis. */
+const byWeb = (of: Ec3Member, found: SectionClass): boolean => of.interaction === 'I major' && found <= 2;
+
+/** M_V,Rd of a section: by (6.30), else (1 − ρ) M_c,Rd. */
+function besideShear(of: Ec3Member, found: SectionClass, rho: number): number {
+  const McRd = resistance(of, found);
+  if (!byWeb(of, found)) return kept(rho) * McRd;
+  return Math.max(1e-6 * McRd, reducedByWeb(of.Wpl, rho, of.Aw, of.tw, of.fy, of.gammaM0, McRd));
 }
 
-function bendingAndShear(of: Ec3Member, demand: Demand, sections: readonly Section[], rows: ClauseRow[]): void {
+function bendingAndShear(of: Ec3Member, demand: Demand, sections: Sections, rows: ClauseRow[]): void {
   if (of.shearBuckling) {
     if (demand.shear > 0) rows.push(refusedRow(clauses.bendingShear, demand, 'shear buckling of the web, 6.2.6(6)'));
     return;
   }
   if (demand.shear <= 0.5 * of.VplRd) return;
-  const found = worst(sections, (section) => {
-    const rho = shearReduction(section.V, of.VplRd);
-    return rho === 0 ? 0 : Math.abs(section.M) / besideShear(of, section, rho);
+  const i = worst(sections, ({ V, M }, found) => {
+    const rho = shearReduction(V, of.VplRd);
+    return rho === 0 ? 0 : Math.abs(M) / besideShear(of, found, rho);
   });
-  if (!found) return;
-  const { section } = found;
-  const rho = shearReduction(section.V, of.VplRd);
-  const MvRd = besideShear(of, section, rho);
-  const M = Math.abs(section.M);
+  if (i < 0) return;
+  const { x, N, V, M } = sections.places[i]!;
+  const found = classOf(sections, i);
+  const rho = shearReduction(V, of.VplRd);
+  const MvRd = besideShear(of, found, rho);
   rows.push(
-    checkedRow(clauses.bendingShear, demand, 'moment', M, MvRd, section.x, faceOf(section.M), () => ({
+    checkedRow(clauses.bendingShear, demand, 'moment', Math.abs(M), MvRd, x, faceOf(M), () => ({
       ...basics(of),
-      ...classInputs(of, section),
-      M,
-      V: Math.abs(section.V),
+      ...classInputs(of, axial(of, N), M),
+      M: Math.abs(M),
+      V: Math.abs(V),
       VplRd: of.VplRd,
       rho,
       Aw: of.Aw,
       tw: of.tw,
-      by: of.interaction === 'I major' && section.class.class <= 2 ? '6.30' : 'whole',
-      McRd: resistance(of, section),
+      by: byWeb(of, found) ? '6.30' : 'whole',
+      McRd: resistance(of, found),
       MvRd,
     })),
   );
 }
 
 /** The ratio of 6.2.9 at a section, the yield strength reduced by 1 − ρ for the whole section where V is high (6.2.10). */
-function axialRatio(of: Ec3Member, section: Section): number {
-  if (section.N === 0 || section.M === 0) return 0;
-  const keep = kept(shearReduction(section.V, of.VplRd));
-  if (section.class.class === 3) return longitudinalStress(section.N, section.M, of.A, of.Wel) / ((keep * of.fy) / of.gammaM0);
-  const n = Math.abs(section.N) / (keep * of.NplRd);
-  if (of.interaction === 'linear' || n >= 1) return n + Math.abs(section.M) / (keep * resistance(of, section));
-  return Math.abs(section.M) / (keep * resistance(of, section) * momentLeft(of.interaction, n, of.a, of.web));
+function axialRatio(of: Ec3Member, { N: along, V, M }: Place, found: SectionClass): number {
+  const N = axial(of, along);
+  if (N === 0 || M === 0) return 0;
+  const keep = kept(shearReduction(V, of.VplRd));
+  if (found === 3) return longitudinalStress(N, M, of.A, of.Wel) / ((keep * of.fy) / of.gammaM0);
+  const n = Math.abs(N) / (keep * of.NplRd);
+  const m = Math.abs(M) / (keep * resistance(of, found));
+  return of.interaction === 'linear' || n >= 1 ? n + m : m / momentLeft(of.interaction, n, of.a, of.web);
 }
 
-function bendingAndAxial(of: Ec3Member, demand: Demand, sections: readonly Section[], rows: ClauseRow[]): void {
-  const found = worst(sections, (section) => axialRatio(of, section));
-  if (!found) return;
-  const { section, ratio } = found;
-  const rho = shearReduction(section.V, of.VplRd);
+function bendingAndAxial(of: Ec3Member, demand: Demand, sections: Sections, rows: ClauseRow[]): void {
+  const i = worst(sections, (place, found) => axialRatio(of, place, found));
+  if (i < 0) return;
+  const place = sections.places[i]!;
+  const found = classOf(sections, i);
+  const ratio = axialRatio(of, place, found);
+  const { x, V, M } = place;
+  const N = axial(of, place.N);
+  const rho = shearReduction(V, of.VplRd);
   const keep = kept(rho);
-  const n = Math.abs(section.N) / (keep * of.NplRd);
-  const M = Math.abs(section.M);
-  const by = section.class.class === 3 ? 'elastic' : of.interaction === 'linear' || n >= 1 ? 'linear' : of.interaction;
-  const McRd = resistance(of, section);
-  const left = by === 'elastic' || by === 'linear' ? null : momentLeft(by, n, of.a, of.web);
-  const inputs = () => ({
+  const n = Math.abs(N) / (keep * of.NplRd);
+  const McRd = resistance(of, found);
+  const by = found === 3 ? 'elastic' : of.interaction === 'linear' || n >= 1 ? 'linear' : of.interaction;
+  const sigma = by === 'elastic' ? longitudinalStress(N, M, of.A, of.Wel) : null;
+  const limit = by === 'elastic' ? (keep * of.fy) / of.gammaM0 : null;
+  const MNRd = by === 'elastic' || by === 'linear' ? null : keep * McRd * momentLeft(by, n, of.a, of.web);
+  const inputs = (): Inputs => ({
     ...basics(of),
-    ...classInputs(of, section),
-    N: Math.abs(section.N),
-    V: Math.abs(section.V),
-    M,
+    ...classInputs(of, N, M),
+    N: Math.abs(N),
+    V: Math.abs(V),
+    M: Math.abs(M),
     VplRd: of.VplRd,
     rho,
     NplRd: of.NplRd,
     n,
     a: of.a,
-    web: of.web,
     by,
     McRd,
-    MNRd: left === null ? null : keep * McRd * left,
-    sigma: by === 'elastic' ? longitudinalStress(section.N, section.M, of.A, of.Wel) : null,
-    limit: by === 'elastic' ? (keep * of.fy) / of.gammaM0 : null,
+    MNRd,
+    sigma,
+    limit,
     ratio,
   });
-  const face = faceOf(section.M);
-  if (by === 'elastic') {
-    const sigma = longitudinalStress(section.N, section.M, of.A, of.Wel);
-    rows.push(checkedRow(clauses.bendingAxial, demand, 'stress', sigma, (keep * of.fy) / of.gammaM0, section.x, face, inputs));
-  } else if (left === null) rows.push(checkedRow(clauses.bendingAxial, demand, 'number', ratio, 1, section.x, face, inputs));
-  else rows.push(checkedRow(clauses.bendingAxial, demand, 'moment', M, keep * McRd * left, section.x, face, inputs));
+  const clause = clauses.bendingAxial;
+  if (sigma !== null && limit !== null) rows.push(checkedRow(clause, demand, 'stress', sigma, limit, x, faceOf(M), inputs));
+  else if (MNRd !== null) rows.push(checkedRow(clause, demand, 'moment', Math.abs(M), MNRd, x, faceOf(M), inputs));
+  else rows.push(checkedRow(clause, demand, 'number', ratio, 1, x, faceOf(M), inputs));
 }

@@ -1,7 +1,7 @@
 import type { Settings } from '@/lib/model/settings';
 import type { CodeMember } from '../design-code/code-member';
 import type { PlasticInteraction } from './bending-axial';
-import { platesOf, type CoveredShape, type Plates } from './classification';
+import { plasticRange, platesOf, type CoveredShape, type PlasticRange, type Plates } from './classification';
 import { bucklingCurve, bucklingResistance, criticalForce, torsionalForce, type Buckling } from './flexural-buckling';
 import { criticalMoment } from './critical-moment';
 import { plateauLT } from './lateral-torsional';
@@ -34,6 +34,7 @@ export interface Ec3Member {
   readonly of: CodeMember;
   readonly shape: CoveredShape;
   readonly plates: Plates;
+  readonly plasticRange: PlasticRange;
   readonly A: number;
   readonly E: number;
   readonly fy: number;
@@ -117,9 +118,11 @@ export function ec3Member(of: CodeMember, settings: Settings): Ec3Member | strin
     buckling.push({ mode: 'T', I: It, Lcr, Ncr, curve, ...bucklingResistance(A, fy, Ncr, curve, gammaM1) });
   }
   const member = { of, shape, A, E, fy, gammaM0, gammaM1, h, b, tw, Iy, Iz, It, WelY, WplY, WelZ, WplZ, Av, Aw, buckling };
+  const plates = platesOf(shape, dims, turned, A);
   return {
     ...member,
-    plates: platesOf(shape, dims, turned, A),
+    plates,
+    plasticRange: plasticRange(plates, fy),
     Wel: turned ? WelZ : WelY,
     Wpl: turned ? WplZ : WplY,
     NplRd: (A * fy) / gammaM0,
@@ -157,7 +160,15 @@ function lateralOf(
     return { kind, It, Iw: Iw ?? 0, G, curve: null };
   }
   if (!deep) return { kind: 'none' };
-  const Mcr = criticalMoment(E, G, Iz, It, 0, Math.max(of.top.length_m, of.bottom.length_m, of.length_m), 1);
+  const Mcr = criticalMoment(
+    E,
+    G,
+    Iz,
+    It,
+    0,
+    (of.free.start || of.free.end ? 2 : 1) * Math.max(of.top.length_m, of.bottom.length_m, of.length_m),
+    1,
+  );
   if (Math.sqrt((WplY * fy) / Mcr) <= plateauLT) return { kind: 'none' };
   return { kind: 'general', It, Iw: 0, G, curve: 'd' };
 }

@@ -25,7 +25,7 @@ export function forceWorking(check: Check, print: Printer, kind: 't' | 'c'): rea
     tension ? '(6.6)' : '(6.10)',
   );
   const force = given(tension ? 'tension' : 'compression', print, [[N, of.number('N'), 'force']]);
-  return tension ? [force, line] : [force, classLine(of, print), line];
+  return [force, line];
 }
 
 function momentResistance(of: Reader, print: Printer): WorkingLine {
