@@ -1,3 +1,4 @@
+import { checkQuantity } from '@/lib/tables/column-quantity';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity, System } from '@/lib/units/quantity';
 import { formatQuantity } from '@/lib/units/format';
@@ -24,8 +25,8 @@ export function shownColumns(columns: readonly Column[], view: View): readonly C
 export function quantityOf(column: Column, row: Row | null): Quantity {
   const quantity: ColumnQuantity = column.quantity ?? 'number';
   if (quantity !== 'byCheck') return quantity;
-  const told = row?.cells.quantity;
-  if (told === 'stress' || told === 'displacement' || told === 'number') return told;
+  const told = row === null ? null : checkQuantity(row);
+  if (told !== null) return told;
   const check = String(row?.cells.check ?? '');
   if (['deflection', 'sway', 'displacement', 'spread'].includes(check)) return 'displacement';
   return ['stability', 'critical load factor'].includes(check) ? 'number' : 'stress';

@@ -6,8 +6,10 @@ export function columnQuantity(column: Column): Quantity | null {
   return column.quantity === undefined || column.quantity === 'byCheck' ? null : column.quantity;
 }
 
+const ofChecks = ['stress', 'displacement', 'number', 'force', 'moment'] as const;
+
 /** What a row of checks has its value and limit in. */
 export function checkQuantity(row: Row): Quantity | null {
   const { quantity } = row.cells;
-  return quantity === 'stress' || quantity === 'displacement' || quantity === 'number' ? quantity : null;
+  return ofChecks.find((each) => each === quantity) ?? null;
 }

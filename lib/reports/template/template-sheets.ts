@@ -56,6 +56,8 @@ export function templateSheets(system: System): readonly TemplateSheet[] {
         ['imperfections', 'none'],
         ['stiffness reduction', 'none'],
         ['shear deformation', 'no'],
+        ...(system === 'metric' ? [['gamma M0', 1], ['gamma M1', 1], ['national annex', null], ['interaction', 'Annex B']] : []), // prettier-ignore
+        ['load height', 'shear centre'],
       ],
     },
     {

@@ -18,6 +18,8 @@ const settingChoices: Readonly<Record<string, readonly string[]>> = {
   imperfections: ['none', 'EN 1993-1-1', 'AISC 360'],
   'stiffness reduction': ['none', 'AISC 360'],
   'shear deformation': ['no', 'yes'],
+  interaction: ['Annex B', 'Annex A'],
+  'load height': ['shear centre', 'top flange', 'bottom flange'],
 };
 
 /** What a setting does, as a note on its name. */
@@ -30,6 +32,13 @@ const settingNotes: Readonly<Record<string, string>> = {
     'as listed: those of Combinations only. A set makes combinations from the kinds of the load cases, beside the listed ones.',
   'shear deformation': 'yes: members shear as well as bend. Sections given by their properties then need Av.',
   stability: 'by others: member and frame stability is not screened, and every result says so.',
+  'strength check':
+    'elastic stress, or a design code’s clauses for every member. The codes want factored loads (ASD: unfactored ones).',
+  'gamma M0': 'EN 1993-1-1: partial factor for the resistance of cross-sections; the national annex gives it.',
+  'gamma M1': 'EN 1993-1-1: partial factor for members against buckling; the national annex gives it.',
+  'national annex': 'Its name, for the reader of the results; it changes nothing by itself.',
+  interaction: 'EN 1993-1-1: the annex that gives the interaction factors of 6.3.3.',
+  'load height': 'Where loads across a member act, for lateral-torsional buckling under a design code.',
   'stress factor': 'Allowable stress divided by yield: about 0.6 with unfactored loads, 0.9 to 1 with factored ones.',
 };
 

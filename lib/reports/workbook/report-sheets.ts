@@ -8,6 +8,7 @@ import { inputSheet, problemsSheet } from '@/lib/reports/workbook/input-sheets';
 import { combinationsSheet, limitsSheet, loadCasesSheet, loadTotalsSheet, sectionsSheet } from '@/lib/reports/workbook/model-sheets'; // prettier-ignore
 import type { ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
+import { hasWorking, workingSheet } from '@/lib/reports/workbook/working-sheet';
 import { displacementsSheet, membersByCombinationSheet, reactionsSheet } from '@/lib/reports/workbook/state-sheets';
 
 export async function reportSheets(source: ReportSource): Promise<ReportSheet[]> {
@@ -18,6 +19,7 @@ export async function reportSheets(source: ReportSource): Promise<ReportSheet[]>
     framesSheet(facts, source.settings),
     flagsSheet(facts, source.settings),
     membersSheet(source),
+    ...(hasWorking(source.settings) ? [workingSheet(source)] : []),
     membersByCombinationSheet(source),
     reactionsSheet(source),
     displacementsSheet(source),

@@ -69,6 +69,10 @@ export function titleOf(revision: RevisionRecord) {
     checked: null,
     issued: null,
     inputHash: revision.input?.sha256 ?? null,
-    scope: revision.settings?.stability === 'by others' ? 'stress and movement only' : null,
+    scope: onlyStress(revision.settings) ? 'stress and movement only' : null,
   };
 }
+
+/** Elastic stress without the screening of stability; a design code checks buckling by its own clauses. */
+const onlyStress = (settings: RevisionRecord['settings']): boolean =>
+  settings?.stability === 'by others' && settings.strengthCheck === 'elastic stress';
