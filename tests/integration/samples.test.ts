@@ -32,6 +32,8 @@ describe('samples', () => {
     ['slender-sheds-24.xlsx', 24],
     ['braced-bents-12.xlsx', 12],
     ['direct-analysis-us-9.xlsx', 9],
+    ['code-sheds-24.xlsx', 24],
+    ['code-halls-us-9.xlsx', 9],
     ['messy-mended.xlsx', 36],
     ['families/portal.xlsx', 2],
     ['families/bracket.xlsx', 2],
@@ -65,6 +67,8 @@ describe('samples', () => {
   it.each([
     ['slender-sheds-24.xlsx', { imperfections: 'EN 1993-1-1', shearDeformation: true }],
     ['direct-analysis-us-9.xlsx', { imperfections: 'AISC 360', stiffnessReduction: 'AISC 360' }],
+    ['code-sheds-24.xlsx', { imperfections: 'EN 1993-1-1', strengthCheck: 'EN 1993-1-1' }],
+    ['code-halls-us-9.xlsx', { imperfections: 'AISC 360', strengthCheck: 'AISC 360-22 LRFD' }],
   ] as const)('%s is solved in second order, leaning both ways, and most of it checked', async (name, settings) => {
     const intake = await read(name);
     expect(intake.settings).toMatchObject({ analysis: 'second order', ...settings });

@@ -120,7 +120,7 @@ function lateralRow(of: Ec3Member, demand: Demand, found: Classified, worst: Lat
 }
 
 /** What leads to M_b,Rd of a stretch. */
-export function lateralInputs(of: Ec3Member, one: LateralStretch): Inputs {
+function lateralInputs(of: Ec3Member, one: LateralStretch): Inputs {
   const { M, L, C1, C2, zg, Mcr, W, curve, by, lambda, phi, chi, kc, f, chiMod, MbRd, face, stretch } = one;
   const { lateral } = of;
   const torsion: Inputs =
