@@ -20,6 +20,8 @@ function rows(member: CodeMember, demands: readonly Demand[], settings: Settings
     note(
       `M_cr: doubly symmetric section, ends of each length between restraints held sideways and against twist, free to warp; C1 from its diagram of moments; loads at the ${settings.loadHeight}`,
     );
+  if (of.lateral.kind !== 'none' && (member.free.start || member.free.end))
+    note('M_cr to a free end: over twice the length, uniform moment (C1 = 1), the other end held against twist and warping');
   if (of.shape === 'I' && of.buckling.length > 2)
     note('Torsional buckling (6.3.1.4): restraint of twist as far apart as those that hold the member out of the plane');
   const found: ClauseRow[] = [];

@@ -7,7 +7,7 @@ import type { CodeMember, EffectiveLength } from '../design-code/code-member';
 import type { Demand, Stretch } from '../design-code/demand';
 import { ec3 } from './ec3';
 
-export const steel = (fy: number | null = 355e6): Material => ({
+const steel = (fy: number | null = 355e6): Material => ({
   name: 'S355',
   grade: 'S355',
   standard: 'EN',

@@ -11,7 +11,7 @@ export const rolledCurve = (made: Section['made'], h: number, b: number): Curve 
 
 /** Recommended λ̄LT,0 and β of 6.3.2.3(1). */
 export const plateauLT = 0.4;
-export const betaLT = 0.75;
+const betaLT = 0.75;
 
 export interface LateralResistance {
   readonly lambda: number;
