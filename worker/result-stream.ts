@@ -3,6 +3,7 @@ import { MessageChannel, type MessagePort } from 'node:worker_threads';
 import type { Pools, ThreadPool } from './pools';
 import type { PortMessage } from './threads/port-sink';
 import type { ResultFile, WriteTask } from './threads/write';
+import type { WriteCompareTask } from './threads/write-compare';
 import type { WriteTableTask } from './threads/write-table';
 
 /** Streams the result workbook, JSON, or a zip of CSV of a revision whose office the caller has made sure of. */
@@ -19,6 +20,11 @@ export function resultStream(
 /** Streams the rows of one view of a table. Threads of its own: a view need not wait until a large workbook is taken away. */
 export function tableStream(pools: Pools, of: Omit<WriteTableTask, 'port'>): ReadableStream<Uint8Array> {
   return threadStream(pools.tables, { filename: pools.bundle('write'), name: 'writeTable' }, (port): WriteTableTask => ({ ...of, port })); // prettier-ignore
+}
+
+/** Streams the differences between two revisions as a workbook. */
+export function compareStream(pools: Pools, of: Omit<WriteCompareTask, 'port'>): ReadableStream<Uint8Array> {
+  return threadStream(pools.write, { filename: pools.bundle('write'), name: 'writeCompare' }, (port): WriteCompareTask => ({ ...of, port })); // prettier-ignore
 }
 
 /** The thread waits for a slow reader and ends with one that goes away. Errors of the thread error the stream. */

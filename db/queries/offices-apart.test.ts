@@ -2,6 +2,7 @@ import { expect, it } from 'vitest';
 import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
 import { insertActivity, listActivity } from '@/db/queries/activity';
 import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
+import { findCompared } from '@/db/queries/compare';
 import { findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
 import { insertIntake } from '@/db/queries/intake';
 import { findLatestJob, insertJob } from '@/db/queries/jobs';
@@ -72,6 +73,7 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
     listInputRowsAround(db, asking, of.revision, { sheet: 'Members', row: 2, around: 2 }),
   listChanges: ({ db }, asking, of) => listChanges(db, asking, of.changed),
   findMaking: async ({ raw }, asking, of) => findMaking(raw, asking, of.changed),
+  findCompared: async ({ raw }, asking, of) => findCompared(raw, asking, of.revision, of.changed),
   findFrame: ({ db }, asking, of) => findFrame(db, asking, of.revision, 0),
   findFrameIndex: ({ db }, asking, of) => findFrameIndex(db, asking, of.revision, 'F2'),
   iterateFrames: ({ db }, asking, of) => collected(iterateFrames(db, asking, of.revision)),

@@ -4,6 +4,19 @@ import { listToSearch, viewToSearch } from './view-address';
 
 const e = encodeURIComponent;
 
+export interface CompareChosen {
+  readonly with?: string;
+  readonly list?: string;
+  readonly show?: string;
+  readonly by?: number;
+  readonly page?: number;
+}
+
+function searchOf(chosen: CompareChosen): string {
+  const pieces = Object.entries(chosen).flatMap(([key, value]) => (value === undefined ? [] : `${key}=${e(String(value))}`));
+  return pieces.length === 0 ? '' : `?${pieces.join('&')}`;
+}
+
 export const pages = {
   signIn: '/sign-in',
   projects: '/projects',
@@ -15,6 +28,9 @@ export const pages = {
   revision: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}`,
   sheet: (batch: number, letter: string, sheet: 'read' | 'settings' | 'run' | 'glance' | TableName) =>
     `/batches/${batch}/${e(letter)}/${sheet}`,
+  /** Two revisions compared; what is left out of `chosen` is as the page has it by itself. */
+  compare: (batch: number, letter: string, chosen: CompareChosen = {}) =>
+    `/batches/${batch}/${e(letter)}/compare${searchOf(chosen)}`,
   next: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/bring`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
@@ -58,6 +74,8 @@ export const api = {
   exported: (batch: number, letter: string, view: View, format: 'csv' | 'xlsx') =>
     tableAddress(batch, letter, view, '/export', { format }),
   frame: (batch: number, letter: string, number: number) => `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}`,
+  compared: (batch: number, letter: string, chosen: CompareChosen, format?: 'xlsx') =>
+    `/api/batches/${batch}/revisions/${e(letter)}/compare${format === undefined ? '' : '/export'}${searchOf(chosen)}`,
   buckled: (batch: number, letter: string, number: number, result: string) =>
     `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}/buckled?result=${e(result)}`,
 } as const;

@@ -2,7 +2,9 @@
 import { z } from 'zod';
 import { passwordLength } from '@/lib/access/password-length';
 import { personRoles } from '@/lib/access/may';
-import { changeSchema } from '@/lib/changes/change';
+import { type Change, changeSchema, sectionChange } from '@/lib/changes/change';
+import { movementKinds } from '@/lib/results/compare';
+import { comparedLists } from '@/lib/results/compared-page';
 
 const text = (what: string, max: number) =>
   z
@@ -10,6 +12,8 @@ const text = (what: string, max: number) =>
     .trim()
     .min(1, `Enter ${what}.`)
     .max(max, `Keep ${what} to ${max} characters.`);
+
+const letterText = z.string().regex(/^[A-Z]{1,3}$/, 'Name a revision by its letter.');
 
 const emailInput = z
   .string({ error: 'Enter an e-mail address.' })
@@ -40,16 +44,25 @@ export const personInput = z.object({
 
 export const assignedInput = z.object({ people: z.array(z.number().int().positive()).max(500) });
 
+/** What a change is about: nothing is changed twice at once. */
+function subjectOf(change: Change): string {
+  if (change.kind === 'section') return JSON.stringify(change.what);
+  return change.kind === 'setting' ? change.setting : change.kind;
+}
+
 /** Changes from which the next revision is made. */
 export const changesInput = z.object({
   changes: z
     .array(changeSchema, { error: 'List the changes.' })
-    .min(1, 'Change at least one setting.')
+    .min(1, 'Change at least one thing.')
     .max(50, 'Make at most 50 changes at once.')
-    .refine((list) => new Set(list.map((one) => one.setting)).size === list.length, 'Change each setting once.'),
+    .refine((list) => new Set(list.map(subjectOf)).size === list.length, 'Change each thing once.'),
   reason: text('why it is changed', 500),
   run: z.boolean().default(false),
 });
+
+/** A change of section to be looked at before it is made. */
+export const previewInput = z.object({ change: sectionChange });
 
 export const batchNameInput = text('the batch’s name', 120);
 
@@ -62,6 +75,20 @@ export const pageInput = z.object({
 
 export const exportInput = z.object({
   format: z.enum(['csv', 'xlsx'], { error: 'Choose the format: csv or xlsx.' }),
+});
+
+/** Which revision it is compared with, and which rows of what moved. */
+export const compareInput = z.object({
+  with: letterText.optional(),
+  list: z.enum(comparedLists, { error: `Choose a list: ${comparedLists.join(', ')}.` }).default('frames'),
+  show: z.enum(movementKinds, { error: `Choose what to show: ${movementKinds.join(', ')}.` }).default('moved'),
+  by: z.coerce
+    .number({ error: 'Give what is a movement as a number, like 0.01.' })
+    .min(0, 'A movement is 0 or more.')
+    .max(1000, 'Give a movement of at most 1000.')
+    .default(0.01),
+  page: z.coerce.number().int().min(1, 'Pages count from 1.').max(1_000_000).default(1),
+  size: z.coerce.number().int().min(1, 'Ask for at least 1 row.').max(500, 'Ask for at most 500 rows.').default(100),
 });
 
 export const cellInput = z
@@ -81,7 +108,7 @@ export const idInput = z
   .regex(/^[1-9]\d{0,14}$/)
   .transform(Number);
 export const frameNumberInput = z.coerce.number().int().min(1).max(20_000);
-export const letterInput = z.string().regex(/^[A-Z]{1,3}$/);
+export const letterInput = letterText;
 
 export const templateInput = z.object({
   units: z.enum(['metric', 'us'], { error: 'Choose the units: metric or us.' }).default('metric'),

@@ -8,7 +8,9 @@ import { PortSink } from './port-sink';
 import { revisionSource } from './revision-source';
 import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 
+export { compareRevisions } from './compare-revisions';
 export { drawBuckled } from './draw-buckled';
+export { writeCompare } from './write-compare';
 export { writeInput } from './write-input';
 export { writeMarkedCopy } from './write-marked-copy';
 export { writeTable } from './write-table';

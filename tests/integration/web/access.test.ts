@@ -49,6 +49,8 @@ const table: Readonly<Record<string, Line>> = {
   [revision]: reads(),
   [`${revision}/cell`]: reads('?sheet=Members&cell=A1'),
   [`${revision}/changes`]: { who: { GET: staff, POST: makers }, body: {} },
+  [`${revision}/compare`]: reads(),
+  [`${revision}/compare/export`]: reads(),
   [`${revision}/csv`]: reads(),
   [`${revision}/frames/[number]`]: reads(),
   [`${revision}/frames/[number]/buckled`]: reads('?result=C1'),
