@@ -8,7 +8,12 @@ import { openDatabase } from '@/db/open';
 it('brings an empty file up to date, and leaves one that is up to date alone', async () => {
   const folder = mkdtempSync(path.join(tmpdir(), 'tallyframe-db-'));
   const { db, raw, close } = openDatabase(path.join(folder, 'new', 'one.sqlite'));
-  expect(await migrate(db)).toEqual(['2026-12-01-first-tables', '2026-12-01-slim-lists', '2026-12-01-trail-of-changes']);
+  expect(await migrate(db)).toEqual([
+    '2026-12-01-first-tables',
+    '2026-12-01-slim-lists',
+    '2026-12-01-trail-of-changes',
+    '2026-12-01-what-is-combined',
+  ]);
   expect(await migrate(db)).toEqual([]);
   expect(raw.pragma('journal_mode', { simple: true })).toBe('wal');
   expect(raw.pragma('foreign_keys', { simple: true })).toBe(1);

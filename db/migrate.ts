@@ -2,6 +2,7 @@ import { type Kysely, type Migration, Migrator } from 'kysely';
 import { up as firstTables } from '@/db/migrations/2026-12-01-first-tables';
 import { up as slimLists } from '@/db/migrations/2026-12-01-slim-lists';
 import { up as trailOfChanges } from '@/db/migrations/2026-12-01-trail-of-changes';
+import { up as whatIsCombined } from '@/db/migrations/2026-12-01-what-is-combined';
 import type { DB } from '@/db/schema';
 
 /** Registered by hand: bundlers see imports, not folders. */
@@ -9,6 +10,7 @@ const migrations: Record<string, Migration> = {
   '2026-12-01-first-tables': { up: firstTables },
   '2026-12-01-slim-lists': { up: slimLists },
   '2026-12-01-trail-of-changes': { up: trailOfChanges },
+  '2026-12-01-what-is-combined': { up: whatIsCombined },
 };
 
 /** Brings the database up to date; names of the migrations that ran. Safe to call at every start. */

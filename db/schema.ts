@@ -77,6 +77,31 @@ export interface DB {
     headings: string;
     decimal_mark: '.' | ',' | null;
   };
+  combination_read: {
+    revision: number;
+    ordinal: number;
+    name: string;
+    purpose: Purpose;
+    /** Cases by name with their factors, as JSON. */
+    terms: string;
+    /** Of a generated one; null = listed. */
+    clause: string | null;
+    frames: number;
+  };
+  /** An office's own limits on movement, used where a batch's sheets give none. */
+  office_limit: {
+    office: number;
+    ordinal: number;
+    /** A role, or `*`. */
+    applies_to: string;
+    measure: 'deflection' | 'sway';
+    /** n of L/n or h/n. */
+    ratio: number;
+    /** Where the figure is from, in words. */
+    source: string;
+    person: number;
+    at: string;
+  };
   problem: ProblemTable;
   change: {
     id: Generated<number>;

@@ -1,11 +1,14 @@
 import 'server-only';
 import type { z } from 'zod';
+import { db } from '@/db/client';
+import { listCombinations } from '@/db/queries/combinations';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import type { Person } from '@/lib/access/may';
 import { ApiError, notFound } from '@/lib/api/error';
 import type { changesInput } from '@/lib/api/inputs';
 import type { Change } from '@/lib/changes/change';
 import { changeWords } from '@/lib/changes/change-words';
+import { mostRowsWritten } from '@/lib/changes/list-combinations';
 import { settingText } from '@/lib/changes/setting-text';
 import { readSetting, saysTheSame } from '@/lib/changes/setting-value';
 import { settingWords, type Settings } from '@/lib/model/settings';
@@ -25,6 +28,7 @@ export async function makeChange(
 ): Promise<string> {
   const settings = requireRead(revision);
   refuse(changes, settings);
+  await refuseUnknown(changes, revision);
   const made = await askForChange(queue(), serverDatabase(), person.office, {
     from: revision.id,
     person: person.id,
@@ -47,7 +51,13 @@ export function requireRead({ state, settings, input, frames }: RevisionRecord):
 
 function refuse(changes: readonly Change[], settings: Settings): void {
   const fields: Record<string, string[]> = {};
-  for (const { setting, value } of changes) {
+  for (const change of changes) {
+    if (change.kind === 'list combinations') {
+      if (settings.combinationSet === null)
+        fields['combinations'] = ['No combination set is chosen, so nothing is generated. All combinations are listed already.'];
+      continue;
+    }
+    const { setting, value } = change;
     const { refused } = readSetting(setting, value);
     const already = `${settingWords[setting]} is ${settingText(setting, settings) ?? value} already. Choose another value, or leave it out.`;
     const sentence = refused ?? (saysTheSame(settings, setting, value) ? already : null);
@@ -55,4 +65,25 @@ function refuse(changes: readonly Change[], settings: Settings): void {
   }
   const [first] = Object.values(fields);
   if (first) throw new ApiError('bad-request', first[0] ?? '', { fields });
+}
+
+/** Names that are no generated combination of the revision: they may be of an earlier look at it. */
+async function refuseUnknown(changes: readonly Change[], revision: RevisionRecord): Promise<void> {
+  for (const change of changes) {
+    if (change.kind !== 'list combinations') continue;
+    const { list } = await listCombinations(db(), revision.office, revision.id, mostRowsWritten);
+    const names = new Set(list.flatMap(({ name, clause }) => (clause === null ? [] : [name])));
+    const asked = [...change.leaveOut, ...change.factors.map(({ combination }) => combination)];
+    const unknown = asked.find((name) => !names.has(name));
+    const sentence =
+      unknown !== undefined
+        ? `${unknown} is no generated combination of this revision. Open it again.`
+        : names.size === 0
+          ? 'Nothing is generated in this revision.'
+          : list.reduce((sum, { frames }) => sum + frames, 0) > mostRowsWritten &&
+              list.some(({ frames }) => frames !== revision.frames - revision.framesStopped)
+            ? 'Too many rows would be written. List the combinations in the sheets.'
+            : null;
+    if (sentence !== null) throw new ApiError('bad-request', sentence, { fields: { combinations: [sentence] } });
+  }
 }

@@ -3,8 +3,10 @@ import { instant } from '@/db/clock';
 import { packModel } from '@/db/encode';
 import { ListWriter } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
+import { insertCombinations } from '@/db/queries/combinations';
 import { evaluationOf, type StoredState } from '@/db/queries/results';
 import { inShortTransactions } from '@/db/short-transactions';
+import { shownCombinations } from '@/lib/combinations/shown-combinations';
 import type { FrameRead, Intake } from '@/lib/intake/intake';
 import type { Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
@@ -65,6 +67,8 @@ export function insertIntake(raw: RawDatabase, office: number, revision: number,
     ),
   );
   insertProblems(raw, revision, intake.problems);
+  const read = intake.frames.flatMap(({ frame }) => frame ?? []);
+  insertCombinations(raw, revision, shownCombinations(read, intake.settings.combinationSet));
   const carried = insertFrames(raw, revision, found, intake);
   const stopped = intake.frames.filter((one) => one.frame === null).length;
   const count = (severity: string) => intake.problems.filter((one) => one.severity === severity).length;
@@ -196,7 +200,7 @@ function whoseWork(raw: RawDatabase, { person, madeFrom }: Owner) {
 /** Takes away what a reading that was cut short left behind. */
 function clear(raw: RawDatabase, revision: number): void {
   const tables = [
-    'input_row', 'sheet_read', 'problem', 'member_row', 'check_row', 'reaction_row', 'movement_row', 'frame_result', 'frame_peak', 'tally', 'revision_frame',
+    'input_row', 'sheet_read', 'combination_read', 'problem', 'member_row', 'check_row', 'reaction_row', 'movement_row', 'frame_result', 'frame_peak', 'tally', 'revision_frame',
   ]; // prettier-ignore
   inShortTransactions(raw, tables, (table) => raw.prepare(`delete from ${table} where revision = ?`).run(revision));
 }

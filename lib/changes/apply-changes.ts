@@ -1,5 +1,6 @@
 import type { Change } from '@/lib/changes/change';
 import { changeSetting } from '@/lib/changes/change-setting';
+import { listCombinations } from '@/lib/changes/list-combinations';
 import type { StoredInput } from '@/lib/intake/rows/input-rows';
 
 /**
@@ -16,5 +17,7 @@ function applyOne(input: StoredInput, change: Change, by: string): StoredInput {
   switch (change.kind) {
     case 'setting':
       return changeSetting(input, change, by);
+    case 'list combinations':
+      return listCombinations(input, change, by);
   }
 }

@@ -14,6 +14,7 @@ import type { RevisionRecord } from '@/db/queries/revisions';
 import { may, type Person } from '@/lib/access/may';
 import { api, pages } from '@/lib/api/addresses';
 import { RevisionHead } from '../_head/revision-head';
+import { Combinations } from './combinations';
 import { ProblemsByCell } from './problems-by-cell';
 import { Reading } from './reading';
 import { RunGood } from './run-good';
@@ -110,6 +111,7 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
           </p>
         )}
       </Zone>
+      <Combinations person={person} revision={revision} />
       <RunGood
         batch={batch}
         letter={letter}

@@ -1,0 +1,98 @@
+import type { CombinationShown } from '@/lib/combinations/shown-combinations';
+
+/** What is to be written otherwise than it was generated. */
+export interface CombinationEdits {
+  /** Names. */
+  readonly leftOut: ReadonlySet<string>;
+  /** As typed, by `combination|case`. */
+  readonly factors: Readonly<Record<string, string>>;
+}
+
+interface CombinationTableProps {
+  readonly combinations: readonly CombinationShown[];
+  /** Frames that were read: a combination of fewer says of how many it is. */
+  readonly frames: number;
+  /** Given together with `onEdit`: generated rows may be left out and their factors typed. */
+  readonly edits?: CombinationEdits;
+  readonly onEdit?: (edits: CombinationEdits) => void;
+}
+
+/** Combinations with the factor on each case, and the clause each comes from. */
+export function CombinationTable({ combinations, frames, edits, onEdit }: CombinationTableProps) {
+  const cases = [...new Set(combinations.flatMap(({ terms }) => terms.map((term) => term.case)))];
+  const some = combinations.some((each) => each.frames !== frames);
+  return (
+    <div className="tbl-wrap max-h-[32rem] overflow-y-auto" role="region" tabIndex={0} aria-label="Combinations">
+      <table className="tbl tbl-tight">
+        <caption className="sr-only">Combinations, with the factor on each load case</caption>
+        <thead>
+          <tr>
+            {edits && <th scope="col">Keep</th>}
+            <th scope="col">Combination</th>
+            <th scope="col">Purpose</th>
+            {cases.map((name) => (
+              <th key={name} scope="col" className="num">
+                {name}
+              </th>
+            ))}
+            <th scope="col">From</th>
+            {some && (
+              <th scope="col" className="num">
+                Frames
+              </th>
+            )}
+          </tr>
+        </thead>
+        <tbody>
+          {combinations.map((each, i) => (
+            <tr key={`${i} ${each.name}`}>
+              {edits && onEdit && (
+                <td>
+                  {each.clause !== null && (
+                    <input
+                      type="checkbox"
+                      aria-label={`Keep ${each.name}`}
+                      checked={!edits.leftOut.has(each.name)}
+                      onChange={(event) => onEdit({ ...edits, leftOut: without(edits.leftOut, each.name, event.target.checked) })}
+                    />
+                  )}
+                </td>
+              )}
+              <th scope="row">{each.name}</th>
+              <td>{each.purpose}</td>
+              {cases.map((name) => (
+                <td key={name} className="num">
+                  {edits && onEdit && each.clause !== null && factorOf(each, name) !== '' ? (
+                    <input
+                      className="field-input w-20 text-right"
+                      inputMode="decimal"
+                      aria-label={`Factor on ${name} in ${each.name}`}
+                      disabled={edits.leftOut.has(each.name)}
+                      value={edits.factors[`${each.name}|${name}`] ?? factorOf(each, name)}
+                      onChange={(event) =>
+                        onEdit({ ...edits, factors: { ...edits.factors, [`${each.name}|${name}`]: event.target.value } })
+                      }
+                    />
+                  ) : (
+                    factorOf(each, name)
+                  )}
+                </td>
+              ))}
+              <td>{each.clause ?? 'listed'}</td>
+              {some && <td className="num">{each.frames.toLocaleString('en-GB')}</td>}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
+
+function without(leftOut: ReadonlySet<string>, name: string, kept: boolean): ReadonlySet<string> {
+  return kept ? new Set([...leftOut].filter((one) => one !== name)) : new Set([...leftOut, name]);
+}
+
+function factorOf({ terms }: CombinationShown, name: string): string {
+  const factor = terms.find((term) => term.case === name)?.factor;
+  return factor === undefined ? '' : String(factor).replace('-', '−');
+}
