@@ -1,9 +1,10 @@
 import type { Check } from '@/lib/results/result';
 import type { Basis } from './basis';
 import type { BendingStrength } from './bending-strength';
-import type { TorsionalMode } from './compression-strength';
+import type { SlenderPart, TorsionalMode } from './compression-strength';
 import type { MemberStrength } from './member-strength';
 import type { GoverningSegment } from './segment-moment';
+import { c2 } from './slender-elements';
 import { USUAL, type Factors } from './strength';
 
 /** What the working of each clause prints, SI, by the standard's symbols. */
@@ -69,18 +70,26 @@ export function slenderInputs({ basis, compression }: MemberStrength, Pr: number
     Fe: slender.from === 'E4' ? (torsional?.Fe ?? null) : flexural.Fe,
     slenderness: slender.from === 'E3' ? flexural.slenderness : null,
     Fn: slender.Fn,
-    flangeLambda: slender.flange?.lambda ?? null,
-    flangeLambdaR: slender.flange?.lambdaR ?? null,
-    flangeRatio: slender.flange?.ratio ?? null,
-    flangeLost: slender.flange?.lost ?? null,
-    webLambda: slender.web?.lambda ?? null,
-    webLambdaR: slender.web?.lambdaR ?? null,
-    webRatio: slender.web?.ratio ?? null,
-    webLost: slender.web?.lost ?? null,
+    ...partInputs('flange', slender.flange),
+    ...partInputs('web', slender.web),
     Ae: slender.Ae,
     Pn: slender.Pn,
     Pc: slender.Pc,
     Pr,
+  };
+}
+
+function partInputs(plate: 'flange' | 'web', part: SlenderPart | null): Inputs {
+  if (part === null) return {};
+  const { lambda, lambdaR, ratio, lost, c1, Fel } = part;
+  return {
+    [`${plate}Lambda`]: lambda,
+    [`${plate}LambdaR`]: lambdaR,
+    [`${plate}Ratio`]: ratio,
+    [`${plate}Lost`]: lost,
+    [`${plate}C1`]: c1,
+    [`${plate}C2`]: c1 === null ? null : c2(c1),
+    [`${plate}Fel`]: Fel,
   };
 }
 

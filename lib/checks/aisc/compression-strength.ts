@@ -1,7 +1,7 @@
 import type { CodeMember } from '../design-code/code-member';
 import type { Basis } from './basis';
 import { elasticBucklingStress, nominalStress } from './flexural-buckling';
-import { C1, effectiveAreaRatioOfRound, effectiveWidthRatio } from './slender-elements';
+import { C1, effectiveAreaRatioOfRound, effectiveWidthRatio, localBucklingStress } from './slender-elements';
 import { available, USUAL } from './strength';
 import { torsionalBucklingStress } from './torsional-buckling';
 import { compressionLimits } from './width-limits';
@@ -33,6 +33,9 @@ export interface SlenderPart {
   readonly lambdaR: number;
   readonly ratio: number;
   readonly lost: number;
+  /** Of Table E7.1, and F_el (E7-5); null for round walls. */
+  readonly c1: number | null;
+  readonly Fel: number | null;
 }
 
 export interface SlenderElements {
@@ -122,11 +125,15 @@ function slenderElements(of: Basis, Fn: number, from: 'E3' | 'E4'): SlenderEleme
   if (plates.shape === 'chs') {
     const ratio = effectiveAreaRatioOfRound(of.EperFy, plates.flange);
     if (ratio === null) return 'not covered';
-    return withArea({ lambda: plates.flange, lambdaR: limits.flange, ratio, lost: of.Ag * (1 - ratio) }, null);
+    return withArea(
+      { lambda: plates.flange, lambdaR: limits.flange, ratio, lost: of.Ag * (1 - ratio), c1: null, Fel: null },
+      null,
+    );
   }
   const part = (c1: number, lambda: number, lambdaR: number, thickness: number, count: number): SlenderPart => {
     const ratio = effectiveWidthRatio(c1, lambda, lambdaR, of.Fy, Fn);
-    return { lambda, lambdaR, ratio, lost: count * (1 - ratio) * lambda * thickness * thickness };
+    const Fel = localBucklingStress(c1, lambda, lambdaR, of.Fy);
+    return { lambda, lambdaR, ratio, lost: count * (1 - ratio) * lambda * thickness * thickness, c1, Fel };
   };
   const box = plates.shape === 'rhs';
   const [flangeThickness, webThickness] = box ? [d.t ?? NaN, d.t ?? NaN] : [d.tf ?? NaN, d.tw ?? NaN];

@@ -44,6 +44,7 @@ export function shearStrength(of: Basis, length_m: number): ShearStrength {
       Fcr,
       Ag: of.Ag,
       D,
+      t: d.t ?? NaN,
       Dt: plates.flange,
       Lv: length_m,
     });
@@ -53,16 +54,23 @@ export function shearStrength(of: Basis, length_m: number): ShearStrength {
     const t = d.t ?? NaN;
     const Aw = 2 * ht * t * t;
     const Cv = shearBucklingCoefficient(EperFy, ht, KV_BOX);
-    return strength('G4', 'AISC 360-22 G4, (G4-1), (G2-9) to (G2-11)', nominal(Fy, Aw, Cv), USUAL, { Aw, Cv, kv: KV_BOX, ht });
+    return strength('G4', 'AISC 360-22 G4, (G4-1), (G2-9) to (G2-11)', nominal(Fy, Aw, Cv), USUAL, {
+      Aw,
+      Cv,
+      kv: KV_BOX,
+      ht,
+      width: ht * t,
+      t,
+    });
   }
   if (turned) {
     const Aw = 2 * (d.b ?? NaN) * (d.tf ?? NaN);
     const Cv = shearBucklingCoefficient(EperFy, plates.flange, KV_FLANGE);
-    const details = { Aw, Cv, kv: KV_FLANGE, ht: plates.flange };
+    const details = { Aw, Cv, kv: KV_FLANGE, ht: plates.flange, width: d.b ?? NaN, t: d.tf ?? NaN };
     return strength('G6', 'AISC 360-22 G6, (G6-1), (G2-9) to (G2-11)', nominal(Fy, Aw, Cv), USUAL, details);
   }
   const { Cv1, factors } = webShearCoefficient(EperFy, plates.web, of.rolledI);
   const Aw = (d.h ?? NaN) * (d.tw ?? NaN);
-  const details = { Aw, Cv: Cv1, kv: KV_WEB, ht: plates.web };
+  const details = { Aw, Cv: Cv1, kv: KV_WEB, ht: plates.web, width: d.h ?? NaN, t: d.tw ?? NaN };
   return strength('G2', 'AISC 360-22 G2.1, (G2-1) to (G2-4)', nominal(Fy, Aw, Cv1), factors, details);
 }

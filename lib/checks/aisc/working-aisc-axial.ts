@@ -92,56 +92,7 @@ export function torsionalLines(sheet: Sheet): readonly WorkingLine[] {
   ];
 }
 
-/** Slender elements by E7. */
-export function slenderLines(sheet: Sheet): readonly WorkingLine[] {
-  return [
-    required(sheet),
-    line(
-      `elastic buckling stress of the member, by ${sheet.word('from') ?? ''}`,
-      sheet.given([symbol('L', 'c/r'), 'slenderness', 'number'], [F_e, 'Fe', 'stress']),
-      sheet.word('from') === 'E4' ? '(E4-2)' : '(E3-4)',
-    ),
-    nominalStressLine(sheet),
-    ...slenderPart(sheet, 'flange', sheet.word('shape') === 'chs' ? 'wall' : 'flange'),
-    ...slenderPart(sheet, 'web', 'web'),
-    line(
-      'effective area',
-      [
-        symbol('A', 'e'),
-        equals,
-        ...sheet.shown('Ag', 'area'),
-        ...(['flangeLost', 'webLost'] as const).flatMap((name) =>
-          sheet.number(name) ? [text('−'), ...sheet.shown(name, 'area')] : [],
-        ),
-        equals,
-        ...sheet.shown('Ae', 'area'),
-      ],
-      'E7',
-    ),
-    nominalLine(sheet, 'Ae', symbol('A', 'e'), '(E7-1)'),
-    availableLine(sheet, 'P', ['Pn', 'Pc'], 'force'),
-  ];
-}
-
-function slenderPart(sheet: Sheet, plate: 'flange' | 'web', name: string): readonly WorkingLine[] {
-  if (sheet.number(`${plate}Lambda`) === null) return [];
-  const round = sheet.word('shape') === 'chs';
-  return [
-    line(
-      `slender ${name}`,
-      [
-        ...sheet.given([symbol('λ'), `${plate}Lambda`, 'number'], [symbol('λ', 'r'), `${plate}LambdaR`, 'number']),
-        text(':'),
-        fraction([symbol(round ? 'A' : 'b', 'e')], [round ? A_g : symbol('b')]),
-        equals,
-        ...sheet.shown(`${plate}Ratio`, 'number'),
-      ],
-      round ? '(E7-7)' : '(E7-2) to (E7-5), Table E7.1',
-    ),
-  ];
-}
-
-function required(sheet: Sheet): WorkingLine {
+export function required(sheet: Sheet): WorkingLine {
   return line('required strength', sheet.given([symbol('P', 'r'), 'Pr', 'force']));
 }
 
@@ -177,7 +128,7 @@ function elasticStress(sheet: Sheet): WorkingLine {
   );
 }
 
-function nominalStressLine(sheet: Sheet): WorkingLine {
+export function nominalStressLine(sheet: Sheet): WorkingLine {
   const [Fy, Fe] = [sheet.number('Fy') ?? NaN, sheet.number('Fe') ?? NaN];
   const ratio = Fy / Fe;
   if (ratio <= 2.25)
@@ -208,7 +159,7 @@ function nominalStressLine(sheet: Sheet): WorkingLine {
   return line('nominal stress', [F_n, equals, text('0.877'), F_e, equals, text('0.877 ·'), ...sheet.shown('Fe', 'stress'), equals, ...sheet.shown('Fn', 'stress')], '(E3-3)'); // prettier-ignore
 }
 
-function nominalLine(sheet: Sheet, area: 'Ag' | 'Ae', letter: ReturnType<typeof symbol>, source: string): WorkingLine {
+export function nominalLine(sheet: Sheet, area: 'Ag' | 'Ae', letter: ReturnType<typeof symbol>, source: string): WorkingLine {
   return line(
     'nominal strength',
     [P_n, equals, F_n, letter, equals, ...sheet.shown('Fn', 'stress'), times, ...sheet.shown(area, 'area'), equals, ...sheet.shown('Pn', 'force')],

@@ -1,92 +1,141 @@
 import { fraction, root, symbol, text, type WorkingLine, type WorkingPart } from '../working-parts';
-import { equals, F_y, line, squared, times, type Sheet } from './working-aisc-parts';
+import { equals, F_y, line, times, type Sheet } from './working-aisc-parts';
 
 const M_n = symbol('M', 'n');
-const M_p = symbol('M', 'p');
 
-/** The formula of a plate that is not compact. */
+/** The letters of a formula, or the numbers put in for them. */
+interface Terms {
+  readonly Mp: readonly WorkingPart[];
+  readonly Fy: readonly WorkingPart[];
+  readonly E: readonly WorkingPart[];
+  readonly S: readonly WorkingPart[];
+  readonly Se: readonly WorkingPart[];
+  readonly kc: readonly WorkingPart[];
+  readonly lambda: readonly WorkingPart[];
+  readonly lambdaP: readonly WorkingPart[];
+  readonly lambdaR: readonly WorkingPart[];
+  /** Between two factors: a dot between numbers. */
+  readonly by: readonly WorkingPart[];
+}
+
+const letters: Terms = {
+  Mp: [symbol('M', 'p')],
+  Fy: [F_y],
+  E: [symbol('E')],
+  S: [symbol('S')],
+  Se: [symbol('S', 'e')],
+  kc: [symbol('k', 'c')],
+  lambda: [symbol('λ')],
+  lambdaP: [symbol('λ', 'p')],
+  lambdaR: [symbol('λ', 'r')],
+  by: [],
+};
+
+const numbers = (sheet: Sheet, plate: 'flange' | 'web'): Terms => ({
+  Mp: sheet.shown('Mp', 'moment'),
+  Fy: sheet.shown('Fy', 'stress'),
+  E: sheet.shown('E', 'stress'),
+  S: sheet.shown('S', 'modulus'),
+  Se: sheet.shown('Se', 'modulus'),
+  kc: sheet.shown('kc', 'number'),
+  lambda: sheet.shown(`${plate}Lambda`, 'number'),
+  lambdaP: sheet.shown(`${plate}LambdaP`, 'number'),
+  lambdaR: sheet.shown(`${plate}LambdaR`, 'number'),
+  by: [times],
+});
+
+type Formula = (of: Terms) => readonly WorkingPart[];
+
+const squaredOf = (of: Terms): readonly WorkingPart[] => [text('('), ...of.lambda, text(')²')];
+/** M_p − (M_p − 0.7 F_y S)(λ − λ_p)/(λ_r − λ_p). */
+const straight: Formula = (of) => [
+  ...of.Mp,
+  text('− ('),
+  ...of.Mp,
+  text('− 0.7'),
+  ...of.by,
+  ...of.Fy,
+  ...of.by,
+  ...of.S,
+  text(')'),
+  fraction([...of.lambda, text('−'), ...of.lambdaP], [...of.lambdaR, text('−'), ...of.lambdaP]),
+];
+/** M_p − (M_p − F_y S)(k λ √(F_y/E) − less). */
+const ofBox =
+  (k: string, less: string): Formula =>
+  (of) => [
+    ...of.Mp,
+    text('− ('),
+    ...of.Mp,
+    text('−'),
+    ...of.Fy,
+    ...of.by,
+    ...of.S,
+    text(`)(${k}`),
+    ...of.by,
+    ...of.lambda,
+    root(fraction(of.Fy, of.E)),
+    text(`− ${less}) ≤`),
+    ...of.Mp,
+  ];
+const F3Slender: Formula = (of) => [
+  fraction([text('0.9'), ...of.by, ...of.E, ...of.by, ...of.kc, ...of.by, ...of.S], squaredOf(of)),
+];
+const F6Slender: Formula = (of) => [fraction([text('0.69'), ...of.by, ...of.E], squaredOf(of)), ...of.by, ...of.S];
+const F7Slender: Formula = (of) => [...of.Fy, ...of.by, ...of.Se];
+const F8Noncompact: Formula = (of) => [
+  text('('),
+  fraction([text('0.021'), ...of.by, ...of.E], of.lambda),
+  text('+'),
+  ...of.Fy,
+  text(')'),
+  ...of.by,
+  ...of.S,
+  text('≤'),
+  ...of.Mp,
+];
+const F8Slender: Formula = (of) => [
+  fraction([text('0.33'), ...of.by, ...of.E], of.lambda),
+  ...of.by,
+  ...of.S,
+  text('≤'),
+  ...of.Mp,
+];
+
+const formulas: Readonly<Record<string, readonly [Formula, string]>> = {
+  'F3 noncompact': [straight, '(F3-1)'],
+  'F3 slender': [F3Slender, '(F3-2)'],
+  'F6 noncompact': [straight, '(F6-2)'],
+  'F6 slender': [F6Slender, '(F6-3), (F6-4)'],
+  'F7 noncompact': [ofBox('3.57', '4.0'), '(F7-2)'],
+  'F7 slender': [F7Slender, '(F7-3)'],
+  'F8 noncompact': [F8Noncompact, '(F8-2)'],
+  'F8 slender': [F8Slender, '(F8-3), (F8-4)'],
+};
+
+/** Local buckling of the plates that are not compact: formula, numbers, moment. */
 export function localBuckling(sheet: Sheet, clause: string): readonly WorkingLine[] {
   const lines: WorkingLine[] = [];
-  const flange = sheet.word('flangeClass');
-  if (flange === 'noncompact' || flange === 'slender') {
-    const [parts, source] = flangeFormula(sheet, clause, flange);
-    lines.push(
-      ...(clause === 'F7' && flange === 'slender'
-        ? [
-            line(
-              'effective flange',
-              sheet.given([symbol('b', 'e'), 'be', 'dimension'], [symbol('S', 'e'), 'Se', 'modulus']),
-              '(F7-4), both flanges reduced',
-            ),
-          ]
-        : []),
-      line(clause === 'F8' ? 'local buckling' : 'flange local buckling', [M_n, equals, ...parts, equals, ...sheet.shown('flangeMoment', 'moment')], source), // prettier-ignore
-    );
+  const found = formulas[`${clause} ${sheet.word('flangeClass') ?? ''}`];
+  if (found) {
+    const [formula, source] = found;
+    const what = clause === 'F8' ? 'local buckling' : 'flange local buckling';
+    if (sheet.number('Se') !== null) {
+      const given = sheet.given([symbol('b', 'e'), 'be', 'dimension'], [symbol('S', 'e'), 'Se', 'modulus']);
+      lines.push(line('effective flange', given, '(F7-4), both flanges reduced'));
+    }
+    lines.push(momentLine(sheet, what, formula, 'flange', source));
   }
   if (clause === 'F7' && sheet.word('webClass') === 'noncompact')
-    lines.push(
-      line(
-        'web local buckling',
-        [
-          M_n,
-          equals,
-          M_p,
-          text('− ('),
-          M_p,
-          text('−'),
-          F_y,
-          symbol('S'),
-          text(')(0.305'),
-          symbol('λ'),
-          root(fraction([F_y], [symbol('E')])),
-          text('− 0.738) ='),
-          ...sheet.shown('webMoment', 'moment'),
-        ],
-        '(F7-6)',
-      ),
-    );
+    lines.push(momentLine(sheet, 'web local buckling', ofBox('0.305', '0.738'), 'web', '(F7-6)'));
   return lines;
 }
 
-function flangeFormula(sheet: Sheet, clause: string, flange: 'noncompact' | 'slender'): [readonly WorkingPart[], string] {
-  const lambda = symbol('λ');
-  const S = symbol('S');
-  if (clause === 'F8')
-    return flange === 'slender'
-      ? [[fraction([text('0.33'), symbol('E')], [lambda]), S], '(F8-3), (F8-4)']
-      : [[text('('), fraction([text('0.021'), symbol('E')], [lambda]), text('+'), F_y, text(')'), S, text('≤'), M_p], '(F8-2)'];
-  if (clause === 'F7')
-    return flange === 'slender'
-      ? [[F_y, symbol('S', 'e'), equals, ...sheet.shown('Fy', 'stress'), times, ...sheet.shown('Se', 'modulus')], '(F7-3)']
-      : [[M_p, text('− ('), M_p, text('−'), F_y, S, text(')(3.57'), lambda, root(fraction([F_y], [symbol('E')])), text('− 4.0)')], '(F7-2)']; // prettier-ignore
-  if (flange === 'noncompact')
-    return [
-      [
-        M_p,
-        text('− ('),
-        M_p,
-        text('− 0.7'),
-        F_y,
-        S,
-        text(')'),
-        fraction([lambda, text('−'), symbol('λ', 'p')], [symbol('λ', 'r'), text('−'), symbol('λ', 'p')]),
-        equals,
-        ...sheet.shown('Mp', 'moment'),
-        text('− ('),
-        ...sheet.shown('Mp', 'moment'),
-        text('− 0.7 ·'),
-        ...sheet.shown('Fy', 'stress'),
-        times,
-        ...sheet.shown('S', 'modulus'),
-        text(')'),
-        fraction(
-          [...sheet.shown('flangeLambda', 'number'), text('−'), ...sheet.shown('flangeLambdaP', 'number')],
-          [...sheet.shown('flangeLambdaR', 'number'), text('−'), ...sheet.shown('flangeLambdaP', 'number')],
-        ),
-      ],
-      clause === 'F6' ? '(F6-2)' : '(F3-1)',
-    ];
-  return clause === 'F6'
-    ? [[fraction([text('0.69'), symbol('E')], [squared('λ')]), S], '(F6-3), (F6-4)']
-    : [[fraction([text('0.9'), symbol('E'), symbol('k', 'c'), S], [squared('λ')]), text('with'), ...sheet.given([symbol('k', 'c'), 'kc', 'number'])], '(F3-2)']; // prettier-ignore
+function momentLine(sheet: Sheet, what: string, formula: Formula, plate: 'flange' | 'web', source: string): WorkingLine {
+  const put = formula(numbers(sheet, plate));
+  return line(
+    what,
+    [M_n, equals, ...formula(letters), equals, ...put, equals, ...sheet.shown(`${plate}Moment`, 'moment')],
+    source,
+  );
 }

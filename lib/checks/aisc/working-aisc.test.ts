@@ -139,6 +139,14 @@ describe('the working of a clause, from its inputs only', () => {
     expect(sources(working(memberOf('W24X55', 10), { shear: 5 }, 'G2 shear'))).toContain('G2.1(b), (G2-3), (G2-4)');
     expect(sources(working(memberOf('W18X50', 10), { shear: 5 }, 'G2 shear', 'ASD'))).toContain('G2.1(a), (G2-2)');
     expect(sources(working(memberOf('HSS8X8X3/8', 10), { shear: 5 }, 'G4 shear'))).toContain('(G4-1)');
+    const thinner = (name: string, change: object): ReturnType<typeof memberOf> => {
+      const section = librarySectionOf(name);
+      return memberOf({ ...section, dimensions: { ...section.dimensions!, ...change } }, 10);
+    };
+    const shear = { shear: 5 };
+    expect(sources(working(thinner('W18X50', { tw: 0.006 }), shear, 'G2 shear'))).toContain('(G2-4)');
+    expect(sources(working(thinner('HSS12X4X1/4', { t: 0.0045 }), shear, 'G4 shear'))).toContain('(G2-10)');
+    expect(sources(working(thinner('HSS12X4X1/4', { t: 0.003 }), shear, 'G4 shear'))).toContain('(G2-11)');
     expect(
       working(memberOf('W18X50', 10, { turned: true }), { shear: 5 }, 'G6 shear').some((line) => line.startsWith('flange')),
     ).toBe(true);

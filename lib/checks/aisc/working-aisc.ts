@@ -1,8 +1,10 @@
 import type { Check } from '@/lib/results/result';
 import { fraction, symbol, text, type Printer, type WorkingLine } from '../working-parts';
-import { flexuralLines, slenderLines, tensionLines, torsionalLines } from './working-aisc-axial';
+import { flexuralLines, tensionLines, torsionalLines } from './working-aisc-axial';
 import { bendingLines } from './working-aisc-bending';
-import { availableLine, equals, F_y, line, sheetOf, times, type Sheet } from './working-aisc-parts';
+import { roundShearLines, shearLines } from './working-aisc-shear';
+import { slenderLines } from './working-aisc-slender';
+import { equals, line, sheetOf, times, type Sheet } from './working-aisc-parts';
 
 /** The calculation of one row of AISC 360-22, from the check's inputs only; null where the check is none of it. */
 export function aiscWorking(check: Check, print: Printer): readonly WorkingLine[] | null {
@@ -35,78 +37,6 @@ export function aiscWorking(check: Check, print: Printer): readonly WorkingLine[
     default:
       return [];
   }
-}
-
-const V_n = symbol('V', 'n');
-const requiredShear = (sheet: Sheet): WorkingLine => line('required strength', sheet.given([symbol('V', 'r'), 'Vr', 'force']));
-
-function shearLines(sheet: Sheet): readonly WorkingLine[] {
-  const clause = sheet.word('clause') ?? '';
-  const letter = clause === 'G2' ? 'v1' : 'v2';
-  const rolled =
-    clause === 'G2' && sheet.word('rolled') !== null && (sheet.number('factor') === 1 || sheet.number('factor') === 1.5);
-  const kv = rolled ? [] : ([[symbol('k', 'v'), 'kv', 'number']] as const);
-  return [
-    requiredShear(sheet),
-    line(
-      clause === 'G6' ? 'flange' : 'web',
-      sheet.given([symbol('λ'), 'ht', 'number'], ...kv, [symbol('C', letter), 'Cv', 'number']),
-      rolled ? 'G2.1(a), (G2-2)' : clause === 'G2' ? 'G2.1(b), (G2-3), (G2-4)' : '(G2-9) to (G2-11)',
-    ),
-    line(
-      'nominal strength',
-      [
-        V_n,
-        text('= 0.6'),
-        F_y,
-        symbol('A', 'w'),
-        symbol('C', letter),
-        text('= 0.6 ·'),
-        ...sheet.shown('Fy', 'stress'),
-        times,
-        ...sheet.shown('Aw', 'area'),
-        times,
-        ...sheet.shown('Cv', 'number'),
-        equals,
-        ...sheet.shown('Vn', 'force'),
-      ],
-      `(${clause}-1)`,
-    ),
-    availableLine(sheet, 'V', ['Vn', 'Vc'], 'force'),
-  ];
-}
-
-function roundShearLines(sheet: Sheet): readonly WorkingLine[] {
-  const F_cr = symbol('F', 'cr');
-  return [
-    requiredShear(sheet),
-    line(
-      'critical stress',
-      [
-        ...sheet.given(
-          [symbol('D'), 'D', 'dimension'],
-          [symbol('λ'), 'Dt', 'number'],
-          [symbol('L', 'v'), 'Lv', 'length'],
-          [F_cr, 'Fcr', 'stress'],
-        ),
-      ],
-      '(G5-2a), (G5-2b), not above 0.6 Fy',
-    ),
-    line(
-      'nominal strength',
-      [
-        V_n,
-        equals,
-        fraction([F_cr, symbol('A', 'g')], [text('2')]),
-        equals,
-        fraction([...sheet.shown('Fcr', 'stress'), times, ...sheet.shown('Ag', 'area')], [text('2')]),
-        equals,
-        ...sheet.shown('Vn', 'force'),
-      ],
-      '(G5-1)',
-    ),
-    availableLine(sheet, 'V', ['Vn', 'Vc'], 'force'),
-  ];
 }
 
 function combinedLines(sheet: Sheet): readonly WorkingLine[] {
