@@ -1,6 +1,6 @@
 /**
  * chain.1000.io: sheets to workbook for 1,000 portals, against reading the same file and writing the same rows bare;
- * chain.1000.code.io: the same with a design code and sixty combinations.
+ * chain.1000.code.io: the same with a design code and generated combinations (65 of EN 1990).
  */
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
@@ -59,7 +59,7 @@ async function wholeAgainstBare(rounds: number, code: boolean): Promise<number> 
   const bytes = await portalWorkbook(1000, code);
   const folder = mkdtempSync(join(tmpdir(), 'tallyframe-bench-'));
   try {
-    // with sixty combinations the rows of all would not fit in memory: those of a fifth are written five times
+    // with so many combinations the rows of all would not fit in memory: those of a fifth are written five times
     const times = code ? 5 : 1;
     const rows = await storedChain(code ? await portalWorkbook(1000 / times, code) : bytes, folder, true);
     const [whole = [], bare = []] = await interleaved(
