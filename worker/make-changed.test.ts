@@ -8,7 +8,6 @@ import { findRevision, type RevisionRecord } from '@/db/queries/revisions';
 import { listUploadedFiles, listUploads, insertUpload } from '@/db/queries/uploads';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { changeWords } from '@/lib/changes/change-words';
-import type { Change } from '@/lib/changes/change';
 import { reportSheets } from '@/lib/reports/workbook/report-sheets';
 import { resultsJson } from '@/lib/results/json';
 import { askForChange, askForReading, askForRun } from './ask';
@@ -76,7 +75,11 @@ async function run({ id }: RevisionRecord): Promise<void> {
   await queue.idle();
 }
 
-async function change(from: RevisionRecord, changes: readonly Change[], runIt = true): Promise<RevisionRecord> {
+async function change(
+  from: RevisionRecord,
+  changes: readonly Parameters<typeof changeWords>[0][],
+  runIt = true,
+): Promise<RevisionRecord> {
   const words = changes.map((one) => ({ change: one, ...changeWords(one, from.settings!) }));
   const made = { from: from.id, person: office.person, changes: words, reason: 'to see', run: runIt };
   expect(await askForChange(queue, database, office.office, made)).toBeDefined();

@@ -7,11 +7,13 @@ import type { Person } from '@/lib/access/may';
 import { ApiError, notFound } from '@/lib/api/error';
 import type { changesInput } from '@/lib/api/inputs';
 import type { Change } from '@/lib/changes/change';
-import { changeWords } from '@/lib/changes/change-words';
+import { changeWords, sectionChangeWords, type ChangeWords } from '@/lib/changes/change-words';
 import { mostRowsWritten } from '@/lib/changes/list-combinations';
+import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
 import { readSetting, saysTheSame } from '@/lib/changes/setting-value';
 import { settingWords, type Settings } from '@/lib/model/settings';
+import { previewChanges } from './preview-changes';
 import { askForChange } from '@/worker/ask';
 import { queue, serverDatabase } from '@/worker/boot';
 
@@ -29,10 +31,11 @@ export async function makeChange(
   const settings = requireRead(revision);
   refuse(changes, settings);
   await refuseUnknown(changes, revision);
+  const previews = await previewsOf(person, revision, changes);
   const made = await askForChange(queue(), serverDatabase(), person.office, {
     from: revision.id,
     person: person.id,
-    changes: changes.map((change) => ({ change, ...changeWords(change, settings) })),
+    changes: changes.map((change) => ({ change, ...wordsOf(change, settings, previews) })),
     reason,
     run,
   });
@@ -52,6 +55,7 @@ export function requireRead({ state, settings, input, frames }: RevisionRecord):
 function refuse(changes: readonly Change[], settings: Settings): void {
   const fields: Record<string, string[]> = {};
   for (const change of changes) {
+    if (change.kind === 'section') continue;
     if (change.kind === 'list combinations') {
       if (settings.combinationSet === null)
         fields['combinations'] = ['No combination set is chosen, so nothing is generated. All combinations are listed already.'];
@@ -65,6 +69,22 @@ function refuse(changes: readonly Change[], settings: Settings): void {
   }
   const [first] = Object.values(fields);
   if (first) throw new ApiError('bad-request', first[0] ?? '', { fields });
+}
+
+type Previews = ReadonlyMap<Change, SectionPreview>;
+
+/** What each change of section would do, read in a thread. @throws {ApiError} bad-request where one cannot be done */
+async function previewsOf(person: Person, revision: RevisionRecord, changes: readonly Change[]): Promise<Previews> {
+  if (!changes.some(({ kind }) => kind === 'section')) return new Map();
+  const previews = await previewChanges(person, revision, changes);
+  return new Map(changes.flatMap((change, i): [Change, SectionPreview][] => (previews[i] ? [[change, previews[i]]] : [])));
+}
+
+function wordsOf(change: Change, settings: Settings, previews: Previews): ChangeWords {
+  if (change.kind !== 'section') return changeWords(change, settings);
+  const preview = previews.get(change);
+  if (!preview) throw new RangeError('Expected a preview of each change of section');
+  return sectionChangeWords(change, preview);
 }
 
 /** Names that are no generated combination of the revision: they may be of an earlier look at it. */

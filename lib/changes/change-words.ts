@@ -1,4 +1,6 @@
-import type { Change, ListCombinationsChange } from '@/lib/changes/change';
+import type { Change, ListCombinationsChange, SectionChange } from '@/lib/changes/change';
+import { askedWords } from '@/lib/changes/members-asked';
+import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
 import { readSetting } from '@/lib/changes/setting-value';
 import { settingWords, type Settings } from '@/lib/model/settings';
@@ -14,12 +16,24 @@ export interface ChangeWords {
 }
 
 /** @param before the settings of the revision that is changed */
-export function changeWords(change: Change, before: Settings): ChangeWords {
+export function changeWords(change: Exclude<Change, SectionChange>, before: Settings): ChangeWords {
   if (change.kind === 'list combinations') return { what: 'combinations', ...listedWords(change, before) };
   const { setting, value } = change;
   const read = readSetting(setting, value);
   const to = read.refused === null ? settingText(setting, read.settings) : value;
   return { what: settingWords[setting], from: settingText(setting, before) ?? 'none', to: to ?? value };
+}
+
+/** "section of role rafter (480 members in 240 frames)", "IPE 300, IPE 330", "IPE 360". */
+export function sectionChangeWords({ what }: SectionChange, { from, to, touched, members }: SectionPreview): ChangeWords {
+  const count = (n: number, one: string): string => `${n.toLocaleString('en-GB')} ${n === 1 ? one : `${one}s`}`;
+  const names = [...new Set(from.map(({ before }) => before.section))];
+  const shown = names.length > 4 ? [...names.slice(0, 3), `${names.length - 3} others`] : names;
+  return {
+    what: `section of ${askedWords(what)} (${count(members.length, 'member')} in ${count(touched.length, 'frame')})`,
+    from: shown.join(', '),
+    to,
+  };
 }
 
 /** "analysis: first order → second order" */

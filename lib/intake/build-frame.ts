@@ -16,7 +16,7 @@ import { readNodeLoads } from '@/lib/intake/sheets/node-loads';
 import { readNodes } from '@/lib/intake/sheets/nodes';
 import { readSettlements } from '@/lib/intake/sheets/settlements';
 import { readSupports, zerosAndOnes } from '@/lib/intake/sheets/supports';
-import { absentPlace } from '@/lib/intake/table';
+import { absentPlace, type Row } from '@/lib/intake/table';
 import type { Frame, Material, Section } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
@@ -43,7 +43,16 @@ export class FrameBuilder {
       batch.settings.imperfections !== 'none',
       new GeneratedCombinations(chosenSet(batch), problems),
     );
-    this.limits = new Limits(tables.get('Limits'), batch, batch.settings, batch.origins, this.combinations, reader, problems);
+    this.limits = new Limits(
+      tables.get('Limits'),
+      batch,
+      batch.settings,
+      batch.origins,
+      this.combinations,
+      reader,
+      problems,
+      batch.officeLimits,
+    );
     this.refusedSupports = zerosAndOnes(tables.get('Supports'));
   }
 
@@ -53,8 +62,8 @@ export class FrameBuilder {
     return rows;
   }
 
-  /** The frame in SI; what is wrong with it is told, and the result is then not to be used. */
-  build(entry: FrameEntry): Frame {
+  /** The frame in SI, and the row of each member; what is wrong with it is told, and the result is then not to be used. */
+  build(entry: FrameEntry): { readonly frame: Frame; readonly memberRows: readonly Row[] } {
     const { batch } = this;
     const draft = newDraft(batch, entry);
     readNodes(draft, this.of('Nodes'));
@@ -73,7 +82,7 @@ export class FrameBuilder {
     const { list: combinations, notChecked } = this.combinations.for(entry, draft.cases);
     draft.combinationNames.push(...combinations.map((each) => each.name));
     const limits = this.limits.for(draft);
-    return {
+    const frame: Frame = {
       id: entry.id,
       title: entry.title,
       group: entry.group,
@@ -93,6 +102,7 @@ export class FrameBuilder {
       limits,
       notChecked,
     };
+    return { frame, memberRows: draft.memberRows };
   }
 
   /** Tells what only shows when every frame is read. */

@@ -1,5 +1,5 @@
 /** Rows of the files → frames and problems: the rules of sheets §2, §3, §5 and §7. */
-import type { Batch } from '@/lib/intake/batch';
+import type { Batch, FrameEntry } from '@/lib/intake/batch';
 import { FrameBuilder } from '@/lib/intake/build-frame';
 import { isReadable, VariantReader } from '@/lib/intake/families/variants';
 import type { RawSheet } from '@/lib/intake/files/raw-sheet';
@@ -16,9 +16,11 @@ import { LoadCases } from '@/lib/intake/sheets/load-cases';
 import { Materials } from '@/lib/intake/sheets/materials';
 import { Sections } from '@/lib/intake/sheets/sections';
 import { readSetup } from '@/lib/intake/sheets/setup';
-import { absentPlace, type Part, partPlace, rawCell, type Table } from '@/lib/intake/table';
+import { absentPlace, type Part, partPlace, rawCell, type Row, type Table } from '@/lib/intake/table';
 import { BatchWarnings } from '@/lib/intake/warnings';
 import { sheetKey } from '@/lib/intake/words';
+import type { Frame } from '@/lib/model/frame';
+import type { OfficeLimit } from '@/lib/model/office-limit';
 import type { Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
 import * as say from '@/lib/problems/wording';
@@ -32,6 +34,19 @@ export interface RawInput {
 export interface IntakeOptions {
   /** The office's own settings, where the Setup sheet is silent. */
   readonly office?: Partial<Settings>;
+  /** The office's own limits on movement, where the sheets give none. */
+  readonly officeLimits?: readonly OfficeLimit[];
+  /** Told of every frame whose rows make sense by themselves, with the rows its members stand on (lib/changes). */
+  readonly onFrame?: (seen: FrameSeen) => void;
+}
+
+/** A frame as read, and where its members stand. */
+export interface FrameSeen {
+  readonly entry: FrameEntry;
+  readonly frame: Frame;
+  /** By member of the frame. */
+  readonly memberRows: readonly Row[];
+  readonly batch: Batch;
 }
 
 const byKey = new Map(sheetNames.map((name) => [sheetKey(name), name]));
@@ -68,10 +83,10 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
   const cases = new LoadCases(tables.get('Load cases'), loads, known, [...families.values()], reader, problems);
   const batch: Batch = {
     problems, reader, system, settings: setup.settings, origins: setup.origins, settingPlaces: setup.places, tables, families,
-    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases,
+    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases, officeLimits: options.officeLimits ?? [],
   }; // prettier-ignore
 
-  const read = readFrames(batch);
+  const read = readFrames(batch, options.onFrame);
   const { stopped } = problems;
   return {
     input: raw.identity,
@@ -84,7 +99,7 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
   };
 }
 
-function readFrames(batch: Batch): FrameRead[] {
+function readFrames(batch: Batch, onFrame?: (seen: FrameSeen) => void): FrameRead[] {
   const { problems } = batch;
   const builder = new FrameBuilder(batch);
   const warnings = new BatchWarnings(batch);
@@ -92,8 +107,10 @@ function readFrames(batch: Batch): FrameRead[] {
   for (const entry of batch.frames) {
     if (!entry.run) continue;
     // a variant with a parameter wrong has said so at its cell, and so has a frame with a family's name
-    const frame = isReadable(entry) && !batch.families.has(entry.key) ? builder.build(entry) : null;
+    const built = isReadable(entry) && !batch.families.has(entry.key) ? builder.build(entry) : null;
+    const frame = built?.frame ?? null;
     if (frame) warnings.look(frame, batch.cases.for(entry).sound);
+    if (built && !problems.stopped.has(entry.id)) onFrame?.({ entry, batch, ...built });
     read.push({ id: entry.id, frame: problems.stopped.has(entry.id) ? null : frame });
   }
   builder.finish();

@@ -1,4 +1,5 @@
 /** In a thread of its own with bounded memory: a revision's uploaded files, or an earlier one's changed rows → what they say, stored. */
+import { listOfficeLimits } from '@/db/queries/office-limits';
 import { insertIntake, type IntakeStored } from '@/db/queries/intake';
 import { findMaking } from '@/db/queries/changes';
 import { listUploadedFiles, listUploads } from '@/db/queries/uploads';
@@ -27,6 +28,7 @@ export async function readRevision(task: ReadTask): Promise<IntakeStored> {
   const intake = await readIntake(files, {
     shouldStop: () => performance.now() > until,
     stopsAfter: `${task.deadline_s} s`,
+    officeLimits: await listOfficeLimits(db, task.office),
   });
   return insertIntake(raw, task.office, task.revision, intake);
 }
@@ -40,3 +42,5 @@ export async function recordUnread({ file, office, revision, why }: UnreadTask):
   const { db, raw } = openOnce(file);
   return insertIntake(raw, office, revision, unreadIntake(await listUploads(db, office, revision), why));
 }
+
+export { previewChanges } from './preview-changes';
