@@ -80,7 +80,7 @@ export function compressionStrength(of: Basis, member: CodeMember): CompressionS
   return { flexural, torsional, slender, refused: null, Pc };
 }
 
-export const TORSIONAL = 'E4 torsional buckling';
+const TORSIONAL = 'E4 torsional buckling';
 export const SLENDER = 'B4.1 slender elements';
 
 function mode(of: Basis, Fe: number): Mode {

@@ -90,7 +90,7 @@ export interface Asked {
   readonly change?: Partial<Demand>;
 }
 
-export function demandOf({ tension = 0, compression = 0, shear = 0, moment = 0, Lb = 20, stretch, change }: Asked): Demand {
+function demandOf({ tension = 0, compression = 0, shear = 0, moment = 0, Lb = 20, stretch, change }: Asked): Demand {
   const M = moment * KIPFT;
   return {
     combination: 'C1',
@@ -117,7 +117,7 @@ export function demandOf({ tension = 0, compression = 0, shear = 0, moment = 0, 
   };
 }
 
-export const settingsOf = (strengthCheck: Settings['strengthCheck'], change: Partial<Settings> = {}): Settings => ({
+const settingsOf = (strengthCheck: Settings['strengthCheck'], change: Partial<Settings> = {}): Settings => ({
   ...defaultSettings,
   strengthCheck,
   ...change,

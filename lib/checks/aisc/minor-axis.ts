@@ -22,6 +22,6 @@ export function minorAxisMoment(
 }
 
 /** F_cr of a slender flange (F6-4), Pa. */
-export function minorAxisCriticalStress(E: number, lambda: number): number {
+function minorAxisCriticalStress(E: number, lambda: number): number {
   return (0.69 * E) / lambda ** 2;
 }
