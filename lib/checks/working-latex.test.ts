@@ -22,6 +22,16 @@ describe('a line of calculation', () => {
     );
   });
 
+  it('sets givens apart and what stands behind ^( as an exponent', () => {
+    const given = (letter: string, text_: string): readonly WorkingPart[] => [symbol(letter), text('='), { kind: 'number', text: text_, unit: 'kN·m' }]; // prettier-ignore
+    expect(latexOf([...given('N', '4'), ...given('M', '5')])).toBe(
+      'N = {4}\\,\\mathrm{kN}{\\cdot}\\mathrm{m} \\quad M = {5}\\,\\mathrm{kN}{\\cdot}\\mathrm{m}',
+    );
+    expect(latexOf([text('0.658^('), symbol('F', 'y'), text('/'), symbol('F', 'e'), text(')'), symbol('F', 'y')])).toBe(
+      '0.658^{F_{\\mathrm{y}} / F_{\\mathrm{e}}} F_{\\mathrm{y}}',
+    );
+  });
+
   it('is text that reads the same, fractions in brackets', () => {
     expect(textOf(resistance)).toBe('N_b,Rd = (χ A f_y) / γ_M1 = (0.6120 · 53.80 cm²) / 1.000 = 1,165 kN');
     expect(textOf([symbol('λ̄'), text('='), root(fraction([symbol('A'), symbol('f', 'y')], [symbol('N', 'cr')]))])).toBe(

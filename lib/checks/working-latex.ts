@@ -1,7 +1,35 @@
 import type { WorkingPart } from './working-parts';
 
 /** A line of calculation as LaTeX, for KaTeX: symbols in italics, subscripts and units upright, words as they stand. */
-export const latexOf = (parts: readonly WorkingPart[]): string => parts.map(one).join(' ');
+export function latexOf(parts: readonly WorkingPart[]): string {
+  let line = '';
+  for (let i = 0; i < parts.length; i++) {
+    const part = parts[i]!;
+    const closing = part.kind === 'text' && part.text.endsWith('^(') ? closes(parts, i + 1) : -1;
+    let next = one(part);
+    if (part.kind === 'text' && closing > 0) {
+      // "0.658^(" … ")": what stands between is the exponent
+      const rest = (parts[closing] as { readonly text: string }).text.slice(1);
+      next = `${words(part.text.slice(0, -2))}^{${latexOf(parts.slice(i + 1, closing))}} ${words(rest)}`.trimEnd();
+    }
+    line += line === '' ? next : `${gap(parts[i - 1]!, part, parts[i + 1])}${next}`;
+    if (closing > 0) i = closing;
+  }
+  return line;
+}
+
+/** Place of the text part that closes a bracket opened before `from`; −1 where none does. */
+function closes(parts: readonly WorkingPart[], from: number): number {
+  return parts.findIndex((part, i) => i >= from && part.kind === 'text' && part.text.startsWith(')'));
+}
+
+/** "N = 4 kN  M = 5 kN·m": a figure and the next given stand apart; a figure behind a letter stands a little off it. */
+function gap(before: WorkingPart, part: WorkingPart, after: WorkingPart | undefined): string {
+  const figure = before.kind === 'number' || before.kind === 'result';
+  const given = part.kind === 'symbol' && after?.kind === 'text' && after.text.startsWith('=');
+  if (figure && given) return ' \\quad ';
+  return before.kind === 'symbol' && part.kind === 'number' ? ' \\, ' : ' ';
+}
 
 function one(part: WorkingPart): string {
   switch (part.kind) {
@@ -53,7 +81,7 @@ const number = (text: string): string =>
         .replace(/[\s\u00a0\u202f]+/g, '\\,')}}`
     : `\\text{${escaped(text)}}`;
 
-const powers: Readonly<Record<string, string>> = { '²': '^{2}', '³': '^{3}', '⁴': '^{4}', '⁶': '^{6}', '·': '\\cdot ', '°': '^{\\circ}', '%': '\\%' }; // prettier-ignore
+const powers: Readonly<Record<string, string>> = { '²': '^{2}', '³': '^{3}', '⁴': '^{4}', '⁶': '^{6}', '·': '{\\cdot}', '°': '^{\\circ}', '%': '\\%' }; // prettier-ignore
 
 /** "kN·m", "cm⁴", "N/mm²". */
 const unitOf = (unit: string): string =>

@@ -87,10 +87,13 @@ export type SettingOrigins = Readonly<Record<SettingName, SettingOrigin>>;
 const ofDesignCodes: ReadonlySet<SettingName> = new Set(['gammaM0', 'gammaM1', 'nationalAnnex', 'interaction', 'loadHeight']);
 const ofEurocode: ReadonlySet<SettingName> = new Set(['gammaM0', 'gammaM1', 'nationalAnnex', 'interaction']);
 
+/** Settings that only the check of elastic stress reads. */
+const ofElasticStress: ReadonlySet<SettingName> = new Set(['stressFactor', 'stability']);
+
 /** Whether a setting has a part in the results under the strength check chosen. */
-export function settingMatters(name: SettingName, settings: Settings): boolean {
-  if (settings.strengthCheck === 'EN 1993-1-1') return true;
-  return !(settings.strengthCheck === 'elastic stress' ? ofDesignCodes : ofEurocode).has(name);
+export function settingMatters(name: SettingName, { strengthCheck }: Settings): boolean {
+  if (strengthCheck === 'elastic stress') return !ofDesignCodes.has(name);
+  return !ofElasticStress.has(name) && (strengthCheck === 'EN 1993-1-1' || !ofEurocode.has(name));
 }
 
 /** The settings that cover, screens and results list, in order: those with a part in the results, and any that was given. */
