@@ -2,11 +2,13 @@ import { expect, it } from 'vitest';
 import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
 import { insertActivity, listActivity } from '@/db/queries/activity';
 import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
+import { listCombinations } from '@/db/queries/combinations';
 import { findCompared } from '@/db/queries/compare';
 import { findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
 import { insertIntake } from '@/db/queries/intake';
 import { findLatestJob, insertJob } from '@/db/queries/jobs';
 import { iterateRows, listFacets, listRows } from '@/db/queries/lists';
+import { listOfficeLimits, updateOfficeLimits } from '@/db/queries/office-limits';
 import { findPerson, listPeople } from '@/db/queries/people';
 import { iterateInputRows, listInputRowsAround, listProblems, listSheets } from '@/db/queries/problems';
 import { findProject, listAssigned, listProjects, listProjectsOf, updateAssigned } from '@/db/queries/projects';
@@ -67,6 +69,7 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
   listUploads: ({ db }, asking, of) => listUploads(db, asking, of.revision),
   listUploadedFiles: ({ db }, asking, of) => listUploadedFiles(db, asking, of.revision),
   listProblems: ({ db }, asking, of) => listProblems(db, asking, of.revision),
+  listCombinations: async ({ db }, asking, of) => (await listCombinations(db, asking, of.revision, 10)).list,
   listSheets: ({ db }, asking, of) => listSheets(db, asking, of.revision),
   iterateInputRows: ({ db }, asking, of) => collected(iterateInputRows(db, asking, of.revision)),
   listInputRowsAround: ({ db }, asking, of) =>
@@ -103,6 +106,17 @@ it('lists only the office’s own people, projects and activity', async () => {
   expect((await listPeople(db, own.office)).map((one) => one.name)).toEqual(['Northlight analyst']);
   expect((await listProjects(db, own.office)).map((one) => one.id)).toEqual([own.project]);
   expect(new Set((await listActivity(db, own.office)).map((one) => one.person))).toEqual(new Set(['Northlight analyst']));
+});
+
+it('keeps each office’s limits to itself, in their order', async () => {
+  const { db, own, other } = await twoOffices();
+  const limit = (ratio: number) => ({ appliesTo: 'beam', measure: 'deflection', ratio, source: 'a table' }) as const;
+  await updateOfficeLimits(db, other.office, { person: other.person, limits: [limit(360)] });
+  await updateOfficeLimits(db, own.office, { person: own.person, limits: [limit(200), { ...limit(300), measure: 'sway' }] });
+  expect((await listOfficeLimits(db, own.office)).map(({ ratio }) => ratio)).toEqual([200, 300]);
+  await updateOfficeLimits(db, own.office, { person: own.person, limits: [] });
+  expect(await listOfficeLimits(db, own.office)).toEqual([]);
+  expect(await listOfficeLimits(db, other.office)).toEqual([limit(360)]);
 });
 
 it('changes nothing of another office', async () => {

@@ -17,6 +17,7 @@ describe('who may do what', () => {
     expect(acts.filter((act) => may(of('checker'), act))).toEqual([
       'read projects',
       'read sections',
+      'read limits',
       'read a batch',
       'take results away',
     ]);

@@ -17,6 +17,8 @@ const staff = ['lead', 'analyst', 'checker'] as const;
 const table = {
   'read projects': staff,
   'read sections': staff,
+  'read limits': staff,
+  'change limits': ['lead'],
   'add a project': ['lead', 'analyst'],
   'read a batch': staff,
   'bring sheets in': ['lead', 'analyst'],

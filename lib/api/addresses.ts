@@ -56,6 +56,7 @@ export const api = {
   template: '/api/template',
   people: '/api/people',
   sections: '/api/sections',
+  limits: '/api/limits',
   projects: '/api/projects',
   project: (project: number) => `/api/projects/${project}`,
   assigned: (project: number) => `/api/projects/${project}/people`,

@@ -7,6 +7,7 @@ import type { Sections } from '@/lib/intake/sheets/sections';
 import type { SheetName } from '@/lib/intake/sheet-definitions';
 import type { Row, Table } from '@/lib/intake/table';
 import type { FamilyOrigin } from '@/lib/model/frame';
+import type { OfficeLimit } from '@/lib/model/office-limit';
 import type { SettingName, SettingOrigins, Settings } from '@/lib/model/settings';
 import type { System } from '@/lib/units/quantity';
 
@@ -52,4 +53,6 @@ export interface Batch {
   readonly sections: Sections;
   readonly materials: Materials;
   readonly cases: LoadCases;
+  /** The office's own limits on movement, where the sheets give none. */
+  readonly officeLimits: readonly OfficeLimit[];
 }

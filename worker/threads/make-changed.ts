@@ -1,6 +1,7 @@
 /** A revision made from an earlier one by changes: its rows, its input workbook, and what they say. */
 import type { OpenDatabase } from '@/db/open';
 import { listChanges, type Making } from '@/db/queries/changes';
+import { listOfficeLimits } from '@/db/queries/office-limits';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { deleteUploads, insertUpload, listUploadedFiles } from '@/db/queries/uploads';
 import { inputRows } from '@/db/queries/waiting';
@@ -29,7 +30,10 @@ export async function makeChanged({ db, raw }: OpenDatabase, office: number, rev
   const [{ sha256, size } = { sha256: '', size: 0 }] = identity.files;
   await deleteUploads(db, office, revision);
   await insertUpload(db, office, { revision, ...file, sha256, size, person: making.person });
-  return readRows({ ...after, identity, problems: problems.filter(isOfFile) });
+  return readRows(
+    { ...after, identity, problems: problems.filter(isOfFile) },
+    { officeLimits: await listOfficeLimits(db, office) },
+  );
 }
 
 /** A revision's input as it is kept; of one that an earlier version kept without its sheets, its files are read again. */

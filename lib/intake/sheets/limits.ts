@@ -7,10 +7,12 @@ import type { ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
 import { level, RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { Combinations } from '@/lib/intake/sheets/combinations';
+import { officeLimits } from '@/lib/intake/sheets/office-limits';
 import { type LimitTarget, targetOf } from '@/lib/intake/sheets/limit-target';
 import { type Row, rawCell, type Table } from '@/lib/intake/table';
 import { ratioText } from '@/lib/intake/words';
 import type { Limit, Measure } from '@/lib/model/frame';
+import type { OfficeLimit } from '@/lib/model/office-limit';
 import type { SettingOrigin, Settings } from '@/lib/model/settings';
 import * as say from '@/lib/problems/wording';
 
@@ -39,6 +41,7 @@ export class Limits {
     private readonly combinations: Combinations,
     private readonly reader: Reader,
     private readonly problems: ProblemList,
+    private readonly office: readonly OfficeLimit[],
   ) {
     this.rows = new RowsByFrame('Limits', table, known, reader);
   }
@@ -51,6 +54,11 @@ export class Limits {
       given.push(...this.read(draft, row, at));
     }
     for (const each of this.fromSetup()) if (!given.some((other) => sets(other.limit, each.limit))) given.push(each);
+    const present = this.office.filter(
+      ({ appliesTo }) => appliesTo === '*' || draft.members.some(({ role }) => role === appliesTo),
+    );
+    const office = officeLimits(present, given.map(({ limit }) => limit), this.settings); // prettier-ignore
+    given.push(...office.map((limit) => ({ limit, row: null, level: level.all })));
     const closest = closestOf(draft, given);
     this.tellEquals(draft, closest);
     const list = closest.map((each) => each.limit);
