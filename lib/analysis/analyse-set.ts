@@ -211,5 +211,6 @@ function troubleOf(
 
 function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): StateTrouble {
   const movement = movementWithout(frame, t, solved, slack);
-  return { kind: 'free', movement: movement?.words ?? 'the frame can move freely.', caught: movement?.caught ?? false };
+  const { words = 'the frame can move freely.', caught = false, stretches = [] } = movement ?? {};
+  return { kind: 'free', movement: words, caught, stretches };
 }

@@ -106,7 +106,7 @@ function settled(
       if (!trial.ok) {
         trouble = trial.trouble;
         const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
-        return { ok: false, why, caught: trouble.kind === 'free' && trouble.caught };
+        return trouble.kind === 'free' ? { ...trouble, ok: false, why } : { ok: false, why, caught: false };
       }
       // passes of sets that are left again count too
       iterations += trial.state.method?.iterations ?? 1;

@@ -47,8 +47,8 @@ export type StateTrouble =
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
   /** A member (index) pulled so hard for its I, m⁴, that it is a rope (second-order/ropes.ts). */
   | { readonly kind: 'rope'; readonly member: number; readonly slenderness: number; readonly leastI_m4: number }
-  /** `caught`: whichever way it moves, some tie is stretched. */
-  | { readonly kind: 'free'; readonly movement: string; readonly caught: boolean };
+  /** `caught`: whichever way it moves, some tie is stretched; how far each is (movement-without.ts). */
+  | { readonly kind: 'free'; readonly movement: string; readonly caught: boolean; readonly stretches: readonly number[] };
 
 /** @param name of the state as it is in the results; @param scale times which the loads were applied */
 export function stateFailure(frame: Frame, name: string, scale: number, reduced: boolean, trouble: StateTrouble): Failure {

@@ -12,6 +12,8 @@ export interface MovementWithout {
   readonly words: string;
   /** Whichever way the frame goes, some tension-only member (a slack one too) is stretched. */
   readonly caught: boolean;
+  /** How far each tension-only member (slack ones too), in order, is stretched by it, up to a common factor of any sign. */
+  readonly stretches: readonly number[];
 }
 
 /** Share of the movement below which a tie is not stretched by it. */
@@ -49,5 +51,5 @@ export function movementWithout(
     return [u[3]! - u[0]!];
   });
   const caught = Math.max(...stretches) > unstretched * most && Math.min(...stretches) < -unstretched * most;
-  return { words: `node ${node} can freely ${how}. ${remedy}.`, caught };
+  return { words: `node ${node} can freely ${how}. ${remedy}.`, caught, stretches };
 }

@@ -64,6 +64,12 @@ describe('which ties are slack', () => {
     expect(without(false)).toMatchObject({ ok: false, members: [0, 1], why: { trial: 'it can move' } });
   });
 
+  it('hand over from one that is pressed to the slack one that catches the frame as it shortens', () => {
+    const free = { ok: false, why: 'it can move', caught: true, stretches: [1, -1] } as const;
+    const of: Record<string, ReturnType<typeof forces>> = { '': forces(-5, -1), '0': forces(-1, -3), '1': forces(2, -1) };
+    expect(settleTies([0, 1], (slack) => of[slack.join()] ?? free)).toMatchObject({ ok: true, slack: [1] });
+  });
+
   it('never keep one that is pressed', () => {
     const found = settleTies([0], (slack) => (slack.length ? { ok: false, why: 'it can move', caught: true } : forces(-1)));
     expect(found).toMatchObject({ ok: false, members: [0] });

@@ -13,6 +13,8 @@ export type TieTrial<T> =
       readonly why: string;
       /** The frame moves freely, and whichever way it does, some tie is stretched. */
       readonly caught: boolean;
+      /** How far each tie is stretched as it does, in the order of `ties`, up to a common factor of any sign. */
+      readonly stretches?: readonly number[];
     };
 
 export type SettledTies<T> =
@@ -36,7 +38,8 @@ const mostPasses = 50;
  * All of them change at once first, which settles almost every frame in two or three passes; where a set comes up again, or
  * the frame can't stand with one, it is begun anew with only the worst changing in each pass. There a tie without any force
  * stays taut if the frame could move freely without it and yet some tie would catch it either way: a braced bay under
- * gravity alone.
+ * gravity alone. One that is pressed there gives way to the slack one that would be stretched the most as it shortens: a
+ * storey that leans one way under its own weight.
  *
  * @param ties members, ascending   @param analyse one set of slack members, ascending   @param start slack at first
  */
@@ -118,7 +121,35 @@ function oneByOne<T>(
     }
     slack = next;
     trial = without;
+    const catcher = without.ok ? null : catching(ties, next, worst, without.stretches);
+    if (catcher === null) continue;
+    const swapped = turned(ties, next, [catcher]);
+    if (seen.has(swapped.join())) return stopped('repeated', changed);
+    seen.add(swapped.join());
+    changed.add(catcher);
+    slack = swapped;
+    trial = analyse(swapped);
   }
+}
+
+/** The slack tie that is stretched the most where the frame moves so that `pressed`, just let go, shortens; null if none is. */
+function catching(
+  ties: readonly number[],
+  slack: readonly number[],
+  pressed: number,
+  stretches: readonly number[] | undefined,
+): number | null {
+  const own = stretches?.[ties.indexOf(pressed)] ?? 0;
+  if (!stretches || own === 0) return null;
+  let found: number | null = null;
+  let most = 1e-6 * Math.abs(own);
+  ties.forEach((member, i) => {
+    const stretched = stretches[i]! * (own > 0 ? -1 : 1);
+    if (!slack.includes(member) || !(stretched > most)) return;
+    found = member;
+    most = stretched;
+  });
+  return found;
 }
 
 /** Ties that are on the wrong side. */
