@@ -24,7 +24,7 @@ function linesOf(check: Check, print: Printer): readonly WorkingLine[] {
   if (check.check === 'critical load factor') return check.inputs.f === undefined ? [] : criticalLoadFactorWorking(check, print);
   const clause = codeWorking(check, print);
   if (clause !== null) return clause;
-  if (check.verdict === 'not checked') return [];
+  if (check.verdict === 'not checked' || Object.keys(check.inputs).length === 0) return [];
   return check.quantity === 'stress' ? stressWorking(check, print) : movementWorking(check, print);
 }
 

@@ -83,8 +83,6 @@ export const unknownSetting = (found: string, near: string | null): string =>
   `“${found}” is no setting, so it is not read.${hint(near)}`;
 export const settingTwice = (name: string, row: number): string =>
   `${name} is given in row ${row} too, with another value. Keep one`;
-export const settingNotSupported = (name: string, value: string): string =>
-  `${name} ${value} is not computed by this version, so no frame is run. Nothing simpler is run in its place`;
 export const columnNotSupported = (column: string): string =>
   `${column} is not computed by this version, so the frame is not run. Nothing simpler is run in its place`;
 

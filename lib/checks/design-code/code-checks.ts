@@ -7,6 +7,7 @@ import { SAME } from '../peak';
 import type { Span } from '../spans';
 import { verdictOf } from '../verdict';
 import type { ClauseRow, DesignCode } from './clause-row';
+import type { Demand } from './demand';
 import { codeMemberOf, lengthAssumptions, notOneMember } from './code-member-of';
 import { demandOf, demandSource } from './demand-of';
 import { inPlaneRules } from './in-plane-rule';
@@ -36,16 +37,39 @@ export function checkByCode(
     const member = codeMemberOf(frame, span);
     for (const said of lengthAssumptions(member)) note(said);
     const source = demandSource(frame, member);
-    const demands = states.map(
-      (state, c) =>
-      demandOf(source, state, span.pieces.map((piece) => lines(c, piece.member)), rules[c]!), // prettier-ignore
-    );
+    const demands = states.map((state, c) => {
+      const own = span.pieces.map((piece) => lines(c, piece.member));
+      return demandOf(source, state, own, rules[c]!);
+    });
     const rows = code.rows(member, demands, settings, note);
-    // nothing found is never a pass
-    if (rows.length === 0) refuseMember(span, code.name, states, 'no force in it that a clause could be held against', findings);
-    else keepRows(span, member.member, rows, settings.nearLimit, findings);
+    if (rows.length > 0) keepRows(span, member.member, rows, settings.nearLimit, findings);
+    else if (demands.every((demand) => idle(demand, member.tensionOnly))) {
+      const none = demands.map((demand) => idleRow(code.name, demand));
+      keepRows(span, member.member, none, settings.nearLimit, findings);
+    }
+    // nothing found of a member that carries something is never a pass
+    else refuseMember(span, code.name, states, 'no clause that its forces could be held against', findings);
   }
 }
+
+/** No force in it but what rounding leaves, or what a tension-only member is not pressed by. */
+const idle = ({ tension, compression, shear, moment }: Demand, tensionOnly: boolean): boolean =>
+  tension === 0 && shear === 0 && moment === 0 && (compression === 0 || tensionOnly);
+
+/** A member that carries nothing in a state is within, whatever it is. */
+const idleRow = (name: string, { combination }: Demand): ClauseRow => ({
+  check: name,
+  reference: 'carries no force',
+  combination,
+  at: null,
+  face: null,
+  value: 0,
+  limit: 1,
+  quantity: 'number',
+  ratio: 0,
+  reason: null,
+  inputs: () => ({}),
+});
 
 /** One row, under the code's own name, that says why a member was not checked. */
 export function refuseMember(span: Span, name: string, states: readonly ResultState[], reason: string, findings: Findings): void {

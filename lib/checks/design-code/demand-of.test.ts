@@ -120,7 +120,9 @@ describe('lengths in the plane of the frame', () => {
   });
 
   it('EN 1993-1-1: a blank one stands with second order and imperfections, or α_cr of 10 and more', () => {
-    const rules = (of: ResultState) => inPlaneRules(settings({ strengthCheck: 'EN 1993-1-1' }), of);
+    const chosen = { strengthCheck: 'EN 1993-1-1', imperfections: 'EN 1993-1-1' } as const;
+    const rules = (of: ResultState) => inPlaneRules(settings(chosen), of);
+    expect(inPlaneRules(settings({ ...chosen, imperfections: 'AISC 360' }), second(2)).blank.allowed).toBe(false);
     expect(rules(second(2)).blank.allowed).toBe(true);
     expect(rules(state('C1', 'strength', [], 10)).blank.allowed).toBe(true);
     expect(rules(state('C1', 'strength', [], null)).blank.allowed).toBe(true);

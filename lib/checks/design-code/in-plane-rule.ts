@@ -14,23 +14,24 @@ const no = (why: string): InPlaneRule => ({ allowed: false, why });
 
 /** Whether lengths in the plane of the frame stand for a state by the code chosen in the settings. */
 export function inPlaneRules(settings: Settings, state: ResultState): InPlaneRules {
-  return settings.strengthCheck === 'EN 1993-1-1' ? eurocode(state) : aisc(settings, state);
+  return settings.strengthCheck === 'EN 1993-1-1' ? eurocode(settings, state) : aisc(settings, state);
 }
 
 /**
  * EN 1993-1-1 5.2.2(7): the length of the span needs second order with imperfections, or α_cr ≥ 10 (5.2.1(3)). A length that
  * was typed is the engineer's own.
  */
-function eurocode(state: ResultState): InPlaneRules {
+function eurocode(settings: Settings, state: ResultState): InPlaneRules {
   const typed = yes('length as given');
-  if (state.order === 2 && state.method !== null && state.method.imperfection !== null)
-    return { typed, blank: yes('length of the span: second order with imperfections (5.2.2(7)a)') };
+  // notional loads of another standard are smaller
+  const leans = settings.imperfections === 'EN 1993-1-1' && state.method !== null && state.method.imperfection !== null;
+  if (state.order === 2 && leans) return { typed, blank: yes('length of the span: second order with imperfections (5.2.2(7)a)') };
   const alpha = state.criticalLoadFactor ?? Infinity;
   if (alpha >= 10) return { typed, blank: yes('length of the span: α_cr is 10 or more (5.2.1(3))') };
   return {
     typed,
     blank: no(
-      `needs the length in the plane (blank, with α_cr ${figure(alpha, 'down')} below 10), or second order with imperfections`,
+      `needs the length in the plane (blank, with α_cr ${figure(alpha, 'down')} below 10), or second order with EN 1993-1-1 imperfections`,
     ),
   };
 }
