@@ -8,7 +8,7 @@ import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { api, pages } from '@/lib/api/addresses';
 import { request, RequestError } from '@/lib/api/fetch';
-import { editedFactor } from '@/components/combinations/edited-factor';
+import { editedFactor } from '@/lib/combinations/edited-factor';
 import type { CombinationShown } from '@/lib/combinations/shown-combinations';
 
 interface WriteCombinationsProps {

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { editedFactor } from '@/components/combinations/edited-factor';
+import { editedFactor } from '@/lib/combinations/edited-factor';
 
 test.each([
   ['1.35', 1.35],
