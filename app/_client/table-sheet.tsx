@@ -1,5 +1,6 @@
 'use client';
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
+import Link from 'next/link';
 import { useCallback, useState } from 'react';
 import { ResultTable } from '@/components/tables/result-table';
 import { api, pages } from '@/lib/api/addresses';
@@ -18,6 +19,8 @@ interface TableSheetProps {
   readonly units: System;
   readonly nearLimit: number;
   readonly parameters: readonly ParameterColumn[];
+  /** The person may make the next revision from what is shown. */
+  readonly mayChange: boolean;
   /** The rows that the server read for the address the page was asked with. */
   readonly first: { readonly address: string; readonly page: RowPage };
 }
@@ -27,7 +30,7 @@ interface Facets {
 }
 
 /** One of a revision's tables: the view in the address, its rows from the server. */
-export function TableSheet({ batch, letter, table, units, nearLimit, parameters, first }: TableSheetProps) {
+export function TableSheet({ batch, letter, table, units, nearLimit, parameters, mayChange, first }: TableSheetProps) {
   const { view, at, go, goPage } = useView(table);
   const [facetsWanted, setFacetsWanted] = useState(false);
   const address = rowsAddress(batch, letter, view, at);
@@ -51,24 +54,33 @@ export function TableSheet({ batch, letter, table, units, nearLimit, parameters,
     [batch, letter, listSearch],
   );
   return (
-    <ResultTable
-      view={view}
-      columns={columns}
-      page={rows.data}
-      units={units}
-      nearLimit={nearLimit}
-      loading={rows.isPlaceholderData}
-      error={rows.error?.message ?? null}
-      facets={facets.data && withLabels(facets.data)}
-      onFacets={() => setFacetsWanted(true)}
-      onView={go}
-      onPage={goPage}
-      hrefOf={hrefOf}
-      exports={[
-        { label: 'CSV', href: api.exported(batch, letter, view, 'csv') },
-        { label: 'XLSX', href: api.exported(batch, letter, view, 'xlsx') },
-      ]}
-    />
+    <>
+      {mayChange && table === 'members' && (
+        <p className="change-members no-print">
+          <Link className="link" href={pages.change(batch, letter, view)}>
+            {view.filters.length === 0 ? 'Change a section' : 'Change the section of these members'}
+          </Link>
+        </p>
+      )}
+      <ResultTable
+        view={view}
+        columns={columns}
+        page={rows.data}
+        units={units}
+        nearLimit={nearLimit}
+        loading={rows.isPlaceholderData}
+        error={rows.error?.message ?? null}
+        facets={facets.data && withLabels(facets.data)}
+        onFacets={() => setFacetsWanted(true)}
+        onView={go}
+        onPage={goPage}
+        hrefOf={hrefOf}
+        exports={[
+          { label: 'CSV', href: api.exported(batch, letter, view, 'csv') },
+          { label: 'XLSX', href: api.exported(batch, letter, view, 'xlsx') },
+        ]}
+      />
+    </>
   );
 }
 

@@ -26,12 +26,19 @@ export const pages = {
   project: (project: number) => `/projects/${project}`,
   bring: (project: number) => `/projects/${project}/bring`,
   revision: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}`,
-  sheet: (batch: number, letter: string, sheet: 'read' | 'settings' | 'run' | 'glance' | TableName) =>
+  sheet: (batch: number, letter: string, sheet: 'read' | 'settings' | 'change' | 'run' | 'glance' | TableName) =>
     `/batches/${batch}/${e(letter)}/${sheet}`,
   /** Two revisions compared; what is left out of `chosen` is as the page has it by itself. */
   compare: (batch: number, letter: string, chosen: CompareChosen = {}) =>
     `/batches/${batch}/${e(letter)}/compare${searchOf(chosen)}`,
   next: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/bring`,
+  /** Other sections for members: those of a view, of a frame, or one of its members. */
+  change: (batch: number, letter: string, of: View | { readonly frame: string; readonly member?: string }) =>
+    `/batches/${batch}/${e(letter)}/change${
+      'table' in of
+        ? viewToSearch({ ...of, sort: null, columns: null })
+        : `?frame=${e(of.frame)}${of.member === undefined ? '' : `&member=${e(of.member)}`}`
+    }`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>
@@ -69,6 +76,7 @@ export const api = {
     letter: string,
     part: 'changes' | 'input' | 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'workbook' | 'json' | 'csv',
   ) => `/api/batches/${batch}/revisions/${e(letter)}/${part}`,
+  preview: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/changes/preview`,
   table: (batch: number, letter: string, view: View, more: Readonly<Record<string, string | number>> = {}) =>
     tableAddress(batch, letter, view, '', more),
   facets: (batch: number, letter: string, view: View) => tableAddress(batch, letter, view, '/facets', {}),

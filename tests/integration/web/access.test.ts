@@ -77,6 +77,7 @@ const table: Readonly<Record<string, Line>> = {
   '(desk)/projects/[project]/bring': { who: { GET: makers } },
   [page]: reads(),
   [`${page}/bring`]: { who: { GET: makers } },
+  [`${page}/change`]: { who: { GET: makers } },
   [`${page}/checks`]: reads(),
   [`${page}/compare`]: reads(),
   [`${page}/frames`]: reads(),

@@ -10,7 +10,7 @@ import { MadeFrom } from './made-from';
 import { stateWords } from './state-words';
 import { ResultTools } from './result-tools';
 
-export type SheetName = 'read' | 'settings' | 'run' | 'glance' | TableName;
+export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | TableName;
 
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
@@ -31,7 +31,7 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
       <MadeFrom revision={revision} />
-      {(hasResults || number > 0 || sheet === 'settings') && (
+      {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change') && (
         <SheetIndex
           sheets={sheets.map((name) => ({
             label: name[0]!.toUpperCase() + name.slice(1),

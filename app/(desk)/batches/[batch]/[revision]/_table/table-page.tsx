@@ -6,6 +6,7 @@ import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { listRows } from '@/db/queries/lists';
 import { parametersOf } from '@/app/_server/view';
+import { may } from '@/lib/access/may';
 import { rowsAddress, rowsAtOnce } from '@/lib/api/rows-address';
 import { viewFromParams } from '@/lib/api/view-address';
 import { checkedWords } from '@/app/_server/checked-words';
@@ -37,6 +38,7 @@ export async function TablePage({ params, searchParams, table }: TablePageProps 
         units={units}
         nearLimit={revision.settings?.nearLimit ?? 0.9}
         parameters={await parametersOf(revision)}
+        mayChange={may(person, 'change a revision')}
         first={{ address: rowsAddress(batch, letter, view, at), page }}
       />
       {table !== 'problems' && <Cautions {...checkedWords(revision)} />}

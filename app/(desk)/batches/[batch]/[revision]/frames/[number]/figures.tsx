@@ -19,7 +19,13 @@ interface Head {
 }
 
 /** N, V, M of each member under the chosen result, with the places of the extremes. */
-export function MembersTable({ drawing, result, numbers }: FiguresProps & { readonly numbers: (member: string) => string }) {
+interface MembersTableProps extends FiguresProps {
+  readonly numbers: (member: string) => string;
+  /** Where another section is chosen for a member; null for who may not. */
+  readonly change: ((member: string) => string) | null;
+}
+
+export function MembersTable({ drawing, result, numbers, change }: MembersTableProps) {
   const { units, members, nodes, nearLimit } = drawing;
   const heads: Head[] = [
     { label: 'Member' },
@@ -53,7 +59,15 @@ export function MembersTable({ drawing, result, numbers }: FiguresProps & { read
               {result.slack.includes(index) && <span className="unit"> slack</span>}
             </th>
             <td>{member.role ?? ''}</td>
-            <td>{member.section}</td>
+            <td>
+              {change === null ? (
+                member.section
+              ) : (
+                <Link href={change(member.id)} prefetch={false} title={`Change the section of ${member.id}`}>
+                  {member.section}
+                </Link>
+              )}
+            </td>
             <Num value={length} quantity="length" units={units} decimals={2} />
             <Num value={extremes?.N.max} quantity="force" units={units} decimals={1} />
             <Num value={extremes?.N.min} quantity="force" units={units} decimals={1} />

@@ -23,10 +23,12 @@ interface FrameSheetProps {
   readonly first: FrameDetail;
   /** The list that the frame was opened from, as its address has it. */
   readonly list: string;
+  /** The person may make the next revision from this one. */
+  readonly mayChange: boolean;
 }
 
 /** Drawing left, checks and one open working right, the chosen result's figures below. */
-export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
+export function FrameSheet({ batch, letter, first, list, mayChange }: FrameSheetProps) {
   const [result, setResult] = useState(first.drawing?.chosen?.name ?? null);
   const [open, setOpen] = useState<string | null>(first.checks[0]?.id ?? null);
   const address = api.frame(batch, letter, first.number) + (result === null ? '' : `?result=${encodeURIComponent(result)}`);
@@ -47,6 +49,7 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
     params.set('show', name);
     window.history.replaceState(null, '', `?${params.toString()}`);
   };
+  const change = mayChange ? (member: string) => pages.change(batch, letter, { frame: frame.id, member }) : null;
   const numbers = (of: string) =>
     pages.numbers(batch, letter, frame.number, { of, ...(result === null ? {} : { show: result }) }, list);
   const chosen = drawing?.chosen ?? null;
@@ -90,7 +93,7 @@ export function FrameSheet({ batch, letter, first, list }: FrameSheetProps) {
             note={`${drawing.chosen.name}: forces and their places; ratio over all checks; a member’s name leads to the numbers behind it`}
             flush
           >
-            <MembersTable drawing={drawing} result={drawing.chosen} numbers={numbers} />
+            <MembersTable drawing={drawing} result={drawing.chosen} numbers={numbers} change={change} />
           </Zone>
           <div className="border-hair grid border-t md:grid-cols-2">
             <Zone title="Movements of nodes" note={drawing.chosen.name} flush>

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { checkedWords } from '@/app/_server/checked-words';
 import { frameDetail } from '@/app/_server/frame-detail';
 import { toParams, type SearchParams } from '@/app/_server/search-params';
@@ -12,6 +13,7 @@ import { Cautions, CheckedAtOnce } from '@/components/ui/notice';
 import { Sheet } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { findFrame, findNeighbours, type Neighbours } from '@/db/queries/frames';
+import { may } from '@/lib/access/may';
 import { api, pages } from '@/lib/api/addresses';
 import { listFromParams, listToSearch } from '@/lib/api/view-address';
 import { offeredColumns } from '@/lib/tables/shown-columns';
@@ -34,6 +36,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
   const asked = toParams(await searchParams);
   const detail = await pageThing(frameDetail(revision, number, asked.get('show')));
   const view = listFromParams(asked);
+  const mayChange = may(person, 'change a revision');
   const around = await findNeighbours(db(), person.office, revision.id, detail.number - 1, view);
   const { batch, letter, units } = revision;
   const filtered = view.filters.length > 0 || view.sort !== null || view.table !== 'frames';
@@ -59,9 +62,12 @@ export default async function FramePage({ params, searchParams }: FramePageProps
         list={placeWords(around, sentence)}
         listHref={pages.table(batch, letter, view)}
         tools={
-          <a href={api.part(batch, letter, 'workbook')} download>
-            Result workbook
-          </a>
+          <>
+            <a href={api.part(batch, letter, 'workbook')} download>
+              Result workbook
+            </a>
+            {mayChange && <Link href={pages.change(batch, letter, { frame: detail.id })}>Change a section</Link>}
+          </>
         }
       />
       <MadeFrom revision={revision} />
@@ -69,7 +75,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
       </h1>
-      <FrameSheet batch={batch} letter={letter} first={detail} list={listToSearch(view)} />
+      <FrameSheet batch={batch} letter={letter} first={detail} list={listToSearch(view)} mayChange={mayChange} />
       <Cautions />
     </Sheet>
   );
