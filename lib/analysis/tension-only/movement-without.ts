@@ -28,10 +28,16 @@ export function movementWithout(
 ): MovementWithout | null {
   const K = new Float64Array(9 * t.blocks);
   const left = data.map((m, i) => (slack.includes(i) ? { ...m, EA: 0 } : m));
-  assemble(K, t, frame, left, angles);
   const inner = new Float64Array(6 * t.size);
-  // judged against K with all members: a direction that only they held has nothing of its own left
-  const unheld = factor(K, t, diagonal, inner, new Float64Array(3 * t.size), pivotTolerance);
+  // judged against K with all members: a direction that only they held has nothing of its own left but, in a tall frame, what
+  // rounding gathers
+  let unheld = -1;
+  for (const tolerance of [pivotTolerance, 1e3 * pivotTolerance]) {
+    K.fill(0);
+    assemble(K, t, frame, left, angles);
+    unheld = factor(K, t, diagonal, inner, new Float64Array(3 * t.size), tolerance);
+    if (unheld >= 0) break;
+  }
   if (unheld < 0) return null;
   const z = nullVector(K, t, inner, unheld);
   const { node, how, remedy } = describeMovement(frame, t, angles, z);
