@@ -1,11 +1,12 @@
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type Settings } from '@/lib/model/settings';
-import type { Certificate, Failure, MemberLine, ResultState } from '@/lib/results/result';
+import type { Certificate, Failure, ResultState } from '@/lib/results/result';
 import { certify, certifyStates, outsideTolerance, type SolvedState } from './certificate';
 import { combinationStates } from './combination-states';
 import { unheldPart } from './connected';
 import { bucklingSpace } from './critical/buckling-trial';
 import { criticalLoadFactor } from './critical/critical-load-factor';
+import type { FlatLines } from './flat-lines';
 import { solveCases, type SolvedCases } from './first-order-cases';
 import { isPlain } from './plan-states';
 import { refusal } from './refusals';
@@ -17,7 +18,7 @@ export interface AnalyseOptions {
   readonly second?: boolean;
   readonly settings?: Settings;
   /** Lines of members that the caller goes on to use, so that each is worked out once. */
-  readonly lineOf?: (state: ResultState, member: number) => MemberLine;
+  readonly lines?: FlatLines;
 }
 export type Analysis =
   | { readonly ok: true; readonly states: ResultState[]; readonly certificate: Certificate }
@@ -89,7 +90,7 @@ function statesAsAsked(
   t: Topology,
   settings: Settings,
   solved: SolvedCases,
-  { second = true, lineOf }: AnalyseOptions,
+  { second = true, lines }: AnalyseOptions,
 ): Certified | Failure {
   const found = combinationStates(frame, t, settings, solved);
   if ('code' in found) return found;
@@ -99,6 +100,6 @@ function statesAsAsked(
   const all = [...cases, ...found.states];
   const { diagonal, norm } = solved;
   const { condition } = found;
-  const certificate = certifyStates({ frame, settings, t, diagonal, norm, condition, solved: all, lineOf }, second);
+  const certificate = certifyStates({ frame, settings, t, diagonal, norm, condition, solved: all, lines }, second);
   return { states: all.map(({ state }) => state), certificate };
 }

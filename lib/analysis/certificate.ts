@@ -1,9 +1,10 @@
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type Settings } from '@/lib/model/settings';
-import type { Certificate, MemberLine, ResultState } from '@/lib/results/result';
+import type { Certificate, ResultState } from '@/lib/results/result';
 import { nodeAngles } from './assemble';
 import { equilibriumTolerance, leastDigits, residualTolerance, secondTolerance, secondUnknowns } from './certificate-tolerances';
 import { globalEquilibrium, stateEquilibrium } from './equilibrium';
+import type { FlatLines } from './flat-lines';
 import type { LoadVectors } from './load-vectors';
 import type { Recovered } from './recover';
 import { caseResidual, stateResidual } from './residual';
@@ -45,7 +46,7 @@ export interface SolvedStates {
   /** Every state handed on, in order. */
   readonly solved: readonly SolvedState[];
   /** Lines of members, where they are kept for who comes after. */
-  readonly lineOf?: (state: ResultState, member: number) => MemberLine;
+  readonly lines?: FlatLines;
 }
 export interface SolvedState {
   readonly state: ResultState;
@@ -76,7 +77,7 @@ export function certifyStates(input: SolvedStates, second: boolean): Certificate
   const floors = solved.map(({ state, handled }) => Math.max(rounding * handled, floorOf(state, cases)));
   return {
     residual: stateResidual(input, nodeAngles(frame)),
-    equilibrium: solved.reduce((most, { state }, i) => worse(most, stateEquilibrium(frame, state, floors[i]!, input.lineOf)), 0),
+    equilibrium: solved.reduce((most, { state }, i) => worse(most, stateEquilibrium(frame, state, floors[i]!, input.lines)), 0),
     condition,
     digits: digitsOf(condition),
     ...compareWithSecond(

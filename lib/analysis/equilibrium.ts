@@ -1,6 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
-import type { MemberLine, ResultState } from '@/lib/results/result';
+import type { ResultState } from '@/lib/results/result';
 import { bounds } from './bounds';
+import type { FlatLines } from './flat-lines';
 import { momentOfMovement } from './moved-loads';
 import { typedTotals, type TypedTotals } from './typed-totals';
 
@@ -33,12 +34,7 @@ const totals = new WeakMap<Frame, readonly TypedTotals[]>();
  * The same of any state: its factors × the loads as typed, the forces that stand for its imperfections, and its reactions.
  * Second order: about where loads and supports have moved to (moved-loads.ts).
  */
-export function stateEquilibrium(
-  frame: Frame,
-  state: ResultState,
-  floor: number,
-  lineOf?: (state: ResultState, member: number) => MemberLine,
-): number {
+export function stateEquilibrium(frame: Frame, state: ResultState, floor: number, lines?: FlatLines): number {
   const middle = middleOf(frame);
   let known = totals.get(frame);
   if (!known) totals.set(frame, (known = frame.cases.map((_, c) => typedTotals(frame, c, middle.x0, middle.y0))));
@@ -62,7 +58,7 @@ export function stateEquilibrium(
       sum.Mz += (x_m - middle.x0) * Fy - (y_m - middle.y0) * Fx;
       sum.sizeF += Math.abs(Fx) + Math.abs(Fy);
     });
-  const moved = state.order === 2 ? momentOfMovement(frame, state, lineOf) : 0;
+  const moved = state.order === 2 ? momentOfMovement(frame, state, lines) : 0;
   return balance(frame, middle, sum, state.reactions, moved, floor);
 }
 

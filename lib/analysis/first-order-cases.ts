@@ -8,6 +8,7 @@ import { freeOrHardlyHeld, lowDigits } from './failures';
 import { loadVectors, type LoadVectors } from './load-vectors';
 import { nullVector } from './mechanism';
 import { memberDataFor, type MemberData } from './member-data';
+import { numbers } from './numbers';
 import { recover, type Recovered } from './recover';
 import { solve } from './solve';
 import type { Topology } from './topology';
@@ -58,7 +59,7 @@ export function solveCases(frame: Frame, t: Topology, shearDeformation: boolean)
 }
 
 function caseState(frame: Frame, recovered: Recovered, index: number, method: StateMethod | null): ResultState {
-  const factors = new Float64Array(frame.cases.length);
+  const factors = numbers(frame.cases.length);
   factors[index] = 1;
   const { displacements, reactions, endForces } = recovered;
   return {

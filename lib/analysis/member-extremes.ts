@@ -1,5 +1,8 @@
-import type { Extreme, MemberExtremes, MemberLine, Segment } from '@/lib/results/result';
-import { evaluate, rootsWithin, valueOf } from './polynomial';
+import type { Extreme, MemberExtremes, MemberLine } from '@/lib/results/result';
+import {
+  degreeDeflection, degreeM, degreeN, degreeV, flattened, headNumbers, ofDeflection, ofM, ofN, ofV, segmentNumbers,
+} from './flat-line'; // prettier-ignore
+import { cubic, rootsWithin, valueOf } from './polynomial';
 
 /** Values this close, relative to the largest, are equal: the one nearest the start is named. */
 const equal = 1e-9;
@@ -9,22 +12,15 @@ export const extremeNumbers = 14;
 
 /** Extremes of N, V, M over a member, and its largest departure from the line between its moved ends (README §3). */
 export function memberExtremes(line: MemberLine): MemberExtremes {
-  return readExtremes(writeExtremes(line, new Float64Array(extremeNumbers), 0), 0);
+  return readExtremes(writeExtremes(flattened(line), 0, new Float64Array(extremeNumbers), 0), 0);
 }
 
-/** The same numbers in a row, as they are stored. @param at where in `out` they begin */
-export function writeExtremes(line: MemberLine, out: Float64Array, at: number): Float64Array {
-  const { segments } = line;
-  candidates = 0;
-  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.N, segments[i]!);
-  writeExtreme(out, at);
-  candidates = 0;
-  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.V, segments[i]!);
-  writeExtreme(out, at + 4);
-  candidates = 0;
-  for (let i = 0; i < segments.length; i++) addCandidates(segments[i]!.M, segments[i]!);
-  writeExtreme(out, at + 8);
-  writeDeparture(line, out, at + 12);
+/** The same numbers in a row, as they are stored. @param line where the member's line begins in `lines` @param at where in `out` they begin */
+export function writeExtremes(lines: Float64Array, line: number, out: Float64Array, at: number): Float64Array {
+  writeExtremeOf(lines, line, degreeN, ofN, out, at);
+  writeExtremeOf(lines, line, degreeV, ofV, out, at + 4);
+  writeExtremeOf(lines, line, degreeM, ofM, out, at + 8);
+  writeDeparture(lines, line, out, at + 12);
   return out;
 }
 
@@ -49,13 +45,51 @@ let xs: Float64Array = new Float64Array(64);
 let values: Float64Array = new Float64Array(64);
 let candidates = 0;
 
-const slope = new Float64Array(8);
-const roots = new Float64Array(8);
-// the deflected line of a segment from its chord, by its number of terms (one where it has no length)
-const departed = Array.from({ length: 10 }, (_, terms) => new Float64Array(terms));
+const p = new Float64Array(16);
+const slope = new Float64Array(16);
+const roots = new Float64Array(16);
 
-/** Both ends of a segment (so both sides of jumps) and the roots of the derivative within it. */
-function addCandidates(p: ArrayLike<number>, { from, to }: Segment): void {
+function writeExtremeOf(lines: Float64Array, line: number, degree: number, of: number, out: Float64Array, at: number): void {
+  candidates = 0;
+  const first = line + headNumbers;
+  if (lines[line] === 1 && (lines[first + degree]! <= 2 || (lines[first + degree] === 3 && lines[first + of + 3] === 0))) {
+    const o = first + of;
+    const highest = lines[first + degree]!;
+    writeShort(lines[o]!, highest > 0 ? lines[o + 1]! : 0, highest > 1 ? lines[o + 2]! : 0, lines[line + 1]!, out, at);
+    return;
+  }
+  for (let i = lines[line]!, s = first; i > 0; i--, s += segmentNumbers) {
+    const highest = lines[s + degree]!;
+    for (let k = 0; k <= highest; k++) p[k] = lines[s + of + k]!;
+    addCandidates(highest, lines[s]!, lines[s + 1]!);
+  }
+  writeExtreme(out, at);
+}
+
+/** Extremes of a + b s + c s² over the whole of a member of length h: both ends, and where it turns between them. */
+function writeShort(a: number, b: number, c: number, h: number, out: Float64Array, at: number): void {
+  const end = a + h * (b + h * c);
+  let turn = 0;
+  let there = a;
+  if (c !== 0) {
+    const root = -b / (2 * c);
+    const largest = Math.max(Math.abs(a), Math.abs(b) * h, Math.abs(c) * h * h);
+    if (root > 0 && root < h && Math.abs(2 * c) * h * h > 1e-13 * largest) {
+      turn = root;
+      there = a + root * (b + root * c);
+    }
+  }
+  const max = Math.max(a, there, end);
+  const min = Math.min(a, there, end);
+  const near = equal * Math.max(Math.abs(max), Math.abs(min));
+  out[at] = max;
+  out[at + 1] = a >= max - near ? 0 : there >= max - near ? turn : h;
+  out[at + 2] = min;
+  out[at + 3] = a <= min + near ? 0 : there <= min + near ? turn : h;
+}
+
+/** Both ends of a segment (so both sides of jumps) and the roots of the derivative of `p` within it. */
+function addCandidates(highest: number, from: number, to: number): void {
   if (candidates + 16 > xs.length) {
     [xs, values] = [longer(xs), longer(values)];
   }
@@ -63,17 +97,24 @@ function addCandidates(p: ArrayLike<number>, { from, to }: Segment): void {
   xs[candidates] = from;
   values[candidates++] = p[0]!;
   if (s === 0) return;
-  let degree = p.length - 1;
+  let degree = highest;
   while (degree > 1 && p[degree] === 0) degree--;
-  if (degree > 1) {
-    let largest = 0;
-    let power = 1;
-    for (let i = 0; i <= degree; i++, power *= s) {
-      const size = Math.abs(p[i]!) * power;
-      if (size > largest) largest = size;
+  if (degree === 2) {
+    // the one turning point, where it is no rounding
+    const root = -p[1]! / (2 * p[2]!);
+    if (root > 0 && root < s && Math.abs(2 * p[2]!) * s * s > 1e-13 * largestTerm(degree, s)) {
+      xs[candidates] = from + root;
+      values[candidates++] = p[0]! + root * (p[1]! + root * p[2]!);
     }
-    for (let i = 1; i <= degree; i++) slope[i - 1] = i * p[i]!;
-    const count = rootsWithin(slope, degree - 1, s, (1e-13 * largest) / s, roots);
+  } else if (degree > 2) {
+    const nothing = (1e-13 * largestTerm(degree, s)) / s;
+    let count: number;
+    if (degree === 4 && Math.abs(4 * p[4]!) * s * s * s > nothing)
+      count = cubic(p[1]!, 2 * p[2]!, 3 * p[3]!, 4 * p[4]!, s, nothing, roots);
+    else {
+      for (let i = 1; i <= degree; i++) slope[i - 1] = i * p[i]!;
+      count = rootsWithin(slope, degree - 1, s, nothing, roots);
+    }
     for (let i = 0; i < count; i++) {
       const root = roots[i]!;
       xs[candidates] = from + root;
@@ -82,6 +123,16 @@ function addCandidates(p: ArrayLike<number>, { from, to }: Segment): void {
   }
   xs[candidates] = to;
   values[candidates++] = valueOf(p, degree, s);
+}
+
+function largestTerm(degree: number, s: number): number {
+  let largest = 0;
+  let power = 1;
+  for (let i = 0; i <= degree; i++, power *= s) {
+    const size = Math.abs(p[i]!) * power;
+    if (size > largest) largest = size;
+  }
+  return largest;
 }
 
 function longer(numbers: Float64Array): Float64Array {
@@ -110,24 +161,32 @@ function writeExtreme(out: Float64Array, at: number): void {
 }
 
 /** Largest of |v − chord|: what stands at the ends is rounding, for they are on the chord by definition. */
-function writeDeparture({ segments, length }: MemberLine, out: Float64Array, at: number): void {
-  const end = segments[segments.length - 1]!;
-  const v1 = segments[0]!.v[0]!;
-  const turn = (evaluate(end.v, end.to - end.from) - v1) / length;
+function writeDeparture(lines: Float64Array, line: number, out: Float64Array, at: number): void {
+  const first = line + headNumbers;
+  const past = first + lines[line]! * segmentNumbers;
+  const length = lines[line + 1]!;
+  const last = past - segmentNumbers;
+  const h = lines[last + 1]! - lines[last]!;
+  let v2 = 0;
+  for (let k = lines[last + degreeDeflection]!; k >= 0; k--) v2 = v2 * h + lines[last + ofDeflection + k]!;
+  const v1 = lines[first + ofDeflection]!;
+  const turn = (v2 - v1) / length;
   candidates = 0;
   let size = 0;
-  for (let k = 0; k < segments.length; k++) {
-    const segment = segments[k]!;
-    const { v } = segment;
-    const p = departed[v.length]!;
-    for (let i = 0; i < p.length; i++) p[i] = v[i]!;
-    size = Math.max(size, Math.abs(p[0]!));
-    p[0] = p[0]! - v1 - turn * segment.from;
-    if (p.length > 1) p[1] = p[1]! - turn;
-    addCandidates(p, segment);
+  for (let s = first; s < past; s += segmentNumbers) {
+    const degree = lines[s + degreeDeflection]!;
+    for (let k = 0; k <= degree; k++) p[k] = lines[s + ofDeflection + k]!;
+    const v = Math.abs(p[0]!);
+    if (v > size) size = v;
+    p[0] = p[0]! - v1 - turn * lines[s]!;
+    if (degree > 0) p[1] = p[1]! - turn;
+    addCandidates(degree, lines[s]!, lines[s + 1]!);
   }
   let largest = 0;
-  for (let i = 0; i < candidates; i++) largest = Math.max(largest, Math.abs(values[i]!));
+  for (let i = 0; i < candidates; i++) {
+    const here = Math.abs(values[i]!);
+    if (here > largest) largest = here;
+  }
   out[at] = 0;
   out[at + 1] = 0;
   if (largest <= 1e-12 * size) return;

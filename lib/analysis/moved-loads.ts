@@ -1,8 +1,10 @@
 import type { Frame, MemberLoad } from '@/lib/model/frame';
-import type { MemberLine, Polynomial, ResultState, Segment } from '@/lib/results/result';
+import type { ResultState } from '@/lib/results/result';
+import {
+  degreeDeflection, degreeN, degreeU, degreeV, headNumbers, ofDeflection, ofN, ofU, ofV, segmentNumbers,
+} from './flat-line'; // prettier-ignore
+import { FlatLines } from './flat-lines';
 import { gravity, memberData } from './member-data';
-import { memberLine } from './member-line';
-import { evaluate } from './polynomial';
 
 /** Five Gauss points on −1 … 1 with their weights: exact to degree 9. */
 const gaussAt = [0, -0.5384693101056831, 0.5384693101056831, -0.906179845938664, 0.906179845938664] as const;
@@ -15,13 +17,9 @@ const gaussWeight = [128 / 225, 0.47862867049936647, 0.47862867049936647, 0.2369
  *
  * With it, the moments of everything about any point sum to none; without a member's P-δ, or with the wrong sway, they don't.
  * Loads as in the state (÷ loadScale); movements as analysed (× loadScale).
- * @param lineOf where lines are kept for who comes after
+ * @param lines where they are kept for who comes after
  */
-export function momentOfMovement(
-  frame: Frame,
-  state: ResultState,
-  lineOf: (state: ResultState, member: number) => MemberLine = (one, member) => memberLine(frame, one, member),
-): number {
+export function momentOfMovement(frame: Frame, state: ResultState, lines: FlatLines = new FlatLines(frame)): number {
   const scale = state.method?.loadScale ?? 1;
   const d = state.displacements;
   let sum = 0;
@@ -36,14 +34,15 @@ export function momentOfMovement(
   if (notional) for (let i = 0; i < frame.nodes.length; i++) take(i, notional[2 * i]! / scale, notional[2 * i + 1]! / scale);
   frame.supports.forEach(({ node }, i) => take(node, state.reactions[3 * i]!, state.reactions[3 * i + 1]!));
   const typed = typedAlong(frame);
+  const own = lines.of(state);
   for (let i = 0; i < typed.length; i++) {
     const along = typed[i]!;
     if (!acts(along, state.factors)) {
       sum += unloaded(frame, state, i, scale);
       continue;
     }
-    const line = lineOf(state, i);
-    sum += shortening(line, scale) + ofMember(along, line, state.factors);
+    const line = own.at(i);
+    sum += shortening(own.numbers, line, scale) + ofMember(along, own.numbers, line, state.factors);
   }
   return scale * sum;
 }
@@ -125,22 +124,28 @@ function unloaded(frame: Frame, state: ResultState, member: number, scale: numbe
 }
 
 /** ∫ Q u′ dx, Q = V − N v′ (movements as analysed: × scale). */
-function shortening({ segments }: MemberLine, scale: number): number {
+function shortening(lines: Float64Array, line: number, scale: number): number {
   let sum = 0;
-  for (const { from, to, N, V, u, v } of segments) {
-    const half = (to - from) / 2;
+  for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
+    const half = (lines[o + 1]! - lines[o]!) / 2;
     if (!(half > 0)) continue;
     for (let g = 0; g < 5; g++) {
       const s = half * (1 + gaussAt[g]!);
-      sum += half * gaussWeight[g]! * (evaluate(V, s) - scale * evaluate(N, s) * slopeOf(v, s)) * slopeOf(u, s);
+      const V = valueAt(lines, o + ofV, lines[o + degreeV]!, s);
+      const N = valueAt(lines, o + ofN, lines[o + degreeN]!, s);
+      const turn = slopeAt(lines, o + ofDeflection, lines[o + degreeDeflection]!, s);
+      const strain = slopeAt(lines, o + ofU, lines[o + degreeU]!, s);
+      sum += half * gaussWeight[g]! * (V - scale * N * turn) * strain;
     }
   }
   return sum;
 }
 
 /** Σ ∫ (u_x q_y − u_y q_x) and Σ (u_x P_y − u_y P_x) of one member's loads as typed, with movements as in the state. */
-function ofMember({ spread, forces }: TypedAlong, { segments }: MemberLine, factors: Float64Array): number {
+function ofMember({ spread, forces }: TypedAlong, lines: Float64Array, line: number, factors: Float64Array): number {
   let sum = 0;
+  const first = line + headNumbers;
+  const past = first + segmentNumbers * lines[line]!;
   for (const { from, to, onU, onV, rows } of spread) {
     let q1 = 0;
     let q2 = 0;
@@ -151,42 +156,54 @@ function ofMember({ spread, forces }: TypedAlong, { segments }: MemberLine, fact
     }
     if (q1 === 0 && q2 === 0) continue;
     const c1 = (q2 - q1) / (to - from);
-    for (const segment of segments) {
-      const p = from > segment.from ? from - segment.from : 0;
-      const r = (to < segment.to ? to : segment.to) - segment.from;
+    for (let segment = first; segment < past; segment += segmentNumbers) {
+      const begins = lines[segment]!;
+      const ends = lines[segment + 1]!;
+      const p = from > begins ? from - begins : 0;
+      const r = (to < ends ? to : ends) - begins;
       if (!(r > p)) continue;
       // q = c₀ + c₁ s along the segment
-      const c0 = q1 + c1 * (segment.from - from);
-      sum += worked(segment, onU, onV, c0, c1, r);
-      if (p > 0) sum -= worked(segment, onU, onV, c0, c1, p);
+      const c0 = q1 + c1 * (begins - from);
+      sum += worked(lines, segment, onU, onV, c0, c1, r);
+      if (p > 0) sum -= worked(lines, segment, onU, onV, c0, c1, p);
     }
   }
   for (let i = 0; i < forces.length; i += 5) {
     const k = factors[forces[i]!]!;
     if (k === 0) continue;
     const at = forces[i + 2]!;
-    const segment = segments.find(({ to }) => at <= to) ?? segments[segments.length - 1]!;
-    const s = at - segment.from;
-    sum += k * forces[i + 1]! * (forces[i + 3]! * evaluate(segment.u, s) + forces[i + 4]! * evaluate(segment.v, s));
+    let segment = first;
+    while (at > lines[segment + 1]! && segment + segmentNumbers < past) segment += segmentNumbers;
+    const s = at - lines[segment]!;
+    const u = valueAt(lines, segment + ofU, lines[segment + degreeU]!, s);
+    const v = valueAt(lines, segment + ofDeflection, lines[segment + degreeDeflection]!, s);
+    sum += k * forces[i + 1]! * (forces[i + 3]! * u + forces[i + 4]! * v);
   }
   return sum;
 }
 
 /** ∫₀ˢ (c₀ + c₁ x)(onU u + onV v) dx, term by term. */
-function worked({ u, v }: Segment, onU: number, onV: number, c0: number, c1: number, s: number): number {
+function worked(lines: Float64Array, o: number, onU: number, onV: number, c0: number, c1: number, s: number): number {
   let sum = 0;
   let power = s;
-  const terms = u.length > v.length ? u.length : v.length;
-  for (let i = 0; i < terms; i++) {
-    const coefficient = onU * (i < u.length ? u[i]! : 0) + onV * (i < v.length ? v[i]! : 0);
+  const ofu = lines[o + degreeU]!;
+  const ofv = lines[o + degreeDeflection]!;
+  for (let i = 0; i <= ofu || i <= ofv; i++) {
+    const coefficient = onU * (i <= ofu ? lines[o + ofU + i]! : 0) + onV * (i <= ofv ? lines[o + ofDeflection + i]! : 0);
     sum += coefficient * power * (c0 / (i + 1) + (c1 * s) / (i + 2));
     power *= s;
   }
   return sum;
 }
 
-function slopeOf(p: Polynomial, s: number): number {
+function valueAt(lines: Float64Array, at: number, degree: number, s: number): number {
+  let value = 0;
+  for (let k = degree; k >= 0; k--) value = value * s + lines[at + k]!;
+  return value;
+}
+
+function slopeAt(lines: Float64Array, at: number, degree: number, s: number): number {
   let slope = 0;
-  for (let k = p.length - 1; k > 0; k--) slope = slope * s + k * p[k]!;
+  for (let k = degree; k > 0; k--) slope = slope * s + k * lines[at + k]!;
   return slope;
 }

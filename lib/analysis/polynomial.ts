@@ -22,7 +22,8 @@ const found = Array.from({ length: most + 1 }, () => new Float64Array(most + 2))
  */
 export function rootsWithin(p: ArrayLike<number>, degree: number, length: number, nothing: number, out: Float64Array): number {
   if (degree > most) throw new RangeError(`Expected a degree up to ${most}, got ${degree}`);
-  let power = length ** degree;
+  let power = 1;
+  for (let i = 0; i < degree; i++) power *= length;
   while (degree > 0 && Math.abs(p[degree]!) * power <= nothing) {
     degree--;
     power /= length;
@@ -33,6 +34,7 @@ export function rootsWithin(p: ArrayLike<number>, degree: number, length: number
     return within(out, 1, length);
   }
   if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length, out);
+  if (degree === 3) return cubic(p[0]!, p[1]!, p[2]!, p[3]!, length, nothing, out);
   const q = rows[degree]!;
   for (let i = 0; i <= degree; i++) q[i] = p[i]!;
   const count = higher(degree, length, nothing);
@@ -112,4 +114,59 @@ function between(p: Float64Array, degree: number, slope: Float64Array, a: number
     if (close) break;
   }
   return x;
+}
+
+const turns = new Float64Array(2);
+
+/**
+ * The same for c₀ + c₁ s + c₂ s² + c₃ s³, the commonest: the slope of a member under even loads. Newton's steps begin where the
+ * straight line between the bracket's ends is nought.
+ */
+export function cubic(
+  c0: number,
+  c1: number,
+  c2: number,
+  c3: number,
+  length: number,
+  nothing: number,
+  out: Float64Array,
+): number {
+  let turnCount: number;
+  if (3 * Math.abs(c3) * length * length * length > nothing) turnCount = quadratic(c1, 2 * c2, 3 * c3, length, turns);
+  else {
+    turns[0] = -c1 / (2 * c2);
+    turnCount = 2 * Math.abs(c2) * length * length > nothing ? within(turns, 1, length) : 0;
+  }
+  let count = 0;
+  let a = 0;
+  let fa = c0;
+  for (let i = 0; i <= turnCount; i++) {
+    const b = i < turnCount ? turns[i]! : length;
+    const fb = c0 + b * (c1 + b * (c2 + b * c3));
+    if (fa === 0 && a > 0) out[count++] = a;
+    else if (fa * fb < 0) {
+      let low = a;
+      let high = b;
+      let x = a + ((b - a) * fa) / (fa - fb);
+      if (!(x > a && x < b)) x = (a + b) / 2;
+      for (let pass = 0; pass < 100; pass++) {
+        const fx = c0 + x * (c1 + x * (c2 + x * c3));
+        if (fx === 0) break;
+        if (fx < 0 === fa < 0) low = x;
+        else high = x;
+        const next = x - fx / (c1 + x * (2 * c2 + 3 * x * c3));
+        const inside = next > low && next < high;
+        const step = inside ? next : (low + high) / 2;
+        if (step === x || high - low <= 2e-16 * high) break;
+        // the next step would be of this one's square
+        const close = inside && Math.abs(step - x) <= 1e-10 * (b - a);
+        x = step;
+        if (close) break;
+      }
+      out[count++] = x;
+    }
+    a = b;
+    fa = fb;
+  }
+  return within(out, count, length);
 }

@@ -2,6 +2,7 @@ import type { Frame, Restraint } from '@/lib/model/frame';
 import { emptyMemberStiffness, memberStiffness } from './assemble';
 import { endForces, endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
 import { memberData, type MemberData } from './member-data';
+import { copyOf, numbers } from './numbers';
 import type { Topology } from './topology';
 
 /** A case as recovered: what a ResultState holds of it, and how far its nodes are out of balance. */
@@ -30,14 +31,14 @@ export function recover(
   data: readonly MemberData[] = memberData(frame),
 ): Recovered {
   const nodes = frame.nodes.length;
-  const all = loads.prescribed.slice(loadCase * nodes * 3, (loadCase + 1) * nodes * 3);
+  const all = copyOf(loads.prescribed, loadCase * nodes * 3, (loadCase + 1) * nodes * 3);
   for (let p = 0; p < t.size; p++) {
     const node = t.nodeAt[p]!;
     for (let r = 0; r < 3; r++) if (t.free[3 * node + r]) all[3 * node + r] = d[(loadCase * t.size + p) * 3 + r]!;
   }
-  const forces = new Float64Array(6 * data.length);
+  const forces = numbers(6 * data.length);
   // what the nodes must do to the members, node axes
-  const asked = new Float64Array(3 * nodes);
+  const asked = numbers(3 * nodes);
   let handled = 0;
   for (let i = 0; i < data.length; i++) {
     const m = data[i]!;
@@ -90,7 +91,7 @@ export function takeReactions(
   all: Float64Array,
   asked: Float64Array,
 ): Float64Array {
-  const reactions = new Float64Array(3 * frame.supports.length);
+  const reactions = numbers(3 * frame.supports.length);
   frame.supports.forEach((support, i) => {
     const o = 3 * support.node;
     const x = takeReaction(support.ux, all, asked, o);

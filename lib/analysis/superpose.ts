@@ -1,9 +1,10 @@
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
+import { numbers } from './numbers';
 
 /** Factor on each case, by case: a case named twice counts twice. */
 export function factorsOf(frame: Frame, index: number): Float64Array {
-  const factors = new Float64Array(frame.cases.length);
+  const factors = numbers(frame.cases.length);
   for (const term of frame.combinations[index]!.terms) factors[term.case] = factors[term.case]! + term.factor;
   return factors;
 }
@@ -12,9 +13,9 @@ export function factorsOf(frame: Frame, index: number): Float64Array {
 export function superpose(frame: Frame, cases: readonly ResultState[], index: number): ResultState {
   const combination = frame.combinations[index]!;
   const factors = factorsOf(frame, index);
-  const displacements = new Float64Array(3 * frame.nodes.length);
-  const reactions = new Float64Array(3 * frame.supports.length);
-  const endForces = new Float64Array(6 * frame.members.length);
+  const displacements = numbers(3 * frame.nodes.length);
+  const reactions = numbers(3 * frame.supports.length);
+  const endForces = numbers(6 * frame.members.length);
   for (let c = 0; c < cases.length; c++) {
     const factor = factors[c]!;
     if (factor === 0) continue;

@@ -1,5 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
+import { lineFrom } from '@/lib/analysis/flat-line';
+import { FlatLines, type StateLines } from '@/lib/analysis/flat-lines';
 import type { Check, MemberLine, ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings } from './check-row';
 import { checkCriticalLoadFactor } from './critical-load-factor';
@@ -30,14 +32,14 @@ export interface FrameChecks {
  * stability by span, critical load factor, then movements.
  *
  * @param states the frame's results, cases and combinations; cases are not checked
- * @param lineOf the exact line of a member in a state; called once for each strength or service combination and member
+ * @param lineOf the exact line of a member in a state, with the same lines as rows of numbers where it has them
  * @param options.all keep every subject × check × combination too
  */
 export function checkFrame(
   frame: Frame,
   settings: Settings,
   states: readonly ResultState[],
-  lineOf: (state: ResultState, member: number) => MemberLine,
+  lineOf: LineOf,
   options: { readonly all: boolean },
 ): FrameChecks {
   const strength = states.filter((state) => state.kind === 'combination' && state.purpose === 'strength');
@@ -50,8 +52,10 @@ export function checkFrame(
     noService: strength.length > 0 ? 'no service combinations' : 'no combinations',
   };
   const spans = spansOf(frame);
-  checkStrength(frame, settings, spans, strength, service.length > 0, lineOf, findings);
-  for (const span of spans) checkDeflection(frame, settings, span, service, lineOf, findings);
+  const flat = lineOf.flat ?? new FlatLines(frame, lineOf);
+  checkStrength(frame, settings, spans, strength, service.length > 0, lineOf, flat, findings);
+  const moved = service.map((state) => flat.of(state));
+  for (const span of spans) checkDeflection(frame, settings, span, service, moved, findings);
   for (const span of spans) checkSway(frame, settings, span, service, findings);
   checkDisplacement(frame, settings, service, findings);
   checkSpread(frame, settings, service, findings);
@@ -63,7 +67,10 @@ export function checkFrame(
   };
 }
 
-type LineOf = (state: ResultState, member: number) => MemberLine;
+interface LineOf {
+  (state: ResultState, member: number): MemberLine;
+  readonly flat?: FlatLines;
+}
 
 function checkStrength(
   frame: Frame,
@@ -72,6 +79,7 @@ function checkStrength(
   states: readonly ResultState[],
   others: boolean,
   lineOf: LineOf,
+  flat: FlatLines,
   findings: Findings,
 ): void {
   const screened = settings.stability === 'screened' ? spans : [];
@@ -99,7 +107,7 @@ function checkStrength(
     for (const span of screened) keepGoverning(findings, [notCheckedRow(stabilitySubject(span), null, none)]);
     return;
   }
-  const byMember = frame.members.map((_, i) => states.map((state) => lineOf(state, i)));
+  const lines = states.map((state) => flat.of(state));
   const slender = new Map<number, ReturnType<SlenderIn>[]>();
   for (let i = 0; i < frame.members.length; i++) {
     const pieces = likePieces(frame, spans, i);
@@ -108,19 +116,15 @@ function checkStrength(
     if (!known) slender.set(pieces[0]!, (known = []));
     const found = known;
     const slenderIn: SlenderIn = (c, find) => {
-      if (found[c] === undefined)
-        found[c] = find(pieces.length === 1 ? byMember[i]![c]! : oneLine(pieces.map((p) => byMember[p]![c]!)));
+      if (found[c] === undefined) found[c] = find(oneLine(pieces.map((p) => objectOf(lines[c]!, p))));
       return found[c];
     };
-    checkStress(frame, settings, i, states, byMember[i]!, slenderIn, findings);
+    checkStress(frame, settings, i, states, lines, slenderIn, findings);
   }
   findings.assumptions.add(
     'Equivalent stress: the larger face stress with the peak shear stress of the same place, on the safe side',
   );
-  for (const span of screened) {
-    const lines = states.map((_, c) => span.pieces.map((piece) => byMember[piece.member]![c]!));
-    checkStability(frame, settings, span, states, lines, findings);
-  }
+  for (const span of screened) checkStability(frame, settings, span, states, lines, findings);
   checkCriticalLoadFactor(settings, states, findings);
 }
 
@@ -136,6 +140,11 @@ function likePieces(frame: Frame, spans: readonly Span[], member: number): reado
       const other = frame.members[i]!;
       return other.section === m.section && other.material === m.material && other.turned === m.turned;
     });
+}
+
+function objectOf(lines: StateLines, member: number): MemberLine {
+  const at = lines.at(member);
+  return lineFrom(lines.numbers, at);
 }
 
 /** Lines one after another: for what is looked for along a physical member, wherever it stands. */

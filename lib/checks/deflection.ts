@@ -1,10 +1,12 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import type { MemberLine, ResultState } from '@/lib/results/result';
+import { degreeDeflection, headNumbers, ofDeflection, segmentNumbers } from '@/lib/analysis/flat-line';
+import type { StateLines } from '@/lib/analysis/flat-lines';
+import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { namesSpan } from './limits';
 import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
-import { SAME, turningPoints } from './peak';
+import { SAME, turningPoints, valueIn } from './peak';
 import { valueAt } from './polynomial';
 import { freeEnds, supported, type Span } from './spans';
 
@@ -20,14 +22,14 @@ type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever';
 /**
  * Deflection of a span in every service combination. A span: largest departure, square to the line between its moved ends.
  * A cantilever: largest displacement square to the member relative to the root node's, root rotation not deducted.
- * @param lineOf the exact line of a member in a state
+ * @param lines of each of `states`
  */
 export function checkDeflection(
   frame: Frame,
   settings: Settings,
   span: Span,
   states: readonly ResultState[],
-  lineOf: (state: ResultState, member: number) => MemberLine,
+  lines: readonly StateLines[],
   findings: Findings,
 ): void {
   const named = limitsWithSetup(frame, settings, 'deflection').filter((limit) => namesSpan(limit, span, frame));
@@ -49,11 +51,7 @@ export function checkDeflection(
   }
   if (!span.whole) return keepGoverning(findings, [notCheckedRow(subject, null, 'pieces of the span do not form one line')]);
   const rule = deflectionRule(frame, span, findings);
-  const measured = (c: number): Movement => {
-    const state = states[c]!;
-    const lines = span.pieces.map((piece) => lineOf(state, piece.member));
-    return deflectionOf(span, rule, lines);
-  };
+  const measured = (c: number): Movement => deflectionOf(span, rule, lines[c]!);
   const inputs = { rule: rule.kind, root: rule.kind === 'cantilever' ? rule.root : null };
   checkMovement(subject, 'deflection', limits, span.length_m, settings, states, measured, () => inputs, findings);
 }
@@ -79,7 +77,7 @@ const departure = new Float64Array(16);
 const points = new Float64Array(32);
 
 /** Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start. */
-function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLine[]): Movement {
+function deflectionOf(span: Span, rule: DeflectionRule, lines: StateLines): Movement {
   const last = span.pieces.length - 1;
   const first = endDeflection(span, 0, lines, 'near');
   const final = endDeflection(span, last, lines, 'far');
@@ -90,11 +88,17 @@ function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLi
   for (let p = 0; p <= last; p++) {
     const { from_m, length_m, reversed } = span.pieces[p]!;
     const sign = reversed ? -1 : 1;
-    const segments = lines[p]!.segments;
-    for (let i = 0; i < segments.length; i++) {
-      const { v, from, to } = segments[reversed ? segments.length - 1 - i : i]!;
-      const degree = Math.max(1, v.length - 1);
-      for (let k = 0; k <= degree; k++) departure[k] = sign * (v[k] ?? 0);
+    const line = lines.at(span.pieces[p]!.member);
+    const { numbers } = lines;
+    const segments = numbers[line]!;
+    for (let i = 0; i < segments; i++) {
+      const o = line + headNumbers + segmentNumbers * (reversed ? segments - 1 - i : i);
+      const from = numbers[o]!;
+      const to = numbers[o + 1]!;
+      let degree = numbers[o + degreeDeflection]!;
+      departure[1] = 0;
+      for (let k = 0; k <= degree; k++) departure[k] = sign * numbers[o + ofDeflection + k]!;
+      degree = Math.max(1, degree);
       const x0 = reversed ? from_m + length_m - from : from_m + from;
       departure[0] = departure[0]! - rest - slope * x0;
       departure[1] = departure[1]! - sign * slope;
@@ -102,7 +106,10 @@ function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLi
       for (let j = 0; j < count; j++) {
         const s = points[reversed ? count - 1 - j : j]!;
         const here = Math.abs(valueAt(departure, degree, s));
-        if (here > value * (1 + SAME)) [value, at] = [here, x0 + sign * s];
+        if (here > value * (1 + SAME)) {
+          value = here;
+          at = x0 + sign * s;
+        }
       }
     }
   }
@@ -110,11 +117,12 @@ function deflectionOf(span: Span, rule: DeflectionRule, lines: readonly MemberLi
 }
 
 /** Deflection at the near or far end of a piece as the span runs, square to it, m. */
-function endDeflection(span: Span, piece: number, lines: readonly MemberLine[], which: 'near' | 'far'): number {
-  const { reversed } = span.pieces[piece]!;
-  const segments = lines[piece]!.segments;
+function endDeflection(span: Span, piece: number, lines: StateLines, which: 'near' | 'far'): number {
+  const { member, reversed } = span.pieces[piece]!;
+  const line = lines.at(member);
+  const { numbers } = lines;
   const atStart = (which === 'near') !== reversed;
-  const segment = segments[atStart ? 0 : segments.length - 1]!;
-  const v = valueAt(segment.v, segment.v.length - 1, atStart ? 0 : segment.to - segment.from);
+  const o = line + headNumbers + (atStart ? 0 : segmentNumbers * (numbers[line]! - 1));
+  const v = valueIn(numbers, o + ofDeflection, numbers[o + degreeDeflection]!, atStart ? 0 : numbers[o + 1]! - numbers[o]!);
   return reversed ? -v : v;
 }

@@ -1,6 +1,6 @@
-import type { MemberLine } from '@/lib/results/result';
+import { degreeV, headNumbers, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
 import { faceStress } from './normal-stress';
-import { forcesAt, keep, largerFace, noPeak, SAME, turningPoints, type Peak } from './peak';
+import { forcesAt, keep, largerFace, noPeak, SAME, turningPoints, valueIn, type Peak } from './peak';
 import { valueAt } from './polynomial';
 
 const sigma = new Float64Array(16);
@@ -15,13 +15,15 @@ const peaks = [noPeak(), noPeak()] as const;
  * Exact: looks at the ends, both sides of every load point, and the roots of the derivatives of σ_top² + 3τ² and
  * σ_bottom² + 3τ². These are looked for only where they can matter: not if the member's largest σ with its largest τ,
  * wherever they are, stays below what an end or an earlier combination has.
+ * @param line where the line begins in `lines` (lib/analysis/flat-line.ts)
  * @param perA 1/A   @param perTop 1/W_top   @param perBottom 1/W_bottom   @param perAv 1/Av
  * @param bound √(σ_max² + 3 τ_max²) of the member in this combination, Pa
  * @param floor what another combination has already, Pa; a result below it need not be the exact peak
  * @returns a record that the next call uses again
  */
 export function peakEquivalentStress(
-  line: MemberLine,
+  lines: Float64Array,
+  line: number,
   perA: number,
   perTop: number,
   perBottom: number,
@@ -29,23 +31,31 @@ export function peakEquivalentStress(
   bound: number,
   floor: number,
 ): Peak {
-  const atEnds = scan(line, perA, perTop, perBottom, perAv, false);
+  const atEnds = scan(lines, line, perA, perTop, perBottom, perAv, false);
   if (bound <= Math.max(atEnds.value, floor) * (1 + SAME)) return atEnds;
-  return scan(line, perA, perTop, perBottom, perAv, true);
+  return scan(lines, line, perA, perTop, perBottom, perAv, true);
 }
 
-function scan(line: MemberLine, perA: number, perTop: number, perBottom: number, perAv: number, inside: boolean): Peak {
+function scan(
+  lines: Float64Array,
+  line: number,
+  perA: number,
+  perTop: number,
+  perBottom: number,
+  perAv: number,
+  inside: boolean,
+): Peak {
   for (let f = 0; f < 2; f++) {
     const perW = f === 0 ? -perTop : perBottom;
     const peak = peaks[f]!;
     peak.value = -1;
     peak.face = f === 0 ? 'top' : 'bottom';
-    for (let i = 0; i < line.segments.length; i++) {
-      const { N, V, M, from, to } = line.segments[i]!;
-      const h = to - from;
-      const degree = faceStress(N, M, perA, perW, sigma);
+    for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
+      const from = lines[o]!;
+      const h = lines[o + 1]! - from;
+      const degree = faceStress(lines, o, perA, perW, sigma);
       let count: number;
-      if (inside) count = turningPoints(squared, squareOf(degree, V, perAv), h, points);
+      if (inside) count = turningPoints(squared, squareOf(degree, lines, o, perAv), h, points);
       else {
         points[0] = 0;
         points[1] = h;
@@ -54,8 +64,8 @@ function scan(line: MemberLine, perA: number, perTop: number, perBottom: number,
       for (let j = 0; j < count; j++) {
         const s = points[j]!;
         const stress = valueAt(sigma, degree, s);
-        const shear = valueAt(V, V.length - 1, s) * perAv;
-        if (keep(peak, Math.sqrt(stress * stress + 3 * shear * shear), from + s)) forcesAt(peak, line, i, s);
+        const shear = valueIn(lines, o + ofV, lines[o + degreeV]!, s) * perAv;
+        if (keep(peak, Math.sqrt(stress * stress + 3 * shear * shear), from + s)) forcesAt(peak, lines, o, s);
       }
     }
   }
@@ -63,13 +73,13 @@ function scan(line: MemberLine, perA: number, perTop: number, perBottom: number,
 }
 
 /** Coefficients of σ² + 3τ² into `squared`; returns the degree. */
-function squareOf(degree: number, V: readonly number[], perAv: number): number {
-  const shearDegree = Math.max(0, V.length - 1);
+function squareOf(degree: number, lines: Float64Array, o: number, perAv: number): number {
+  const shearDegree = lines[o + degreeV]!;
   const top = 2 * Math.max(degree, shearDegree);
   squared.fill(0, 0, top + 1);
   for (let a = 0; a <= degree; a++) for (let b = 0; b <= degree; b++) squared[a + b] = squared[a + b]! + sigma[a]! * sigma[b]!;
   const scale = 3 * perAv * perAv;
   for (let a = 0; a <= shearDegree; a++)
-    for (let b = 0; b <= shearDegree; b++) squared[a + b] = squared[a + b]! + scale * V[a]! * V[b]!;
+    for (let b = 0; b <= shearDegree; b++) squared[a + b] = squared[a + b]! + scale * lines[o + ofV + a]! * lines[o + ofV + b]!;
   return top;
 }

@@ -1,4 +1,4 @@
-import type { MemberLine, Polynomial } from '@/lib/results/result';
+import { degreeM, degreeN, degreeV, headNumbers, ofM, ofN, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
 
 /** What N, V and M of a member stay within in size; used again by the next call. */
 export interface LineBounds {
@@ -12,27 +12,34 @@ const bounds: LineBounds = { N: 0, V: 0, M: 0 };
 /** Largest of t − tᵏ within 0 … 1: how far the k-th term leaves the straight line between its ends. */
 const bulge = Float64Array.from({ length: 16 }, (_, k) => (k < 2 ? 0 : k ** (-1 / (k - 1)) - k ** (-k / (k - 1))));
 
-/** Bounds that cost less than peaks: the ends, and how far each term can leave the straight line between them. */
-export function lineBounds({ segments }: MemberLine): LineBounds {
-  bounds.N = bounds.V = bounds.M = 0;
-  for (let i = 0; i < segments.length; i++) {
-    const { N, V, M, from, to } = segments[i]!;
-    const h = to - from;
-    bounds.N = Math.max(bounds.N, bound(N, h));
-    bounds.V = Math.max(bounds.V, bound(V, h));
-    bounds.M = Math.max(bounds.M, bound(M, h));
+/**
+ * Bounds that cost less than peaks: the ends, and how far each term can leave the straight line between them.
+ * @param line where the line begins in `lines`
+ */
+export function lineBounds(lines: Float64Array, line: number): LineBounds {
+  let N = 0;
+  let V = 0;
+  let M = 0;
+  for (let i = lines[line]!, s = line + headNumbers; i > 0; i--, s += segmentNumbers) {
+    const h = lines[s + 1]! - lines[s]!;
+    N = Math.max(N, bound(lines, s + ofN, lines[s + degreeN]!, h));
+    V = Math.max(V, bound(lines, s + ofV, lines[s + degreeV]!, h));
+    M = Math.max(M, bound(lines, s + ofM, lines[s + degreeM]!, h));
   }
+  bounds.N = N;
+  bounds.V = V;
+  bounds.M = M;
   return bounds;
 }
 
-function bound(p: Polynomial, h: number): number {
-  const start = p[0] ?? 0;
+function bound(lines: Float64Array, at: number, degree: number, h: number): number {
+  const start = lines[at]!;
   let end = start;
   let off = 0;
-  for (let k = 1, power = h; k < p.length; k++, power *= h) {
-    const term = p[k]! * power;
+  for (let k = 1, power = h; k <= degree; k++, power *= h) {
+    const term = lines[at + k]! * power;
     end += term;
-    off += Math.abs(term) * (bulge[k] ?? 1);
+    if (k > 1) off += Math.abs(term) * bulge[k]!;
   }
   return Math.max(Math.abs(start), Math.abs(end)) + off;
 }

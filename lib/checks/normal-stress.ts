@@ -1,4 +1,4 @@
-import type { MemberLine } from '@/lib/results/result';
+import { degreeM, degreeN, headNumbers, ofM, ofN, segmentNumbers } from '@/lib/analysis/flat-line';
 import { forcesAt, keep, largerFace, noPeak, turningPoints, type Peak } from './peak';
 import { valueAt } from './polynomial';
 
@@ -10,33 +10,36 @@ const peaks = [noPeak(), noPeak()] as const;
  * Largest normal stress in size along a member, Pa: σ_top = N/A − M/W_top, σ_bottom = N/A + M/W_bottom, tension positive.
  *
  * Exact: looks at the ends, both sides of every load point, and the roots of the derivatives of both polynomials.
+ * @param line where the line begins in `lines` (lib/analysis/flat-line.ts)
  * @param perA 1/A, 1/m²   @param perTop 1/W_top, 1/m³   @param perBottom 1/W_bottom, 1/m³ (0 where M is nil)
  * @returns a record that the next call uses again
  */
-export function peakNormalStress(line: MemberLine, perA: number, perTop: number, perBottom: number): Peak {
+export function peakNormalStress(lines: Float64Array, line: number, perA: number, perTop: number, perBottom: number): Peak {
   for (let f = 0; f < 2; f++) {
     const perW = f === 0 ? -perTop : perBottom;
     const peak = peaks[f]!;
     peak.value = -1;
     peak.face = f === 0 ? 'top' : 'bottom';
-    for (let i = 0; i < line.segments.length; i++) {
-      const { N, M, from, to } = line.segments[i]!;
-      const degree = faceStress(N, M, perA, perW, sigma);
-      const count = turningPoints(sigma, degree, to - from, points);
+    for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
+      const from = lines[o]!;
+      const degree = faceStress(lines, o, perA, perW, sigma);
+      const count = turningPoints(sigma, degree, lines[o + 1]! - from, points);
       for (let j = 0; j < count; j++) {
         const s = points[j]!;
-        if (keep(peak, Math.abs(valueAt(sigma, degree, s)), from + s)) forcesAt(peak, line, i, s);
+        if (keep(peak, Math.abs(valueAt(sigma, degree, s)), from + s)) forcesAt(peak, lines, o, s);
       }
     }
   }
   return largerFace(peaks[0], peaks[1]);
 }
 
-/** Coefficients of N/A + M·perW into `out`; returns the degree. */
-export function faceStress(N: readonly number[], M: readonly number[], perA: number, perW: number, out: Float64Array): number {
-  const terms = Math.max(N.length, M.length, 1);
-  for (let k = 0; k < terms; k++) out[k] = (N[k] ?? 0) * perA + (M[k] ?? 0) * perW;
-  let degree = terms - 1;
+/** Coefficients of N/A + M·perW along the segment that begins at `o` into `out`; returns the degree. */
+export function faceStress(lines: Float64Array, o: number, perA: number, perW: number, out: Float64Array): number {
+  const axial = lines[o + degreeN]!;
+  const bent = lines[o + degreeM]!;
+  let degree = Math.max(axial, bent);
+  for (let k = 0; k <= degree; k++)
+    out[k] = (k <= axial ? lines[o + ofN + k]! : 0) * perA + (k <= bent ? lines[o + ofM + k]! : 0) * perW;
   while (degree > 0 && out[degree] === 0) degree--;
   return degree;
 }

@@ -1,5 +1,5 @@
-import type { MemberLine } from '@/lib/results/result';
-import { rootsWithin, valueAt } from './polynomial';
+import { degreeM, degreeN, degreeV, ofM, ofN, ofV } from '@/lib/analysis/flat-line';
+import { rootsWithin } from './polynomial';
 
 /** Where something is largest in size along a member, and the internal forces there. */
 export interface Peak {
@@ -26,7 +26,10 @@ const slope = new Float64Array(16);
 export function turningPoints(c: ArrayLike<number>, degree: number, h: number, out: Float64Array): number {
   out[0] = 0;
   let count = 1;
-  if (degree > 1) {
+  if (degree === 2) {
+    const s = -c[1]! / (2 * c[2]!);
+    if (s > 0 && s < h) out[count++] = s;
+  } else if (degree > 2) {
     for (let k = 1; k <= degree; k++) slope[k - 1] = k * c[k]!;
     const found = rootsWithin(slope, degree - 1, h, roots);
     for (let i = 0; i < found; i++) out[count++] = roots[i]!;
@@ -50,10 +53,16 @@ export function largerFace(top: Peak, bottom: Peak): Peak {
   return bottom.at < top.at - SAME * (1 + top.at) ? bottom : top;
 }
 
-/** N, V and M at the peak, from the segment that it stands on. */
-export function forcesAt(peak: Peak, line: MemberLine, segment: number, s: number): void {
-  const { N, V, M } = line.segments[segment]!;
-  peak.N = valueAt(N, N.length - 1, s);
-  peak.V = valueAt(V, V.length - 1, s);
-  peak.M = valueAt(M, M.length - 1, s);
+/** N, V and M at the peak, from the segment that it stands on and that begins at `segment` of a row of numbers. */
+export function forcesAt(peak: Peak, lines: Float64Array, segment: number, s: number): void {
+  peak.N = valueIn(lines, segment + ofN, lines[segment + degreeN]!, s);
+  peak.V = valueIn(lines, segment + ofV, lines[segment + degreeV]!, s);
+  peak.M = valueIn(lines, segment + ofM, lines[segment + degreeM]!, s);
+}
+
+/** Value at s of the polynomial whose coefficients stand from `at` on. */
+export function valueIn(lines: Float64Array, at: number, degree: number, s: number): number {
+  let value = 0;
+  for (let k = degree; k >= 0; k--) value = value * s + lines[at + k]!;
+  return value;
 }

@@ -1,6 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import type { Check, MemberLine, ResultState } from '@/lib/results/result';
+import { degreeM, degreeN, headNumbers, ofM, ofN, segmentNumbers } from '@/lib/analysis/flat-line';
+import type { StateLines } from '@/lib/analysis/flat-lines';
+import type { Check, ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { figure } from './figure';
 import { SAME, turningPoints } from './peak';
@@ -36,14 +38,14 @@ interface Screening {
 /**
  * Stability screening of a span in every strength combination: where N ≤ 0.04 N_cr about both axes and M ≤ 0.16 M_cr,
  * both with the actions divided by the stress factor, buckling is negligible; else it is not checked here.
- * @param lines for each of `states` the line of each piece, in the order of span.pieces
+ * @param lines of each of `states`
  */
 export function checkStability(
   frame: Frame,
   settings: Settings,
   span: Span,
   states: readonly ResultState[],
-  lines: readonly (readonly MemberLine[])[],
+  lines: readonly StateLines[],
   findings: Findings,
 ): void {
   const subject = stabilitySubject(span);
@@ -61,7 +63,7 @@ export function checkStability(
   let best: { readonly screening: Screening; readonly state: ResultState } | null = null;
   for (let c = 0; c < states.length; c++) {
     const state = states[c]!;
-    const found = screen(settings, buckling, state, lines[c]!);
+    const found = screen(settings, buckling, state, span, lines[c]!);
     if (found.needs.length > 0 || found.ratio > 1) {
       rows.push(refused(settings, span, subject, state, buckling, found));
       // a combination that is not checked governs all that follow
@@ -99,9 +101,12 @@ function note(span: Span, buckling: SpanBuckling, findings: Findings): void {
 
 const NONE: readonly string[] = [];
 
-function screen(settings: Settings, of: SpanBuckling, state: ResultState, lines: readonly MemberLine[]): Screening {
+function screen(settings: Settings, of: SpanBuckling, state: ResultState, span: Span, lines: StateLines): Screening {
   const f = settings.stressFactor;
-  actionsOf(lines);
+  actionsOf(span, lines);
+  const compression = actions[0]!;
+  const sagging = actions[1]!;
+  const hogging = actions[2]!;
   // what rounding leaves of zero: a stress of E/10⁹
   const noForce = 1e-9 * of.E * of.A;
   const noMoment = noForce * Math.sqrt(of.Imajor / of.A);
@@ -215,25 +220,35 @@ function inputsOf(settings: Settings, span: Span, of: SpanBuckling, found: Scree
 }
 
 const points = new Float64Array(32);
-let compression = 0;
-let sagging = 0;
-let hogging = 0;
+const force = new Float64Array(16);
+// in an array, for numbers kept by a module cost memory
+const actions = new Float64Array(3);
 
-/** Largest compression and moments of either sign along the pieces, N and N·m, into the three figures above. */
-function actionsOf(lines: readonly MemberLine[]): void {
-  compression = sagging = hogging = 0;
-  for (const line of lines)
-    for (let i = 0; i < line.segments.length; i++) {
-      const { N, M, from, to } = line.segments[i]!;
-      const axial = N.length - 1;
-      let count = turningPoints(N, axial, to - from, points);
-      for (let j = 0; j < count; j++) compression = Math.max(compression, -valueAt(N, axial, points[j]!));
-      const bent = M.length - 1;
-      count = turningPoints(M, bent, to - from, points);
+/** Largest compression and moments of either sign along the pieces, N and N·m, into `actions`. */
+function actionsOf(span: Span, of: StateLines): void {
+  let compression = 0;
+  let sagging = 0;
+  let hogging = 0;
+  for (let p = 0; p < span.pieces.length; p++) {
+    const line = of.at(span.pieces[p]!.member);
+    const lines = of.numbers;
+    for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
+      const h = lines[o + 1]! - lines[o]!;
+      const axial = lines[o + degreeN]!;
+      for (let k = 0; k <= axial; k++) force[k] = lines[o + ofN + k]!;
+      let count = turningPoints(force, axial, h, points);
+      for (let j = 0; j < count; j++) compression = Math.max(compression, -valueAt(force, axial, points[j]!));
+      const bent = lines[o + degreeM]!;
+      for (let k = 0; k <= bent; k++) force[k] = lines[o + ofM + k]!;
+      count = turningPoints(force, bent, h, points);
       for (let j = 0; j < count; j++) {
-        const moment = valueAt(M, bent, points[j]!);
+        const moment = valueAt(force, bent, points[j]!);
         if (moment > sagging) sagging = moment;
         if (-moment > hogging) hogging = -moment;
       }
     }
+  }
+  actions[0] = compression;
+  actions[1] = sagging;
+  actions[2] = hogging;
 }

@@ -1,5 +1,7 @@
 import type { Frame, Material } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
+import { degreeM, degreeN, degreeV, flattened, headNumbers, ofM, ofN, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
+import type { StateLines } from '@/lib/analysis/flat-lines';
 import type { MemberLine, ResultState } from '@/lib/results/result';
 import { inPlane, type InPlane } from '@/lib/sections/in-plane';
 import { keepGoverning, notCheckedRow, type Findings } from './check-row';
@@ -24,7 +26,7 @@ export function stressNotChecked(frame: Frame, member: number, reason: string, f
 
 /**
  * Elastic stress of one member over all strength combinations: normal, shear and equivalent stress.
- * @param lines the member's line in each of `states`
+ * @param lines the lines of each of `states`
  * @param slenderIn what is found of slender plates along the line of all pieces of its span of the same section, in a state: along
  *   the physical member, so that a node on it changes nothing; looked for once for all of them
  */
@@ -33,7 +35,7 @@ export function checkStress(
   settings: Settings,
   member: number,
   states: readonly ResultState[],
-  lines: readonly MemberLine[],
+  lines: readonly StateLines[],
   slenderIn: SlenderIn,
   findings: Findings,
 ): void {
@@ -52,21 +54,22 @@ export function checkStress(
 
   const rows = new StressRows(frame, settings, member, of, fy, findings.all !== null);
   for (let c = 0; c < lines.length; c++) {
-    const line = lines[c]!;
+    const at = lines[c]!.at(member);
+    const line = lines[c]!.numbers;
     const combination = states[c]!.name;
-    const noW = modulusMissing(of, m.turned, line);
+    const noW = modulusMissing(of, m.turned, line, at);
     const perTop = of.Wtop_m3 && !noW ? 1 / of.Wtop_m3 : 0;
     const perBottom = of.Wbottom_m3 && !noW ? 1 / of.Wbottom_m3 : 0;
     let noNormal = noW;
     if (!noW && plates.watch.length > 0) {
       const slender = slenderIn(c, (whole) => {
-        const governing = peakNormalStress(whole, 1 / of.A_m2, perTop, perBottom);
+        const governing = peakNormalStress(flattened(whole), 0, 1 / of.A_m2, perTop, perBottom);
         return slenderInCombination(section, m.turned, material, plates.watch, whole, of, governing, settings.stressFactor);
       });
       if (slender) noNormal = `slender ${slender}`;
     }
-    if (!noNormal && !noAv && plates.shear === null && rows.staysBelow(lineBounds(line), perTop, perBottom)) continue;
-    const normal = noNormal ? 0 : rows.take(0, combination, peakNormalStress(line, 1 / of.A_m2, perTop, perBottom));
+    if (!noNormal && !noAv && plates.shear === null && rows.staysBelow(lineBounds(line, at), perTop, perBottom)) continue;
+    const normal = noNormal ? 0 : rows.take(0, combination, peakNormalStress(line, at, 1 / of.A_m2, perTop, perBottom));
     if (noNormal) rows.refuse(0, combination, noNormal);
     if (noAv) {
       rows.refuse(1, combination, noAv);
@@ -74,7 +77,7 @@ export function checkStress(
       continue;
     }
     const perAv = 1 / of.AvPeak_m2!;
-    const peak = peakShearStress(line, perAv);
+    const peak = peakShearStress(line, at, perAv);
     if (plates.shear !== null && peak.value > NO_SHEAR * fy) {
       rows.refuse(1, combination, plates.shear);
       rows.refuse(2, combination, noNormal ?? plates.shear);
@@ -85,24 +88,24 @@ export function checkStress(
     else {
       const bound = Math.sqrt(normal * normal + 3 * shear * shear);
       const floor = rows.floor(2);
-      rows.take(2, combination, peakEquivalentStress(line, 1 / of.A_m2, perTop, perBottom, perAv, bound, floor));
+      rows.take(2, combination, peakEquivalentStress(line, at, 1 / of.A_m2, perTop, perBottom, perAv, bound, floor));
     }
   }
   rows.finish(findings);
 }
 
 /** Why bending stress can't be had: a modulus is missing though the member bends (moments of rounding's size count as none). */
-function modulusMissing(of: InPlane, turned: boolean, line: MemberLine): string | null {
+function modulusMissing(of: InPlane, turned: boolean, lines: Float64Array, line: number): string | null {
   if (of.Wtop_m3 !== null && of.Wbottom_m3 !== null) return null;
   let moment = 0;
   let force = 0;
-  for (const { N, V, M, from, to } of line.segments) {
-    const h = to - from;
-    for (let k = 0; k < M.length; k++) moment += Math.abs(M[k]!) * h ** k;
-    for (let k = 0; k < N.length; k++) force += Math.abs(N[k]!) * h ** k;
-    for (let k = 0; k < V.length; k++) force += Math.abs(V[k]!) * h ** k;
+  for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
+    const h = lines[o + 1]! - lines[o]!;
+    for (let k = 0; k <= lines[o + degreeM]!; k++) moment += Math.abs(lines[o + ofM + k]!) * h ** k;
+    for (let k = 0; k <= lines[o + degreeN]!; k++) force += Math.abs(lines[o + ofN + k]!) * h ** k;
+    for (let k = 0; k <= lines[o + degreeV]!; k++) force += Math.abs(lines[o + ofV + k]!) * h ** k;
   }
-  if (moment <= 1e-9 * force * line.length) return null;
+  if (moment <= 1e-9 * force * lines[line + 1]!) return null;
   if (turned) return 'needs W minor';
   if (of.Wtop_m3 === null && of.Wbottom_m3 === null) return 'needs W top, W bottom';
   return of.Wtop_m3 === null ? 'needs W top' : 'needs W bottom';

@@ -37,8 +37,21 @@ export function evaluateFrame(analyser: Analyser, frame: Frame, settings: Settin
 }
 
 function evaluate(analyser: Analyser, frame: Frame, settings: Settings, options: EvaluateOptions): FrameEvaluation {
-  const lineOf = options.lineOf ?? lineMemo(frame);
-  const analysis = analyser.analyse(frame, { second: options.second, settings, lineOf });
+  if (options.lineOf) return withLines(analyser, frame, settings, options, options.lineOf);
+  const lineOf = lineMemo(frame);
+  const evaluation = withLines(analyser, frame, settings, options, lineOf);
+  lineOf.flat.forget();
+  return evaluation;
+}
+
+function withLines(
+  analyser: Analyser,
+  frame: Frame,
+  settings: Settings,
+  options: EvaluateOptions,
+  lineOf: LineOf,
+): FrameEvaluation {
+  const analysis = analyser.analyse(frame, { second: options.second, settings, lines: lineOf.flat });
   if (!analysis.ok) return unsolved(frame, analysis.failure);
   const bad = analysis.states.find((state) => !finite(state));
   if (bad) {

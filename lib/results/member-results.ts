@@ -36,7 +36,11 @@ export function memberResults(frame: Frame, evaluation: FrameEvaluation, lineOf:
   const governing = byMember(frame, pieces, evaluation.checks);
   const extremes = evaluation.states.map((state) => {
     const numbers = new Float64Array(extremeNumbers * frame.members.length);
-    for (let i = 0; i < frame.members.length; i++) writeExtremes(lineOf(state, i), numbers, extremeNumbers * i);
+    const lines = lineOf.flat.of(state);
+    for (let i = 0; i < frame.members.length; i++) {
+      const at = lines.at(i);
+      writeExtremes(lines.numbers, at, numbers, extremeNumbers * i);
+    }
     return numbers;
   });
   const members = frame.members.map((_, i): MemberGoverning => {

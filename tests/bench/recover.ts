@@ -50,9 +50,16 @@ function recovered({ frame, angles, loads, d }: SolvedFrame, t: Topology, settin
   });
   const combinations = frame.combinations.map((_, index) => ({ ...superpose(frame, cases, index), criticalLoadFactor: 12 }));
   const lineOf = lineMemo(frame);
-  for (const state of combinations)
-    for (let member = 0; member < frame.members.length; member += 1) writeExtremes(lineOf(state, member), extremes, 0);
-  return checkFrame(frame, settings, combinations, lineOf, { all: false }).checks.length;
+  for (const state of combinations) {
+    const lines = lineOf.flat.of(state);
+    for (let member = 0; member < frame.members.length; member += 1) {
+      const at = lines.at(member);
+      writeExtremes(lines.numbers, at, extremes, 0);
+    }
+  }
+  const { checks } = checkFrame(frame, settings, combinations, lineOf, { all: false });
+  lineOf.flat.forget();
+  return checks.length;
 }
 
 export async function recoverAgainstSolve(rounds: number): Promise<Record<string, number>> {

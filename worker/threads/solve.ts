@@ -40,7 +40,9 @@ export function solveChunk(task: SolveTask): SolvedFrame[] {
     const lineOf = lineMemo(frame);
     const options = { second: task.second.has(version), all: false, lineOf };
     const evaluation = evaluateFrame(analyser, frame, task.settings, options);
-    return { version, frame, evaluation, ...memberResults(frame, evaluation, lineOf) };
+    const results = { version, frame, evaluation, ...memberResults(frame, evaluation, lineOf) };
+    lineOf.flat.forget();
+    return results;
   });
   const stored = new Set(insertChunkResults(raw, results, { person: task.person }));
   addJobProgress(raw, task.job, stored.size);

@@ -1,4 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
+import { numbers } from '../numbers';
 
 /** Notional load as a share of the gravity load (AISC 360-22 C2.2b, eq. C2-1: N_i = 0.002 α Y_i). */
 const share = 0.002;
@@ -17,7 +18,7 @@ export function notionalLoads(
   factors: Float64Array,
   alpha: number,
 ): Float64Array {
-  const forces = new Float64Array(2 * frame.nodes.length);
+  const forces = numbers(2 * frame.nodes.length);
   for (let node = 0; node < frame.nodes.length; node++) {
     let Y = 0;
     for (let c = 0; c < gravity.length; c++) Y += factors[c]! * gravity[c]![node]!;

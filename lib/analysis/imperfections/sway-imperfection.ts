@@ -1,4 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
+import { numbers } from '../numbers';
 import type { Column } from './columns';
 
 /** Basic value of the initial sway, φ₀ (EN 1993-1-1 5.3.2(3)a). */
@@ -70,7 +71,7 @@ function lowestRow(frame: Frame, columns: readonly Column[]): readonly Column[] 
  * its foot (EN 1993-1-1 5.3.2(7), Fig. 5.4); a piece in tension gives nothing. Fx, Fy by node, 2 each, N.
  */
 export function swayForces(frame: Frame, columns: readonly Column[], endForces: Float64Array): Float64Array {
-  const forces = new Float64Array(2 * frame.nodes.length);
+  const forces = numbers(2 * frame.nodes.length);
   if (columns.length === 0) return forces;
   const { phi } = swayImperfection(frame, columns, endForces);
   for (const column of columns)

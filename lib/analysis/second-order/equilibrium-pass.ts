@@ -22,6 +22,7 @@ export interface Work {
 
 /** A pivot below this share of its own diagonal is none. */
 const pivotTolerance = 1e-12;
+const ends = new Float64Array(6);
 
 /** Loads of the combination, by member and by node. */
 export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
@@ -52,7 +53,6 @@ export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
     all[o + 2] = all[o + 2]! + k * (s.rz_rad ?? 0);
     settled = true;
   }
-  const ends = new Float64Array(6);
   for (let i = 0; i < data.length; i++) {
     const loading = loadings[i]!;
     combineLoading(frame, i, factors, loadScale, loading);

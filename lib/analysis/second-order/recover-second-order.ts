@@ -1,4 +1,5 @@
 import { endForces, endInNodeAxes, toLocal } from '../load-vectors';
+import { copyOf, numbers } from '../numbers';
 import { takeReactions } from '../recover';
 import type { Work } from './equilibrium-pass';
 import { clampedTurns, type Turns } from './joint-turns';
@@ -6,6 +7,9 @@ import { memberChain } from './member-chain';
 import { emptyPiece } from './piece';
 import type { SecondOrderState } from './solve-second-order';
 
+const u = new Float64Array(6);
+const q = new Float64Array(6);
+const piece = emptyPiece();
 const turns: Turns = { start: 0, end: 0 };
 
 /**
@@ -17,12 +21,9 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
   const { frame, t, angles, data, slack, loadScale, space } = input;
   const { N, loadings, held } = space;
   const nodes = frame.nodes.length;
-  const all = space.all.slice();
-  const asked = new Float64Array(3 * nodes);
-  const forces = new Float64Array(6 * data.length);
-  const u = new Float64Array(6);
-  const q = new Float64Array(6);
-  const piece = emptyPiece();
+  const all = copyOf(space.all);
+  const asked = numbers(3 * nodes);
+  const forces = numbers(6 * data.length);
   let handled = 0;
   for (let i = 0; i < data.length; i++) {
     if (slack?.[i]) continue;

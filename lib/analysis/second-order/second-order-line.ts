@@ -1,6 +1,8 @@
 import type { Frame } from '@/lib/model/frame';
-import type { MemberLine, ResultState, Segment } from '@/lib/results/result';
+import type { ResultState } from '@/lib/results/result';
+import { headNumbers, ofDeflection, ofM, ofN, ofU, ofV, segmentNumbers, writeDegrees } from '../flat-line';
 import type { MemberData } from '../member-data';
+import type { LineRoom } from '../member-line';
 import { economise } from './economise';
 import { cut, emptyPieces, givenStride, series, terms, type LinePieces, type PieceEnd } from './line-pieces';
 import { combineLoading, emptyLoading, type MemberLoading } from './member-loading';
@@ -22,9 +24,9 @@ const at: PieceEnd = { v: 0, psi: 0, M: 0, Q: 0 };
 /**
  * Internal forces and deflected line of a member of a second-order state, as polynomials between load points (more where
  * the axial force is large): power series of EI ψ′ = M + EI κ₀, M′ = V = Q + N v′, Q′ = q, v′ = ψ − V/GAv, their degree
- * lowered within 1e-9 of their largest value, both ends exactly. README §8.
+ * lowered within 1e-9 of their largest value, both ends exactly. README §8. As a row of numbers (../flat-line.ts).
  */
-export function secondOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData): MemberLine {
+export function secondOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData, into: LineRoom): void {
   const scale = state.method?.loadScale ?? 1;
   const e = 6 * member;
   const N0 = state.endForces[e]!;
@@ -40,8 +42,7 @@ export function secondOrderLine(frame: Frame, state: ResultState, member: number
     pieces = cut(m, loading, scale * N0, scale, finer, pieces);
     if (damping(m) > dampest) along(m, tieStarts(m, loading, pieces, ends));
     else follow(m, scale * N0, ends);
-    const segments = written(m, state.endForces, e, u1, v2, scale, finer < 16);
-    if (segments) return { length: m.length, segments };
+    if (written(m, state.endForces, e, u1, v2, scale, finer < 16, into)) return;
   }
 }
 
@@ -142,22 +143,28 @@ function largest(c: Float64Array, first: number): number {
   return most;
 }
 
-/** Coefficients in powers of s, of as low a degree as may be; null where that is above `cap`. */
-function lowered(c: Float64Array, k: number, allowed: number, beyond: number, cap: number): number[] | null {
+/** Coefficients in powers of s, of as low a degree as may be, to `at`; returns the degree, −1 where it is above `cap`. */
+function lowered(
+  c: Float64Array,
+  k: number,
+  allowed: number,
+  beyond: number,
+  cap: number,
+  out: Float64Array,
+  at: number,
+): number {
   const o = terms * k;
   const degree = economise(c, o, terms - 1, allowed, cap, beyond === Infinity ? beyond : beyond * allowed);
-  if (degree < 0) return null;
-  const out = new Array<number>(degree + 1);
   const per = 1 / pieces.given[givenStride * k + 1]!;
   let power = 1;
   for (let i = 0; i <= degree; i++) {
-    out[i] = c[o + i]! * power;
+    out[at + i] = c[o + i]! * power;
     power *= per;
   }
-  return out;
+  return degree;
 }
 
-/** The segments; null where a piece asks for a higher degree than may be, if `strict`. */
+/** The segments; false where a piece asks for a higher degree than may be, if `strict`. */
 function written(
   m: MemberData,
   forces: Float64Array,
@@ -166,29 +173,64 @@ function written(
   v2: number,
   scale: number,
   strict: boolean,
-): Segment[] | null {
+  into: LineRoom,
+): boolean {
   const beyond = strict ? 4 : Infinity;
-  const [ofV, ofM, ofv] = [close * largest(pieces.V, 0), close * largest(pieces.M, 0), close * largest(pieces.v, 2)];
-  const segments: Segment[] = [];
-  const flat = (x: number, at: number, u: number, v: number): Segment => ({
-    from: x, to: x, N: [forces[e + at]!], V: [forces[e + at + 1]!], M: [forces[e + at + 2]!], u: [u], v: [v],
-  }); // prettier-ignore
+  const ofShear = close * largest(pieces.V, 0);
+  const ofMoment = close * largest(pieces.M, 0);
+  const ofMovement = close * largest(pieces.v, 2);
+  const at = into.room(pieces.count + 2);
+  const out = into.numbers;
+  let s = at + headNumbers;
   let u = u1;
-  if (loading.startJump) segments.push(flat(0, 0, u, pieces.v[0]!));
+  if (loading.startJump) {
+    flat(0, forces, e, u, pieces.v[0]!, out, s);
+    s += segmentNumbers;
+  }
   for (let k = 0; k < pieces.count; k++) {
     const g = givenStride * k;
-    const from = pieces.given[g]!;
     const l = pieces.given[g + 1]!;
-    const [n0, n1, n2] = [pieces.given[g + 2]! / scale, pieces.given[g + 3]! / scale, pieces.given[g + 4]! / scale];
-    const stretch = [u, n0 / m.EA + loading.strain, n1 / m.EA / 2, n2 / m.EA / 3] as const;
-    const V = lowered(pieces.V, k, ofV, beyond, mostForces);
-    const M = V && lowered(pieces.M, k, ofM, beyond, mostForces);
-    const v = M && lowered(pieces.v, k, ofv, beyond, mostDeflection);
-    if (!V || !M || !v) return null;
-    const to = k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length;
-    segments.push({ from, to, N: [n0, n1, n2], V, M, u: stretch, v });
-    u += l * (stretch[1] + l * (stretch[2] + l * stretch[3]));
+    const n0 = pieces.given[g + 2]! / scale;
+    const n1 = pieces.given[g + 3]! / scale;
+    const n2 = pieces.given[g + 4]! / scale;
+    const V = lowered(pieces.V, k, ofShear, beyond, mostForces, out, s + ofV);
+    if (V < 0) return false;
+    const M = lowered(pieces.M, k, ofMoment, beyond, mostForces, out, s + ofM);
+    if (M < 0) return false;
+    const v = lowered(pieces.v, k, ofMovement, beyond, mostDeflection, out, s + ofDeflection);
+    if (v < 0) return false;
+    out[s] = pieces.given[g]!;
+    out[s + 1] = k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length;
+    writeDegrees(out, s, 2, V, M, 3, v);
+    out[s + ofN] = n0;
+    out[s + ofN + 1] = n1;
+    out[s + ofN + 2] = n2;
+    const strain = n0 / m.EA + loading.strain;
+    const strain1 = n1 / m.EA / 2;
+    const strain2 = n2 / m.EA / 3;
+    out[s + ofU] = u;
+    out[s + ofU + 1] = strain;
+    out[s + ofU + 2] = strain1;
+    out[s + ofU + 3] = strain2;
+    u += l * (strain + l * (strain1 + l * strain2));
+    s += segmentNumbers;
   }
-  if (loading.endJump) segments.push(flat(m.length, 3, u, v2));
-  return segments;
+  if (loading.endJump) {
+    flat(m.length, forces, e + 3, u, v2, out, s);
+    s += segmentNumbers;
+  }
+  out[at] = (s - at - headNumbers) / segmentNumbers;
+  out[at + 1] = m.length;
+  return true;
+}
+
+/** A segment of no length. */
+function flat(x: number, forces: Float64Array, e: number, u: number, v: number, out: Float64Array, s: number): void {
+  out[s] = out[s + 1] = x;
+  writeDegrees(out, s, 0, 0, 0, 0, 0);
+  out[s + ofN] = forces[e]!;
+  out[s + ofV] = forces[e + 1]!;
+  out[s + ofM] = forces[e + 2]!;
+  out[s + ofU] = u;
+  out[s + ofDeflection] = v;
 }
