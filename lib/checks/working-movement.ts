@@ -91,7 +91,7 @@ export function criticalLoadFactorWorking(check: Check, print: Printer): readonl
         text('='),
         print.result(product, 'number'),
       ],
-      source: 'f: stress factor',
+      source: num(check, 'f') === 1 ? 'f: stress factor, 1 under a design code' : 'f: stress factor',
     },
     { what: 'limit', parts: [alpha_cr, symbol('f'), text('≥ 1, and ≥ 10 for a first-order analysis')] },
   ];
