@@ -64,7 +64,7 @@ export function CombinationTable({ combinations, frames, edits, onEdit }: Combin
                 <td key={name} className="num">
                   {edits && onEdit && each.clause !== null && factorOf(each, name) !== '' ? (
                     <input
-                      className="field-input w-20 text-right"
+                      className="border-hair w-20 border px-1 text-right"
                       inputMode="decimal"
                       aria-label={`Factor on ${name} in ${each.name}`}
                       disabled={edits.leftOut.has(each.name)}

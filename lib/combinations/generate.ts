@@ -101,7 +101,7 @@ function nameOf(cases: readonly LoadCase[], terms: Combination['terms'], suffix:
 }
 
 /** 1 is "1.0", so that a factor always stands before a case's name. */
-export function factorText(factor: number): string {
+function factorText(factor: number): string {
   const text = String(Number(factor.toPrecision(6)));
   return /^\d+$/.test(text) ? `${text}.0` : text;
 }

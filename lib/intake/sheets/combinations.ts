@@ -212,5 +212,6 @@ export class Combinations {
 
   tellUnfit(frames: readonly FrameEntry[]): void {
     if (this.table) this.rows.tellUnfit(this.reader, frames, this.problems);
+    this.generated.tellTaken();
   }
 }

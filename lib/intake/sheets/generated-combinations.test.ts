@@ -32,8 +32,8 @@ describe('a combination set chosen in Setup', () => {
       'service: 1.0 dead − 1.0 wind (service)',
     ]);
     expect(intake.frames[0]?.frame?.notChecked).toEqual([]);
-    expect(lines(intake)).toEqual(['note default-used Setup!B5 F1,F2']);
-    expect(intake.problems[0]?.message).toContain('service combinations hold snow and wind in full');
+    expect(lines(intake)).toEqual(['note default-used Setup!B5 –']);
+    expect(intake.problems[0]?.message).toBe('ASCE 7-22 LRFD: service combinations hold snow and wind in full');
   });
 
   it('stands after the listed ones, and adds none that is listed already by its factors', () => {

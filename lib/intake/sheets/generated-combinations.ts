@@ -15,15 +15,13 @@ export interface ChosenSet {
 /** Combinations made by the batch's rule set, beside those that its sheet lists. */
 export class GeneratedCombinations {
   private readonly made = new Map<FrameCases, Generated>();
+  /** What was taken for kinds that some frame has. */
+  private readonly said = new Set<string>();
 
   constructor(
     private readonly chosen: ChosenSet | null,
     private readonly problems: ProblemList,
   ) {}
-
-  get any(): boolean {
-    return this.chosen !== null;
-  }
 
   /**
    * What the set makes of a frame's cases, without those that the sheet lists: of one name, or of the same factors for the
@@ -45,8 +43,7 @@ export class GeneratedCombinations {
       this.problems.add(place, { code: 'out-of-range', message: say.tooManyCombinations(set.name, made.tooMany) }, frame);
       return { list: [], notChecked: [] };
     }
-    if (made.said.length > 0)
-      this.problems.add(place, { code: 'default-used', message: say.setTakes(set.name, set.said.map(({ words }) => words)) }, frame); // prettier-ignore
+    for (const words of made.said) this.said.add(words);
     const names = new Set(listed.map(({ name }) => idKey(name)));
     const factors = new Set(listed.map(({ purpose, terms }) => sameTerms(purpose, terms)));
     const list = made.list.filter(({ name, purpose, terms }) => {
@@ -59,5 +56,12 @@ export class GeneratedCombinations {
       list: list.map(({ name, purpose, terms }) => ({ name, purpose, terms })),
       notChecked: made.noRule.map(({ name, kind }) => say.noRuleForKind(name, kind, set.name)),
     };
+  }
+
+  /** Says at the set, once every frame is read, what it takes for the kinds that the batch has. */
+  tellTaken(): void {
+    if (!this.chosen || this.said.size === 0) return;
+    const { set, place } = this.chosen;
+    this.problems.add(place, { code: 'default-used', message: say.setTakes(set.name, [...this.said]) }, null);
   }
 }
