@@ -170,14 +170,15 @@ describe('the workbook of a batch checked by a design code', () => {
   }
   const lines = (rows: readonly ReportRow[] | undefined): string[] => (rows ?? []).map((each) => each.join(' | '));
 
-  it('has forces and moments with their units, the governing clause’s calculation, and says what was checked', async () => {
+  it('has forces and moments with their units, the calculation of every clause, and says what was checked', async () => {
     const book = await workbook(beam([...eurocode, ['national annex', 'recommended values']]));
     const bending = book.get('Members')?.find((each) => each[4] === '6.2.5 bending');
     expect(bending?.[8]).toBeCloseTo(121.5, 6);
     expect(bending?.[10]).toBe('kN·m');
     const working = book.get('Working') ?? [];
     expect(working[0]).toEqual(['frame', 'where', 'check', 'combination', 'step', 'calculation', 'clause', 'verdict']);
-    expect(new Set(working.slice(1).map((each) => each[2])).size).toBe(1);
+    const clauses = (book.get('Members') ?? []).slice(1).map((each) => each[4]).filter((check) => /^\d/.test(String(check))); // prettier-ignore
+    expect([...new Set(working.slice(1).map((each) => each[2]))]).toEqual(clauses);
     expect(lines(working).some((line) => /√|\//.test(line) && line.includes(' = '))).toBe(true);
     expect(lines(working).join()).not.toMatch(/NaN|undefined/);
     const cover = lines(book.get('Cover')).join('\n');

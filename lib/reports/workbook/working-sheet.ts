@@ -1,4 +1,4 @@
-/** Working: the calculation of the clause that governs each member, line by line, as text. */
+/** Working: the calculation of every clause on the Members sheet, line by line, as text. */
 import { isClause } from '@/lib/checks/design-code/clause-name';
 import { workingOf } from '@/lib/checks/working';
 import { workingFormat } from '@/lib/checks/working-format';
@@ -7,24 +7,9 @@ import { text, verdictColumn, type ReportRow, type ReportSheet } from '@/lib/rep
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { rowsOfFrames } from '@/lib/reports/workbook/rows-of-frames';
 import type { Settings } from '@/lib/model/settings';
-import type { Check } from '@/lib/results/result';
-import { governingIndex } from '@/lib/results/verdict';
 
 /** Whether a workbook has the sheet: where members are checked by a design code. */
 export const hasWorking = ({ strengthCheck }: Settings): boolean => strengthCheck !== 'elastic stress';
-
-/** The governing clause of each member or span, in the order of the checks; a member no clause of which was checked is left out. */
-function governingClauses(checks: readonly Check[]): readonly Check[] {
-  const bySubject = new Map<string, Check[]>();
-  for (const check of checks) {
-    if (!isClause(check.check) || check.subject === null) continue;
-    const key = `${check.subjectKind} ${check.subject}`;
-    const list = bySubject.get(key);
-    if (list) list.push(check);
-    else bySubject.set(key, [check]);
-  }
-  return [...bySubject.values()].map((list) => list[governingIndex(list)]!);
-}
 
 export function workingSheet(source: ReportSource): ReportSheet {
   const format = workingFormat(source.settings.units, source.settings.nearLimit);
@@ -42,7 +27,8 @@ export function workingSheet(source: ReportSource): ReportSheet {
     ],
     rows: () =>
       rowsOfFrames(source, { states: false }, function* (each): Iterable<ReportRow> {
-        for (const check of governingClauses(each.evaluation?.checks ?? []))
+        for (const check of each.evaluation?.checks ?? []) {
+          if (!isClause(check.check)) continue;
           for (const line of workingOf(check, format))
             yield [
               each.id,
@@ -54,6 +40,7 @@ export function workingSheet(source: ReportSource): ReportSheet {
               line.source ?? null,
               line.what === 'ratio' ? check.verdict : null,
             ];
+        }
       }),
   };
 }
