@@ -5,7 +5,7 @@ import { foot_m, pound_kg } from '@/lib/units/constants';
 import type { Quantity, System } from '@/lib/units/quantity';
 
 /** The density that EN 1991-1-1 (annex A) and the product standards give steel with; its mass per metre goes with it. */
-export const steelDensity_kg_m3 = 7850;
+const steelDensity_kg_m3 = 7850;
 
 type LibraryQuantity = Quantity | 'massPerLength';
 
