@@ -39,8 +39,8 @@ export type ComparedRows =
 
 export interface ComparedPage {
   readonly totals: ComparedTotals;
-  /** Inputs that differ: kinds of change, and cells or rows in all. */
-  readonly inputs: { readonly changes: number; readonly cells: number };
+  /** Inputs that differ: kinds of change, cells or rows in all, and the first few changes. */
+  readonly inputs: { readonly changes: number; readonly cells: number; readonly first: readonly InputGroup[] };
   /** In the later revision's sheet order, then those that only the earlier one has; null where it was not asked for. */
   readonly strip: readonly ComparedCell[] | null;
   readonly page: ComparedRows;

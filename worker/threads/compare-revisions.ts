@@ -6,6 +6,9 @@ import type { CompareAsked, ComparedCell, ComparedPage, ComparedRows } from '@/l
 import { type Compared, comparedOf } from './compared';
 import { openOnce } from './open-once';
 
+/** Changes of inputs that are named whichever list is asked for. */
+const someChanges = 6;
+
 export interface CompareTask extends CompareAsked {
   /** The database's file. */
   readonly file: string;
@@ -22,7 +25,7 @@ export async function compareRevisions({ file, office, before, after, ...asked }
   const [groups, cells] = [await compared.inputGroups(), await compared.inputs()];
   return {
     totals: compareTotals(compared.frames, asked.by),
-    inputs: { changes: groups.length, cells: cells.length },
+    inputs: { changes: groups.length, cells: cells.length, first: groups.slice(0, someChanges) },
     strip: asked.strip ? stripOf(compared) : null,
     page: { list, rows: rows.slice(asked.offset, asked.offset + asked.limit) } as ComparedRows,
     matching: rows.length,

@@ -7,18 +7,19 @@ import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
 import type { TableName } from '@/lib/tables/view';
 import { MadeFrom } from './made-from';
+import { letterBefore } from './letter-before';
 import { stateWords } from './state-words';
 import { ResultTools } from './result-tools';
 
-export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | TableName;
+export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | 'compare' | TableName;
 
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
   readonly sheet: SheetName;
 }
 
-/** The numbered sheets; compare (8) and marks (9) keep their numbers for when they come. */
-const sheets = ['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems'] as const;
+/** The numbered sheets; marks (9) keep their number for when they come. */
+const sheets = ['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems', 'compare'] as const;
 
 /** Title block and sheet index over every page of a revision. */
 export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
@@ -34,8 +35,8 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
       {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change') && (
         <SheetIndex
           sheets={sheets.map((name) => ({
-            label: name[0]!.toUpperCase() + name.slice(1),
-            href: hasResults || name === 'problems' ? pages.sheet(batch, letter, name) : null,
+            label: labelOf(revision, name),
+            href: sheetHref(revision, name),
             count: known[name] ?? null,
             current: name === sheet,
           }))}
@@ -44,6 +45,24 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
       )}
     </>
   );
+}
+
+/** The revision that it was made from, or the one before it; null = it is the first. */
+const otherOf = ({ letter, madeFrom }: RevisionRecord): string | null => madeFrom ?? letterBefore(letter);
+
+/** "Frames", "Compare with A" */
+function labelOf(revision: RevisionRecord, name: (typeof sheets)[number]): string {
+  const other = otherOf(revision);
+  return name === 'compare' && other !== null ? `Compare with ${other}` : name[0]!.toUpperCase() + name.slice(1);
+}
+
+/** Null: not there yet, or nothing to compare with. */
+function sheetHref(revision: RevisionRecord, name: (typeof sheets)[number]): string | null {
+  const { batch, letter, runStartedAt } = revision;
+  if (runStartedAt === null && name !== 'problems') return null;
+  if (name !== 'compare') return pages.sheet(batch, letter, name);
+  const other = otherOf(revision);
+  return other === null ? null : pages.compare(batch, letter, { with: other });
 }
 
 /** Rows of the tables of results; the database keeps them tallied. */
