@@ -37,7 +37,7 @@ describe('every page by axe', () => {
     );
   }
 
-  const lead = ['/projects', '/people'];
+  const lead = ['/projects', '/people', '/limits'];
   const staff = () => [
     `/projects/${people.north.project}`,
     `/projects/${people.north.project}/bring`,
