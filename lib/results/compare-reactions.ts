@@ -1,7 +1,7 @@
 /** Reactions of a frame before and after: at each support the largest and smallest of each direction over all its results. */
 import { idKey } from '@/lib/intake/ids';
 
-export const directions = ['Fx', 'Fy', 'Mz'] as const;
+const directions = ['Fx', 'Fy', 'Mz'] as const;
 export type Direction = (typeof directions)[number];
 
 /** One support in one result, N and N·m. */

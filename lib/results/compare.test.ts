@@ -52,6 +52,12 @@ describe('frames of two revisions', () => {
     expect(hair!.change).toBe(0);
   });
 
+  it('moved, and did not stay, where the ratio has no end in one of both', () => {
+    const [pair] = pairFrames([frame('1', 'over', 1.5)], [frame('1', 'over', Infinity)]);
+    expect([pair!.change, fits(pair!, 'moved', 0.01)]).toEqual([Infinity, true]);
+    expect(pairFrames([frame('1', 'over', Infinity)], [frame('1', 'over', Infinity)])[0]!.change).toBe(0);
+  });
+
   it('stand with those that became over first, then by how much they moved', () => {
     const pairs = pairFrames(
       [frame('1', 'within', 0.5), frame('2', 'within', 0.9), frame('3', 'over', 1.2), frame('4', 'within', 0.1)],

@@ -62,7 +62,7 @@ export interface MemberPair extends Movement {
 /** A movement that any figure shows: ratios that differ by less are the same up to rounding. */
 const rounding = 1e-9;
 
-export function movementOf(before: Standing | null, after: Standing | null): Movement {
+function movementOf(before: Standing | null, after: Standing | null): Movement {
   if (before === null || after === null) return { became: null, change: null };
   return {
     became: before.verdict === after.verdict ? null : after.verdict,
@@ -74,7 +74,8 @@ function changeOf(before: number | null, after: number | null): number | null {
   if (before === null || after === null) return null;
   if (before === after) return 0;
   const change = after - before;
-  return Math.abs(change) <= rounding * Math.max(Math.abs(before), Math.abs(after)) ? 0 : change;
+  // a ratio without end (no resistance at all) is no rounding of any other
+  return Number.isFinite(change) && Math.abs(change) <= rounding * Math.max(Math.abs(before), Math.abs(after)) ? 0 : change;
 }
 
 /**

@@ -60,7 +60,7 @@ export function compareSheets(source: CompareSource): ReportSheet[] {
 }
 
 /** "became over", "moved", "only in A", "the same". */
-export function movedWords(pair: FramePair | MemberPair, by: number, letters: { before: string; after: string }): string {
+function movedWords(pair: FramePair | MemberPair, by: number, letters: { before: string; after: string }): string {
   if (pair.before === null) return `only in ${letters.after}`;
   if (pair.after === null) return `only in ${letters.before}`;
   if (pair.became !== null) return `became ${pair.became}`;
