@@ -45,6 +45,7 @@ describe('every page by axe', () => {
     `/batches/${messy}/A/problems`,
     `/batches/${messy}/A/bring`,
     `/batches/${batch}/B/settings`,
+    `/batches/${batch}/B/compare?with=A&show=all`,
     ...['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'run', 'frames/1', 'frames/1/numbers'].map(
       (sheet) => `/batches/${batch}/A/${sheet}`,
     ),
