@@ -110,12 +110,12 @@ function checkStrength(
   const lines = states.map((state) => flat.of(state));
   const slender = new Map<number, ReturnType<SlenderIn>[]>();
   for (let i = 0; i < frame.members.length; i++) {
-    const pieces = likePieces(frame, spans, i);
-    // pieces of one physical member share what is found along it
-    let known = slender.get(pieces[0]!);
-    if (!known) slender.set(pieces[0]!, (known = []));
-    const found = known;
+    let pieces: readonly number[] | null = null;
     const slenderIn: SlenderIn = (c, find) => {
+      pieces ??= likePieces(frame, spans, i);
+      // pieces of one physical member share what is found along it
+      let found = slender.get(pieces[0]!);
+      if (!found) slender.set(pieces[0]!, (found = []));
       if (found[c] === undefined) found[c] = find(oneLine(pieces.map((p) => objectOf(lines[c]!, p))));
       return found[c];
     };

@@ -6,7 +6,8 @@ import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { namesSpan } from './limits';
 import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
-import { SAME, turningPoints, valueIn } from './peak';
+import { valueIn } from './line-bounds';
+import { SAME, turningPoints } from './peak';
 import { valueAt } from './polynomial';
 import { freeEnds, supported, type Span } from './spans';
 

@@ -1,6 +1,7 @@
 import { degreeV, headNumbers, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
 import { faceStress } from './normal-stress';
-import { forcesAt, keep, largerFace, noPeak, SAME, turningPoints, valueIn, type Peak } from './peak';
+import { valueIn } from './line-bounds';
+import { forcesAt, keep, largerFace, noPeak, SAME, turningPoints, type Peak } from './peak';
 import { valueAt } from './polynomial';
 
 const sigma = new Float64Array(16);

@@ -32,7 +32,15 @@ export function lineBounds(lines: Float64Array, line: number): LineBounds {
   return bounds;
 }
 
-function bound(lines: Float64Array, at: number, degree: number, h: number): number {
+/** Value at s of the polynomial whose coefficients stand from `at` on. */
+export function valueIn(lines: Float64Array, at: number, degree: number, s: number): number {
+  let value = 0;
+  for (let k = degree; k >= 0; k--) value = value * s + lines[at + k]!;
+  return value;
+}
+
+/** What the polynomial whose coefficients stand from `at` on stays within in size from 0 to h. */
+export function bound(lines: Float64Array, at: number, degree: number, h: number): number {
   const start = lines[at]!;
   let end = start;
   let off = 0;

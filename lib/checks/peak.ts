@@ -1,4 +1,5 @@
 import { degreeM, degreeN, degreeV, ofM, ofN, ofV } from '@/lib/analysis/flat-line';
+import { valueIn } from './line-bounds';
 import { rootsWithin } from './polynomial';
 
 /** Where something is largest in size along a member, and the internal forces there. */
@@ -58,11 +59,4 @@ export function forcesAt(peak: Peak, lines: Float64Array, segment: number, s: nu
   peak.N = valueIn(lines, segment + ofN, lines[segment + degreeN]!, s);
   peak.V = valueIn(lines, segment + ofV, lines[segment + degreeV]!, s);
   peak.M = valueIn(lines, segment + ofM, lines[segment + degreeM]!, s);
-}
-
-/** Value at s of the polynomial whose coefficients stand from `at` on. */
-export function valueIn(lines: Float64Array, at: number, degree: number, s: number): number {
-  let value = 0;
-  for (let k = degree; k >= 0; k--) value = value * s + lines[at + k]!;
-  return value;
 }

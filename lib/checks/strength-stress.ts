@@ -10,6 +10,7 @@ import { lineBounds } from './line-bounds';
 import { peakNormalStress } from './normal-stress';
 import { peakShearStress } from './shear-stress';
 import { plateProportions, slenderInCombination, type PlateProportions } from './slender-plates';
+import { StressBounds } from './stress-bounds';
 import { StressRows, stressNames, stressSubject } from './stress-rows';
 
 /** A slender plate of a physical member in a state: `find` is asked once for all of its pieces. */
@@ -53,6 +54,13 @@ export function checkStress(
   if (fy === null || noYield !== null) return stressNotChecked(frame, member, noYield ?? 'needs fy', findings);
 
   const rows = new StressRows(frame, settings, member, of, fy, findings.all !== null);
+  if (plates.watch.length === 0 && plates.shear === null && of.AvPeak_m2 !== null && findings.all === null) {
+    const { Wtop_m3: top, Wbottom_m3: bottom } = of;
+    if (top && bottom) {
+      takePeaks(rows, states, lines, member, 1 / of.A_m2, 1 / top, 1 / bottom, 1 / of.AvPeak_m2);
+      return rows.finish(findings);
+    }
+  }
   for (let c = 0; c < lines.length; c++) {
     const at = lines[c]!.at(member);
     const line = lines[c]!.numbers;
@@ -92,6 +100,36 @@ export function checkStress(
     }
   }
   rows.finish(findings);
+}
+
+/** Peaks of a member of which nothing is refused in any state, at those states that may govern. */
+function takePeaks(
+  rows: StressRows,
+  states: readonly ResultState[],
+  lines: readonly StateLines[],
+  member: number,
+  perA: number,
+  perTop: number,
+  perBottom: number,
+  perAv: number,
+): void {
+  const bounds = new StressBounds(lines, member, perA, perTop, perBottom, perAv);
+  for (let c = 0; c < lines.length; c++) {
+    const both = bounds.mayGovern(2, c);
+    const alone = bounds.mayGovern(0, c);
+    const sheared = bounds.mayGovern(1, c);
+    if (!alone && !sheared && !both) continue;
+    const { name } = states[c]!;
+    const at = lines[c]!.at(member);
+    const line = lines[c]!.numbers;
+    const normal = alone || both ? peakNormalStress(line, at, perA, perTop, perBottom) : null;
+    const shear = sheared || both ? peakShearStress(line, at, perAv) : null;
+    if (alone && normal) rows.take(0, name, normal);
+    if (sheared && shear) rows.take(1, name, shear);
+    if (!both || !normal || !shear) continue;
+    const bound = Math.sqrt(normal.value * normal.value + 3 * shear.value * shear.value);
+    rows.take(2, name, peakEquivalentStress(line, at, perA, perTop, perBottom, perAv, bound, rows.floor(2)));
+  }
 }
 
 /** Why bending stress can't be had: a modulus is missing though the member bends (moments of rounding's size count as none). */
