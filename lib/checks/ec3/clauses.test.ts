@@ -5,7 +5,15 @@ import { longitudinalStress, momentLeft } from './bending-axial';
 import { bendingResistance } from './bending';
 import { reducedByWeb, shearReduction } from './bending-shear';
 import { classify, plasticRange, platesOf, surelyPlastic, type CoveredShape } from './classification';
-import { criticalMoment, endRatio, isStraight, loadHeightFactor, momentFactor, type MomentDiagram } from './critical-moment';
+import {
+  criticalMoment,
+  endRatio,
+  isStraight,
+  loadBetween,
+  loadHeightFactor,
+  momentFactor,
+  type MomentDiagram,
+} from './critical-moment';
 import { momentFactorA, momentFactorB } from './equivalent-moment';
 import { bucklingCurve, bucklingResistance, criticalForce, torsionalForce } from './flexural-buckling';
 import { heb300, ipe300, shaped } from './hand-made-ec3';
@@ -288,14 +296,30 @@ describe('lateral-torsional buckling, 6.3.2', () => {
   });
 
   it('kc of Table 6.6: 1/(1.33 − 0.33ψ), 0.94 for a uniform load, 0.86 for a force within 1 %', () => {
-    expect(correctionFactor(true, 0, 1.77)).toBeCloseTo(1 / 1.33, 12);
-    expect(correctionFactor(false, 1, 1.127)).toBeCloseTo(0.942, 3);
-    expect(Math.abs(correctionFactor(false, 1, 1.348) / 0.86 - 1)).toBeLessThan(0.01);
-    expect(correctionFactor(false, 1, 0.9)).toBe(1);
+    expect(correctionFactor(true, 0, 1.77, 'none')).toBeCloseTo(1 / 1.33, 12);
+    expect(correctionFactor(false, 1, 1.127, 'other')).toBeCloseTo(0.942, 3);
+    expect(Math.abs(correctionFactor(false, 1, 1.348, 'middle') / 0.86 - 1)).toBeLessThan(0.01);
+    expect(correctionFactor(false, 1, 0.9, 'other')).toBe(1);
+  });
+
+  it('kc of a uniform load between fixed ends is the 0.90 of Table 6.6, though 1/√C1 is 0.62', () => {
+    const fixed = { start: -1, quarter: 0.125, middle: 0.5, threeQuarter: 0.125, end: -1, largest: -1, loaded: true };
+    expect(loadBetween(fixed)).toBe('other');
+    expect(1 / Math.sqrt(momentFactor(fixed))).toBeCloseTo(0.623, 2);
+    expect(correctionFactor(false, 1, momentFactor(fixed), loadBetween(fixed))).toBe(0.9);
+    expect(loadBetween({ ...fixed, quarter: 0, middle: 1, threeQuarter: 0, largest: 1 })).toBe('middle');
+    expect(loadBetween({ ...fixed, loaded: false })).toBe('none');
   });
 });
 
 describe('interaction, 6.3.3', () => {
+  it('C_m,0 of Table A.2 takes the largest deflection, which a diagram of both signs has beside the middle', () => {
+    // M = sin(2πx/L): δ = L²/(4π²EI) at the quarter points, none at the middle: 1 + (1/4 − 1) N/N_cr
+    const wave = { start: 0, quarter: 1, middle: 0, threeQuarter: -1, end: 0, largest: 1, loaded: true };
+    expect(momentFactorA(wave, 0.4)).toBeCloseTo(1 - 0.75 * 0.4, 1);
+    expect(momentFactorA(wave, 0.4)).toBeGreaterThan(0.65);
+  });
+
   it('C_m of Table B.3', () => {
     expect(momentFactorB(straight(1, 0.5))).toBeCloseTo(0.8, 12);
     expect(momentFactorB(straight(1, -1))).toBe(0.4);

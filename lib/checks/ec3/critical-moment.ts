@@ -38,6 +38,15 @@ export function momentFactor(of: MomentDiagram): number {
   return Math.max(1, Math.min(any, 1.77 - 1.04 * psi + 0.27 * psi * psi, 2.6));
 }
 
+/** What loads a length between its ends, by its diagram: nothing, one force at the middle, or anything else. */
+export function loadBetween(of: MomentDiagram): 'none' | 'middle' | 'other' {
+  if (!of.loaded) return 'none';
+  const sag = of.middle - (of.start + of.end) / 2;
+  const part = (value: number, share: number): number => (value - of.start - share * (of.end - of.start)) / sag;
+  const atMiddle = Math.abs(part(of.quarter, 0.25) - 0.5) < 0.03 && Math.abs(part(of.threeQuarter, 0.75) - 0.5) < 0.03;
+  return atMiddle ? 'middle' : 'other';
+}
+
 /**
  * C2 for loads at the height of a flange, where the diagram is that of a uniform load, or of one force at the middle, or stands
  * between the two, added to any end moments; null for any other. With s what the load adds at the middle to the straight line between the ends:

@@ -112,7 +112,8 @@ export function ec3Member(of: CodeMember, settings: Settings): Ec3Member | strin
     mode('z', Iz, of.minor.length_m),
   ];
   if (shape === 'I' && It !== null && Iw !== null && material.G_Pa !== null) {
-    const Lcr = of.outOfPlane.length_m;
+    // what holds one face only does not hold the twist
+    const Lcr = Math.max(of.outOfPlane.length_m, of.top.length_m, of.bottom.length_m);
     const Ncr = torsionalForce(E, material.G_Pa, It, Iw, (Iy + Iz) / A, Lcr);
     const curve = bucklingCurve(shape, made, 'minor', h, b, tf, s460);
     buckling.push({ mode: 'T', I: It, Lcr, Ncr, curve, ...bucklingResistance(A, fy, Ncr, curve, gammaM1) });

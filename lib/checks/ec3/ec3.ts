@@ -23,7 +23,9 @@ function rows(member: CodeMember, demands: readonly Demand[], settings: Settings
   if (of.lateral.kind !== 'none' && (member.free.start || member.free.end))
     note('M_cr to a free end: over twice the length, uniform moment (C1 = 1), the other end held against twist and warping');
   if (of.shape === 'I' && of.buckling.length > 2)
-    note('Torsional buckling (6.3.1.4): restraint of twist as far apart as those that hold the member out of the plane');
+    note(
+      'Torsional buckling (6.3.1.4): twist is held where the member is held out of the plane and at both faces; the longest of these lengths',
+    );
   const found: ClauseRow[] = [];
   for (const demand of demands) {
     crossSectionRows(of, demand, found);

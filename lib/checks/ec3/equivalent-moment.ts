@@ -31,8 +31,9 @@ function sagging(alpha: number, psi: number): number {
 }
 
 /**
- * C_m,0 of EN 1993-1-1 Table A.2: straight 0.79 + 0.21ψ + 0.36(ψ − 0.33) N/N_cr; else 1 + (π²EI δ/(L²M) − 1) N/N_cr, δ at the
- * middle from the diagram itself, δ = L²(M₂ + M₃ + M₄)/(24EI) (Simpson's rule, exact for a uniform load and for one at the middle).
+ * C_m,0 of EN 1993-1-1 Table A.2: straight 0.79 + 0.21ψ + 0.36(ψ − 0.33) N/N_cr; else 1 + (π²EI δ/(L²M) − 1) N/N_cr, δ the
+ * largest at the quarter points, from the diagram itself: at the middle L²(M₂ + M₃ + M₄)/(24EI) (Simpson's rule, exact for a
+ * uniform load and for one at the middle).
  * @param part N_Ed/N_cr,i in the plane of the moments
  */
 export function momentFactorA(of: MomentDiagram, part: number): number {
@@ -42,6 +43,26 @@ export function momentFactorA(of: MomentDiagram, part: number): number {
     const psi = endRatio(of);
     return 0.79 + 0.21 * psi + 0.36 * (psi - 0.33) * part;
   }
-  const bow = (Math.PI ** 2 * Math.abs(of.quarter + of.middle + of.threeQuarter)) / (24 * M);
+  const middle = Math.abs(of.quarter + of.middle + of.threeQuarter) / 24;
+  const bow = (Math.PI ** 2 * Math.max(middle, quarterBow(of), quarterBow(turnedRound(of)))) / M;
   return 1 + (bow - 1) * part;
 }
+
+/**
+ * |EIδ|/L² at the first quarter point: the simple beam's deflection there under the elastic loads (M₋ + 10M + M₊) h/12 of the quarter
+ * points, h = L/4 (Newmark; exact where M is a cubic). A diagram that turns from one face to the other deflects most beside the middle.
+ */
+function quarterBow({ start, quarter, middle, threeQuarter, end }: MomentDiagram): number {
+  const one = start + 10 * quarter + middle;
+  const two = quarter + 10 * middle + threeQuarter;
+  const three = middle + 10 * threeQuarter + end;
+  return Math.abs(3 * one + 2 * two + three) / (16 * 48);
+}
+
+const turnedRound = (of: MomentDiagram): MomentDiagram => ({
+  ...of,
+  start: of.end,
+  quarter: of.threeQuarter,
+  threeQuarter: of.quarter,
+  end: of.start,
+});

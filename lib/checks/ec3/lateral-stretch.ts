@@ -1,7 +1,7 @@
 import type { Settings } from '@/lib/model/settings';
 import type { Stretch } from '../design-code/demand';
 import { modulusOf } from './bending';
-import { criticalMoment, endRatio, isStraight, loadHeightFactor, momentFactor } from './critical-moment';
+import { criticalMoment, endRatio, isStraight, loadBetween, loadHeightFactor, momentFactor } from './critical-moment';
 import type { Ec3Member, Lateral } from './ec3-member';
 import {
   correctionFactor,
@@ -64,7 +64,7 @@ export function lateralStretch(
   const Mcr = criticalMoment(E, lateral.G, Iz, lateral.It, lateral.Iw, L, C1, C2, zg);
   const W = modulusOf(sectionClass, of.WplY, of.WelY);
   const curve = lateral.curve ?? (lateral.kind === 'rolled' ? rolledCurve(made, h, b) : generalCurve(made, h, b));
-  const kc = byDiagram ? correctionFactor(isStraight(stretch), endRatio(stretch), C1) : 1;
+  const kc = byDiagram ? correctionFactor(isStraight(stretch), endRatio(stretch), C1, loadBetween(stretch)) : 1;
   const found = lateral.kind === 'rolled' ? rolledCase(W, fy, Mcr, curve, kc, gammaM1) : generalCase(W, fy, Mcr, curve, gammaM1);
   const { lambda, phi, chi, f, chiMod, MbRd } = found;
   const by = lateral.kind;

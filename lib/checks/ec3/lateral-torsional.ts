@@ -45,8 +45,11 @@ export function rolledCase(W: number, fy: number, Mcr: number, curve: Curve, kc:
 }
 
 /**
- * kc of 6.3.2.3(2): Table 6.6 for a straight diagram, 1/(1.33 − 0.33ψ); else 1/√C1, which gives the table's 0.94 and 0.86 for
- * a uniform load and a force at the middle between pinned ends.
+ * kc of 6.3.2.3(2): Table 6.6 for a straight diagram, 1/(1.33 − 0.33ψ); else 1/√C1. Beside end moments the table has for a uniform
+ * load 0.90 and 0.91, far above 1/√C1: under any load but a force at the middle kc is not below 0.90.
+ * @param load what bends the length between its ends: 'none' of it (a bow of second order only), 'middle' a force there, or 'other'
  */
-export const correctionFactor = (straight: boolean, psi: number, C1: number): number =>
-  straight ? 1 / (1.33 - 0.33 * psi) : Math.min(1, 1 / Math.sqrt(C1));
+export function correctionFactor(straight: boolean, psi: number, C1: number, load: 'none' | 'middle' | 'other'): number {
+  if (straight) return 1 / (1.33 - 0.33 * psi);
+  return Math.min(1, Math.max(load === 'other' ? 0.9 : 0, 1 / Math.sqrt(C1)));
+}
