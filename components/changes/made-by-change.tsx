@@ -9,10 +9,12 @@ interface MadeByChangeProps {
   readonly at: string;
   readonly reason: string;
   readonly changes: readonly ChangeShown[];
+  /** Frames that are the very same as in the revision it was made from; null = not known yet. */
+  readonly carriedOver?: { readonly frames: number; readonly of: number } | null;
 }
 
 /** Under the title block of a revision made on screen: what sets it apart from the one it was made from. */
-export function MadeByChange({ letter, from, person, at, reason, changes }: MadeByChangeProps) {
+export function MadeByChange({ letter, from, person, at, reason, changes, carriedOver = null }: MadeByChangeProps) {
   return (
     <section className="made-by-change" aria-label={`How revision ${letter} was made`}>
       <p>
@@ -26,6 +28,12 @@ export function MadeByChange({ letter, from, person, at, reason, changes }: Made
       <p>
         <span className="made-why">Why:</span> {reason}
       </p>
+      {carriedOver && carriedOver.frames > 0 && (
+        <p>
+          <span className="made-why">Carried over:</span> {carriedOver.frames.toLocaleString('en-GB')} of{' '}
+          {carriedOver.of.toLocaleString('en-GB')} frames, as in {from.letter} with their results
+        </p>
+      )}
     </section>
   );
 }

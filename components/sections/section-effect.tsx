@@ -39,8 +39,10 @@ export function SectionEffect({ preview, letter, units }: SectionEffectProps) {
         <b>
           {count(preview.count, 'member')} in {count(frames, 'frame')}
         </b>{' '}
-        change to {to}; {frames === 1 ? 'that frame runs' : 'those frames run'} again. {count(carriedOver, 'other frame')}{' '}
-        {carriedOver === 1 ? 'keeps its' : 'keep their'} results, carried over from {letter}.
+        change to {to}; {frames === 1 ? 'that frame runs' : 'those frames run'} again.{' '}
+        {carriedOver === 0
+          ? 'No other frame can run.'
+          : `${count(carriedOver, 'other frame')} ${carriedOver === 1 ? 'keeps its' : 'keep their'} results, carried over from ${letter}.`}
         {mass && (
           <>
             {' '}

@@ -13,7 +13,7 @@ export interface PropertyShown {
 /** Every property of a section with its unit and where it comes from. */
 export function SectionFacts({ name, properties }: { readonly name: string; readonly properties: readonly PropertyShown[] }) {
   return (
-    <div className="tbl-wrap">
+    <div className="tbl-scroll" role="region" tabIndex={0} aria-label={`Properties of ${name}, scrolls`}>
       <table className="tbl">
         <caption className="sr-only">Properties of {name}</caption>
         <thead>

@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
 import { listActivity } from '@/db/queries/activity';
-import { findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
+import { countCarriedOver, findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
 import { insertIntake } from '@/db/queries/intake';
 import { findLatestJob } from '@/db/queries/jobs';
 import { insertPerson } from '@/db/queries/people';
@@ -50,7 +50,7 @@ it('is in the activity, and has a job that reads it and goes on to run it where 
 });
 
 it('carries untouched frames over with who uploaded and ran them, and names who changed the others', async () => {
-  const { raw, own, revision, person } = await changed();
+  const { db, raw, own, revision, person } = await changed();
   insertIntake(raw, own.office, revision.id, intakeOf([portal('F1', 10), portal('F2', 14), null]));
   const rows = raw
     .prepare('select frame_id, status, uploaded_by, changed_by, run_by from revision_frame where revision = ? order by frame')
@@ -61,6 +61,8 @@ it('carries untouched frames over with who uploaded and ran them, and names who 
     ['F2', 'waiting', own.person, person, null],
     [expect.any(String), 'stopped', own.person, null, null],
   ]);
+  expect(await countCarriedOver(db, own.office, revision.id)).toBe(1);
+  expect(await countCarriedOver(db, own.office + 1, revision.id)).toBe(0);
 });
 
 it('keeps who changed a frame before where a later change leaves it alone', async () => {

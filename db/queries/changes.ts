@@ -112,3 +112,23 @@ export function findMaking(raw: RawDatabase, office: number, revision: number): 
     )
     .get(revision, office);
 }
+
+/** Of the frames of a revision made by a change, how many are the very same as in the revision that it was made from. */
+export async function countCarriedOver(db: Db, office: number, revision: number): Promise<number> {
+  const { count } = await db
+    .selectFrom('revision_frame as own')
+    .innerJoin('revision', 'revision.id', 'own.revision')
+    .select((e) => e.fn.countAll<number>().as('count'))
+    .where('own.revision', '=', revision)
+    .where('revision.office', '=', office)
+    .where('own.version', 'in', (e) =>
+      e
+        .selectFrom('revision_frame as before')
+        .innerJoin('revision as made', 'made.made_from', 'before.revision')
+        .select('before.version')
+        .where('made.id', '=', revision)
+        .where('before.version', 'is not', null),
+    )
+    .executeTakeFirstOrThrow();
+  return count;
+}

@@ -19,6 +19,11 @@ describe('a view of the section library', () => {
     expect(names('q=IPE+A')).toContain('IPE A 300');
   });
 
+  it('takes a part of a designation for its start where any starts so', () => {
+    expect(names('q=IPE+5')).toEqual(['IPE 500', 'IPE 550']);
+    expect(names('q=120x60x')).toContain('HFRHS 120x60x5');
+  });
+
   it('suggests the nearest for a near miss, and names a section of another range', () => {
     expect(found('q=IPE+310')).toMatchObject({ rows: [], suggestion: 'IPE 300' });
     expect(found('q=HE+200+A&range=IPE')).toMatchObject({ rows: [], suggestion: 'HE 200 A' });

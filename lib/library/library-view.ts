@@ -115,8 +115,12 @@ function searched(all: readonly LibraryRow[], search: string): LibraryFound {
     return { rows: own, note: found.note, suggestion: own.length === 0 ? found.section.designation : null };
   }
   const key = designationKey(search);
-  const parts = all.filter(({ section }) => key !== '' && designationKey(section.designation ?? '').includes(key));
-  return { rows: parts, note: null, suggestion: parts.length > 0 ? null : found.suggestion };
+  const keyed = all.map((row) => ({ row, own: designationKey(row.section.designation ?? '') }));
+  const parts = keyed.filter(({ own }) => key !== '' && own.includes(key));
+  // "IPE 5" is the start of some and a part of Pipe 5: those that start so are meant
+  const starts = parts.filter(({ own }) => own.startsWith(key));
+  const rows = (starts.length > 0 ? starts : parts).map(({ row }) => row);
+  return { rows, note: null, suggestion: rows.length > 0 ? null : found.suggestion };
 }
 
 /** The row of a designation as the standard writes it. */

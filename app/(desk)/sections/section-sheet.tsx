@@ -11,22 +11,27 @@ import type { System } from '@/lib/units/quantity';
 
 const dimensionWords = { h: 'depth', b: 'width', tw: 'web', tf: 'flange', t: 'wall', d: 'diameter', r: 'radius' } as const;
 
+/** As the standard writes it: 7.1, not 7.100. */
+const dimension = (si: number, units: System): string => String(Number(fromSI(si, 'dimension', units).toPrecision(4)));
+
 /** One section of the library: its picture to scale, dimensions and every property. */
 export function SectionSheet({ chosen, units }: { readonly chosen: LibraryRow; readonly units: System }) {
   const { section, row, range } = chosen;
   const name = section.designation ?? section.name;
-  const length = (si: number | null): string => `${formatNumber(si === null ? null : fromSI(si, 'dimension', units), { significant: 4 })} ${unitLabel('dimension', units)}`; // prettier-ignore
+  const length = (si: number | null): string => `${si === null ? '–' : dimension(si, units)} ${unitLabel('dimension', units)}`;
   const dimensions = (Object.keys(dimensionWords) as (keyof typeof dimensionWords)[]).flatMap((key): PropertyShown[] => {
     const si = section.dimensions?.[key] ?? null;
     if (si === null) return [];
-    const value = formatNumber(fromSI(si, 'dimension', units), { significant: 4 });
+    const value = dimension(si, units);
     return [{ key, what: dimensionWords[key], symbol: key, value, unit: unitLabel('dimension', units), source: 'nominal' }];
   });
-  const properties = libraryColumns.map(({ key, label, what, quantity, value }): PropertyShown => {
-    const si = value(section);
-    const text = si === null ? null : formatNumber(libraryNumber(si, quantity, units), { significant: 4 });
-    return { key: `of-${key}`, what, symbol: label, value: text, unit: libraryUnit(quantity, units), source: 'derived' };
-  });
+  const properties = libraryColumns
+    .filter(({ key }) => key !== 'depth' && key !== 'width')
+    .map(({ key, label, what, quantity, value }): PropertyShown => {
+      const si = value(section);
+      const text = si === null ? null : formatNumber(libraryNumber(si, quantity, units), { significant: 4 });
+      return { key: `of-${key}`, what, symbol: label, value: text, unit: libraryUnit(quantity, units), source: 'derived' };
+    });
   const { standard, made } = ranges[range];
   return (
     <Zone title={name} note={`${range}, ${standard}`}>

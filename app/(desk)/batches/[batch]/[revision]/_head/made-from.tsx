@@ -1,7 +1,7 @@
 import { MadeByChange } from '@/components/changes/made-by-change';
 import { dayTime } from '@/app/_server/dates';
 import { db } from '@/db/client';
-import { listChanges } from '@/db/queries/changes';
+import { countCarriedOver, listChanges } from '@/db/queries/changes';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
 
@@ -19,6 +19,9 @@ export async function MadeFrom({ revision }: { readonly revision: RevisionRecord
       person={first.person}
       at={dayTime(first.at)}
       reason={first.reason}
+      carriedOver={
+        revision.state === 'reading' ? null : { frames: await countCarriedOver(db(), office, id), of: revision.frames }
+      }
       changes={changes.map(({ what, from, to }) => ({ what, from, to }))}
     />
   );
