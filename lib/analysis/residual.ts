@@ -21,6 +21,8 @@ export function caseResidual({ t, diagonal, norm, loads, d, recovered }: Solved)
   return largest;
 }
 
+const along = new Float64Array(3);
+
 /**
  * The same of states that are no sums of cases: how far their nodes are out of balance on the final, deflected, reduced,
  * slackened frame, against ‖K̂‖₁‖d̂‖∞ alone (without ‖f̂‖: the stricter), K̂ of the frame with all its members.
@@ -34,9 +36,12 @@ export function stateResidual({ t, diagonal, norm, solved }: SolvedStates, angle
     let softest = Infinity;
     for (let p = 0; p < t.size; p++) {
       const node = t.nodeAt[p]!;
-      const [c, s] = [Math.cos(angles[node]!), Math.sin(angles[node]!)];
-      const [x, y, turn] = state.displacements.subarray(3 * node, 3 * node + 3);
-      const along = [x! * c + y! * s, y! * c - x! * s, turn!];
+      const angle = angles[node]!;
+      const x = state.displacements[3 * node]!;
+      const y = state.displacements[3 * node + 1]!;
+      along[0] = angle === 0 ? x : x * Math.cos(angle) + y * Math.sin(angle);
+      along[1] = angle === 0 ? y : y * Math.cos(angle) - x * Math.sin(angle);
+      along[2] = state.displacements[3 * node + 2]!;
       for (let r = 0; r < 3; r++) {
         if (!t.free[3 * node + r]) continue;
         const scale = Math.sqrt(diagonal[3 * p + r]!);

@@ -99,10 +99,12 @@ function unsolved(frame: Frame, failure: Failure): FrameEvaluation {
 
 /** A node without a rotation of its own has rz NaN by agreement; nothing else may be. */
 function finite(state: ResultState): boolean {
-  return (
-    state.displacements.every((d, i) => Number.isFinite(d) || (i % 3 === 2 && Number.isNaN(d))) &&
-    state.reactions.every(Number.isFinite) &&
-    state.endForces.every(Number.isFinite) &&
-    (state.criticalLoadFactor === null || Number.isFinite(state.criticalLoadFactor))
-  );
+  const { displacements, reactions, endForces, criticalLoadFactor } = state;
+  for (let i = 0; i < displacements.length; i++) {
+    const d = displacements[i]!;
+    if (!Number.isFinite(d) && !(i % 3 === 2 && Number.isNaN(d))) return false;
+  }
+  for (let i = 0; i < reactions.length; i++) if (!Number.isFinite(reactions[i]!)) return false;
+  for (let i = 0; i < endForces.length; i++) if (!Number.isFinite(endForces[i]!)) return false;
+  return criticalLoadFactor === null || Number.isFinite(criticalLoadFactor);
 }

@@ -7,16 +7,21 @@ import { stride, type MemberLoading } from './member-loading';
  */
 export function slackReactions(m: MemberData, loading: MemberLoading, out: Float64Array): Float64Array {
   const L = m.length;
-  let [across, lever, along] = [loading.endPy, loading.endPy * L + loading.endM, 0];
+  const { stretches } = loading;
+  let across = loading.endPy;
+  let lever = loading.endPy * L + loading.endM;
+  let along = 0;
   let x = 0;
   for (let i = 0; i < loading.count; i++) {
     const o = stride * i;
-    const at = (r: number): number => loading.stretches[o + r]!;
-    const l = at(0);
-    const q = l * (at(4) + (l * at(5)) / 2);
-    across += at(6) + q;
-    lever += at(6) * x + at(7) + q * x + l * l * (at(4) / 2 + (l * at(5)) / 3);
-    along += l * (at(1) + l * (at(2) / 2 + (l * at(3)) / 3));
+    const l = stretches[o]!;
+    const q0 = stretches[o + 4]!;
+    const q1 = stretches[o + 5]!;
+    const P = stretches[o + 6]!;
+    const q = l * (q0 + (l * q1) / 2);
+    across += P + q;
+    lever += P * x + stretches[o + 7]! + q * x + l * l * (q0 / 2 + (l * q1) / 3);
+    along += l * (stretches[o + 1]! + l * (stretches[o + 2]! / 2 + (l * stretches[o + 3]!) / 3));
     x += l;
   }
   out[0] = along / L;
