@@ -80,7 +80,7 @@ export function VerdictTable({ totals, letters }: Pick<ComparedFactsProps, 'tota
   const { verdicts } = totals;
   const column = (at: number) => verdicts.reduce((sum, row) => sum + (row[at] ?? 0), 0);
   return (
-    <div className="tbl-wrap">
+    <div className="tbl-wrap" role="region" aria-label="Verdicts before and after" tabIndex={0}>
       <table className="tbl tbl-side">
         <caption className="sr-only">
           Verdicts of frames, revision {letters.before} down and {letters.after} across
