@@ -22,6 +22,17 @@ const rhs = shaped('rhs', { h: 200, b: 100, t: 8, r: 12 }, 'hot finished');
 const chs = shaped('chs', { d: 168.3, t: 8 }, 'hot finished');
 const pfc = shaped('channel', { h: 200, b: 90, tw: 7, tf: 14, r: 12 });
 
+describe('torsional buckling of an I', () => {
+  it('is held where both faces are: restraints of the top face and across the plane alone do not shorten it', () => {
+    const rails = { ...memberOf(ipe300, { minor: 1.5, fy: 235e6 }), top: { length_m: 1.5, from: 'typed' as const } };
+    const inputs = rowOf(rowsOf(rails, demandOf({ N: -1e5 })), '6.3.1').inputs();
+    expect(inputs).toMatchObject({ axis: 'T', Lcr: 6 });
+    const both = { ...rails, bottom: { length_m: 1.5, from: 'typed' as const } };
+    const held = rowOf(rowsOf(both, demandOf({ N: -1e5 })), '6.3.1').inputs();
+    expect(Number(held.NbRd)).toBeGreaterThan(Number(inputs.NbRd));
+  });
+});
+
 describe('a member that EN 1993-1-1 is not applied to is not checked, whatever it carries', () => {
   const why = (section: Section, options = {}): string => {
     const rows = rowsOf(memberOf(section, options), demandOf({ N: -1e5, M: even(1e3) }));

@@ -85,7 +85,7 @@ export function lateralWorking(check: Check, print: Printer): readonly WorkingLi
         'correction factor',
         print,
         [[symbol('k', 'c'), of.number('kc'), 'number']],
-        'Table 6.6; 1/√C1 where loaded between the ends',
+        'Table 6.6; 1/√C1 where loaded, not below 0.90 but for a force at the middle',
       ),
       sum('f', symbol('f'), [words('1 − 0.5 (1 −'), symbol('k', 'c'), words(') [1 − 2 ('), LT, words('− 0.8)²]')], [], n('f'), '6.3.2.3(2), not above 1'), // prettier-ignore
       sum('modified reduction factor', symbol('χ', 'LT,mod'), [fraction([symbol('χ', 'LT')], [symbol('f')])], [], n('chiLTmod'), '(6.58), not above 1 and 1/λ̄LT²'), // prettier-ignore
