@@ -13,11 +13,19 @@ export interface EvenStretches {
 }
 
 const known = new WeakMap<Frame, EvenStretches>();
+// asked for line after line of one frame
+let latest: Frame | null = null;
+let ofLatest: EvenStretches | null = null;
 
 /** Worked out once a frame. */
 export function evenStretches(frame: Frame): EvenStretches {
-  const before = known.get(frame);
-  if (before) return before;
+  if (frame === latest && ofLatest) return ofLatest;
+  const found = known.get(frame) ?? build(frame);
+  latest = frame;
+  return (ofLatest = found);
+}
+
+function build(frame: Frame): EvenStretches {
   const count = frame.cases.length;
   const even = new Uint8Array(frame.members.length);
   const acting = new Float64Array(evenNumbers * count * frame.members.length);

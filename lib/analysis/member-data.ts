@@ -40,13 +40,21 @@ export interface MemberMethod {
 }
 
 const known = new WeakMap<Frame, readonly MemberData[]>();
+// asked for line after line of one frame
+let latest: Frame | null = null;
+let ofLatest: readonly MemberData[] = [];
 const shearing = new WeakMap<Frame, readonly MemberData[]>();
 const reduced = new WeakMap<readonly MemberData[], WeakMap<Float64Array, readonly MemberData[]>>();
 
 /** Members of a frame in its own order; computed once a frame. */
 export function memberData(frame: Frame): readonly MemberData[] {
-  const before = known.get(frame);
-  if (before) return before;
+  if (frame === latest) return ofLatest;
+  const data = known.get(frame) ?? membersOf(frame);
+  latest = frame;
+  return (ofLatest = data);
+}
+
+function membersOf(frame: Frame): readonly MemberData[] {
   const data = frame.members.map((member): MemberData => {
     const a = frame.nodes[member.start]!;
     const b = frame.nodes[member.end]!;

@@ -128,7 +128,9 @@ function takePeaks(
     if (sheared && shear) rows.take(1, name, shear);
     if (!both || !normal || !shear) continue;
     const bound = Math.sqrt(normal.value * normal.value + 3 * shear.value * shear.value);
-    rows.take(2, name, peakEquivalentStress(line, at, perA, perTop, perBottom, perAv, bound, rows.floor(2)));
+    const floor = rows.floor(2);
+    // what is no number is kept, not passed over
+    if (!(bound <= floor)) rows.take(2, name, peakEquivalentStress(line, at, perA, perTop, perBottom, perAv, bound, floor));
   }
 }
 
