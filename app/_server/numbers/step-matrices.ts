@@ -4,8 +4,8 @@ import { inUnits, unitText, type NumberUnits } from './number-units';
 /** Directions of both ends in order: powers of length in a force (moment 1) and in a movement (rotation 0). */
 export const sixth = [0, 1, 2, 3, 4, 5] as const;
 const turns = (i: number): boolean => i % 3 === 2;
-export const forceLengths = (i: number): 0 | 1 => (turns(i) ? 1 : 0);
-export const moveLengths = (i: number): 0 | 1 => (turns(i) ? 0 : 1);
+const forceLengths = (i: number): 0 | 1 => (turns(i) ? 1 : 0);
+const moveLengths = (i: number): 0 | 1 => (turns(i) ? 0 : 1);
 
 export const forceUnit = (i: number, units: NumberUnits): string => unitText(units, 1, forceLengths(i));
 export const moveUnit = (i: number, units: NumberUnits): string => (turns(i) ? 'rad' : units.length);

@@ -18,7 +18,7 @@ const known = new WeakMap<Frame, Standing[]>();
  * Columns found anew: members that share a span word are one; role column, or no role and within 20° of vertical from
  * the line's one free end to the other. Pieces that lie flat are left out.
  */
-export function standingLines(frame: Frame): Standing[] {
+function standingLines(frame: Frame): Standing[] {
   const before = known.get(frame) ?? standing(frame);
   known.set(frame, before);
   return before;
@@ -60,7 +60,7 @@ function steep(frame: Frame, members: readonly number[]): boolean {
  *
  * @param endForces of the combination's first-order analysis   @returns Fx, Fy by node, towards +X, N
  */
-export function swayByLean(frame: Frame, endForces: ArrayLike<number>): Float64Array {
+function swayByLean(frame: Frame, endForces: ArrayLike<number>): Float64Array {
   const forces = new Float64Array(2 * frame.nodes.length);
   const columns = standingLines(frame);
   if (columns.length === 0) return forces;
@@ -90,7 +90,7 @@ export function swayByLean(frame: Frame, endForces: ArrayLike<number>): Float64A
  *
  * @returns Fx, Fy by node, towards +X, N
  */
-export function swayByGravity(setup: Setup, factors: ArrayLike<number>, alpha: number): Float64Array {
+function swayByGravity(setup: Setup, factors: ArrayLike<number>, alpha: number): Float64Array {
   const { frame, members, along, supportAt } = setup;
   const forces = new Float64Array(2 * frame.nodes.length);
   if (standingLines(frame).length === 0) return forces;

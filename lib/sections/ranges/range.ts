@@ -103,7 +103,7 @@ export function tubeRows(
 }
 
 /** `3-1/2` → 3.5, `5/16` → 0.3125. */
-export function inches(text: string): number {
+function inches(text: string): number {
   const [, whole = '0', over = '0', under = '1'] = /^(?:(\d+)(?:-|$))?(?:(\d+)\/(\d+))?$/.exec(text) ?? [];
   return Number(whole) + Number(over) / Number(under);
 }
