@@ -1,5 +1,6 @@
 /** What the tables hold, for Kysely. Instants are ISO 8601 text in UTC, flags 0 or 1, records JSON text. See db/README.md. */
 import type { Generated } from 'kysely';
+import type { IssuingTables } from '@/db/tables/issuing';
 import type { Purpose } from '@/lib/model/frame';
 
 /** A person's role in an office. */
@@ -17,7 +18,7 @@ export type FrameStatus = VersionState | 'stopped';
 /** 0 within, 1 near, 2 not checked, 3 over: larger is worse; −1 = none yet (frames only). */
 export type VerdictRank = number;
 
-export interface DB {
+export interface DB extends IssuingTables {
   office: { id: Generated<number>; name: string; created_at: string };
   person: { id: Generated<number>; email: string; name: string; password_hash: string; created_at: string };
   membership: { office: number; person: number; role: OfficeRole; created_at: string; ended_at: string | null };
