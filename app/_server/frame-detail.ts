@@ -1,6 +1,6 @@
 import 'server-only';
 import type { CertificateData } from '@/components/certificate/certificate';
-import type { DrawingData } from '@/components/drawing/drawing-data';
+import type { DrawingData } from '@/lib/drawing/drawing-data';
 import type { WorkingLine } from '@/lib/checks/working-parts';
 import { db } from '@/db/client';
 import { findFrame } from '@/db/queries/frames';
@@ -11,7 +11,7 @@ import { frameNumberInput } from '@/lib/api/inputs';
 import type { MemberGoverning } from '@/lib/results/member-results';
 import { governingIndex } from '@/lib/results/verdict';
 import type { Certificate, Check, Verdict } from '@/lib/results/result';
-import { drawingData } from './drawing-data';
+import { drawingData } from '@/lib/drawing/frame-drawing-data';
 import { settingLines } from './setting-lines';
 import { workingLines } from './working-lines';
 

@@ -1,5 +1,5 @@
 import { CopyButton } from '../ui/copy-button';
-import { powerText } from '../ui/power-text';
+import { powerText } from '@/lib/units/power-text';
 import type { CertificateLine } from '@/lib/analysis/certificate-lines';
 
 export interface SettingLine {

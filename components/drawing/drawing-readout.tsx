@@ -1,14 +1,9 @@
 import { formatQuantity } from '@/lib/units/format';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity } from '@/lib/units/quantity';
-import type { DrawingData, DrawingResult } from './drawing-data';
-import { valueAt } from './member-axis';
-
-/** A point of a member that is being read: x in m from its start. */
-export interface ReadPoint {
-  readonly member: number;
-  readonly x: number;
-}
+import type { DrawingData, DrawingResult } from '@/lib/drawing/drawing-data';
+import { valueAt } from '@/lib/drawing/member-axis';
+import type { ReadPoint } from '@/lib/drawing/read-step';
 
 /** One line under the drawing: x, N, V, M and v at the point. Says how to read where nothing is pointed at. */
 export function DrawingReadout({

@@ -1,8 +1,8 @@
 import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
-import type { DrawingBuckled, DrawingData, DrawingMethod, DrawingResult } from './drawing-data';
-import { plainMethod, simpleBeam } from './drawing-sample';
+import type { DrawingBuckled, DrawingData, DrawingMethod, DrawingResult } from '@/lib/drawing/drawing-data';
+import { plainMethod, simpleBeam } from '@/lib/drawing/drawing-sample';
 import { FrameDrawing } from './frame-drawing';
 
 const large = () => document.querySelector<SVGSVGElement>('.d-view-large')!;

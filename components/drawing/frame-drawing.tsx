@@ -3,12 +3,12 @@ import { useState, type KeyboardEvent, type PointerEvent, type ReactNode } from 
 import { Segments } from '../ui/segments';
 import { useKeys } from '../ui/use-keys';
 import { useWidth } from '../ui/use-width';
-import { captionOf, viewNames, type Diagram, type ViewName } from './captions';
-import type { DrawingBuckled, DrawingData } from './drawing-data';
-import { DrawingReadout, type ReadPoint } from './drawing-readout';
+import { captionOf, viewNames, type Diagram, type ViewName } from '@/lib/drawing/captions';
+import type { DrawingBuckled, DrawingData } from '@/lib/drawing/drawing-data';
+import { DrawingReadout } from './drawing-readout';
 import { nearestPoint } from './nearest-point';
-import { boundsOf } from './paper';
-import { readStep } from './read-step';
+import { boundsOf } from '@/lib/drawing/paper';
+import { readStep, type ReadPoint } from '@/lib/drawing/read-step';
 import { ResultChoice } from './result-choice';
 import { ResultFacts } from './result-facts';
 import { BuckledView, DeflectedView, DiagramView, LoadsView, RatioView } from './views';

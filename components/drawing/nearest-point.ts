@@ -1,6 +1,6 @@
-import type { DrawingData } from './drawing-data';
-import type { ReadPoint } from './drawing-readout';
-import type { Point } from './paper';
+import type { DrawingData } from '@/lib/drawing/drawing-data';
+import type { ReadPoint } from '@/lib/drawing/read-step';
+import type { Point } from '@/lib/drawing/paper';
 
 /** The member nearest to a point on paper, and how far along it, within 60 px; read from the lines as they are drawn. */
 export function nearestPoint(svg: SVGSVGElement, data: DrawingData, at: Point): ReadPoint | null {

@@ -1,7 +1,7 @@
 import { formatNumber } from '@/lib/units/format';
 import { Finder, type FinderOption } from '../ui/finder';
 import { Segments } from '../ui/segments';
-import type { ResultName } from './drawing-data';
+import type { ResultName } from '@/lib/drawing/drawing-data';
 
 interface ResultChoiceProps {
   readonly results: readonly ResultName[];

@@ -1,5 +1,5 @@
-import { powerText } from '../ui/power-text';
-import type { DrawingData, DrawingResult } from './drawing-data';
+import type { DrawingData, DrawingResult } from '@/lib/drawing/drawing-data';
+import { resultMethodWords } from '@/lib/drawing/result-method-words';
 
 interface ResultFactsProps {
   readonly data: DrawingData;
@@ -10,31 +10,7 @@ interface ResultFactsProps {
 export function ResultFacts({ data, result }: ResultFactsProps) {
   return (
     <p className="d-facts" aria-label="How this result was found" role="note">
-      <b>{result.name}</b> {methodWords(data, result).join(' · ')}
+      <b>{result.name}</b> {resultMethodWords(data, result).join(' · ')}
     </p>
   );
-}
-
-/** "second order, 5 passes, last change 3.1 · 10⁻¹¹", "imperfection to the right →", "slack: BD, CE" … */
-export function methodWords(
-  { members, noCasesAlone }: Pick<DrawingData, 'noCasesAlone'> & { readonly members: readonly { readonly id: string }[] },
-  { method, slack }: Pick<DrawingResult, 'method' | 'slack'>,
-): string[] {
-  const { order, iterations, change, imperfection, shearDeformation, reducedStiffness, loadScale } = method;
-  const passes = iterations === 1 ? 'settled in one pass' : `settled in ${iterations} passes, last change ${powerText(change)}`;
-  const words = [
-    order === 2
-      ? `second order: equilibrium on the deformed shape, ${passes}`
-      : `first order${iterations > 1 ? `, ${passes}` : ''}`,
-  ];
-  if (imperfection !== null) words.push(`imperfection to the ${imperfection} ${imperfection === 'right' ? '→' : '←'}`);
-  if (shearDeformation) words.push('members shear as well as bend');
-  if (reducedStiffness) words.push('stiffness reduced (AISC 360)');
-  if (loadScale !== 1) words.push(`analysed under ${loadScale} times the loads, results divided by ${loadScale}`);
-  if (slack.length > 0) {
-    const names = slack.map((index) => members[index]?.id ?? '').join(', ');
-    words.push(`slack, drawn dashed: ${names}`);
-  }
-  if (noCasesAlone !== null) words.push(noCasesAlone);
-  return words;
 }

@@ -1,6 +1,6 @@
-import type { PlacedLabel } from './labels';
-import { line, plus } from './paper';
-import { chainText, type Scene } from './scene';
+import type { PlacedLabel } from '@/lib/drawing/labels';
+import { line, plus } from '@/lib/drawing/paper';
+import { chainText, type Scene } from '@/lib/drawing/scene';
 import { Supports } from './supports';
 
 /** Dimensions with oblique ticks and extension lines. */

@@ -2,12 +2,12 @@
 import { useEffect, useId, useMemo, useState } from 'react';
 import { formatNumber } from '@/lib/units/format';
 import { HatchPattern } from '../charts/spread';
-import { planBuckled } from './buckled-plan';
-import { planDeflected } from './deflected-plan';
-import { planDiagram, type Force } from './diagram-plan';
-import type { DrawingBuckled, DrawingData, DrawingResult } from './drawing-data';
-import { planLoads } from './loads-plan';
-import { planRatio } from './ratio-plan';
+import { planBuckled } from '@/lib/drawing/buckled-plan';
+import { planDeflected } from '@/lib/drawing/deflected-plan';
+import { planDiagram, type Force } from '@/lib/drawing/diagram-plan';
+import type { DrawingBuckled, DrawingData, DrawingResult } from '@/lib/drawing/drawing-data';
+import { planLoads } from '@/lib/drawing/loads-plan';
+import { planRatio } from '@/lib/drawing/ratio-plan';
 import { Dimensions, FrameLines, Labels } from './scene-layer';
 
 interface ViewProps {

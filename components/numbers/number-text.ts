@@ -1,5 +1,5 @@
 import { formatNumber } from '@/lib/units/format';
-import { powerText } from '../ui/power-text';
+import { powerText } from '@/lib/units/power-text';
 import type { NumberCell, NumberTable } from './numbers-data';
 
 /**

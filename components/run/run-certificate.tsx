@@ -1,5 +1,5 @@
 import { Fact } from '../ui/fact';
-import { powerText } from '../ui/power-text';
+import { powerText } from '@/lib/units/power-text';
 
 export interface RunCertificateData {
   /** Different frames solved. */

@@ -1,6 +1,6 @@
 import 'server-only';
-import type { ResultName } from '@/components/drawing/drawing-data';
-import { methodWords } from '@/components/drawing/result-facts';
+import type { ResultName } from '@/lib/drawing/drawing-data';
+import { resultMethodWords } from '@/lib/drawing/result-method-words';
 import type { NumbersData } from '@/components/numbers/numbers-data';
 import { db } from '@/db/client';
 import { findFrame, type FrameStored } from '@/db/queries/frames';
@@ -10,7 +10,7 @@ import { frameNumberInput } from '@/lib/api/inputs';
 import type { Frame } from '@/lib/model/frame';
 import type { FrameEvaluation, ResultState, Verdict } from '@/lib/results/result';
 import { noCasesAlone } from '@/lib/results/state-facts';
-import { governingState, methodOf, notApplicable } from '../drawing-data';
+import { governingState, methodOf, notApplicable } from '@/lib/drawing/frame-drawing-data';
 import { numberUnits } from './number-units';
 import { numbersData } from './numbers-data';
 
@@ -82,7 +82,7 @@ function memberAsked({ members }: Frame, evaluation: FrameEvaluation | null, of:
 
 function methodOfResult(frame: Frame, state: ResultState): string {
   const told = { method: methodOf(state), slack: state.method?.slack ?? [] };
-  return `${state.name}: ${methodWords({ members: frame.members, noCasesAlone: noCasesAlone(frame) }, told).join(' · ')}.`;
+  return `${state.name}: ${resultMethodWords({ members: frame.members, noCasesAlone: noCasesAlone(frame) }, told).join(' · ')}.`;
 }
 
 function whyNone({ status, evaluation }: FrameStored): string {

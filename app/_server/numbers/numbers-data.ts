@@ -4,7 +4,7 @@ import { behindFrame } from '@/lib/analysis/behind/behind-frame';
 import { behindMember, type BehindMember } from '@/lib/analysis/behind/behind-member';
 import type { Frame } from '@/lib/model/frame';
 import type { ResultState } from '@/lib/results/result';
-import { describeState } from '../describe-state';
+import { describeState } from '@/lib/results/describe-state';
 import { directionColumns, directionName, directionRows, frameStep } from './frame-step';
 import { loadsStep } from './loads-step';
 import { memberStep } from './member-step';

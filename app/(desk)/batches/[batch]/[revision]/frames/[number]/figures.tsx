@@ -1,6 +1,6 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
-import type { DrawingData, DrawingResult } from '@/components/drawing/drawing-data';
+import type { DrawingData, DrawingResult } from '@/lib/drawing/drawing-data';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import { unitLabel } from '@/lib/units/batch-unit';

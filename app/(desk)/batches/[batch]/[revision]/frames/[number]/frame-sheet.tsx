@@ -2,8 +2,8 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Certificate } from '@/components/certificate/certificate';
-import type { Diagram } from '@/components/drawing/captions';
-import type { DrawingBuckled } from '@/components/drawing/drawing-data';
+import type { Diagram } from '@/lib/drawing/captions';
+import type { DrawingBuckled } from '@/lib/drawing/drawing-data';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { Working } from '@/components/working/working';
 import { Fact } from '@/components/ui/fact';

@@ -1,7 +1,7 @@
 'use client';
 import { useRouter } from 'next/navigation';
 import { useTransition } from 'react';
-import type { ResultName } from '@/components/drawing/drawing-data';
+import type { ResultName } from '@/lib/drawing/drawing-data';
 import { ResultChoice } from '@/components/drawing/result-choice';
 import { Finder } from '@/components/ui/finder';
 import { Segments } from '@/components/ui/segments';

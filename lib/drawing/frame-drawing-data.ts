@@ -1,4 +1,3 @@
-import 'server-only';
 import type {
   DrawingData,
   DrawingJoint,
@@ -7,7 +6,7 @@ import type {
   DrawingMethod,
   DrawingRestraint,
   DrawingResult,
-} from '@/components/drawing/drawing-data';
+} from './drawing-data';
 import { memberExtremes } from '@/lib/analysis/member-extremes';
 import { memberLine } from '@/lib/analysis/member-line';
 import { sampleLine } from '@/lib/analysis/sample-line';
@@ -15,7 +14,7 @@ import type { Frame, Joint, MemberLoad, Restraint } from '@/lib/model/frame';
 import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { imperfectionForces, noCasesAlone } from '@/lib/results/state-facts';
-import { describeState } from './describe-state';
+import { describeState } from '@/lib/results/describe-state';
 
 /** Standard gravity, m/s² (ISO 80000-3; sheets §2). */
 const g = 9.80665;

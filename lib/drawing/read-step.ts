@@ -1,5 +1,10 @@
 import type { DrawingData } from './drawing-data';
-import type { ReadPoint } from './drawing-readout';
+
+/** A point of a member that is being read: x in m from its start. */
+export interface ReadPoint {
+  readonly member: number;
+  readonly x: number;
+}
 
 /** Arrow left and right walk along the member in twentieths, up and down go to the next one. Null: the key does nothing here. */
 export function readStep(key: string, data: DrawingData, point: ReadPoint | null): ReadPoint | null {

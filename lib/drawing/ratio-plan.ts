@@ -1,6 +1,5 @@
 import { formatRatio } from '@/lib/units/format';
 import type { Verdict } from '@/lib/results/result';
-import { verdictClass } from '../ui/verdict-mark';
 import type { DrawingData } from './drawing-data';
 import { placeLabels, textWidth, type LabelWish, type PlacedLabel } from './labels';
 import { along, type MemberAxis } from './member-axis';
@@ -114,7 +113,7 @@ function ratioWishes(scene: Scene, w: number): LabelWish[] {
       return {
         key: `ratio-${axis.index}`,
         text,
-        className: `d-ratio d-ratio-${verdictClass(member.verdict)}`,
+        className: `d-ratio d-ratio-${member.verdict.replace(' ', '-')}`,
         size: font,
         places,
         must: i === 0,

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { DrawingResult } from '@/components/drawing/drawing-data';
+import type { DrawingResult } from './drawing-data';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import { plainCase, plainFrame, plainMember, plainSection } from '@/lib/analysis/plain-frame';
 import { defaultSettings } from '@/lib/model/settings';
@@ -7,7 +7,7 @@ import { cantileverFrame } from '@/lib/results/cantilever-frame';
 import { evaluateFrame } from '@/lib/results/evaluate';
 import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults } from '@/lib/results/member-results';
-import { drawingData } from './drawing-data';
+import { drawingData } from './frame-drawing-data';
 
 const frame = cantileverFrame('F1');
 const evaluation = evaluateFrame(createAnalyser(), frame, defaultSettings, { second: false, all: true });
