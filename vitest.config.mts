@@ -41,7 +41,6 @@ export default defineConfig({
           include: ['tests/integration/*.test.ts'],
           testTimeout: 180_000,
           hookTimeout: 180_000,
-          fileParallelism: false,
         },
       },
       {

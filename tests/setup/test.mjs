@@ -2,7 +2,7 @@
  * `npm test`: installs what is missing, then formatting, lint, types, unused code, build, and all tests.
  * Ends with a line "N passed, N failed" that counts each of these steps and each test.
  */
-import { spawnSync } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -22,6 +22,23 @@ function step(title, program, args) {
   const ok = done.status === 0;
   console.log(`== ${title}: ${ok ? 'passed' : 'FAILED'} in ${Math.round((Date.now() - began) / 1000)} s`);
   return ok;
+}
+
+/** Like step, beside others: what it prints is shown when it has ended. */
+function stepBeside(title, program, args) {
+  const began = Date.now();
+  return new Promise((resolve) => {
+    const child = spawn(program, args, { cwd: root, stdio: ['ignore', 'pipe', 'pipe'], env });
+    const printed = [];
+    for (const stream of [child.stdout, child.stderr]) stream.on('data', (piece) => printed.push(piece));
+    const end = (ok, words) => {
+      console.log(`\n== ${title}\n${Buffer.concat(printed).toString('utf8')}${words}`);
+      console.log(`== ${title}: ${ok ? 'passed' : 'FAILED'} in ${Math.round((Date.now() - began) / 1000)} s`);
+      resolve(ok);
+    };
+    child.once('error', (error) => end(false, `${error.message}\n`));
+    child.once('close', (status) => end(status === 0, ''));
+  });
 }
 
 function count(ok) {
@@ -53,13 +70,17 @@ function vitest(title, projects) {
 
 prepareMachine({ browser: true });
 rmSync(join(root, '.next'), { recursive: true, force: true });
-count(step('formatting', bin('prettier'), ['--check', '--log-level=warn', '.']));
-count(step('lint', bin('eslint'), ['.', '--max-warnings=0']));
-count(step('route types', bin('next'), ['typegen']) && step('types', bin('tsc'), ['--noEmit']));
-count(step('unused code', bin('knip'), []));
+// Two lanes, one for each of a small machine's cores.
+const lint = async () => count(await stepBeside('lint', bin('eslint'), ['.', '--max-warnings=0']));
+const written = async () => {
+  count(await stepBeside('formatting', bin('prettier'), ['--check', '--log-level=warn', '.']));
+  count(await stepBeside('unused code', bin('knip'), []));
+  const typed = await stepBeside('route types', bin('next'), ['typegen']);
+  count(typed && (await stepBeside('types', bin('tsc'), ['--noEmit'])));
+};
+await Promise.all([lint(), written()]);
 count(step('build', 'npm', ['run', '--silent', 'build']));
-vitest('unit and published-value tests', ['node', 'dom']);
-vitest('integration tests', ['integration']);
+vitest('unit, published-value and integration tests', ['node', 'dom', 'integration']);
 vitest('browser tests', ['browser']);
 rmSync(scratch, { recursive: true, force: true });
 console.log(`\n${passed} passed, ${failed} failed`);
