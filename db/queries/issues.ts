@@ -173,12 +173,6 @@ function issuesFor(db: Db, office: number, person: number) {
 function listed(query: ReturnType<typeof issues>) {
   return query.select((eb) => {
     const asked = () => eb.selectFrom('question').whereRef('question.issue', '=', 'issue.id');
-    const last = eb
-      .selectFrom('answer')
-      .select('answer.person')
-      .whereRef('answer.question', '=', 'question.id')
-      .orderBy('answer.id', 'desc')
-      .limit(1);
     return [
       eb
         .selectFrom('issue_client')
@@ -204,7 +198,15 @@ function listed(query: ReturnType<typeof issues>) {
         .as('questions'),
       asked()
         .select((one) => one.fn.countAll<number>().as('n'))
-        .where((one) => one(one.fn.coalesce(last, 'question.person'), '=', one.ref('question.person')))
+        .where((one) => {
+          const last = one
+            .selectFrom('answer')
+            .select('answer.person')
+            .whereRef('answer.question', '=', 'question.id')
+            .orderBy('answer.id', 'desc')
+            .limit(1);
+          return one(one.fn.coalesce(last, one.ref('question.person')), '=', one.ref('question.person'));
+        })
         .$asScalar()
         .as('open'),
     ];
