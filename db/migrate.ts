@@ -4,6 +4,7 @@ import { up as slimLists } from '@/db/migrations/2026-12-01-slim-lists';
 import { up as trailOfChanges } from '@/db/migrations/2026-12-01-trail-of-changes';
 import { up as whatIsCombined } from '@/db/migrations/2026-12-01-what-is-combined';
 import { up as whoWasIssuedWhat } from '@/db/migrations/2026-12-01-who-was-issued-what';
+import { up as whomMailReaches } from '@/db/migrations/2026-12-01-whom-mail-reaches';
 import type { DB } from '@/db/schema';
 
 /** Registered by hand: bundlers see imports, not folders. */
@@ -13,6 +14,7 @@ const migrations: Record<string, Migration> = {
   '2026-12-01-trail-of-changes': { up: trailOfChanges },
   '2026-12-01-what-is-combined': { up: whatIsCombined },
   '2026-12-01-who-was-issued-what': { up: whoWasIssuedWhat },
+  '2026-12-01-whom-mail-reaches': { up: whomMailReaches },
 };
 
 /** Brings the database up to date; names of the migrations that ran. Safe to call at every start. */

@@ -1,6 +1,7 @@
 /** What the tables hold, for Kysely. Instants are ISO 8601 text in UTC, flags 0 or 1, records JSON text. See db/README.md. */
 import type { Generated } from 'kysely';
 import type { IssuingTables } from '@/db/tables/issuing';
+import type { MailTables } from '@/db/tables/mail';
 import type { Purpose } from '@/lib/model/frame';
 
 /** A person's role in an office. */
@@ -18,7 +19,7 @@ export type FrameStatus = VersionState | 'stopped';
 /** 0 within, 1 near, 2 not checked, 3 over: larger is worse; −1 = none yet (frames only). */
 export type VerdictRank = number;
 
-export interface DB extends IssuingTables {
+export interface DB extends IssuingTables, MailTables {
   office: { id: Generated<number>; name: string; created_at: string };
   person: { id: Generated<number>; email: string; name: string; password_hash: string; created_at: string };
   membership: { office: number; person: number; role: OfficeRole; created_at: string; ended_at: string | null };
@@ -40,7 +41,16 @@ export interface DB extends IssuingTables {
     created_at: string;
   };
   project_person: { project: number; person: number; created_at: string };
-  batch: { id: Generated<number>; office: number; project: number; name: string; created_by: number; created_at: string };
+  batch: {
+    id: Generated<number>;
+    office: number;
+    project: number;
+    name: string;
+    created_by: number;
+    created_at: string;
+    /** Who looks after it since it was handed over; null = who made it. */
+    keeper: number | null;
+  };
   revision: RevisionTable;
   upload: {
     id: Generated<number>;
@@ -174,16 +184,6 @@ export interface DB extends IssuingTables {
     what: string;
     detail: string;
     at: string;
-  };
-  outbox: {
-    id: Generated<number>;
-    office: number;
-    recipient: string;
-    kind: string;
-    payload: string;
-    state: 'waiting' | 'sent' | 'failed';
-    created_at: string;
-    sent_at: string | null;
   };
 }
 

@@ -21,15 +21,15 @@ export interface AboutIssue {
 }
 
 export type MailMessage =
-  /** `token` is the single-use secret of the link; only its hash is kept once the letter is on its way. */
+  /** `link` is the row id of a single-use link, never its secret: that is derived when the letter is written. */
   | {
       readonly kind: 'invitation';
       readonly by: string;
       readonly officeName: string;
       readonly role: string;
-      readonly token: string;
+      readonly link: number;
     }
-  | { readonly kind: 'password reset'; readonly token: string }
+  | { readonly kind: 'password reset'; readonly link: number }
   | {
       readonly kind: 'run finished';
       readonly about: AboutRevision;
