@@ -11,7 +11,7 @@ import { memberDataFor } from './member-data';
 import { strengthScale, type PlannedState } from './plan-states';
 import { ropeAmong } from './second-order/ropes';
 import type { SecondOrderSpace } from './second-order/second-order-space';
-import { firstOrderCombination, solveSecondOrder } from './second-order/solve-second-order';
+import { firstOrderCombination, solveSecondOrder, type SecondOrderFailure } from './second-order/solve-second-order';
 import { firstReduction, reduce, shareOf, squashLoads } from './stiffness-reduction/reduced-stiffness';
 import { factorsOf, superpose } from './superpose';
 import { movementWithout } from './tension-only/movement-without';
@@ -202,11 +202,12 @@ function troubleOf(
   job: SetJob,
   first: FirstOrder,
   slack: readonly number[],
-  { why, reached }: { readonly why: 'unstable' | 'mechanism' | 'not settled'; readonly reached: number },
+  { why, reached, member = 0 }: SecondOrderFailure,
 ): StateTrouble {
   if (why === 'mechanism') return withoutThem(job, slack);
   if (why === 'not settled') return { kind: why, reached };
-  return { kind: why, reached, criticalLoadFactor: alphaOf(job, first) };
+  const criticalLoadFactor = alphaOf(job, first);
+  return why === 'too far' ? { kind: why, reached, member, criticalLoadFactor } : { kind: why, reached, criticalLoadFactor };
 }
 
 function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): StateTrouble {

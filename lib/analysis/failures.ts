@@ -2,6 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { Failure } from '@/lib/results/result';
 import type { Condition } from './condition';
 import { memberData } from './member-data';
+import { mostTurn } from './second-order/solve-second-order';
 import { describeMovement, freeToMove, strains } from './mechanism';
 import type { Topology } from './topology';
 
@@ -42,6 +43,8 @@ function stubRemedy(frame: Frame): string | null {
 export type StateTrouble =
   /** Followed in stable equilibrium up to this share of its loads; α_cr, null = none or not known. */
   | { readonly kind: 'unstable'; readonly reached: number; readonly criticalLoadFactor: number | null }
+  /** Beyond this share of its loads a member (index) turns further than small displacements allow. */
+  | { readonly kind: 'too far'; readonly reached: number; readonly member: number; readonly criticalLoadFactor: number | null }
   | { readonly kind: 'not settled'; readonly reached: number }
   /** A member (index) whose axial force reaches what its section can carry, so that nothing of its stiffness is left. */
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
@@ -58,11 +61,15 @@ export function stateFailure(frame: Frame, name: string, scale: number, reduced:
 export function troubleWords(frame: Frame, scale: number, reduced: boolean, trouble: StateTrouble): string {
   const loads = scale === 1 ? 'its loads' : `${scale} times its loads`;
   switch (trouble.kind) {
-    case 'unstable': {
-      const alpha = trouble.criticalLoadFactor;
-      const critical = alpha === null ? '' : `; its critical load factor is ${figure(alpha)}`;
-      const softened = reduced ? ' with the stiffness reduced (AISC 360-22 C2.3)' : '';
-      return `unstable at this load${softened}: it stood up to ${figure(trouble.reached)} of ${loads}${critical}. Stiffen or brace the frame, or reduce the load.`;
+    case 'unstable':
+      return `unstable at this load${softened(reduced)}: it stood up to ${figure(trouble.reached)} of ${loads}${critical(trouble, scale)}. ${remedy}`;
+    case 'too far': {
+      const id = frame.members[trouble.member]!.id;
+      const alpha = trouble.criticalLoadFactor ?? Infinity;
+      const turned = `${figure(trouble.reached)} of ${loads}, where member ${id} has turned by ${mostTurn} rad, the most for which small displacements hold`;
+      return alpha * (reduced ? 0.8 : 1) <= scale
+        ? `unstable at this load${softened(reduced)}: it stood up to ${turned}${critical(trouble, scale)}. ${remedy}`
+        : `moves too far to be analysed${softened(reduced)}: it was followed up to ${turned}${critical(trouble, scale)}. ${remedy}`;
     }
     case 'not settled':
       return `the second-order analysis did not settle: it could be followed up to ${figure(trouble.reached)} of ${loads}.`;
@@ -81,6 +88,19 @@ export function troubleWords(frame: Frame, scale: number, reduced: boolean, trou
     case 'free':
       return trouble.movement;
   }
+}
+
+const remedy = 'Stiffen or brace the frame, or reduce the load.';
+
+function softened(reduced: boolean): string {
+  return reduced ? ' with the stiffness reduced (AISC 360-22 C2.3)' : '';
+}
+
+/** α_cr beside a share that was reached: they differ by what it leaves out. */
+function critical({ criticalLoadFactor }: { readonly criticalLoadFactor: number | null }, scale: number): string {
+  if (criticalLoadFactor === null) return '';
+  const once = scale === 1 ? '' : ' of its loads once';
+  return `; its critical load factor${once}, by first-order axial forces and full stiffness, is ${figure(criticalLoadFactor)}`;
 }
 
 /** Rounded down, so that a load that was not reached is never printed as reached. */

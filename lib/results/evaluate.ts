@@ -1,6 +1,7 @@
 /** Analysis, checks, mass and verdict of one frame: what a run does with each frame, wherever it runs. */
 import { analysisAssumptions } from '@/lib/analysis/analysis-assumptions';
 import type { Analyser } from '@/lib/analysis/analyser';
+import { largeTurns } from '@/lib/analysis/large-turns';
 import { checkFrame } from '@/lib/checks/check-frame';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
@@ -63,6 +64,7 @@ function withLines(
     ...methodAssumptions(settings),
     ...analysisAssumptions(frame, settings),
     ...slackAssumptions(frame, analysis.states),
+    ...largeTurns(frame, analysis.states),
     ...found.assumptions,
   ];
   const notChecked = checks.length === 0 && found.notChecked.length === 0 ? ['nothing to check'] : found.notChecked;

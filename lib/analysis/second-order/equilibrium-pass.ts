@@ -16,8 +16,13 @@ export interface Work {
   /** Supports are moved. */
   readonly settled: boolean;
   passes: number;
+  /** Share of the loads whose axial forces are at work; movements are those of the whole loads under them. */
+  share: number;
   /** Largest axial stiffness × movement of the last pass, N. */
   handled: number;
+  /** Largest turn of a member's chord in the last pass, rad, and whose (index). */
+  turn: number;
+  turned: number;
 }
 
 /** A pivot below this share of its own diagonal is none. */
@@ -64,7 +69,7 @@ export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
       held[i] = 0;
     }
   }
-  return { input, order, settled, passes: 0, handled: 0 };
+  return { input, order, settled, passes: 0, share: 1, handled: 0, turn: 0, turned: 0 };
 }
 
 /** Whether first-order stiffness alone holds the frame. */
@@ -107,7 +112,7 @@ export function respond(work: Work): boolean {
     if (slack?.[i]) continue;
     const m = data[i]!;
     const loading = loadings[i]!;
-    memberChain(m, loading, order === 2 ? N[i]! : null, true, piece, buckled);
+    memberChain(m, loading, order === 2 ? N[i]! : null, true, piece, buckled, work.share);
     if (buckled.yes) return false;
     addMember(K, t, m, piece, angles);
     let X1 = -held[i]!;
@@ -137,6 +142,7 @@ export function respond(work: Work): boolean {
     for (let r = 0; r < 3; r++) if (t.free[o + r]) all[o + r] = d[3 * p + r]!;
   }
   work.handled = 0;
+  work.turn = 0;
   for (let i = 0; i < data.length; i++) {
     const m = data[i]!;
     if (slack?.[i]) answer[i] = 0;
@@ -145,6 +151,11 @@ export function respond(work: Work): boolean {
       const ka = m.EA / m.length;
       answer[i] = ka * (u[3]! - u[0]!) + held[i]!;
       work.handled = Math.max(work.handled, ka * Math.abs(u[3]!), ka * Math.abs(u[0]!));
+      const turn = Math.abs(u[4]! - u[1]!) / m.length;
+      if (turn > work.turn) {
+        work.turn = turn;
+        work.turned = i;
+      }
     }
   }
   return true;

@@ -23,6 +23,7 @@ const one = emptyTransfer();
  * @param N at its start, before a force exactly there, N, tension positive; null = first order: no axial force bends it
  * @param released false: with its ends clamped to the nodes, whatever its joints
  * @param out overwritten   @param buckled set where it has no stiffness left between its nodes
+ * @param share of the loading's axial forces that acts; its loads across act whole
  */
 export function memberChain(
   m: MemberData,
@@ -31,13 +32,14 @@ export function memberChain(
   released: boolean,
   out: Piece,
   buckled: Buckled,
+  share = 1,
 ): void {
   const { count, stretches } = loading;
   const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
-  const bends = N === null ? 0 : 1;
+  const bends = N === null ? 0 : share;
   const start = N ?? 0;
   let total = 0;
-  if (bends) for (let i = 0; i < count; i++) total += slenderness(m, loading, i, start, slip, buckled);
+  if (bends) for (let i = 0; i < count; i++) total += slenderness(m, loading, i, start, slip, buckled, bends);
   const groups = Math.max(1, Math.ceil(total / longestGroup));
   const finest = groups > 1 ? 1 : longest;
   let done = 0;
@@ -49,7 +51,7 @@ export function memberChain(
     const n2 = bends * stretches[o + 3]!;
     const q1 = stretches[o + 5]!;
     const a = start + bends * stretches[o + 1]!;
-    const slender = count === 1 || !bends ? total : slenderness(m, loading, i, start, slip, buckled);
+    const slender = count === 1 || !bends ? total : slenderness(m, loading, i, start, slip, buckled, bends);
     const pieces = Math.max(1, Math.ceil(slender / finest));
     const h = stretches[o]! / pieces;
     for (let j = 0; j < pieces; j++) {
@@ -77,20 +79,31 @@ export function memberChain(
 export function piecesAlong(m: MemberData, loading: MemberLoading, N: number): number {
   const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
   let total = 0;
-  for (let i = 0; i < loading.count; i++) total += slenderness(m, loading, i, N, slip, { yes: false });
+  for (let i = 0; i < loading.count; i++) total += slenderness(m, loading, i, N, slip, { yes: false }, 1);
   let pieces = 0;
   for (let i = 0; i < loading.count; i++)
-    pieces += Math.max(1, Math.ceil(slenderness(m, loading, i, N, slip, { yes: false }) / (total > longestGroup ? 1 : longest)));
+    pieces += Math.max(
+      1,
+      Math.ceil(slenderness(m, loading, i, N, slip, { yes: false }, 1) / (total > longestGroup ? 1 : longest)),
+    );
   return pieces;
 }
 
 /** √(|N| l²/EI) of one stretch, N its largest. */
-function slenderness(m: MemberData, { stretches }: MemberLoading, i: number, N: number, slip: number, buckled: Buckled): number {
+function slenderness(
+  m: MemberData,
+  { stretches }: MemberLoading,
+  i: number,
+  N: number,
+  slip: number,
+  buckled: Buckled,
+  share: number,
+): number {
   const o = stride * i;
   const l = stretches[o]!;
-  const n2 = stretches[o + 3]!;
-  const a = N + stretches[o + 1]!;
-  const b = a + l * (stretches[o + 2]! + l * n2);
+  const n2 = share * stretches[o + 3]!;
+  const a = N + share * stretches[o + 1]!;
+  const b = a + l * (share * stretches[o + 2]! + l * n2);
   const bulge = 0.25 * Math.abs(n2) * l * l;
   const size = Math.max(Math.abs(a), Math.abs(b)) + bulge;
   let per = 1;

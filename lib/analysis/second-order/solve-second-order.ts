@@ -4,6 +4,7 @@ import type { Topology } from '../topology';
 import { prepare, respond, standsWithoutForces, type Work } from './equilibrium-pass';
 import { forget, nextGuess } from './next-guess';
 import { recoverSecondOrder } from './recover-second-order';
+import { repels } from './repels';
 import type { SecondOrderSpace } from './second-order-space';
 
 /** One combination, and how its members are taken. */
@@ -43,8 +44,13 @@ export interface SecondOrderFailure {
   readonly ok: false;
   /** Share of the combination's load up to which stable equilibrium was followed, 0 to 1. */
   readonly reached: number;
-  /** unstable: past a critical load · mechanism: not held even without axial forces · not settled: axial forces went on changing. */
-  readonly why: 'unstable' | 'mechanism' | 'not settled';
+  /**
+   * unstable: past a critical load · too far: a member turns by more than `mostTurn` · mechanism: not held even without axial
+   * forces · not settled: axial forces went on changing.
+   */
+  readonly why: 'unstable' | 'too far' | 'mechanism' | 'not settled';
+  /** Too far: the member (index) that turns. */
+  readonly member?: number;
 }
 
 /** Axial forces stand still when none changes by more than this share of the largest. */
@@ -54,6 +60,13 @@ const rounding = 4e-15;
 const mostPasses = 60;
 /** … and where they go on flickering by no more than this. */
 const enough = 1e-8;
+/**
+ * By how much the line between a member's ends may turn, rad: sin and cos are then within 0.5 % of what small displacements take
+ * for them. Beyond, equations that are linear in the movements go on having a solution past a critical load, at sways of metres.
+ */
+export const mostTurn = 0.1;
+/** Where the second pass still changes this share of what the first did, axial forces decide whether the state is held. */
+const hesitant = 0.3;
 /** The share of the load at which equilibrium is lost is closed in on to this. */
 const closeness = 1e-3;
 
@@ -61,8 +74,9 @@ const closeness = 1e-3;
  * Second-order elastic equilibrium of one combination (README §8): members exactly under their axial forces, P-Δ and P-δ,
  * repeated until the axial forces stand still.
  *
- * K(N) must be positive definite, members between their nodes too, at every load share taken, so that an equilibrium beyond
- * a critical load is never given: where the whole load can't be reached from the first-order forces, it is put on in steps.
+ * K(N) must be positive definite, members between their nodes too, at every load share taken, no member may turn too far, and
+ * the axial forces must not run away from the state when disturbed, so that an equilibrium beyond a critical load is never
+ * given: where the whole load can't be reached from the first-order forces at once, it is put on in steps.
  */
 export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
   const work = prepare(input, 2);
@@ -71,7 +85,8 @@ export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
   if (input.guess) for (let i = 0; i < N.length; i++) N[i] = input.guess[i]! * input.loadScale;
   else N.fill(0);
   const straight = settle(work, 1);
-  if (straight.how === 'still') return recoverSecondOrder(work, straight.change);
+  if (straight.how === 'still' && straight.held < hesitant && work.turn <= mostTurn)
+    return recoverSecondOrder(work, straight.change);
   return inSteps(work);
 }
 
@@ -86,6 +101,8 @@ export function firstOrderCombination(input: SecondOrderInput): SecondOrderResul
 interface Settled {
   readonly how: 'still' | 'unstable' | 'moving';
   readonly change: number;
+  /** What the second pass changed of what the first did. */
+  readonly held: number;
 }
 
 /**
@@ -95,11 +112,14 @@ interface Settled {
 function settle(work: Work, share: number): Settled {
   const { N, answer, loadings, passes } = work.input.space;
   let change = Infinity;
+  let held = 0;
+  let begun = 0;
+  work.share = share;
   let ahead = false;
   forget(passes);
   for (let pass = 0; pass < mostPasses; pass++) {
     if (!respond(work)) {
-      if (!ahead) return { how: 'unstable', change };
+      if (!ahead) return { how: 'unstable', change, held };
       // too far ahead: on from the answer itself
       N.set(passes.answer);
       forget(passes);
@@ -114,17 +134,19 @@ function settle(work: Work, share: number): Settled {
       moved = Math.max(moved, Math.abs(next - N[i]!));
       answer[i] = next;
     }
-    if (!Number.isFinite(moved)) return { how: 'unstable', change };
+    if (!Number.isFinite(moved)) return { how: 'unstable', change, held };
     change = size > 0 ? moved / size : 0;
     if (moved <= still * size + rounding * share * work.handled) {
       N.set(answer);
-      return { how: 'still', change };
+      return { how: 'still', change, held };
     }
+    if (pass === 0) begun = moved;
+    else if (pass === 1) held = moved / begun;
     ahead = nextGuess(N, answer, passes);
   }
   N.set(answer);
   // what is left is rounding that equilibrium near a critical load makes more of
-  return { how: change <= enough ? 'still' : 'moving', change };
+  return { how: change <= enough ? 'still' : 'moving', change, held };
 }
 
 /** The load put on in steps, each from the equilibrium before it, halved where it is too long. */
@@ -132,21 +154,29 @@ function inSteps(work: Work): SecondOrderResult {
   const { N } = work.input.space;
   const kept = new Float64Array(N.length);
   let reached = 0;
-  let why: SecondOrderFailure['why'] = 'unstable';
+  let failure: Pick<SecondOrderFailure, 'why' | 'member'> = { why: 'unstable' };
   for (let step = 0.5; step >= closeness;) {
     const share = Math.min(1, reached + step);
     for (let i = 0; i < N.length; i++) N[i] = reached > 0 ? (kept[i]! * share) / reached : 0;
-    const { how, change } = settle(work, share);
-    if (how === 'still') {
-      if (share === 1) return recoverSecondOrder(work, change);
+    const settled = settle(work, share);
+    const trouble = troubleAt(work, settled, share);
+    if (trouble) {
+      step /= 2;
+      failure = trouble;
+    } else {
+      if (share === 1) return recoverSecondOrder(work, settled.change);
       kept.set(N);
       reached = share;
-    } else {
-      step /= 2;
-      // axial forces that find no equilibrium at all have none: the load they can carry is passed
-      why = how === 'unstable' || change > 1e-6 ? 'unstable' : 'not settled';
     }
   }
-  if (reached === 0 && !standsWithoutForces(work)) why = 'mechanism';
-  return { ok: false, reached, why };
+  if (reached === 0 && !standsWithoutForces(work)) return { ok: false, reached, why: 'mechanism' };
+  return { ok: false, reached, ...failure };
+}
+
+/** Why the state at a load share is none; null where it is one. */
+function troubleAt(work: Work, { how, change, held }: Settled, share: number): Pick<SecondOrderFailure, 'why' | 'member'> | null {
+  // axial forces that find no equilibrium at all have none: the load they can carry is passed
+  if (how !== 'still') return { why: how === 'unstable' || change > 1e-6 ? 'unstable' : 'not settled' };
+  if (share * work.turn > mostTurn) return { why: 'too far', member: work.turned };
+  return held >= hesitant && repels(work, share) ? { why: 'unstable' } : null;
 }
