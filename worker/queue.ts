@@ -11,6 +11,7 @@ import { findRevisionById } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
 import { failStrandedReadings } from '@/db/queries/waiting';
 import { askForRun } from './ask';
+import { makeOneIssue } from './issuing';
 import type { Pools } from './pools';
 import type { ProgressEvents, RunProgress } from './progress';
 import { readOneRevision } from './reading';
@@ -30,7 +31,12 @@ export interface QueueOptions {
   readonly onChunk?: (chunk: { readonly office: number; readonly revision: number; readonly frames: number }) => void;
 }
 
-interface ReadWork {
+/** Jobs that are one thread's work from beginning to end, by kind; one of them at a time, office by office. */
+const wholeJobs: Readonly<Record<string, (options: QueueOptions, job: JobRecord) => Promise<void>>> = {
+  issue: makeOneIssue,
+};
+
+interface WholeWork {
   readonly office: number;
   readonly job: JobRecord;
   taken: boolean;
@@ -40,8 +46,10 @@ export class WorkQueue {
   readonly events: ProgressEvents = new EventEmitter();
   private readonly solving = new PQueue({ concurrency: 2 });
   private readonly reading = new PQueue({ concurrency: 1 });
+  private readonly making = new PQueue({ concurrency: 1 });
   private readonly runs = new Turns<RunWork>();
-  private readonly reads = new Turns<ReadWork>();
+  private readonly reads = new Turns<WholeWork>();
+  private readonly wholes = new Turns<WholeWork>();
   private readonly known = new Set<number>();
   /** Versions that some thread has in hand: two runs of one batch may wait for the same frame. */
   private readonly inHand = new Set<number>();
@@ -101,7 +109,8 @@ export class WorkQueue {
       await this.pumping;
       await this.solving.onIdle();
       await this.reading.onIdle();
-    } while (this.pumping || this.solving.pending + this.solving.size + this.reading.pending + this.reading.size > 0);
+      await this.making.onIdle();
+    } while (this.pumping || [this.solving, this.reading, this.making].some((queue) => queue.pending + queue.size > 0));
   }
 
   /** Hands out nothing more and waits for what is in hand; unfinished work is taken up by the next start. */
@@ -110,6 +119,7 @@ export class WorkQueue {
     await this.pumping;
     await this.solving.onIdle();
     await this.reading.onIdle();
+    await this.making.onIdle();
   }
 
   private async pump(): Promise<void> {
@@ -117,6 +127,7 @@ export class WorkQueue {
       this.again = false;
       await this.learn();
       while (this.reading.pending + this.reading.size < 1 && (await this.handOutReading()));
+      while (this.making.pending + this.making.size < 1 && (await this.handOutWhole()));
       while (this.solving.pending + this.solving.size < 2 && (await this.handOutChunk()));
     }
   }
@@ -127,6 +138,7 @@ export class WorkQueue {
       if (this.known.has(job.id)) continue;
       if (job.kind === 'read') this.reads.add({ office: job.office, job, taken: false });
       else if (job.kind === 'run') this.runs.add(new RunWork(job, this.options, this.inHand));
+      else if (wholeJobs[job.kind]) this.wholes.add({ office: job.office, job, taken: false });
       else continue;
       this.known.add(job.id);
     }
@@ -144,6 +156,22 @@ export class WorkQueue {
         this.options.log('a reading could not be recorded', { error, job: work.job.id });
       }
       this.reads.remove(work);
+      this.moved(work.job.revision);
+    });
+    return true;
+  }
+
+  private async handOutWhole(): Promise<boolean> {
+    const work = await this.wholes.next((each) => (each.taken ? null : each));
+    if (!work || this.closed) return false;
+    work.taken = true;
+    void this.making.add(async () => {
+      try {
+        await wholeJobs[work.job.kind]!(this.options, work.job);
+      } catch (error) {
+        this.options.log('the end of a job could not be recorded', { error, job: work.job.id });
+      }
+      this.wholes.remove(work);
       this.moved(work.job.revision);
     });
     return true;

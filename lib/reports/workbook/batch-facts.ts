@@ -2,6 +2,7 @@
  * What is gathered in one pass over the frames: the cover's counts, and the sheets whose rows are few enough to keep.
  * The long sheets make passes of their own and hold nothing.
  */
+import { acceptedWords } from '@/lib/reports/accepted-words';
 import { flagsOf, frameRow, type Flag } from '@/lib/reports/workbook/frame-rows';
 import { DistinctParts } from '@/lib/reports/workbook/distinct-parts';
 import { loadTotals } from '@/lib/reports/workbook/load-totals';
@@ -36,6 +37,7 @@ export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
   const flags: Flag[] = [];
   const totalRows: ReportRow[] = [];
   const parts = new DistinctParts();
+  const accepted = source.issue ? acceptedWords(source.issue.acceptances) : null;
   let notSolved = 0;
   let tied = false;
   const take = (each: ReportFrame): void => {
@@ -43,7 +45,7 @@ export async function gatherFacts(source: ReportSource): Promise<BatchFacts> {
     if (each.evaluation?.status !== 'solved') notSolved += 1;
     for (const line of each.evaluation?.assumptions ?? []) assumed.set(line, (assumed.get(line) ?? 0) + 1);
     frameRows.push(frameRow(each, system));
-    flags.push(...flagsOf(each));
+    flags.push(...flagsOf(each, accepted));
     if (each.frame === null) return;
     parts.add(each.frame);
     tied ||= each.frame.members.some((member) => member.tensionOnly);

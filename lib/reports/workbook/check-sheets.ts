@@ -1,4 +1,5 @@
 /** Members (the governing row of each member and check) and Movements. */
+import { acceptedWords } from '@/lib/reports/accepted-words';
 import { cellOf, quantityColumn, ratioColumn, text, verdictColumn } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
@@ -9,6 +10,7 @@ const movements = new Set(['deflection', 'sway', 'displacement', 'spread']);
 
 function checkSheet(source: ReportSource, name: string, wanted: (check: string) => boolean): ReportSheet {
   const system = source.settings.units;
+  const accepted = acceptedWords(source.issue?.acceptances ?? []);
   return {
     name,
     columns: [
@@ -27,6 +29,7 @@ function checkSheet(source: ReportSource, name: string, wanted: (check: string) 
       verdictColumn(),
       text('not checked', 50),
       text('reference', 30),
+      ...(source.issue ? [text('accepted', 60)] : []),
     ],
     rows: () =>
       rowsOfFrames(source, { states: false }, function* (each): Iterable<ReportRow> {
@@ -49,6 +52,9 @@ function checkSheet(source: ReportSource, name: string, wanted: (check: string) 
             check.verdict,
             check.reason,
             check.reference,
+            ...(source.issue
+              ? [accepted({ frame: each.id, subject: check.subject ?? each.id, check: check.check, verdict: check.verdict })]
+              : []),
           ];
         }
       }),

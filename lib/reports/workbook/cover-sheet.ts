@@ -2,6 +2,7 @@
 import { settingWords, statedSettings } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
 import { methodWords } from '@/lib/reports/method-words';
+import { issueRows } from '@/lib/reports/workbook/issue-rows';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import type { BatchFacts } from '@/lib/reports/workbook/batch-facts';
@@ -18,19 +19,24 @@ const sign = [
 
 const originWords = { sheet: 'Setup', office: "the office's own", default: 'default, the sheet is silent' };
 
-function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
-  const { title, input, settings } = source;
-  yield [settings.title ?? title.batch ?? input.name];
-  yield [];
-  const notYet = 'not yet';
+/** Of a revision that is not issued: what there is of it so far. */
+function* draftRows({ title }: ReportSource): Iterable<ReportRow> {
   yield ['project', title.project ?? ''];
   yield ['batch', title.batch ?? ''];
   yield ['revision', title.revision ?? ''];
   yield ['state', title.state ?? ''];
   yield ['prepared', title.prepared ?? ''];
+  yield ['checked', title.checked ?? 'not yet'];
+  yield ['issued', title.issued ?? 'not yet'];
+}
+
+function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
+  const { title, input, settings } = source;
+  yield [settings.title ?? title.batch ?? input.name];
+  yield [];
+  if (source.issue) yield* issueRows(source.issue);
+  else yield* draftRows(source);
   for (const [index, line] of (title.madeBy ?? []).entries()) yield [index === 0 ? 'made by a change' : '', line];
-  yield ['checked', title.checked ?? notYet];
-  yield ['issued', title.issued ?? notYet];
   yield ['input', input.name];
   yield ['input SHA-256', input.sha256];
   for (const file of input.files.length > 1 ? input.files : []) yield ['', `${file.name}: ${file.sha256}`];

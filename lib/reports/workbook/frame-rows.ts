@@ -1,4 +1,5 @@
 /** A frame's row on the Frames sheet, and what of it is flagged. */
+import type { AcceptedRow } from '@/lib/reports/accepted-words';
 import { cellOf, verdictOrder, type ReportRow } from '@/lib/reports/workbook/report-sheet';
 import type { ReportFrame } from '@/lib/reports/workbook/report-source';
 import { verdictOf } from '@/lib/reports/workbook/verdict-of';
@@ -57,8 +58,14 @@ export interface Flag {
   readonly row: ReportRow;
 }
 
-/** Every check of a frame that is over, near or not checked; the frame itself where nothing of it was checked. */
-export function flagsOf(each: ReportFrame): Flag[] {
+/**
+ * Every check of a frame that is over, near or not checked; the frame itself where nothing of it was checked.
+ *
+ * @param accepted the reason that a checker gave for a row, where one accepted it; null in a draft
+ */
+export function flagsOf(each: ReportFrame, accepted: ((row: AcceptedRow) => string | null) | null): Flag[] {
+  const reason = (verdict: Verdict, [subject, check]: readonly [string, string, ...unknown[]]): (string | null)[] =>
+    accepted ? [accepted({ frame: each.id, subject, check, verdict })] : [];
   const flag = (
     verdict: Verdict,
     ratio: number | null,
@@ -67,7 +74,7 @@ export function flagsOf(each: ReportFrame): Flag[] {
     order: verdictOrder[verdict],
     ratio: ratio ?? 0,
     number: each.number,
-    row: [verdict, ratio, each.id, ...cells],
+    row: [verdict, ratio, each.id, ...cells, ...reason(verdict, cells)],
   });
   const checks = each.evaluation?.checks ?? [];
   if (checks.length === 0)

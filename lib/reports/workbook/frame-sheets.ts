@@ -36,7 +36,7 @@ export function framesSheet(facts: BatchFacts, settings: Settings): ReportSheet 
   };
 }
 
-export function flagsSheet(facts: BatchFacts, settings: Settings): ReportSheet {
+export function flagsSheet(facts: BatchFacts, settings: Settings, issued: boolean): ReportSheet {
   return {
     name: 'Flags',
     columns: [
@@ -47,6 +47,7 @@ export function flagsSheet(facts: BatchFacts, settings: Settings): ReportSheet {
       text('check', 20),
       text('combination'),
       text('why', 60),
+      ...(issued ? [text('accepted', 60)] : []),
     ],
     rows: () => facts.flagRows,
   };

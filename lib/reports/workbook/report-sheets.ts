@@ -17,7 +17,7 @@ export async function reportSheets(source: ReportSource): Promise<ReportSheet[]>
   return [
     coverSheet(source, facts),
     framesSheet(facts, source.settings),
-    flagsSheet(facts, source.settings),
+    flagsSheet(facts, source.settings, source.issue !== undefined),
     membersSheet(source),
     ...(hasWorking(source.settings) ? [workingSheet(source)] : []),
     membersByCombinationSheet(source),

@@ -3,6 +3,7 @@ import type { InputIdentity, InputRow } from '@/lib/intake/intake';
 import type { Frame } from '@/lib/model/frame';
 import type { SettingOrigins, Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
+import type { IssueCover } from '@/lib/reports/issue-cover';
 import type { FrameEvaluation } from '@/lib/results/result';
 
 /** Who and what the cover names; null = not yet, or unknown to the command line. */
@@ -42,6 +43,8 @@ export interface FrameNeed {
 
 export interface ReportSource {
   readonly title: ReportTitle;
+  /** Of an issue's workbook: who signs what; absent in a draft. */
+  readonly issue?: IssueCover;
   readonly engine: string;
   readonly input: InputIdentity;
   readonly settings: Settings;
