@@ -13,7 +13,7 @@ const apiPolicy = { key: 'Content-Security-Policy', value: "default-src 'none'; 
 const nextConfig = {
   reactStrictMode: true,
   poweredByHeader: false,
-  serverExternalPackages: ['better-sqlite3', 'piscina', '@node-rs/argon2', 'exceljs', 'pino'],
+  serverExternalPackages: ['better-sqlite3', 'piscina', '@node-rs/argon2', 'exceljs', 'pino', 'resend'],
   // Types are checked by `npm test` (tsc), once, not again by the build.
   typescript: { ignoreBuildErrors: true },
   headers: () =>

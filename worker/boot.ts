@@ -1,9 +1,12 @@
 /** Starts the server's work: called once from instrumentation.ts, and safe to be called again. */
 import 'server-only';
+import path from 'node:path';
 import { databaseFile, db, raw } from '@/db/client';
 import { migrate } from '@/db/migrate';
 import type { OpenDatabase } from '@/db/open';
 import { log } from './log';
+import { isMailHosted, serviceOf } from './mail/service-of';
+import { MailPump } from './mail/pump';
 import { createPools, type Pools } from './pools';
 import type { RunProgress } from './progress';
 import { WorkQueue } from './queue';
@@ -44,5 +47,15 @@ export function boot(): Promise<void> {
     const ran = await migrate(db());
     for (const migration of ran) log('migration', { migration });
     await here.queue.start();
+    await startMail();
   })());
+}
+
+async function startMail(): Promise<void> {
+  const { env } = process;
+  const service = await serviceOf(env, path.dirname(databaseFile()));
+  if (!isMailHosted(env)) log('letters are kept on this machine and reach nobody: MAIL_KEY is not set', {});
+  // Links lead to where people sign in; both are checked or set before the server starts.
+  const site = (env['NEXTAUTH_URL'] ?? 'http://localhost:3000').replace(/\/+$/, '');
+  new MailPump({ db: db(), service, site, secret: env['NEXTAUTH_SECRET'] ?? '', log }).start();
 }

@@ -1,5 +1,6 @@
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { insertUpload } from '@/db/queries/uploads';
+import { listLetters } from '@/db/queries/outbox';
 import { countWaiting } from '@/db/queries/results';
 import { findLatestJob } from '@/db/queries/jobs';
 import { listProblems } from '@/db/queries/problems';
@@ -55,6 +56,9 @@ describe('runs', () => {
       done: 107,
       total: 107,
     });
+    const [letter, ...more] = await listLetters(database.db, of.office);
+    expect(letter).toMatchObject({ kind: 'run finished', state: 'waiting' });
+    expect(more).toEqual([]);
     expect(logged).toEqual([]);
   });
 

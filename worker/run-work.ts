@@ -2,6 +2,7 @@
 import { finishJob, leaseJob, updateJobProgress, type JobRecord } from '@/db/queries/jobs';
 import { countRevisionVerdicts, findRevisionById, updateRevisionState } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
+import { putRunFinished } from '@/db/queries/run-letter';
 import type { Settings } from '@/lib/model/settings';
 import { RunMeter } from './progress';
 import type { QueueOptions } from './queue';
@@ -125,22 +126,36 @@ export class RunWork {
   /** Records how the run ended. */
   async finish(): Promise<void> {
     const { database, file, pools } = this.options;
-    const { db, raw } = database;
-    const { waiting } = countWaiting(raw, this.revision);
+    const { waiting } = countWaiting(database.raw, this.revision);
     const kept = `${await this.keptWords()} are kept`;
     if (waiting === 0 && this.failure === null) {
       const task: FailuresTask = { file, office: this.office, revision: this.revision };
       await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'tellFailures' });
-      await updateRevisionState(db, this.office, this.revision, ['running'], 'run');
-      await finishJob(db, this.job.id, 'done');
+      await this.end('done', 'run');
     } else if (this.failure !== null) {
       const reason = `The run stopped before it finished. ${kept}. Start it again to do the rest. (${this.failure})`;
-      await updateRevisionState(db, this.office, this.revision, ['running'], 'failed', { reason });
-      await finishJob(db, this.job.id, 'failed', this.failure);
+      await this.end('failed', 'failed', reason);
     } else {
-      await updateRevisionState(db, this.office, this.revision, ['running'], 'stopped', { reason: `Stopped. ${kept}.` });
-      await finishJob(db, this.job.id, 'stopped');
+      await this.end('stopped', 'stopped', `Stopped. ${kept}.`);
     }
+  }
+
+  /** Job, revision and the letter to whoever started it, all or none; no letter where a person stopped it. */
+  private async end(job: 'done' | 'stopped' | 'failed', revision: 'run' | 'stopped' | 'failed', reason?: string): Promise<void> {
+    const { db } = this.options.database;
+    const counts = await countRevisionVerdicts(db, this.office, this.revision);
+    await db.transaction().execute(async (within) => {
+      const more = reason === undefined ? {} : { reason };
+      await updateRevisionState(within, this.office, this.revision, ['running'], revision, more);
+      const ended = await finishJob(within, this.job.id, job, this.failure);
+      if (!ended || job === 'stopped' || this.job.person === null) return;
+      await putRunFinished(within, this.office, {
+        revision: this.revision,
+        person: this.job.person,
+        counts,
+        stopped: job === 'failed',
+      });
+    });
   }
 
   /** "140 of 1,000 frames": those of the sheets, of which several may be the same and are solved once. */
