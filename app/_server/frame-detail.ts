@@ -1,6 +1,7 @@
 import 'server-only';
 import type { CertificateData } from '@/components/certificate/certificate';
 import type { DrawingData } from '@/lib/drawing/drawing-data';
+import { workingLines } from '@/lib/checks/working-lines';
 import type { WorkingLine } from '@/lib/checks/working-parts';
 import { db } from '@/db/client';
 import { findFrame } from '@/db/queries/frames';
@@ -9,11 +10,11 @@ import { certificateLines } from '@/lib/analysis/certificate-lines';
 import { notFound } from '@/lib/api/error';
 import { frameNumberInput } from '@/lib/api/inputs';
 import type { MemberGoverning } from '@/lib/results/member-results';
-import { governingIndex } from '@/lib/results/verdict';
+import { checkPlace } from '@/lib/results/check-place';
+import { worstFirst } from '@/lib/results/worst-first';
 import type { Certificate, Check, Verdict } from '@/lib/results/result';
 import { drawingData } from '@/lib/drawing/frame-drawing-data';
 import { settingLines } from './setting-lines';
-import { workingLines } from './working-lines';
 
 /** A check as the frame page lists it, with its calculation. */
 export interface CheckLine {
@@ -115,7 +116,7 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
   function line(check: Check, index: number): CheckLine {
     return {
       id: String(index),
-      where: whereOf(check),
+      where: checkPlace(frame!, check),
       check: check.check,
       combination: check.combination,
       at: check.at,
@@ -130,21 +131,4 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
       working: workingLines(check, revision),
     };
   }
-
-  function whereOf({ subjectKind, subject }: Check): string {
-    if (subjectKind === 'frame' || subject === null) return 'frame';
-    if (subjectKind === 'node') return `node ${subject}`;
-    if (subjectKind === 'spread') return `between ${subject}`;
-    const member = frame!.members.find((one) => (subjectKind === 'span' ? one.span === subject : one.id === subject));
-    const role = member?.role ?? null;
-    return role === null || role === 'other' || subject.toLowerCase() === role ? subject : `${role} ${subject}`;
-  }
-}
-
-/** By verdict, then by largest ratio, as the governing check is chosen. */
-function worstFirst(checks: readonly Check[]): Check[] {
-  const left = [...checks];
-  const sorted: Check[] = [];
-  while (left.length > 0) sorted.push(...left.splice(governingIndex(left), 1));
-  return sorted;
 }

@@ -4,7 +4,7 @@ import type { Verdict } from '@/lib/results/result';
 import { formatRatio } from '@/lib/units/format';
 import { VerdictMark } from '../ui/verdict-mark';
 import { useWidth } from '../ui/use-width';
-import { ticks, tickText } from './axis';
+import { ticks, tickText } from '@/lib/drawing/axis';
 import type { RatioPoint } from './charts-data';
 
 interface RatioAgainstProps {

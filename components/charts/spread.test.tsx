@@ -1,19 +1,20 @@
 import { render, screen } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { RatioAgainst } from './ratio-against';
-import { Spread, spread } from './spread';
-import { ticks, tickText } from './axis';
+import { spreadBins } from '@/lib/drawing/spread-bins';
+import { Spread } from './spread';
+import { ticks, tickText } from '@/lib/drawing/axis';
 
 describe('the spread of ratios', () => {
   it('counts a ratio of exactly 1.00 as near and one above it as over', () => {
-    const { bins } = spread([1, 1.0001, 0.9, 0.8999], 0.9);
+    const { bins } = spreadBins([1, 1.0001, 0.9, 0.8999], 0.9);
     const count = (verdict: string) => bins.filter((bin) => bin.verdict === verdict).reduce((sum, bin) => sum + bin.count, 0);
     expect([count('within'), count('near'), count('over')]).toEqual([1, 2, 1]);
   });
 
   it('keeps every frame, and never lets a step straddle a near limit of its own', () => {
     const ratios = Array.from({ length: 200 }, (_, i) => ((i * 7919) % 1900) / 1000);
-    const { bins } = spread(ratios, 0.885);
+    const { bins } = spreadBins(ratios, 0.885);
     expect(bins.reduce((sum, bin) => sum + bin.count, 0)).toBe(200);
     for (const bin of bins) expect(bin.from < 0.885 && bin.to > 0.885).toBe(false);
     const over = bins.filter((bin) => bin.verdict === 'over').reduce((sum, bin) => sum + bin.count, 0);

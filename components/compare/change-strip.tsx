@@ -3,8 +3,8 @@ import { useRouter } from 'next/navigation';
 import { useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { formatRatio } from '@/lib/units/format';
 import type { Verdict } from '@/lib/results/result';
-import { columnAt, columnX, layOutStrip, type StripLayout } from '../strip/strip-layout';
-import { stripTop } from '../strip/strip-data';
+import { columnAt, columnX, layOutStrip, type StripLayout } from '@/lib/drawing/strip-layout';
+import { stripTop } from '@/lib/drawing/strip-data';
 import { useWidth } from '../ui/use-width';
 import { VerdictMark } from '../ui/verdict-mark';
 

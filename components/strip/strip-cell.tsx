@@ -1,6 +1,6 @@
 import { memo } from 'react';
 import { verdictClass } from '../ui/verdict-mark';
-import { cellHeight, type StripFrame } from './strip-data';
+import { cellHeight, type StripFrame } from '@/lib/drawing/strip-data';
 
 interface StripCellProps {
   readonly frame: StripFrame;

@@ -1,7 +1,7 @@
 'use client';
 import type { Verdict } from '@/lib/results/result';
 import { VerdictMark } from '../ui/verdict-mark';
-import { verdictOrder, type VerdictCounts } from './strip-data';
+import { verdictOrder, type VerdictCounts } from '@/lib/drawing/strip-data';
 
 interface StripLegendProps {
   readonly counts: VerdictCounts;

@@ -2,7 +2,7 @@ import Link from 'next/link';
 import type { RefObject } from 'react';
 import { RatioText } from '../ui/ratio-text';
 import { VerdictMark } from '../ui/verdict-mark';
-import type { StripFrame } from './strip-data';
+import type { StripFrame } from '@/lib/drawing/strip-data';
 
 interface StripReadoutProps {
   readonly frame: StripFrame | undefined;

@@ -2,8 +2,8 @@ import { memo } from 'react';
 import { formatRatio } from '@/lib/units/format';
 import type { Verdict } from '@/lib/results/result';
 import { StripCell } from './strip-cell';
-import { countVerdicts, stripTop, type StripFrame } from './strip-data';
-import { columnX, type StripLayout } from './strip-layout';
+import { countVerdicts, stripTop, type StripFrame } from '@/lib/drawing/strip-data';
+import { columnX, type StripLayout } from '@/lib/drawing/strip-layout';
 
 interface StripRowProps {
   readonly frames: readonly StripFrame[];

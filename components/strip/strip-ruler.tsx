@@ -1,5 +1,5 @@
 import { VerdictMark } from '../ui/verdict-mark';
-import { columnX, type StripLayout } from './strip-layout';
+import { columnX, type StripLayout } from '@/lib/drawing/strip-layout';
 
 /** A tick a frame, longer at five, a number at ten; and the marks that head the row tallies. */
 export function StripRuler({ layout }: { readonly layout: StripLayout }) {

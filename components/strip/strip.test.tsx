@@ -2,8 +2,8 @@ import { fireEvent, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import { Strip } from './strip';
-import { cellHeight, countVerdicts, type StripFrame } from './strip-data';
-import { columnAt, columnX, layOutStrip } from './strip-layout';
+import { cellHeight, countVerdicts, type StripFrame } from '@/lib/drawing/strip-data';
+import { columnAt, columnX, layOutStrip } from '@/lib/drawing/strip-layout';
 
 const verdictOf = (ratio: number) => (ratio > 1 ? 'over' : ratio >= 0.9 ? 'near' : 'within');
 const frame = (index: number, ratio: number | null, more: Partial<StripFrame> = {}): StripFrame => ({

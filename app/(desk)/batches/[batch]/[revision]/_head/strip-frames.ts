@@ -1,4 +1,4 @@
-import type { StripFrame } from '@/components/strip/strip-data';
+import type { StripFrame } from '@/lib/drawing/strip-data';
 import type { Verdict } from '@/lib/results/result';
 
 /** A frame as the summary route gives it. */

@@ -1,13 +1,17 @@
-import 'server-only';
-import type { WorkingLine } from '@/lib/checks/working-parts';
-import type { RevisionRecord } from '@/db/queries/revisions';
 import { workingOf } from '@/lib/checks/working';
 import { workingFormat } from '@/lib/checks/working-format';
+import type { WorkingLine } from '@/lib/checks/working-parts';
+import type { SettingOrigins, Settings } from '@/lib/model/settings';
 import type { Check } from '@/lib/results/result';
 
+interface WorkedUnder {
+  readonly settings: Settings | null;
+  readonly origins: SettingOrigins | null;
+}
+
 /** The calculation of a check in the batch's units, the limit's line closed by where its setting was given. */
-export function workingLines(check: Check, { units, settings, origins }: RevisionRecord): WorkingLine[] {
-  const lines = workingOf(check, workingFormat(units, settings?.nearLimit ?? 0.9));
+export function workingLines(check: Check, { settings, origins }: WorkedUnder): WorkingLine[] {
+  const lines = workingOf(check, workingFormat(settings?.units ?? 'metric', settings?.nearLimit ?? 0.9));
   const given = check.quantity === 'stress' ? origins?.stressFactor : undefined;
   if (given === undefined) return [...lines];
   const source = given.cell ?? (given.source === 'default' ? 'taken as default' : `from the ${given.source}`);
