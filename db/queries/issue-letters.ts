@@ -6,7 +6,7 @@ import type { AboutIssue } from '@/lib/mail/message';
 
 export function aboutIssue({ project, batch, revision, id, number }: IssueRecord): AboutIssue {
   const name = project.number === null || project.number === '' ? project.name : `${project.number} ${project.name}`;
-  return { project: name, batch: batch.id, batchName: batch.name, letter: revision.letter, issue: id, number };
+  return { project: name, batchName: batch.name, letter: revision.letter, issue: id, number };
 }
 
 /** Tells the clients of an issue that they have it. @param only these of them: sent to later */
