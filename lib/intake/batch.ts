@@ -1,5 +1,6 @@
 import type { Family } from '@/lib/intake/families/family';
 import type { Place, ProblemList } from '@/lib/intake/problem-list';
+import type { PartOrigins } from '@/lib/intake/own/part-origins';
 import type { Reader, Reading } from '@/lib/intake/reader';
 import type { LoadCases } from '@/lib/intake/sheets/load-cases';
 import type { Materials } from '@/lib/intake/sheets/materials';
@@ -53,6 +54,7 @@ export interface Batch {
   readonly sections: Sections;
   readonly materials: Materials;
   readonly cases: LoadCases;
+  readonly partOrigins: PartOrigins;
   /** The office's own limits on movement, where the sheets give none. */
   readonly officeLimits: readonly OfficeLimit[];
 }

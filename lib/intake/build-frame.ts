@@ -82,6 +82,7 @@ export class FrameBuilder {
     const { list: combinations, notChecked } = this.combinations.for(entry, draft.cases);
     draft.combinationNames.push(...combinations.map((each) => each.name));
     const limits = this.limits.for(draft);
+    if (!batch.problems.stopped.has(entry.id)) batch.partOrigins.see(draft);
     const frame: Frame = {
       id: entry.id,
       title: entry.title,

@@ -1,4 +1,5 @@
 /** What reading a set of files gives: the door between sheets and everything after. */
+import type { PartOrigin } from '@/lib/intake/own/own-thing';
 import type { Frame } from '@/lib/model/frame';
 import type { SettingOrigins, Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
@@ -64,4 +65,6 @@ export interface Intake {
   readonly problems: readonly Problem[];
   readonly sheets: readonly SheetRead[];
   readonly rows: readonly InputRow[];
+  /** Sections and materials of the frames that can run, in order of first use. */
+  readonly parts?: readonly PartOrigin[];
 }

@@ -6,6 +6,10 @@ import type { RawSheet } from '@/lib/intake/files/raw-sheet';
 import { familiesInUse, FrameList } from '@/lib/intake/frames';
 import { nearest } from '@/lib/intake/distance';
 import type { FrameRead, InputIdentity, Intake, SheetRead } from '@/lib/intake/intake';
+import { isOfficePart, officeSheetKind, ownSheets } from '@/lib/intake/own/own-sheets';
+import type { OwnThing } from '@/lib/intake/own/own-thing';
+import { PartOrigins } from '@/lib/intake/own/part-origins';
+import { readOwn } from '@/lib/intake/own/read-own';
 import { ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, Reader } from '@/lib/intake/reader';
 import { readTable } from '@/lib/intake/read-table';
@@ -36,6 +40,8 @@ export interface IntakeOptions {
   readonly office?: Partial<Settings>;
   /** The office's own limits on movement, where the sheets give none. */
   readonly officeLimits?: readonly OfficeLimit[];
+  /** The office's own sections and materials: the sheets' come before them, the standard ranges behind. */
+  readonly own?: readonly OwnThing[];
   /** Told of every frame whose rows make sense by themselves, with the rows its members stand on (lib/changes). */
   readonly onFrame?: (seen: FrameSeen) => void;
 }
@@ -73,8 +79,11 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
   // a file that could not be read may hold the sheet that seems missing
   if (!raw.problems.some((problem) => problem.severity === 'error')) tellMissingSheets(tables, raw.sheets, problems);
 
-  const sections = new Sections(tables.get('Sections'), reader, problems);
-  const materials = new Materials(tables.get('Materials'), reader, problems);
+  const held = (kind: 'section' | 'material') => raw.sheets.filter(({ name }) => officeSheetKind(name) === kind);
+  const own = readOwn({ section: held('section'), material: held('material') }, options.own ?? [], system, reader, problems);
+  const sections = new Sections(tables.get('Sections'), reader, problems, { own: own.sections });
+  const materials = new Materials(tables.get('Materials'), reader, problems, own.materials);
+  const partOrigins = new PartOrigins(own.sections);
   const families = familiesInUse(tables, system, reader, problems);
   const frames = new FrameList(tables, families, reader, problems);
   frames.read(new VariantReader(families, sections, materials, reader, problems));
@@ -83,19 +92,29 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
   const cases = new LoadCases(tables.get('Load cases'), loads, known, [...families.values()], reader, problems);
   const batch: Batch = {
     problems, reader, system, settings: setup.settings, origins: setup.origins, settingPlaces: setup.places, tables, families,
-    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases, officeLimits: options.officeLimits ?? [],
+    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases, partOrigins, officeLimits: options.officeLimits ?? [],
   }; // prettier-ignore
 
   const read = readFrames(batch, options.onFrame);
   const { stopped } = problems;
+  const parts = raw.sheets.flatMap((sheet) => sheet.parts);
+  const taken = [...own.sections.taken, ...own.materials.taken];
+  const added = ownSheets(taken, 1 + Math.max(-1, ...parts.map(({ order }) => order)), parts.map(({ name }) => name)); // prettier-ignore
+  const sheets = [...raw.sheets, ...added];
+  const kinds = added.map((sheet) => {
+    const name = officeSheetKind(sheet.name) === 'section' ? 'Sections' : 'Materials';
+    return readTable(sheet, sheetDefinitions.get(name)!, system, new ProblemList());
+  });
   return {
     input: raw.identity,
     settings: setup.settings,
     origins: setup.origins,
     frames: read.map((each) => (problems.stopsAll || stopped.has(each.id) ? { id: each.id, frame: null } : each)),
-    problems: problems.list(),
-    sheets: sheetsRead(raw.sheets, tables),
-    rows: inputRows(raw.sheets),
+    // what was said of the office's own when it was saved is not the sender's
+    problems: problems.list().filter(({ severity, file, sheet }) => severity === 'error' || !isOfficePart({ file: file ?? '', name: sheet ?? '' })), // prettier-ignore
+    sheets: sheetsRead(sheets, [...tables.values(), ...own.tables, ...kinds]),
+    rows: inputRows(sheets),
+    parts: partOrigins.list(),
   };
 }
 
@@ -141,6 +160,7 @@ function tellUnknownMaterials(batch: Batch): void {
 function nameSheets(sheets: readonly RawSheet[], problems: ProblemList): Map<SheetName, RawSheet> {
   const named = new Map<SheetName, RawSheet>();
   for (const sheet of sheets) {
+    if (officeSheetKind(sheet.name) !== null) continue;
     const name = byKey.get(sheetKey(sheet.name));
     if (name) {
       const before = named.get(name);
@@ -174,9 +194,9 @@ function tellMissingSheets(tables: ReadonlyMap<SheetName, Table>, sheets: readon
   }
 }
 
-function sheetsRead(sheets: readonly RawSheet[], tables: ReadonlyMap<SheetName, Table>): SheetRead[] {
+function sheetsRead(sheets: readonly RawSheet[], tables: readonly Table[]): SheetRead[] {
   const parts = new Map<RawSheet['parts'][number], Part>();
-  for (const table of tables.values()) for (const part of table.parts) parts.set(part.raw, part);
+  for (const table of tables) for (const part of table.parts) parts.set(part.raw, part);
   return sheets
     .flatMap((sheet) => sheet.parts)
     .sort((a, b) => a.order - b.order)

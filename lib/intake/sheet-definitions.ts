@@ -43,10 +43,11 @@ const definitions: readonly SheetDefinition[] = [
     section: null, designation: null, shape: null, h: 'dimension', b: 'dimension', tw: 'dimension', tf: 'dimension',
     r: 'dimension', t: 'dimension', d: 'dimension', A: 'area', I: 'secondMoment', W: 'modulus', 'W top': 'modulus',
     'W bottom': 'modulus', depth: 'dimension', Av: 'area', Wpl: 'modulus', 'I minor': 'secondMoment', 'W minor': 'modulus',
-    'Wpl minor': 'modulus', It: 'secondMoment', Iw: 'warping', material: null,
+    'Wpl minor': 'modulus', It: 'secondMoment', Iw: 'warping', material: null, published: null, source: null,
   }), // prettier-ignore
   define('Materials', ['material', ['grade', 'E']], {
     material: null, grade: null, E: 'stress', fy: 'stress', fu: 'stress', density: 'density', expansion: 'expansion', G: 'stress',
+    'fy by thickness': null, source: null,
   }), // prettier-ignore
   define('Supports', ['frame', 'node'], {
     frame: null, node: null, ux: 'springTranslation', uy: 'springTranslation', rz: 'springRotation', angle: 'angle',

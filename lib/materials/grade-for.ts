@@ -54,7 +54,10 @@ export function gradeFor(
 /** 0.45359237 kg ÷ (0.3048 m)³. */
 const POUND_PER_CUBIC_FOOT = 0.45359237 / 0.3048 ** 3;
 
-function strength(steps: Steps, thickness_m: number | null): number | null {
+/**
+ * Strength in Pa of a part of this thickness in m; null above the last step, and where the thickness is not known and matters.
+ */
+export function strength(steps: Steps, thickness_m: number | null): number | null {
   if (thickness_m === null) return steps.length === 1 ? (steps[0]?.[1] ?? 0) * 1e6 : null;
   // A thickness that was read in mm and kept in m comes back a rounding away from its step.
   const t = thickness_m * 1000 * (1 - 1e-12);

@@ -137,6 +137,11 @@ export const unknownSection = (name: string, near: string | null): string =>
   `section ${name} is neither in Sections nor a designation of the library.${hint(near)}`;
 export const unknownMaterial = (name: string, near: string | null): string =>
   `material ${name} is neither in Materials nor a grade that is held.${hint(near)}`;
+export const retired = (name: string): string =>
+  `${name} was one of the office’s own and is no longer offered. Name another, or give its figures in the sheets`;
+export const isStandard = (held: string): string =>
+  `${held} is a standard one. Give the office’s own another name, so that nobody takes the one for the other`;
+export const badName = (): string => 'a name has at most 60 characters, and none of { } *';
 export const materialMissing = (): string => 'no material is given here, in Sections or in Setup. Give one';
 export const turnedNeedsMinor = (section: string): string =>
   `a turned member bends about the section's minor axis: section ${section} needs I minor`;
@@ -168,6 +173,11 @@ export const unknownDesignation = (name: string, near: string | null): string =>
   `${name} is no designation of the library, and neither shape nor properties are given.${hint(near)}`;
 export const designationTaken = (note: string): string => `taken as ${note}`;
 export const dimensionMissing = (shape: string, dimension: string): string => `shape ${shape} needs ${dimension}`;
+export const publishedFar = (name: string, share: number): string =>
+  `${name} is ${figure(Math.abs(share) * 100)} % ${share > 0 ? 'above' : 'below'} what the dimensions give. Is it in its unit, and of this section?`;
+export const yieldSteps = (found: string): string =>
+  `“${found}” is no yield strength by thickness. Write it like “355 MPa to 16 mm; 345 MPa to 40 mm”, thinnest first`;
+export const yieldTwice = (): string => 'fy and fy by thickness are both given. Keep one, so that it is plain which holds';
 export const dimensionUnused = (dimension: string): string => `${dimension} is not used for a section given this way`;
 export const impossibleShape = (why: string): string => `these dimensions make no section: ${why}`;
 export const propertyMissing = (name: string): string => `a section given by its properties needs ${name}`;

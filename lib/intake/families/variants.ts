@@ -161,6 +161,12 @@ export class VariantReader {
     }
     const found = parameter.quantity === 'section' ? this.sections.find(text) : this.materials.find(text);
     if (!('suggestion' in found)) return text;
+    if (found.retired) {
+      return tell({
+        code: parameter.quantity === 'section' ? 'unknown-section' : 'unknown-material',
+        message: say.retired(text),
+      });
+    }
     return parameter.quantity === 'section'
       ? tell({ code: 'unknown-section', message: say.unknownSection(text, found.suggestion) })
       : tell({ code: 'unknown-material', message: say.unknownMaterial(text, found.suggestion) });

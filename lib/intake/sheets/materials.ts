@@ -4,7 +4,10 @@ import { oneRowAKey } from '@/lib/intake/keyed-rows';
 import type { Entry, ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
 import { type Row, rawCell, type Table } from '@/lib/intake/table';
-import { gradeFor, type GradeProperties } from '@/lib/materials/grade-for';
+import type { Offered } from '@/lib/intake/own/offered';
+import { gradeFor, type GradeProperties, strength } from '@/lib/materials/grade-for';
+import type { Steps } from '@/lib/materials/grades';
+import { readYieldSteps } from '@/lib/materials/yield-steps';
 import type { Material, PropertySource, Shape } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
 
@@ -14,10 +17,13 @@ const columns = {
 type Property = keyof typeof columns;
 const properties = Object.keys(columns) as Property[];
 
-interface MaterialRow {
+export interface MaterialRow {
   readonly name: string;
+  /** Of the Materials sheet or of the office's own; null = a grade by its name. */
   readonly row: Row | null;
   readonly grade: string | null;
+  /** Yield strength by thickness; null = a grade's, or typed. */
+  readonly steps: Steps | null;
   readonly typed: Partial<Record<Property, number>>;
 }
 
@@ -28,13 +34,26 @@ export interface FoundMaterial {
   readonly entries: readonly Entry[];
 }
 
-/** The batch's materials: those of the Materials sheet, else grades by their name. */
+/** What stands for a material that is nowhere. */
+export interface UnknownMaterial {
+  readonly suggestion: string | null;
+  /** It was one of the office's own, and is no longer offered. */
+  readonly retired?: boolean;
+}
+
+/** The batch's materials: those of the Materials sheet, else the office's own, else grades by their name. */
 export class Materials {
   private readonly bySheet = new Map<string, FoundMaterial>();
-  private readonly grades = new Map<string, FoundMaterial | { suggestion: string | null }>();
+  private readonly grades = new Map<string, FoundMaterial | UnknownMaterial>();
   private readonly resolved = new Map<MaterialRow, Map<string, Material>>();
 
-  constructor(table: Table | undefined, reader: Reader, problems: ProblemList) {
+  /** @param own the office's own */
+  constructor(
+    table: Table | undefined,
+    reader: Reader,
+    problems: ProblemList,
+    private readonly own?: Offered<MaterialRow>,
+  ) {
     const ided = (row: Row): { id: string; key: string } | undefined => {
       if (!reader.keeps(row, forNobody)) return undefined;
       const id = reader.needId(row, 'material', forNobody);
@@ -50,19 +69,31 @@ export class Materials {
       if (!same) conflicts.set(key, [...(conflicts.get(key) ?? []), ...told.entries]);
     });
     for (const { row, id, key } of kept) {
-      const { value, entries } = problems.record(() => readMaterial(row, id, reader));
+      const { value, entries } = problems.record(() => readMaterial(row, id, reader, own));
       this.bySheet.set(key, { source: value ?? null, row, entries: [...entries, ...(conflicts.get(key) ?? [])] });
     }
   }
 
-  find(name: string): FoundMaterial | { readonly suggestion: string | null } {
+  /** Every row of the Materials sheet, once a name, in order. */
+  rows(): readonly (readonly [name: string, FoundMaterial])[] {
+    return [...this.bySheet];
+  }
+
+  find(name: string): FoundMaterial | UnknownMaterial {
     const own = this.bySheet.get(idKey(name));
     if (own) return own;
     let found = this.grades.get(name);
     if (!found) {
+      const office = this.own?.take(name);
       const grade = gradeFor(name, null);
-      if ('properties' in grade) found = { source: { name, row: null, grade: name, typed: {} }, row: null, entries: [] };
-      else found = { suggestion: nearestAny(idKey(name), [...this.bySheet.keys()].map((key) => [key, key] as const)) ?? grade.suggestion }; // prettier-ignore
+      if (office) found = { source: office.value, row: office.row, entries: office.entries };
+      else if ('properties' in grade)
+        found = { source: { name, row: null, grade: name, steps: null, typed: {} }, row: null, entries: [] }; // prettier-ignore
+      else if (this.own?.isRetired(name)) found = { suggestion: null, retired: true };
+      else {
+        const near = [...this.bySheet.keys(), ...(this.own?.names() ?? [])].map((key) => [idKey(key), key] as const);
+        found = { suggestion: nearestAny(idKey(name), near) ?? grade.suggestion };
+      }
       this.grades.set(name, found);
     }
     return found;
@@ -87,12 +118,15 @@ export class Materials {
   }
 }
 
-function materialOf({ name, grade, typed }: MaterialRow, thickness_m: number | null, shape: Shape | null): Material {
+function materialOf({ name, grade, typed, steps }: MaterialRow, thickness_m: number | null, shape: Shape | null): Material {
   const found = grade === null ? null : gradeFor(grade, thickness_m, shape);
   const held: GradeProperties | null = found && 'properties' in found ? found.properties : null;
   const sources: Partial<Record<Property, PropertySource>> = {};
   const value = (key: Property): number | null => {
-    const own = typed[key];
+    const stepped = key === 'fy_Pa' && steps !== null ? strength(steps, thickness_m) : undefined;
+    // thicker than the last step: no strength is known, whatever a grade would say
+    if (stepped === null) return null;
+    const own = stepped ?? typed[key];
     if (own !== undefined) sources[key] = 'typed';
     else if (held && held[key] !== null) sources[key] = 'library';
     return own ?? held?.[key] ?? null;
@@ -113,10 +147,17 @@ function materialOf({ name, grade, typed }: MaterialRow, thickness_m: number | n
   };
 }
 
-function readMaterial(row: Row, name: string, reader: Reader): MaterialRow | undefined {
+function readMaterial(row: Row, name: string, reader: Reader, own: Offered<MaterialRow> | undefined): MaterialRow | undefined {
   let sound = !reader.faulty(row, forNobody);
   const grade = reader.id(row, 'grade', forNobody);
   if (grade === undefined) sound = false;
+  const stepText = reader.text(row, 'fy by thickness', forNobody);
+  const steps = stepText ? readYieldSteps(stepText) : null;
+  if (stepText === undefined) sound = false;
+  else if (stepText !== null && steps === null) {
+    reader.tell(row, 'fy by thickness', { code: 'not-a-number', message: say.yieldSteps(stepText) }, forNobody);
+    sound = false;
+  }
   const typed: Partial<Record<Property, number>> = {};
   for (const key of properties) {
     const value = reader.number(row, columns[key], forNobody);
@@ -130,7 +171,19 @@ function readMaterial(row: Row, name: string, reader: Reader): MaterialRow | und
       }
     }
   }
-  if (grade) {
+  if (steps !== null && typed.fy_Pa !== undefined) {
+    reader.tell(row, 'fy by thickness', { code: 'conflicting-row', message: say.yieldTwice() }, forNobody);
+    sound = false;
+  }
+  const office = grade ? own?.take(grade) : null;
+  if (office && sound) {
+    suspect(row, typed, reader);
+    const { value } = office;
+    if (!value) return undefined;
+    const kept = typed.fy_Pa === undefined ? (steps ?? value.steps) : null;
+    return { name, row, grade: value.grade, steps: kept, typed: { ...value.typed, ...typed } };
+  }
+  if (grade && !office) {
     const found = gradeFor(grade, null);
     if (!('properties' in found)) {
       reader.tell(row, 'grade', { code: 'unknown-grade', message: say.unknownGrade(grade, found.suggestion) }, forNobody);
@@ -141,7 +194,7 @@ function readMaterial(row: Row, name: string, reader: Reader): MaterialRow | und
     sound = false;
   }
   suspect(row, typed, reader);
-  return sound && grade !== undefined ? { name, row, grade, typed } : undefined;
+  return sound && grade !== undefined ? { name, row, grade, steps, typed } : undefined;
 }
 
 function suspect(row: Row, typed: Partial<Record<Property, number>>, reader: Reader): void {

@@ -1,5 +1,6 @@
 import type { Draft } from '@/lib/intake/draft';
 import { forNobody } from '@/lib/intake/reader';
+import type { UnknownMaterial } from '@/lib/intake/sheets/materials';
 import { type Row, rawCell } from '@/lib/intake/table';
 import type { Section } from '@/lib/model/frame';
 import * as say from '@/lib/problems/wording';
@@ -16,9 +17,9 @@ export function resolveMaterial(
   const { reader, settings, settingPlaces, problems } = draft.batch;
   const own = reader.id(row, 'material', draft.reading);
   if (own === undefined) return undefined;
-  const unknown = (name: string, suggestion: string | null): { code: 'unknown-material'; message: string } => ({
+  const unknown = (name: string, { suggestion, retired }: UnknownMaterial): { code: 'unknown-material'; message: string } => ({
     code: 'unknown-material',
-    message: say.unknownMaterial(name, suggestion),
+    message: retired ? say.retired(name) : say.unknownMaterial(name, suggestion),
   });
   if (own !== null)
     return materialIndex(draft, own, found.section, (s) => reader.tell(row, 'material', unknown(own, s), draft.reading));
@@ -46,12 +47,12 @@ function materialIndex(
   draft: Draft,
   name: string,
   section: Section,
-  tell: (suggestion: string | null) => void,
+  tell: (unknown: UnknownMaterial) => void,
 ): number | undefined {
   const { materials, problems } = draft.batch;
   const found = materials.find(name);
   if ('suggestion' in found) {
-    tell(found.suggestion);
+    tell(found);
     return undefined;
   }
   for (const entry of found.entries) problems.touch(entry, draft.entry.id);

@@ -126,7 +126,8 @@ function sectionOf(draft: Draft, row: Row): Found | undefined {
   }
   const found = sections.find(name);
   if ('suggestion' in found) {
-    reader.tell(row, 'section', { code: 'unknown-section', message: say.unknownSection(name, found.suggestion) }, reading);
+    const message = found.retired ? say.retired(name) : say.unknownSection(name, found.suggestion);
+    reader.tell(row, 'section', { code: 'unknown-section', message }, reading);
     return undefined;
   }
   for (const entry of found.entries) problems.touch(entry, draft.entry.id);

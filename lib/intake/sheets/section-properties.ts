@@ -9,9 +9,14 @@ const columns = {
 } as const; // prettier-ignore
 type Typed = keyof typeof columns;
 
-/** A section given by its properties. W from I and depth only if neither W is given: "taken as symmetric". */
-export function readProperties(row: Row, name: string, reader: Reader): Section | undefined {
-  const values: Partial<Record<Typed | 'W', number>> = {};
+/** Properties that a row may type, with their columns. */
+export const propertyColumns = Object.entries(columns) as readonly (readonly [Typed, string])[];
+
+type Values = Partial<Record<Typed | 'W', number>>;
+
+/** The properties that a row types, in SI; undefined where a cell is wrong (told). */
+function typedValues(row: Row, reader: Reader): Values | undefined {
+  const values: Values = {};
   let sound = true;
   const take = (key: Typed | 'W', column: string): void => {
     const value = reader.number(row, column, forNobody);
@@ -32,7 +37,53 @@ export function readProperties(row: Row, name: string, reader: Reader): Section 
   };
   for (const key of Object.keys(columns) as Typed[]) take(key, columns[key]);
   take('W', 'W');
-  if (!sound) return undefined;
+  return sound ? values : undefined;
+}
+
+/** Published beside derived: further apart is more than rounding. */
+const mostApart = 0.1;
+
+/** A section of a shape with published properties: these are used as given, the others as the dimensions give them. */
+export function withPublished(row: Row, section: Section, reader: Reader): Section | undefined {
+  const values = typedValues(row, reader);
+  if (!values) return undefined;
+  const properties: Record<string, number | null> = { ...section.properties };
+  const sources: Partial<Record<keyof SectionProperties, PropertySource>> = { ...section.sources };
+  const put = (key: Typed, value: number | undefined, column: string): void => {
+    if (value === undefined) return;
+    const before = section.properties[key];
+    if (before !== null && Math.abs(value / before - 1) > mostApart) {
+      const message = say.publishedFar(column, value / before - 1);
+      reader.tell(row, column, { code: 'suspect-unit', message }, forNobody);
+    }
+    properties[key] = value;
+    sources[key] = 'typed';
+  };
+  for (const key of Object.keys(columns) as Typed[]) {
+    // of a hollow section t is the wall, which its shape has read
+    if (key === 't_m' && (section.shape === 'rhs' || section.shape === 'chs')) continue;
+    const ofW = key === 'Wtop_m3' || key === 'Wbottom_m3';
+    const column = ofW && values[key] === undefined ? 'W' : columns[key];
+    put(key, values[key] ?? (ofW ? values.W : undefined), column);
+  }
+  return { ...section, properties: properties as unknown as SectionProperties, sources };
+}
+
+/**
+ * A section given by its properties. W from I and depth only if neither W is given: "taken as symmetric".
+ *
+ * @param outer depth and width in m of a published section whose shape is not given
+ */
+export function readProperties(
+  row: Row,
+  name: string,
+  reader: Reader,
+  outer: { readonly h?: number; readonly b?: number } = {},
+): Section | undefined {
+  const values = typedValues(row, reader);
+  if (!values) return undefined;
+  if (outer.h !== undefined) values.depth_m ??= outer.h;
+  let sound = true;
   for (const key of ['A_m2', 'I_m4'] as const) {
     if (values[key] !== undefined) continue;
     reader.tell(row, columns[key], { code: 'not-a-number', message: say.propertyMissing(columns[key]) }, forNobody);
@@ -44,6 +95,7 @@ export function readProperties(row: Row, name: string, reader: Reader): Section 
   for (const key of Object.keys(columns) as Typed[]) if (values[key] !== undefined) sources[key] = 'typed';
   let top = values.Wtop_m3 ?? values.W;
   let bottom = values.Wbottom_m3 ?? values.W;
+  if (outer.b !== undefined) sources.width_m = 'typed';
   if (values.W !== undefined) sources.Wtop_m3 = sources.Wbottom_m3 = 'typed';
   if (top === undefined && bottom === undefined && depth !== undefined) {
     top = bottom = (2 * I) / depth;
@@ -57,7 +109,7 @@ export function readProperties(row: Row, name: string, reader: Reader): Section 
     Wtop_m3: top ?? null,
     Wbottom_m3: bottom ?? null,
     depth_m: depth ?? null,
-    width_m: null,
+    width_m: outer.b ?? null,
     AvTyped_m2: values.AvTyped_m2 ?? null,
     AvPeak_m2: null,
     AvPeakTurned_m2: null,
