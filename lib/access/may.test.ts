@@ -3,14 +3,16 @@ import { acts, homeOf, may, personRoles } from './may';
 
 const of = (role: (typeof personRoles)[number], office = 1) => ({ role, office });
 
+const clientsOwn: readonly string[] = ['read what was issued', 'ask about an issue'];
+
 describe('who may do what', () => {
   it('lets nobody touch a thing of another office, whatever the role and the act', () => {
     for (const role of personRoles)
       for (const act of acts) expect(may(of(role), act, { office: 2 }), `${role}: ${act}`).toBe(false);
   });
 
-  it('gives the lead everything in the office but the client’s own page', () => {
-    for (const act of acts) expect(may(of('lead'), act, { office: 1 })).toBe(act !== 'read what was issued');
+  it('gives the lead everything in the office but the clients’ own pages and questions', () => {
+    for (const act of acts) expect(may(of('lead'), act, { office: 1 })).toBe(!clientsOwn.includes(act));
   });
 
   it('lets a checker read everything and change nothing', () => {
@@ -20,6 +22,10 @@ describe('who may do what', () => {
       'read limits',
       'read a batch',
       'take results away',
+      'read issues',
+      'issue',
+      'answer questions',
+      'test issued numbers',
     ]);
   });
 
@@ -32,7 +38,7 @@ describe('who may do what', () => {
   });
 
   it('shows a client only what was issued', () => {
-    expect(acts.filter((act) => may(of('client'), act))).toEqual(['read what was issued']);
+    expect(acts.filter((act) => may(of('client'), act))).toEqual(clientsOwn);
     expect(homeOf('client')).toBe('/issued');
   });
 });

@@ -28,7 +28,13 @@ const table = {
   'read people': ['lead'],
   'add people': ['lead'],
   'assign people': ['lead'],
+  'read issues': staff,
+  issue: ['lead', 'checker'],
+  'choose who issues': ['lead'],
+  'answer questions': staff,
+  'test issued numbers': staff,
   'read what was issued': ['client'],
+  'ask about an issue': ['client'],
 } as const satisfies Readonly<Record<string, readonly PersonRole[]>>;
 
 export type Act = keyof typeof table;
