@@ -1,7 +1,11 @@
 /** What the tables hold, for Kysely. Instants are ISO 8601 text in UTC, flags 0 or 1, records JSON text. See db/README.md. */
 import type { Generated } from 'kysely';
+import type { CombinationSetTables } from '@/db/tables/combination-sets';
+import type { CheckingTables } from '@/db/tables/checking';
 import type { IssuingTables } from '@/db/tables/issuing';
+import type { OwnPartTables } from '@/db/tables/own-parts';
 import type { MailTables } from '@/db/tables/mail';
+import type { TokenTables } from '@/db/tables/tokens';
 import type { Purpose } from '@/lib/model/frame';
 
 /** A person's role in an office. */
@@ -19,7 +23,7 @@ export type FrameStatus = VersionState | 'stopped';
 /** 0 within, 1 near, 2 not checked, 3 over: larger is worse; −1 = none yet (frames only). */
 export type VerdictRank = number;
 
-export interface DB extends IssuingTables, MailTables {
+export interface DB extends CheckingTables, CombinationSetTables, IssuingTables, MailTables, OwnPartTables, TokenTables {
   office: { id: Generated<number>; name: string; created_at: string };
   person: { id: Generated<number>; email: string; name: string; password_hash: string; created_at: string };
   membership: { office: number; person: number; role: OfficeRole; created_at: string; ended_at: string | null };
@@ -103,11 +107,16 @@ export interface DB extends IssuingTables, MailTables {
   office_limit: {
     office: number;
     ordinal: number;
-    /** A role, or `*`. */
+    /** A role, a place of nodes, or `*`. */
     applies_to: string;
-    measure: 'deflection' | 'sway';
+    measure: 'deflection' | 'sway' | 'displacement' | 'spread';
+    direction: 'x' | 'y' | 'resultant' | null;
+    to_place: string | null;
     /** n of L/n or h/n. */
-    ratio: number;
+    ratio: number | null;
+    absolute_m: number | null;
+    /** A service combination's name, `*` in it for anything; null = every one. */
+    combination: string | null;
     /** Where the figure is from, in words. */
     source: string;
     person: number;
@@ -219,6 +228,12 @@ export interface RevisionTable {
   run_finished_at: string | null;
   /** The revision it was made from by changes; null = its files were brought in. */
   made_from: number | null;
+  /** Who sent it to check last. */
+  sent_by: number | null;
+  sent_at: string | null;
+  /** Who passed it; null again where it is returned. */
+  checked_by: number | null;
+  checked_at: string | null;
 }
 
 export interface ProblemTable {

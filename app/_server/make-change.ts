@@ -1,14 +1,13 @@
 import 'server-only';
 import type { z } from 'zod';
 import { db } from '@/db/client';
-import { listCombinations } from '@/db/queries/combinations';
+import { findSetVersion, type SetVersion } from '@/db/queries/combination-sets';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import type { Person } from '@/lib/access/may';
 import { ApiError, notFound } from '@/lib/api/error';
 import type { changesInput } from '@/lib/api/inputs';
 import type { Change } from '@/lib/changes/change';
-import { changeWords, sectionChangeWords, type ChangeWords } from '@/lib/changes/change-words';
-import { mostRowsWritten } from '@/lib/changes/list-combinations';
+import { changeWords, officeCombinationsWords, sectionChangeWords, type ChangeWords } from '@/lib/changes/change-words';
 import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
 import { readSetting, saysTheSame } from '@/lib/changes/setting-value';
@@ -30,12 +29,12 @@ export async function makeChange(
 ): Promise<string> {
   const settings = requireRead(revision);
   refuse(changes, settings);
-  await refuseUnknown(changes, revision);
+  const sets = await setsOf(person, changes);
   const previews = await previewsOf(person, revision, changes);
   const made = await askForChange(queue(), serverDatabase(), person.office, {
     from: revision.id,
     person: person.id,
-    changes: changes.map((change) => ({ change, ...wordsOf(change, settings, previews) })),
+    changes: changes.map((change) => ({ change, ...wordsOf(change, settings, previews, sets) })),
     reason,
     run,
   });
@@ -55,10 +54,12 @@ export function requireRead({ state, settings, input, frames }: RevisionRecord):
 function refuse(changes: readonly Change[], settings: Settings): void {
   const fields: Record<string, string[]> = {};
   for (const change of changes) {
-    if (change.kind === 'section') continue;
+    if (change.kind === 'section' || change.kind === 'office combinations') continue;
     if (change.kind === 'list combinations') {
-      if (settings.combinationSet === null)
-        fields['combinations'] = ['No combination set is chosen, so nothing is generated. All combinations are listed already.'];
+      const { leaveOut, factors, add } = change;
+      const edits = leaveOut.length + factors.length + (add ?? []).length;
+      if (edits === 0 && (settings.combinationSet === null || change.generated === 'keep'))
+        fields['combinations'] = ['All combinations are listed already. Add one, change one or leave one out.'];
       continue;
     }
     const { setting, value } = change;
@@ -73,37 +74,34 @@ function refuse(changes: readonly Change[], settings: Settings): void {
 
 type Previews = ReadonlyMap<Change, SectionPreview>;
 
-/** What each change of section would do, read in a thread. @throws {ApiError} bad-request where one cannot be done */
+/** What each change of section would do, and whether rows can take the others. @throws {ApiError} bad-request where one cannot be done */
 async function previewsOf(person: Person, revision: RevisionRecord, changes: readonly Change[]): Promise<Previews> {
-  if (!changes.some(({ kind }) => kind === 'section')) return new Map();
+  if (changes.every(({ kind }) => kind === 'setting')) return new Map();
   const previews = await previewChanges(person, revision, changes);
   return new Map(changes.flatMap((change, i): [Change, SectionPreview][] => (previews[i] ? [[change, previews[i]]] : [])));
 }
 
-function wordsOf(change: Change, settings: Settings, previews: Previews): ChangeWords {
+type Sets = ReadonlyMap<Change, SetVersion>;
+
+/** The office's sets that changes name. @throws {ApiError} bad-request where there is none, or it is not offered */
+async function setsOf(person: Person, changes: readonly Change[]): Promise<Sets> {
+  const sets = new Map<Change, SetVersion>();
+  for (const change of changes) {
+    if (change.kind !== 'office combinations') continue;
+    const found = await findSetVersion(db(), person.office, change.set, change.version);
+    if (found === undefined || found.withdrawnAt !== null) {
+      const sentence = 'The office has no such combination set in use. Choose another.';
+      throw new ApiError('bad-request', sentence, { fields: { set: [sentence] } });
+    }
+    sets.set(change, found);
+  }
+  return sets;
+}
+
+function wordsOf(change: Change, settings: Settings, previews: Previews, sets: Sets): ChangeWords {
+  if (change.kind === 'office combinations') return officeCombinationsWords(change, sets.get(change)?.name ?? '', settings);
   if (change.kind !== 'section') return changeWords(change, settings);
   const preview = previews.get(change);
   if (!preview) throw new RangeError('Expected a preview of each change of section');
   return sectionChangeWords(change, preview);
-}
-
-/** Names that are no generated combination of the revision: they may be of an earlier look at it. */
-async function refuseUnknown(changes: readonly Change[], revision: RevisionRecord): Promise<void> {
-  for (const change of changes) {
-    if (change.kind !== 'list combinations') continue;
-    const { list } = await listCombinations(db(), revision.office, revision.id, mostRowsWritten);
-    const names = new Set(list.flatMap(({ name, clause }) => (clause === null ? [] : [name])));
-    const asked = [...change.leaveOut, ...change.factors.map(({ combination }) => combination)];
-    const unknown = asked.find((name) => !names.has(name));
-    const sentence =
-      unknown !== undefined
-        ? `${unknown} is no generated combination of this revision. Open it again.`
-        : names.size === 0
-          ? 'Nothing is generated in this revision.'
-          : list.reduce((sum, { frames }) => sum + frames, 0) > mostRowsWritten &&
-              list.some(({ frames }) => frames !== revision.frames - revision.framesStopped)
-            ? 'Too many rows would be written. List the combinations in the sheets.'
-            : null;
-    if (sentence !== null) throw new ApiError('bad-request', sentence, { fields: { combinations: [sentence] } });
-  }
 }

@@ -21,6 +21,7 @@ export async function previewChanges(
   const task: PreviewTask = { file: databaseFile(), office: person.office, revision: revision.id, changes, by: person.name };
   const threads = pools();
   const answer = (await threads.read.run(task, { filename: threads.bundle('read'), name: 'previewChanges' })) as PreviewAnswer;
-  if ('refused' in answer) throw new ApiError('bad-request', answer.refused, { fields: { section: [answer.refused] } });
+  if ('refused' in answer)
+    throw new ApiError('bad-request', answer.refused, { fields: { [answer.field ?? 'section']: [answer.refused] } });
   return answer.previews;
 }

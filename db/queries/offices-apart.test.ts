@@ -2,6 +2,15 @@ import { expect, it } from 'vitest';
 import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
 import { insertActivity, listActivity } from '@/db/queries/activity';
 import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
+import {
+  findSetVersion,
+  insertCombinationSet,
+  insertSetVersion,
+  listCombinationSets,
+  listSetUses,
+  listSetVersions,
+  updateSetOffered,
+} from '@/db/queries/combination-sets';
 import { listCombinations } from '@/db/queries/combinations';
 import { findCompared } from '@/db/queries/compare';
 import { findMaking, insertChangedRevision, listChanges } from '@/db/queries/changes';
@@ -117,6 +126,32 @@ it('keeps each office’s limits to itself, in their order', async () => {
   await updateOfficeLimits(db, own.office, { person: own.person, limits: [] });
   expect(await listOfficeLimits(db, own.office)).toEqual([]);
   expect(await listOfficeLimits(db, other.office)).toEqual([limit(360)]);
+});
+
+it('keeps each office’s combination sets to itself, every version as it was', async () => {
+  const { db, own, other } = await twoOffices();
+  const rules = [{ from: 'handbook', purpose: 'strength', suffix: '', rule: '1.35 dead' }] as const;
+  const given = { basedOn: null, level: 'factored', together: false, rules, provenance: 'handbook' } as const;
+  const set = (await insertCombinationSet(db, own.office, { ...given, name: 'Sheds', person: own.person }))!;
+  expect(await insertCombinationSet(db, own.office, { ...given, name: 'SHEDS', person: own.person })).toBeUndefined();
+  expect(await insertCombinationSet(db, other.office, { ...given, name: 'Sheds', person: other.person })).toBeDefined();
+  const next = { ...given, provenance: 'handbook, 2nd', set, after: 1 };
+  expect(await insertSetVersion(db, other.office, { ...next, person: other.person })).toBe(false);
+  expect(await insertSetVersion(db, own.office, { ...next, person: own.person })).toBe(true);
+  expect(await insertSetVersion(db, own.office, { ...next, person: own.person })).toBe(false);
+  expect((await listSetVersions(db, own.office, set)).map(({ version, provenance }) => [version, provenance])).toEqual([[2, 'handbook, 2nd'], [1, 'handbook']]); // prettier-ignore
+  expect(await listSetVersions(db, other.office, set)).toEqual([]);
+  expect(await findSetVersion(db, other.office, set, 1)).toBeUndefined();
+  const change = { kind: 'office combinations', set, version: 1, listed: 'keep' } as const;
+  const words = { what: 'combinations', from: 'as listed', to: 'the office’s set Sheds' };
+  const made = { from: own.revision, person: own.person, changes: [{ change, ...words }], reason: 'ours', run: false };
+  await insertChangedRevision(db, own.office, made);
+  expect((await listSetUses(db, own.office, set)).map(({ version, letter }) => [version, letter])).toEqual([[1, 'C']]);
+  expect(await listSetUses(db, other.office, set)).toEqual([]);
+  expect((await listCombinationSets(db, own.office)).map(({ version, used }) => [version, used])).toEqual([[2, 1]]);
+  expect(await updateSetOffered(db, other.office, set, false)).toBe(false);
+  expect(await updateSetOffered(db, own.office, set, false)).toBe(true);
+  expect((await listCombinationSets(db, own.office))[0]?.withdrawnAt).not.toBeNull();
 });
 
 it('changes nothing of another office', async () => {

@@ -3,7 +3,6 @@ import { z } from 'zod';
 import { passwordLength } from '@/lib/access/password-length';
 import { personRoles } from '@/lib/access/may';
 import { type Change, changeSchema, sectionChange } from '@/lib/changes/change';
-import { limitedBy, type OfficeLimit } from '@/lib/model/office-limit';
 import { movementKinds } from '@/lib/results/compare';
 import { comparedLists } from '@/lib/results/compared-page';
 
@@ -16,7 +15,7 @@ const text = (what: string, max: number) =>
 
 const letterText = z.string().regex(/^[A-Z]{1,3}$/, 'Name a revision by its letter.');
 
-const emailInput = z
+export const emailInput = z
   .string({ error: 'Enter an e-mail address.' })
   .trim()
   .toLowerCase()
@@ -48,6 +47,8 @@ export const assignedInput = z.object({ people: z.array(z.number().int().positiv
 /** What a change is about: nothing is changed twice at once. */
 function subjectOf(change: Change): string {
   if (change.kind === 'section') return JSON.stringify(change.what);
+  // what frames are combined by is one thing, whichever way it is changed
+  if (change.kind === 'list combinations' || change.kind === 'office combinations') return 'combinationSet';
   return change.kind === 'setting' ? change.setting : change.kind;
 }
 
@@ -64,30 +65,6 @@ export const changesInput = z.object({
 
 /** A change of section to be looked at before it is made. */
 export const previewInput = z.object({ change: sectionChange });
-
-/** An office's own limits on movement, one for a role and measure. */
-export const limitsInput = z.object({
-  limits: z
-    .array(
-      z.strictObject({
-        appliesTo: z.enum(limitedBy as [OfficeLimit['appliesTo'], ...OfficeLimit['appliesTo'][]], {
-          error: `Say what it applies to: ${limitedBy.join(', ')}.`,
-        }),
-        measure: z.enum(['deflection', 'sway'], { error: 'Choose the measure: deflection or sway.' }),
-        ratio: z
-          .number({ error: 'Give n of L/n as a number.' })
-          .min(1, 'Give n of L/n from 1.')
-          .max(10_000, 'Give n of L/n up to 10,000.'),
-        source: z.string().trim().max(200, 'Keep the source to 200 characters.').default(''),
-      }),
-      { error: 'List the limits.' },
-    )
-    .max(100, 'Keep at most 100 limits.')
-    .refine(
-      (list) => new Set(list.map(({ appliesTo, measure }) => `${appliesTo} ${measure}`)).size === list.length,
-      'Give one limit for a role and measure.',
-    ),
-});
 
 export const batchNameInput = text('the batch’s name', 120);
 

@@ -2,19 +2,30 @@ import type { Change } from '@/lib/changes/change';
 import { changeSection, readForChange } from '@/lib/changes/change-section';
 import { changeSetting } from '@/lib/changes/change-setting';
 import { listCombinations } from '@/lib/changes/list-combinations';
+import { officeCombinations } from '@/lib/changes/office-combinations';
+import type { OfficeSet } from '@/lib/combinations/office-set';
 import type { StoredInput } from '@/lib/intake/rows/input-rows';
 
 /**
  * An input with changes made to its rows, one after the other; rows that no change touches stay the very same.
  *
  * @param by who made the changes: their rows say so
+ * @param sets the versions of the office's combination sets that the changes name, by `setKey`
  * @throws {RangeError} for a change that the sheets would refuse: that is asked for before (`readSetting`, `previewSection`)
  */
-export function applyChanges(input: StoredInput, changes: readonly Change[], by: string): StoredInput {
-  return changes.reduce((rows, change) => applyOne(rows, change, by), input);
+export function applyChanges(
+  input: StoredInput,
+  changes: readonly Change[],
+  by: string,
+  sets: ReadonlyMap<string, OfficeSet> = new Map(),
+): StoredInput {
+  return changes.reduce((rows, change) => applyOne(rows, change, by, sets), input);
 }
 
-function applyOne(input: StoredInput, change: Change, by: string): StoredInput {
+/** A version of an office's set, as `applyChanges` looks for it. */
+export const setKey = ({ set, version }: { readonly set: number; readonly version: number }): string => `${set}.${version}`;
+
+function applyOne(input: StoredInput, change: Change, by: string, sets: ReadonlyMap<string, OfficeSet>): StoredInput {
   switch (change.kind) {
     case 'setting':
       return changeSetting(input, change, by);
@@ -25,5 +36,10 @@ function applyOne(input: StoredInput, change: Change, by: string): StoredInput {
     }
     case 'list combinations':
       return listCombinations(input, change, by);
+    case 'office combinations': {
+      const set = sets.get(setKey(change));
+      if (!set) throw new RangeError(`Expected version ${change.version} of the office's combination set ${change.set}`);
+      return officeCombinations(input, change, set, by);
+    }
   }
 }

@@ -16,22 +16,50 @@ const settingChange = z.strictObject({
   value: z.string({ error: 'Give the value as it would be typed on the sheet.' }).trim().max(200),
 });
 
-/** Generated combinations become rows of the Combinations sheet, and the sheet's are all there are. */
+const aFactor = z.number({ error: 'Give a factor as a number.' }).min(-100).max(100);
+
+/** Rows of the Combinations sheet are edited; generated ones become rows of it too, and the sheet's are then all there are. */
 const listCombinationsChange = z.strictObject({
   kind: z.literal('list combinations'),
-  /** Names of generated combinations that are not written. */
+  /** Whether generated combinations are written as rows, or go on being generated; not said: they are written. */
+  generated: z.enum(['write', 'keep'], { error: 'Say whether generated combinations are written: write or keep.' }).optional(),
+  /** Rows to add, for every frame. */
+  add: z
+    .array(
+      z.strictObject({
+        name: z.string({ error: 'Name the combination.' }).trim().min(1, 'Name the combination.').max(200),
+        purpose: z.enum(['strength', 'service'], { error: 'Choose the purpose: strength or service.' }),
+        terms: z
+          .array(z.strictObject({ case: z.string().trim().min(1).max(300), factor: aFactor }))
+          .min(1, 'Give at least one factor.')
+          .max(300)
+          .refine((terms) => new Set(terms.map((term) => term.case)).size === terms.length, 'Give each case once.'),
+      }),
+    )
+    .max(200, 'Add at most 200 combinations at once.')
+    .optional(),
+  /** Names of combinations that are left out: generated ones are not written, listed rows go. */
   leaveOut: z.array(z.string().max(2000)).max(2000).default([]),
-  /** Factors in place of generated ones. */
+  /** Factors in place of generated or listed ones. */
   factors: z
     .array(
       z.strictObject({
         combination: z.string().max(2000),
         case: z.string().max(300),
-        factor: z.number({ error: 'Give a factor as a number.' }).min(-100).max(100),
+        factor: aFactor,
       }),
     )
     .max(5000)
     .default([]),
+});
+
+/** What a version of one of the office's own combination sets makes of the load cases becomes rows of the Combinations sheet. */
+const officeCombinationsChange = z.strictObject({
+  kind: z.literal('office combinations'),
+  set: z.number({ error: 'Choose a combination set of the office.' }).int().positive(),
+  version: z.number({ error: 'Give the version of the set.' }).int().positive(),
+  /** Whether what is listed stays beside it, or goes. */
+  listed: z.enum(['keep', 'replace'], { error: 'Say what becomes of listed combinations: keep or replace.' }),
 });
 
 const id = (what: string) =>
@@ -66,11 +94,16 @@ export const sectionChange = z.strictObject({
 });
 
 /** Every kind of change. A further kind is one more line here, one in apply-changes.ts and one in change-words.ts. */
-export const changeSchema = z.discriminatedUnion('kind', [settingChange, sectionChange, listCombinationsChange], {
-  error: 'Say what kind of change it is: setting, section or list combinations.',
-});
+export const changeSchema = z.discriminatedUnion(
+  'kind',
+  [settingChange, sectionChange, listCombinationsChange, officeCombinationsChange],
+  {
+    error: 'Say what kind of change it is: setting, section, list combinations or office combinations.',
+  },
+);
 
 export type Change = z.infer<typeof changeSchema>;
 export type SettingChange = Extract<Change, { kind: 'setting' }>;
 export type ListCombinationsChange = Extract<Change, { kind: 'list combinations' }>;
+export type OfficeCombinationsChange = Extract<Change, { kind: 'office combinations' }>;
 export type SectionChange = Extract<Change, { kind: 'section' }>;

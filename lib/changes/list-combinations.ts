@@ -1,65 +1,86 @@
-/** Generated combinations written into the Combinations sheet, as an edit of a batch's rows. */
+/** Combinations changed on screen, as an edit of a batch's rows: listed ones, new ones, and generated ones written down. */
 import type { ListCombinationsChange } from '@/lib/changes/change';
+import { ChangeRefused } from '@/lib/changes/change-refused';
 import { changeSetting } from '@/lib/changes/change-setting';
-import { withCell } from '@/lib/changes/with-cell';
-import { shownCombinations } from '@/lib/combinations/shown-combinations';
-import { sheetKey } from '@/lib/intake/files/names';
-import type { RawPart, RawRow } from '@/lib/intake/files/raw-sheet';
+import { listedIn, type RowToWrite, withEdits, withRows } from '@/lib/changes/combination-rows';
+import { type CombinationShown, shownCombinations } from '@/lib/combinations/shown-combinations';
 import { idKey } from '@/lib/intake/ids';
-import { ProblemList } from '@/lib/intake/problem-list';
-import { readTable } from '@/lib/intake/read-table';
-import { isTyped, plainCell } from '@/lib/intake/rows/cell-marks';
-import { partOf, rowsOfPart, type StoredInput } from '@/lib/intake/rows/input-rows';
+import type { Intake } from '@/lib/intake/intake';
+import type { StoredInput } from '@/lib/intake/rows/input-rows';
 import { readRows } from '@/lib/intake/rows/read-rows';
-import { sheetDefinitions } from '@/lib/intake/sheet-definitions';
-import type { Part } from '@/lib/intake/table';
-import { wordKey } from '@/lib/intake/words';
-import type { Frame, Purpose } from '@/lib/model/frame';
+import type { Combination, Frame, LoadCase } from '@/lib/model/frame';
 
 /** Rows that one change writes at most. */
 export const mostRowsWritten = 100_000;
 
-interface RowToWrite {
-  readonly name: string;
-  readonly purpose: Purpose;
-  readonly terms: readonly { readonly case: string; readonly factor: number }[];
-  /** null = for every frame. */
-  readonly frame: string | null;
-}
+/** The rows as the reader takes them. */
+export const readAgain = (input: StoredInput): Intake =>
+  readRows({ ...input, identity: { name: '', sha256: '', files: [] }, problems: [] });
 
 /**
- * Writes each generated combination as a row of Combinations, a column a case (or a row a term, where the sheet has that
- * form), without those left out and with factors that were changed, and sets `combination set` to as listed. What all
- * frames share is one row; what is of some only is a row for each. Listed rows stay as they were typed.
+ * Edits the Combinations sheet: rows left out, factors changed, rows added. With `generated: 'write'` (as where it is not
+ * said) every generated combination is written as a row too and `combination set` becomes as listed; with `keep` the set
+ * goes on generating. What all frames share is one row; what is of some only is a row for each.
  *
- * @throws {RangeError} where no rule set is chosen, a name is not generated, or more rows than `mostRowsWritten` would come
+ * @throws {ChangeRefused} for a name that is unknown or taken, a case that is unknown, more rows than `mostRowsWritten`,
+ *   rows that the reader would refuse, and a case that would silently be in no combination any more
  */
 export function listCombinations(input: StoredInput, change: ListCombinationsChange, by: string): StoredInput {
-  const rows = rowsToWrite(input, change);
-  const written = rows.length === 0 ? input : withRows(input, rows, by);
-  return changeSetting(written, { kind: 'setting', setting: 'combinationSet', value: 'as listed' }, by);
+  const read = readAgain(input);
+  const frames = read.frames.flatMap(({ frame }) => frame ?? []);
+  const shown = shownCombinations(frames, read.settings.combinationSet);
+  const write = change.generated !== 'keep';
+  const listed = listedIn(input);
+  const ofSet = shown.filter(({ name, clause }) => clause !== null && !listed(name));
+  const set = read.settings.combinationSet;
+  if (
+    write &&
+    ofSet.length === 0 &&
+    set === null &&
+    (change.add ?? []).length + change.leaveOut.length + change.factors.length === 0
+  )
+    throw new ChangeRefused('Nothing is generated in this revision');
+  const edits = editsOf(change, shown, write);
+  const rows = [...(write ? rowsToWrite(frames, ofSet, edits) : []), ...rowsAdded(change, frames, shown)];
+  if (rows.length > mostRowsWritten) throw new ChangeRefused(`More than ${mostRowsWritten.toLocaleString('en-GB')} rows would be written. List the combinations in the sheets`); // prettier-ignore
+  const edited = withEdits(input, edits, by);
+  const written = rows.length === 0 ? edited : withRows(edited, rows, by);
+  const after = write && set !== null ? changeSetting(written, { kind: 'setting', setting: 'combinationSet', value: 'as listed' }, by) : written; // prettier-ignore
+  refuseNewErrors(read, after);
+  return after;
 }
 
-function rowsToWrite(input: StoredInput, { leaveOut, factors }: ListCombinationsChange): RowToWrite[] {
-  const identity = { name: '', sha256: '', files: [] };
-  const { frames: read, settings } = readRows({ ...input, identity, problems: [] });
-  const frames = read.flatMap(({ frame }) => frame ?? []);
-  const shown = shownCombinations(frames, settings.combinationSet).filter(({ clause }) => clause !== null);
-  if (shown.length === 0) throw new RangeError('Expected a batch with generated combinations');
-  const names = new Set(shown.map(({ name }) => idKey(name)));
-  for (const name of [...leaveOut, ...factors.map(({ combination }) => combination)])
-    if (!names.has(idKey(name))) throw new RangeError(`Expected a generated combination, got ${name}`);
-  const out = new Set(leaveOut.map(idKey));
-  const changed = new Map(factors.map((each) => [`${idKey(each.combination)}|${idKey(each.case)}`, each.factor]));
-  const rows = shown
+type Edits = ReturnType<typeof editsOf>;
+
+function editsOf({ leaveOut, factors }: ListCombinationsChange, shown: readonly CombinationShown[], write: boolean) {
+  const known = new Map(shown.map((each) => [idKey(each.name), each]));
+  const byName = new Map<string, Map<string, { case: string; factor: number }>>();
+  const of = (name: string): CombinationShown => {
+    const found = known.get(idKey(name));
+    if (!found) throw new ChangeRefused(`${name} is no combination of this revision. Open it again`);
+    if (found.clause !== null && !write)
+      throw new ChangeRefused(`${name} is generated: it can be changed only where the generated ones are written into the sheet`);
+    return found;
+  };
+  for (const { combination, case: name, factor } of factors) {
+    const own = byName.get(idKey(of(combination).name)) ?? new Map<string, { case: string; factor: number }>();
+    own.set(idKey(name), { case: name, factor });
+    byName.set(idKey(combination), own);
+  }
+  return { out: new Set(leaveOut.map((name) => idKey(of(name).name))), factors: byName };
+}
+
+function rowsToWrite(frames: readonly Frame[], ofSet: readonly CombinationShown[], { out, factors }: Edits): RowToWrite[] {
+  return ofSet
     .filter(({ name }) => !out.has(idKey(name)))
     .flatMap(({ name, purpose, terms, frames: count }): RowToWrite[] => {
-      const own = terms.map((term) => ({ ...term, factor: changed.get(`${idKey(name)}|${idKey(term.case)}`) ?? term.factor }));
+      const changed = factors.get(idKey(name));
+      const own = terms.map((term) => ({ ...term, factor: changed?.get(idKey(term.case))?.factor ?? term.factor }));
+      const added = [...(changed ?? [])].filter(([key]) => !terms.some((term) => idKey(term.case) === key));
+      own.push(...added.map(([, term]) => ({ ...term })));
       if (count === frames.length) return [{ name, purpose, terms: own, frame: null }];
       return frames.filter((frame) => has(frame, name, terms)).map(({ id }) => ({ name, purpose, terms: own, frame: id }));
     });
-  if (rows.length > mostRowsWritten) throw new RangeError(`Expected at most ${mostRowsWritten} rows, got ${rows.length}`);
-  return rows;
 }
 
 /** Whether a frame has a combination of this name with these very terms. */
@@ -71,84 +92,49 @@ function has({ cases, combinations }: Frame, name: string, terms: RowToWrite['te
   );
 }
 
-/** The input with these rows behind the last sheet of combinations, or on a new one. */
-function withRows(input: StoredInput, rows: readonly RowToWrite[], by: string): StoredInput {
-  const place = input.sheets.findLastIndex((sheet) => sheetKey(sheet.name) === sheetKey('Combinations'));
-  const sheet = input.sheets[place];
-  const definition = sheetDefinitions.get('Combinations');
-  if (!definition) throw new RangeError('Expected a definition of Combinations');
-  if (sheet) {
-    const part = partOf(sheet, place, input.rows.filter((row) => row.part === place)); // prettier-ignore
-    const [read] = readTable({ name: sheet.name, parts: [part] }, definition, 'metric', new ProblemList()).parts;
-    if (read && read.headingRow !== null && read.byName.has('combination') && read.byName.has('purpose')) {
-      const edited = appended(read, read.headingRow, rows, by);
-      const others = input.sheets.map((_, i) =>
-        i === place ? rowsOfPart(edited, i) : input.rows.filter((row) => row.part === i),
-      );
-      return { sheets: input.sheets, rows: others.flat() };
-    }
-  }
-  const file = input.sheets.find((each) => isTyped(each.file))?.file ?? 'Combinations.csv';
-  const headings = ['combination', 'purpose'].map((text) => plainCell(text, false));
-  const empty: RawPart = { name: 'Combinations', file, order: input.sheets.length, decimalMark: null, rows: [{ row: 1, cells: headings, changedBy: by }] }; // prettier-ignore
-  const [read] = readTable({ name: empty.name, parts: [empty] }, definition, 'metric', new ProblemList()).parts;
-  if (!read) throw new RangeError('Expected a sheet that was made to be read');
-  const made = appended(read, 1, rows, by);
-  return {
-    sheets: [...input.sheets, { name: empty.name, file, decimalMark: null }],
-    rows: [...input.rows, ...rowsOfPart(made, input.sheets.length)],
-  };
+function rowsAdded({ add }: ListCombinationsChange, frames: readonly Frame[], shown: readonly CombinationShown[]): RowToWrite[] {
+  if (!add || add.length === 0) return [];
+  const taken = new Set(shown.map(({ name }) => idKey(name)));
+  const cases = new Map<string, string>();
+  for (const list of new Set(frames.map((frame) => frame.cases))) for (const { name } of list) cases.set(idKey(name), name);
+  return add.map(({ name, purpose, terms }) => {
+    if (taken.has(idKey(name))) throw new ChangeRefused(`There is a combination ${name} already. Give the new one another name`);
+    if (cases.has(idKey(name))) throw new ChangeRefused(`${name} is the name of a load case. Give the combination another`);
+    taken.add(idKey(name));
+    const own = terms.map((term) => {
+      const known = cases.get(idKey(term.case));
+      if (known === undefined) throw new ChangeRefused(`${term.case} is no load case of this revision`);
+      return { case: known, factor: term.factor };
+    });
+    return { name, purpose, terms: own, frame: null };
+  });
 }
 
-/** Names of columns that a case of the same name could be taken for. */
-const reserved = new Set(['combination', 'purpose', 'case', 'factor', 'frame'].map(wordKey));
-
-function appended(read: Part, headingRow: number, rows: readonly RowToWrite[], by: string): RawPart {
-  let part = read.raw;
-  let width = Math.max(...part.rows.map(({ cells }) => cells.length));
-  /** Column of a heading, added behind the last where there is none. */
-  const column = (found: number | undefined, heading: string): number => {
-    if (found !== undefined) return found;
-    part = { ...part, rows: withCell(part.rows, headingRow, width, plainCell(heading, false), by) };
-    width += 1;
-    return width - 1;
-  };
-  const known = (name: string) => read.byName.get(name)?.index;
-  const at = { combination: column(known('combination'), 'combination'), purpose: column(known('purpose'), 'purpose') };
-  const frameAt = rows.some(({ frame }) => frame !== null) ? column(known('frame'), 'frame') : null;
-  const cases = [...new Set(rows.flatMap(({ terms }) => terms.map((term) => term.case)))];
-  const wide = !read.byName.has('case') && !read.byName.has('factor');
-  if (wide && cases.some((name) => reserved.has(wordKey(name)))) throw new RangeError('Expected cases that can head a column');
-  let next = (part.rows.at(-1)?.row ?? 0) + 1;
-  const row = (values: readonly (readonly [column: number, text: string, number?: boolean])[]): RawRow => {
-    const last = Math.max(...values.map(([index]) => index));
-    const cells = Array.from({ length: last + 1 }, (_, i) => {
-      const value = values.find(([index]) => index === i);
-      return value ? plainCell(value[1], value[2] === true && isTyped(part.file)) : null;
-    });
-    return { row: next++, cells, changedBy: by };
-  };
-  const head = ({ name, purpose, frame }: RowToWrite) =>
-    [
-      [at.combination, name],
-      [at.purpose, purpose],
-      ...(frameAt !== null && frame !== null ? [[frameAt, frame] as const] : []),
-    ] as const;
-  if (!wide) {
-    const [caseAt, factorAt] = [column(known('case'), 'case'), column(known('factor'), 'factor')];
-    const terms = rows.flatMap((each) =>
-      each.terms.map((term) => row([...head(each), [caseAt, term.case], [factorAt, String(term.factor), true]])),
+/**
+ * Reads the rows again: what the reader refuses now and did not before stops the change, and so does a case that was "not
+ * checked" for want of a rule and would no longer be said to be.
+ *
+ * @throws {ChangeRefused}
+ */
+export function refuseNewErrors(before: Intake, after: StoredInput): void {
+  const read = readAgain(after);
+  const said = (problems: Intake['problems']) => problems.filter(({ severity }) => severity === 'error');
+  const known = new Set(said(before.problems).map(({ code, message }) => `${code} ${message}`));
+  const fresh = said(read.problems).find(({ code, message }) => !known.has(`${code} ${message}`));
+  if (fresh) throw new ChangeRefused(`${fresh.sheet ?? 'The sheets'}: ${fresh.message.replace(/\.$/, '')}`);
+  for (const [i, { frame }] of read.frames.entries()) {
+    const was = before.frames[i]?.frame;
+    if (!frame || !was) continue;
+    const lost = uncombined(frame.cases, frame.combinations).find(
+      ({ name }) =>
+        was.notChecked.some((reason) => reason.includes(name)) && !frame.notChecked.some((reason) => reason.includes(name)),
     );
-    return { ...part, rows: [...part.rows, ...terms] };
+    if (lost) throw new ChangeRefused(`No combination would hold ${lost.name} (${lost.kind}), for which the set has no rule. Add one that does`); // prettier-ignore
   }
-  const columnOf = new Map(
-    cases.map((name) => [
-      name,
-      column(read.columns.find((each) => each.known === null && idKey(each.text) === idKey(name))?.index, name),
-    ]),
-  );
-  const lines = rows.map((each) =>
-    row([...head(each), ...each.terms.map((term) => [columnOf.get(term.case) ?? 0, String(term.factor), true] as const)]),
-  );
-  return { ...part, rows: [...part.rows, ...lines] };
+}
+
+/** Cases that no combination holds. */
+export function uncombined(cases: readonly LoadCase[], combinations: readonly Combination[]): LoadCase[] {
+  const held = new Set(combinations.flatMap(({ terms }) => terms.map((term) => term.case)));
+  return cases.filter((_, i) => !held.has(i));
 }

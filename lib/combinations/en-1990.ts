@@ -72,7 +72,10 @@ export function enForms(factors: EnFactors): Form[] {
   const beside = (lead: CaseKind | null, factor: (kind: EnVariable) => number): Slot[] =>
     enVariable
       .filter((kind) => (lead === null ? kind !== 'roof live' : mayMeet(lead, kind)) && factor(kind) > 0)
-      .map((kind) => optional(factor(kind), kind));
+      .map((kind) => {
+        const slot = optional(factor(kind), kind);
+        return factor === psi0 ? { ...slot, parts: { gamma: gammaQ[kind], psi: psi[kind][0] } } : slot;
+      });
   const psi0 = (kind: EnVariable) => gammaQ[kind] * psi[kind][0];
   const led = (clause: string, dead: number): Form[] =>
     enVariable.map((lead) => strength(clause, dead, [required(gammaQ[lead], lead), ...beside(lead, psi0)]));

@@ -78,7 +78,8 @@ function actingIn(form: Form, cases: readonly LoadCase[], together: boolean): We
     .map(ofSlot)
     .reduce(
       (sets, slot) => sets.flatMap((set) => slot.map((own) => [...set, ...own])),
-      weighed(deadSets(cases, indices(cases, ['dead'])), form.dead),
+      // a rule of an office's own may leave out what is dead
+      form.dead === 0 ? [[]] : weighed(deadSets(cases, indices(cases, ['dead'])), form.dead),
     )
     .filter((acting) => mayActTogether(cases, acting));
 }

@@ -7,6 +7,8 @@ export interface Slot {
   readonly factor: number;
   /** False: they act or not, whichever is worse, so both are made. */
   readonly required: boolean;
+  /** γ and ψ whose product the factor is, where the standard has them apart. */
+  readonly parts?: { readonly gamma: number; readonly psi: number };
 }
 
 /** One combination of a standard: a factor on everything dead, and variable actions. */

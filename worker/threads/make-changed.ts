@@ -1,11 +1,14 @@
 /** A revision made from an earlier one by changes: its rows, its input workbook, and what they say. */
 import type { OpenDatabase } from '@/db/open';
 import { listChanges, type Making } from '@/db/queries/changes';
+import { findSetVersion } from '@/db/queries/combination-sets';
 import { listOfficeLimits } from '@/db/queries/office-limits';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { deleteUploads, insertUpload, listUploadedFiles } from '@/db/queries/uploads';
 import { inputRows } from '@/db/queries/waiting';
-import { applyChanges } from '@/lib/changes/apply-changes';
+import { applyChanges, setKey } from '@/lib/changes/apply-changes';
+import type { Change } from '@/lib/changes/change';
+import type { OfficeSet } from '@/lib/combinations/office-set';
 import { identityOf } from '@/lib/intake/files/identity';
 import { readFiles } from '@/lib/intake/files/read-files';
 import type { Intake } from '@/lib/intake/intake';
@@ -20,11 +23,8 @@ import { inputWorkbook } from '@/lib/reports/input-workbook/input-workbook';
 export async function makeChanged({ db, raw }: OpenDatabase, office: number, revision: number, making: Making): Promise<Intake> {
   const [changes, problems] = await Promise.all([listChanges(db, office, revision), listProblems(db, office, making.from)]);
   const before = await storedInput({ db, raw }, office, making.from);
-  const after = applyChanges(
-    before,
-    changes.map(({ change }) => change),
-    making.personName,
-  );
+  const asked = changes.map(({ change }) => change);
+  const after = applyChanges(before, asked, making.personName, await officeSets(db, office, asked));
   const file = inputWorkbook(after, `${making.batch} ${making.letter}`);
   const identity = identityOf([file]);
   const [{ sha256, size } = { sha256: '', size: 0 }] = identity.files;
@@ -47,4 +47,19 @@ export async function storedInput(
   const { sheets } = await readFiles(await listUploadedFiles(db, office, revision));
   const parts = sheets.flatMap((sheet) => sheet.parts).sort((a, b) => a.order - b.order);
   return { sheets: parts, rows: rowsOf(sheets) };
+}
+
+/** The versions of the office's combination sets that changes name. */
+export async function officeSets(
+  db: OpenDatabase['db'],
+  office: number,
+  changes: readonly Change[],
+): Promise<Map<string, OfficeSet>> {
+  const sets = new Map<string, OfficeSet>();
+  for (const change of changes) {
+    if (change.kind !== 'office combinations') continue;
+    const found = await findSetVersion(db, office, change.set, change.version);
+    if (found) sets.set(setKey(change), found);
+  }
+  return sets;
 }

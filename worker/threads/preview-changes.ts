@@ -1,8 +1,9 @@
 /** In a thread: what changes of section would do to a revision, from its rows; nothing is stored. */
 import { applyChanges } from '@/lib/changes/apply-changes';
 import type { Change } from '@/lib/changes/change';
+import { ChangeRefused } from '@/lib/changes/change-refused';
 import { previewSection, type SectionPreview } from '@/lib/changes/section-preview';
-import { storedInput } from './make-changed';
+import { officeSets, storedInput } from './make-changed';
 import { openOnce } from './open-once';
 
 export interface PreviewTask {
@@ -16,14 +17,22 @@ export interface PreviewTask {
 }
 
 /** By change: what it does to the rows as the changes before it leave them; null for other kinds. */
-export type PreviewAnswer = { readonly previews: readonly (SectionPreview | null)[] } | { readonly refused: string };
+export type PreviewAnswer =
+  { readonly previews: readonly (SectionPreview | null)[] } | { readonly refused: string; readonly field?: string };
 
 export async function previewChanges({ file, office, revision, changes, by }: PreviewTask): Promise<PreviewAnswer> {
-  let input = await storedInput(openOnce(file), office, revision);
+  const database = openOnce(file);
+  const sets = await officeSets(database.db, office, changes);
+  let input = await storedInput(database, office, revision);
   const previews: (SectionPreview | null)[] = [];
   for (const change of changes) {
     if (change.kind !== 'section') {
-      input = applyChanges(input, [change], by);
+      try {
+        input = applyChanges(input, [change], by, sets);
+      } catch (error) {
+        if (error instanceof ChangeRefused) return { refused: `${error.message}.`, field: 'combinations' };
+        throw error;
+      }
       previews.push(null);
       continue;
     }

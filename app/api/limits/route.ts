@@ -4,7 +4,7 @@ import { requirePerson } from '@/app/_server/person';
 import { db } from '@/db/client';
 import { insertActivity } from '@/db/queries/activity';
 import { listOfficeLimits, updateOfficeLimits } from '@/db/queries/office-limits';
-import { limitsInput } from '@/lib/api/inputs';
+import { limitsInput } from '@/lib/api/office-inputs';
 
 /** The office's own limits on movement. */
 export const GET = door(async (request) => {

@@ -7,7 +7,7 @@ import type { ProblemList } from '@/lib/intake/problem-list';
 import { forNobody, type Reader } from '@/lib/intake/reader';
 import { level, RowsByFrame } from '@/lib/intake/rows-by-frame';
 import type { Combinations } from '@/lib/intake/sheets/combinations';
-import { officeLimits } from '@/lib/intake/sheets/office-limits';
+import { type LimitedFrame, officeLimits } from '@/lib/intake/sheets/office-limits';
 import { type LimitTarget, targetOf } from '@/lib/intake/sheets/limit-target';
 import { type Row, rawCell, type Table } from '@/lib/intake/table';
 import { ratioText } from '@/lib/intake/words';
@@ -54,10 +54,8 @@ export class Limits {
       given.push(...this.read(draft, row, at));
     }
     for (const each of this.fromSetup()) if (!given.some((other) => sets(other.limit, each.limit))) given.push(each);
-    const present = this.office.filter(
-      ({ appliesTo }) => appliesTo === '*' || draft.members.some(({ role }) => role === appliesTo),
-    );
-    const office = officeLimits(present, given.map(({ limit }) => limit), this.settings); // prettier-ignore
+    const office =
+      this.office.length === 0 ? [] : officeLimits(this.office, given.map(({ limit }) => limit), this.settings, this.limited(draft)); // prettier-ignore
     given.push(...office.map((limit) => ({ limit, row: null, level: level.all })));
     const closest = closestOf(draft, given);
     this.tellEquals(draft, closest);
@@ -67,6 +65,15 @@ export class Limits {
     if (known) return known;
     this.shared.set(key, list);
     return list;
+  }
+
+  /** What of a frame the office's limits may name. */
+  private limited({ members, nodes, combinationNames }: Draft): LimitedFrame {
+    return {
+      roles: new Set(members.flatMap(({ role }) => role ?? [])),
+      places: new Map(nodes.flatMap(({ place }) => (place === null ? [] : [[idKey(place), place] as const]))),
+      services: combinationNames.filter((name) => this.combinations.names.get(idKey(name))?.purpose === 'service'),
+    };
   }
 
   private fromSetup(): Given[] {
