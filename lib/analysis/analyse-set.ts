@@ -7,6 +7,7 @@ import { nextCriticalLoadFactor, type CriticalMemory } from './critical/neighbou
 import type { SolvedCases } from './first-order-cases';
 import type { StateTrouble } from './failures';
 import type { ImperfectionForces } from './imperfections/imperfection-forces';
+import { toLocal } from './load-vectors';
 import { memberDataFor } from './member-data';
 import { strengthScale, type PlannedState } from './plan-states';
 import { ropeAmong } from './second-order/ropes';
@@ -202,12 +203,25 @@ function troubleOf(
   job: SetJob,
   first: FirstOrder,
   slack: readonly number[],
-  { why, reached, member = 0 }: SecondOrderFailure,
+  { why, reached, member = 0, movement }: SecondOrderFailure,
 ): StateTrouble {
   if (why === 'mechanism') return withoutThem(job, slack);
   if (why === 'not settled') return { kind: why, reached };
   const criticalLoadFactor = alphaOf(job, first);
-  return why === 'too far' ? { kind: why, reached, member, criticalLoadFactor } : { kind: why, reached, criticalLoadFactor };
+  const pulls = movement && stretchesOf(job, movement);
+  const rest = { reached, criticalLoadFactor, pulls };
+  return why === 'too far' ? { kind: why, member, ...rest } : { kind: why, ...rest };
+}
+
+const u = new Float64Array(6);
+
+/** How far each tie is stretched by a movement along node axes. */
+function stretchesOf({ solved: { data, angles }, ties }: SetJob, movement: Float64Array): number[] {
+  return ties.map((tie) => {
+    const m = data[tie]!;
+    toLocal(m, angles, movement, 3 * m.start, 3 * m.end, u);
+    return u[3]! - u[0]!;
+  });
 }
 
 function withoutThem({ frame, t, solved }: SetJob, slack: readonly number[]): StateTrouble {

@@ -106,7 +106,8 @@ function settled(
       if (!trial.ok) {
         trouble = trial.trouble;
         const why = troubleWords(frame, planned.loadScale, planned.reduced, trouble);
-        return trouble.kind === 'free' ? { ...trouble, ok: false, why } : { ok: false, why, caught: false };
+        if (trouble.kind === 'free') return { ...trouble, ok: false, why };
+        return { ok: false, why, caught: false, pulls: 'pulls' in trouble ? trouble.pulls : undefined };
       }
       // passes of sets that are left again count too
       iterations += trial.state.method?.iterations ?? 1;
@@ -119,9 +120,9 @@ function settled(
     const method = state.method && { ...state.method, iterations };
     return { found: { state: { ...state, method }, outOfBalance, handled }, slack: result.slack, iterations };
   }
-  if (typeof result.why === 'string') return tieFailure(frame, planned.name, result.members, result.why);
+  if (typeof result.why === 'string') return tieFailure(frame, planned.name, { ...result, why: result.why });
   const kept: StateTrouble | null = trouble;
   if (kept !== null && (kept as StateTrouble).kind !== 'free')
     return stateFailure(frame, planned.name, planned.loadScale, planned.reduced, kept);
-  return tieFailure(frame, planned.name, result.members, result.why.trial);
+  return tieFailure(frame, planned.name, { ...result, why: result.why.trial });
 }

@@ -41,10 +41,24 @@ function stubRemedy(frame: Frame): string | null {
 
 /** Why one state has no position of equilibrium. */
 export type StateTrouble =
-  /** Followed in stable equilibrium up to this share of its loads; α_cr, null = none or not known. */
-  | { readonly kind: 'unstable'; readonly reached: number; readonly criticalLoadFactor: number | null }
+  /**
+   * Followed in stable equilibrium up to this share of its loads; α_cr, null = none or not known. `pulls`: how far each tie, in
+   * order, is stretched as it gives way.
+   */
+  | {
+      readonly kind: 'unstable';
+      readonly reached: number;
+      readonly criticalLoadFactor: number | null;
+      readonly pulls?: readonly number[];
+    }
   /** Beyond this share of its loads a member (index) turns further than small displacements allow. */
-  | { readonly kind: 'too far'; readonly reached: number; readonly member: number; readonly criticalLoadFactor: number | null }
+  | {
+      readonly kind: 'too far';
+      readonly reached: number;
+      readonly member: number;
+      readonly criticalLoadFactor: number | null;
+      readonly pulls?: readonly number[];
+    }
   | { readonly kind: 'not settled'; readonly reached: number }
   /** A member (index) whose axial force reaches what its section can carry, so that nothing of its stiffness is left. */
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
@@ -108,16 +122,25 @@ function figure(value: number): string {
   return String(Math.floor(value * 1000 * (1 + 1e-9)) / 1000);
 }
 
+/** Ties named of a failure; of more they are counted. */
+const mostTies = 12;
+
 /** A state whose tension-only members find no set. */
-export function tieFailure(frame: Frame, name: string, members: readonly number[], why: 'repeated' | 'passes' | string): Failure {
+export function tieFailure(
+  frame: Frame,
+  name: string,
+  { members, passes, why }: { readonly members: readonly number[]; readonly passes: number; readonly why: 'repeated' | 'passes' | string }, // prettier-ignore
+): Failure {
   const ids = members.map((member) => frame.members[member]!.id);
   const one = ids.length === 1;
-  const named = `its tension-only member${one ? '' : 's'} ${ids.join(', ')}`;
+  const some =
+    ids.length > mostTies ? `${ids.slice(0, mostTies - 1).join(', ')} and ${ids.length - mostTies + 1} more` : ids.join(', ');
+  const named = `its tension-only member${one ? '' : 's'} ${some}`;
   const reason =
     why === 'repeated'
       ? `${named} never ${one ? 'settles' : 'settle'} as taut or slack`
       : why === 'passes'
-        ? `${named} did not settle as taut or slack in 50 passes`
+        ? `${named} did not settle as taut or slack in ${passes} passes`
         : `${named} ${one ? 'is' : 'are'} slack, and without ${one ? 'it' : 'them'} ${why}`;
   return { code: 'not-solved', node: null, message: `${name}: ${reason}` };
 }

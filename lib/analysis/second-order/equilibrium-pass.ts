@@ -13,11 +13,15 @@ export interface Work {
   readonly input: SecondOrderInput;
   /** 2 = axial forces bend; 1 = they don't. */
   readonly order: 1 | 2;
+  /** By member, whether it is tension only; null where none is. */
+  readonly ties: readonly boolean[] | null;
   /** Supports are moved. */
   readonly settled: boolean;
   passes: number;
   /** Share of the loads whose axial forces are at work; movements are those of the whole loads under them. */
   share: number;
+  /** Largest axial force taken in the last pass, N; kept where there are ties. */
+  largest: number;
   /** Largest axial stiffness × movement of the last pass, N. */
   handled: number;
   /** Largest turn of a member's chord in the last pass, rad, and whose (index). */
@@ -69,7 +73,8 @@ export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
       held[i] = 0;
     }
   }
-  return { input, order, settled, passes: 0, share: 1, handled: 0, turn: 0, turned: 0 };
+  const ties = frame.members.some(({ tensionOnly }) => tensionOnly) ? frame.members.map(({ tensionOnly }) => tensionOnly) : null;
+  return { input, order, ties, settled, passes: 0, share: 1, largest: 0, handled: 0, turn: 0, turned: 0 };
 }
 
 /** Whether first-order stiffness alone holds the frame. */
@@ -87,6 +92,20 @@ function factored({ t, space }: SecondOrderInput): boolean {
   return factor(space.K, t, space.diagonal, space.inner, space.pivots, pivotTolerance) < 0;
 }
 
+/** Mean compression below this share of the frame's largest axial force is none. */
+const nothing = 1e-7;
+
+/**
+ * Axial force that bends a member, at its start; null = none does. A taut tie that is pressed on the way to the right set never
+ * buckles as a strut: it will be let go. (One that is kept without force is far below `nothing`.)
+ */
+export function bendingForce({ input, order, ties, share, largest }: Work, i: number): number | null {
+  if (order === 1) return null;
+  const { N, loadings } = input.space;
+  if (!ties?.[i]) return N[i]!;
+  return N[i]! + 0.5 * share * loadings[i]!.endN < -nothing * largest ? null : N[i]!;
+}
+
 const piece = emptyPiece();
 const buckled: Buckled = { yes: false };
 const u = new Float64Array(6);
@@ -96,10 +115,14 @@ const u = new Float64Array(6);
  * @returns false where K(N) is not positive definite, members between their nodes included
  */
 export function respond(work: Work): boolean {
-  const { input, order, settled } = work;
+  const { input, settled } = work;
   const { frame, t, angles, data, slack, space } = input;
   const { K, d, N, nodeForces, all, loadings, answer, held, inner } = space;
   work.passes++;
+  if (work.ties) {
+    work.largest = 0;
+    for (let i = 0; i < N.length; i++) work.largest = Math.max(work.largest, Math.abs(N[i]!));
+  }
   K.fill(0);
   for (let p = 0; p < t.size; p++) {
     const o = 3 * t.nodeAt[p]!;
@@ -112,7 +135,7 @@ export function respond(work: Work): boolean {
     if (slack?.[i]) continue;
     const m = data[i]!;
     const loading = loadings[i]!;
-    memberChain(m, loading, order === 2 ? N[i]! : null, true, piece, buckled, work.share);
+    memberChain(m, loading, bendingForce(work, i), true, piece, buckled, work.share);
     if (buckled.yes) return false;
     addMember(K, t, m, piece, angles);
     let X1 = -held[i]!;

@@ -1,7 +1,7 @@
 import { endForces, endInNodeAxes, toLocal } from '../load-vectors';
 import { copyOf, numbers } from '../numbers';
 import { takeReactions } from '../recover';
-import type { Work } from './equilibrium-pass';
+import { bendingForce, type Work } from './equilibrium-pass';
 import { clampedTurns, type Turns } from './joint-turns';
 import { memberChain } from './member-chain';
 import { emptyPiece } from './piece';
@@ -17,9 +17,9 @@ const turns: Turns = { start: 0, end: 0 };
  * along and square to their original axes; V = dM/dx is square to the deflected one: V = (Q + N ψ)/(1 + N/GAv). README §8.
  */
 export function recoverSecondOrder(work: Work, change: number): SecondOrderState {
-  const { input, order } = work;
+  const { input } = work;
   const { frame, t, angles, data, slack, loadScale, space } = input;
-  const { N, loadings, held } = space;
+  const { loadings, held } = space;
   const nodes = frame.nodes.length;
   const all = copyOf(space.all);
   const asked = numbers(3 * nodes);
@@ -29,8 +29,9 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
     if (slack?.[i]) continue;
     const m = data[i]!;
     const loading = loadings[i]!;
-    const bend = order === 2 ? N[i]! : 0;
-    memberChain(m, loading, order === 2 ? bend : null, false, piece, { yes: false });
+    const force = bendingForce(work, i);
+    const bend = force ?? 0;
+    memberChain(m, loading, force, false, piece, { yes: false });
     toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
     clampedTurns(m, piece, u, turns);
     u[2] = turns.start;
@@ -55,7 +56,7 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
       asked[3 * node + 1] = asked[3 * node + 1]! + y;
       asked[3 * node + 2] = asked[3 * node + 2]! + q[3 * end + 2]!;
     }
-    const endN = order === 2 ? bend + loading.endN : 0;
+    const endN = force === null ? 0 : bend + loading.endN;
     const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
     forces[6 * i] = -q[0]! / loadScale + 0;
     forces[6 * i + 1] = (q[1]! + bend * u[2]!) / (1 + bend * slip) / loadScale + 0;

@@ -4,6 +4,7 @@ import type { Topology } from '../topology';
 import { prepare, respond, standsWithoutForces, type Work } from './equilibrium-pass';
 import { forget, nextGuess } from './next-guess';
 import { recoverSecondOrder } from './recover-second-order';
+import { givingWay } from './giving-way';
 import { repels } from './repels';
 import type { SecondOrderSpace } from './second-order-space';
 
@@ -51,6 +52,8 @@ export interface SecondOrderFailure {
   readonly why: 'unstable' | 'too far' | 'mechanism' | 'not settled';
   /** Too far: the member (index) that turns. */
   readonly member?: number;
+  /** How it gives way, to the side that it leans to, 3 a node along node axes; where slack ties might catch it. */
+  readonly movement?: Float64Array;
 }
 
 /** Axial forces stand still when none changes by more than this share of the largest. */
@@ -151,7 +154,8 @@ function settle(work: Work, share: number): Settled {
 
 /** The load put on in steps, each from the equilibrium before it, halved where it is too long. */
 function inSteps(work: Work): SecondOrderResult {
-  const { N } = work.input.space;
+  const { input } = work;
+  const { N } = input.space;
   const kept = new Float64Array(N.length);
   let reached = 0;
   let failure: Pick<SecondOrderFailure, 'why' | 'member'> = { why: 'unstable' };
@@ -170,7 +174,9 @@ function inSteps(work: Work): SecondOrderResult {
     }
   }
   if (reached === 0 && !standsWithoutForces(work)) return { ok: false, reached, why: 'mechanism' };
-  return { ok: false, reached, ...failure };
+  if (!input.slack) return { ok: false, reached, ...failure };
+  N.set(kept);
+  return { ok: false, reached, ...failure, movement: givingWay(work, reached) };
 }
 
 /** Why the state at a load share is none; null where it is one. */

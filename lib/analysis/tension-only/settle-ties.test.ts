@@ -64,6 +64,35 @@ describe('which ties are slack', () => {
     expect(without(false)).toMatchObject({ ok: false, members: [0, 1], why: { trial: 'it can move' } });
   });
 
+  it('are taken up where the frame gives way without them: the one that is pulled the most as it does', () => {
+    const found = settleTies(
+      [0, 1, 2],
+      (slack) => {
+        return slack.length === 3 ? { ok: false, why: 'unstable', caught: false, pulls: [-2, 0.5, 1] } : forces(-3, -1, 4);
+      },
+      [0, 1, 2],
+    );
+    expect(found).toMatchObject({ ok: true, slack: [0, 1] });
+    const lost = settleTies([0], () => ({ ok: false, why: 'unstable', caught: false, pulls: [-1] }), [0]);
+    expect(lost).toMatchObject({ ok: false, why: { trial: 'unstable' } });
+  });
+
+  it('change one by one as often as there are many of them', () => {
+    const ties = Array.from({ length: 120 }, (_, i) => i);
+    // all at once it can move; then each that is let go presses the next
+    const found = settleTies(ties, (slack) =>
+      slack.length > 100
+        ? { ok: false, why: 'it can move', caught: false }
+        : forces(
+            ...ties.map((i) =>
+              i < 100 ? (i <= slack.length ? -1 - 1 / (1 + i) : slack.length < 1 ? -1 : 1) : slack.length < 1 ? -1 : 1,
+            ),
+          ),
+    );
+    expect(found).toMatchObject({ ok: true });
+    expect(found.passes).toBeGreaterThan(50);
+  });
+
   it('hand over from one that is pressed to the slack one that catches the frame as it shortens', () => {
     const free = { ok: false, why: 'it can move', caught: true, stretches: [1, -1] } as const;
     const of: Record<string, ReturnType<typeof forces>> = { '': forces(-5, -1), '0': forces(-1, -3), '1': forces(2, -1) };

@@ -15,6 +15,8 @@ export type TieTrial<T> =
       readonly caught: boolean;
       /** How far each tie is stretched as it does, in the order of `ties`, up to a common factor of any sign. */
       readonly stretches?: readonly number[];
+      /** Unstable: how far each tie is stretched as the frame gives way, to the side that it leans to. */
+      readonly pulls?: readonly number[];
     };
 
 export type SettledTies<T> =
@@ -28,8 +30,10 @@ export type SettledTies<T> =
       readonly why: 'repeated' | 'passes' | { readonly trial: string };
     };
 
-/** Passes after which no set is looked for any longer (engine, Second order and stability). */
+/** Passes after which no set is looked for any longer (engine, Second order and stability) … */
 const mostPasses = 50;
+/** … and for each tie where they change one by one: a tall bent has more of them than that. */
+const mostOfEach = 3;
 
 /**
  * Which tension-only members are slack: taut ones without tension are let go, slack ones that would be stretched are taken
@@ -74,7 +78,7 @@ function allAtOnce<T>(
     if (passes() >= mostPasses) return { ok: false, members: ascending(changed), passes: passes(), why: 'passes' };
     seen.add(slack.join());
     const trial = analyse(slack);
-    if (!trial.ok && slack !== start) return null;
+    if (!trial.ok && (slack !== start || trial.pulls)) return null;
     if (!trial.ok) return { ok: false, members: slack, passes: passes(), why: { trial: trial.why } };
     const turning = wrong(ties, slack, trial.forces, trial.nothing);
     if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes: passes() };
@@ -90,6 +94,7 @@ function oneByOne<T>(
   analyse: Analyse<T>,
   passes: () => number,
 ): SettledTies<T> {
+  const last = Math.max(mostPasses, mostOfEach * ties.length);
   const seen = new Set<string>([start.join()]);
   const changed = new Set<number>();
   const kept = new Set<number>();
@@ -102,12 +107,21 @@ function oneByOne<T>(
     why,
   });
   for (;;) {
-    if (!trial.ok) return stopped({ trial: trial.why }, slack);
+    if (!trial.ok) {
+      const back = trial.pulls ? mostPulled(ties, slack, trial.pulls) : null;
+      const next = back === null ? slack : turned(ties, slack, [back]);
+      if (back === null || seen.has(next.join()) || passes() >= last) return stopped({ trial: trial.why }, slack);
+      changed.add(back);
+      seen.add(next.join());
+      slack = next;
+      trial = analyse(slack);
+      continue;
+    }
     const { forces, nothing } = trial;
     const force = (member: number): number => Math.abs(forces[ties.indexOf(member)]!);
     const turning = wrong(ties, slack, forces, nothing).filter((member) => !(kept.has(member) && force(member) <= nothing));
     if (turning.length === 0) return { ok: true, solution: trial.solution, slack, passes: passes() };
-    if (passes() >= mostPasses) return stopped('passes', changed);
+    if (passes() >= last) return stopped('passes', changed);
     // the worst, the first of equals
     const worst = turning.reduce((most, member) => (force(member) > force(most) * (1 + 1e-9) ? member : most));
     const next = turned(ties, slack, [worst]);
@@ -148,6 +162,18 @@ function catching(
     if (!slack.includes(member) || !(stretched > most)) return;
     found = member;
     most = stretched;
+  });
+  return found;
+}
+
+/** The slack tie that is stretched the most as the frame gives way; null if none is. */
+function mostPulled(ties: readonly number[], slack: readonly number[], pulls: readonly number[]): number | null {
+  let found: number | null = null;
+  let most = 1e-6 * Math.max(...pulls.map(Math.abs));
+  ties.forEach((member, i) => {
+    if (!slack.includes(member) || !(pulls[i]! > most)) return;
+    found = member;
+    most = pulls[i]!;
   });
   return found;
 }
