@@ -4,6 +4,7 @@ import { packModel } from '@/db/encode';
 import { ListWriter } from '@/db/lists/list-writer';
 import type { RawDatabase } from '@/db/open';
 import { insertCombinations } from '@/db/queries/combinations';
+import { insertRevisionParts } from '@/db/queries/own-parts';
 import { evaluationOf, type StoredState } from '@/db/queries/results';
 import { inShortTransactions } from '@/db/short-transactions';
 import { shownCombinations } from '@/lib/combinations/shown-combinations';
@@ -69,6 +70,7 @@ export function insertIntake(raw: RawDatabase, office: number, revision: number,
   insertProblems(raw, revision, intake.problems);
   const read = intake.frames.flatMap(({ frame }) => frame ?? []);
   insertCombinations(raw, revision, shownCombinations(read, intake.settings.combinationSet));
+  insertRevisionParts(raw, office, revision, intake.parts ?? []);
   const carried = insertFrames(raw, revision, found, intake);
   const stopped = intake.frames.filter((one) => one.frame === null).length;
   const count = (severity: string) => intake.problems.filter((one) => one.severity === severity).length;

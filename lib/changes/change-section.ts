@@ -6,6 +6,8 @@ import { type CellEdits, withCells } from '@/lib/changes/with-cell';
 import type { RawCell, RawRow } from '@/lib/intake/files/raw-sheet';
 import { idText } from '@/lib/intake/ids';
 import type { Intake } from '@/lib/intake/intake';
+import { ownSheets } from '@/lib/intake/own/own-sheets';
+import type { OwnThing } from '@/lib/intake/own/own-thing';
 import type { FrameSeen } from '@/lib/intake/read-input';
 import { plainCell } from '@/lib/intake/rows/cell-marks';
 import { partOf, rowsOfPart, type StoredInput } from '@/lib/intake/rows/input-rows';
@@ -36,9 +38,10 @@ export const memberKey = (frame: string, member: string): string => `${frame}\n$
 
 const identity = { name: '', sha256: '', files: [] };
 
-export function readForChange(input: StoredInput): InputRead {
+/** @param own what the office offers beside the sheets */
+export function readForChange(input: StoredInput, own: readonly OwnThing[] = []): InputRead {
   const seen: FrameSeen[] = [];
-  const intake = readRows({ ...input, identity, problems: [] }, { onFrame: (frame) => seen.push(frame) });
+  const intake = readRows({ ...input, identity, problems: [] }, { own, onFrame: (frame) => seen.push(frame) });
   return { intake, seen };
 }
 
@@ -122,7 +125,17 @@ export function changeSection(input: StoredInput, read: InputRead, change: Secti
       })); // prettier-ignore
     }
   }
-  return { input: edited(input, edits, added, by), section: to.section, members: changed };
+  const after = edited(input, edits, added, by);
+  return { input: withOwn(after, read.seen[0]?.batch.ownSections.taken ?? new Set()), section: to.section, members: changed };
+}
+
+/** The input with the office's own sections that it takes: its rows say by themselves what its frames are made of. */
+function withOwn({ sheets, rows }: StoredInput, taken: ReadonlySet<OwnThing>): StoredInput {
+  const parts = ownSheets([...taken], sheets.length, sheets.map(({ name }) => name)).flatMap((sheet) => sheet.parts); // prettier-ignore
+  return {
+    sheets: [...sheets, ...parts.map(({ name, file, decimalMark }) => ({ name, file, decimalMark }))],
+    rows: [...rows, ...parts.flatMap((part) => rowsOfPart(part, part.order))],
+  };
 }
 
 /** A template's row once more for one frame, whose place it takes there. */
@@ -146,7 +159,8 @@ function sectionNamed({ seen }: InputRead, name: string): { section: Section; ty
   if (!sections) return { refused: 'No frame of this revision can run, so no section can be changed. Mend its sheets first.' };
   const found = sections.find(name);
   if ('suggestion' in found) {
-    const hint = found.suggestion === null ? 'Name a designation of the library or a section of the Sections sheet.' : `Did you mean ${found.suggestion}?`; // prettier-ignore
+    const hint = found.suggestion === null ? 'Name a designation of the library, one of the office’s own or a section of the Sections sheet.' : `Did you mean ${found.suggestion}?`; // prettier-ignore
+    if (found.retired) return { refused: `${name} is no longer offered by the office. Name another section.` };
     return { refused: `There is no section “${name}”. ${hint}` };
   }
   if (found.section === null) return { refused: `The row of ${name} on the Sections sheet is wrong. Mend it first.` };

@@ -1,6 +1,7 @@
 /** What a change of section would do, read from its rows before anything runs. */
 import type { SectionChange } from '@/lib/changes/change';
 import { changeSection, memberKey, readForChange, type InputRead, type Refused } from '@/lib/changes/change-section';
+import type { OwnThing } from '@/lib/intake/own/own-thing';
 import type { FrameSeen } from '@/lib/intake/read-input';
 import type { StoredInput } from '@/lib/intake/rows/input-rows';
 import type { Material, Member, Section } from '@/lib/model/frame';
@@ -49,11 +50,16 @@ export interface Previewed {
  * Makes the change to the rows and reads them again: every member asked for has the new section then, every other member the
  * one it had, no frame stops that could run and no member takes another material. Else the change is refused with the reason.
  */
-export function previewSection(input: StoredInput, change: SectionChange, by: string): Previewed | Refused {
-  const before = readForChange(input);
+export function previewSection(
+  input: StoredInput,
+  change: SectionChange,
+  by: string,
+  own: readonly OwnThing[] = [],
+): Previewed | Refused {
+  const before = readForChange(input, own);
   const made = changeSection(input, before, change, by);
   if ('refused' in made) return made;
-  const after = readForChange(made.input);
+  const after = readForChange(made.input, own);
   const wrong = refuse(before, after, made.members);
   if (wrong !== null) return { refused: wrong };
 

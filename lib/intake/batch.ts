@@ -1,5 +1,6 @@
 import type { Family } from '@/lib/intake/families/family';
 import type { Place, ProblemList } from '@/lib/intake/problem-list';
+import type { Offered } from '@/lib/intake/own/offered';
 import type { PartOrigins } from '@/lib/intake/own/part-origins';
 import type { Reader, Reading } from '@/lib/intake/reader';
 import type { LoadCases } from '@/lib/intake/sheets/load-cases';
@@ -7,7 +8,7 @@ import type { Materials } from '@/lib/intake/sheets/materials';
 import type { Sections } from '@/lib/intake/sheets/sections';
 import type { SheetName } from '@/lib/intake/sheet-definitions';
 import type { Row, Table } from '@/lib/intake/table';
-import type { FamilyOrigin } from '@/lib/model/frame';
+import type { FamilyOrigin, Section } from '@/lib/model/frame';
 import type { OfficeLimit } from '@/lib/model/office-limit';
 import type { SettingName, SettingOrigins, Settings } from '@/lib/model/settings';
 import type { System } from '@/lib/units/quantity';
@@ -53,6 +54,8 @@ export interface Batch {
   readonly framesByKey: ReadonlyMap<string, FrameEntry>;
   readonly sections: Sections;
   readonly materials: Materials;
+  /** The office's own sections: what the batch has taken of them and its rows don't hold yet. */
+  readonly ownSections: Offered<Section>;
   readonly cases: LoadCases;
   readonly partOrigins: PartOrigins;
   /** The office's own limits on movement, where the sheets give none. */

@@ -92,7 +92,7 @@ export function readInput(raw: RawInput, options: IntakeOptions = {}): Intake {
   const cases = new LoadCases(tables.get('Load cases'), loads, known, [...families.values()], reader, problems);
   const batch: Batch = {
     problems, reader, system, settings: setup.settings, origins: setup.origins, settingPlaces: setup.places, tables, families,
-    frames: frames.list, framesByKey: frames.byKey, sections, materials, cases, partOrigins, officeLimits: options.officeLimits ?? [],
+    frames: frames.list, framesByKey: frames.byKey, sections, materials, ownSections: own.sections, cases, partOrigins, officeLimits: options.officeLimits ?? [],
   }; // prettier-ignore
 
   const read = readFrames(batch, options.onFrame);

@@ -3,6 +3,7 @@ import type { OpenDatabase } from '@/db/open';
 import { listChanges, type Making } from '@/db/queries/changes';
 import { findSetVersion } from '@/db/queries/combination-sets';
 import { listOfficeLimits } from '@/db/queries/office-limits';
+import { listOwnThings } from '@/db/queries/own-parts';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { deleteUploads, insertUpload, listUploadedFiles } from '@/db/queries/uploads';
 import { inputRows } from '@/db/queries/waiting';
@@ -23,17 +24,20 @@ import { inputWorkbook } from '@/lib/reports/input-workbook/input-workbook';
 export async function makeChanged({ db, raw }: OpenDatabase, office: number, revision: number, making: Making): Promise<Intake> {
   const [changes, problems] = await Promise.all([listChanges(db, office, revision), listProblems(db, office, making.from)]);
   const before = await storedInput({ db, raw }, office, making.from);
+  const own = await listOwnThings(db, office);
   const asked = changes.map(({ change }) => change);
-  const after = applyChanges(before, asked, making.personName, await officeSets(db, office, asked));
-  const file = inputWorkbook(after, `${making.batch} ${making.letter}`);
+  const after = applyChanges(before, asked, making.personName, await officeSets(db, office, asked), own);
+  const unnamed = { name: '', sha256: '', files: [] };
+  const read = readRows(
+    { ...after, identity: unnamed, problems: problems.filter(isOfFile) },
+    { officeLimits: await listOfficeLimits(db, office), own },
+  );
+  const file = inputWorkbook(read, `${making.batch} ${making.letter}`);
   const identity = identityOf([file]);
   const [{ sha256, size } = { sha256: '', size: 0 }] = identity.files;
   await deleteUploads(db, office, revision);
   await insertUpload(db, office, { revision, ...file, sha256, size, person: making.person });
-  return readRows(
-    { ...after, identity, problems: problems.filter(isOfFile) },
-    { officeLimits: await listOfficeLimits(db, office) },
-  );
+  return { ...read, input: identity };
 }
 
 /** A revision's input as it is kept; of one that an earlier version kept without its sheets, its files are read again. */

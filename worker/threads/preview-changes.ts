@@ -1,4 +1,5 @@
 /** In a thread: what changes of section would do to a revision, from its rows; nothing is stored. */
+import { listOwnThings } from '@/db/queries/own-parts';
 import { applyChanges } from '@/lib/changes/apply-changes';
 import type { Change } from '@/lib/changes/change';
 import { ChangeRefused } from '@/lib/changes/change-refused';
@@ -23,12 +24,13 @@ export type PreviewAnswer =
 export async function previewChanges({ file, office, revision, changes, by }: PreviewTask): Promise<PreviewAnswer> {
   const database = openOnce(file);
   const sets = await officeSets(database.db, office, changes);
+  const own = await listOwnThings(database.db, office);
   let input = await storedInput(database, office, revision);
   const previews: (SectionPreview | null)[] = [];
   for (const change of changes) {
     if (change.kind !== 'section') {
       try {
-        input = applyChanges(input, [change], by, sets);
+        input = applyChanges(input, [change], by, sets, own);
       } catch (error) {
         if (error instanceof ChangeRefused) return { refused: `${error.message}.`, field: 'combinations' };
         throw error;
@@ -36,7 +38,7 @@ export async function previewChanges({ file, office, revision, changes, by }: Pr
       previews.push(null);
       continue;
     }
-    const previewed = previewSection(input, change, by);
+    const previewed = previewSection(input, change, by, own);
     if ('refused' in previewed) return previewed;
     input = previewed.input;
     previews.push(previewed.preview);

@@ -1,5 +1,6 @@
 /** In a thread of its own with bounded memory: a revision's uploaded files, or an earlier one's changed rows → what they say, stored. */
 import { listOfficeLimits } from '@/db/queries/office-limits';
+import { listOwnThings } from '@/db/queries/own-parts';
 import { insertIntake, type IntakeStored } from '@/db/queries/intake';
 import { findMaking } from '@/db/queries/changes';
 import { listUploadedFiles, listUploads } from '@/db/queries/uploads';
@@ -29,6 +30,7 @@ export async function readRevision(task: ReadTask): Promise<IntakeStored> {
     shouldStop: () => performance.now() > until,
     stopsAfter: `${task.deadline_s} s`,
     officeLimits: await listOfficeLimits(db, task.office),
+    own: await listOwnThings(db, task.office),
   });
   return insertIntake(raw, task.office, task.revision, intake);
 }

@@ -31,6 +31,8 @@ export interface PartOrigin {
   readonly version: number | null;
   /** "Sections row 4", the office's note, or what a sheet says as its source; null = nothing more is known. */
   readonly note: string | null;
+  /** The office's own name for it, where it is the office's. */
+  readonly own: string | null;
   /** Frames that are made of it. */
   readonly frames: number;
 }

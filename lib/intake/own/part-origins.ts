@@ -31,11 +31,14 @@ export class PartOrigins {
   }
 }
 
-function originOf(row: Row | null): Pick<PartOrigin, 'origin' | 'version' | 'note'> {
-  if (!row) return { origin: 'library', version: null, note: null };
+function originOf(row: Row | null): Omit<PartOrigin, 'kind' | 'name' | 'frames'> {
+  if (!row) return { origin: 'library', version: null, note: null, own: null };
   const own = versionOf(row);
-  if (own) return { origin: 'office', ...own };
+  if (own) {
+    const named = rawCell(row, row.part.definition.name === 'Sections' ? 'section' : 'material');
+    return { origin: 'office', ...own, own: named?.text ?? null };
+  }
   const said = rawCell(row, 'source')?.text.trim() ?? '';
   const place = `${row.part.raw.name} row ${row.raw.row}`;
-  return { origin: 'sheet', version: null, note: said === '' ? place : `${place}: ${said}` };
+  return { origin: 'sheet', version: null, note: said === '' ? place : `${place}: ${said}`, own: null };
 }
