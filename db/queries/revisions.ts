@@ -38,6 +38,16 @@ export interface RevisionRecord {
   readonly runFinishedAt: string | null;
   /** Letter of the revision it was made from by changes (queries/changes.ts); null = its files were brought in. */
   readonly madeFrom: string | null;
+  /** Who sent it to check last. */
+  readonly sent: Act | null;
+  /** Who passed it, as long as it was not returned afterwards. */
+  readonly checked: Act | null;
+}
+
+interface Act {
+  readonly id: number;
+  readonly name: string;
+  readonly at: string;
 }
 
 /**
@@ -164,6 +174,8 @@ function revisions(db: Db, office: number) {
     .innerJoin('person as maker', 'maker.id', 'revision.created_by')
     .leftJoin('person as runner', 'runner.id', 'revision.run_by')
     .leftJoin('revision as earlier', 'earlier.id', 'revision.made_from')
+    .leftJoin('person as sender', 'sender.id', 'revision.sent_by')
+    .leftJoin('person as checker', 'checker.id', 'revision.checked_by')
     .selectAll('revision')
     .select([
       'batch.name as batch_name',
@@ -173,6 +185,8 @@ function revisions(db: Db, office: number) {
       'maker.name as maker_name',
       'runner.name as runner_name',
       'earlier.letter as earlier_letter',
+      'sender.name as sender_name',
+      'checker.name as checker_name',
     ])
     .where('revision.office', '=', office);
 }
@@ -214,5 +228,10 @@ function record(row: Read): RevisionRecord {
     runStartedAt: row.run_started_at,
     runFinishedAt: row.run_finished_at,
     madeFrom: row.earlier_letter,
+    sent: act(row.sent_by, row.sender_name, row.sent_at),
+    checked: act(row.checked_by, row.checker_name, row.checked_at),
   };
 }
+
+const act = (id: number | null, name: string | null, at: string | null): Act | null =>
+  id === null || at === null ? null : { id, name: name ?? '', at };
