@@ -23,6 +23,12 @@ export const pages = {
   people: '/people',
   sections: '/sections',
   issued: '/issued',
+  /** One issue as its client reads it, and as the office does. */
+  issuedOne: (issue: number) => `/issued/${issue}`,
+  issue: (issue: number) => `/issues/${issue}`,
+  issues: (project?: number) => `/issues${project === undefined ? '' : `?project=${project}`}`,
+  /** Where a revision is issued from. */
+  toIssue: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/issue`,
   combinationSets: '/combinations',
   combinationSet: (set: number, version?: number) => `/combinations/${set}${version === undefined ? '' : `?version=${version}`}`,
   project: (project: number) => `/projects/${project}`,
@@ -74,6 +80,15 @@ export const api = {
   batches: (project: number) => `/api/projects/${project}/batches`,
   batch: (batch: number) => `/api/batches/${batch}`,
   revisions: (batch: number) => `/api/batches/${batch}/revisions`,
+  toIssue: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/issue`,
+  whoIssues: '/api/issues/who',
+  issuePart: (issue: number, part: 'withdraw' | 'clients' | 'engine') => `/api/issues/${issue}/${part}`,
+  issueFile: (issue: number, file: string) => `/api/issues/${issue}/files/${file}`,
+  answer: (issue: number, question: number) => `/api/issues/${issue}/questions/${question}`,
+  issuedFile: (issue: number, file: string) => `/api/issued/${issue}/files/${file}`,
+  receipt: (issue: number) => `/api/issued/${issue}/receipt`,
+  issuedQuestions: (issue: number) => `/api/issued/${issue}/questions`,
+  issuedQuestion: (issue: number, question: number) => `/api/issued/${issue}/questions/${question}`,
   revision: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}`,
   part: (
     batch: number,

@@ -28,9 +28,9 @@ export const moreClientsInput = z.strictObject({ clients: people.min(1, 'Choose 
 
 export const withdrawInput = z.strictObject({ reason: text('why it is withdrawn', 1000) });
 
-/** @param frame a number in sheet order, from 1; left out for a question on the whole issue */
+/** `frame`: its number in sheet order, from 1, or its name; left out for a question on the whole issue. */
 export const questionInput = z.strictObject({
-  frame: z.number().int().positive().nullish(),
+  frame: z.union([z.number().int().positive(), z.string().trim().min(1).max(200)], { error: 'Name the frame.' }).nullish(),
   text: text('the question', 2000),
 });
 
