@@ -2,6 +2,7 @@
 import type { OpenDatabase } from '@/db/open';
 import { findIssueBasis, type IssueBasis } from '@/db/queries/issue-basis';
 import { insertIssue, type IssueAsked } from '@/db/queries/issue-making';
+import { isIndependent } from '@/lib/checking/independence';
 import { whyNotIssue } from '@/lib/issuing/why-not-issue';
 import type { WorkQueue } from './queue';
 
@@ -18,7 +19,7 @@ export function whyNot(basis: IssueBasis, person: Issuer): string[] {
   return whyNotIssue({
     role: person.role,
     checkersIssue,
-    prepared: preparers.has(person.id),
+    prepared: !isIndependent(person.id, preparers),
     revisionState: revision.state,
     laterInForce,
     making,

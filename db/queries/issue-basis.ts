@@ -1,6 +1,9 @@
 import type { Db } from '@/db/open';
+import { findChecking } from '@/db/queries/checking';
+import { listPreparers } from '@/db/queries/checking-people';
 import { readOfficeSetting } from '@/db/queries/office-settings';
 import { findRevisionById, type RevisionRecord } from '@/db/queries/revisions';
+import type { Work } from '@/lib/checking/independence';
 import { issueNumber, numberStem } from '@/lib/issuing/issue-number';
 import type { IssuedCounts } from '@/lib/issuing/issue-sentence';
 import type { Acceptance, IssueCover, Signature } from '@/lib/reports/issue-cover';
@@ -13,8 +16,8 @@ export interface IssueBasis {
   /** Null until a checker has passed it. */
   readonly checked: Signature | null;
   readonly acceptances: readonly Acceptance[];
-  /** Everyone who uploaded, changed or ran a frame of it. */
-  readonly preparers: ReadonlySet<number>;
+  /** Everyone with a part in it, frames carried over included. */
+  readonly preparers: readonly Work[];
   readonly checkersIssue: boolean;
   /** Letter of a later revision of the batch whose issue is in force. */
   readonly laterInForce: string | null;
@@ -37,45 +40,32 @@ export interface IssueBasis {
 export async function findIssueBasis(db: Db, office: number, revision: number): Promise<IssueBasis | undefined> {
   const found = await findRevisionById(db, office, revision);
   if (!found) return undefined;
-  const [{ name }, checking, preparers, checkersIssue, handed, frames, number] = [
-    await db.selectFrom('office').select('name').where('id', '=', office).executeTakeFirstOrThrow(),
-    await checkingOf(db, found),
-    await preparersOf(db, found),
-    await readOfficeSetting(db, office, 'checkers issue'),
-    await handedOver(db, found),
-    await framesOf(db, revision),
-    await nextNumber(db, found),
-  ];
-  const { before, laterInForce, making } = handed;
+  const { name } = await db.selectFrom('office').select('name').where('id', '=', office).executeTakeFirstOrThrow();
+  const checking = await checkingOf(db, found);
   return {
     revision: found,
     office: name,
     ...checking,
-    preparers,
-    checkersIssue,
-    laterInForce,
-    making,
-    ...frames,
-    before,
-    number,
+    ...(await handedOver(db, found)),
+    preparers: await listPreparers(db, office, revision),
+    checkersIssue: await readOfficeSetting(db, office, 'checkers issue'),
+    counts: await countsOf(db, revision, checking.notIssued.length),
+    number: await nextNumber(db, found),
   };
 }
 
-async function checkingOf(_db: Db, revision: RevisionRecord): Promise<Pick<IssueBasis, 'prepared' | 'checked' | 'acceptances'>> {
-  const { runBy, createdBy, runFinishedAt, createdAt } = revision;
-  const prepared = { name: (runBy ?? createdBy).name, at: runFinishedAt ?? createdAt };
-  return { prepared, checked: null, acceptances: [] };
-}
-
-async function preparersOf(db: Db, revision: RevisionRecord): Promise<ReadonlySet<number>> {
-  const row = db.selectFrom('revision_frame').where('revision', '=', revision.id);
-  const [uploaded, changed, ran] = [
-    await row.select('uploaded_by as person').distinct().execute(),
-    await row.select('changed_by as person').distinct().execute(),
-    await row.select('run_by as person').distinct().execute(),
-  ];
-  const people = [...uploaded, ...changed, ...ran].flatMap(({ person }) => person ?? []);
-  return new Set([...people, revision.createdBy.id, ...(revision.runBy ? [revision.runBy.id] : [])]);
+async function checkingOf(
+  db: Db,
+  { office, id, runBy, createdBy, runFinishedAt, createdAt }: RevisionRecord,
+): Promise<Pick<IssueBasis, 'prepared' | 'checked' | 'acceptances' | 'notIssued'>> {
+  const checking = await findChecking(db, office, id);
+  const signed = ({ name, at }: Signature): Signature => ({ name, at });
+  return {
+    prepared: checking?.sent ? signed(checking.sent) : { name: (runBy ?? createdBy).name, at: runFinishedAt ?? createdAt },
+    checked: checking?.passed ? signed(checking.passed) : null,
+    acceptances: checking?.acceptances ?? [],
+    notIssued: checking?.notIssued ?? [],
+  };
 }
 
 async function handedOver(db: Db, { office, batch, id }: RevisionRecord) {
@@ -100,8 +90,8 @@ async function handedOver(db: Db, { office, batch, id }: RevisionRecord) {
   };
 }
 
-/** Verdicts of the frames that have a solution, and the frames that have none: these are not issued. */
-async function framesOf(db: Db, revision: number): Promise<Pick<IssueBasis, 'counts' | 'notIssued'>> {
+/** Verdicts of the frames that have a solution. */
+async function countsOf(db: Db, revision: number, notIssued: number): Promise<IssuedCounts> {
   const rows = await db
     .selectFrom('revision_frame')
     .select((eb) => ['verdict', eb.fn.countAll<number>().as('n')])
@@ -110,26 +100,8 @@ async function framesOf(db: Db, revision: number): Promise<Pick<IssueBasis, 'cou
     .groupBy('verdict')
     .execute();
   const of = (verdict: number): number => rows.find((row) => row.verdict === verdict)?.n ?? 0;
-  const without = await db
-    .selectFrom('revision_frame')
-    .select(['frame_id', 'status', 'reason'])
-    .where('revision', '=', revision)
-    .where('status', '!=', 'solved')
-    .orderBy('frame')
-    .execute();
-  const notIssued = without.map(({ frame_id, status, reason }) => ({ frame: frame_id, reason: reason ?? whyNone[status] }));
-  return {
-    counts: { within: of(0), near: of(1), notChecked: of(2), over: of(3), notIssued: notIssued.length },
-    notIssued,
-  };
+  return { within: of(0), near: of(1), notChecked: of(2), over: of(3), notIssued };
 }
-
-const whyNone = {
-  stopped: 'stopped by errors in its sheets',
-  waiting: 'not run',
-  'not solved': 'no solution was found',
-  solved: '',
-} as const;
 
 /** Counted over the office: two projects may share a number. A number given up by an issue that failed is given again. */
 async function nextNumber(db: Db, { office, id, project, projectNumber }: RevisionRecord): Promise<IssueBasis['number']> {

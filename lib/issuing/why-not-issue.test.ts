@@ -23,7 +23,7 @@ describe('who may issue', () => {
   it('is never one who prepared it, the lead included', () => {
     for (const role of ['lead', 'checker'] as const)
       expect(whyNotIssue({ ...ready, role, checkersIssue: true, prepared: true })).toEqual([
-        'You uploaded, changed or ran a frame of it, so somebody else issues it.',
+        'You had a part in making it, so somebody else issues it.',
       ]);
   });
 

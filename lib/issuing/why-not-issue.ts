@@ -29,7 +29,7 @@ export function whyNotIssue(one: IssuingCase): string[] {
   if (one.role === 'checker' && !one.checkersIssue)
     why.push('In this office the lead issues what a checker passed. The lead can let checkers issue, on the page of issues.');
   else if (!mayRoleIssue(one.role, one.checkersIssue)) why.push('The lead issues, or a checker where the office says so.');
-  if (one.prepared) why.push('You uploaded, changed or ran a frame of it, so somebody else issues it.');
+  if (one.prepared) why.push('You had a part in making it, so somebody else issues it.');
   if (one.making) why.push('Its files are being made already.');
   else if (one.revisionState !== 'checked') why.push(notChecked(one.revisionState));
   if (one.laterInForce !== null)
