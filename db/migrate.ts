@@ -3,6 +3,7 @@ import { up as firstTables } from '@/db/migrations/2026-12-01-first-tables';
 import { up as slimLists } from '@/db/migrations/2026-12-01-slim-lists';
 import { up as trailOfChanges } from '@/db/migrations/2026-12-01-trail-of-changes';
 import { up as whatIsCombined } from '@/db/migrations/2026-12-01-what-is-combined';
+import { up as whichIsLightest } from '@/db/migrations/2026-12-01-which-is-lightest';
 import { up as whoseCombinations } from '@/db/migrations/2026-12-01-whose-combinations';
 import { up as whoChecked } from '@/db/migrations/2026-12-01-who-checked';
 import { up as whoseSections } from '@/db/migrations/2026-12-01-whose-sections';
@@ -17,6 +18,7 @@ const migrations: Record<string, Migration> = {
   '2026-12-01-slim-lists': { up: slimLists },
   '2026-12-01-trail-of-changes': { up: trailOfChanges },
   '2026-12-01-what-is-combined': { up: whatIsCombined },
+  '2026-12-01-which-is-lightest': { up: whichIsLightest },
   '2026-12-01-who-checked': { up: whoChecked },
   '2026-12-01-who-was-issued-what': { up: whoWasIssuedWhat },
   '2026-12-01-whom-mail-reaches': { up: whomMailReaches },

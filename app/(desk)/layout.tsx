@@ -11,8 +11,12 @@ export default async function DeskLayout({ children }: { readonly children: Reac
   const words = [
     ...(may(person, 'read projects') ? [{ label: 'Projects', href: '/projects', within: ['/projects', '/batches'] }] : []),
     ...(may(person, 'read sections') ? [{ label: 'Sections', href: '/sections', within: ['/sections'] }] : []),
+    ...(may(person, 'read combination sets')
+      ? [{ label: 'Combinations', href: '/combinations', within: ['/combinations'] }]
+      : []),
     ...(may(person, 'read limits') ? [{ label: 'Limits', href: '/limits', within: ['/limits'] }] : []),
-    ...(may(person, 'read people') ? [{ label: 'People', href: '/people', within: ['/people'] }] : []),
+    ...(may(person, 'read people') ? [{ label: 'People', href: '/people', within: ['/people', '/letters'] }] : []),
+    ...(may(person, 'read what was issued') ? [{ label: 'Issued', href: '/issued', within: ['/issued'] }] : []),
   ];
   return (
     <QueryProvider>

@@ -1,6 +1,8 @@
 'use client';
+import Link from 'next/link';
 import { usePathname } from 'next/navigation';
 import { Bar } from '@/components/ui/bar';
+import { pages } from '@/lib/api/addresses';
 import { SignOut } from './sign-out';
 
 interface DeskBarProps {
@@ -18,7 +20,14 @@ export function DeskBar({ words, ...rest }: DeskBarProps) {
     <Bar
       {...rest}
       words={words.map(({ label, href, within }) => ({ label, href, current: within.some((start) => path.startsWith(start)) }))}
-      account={<SignOut />}
+      account={
+        <>
+          <Link className="link" href={pages.me}>
+            Your page
+          </Link>
+          <SignOut />
+        </>
+      }
     />
   );
 }

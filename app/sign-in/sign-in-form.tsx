@@ -1,12 +1,14 @@
 'use client';
+import Link from 'next/link';
 import { useState, type FormEvent } from 'react';
 import { signIn, type SignedIn } from '@/app/_client/credentials';
 import { SignInRow } from '@/components/sign-in/sign-in-sheet';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
+import { pages } from '@/lib/api/addresses';
 
 const words: Readonly<Record<Exclude<SignedIn, 'yes'>, string>> = {
-  no: 'The e-mail address and the password don’t belong together. Check both, or ask your office’s lead for a new password.',
+  no: 'The e-mail address and the password don’t belong together. Check both, or have a link for a new password sent to you.',
   wait: 'There were too many attempts. Wait a quarter of an hour, then try again.',
   'no answer': 'The server did not answer. Check the connection and try again.',
 };
@@ -38,7 +40,19 @@ export function SignInForm({ next }: { readonly next: string }) {
         <Field label="E-mail" name="email" type="email" autoComplete="username" autoFocus required />
       </SignInRow>
       <SignInRow>
-        <Field label="Password" name="password" type="password" autoComplete="current-password" required error={fault} />
+        <Field
+          label="Password"
+          name="password"
+          type="password"
+          autoComplete="current-password"
+          required
+          error={fault}
+          aside={
+            <Link className="link" href={pages.forgotten}>
+              Forgotten
+            </Link>
+          }
+        />
       </SignInRow>
       <SignInRow>
         <Button look="filled" type="submit" disabled={busy}>

@@ -6,10 +6,12 @@ interface SignInSheetProps {
   /** The form: E-mail, Password (components/ui/field), a filled button. It is the drawing's title block. */
   readonly children: ReactNode;
   readonly version: string;
+  /** Which sheet it is, as its title block names it. */
+  readonly sheet?: string;
 }
 
 /** Sign-in: a blank drawing sheet with zone marks, the mark as a dimensioned drawing, and the form as its title block. */
-export function SignInSheet({ children, version }: SignInSheetProps) {
+export function SignInSheet({ children, version, sheet = 'sign in' }: SignInSheetProps) {
   return (
     <div className="si-page">
       <div className="si-columns-marks" aria-hidden="true">
@@ -54,7 +56,7 @@ export function SignInSheet({ children, version }: SignInSheetProps) {
             <div className="si-cells">
               <div>
                 <div className="tb-label">Sheet</div>
-                <b>sign in</b>
+                <b>{sheet}</b>
               </div>
               <div>
                 <div className="tb-label">Version</div>

@@ -1,8 +1,11 @@
 import { instant } from '@/db/clock';
 import type { Db } from '@/db/open';
 import { findAccount } from './people';
-import { insertLink } from './links';
+import { insertActivity } from './activity';
+import { endLinks, findLink, insertLink, useLink } from './links';
 import { putInOutbox } from './outbox';
+import { endSessions, updatePassword } from './standing';
+import { endTokens } from './tokens';
 
 /** How often a new password was asked for: for an account, or from an address, since an instant. */
 export async function countResetRequests(
@@ -41,4 +44,28 @@ export async function answerResetRequests(db: Db, serverSecret: string): Promise
       await putInOutbox(within, office.id, account.email, { kind: 'password reset', link });
     });
   }
+}
+
+/** Whether the holder of a secret may choose a new password by it. */
+export async function isResetOpen(db: Db, secret: string): Promise<boolean> {
+  return (await findLink(db, 'password reset', secret)) !== undefined;
+}
+
+/**
+ * Sets the password of whoever holds a link's secret, once, and ends everything they are signed in by.
+ *
+ * @returns false for a link that does not work (any more)
+ */
+export async function resetPassword(db: Db, secret: string, passwordHash: string): Promise<boolean> {
+  return db.transaction().execute(async (within) => {
+    const link = await findLink(within, 'password reset', secret);
+    if (!link || link.person === null || !(await useLink(within, link.id))) return false;
+    const { person, office } = link;
+    await updatePassword(within, person, passwordHash);
+    await endSessions(within, person);
+    await endTokens(within, person);
+    await endLinks(within, { person });
+    await insertActivity(within, office, { what: 'set a new password by e-mail', person });
+    return true;
+  });
 }

@@ -54,21 +54,28 @@ export async function insertPerson(
   office: number,
   person: { readonly email: string; readonly name: string; readonly passwordHash: string; readonly role: OfficeRole },
 ): Promise<number | undefined> {
+  return db.transaction().execute((within) => insertPersonWithin(within, office, person));
+}
+
+/** The same, in a transaction that is open already. */
+export async function insertPersonWithin(
+  within: Db,
+  office: number,
+  person: { readonly email: string; readonly name: string; readonly passwordHash: string; readonly role: OfficeRole },
+): Promise<number | undefined> {
   const created_at = instant();
-  return db.transaction().execute(async (within) => {
-    const row = await within
-      .insertInto('person')
-      .values({ email: person.email.trim(), name: person.name, password_hash: person.passwordHash, created_at })
-      .onConflict((conflict) => conflict.column('email').doNothing())
-      .returning('id')
-      .executeTakeFirst();
-    if (!row) return undefined;
-    await within
-      .insertInto('membership')
-      .values({ office, person: row.id, role: person.role, created_at, ended_at: null })
-      .execute();
-    return row.id;
-  });
+  const row = await within
+    .insertInto('person')
+    .values({ email: person.email.trim(), name: person.name, password_hash: person.passwordHash, created_at })
+    .onConflict((conflict) => conflict.column('email').doNothing())
+    .returning('id')
+    .executeTakeFirst();
+  if (!row) return undefined;
+  await within
+    .insertInto('membership')
+    .values({ office, person: row.id, role: person.role, created_at, ended_at: null })
+    .execute();
+  return row.id;
 }
 
 /** Failed sign-in attempts for an account, or from an address, since an instant. */

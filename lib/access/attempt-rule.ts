@@ -8,3 +8,6 @@ export const attemptRule = { window_ms: 15 * 60_000, perAccount: 10, perAddress:
 export function mustWait(failures: { readonly ofAccount: number; readonly fromAddress: number }): boolean {
   return failures.ofAccount >= attemptRule.perAccount || failures.fromAddress >= attemptRule.perAddress;
 }
+
+/** How often a new password may be asked for within an hour: for an account, whether it exists or not, and from an address. */
+export const resetRule = { window_ms: 3_600_000, perAccount: 5, perAddress: 20 } as const;

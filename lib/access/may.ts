@@ -17,6 +17,7 @@ const staff = ['lead', 'analyst', 'checker'] as const;
 const table = {
   'read projects': staff,
   'read sections': staff,
+  'change sections': ['lead'],
   'read limits': staff,
   'change limits': ['lead'],
   'read combination sets': staff,

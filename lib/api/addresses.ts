@@ -1,4 +1,7 @@
 /** Addresses of pages and of the API, written once. Revisions are named by their letter within a batch. */
+import { ownPaths } from '@/lib/api/own-inputs';
+import type { OwnKind } from '@/lib/intake/own/own-thing';
+import type { System } from '@/lib/units/quantity';
 import type { TableName, View } from '@/lib/tables/view';
 import { listToSearch, viewToSearch } from './view-address';
 
@@ -21,7 +24,17 @@ export const pages = {
   signIn: '/sign-in',
   projects: '/projects',
   people: '/people',
+  person: (person: number) => `/people/${person}`,
+  me: '/me',
+  letters: '/letters',
+  letter: (letter: string) => `/letters/${e(letter)}`,
+  forgotten: '/password',
+  activity: (project: number) => `/projects/${project}/activity`,
   sections: '/sections',
+  own: '/sections/own',
+  ownNew: (kind: OwnKind) => `/sections/own/${ownPaths[kind]}/new`,
+  ownImport: (kind: OwnKind) => `/sections/own/${ownPaths[kind]}/import`,
+  ownPart: (kind: OwnKind, part: number) => `/sections/own/${ownPaths[kind]}/${part}`,
   issued: '/issued',
   /** One issue as its client reads it, and as the office does. */
   issuedOne: (issue: number) => `/issued/${issue}`,
@@ -70,7 +83,27 @@ export const api = {
   ping: '/api/ping',
   template: '/api/template',
   people: '/api/people',
+  person: (person: number) => `/api/people/${person}`,
+  transfer: (person: number) => `/api/people/${person}/transfer`,
+  invitations: '/api/people/invitations',
+  oneInvitation: (invitation: number) => `/api/people/invitations/${invitation}`,
+  /** Where someone invited begins; the link’s secret is sent, never part of the address. */
+  invitation: '/api/invitation',
+  passwordReset: '/api/password-reset',
+  ownPassword: '/api/me/password',
+  ownLetters: '/api/me/letters',
+  tokens: '/api/me/tokens',
+  token: (token: number) => `/api/me/tokens/${token}`,
+  letterAgain: (letter: number) => `/api/letters/${letter}/again`,
+  activity: (project: number, search = '') => `/api/projects/${project}/activity${search}`,
+  activityExport: (project: number, search = '') => `/api/projects/${project}/activity/export${search}`,
   sections: '/api/sections',
+  own: (kind: OwnKind) => `/api/own/${ownPaths[kind]}`,
+  ownPart: (kind: OwnKind, part: number) => `/api/own/${ownPaths[kind]}/${part}`,
+  ownImport: (kind: OwnKind, units: System, keep: boolean) =>
+    `/api/own/${ownPaths[kind]}/import?units=${units}&keep=${keep ? 'yes' : 'no'}`,
+  ownTemplate: (kind: OwnKind, units: System, format: 'xlsx' | 'csv') =>
+    `/api/own/${ownPaths[kind]}/template?units=${units}&format=${format}`,
   limits: '/api/limits',
   combinationSets: '/api/combination-sets',
   combinationSet: (set: number) => `/api/combination-sets/${set}`,

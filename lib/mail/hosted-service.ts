@@ -28,7 +28,7 @@ export function hostedService({ key, from, url }: HostedOptions): MailService {
         const { data, error } = await client.emails.send(request, { idempotencyKey, signal });
         if (error === null) return { sent: true, id: data.id };
         // A proxy between may answer JSON of another shape.
-        const { name = 'refused', message = 'without a reason' }: Partial<typeof error> = error;
+        const { name = 'refused', message = 'without a reason' }: { readonly name?: string; readonly message?: string } = error;
         return { sent: false, lasting: lasting.has(name), reason: `${name}: ${message}`.slice(0, 300) };
       } catch (cause) {
         return { sent: false, lasting: false, reason: cause instanceof Error ? cause.message.slice(0, 300) : 'no answer' };

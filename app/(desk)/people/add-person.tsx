@@ -2,28 +2,20 @@
 import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useRef, useState } from 'react';
+import { RoleChoice } from '@/app/_client/role-choice';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
-import { Segments } from '@/components/ui/segments';
-import { personRoles, type PersonRole } from '@/lib/access/may';
+import type { PersonRole } from '@/lib/access/may';
 import { passwordLength } from '@/lib/access/password-length';
 import { api } from '@/lib/api/addresses';
 import { request, RequestError } from '@/lib/api/fetch';
-
-/** What each role comes to do, as the lead chooses it. */
-const does: Readonly<Record<PersonRole, string>> = {
-  lead: 'runs the office’s work: everything, people too',
-  analyst: 'prepares batches: brings sheets in, mends, runs',
-  checker: 'second engineer: reads everything, changes nothing',
-  client: 'builds from the results: sees only what is issued',
-};
 
 interface Added {
   readonly person: { readonly name: string; readonly email: string };
 }
 
-/** The lead adds a person with a first password and hands it over. */
+/** Without e-mail: the lead adds a person with a first password and hands it over. */
 export function AddPerson() {
   const router = useRouter();
   const form = useRef<HTMLFormElement>(null);
@@ -50,16 +42,7 @@ export function AddPerson() {
     >
       <Field label="Name" name="name" maxLength={120} required autoComplete="off" error={fields.name?.[0]} />
       <Field label="E-mail" name="email" type="email" required autoComplete="off" error={fields.email?.[0]} />
-      <div>
-        <div className="field-head">What they come to do</div>
-        <Segments
-          label="What they come to do"
-          options={personRoles.map((value) => ({ value, label: value }))}
-          value={role}
-          onChange={(value) => setRole(value as PersonRole)}
-        />
-        <p className="field-hint">{does[role]}</p>
-      </div>
+      <RoleChoice value={role} onChange={setRole} />
       <Field
         label="First password"
         name="password"
@@ -69,7 +52,7 @@ export function AddPerson() {
         hint={`At least ${passwordLength.min} characters. Hand it over yourself; it is not sent.`}
       />
       <p>
-        <Button type="submit" look="filled" disabled={add.isPending}>
+        <Button type="submit" disabled={add.isPending}>
           Add the person
         </Button>
       </p>
