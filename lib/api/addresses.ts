@@ -2,6 +2,9 @@
 import { ownPaths } from '@/lib/api/own-inputs';
 import type { OwnKind } from '@/lib/intake/own/own-thing';
 import type { System } from '@/lib/units/quantity';
+import { ownPaths } from '@/lib/api/own-paths';
+import type { OwnKind } from '@/lib/intake/own/own-thing';
+import type { System } from '@/lib/units/quantity';
 import type { TableName, View } from '@/lib/tables/view';
 import { listToSearch, viewToSearch } from './view-address';
 

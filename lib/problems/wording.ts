@@ -15,6 +15,8 @@ export const missingSheet = (name: string, empty: boolean): string =>
   empty
     ? `sheet ${name} is empty. Fill it, or describe the frames in Variants`
     : `sheet ${name} is missing. Add it, or describe the frames in Variants`;
+export const tableMissing = (name: string): string =>
+  `no sheet ${name} is in these files. Name the sheet so, or send one sheet alone`;
 export const sheetIgnored = (name: string): string => `sheet “${name}” is none that is read, so it is left alone`;
 export const nearMissSheet = (name: string, near: string): string =>
   `sheet “${name}” is not read. If it is meant as ${near}, name it so`;
