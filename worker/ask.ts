@@ -4,6 +4,9 @@ import { insertChangedRevision } from '@/db/queries/changes';
 import { findLatestJob, finishJob, insertJob } from '@/db/queries/jobs';
 import { updateRevisionState } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
+import { insertSizing, updateSizingState } from '@/db/queries/sizing';
+import { engineVersion } from '@/lib/analysis/engine-version';
+import type { SizingRequest } from '@/lib/sizing/sizing';
 import type { WorkQueue } from './queue';
 
 /** Queues the reading of a revision whose files are stored; false where that is queued already. */
@@ -53,6 +56,51 @@ export async function askForRun(
   });
   if (asked) queue.wake();
   return asked;
+}
+
+/**
+ * Queues a sizing of a revision, or one that was stopped or failed to go on with.
+ *
+ * @returns the sizing; undefined where one of that revision is queued or going on
+ */
+export async function askForSizing(
+  queue: WorkQueue,
+  { db }: Pick<OpenDatabase, 'db'>,
+  of: { readonly office: number; readonly revision: number; readonly person: number } & (
+    | { readonly request: SizingRequest }
+    | { readonly again: number }
+  ),
+): Promise<number | undefined> {
+  const asked = await db.transaction().execute(async (within) => {
+    const { office, revision, person } = of;
+    const again = 'again' in of ? of.again : null;
+    const latest = await findLatestJob(within, office, revision, 'size');
+    if (latest && (latest.state === 'queued' || latest.state === 'running')) return undefined;
+    if (again !== null && !(await updateSizingState(within, office, again, ['stopped', 'failed'], 'queued'))) return undefined;
+    const sizing =
+      'request' in of
+        ? await insertSizing(within, office, { revision, person, request: of.request, engine: engineVersion })
+        : of.again;
+    await insertJob(within, office, { kind: 'size', revision, person, payload: { sizing } });
+    return sizing;
+  });
+  if (asked !== undefined) queue.wake();
+  return asked;
+}
+
+/** Stops a sizing after the chunks in hand; what frames answered is kept. False where it is not going on. */
+export async function askToStopSizing(
+  queue: WorkQueue,
+  { db }: Pick<OpenDatabase, 'db'>,
+  of: { readonly office: number; readonly revision: number; readonly sizing: number },
+): Promise<boolean> {
+  const job = await findLatestJob(db, of.office, of.revision, 'size');
+  if (!job || job.payload['sizing'] !== of.sizing || (job.state !== 'queued' && job.state !== 'running')) return false;
+  if (!queue.stopSizing(of.sizing)) {
+    await finishJob(db, job.id, 'stopped');
+    await updateSizingState(db, of.office, of.sizing, ['queued', 'running'], 'stopped', { reason: 'Stopped.' });
+  }
+  return true;
 }
 
 /** Stops a run after the chunks in hand; what is solved is kept. False where none is going on. */

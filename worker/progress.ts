@@ -18,6 +18,15 @@ export interface RunProgress {
   readonly last: readonly Omit<SolvedFrame, 'version'>[];
 }
 
+/** Of a sizing: frames × candidates, the total as well as it is known by then. */
+export interface SizingProgress {
+  readonly state: 'queued' | 'running' | 'stopping';
+  readonly done: number;
+  readonly total: number;
+  readonly rate: number | null;
+  readonly secondsLeft: number | null;
+}
+
 const window_ms = 5_000;
 const mostLast = 12;
 

@@ -13,9 +13,10 @@ import { failStrandedReadings } from '@/db/queries/waiting';
 import { askForRun } from './ask';
 import { makeOneIssue } from './issuing';
 import type { Pools } from './pools';
-import type { ProgressEvents, RunProgress } from './progress';
+import type { ProgressEvents, RunProgress, SizingProgress } from './progress';
 import { readOneRevision } from './reading';
-import { RunWork } from './run-work';
+import { RunWork, type Chunk } from './run-work';
+import { SizeWork, type SizeChunk } from './size-work';
 import { Turns } from './turns';
 
 /** Says what went wrong where no person is waiting for the answer. */
@@ -47,7 +48,8 @@ export class WorkQueue {
   private readonly solving = new PQueue({ concurrency: 2 });
   private readonly reading = new PQueue({ concurrency: 1 });
   private readonly making = new PQueue({ concurrency: 1 });
-  private readonly runs = new Turns<RunWork>();
+  /** What goes through the solving threads chunk by chunk. */
+  private readonly runs = new Turns<RunWork | SizeWork>();
   private readonly reads = new Turns<WholeWork>();
   private readonly wholes = new Turns<WholeWork>();
   private readonly known = new Set<number>();
@@ -80,14 +82,14 @@ export class WorkQueue {
 
   /** Hands out no more chunks of a revision's run; those in hand are kept. False where it knows of no such run. */
   stop(revision: number): boolean {
-    const runs = this.runs.all().filter((run) => run.revision === revision);
+    const runs = this.runs.all().filter((run) => run instanceof RunWork && run.revision === revision);
     for (const run of runs) run.stop();
     this.wake();
     return runs.length > 0;
   }
 
   progress(revision: number): RunProgress {
-    const run = this.runs.all().find((each) => each.revision === revision);
+    const run = this.runs.all().find((each): each is RunWork => each instanceof RunWork && each.revision === revision);
     const { total, waiting } = run?.counts ?? countWaiting(this.options.database.raw, revision);
     const done = total - waiting;
     const rate = run?.meter?.rate ?? null;
@@ -101,6 +103,27 @@ export class WorkQueue {
       inHand: run?.versionsInHand ?? [],
       last: run?.meter?.last ?? [],
     };
+  }
+
+  /** Hands out no more of a sizing. False where it knows of no such one. */
+  stopSizing(sizing: number): boolean {
+    const work = this.sizingWork(sizing);
+    work?.stop();
+    this.wake();
+    return work !== undefined;
+  }
+
+  /** How far a sizing is; null where none such is queued or going on here. */
+  sizingProgress(sizing: number): SizingProgress | null {
+    const work = this.sizingWork(sizing);
+    if (!work) return null;
+    const { done, total } = work.counts;
+    const rate = work.meter?.rate ?? null;
+    return { state: work.state, done, total, rate, secondsLeft: rate ? Math.ceil((total - done) / rate) : null };
+  }
+
+  private sizingWork(sizing: number): SizeWork | undefined {
+    return this.runs.all().find((each): each is SizeWork => each instanceof SizeWork && each.sizing === sizing);
   }
 
   /** Settles when nothing is queued or going on. */
@@ -138,6 +161,7 @@ export class WorkQueue {
       if (this.known.has(job.id)) continue;
       if (job.kind === 'read') this.reads.add({ office: job.office, job, taken: false });
       else if (job.kind === 'run') this.runs.add(new RunWork(job, this.options, this.inHand));
+      else if (job.kind === 'size') this.runs.add(new SizeWork(job, this.options));
       else if (wholeJobs[job.kind]) this.wholes.add({ office: job.office, job, taken: false });
       else continue;
       this.known.add(job.id);
@@ -188,13 +212,13 @@ export class WorkQueue {
   }
 
   private async handOutChunk(): Promise<boolean> {
-    const chunk = await this.runs.next((run) => run.nextChunk());
+    const chunk = await this.runs.next<Chunk | SizeChunk>((run) => run.nextChunk());
     await this.settleRuns();
     if (!chunk || this.closed) return false;
     const { run } = chunk;
     this.options.onChunk?.({ office: run.office, revision: run.revision, frames: chunk.versions.length });
     void this.solving.add(async () => {
-      await run.solve(chunk);
+      await ('wanted' in chunk ? chunk.run.solve(chunk) : chunk.run.solve(chunk));
       await this.settleRuns();
       this.moved(run.revision);
     });

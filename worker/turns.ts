@@ -1,5 +1,5 @@
 /** Whose turn it is: offices one after the other, within an office the work that was asked for first. */
-export class Turns<Work extends { readonly office: number }> {
+export class Turns<Work extends { readonly office: number; readonly patient?: boolean }> {
   private readonly works: Work[] = [];
   /** The office served last; the next one after it in order of arrival comes first. */
   private last: number | null = null;
@@ -19,7 +19,7 @@ export class Turns<Work extends { readonly office: number }> {
 
   /**
    * The first piece that anyone has to give, asking office after office from the one behind the last served, and
-   * within an office its work in order of arrival.
+   * within an office its work in order of arrival, patient work after the other.
    *
    * @param take a piece of that work, or null where it has none to give now
    */
@@ -28,12 +28,17 @@ export class Turns<Work extends { readonly office: number }> {
     const from = this.last === null ? 0 : offices.findIndex((office) => office > this.last!);
     const order = from <= 0 ? offices : [...offices.slice(from), ...offices.slice(0, from)];
     for (const office of order)
-      for (const work of this.works.filter((each) => each.office === office)) {
+      for (const work of this.ofOffice(office)) {
         const piece = await take(work);
         if (piece === null) continue;
         this.last = office;
         return piece;
       }
     return null;
+  }
+
+  private ofOffice(office: number): readonly Work[] {
+    const own = this.works.filter((each) => each.office === office);
+    return [...own.filter((each) => !each.patient), ...own.filter((each) => each.patient)];
   }
 }

@@ -8,10 +8,14 @@ export type SizedBy = (typeof sizedBy)[number];
 export interface SizingGroup {
   readonly by: SizedBy;
   readonly name: string;
-  /** Names of the sections tried, in the order of their range. */
+  /** The range whose sections are tried: a standard one, `officeRange` or `batchRange`. */
   readonly range: string;
   readonly minDepth_m: number | null;
   readonly maxDepth_m: number | null;
+}
+
+export interface SizingRequest {
+  readonly groups: readonly SizingGroup[];
 }
 
 /** A section that a group may take. */
@@ -98,6 +102,11 @@ export interface SizingFound {
   /** Steel of all frames with their number off; null where a density is missing. */
   readonly mass: { readonly before_kg: number; readonly after_kg: number } | null;
 }
+
+/** The office's own sections, by name. */
+export const officeRange = 'the office’s own';
+/** Every section that members of the batch have now. */
+export const batchRange = 'sections of this batch';
 
 /** Rounds after which it is said that choices did not come to rest. */
 export const mostRounds = 8;

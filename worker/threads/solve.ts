@@ -12,6 +12,7 @@ import { openOnce } from './open-once';
 export { evaluateChunk } from './chunk';
 export { tellFailures } from './failures';
 export { listRun } from './list-run';
+export { listSizing, sizeChunk } from './size';
 
 export interface SolveTask {
   /** The database's file. */
