@@ -30,6 +30,10 @@ export function analysisAssumptions(frame: Frame, settings: Settings): readonly 
     said.push(
       'second order: strength combinations are analysed under 1.6 times their loads and results divided by 1.6 (AISC 360-22 C2.1(d))',
     );
+  if (asd && strength)
+    said.push(
+      'critical load factor: of the loads as the ASD combinations give them, not of 1.6 times them; by first-order axial forces and full stiffness',
+    );
   if (frame.members.some((member) => member.tensionOnly))
     said.push('tension-only members: pinned at both ends, slack without tension; load cases alone have no results');
   return said;

@@ -32,6 +32,13 @@ describe('a certificate in words', () => {
     expect(outcomes({ residual: NaN, equilibrium: NaN, digits: NaN, second: NaN })).toEqual(Array(4).fill('outside'));
   });
 
+  it('of a frame without results is not applicable, but for its stiffness', () => {
+    const lines = certificateLines({ ...sound, residual: 0, equilibrium: 0, second: null, secondReason: 'no results' });
+    expect(lines.map(({ outcome }) => outcome)).toEqual(['not made', 'not made', 'passed', 'not made']);
+    for (const at of [0, 1, 3])
+      expect(lines[at]).toMatchObject({ figure: null, reason: expect.stringMatching(/^not applicable/) });
+  });
+
   it('says why there is no second analysis', () => {
     const last = (secondReason: string | null) => certificateLines({ ...sound, second: null, secondReason })[3]!;
     expect(last('sampled')).toMatchObject({ outcome: 'not made', figure: null });

@@ -16,7 +16,10 @@ export interface CertificateLine {
   readonly reason: string | null;
 }
 
+const noResults =
+  'not applicable: the frame has no results, for with tension-only members load cases alone have none, and it has no combinations';
 const whyNot: Readonly<Record<string, string>> = {
+  'no results': noResults,
   sampled:
     'of a batch above 100 frames, 5 % are analysed twice, at least 100, picked by their content’s hash; this frame is not among them',
   'too large': `it is made only by choice above ${secondUnknowns} unknowns`,
@@ -26,28 +29,29 @@ const whyNot: Readonly<Record<string, string>> = {
 export function certificateLines(certificate: Certificate): CertificateLine[] {
   const { residual, equilibrium, condition, digits, second, secondReason } = certificate;
   const within = (figure: number, most: number) => (figure <= most ? 'passed' : 'outside');
+  const none = second === null && secondReason === 'no results';
+  const ofResults = (figure: number, most: number) =>
+    none
+      ? ({ figure: null, outcome: 'not made', reason: noResults } as const)
+      : ({ figure, outcome: within(figure, most), reason: null } as const);
   return [
     {
       item: 1,
       name: 'The equations are met',
       meaning:
         'The displacements put back into K d = f: what is left over, beside the size of its terms; the largest of all results.',
-      figure: residual,
+      ...ofResults(residual, residualTolerance),
       bound: 'at most',
       tolerance: residualTolerance,
-      outcome: within(residual, residualTolerance),
-      reason: null,
     },
     {
       item: 1,
       name: 'Loads and reactions balance',
       meaning:
         'The loads as the sheets give them and the reactions, summed in x, in y and about a point: what is left over, beside their size.',
-      figure: equilibrium,
+      ...ofResults(equilibrium, equilibriumTolerance),
       bound: 'at most',
       tolerance: equilibriumTolerance,
-      outcome: within(equilibrium, equilibriumTolerance),
-      reason: null,
     },
     {
       item: 2,

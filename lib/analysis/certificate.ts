@@ -112,6 +112,7 @@ function compareWithSecond(
   wanted: boolean,
   floors?: readonly number[],
 ): Pick<Certificate, 'second' | 'secondReason'> {
+  if (states.length === 0) return { second: null, secondReason: 'no results' };
   if (!wanted) return { second: null, secondReason: 'sampled' };
   if (t.free.reduce((sum, free) => sum + free, 0) > secondUnknowns) return { second: null, secondReason: 'too large' };
   const others = secondAnalysis(frame, settings, states);

@@ -193,6 +193,7 @@ export const unknownGrade = (name: string, near: string | null): string =>
   `grade ${name} is not held.${hint(near)} Without a grade, give E, fy and density`;
 export const gradeOrE = (): string => 'a material needs a grade or E';
 export const suspectE = (): string => 'E is outside 50 to 250 GPa. Is it in the unit of its heading?';
+export const suspectG = (): string => 'G is outside 15 to 100 GPa. Is it in the unit of its heading?';
 export const suspectDensity = (): string => 'density is outside 2,000 to 9,000 kg/m³. Is it in the unit of its heading?';
 export const suspectYield = (): string => 'fy is above 1,000 MPa. Is it in the unit of its heading?';
 export const densityMissing = (material: string, loadCase: string): string =>

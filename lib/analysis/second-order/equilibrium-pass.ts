@@ -1,4 +1,5 @@
 import { addMember, addSupports, diagonalOf, emptyMemberStiffness, memberStiffness } from '../assemble';
+import { scaledNorm } from '../condition';
 import { factor } from '../factor';
 import type { MemberData } from '../member-data';
 import { solve } from '../solve';
@@ -20,6 +21,8 @@ export interface Work {
   passes: number;
   /** Share of the loads whose axial forces are at work; movements are those of the whole loads under them. */
   share: number;
+  /** ‖K̂(N)‖₁ of the last pass, K̂ scaled to a unit diagonal; null = not wanted. */
+  norm: number | null;
   /** Largest axial force taken in the last pass, N; kept where there are ties. */
   largest: number;
   /** Largest axial stiffness × movement of the last pass, N. */
@@ -74,7 +77,7 @@ export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
     }
   }
   const ties = frame.members.some(({ tensionOnly }) => tensionOnly) ? frame.members.map(({ tensionOnly }) => tensionOnly) : null;
-  return { input, order, ties, settled, passes: 0, share: 1, largest: 0, handled: 0, turn: 0, turned: 0 };
+  return { input, order, ties, settled, passes: 0, share: 1, largest: 0, norm: null, handled: 0, turn: 0, turned: 0 };
 }
 
 /** Whether first-order stiffness alone holds the frame. */
@@ -158,6 +161,10 @@ export function respond(work: Work): boolean {
   }
   addSupports(K, t, frame);
   for (let p = 0; p < t.size; p++) for (let r = 0; r < 3; r++) if (!t.free[3 * t.nodeAt[p]! + r]) d[3 * p + r] = 0;
+  if (work.norm !== null) {
+    diagonalOf(K, t, space.diagonal);
+    work.norm = scaledNorm(K, t, space.diagonal);
+  }
   if (!factored(input)) return false;
   solve(K, t, inner, d, 1);
   for (let p = 0; p < t.size; p++) {

@@ -203,6 +203,7 @@ function suspect(row: Row, typed: Partial<Record<Property, number>>, reader: Rea
     if (value !== undefined && odd(value)) reader.tell(row, columns[key], { code: 'suspect-unit', message }, forNobody);
   };
   ask('E_Pa', (E) => E < 50e9 || E > 250e9, say.suspectE());
+  ask('G_Pa', (G) => G < 15e9 || G > 100e9, say.suspectG());
   ask('density_kg_m3', (density) => density < 2000 || density > 9000, say.suspectDensity());
   ask('fy_Pa', (fy) => fy > 1000e6, say.suspectYield());
 }

@@ -255,6 +255,7 @@ describe('materials', () => {
     ['neither grade nor E', ['grade', 'E'], [null, null], ['error not-a-number Materials!C2 F1']],
     ['E below zero', ['E', 'density'], [-1, 7850], ['error not-positive Materials!B2 F1']],
     ['E in GPa under MPa', ['E', 'density'], [210, 7850], ['warning suspect-unit Materials!B2 F1']],
+    ['G in GPa under MPa', ['E', 'G', 'density'], [210000, 81, 7850], ['warning suspect-unit Materials!C2 F1']],
     ['a density in t/m³', ['E', 'density'], [210000, 7.85], ['warning suspect-unit Materials!C2 F1']],
     ['a yield above any steel', ['E', 'fy', 'density'], [210000, 2750, 7850], ['warning suspect-unit Materials!C2 F1']],
     ['E without density where a case has self-weight', ['E', 'density'], [210000, null], ['error not-a-number Materials!C2 F1']],
