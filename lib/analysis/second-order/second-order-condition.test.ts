@@ -39,10 +39,10 @@ function exactly(P: number): number {
 
 describe('the condition of a second-order state', () => {
   it('is that of K under its axial forces, growing without bound towards the critical load', () => {
-    // the estimate is a lower bound, seldom below a third (Higham 2002, 15.1)
+    // the estimate is a lower bound, within a few times of it (Higham 2002, 15.1)
     for (const share of [0.01, 0.5, 0.9, 0.99, 0.9999]) {
       const ratio = conditionUnder(share * euler) / exactly(share * euler);
-      expect(ratio).toBeGreaterThan(0.25);
+      expect(ratio).toBeGreaterThan(0.2);
       expect(ratio).toBeLessThan(1 + 1e-9);
     }
     expect(conditionUnder(0.999 * euler)).toBeGreaterThan(200 * conditionUnder(0.5 * euler));
