@@ -1,8 +1,7 @@
 /** Who may check a revision: a second engineer, never one who had a hand in it. */
 
 /** What makes a person part of a revision's making, frames carried over from earlier revisions included. */
-const deeds = ['uploaded', 'changed', 'ran', 'made', 'sent'] as const;
-export type Deed = (typeof deeds)[number];
+export type Deed = 'uploaded' | 'changed' | 'ran' | 'made' | 'sent';
 
 /** A person with what they did of a revision. */
 export interface Work {
