@@ -1,26 +1,27 @@
+import { editable, type CombinationEdits } from '@/components/combinations/combination-edits';
 import type { CombinationShown } from '@/lib/combinations/shown-combinations';
-
-/** What is to be written otherwise than it was generated. */
-export interface CombinationEdits {
-  /** Names. */
-  readonly leftOut: ReadonlySet<string>;
-  /** As typed, by `combination|case`. */
-  readonly factors: Readonly<Record<string, string>>;
-}
 
 interface CombinationTableProps {
   readonly combinations: readonly CombinationShown[];
   /** Frames that were read: a combination of fewer says of how many it is. */
   readonly frames: number;
-  /** Given together with `onEdit`: generated rows may be left out and their factors typed. */
+  /** Further load cases that a row could hold. */
+  readonly cases?: readonly string[];
+  /** Given together with `onEdit`: rows may be left out and their factors typed. */
   readonly edits?: CombinationEdits;
   readonly onEdit?: (edits: CombinationEdits) => void;
 }
 
+/** Of so many cells at most, empty ones may be typed in too. */
+const mostCells = 3000;
+
 /** Combinations with the factor on each case, and the clause each comes from. */
-export function CombinationTable({ combinations, frames, edits, onEdit }: CombinationTableProps) {
-  const cases = [...new Set(combinations.flatMap(({ terms }) => terms.map((term) => term.case)))];
+export function CombinationTable({ combinations, frames, cases: further = [], edits, onEdit }: CombinationTableProps) {
+  const own = combinations.flatMap(({ terms }) => terms.map((term) => term.case));
+  const cases = [...new Set(edits ? [...own, ...further] : own)];
   const some = combinations.some((each) => each.frames !== frames);
+  const may = edits && onEdit ? editable(combinations) : null;
+  const inEmpty = combinations.length * cases.length <= mostCells;
   return (
     <div className="tbl-wrap max-h-[32rem] overflow-y-auto" role="region" tabIndex={0} aria-label="Combinations">
       <table className="tbl tbl-tight">
@@ -44,44 +45,51 @@ export function CombinationTable({ combinations, frames, edits, onEdit }: Combin
           </tr>
         </thead>
         <tbody>
-          {combinations.map((each, i) => (
-            <tr key={`${i} ${each.name}`}>
-              {edits && onEdit && (
-                <td>
-                  {each.clause !== null && (
-                    <input
-                      type="checkbox"
-                      aria-label={`Keep ${each.name}`}
-                      checked={!edits.leftOut.has(each.name)}
-                      onChange={(event) => onEdit({ ...edits, leftOut: without(edits.leftOut, each.name, event.target.checked) })}
-                    />
-                  )}
-                </td>
-              )}
-              <th scope="row">{each.name}</th>
-              <td>{each.purpose}</td>
-              {cases.map((name) => (
-                <td key={name} className="num">
-                  {edits && onEdit && each.clause !== null && factorOf(each, name) !== '' ? (
-                    <input
-                      className="border-hair w-20 border px-1 text-right"
-                      inputMode="decimal"
-                      aria-label={`Factor on ${name} in ${each.name}`}
-                      disabled={edits.leftOut.has(each.name)}
-                      value={edits.factors[`${each.name}|${name}`] ?? factorOf(each, name)}
-                      onChange={(event) =>
-                        onEdit({ ...edits, factors: { ...edits.factors, [`${each.name}|${name}`]: event.target.value } })
-                      }
-                    />
-                  ) : (
-                    factorOf(each, name)
-                  )}
-                </td>
-              ))}
-              <td>{each.clause ?? 'listed'}</td>
-              {some && <td className="num">{each.frames.toLocaleString('en-GB')}</td>}
-            </tr>
-          ))}
+          {combinations.map((each, i) => {
+            // of frames that list it differently there are several rows: the first stands for all
+            const first = combinations.findIndex(({ name }) => name === each.name) === i;
+            const open = may?.has(each.name) === true && first;
+            return (
+              <tr key={`${i} ${each.name}`}>
+                {edits && onEdit && (
+                  <td>
+                    {first && (
+                      <input
+                        type="checkbox"
+                        aria-label={`Keep ${each.name}`}
+                        checked={!edits.leftOut.has(each.name)}
+                        onChange={(event) =>
+                          onEdit({ ...edits, leftOut: without(edits.leftOut, each.name, event.target.checked) })
+                        }
+                      />
+                    )}
+                  </td>
+                )}
+                <th scope="row">{each.name}</th>
+                <td>{each.purpose}</td>
+                {cases.map((name) => (
+                  <td key={name} className="num">
+                    {edits && onEdit && open && (inEmpty || factorOf(each, name) !== '') ? (
+                      <input
+                        className="border-hair w-20 border px-1 text-right"
+                        inputMode="decimal"
+                        aria-label={`Factor on ${name} in ${each.name}`}
+                        disabled={edits.leftOut.has(each.name)}
+                        value={edits.factors[`${each.name}|${name}`] ?? factorOf(each, name)}
+                        onChange={(event) =>
+                          onEdit({ ...edits, factors: { ...edits.factors, [`${each.name}|${name}`]: event.target.value } })
+                        }
+                      />
+                    ) : (
+                      factorOf(each, name)
+                    )}
+                  </td>
+                ))}
+                <td>{each.clause ?? 'listed'}</td>
+                {some && <td className="num">{each.frames.toLocaleString('en-GB')}</td>}
+              </tr>
+            );
+          })}
         </tbody>
       </table>
     </div>

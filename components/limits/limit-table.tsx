@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
-import type { OfficeLimit } from '@/lib/model/office-limit';
+import { limitKey, limitedBy, type OfficeLimit } from '@/lib/model/office-limit';
+import { figureWords, limitedWords, measureWords } from './limit-words';
 
 interface LimitTableProps {
   readonly limits: readonly OfficeLimit[];
@@ -7,7 +8,7 @@ interface LimitTableProps {
   readonly acts?: { readonly heading: string; readonly of: (index: number) => ReactNode };
 }
 
-/** An office's limits: on what, of which members, and where the figure is from. */
+/** An office's limits: on what, of which members or nodes, in which combinations, and where the figure is from. */
 export function LimitTable({ limits, acts }: LimitTableProps) {
   if (limits.length === 0) return <p>The office has no limits of its own yet.</p>;
   return (
@@ -21,6 +22,7 @@ export function LimitTable({ limits, acts }: LimitTableProps) {
             <th scope="col" className="num">
               At most
             </th>
+            <th scope="col">In combinations</th>
             <th scope="col">Source</th>
             {acts && (
               <th scope="col">
@@ -30,14 +32,13 @@ export function LimitTable({ limits, acts }: LimitTableProps) {
           </tr>
         </thead>
         <tbody>
-          {limits.map(({ appliesTo, measure, ratio, source }, index) => (
-            <tr key={`${appliesTo} ${measure}`}>
-              <th scope="row">{appliesTo === '*' ? 'all members' : `role ${appliesTo}`}</th>
-              <td>{measure}</td>
-              <td className="num">
-                {measure === 'sway' ? 'h' : 'L'}/{ratio}
-              </td>
-              <td>{source === '' ? 'the office’s own' : source}</td>
+          {limits.map((limit, index) => (
+            <tr key={limitKey(limit)}>
+              <th scope="row">{limitedWords(limit, limitedBy)}</th>
+              <td>{measureWords(limit)}</td>
+              <td className="num">{figureWords(limit)}</td>
+              <td>{limit.combination ?? 'every service combination'}</td>
+              <td>{limit.source === '' ? 'the office’s own' : limit.source}</td>
               {acts && <td>{acts.of(index)}</td>}
             </tr>
           ))}

@@ -49,7 +49,7 @@ function subjectOf(change: Change): string {
   if (change.kind === 'section') return JSON.stringify(change.what);
   // what frames are combined by is one thing, whichever way it is changed
   if (change.kind === 'list combinations' || change.kind === 'office combinations') return 'combinationSet';
-  return change.kind === 'setting' ? change.setting : change.kind;
+  return change.setting;
 }
 
 /** Changes from which the next revision is made. */

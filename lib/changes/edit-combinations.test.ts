@@ -86,7 +86,7 @@ describe('combinations changed on screen', () => {
       }
       return 'taken';
     };
-    const one = { name: 'U9', purpose: 'strength', terms: [{ case: 'dead', factor: 1 }] } as const;
+    const one = { name: 'U9', purpose: 'strength' as const, terms: [{ case: 'dead', factor: 1 }] };
     expect(refuse(edit({ leaveOut: ['U8'] }))).toContain('U8 is no combination of this revision');
     expect(refuse(edit({ add: [{ ...one, name: 'u1' }] }))).toContain('There is a combination u1 already');
     expect(refuse(edit({ add: [{ ...one, name: 'Dead' }] }))).toContain('name of a load case');

@@ -75,7 +75,7 @@ describe('combinations and the office’s limits', () => {
     const row = lead.getByRole('row', { name: /^role beam deflection L\/360/ });
     await row.waitFor();
     expect(await row.innerText()).toContain('IBC Table 1604.3: floor member, live');
-    await lead.getByRole('button', { name: 'Take away deflection of beam' }).click();
+    await lead.getByRole('button', { name: 'Take away deflection of role beam' }).click();
     await lead.getByText('The office has no limits of its own yet.').waitFor();
     expect(complaints).toEqual([]);
     await page.goto(`${url}/limits`);

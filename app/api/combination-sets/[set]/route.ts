@@ -18,7 +18,7 @@ async function at(request: Request, params: Params<'set'>['params'], act: Act) {
   return { person, latest, versions };
 }
 
-const note = (person: Person, what: string, detail: Record<string, unknown>) =>
+const note = (person: Person, what: string, detail: Record<string, string | number>) =>
   insertActivity(db(), person.office, { what, person: person.id, detail });
 
 /** One of the office's sets: every version, the latest first, and the revisions that it made. */

@@ -3,6 +3,7 @@ import { CombinationTable } from '@/components/combinations/combination-table';
 import { Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { listCombinations } from '@/db/queries/combinations';
+import { iterateFrames } from '@/db/queries/frames';
 import { letterOf, listRevisions, type RevisionRecord } from '@/db/queries/revisions';
 import { may, type Person } from '@/lib/access/may';
 import { pages } from '@/lib/api/addresses';
@@ -20,11 +21,17 @@ interface CombinationsProps {
 export async function Combinations({ person, revision }: CombinationsProps) {
   const { id, office, batch, letter, settings, frames, framesStopped } = revision;
   const { list, all } = await listCombinations(db(), office, id, most);
-  if (list.length === 0) return null;
+  if (frames === framesStopped) return null;
+  const change = may(person, 'change a revision');
+  if (list.length === 0 && !change) return null;
   const generated = list.filter(({ clause }) => clause !== null).length;
   const set = settings?.combinationSet ?? null;
   const note =
-    set === null ? `${all} listed` : `${set}: ${generated} generated${all > generated ? `, ${all - generated} listed` : ''}`;
+    set === null
+      ? all === 0
+        ? 'none'
+        : `${all} listed`
+      : `${set}: ${generated} generated${all > generated ? `, ${all - generated} listed` : ''}`;
   const revisions = await listRevisions(db(), office, batch);
   const table = <CombinationTable combinations={list} frames={frames - framesStopped} />;
   return (
@@ -33,13 +40,14 @@ export async function Combinations({ person, revision }: CombinationsProps) {
       note={all > most ? `the first ${most} of ${all.toLocaleString('en-GB')}` : note}
       aside={<Link href={pages.sheet(batch, letter, 'settings')}>Choose a set</Link>}
     >
-      {generated > 0 && all <= most && may(person, 'change a revision') ? (
+      {all <= most && change ? (
         <WriteCombinations
           key={`${batch} ${letter}`}
           batch={batch}
           letter={letter}
           next={letterOf(revisions.length)}
           combinations={list}
+          cases={await casesOf(revision)}
           frames={frames - framesStopped}
         />
       ) : (
@@ -47,4 +55,10 @@ export async function Combinations({ person, revision }: CombinationsProps) {
       )}
     </Zone>
   );
+}
+
+/** Load cases by name: those of the first frame that was read, then further ones that combinations hold. */
+async function casesOf({ office, id }: RevisionRecord): Promise<string[]> {
+  for await (const { read } of iterateFrames(db(), office, id)) if (read.frame) return read.frame.cases.map(({ name }) => name);
+  return [];
 }

@@ -2,13 +2,14 @@
 import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
-import { CombinationTable, type CombinationEdits } from '@/components/combinations/combination-table';
+import { AddCombination } from '@/components/combinations/add-combination';
+import { type CombinationEdits, noEdits, readEdits } from '@/components/combinations/combination-edits';
+import { CombinationTable } from '@/components/combinations/combination-table';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { api, pages } from '@/lib/api/addresses';
 import { request, RequestError } from '@/lib/api/fetch';
-import { editedFactor } from '@/lib/combinations/edited-factor';
 import type { CombinationShown } from '@/lib/combinations/shown-combinations';
 
 interface WriteCombinationsProps {
@@ -17,6 +18,8 @@ interface WriteCombinationsProps {
   /** The letter that the next revision will have. */
   readonly next: string;
   readonly combinations: readonly CombinationShown[];
+  /** Load cases of the batch. */
+  readonly cases: readonly string[];
   readonly frames: number;
 }
 
@@ -24,29 +27,19 @@ interface Made {
   readonly revision: string;
 }
 
-const none: CombinationEdits = { leftOut: new Set(), factors: {} };
-
-/** The generated combinations, to be changed or left out row by row, and written into the next revision's sheet. */
-export function WriteCombinations({ batch, letter, next, combinations, frames }: WriteCombinationsProps) {
+/** Combinations to be changed, left out and added row by row, and written into the next revision's sheet. */
+export function WriteCombinations({ batch, letter, next, combinations, cases, frames }: WriteCombinationsProps) {
   const router = useRouter();
+  const anyGenerated = combinations.some(({ clause }) => clause !== null);
   const [edits, setEdits] = useState<CombinationEdits | null>(null);
+  const [write, setWrite] = useState(anyGenerated);
   const [reason, setReason] = useState('');
-  const given = combinations.flatMap(({ name, terms }) =>
-    terms.flatMap((term) => {
-      const typed = edits?.factors[`${name}|${term.case}`];
-      return typed === undefined ? [] : [{ combination: name, case: term.case, was: term.factor, factor: editedFactor(typed) }];
-    }),
-  );
-  const wrong = given.find(({ factor }) => factor === null);
-  const factors = given.flatMap(({ combination, case: of, was, factor }) =>
-    factor === null || factor === was ? [] : [{ combination, case: of, factor }],
-  );
-  const leaveOut = [...(edits?.leftOut ?? [])];
+  const { change, wrong, ofGenerated } = readEdits(combinations, edits ?? noEdits, write);
   const make = useMutation({
     mutationFn: () =>
       request<Made>(api.part(batch, letter, 'changes'), {
         method: 'POST',
-        json: { changes: [{ kind: 'list combinations', leaveOut, factors }], reason, run: false },
+        json: { changes: [change], reason, run: false },
       }),
     onSuccess: ({ revision }) => router.push(pages.sheet(batch, revision, 'read')),
   });
@@ -55,22 +48,63 @@ export function WriteCombinations({ batch, letter, next, combinations, frames }:
   if (edits === null) {
     return (
       <>
-        <CombinationTable combinations={combinations} frames={frames} />
+        {combinations.length > 0 ? (
+          <CombinationTable combinations={combinations} frames={frames} />
+        ) : (
+          <p>No combinations: the load cases are analysed one by one, and nothing is checked.</p>
+        )}
         <p className="mt-3">
-          <Button onClick={() => setEdits(none)}>Change them, or write them into the sheet</Button>
+          <Button onClick={() => setEdits(noEdits)}>
+            {anyGenerated ? 'Change them, or write them into the sheet' : combinations.length > 0 ? 'Change them' : 'Add some'}
+          </Button>
         </p>
       </>
     );
   }
+  const edited = change.leaveOut.length + change.factors.length + edits.added.length;
+  const writes = change.generated === 'write' && anyGenerated;
   return (
     <form onSubmit={(event) => event.preventDefault()}>
-      <CombinationTable combinations={combinations} frames={frames} edits={edits} onEdit={setEdits} />
+      {combinations.length > 0 && (
+        <CombinationTable combinations={combinations} frames={frames} cases={cases} edits={edits} onEdit={setEdits} />
+      )}
+      {edits.added.length > 0 && (
+        <ul className="my-2" aria-label="Rows added">
+          {edits.added.map(({ name, purpose, terms }) => (
+            <li key={name}>
+              <b>{name}</b>, {purpose}: {terms.map((term) => `${term.factor} ${term.case}`).join(', ')}{' '}
+              <button
+                type="button"
+                className="link"
+                aria-label={`Take ${name} away again`}
+                onClick={() => setEdits({ ...edits, added: edits.added.filter((one) => one.name !== name) })}
+              >
+                Take it away again
+              </button>
+            </li>
+          ))}
+        </ul>
+      )}
+      <AddCombination
+        cases={cases}
+        taken={[...combinations, ...edits.added].map(({ name }) => name)}
+        onAdd={(added) => setEdits({ ...edits, added: [...edits.added, added] })}
+      />
       <div className="make-change">
+        {anyGenerated && (
+          <label className="flex items-baseline gap-2">
+            <input type="checkbox" checked={writes} disabled={ofGenerated} onChange={(event) => setWrite(event.target.checked)} />
+            Write the generated ones into the sheet too{ofGenerated && ', since one of them is changed'}
+          </label>
+        )}
         <p role="status">
-          {words(leaveOut.length, factors.length)} The rows are written into Combinations of revision {next}, and nothing is
-          generated there any more; {letter} stays as it is.
+          {words(change.leaveOut.length, change.factors.length, edits.added.length)}{' '}
+          {writes
+            ? `The rows are written into Combinations of revision ${next}, and nothing is generated there any more`
+            : `Combinations of revision ${next} is written so`}
+          ; {letter} stays as it is.
         </p>
-        {wrong && <Notice kind="error">{`The factor on ${wrong.case} in ${wrong.combination} is no number.`}</Notice>}
+        {wrong !== null && <Notice kind="error">{wrong}</Notice>}
         <Field
           label="Why they are written"
           hint="It stands at the head of the new revision and in the activity of the project."
@@ -82,7 +116,7 @@ export function WriteCombinations({ batch, letter, next, combinations, frames }:
         />
         {make.error && !fields['reason'] && <Notice kind="error">{make.error.message}</Notice>}
         <div className="make-change-acts">
-          <Button look="filled" disabled={busy || wrong !== undefined} onClick={() => make.mutate()}>
+          <Button look="filled" disabled={busy || wrong !== null || (edited === 0 && !writes)} onClick={() => make.mutate()}>
             Make revision {next}
           </Button>
           <Button disabled={busy} onClick={() => setEdits(null)}>
@@ -94,11 +128,12 @@ export function WriteCombinations({ batch, letter, next, combinations, frames }:
   );
 }
 
-function words(out: number, changed: number): string {
-  if (out + changed === 0) return 'All are kept as they were generated.';
+function words(out: number, changed: number, added: number): string {
+  if (out + changed + added === 0) return 'All are kept as they are.';
   const parts = [
     ...(out > 0 ? [`${out} ${out === 1 ? 'is' : 'are'} left out`] : []),
     ...(changed > 0 ? [`${changed} ${changed === 1 ? 'factor is' : 'factors are'} changed`] : []),
+    ...(added > 0 ? [`${added} ${added === 1 ? 'is' : 'are'} added`] : []),
   ];
   return `${parts.join(', ')}.`;
 }

@@ -5,10 +5,12 @@ import { SettingTable } from '@/components/changes/setting-table';
 import { Notice } from '@/components/ui/notice';
 import { Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
+import { listCombinationSets } from '@/db/queries/combination-sets';
 import { letterOf, listRevisions } from '@/db/queries/revisions';
 import { may } from '@/lib/access/may';
 import { api } from '@/lib/api/addresses';
 import { RevisionHead } from '../_head/revision-head';
+import { ChooseOfficeSet } from './choose-office-set';
 import { ChooseSettings } from './choose-settings';
 
 export const metadata: Metadata = { title: 'Settings' };
@@ -34,6 +36,7 @@ export default async function SettingsPage({ params }: { readonly params: Promis
       </Sheet>
     );
   }
+  const sets = mayChange ? (await listCombinationSets(db(), office)).filter(({ withdrawnAt }) => withdrawnAt === null) : [];
   const shown = (
     <Zone
       title={`Settings of revision ${letter}`}
@@ -75,7 +78,20 @@ export default async function SettingsPage({ params }: { readonly params: Promis
       {mayChange ? (
         <div className="grid min-[1100px]:grid-cols-[minmax(0,480fr)_minmax(0,920fr)]">
           <div className="min-w-0">{shown}</div>
-          <div className="border-hair min-w-0 max-[1099px]:border-t min-[1100px]:border-l">{choose}</div>
+          <div className="border-hair min-w-0 max-[1099px]:border-t min-[1100px]:border-l">
+            {choose}
+            {sets.length > 0 && (
+              <Zone title={`Or combine ${next} by a set of the office`}>
+                <ChooseOfficeSet
+                  key={`${batch} ${letter}`}
+                  batch={batch}
+                  letter={letter}
+                  next={next}
+                  sets={sets.map(({ set, version, name }) => ({ set, version, name }))}
+                />
+              </Zone>
+            )}
+          </div>
         </div>
       ) : (
         shown
