@@ -42,6 +42,8 @@ export interface RevisionRecord {
   readonly sent: Act | null;
   /** Who passed it, as long as it was not returned afterwards. */
   readonly checked: Act | null;
+  /** The issue that clients got of it, and who issued it. */
+  readonly issued: (Act & { readonly number: string }) | null;
 }
 
 interface Act {
@@ -176,6 +178,10 @@ function revisions(db: Db, office: number) {
     .leftJoin('revision as earlier', 'earlier.id', 'revision.made_from')
     .leftJoin('person as sender', 'sender.id', 'revision.sent_by')
     .leftJoin('person as checker', 'checker.id', 'revision.checked_by')
+    .leftJoin('issue', (join) =>
+      join.onRef('issue.revision', '=', 'revision.id').on('issue.state', 'not in', ['making', 'failed']),
+    )
+    .leftJoin('person as issuer', 'issuer.id', 'issue.issued_by')
     .selectAll('revision')
     .select([
       'batch.name as batch_name',
@@ -187,6 +193,10 @@ function revisions(db: Db, office: number) {
       'earlier.letter as earlier_letter',
       'sender.name as sender_name',
       'checker.name as checker_name',
+      'issue.number as issue_number',
+      'issue.issued_by',
+      'issue.issued_at',
+      'issuer.name as issuer_name',
     ])
     .where('revision.office', '=', office);
 }
@@ -230,7 +240,13 @@ function record(row: Read): RevisionRecord {
     madeFrom: row.earlier_letter,
     sent: act(row.sent_by, row.sender_name, row.sent_at),
     checked: act(row.checked_by, row.checker_name, row.checked_at),
+    issued: issued(row),
   };
+}
+
+function issued({ issued_by, issuer_name, issued_at, issue_number }: Read): RevisionRecord['issued'] {
+  const by = act(issued_by, issuer_name, issued_at);
+  return by && { ...by, number: issue_number ?? '' };
 }
 
 const act = (id: number | null, name: string | null, at: string | null): Act | null =>

@@ -6,12 +6,13 @@ import { listRows } from '@/db/queries/lists';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
 import type { TableName } from '@/lib/tables/view';
+import { IssueLine } from './issue-line';
 import { MadeFrom } from './made-from';
 import { letterBefore } from './letter-before';
 import { stateWords } from './state-words';
 import { ResultTools } from './result-tools';
 
-export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | 'compare' | TableName;
+export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | 'compare' | 'issue' | TableName;
 
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
@@ -31,8 +32,9 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
   return (
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
+      <IssueLine revision={revision} />
       <MadeFrom revision={revision} />
-      {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change') && (
+      {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change' || sheet === 'issue') && (
         <SheetIndex
           sheets={sheets.map((name) => ({
             label: labelOf(revision, name),
@@ -85,8 +87,8 @@ export function titleOf(revision: RevisionRecord) {
     revision: { letter, date: day(revision.createdAt) },
     state: stateWords(revision),
     prepared: `${revision.createdBy.name}, ${day(revision.createdAt)}`,
-    checked: null,
-    issued: null,
+    checked: revision.checked && `${revision.checked.name}, ${day(revision.checked.at)}`,
+    issued: revision.issued && `${revision.issued.number}, ${day(revision.issued.at)}`,
     inputHash: revision.input?.sha256 ?? null,
     scope: onlyStress(revision.settings) ? 'stress and movement only' : null,
   };
