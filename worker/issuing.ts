@@ -4,6 +4,7 @@ import { findIssue } from '@/db/queries/issues';
 import { finishJob, leaseJob, type JobRecord } from '@/db/queries/jobs';
 import type { QueueOptions } from './queue';
 import type { MakeIssueTask } from './threads/make-issue';
+import type { RetestTask } from './threads/retest-issue';
 
 const lease_ms = 30 * 60_000;
 
@@ -29,6 +30,24 @@ export async function makeOneIssue({ database, pools, file, log }: QueueOptions,
     const why = 'The files could not be made through a fault of the program, which was logged. Nobody was told; issue it again.';
     await failIssue(db, office, issue, why);
     await finishJob(db, job.id, 'failed', why);
+    return;
+  }
+  await finishJob(db, job.id, 'done');
+}
+
+/** Tests whether the present engine gives what was issued; begun again after a kill, since nothing but its outcome is kept. */
+export async function retestOneIssue({ database, pools, file, log }: QueueOptions, job: JobRecord): Promise<void> {
+  const { db } = database;
+  const { office, payload, person } = job;
+  const until = new Date(Date.now() + lease_ms).toISOString();
+  if (!(await leaseJob(db, { owner: `${process.pid}`, until, job: job.id }))) return;
+  const issue = Number(payload['issue']);
+  try {
+    const task: RetestTask = { file, office, issue, person: person ?? 0, job: job.id };
+    await pools.write.run(task, { filename: pools.bundle('write'), name: 'retestIssue' });
+  } catch (error) {
+    log('an issue could not be tested', { error, issue, job: job.id });
+    await finishJob(db, job.id, 'failed', 'The test could not be made through a fault of the program, which was logged.');
     return;
   }
   await finishJob(db, job.id, 'done');

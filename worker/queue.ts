@@ -11,7 +11,7 @@ import { findRevisionById } from '@/db/queries/revisions';
 import { countWaiting } from '@/db/queries/results';
 import { failStrandedReadings } from '@/db/queries/waiting';
 import { askForRun } from './ask';
-import { makeOneIssue } from './issuing';
+import { makeOneIssue, retestOneIssue } from './issuing';
 import type { Pools } from './pools';
 import type { ProgressEvents, RunProgress, SizingProgress } from './progress';
 import { readOneRevision } from './reading';
@@ -35,6 +35,7 @@ export interface QueueOptions {
 /** Jobs that are one thread's work from beginning to end, by kind; one of them at a time, office by office. */
 const wholeJobs: Readonly<Record<string, (options: QueueOptions, job: JobRecord) => Promise<void>>> = {
   issue: makeOneIssue,
+  retest: retestOneIssue,
 };
 
 interface WholeWork {

@@ -11,6 +11,7 @@ import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 export { compareRevisions } from './compare-revisions';
 export { drawBuckled } from './draw-buckled';
 export { makeIssue } from './make-issue';
+export { retestIssue } from './retest-issue';
 export { writeCompare } from './write-compare';
 export { writeInput } from './write-input';
 export { writeMarkedCopy } from './write-marked-copy';
