@@ -89,6 +89,7 @@ export async function evaluateBatch(
     settings: intake.settings,
     origins: intake.origins,
     problems: problemsWithFailures(intake, inOrder),
+    ...(intake.parts && { parts: intake.parts }),
     inputRows: () => intake.rows,
     frameCount: intake.frames.length,
     solved,

@@ -2,6 +2,7 @@ import { countWaiting } from '@/db/queries/results';
 import type { OpenDatabase, RawDatabase } from '@/db/open';
 import { frameRows, readStates, type FrameRow } from '@/db/queries/frame-rows';
 import { type ChangeRecord, listChanges } from '@/db/queries/changes';
+import { listRevisionParts } from '@/db/queries/own-parts';
 import { listProblems, listSheets } from '@/db/queries/problems';
 import { findRevisionById } from '@/db/queries/revisions';
 import { inputRows, inputWidth } from '@/db/queries/waiting';
@@ -16,10 +17,11 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
   const found = await findRevisionById(db, office, revision);
   if (!found?.settings || !found.origins || !found.input)
     throw new RangeError(`Expected revision ${revision} of office ${office} to be read`);
-  const [problems, sheets, changes] = await Promise.all([
+  const [problems, sheets, changes, parts] = await Promise.all([
     listProblems(db, office, revision),
     listSheets(db, office, revision),
     listChanges(db, office, revision),
+    listRevisionParts(db, office, revision),
   ]);
   const unfinished = countWaiting(raw, revision).waiting > 0;
   return {
@@ -38,6 +40,7 @@ export async function revisionSource({ db, raw }: OpenDatabase, office: number, 
     settings: found.settings,
     origins: found.origins,
     problems: problemsInOrder(problems, sheets),
+    parts,
     inputRows: () => inputRows(raw, revision),
     inputWidth: () => inputWidth(raw, revision),
     frames: framesOf(raw, revision),

@@ -48,6 +48,9 @@ export default async function SectionsPage({ searchParams }: { readonly searchPa
       note="standard ranges: nominal dimensions of the standard, properties derived from them"
       aside={
         <>
+          <Link className="link" href={pages.own}>
+            The office’s own
+          </Link>{' '}
           <a className="link" href={exported('csv')} download>
             CSV
           </a>{' '}

@@ -1,4 +1,5 @@
 /** The first sheet: what was analysed, by what, under which assumptions, and what must not be concluded from it. */
+import { originOfPart } from '@/lib/intake/own/own-thing';
 import { settingWords, statedSettings } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
 import { methodWords } from '@/lib/reports/method-words';
@@ -72,6 +73,13 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
       value === null ? 'silent' : typeof value === 'boolean' ? (value ? 'yes' : 'no') : value,
       origin.changedBy ? `changed on screen by ${origin.changedBy}` : (origin.cell ?? originWords[origin.source]),
     ];
+  }
+  const own = (source.parts ?? []).filter(({ origin }) => origin === 'office');
+  for (const [index, part] of own.entries()) {
+    if (index === 0) yield [];
+    const named = part.own === null || part.own === part.name ? part.name : `${part.name} (${part.own})`;
+    const frames = `in ${part.frames} ${part.frames === 1 ? 'frame' : 'frames'}`;
+    yield [index === 0 ? 'the office’s own' : '', `${part.kind} ${named}, ${frames}`, originOfPart(part)];
   }
   if (facts.assumptions.length > 0) {
     yield [];

@@ -1,4 +1,5 @@
 /** What the frames are made of, as it was used: sections, materials, load cases, combinations, limits, load totals. */
+import { originOfPart, type PartOrigin } from '@/lib/intake/own/own-thing';
 import type { Material, SectionProperties } from '@/lib/model/frame';
 import { cellOf, quantityColumn, text } from '@/lib/reports/workbook/report-sheet';
 import type { ReportRow, ReportSheet } from '@/lib/reports/workbook/report-sheet';
@@ -35,9 +36,10 @@ const materialRows: readonly (readonly [keyof Material['sources'], string, Quant
   ['expansion_perK', 'expansion', 'expansion'],
 ];
 
-export function sectionsSheet({ parts }: BatchFacts, system: System): ReportSheet {
-  const line = (kind: string, name: string, of: string, value: number | null, quantity: Quantity, from: string): ReportRow =>
-    [kind, name, of, value === null ? 'not available' : cellOf(value, quantity, system), unitLabel(quantity, system), from]; // prettier-ignore
+export function sectionsSheet({ parts }: BatchFacts, system: System, origins: readonly PartOrigin[] = []): ReportSheet {
+  const from = new Map(origins.map((part) => [`${part.kind} ${part.name}`, originOfPart(part)]));
+  const line = (kind: string, name: string, of: string, value: number | null, quantity: Quantity, source: string): ReportRow =>
+    [kind, name, of, value === null ? 'not available' : cellOf(value, quantity, system), unitLabel(quantity, system), source, from.get(`${kind} ${name}`) ?? '']; // prettier-ignore
   return {
     name: 'Sections and materials',
     columns: [
@@ -47,6 +49,7 @@ export function sectionsSheet({ parts }: BatchFacts, system: System): ReportShee
       { heading: 'value (in unit)', format: '0.000', width: 14 },
       text('unit', 8),
       text('source', 10),
+      text('comes from', 26),
     ],
     *rows(): Iterable<ReportRow> {
       for (const section of parts.sections.values()) {

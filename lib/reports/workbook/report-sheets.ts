@@ -25,7 +25,7 @@ export async function reportSheets(source: ReportSource): Promise<ReportSheet[]>
     displacementsSheet(source),
     movementsSheet(source),
     ...(facts.tied || beyondPlain(source.settings) ? [analysisSheet(source)] : []),
-    sectionsSheet(facts, system),
+    sectionsSheet(facts, system, source.parts),
     loadCasesSheet(facts),
     combinationsSheet(facts),
     limitsSheet(facts, system),

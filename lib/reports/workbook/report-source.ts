@@ -1,5 +1,6 @@
 /** What a result workbook is made from: stored numbers, never recomputed ones. */
 import type { InputIdentity, InputRow } from '@/lib/intake/intake';
+import type { PartOrigin } from '@/lib/intake/own/own-thing';
 import type { Frame } from '@/lib/model/frame';
 import type { SettingOrigins, Settings } from '@/lib/model/settings';
 import type { Problem } from '@/lib/problems/problem';
@@ -50,6 +51,8 @@ export interface ReportSource {
   readonly settings: Settings;
   readonly origins: SettingOrigins;
   readonly problems: readonly Problem[];
+  /** Where sections and materials come from; missing of what an earlier version read. */
+  readonly parts?: readonly PartOrigin[];
   readonly inputRows: () => Iterable<InputRow>;
   /** Cells of the widest of them, where that is known without going through them. */
   readonly inputWidth?: () => number;
