@@ -19,6 +19,25 @@ interface By {
   readonly id: number;
 }
 
+/** A frame of a revision at its place from 0; without an engine where it has no solution. */
+export async function findMarkedFrame(
+  db: Db,
+  office: number,
+  revision: number,
+  index: number,
+): Promise<{ index: number; id: string; engine: string | null; hash: string } | undefined> {
+  const row = await db
+    .selectFrom('revision_frame')
+    .innerJoin('revision', 'revision.id', 'revision_frame.revision')
+    .leftJoin('frame_version', 'frame_version.id', 'revision_frame.version')
+    .select(['revision_frame.frame_id', 'revision_frame.status', 'frame_version.engine', 'frame_version.hash'])
+    .where('revision.office', '=', office)
+    .where('revision_frame.revision', '=', revision)
+    .where('revision_frame.frame', '=', index)
+    .executeTakeFirst();
+  return row && { index, id: row.frame_id, engine: row.status === 'solved' ? row.engine : null, hash: row.hash ?? '' };
+}
+
 /** Why nothing of a revision can be marked as it stands now; null = it can. Within the transaction that marks. */
 export async function markable(within: Db, { id }: Pick<RevisionRecord, 'id'>): Promise<string | null> {
   const { state } = await within.selectFrom('revision').select('state').where('id', '=', id).executeTakeFirstOrThrow();

@@ -15,13 +15,15 @@ describe('who may do what', () => {
     for (const act of acts) expect(may(of('lead'), act, { office: 1 })).toBe(!clientsOwn.includes(act));
   });
 
-  it('lets a checker read everything and change nothing', () => {
+  it('lets a checker read everything and mark it, and change nothing', () => {
     expect(acts.filter((act) => may(of('checker'), act))).toEqual([
       'read projects',
       'read sections',
       'read limits',
       'read combination sets',
       'read a batch',
+      'check',
+      'answer a query',
       'take results away',
       'read activity',
       'be oneself',
@@ -36,6 +38,8 @@ describe('who may do what', () => {
     expect(may(of('analyst'), 'bring sheets in')).toBe(true);
     expect(may(of('analyst'), 'run')).toBe(true);
     expect(may(of('analyst'), 'change a revision')).toBe(true);
+    expect(may(of('analyst'), 'send to check')).toBe(true);
+    expect(may(of('analyst'), 'check')).toBe(false);
     expect(may(of('analyst'), 'add people')).toBe(false);
     expect(may(of('analyst'), 'assign people')).toBe(false);
   });

@@ -1,7 +1,4 @@
 /** Addresses of pages and of the API, written once. Revisions are named by their letter within a batch. */
-import { ownPaths } from '@/lib/api/own-inputs';
-import type { OwnKind } from '@/lib/intake/own/own-thing';
-import type { System } from '@/lib/units/quantity';
 import { ownPaths } from '@/lib/api/own-paths';
 import type { OwnKind } from '@/lib/intake/own/own-thing';
 import type { System } from '@/lib/units/quantity';
@@ -55,6 +52,10 @@ export const pages = {
   /** Two revisions compared; what is left out of `chosen` is as the page has it by itself. */
   compare: (batch: number, letter: string, chosen: CompareChosen = {}) =>
     `/batches/${batch}/${e(letter)}/compare${searchOf(chosen)}`,
+  toCheck: '/to-check',
+  /** The checker's list of a revision, at one of its frames (its place in sheet order, from 1). */
+  checking: (batch: number, letter: string, number?: number) =>
+    `/batches/${batch}/${e(letter)}/checking${number === undefined ? '' : `?frame=${number}`}`,
   next: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/bring`,
   /** Other sections for members: those of a view, of a frame, or one of its members. */
   change: (batch: number, letter: string, of: View | { readonly frame: string; readonly member?: string }) =>
@@ -131,6 +132,13 @@ export const api = {
     letter: string,
     part: 'changes' | 'input' | 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'workbook' | 'json' | 'csv',
   ) => `/api/batches/${batch}/revisions/${e(letter)}/${part}`,
+  toCheck: '/api/to-check',
+  checking: (batch: number, letter: string, part?: 'return' | 'pass') =>
+    `/api/batches/${batch}/revisions/${e(letter)}/checking${part === undefined ? '' : `/${part}`}`,
+  query: (batch: number, letter: string, query: number) =>
+    `/api/batches/${batch}/revisions/${e(letter)}/checking/queries/${query}`,
+  checkingFrame: (batch: number, letter: string, number: number, part?: 'seen' | 'queries' | 'acceptances' | 'own-values') =>
+    `/api/batches/${batch}/revisions/${e(letter)}/checking/frames/${number}${part === undefined ? '' : `/${part}`}`,
   preview: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/changes/preview`,
   table: (batch: number, letter: string, view: View, more: Readonly<Record<string, string | number>> = {}) =>
     tableAddress(batch, letter, view, '', more),

@@ -15,6 +15,7 @@ const { url, people } = inject('server');
 const staff: readonly PersonRole[] = ['lead', 'analyst', 'checker'];
 const makers: readonly PersonRole[] = ['lead', 'analyst'];
 const lead: readonly PersonRole[] = ['lead'];
+const checkers: readonly PersonRole[] = ['lead', 'checker'];
 const everybody = 'everybody';
 
 type Who = readonly PersonRole[] | typeof everybody;
@@ -41,6 +42,7 @@ const table: Readonly<Record<string, Line>> = {
   'api/people': { who: { GET: lead, POST: lead }, body: {} },
   'api/sections': reads(),
   'api/limits': { who: { GET: staff, PUT: lead }, body: {} },
+  'api/to-check': reads(),
   'api/projects': { who: { GET: staff, POST: makers }, body: {} },
   'api/projects/[project]': reads(),
   'api/projects/[project]/people': { who: { GET: lead, PUT: lead }, body: {} },
@@ -50,6 +52,15 @@ const table: Readonly<Record<string, Line>> = {
   [revision]: reads(),
   [`${revision}/cell`]: reads('?sheet=Members&cell=A1'),
   [`${revision}/changes`]: { who: { GET: staff, POST: makers }, body: {} },
+  [`${revision}/checking`]: { who: { GET: staff, POST: makers }, body: { note: 'x'.repeat(9999) } },
+  [`${revision}/checking/return`]: { who: { POST: checkers }, body: {} },
+  [`${revision}/checking/pass`]: { who: { POST: checkers }, body: {} },
+  [`${revision}/checking/frames/[number]`]: reads(),
+  [`${revision}/checking/frames/[number]/seen`]: { who: { POST: checkers, DELETE: checkers } },
+  [`${revision}/checking/frames/[number]/queries`]: { who: { POST: checkers }, body: {} },
+  [`${revision}/checking/frames/[number]/acceptances`]: { who: { POST: checkers, DELETE: checkers }, body: {} },
+  [`${revision}/checking/frames/[number]/own-values`]: { who: { POST: checkers }, body: {} },
+  [`${revision}/checking/queries/[query]`]: { who: { POST: staff }, body: {} },
   [`${revision}/compare`]: reads(),
   [`${revision}/compare/export`]: reads(),
   [`${revision}/changes/preview`]: { who: { POST: makers }, body: {} },
@@ -72,12 +83,14 @@ const table: Readonly<Record<string, Line>> = {
   '(desk)/people': { who: { GET: lead } },
   '(desk)/sections': reads(),
   '(desk)/limits': reads(),
+  '(desk)/to-check': reads(),
   '(desk)/projects': reads(),
   '(desk)/projects/[project]': reads(),
   '(desk)/projects/[project]/bring': { who: { GET: makers } },
   [page]: reads(),
   [`${page}/bring`]: { who: { GET: makers } },
   [`${page}/change`]: { who: { GET: makers } },
+  [`${page}/checking`]: reads(),
   [`${page}/checks`]: reads(),
   [`${page}/compare`]: reads(),
   [`${page}/frames`]: reads(),
@@ -131,6 +144,7 @@ describe('access', () => {
       .replace('[batch]', String(batch))
       .replace('[revision]', letter)
       .replace('[number]', '1')
+      .replace('[query]', '1')
       .replace('[table]', 'members')
       .replace('[...nextauth]', 'session')
       .replace('[...rest]', 'no/such/address');
