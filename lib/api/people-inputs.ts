@@ -61,3 +61,16 @@ export const tokenInput = z.object({
     { error: `Choose for how many days: ${tokenDays.join(', ')}.` },
   ),
 });
+
+const dayText = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, 'Give a day like 2026-12-01.');
+/** An empty field of a form says nothing. */
+const orNothing = <T extends z.ZodType>(schema: T) => z.preprocess((sent) => (sent === '' ? undefined : sent), schema.optional());
+
+/** Which entries of a project’s activity. */
+export const activityInput = z.object({
+  person: orNothing(z.coerce.number({ error: 'Name a person by their id.' }).int().positive()),
+  what: orNothing(z.string().max(100)),
+  from: orNothing(dayText),
+  to: orNothing(dayText),
+  before: orNothing(z.coerce.number().int().positive()),
+});

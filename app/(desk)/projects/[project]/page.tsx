@@ -29,7 +29,14 @@ export default async function ProjectPage({ params }: { readonly params: Promise
     <Zone
       title={`Batches of ${name}`}
       level={1}
-      note="the newest first, each by its latest revision"
+      note={
+        <>
+          the newest first, each by its latest revision.{' '}
+          <Link className="link" href={pages.activity(project.id)}>
+            Activity
+          </Link>
+        </>
+      }
       aside={
         mayBring && (
           <ButtonLink href={pages.bring(project.id)} look="filled">
