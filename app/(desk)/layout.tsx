@@ -10,6 +10,7 @@ export default async function DeskLayout({ children }: { readonly children: Reac
   if (person === null) return children;
   const words = [
     ...(may(person, 'read projects') ? [{ label: 'Projects', href: '/projects', within: ['/projects', '/batches'] }] : []),
+    ...(may(person, 'read issues') ? [{ label: 'Issues', href: '/issues', within: ['/issues'] }] : []),
     ...(may(person, 'read sections') ? [{ label: 'Sections', href: '/sections', within: ['/sections'] }] : []),
     ...(may(person, 'read combination sets')
       ? [{ label: 'Combinations', href: '/combinations', within: ['/combinations'] }]

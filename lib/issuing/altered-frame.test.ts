@@ -44,6 +44,6 @@ describe('whether an engine gives what was issued', () => {
     const fresh = alteredFrame(of, { ...stored, states: stored.states.slice(1) }, stored);
     expect(fresh?.what).toContain('is new');
     const failed = alteredFrame(of, stored, { ...stored, status: 'not solved', verdict: 'not checked', states: [], checks: [] });
-    expect(failed?.what).toMatch(/no solution now, verdict/);
+    expect(failed?.what).toContain('it has no solution now');
   });
 });

@@ -38,11 +38,14 @@ export default async function ProjectPage({ params }: { readonly params: Promise
         </>
       }
       aside={
-        mayBring && (
-          <ButtonLink href={pages.bring(project.id)} look="filled">
-            Bring sheets in
-          </ButtonLink>
-        )
+        <>
+          <Link href={pages.issues(project.id)}>Issues</Link>
+          {mayBring && (
+            <ButtonLink href={pages.bring(project.id)} look="filled">
+              Bring sheets in
+            </ButtonLink>
+          )}
+        </>
       }
     >
       {batches.length === 0 ? (

@@ -76,7 +76,7 @@ export function IssueForm({ address, clients, frames, flagged, may, making }: Is
         {(
           [
             ['all', `all ${frames.toLocaleString('en-GB')}`],
-            ['flagged', `those over, not checked or near (${flagged.toLocaleString('en-GB')})`],
+            ['flagged', `those over or not checked (${flagged.toLocaleString('en-GB')})`],
             ['some', 'some, by their numbers in sheet order'],
           ] as const
         ).map(([value, label]) => (
