@@ -29,6 +29,7 @@ export const seedProjects: readonly SeedProject[] = [
       { name: 'Portal sheds, first phase', by: 'analyst', revisions: [ran('portal-sheds-240.xlsx')] },
       { name: 'Portal sheds, catalogue', by: 'secondAnalyst', revisions: [ran('portal-sheds-1000.xlsx')] },
       { name: 'Sheds on pinned bases', by: 'analyst', revisions: [ran('slender-sheds-24.xlsx')] },
+      { name: 'Sheds by EN 1993-1-1', by: 'analyst', revisions: [ran('code-sheds-24.xlsx')] },
     ],
   },
   {
@@ -50,6 +51,7 @@ export const seedProjects: readonly SeedProject[] = [
       { name: 'Walkway brackets', by: 'secondAnalyst', revisions: [ran('walkways-csv')] },
       { name: 'Canopies', by: 'analyst', revisions: [ran('canopies-us-36.xlsx')] },
       { name: 'Halls with leaning columns', by: 'secondAnalyst', revisions: [ran('direct-analysis-us-9.xlsx')] },
+      { name: 'Halls by AISC 360-22', by: 'secondAnalyst', revisions: [ran('code-halls-us-9.xlsx')] },
       // Revision A shows what slips look like; B is the same file mended.
       {
         name: 'Cutter Row bents',

@@ -5,6 +5,7 @@ import { basename, join } from 'node:path';
 import { migrate } from '@/db/migrate';
 import { openDatabase, type Db, type OpenDatabase } from '@/db/open';
 import { insertActivity } from '@/db/queries/activity';
+import { insertCombinationSet } from '@/db/queries/combination-sets';
 import { insertBatch } from '@/db/queries/batches';
 import { countOffices, insertOffice } from '@/db/queries/offices';
 import { insertPerson } from '@/db/queries/people';
@@ -12,6 +13,7 @@ import { insertProject, updateAssigned } from '@/db/queries/projects';
 import { findRevisionById, insertRevision } from '@/db/queries/revisions';
 import { insertUpload } from '@/db/queries/uploads';
 import { hashPassword } from '@/lib/access/password';
+import { rulesOf } from '@/lib/combinations/office-set';
 import { askForReading, askForRun } from '@/worker/ask';
 import { createPools } from '@/worker/pools';
 import { WorkQueue } from '@/worker/queue';
@@ -80,6 +82,16 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
     people.set(key, person);
   }
   const idOf = (key: SeedPerson['key']): number => people.get(key)!;
+  const basedOn = 'EN 1990 6.10, live B, snow to 1000 m, service characteristic';
+  await insertCombinationSet(db, office, {
+    name: 'Sheds, category B',
+    basedOn,
+    level: 'factored',
+    together: false,
+    rules: rulesOf(basedOn),
+    provenance: 'The recommended values of EN 1990, as the office uses them for sheds up to 1000 m. Invented for this demonstration.',
+    person: idOf('lead'),
+  });
   for (const { name, number, client, batches } of seedProjects) {
     const lead = idOf('lead');
     const project = (await insertProject(db, office, { name, number, person: lead }))!;
