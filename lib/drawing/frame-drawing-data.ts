@@ -94,6 +94,32 @@ function drawingResult(frame: Frame, state: ResultState): DrawingResult {
   };
 }
 
+/** The loads of one load case as typed, with nothing that they do. @param index of the case in the frame */
+export function drawingCase(frame: Frame, index: number): DrawingResult {
+  const name = frame.cases[index]?.name ?? '';
+  return {
+    name,
+    kind: 'case',
+    purpose: null,
+    description: null,
+    loads: loadsOf(frame, index, name, 1),
+    reactions: [],
+    displacements: [],
+    lines: [],
+    slack: [],
+    method: {
+      order: 1,
+      criticalLoadFactor: null,
+      imperfection: null,
+      shearDeformation: false,
+      reducedStiffness: false,
+      loadScale: 1,
+      iterations: 1,
+      change: 0,
+    },
+  };
+}
+
 export function methodOf({ order, criticalLoadFactor, method }: ResultState): DrawingMethod {
   return {
     order,
