@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { expandSigns, mostSigned, splitSign } from '@/lib/combinations/expand-signs';
+import { expandSigns, mostSigned, signedName, splitSign } from '@/lib/combinations/expand-signs';
 
 it('a combination without ± stands for itself', () => {
   expect(expandSigns('C1', [{ factor: 1.35, signed: false }])).toEqual([{ name: 'C1', factors: [1.35] }]);
@@ -37,4 +37,13 @@ it('more signs than can be meant are a caller’s mistake', () => {
 it('± is read as people type it', () => {
   expect(['±1.5', '+/-1.5', '+-1.5', ' ± 1.5', '+ / − 1.5'].map(splitSign)).toEqual(['1.5', '1.5', '1.5', '1.5', '1.5']);
   expect(['1.5', '+1.5', '-1.5', ''].map(splitSign)).toEqual([null, null, null, null]);
+});
+it('a name with signs is written one way, however they are typed', () => {
+  expect(['C1 (+-)', 'C1 (+ −)', 'C1(−)', 'C1', 'C1 (a)'].map(signedName)).toEqual([
+    'C1 (+ −)',
+    'C1 (+ −)',
+    'C1 (−)',
+    'C1',
+    'C1 (a)',
+  ]);
 });

@@ -77,7 +77,10 @@ const wrong = (sentence: string): RuleSetReading => ({ set: null, wrong: sentenc
 function readAfresh(text: string): RuleSetReading {
   const [first = '', ...words] = text.split(/;|,(?=\s|$)/).map((word) => word.trim());
   const name = byKey.get(keyOf(first));
-  if (name === undefined) return wrong(`“${first}” is no combination set. Known are ${ruleSetNames.join(', ')}, and as listed`);
+  if (name === undefined)
+    return wrong(
+      `“${first}” is no combination set. Known are ${ruleSetNames.join(', ')}, and as listed. A set of an office’s own is chosen on a revision’s settings page, which lists its combinations in the sheet`,
+    );
   const given = words.filter((word) => word !== '');
   const together = given.some((word) => keyOf(word) === 'kindstogether');
   const others = given.filter((word) => keyOf(word) !== 'kindstogether');

@@ -20,3 +20,17 @@ it('shows each combination once: listed or by its clause, and of how many frames
     '1.0 dead + 1.0 wind (service)',
   ]);
 });
+
+it('shows what is only listed as listed, and counts frames that share their lists', () => {
+  const sheets = sound();
+  sheets['Combinations'] = [['combination', 'purpose', 'dead', 'wind'], ['C1', 'strength', 1.35, '±1.5']]; // prettier-ignore
+  const { frames } = readSheets(sheets);
+  const read = frames.flatMap(({ frame }) => frame ?? []);
+  const [first] = read;
+  const again = first ? [...read, { ...first, cases: [...first.cases] }] : read;
+  expect(shownCombinations(again, null).map(({ name, clause, frames: of }) => [name, clause, of])).toEqual([
+    ['C1 (+)', null, 3],
+    ['C1 (−)', null, 3],
+  ]);
+  expect(shownCombinations([], 'EN 1990 6.10')).toEqual([]);
+});

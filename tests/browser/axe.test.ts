@@ -56,7 +56,7 @@ describe('every page by axe', () => {
     );
   }
 
-  const lead = ['/projects', '/people', '/limits'];
+  const lead = ['/projects', '/people', '/limits', '/combinations'];
   const staff = () => [
     `/projects/${people.north.project}`,
     `/projects/${people.north.project}/bring`,

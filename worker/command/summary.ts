@@ -23,12 +23,18 @@ interface Line {
   readonly reason: string;
 }
 
+/** Where the sheets are silent: what an office would have said is not known here. */
+const noOffice =
+  'Limits are those of the sheets, which give none for some movement: no office’s own limits apply on the command line.';
+
 /** Frames, counts by verdict, and the ten worst (over first, then near, by ratio) as a table. */
 export async function summarise(source: EvaluatedBatch): Promise<string> {
   const counts: Record<Verdict, number> = { over: 0, 'not checked': 0, near: 0, within: 0 };
   let unsolved = 0;
   const worst: Line[] = [];
+  let silent = false;
   for await (const { id, evaluation } of source.frames({ states: false })) {
+    silent ||= evaluation?.notChecked.some((reason) => /no (deflection|sway) limit/.test(reason)) ?? false;
     const verdict = evaluation?.verdict ?? 'not checked';
     counts[verdict]++;
     if (evaluation?.status !== 'solved') unsolved++;
@@ -53,6 +59,7 @@ export async function summarise(source: EvaluatedBatch): Promise<string> {
     `${source.frameCount} frames: ${counts.over} over, ${counts['not checked']} not checked, ${counts.near} near, ${counts.within} within; ${unsolved} not solved`,
     `Problems in the sheets: ${by('error')}, ${by('warning')}, ${by('note')}`,
     ...errorLines(source.problems, 5).map((line) => `  ${line}`),
+    ...(silent ? [noOffice] : []),
     '',
     'Worst first',
     ...table(worst, source.settings.nearLimit),

@@ -16,6 +16,9 @@ function rows(member: CodeMember, demands: readonly Demand[], settings: Settings
     return demands.map((demand) => refusedRow(whole, demand, of));
   }
   note('EN 1993-1-1: gross sections (holes are not known), η = 1.0 in shear');
+  note(
+    'EN 1993-1-1: recommended values but for γM0 and γM1 as set; other values of a national annex are not read (the United Kingdom’s for lateral-torsional buckling: λ̄LT,0 = 0.2 and β = 1.0 for welded sections, kc = 1/√C1)',
+  );
   if (of.lateral.kind === 'rolled' || of.lateral.kind === 'general')
     note(
       `M_cr: doubly symmetric section, ends of each length between restraints held sideways and against twist, free to warp; C1 from its diagram of moments; loads at the ${settings.loadHeight}`,

@@ -42,6 +42,8 @@ const table: Readonly<Record<string, Line>> = {
   'api/people': { who: { GET: lead, POST: lead }, body: {} },
   'api/sections': reads(),
   'api/limits': { who: { GET: staff, PUT: lead }, body: {} },
+  'api/combination-sets': { who: { GET: staff, POST: lead }, body: {} },
+  'api/combination-sets/[set]': { who: { GET: staff, POST: lead, PUT: lead }, body: {} },
   'api/to-check': reads(),
   'api/projects': { who: { GET: staff, POST: makers }, body: {} },
   'api/projects/[project]': reads(),
@@ -71,6 +73,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${revision}/json`]: reads(),
   [`${revision}/marked-copy`]: reads(),
   [`${revision}/progress`]: reads(),
+  [`${revision}/report`]: reads(),
   [`${revision}/run`]: { who: { POST: makers, DELETE: makers } },
   [`${revision}/summary`]: reads(),
   [`${revision}/tables/[table]`]: reads(),
@@ -83,6 +86,8 @@ const table: Readonly<Record<string, Line>> = {
   '(desk)/people': { who: { GET: lead } },
   '(desk)/sections': reads(),
   '(desk)/limits': reads(),
+  '(desk)/combinations': reads(),
+  '(desk)/combinations/[set]': reads(),
   '(desk)/to-check': reads(),
   '(desk)/projects': reads(),
   '(desk)/projects/[project]': reads(),
@@ -124,6 +129,7 @@ function methodsOf(file: string): Method[] {
 describe('access', () => {
   const visitors = new Map<string, Visitor>();
   const brought = new Map<OfficeKey, Brought>();
+  const sets = new Map<OfficeKey, number>();
 
   beforeAll(async () => {
     for (const office of officeKeys) {
@@ -132,6 +138,10 @@ describe('access', () => {
       const made = await bring(analyst, `/api/projects/${people[office].project}/batches`, 'samples/pipe-rack-12.xlsx');
       await run(analyst, made);
       brought.set(office, made);
+      const rules = [{ from: 'handbook', purpose: 'strength', rule: '1.35 dead' }];
+      const set = { name: `Sheds ${office}`, level: 'factored', rules, provenance: 'handbook' };
+      const kept = await visitors.get(`${office} lead`)!.send('/api/combination-sets', set);
+      sets.set(office, ((await kept.json()) as { set: number }).set);
     }
   });
 
@@ -140,6 +150,7 @@ describe('access', () => {
     const { batch, revision: letter } = brought.get(office)!;
     const filled = address
       .replace('(desk)/', '')
+      .replace('[set]', String(sets.get(office)))
       .replace('[project]', String(people[office].project))
       .replace('[batch]', String(batch))
       .replace('[revision]', letter)
@@ -187,7 +198,7 @@ describe('access', () => {
           else expect([own.status, role], 'own office').toEqual([isPage(file) || role === 'client' ? 404 : 403, role]);
           if (allowed && isPage(file) && own.status === 307) expect(own.headers.get('location')).not.toMatch(/sign-in/);
           await own.body?.cancel();
-          if (!/\[(project|batch)\]/.test(address)) continue;
+          if (!/\[(project|batch|set)\]/.test(address)) continue;
           const other = await ask(visitor, file, address, method, 'south');
           const text = await other.text();
           expect([other.status, role], 'other office').toEqual([allowed || isPage(file) || role === 'client' ? 404 : 403, role]);
