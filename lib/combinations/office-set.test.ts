@@ -56,3 +56,14 @@ describe('an office’s own set', () => {
     expect(() => rulesOf('no set')).toThrow(RangeError);
   });
 });
+
+describe('sets of very many cases', () => {
+  it('are counted and not made, before memory would run out', () => {
+    const many: LoadCase[] = Array.from({ length: 20 }, (_, i) => ({
+      name: `L${i}`, kind: 'live', selfWeight: 0, alternative: null, reversible: false, note: null,
+    })); // prettier-ignore
+    const { set: rules } = officeRuleSet(set({ rules: [{ from: 'x', purpose: 'strength', suffix: '', rule: '1.5 live' }] }));
+    if (!rules) throw new Error('no rules');
+    expect(generateCombinations(many, rules)).toMatchObject({ list: [], tooMany: 2 ** 20 - 1 });
+  });
+});

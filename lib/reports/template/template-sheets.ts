@@ -130,7 +130,11 @@ export function templateSheets(system: System): readonly TemplateSheet[] {
         c('span', 'Members with the same word form one physical member.'),
         c('length major', 'Buckling length about the major axis. Blank: length of the span.', { quantity: 'length' }),
         c(minor, 'Buckling length about the minor axis. Blank: length of the span.', { quantity: 'length' }),
-        c(ltb, 'Between restraints of the face in compression. Blank: length of the span.', { quantity: 'length' }),
+        c(
+          ltb,
+          'Between restraints of the face in compression, counted from the start of the span; what is left over is at its end. Blank: length of the span.',
+          { quantity: 'length' },
+        ),
         c('group', 'A word to filter by and to set limits by.'),
       ],
       rows: [
