@@ -2,6 +2,8 @@ import type { ReactNode } from 'react';
 import { DeskBar } from '@/app/_client/desk-bar';
 import { QueryProvider } from '@/app/_client/query-provider';
 import { pagePerson } from '@/app/_server/page-person';
+import { db } from '@/db/client';
+import { countRevisionsToCheck } from '@/db/queries/checking';
 import { may } from '@/lib/access/may';
 
 /** The bar over every page of the office. Whether the page may be seen is settled by the page itself. */
@@ -10,6 +12,9 @@ export default async function DeskLayout({ children }: { readonly children: Reac
   if (person === null) return children;
   const words = [
     ...(may(person, 'read projects') ? [{ label: 'Projects', href: '/projects', within: ['/projects', '/batches'] }] : []),
+    ...(may(person, 'read a batch')
+      ? [{ label: 'To check', href: '/to-check', within: ['/to-check'], count: await countRevisionsToCheck(db(), person.office) }]
+      : []),
     ...(may(person, 'read issues') ? [{ label: 'Issues', href: '/issues', within: ['/issues'] }] : []),
     ...(may(person, 'read sections') ? [{ label: 'Sections', href: '/sections', within: ['/sections'] }] : []),
     ...(may(person, 'read combination sets')

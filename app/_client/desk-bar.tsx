@@ -10,7 +10,12 @@ interface DeskBarProps {
   readonly person: string;
   readonly role: string;
   readonly home: string;
-  readonly words: readonly { readonly label: string; readonly href: string; readonly within: readonly string[] }[];
+  readonly words: readonly {
+    readonly label: string;
+    readonly href: string;
+    readonly within: readonly string[];
+    readonly count?: number;
+  }[];
 }
 
 /** The bar over every page, with the word of the part one is in underlined. */
@@ -19,7 +24,13 @@ export function DeskBar({ words, ...rest }: DeskBarProps) {
   return (
     <Bar
       {...rest}
-      words={words.map(({ label, href, within }) => ({ label, href, current: within.some((start) => path.startsWith(start)) }))}
+      words={words.map(({ label, href, within, count }) => ({
+        label,
+        href,
+        current: within.some((start) => path.startsWith(start)),
+        // a nought is no news
+        ...(count ? { count } : {}),
+      }))}
       account={
         <>
           <Link className="link" href={pages.me}>

@@ -1,4 +1,5 @@
 import { memo } from 'react';
+import { checkMarkPaths } from '../checking/check-mark';
 import { verdictClass } from '../ui/verdict-mark';
 import { cellHeight, type StripFrame } from '@/lib/drawing/strip-data';
 
@@ -58,10 +59,21 @@ export const StripCell = memo(function StripCell(props: StripCellProps) {
         />
       )}
       {(state === 'within' || state === 'near') && <path className="cell-level" d={`M${x} ${top + 0.75}h${width}`} />}
+      {frame.mark && <Marked kind={frame.mark} x={x + width / 2} y={top} />}
       {read && <rect className="cell-read" x={x - 3.5} y={foot - height - 2} width={width + 7} height={height + 5} />}
     </g>
   );
 });
+
+/** A checker's hand over a cell's head. */
+function Marked({ kind, x, y }: { readonly kind: keyof typeof checkMarkPaths; readonly x: number; readonly y: number }) {
+  return (
+    <g className="cell-mark" data-mark={kind} transform={`translate(${x - 4.5} ${Math.max(y - 10, 0)}) scale(0.75)`}>
+      <path className="cell-mark-halo" d={checkMarkPaths[kind]} />
+      <path d={checkMarkPaths[kind]} />
+    </g>
+  );
+}
 
 /** Solid, with a V cut in its head: 46 % wide, 20 % deep, 3 px at least. */
 function notched(x: number, top: number, width: number, tall: number): string {

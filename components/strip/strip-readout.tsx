@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import type { RefObject } from 'react';
+import { CheckMark } from '../checking/check-mark';
 import { RatioText } from '../ui/ratio-text';
 import { VerdictMark } from '../ui/verdict-mark';
 import type { StripFrame } from '@/lib/drawing/strip-data';
@@ -43,6 +44,11 @@ export function StripReadout({ frame, number, count, href, nearLimit, linkRef }:
       {frame.section && <span>{frame.section}</span>}
       {frame.combination && <span>combination {frame.combination}</span>}
       {frame.reason && <span className="readout-soft">{frame.reason}</span>}
+      {frame.mark && (
+        <span className="ck-green">
+          <CheckMark kind={frame.mark} /> {frame.mark}
+        </span>
+      )}
       {href && (
         <span className="readout-key">
           <kbd>Enter</kbd> opens

@@ -86,7 +86,8 @@ export const StripRow = memo(function StripRow(props: StripRowProps) {
 function label(frame: StripFrame, nearLimit: number): string {
   if (frame.state) return `${frame.id}, ${frame.state}`;
   const ratio = frame.ratio === null ? '' : `, ${formatRatio(frame.ratio, nearLimit)}`;
-  return `${frame.id}, ${frame.verdict ?? 'waiting'}${ratio}`;
+  const mark = frame.mark ? `, ${frame.mark}` : '';
+  return `${frame.id}, ${frame.verdict ?? 'waiting'}${ratio}${mark}`;
 }
 
 /** Width of a group's name in the condensed cut, and what keeps it from the next, px. */

@@ -32,6 +32,8 @@ const keys: readonly KeyWord[] = [
   { keys: ['n', 'v', 'm', 'b'], does: 'axial force, shear force, bending moment, buckled shape' },
   { keys: ['↑', '↓', '←', '→'], does: 'read the next cell, row, or point of a member' },
   { keys: ['Enter'], does: 'open what is read' },
+  { keys: ['s', 'Space'], does: 'on a checker’s list: mark the frame seen and go on' },
+  { keys: ['q', 'a', 'o'], does: 'on a checker’s list: query, accept, open the frame’s own page' },
   { keys: ['?'], does: 'show these keys' },
 ];
 

@@ -16,6 +16,8 @@ export interface StripFrame {
   readonly combination?: string | null;
   /** Why it is not checked. */
   readonly reason?: string | null;
+  /** The checker's, where there is one. */
+  readonly mark?: 'seen' | 'queried' | 'accepted' | null;
 }
 
 /** Frames in order, counted by verdict. */

@@ -5,22 +5,26 @@ import { db } from '@/db/client';
 import { listRows } from '@/db/queries/lists';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { pages } from '@/lib/api/addresses';
+import { whyNotMove } from '@/lib/checking/checking-states';
 import type { TableName } from '@/lib/tables/view';
+import { CheckingLine } from './checking-line';
 import { IssueLine } from './issue-line';
 import { MadeFrom } from './made-from';
 import { letterBefore } from './letter-before';
 import { stateWords } from './state-words';
 import { ResultTools } from './result-tools';
 
-export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | 'compare' | 'issue' | TableName;
+export type SheetName = 'read' | 'settings' | 'change' | 'run' | 'glance' | 'compare' | 'checking' | 'issue' | 'size' | TableName;
 
 interface RevisionHeadProps {
   readonly revision: RevisionRecord;
   readonly sheet: SheetName;
 }
 
-/** The numbered sheets; marks (9) keep their number for when they come. */
-const sheets = ['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems', 'compare'] as const;
+/** The numbered sheets. */
+const sheets = [
+  'glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'problems', 'compare', 'checking',
+] as const; // prettier-ignore
 
 /** Title block and sheet index over every page of a revision. */
 export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
@@ -33,8 +37,9 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
       <IssueLine revision={revision} />
+      <CheckingLine revision={revision} />
       <MadeFrom revision={revision} />
-      {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change' || sheet === 'issue') && (
+      {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change' || sheet === 'issue' || sheet === 'size') && (
         <SheetIndex
           sheets={sheets.map((name) => ({
             label: labelOf(revision, name),
@@ -42,7 +47,14 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
             count: known[name] ?? null,
             current: name === sheet,
           }))}
-          tools={<ResultTools batch={batch} letter={letter} ready={hasResults && revision.state !== 'running'} />}
+          tools={
+            <ResultTools
+              batch={batch}
+              letter={letter}
+              ready={hasResults && revision.state !== 'running'}
+              checking={whyNotMove(revision.state, 'send') === null}
+            />
+          }
         />
       )}
     </>
@@ -55,6 +67,7 @@ const otherOf = ({ letter, madeFrom }: RevisionRecord): string | null => madeFro
 /** "Frames", "Compare with A" */
 function labelOf(revision: RevisionRecord, name: (typeof sheets)[number]): string {
   const other = otherOf(revision);
+  if (name === 'checking') return 'Marks';
   return name === 'compare' && other !== null ? `Compare with ${other}` : name[0]!.toUpperCase() + name.slice(1);
 }
 
@@ -62,6 +75,7 @@ function labelOf(revision: RevisionRecord, name: (typeof sheets)[number]): strin
 function sheetHref(revision: RevisionRecord, name: (typeof sheets)[number]): string | null {
   const { batch, letter, runStartedAt } = revision;
   if (runStartedAt === null && name !== 'problems') return null;
+  if (name === 'checking') return pages.checking(batch, letter);
   if (name !== 'compare') return pages.sheet(batch, letter, name);
   const other = otherOf(revision);
   return other === null ? null : pages.compare(batch, letter, { with: other });

@@ -39,3 +39,11 @@ export function stripFrames(cells: readonly GlanceCell[], running = false, inHan
     return cells.length > longStrip ? cell : { ...cell, check, subject, section, combination, reason };
   });
 }
+
+/** The same with the checker's marks, by place from 0. */
+export function markedFrames(
+  frames: readonly StripFrame[],
+  marks: ReadonlyMap<number, StripFrame['mark']>,
+): readonly StripFrame[] {
+  return marks.size === 0 ? frames : frames.map((frame, i) => ({ ...frame, mark: marks.get(i) ?? null }));
+}

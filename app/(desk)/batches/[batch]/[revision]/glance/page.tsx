@@ -10,13 +10,14 @@ import { Strip } from '@/components/strip/strip';
 import { Cautions } from '@/components/ui/notice';
 import { Columns, Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
+import { listStripMarks } from '@/db/queries/checking';
 import { findSummary, listParameterRatios } from '@/db/queries/summary';
 import { pages } from '@/lib/api/addresses';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import type { ParameterColumn } from '@/lib/tables/shown-columns';
 import type { View } from '@/lib/tables/view';
 import { RevisionHead } from '../_head/revision-head';
-import { stripFrames } from '../_head/strip-frames';
+import { markedFrames, stripFrames } from '../_head/strip-frames';
 import { governingCounts, sectionWork, worstFrames } from './glance-data';
 import { RatioOver } from './ratio-over';
 
@@ -29,6 +30,7 @@ export default async function GlancePage({ params }: { readonly params: Promise<
   const summary = await findSummary(db(), person.office, revision.id);
   if (summary === undefined) throw new Error(`Expected a summary of revision ${revision.id}`);
   const { batch, letter, units } = revision;
+  const marks = await listStripMarks(db(), person.office, revision.id);
   const nearLimit = revision.settings?.nearLimit ?? 0.9;
   const { cells, counts } = summary;
   const numeric = summary.parameters.filter((one) => one.numeric);
@@ -60,7 +62,11 @@ export default async function GlancePage({ params }: { readonly params: Promise<
   const main = (
     <>
       <Zone>
-        <Strip frames={stripFrames(cells)} nearLimit={nearLimit} hrefPattern={`${pages.sheet(batch, letter, 'frames')}/{n}`} />
+        <Strip
+          frames={markedFrames(stripFrames(cells), marks)}
+          nearLimit={nearLimit}
+          hrefPattern={`${pages.sheet(batch, letter, 'frames')}/{n}`}
+        />
       </Zone>
       <div className={`border-hair grid border-t ${first === undefined ? '' : 'md:grid-cols-2'}`}>
         {first !== undefined && (

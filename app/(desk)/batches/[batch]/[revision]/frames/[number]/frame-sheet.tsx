@@ -15,6 +15,7 @@ import { isClause } from '@/lib/checks/design-code/clause-name';
 import { api, pages } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 import { ChecksTable } from './checks-table';
+import { FrameHandChecks, FrameMarks } from './frame-marks';
 import { MembersTable, MovementsTable, ReactionsTable } from './figures';
 
 interface FrameSheetProps {
@@ -25,10 +26,12 @@ interface FrameSheetProps {
   readonly list: string;
   /** The person may make the next revision from this one. */
   readonly mayChange: boolean;
+  /** It was sent to check: its marks are shown. */
+  readonly sent: boolean;
 }
 
 /** Drawing left, checks and one open working right, the chosen result's figures below. */
-export function FrameSheet({ batch, letter, first, list, mayChange }: FrameSheetProps) {
+export function FrameSheet({ batch, letter, first, list, mayChange, sent }: FrameSheetProps) {
   const [result, setResult] = useState(first.drawing?.chosen?.name ?? null);
   const [open, setOpen] = useState<string | null>(first.checks[0]?.id ?? null);
   const address = api.frame(batch, letter, first.number) + (result === null ? '' : `?result=${encodeURIComponent(result)}`);
@@ -105,6 +108,7 @@ export function FrameSheet({ batch, letter, first, list, mayChange }: FrameSheet
           </div>
         </>
       )}
+      {drawing !== null && <FrameHandChecks batch={batch} letter={letter} number={first.number} />}
       <Zone title="Certificate" className="zone-late" note={certificateWords(frame)}>
         <Certificate {...frame.vouched} />
       </Zone>
@@ -112,6 +116,7 @@ export function FrameSheet({ batch, letter, first, list, mayChange }: FrameSheet
   );
   const side = (
     <>
+      {sent && <FrameMarks batch={batch} letter={letter} number={first.number} />}
       <Zone title="Checks" note={checkWords(frame)}>
         {frame.failure && <Notice kind="error">{frame.failure}</Notice>}
         {frame.status === 'waiting' && <Notice>This frame has not been run yet.</Notice>}

@@ -17,6 +17,7 @@ import { may } from '@/lib/access/may';
 import { api, pages } from '@/lib/api/addresses';
 import { listFromParams, listToSearch } from '@/lib/api/view-address';
 import { offeredColumns } from '@/lib/tables/shown-columns';
+import { CheckingLine } from '../../_head/checking-line';
 import { MadeFrom } from '../../_head/made-from';
 import { titleOf } from '../../_head/revision-head';
 import type { View } from '@/lib/tables/view';
@@ -70,12 +71,20 @@ export default async function FramePage({ params, searchParams }: FramePageProps
           </>
         }
       />
+      <CheckingLine revision={revision} />
       <MadeFrom revision={revision} />
       <CheckedAtOnce {...(detail.checks.length > 0 ? checkedWords(revision) : {})} />
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
       </h1>
-      <FrameSheet batch={batch} letter={letter} first={detail} list={listToSearch(view)} mayChange={mayChange} />
+      <FrameSheet
+        batch={batch}
+        letter={letter}
+        first={detail}
+        list={listToSearch(view)}
+        mayChange={mayChange}
+        sent={revision.sent !== null}
+      />
       <Cautions />
     </Sheet>
   );
