@@ -9,13 +9,14 @@ import { listAssigned } from '@/db/queries/projects';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import type { Person } from '@/lib/access/may';
 import { notFound } from '@/lib/api/error';
+import type { IssueState } from '@/lib/issuing/issue-states';
 import { whyNot } from '@/worker/ask-issue';
 
 /** How far the making of an issue's files is. */
 export interface MakingProgress {
   readonly issue: number;
   readonly number: string;
-  readonly state: string;
+  readonly state: IssueState;
   readonly failure: string | null;
   readonly files: { readonly done: number; readonly of: number };
   readonly bytes: number;

@@ -6,8 +6,10 @@ import { dropUnfinished, insertIssueFile, insertIssuePiece, issueFilesMade } fro
 import { findIssue, type IssueRecord } from '@/db/queries/issues';
 import { updateJobProgress } from '@/db/queries/jobs';
 import { issueFileKinds, issueFileName, type IssueFileKind } from '@/lib/issuing/issue-file';
+import { writeReport } from '@/lib/reports/pdf/write-report';
 import { openOnce } from './open-once';
 import { PieceSink } from './piece-sink';
+import { reportFonts } from './report-fonts';
 import { revisionSource } from './revision-source';
 import { writeResultWorkbook } from './write-files';
 import { writeInput } from './write-input';
@@ -38,12 +40,11 @@ export async function makeIssue({ file, office, issue, job }: MakeIssueTask): Pr
   const found = await findIssue(database.db, office, issue);
   if (found?.state !== 'making') throw new RangeError(`Expected issue ${issue} of office ${office} to be in the making`);
   const made = issueFilesMade(database.raw, issue);
-  const kinds = issueFileKinds.filter((kind) => write[kind]);
-  for (const [index, kind] of kinds.entries()) {
-    await updateJobProgress(database.db, job, { done: index, total: kinds.length });
+  for (const [index, kind] of issueFileKinds.entries()) {
+    await updateJobProgress(database.db, job, { done: index, total: issueFileKinds.length });
     if (!made.has(kind)) await makeFile(database, file, found, kind);
   }
-  await updateJobProgress(database.db, job, { done: kinds.length, total: kinds.length });
+  await updateJobProgress(database.db, job, { done: issueFileKinds.length, total: issueFileKinds.length });
 }
 
 async function makeFile(database: OpenDatabase, file: string, issue: IssueRecord, kind: IssueFileKind): Promise<void> {
@@ -51,14 +52,21 @@ async function makeFile(database: OpenDatabase, file: string, issue: IssueRecord
   dropUnfinished(raw, issue.id, kind);
   const sink = new PieceSink((ordinal, bytes) => insertIssuePiece(raw, { issue: issue.id, kind, ordinal, bytes }));
   const kept = new Promise<void>((resolve, reject) => sink.on('finish', resolve).on('error', reject));
-  const [{ ending, pages }] = await Promise.all([write[kind]!(database, file, issue, sink), kept]);
+  const [{ ending, pages }] = await Promise.all([write[kind](database, file, issue, sink), kept]);
   const { size, sha256 } = sink;
   insertIssueFile(raw, issue.id, { kind, name: issueFileName(issue.number, kind, ending), size, sha256, pages });
 }
 
 const write: Readonly<
-  Partial<Record<IssueFileKind, (database: OpenDatabase, file: string, issue: IssueRecord, sink: Writable) => Promise<Made>>>
+  Record<IssueFileKind, (database: OpenDatabase, file: string, issue: IssueRecord, sink: Writable) => Promise<Made>>
 > = {
+  async report(database, _file, issue, sink) {
+    const { pages } = await writeReport(
+      { source: await issueSource(database, issue), cover: issue.cover, frames: issue.reportFrames, fonts: reportFonts() },
+      sink,
+    );
+    return { ending: 'pdf', pages };
+  },
   async workbook(database, _file, issue, sink) {
     await writeResultWorkbook(await issueSource(database, issue), sink);
     if (!sink.writableEnded) sink.end();

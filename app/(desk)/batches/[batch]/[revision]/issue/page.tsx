@@ -53,7 +53,7 @@ export default async function IssuePage({ params }: { readonly params: Promise<R
                 address={api.toIssue(revision.batch, letter)}
                 clients={clients}
                 frames={revision.frames}
-                flagged={basis.counts.over + basis.counts.near + basis.counts.notChecked}
+                flagged={basis.counts.over + basis.counts.notChecked + basis.counts.notIssued}
                 may={why.length === 0}
                 making={making?.state === 'making' ? making : null}
               />
