@@ -14,15 +14,19 @@ interface RatioAgainstProps {
   readonly unit: string;
   readonly nearLimit: number;
   readonly height?: number;
+  /** Name of the point that is told of where none is pointed at; else the worst. */
+  readonly chosen?: string | null;
+  /** What there is none of where nothing can be drawn. */
+  readonly none?: string;
 }
 
 /** Governing ratio against a parameter of the family; the worst frame's group is joined by a thin line in order of x. */
-export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226 }: RatioAgainstProps) {
+export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226, chosen, none }: RatioAgainstProps) {
   const [box, width] = useWidth<HTMLDivElement>(440);
   const [read, setRead] = useState<RatioPoint | null>(null);
   const drawn = points.filter((p): p is RatioPoint & { x: number } => typeof p.x === 'number' && Number.isFinite(p.ratio));
   const axis = unit === '' || unit === '-' ? parameter : `${parameter}, ${unit}`;
-  if (drawn.length === 0) return <p className="chart-note">No frame has a value of {parameter} and a ratio.</p>;
+  if (drawn.length === 0) return <p className="chart-note">{none ?? `No frame has a value of ${parameter} and a ratio.`}</p>;
   const [left, foot, head] = [36, height - 34, 8];
   const xs = drawn.map((p) => p.x);
   const [x0, x1] = padded(Math.min(...xs), Math.max(...xs));
@@ -45,7 +49,8 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226 
     }
     setRead(best);
   };
-  const told = read ?? worst;
+  const taken = chosen == null ? undefined : drawn.find((p) => p.frame === chosen);
+  const told = read ?? taken ?? worst;
   return (
     <div ref={box} className="chart">
       <svg
@@ -86,10 +91,12 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226 
         <text className="chart-text" x={width - 8} y={height - 4} textAnchor="end">
           {axis}
         </text>
-        {read && <circle className="chart-read" cx={X(read.x ?? 0)} cy={Y(read.ratio)} r={7} />}
+        {(read ?? taken) && (
+          <circle className="chart-read" cx={X((read ?? taken)?.x ?? 0)} cy={Y((read ?? taken)?.ratio ?? 0)} r={7} />
+        )}
       </svg>
       <p className="chart-note">
-        {read ? '' : 'worst: '}
+        {read ? '' : taken ? 'chosen: ' : 'worst: '}
         <b>{told.frame}</b> <VerdictMark verdict={told.verdict} size={10} /> {formatRatio(told.ratio, nearLimit)}, {parameter}{' '}
         {Number((told.x ?? 0).toPrecision(4))} {unit}
         {told.group ? `, ${told.group}` : ''}

@@ -27,6 +27,7 @@ const table = {
   'bring sheets in': ['lead', 'analyst'],
   'change a revision': ['lead', 'analyst'],
   run: ['lead', 'analyst'],
+  'size sections': ['lead', 'analyst'],
   'send to check': ['lead', 'analyst'],
   check: ['lead', 'checker'],
   'answer a query': staff,

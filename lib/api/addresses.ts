@@ -57,6 +57,12 @@ export const pages = {
   checking: (batch: number, letter: string, number?: number) =>
     `/batches/${batch}/${e(letter)}/checking${number === undefined ? '' : `?frame=${number}`}`,
   next: (batch: number, letter: string) => `/batches/${batch}/${e(letter)}/bring`,
+  /** The lightest sections of groups of members; one sizing, or the newest. */
+  size: (batch: number, letter: string, sizing?: number) =>
+    `/batches/${batch}/${e(letter)}/size${sizing === undefined ? '' : `?sizing=${sizing}`}`,
+  /** Other sections tried on a frame; `of` a member of it, or what else members are asked for by. */
+  tryOn: (batch: number, letter: string, number: number, of?: string) =>
+    `/batches/${batch}/${e(letter)}/frames/${number}/try${of === undefined ? '' : `?of=${e(of)}`}`,
   /** Other sections for members: those of a view, of a frame, or one of its members. */
   change: (batch: number, letter: string, of: View | { readonly frame: string; readonly member?: string }) =>
     `/batches/${batch}/${e(letter)}/change${
@@ -148,6 +154,14 @@ export const api = {
   frame: (batch: number, letter: string, number: number) => `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}`,
   compared: (batch: number, letter: string, chosen: CompareChosen, format?: 'xlsx') =>
     `/api/batches/${batch}/revisions/${e(letter)}/compare${format === undefined ? '' : '/export'}${searchOf(chosen)}`,
+  sizings: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/size`,
+  sizing: (batch: number, letter: string, sizing: number, part: '' | '/export' = '') =>
+    `/api/batches/${batch}/revisions/${e(letter)}/size/${sizing}${part}`,
+  /** A frame's model as it is analysed, with its settings. */
+  model: (batch: number, letter: string, number: number) => `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}/model`,
+  /** A section as members of the batch would have it, of each of these materials. */
+  section: (batch: number, letter: string, name: string, of: readonly string[]) =>
+    `/api/batches/${batch}/revisions/${e(letter)}/section?name=${e(name)}${of.map((one) => `&of=${e(one)}`).join('')}`,
   buckled: (batch: number, letter: string, number: number, result: string) =>
     `/api/batches/${batch}/revisions/${e(letter)}/frames/${number}/buckled?result=${e(result)}`,
 } as const;

@@ -8,6 +8,7 @@ import { queries } from './queries';
 import { recoverAgainstSolve } from './recover';
 import { everydayAgainstBare, secondAgainstFirst } from './second-order';
 import { serverUnderLoad } from './server';
+import { sizeAgainstRun } from './size';
 import { solveAgainstPeers } from './solve';
 import { twoThreadsAgainstOne } from './threads';
 
@@ -25,6 +26,7 @@ const must: Readonly<Record<string, { readonly limit: number; readonly atLeast?:
   'chain.1000.io': { limit: 1.5 },
   'chain.1000.code.io': { limit: 3 },
   'threads.2.1': { limit: 1.6, atLeast: true },
+  'size.240.run': { limit: 20 },
   'query.page.bare': { limit: 5 },
   'query.page.growth': { limit: 3 },
   'query.summary.growth': { limit: 12 },
@@ -41,6 +43,7 @@ const groups: readonly (readonly [string, () => Promise<Record<string, number>>]
   ['chain', () => chainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
   ['code', () => codeChainAgainstBare(Number(process.env['BENCH_ROUNDS'] ?? 5))],
   ['profile', async () => (await profileChain(), {})],
+  ['size', () => sizeAgainstRun(5)],
   ['queries', () => queries(5)],
   ['threads', () => twoThreadsAgainstOne(5)],
   ['server', () => serverUnderLoad(Number(process.env['BENCH_FRAMES'] ?? 20_000))],

@@ -46,5 +46,4 @@ export async function recordUnread({ file, office, revision, why }: UnreadTask):
 }
 
 export { previewChanges } from './preview-changes';
-export { takeSections } from './take-sections';
 export { readOwnTable } from './read-own-table';

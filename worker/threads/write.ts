@@ -10,8 +10,10 @@ import { writeResultCsvZip, writeResultWorkbook } from './write-files';
 
 export { compareRevisions } from './compare-revisions';
 export { drawBuckled } from './draw-buckled';
+export { listGroups } from './list-groups';
 export { makeIssue } from './make-issue';
 export { retestIssue } from './retest-issue';
+export { takeSections } from './take-sections';
 export { writeCompare } from './write-compare';
 export { writeInput } from './write-input';
 export { writeMarkedCopy } from './write-marked-copy';
