@@ -40,6 +40,8 @@ const partWords: Readonly<Record<CheckListRow['part'], string>> = {
   sample: 'Sample of within,',
 };
 
+/** Above this many lines only those in sight are drawn. */
+const virtualAbove = 300;
 const rowHeight = 40;
 const partHeight = 30;
 
@@ -47,9 +49,10 @@ const partHeight = 30;
 export function CheckList({ rows, nearLimit, at, onGo }: CheckListProps) {
   const box = useRef<HTMLDivElement>(null);
   const lines = useMemo(() => inParts(rows), [rows]);
+  const virtual = lines.length > virtualAbove;
   // eslint-disable-next-line react-hooks/incompatible-library -- the virtualizer's own object changes as it scrolls; nothing here is memoised on it
   const virtualizer = useVirtualizer({
-    count: lines.length,
+    count: virtual ? lines.length : 0,
     getScrollElement: () => box.current,
     estimateSize: (i) => (isPart(lines[i]!) ? partHeight : rowHeight),
     overscan: 12,
@@ -57,24 +60,43 @@ export function CheckList({ rows, nearLimit, at, onGo }: CheckListProps) {
   });
   const line = lines.findIndex((one) => !isPart(one) && one.number === at);
   useEffect(() => {
-    if (line >= 0) virtualizer.scrollToIndex(line, { align: 'auto' });
+    if (line < 0) return;
+    if (virtual) virtualizer.scrollToIndex(line, { align: 'auto' });
+    else showWithin(box.current, line);
     // scrolled to when another frame is looked at, not when the list is drawn again
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [at]);
+  const draw = (one: Line) =>
+    isPart(one) ? <Part {...one} /> : <Row row={one} nearLimit={nearLimit} current={one.number === at} onGo={onGo} />;
   return (
     <div className="ck-list" ref={box} role="region" tabIndex={0} aria-label="Frames to see" data-check-list>
-      <div className="ck-list-inner" style={{ height: virtualizer.getTotalSize() }}>
-        {virtualizer.getVirtualItems().map((item) => {
-          const one = lines[item.index]!;
-          return (
+      {virtual ? (
+        <div className="ck-list-inner" style={{ height: virtualizer.getTotalSize() }}>
+          {virtualizer.getVirtualItems().map((item) => (
             <div key={item.key} className="ck-line" style={{ top: item.start, height: item.size }}>
-              {isPart(one) ? <Part {...one} /> : <Row row={one} nearLimit={nearLimit} current={one.number === at} onGo={onGo} />}
+              {draw(lines[item.index]!)}
             </div>
-          );
-        })}
-      </div>
+          ))}
+        </div>
+      ) : (
+        lines.map((one, i) => (
+          <div key={i} style={{ height: isPart(one) ? partHeight : rowHeight }}>
+            {draw(one)}
+          </div>
+        ))
+      )}
     </div>
   );
+}
+
+/** Scrolls the box alone, and only as far as needed: the page stays where it is. */
+function showWithin(box: HTMLElement | null, line: number): void {
+  const child = box?.children[line];
+  if (!box || !(child instanceof HTMLElement)) return;
+  const top = child.getBoundingClientRect().top - box.getBoundingClientRect().top + box.scrollTop;
+  if (top < box.scrollTop) box.scrollTop = top;
+  else if (top + child.offsetHeight > box.scrollTop + box.clientHeight)
+    box.scrollTop = top + child.offsetHeight - box.clientHeight;
 }
 
 const isPart = (line: Line): line is Extract<Line, { done: number }> => 'done' in line;

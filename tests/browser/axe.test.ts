@@ -2,6 +2,7 @@ import AxeBuilder from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { bring, run, stateBecomes } from '../setup/bring';
+import { send } from '../setup/check';
 import { signedIn } from '../setup/visitor';
 import { openBrowser, signInAs } from './browser';
 
@@ -36,6 +37,7 @@ describe('every page by axe', () => {
     const next = { changes: [{ kind: 'setting', setting: 'nearLimit', value: '0.8' }], reason: 'for a look', run: true };
     await analyst.send(`/api/batches/${batch}/revisions/A/changes`, next);
     await stateBecomes(analyst, { batch, revision: 'B' }, (state) => state === 'run');
+    await send(analyst, good);
     browser = await openBrowser();
   });
   afterAll(() => browser.close());
@@ -56,7 +58,7 @@ describe('every page by axe', () => {
     );
   }
 
-  const lead = ['/projects', '/people', '/limits', '/combinations'];
+  const lead = ['/projects', '/to-check', '/people', '/limits', '/combinations'];
   const staff = () => [
     `/projects/${people.north.project}`,
     `/projects/${people.north.project}/bring`,
@@ -64,6 +66,7 @@ describe('every page by axe', () => {
     `/batches/${messy}/A/problems`,
     `/batches/${messy}/A/bring`,
     `/batches/${batch}/B/settings`,
+    `/batches/${batch}/A/checking`,
     `/batches/${batch}/B/compare?with=A&show=all`,
     ...['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'run', 'frames/1', 'frames/1/numbers'].map(
       (sheet) => `/batches/${batch}/A/${sheet}`,

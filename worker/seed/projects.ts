@@ -5,6 +5,8 @@ interface SeedRevision {
   /** A workbook of samples/, or a folder of CSV. */
   readonly source: string;
   readonly run: boolean;
+  /** Sent to check afterwards, and how far the checker got. */
+  readonly check?: 'begun' | 'passed';
 }
 
 export interface SeedProject {
@@ -26,7 +28,7 @@ export const seedProjects: readonly SeedProject[] = [
     number: '2604',
     client: 'client',
     batches: [
-      { name: 'Portal sheds, first phase', by: 'analyst', revisions: [ran('portal-sheds-240.xlsx')] },
+      { name: 'Portal sheds, first phase', by: 'analyst', revisions: [{ ...ran('portal-sheds-240.xlsx'), check: 'begun' }] },
       { name: 'Portal sheds, catalogue', by: 'secondAnalyst', revisions: [ran('portal-sheds-1000.xlsx')] },
       { name: 'Sheds on pinned bases', by: 'analyst', revisions: [ran('slender-sheds-24.xlsx')] },
       { name: 'Sheds by EN 1993-1-1', by: 'analyst', revisions: [ran('code-sheds-24.xlsx')] },
@@ -37,7 +39,7 @@ export const seedProjects: readonly SeedProject[] = [
     number: '2611',
     client: 'secondClient',
     batches: [
-      { name: 'Pipe rack, line 1', by: 'analyst', revisions: [ran('pipe-rack-12.xlsx')] },
+      { name: 'Pipe rack, line 1', by: 'analyst', revisions: [{ ...ran('pipe-rack-12.xlsx'), check: 'passed' }] },
       { name: 'Pipe rack, lines 2 and 3', by: 'analyst', revisions: [ran('pipe-rack-24.xlsx')] },
       { name: 'Bents braced by rods', by: 'analyst', revisions: [ran('braced-bents-12.xlsx')] },
       { name: 'Equipment brackets', by: 'secondAnalyst', revisions: [ran('brackets-150.xlsx')] },

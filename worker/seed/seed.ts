@@ -17,6 +17,7 @@ import { rulesOf } from '@/lib/combinations/office-set';
 import { askForReading, askForRun } from '@/worker/ask';
 import { createPools } from '@/worker/pools';
 import { WorkQueue } from '@/worker/queue';
+import { checkSeeded } from './check';
 import { seedOffice, seedPeople, type SeedPerson } from './people';
 import { seedProjects } from './projects';
 
@@ -89,7 +90,8 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
     level: 'factored',
     together: false,
     rules: rulesOf(basedOn),
-    provenance: 'The recommended values of EN 1990, as the office uses them for sheds up to 1000 m. Invented for this demonstration.',
+    provenance:
+      'The recommended values of EN 1990, as the office uses them for sheds up to 1000 m. Invented for this demonstration.',
     person: idOf('lead'),
   });
   for (const { name, number, client, batches } of seedProjects) {
@@ -100,7 +102,7 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
     for (const { name: batchName, by, revisions } of batches) {
       const person = idOf(by);
       const batch = (await insertBatch(db, office, { project, name: batchName, person }))!;
-      for (const { source, run } of revisions) {
+      for (const { source, run, check } of revisions) {
         const place = { office, project, batch, person };
         const revision = await bringIn(db, place, filesOf(join(samples, source)));
         await askForReading(queue, database, { office, revision, person });
@@ -108,6 +110,13 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
         if (run && (await askForRun(queue, database, { office, revision, person })))
           await insertActivity(db, office, { what: 'started the run', project, batch, revision, person });
         await queue.idle();
+        if (check !== undefined) {
+          const named = (key: SeedPerson['key']) => ({
+            id: idOf(key),
+            name: seedPeople.find((one) => one.key === key)?.name ?? '',
+          });
+          await checkSeeded(db, { office, revision, by: named(by), checker: named('checker'), how: check });
+        }
         const done = await findRevisionById(db, office, revision);
         say(`${batchName}, revision ${done?.letter}: ${done?.frames} frames, ${done?.state}`);
       }
