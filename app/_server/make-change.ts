@@ -19,6 +19,7 @@ import { queue, serverDatabase } from '@/worker/boot';
 /**
  * Makes the next revision of a batch from one that was read, whatever became of that since: it stays as it is.
  *
+ * @param known what each change of section does, where that was looked at already
  * @returns the new revision's letter; it is in state "reading" until its rows are read
  * @throws {ApiError} bad-request naming the settings that are refused or stand so already; conflict where nothing was read
  */
@@ -26,11 +27,12 @@ export async function makeChange(
   person: Person,
   revision: RevisionRecord,
   { changes, reason, run }: z.output<typeof changesInput>,
+  known?: ReadonlyMap<Change, SectionPreview>,
 ): Promise<string> {
   const settings = requireRead(revision);
   refuse(changes, settings);
   const sets = await setsOf(person, changes);
-  const previews = await previewsOf(person, revision, changes);
+  const previews = known ?? (await previewsOf(person, revision, changes));
   const made = await askForChange(queue(), serverDatabase(), person.office, {
     from: revision.id,
     person: person.id,

@@ -145,6 +145,7 @@ export const api = {
     `/api/batches/${batch}/revisions/${e(letter)}/checking/queries/${query}`,
   checkingFrame: (batch: number, letter: string, number: number, part?: 'seen' | 'queries' | 'acceptances' | 'own-values') =>
     `/api/batches/${batch}/revisions/${e(letter)}/checking/frames/${number}${part === undefined ? '' : `/${part}`}`,
+  changesSheet: (batch: number, letter: string, search = '') => `/api/batches/${batch}/revisions/${e(letter)}/changes/sheet${search}`,
   preview: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/changes/preview`,
   table: (batch: number, letter: string, view: View, more: Readonly<Record<string, string | number>> = {}) =>
     tableAddress(batch, letter, view, '', more),

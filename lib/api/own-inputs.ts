@@ -17,3 +17,11 @@ export const ownInput = ownVersionInput.extend({
 /** A table of them is looked at first; `keep=yes` keeps what it says. */
 export const ownImportInput = z.object({ units: units.default('metric'), keep: z.enum(['yes', 'no']).default('no') });
 export const ownTemplateInput = z.object({ units: units.default('metric'), format: z.enum(['xlsx', 'csv']).default('xlsx') });
+
+/** A Changes sheet is looked at first; `make=yes` makes the next revision by it. */
+export const changesSheetInput = z.object({
+  make: z.enum(['yes', 'no']).default('no'),
+  run: z.enum(['yes', 'no']).default('no'),
+  reason: z.string().trim().max(500, 'Keep why it is changed to 500 characters.').default(''),
+});
+export const changesTemplateInput = z.object({ format: z.enum(['xlsx', 'csv']).default('xlsx') });

@@ -154,7 +154,7 @@ function rowForFrame(
 }
 
 /** The section of a name as a member would find it: the batch's own before the library's. */
-function sectionNamed({ seen }: InputRead, name: string): { section: Section; typed: string } | Refused {
+export function sectionNamed({ seen }: InputRead, name: string): { section: Section; typed: string } | Refused {
   const sections = seen[0]?.batch.sections;
   if (!sections) return { refused: 'No frame of this revision can run, so no section can be changed. Mend its sheets first.' };
   const found = sections.find(name);

@@ -44,6 +44,8 @@ export interface SectionPreview {
 export interface Previewed {
   readonly preview: SectionPreview;
   readonly input: StoredInput;
+  /** The rows as changed, read. */
+  readonly read: InputRead;
 }
 
 /**
@@ -55,8 +57,8 @@ export function previewSection(
   change: SectionChange,
   by: string,
   own: readonly OwnThing[] = [],
+  before: InputRead = readForChange(input, own),
 ): Previewed | Refused {
-  const before = readForChange(input, own);
   const made = changeSection(input, before, change, by);
   if ('refused' in made) return made;
   const after = readForChange(made.input, own);
@@ -85,6 +87,7 @@ export function previewSection(
   const touched = [...new Map(members.map(({ frame, number }) => [number, frame]))];
   return {
     input: made.input,
+    read: after,
     preview: {
       to: members[0]?.after.section ?? change.to,
       from: bySection(members),

@@ -11,7 +11,8 @@ export type SheetName = (typeof sheetNames)[number];
 export type ColumnQuantity = Quantity | 'load' | null;
 
 export interface SheetDefinition {
-  readonly name: SheetName;
+  /** `Changes` is a sheet of its own errand, and none of a batch. */
+  readonly name: SheetName | 'Changes';
   readonly columns: ReadonlyMap<string, ColumnQuantity>;
   /** Each entry: a column, or columns of which one is enough. */
   readonly required: readonly (readonly string[])[];
@@ -79,7 +80,9 @@ const definitions: readonly SheetDefinition[] = [
   define('Variants', ['frame', 'family'], { frame: null, family: null }),
 ];
 
-export const sheetDefinitions: ReadonlyMap<SheetName, SheetDefinition> = new Map(definitions.map((d) => [d.name, d]));
+export const sheetDefinitions: ReadonlyMap<SheetName, SheetDefinition> = new Map(
+  sheetNames.flatMap((name) => definitions.filter((each) => each.name === name).map((each) => [name, each] as const)),
+);
 
 /** Sheets with columns of the file's own: parameters in Variants, cases in wide Combinations. */
-export const openEnded: ReadonlySet<SheetName> = new Set(['Variants', 'Combinations']);
+export const openEnded: ReadonlySet<string> = new Set(['Variants', 'Combinations']);

@@ -15,6 +15,18 @@ export const missingSheet = (name: string, empty: boolean): string =>
   empty
     ? `sheet ${name} is empty. Fill it, or describe the frames in Variants`
     : `sheet ${name} is missing. Add it, or describe the frames in Variants`;
+// --- changes
+
+export const memberAndRole = (): string => 'a row names a member or a role, not both. Keep one';
+export const memberOrRole = (): string => 'say which members: a member of a frame, or a role';
+export const memberNeedsFrame = (member: string): string => `member ${member} needs its frame: name it`;
+export const frameNotRun = (frame: string): string => `${frame} is no frame of this revision that can run`;
+export const noSuchMember = (member: string, frame: string): string => `frame ${frame} has no member ${member}`;
+export const noSuchRole = (role: string, frame: string | null): string =>
+  frame === null ? `no frame has a member with the role ${role}` : `frame ${frame} has no member with the role ${role}`;
+export const changedTwice = (to: string, row: number): string =>
+  `row ${row} gives the same member ${to}. Keep one, or name the frame and the member`;
+
 export const tableMissing = (name: string): string =>
   `no sheet ${name} is in these files. Name the sheet so, or send one sheet alone`;
 export const sheetIgnored = (name: string): string => `sheet “${name}” is none that is read, so it is left alone`;

@@ -46,4 +46,5 @@ export async function recordUnread({ file, office, revision, why }: UnreadTask):
 }
 
 export { previewChanges } from './preview-changes';
+export { previewChangesSheet } from './preview-changes-sheet';
 export { readOwnTable } from './read-own-table';

@@ -1,5 +1,5 @@
 /** A sheet to fill in with an office's own sections or grades. */
-import type { RawPart } from '@/lib/intake/files/raw-sheet';
+import type { RawCell, RawPart } from '@/lib/intake/files/raw-sheet';
 import { ownDefinition, rowsOf } from '@/lib/intake/own/own-sheets';
 import type { OwnKind, OwnRecord } from '@/lib/intake/own/own-thing';
 import { rowsOfPart } from '@/lib/intake/rows/input-rows';
@@ -51,17 +51,34 @@ const grades: Readonly<Record<System, readonly Example[]>> = {
 export function ownTemplate(kind: OwnKind, units: System, format: 'xlsx' | 'csv'): Uint8Array {
   const examples = (kind === 'section' ? sections : grades)[units];
   const rows = rowsOf(kind, units, examples.map((example) => ({ ...example, units }))); // prettier-ignore
-  const { name } = ownDefinition(kind);
+  const lines = rows.map(({ cells }) => cells.map((one) => one?.text ?? ''));
+  return sheetBytes(ownDefinition(kind).name, lines, format);
+}
+
+/** A Changes sheet with its headings and comments on how rows are read. */
+export function changesTemplate(format: 'xlsx' | 'csv'): Uint8Array {
+  const lines = [
+    ['frame', 'member', 'role', 'section', 'note'],
+    ['# F1', 'BC', '', 'IPE 360', 'one member of one frame'],
+    ['# F2', '', 'rafter', 'IPE 360', 'every rafter of one frame'],
+    ['# *', '', 'column', 'HE 200 B', 'every column of every frame; a closer row holds'],
+  ];
+  return sheetBytes('Changes', lines, format);
+}
+
+function sheetBytes(name: string, lines: readonly (readonly string[])[], format: 'xlsx' | 'csv'): Uint8Array {
   if (format === 'csv') {
     const cell = (text: string): string => (/[",\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text);
-    const lines = rows.map(({ cells }) => cells.map((one) => cell(one?.text ?? '')).join(','));
-    return Buffer.from(`\uFEFF${lines.join('\r\n')}\r\n`);
+    return Buffer.from(`\uFEFF${lines.map((line) => line.map(cell).join(',')).join('\r\n')}\r\n`);
   }
-  const typed = rows.map((row) => ({
-    ...row,
-    cells: row.cells.map((one) => (one && isFigure(one.text) ? { kind: 'number' as const, value: Number(one.text), text: String(Number(one.text)) } : one)), // prettier-ignore
+  const rows = lines.map((line, i) => ({
+    row: i + 1,
+    cells: line.map((text): RawCell | null => {
+      if (text === '') return null;
+      return isFigure(text) ? { kind: 'number', value: Number(text), text: String(Number(text)) } : { kind: 'text', text };
+    }),
   }));
-  const part: RawPart = { name, file: 'template.xlsx', order: 0, decimalMark: null, rows: typed };
+  const part: RawPart = { name, file: 'template.xlsx', order: 0, decimalMark: null, rows };
   return inputWorkbook({ sheets: [part], rows: rowsOfPart(part, 0) }, name).bytes;
 }
 
