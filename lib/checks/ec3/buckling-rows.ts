@@ -1,6 +1,7 @@
 import type { Settings } from '@/lib/model/settings';
 import type { ClauseRow } from '../design-code/clause-row';
 import type { Demand } from '../design-code/demand';
+import { endRatio, isStraight } from './critical-moment';
 import { modulusOf } from './bending';
 import { classify, type Classified } from './classification';
 import { slenderWords } from './cross-section-rows';
@@ -115,6 +116,8 @@ function lateralRow(of: Ec3Member, demand: Demand, found: Classified, worst: Lat
   return checkedRow(clauses.lateral, demand, 'moment', M, MbRd, stretch.compressingAt, face, () => ({
     ...basics(of),
     class: found.class,
+    plate: found.plate,
+    ct: found.slenderness,
     ...lateralInputs(of, worst),
   }));
 }
@@ -146,5 +149,15 @@ function lateralInputs(of: Ec3Member, one: LateralStretch): Inputs {
     chiLTmod: chiMod,
     MbRd,
   };
-  return { ...where, Iz: of.Iz, ...torsion, ...factors };
+  return { ...where, Iz: of.Iz, ...torsion, ...factors, ...gradientInputs(one) };
+}
+
+/** The diagram of a stretch, and what C1 was taken by. */
+function gradientInputs({ C1, M, stretch }: LateralStretch): Inputs {
+  const { quarter, middle, threeQuarter, largest, heldAtStart, heldAtEnd } = stretch;
+  const psi = endRatio(stretch);
+  const own = heldAtStart && heldAtEnd && Math.abs(largest) <= M * (1 + 1e-9);
+  const straight = isStraight(stretch) && C1 >= 1.77 - 1.04 * psi + 0.27 * psi * psi - 1e-9;
+  const C1by = !own || C1 === 1 ? 'uniform' : straight ? 'straight' : 'diagram';
+  return { C1by, psi, Mmax: Math.abs(largest), Mquarter: quarter, Mmiddle: middle, MthreeQuarter: threeQuarter };
 }

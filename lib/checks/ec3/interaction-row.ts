@@ -6,7 +6,7 @@ import { kyyB, kyzB, kzyStiff, kzySoft, kzzB, type AnnexBInput } from './annex-b
 import { modulusOf } from './bending';
 import { interaction } from './bending-compression';
 import type { Classified } from './classification';
-import { criticalMoment } from './critical-moment';
+import { criticalMoment, endRatio, isStraight } from './critical-moment';
 import type { Ec3Member } from './ec3-member';
 import { basics, checkedRow, clauses, refusedRow, type Inputs } from './ec3-rows';
 import { momentFactorA, momentFactorB } from './equivalent-moment';
@@ -64,6 +64,10 @@ export function interactionRow(
   return checkedRow(clauses.interaction, demand, 'number', ratio, 1, at, null, () => ({
     ...basics(of),
     class: found.class,
+    plate: found.plate,
+    ct: found.slenderness,
+    hollow: of.shape === 'I' ? 0 : 1,
+    ...diagramInputs(of, whole),
     annex: settings.interaction === 'Annex A' ? 'A' : 'B',
     turned: turned ? 1 : 0,
     susceptible: lateral ? 1 : 0,
@@ -88,6 +92,17 @@ export function interactionRow(
     r61,
     r62,
   }));
+}
+
+/** The diagram of the whole member, and the line of Table B.3 that it belongs to. */
+function diagramInputs(of: Ec3Member, whole: Stretch): Inputs {
+  const { start, middle, end, largest } = whole;
+  const Mh = Math.abs(start) >= Math.abs(end) ? start : end;
+  const known = Math.max(Math.abs(Mh), Math.abs(middle)) >= 0.95 * Math.abs(largest);
+  const atEnd = Math.abs(middle) <= Math.abs(Mh);
+  const CmBy = sways(of) ? 'sway' : isStraight(whole) ? 'straight' : !known ? 'none' : atEnd ? 'end' : 'middle';
+  const [over, under] = atEnd ? [middle, Mh] : [Mh, middle];
+  return { CmBy, psi: endRatio(whole), Mh, Ms: middle, alpha: under === 0 ? 0 : over / under };
 }
 
 function byAnnexB(

@@ -1,6 +1,7 @@
 import type { Check } from '@/lib/results/result';
 import { fraction, root, symbol, type Printer, type WorkingLine, type WorkingPart } from '../working-parts';
 import { imperfectionFactor, type Curve } from './reduction-factor';
+import { annexBLines, criticalMomentLine, momentFactorLines, momentGradientLines } from './working-ec3-factors';
 import { classLine, given, M1, reader, squared, sum, words, type Reader } from './working-ec3-parts';
 
 const fy = symbol('f', 'y');
@@ -20,8 +21,8 @@ export function flexuralWorking(check: Check, print: Printer): readonly WorkingL
     axis === 'T' ? torsional(of, print) : euler(of, print, axis),
     sum('slenderness', lambda, [root(fraction([symbol('A'), fy], [Ncr]))], [root(fraction([print.number(of.number('A'), 'area'), words('·'), print.number(of.number('fy'), 'stress')], [print.number(of.number('Ncr'), 'force')]))], n('lambda'), '6.3.1.2(1)'), // prettier-ignore
     { what: 'buckling curve', parts: [words(`${curve}:`), symbol('α'), words('='), print.number(alphaOf(curve), 'number')], source: 'Tables 6.1, 6.2' }, // prettier-ignore
-    sum('Φ', symbol('Φ'), [words('0.5 [1 +'), symbol('α'), words('('), lambda, words('− 0.2) +'), squared('λ̄'), words(']')], [], phi, '6.3.1.2(1)'), // prettier-ignore
-    sum('reduction factor', symbol('χ'), [fraction([words('1')], [symbol('Φ'), words('+'), root(squared('Φ'), words('−'), squared('λ̄'))])], [], chi, '(6.49), not above 1'), // prettier-ignore
+    sum('Φ', symbol('Φ'), [words('0.5 [1 +'), symbol('α'), words('('), lambda, words('− 0.2) +'), squared('λ̄'), words(']')], [words('0.5 [1 +'), print.number(alphaOf(curve), 'number'), words('('), n('lambda'), words('− 0.2) + ('), n('lambda'), words(')²]')], phi, '6.3.1.2(1)'), // prettier-ignore
+    sum('reduction factor', symbol('χ'), [fraction([words('1')], [symbol('Φ'), words('+'), root(squared('Φ'), words('−'), squared('λ̄'))])], [fraction([words('1')], [phi, words('+'), root(words('('), phi, words(')² − ('), n('lambda'), words(')²'))])], chi, '(6.49), not above 1'), // prettier-ignore
     sum('buckling resistance', symbol('N', 'b,Rd'), [fraction([symbol('χ'), symbol('A'), fy], [M1])], [fraction([chi, words('·'), print.number(of.number('A'), 'area'), words('·'), print.number(of.number('fy'), 'stress')], [n('gammaM1')])], print.number(of.number('NbRd'), 'force'), '(6.47)'), // prettier-ignore
   ];
 }
@@ -67,8 +68,9 @@ export function lateralWorking(check: Check, print: Printer): readonly WorkingLi
   const lines: WorkingLine[] = [
     given('moment', print, [[symbol('M', 'Ed'), of.number('M'), 'moment'], [symbol('L'), of.number('L'), 'length']], `${of.word('face')} face in compression, between restraints`), // prettier-ignore
     classLine(of, print),
-    given('for the critical moment', print, [[symbol('C', '1'), of.number('C1'), 'number'], ...(high ? [[symbol('C', '2'), of.number('C2'), 'number'] as const, [symbol('z', 'g'), of.number('zg'), 'dimension'] as const] : []), [symbol('E'), of.number('E'), 'stress'], [symbol('G'), of.number('G'), 'stress'], [symbol('I', 'z'), of.number('Iz'), 'secondMoment'], [symbol('I', 't'), of.number('It'), 'secondMoment'], [symbol('I', 'w'), of.number('Iw'), 'warping']]), // prettier-ignore
-    sum('critical moment', symbol('M', 'cr'), critical, [], print.number(of.number('Mcr'), 'moment'), 'elastic, gross section (6.3.2.2(2))'), // prettier-ignore
+    ...momentGradientLines(of, print),
+    ...(high ? [given('height of the load', print, [[symbol('C', '2'), of.number('C2'), 'number'], [symbol('z', 'g'), of.number('zg'), 'dimension']])] : []), // prettier-ignore
+    criticalMomentLine(of, print, critical),
     sum('slenderness', symbol('λ̄', 'LT'), [root(fraction([symbol('W', W), fy], [symbol('M', 'cr')]))], [root(fraction([print.number(of.number('W'), 'modulus'), words('·'), print.number(of.number('fy'), 'stress')], [print.number(of.number('Mcr'), 'moment')]))], n('lambdaLT'), '6.3.2.2(1)'), // prettier-ignore
     { what: 'buckling curve', parts: [words(`${curve}:`), symbol('α', 'LT'), words('='), print.number(alphaOf(curve), 'number')], source: rolled ? 'Tables 6.3, 6.5; λ̄LT,0 = 0.4, β = 0.75' : 'Tables 6.3, 6.4' }, // prettier-ignore
   ];
@@ -76,8 +78,8 @@ export function lateralWorking(check: Check, print: Printer): readonly WorkingLi
   const sq = squared('λ̄', 'LT');
   const [Phi, beta] = [symbol('Φ', 'LT'), rolled ? [words('0.75')] : []];
   lines.push(
-    sum('Φ_LT', Phi, [words('0.5 [1 +'), symbol('α', 'LT'), words('('), LT, words(rolled ? '− 0.4) +' : '− 0.2) +'), ...beta, sq, words(']')], [], n('phiLT'), rolled ? '6.3.2.3(1)' : '6.3.2.2(1)'), // prettier-ignore
-    sum('reduction factor', symbol('χ', 'LT'), [fraction([words('1')], [Phi, words('+'), root(squared('Φ', 'LT'), words('−'), ...beta, sq)])], [], n('chiLT'), rolled ? '(6.57), not above 1 and 1/λ̄LT²' : '(6.56), not above 1'), // prettier-ignore
+    sum('Φ_LT', Phi, [words('0.5 [1 +'), symbol('α', 'LT'), words('('), LT, words(rolled ? '− 0.4) +' : '− 0.2) +'), ...beta, sq, words(']')], [words('0.5 [1 +'), print.number(alphaOf(curve), 'number'), words('('), n('lambdaLT'), words(rolled ? '− 0.4) +' : '− 0.2) +'), ...(rolled ? [words('0.75 ·')] : []), words('('), n('lambdaLT'), words(')²]')], n('phiLT'), rolled ? '6.3.2.3(1)' : '6.3.2.2(1)'), // prettier-ignore
+    sum('reduction factor', symbol('χ', 'LT'), [fraction([words('1')], [Phi, words('+'), root(squared('Φ', 'LT'), words('−'), ...beta, sq)])], [fraction([words('1')], [n('phiLT'), words('+'), root(words('('), n('phiLT'), words(rolled ? ')² − 0.75 · (' : ')² − ('), n('lambdaLT'), words(')²'))])], n('chiLT'), rolled ? '(6.57), not above 1 and 1/λ̄LT²' : '(6.56), not above 1'), // prettier-ignore
   );
   if (rolled)
     lines.push(
@@ -87,8 +89,8 @@ export function lateralWorking(check: Check, print: Printer): readonly WorkingLi
         [[symbol('k', 'c'), of.number('kc'), 'number']],
         'Table 6.6; 1/√C1 where loaded, not below 0.90 but for a force at the middle',
       ),
-      sum('f', symbol('f'), [words('1 − 0.5 (1 −'), symbol('k', 'c'), words(') [1 − 2 ('), LT, words('− 0.8)²]')], [], n('f'), '6.3.2.3(2), not above 1'), // prettier-ignore
-      sum('modified reduction factor', symbol('χ', 'LT,mod'), [fraction([symbol('χ', 'LT')], [symbol('f')])], [], n('chiLTmod'), '(6.58), not above 1 and 1/λ̄LT²'), // prettier-ignore
+      sum('f', symbol('f'), [words('1 − 0.5 (1 −'), symbol('k', 'c'), words(') [1 − 2 ('), LT, words('− 0.8)²]')], [words('1 − 0.5 (1 −'), n('kc'), words(') [1 − 2 ('), n('lambdaLT'), words('− 0.8)²]')], n('f'), '6.3.2.3(2), not above 1'), // prettier-ignore
+      sum('modified reduction factor', symbol('χ', 'LT,mod'), [fraction([symbol('χ', 'LT')], [symbol('f')])], [fraction([n('chiLT')], [n('f')])], n('chiLTmod'), '(6.58), not above 1 and 1/λ̄LT²'), // prettier-ignore
     );
   const reduction = rolled ? symbol('χ', 'LT,mod') : symbol('χ', 'LT');
   lines.push(
@@ -112,23 +114,19 @@ export function interactionWorking(check: Check, print: Printer): readonly Worki
   const MRd = symbol('M', of.number('susceptible') === 1 ? 'b,Rd' : `${axis},Rd`);
   const expression = (what: string, Nb: WorkingPart, k: WorkingPart, axial: string, factor: string, value: string, source: string): WorkingLine => // prettier-ignore
     sum(what, words('Σ'), [fraction([symbol('N', 'Ed')], [Nb]), words('+'), k, fraction([m], [MRd])], [n(axial), words('+'), n(factor), words('·'), n('m')], print.result(of.number(value), 'number'), source); // prettier-ignore
-  const kSource = A
-    ? `Table A.1${of.number('susceptible') === 1 ? '' : ', not susceptible to torsional deformations'}`
-    : of.number('susceptible') === 1
-      ? 'Table B.2: susceptible to torsional deformations'
-      : 'Table B.1: not susceptible to torsional deformations';
+  const kSource = `Table A.1${of.number('susceptible') === 1 ? '' : ', not susceptible to torsional deformations'}`;
   return [
     given('compression and moment', print, [[symbol('N', 'Ed'), of.number('N'), 'force'], [m, of.number('M'), 'moment']]), // prettier-ignore
     classLine(of, print),
     given('buckling resistances', print, [[symbol('λ̄', 'y'), of.number('lambdaY'), 'number'], [symbol('χ', 'y'), of.number('chiY'), 'number'], [symbol('N', 'b,y,Rd'), of.number('NbyRd'), 'force'], [symbol('λ̄', out), of.number('lambdaZ'), 'number'], [symbol('χ', out), of.number('chiZ'), 'number'], [symbol('N', `b,${out},Rd`), of.number('NbzRd'), 'force']], '6.3.1'), // prettier-ignore
     given('moment resistance', print, [[symbol('χ', 'LT'), of.number('chiLT'), 'number'], [MRd, of.number('MbRd'), 'moment']], of.number('susceptible') === 1 ? '6.3.2' : 'W fy/γM1'), // prettier-ignore
-    given('moment factors', print, optional([[symbol('C', `m${axis},0`), 'Cm0'], [symbol('C', `m${axis}`), 'Cm'], [symbol('C', 'mLT'), 'CmLT']]), A ? 'Tables A.1, A.2' : 'Table B.3'), // prettier-ignore
     ...(A
       ? [
+          given('moment factors', print, optional([[symbol('C', `m${axis},0`), 'Cm0'], [symbol('C', `m${axis}`), 'Cm'], [symbol('C', 'mLT'), 'CmLT']]), 'Tables A.1, A.2'), // prettier-ignore
           given('auxiliary terms', print, [...optional([[symbol('μ', 'y'), 'muY'], [symbol('μ', 'z'), 'muZ'], [symbol('n', 'pl'), 'npl'], [symbol('a', 'LT'), 'aLT'], [symbol('λ̄', '0'), 'lambda0'], [symbol('ε', 'y'), 'epsilonY'], [symbol('C', turned ? 'yz' : 'yy'), 'C61'], [symbol('C', turned ? 'zz' : 'zy'), 'C62']]), [symbol('N', 'cr,y'), of.number('NcrY'), 'force'], [symbol('N', 'cr,z'), of.number('NcrZ'), 'force']], 'Table A.1'), // prettier-ignore
+          given('interaction factors', print, [[k61, of.number('k61'), 'number'], [k62, of.number('k62'), 'number']], kSource), // prettier-ignore
         ]
-      : []),
-    given('interaction factors', print, [[k61, of.number('k61'), 'number'], [k62, of.number('k62'), 'number']], kSource), // prettier-ignore
+      : [...momentFactorLines(of, print, axis), ...annexBLines(of, print)]),
     expression('about y', symbol('N', 'b,y,Rd'), k61, 'nY', 'k61', 'r61', '(6.61)'),
     expression('about z', symbol('N', `b,${out},Rd`), k62, 'nZ', 'k62', 'r62', '(6.62)'),
   ];

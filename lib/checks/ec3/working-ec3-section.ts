@@ -139,8 +139,8 @@ function plastic(of: Reader, print: Printer, rho: number): readonly WorkingLine[
   const beside = rho > 0 ? ' (1 − ρ)' : '';
   const n = symbol('n');
   const lines = [
-    sum('plastic resistance', symbol('N', 'pl,Rd'), [fraction([symbol('A'), fy], [M0])], [], print.number(of.number('NplRd'), 'force'), '(6.6)'), // prettier-ignore
-    sum('part of it', n, [fraction([N], [symbol('N', `pl,Rd${beside}`)])], [], print.number(of.number('n'), 'number'), '6.2.9.1(5)'), // prettier-ignore
+    sum('plastic resistance', symbol('N', 'pl,Rd'), [fraction([symbol('A'), fy], [M0])], rho > 0 ? [] : [fraction([print.number(of.number('A'), 'area'), words('·'), print.number(of.number('fy'), 'stress')], [print.number(of.number('gammaM0'), 'number')])], print.number(of.number('NplRd'), 'force'), '(6.6)'), // prettier-ignore
+    sum('part of it', n, [fraction([N], [symbol('N', `pl,Rd${beside}`)])], rho > 0 ? [] : [fraction([print.number(of.number('N'), 'force')], [print.number(of.number('NplRd'), 'force')])], print.number(of.number('n'), 'number'), '6.2.9.1(5)'), // prettier-ignore
     momentResistance(of, print),
   ];
   const Mc = symbol('M', `c,Rd${beside}`);
@@ -154,6 +154,11 @@ function plastic(of: Reader, print: Printer, rho: number): readonly WorkingLine[
     by === 'I minor'
       ? [Mc, words('[1 − ('), fraction([n, words('−'), symbol('a')], [words('1 −'), symbol('a')]), words(')²]')]
       : [Mc, fraction([words('1 −'), n], [words('1 − 0.5'), symbol('a')])];
+  const [Mc0, n0, a0] = [print.number(of.number('McRd'), 'moment'), print.number(of.number('n'), 'number'), print.number(of.number('a'), 'number')]; // prettier-ignore
+  const numbers =
+    by === 'I minor'
+      ? [Mc0, words('[1 − ('), fraction([n0, words('−'), a0], [words('1 −'), a0]), words(')²]')]
+      : [Mc0, words('·'), fraction([words('1 −'), n0], [words('1 − 0.5 ·'), a0])];
   const source =
     by === 'I major'
       ? '(6.36), not above M_c,Rd; M_c,Rd where (6.33) and (6.34) hold'
@@ -163,6 +168,13 @@ function plastic(of: Reader, print: Printer, rho: number): readonly WorkingLine[
   return [
     ...lines,
     a,
-    sum('reduced moment resistance', symbol('M', 'N,Rd'), formula, [], print.number(of.number('MNRd'), 'moment'), source),
+    sum(
+      'reduced moment resistance',
+      symbol('M', 'N,Rd'),
+      formula,
+      rho > 0 || of.number('MNRd') >= of.number('McRd') ? [] : numbers,
+      print.number(of.number('MNRd'), 'moment'),
+      source,
+    ),
   ];
 }

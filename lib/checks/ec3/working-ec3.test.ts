@@ -27,6 +27,28 @@ const textOf = (row: ClauseRow): string =>
     .map((line) => `${line.what}: ${flat(line.parts)} [${line.source ?? ''}]`)
     .join('\n');
 
+/** What stands between the last two = of a line, and what it is said to be; null where there are no bare numbers to calculate. */
+function calculated(parts: readonly WorkingPart[]): readonly [number, number] | null {
+  const code = (list: readonly WorkingPart[]): string =>
+    list
+      .map((part) => {
+        if (part.kind === 'fraction') return `((${code(part.over)})/(${code(part.under)}))`;
+        if (part.kind === 'root') return `Math.sqrt(${code(part.of)})`;
+        if (part.kind === 'symbol') return '@';
+        // moments all have one unit; what else has one needs more than a calculator
+        return part.kind !== 'text' && part.unit !== undefined && part.unit !== 'kN·m' ? '@' : part.text;
+      })
+      .join(' ');
+  const pieces = code(parts).split(' = ').map((piece) => piece.trim()); // prettier-ignore
+  const [sum, result] = pieces.slice(-2);
+  if (pieces.length < 3 || sum === undefined || result === undefined) return null;
+  const plain = sum
+    .replaceAll('−', '-').replaceAll('·', '*').replaceAll('[', '(').replaceAll(']', ')').replaceAll(')²', ')**2')
+    .replace(/([\d)])\s+(\(|Math)/g, '$1*$2'); // prettier-ignore
+  if (!/^[\d\s+\-*/().e]*$/.test(plain.replaceAll('Math.sqrt', '')) || !/^[\d.−]+$/.test(result)) return null;
+  return [Number(new Function(`return ${plain}`)()), Number(result.replace('−', '-'))];
+}
+
 const rhs = shaped('rhs', { h: 300, b: 100, t: 12, r: 18 }, 'hot finished');
 const chs = shaped('chs', { d: 168.3, t: 8 }, 'hot finished');
 const welded = shaped('I', { h: 300, b: 250, tw: 12, tf: 10, r: 0 }, 'welded');
@@ -50,6 +72,28 @@ describe('working of EN 1993-1-1', () => {
             }
     expect(seen.size).toBe(9);
   });
+
+  it('the numbers put into every formula without units give its result, as a checker’s calculator would', () => {
+    const seen = new Map<string, number>();
+    for (const section of [ipe300, heb300, rhs, chs, welded])
+      for (const turned of [false, true])
+        for (const fy of [235e6, 355e6])
+          for (const [L, M] of [[3, (x: number) => 2e4 * (1 - 1.5 * x)], [6, (x: number) => 2e4 * 4 * x * (1 - x)], [9, (x: number) => 2e4 * (4 * x * (1 - x) - 0.8)], [6, () => 2e4], [14, (x: number) => 2e3 * (1 - 0.2 * x)]] as const) {
+            const demand = demandOf({ L, N: -4e4, M, loaded: L === 6 || L === 9 });
+            for (const row of rowsOf(memberOf(section, { L, turned, fy }), demand)) {
+              if (row.ratio === null) continue;
+              for (const line of ec3Working(asCheck(row), print)!) {
+                const found = calculated(line.parts);
+                if (found === null) continue;
+                seen.set(line.what, (seen.get(line.what) ?? 0) + 1);
+                const [value, result] = found;
+                const capped = /not above|not below/.test(line.source ?? '') && ([1, 0.4, 2.6].includes(result) || (line.source!.includes('1/λ̄') && value > result));
+                if (!capped) expect(Math.abs(value - result), `${line.what}: ${flat(line.parts)}`).toBeLessThan(0.004 * Math.max(0.1, result)); // prettier-ignore
+              }
+            }
+          }
+    for (const what of ['Φ', 'reduction factor', 'Φ_LT', 'f', 'modified reduction factor', 'diagram of moments', 'moment factor', 'interaction factor y', 'interaction factor z', 'interaction factor zy', 'about y', 'about z']) expect(seen.get(what) ?? 0, what).toBeGreaterThan(0); // prettier-ignore
+  }); // prettier-ignore
 
   it('flexural buckling: λ̄, Φ, χ and N_b,Rd in the order of the standard', () => {
     const text = textOf(rowOf(rowsOf(memberOf(heb300), demandOf({ N: -1e6 })), '6.3.1'));
