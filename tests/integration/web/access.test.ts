@@ -41,6 +41,10 @@ const table: Readonly<Record<string, Line>> = {
   'api/template': { who: { GET: staff } },
   'api/people': { who: { GET: lead, POST: lead }, body: {} },
   'api/sections': reads(),
+  'api/own/[kind]': { who: { GET: staff, POST: lead }, body: {} },
+  'api/own/[kind]/[part]': { who: { GET: staff, PUT: lead, DELETE: lead }, body: {} },
+  'api/own/[kind]/import': { who: { POST: lead } },
+  'api/own/[kind]/template': reads(),
   'api/limits': { who: { GET: staff, PUT: lead }, body: {} },
   'api/combination-sets': { who: { GET: staff, POST: lead }, body: {} },
   'api/combination-sets/[set]': { who: { GET: staff, POST: lead, PUT: lead }, body: {} },
@@ -66,6 +70,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${revision}/compare`]: reads(),
   [`${revision}/compare/export`]: reads(),
   [`${revision}/changes/preview`]: { who: { POST: makers }, body: {} },
+  [`${revision}/changes/sheet`]: { who: { GET: makers, POST: makers } },
   [`${revision}/csv`]: reads(),
   [`${revision}/frames/[number]`]: reads(),
   [`${revision}/frames/[number]/buckled`]: reads('?result=C1'),
@@ -85,6 +90,10 @@ const table: Readonly<Record<string, Line>> = {
   issued: { who: { GET: ['client'] } },
   '(desk)/people': { who: { GET: lead } },
   '(desk)/sections': reads(),
+  '(desk)/sections/own': reads(),
+  '(desk)/sections/own/[kind]/new': { who: { GET: lead } },
+  '(desk)/sections/own/[kind]/import': { who: { GET: lead } },
+  '(desk)/sections/own/[kind]/[part]': reads(),
   '(desk)/limits': reads(),
   '(desk)/combinations': reads(),
   '(desk)/combinations/[set]': reads(),
@@ -130,6 +139,7 @@ describe('access', () => {
   const visitors = new Map<string, Visitor>();
   const brought = new Map<OfficeKey, Brought>();
   const sets = new Map<OfficeKey, number>();
+  const parts = new Map<OfficeKey, number>();
 
   beforeAll(async () => {
     for (const office of officeKeys) {
@@ -142,6 +152,9 @@ describe('access', () => {
       const set = { name: `Sheds ${office}`, level: 'factored', rules, provenance: 'handbook' };
       const kept = await visitors.get(`${office} lead`)!.send('/api/combination-sets', set);
       sets.set(office, ((await kept.json()) as { set: number }).set);
+      const own = { name: `Bar ${office}`, units: 'metric', cells: { shape: 'bar', h: '100', b: '20' } };
+      const bar = await visitors.get(`${office} lead`)!.send('/api/own/sections', own);
+      parts.set(office, ((await bar.json()) as { id: number }).id);
     }
   });
 
@@ -151,6 +164,8 @@ describe('access', () => {
     const filled = address
       .replace('(desk)/', '')
       .replace('[set]', String(sets.get(office)))
+      .replace('[kind]', 'sections')
+      .replace('[part]', String(parts.get(office)))
       .replace('[project]', String(people[office].project))
       .replace('[batch]', String(batch))
       .replace('[revision]', letter)
@@ -198,7 +213,7 @@ describe('access', () => {
           else expect([own.status, role], 'own office').toEqual([isPage(file) || role === 'client' ? 404 : 403, role]);
           if (allowed && isPage(file) && own.status === 307) expect(own.headers.get('location')).not.toMatch(/sign-in/);
           await own.body?.cancel();
-          if (!/\[(project|batch|set)\]/.test(address)) continue;
+          if (!/\[(project|batch|set|part)\]/.test(address)) continue;
           const other = await ask(visitor, file, address, method, 'south');
           const text = await other.text();
           expect([other.status, role], 'other office').toEqual([allowed || isPage(file) || role === 'client' ? 404 : 403, role]);
