@@ -7,7 +7,7 @@ import { readArguments, usage, type BatchArguments } from '@/worker/command/argu
 import { evaluateBatch, type EvaluatedBatch } from '@/worker/command/evaluate-batch';
 import { ProgressBar } from '@/worker/command/progress-bar';
 import { errorLines, summarise } from '@/worker/command/summary';
-import { writeCsvFolder, writeJsonFile, writeWorkbookFile } from '@/worker/threads/write-files';
+import { writeCsvFolder, writeJsonFile, writeReportFile, writeWorkbookFile } from '@/worker/threads/write-files';
 
 /**
  * Runs the command with the words typed after `--`, paths relative to `folder`.
@@ -35,7 +35,7 @@ export async function runBatch(words: readonly string[], folder: string): Promis
       process.stderr.write(`${errorLines(intake.problems, 20).join('\n') || 'No frame was found in what was sent.'}\n`);
       return 2;
     }
-    if (!wanted.json && !wanted.xlsx && !wanted.csv) process.stdout.write(await summarise(batch));
+    if (!wanted.json && !wanted.xlsx && !wanted.csv && !wanted.report) process.stdout.write(await summarise(batch));
     return batch.solved === intake.frames.length ? 0 : 1;
   } finally {
     batch.close();
@@ -66,6 +66,7 @@ async function writeOutputs(batch: EvaluatedBatch, wanted: BatchArguments, folde
     [wanted.json, (path) => writeJsonFile(batch, path, { all: wanted.all })],
     [wanted.xlsx, (path) => writeWorkbookFile(batch, path)],
     [wanted.csv, (path) => writeCsvFolder(batch, path)],
+    [wanted.report, (path) => writeReportFile(batch, path)],
   ];
   for (const [name, write] of outputs) {
     if (name === null) continue;

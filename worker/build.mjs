@@ -29,7 +29,7 @@ const options = {
   sourcemap: true,
   tsconfig: 'tsconfig.json',
   // Native addons, and packages that look for files beside themselves at run time.
-  external: ['better-sqlite3', '@node-rs/argon2', 'piscina', 'pino'],
+  external: ['better-sqlite3', '@node-rs/argon2', 'piscina', 'pino', 'pdfkit'],
   // Lets bundled CommonJS dependencies call require() from ESM output.
   banner: {
     js: "import { createRequire as __createRequire } from 'node:module'; const require = __createRequire(import.meta.url);",

@@ -4,6 +4,7 @@ import type { Pools, ThreadPool } from './pools';
 import type { PortMessage } from './threads/port-sink';
 import type { ResultFile, WriteTask } from './threads/write';
 import type { WriteCompareTask } from './threads/write-compare';
+import type { WriteReportTask } from './threads/write-report';
 import type { WriteTableTask } from './threads/write-table';
 
 /** Streams the result workbook, JSON, or a zip of CSV of a revision whose office the caller has made sure of. */
@@ -25,6 +26,11 @@ export function tableStream(pools: Pools, of: Omit<WriteTableTask, 'port'>): Rea
 /** Streams the differences between two revisions as a workbook. */
 export function compareStream(pools: Pools, of: Omit<WriteCompareTask, 'port'>): ReadableStream<Uint8Array> {
   return threadStream(pools.write, { filename: pools.bundle('write'), name: 'writeCompare' }, (port): WriteCompareTask => ({ ...of, port })); // prettier-ignore
+}
+
+/** Streams the calculation report of a revision as a draft. */
+export function reportStream(pools: Pools, of: Omit<WriteReportTask, 'port'>): ReadableStream<Uint8Array> {
+  return threadStream(pools.write, { filename: pools.bundle('write'), name: 'writeDraftReport' }, (port): WriteReportTask => ({ ...of, port })); // prettier-ignore
 }
 
 /** The thread waits for a slow reader and ends with one that goes away. Errors of the thread error the stream. */

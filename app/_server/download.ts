@@ -4,6 +4,7 @@ const kinds: Readonly<Record<string, string>> = {
   csv: 'text/csv; charset=utf-8',
   xlsx: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
   json: 'application/json; charset=utf-8',
+  pdf: 'application/pdf',
   zip: 'application/zip',
 };
 

@@ -20,12 +20,7 @@ const files = {
  * @throws {ApiError} conflict while there is nothing to take away, or it still changes
  */
 export async function resultDownload(person: Person, revision: RevisionRecord, file: keyof typeof files): Promise<Response> {
-  if (revision.state === 'reading') throw new ApiError('conflict', 'The sheets are still being read. Ask again in a moment.');
-  if (revision.state === 'running') {
-    throw new ApiError('conflict', 'The run goes on. Take the results away when it has ended, or stop it first.');
-  }
-  if (revision.settings === null)
-    throw new ApiError('conflict', 'Nothing of these sheets could be read, so there are no results.');
+  requireResults(revision);
   const { project, batch, id } = revision;
   const { as, ending } = files[file];
   await insertActivity(db(), person.office, {
@@ -38,4 +33,14 @@ export async function resultDownload(person: Person, revision: RevisionRecord, f
   });
   const content = resultStream(pools(), { file: databaseFile(), office: person.office, revision: id, as });
   return attachment(`${revision.batchName} ${revision.letter} results.${ending}`, content);
+}
+
+/** @throws {ApiError} conflict while a revision has nothing to take away, or it still changes */
+export function requireResults(revision: Pick<RevisionRecord, 'state' | 'settings'>): void {
+  if (revision.state === 'reading') throw new ApiError('conflict', 'The sheets are still being read. Ask again in a moment.');
+  if (revision.state === 'running') {
+    throw new ApiError('conflict', 'The run goes on. Take the results away when it has ended, or stop it first.');
+  }
+  if (revision.settings === null)
+    throw new ApiError('conflict', 'Nothing of these sheets could be read, so there are no results.');
 }

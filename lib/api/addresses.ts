@@ -136,7 +136,7 @@ export const api = {
   part: (
     batch: number,
     letter: string,
-    part: 'changes' | 'input' | 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'workbook' | 'json' | 'csv',
+    part: 'changes' | 'input' | 'run' | 'progress' | 'summary' | 'cell' | 'marked-copy' | 'report' | 'workbook' | 'json' | 'csv',
   ) => `/api/batches/${batch}/revisions/${e(letter)}/${part}`,
   toCheck: '/api/to-check',
   checking: (batch: number, letter: string, part?: 'return' | 'pass') =>

@@ -8,8 +8,13 @@ describe('the words after `npm run batch --`', () => {
       json: 'out.json',
       xlsx: null,
       csv: 'sheets',
+      report: null,
       all: true,
     });
+  });
+
+  it('name a report to write', () => {
+    expect(readArguments(['a.xlsx', '--report', 'out.pdf'])).toMatchObject({ files: ['a.xlsx'], report: 'out.pdf' });
   });
 
   it('take everything after a bare -- as files', () => {

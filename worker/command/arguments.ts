@@ -4,16 +4,18 @@ export interface BatchArguments {
   readonly json: string | null;
   readonly xlsx: string | null;
   readonly csv: string | null;
+  readonly report: string | null;
   readonly all: boolean;
 }
 
-export const usage = `Usage: npm run --silent batch -- FILE… [--json OUT] [--xlsx OUT] [--csv DIR] [--all]
+export const usage = `Usage: npm run --silent batch -- FILE… [--json OUT] [--xlsx OUT] [--csv DIR] [--report OUT] [--all]
 
-  FILE…       one .xlsx, one .zip, or one or several .csv (file name = sheet name)
-  --json OUT  results as JSON, SI units
-  --xlsx OUT  result workbook
-  --csv DIR   the workbook's sheets, one CSV file each
-  --all       JSON checks of every combination, not only the governing ones
+  FILE…         one .xlsx, one .zip, or one or several .csv (file name = sheet name)
+  --json OUT    results as JSON, SI units
+  --xlsx OUT    result workbook
+  --csv DIR     the workbook's sheets, one CSV file each
+  --report OUT  calculation report as PDF, a draft
+  --all         JSON checks of every combination, not only the governing ones
   Without an output named, a short summary is printed.
 
 Ends with 0 when every frame was solved, 1 when some were not, 2 when nothing could be read.`;
@@ -34,7 +36,7 @@ export function readArguments(words: readonly string[]): BatchArguments | { read
     else if (word === '--all') all = true;
     else {
       const [name = '', joined] = splitOnce(word);
-      if (!['--json', '--xlsx', '--csv'].includes(name)) return { wrong: `${word} is not an option.` };
+      if (!['--json', '--xlsx', '--csv', '--report'].includes(name)) return { wrong: `${word} is not an option.` };
       const value = joined ?? words[++i];
       if (value === undefined || value === '' || (joined === undefined && value.startsWith('--')))
         return { wrong: `${name} needs ${name === '--csv' ? 'a folder' : 'a file'} to write to.` };
@@ -43,7 +45,14 @@ export function readArguments(words: readonly string[]): BatchArguments | { read
     }
   }
   if (files.length === 0) return { wrong: 'No file is named.' };
-  return { files, json: out.get('--json') ?? null, xlsx: out.get('--xlsx') ?? null, csv: out.get('--csv') ?? null, all };
+  return {
+    files,
+    json: out.get('--json') ?? null,
+    xlsx: out.get('--xlsx') ?? null,
+    csv: out.get('--csv') ?? null,
+    report: out.get('--report') ?? null,
+    all,
+  };
 }
 
 function splitOnce(word: string): [string, string | undefined] {

@@ -5,12 +5,14 @@ import { join } from 'node:path';
 import { Readable, type Writable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import { Zip, ZipDeflate } from 'fflate';
+import { writeReport } from '@/lib/reports/pdf/write-report';
 import type { ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import { reportSheets } from '@/lib/reports/workbook/report-sheets';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { csvOf } from '@/lib/reports/workbook/write-csv';
 import { writeXlsx } from '@/lib/reports/workbook/write-xlsx';
 import { resultsJson } from '@/lib/results/json';
+import { reportFonts } from './report-fonts';
 
 // The workbook writer's zip library calls Buffer() in an old form; bundled, Node would warn of it at every workbook.
 process.noDeprecation = true;
@@ -33,6 +35,23 @@ export async function writeWorkbookFile(source: ReportSource, path: string): Pro
 
 export async function writeJsonFile(source: ReportSource, path: string, options: { readonly all: boolean }): Promise<void> {
   await pipeline(Readable.from(resultsJson(source, options)), createWriteStream(path));
+}
+
+/** The calculation report of every frame as a draft, signed by nobody. */
+export async function writeReportFile(source: ReportSource, path: string): Promise<void> {
+  const nobody = { prepared: null, checked: null, approved: null, issued: null, supersedes: null, note: null };
+  const cover = {
+    ...nobody,
+    number: null,
+    office: '',
+    project: '',
+    projectNumber: null,
+    batch: '',
+    revision: '',
+    acceptances: [],
+    notIssued: [],
+  };
+  await writeReport({ source, cover, frames: 'all', fonts: reportFonts() }, createWriteStream(path));
 }
 
 /** A zip of one CSV file a sheet of the workbook, at the stream's pace. */

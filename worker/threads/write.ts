@@ -17,6 +17,7 @@ export { takeSections } from './take-sections';
 export { writeCompare } from './write-compare';
 export { writeInput } from './write-input';
 export { writeMarkedCopy } from './write-marked-copy';
+export { writeDraftReport } from './write-report';
 export { writeTable } from './write-table';
 
 export type ResultFile = 'xlsx' | 'json' | 'csv';

@@ -15,8 +15,12 @@ export interface Entry {
   /** Of a frame; null = a part of the report. */
   readonly verdict: Verdict | null;
 }
-/** Where a key's page is. */
-export type Places = ReadonlyMap<string, { readonly page: PdfPage; readonly number: number }>;
+/** A page, and its number. */
+export interface Place {
+  readonly page: Pick<PdfPage, 'place'>;
+  readonly number: number;
+}
+export type Places = ReadonlyMap<string, Place>;
 
 interface Placed {
   readonly entry: Entry;
@@ -80,13 +84,7 @@ export function drawContents(flow: Flow, { sheets, width, placed }: ContentsLayo
   file.moveBehindFirst(sheets);
 }
 
-function drawEntry(
-  flow: Flow,
-  canvas: Canvas,
-  { entry, lines, x, y }: Placed,
-  width: number,
-  { page, number }: { page: PdfPage; number: number },
-): void {
+function drawEntry(flow: Flow, canvas: Canvas, { entry, lines, x, y }: Placed, width: number, { page, number }: Place): void {
   // prettier-ignore
   const { faces } = flow.file;
   const face = entry.verdict === null ? faces.sansBold : faces.condensed;

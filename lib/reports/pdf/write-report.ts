@@ -3,19 +3,17 @@ import type { Writable } from 'node:stream';
 import type { IssueCover } from '@/lib/reports/issue-cover';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { basisPages, partsPages } from './basis-pages';
-import { drawContents, layOutContents, type Entry } from './contents-pages';
+import { drawContents, layOutContents, type Entry, type Place } from './contents-pages';
 import { coverPage } from './cover-page';
 import { shortDate } from './dates';
 import { Flow } from './flow';
 import { framePages } from './frame-pages';
-import { PdfFile, type PdfPage } from './pdf-file';
+import { PdfFile } from './pdf-file';
 import { reportFacts, type FrameLine, type ReportFacts } from './report-facts';
+import type { ReportChoice } from './report-choice';
 import type { ReportFonts } from './report-fonts';
 import { papers, type BlockFacts, type Paper } from './sheet';
 import { flagPages, summaryPages } from './summary-pages';
-
-/** Which frames are calculated in full: every one, those over or not checked, or places in sheet order from 1. */
-export type ReportChoice = 'all' | 'flagged' | readonly number[];
 
 export interface ReportAsked {
   readonly source: ReportSource;
@@ -47,12 +45,13 @@ export async function writeReport(
 
   const entries = entriesOf(chosen);
   const layout = layOutContents(file, flow.zones, entries);
-  const places = new Map<string, { page: PdfPage; number: number }>();
+  const places = new Map<string, Place>();
   const part = (key: string, draw: () => void): void => {
     const before = file.pages;
     const number = before + 1 + layout.sheets;
-    let first: PdfPage | null = null;
-    flow.onSheet = (page) => (first ??= page);
+    // of a page only where it is, or its content would be kept
+    let first: Place['page'] | null = null;
+    flow.onSheet = ({ place }) => (first ??= { place });
     draw();
     if (first) places.set(key, { page: first, number });
   };
