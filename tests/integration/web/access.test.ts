@@ -7,6 +7,7 @@ import { beforeAll, describe, expect, inject, it } from 'vitest';
 import { personRoles, type PersonRole } from '@/lib/access/may';
 import { errorShape } from '@/lib/api/error';
 import { bring, run, type Brought } from '../../setup/bring';
+import { checked, issued } from '../../setup/issue';
 import { officeKeys, type OfficeKey } from '../../setup/people';
 import { signedIn, Visitor } from '../../setup/visitor';
 
@@ -75,6 +76,22 @@ const table: Readonly<Record<string, Line>> = {
   [`${revision}/frames/[number]`]: reads(),
   [`${revision}/frames/[number]/buckled`]: reads('?result=C1'),
   [`${revision}/input`]: reads(),
+  [`${revision}/issue`]: { who: { GET: staff, POST: ['lead', 'checker'] }, body: {} },
+  'api/issues': reads(),
+  'api/issues/who': { who: { GET: staff, PUT: lead }, body: {} },
+  'api/issues/[issue]': reads(),
+  'api/issues/[issue]/clients': { who: { GET: staff, POST: ['lead', 'checker'] }, body: {} },
+  'api/issues/[issue]/engine': { who: { GET: staff, POST: staff } },
+  'api/issues/[issue]/files/[file]': reads(),
+  'api/issues/[issue]/questions/[question]': { who: { POST: staff }, body: {} },
+  'api/issues/[issue]/withdraw': { who: { POST: ['lead', 'checker'] }, body: {} },
+  'api/issued': { who: { GET: ['client'] } },
+  'api/issued/[issue]': { who: { GET: ['client'] } },
+  'api/issued/[issue]/files/[file]': { who: { GET: ['client'] } },
+  'api/issued/[issue]/frames': { who: { GET: ['client'] } },
+  'api/issued/[issue]/questions': { who: { GET: ['client'], POST: ['client'] }, body: {} },
+  'api/issued/[issue]/questions/[question]': { who: { POST: ['client'] }, body: {} },
+  'api/issued/[issue]/receipt': { who: { POST: ['client'] } },
   [`${revision}/json`]: reads(),
   [`${revision}/marked-copy`]: reads(),
   [`${revision}/progress`]: reads(),
@@ -88,6 +105,10 @@ const table: Readonly<Record<string, Line>> = {
   '': { who: { GET: everybody } },
   'sign-in': { who: { GET: everybody } },
   issued: { who: { GET: ['client'] } },
+  // the office's people go on to its record
+  'issued/[issue]': { who: { GET: personRoles } },
+  '(desk)/issues': reads(),
+  '(desk)/issues/[issue]': reads(),
   '(desk)/people': { who: { GET: lead } },
   '(desk)/sections': reads(),
   '(desk)/sections/own': reads(),
@@ -103,6 +124,7 @@ const table: Readonly<Record<string, Line>> = {
   '(desk)/projects/[project]/bring': { who: { GET: makers } },
   [page]: reads(),
   [`${page}/bring`]: { who: { GET: makers } },
+  [`${page}/issue`]: reads(),
   [`${page}/change`]: { who: { GET: makers } },
   [`${page}/checking`]: reads(),
   [`${page}/checks`]: reads(),
@@ -139,6 +161,7 @@ describe('access', () => {
   const visitors = new Map<string, Visitor>();
   const brought = new Map<OfficeKey, Brought>();
   const sets = new Map<OfficeKey, number>();
+  const issues = new Map<OfficeKey, { issue: number; question: number }>();
   const parts = new Map<OfficeKey, number>();
 
   beforeAll(async () => {
@@ -152,11 +175,21 @@ describe('access', () => {
       const set = { name: `Sheds ${office}`, level: 'factored', rules, provenance: 'handbook' };
       const kept = await visitors.get(`${office} lead`)!.send('/api/combination-sets', set);
       sets.set(office, ((await kept.json()) as { set: number }).set);
+      issues.set(office, await issueOf(office, analyst));
       const own = { name: `Bar ${office}`, units: 'metric', cells: { shape: 'bar', h: '100', b: '20' } };
       const bar = await visitors.get(`${office} lead`)!.send('/api/own/sections', own);
       parts.set(office, ((await bar.json()) as { id: number }).id);
     }
   });
+
+  /** An issue of the office that its client has, with a question of theirs. */
+  async function issueOf(office: OfficeKey, analyst: Visitor): Promise<{ issue: number; question: number }> {
+    const [checker, lead] = [visitors.get(`${office} checker`)!, visitors.get(`${office} lead`)!];
+    const desk = { url, office: people[office], analyst, checker, lead };
+    const { issue } = await issued(lead, await checked(desk), [people[office].people.client]);
+    const asked = await visitors.get(`${office} client`)!.send(`/api/issued/${issue}/questions`, { text: 'Which bolts?' });
+    return { issue, question: ((await asked.json()) as { question: { id: number } }).question.id };
+  }
 
   /** The address as it names the things of an office. */
   function fill(address: string, office: OfficeKey): string {
@@ -169,6 +202,9 @@ describe('access', () => {
       .replace('[project]', String(people[office].project))
       .replace('[batch]', String(batch))
       .replace('[revision]', letter)
+      .replace('[issue]', String(issues.get(office)!.issue))
+      .replace('[question]', String(issues.get(office)!.question))
+      .replace('[file]', 'input')
       .replace('[number]', '1')
       .replace('[query]', '1')
       .replace('[table]', 'members')
@@ -213,7 +249,7 @@ describe('access', () => {
           else expect([own.status, role], 'own office').toEqual([isPage(file) || role === 'client' ? 404 : 403, role]);
           if (allowed && isPage(file) && own.status === 307) expect(own.headers.get('location')).not.toMatch(/sign-in/);
           await own.body?.cancel();
-          if (!/\[(project|batch|set|part)\]/.test(address)) continue;
+          if (!/\[(project|batch|set|part|issue)\]/.test(address)) continue;
           const other = await ask(visitor, file, address, method, 'south');
           const text = await other.text();
           expect([other.status, role], 'other office').toEqual([allowed || isPage(file) || role === 'client' ? 404 : 403, role]);
