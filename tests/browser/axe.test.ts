@@ -3,6 +3,7 @@ import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { bring, run, stateBecomes } from '../setup/bring';
 import { send } from '../setup/check';
+import { checked, issued, passed } from '../setup/issue';
 import { signedIn } from '../setup/visitor';
 import { openBrowser, signInAs } from './browser';
 
@@ -26,6 +27,7 @@ describe('every page by axe', () => {
   let browser: Browser;
   let batch = 0;
   let messy = 0;
+  let issue = 0;
 
   beforeAll(async () => {
     const analyst = await signedIn(url, 'north', 'analyst');
@@ -38,6 +40,10 @@ describe('every page by axe', () => {
     await analyst.send(`/api/batches/${batch}/revisions/A/changes`, next);
     await stateBecomes(analyst, { batch, revision: 'B' }, (state) => state === 'run');
     await send(analyst, good);
+    const [checker, north] = [await signedIn(url, 'north', 'checker'), await signedIn(url, 'north', 'lead')];
+    await passed({ analyst, checker }, { batch, revision: 'B' });
+    const handed = await checked({ url, office: people.north, analyst, checker, lead: north });
+    issue = (await issued(north, handed, [people.north.people.client])).issue;
     browser = await openBrowser();
   });
   afterAll(() => browser.close());
@@ -58,7 +64,7 @@ describe('every page by axe', () => {
     );
   }
 
-  const lead = ['/projects', '/to-check', '/people', '/limits', '/combinations'];
+  const lead = ['/issues', '/projects', '/to-check', '/people', '/limits', '/combinations'];
   const staff = () => [
     `/projects/${people.north.project}`,
     `/projects/${people.north.project}/bring`,
@@ -67,6 +73,8 @@ describe('every page by axe', () => {
     `/batches/${messy}/A/bring`,
     `/batches/${batch}/B/settings`,
     `/batches/${batch}/A/checking`,
+    `/batches/${batch}/B/issue`,
+    `/issues/${issue}`,
     `/batches/${batch}/B/compare?with=A&show=all`,
     ...['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'run', 'frames/1', 'frames/1/numbers'].map(
       (sheet) => `/batches/${batch}/A/${sheet}`,
@@ -98,7 +106,7 @@ describe('every page by axe', () => {
     const page = await (await browser.newContext({ viewport: { width: 390, height: 844 } })).newPage();
     const found = await look(page, '/sign-in');
     await signInAs(page, url, 'north', 'client');
-    found.push(...(await look(page, '/issued')));
+    found.push(...(await look(page, '/issued')), ...(await look(page, `/issued/${issue}`)));
     expect(found).toEqual([]);
   });
 });
