@@ -29,6 +29,8 @@ function pagePolicy(nonce: string, development: boolean): string {
     "img-src 'self' data: blob:",
     "font-src 'self'",
     "connect-src 'self'",
+    // the engine, where sections are tried
+    "worker-src 'self'",
     "manifest-src 'self'",
     "form-action 'self'",
     "base-uri 'none'",

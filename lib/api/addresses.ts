@@ -3,6 +3,7 @@ import { ownPaths } from '@/lib/api/own-paths';
 import type { OwnKind } from '@/lib/intake/own/own-thing';
 import type { System } from '@/lib/units/quantity';
 import type { TableName, View } from '@/lib/tables/view';
+import type { SectionChange } from '@/lib/changes/change';
 import { listToSearch, viewToSearch } from './view-address';
 
 const e = encodeURIComponent;
@@ -18,6 +19,14 @@ export interface CompareChosen {
 function searchOf(chosen: CompareChosen): string {
   const pieces = Object.entries(chosen).flatMap(([key, value]) => (value === undefined ? [] : `${key}=${e(String(value))}`));
   return pieces.length === 0 ? '' : `?${pieces.join('&')}`;
+}
+
+/** A view of the members table that shows the members asked for; those named one by one are of one frame. */
+function viewOfAsked({ members, ...criteria }: SectionChange['what']): View {
+  const values = new Map(Object.entries(criteria).map(([key, value]) => [key, [value]]));
+  if (members) values.set('frame', [members[0]?.frame ?? '']).set('member', members.map(({ member }) => member)); // prettier-ignore
+  const filters = [...values].map(([column, some]) => ({ column, op: 'in' as const, values: some }));
+  return { table: 'members', filters, sort: null, columns: null };
 }
 
 export const pages = {
@@ -70,6 +79,8 @@ export const pages = {
         ? viewToSearch({ ...of, sort: null, columns: null })
         : `?frame=${e(of.frame)}${of.member === undefined ? '' : `&member=${e(of.member)}`}`
     }`,
+  /** The same with the section that they take filled in. */
+  changeTo: (batch: number, letter: string, { what, to }: SectionChange) => `${pages.change(batch, letter, viewOfAsked(what))}&to=${e(to)}`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>

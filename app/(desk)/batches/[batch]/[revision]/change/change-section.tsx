@@ -23,6 +23,8 @@ interface ChangeSectionProps {
   readonly what: SectionChange['what'];
   /** The members asked for, in words. */
   readonly words: string;
+  /** The replacement that the address names: it came from a try or a sizing. */
+  readonly first?: string | null;
 }
 
 interface Library {
@@ -38,10 +40,10 @@ export type PreviewAnswer = Omit<SectionPreview, 'carriedOver'> & {
 };
 
 /** Chooses the replacement, shows what it touches before anything runs, and makes the next revision with a reason. */
-export function ChangeSection({ batch, letter, next, units, what, words }: ChangeSectionProps) {
+export function ChangeSection({ batch, letter, next, units, what, words, first = null }: ChangeSectionProps) {
   const router = useRouter();
-  const [typed, setTyped] = useState('');
-  const [to, setTo] = useState<string | null>(null);
+  const [typed, setTyped] = useState(first ?? '');
+  const [to, setTo] = useState<string | null>(first);
   const [reason, setReason] = useState('');
   const search = typed.trim();
   const library = useQuery({

@@ -73,6 +73,7 @@ export default async function ChangePage({ params, searchParams }: ChangePagePro
           units={units}
           what={asked.what}
           words={askedWords(asked.what)}
+          first={search.get('to')}
         />
       )}
     </Sheet>

@@ -67,6 +67,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
             <a href={api.part(batch, letter, 'workbook')} download>
               Result workbook
             </a>
+            {detail.drawing && <Link href={pages.tryOn(batch, letter, detail.number)}>Try a section</Link>}
             {mayChange && <Link href={pages.change(batch, letter, { frame: detail.id })}>Change a section</Link>}
           </>
         }

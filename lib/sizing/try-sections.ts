@@ -1,0 +1,113 @@
+/** Other sections tried on one frame: the engine of a run on a changed frame, nothing stored. Runs in a browser. */
+import type { Analyser } from '@/lib/analysis/analyser';
+import { workingLines } from '@/lib/checks/working-lines';
+import type { WorkingLine } from '@/lib/checks/working-parts';
+import type { DrawingData } from '@/lib/drawing/drawing-data';
+import { drawingData } from '@/lib/drawing/frame-drawing-data';
+import type { Frame } from '@/lib/model/frame';
+import type { Settings } from '@/lib/model/settings';
+import { checkPlace } from '@/lib/results/check-place';
+import { evaluateFrame } from '@/lib/results/evaluate';
+import { lineMemo } from '@/lib/results/line-memo';
+import { memberResults, type MemberGoverning } from '@/lib/results/member-results';
+import type { Check, FrameEvaluation, Governing, Verdict } from '@/lib/results/result';
+import { worstFirst } from '@/lib/results/worst-first';
+import { groupsOf } from '@/lib/sizing/members-of';
+import type { SectionTaken } from '@/lib/sizing/section-taken';
+import type { SizedBy } from '@/lib/sizing/sizing';
+import { withSections } from '@/lib/sizing/with-sections';
+
+/** Members of the frame as it is stored: one, or all of a role, group or section. */
+export interface TryOf {
+  readonly by: SizedBy | 'member';
+  readonly name: string;
+}
+
+export interface TriedSection {
+  readonly of: TryOf;
+  readonly taken: SectionTaken;
+}
+
+/** A check as the frame's page lists it. */
+export type TriedCheck = Pick<
+  Check,
+  'check' | 'combination' | 'at' | 'face' | 'value' | 'limit' | 'quantity' | 'ratio' | 'verdict' | 'reason' | 'reference'
+> & { readonly id: string; readonly where: string; readonly working: readonly WorkingLine[] };
+
+export interface TryTold {
+  readonly verdict: Verdict;
+  readonly governing: Governing | null;
+  /** Why it has no solution, as a sentence. */
+  readonly failure: string | null;
+  readonly notChecked: readonly string[];
+  readonly assumptions: readonly string[];
+  readonly mass_kg: number | null;
+  /** Worst first. */
+  readonly checks: readonly TriedCheck[];
+  readonly drawing: DrawingData;
+}
+
+export interface Tried {
+  readonly frame: Frame;
+  readonly evaluation: FrameEvaluation;
+  readonly members: readonly MemberGoverning[];
+}
+
+/** Whether a member is what a try is of. @param frame as it is stored */
+export function takenBy(frame: Frame, of: TryOf): (member: number) => boolean {
+  if (of.by === 'member') return (i) => frame.members[i]?.id === of.name;
+  const found = groupsOf(frame, [{ by: of.by, name: of.name }]);
+  return (i) => !('twice' in found) && found.of[i] === 0;
+}
+
+/**
+ * Evaluates the frame with the sections tried, as a run does it; of two tries for a member the later one holds.
+ *
+ * @param frame as it is stored
+ * @returns why it cannot be tried, where a section is not to be had for a member
+ */
+export function trySections(
+  analyser: Analyser,
+  frame: Frame,
+  settings: Settings,
+  tried: readonly TriedSection[],
+): Tried | { readonly unfit: string } {
+  const takes = tried.map(({ of, taken }) => ({ taken, has: takenBy(frame, of) }));
+  const changed = withSections(frame, (i) => takes.findLast(({ has }) => has(i))?.taken ?? null);
+  if ('unfit' in changed) return changed;
+  const lineOf = lineMemo(changed);
+  const evaluation = evaluateFrame(analyser, changed, settings, { second: true, all: false, lineOf });
+  const { members } = memberResults(changed, evaluation, lineOf);
+  lineOf.flat.forget();
+  return { frame: changed, evaluation, members };
+}
+
+/** What is shown of a try. @param chosen case or combination to draw; null = the governing one */
+export function tryTold({ frame, evaluation, members }: Tried, settings: Settings, chosen: string | null): TryTold {
+  const { units, nearLimit } = settings;
+  return {
+    verdict: evaluation.verdict,
+    governing: evaluation.governing,
+    failure: evaluation.failure?.message ?? null,
+    notChecked: evaluation.notChecked.filter((reason) => !evaluation.failure || !reason.startsWith('not solved')),
+    assumptions: evaluation.assumptions,
+    mass_kg: evaluation.mass,
+    checks: worstFirst(evaluation.checks).map((check, i) => ({
+      id: `${i}`,
+      where: checkPlace(frame, check),
+      check: check.check,
+      combination: check.combination,
+      at: check.at,
+      face: check.face,
+      value: check.value,
+      limit: check.limit,
+      quantity: check.quantity,
+      ratio: check.ratio,
+      verdict: check.verdict,
+      reason: check.reason,
+      reference: check.reference,
+      working: workingLines(check, { settings, origins: null }),
+    })),
+    drawing: drawingData({ frame, evaluation, members, units, nearLimit, chosen }),
+  };
+}
