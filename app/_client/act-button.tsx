@@ -12,12 +12,14 @@ interface ActButtonProps {
   readonly json?: unknown;
   /** Asked before it is done: "Disable Ivo? They are signed out at once." */
   readonly question?: string;
+  /** In a table's row: as a link looks. */
+  readonly quiet?: boolean;
   /** Said when it is done; the page is read again besides. */
   readonly done?: string;
 }
 
 /** One act at one address, asked back where it matters; the page then shows what became of it. */
-export function ActButton({ label, address, method, json, question, done }: ActButtonProps) {
+export function ActButton({ label, address, method, json, question, done, quiet = false }: ActButtonProps) {
   const router = useRouter();
   const [asking, setAsking] = useState(false);
   const act = useMutation({
@@ -25,6 +27,7 @@ export function ActButton({ label, address, method, json, question, done }: ActB
     onSuccess: () => router.refresh(),
     onSettled: () => setAsking(false),
   });
+  const begin = () => (question === undefined ? act.mutate() : setAsking(true));
   if (asking) {
     return (
       <span className="inline-flex flex-wrap items-center gap-2">
@@ -38,9 +41,15 @@ export function ActButton({ label, address, method, json, question, done }: ActB
   }
   return (
     <span className="inline-flex flex-wrap items-center gap-2">
-      <Button onClick={() => (question === undefined ? act.mutate() : setAsking(true))} disabled={act.isPending}>
-        {label}
-      </Button>
+      {quiet ? (
+        <button type="button" className="choice-plain underline underline-offset-3" onClick={begin} disabled={act.isPending}>
+          {label}
+        </button>
+      ) : (
+        <Button onClick={begin} disabled={act.isPending}>
+          {label}
+        </Button>
+      )}
       <span role="status">{act.error ? act.error.message : act.isSuccess ? (done ?? '') : ''}</span>
     </span>
   );

@@ -14,12 +14,14 @@ const reading: readonly Act[] = [
   'read projects',
   'read sections',
   'read limits',
+  'read combination sets',
   'read a batch',
   'take results away',
   'read activity',
+  'read issues',
   'read what was issued',
 ];
-const working: readonly Act[] = [...reading, 'add a project', 'bring sheets in', 'change a revision', 'run'];
+const working: readonly Act[] = [...reading, 'add a project', 'bring sheets in', 'change a revision', 'run', 'size sections'];
 
 /** Acts that are not named here are closed to every token: people, letters, tokens themselves, checking, issuing. */
 export function scopeAllows(scope: TokenScope, act: Act): boolean {

@@ -28,7 +28,7 @@ export function writeLetter(message: MailMessage, place: LetterPlace): Letter {
 
 type Parts = Omit<LetterParts, 'office'>;
 
-const chosen = 'Which letters you get is up to you: choose on your own page, under your name.';
+const chosen = 'Which letters you get is up to you: choose under “Your page”, at the top of every page.';
 
 function partsOf(message: MailMessage, { site, officeName, secret }: LetterPlace): Parts {
   const revision = ({ batch, letter }: AboutRevision, sheet: string) => `${site}/batches/${batch}/${letter}${sheet}`;

@@ -64,10 +64,21 @@ describe('every page by axe', () => {
     );
   }
 
-  const lead = ['/issues', '/projects', '/to-check', '/people', '/limits', '/combinations'];
+  const lead = [
+    '/issues',
+    '/projects',
+    '/to-check',
+    '/people',
+    `/people/${people.north.people.analyst}`,
+    '/letters',
+    '/me',
+    '/limits',
+    '/combinations',
+  ];
   const staff = () => [
     `/projects/${people.north.project}`,
     `/projects/${people.north.project}/bring`,
+    `/projects/${people.north.project}/activity`,
     `/batches/${messy}/A/read`,
     `/batches/${messy}/A/problems`,
     `/batches/${messy}/A/bring`,
@@ -85,7 +96,11 @@ describe('every page by axe', () => {
   it('finds nothing on any page of the office, light or dark', async () => {
     const context = await browser.newContext({ viewport: { width: 1440, height: 900 } });
     const first = await context.newPage();
-    const found = await look(first, '/sign-in');
+    const found = [
+      ...(await look(first, '/sign-in')),
+      ...(await look(first, '/password')),
+      ...(await look(first, '/invitation/x')),
+    ];
     await signInAs(first, url, 'north', 'lead');
     // Two tabs at once: much of a page's time is waiting.
     const waiting = [...lead, ...staff()];

@@ -63,7 +63,9 @@ export default async function LettersPage() {
                       {state !== 'sent' && lastError !== null && (
                         <span className="flex flex-wrap items-center gap-3">
                           {lastError} {attempts === 1 ? '(1 attempt)' : `(${attempts} attempts)`}
-                          {state === 'failed' && <ActButton label="Try again" address={api.letterAgain(id)} method="POST" />}
+                          {state === 'failed' && (
+                            <ActButton quiet label="Try again" address={api.letterAgain(id)} method="POST" />
+                          )}
                         </span>
                       )}
                     </td>

@@ -40,6 +40,7 @@ export function TokenList({ tokens }: TokenListProps) {
               <td>{used}</td>
               <td>
                 <ActButton
+                  quiet
                   label="Revoke"
                   address={api.token(id)}
                   method="DELETE"

@@ -40,8 +40,15 @@ export function OpenInvitations({ invitations }: OpenInvitationsProps) {
               <td>{until}</td>
               <td>
                 <span className="flex flex-wrap gap-2">
-                  <ActButton label="Send again" address={api.oneInvitation(id)} method="POST" done="Sent, with a new link." />
                   <ActButton
+                    quiet
+                    label="Send again"
+                    address={api.oneInvitation(id)}
+                    method="POST"
+                    done="Sent, with a new link."
+                  />
+                  <ActButton
+                    quiet
                     label="Revoke"
                     address={api.oneInvitation(id)}
                     method="DELETE"

@@ -1,17 +1,20 @@
 /**
- * Every route and page × method × role × own and other office × signed out. The list of addresses comes from the
- * files under app/, so that a route without its line in the table fails the test.
+ * Every route and page × method × role × own and other office × own and other project × signed out × a script's token.
+ * The list of addresses comes from the files under app/, so that a route without its line in the table fails the test.
  */
 import { readdirSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { beforeAll, describe, expect, inject, it } from 'vitest';
+import { openDatabase } from '@/db/open';
 import { personRoles, type PersonRole } from '@/lib/access/may';
 import { errorShape } from '@/lib/api/error';
 import { bring, run, type Brought } from '../../setup/bring';
 import { checked, issued } from '../../setup/issue';
-import { officeKeys, type OfficeKey } from '../../setup/people';
+import { letterTo } from '../../setup/letters';
+import { officeKeys, testPassword, type OfficeKey } from '../../setup/people';
 import { signedIn, Visitor } from '../../setup/visitor';
 
-const { url, people } = inject('server');
+const { url, dataDir, people } = inject('server');
 
 const staff: readonly PersonRole[] = ['lead', 'analyst', 'checker'];
 const makers: readonly PersonRole[] = ['lead', 'analyst'];
@@ -41,6 +44,19 @@ const table: Readonly<Record<string, Line>> = {
   'api/auth/[...nextauth]': { who: { GET: everybody, POST: everybody } },
   'api/template': { who: { GET: staff } },
   'api/people': { who: { GET: lead, POST: lead }, body: {} },
+  'api/people/[person]': { who: { GET: lead, PUT: lead }, body: {} },
+  'api/people/[person]/transfer': { who: { POST: lead }, body: {} },
+  'api/people/invitations': { who: { GET: lead, POST: lead }, body: {} },
+  'api/people/invitations/[invitation]': { who: { POST: lead, DELETE: lead } },
+  'api/invitation': { who: { POST: everybody }, body: {} },
+  'api/password-reset': { who: { POST: everybody, PUT: everybody }, body: {} },
+  'api/me': { who: { GET: personRoles } },
+  'api/me/letters': { who: { PUT: personRoles }, body: {} },
+  'api/me/password': { who: { PUT: personRoles }, body: {} },
+  'api/me/tokens': { who: { GET: personRoles, POST: personRoles }, body: {} },
+  'api/me/tokens/[token]': { who: { DELETE: personRoles } },
+  'api/letters': { who: { GET: lead } },
+  'api/letters/[letter]/again': { who: { POST: lead } },
   'api/sections': reads(),
   'api/own/[kind]': { who: { GET: staff, POST: lead }, body: {} },
   'api/own/[kind]/[part]': { who: { GET: staff, PUT: lead, DELETE: lead }, body: {} },
@@ -53,6 +69,8 @@ const table: Readonly<Record<string, Line>> = {
   'api/projects': { who: { GET: staff, POST: makers }, body: {} },
   'api/projects/[project]': reads(),
   'api/projects/[project]/people': { who: { GET: lead, PUT: lead }, body: {} },
+  'api/projects/[project]/activity': reads(),
+  'api/projects/[project]/activity/export': reads(),
   'api/projects/[project]/batches': { who: { GET: staff, POST: makers } },
   'api/batches/[batch]': reads(),
   'api/batches/[batch]/revisions': { who: { GET: staff, POST: makers } },
@@ -109,7 +127,14 @@ const table: Readonly<Record<string, Line>> = {
   'issued/[issue]': { who: { GET: personRoles } },
   '(desk)/issues': reads(),
   '(desk)/issues/[issue]': reads(),
+  'invitation/[token]': { who: { GET: everybody } },
+  password: { who: { GET: everybody } },
+  'password/[token]': { who: { GET: everybody } },
+  '(desk)/me': { who: { GET: personRoles } },
+  '(desk)/letters': { who: { GET: lead } },
+  '(desk)/letters/[letter]': { who: { GET: lead } },
   '(desk)/people': { who: { GET: lead } },
+  '(desk)/people/[person]': { who: { GET: lead } },
   '(desk)/sections': reads(),
   '(desk)/sections/own': reads(),
   '(desk)/sections/own/[kind]/new': { who: { GET: lead } },
@@ -121,6 +146,7 @@ const table: Readonly<Record<string, Line>> = {
   '(desk)/to-check': reads(),
   '(desk)/projects': reads(),
   '(desk)/projects/[project]': reads(),
+  '(desk)/projects/[project]/activity': reads(),
   '(desk)/projects/[project]/bring': { who: { GET: makers } },
   [page]: reads(),
   [`${page}/bring`]: { who: { GET: makers } },
@@ -163,6 +189,10 @@ describe('access', () => {
   const sets = new Map<OfficeKey, number>();
   const issues = new Map<OfficeKey, { issue: number; question: number }>();
   const parts = new Map<OfficeKey, number>();
+  const desks = new Map<OfficeKey, { invitation: number; failed: number; kept: string }>();
+  /** Each person's own. */
+  const tokens = new Map<string, number>();
+  let reading = '';
 
   beforeAll(async () => {
     for (const office of officeKeys) {
@@ -179,8 +209,48 @@ describe('access', () => {
       const own = { name: `Bar ${office}`, units: 'metric', cells: { shape: 'bar', h: '100', b: '20' } };
       const bar = await visitors.get(`${office} lead`)!.send('/api/own/sections', own);
       parts.set(office, ((await bar.json()) as { id: number }).id);
+      desks.set(office, await lettersOf(office, visitors.get(`${office} lead`)!));
+      for (const role of personRoles) {
+        const asked = { name: 'access', scope: 'read', days: 7 };
+        const token = await visitors.get(`${office} ${role}`)!.send('/api/me/tokens', asked);
+        const { id, secret } = ((await token.json()) as { token: { id: number; secret: string } }).token;
+        tokens.set(`${office} ${role}`, id);
+        if (role === 'lead' && office === 'south') reading = secret;
+      }
     }
+    await assignElsewhere();
   });
+
+  /** An open invitation of the office, its letter as it is kept, and a letter that failed. */
+  async function lettersOf(office: OfficeKey, lead: Visitor): Promise<{ invitation: number; failed: number; kept: string }> {
+    const to = `access@${office}.example`;
+    const answer = await lead.send('/api/people/invitations', { email: to, role: 'client' });
+    const { invitation } = (await answer.json()) as { invitation: { id: number } };
+    const kept = await letterTo({ dataDir, office: people[office].office, to, kind: 'invitation' });
+    const { db, close } = openDatabase(join(dataDir, 'tallyframe.sqlite'));
+    const at = '2026-12-01T09:00:00.000Z';
+    const letter = { kind: 'passed', payload: '{}', state: 'failed', idempotency_key: `access ${office}`, due_at: at, created_at: at } as const; // prettier-ignore
+    const values = { ...letter, office: people[office].office, recipient: to };
+    const { id } = await db.insertInto('outbox').values(values).returning('id').executeTakeFirstOrThrow();
+    await close();
+    return { invitation: invitation.id, failed: id, kept: kept.id };
+  }
+
+  /** Someone of every role of the north office who is assigned to another of its projects, and to that alone. */
+  async function assignElsewhere(): Promise<void> {
+    const lead = visitors.get('north lead')!;
+    const made = await lead.send('/api/projects', { name: 'Yards north' });
+    const { project } = (await made.json()) as { project: { id: number } };
+    for (const role of personRoles) {
+      const email = `elsewhere.${role}@north.example`;
+      const added = await lead.send('/api/people', { name: `elsewhere ${role}`, email, role, password: testPassword });
+      const { person } = (await added.json()) as { person: { id: number } };
+      await lead.send(`/api/people/${person.id}`, { projects: [project.id] }, 'PUT');
+      const visitor = new Visitor(url);
+      await visitor.trySignIn(email, testPassword);
+      visitors.set(`elsewhere ${role}`, visitor);
+    }
+  }
 
   /** An issue of the office that its client has, with a question of theirs. */
   async function issueOf(office: OfficeKey, analyst: Visitor): Promise<{ issue: number; question: number }> {
@@ -192,7 +262,7 @@ describe('access', () => {
   }
 
   /** The address as it names the things of an office. */
-  function fill(address: string, office: OfficeKey): string {
+  function fill(address: string, office: OfficeKey, role: PersonRole): string {
     const { batch, revision: letter } = brought.get(office)!;
     const filled = address
       .replace('(desk)/', '')
@@ -208,18 +278,42 @@ describe('access', () => {
       .replace('[number]', '1')
       .replace('[query]', '1')
       .replace('[table]', 'members')
+      .replace('[person]', String(people[office].people.checker))
+      .replace('[invitation]', String(desks.get(office)!.invitation))
+      .replace('letters/[letter]/again', `letters/${desks.get(office)!.failed}/again`)
+      .replace('[letter]', desks.get(office)!.kept)
+      .replace('me/tokens/[token]', `me/tokens/${tokens.get(`${office} ${role}`)}`)
+      .replace('[token]', 'no-such-secret')
       .replace('[...nextauth]', 'session')
       .replace('[...rest]', 'no/such/address');
     return `/${filled}${table[address]?.query ?? ''}`;
   }
 
-  async function ask(visitor: Visitor, file: string, address: string, method: Method, office: OfficeKey): Promise<Response> {
+  async function ask(
+    visitor: Visitor,
+    file: string,
+    address: string,
+    method: Method,
+    office: OfficeKey,
+    role: PersonRole = 'lead',
+  ): Promise<Response> {
     const body = method === 'GET' || method === 'DELETE' ? undefined : JSON.stringify(table[address]?.body ?? {});
-    const response = await visitor.fetch(fill(address, office), { method, body });
+    const response = await visitor.fetch(fill(address, office, role), { method, body });
     if (!isPage(file) && response.status >= 400 && !address.startsWith('api/auth')) {
       expect(errorShape.strict().safeParse(await response.clone().json()).success, `${method} ${address}: shape`).toBe(true);
     }
     return response;
+  }
+
+  /** Staff reach every project of their office; a client none but those they are assigned to. */
+  async function askElsewhere(file: string, address: string, method: Method, role: PersonRole, allowed: boolean): Promise<void> {
+    const answer = await ask(visitors.get(`elsewhere ${role}`)!, file, address, method, 'north', role);
+    const text = await answer.text();
+    if (role === 'client') {
+      expect([answer.status, role], 'other project').toEqual([404, role]);
+      expect(text, 'other project').not.toMatch(/Sheds north|pipe-rack/);
+    } else if (allowed) expect([answer.status, role].join(' '), 'other project').not.toMatch(/^(401|403|404|5\d\d)/);
+    else expect([answer.status, role], 'other project').toEqual([isPage(file) ? 404 : 403, role]);
   }
 
   it('has a line for every route and page, and no line for one that is gone', () => {
@@ -243,14 +337,15 @@ describe('access', () => {
         if (who === everybody || who === undefined) return;
         for (const role of personRoles) {
           const visitor = visitors.get(`north ${role}`)!;
-          const own = await ask(visitor, file, address, method, 'north');
+          const own = await ask(visitor, file, address, method, 'north', role);
           const allowed = who.includes(role);
           if (allowed) expect([own.status, role].join(' '), 'own office').not.toMatch(/^(401|403|404|5\d\d)/);
           else expect([own.status, role], 'own office').toEqual([isPage(file) || role === 'client' ? 404 : 403, role]);
           if (allowed && isPage(file) && own.status === 307) expect(own.headers.get('location')).not.toMatch(/sign-in/);
           await own.body?.cancel();
-          if (!/\[(project|batch|set|part|issue)\]/.test(address)) continue;
-          const other = await ask(visitor, file, address, method, 'south');
+          if (/\[(project|batch|issue)\]/.test(address)) await askElsewhere(file, address, method, role, allowed);
+          if (!/\[(project|batch|set|part|issue|person|invitation|letter|token)\]/.test(address)) continue;
+          const other = await ask(visitor, file, address, method, 'south', role);
           const text = await other.text();
           expect([other.status, role], 'other office').toEqual([allowed || isPage(file) || role === 'client' ? 404 : 403, role]);
           expect(text, 'other office').not.toMatch(/Sheds south|south office|pipe-rack/);
@@ -258,6 +353,18 @@ describe('access', () => {
       });
     }
   }
+
+  it('lets a token for reading change nothing, whatever the address', async () => {
+    for (const { file, address } of addresses) {
+      for (const method of methodsOf(file)) {
+        const who = table[address]?.who[method];
+        if (method === 'GET' || isPage(file) || who === everybody || who === undefined) continue;
+        const headers = { authorization: `Bearer ${reading}` };
+        const answer = await fetch(`${url}${fill(address, 'south', 'lead')}`, { method, headers });
+        expect([answer.status, `${method} ${address}`]).toEqual([403, `${method} ${address}`]);
+      }
+    }
+  });
 
   it('never shows one office a project or a person of the other in a list', async () => {
     const north = visitors.get('north lead')!;

@@ -35,7 +35,7 @@ export default async function LetterPage({ params }: { readonly params: Promise<
       <Zone title="As HTML">
         <iframe
           title="The letter as HTML"
-          className="h-180 w-full"
+          className="h-130 w-full"
           sandbox="allow-top-navigation-by-user-activation"
           srcDoc={letter.html.replace('<style>', `<base target="_top"><style nonce="${nonce}">`)}
         />
