@@ -145,15 +145,21 @@ export async function insertAcceptances(
     const chosen = known.filter(({ item }) => items.includes(item));
     if (chosen.length !== new Set(items).size)
       return 'One of these checks is neither over nor not checked. Open the frame again.';
-    const all = chosen.map((one) => ({ frame: frame.index, ...one }));
-    if (alike) for (const one of chosen) all.push(...(await sameElsewhere(within, revision.id, frame.index, one)));
+    const byPlace = new Map(chosen.map((one) => [`${frame.index} ${one.item}`, { frame: frame.index, ...one }]));
+    // two checks of this frame may be not checked for one cause, which others share: each of those is accepted once
+    if (alike)
+      for (const one of chosen)
+        for (const same of await sameElsewhere(within, revision.id, frame.index, one))
+          byPlace.set(`${same.frame} ${same.item}`, same);
+    const all = [...byPlace.values()];
     const at = instant();
-    for (const { frame: index, item } of all)
+    // elsewhere only what nobody accepted yet is
+    for (const { item } of chosen)
       await within
         .updateTable('checking_acceptance')
         .set({ ended_by: by.id, ended_at: at })
         .where('revision', '=', revision.id)
-        .where('frame', '=', index)
+        .where('frame', '=', frame.index)
         .where('item', '=', item)
         .where('ended_at', 'is', null)
         .execute();

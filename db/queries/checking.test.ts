@@ -191,6 +191,12 @@ it('one reason is given to every check that is not checked for the very same cau
   expect(await insertAcceptances(db, await given.revision(), marked(row.index), checker, accept)).toBe(
     (await total.execute()).length,
   );
+  const both = rows.find(({ toAccept }) => toAccept > 1)!;
+  const twice = (await listToAccept(db, id, both.index)).map(({ item }) => item);
+  const again = { items: twice, reason: 'Each once.', alike: true };
+  expect(await insertAcceptances(db, await given.revision(), marked(both.index), checker, again)).toBeGreaterThanOrEqual(
+    twice.length,
+  );
   const over = await of('over');
   const overs = { ...accept, items: [over.found.item] };
   expect(await insertAcceptances(db, await given.revision(), marked(over.row.index), checker, overs)).toBe(1);
