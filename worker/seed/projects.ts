@@ -1,4 +1,5 @@
 /** The invented office's projects and what was brought in for them, by the names of the files in samples/. */
+import type { SeedIssues } from './issue';
 import type { SeedPerson } from './people';
 
 interface SeedRevision {
@@ -7,6 +8,8 @@ interface SeedRevision {
   readonly run: boolean;
   /** Sent to check afterwards, and how far the checker got. */
   readonly check?: 'begun' | 'passed';
+  /** Issued once it is passed, and again after a change. */
+  readonly issues?: SeedIssues;
 }
 
 export interface SeedProject {
@@ -41,7 +44,24 @@ export const seedProjects: readonly SeedProject[] = [
     batches: [
       { name: 'Pipe rack, line 1', by: 'analyst', revisions: [{ ...ran('pipe-rack-12.xlsx'), check: 'passed' }] },
       { name: 'Pipe rack, lines 2 and 3', by: 'analyst', revisions: [ran('pipe-rack-24.xlsx')] },
-      { name: 'Bents braced by rods', by: 'analyst', revisions: [ran('braced-bents-12.xlsx')] },
+      {
+        name: 'Bents braced by rods',
+        by: 'analyst',
+        revisions: [
+          {
+            ...ran('braced-bents-12.xlsx'),
+            check: 'passed',
+            issues: {
+              note: 'For ordering steel.',
+              next: {
+                nearLimit: '0.7',
+                reason: 'The client wants to see whatever is worked above 0.7.',
+                note: 'For fabrication. Frames above 0.7 are marked near, as asked.',
+              },
+            },
+          },
+        ],
+      },
       { name: 'Equipment brackets', by: 'secondAnalyst', revisions: [ran('brackets-150.xlsx')] },
     ],
   },

@@ -18,6 +18,7 @@ import { askForReading, askForRun } from '@/worker/ask';
 import { createPools } from '@/worker/pools';
 import { WorkQueue } from '@/worker/queue';
 import { checkSeeded } from './check';
+import { issueSeeded } from './issue';
 import { seedOffice, seedPeople, type SeedPerson } from './people';
 import { seedProjects } from './projects';
 
@@ -102,7 +103,7 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
     for (const { name: batchName, by, revisions } of batches) {
       const person = idOf(by);
       const batch = (await insertBatch(db, office, { project, name: batchName, person }))!;
-      for (const { source, run, check } of revisions) {
+      for (const { source, run, check, issues } of revisions) {
         const place = { office, project, batch, person };
         const revision = await bringIn(db, place, filesOf(join(samples, source)));
         await askForReading(queue, database, { office, revision, person });
@@ -110,12 +111,16 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
         if (run && (await askForRun(queue, database, { office, revision, person })))
           await insertActivity(db, office, { what: 'started the run', project, batch, revision, person });
         await queue.idle();
+        const named = (key: SeedPerson['key']) => ({
+          id: idOf(key),
+          name: seedPeople.find((one) => one.key === key)?.name ?? '',
+        });
         if (check !== undefined) {
-          const named = (key: SeedPerson['key']) => ({
-            id: idOf(key),
-            name: seedPeople.find((one) => one.key === key)?.name ?? '',
-          });
           await checkSeeded(db, { office, revision, by: named(by), checker: named('checker'), how: check });
+        }
+        if (issues !== undefined) {
+          const signing = { by: named(by), checker: named('checker'), lead: named('lead'), client: named(client) };
+          await issueSeeded(database, queue, { office, revision, ...signing }, issues);
         }
         const done = await findRevisionById(db, office, revision);
         say(`${batchName}, revision ${done?.letter}: ${done?.frames} frames, ${done?.state}`);
