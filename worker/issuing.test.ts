@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import ExcelJS from 'exceljs';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { insertAnswer, insertQuestion, sendIssueTo, withdrawIssue } from '@/db/queries/issue-acts';
@@ -10,7 +11,6 @@ import { updateAssigned } from '@/db/queries/projects';
 import { findRevisionById, updateRevisionState } from '@/db/queries/revisions';
 import type { MailMessage } from '@/lib/mail/message';
 import type { IssueFileKind } from '@/lib/issuing/issue-file';
-import { sha256 } from '../tests/integration/sha256';
 import { askForRun } from './ask';
 import { askForIssue, type Issuer } from './ask-issue';
 import { WorkQueue } from './queue';
@@ -20,6 +20,8 @@ import { listRun } from './threads/list-run';
 import { makeIssue } from './threads/make-issue';
 import { retestIssue } from './threads/retest-issue';
 import { solveChunk } from './threads/solve';
+
+const sha256 = (bytes: Buffer): string => createHash('sha256').update(bytes).digest('hex');
 
 let database: TestDatabase;
 let office: TestOffice;

@@ -33,7 +33,7 @@ interface Of {
 /** @throws {Error} where a step is refused, so that a seed that no longer fits is noticed */
 export async function issueSeeded(database: OpenDatabase, queue: WorkQueue, of: Of, { note, next }: SeedIssues): Promise<void> {
   const { db } = database;
-  const { office, revision, lead, checker, by, client } = of;
+  const { office, revision, checker, by, client } = of;
   const first = await issue(database, queue, of, revision, note);
   const text = 'May the rods be spliced at mid length for transport?';
   const asked = await insertQuestion(db, first, { by: client, frame: null, text });

@@ -1,7 +1,9 @@
+import { createHash } from 'node:crypto';
 import { once } from 'node:events';
 import { describe, expect, it } from 'vitest';
-import { sha256 } from '../../tests/integration/sha256';
 import { PieceSink } from './piece-sink';
+
+const sha256 = (bytes: Buffer): string => createHash('sha256').update(bytes).digest('hex');
 
 async function through(chunks: readonly Buffer[]): Promise<{ pieces: Buffer[]; sink: PieceSink }> {
   const pieces: Buffer[] = [];

@@ -1,7 +1,7 @@
 'use client';
-import { useMutation, useQuery } from '@tanstack/react-query';
+import { useMutation } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
-import { useEffect, useState } from 'react';
+import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { api } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
@@ -11,34 +11,34 @@ interface Told {
   readonly failure: string | null;
 }
 
+const between_ms = 700;
+
 /** Tests one issue by the present engine, and says how far that is. */
 export function TestEngine({ issue, number }: { readonly issue: number; readonly number: string }) {
   const router = useRouter();
-  const [waiting, setWaiting] = useState(false);
-  const address = api.issuePart(issue, 'engine');
+  const [done, setDone] = useState(0);
   const test = useMutation({
-    mutationFn: () => request(address, { method: 'POST' }),
-    onSuccess: () => setWaiting(true),
+    mutationFn: async () => {
+      const address = api.issuePart(issue, 'engine');
+      await request(address, { method: 'POST' });
+      for (;;) {
+        const { going, failure } = await request<Told>(address);
+        if (going === null) {
+          if (failure !== null) throw new Error(failure);
+          return;
+        }
+        setDone(going.done);
+        await new Promise((resolve) => setTimeout(resolve, between_ms));
+      }
+    },
+    onSuccess: () => router.refresh(),
   });
-  const { data } = useQuery({
-    queryKey: ['engine', issue, waiting],
-    queryFn: () => request<Told>(address),
-    enabled: waiting,
-    refetchInterval: 700,
-    staleTime: 0,
-  });
-  const ended = waiting && data !== undefined && data.going === null;
-  useEffect(() => {
-    if (!ended) return;
-    setWaiting(false);
-    router.refresh();
-  }, [ended, router]);
   return (
     <span role="status">
-      {waiting ? (
-        `${data?.going?.done ?? 0} frames so far`
+      {test.isPending ? (
+        `${done.toLocaleString('en-GB')} frames so far`
       ) : (
-        <Button onClick={() => test.mutate()} disabled={test.isPending}>
+        <Button onClick={() => test.mutate()}>
           Test<span className="sr-only"> {number} by the present engine</span>
         </Button>
       )}

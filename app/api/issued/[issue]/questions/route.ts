@@ -21,7 +21,7 @@ export const GET = door(
 export const POST = door(
   atIssue('ask about an issue', async ({ request, person, issue }) => {
     const { frame, text } = await readJson(request, questionInput);
-    const about = frame == null ? null : await frameOfIssue(issue, frame);
+    const about = frame === null || frame === undefined ? null : await frameOfIssue(issue, frame);
     if (about === undefined) {
       const sentence = 'There is no such frame in this issue.';
       throw new ApiError('bad-request', sentence, { fields: { frame: [sentence] } });
