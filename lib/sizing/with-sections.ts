@@ -16,6 +16,7 @@ export interface Unfit {
 export function withSections(frame: Frame, takes: (member: number) => SectionTaken | null): Frame | Unfit {
   const sections: Section[] = [];
   const materials: Material[] = [];
+  const thicknesses: (number | null)[] = [];
   const names = new Map<string, number>();
   const members: Member[] = [];
   for (const [i, member] of frame.members.entries()) {
@@ -30,8 +31,13 @@ export function withSections(frame: Frame, takes: (member: number) => SectionTak
     // names of sections are unique within a batch; one that another member has already is the same section
     let at = names.get(section.name);
     if (at === undefined) names.set(section.name, (at = sections.push(section) - 1));
-    let of = materials.findIndex((one) => one === material || sameMaterial(one, material));
-    if (of < 0) of = materials.push(material) - 1;
+    // the sheets resolve a material once for each thickness, and so list it once for each
+    const t = section.properties.t_m;
+    let of = materials.findIndex((one, m) => thicknesses[m] === t && (one === material || sameMaterial(one, material)));
+    if (of < 0) {
+      of = materials.push(material) - 1;
+      thicknesses.push(t);
+    }
     members.push(at === member.section && of === member.material ? member : { ...member, section: at, material: of });
   }
   return { ...frame, members, sections, materials };
