@@ -17,7 +17,7 @@ import type { StripFrame } from '@/lib/drawing/strip-data';
 import { FrameFacts } from './frame-facts';
 import { FramePanel } from './frame-panel';
 import { PassOrReturn } from './pass-or-return';
-import { useFrameChecking } from './use-frame-checking';
+import { useFrameChecking, withSeen } from './use-frame-checking';
 
 interface CheckingDeskProps {
   readonly batch: number;
@@ -68,7 +68,7 @@ export function CheckingDesk({ batch, letter, nearLimit, first, strip, asked }: 
   const seenAndNext = () => {
     const row = rows[at];
     if (row && detail.mayMark && !row.seen) {
-      client.setQueryData<CheckingDetail>(key, (known) => known && markedSeen(known, row.number));
+      client.setQueryData<CheckingDetail>(key, (known) => known && withSeen(known, row.number, true));
       acts.seen(true);
     }
     if (row) go(next);
@@ -139,11 +139,6 @@ export function CheckingDesk({ batch, letter, nearLimit, first, strip, asked }: 
       <PassOrReturn batch={batch} letter={letter} detail={detail} />
     </>
   );
-}
-
-function markedSeen(detail: CheckingDetail, number: number): CheckingDetail {
-  const list = detail.list.map((row) => (row.number === number ? { ...row, seen: true } : row));
-  return { ...detail, list, progress: { ...detail.progress, seen: detail.progress.seen + 1 } };
 }
 
 function focusOn(key: 'q' | 'a'): void {

@@ -7,6 +7,7 @@ import { Notice } from '@/components/ui/notice';
 import type { CheckingDetail } from '@/app/_server/checking-detail';
 import { api } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
+import { whyNotPass } from '@/lib/checking/why-not-pass';
 
 interface PassOrReturnProps {
   readonly batch: number;
@@ -26,7 +27,8 @@ export function PassOrReturn({ batch, letter, detail }: PassOrReturnProps) {
       router.refresh();
     },
   });
-  const { whyNotPass, whyNotReturn, whyNotCheck, state, acts } = detail;
+  const { whyNotReturn, whyNotCheck, state, acts, progress } = detail;
+  const against = detail.mayMark ? whyNotPass(progress) : detail.whyNotPass;
   if (state !== 'to check' && state !== 'checked') return null;
   const preparer = acts.findLast(({ what }) => what === 'sent')?.by ?? 'who prepared it';
   const unnoted = note.trim() === '';
@@ -45,8 +47,8 @@ export function PassOrReturn({ batch, letter, detail }: PassOrReturnProps) {
         {state === 'to check' && (
           <p>
             <b>Passing needs every listed frame seen, every query closed, every over and not checked accepted.</b>{' '}
-            {whyNotPass.length > 0 ? whyNotPass.join(' ') : 'Nothing stands against it.'} You did not prepare this revision, so
-            you may pass it.
+            {against.length > 0 ? against.join(' ') : 'Nothing stands against it.'} You did not prepare this revision, so you may
+            pass it.
           </p>
         )}
         {state === 'checked' && <p>Passed. As long as it is not issued it may still be returned.</p>}
@@ -59,7 +61,7 @@ export function PassOrReturn({ batch, letter, detail }: PassOrReturnProps) {
           Return to {preparer}
         </Button>
         {state === 'to check' && (
-          <Button look="checker" disabled={whyNotPass.length > 0 || act.isPending} onClick={() => act.mutate('pass')}>
+          <Button look="checker" disabled={against.length > 0 || act.isPending} onClick={() => act.mutate('pass')}>
             Pass revision {letter}
           </Button>
         )}

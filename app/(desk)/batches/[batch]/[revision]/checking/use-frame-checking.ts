@@ -1,6 +1,6 @@
 'use client';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import type { FrameChecking } from '@/app/_server/checking-detail';
+import type { CheckingDetail, FrameChecking } from '@/app/_server/checking-detail';
 import { api } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 
@@ -24,11 +24,26 @@ export function useFrameChecking(batch: number, letter: string, number: number, 
       request(to, { method, json }),
     onSettled: again,
   });
+  // a mark is set many times a minute: the list is mended by what is answered, and not brought anew
+  const see = useMutation({
+    mutationFn: ({ of, seen }: { of: number; seen: boolean }) =>
+      request<{ progress: CheckingDetail['progress'] }>(api.checkingFrame(batch, letter, of, 'seen'), {
+        method: seen ? 'POST' : 'DELETE',
+      }),
+    onSuccess: async ({ progress }, { of, seen }) => {
+      client.setQueryData<CheckingDetail>(
+        ['checking', batch, letter],
+        (known) => known && { ...withSeen(known, of, seen), progress },
+      );
+      await client.invalidateQueries({ queryKey: ['checking-frame', batch, letter, of] });
+    },
+    onError: again,
+  });
   return {
     marks: marks.data?.frame ?? null,
-    error: act.error ?? marks.error,
-    busy: act.isPending,
-    seen: (seen: boolean) => act.mutate({ to: address('seen'), method: seen ? 'POST' : 'DELETE' }),
+    error: act.error ?? see.error ?? marks.error,
+    busy: act.isPending || see.isPending,
+    seen: (seen: boolean) => see.mutate({ of: number, seen }),
     query: (json: { subject: string | null; check: string | null; text: string }) =>
       act.mutateAsync({ to: address('queries'), json }),
     answer: (query: number, json: { text: string; close: boolean }) =>
@@ -39,4 +54,9 @@ export function useFrameChecking(batch: number, letter: string, number: number, 
     ownValue: (json: { figure: unknown; value: string; note: string }) => act.mutateAsync({ to: address('own-values'), json }),
   };
 }
+/** The list with a frame of it marked seen, or no longer: others may have seen it too, which the next reading of the list says. */
+export function withSeen(detail: CheckingDetail, number: number, seen: boolean): CheckingDetail {
+  return { ...detail, list: detail.list.map((row) => (row.number === number ? { ...row, seen } : row)) };
+}
+
 export type FrameCheckingActs = ReturnType<typeof useFrameChecking>;
