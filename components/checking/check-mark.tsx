@@ -1,11 +1,5 @@
 export type CheckMarkKind = 'seen' | 'queried' | 'accepted';
 
-export const checkMarkWords: Readonly<Record<CheckMarkKind, string>> = {
-  seen: 'seen',
-  queried: 'queried',
-  accepted: 'accepted',
-};
-
 /** Strokes of a hand on a 12 px square: a tick, a query, a tick underlined. */
 export const checkMarkPaths: Readonly<Record<CheckMarkKind, string>> = {
   seen: 'M1.5 6.5 4.5 9.5 10.5 2',

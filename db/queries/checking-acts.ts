@@ -111,7 +111,7 @@ async function preparersEmails(within: Db, { office, batch, sent, createdBy }: R
   return emailsOf(within, office, [...people].filter((person) => person !== by.id)); // prettier-ignore
 }
 
-export function aboutOf({ projectName, projectNumber, batch, batchName, letter }: RevisionRecord): AboutRevision {
+function aboutOf({ projectName, projectNumber, batch, batchName, letter }: RevisionRecord): AboutRevision {
   const project = projectNumber === null || projectNumber === '' ? projectName : `${projectNumber} ${projectName}`;
   return { project, batch, batchName, letter };
 }

@@ -77,7 +77,7 @@ export async function updateSeen(
 }
 
 /** Row −1 of what is accepted: the frame as a whole. */
-export const wholeFrame = -1;
+const wholeFrame = -1;
 
 export interface ToAccept {
   /** Ordinal of its row among the frame's checks, or −1. */

@@ -27,7 +27,7 @@ export interface ListedFrame {
   readonly reasons: readonly ReasonToSee[];
 }
 
-export const listParts = ['over', 'not checked', 'near', 'sample'] as const;
+const listParts = ['over', 'not checked', 'near', 'sample'] as const;
 export type ListPart = (typeof listParts)[number];
 
 /** Share of all frames that the sample of frames within comes to, and the fewest of them. */
