@@ -29,6 +29,7 @@ import {
   listRevisions,
   updateRevisionState,
 } from '@/db/queries/revisions';
+import { findSizing, insertSizing, listSizings } from '@/db/queries/sizing';
 import { findSummary, listParameterRatios, listParameters } from '@/db/queries/summary';
 import { deleteUploads, insertUpload, listUploadedFiles, listUploads } from '@/db/queries/uploads';
 import type { OpenDatabase } from '@/db/open';
@@ -52,6 +53,7 @@ async function twoOffices() {
     const made = { from: revision.id, person: own.person, changes: [{ change, ...words }], reason: 'asked for', run: false };
     const changed = (await insertChangedRevision(database.db, own.office, made))!.id;
     await insertJob(database.db, own.office, { kind: 'run', revision: revision.id, person: own.person });
+    await insertSizing(database.db, own.office, { revision: revision.id, person: own.person, request: { groups: [] }, engine: 'e' });
     return { ...own, revision: revision.id, changed };
   };
   return { ...database, own: await fill('Northlight'), other: await fill('Southgate') };
@@ -99,6 +101,8 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
   listParameters: ({ db }, asking, of) => listParameters(db, asking, of.revision),
   listParameterRatios: ({ db }, asking, of) => listParameterRatios(db, asking, of.revision, 'span'),
   findLatestJob: ({ db }, asking, of) => findLatestJob(db, asking, of.revision, 'run'),
+  listSizings: ({ db }, asking, of) => listSizings(db, asking, of.revision),
+  findSizing: async ({ db }, asking, of) => findSizing(db, asking, of.revision, (await listSizings(db, of.office, of.revision))[0]?.id ?? 0),
   listActivityOfProject: ({ db }, asking, of) => listActivity(db, asking, { project: of.project }),
 };
 

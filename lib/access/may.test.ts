@@ -37,6 +37,7 @@ describe('who may do what', () => {
   it('lets an analyst prepare and run batches but not add people', () => {
     expect(may(of('analyst'), 'bring sheets in')).toBe(true);
     expect(may(of('analyst'), 'run')).toBe(true);
+    expect(may(of('analyst'), 'size sections')).toBe(true);
     expect(may(of('analyst'), 'change a revision')).toBe(true);
     expect(may(of('analyst'), 'send to check')).toBe(true);
     expect(may(of('analyst'), 'check')).toBe(false);

@@ -36,6 +36,7 @@ describe('every page by axe', () => {
     await run(analyst, good);
     batch = good.batch;
     messy = (await bring(analyst, to, 'samples/messy.xlsx')).batch;
+    await analyst.send(`/api/batches/${batch}/revisions/A/size`, { groups: [{ by: 'role', name: 'column', range: 'HE B' }] });
     const next = { changes: [{ kind: 'setting', setting: 'nearLimit', value: '0.8' }], reason: 'for a look', run: true };
     await analyst.send(`/api/batches/${batch}/revisions/A/changes`, next);
     await stateBecomes(analyst, { batch, revision: 'B' }, (state) => state === 'run');
@@ -90,6 +91,8 @@ describe('every page by axe', () => {
     ...['glance', 'frames', 'members', 'checks', 'reactions', 'movements', 'run', 'frames/1', 'frames/1/numbers'].map(
       (sheet) => `/batches/${batch}/A/${sheet}`,
     ),
+    `/batches/${batch}/A/frames/1/try`,
+    `/batches/${batch}/A/size`,
     '/no/such/page',
   ];
 

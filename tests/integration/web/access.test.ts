@@ -93,6 +93,12 @@ const table: Readonly<Record<string, Line>> = {
   [`${revision}/csv`]: reads(),
   [`${revision}/frames/[number]`]: reads(),
   [`${revision}/frames/[number]/buckled`]: reads('?result=C1'),
+  [`${revision}/frames/[number]/model`]: reads(),
+  [`${revision}/section`]: reads('?name=IPE%20300&of=S275'),
+  [`${revision}/size`]: { who: { GET: staff, POST: makers }, body: {} },
+  [`${revision}/size/groups`]: reads(),
+  [`${revision}/size/[sizing]`]: { who: { GET: staff, POST: makers, DELETE: makers } },
+  [`${revision}/size/[sizing]/export`]: reads(),
   [`${revision}/input`]: reads(),
   [`${revision}/issue`]: { who: { GET: staff, POST: ['lead', 'checker'] }, body: {} },
   'api/issues': reads(),
@@ -158,6 +164,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${page}/frames`]: reads(),
   [`${page}/frames/[number]`]: reads(),
   [`${page}/frames/[number]/numbers`]: reads(),
+  [`${page}/frames/[number]/try`]: reads(),
   [`${page}/glance`]: reads(),
   [`${page}/members`]: reads(),
   [`${page}/movements`]: reads(),
@@ -166,6 +173,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${page}/read`]: reads(),
   [`${page}/run`]: reads(),
   [`${page}/settings`]: reads(),
+  [`${page}/size`]: reads(),
 };
 
 const files = readdirSync('app', { recursive: true, encoding: 'utf8' })
@@ -189,6 +197,7 @@ describe('access', () => {
   const sets = new Map<OfficeKey, number>();
   const issues = new Map<OfficeKey, { issue: number; question: number }>();
   const parts = new Map<OfficeKey, number>();
+  const sizings = new Map<OfficeKey, number>();
   const desks = new Map<OfficeKey, { invitation: number; failed: number; kept: string }>();
   /** Each person's own. */
   const tokens = new Map<string, number>();
@@ -201,6 +210,9 @@ describe('access', () => {
       const made = await bring(analyst, `/api/projects/${people[office].project}/batches`, 'samples/pipe-rack-12.xlsx');
       await run(analyst, made);
       brought.set(office, made);
+      const groups = [{ by: 'role', name: 'column', range: 'HE B' }];
+      const sized = await analyst.send(`/api/batches/${made.batch}/revisions/${made.revision}/size`, { groups });
+      sizings.set(office, ((await sized.json()) as { sizing: { id: number } }).sizing.id);
       const rules = [{ from: 'handbook', purpose: 'strength', rule: '1.35 dead' }];
       const set = { name: `Sheds ${office}`, level: 'factored', rules, provenance: 'handbook' };
       const kept = await visitors.get(`${office} lead`)!.send('/api/combination-sets', set);
@@ -278,6 +290,7 @@ describe('access', () => {
       .replace('[number]', '1')
       .replace('[query]', '1')
       .replace('[table]', 'members')
+      .replace('[sizing]', String(sizings.get(office)))
       .replace('[person]', String(people[office].people.checker))
       .replace('[invitation]', String(desks.get(office)!.invitation))
       .replace('letters/[letter]/again', `letters/${desks.get(office)!.failed}/again`)
