@@ -1,6 +1,10 @@
 import { expect, it } from 'vitest';
 import { findBatch, insertBatch, listBatches } from '@/db/queries/batches';
-import { insertActivity, listActivity } from '@/db/queries/activity';
+import { insertActivity, listActivity, listActivityChoices } from '@/db/queries/activity';
+import { insertInvitation, listInvitations } from '@/db/queries/invitations';
+import { listLetters } from '@/db/queries/outbox';
+import { findKeeper, findStanding } from '@/db/queries/standing';
+import { insertToken, listTokens } from '@/db/queries/tokens';
 import { findFrame, findFrameIndex, findNeighbours, iterateFrames } from '@/db/queries/frames';
 import {
   findSetVersion,
@@ -53,12 +57,21 @@ async function twoOffices() {
     const made = { from: revision.id, person: own.person, changes: [{ change, ...words }], reason: 'asked for', run: false };
     const changed = (await insertChangedRevision(database.db, own.office, made))!.id;
     await insertJob(database.db, own.office, { kind: 'run', revision: revision.id, person: own.person });
-    await insertSizing(database.db, own.office, { revision: revision.id, person: own.person, request: { groups: [] }, engine: 'e' });
-    return { ...own, revision: revision.id, changed };
+    await insertSizing(database.db, own.office, {
+      revision: revision.id,
+      person: own.person,
+      request: { groups: [] },
+      engine: 'e',
+    });
+    const by = { person: { id: own.person, name: 'Northlight analyst', officeName: name }, serverSecret: 'of tests' };
+    await insertInvitation(database.db, own.office, { email: `wren@${name}.example`, role: 'client', projects: [] }, by);
+    const token = { person: own.person, name: 'nightly', scope: 'read', expiresAt: '2099-01-01T00:00:00.000Z' } as const;
+    await insertToken(database.db, own.office, token);
+    return { ...own, name, revision: revision.id, changed };
   };
   return { ...database, own: await fill('Northlight'), other: await fill('Southgate') };
 }
-type Filled = Office & { readonly revision: number; readonly changed: number };
+type Filled = Office & { readonly name: string; readonly revision: number; readonly changed: number };
 
 const members: View = { table: 'members', filters: [], sort: null, columns: null };
 
@@ -102,7 +115,14 @@ const queries: Readonly<Record<string, (given: OpenDatabase, asking: number, of:
   listParameterRatios: ({ db }, asking, of) => listParameterRatios(db, asking, of.revision, 'span'),
   findLatestJob: ({ db }, asking, of) => findLatestJob(db, asking, of.revision, 'run'),
   listSizings: ({ db }, asking, of) => listSizings(db, asking, of.revision),
-  findSizing: async ({ db }, asking, of) => findSizing(db, asking, of.revision, (await listSizings(db, of.office, of.revision))[0]?.id ?? 0),
+  findSizing: async ({ db }, asking, of) =>
+    findSizing(db, asking, of.revision, (await listSizings(db, of.office, of.revision))[0]?.id ?? 0),
+  findStanding: ({ db }, asking, of) => findStanding(db, asking, of.person),
+  findKeeper: ({ db }, asking, of) => findKeeper(db, asking, of.batch),
+  listTokens: ({ db }, asking, of) => listTokens(db, asking, of.person),
+  listInvitations: async ({ db }, asking, of) => (await listInvitations(db, asking)).filter((one) => one.email.includes(of.name)),
+  listLetters: async ({ db }, asking, of) => (await listLetters(db, asking)).filter((one) => one.recipient.includes(of.name)),
+  listActivityChoices: async ({ db }, asking, of) => (await listActivityChoices(db, asking, of.project)).whats,
   listActivityOfProject: ({ db }, asking, of) => listActivity(db, asking, { project: of.project }),
 };
 
