@@ -1,6 +1,7 @@
 /** Who is written to about an issue, each in the transaction of the act that causes it. */
 import type { Db } from '@/db/open';
 import type { IssueRecord } from '@/db/queries/issues';
+import { findKeeper } from '@/db/queries/standing';
 import { putInOutbox } from '@/db/queries/outbox';
 import type { AboutIssue } from '@/lib/mail/message';
 
@@ -52,12 +53,14 @@ export async function tellOffice(
     .where('role', '=', 'lead')
     .where('ended_at', 'is', null)
     .execute();
-  const { created_by, run_by } = await within
+  const { created_by, run_by, batch } = await within
     .selectFrom('revision')
-    .select(['created_by', 'run_by'])
+    .select(['created_by', 'run_by', 'batch'])
     .where('id', '=', issue.revision.id)
     .executeTakeFirstOrThrow();
-  const people = new Set([...leads.map(({ person }) => person), run_by ?? created_by]);
+  // Who prepared it may have handed its batch over since.
+  const keeper = await findKeeper(within, issue.office, batch);
+  const people = new Set([...leads.map(({ person }) => person), run_by ?? created_by, ...(keeper ? [keeper.id] : [])]);
   for (const email of await emailsOf(within, issue.office, [...people]))
     await putInOutbox(within, issue.office, email, { kind: 'question', about: aboutIssue(issue), ...said });
 }
