@@ -27,6 +27,8 @@ export function publicRevision(revision: RevisionRecord) {
     runStartedAt,
     runFinishedAt,
     madeFrom: revision.madeFrom,
+    sentToCheck: revision.sent && { by: revision.sent.name, at: revision.sent.at },
+    checked: revision.checked && { by: revision.checked.name, at: revision.checked.at },
   };
 }
 export type PublicRevision = ReturnType<typeof publicRevision>;

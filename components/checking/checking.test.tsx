@@ -2,6 +2,7 @@ import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import type { HandChecks } from '@/lib/checking/hand-checks/hand-checks';
+import { Strip } from '../strip/strip';
 import { CheckList, type CheckListRow } from './check-list';
 import { HandChecksShown } from './hand-checks-shown';
 import { QueryThread, type Thread } from './query-thread';
@@ -30,6 +31,25 @@ describe('the frames to see', () => {
     expect(of(/F4/)).toHaveTextContent(/queried, to see/);
     await userEvent.click(of(/F7/));
     expect(onGo).toHaveBeenCalledWith(7);
+  });
+});
+
+describe('marks on the strip', () => {
+  it('stand over their cells, are said in words, and a cell opens what the page wants', async () => {
+    const onOpen = vi.fn();
+    const frames = [
+      { id: 'F1', verdict: 'over', ratio: 1.1, mark: 'queried' },
+      { id: 'F2', verdict: 'within', ratio: 0.5 },
+    ] as const;
+    const { rerender } = render(<Strip frames={frames} nearLimit={0.9} initial={0} onOpen={onOpen} />);
+    expect(screen.getByRole('option', { name: 'F1, over, 1.10, queried' }).querySelector('[data-mark="queried"]')).not.toBeNull();
+    expect(screen.getByRole('option', { name: 'F2, within, 0.50' }).querySelector('[data-mark]')).toBeNull();
+    expect(screen.getByTestId('strip-readout')).toHaveTextContent('queried');
+    rerender(<Strip frames={frames} nearLimit={0.9} initial={1} onOpen={onOpen} />);
+    expect(screen.getByTestId('strip-readout')).toHaveTextContent('F2');
+    screen.getByRole('listbox').focus();
+    await userEvent.keyboard('{Enter}');
+    expect(onOpen).toHaveBeenCalledWith(1);
   });
 });
 

@@ -18,8 +18,10 @@ interface StripProps {
   readonly hrefPattern?: string | null;
   readonly title?: ReactNode;
   readonly note?: ReactNode;
-  /** Index of the frame that is read first; default the worst. */
+  /** Index of the frame that is read first, and again where another is given; default the worst. */
   readonly initial?: number;
+  /** A press or Enter on a cell, in place of following its address. */
+  readonly onOpen?: (index: number) => void;
   readonly onRead?: (index: number) => void;
   /** Legend counts filter; off in print-like uses. */
   readonly filters?: boolean;
@@ -32,10 +34,15 @@ const virtualAbove = 1000;
  * The batch at a glance: one cell a frame in sheet order, filled to its governing ratio against a line at 1.00 and
  * shaped by its verdict, tallied at each row's end. One tab stop; arrows, Home, End read; Enter or a press opens.
  */
-export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, onRead, filters = true }: StripProps) {
+export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, onRead, onOpen, filters = true }: StripProps) {
   const id = useId();
   const [box, width] = useWidth<HTMLDivElement>(884);
   const [read, setRead] = useState(() => initial ?? worst(frames));
+  const [begun, setBegun] = useState(initial);
+  if (initial !== begun) {
+    setBegun(initial);
+    if (initial !== undefined) setRead(initial);
+  }
   const [only, setOnly] = useState<Verdict | null>(null);
   const link = useRef<HTMLAnchorElement>(null);
   const scroller = useRef<HTMLDivElement>(null);
@@ -68,6 +75,7 @@ export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, on
     for (let i = from; i >= 0 && i < frames.length; i += step) if (fits(i)) return i;
     return read;
   };
+  const open = () => (onOpen ? onOpen(read) : link.current?.click());
   const onKeyDown = (event: KeyboardEvent) => {
     const { columns } = layout;
     const rowStart = read - (read % columns);
@@ -85,7 +93,7 @@ export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, on
     };
     const move = to[event.key];
     if (move) go(move());
-    else if (event.key === 'Enter') link.current?.click();
+    else if (event.key === 'Enter') open();
     else return;
     event.preventDefault();
   };
@@ -151,7 +159,7 @@ export function Strip({ frames, nearLimit, hrefPattern, title, note, initial, on
             if (index !== null) go(index);
           }}
           onClick={() => {
-            if (pressed.current === read) link.current?.click();
+            if (pressed.current === read) open();
             pressed.current = null;
           }}
         >

@@ -102,11 +102,10 @@ export function CheckingDesk({ batch, letter, nearLimit, first, strip, asked }: 
         <div className="min-w-0">
           <Zone>
             <Strip
-              key={at < 0 ? 'none' : rows[at]!.number}
               frames={marked}
               nearLimit={nearLimit}
-              hrefPattern={`${pages.checking(batch, letter)}?frame={n}`}
               initial={chosen === null ? undefined : chosen - 1}
+              onOpen={(index) => go(index + 1)}
               title="Marks on the strip"
               note={
                 <>
