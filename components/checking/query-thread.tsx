@@ -50,7 +50,7 @@ export function QueryThread({ thread, earlier = false, onSay }: QueryThreadProps
           <p className="ck-said">
             {i === 0 && <CheckMark kind="queried" />} <b>{message.by}</b>{' '}
             <span>
-              {i === 0 ? 'queried' : 'answered'}
+              {i === 0 ? 'queried' : message.by === thread.raisedBy ? 'added' : 'answered'}
               {i === 0 && earlier && ` revision ${thread.revision}`}
               {i === 0 && about !== '' && ` ${about}`}, {message.when}
             </span>
