@@ -1,4 +1,10 @@
-/** Who may do what: one table. Pages, route handlers and navigation all ask here, and nowhere else. */
+/**
+ * Who may do what: one table. Pages, route handlers and navigation all ask here, and nowhere else.
+ *
+ * Lead, analysts and checkers reach every project of their office. A client reaches what was issued to projects that
+ * they are assigned to, and nothing else: the queries of issues take the person besides the office. What a script's
+ * token may do of it: token-scopes.ts. Every address by role, office and project: tests/integration/web/access.test.ts.
+ */
 export const personRoles = ['lead', 'analyst', 'checker', 'client'] as const;
 export type PersonRole = (typeof personRoles)[number];
 

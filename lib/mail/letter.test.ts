@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { choosable, mailKinds } from './kinds';
+import { choosable, type mailKinds } from './kinds';
 import { writeLetter } from './letter';
 import { sampleMessages } from './sample-messages';
 

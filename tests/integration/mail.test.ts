@@ -7,8 +7,8 @@ import { newDatabase } from '@/db/testing/database';
 import { office } from '@/db/testing/sample';
 import { mostAttempts } from '@/lib/mail/back-off';
 import type { MailMessage } from '@/lib/mail/message';
-import { down, fakeMailService, type FakeMailService } from '@/tests/fakes/mail-service';
-import { MailPump } from './pump';
+import { down, fakeMailService, type FakeMailService } from '../fakes/mail-service';
+import { MailPump } from '@/worker/mail/pump';
 
 const secret = 'of the server, for tests only';
 const passed: MailMessage = {
