@@ -4,7 +4,7 @@ import { instant } from '@/db/clock';
 import type { Db } from '@/db/open';
 import { linkSecret, secretHash } from '@/lib/access/link-secret';
 
-export const linkLife_ms = { invitation: 7 * 86_400_000, 'password reset': 3_600_000 } as const;
+const linkLife_ms = { invitation: 7 * 86_400_000, 'password reset': 3_600_000 } as const;
 
 type LinkOf = { readonly invitation: number } | { readonly person: number };
 
