@@ -1,4 +1,4 @@
-import { unitLabel } from '@/lib/units/batch-unit';
+import { fromSI, unitLabel } from '@/lib/units/batch-unit';
 import { formatQuantity, formatRatio } from '@/lib/units/format';
 import type { System } from '@/lib/units/quantity';
 import type { WorkingFormat } from './working-parts';
@@ -7,7 +7,10 @@ import type { WorkingFormat } from './working-parts';
 export function workingFormat(system: System, nearLimit: number): WorkingFormat {
   return {
     quantity: (si, quantity) => ({
-      text: formatQuantity(si, quantity, system, { significant: 4 }),
+      // what cancelling left over of a force or a stress is none
+      text: formatQuantity(quantity !== 'number' && Math.abs(fromSI(si, quantity, system)) < 1e-9 ? 0 : si, quantity, system, {
+        significant: 4,
+      }),
       unit: quantity === 'number' ? '' : unitLabel(quantity, system),
     }),
     ratio: (ratio) => formatRatio(ratio, nearLimit),

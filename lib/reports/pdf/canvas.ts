@@ -16,7 +16,7 @@ export interface TextStyle {
   readonly anchor?: 'start' | 'middle' | 'end';
   /** Clockwise as seen, degrees. */
   readonly turn?: number;
-  /** Width of a halo of the sheet behind the text. */
+  /** The sheet is laid bare behind the text, so far around it. */
   readonly halo?: number;
 }
 
@@ -101,7 +101,11 @@ export class Canvas {
     const at = `${fine(c)} ${fine(s)} ${fine(s)} ${fine(-c)} ${num(x - back * c)} ${num(y - back * s)} Tm`;
     const shown = face.show(text);
     const font = `/${face.font.id} ${fine(size)} Tf`;
-    if (halo > 0) this.op(`q ${rgb('white')} RG ${num(halo)} w 1 j BT ${font} 1 Tr ${at} ${shown} ET Q`);
+    if (halo > 0) {
+      const [width, high] = [face.width(text, size) + 2 * halo, size * 0.74 + 2 * halo];
+      const corner = `${fine(c)} ${fine(s)} ${fine(-s)} ${fine(c)} ${num(x - back * c)} ${num(y - back * s)} cm`;
+      this.op(`q ${corner} ${rgb('white')} rg ${num(-halo)} ${num(halo - high)} ${num(width)} ${num(high)} re f Q`);
+    }
     this.op(`BT ${rgb(colour)} rg ${font} 0 Tr ${at} ${shown} ET`);
   }
 

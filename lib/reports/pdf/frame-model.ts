@@ -58,16 +58,20 @@ function remarks(frame: Frame, index: number, units: System): string {
   const { span, axialOnly, tensionOnly, lengthMajor_m, lengthMinor_m, lengthLtbTop_m, lengthLtbBottom_m } = frame.members[index]!;
   const given = (name: string, value: number | null): string | null =>
     value === null ? null : `${name} ${lengthText(value, units)}`;
-  return [
-    span === null ? null : `span ${span}`,
-    tensionOnly ? 'tension only' : axialOnly ? 'axial only' : null,
-    given('L major', lengthMajor_m),
-    given('L minor', lengthMinor_m),
-    given('top held each', lengthLtbTop_m),
-    given('bottom held each', lengthLtbBottom_m),
-  ]
-    .filter((one) => one !== null)
-    .join(', ');
+  return (
+    [
+      span === null ? null : `span ${span}`,
+      tensionOnly ? 'tension only' : axialOnly ? 'axial only' : null,
+      given('L major', lengthMajor_m),
+      given('L minor', lengthMinor_m),
+      given('top held each', lengthLtbTop_m),
+      given('bottom held each', lengthLtbBottom_m),
+    ]
+      .filter((one) => one !== null)
+      .join(', ')
+      // a length and its unit stay in one line
+      .replace(/(\d) (?=m|ft)/g, '$1\u00a0')
+  );
 }
 
 export function nodesTable(flow: Flow, frame: Frame, units: System): void {

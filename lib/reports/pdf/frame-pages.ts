@@ -37,7 +37,10 @@ export interface FrameAsked {
 export function framePages(flow: Flow, asked: FrameAsked): void {
   const { source, each, line, under } = asked;
   const { nearLimit } = source.settings;
-  const words = line.ratio === null ? line.verdict : `${line.verdict} ${formatRatio(line.ratio, nearLimit)}`;
+  const words =
+    line.ratio === null || line.verdict === 'not checked'
+      ? line.verdict
+      : `${line.verdict} ${formatRatio(line.ratio, nearLimit)}`;
   flow.part({ title: line.id, note: line.title, frame: line.id, verdict: { verdict: line.verdict, words } });
   flow.bookmark(line.id, under);
   facts(flow, asked);
@@ -52,7 +55,7 @@ export function framePages(flow: Flow, asked: FrameAsked): void {
   const data = drawingData({ frame, evaluation: solved, members: results.members, units: source.settings.units, nearLimit, chosen: strength?.name ?? null }); // prettier-ignore
   flow.heading('Model', 'geometry, supports, sections');
   const note = [dimensionNote(frame), 'dimensions between supports and levels; coordinates below'].join(' ');
-  viewRow(flow, [{ title: 'Geometry', note, draw: geometryView(data) }], viewHeight(data, flow.width, 150, 250));
+  viewRow(flow, [{ title: 'Geometry', note, draw: geometryView(data) }], viewHeight(data, flow.width, 120, 250));
   membersTable(flow, frame, data);
   nodesTable(flow, frame, data.units);
   loadsPart(flow, frame, data);
@@ -93,7 +96,7 @@ function facts(flow: Flow, { source, each, line, of, acceptances, shared }: Fram
   const { evaluation, group, count, note } = each;
   const { units } = source.settings;
   const mass = evaluation?.mass ?? null;
-  const told = [
+  const words = [
     `frame ${line.number} of ${of}`,
     group === null ? null : `group ${group}`,
     `${count} off`,
@@ -102,9 +105,9 @@ function facts(flow: Flow, { source, each, line, of, acceptances, shared }: Fram
       ? null
       : `governed by ${line.check}${line.place === null ? '' : `, ${line.place}`}${line.combination === null ? '' : `, ${line.combination}`}`,
   ].filter((one) => one !== null);
-  flow.paragraph(`${told.join(' · ')}.`, { colour: 'ink2', size: 8.8 });
+  flow.paragraph(`${words.join(' · ')}.`, { colour: 'ink2', size: 8.8 });
   if (note !== null && note !== '') flow.paragraph(`Note: ${note}`, { size: 8.8 });
-  if (line.unsolved !== null) flow.paragraph(`Not solved: ${line.unsolved}. Nothing of it is checked, and it is not issued.`, { face: 'sansBold', colour: 'red' });
+  if (line.unsolved !== null) flow.paragraph(`Not solved: ${line.unsolved.replace(/\.$/, '')}. Nothing of it is checked, and it is not issued.`, { face: 'sansBold', colour: 'red' });
   else if (line.verdict === 'over') flow.paragraph('Over: not to be built from, unless each check that is over is accepted below with its reason.', { face: 'sansBold', colour: 'red', size: 8.8 }); // prettier-ignore
   const reasons = line.unsolved === null ? (evaluation?.notChecked ?? []) : [];
   for (const reason of reasons) flow.paragraph(`Not checked: ${reason}`, { size: 8.8 });
@@ -120,9 +123,8 @@ function diagrams(flow: Flow, frame: Frame, data: DrawingData, strength: ResultS
   if (result === null || strength === null) return;
   const moving = data.movement ?? result;
   const method = resultMethodWords({ members: frame.members, noCasesAlone: data.noCasesAlone }, result).join('; ');
-  const terms = describeState(frame, strength);
-  flow.heading('Internal forces', `${result.name}: ${terms}; ${method}`);
-  const tall = viewHeight(data, flow.width, 150, 250);
+  flow.heading('Internal forces', `${told(result.name, describeState(frame, strength))}; ${method}`);
+  const tall = viewHeight(data, flow.width, 120, 250);
   const low = viewHeight(data, flow.width / 2, 96, 150);
   const force = unitLabel('force', data.units);
   viewRow(flow, [{ title: 'Bending moment', note: `${result.name}, ${unitLabel('moment', data.units)}, drawn on the tension side; extremes dotted`, draw: diagramView(data, result, 'M', true) }], tall); // prettier-ignore
@@ -134,7 +136,7 @@ function diagrams(flow: Flow, frame: Frame, data: DrawingData, strength: ResultS
     ],
     low,
   );
-  const moved = moving.description === null ? moving.name : `${moving.name}, ${moving.description}`;
+  const moved = told(moving.name, moving.description);
   viewRow(
     flow,
     [
@@ -146,4 +148,10 @@ function diagrams(flow: Flow, frame: Frame, data: DrawingData, strength: ResultS
 }
 
 const dimensionNote = ({ nodes, members, supports }: Frame): string =>
-  `${members.length} members, ${nodes.length} nodes, ${supports.length} ${supports.length === 1 ? 'support' : 'supports'};`;
+  `${counted(members.length, 'member')}, ${counted(nodes.length, 'node')}, ${counted(supports.length, 'support')};`;
+
+const counted = (count: number, what: string): string => `${count} ${what}${count === 1 ? '' : 's'}`;
+
+/** A result with its loads, unless its name says them already. */
+const told = (name: string, terms: string | null): string =>
+  terms === null || name.startsWith(terms) ? name : `${name}, ${terms}`;

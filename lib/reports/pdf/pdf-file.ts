@@ -40,6 +40,7 @@ interface Inner {
     readonly fonts: Record<string, object>;
     readonly xobjects: Record<string, object>;
   };
+  endMetadata: () => void;
   ref(data: Record<string, unknown>): Reference;
   annotate(x: number, y: number, width: number, height: number, options: Record<string, unknown>): void;
 }
@@ -90,8 +91,11 @@ export class PdfFile {
       },
     });
     this.inner = this.doc as unknown as Inner;
-    // the library would put today's
-    if (made === null) delete this.inner.info['CreationDate'];
+    // the library wants one, and would put today's
+    if (made === null) {
+      delete this.inner.info['CreationDate'];
+      this.inner.endMetadata = () => undefined;
+    }
     const open = (name: FaceName): Face => {
       this.doc.registerFont(name, Buffer.from(fonts[name]));
       this.doc.font(name);
@@ -161,7 +165,8 @@ export class PdfFile {
   async end(totalStyle: TextStyle): Promise<void> {
     this.finish();
     const canvas = new Canvas();
-    canvas.text(String(this.pages), 0, 0, totalStyle);
+    // its space before it, that text taken out of the file has it too
+    canvas.text(` ${this.pages}`, 0, 0, totalStyle);
     const { id } = totalStyle.face.font;
     this.total.data['Resources'] = { Font: { [id]: totalStyle.face.font.ref() } };
     this.total.write(canvas.content());

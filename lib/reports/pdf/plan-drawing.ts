@@ -123,6 +123,6 @@ function centred(
     colour,
     anchor: 'middle',
     turn,
-    halo: 3,
+    halo: 1.2,
   });
 }

@@ -1,5 +1,5 @@
 /** One sheet of the report: border, head, title block at the foot, and the words under it. */
-import type { Ink } from './ink';
+import { verdictInk, type Ink } from './ink';
 import type { Canvas } from './canvas';
 import type { PdfFile } from './pdf-file';
 import { tallyMark } from './tally-mark';
@@ -61,20 +61,23 @@ export function drawSheet(file: PdfFile, canvas: Canvas, zones: Zones, facts: Bl
   const { sansBold, sans } = file.faces;
   const width = border.right - border.x;
   const under = border.y + headHeight;
-  let right = border.right - pad;
-  if (head.verdict) {
-    const { verdict, words } = head.verdict;
-    const colour = verdict === 'over' ? 'red' : verdict === 'near' ? 'amber' : 'ink';
-    canvas.text(words, right, under - 8, { face: sansBold, size: 11, colour, anchor: 'end' });
-    right -= sansBold.width(words, 11) + 13;
-    verdictMark(canvas, verdict, right, under - 8, 9);
-    right -= 8;
-  }
+  const end = border.right - pad;
+  const verdictWidth = head.verdict ? sansBold.width(head.verdict.words, 11) : 0;
+  const right = head.verdict ? end - verdictWidth - 21 : end;
   const title = cut(head.title, sansBold, 12, right - border.x - pad);
   canvas.text(title, border.x + pad, under - 8, { face: sansBold, size: 12 });
   const after = border.x + pad + sansBold.width(title, 12) + 7;
   if (head.note && right - after > 20)
     canvas.text(cut(head.note, sans, 9.5, right - after), after, under - 8, { face: sans, size: 9.5, colour: 'ink2' });
+  if (head.verdict) {
+    const { verdict, words } = head.verdict;
+    verdictMark(canvas, verdict, end - verdictWidth - 13, under - 8, 9);
+    canvas.text(words, end - verdictWidth, under - 8, {
+      face: sansBold,
+      size: 11,
+      colour: verdict === 'not checked' ? 'ink' : verdictInk[verdict],
+    });
+  }
   canvas.line(border.x, under, border.right, under, { width: 0.75 });
   titleBlock(file, canvas, zones, facts, head, number);
   canvas.rect(border.x, border.y, width, border.bottom - border.y, { pen: { width: 1.2 } });
@@ -108,7 +111,7 @@ function titleBlock(file: PdfFile, canvas: Canvas, { border }: Zones, facts: Blo
       canvas.shape(`${x + 5} ${baseline + 2} m ${x + 21} ${baseline + 2} l ${x + 13} ${baseline - 12} l h`, { fill: 'ink' });
       canvas.text(value ?? '', x + 13, baseline, { face: condensedMedium, size: 8, colour: 'white', anchor: 'middle' });
     } else if (kind === 'number') {
-      const text = `${value ?? ''} of `;
+      const text = `${value ?? ''} of`;
       canvas.text(text, x + 5, baseline, { face: condensedMedium, size: 9 });
       file.drawTotal(canvas, x + 5 + condensedMedium.width(text, 9), baseline);
     } else if (value === null) canvas.text('not yet', x + 5, baseline, { face: condensed, size: 8.5, colour: 'ink3' });

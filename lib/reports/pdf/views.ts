@@ -106,7 +106,7 @@ export const diagramView =
       strokePath(canvas, `M${x} ${y}V${y - plan.bar.length}M${x - 4} ${y}H${x + 4}M${x - 4} ${y - plan.bar.length}H${x + 4}`, {
         width: 1.3,
       });
-      canvas.text(plan.bar.text, x + 8, y + 17, { face: faces.condensed, size: 12, colour: 'ink2', anchor: 'end', halo: 3 });
+      canvas.text(plan.bar.text, x + 8, y + 17, { face: faces.condensed, size: 12, colour: 'ink2', anchor: 'end', halo: 1.2 });
     }
     if (!plan.bar) said(canvas, `${force} is zero everywhere`, width, faces);
   };
@@ -124,7 +124,7 @@ export const deflectedView =
     drawDimensions(canvas, plan.scene, faces);
     drawLabels(canvas, plan.labels, faces);
     const words = plan.times === null ? 'nothing moves' : `movements × ${Number(plan.times.toPrecision(3))}`;
-    canvas.text(words, width - 8, height - 7, { face: faces.condensed, size: 11.5, colour: 'ink2', anchor: 'end', halo: 3 });
+    canvas.text(words, width - 8, height - 7, { face: faces.condensed, size: 11.5, colour: 'ink2', anchor: 'end', halo: 1.2 });
   };
 
 export const ratioView =
@@ -145,5 +145,5 @@ export const ratioView =
   };
 
 function said(canvas: Canvas, words: string, width: number, faces: Faces): void {
-  canvas.text(words, width / 2, 16, { face: faces.condensed, size: 12, colour: 'ink2', anchor: 'middle', halo: 3 });
+  canvas.text(words, width / 2, 16, { face: faces.condensed, size: 12, colour: 'ink2', anchor: 'middle', halo: 1.2 });
 }
