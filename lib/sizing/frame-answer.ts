@@ -13,6 +13,8 @@ export function frameAnswer(evaluation: FrameEvaluation): FrameAnswer {
     const of = open ? [open.check, open.subject, open.reason].filter((word) => word !== null).join(', ') : null;
     return { outcome: 'not checked', ratio, governs: of ?? notChecked[0] ?? 'nothing to check' };
   }
-  const governs = [governing?.check, governing?.subject, governing?.combination].filter((word) => word != null).join(', ');
+  const governs = [governing?.check, governing?.subject, governing?.combination]
+    .filter((word) => word !== null && word !== undefined)
+    .join(', ');
   return { outcome: verdict === 'over' ? 'over' : 'fits', ratio, governs };
 }

@@ -22,6 +22,7 @@ import { MadeFrom } from '../../_head/made-from';
 import { titleOf } from '../../_head/revision-head';
 import type { View } from '@/lib/tables/view';
 import { FrameSheet } from './frame-sheet';
+import { TryLine } from './try-line';
 
 export const metadata: Metadata = { title: 'Frame' };
 
@@ -78,6 +79,7 @@ export default async function FramePage({ params, searchParams }: FramePageProps
       <h1 className="sr-only">
         Frame {detail.id}, {detail.verdict}
       </h1>
+      {detail.drawing && <TryLine action={pages.tryOn(batch, letter, detail.number)} members={detail.drawing.members} />}
       <FrameSheet
         batch={batch}
         letter={letter}

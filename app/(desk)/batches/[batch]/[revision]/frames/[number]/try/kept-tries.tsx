@@ -47,7 +47,9 @@ export function KeptTries({ kept, shown, units, nearLimit, onTake }: KeptTriesPr
           {kept.map(({ tried, told }, i) => {
             const { mass_kg, governing, verdict, failure } = told;
             const change = stored === null || mass_kg === null || stored === 0 ? null : 100 * (mass_kg / stored - 1);
-            const governs = [governing?.check, governing?.subject, governing?.combination].filter((word) => word != null);
+            const governs = [governing?.check, governing?.subject, governing?.combination].filter(
+              (word) => word !== null && word !== undefined,
+            );
             return (
               <tr key={i} className={tried === shown ? 'tbl-selected' : undefined}>
                 <th scope="row">

@@ -27,6 +27,7 @@ interface TryPageProps {
 /** Other sections tried on one frame: ratios, checks and drawing change at once, and nothing is stored. */
 export default async function TryPage({ params, searchParams }: TryPageProps) {
   const { number: asked } = await params;
+  const search = toParams(await searchParams);
   const { person, revision } = await pageRevision(params, `frames/${asked}/try`);
   const number = frameNumberInput.safeParse(asked);
   const found = await pageThing(
@@ -79,7 +80,8 @@ export default async function TryPage({ params, searchParams }: TryPageProps) {
           units={settings.units}
           nearLimit={nearLimit}
           mayChange={may(person, 'change a revision')}
-          first={toParams(await searchParams).get('of')}
+          first={search.get('of')}
+          to={search.get('to')}
         />
       )}
       <Cautions />

@@ -1,6 +1,6 @@
 'use client';
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
-import { useEffect, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { SectionOffers, type SectionOffered } from '@/components/sections/section-offers';
 import { Working } from '@/components/working/working';
@@ -15,7 +15,7 @@ import { isClause } from '@/lib/checks/design-code/clause-name';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { SectionTaken } from '@/lib/sizing/section-taken';
-import type { TriedSection, TryTold } from '@/lib/sizing/try-sections';
+import type { TriedSection, TryOf, TryTold } from '@/lib/sizing/try-sections';
 import type { System } from '@/lib/units/quantity';
 import { ChecksTable } from '../checks-table';
 import { KeptTries, type Kept } from './kept-tries';
@@ -33,6 +33,8 @@ interface TrySheetProps {
   readonly mayChange: boolean;
   /** "member AB": what the address asks to begin with. */
   readonly first: string | null;
+  /** The section that it asks to begin with. */
+  readonly to: string | null;
 }
 
 interface Model {
@@ -61,10 +63,10 @@ export function TrySheet(props: TrySheetProps) {
 
 const nothing: readonly TriedSection[] = [];
 
-function Trying({ batch, letter, next, units, nearLimit, mayChange, first, frame, settings }: TrySheetProps & Model) {
+function Trying({ batch, letter, next, units, nearLimit, mayChange, first, to, frame, settings }: TrySheetProps & Model) {
   const { options, of } = tryOptions(frame);
   const [chosen, setChosen] = useState(() => (first !== null && of.has(first) ? first : (options[0]?.value ?? '')));
-  const [typed, setTyped] = useState('');
+  const [typed, setTyped] = useState(to ?? '');
   const [tried, setTried] = useState(nothing);
   const [show, setShow] = useState<string | null>(null);
   const [kept, setKept] = useState<readonly Kept[]>([]);
@@ -72,6 +74,7 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, frame
   const [refused, setRefused] = useState<string | null>(null);
   const [open, setOpen] = useState<string | null>('0');
   const { busy, ask } = useEngine();
+  const takes = useRef(0);
   const search = typed.trim();
   const library = useQuery({
     queryKey: ['sections', search],
@@ -92,17 +95,29 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, frame
     });
   }, [ask, frame, settings, tried, show]);
 
-  const take = async (name: string) => {
-    const target = of.get(chosen);
-    if (!target) return;
-    try {
-      const materials = [...new Set(frame.materials.map((material) => material.name))];
-      const { taken } = await request<{ taken: SectionTaken }>(api.section(batch, letter, name, materials));
-      setTried((before) => [...before.filter((one) => wordsOf(one.of) !== chosen), { of: target, taken }]);
-    } catch (error) {
-      setRefused(error instanceof Error ? error.message : 'The section was not brought. Try again.');
-    }
-  };
+  const take = useCallback(
+    async (name: string, target: TryOf | undefined) => {
+      if (!target) return;
+      const turn = (takes.current += 1);
+      try {
+        const materials = [...new Set(frame.materials.map((material) => material.name))];
+        const { taken } = await request<{ taken: SectionTaken }>(api.section(batch, letter, name, materials));
+        // of two that were pressed the later one holds, whichever is brought first
+        if (turn !== takes.current) return;
+        setTried((before) => [...before.filter((one) => wordsOf(one.of) !== wordsOf(target)), { of: target, taken }]);
+      } catch (error) {
+        if (turn === takes.current)
+          setRefused(error instanceof Error ? error.message : 'The section was not brought. Try again.');
+      }
+    },
+    [batch, letter, frame],
+  );
+  const asked = useRef(to);
+  useEffect(() => {
+    const name = asked.current;
+    asked.current = null;
+    if (name !== null && name.trim() !== '') void take(name, tryOptions(frame).of.get(chosen));
+  }, [take, frame, chosen]);
   const told = shown?.told ?? null;
   const check = told?.checks.find((one) => one.id === open);
   const taken = tried.find((one) => wordsOf(one.of) === chosen)?.taken.section.name ?? null;
@@ -118,7 +133,7 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, frame
           {tried.length > 0 && <Button onClick={() => setTried(nothing)}>Back to what is stored</Button>}
         </div>
         {search.length > 1 && library.data && (
-          <SectionOffers offered={library.data.sections} suggestion={library.data.suggestion} typed={search} chosen={taken} units={units} onChoose={(name) => void take(name)} />
+          <SectionOffers offered={library.data.sections} suggestion={library.data.suggestion} typed={search} chosen={taken} units={units} onChoose={(name) => void take(name, of.get(chosen))} />
         )}
         {refused && <Notice kind="error">{refused}</Notice>}
       </Zone>
