@@ -69,7 +69,7 @@ describe('an issue from desk to client', () => {
     await send(analyst, a, 'The east line first.');
     const checking = await pageOf('checker');
     await checking.goto(`${url}/batches/${a.batch}/A/checking`, { waitUntil: 'networkidle' });
-    await checking.getByLabel(/Note/).first().fill('The near limit of this client is 0.8.');
+    await checking.getByLabel(/^Note: needed to return it/).fill('The near limit of this client is 0.8.');
     await checking.getByRole('button', { name: /Return/ }).click();
     await stateBecomes(analyst, a, (state) => state === 'returned');
     await letterTo(emailOf('north', 'analyst'), 'returned', 'The near limit of this client');
