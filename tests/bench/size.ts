@@ -1,4 +1,4 @@
-/** size.240.run: two groups of 240 portals sized with some thirty candidates each, against one run of the batch, through the queue. */
+/** size.240.run: two groups of 240 portals sized with thirty candidates each on average, against one run of the batch, through the queue. */
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -51,7 +51,7 @@ export async function sizeAgainstRun(rounds: number): Promise<Record<string, num
       const run = await timed(() => askForRun(queue, database, of));
       let sizing: number | undefined;
       const groups = [
-        { by: 'role', name: 'rafter', range: 'IPE', minDepth_m: null, maxDepth_m: null },
+        { by: 'role', name: 'rafter', range: 'IPE', minDepth_m: 0.2, maxDepth_m: 0.55 },
         { by: 'role', name: 'column', range: 'HE B', minDepth_m: null, maxDepth_m: null },
       ] as const;
       const size = await timed(async () => (sizing = await askForSizing(queue, database, { ...of, request: { groups } })));
@@ -61,8 +61,9 @@ export async function sizeAgainstRun(rounds: number): Promise<Record<string, num
       told.push(
         `run ${run.toFixed(0)} ms, size ${size.toFixed(0)} ms: ${candidates.join(' + ')} candidates, ${found.done} frames × candidates, ${found.found?.words}`,
       );
-      // 30 candidates a group are asked for: a range that holds more or fewer is counted by its candidates
-      ratios.push((size / run) * (60 / candidates.reduce((sum, n) => sum + n, 0)));
+      if (candidates.reduce((sum, n) => sum + n, 0) !== 60)
+        throw new Error(`Expected 60 candidates, got ${candidates.join(' and ')}`);
+      ratios.push(size / run);
       await queue.close();
       await database.close();
     }
