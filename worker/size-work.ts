@@ -12,7 +12,7 @@ import type { QueueOptions } from './queue';
 import type { ListSizingTask, SizeTask, SizingListed } from './threads/size';
 
 /** Frames handed to a thread at once. */
-export const sizeChunkSize = 40;
+const sizeChunkSize = 40;
 const lease_ms = 10 * 60_000;
 
 export interface SizeChunk {

@@ -13,7 +13,7 @@ export interface Wanted {
 }
 
 /** Masses closer than this are equal; so are ratios. */
-export const same = 1e-9;
+const same = 1e-9;
 
 /** Frames asked before the next look: a candidate that fails does so in the frames that failed before. */
 const firstStep = 2;

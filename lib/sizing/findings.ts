@@ -81,8 +81,9 @@ function groupFound(
       frames: count(places),
       unfit: candidate.unfit,
     };
+    const withIt = choice.with(g, c);
     const answers = places.flatMap((f) => {
-      const answer = candidate.taken ? known.get(choice.with(g, c), f) : null;
+      const answer = candidate.taken ? known.get(withIt, f) : null;
       return answer ? [{ f, answer }] : [];
     });
     const of = (outcome: FrameAnswer['outcome']): number =>
@@ -138,11 +139,12 @@ function stubbornOf(
   places: readonly number[],
 ): Stubborn[] {
   const found: Stubborn[] = [];
+  const choices = candidates.map((_, c) => choice.with(g, c));
   for (const f of places) {
     let nearest: { readonly answer: FrameAnswer; readonly candidate: string } | null = null;
     let fits = false;
     for (const [c, candidate] of candidates.entries()) {
-      const answer = candidate.taken ? known.get(choice.with(g, c), f) : null;
+      const answer = candidate.taken ? known.get(choices[c] ?? choice, f) : null;
       if (!answer) continue;
       if (answer.outcome === 'fits') fits = true;
       if (nearest === null || graver(nearest.answer, answer)) nearest = { answer, candidate: candidate.name };

@@ -22,13 +22,15 @@ export class KnownAnswers {
   private readonly columns = new Map<string, Column>();
   private readonly words: string[] = [];
   private readonly places = new Map<string, number>();
+  /** By choice and mask: answers are asked for by the million. */
+  private readonly keys = new WeakMap<Choice, string[]>();
 
   /** @param masks by frame: bit g is set where it has members of group g */
   constructor(private readonly masks: Uint8Array) {}
 
   /** What a frame says of a choice; null = it was not asked yet. */
   get(choice: Choice, frame: number): FrameAnswer | null {
-    const column = this.columns.get(keyOf(choice, this.maskOf(frame)));
+    const column = this.columns.get(this.keyOf(choice, frame));
     const outcome = column?.outcome[frame] ?? unknown;
     if (!column || outcome === unknown) return null;
     const ratio = column.ratio[frame] ?? NaN;
@@ -40,7 +42,7 @@ export class KnownAnswers {
   }
 
   put(choice: Choice, frame: number, { outcome, ratio, governs }: FrameAnswer): void {
-    const key = keyOf(choice, this.maskOf(frame));
+    const key = this.keyOf(choice, frame);
     let column = this.columns.get(key);
     if (!column) {
       const frames = this.masks.length;
@@ -58,15 +60,11 @@ export class KnownAnswers {
     column.governs[frame] = place;
   }
 
-  private maskOf(frame: number): number {
+  private keyOf(choice: Choice, frame: number): string {
     const mask = this.masks[frame];
     if (mask === undefined) throw new RangeError(`Expected a frame below ${this.masks.length}, got ${frame}`);
-    return mask;
+    let keys = this.keys.get(choice);
+    if (!keys) this.keys.set(choice, (keys = []));
+    return (keys[mask] ??= choice.map((c, g) => (mask & (1 << g) ? c : '')).join());
   }
-}
-
-function keyOf(choice: Choice, mask: number): string {
-  let key = '';
-  for (let g = 0; g < choice.length; g++) key += mask & (1 << g) ? `${choice[g]},` : ',';
-  return key;
 }
