@@ -11,9 +11,9 @@ import type { IssuedCounts } from '@/lib/issuing/issue-sentence';
 import { idKey } from '@/lib/intake/ids';
 import type { Acceptance } from '@/lib/reports/issue-cover';
 import type { FramePair } from '@/lib/results/compare';
-import type { InputGroup } from '@/lib/results/compare-inputs';
+import type { InputGroup, SettingDifference } from '@/lib/results/compare-inputs';
 import type { Verdict } from '@/lib/results/result';
-import { comparedPage } from './compared';
+import { comparedPage, settingsThatDiffer } from './compared';
 
 /** A frame that was issued: what was stored of it, never computed again. */
 export type IssuedCell = SummaryCell & { readonly verdict: Verdict };
@@ -92,6 +92,7 @@ export interface ChangedSince {
   readonly moved: readonly FramePair[];
   readonly matching: number;
   readonly inputs: readonly InputGroup[];
+  readonly settings: readonly SettingDifference[];
 }
 
 /** Frames that a page of changes names one by one. */
@@ -109,12 +110,14 @@ export async function changedSince(person: Person, issue: IssueRecord): Promise<
   ];
   if (!before || !after) return null;
   const asked = { list: 'frames', show: 'moved', by: 0.005, page: 1, size: mostMoved } as const;
-  const { totals, inputs, page, matching } = await comparedPage({ before, after, all: [before, after] }, asked, false);
+  const two = { before, after, all: [before, after] };
+  const { totals, inputs, page, matching } = await comparedPage(two, asked, false);
   return {
     issue: { id: earlier.id, number: earlier.number, at: earlier.issuedAt, state: earlier.state },
     frames: totals.frames,
     moved: page.list === 'frames' ? page.rows : [],
     matching,
     inputs: inputs.first,
+    settings: settingsThatDiffer(two),
   };
 }

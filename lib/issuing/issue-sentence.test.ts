@@ -15,7 +15,7 @@ describe('the sentence of an issue', () => {
     expect(issueSentence({ ...none, over: 2, within: 10 })).toBe('12 frames: 2 over, 10 within.');
     expect(issueSentence({ ...none, notChecked: 1 })).toBe('1 frame: 1 not checked.');
     expect(issueSentence({ over: 1, notChecked: 2, near: 3, within: 4, notIssued: 0 })).toBe(
-      '10 frames: 1 over and 2 not checked, 7 within.',
+      '10 frames: 1 over and 2 not checked, 7 within (3 near).',
     );
   });
 

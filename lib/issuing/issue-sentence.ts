@@ -10,7 +10,7 @@ export interface IssuedCounts {
 }
 
 /**
- * "79 frames, all within their limits; 6 of them near." A frame that is near is within its limits; one that is over or not
+ * "79 frames, all within their limits; 6 of them near."; "12 frames: 2 over, 10 within (3 near)." A frame that is near is within its limits; one that is over or not
  * checked never is, whoever accepted it.
  */
 export function issueSentence({ over, notChecked, near, within, notIssued }: IssuedCounts): string {
@@ -24,7 +24,9 @@ export function issueSentence({ over, notChecked, near, within, notIssued }: Iss
   } else {
     const bad = [over > 0 && `${number(over)} over`, notChecked > 0 && `${number(notChecked)} not checked`].filter(Boolean);
     const good = near + within;
-    pieces.push(`${count(frames, 'frame')}: ${bad.join(' and ')}${good > 0 ? `, ${number(good)} within` : ''}`);
+    pieces.push(
+      `${count(frames, 'frame')}: ${bad.join(' and ')}${good > 0 ? `, ${number(good)} within${near > 0 ? ` (${number(near)} near)` : ''}` : ''}`,
+    );
   }
   if (notIssued > 0) pieces.push(`${count(notIssued, 'frame')} of the sheets ${notIssued === 1 ? 'is' : 'are'} not issued`);
   return `${pieces.join('. ')}.`;

@@ -7,15 +7,21 @@ const count = (n: number, noun: string): string => `${n.toLocaleString('en-GB')}
 
 /** What changed since the issue before: what of the sheets, then frame by frame, those that moved. */
 export function Changed({ changed, nearLimit }: { readonly changed: ChangedSince; readonly nearLimit: number }) {
-  const { frames, moved, matching, inputs } = changed;
+  const { frames, moved, matching, inputs, settings } = changed;
   return (
     <>
       <p className="issue-said">
-        {count(frames.carried, 'frame')} of {frames.after.toLocaleString('en-GB')} {frames.carried === 1 ? 'is' : 'are'} the same,
-        with the same results. {matching === 0 ? 'No ratio or verdict moved.' : `${count(matching, 'frame')} moved.`}
+        {matching === 0
+          ? `No verdict is another and no ratio moved in ${count(frames.after, 'frame')}.`
+          : `${count(matching, 'frame')} moved to another verdict or ratio, came or went. All others stand as they did.`}
       </p>
-      {inputs.length > 0 && (
+      {inputs.length + settings.length > 0 && (
         <ul className="mb-2">
+          {settings.map(({ setting, before, after }) => (
+            <li key={setting}>
+              Setting, {setting}: <s>{before}</s> → <b>{after}</b>
+            </li>
+          ))}
           {inputs.map(({ sheet, what, before, after, cells, where }) => (
             <li key={`${sheet} ${what} ${before} ${after} ${where[0]}`}>
               {sheet}, {what ?? 'row'}: <s>{before ?? 'none'}</s> → <b>{after ?? 'none'}</b>{' '}

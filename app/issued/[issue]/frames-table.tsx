@@ -79,10 +79,9 @@ export function FramesTable({ rows, units, nearLimit, chosen, hrefOf, asked }: F
               </td>
               <td className="issue-wraps">
                 <VerdictMark verdict={row.verdict} word />
-                {row.accepted.map(({ check, subject, verdict, reason, by }) => (
-                  <div key={`${check} ${subject}`} className="text-ink2">
-                    {check} {verdict}
-                    {subject !== null && subject !== row.id && ` at ${subject}`}, accepted by {by.name}: {reason}
+                {acceptedLines(row).map((line) => (
+                  <div key={line} className="text-ink2">
+                    {line}
                   </div>
                 ))}
               </td>
@@ -92,6 +91,20 @@ export function FramesTable({ rows, units, nearLimit, chosen, hrefOf, asked }: F
         </tbody>
       </table>
     </div>
+  );
+}
+
+/** "stability at CA1, CB1: not checked, accepted by B. Checker: the reason", a line for each check and reason. */
+function acceptedLines({ id, accepted }: IssuedFrame): string[] {
+  const lines = new Map<string, { before: string; where: string[]; after: string }>();
+  for (const { check, subject, verdict, reason, by } of accepted) {
+    const after = `: ${verdict}, accepted by ${by.name}: ${reason}`;
+    const line = lines.get(check + after) ?? { before: check, where: [], after };
+    if (subject !== null && subject !== id) line.where.push(subject);
+    lines.set(check + after, line);
+  }
+  return [...lines.values()].map(
+    ({ before, where, after }) => `${before}${where.length > 0 ? ` at ${where.join(', ')}` : ''}${after}`,
   );
 }
 

@@ -73,6 +73,7 @@ export default async function IssuePage({ params }: { readonly params: Promise<{
             </Zone>
             <QuestionsZone issue={issue} />
             <Clients person={person} issue={issue} />
+            <Downloads issue={issue} />
           </>
         }
         side={
@@ -95,29 +96,32 @@ export default async function IssuePage({ params }: { readonly params: Promise<{
 
 async function Files({ issue }: { readonly issue: IssueRecord }) {
   const files = await listIssueFiles(db(), issue.office, issue.id);
+  return (
+    <Zone title="Files" note="as they were made; every download is recorded">
+      <IssueFiles
+        first={false}
+        files={files.map((file) => ({ ...file, about: fileAbout(file), href: api.issueFile(issue.id, file.kind) }))}
+      />
+    </Zone>
+  );
+}
+
+async function Downloads({ issue }: { readonly issue: IssueRecord }) {
   const downloads = await listDownloads(db(), issue.office, issue.id, { limit: 50 });
   return (
-    <>
-      <Zone title="Files" note="as they were made; every download is recorded">
-        <IssueFiles
-          first={false}
-          files={files.map((file) => ({ ...file, about: fileAbout(file), href: api.issueFile(issue.id, file.kind) }))}
-        />
-      </Zone>
-      <Zone title="Downloads" note={downloads.length === 50 ? 'the last 50' : undefined}>
-        {downloads.length === 0 ? (
-          <p>Nobody has taken a file yet.</p>
-        ) : (
-          <ul>
-            {downloads.map(({ name, role, file, at }, index) => (
-              <li key={index}>
-                {dayTime(at)} <b>{name}</b> <span className="text-ink2">{role}</span>, {fileWords[file].toLowerCase()}
-              </li>
-            ))}
-          </ul>
-        )}
-      </Zone>
-    </>
+    <Zone title="Downloads" note={downloads.length === 50 ? 'the last 50' : undefined}>
+      {downloads.length === 0 ? (
+        <p>Nobody has taken a file yet.</p>
+      ) : (
+        <ul>
+          {downloads.map(({ name, role, file, at }, index) => (
+            <li key={index}>
+              {dayTime(at)} <b>{name}</b> <span className="text-ink2">{role}</span>, {fileWords[file].toLowerCase()}
+            </li>
+          ))}
+        </ul>
+      )}
+    </Zone>
   );
 }
 

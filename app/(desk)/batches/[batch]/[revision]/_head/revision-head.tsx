@@ -36,7 +36,7 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
   return (
     <>
       <TitleBlock {...titleOf(revision)} sheet={number > 0 ? `${number} of ${sheets.length}` : sheet} />
-      <IssueLine revision={revision} />
+      {sheet !== 'issue' && <IssueLine revision={revision} />}
       <CheckingLine revision={revision} />
       <MadeFrom revision={revision} />
       {(hasResults || number > 0 || sheet === 'settings' || sheet === 'change' || sheet === 'issue' || sheet === 'size') && (
