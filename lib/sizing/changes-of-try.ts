@@ -1,7 +1,7 @@
 import type { SectionChange } from '@/lib/changes/change';
 import type { Frame } from '@/lib/model/frame';
 import { changesOf } from '@/lib/sizing/changes-of';
-import { takenBy, type TriedSection } from '@/lib/sizing/try-sections';
+import { takenBy, type TriedSection } from '@/lib/sizing/taken-by';
 
 export interface TryChanges {
   /** The very members of this frame. */

@@ -12,21 +12,8 @@ import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults, type MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, Governing, Verdict } from '@/lib/results/result';
 import { worstFirst } from '@/lib/results/worst-first';
-import { groupsOf } from '@/lib/sizing/members-of';
-import type { SectionTaken } from '@/lib/sizing/section-taken';
-import type { SizedBy } from '@/lib/sizing/sizing';
+import { takenBy, type TriedSection } from '@/lib/sizing/taken-by';
 import { withSections } from '@/lib/sizing/with-sections';
-
-/** Members of the frame as it is stored: one, or all of a role, group or section. */
-export interface TryOf {
-  readonly by: SizedBy | 'member';
-  readonly name: string;
-}
-
-export interface TriedSection {
-  readonly of: TryOf;
-  readonly taken: SectionTaken;
-}
 
 /** A check as the frame's page lists it. */
 export type TriedCheck = Pick<
@@ -51,13 +38,6 @@ export interface Tried {
   readonly frame: Frame;
   readonly evaluation: FrameEvaluation;
   readonly members: readonly MemberGoverning[];
-}
-
-/** Whether a member is what a try is of. @param frame as it is stored */
-export function takenBy(frame: Frame, of: TryOf): (member: number) => boolean {
-  if (of.by === 'member') return (i) => frame.members[i]?.id === of.name;
-  const found = groupsOf(frame, [{ by: of.by, name: of.name }]);
-  return (i) => !('twice' in found) && found.of[i] === 0;
 }
 
 /**

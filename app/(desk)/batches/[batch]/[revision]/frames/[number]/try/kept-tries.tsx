@@ -1,6 +1,7 @@
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
-import type { TriedSection, TryTold } from '@/lib/sizing/try-sections';
+import type { TriedSection } from '@/lib/sizing/taken-by';
+import type { TryTold } from '@/lib/sizing/try-sections';
 import { formatNumber, formatQuantity } from '@/lib/units/format';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { System } from '@/lib/units/quantity';

@@ -1,6 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import type { TriedSection, TryTold } from '@/lib/sizing/try-sections';
+import type { TriedSection } from '@/lib/sizing/taken-by';
+import type { TryTold } from '@/lib/sizing/try-sections';
 
 /** What the page asks of the worker. */
 export interface TryAsked {

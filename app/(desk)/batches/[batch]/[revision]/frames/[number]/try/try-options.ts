@@ -1,6 +1,6 @@
 import type { FinderOption } from '@/components/ui/finder';
 import type { Frame } from '@/lib/model/frame';
-import type { TryOf } from '@/lib/sizing/try-sections';
+import type { TryOf } from '@/lib/sizing/taken-by';
 
 /** "role rafter", "member AB": one text for what a try is of. */
 export const wordsOf = ({ by, name }: TryOf): string => `${by} ${name}`;

@@ -5,7 +5,7 @@ import { pages } from '@/lib/api/addresses';
 import { askedWords } from '@/lib/changes/members-asked';
 import type { Frame } from '@/lib/model/frame';
 import { changesOfTry } from '@/lib/sizing/changes-of-try';
-import type { TriedSection } from '@/lib/sizing/try-sections';
+import type { TriedSection } from '@/lib/sizing/taken-by';
 import { MakeChanges } from '../../../_head/make-changes';
 
 interface TurnIntoChangeProps {
