@@ -1,3 +1,4 @@
+import { Fragment } from 'react';
 import type { HandChecks } from '@/lib/checking/hand-checks/hand-checks';
 import { unitLabel } from '@/lib/units/batch-unit';
 import { formatQuantity } from '@/lib/units/format';
@@ -32,20 +33,26 @@ export function HandChecksShown({ checks, units }: HandChecksShownProps) {
           </tr>
         </thead>
         <tbody>
-          {checks.balance.map(({ result, loads, reactions, agreement }) => (
-            <tr key={result}>
-              <th scope="row">{result}</th>
-              <td className="num">{of(loads.H, 'force')}</td>
-              <td className="num">{of(reactions.H, 'force')}</td>
-              <td className="num">{of(loads.V, 'force')}</td>
-              <td className="num">{of(reactions.V, 'force')}</td>
-              <td className="num">{of(loads.M, 'moment')}</td>
-              <td className="num">{of(reactions.M, 'moment')}</td>
-              <td>
-                <Outcome word={agreement} />
-              </td>
-            </tr>
-          ))}
+          {checks.balance.map(({ result, loads, reactions, agreement }) => {
+            const force = Math.max(...[loads, reactions].flatMap(({ H, V }) => [Math.abs(H), Math.abs(V)]));
+            const moment = Math.max(Math.abs(loads.M), Math.abs(reactions.M), force);
+            return (
+              <tr key={result}>
+                <th scope="row">{result}</th>
+                {(['H', 'V'] as const).map((sum) => (
+                  <Fragment key={sum}>
+                    <td className="num">{of(rounded(loads[sum], force), 'force')}</td>
+                    <td className="num">{of(rounded(reactions[sum], force), 'force')}</td>
+                  </Fragment>
+                ))}
+                <td className="num">{of(rounded(loads.M, moment), 'moment')}</td>
+                <td className="num">{of(rounded(reactions.M, moment), 'moment')}</td>
+                <td>
+                  <Outcome word={agreement} />
+                </td>
+              </tr>
+            );
+          })}
         </tbody>
       </Scrolled>
       <h3>Mid moment − mean of end moments = wL²/8</h3>
@@ -137,6 +144,9 @@ export function HandChecksShown({ checks, units }: HandChecksShownProps) {
     </div>
   );
 }
+
+/** What is left of figures that cancel is no figure: 5e-17 kN beside 5 kN is 0. */
+const rounded = (value: number, size: number): number => (Math.abs(value) <= 1e-9 * size ? 0 : value);
 
 /** "BC in wind: a point load acts on it"; members alike in one. */
 function leftOutWords(leftOut: HandChecks['spansLeftOut']): string {

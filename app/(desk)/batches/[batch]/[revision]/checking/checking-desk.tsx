@@ -119,7 +119,14 @@ export function CheckingDesk({ batch, letter, nearLimit, first, strip, asked }: 
           <div className="ck-frame">
             <div className="min-w-0" aria-busy={asking.isPlaceholderData}>
               {asking.error && <Notice kind="error">{asking.error.message}</Notice>}
-              {frame && <FrameFacts key={frame.number} frame={frame} href={pages.frame(batch, letter, frame.number)} />}
+              {frame && (
+                <FrameFacts
+                  key={frame.number}
+                  frame={frame}
+                  href={pages.frame(batch, letter, frame.number)}
+                  why={rows.find((row) => row.number === frame.number)?.why ?? []}
+                />
+              )}
               {acts.marks?.handChecks && (
                 <Zone>
                   <details className="ck-details">
@@ -135,10 +142,30 @@ export function CheckingDesk({ batch, letter, nearLimit, first, strip, asked }: 
           </div>
         </div>
       </div>
+      {detail.queries.length > 0 && (
+        <Zone title="Every query of this revision" note={`${detail.progress.openQueries} open`} className="ck-queries">
+          <ul>
+            {detail.queries.map((query) => (
+              <li key={query.id}>
+                <CheckMark kind="queried" />{' '}
+                <button type="button" className="link choice-plain" onClick={() => go(query.number)}>
+                  {query.frameId}
+                </button>{' '}
+                <b>{query.raisedBy}</b>: {query.messages[0]?.text}{' '}
+                <span className="ck-none">
+                  {query.closed ? `closed, ${query.closed.when}` : `open, ${answers(query.messages.length - 1)}`}
+                </span>
+              </li>
+            ))}
+          </ul>
+        </Zone>
+      )}
       <PassOrReturn batch={batch} letter={letter} detail={detail} />
     </>
   );
 }
+
+const answers = (n: number): string => (n === 0 ? 'no answer yet' : n === 1 ? '1 answer' : `${n} answers`);
 
 function focusOn(key: 'q' | 'a'): void {
   const field = document.querySelector<HTMLTextAreaElement>(`textarea[data-key="${key}"]`);

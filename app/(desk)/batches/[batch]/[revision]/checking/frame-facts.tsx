@@ -15,10 +15,12 @@ interface FrameFactsProps {
   readonly frame: FrameDetail;
   /** Its own page. */
   readonly href: string;
+  /** Every reason it is on the list for; [] = it isn't. */
+  readonly why: readonly string[];
 }
 
 /** What a checker looks at of a frame: moments, loads, ratios; its checks with the working of one; its certificate. */
-export function FrameFacts({ frame, href }: FrameFactsProps) {
+export function FrameFacts({ frame, href, why }: FrameFactsProps) {
   const { drawing, checks, units, nearLimit } = frame;
   const [open, setOpen] = useState<string | null>(checks[0]?.id ?? null);
   const check = checks.find((one) => one.id === open) ?? checks[0];
@@ -30,11 +32,14 @@ export function FrameFacts({ frame, href }: FrameFactsProps) {
           <b>{frame.id}</b> <VerdictMark verdict={frame.verdict} word />{' '}
           <RatioText ratio={frame.ratio} verdict={frame.verdict} nearLimit={nearLimit} />{' '}
           {check && [check.check, check.where, check.combination].filter(Boolean).join(', ')} <Link href={href}>open</Link>
+          <span className="ck-reasons">
+            {why.length > 0 ? `On the list for: ${why.join(', ')}.` : 'Not on the list; it may be marked all the same.'}
+          </span>
         </p>
         {drawing && chosen && (
           <>
             <svg
-              className="ck-svg"
+              className="d-view ck-svg"
               viewBox="0 0 600 300"
               role="img"
               aria-label={`Frame ${frame.id}, bending moment, ${chosen.name}`}
@@ -42,10 +47,15 @@ export function FrameFacts({ frame, href }: FrameFactsProps) {
               <DiagramView data={drawing} result={chosen} force="M" width={600} height={300} large />
             </svg>
             <div className="ck-pair ck-small d-small">
-              <svg className="ck-svg" viewBox="0 0 300 190" role="img" aria-label={`Frame ${frame.id}, loads and reactions`}>
+              <svg
+                className="d-view ck-svg"
+                viewBox="0 0 300 190"
+                role="img"
+                aria-label={`Frame ${frame.id}, loads and reactions`}
+              >
                 <LoadsView data={drawing} result={chosen} width={300} height={190} large={false} />
               </svg>
-              <svg className="ck-svg" viewBox="0 0 300 190" role="img" aria-label={`Frame ${frame.id}, members by ratio`}>
+              <svg className="d-view ck-svg" viewBox="0 0 300 190" role="img" aria-label={`Frame ${frame.id}, members by ratio`}>
                 <RatioView data={drawing} width={300} height={190} large={false} />
               </svg>
             </div>

@@ -3,7 +3,6 @@ import { checkingDetail } from '@/app/_server/checking-detail';
 import { checkedWords } from '@/app/_server/checked-words';
 import { needResults, pageRevision, type RevisionParams } from '@/app/_server/page-revision';
 import type { SearchParams } from '@/app/_server/search-params';
-import { QueryThread } from '@/components/checking/query-thread';
 import { Cautions } from '@/components/ui/notice';
 import { Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
@@ -67,18 +66,6 @@ export default async function CheckingPage({ params, searchParams }: CheckingPag
         />
       )}
       {revision.sent !== null && <CheckingRecord detail={detail} />}
-      {revision.sent !== null && detail.queries.length > 0 && (
-        <Zone title="Every query of this revision" note={`${detail.progress.openQueries} open`}>
-          {detail.queries.map((thread) => (
-            <div key={thread.id}>
-              <a className="link" href={`?frame=${thread.number}`}>
-                {thread.frameId}
-              </a>
-              <QueryThread thread={thread} />
-            </div>
-          ))}
-        </Zone>
-      )}
       <Cautions {...checkedWords(revision)} />
     </Sheet>
   );

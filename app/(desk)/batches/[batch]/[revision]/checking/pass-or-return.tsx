@@ -1,5 +1,5 @@
 'use client';
-import { useMutation } from '@tanstack/react-query';
+import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useId, useState } from 'react';
 import { Button } from '@/components/ui/button';
@@ -18,13 +18,15 @@ interface PassOrReturnProps {
 /** The foot of the checker's desk: what stands against passing, written out; return with a note, or pass. */
 export function PassOrReturn({ batch, letter, detail }: PassOrReturnProps) {
   const router = useRouter();
+  const client = useQueryClient();
   const field = useId();
   const [note, setNote] = useState('');
   const act = useMutation({
     mutationFn: (to: 'return' | 'pass') => request(api.checking(batch, letter, to), { method: 'POST', json: { note } }),
-    onSuccess: () => {
+    onSuccess: async () => {
       setNote('');
       router.refresh();
+      await client.invalidateQueries({ predicate: ({ queryKey }) => String(queryKey[0]).startsWith('checking') });
     },
   });
   const { whyNotReturn, whyNotCheck, state, acts, progress } = detail;

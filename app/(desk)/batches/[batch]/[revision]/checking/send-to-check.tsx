@@ -1,5 +1,5 @@
 'use client';
-import { useMutation } from '@tanstack/react-query';
+import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
 import { useId, useState } from 'react';
 import { Button } from '@/components/ui/button';
@@ -18,11 +18,15 @@ interface SendToCheckProps {
 /** The preparer hands a revision to a second engineer, with a note. */
 export function SendToCheck({ batch, letter, checkers, again }: SendToCheckProps) {
   const router = useRouter();
+  const client = useQueryClient();
   const field = useId();
   const [note, setNote] = useState('');
   const send = useMutation({
     mutationFn: () => request(api.checking(batch, letter), { method: 'POST', json: { note } }),
-    onSuccess: () => router.refresh(),
+    onSuccess: async () => {
+      router.refresh();
+      await client.invalidateQueries({ predicate: ({ queryKey }) => String(queryKey[0]).startsWith('checking') });
+    },
   });
   const nobody = checkers.length === 0;
   return (
