@@ -17,8 +17,8 @@ const lease_ms = 10 * 60_000;
 
 export interface SizeChunk {
   readonly run: SizeWork;
-  /** Places among the frames of the problem, and what they are asked. */
-  readonly wanted: Wanted;
+  /** Places among the frames of the problem, and what they are asked; null = find out what there is to do. */
+  readonly wanted: Wanted | null;
   readonly versions: readonly number[];
 }
 
@@ -66,7 +66,10 @@ export class SizeWork {
   } // prettier-ignore
 
   get ended(): boolean {
-    if (this.inThreads > 0) return false;
+    return this.inThreads === 0 && this.ending;
+  }
+
+  private get ending(): boolean {
     return this.stopped || this.failure !== null || this.refused !== null || this.found !== null;
   }
 
@@ -74,25 +77,33 @@ export class SizeWork {
     this.stopped = true;
   }
 
-  async nextChunk(): Promise<SizeChunk | null> {
-    if (this.stopped || this.failure !== null || this.refused !== null || this.found !== null) return null;
-    try {
-      if (!this.search) await this.begin();
-      this.goOn();
-    } catch (error) {
-      this.fail(error);
-      return null;
+  nextChunk(): SizeChunk | null {
+    if (this.ending) return null;
+    if (!this.search) {
+      if (this.inThreads > 0) return null;
+      this.inThreads += 1;
+      return { run: this, wanted: null, versions: [] };
     }
+    this.goOn();
     const wanted = this.waiting.shift();
     if (!wanted) return null;
     this.inThreads += 1;
     return { run: this, wanted, versions: wanted.frames.map((f) => this.versions[f] ?? -1) };
   }
 
-  /** Evaluates a chunk in a thread. A fault ends the sizing as failed; what is stored stays. */
+  /** Does a chunk in a thread. A fault ends the sizing as failed; what is stored stays. */
   async solve({ wanted, versions }: SizeChunk): Promise<void> {
+    try {
+      await (wanted === null ? this.begin() : this.evaluate(wanted, versions));
+    } catch (error) {
+      this.fail(error);
+    }
+    this.inThreads -= 1;
+    this.goOn();
+  }
+
+  private async evaluate({ choice, frames }: Wanted, versions: readonly number[]): Promise<void> {
     const { pools, file } = this.options;
-    const { choice, frames } = wanted;
     const groups = this.problem?.groups ?? [];
     const task: SizeTask = {
       file,
@@ -104,19 +115,13 @@ export class SizeWork {
       taken: groups.map(({ candidates }, g) => candidates[choice[g] ?? -1]?.taken ?? null),
       versions,
     };
-    try {
-      const answers = (await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'sizeChunk' })) as FrameAnswer[];
-      for (const [i, f] of frames.entries()) {
-        const answer = answers[i];
-        if (answer) this.known?.put(choice, f, answer);
-      }
-      this.answered += frames.length;
-      this.meter?.add([], frames.length);
-    } catch (error) {
-      this.fail(error);
+    const answers = (await pools.solve.run(task, { filename: pools.bundle('solve'), name: 'sizeChunk' })) as FrameAnswer[];
+    for (const [i, f] of frames.entries()) {
+      const answer = answers[i];
+      if (answer) this.known?.put(choice, f, answer);
     }
-    this.inThreads -= 1;
-    this.goOn();
+    this.answered += frames.length;
+    this.meter?.add([], frames.length);
   }
 
   /** Records how it ended. */
