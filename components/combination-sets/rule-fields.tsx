@@ -28,7 +28,7 @@ export function RuleFields({ rules, onChange }: RuleFieldsProps) {
         </thead>
         <tbody>
           {rules.map(({ from, purpose, suffix, rule }, i) => {
-            const { wrong } = readRule(rule);
+            const { wrong } = rule.trim() === '' ? { wrong: null } : readRule(rule);
             const name = `rule ${i + 1}`;
             return (
               <tr key={i}>
@@ -54,7 +54,7 @@ export function RuleFields({ rules, onChange }: RuleFieldsProps) {
                 </td>
                 <td>
                   <input
-                    className="border-hair w-[34rem] max-w-full border px-1"
+                    className="border-hair mt-1 w-[34rem] max-w-full border px-1"
                     aria-label={`Factors of ${name}`}
                     aria-invalid={wrong !== null || undefined}
                     aria-describedby={wrong === null ? undefined : `rule-${i}-wrong`}
@@ -63,7 +63,7 @@ export function RuleFields({ rules, onChange }: RuleFieldsProps) {
                     onChange={(event) => set(i, { rule: event.target.value })}
                   />
                   {wrong !== null && (
-                    <p id={`rule-${i}-wrong`} className="field-error">
+                    <p id={`rule-${i}-wrong`} className="field-error pb-1">
                       {wrong}.
                     </p>
                   )}

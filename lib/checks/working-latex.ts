@@ -34,7 +34,8 @@ function gap(before: WorkingPart, part: WorkingPart, after: WorkingPart | undefi
 function one(part: WorkingPart): string {
   switch (part.kind) {
     case 'text':
-      return words(part.text);
+      // a blank between two givens
+      return part.text !== '' && part.text.trim() === '' ? '\\quad' : words(part.text);
     case 'symbol':
       return `${letter(part.symbol)}${part.sub ? `_{${upright(part.sub)}}` : ''}${part.sup ? `^{${upright(part.sup)}}` : ''}`;
     case 'number':

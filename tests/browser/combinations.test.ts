@@ -64,6 +64,57 @@ describe('combinations and the office’s limits', () => {
     expect(complaints).toEqual([]);
   });
 
+  it('are added to and changed where they are listed, by whoever may change a revision', async () => {
+    await page.goto(`${url}/batches/${brought.batch}/B/read`);
+    await page.getByRole('button', { name: 'Change them', exact: true }).click();
+    await page.getByLabel('Factor on dead in 1.4 dead').fill('1.3');
+    await page.getByLabel('Its name').fill('Storm');
+    await page.getByLabel('wind', { exact: true }).fill('1,9');
+    await page.getByRole('button', { name: 'Add the row' }).click();
+    await page.getByText('1 factor is changed, 1 is added.').waitFor();
+    await page.getByLabel('Why they are written').fill('A storm of the past winter');
+    await page.getByRole('button', { name: 'Make revision C' }).click();
+    await page.waitForURL(new RegExp(`/batches/${brought.batch}/C/read`));
+    const table = page.getByRole('table', { name: /^Combinations/ });
+    await expect.poll(() => table.getByRole('row', { name: /^Storm/ }).innerText()).toMatch(/strength\s+1\.9\s+listed/);
+    expect(await table.getByRole('row', { name: /^1\.4 dead / }).innerText()).toMatch(/1\.3\s+listed/);
+  });
+
+  it('come from a set that the lead kept, chosen on the settings page, and the set says where it is used', async () => {
+    const lead = await (await browser.newContext({ viewport: { width: 1440, height: 900 } })).newPage();
+    const complaints = complaintsOf(lead);
+    await signInAs(lead, url, 'north', 'lead');
+    await lead.goto(`${url}/combinations`);
+    await lead.getByLabel('Name', { exact: true }).fill('Cantilevers');
+    await lead.getByLabel('Begun from').selectOption('ASCE 7-22 LRFD');
+    await lead.getByLabel('Factors of rule 1', { exact: true }).fill('1.4 dead + 1.5 storm');
+    await lead.getByText('“storm” is no kind of load case.').waitFor();
+    expect(await lead.getByRole('button', { name: 'Keep the set' }).isDisabled()).toBe(true);
+    await lead.getByLabel('Factors of rule 1', { exact: true }).fill('1.45 dead');
+    await lead.getByLabel('Where the figures are from, and who agreed to them').fill('The office’s own rule');
+    await lead.getByRole('button', { name: 'Keep the set' }).click();
+    await lead.getByRole('heading', { name: 'Cantilevers' }).waitFor();
+    await lead.getByText('No revision was made by it yet.').waitFor();
+
+    await page.goto(`${url}/batches/${brought.batch}/A/settings`);
+    await page.getByLabel('Combination set of the office').selectOption({ label: 'Cantilevers, version 1' });
+    await page.getByLabel('Why it is chosen').fill('As the office does');
+    await page.getByRole('button', { name: 'Make revision D with this set' }).click();
+    await page.waitForURL(new RegExp(`/batches/${brought.batch}/D/read`));
+    const table = page.getByRole('table', { name: /^Combinations/ });
+    await expect.poll(() => table.getByRole('row', { name: /^1\.45 dead/ }).innerText()).toMatch(/strength\s+1\.45/);
+
+    await lead.reload();
+    const used = lead.getByRole('table', { name: 'Revisions made by the set' });
+    expect(await used.getByRole('row').last().innerText()).toMatch(/D/);
+    await lead.getByLabel('Factors of rule 1', { exact: true }).fill('1.5 dead');
+    await lead.getByRole('button', { name: 'Keep it as version 2' }).click();
+    await lead.getByText(/^version 2, kept/).waitFor();
+    await page.reload();
+    expect(await table.getByRole('row', { name: /^1\.45 dead/ }).count()).toBe(1);
+    expect(complaints).toEqual([]);
+  });
+
   it('are taken from the lead’s page where the sheets give none', async () => {
     const lead = await (await browser.newContext({ viewport: { width: 1440, height: 900 } })).newPage();
     const complaints = complaintsOf(lead);

@@ -124,7 +124,17 @@ function aboutMajor(of: Basis): BendingStrength | Refused {
       moment: (Lb, Cb) => lateralTorsionalMoment(open, Lp, Lr, Lb, Cb),
       criticalStress: (Lb, Cb) => criticalStress(open, Lb, Cb),
     },
-    details: { ry: of.ry, rts: open.rts, ho, J: of.J, c, Cw: of.Cw, Iy: of.Iy, kc: of.plates.kc },
+    details: {
+      ry: of.ry,
+      rts: open.rts,
+      ho,
+      J: of.J,
+      c,
+      X: (open.J * c) / (open.Sx * ho),
+      Cw: of.Cw,
+      Iy: of.Iy,
+      kc: of.plates.kc,
+    },
   };
 }
 

@@ -32,10 +32,6 @@ export function lateralBuckling(sheet: Sheet, clause: string): readonly WorkingL
 
 function openLengths(sheet: Sheet): readonly WorkingLine[] {
   const c = sheet.word('shape') === 'channel' ? '(F2-8b)' : '(F2-8a)';
-  const X = fraction([symbol('J'), symbol('c')], [symbol('S', 'x'), symbol('h', 'o')]);
-  const y = [text('0.7'), F_y];
-  const figures = torsionFigures(sheet);
-  const yielding = [text('0.7 ·'), ...sheet.shown('Fy', 'stress')];
   return [
     line(
       'section',
@@ -54,6 +50,19 @@ function openLengths(sheet: Sheet): readonly WorkingLine[] {
       [L_p, text('= 1.76'), symbol('r', 'y'), E_per_Fy, text('= 1.76 ·'), ...sheet.shown('ry', 'dimension'), root(fraction(sheet.shown('E', 'stress'), sheet.shown('Fy', 'stress'))), equals, ...sheet.shown('Lp', 'length')],
       '(F2-5)',
     ), // prettier-ignore
+    ...inelasticLimit(sheet),
+  ];
+}
+
+/** L_r in two lines: what twists, then the length, so that neither is wider than a page. */
+function inelasticLimit(sheet: Sheet): readonly WorkingLine[] {
+  const X = fraction([symbol('J'), symbol('c')], [symbol('S', 'x'), symbol('h', 'o')]);
+  const y = [text('0.7'), F_y];
+  const x = symbol('X');
+  const twist = sheet.shown('X', 'number');
+  const yielding = [text('0.7 ·'), ...sheet.shown('Fy', 'stress')];
+  return [
+    line('twisting', [x, equals, X, equals, ...torsionFigures(sheet), equals, ...twist]),
     line(
       'limit of inelastic buckling',
       [
@@ -61,16 +70,13 @@ function openLengths(sheet: Sheet): readonly WorkingLine[] {
         text('= 1.95'),
         r_ts,
         fraction([symbol('E')], y),
-        root(X, text('+'), root(text('('), X, text(')² + 6.76 ('), fraction(y, [symbol('E')]), text(')²'))),
+        root(x, text('+'), root(squared('X'), text('+ 6.76 ('), fraction(y, [symbol('E')]), text(')²'))),
         equals,
         text('1.95 ·'),
         ...sheet.shown('rts', 'dimension'),
+        times,
         fraction(sheet.shown('E', 'stress'), yielding),
-        root(
-          ...figures,
-          text('+'),
-          root(text('('), ...figures, text(')² + 6.76 ('), fraction(yielding, sheet.shown('E', 'stress')), text(')²')),
-        ),
+        root(...twist, text('+'), root(text('('), ...twist, text(')² + 6.76 ('), fraction(yielding, sheet.shown('E', 'stress')), text(')²'))), // prettier-ignore
         equals,
         ...sheet.shown('Lr', 'length'),
       ],
@@ -137,6 +143,7 @@ function gradient(sheet: Sheet): readonly WorkingLine[] {
   if (why !== null) return [line('moment gradient', [C_b, equals, ...sheet.shown('Cb', 'number'), text(`: ${why}`)], 'F1')];
   const M = (sub: string): WorkingPart => symbol('M', sub);
   return [
+    line('moments of the segment', sheet.given([M('max'), 'Mmax', 'moment'], [M('A'), 'MA', 'moment'], [M('B'), 'MB', 'moment'], [M('C'), 'MC', 'moment']), 'at its quarter points'), // prettier-ignore
     line(
       'moment gradient',
       [
@@ -145,20 +152,6 @@ function gradient(sheet: Sheet): readonly WorkingLine[] {
         fraction(
           [text('12.5'), M('max')],
           [text('2.5'), M('max'), text('+ 3'), M('A'), text('+ 4'), M('B'), text('+ 3'), M('C')],
-        ),
-        equals,
-        fraction(
-          [text('12.5 ·'), ...sheet.shown('Mmax', 'moment')],
-          [
-            text('2.5 ·'),
-            ...sheet.shown('Mmax', 'moment'),
-            text('+ 3 ·'),
-            ...sheet.shown('MA', 'moment'),
-            text('+ 4 ·'),
-            ...sheet.shown('MB', 'moment'),
-            text('+ 3 ·'),
-            ...sheet.shown('MC', 'moment'),
-          ],
         ),
         equals,
         ...sheet.shown('Cb', 'number'),

@@ -149,7 +149,7 @@ function lateralInputs(of: Ec3Member, one: LateralStretch): Inputs {
     chiLTmod: chiMod,
     MbRd,
   };
-  return { ...where, Iz: of.Iz, ...torsion, ...factors, ...gradientInputs(one) };
+  return { ...where, Iz: of.Iz, Pz: (Math.PI ** 2 * of.E * of.Iz) / (L * L), ...torsion, ...factors, ...gradientInputs(one) };
 }
 
 /** The diagram of a stretch, and what C1 was taken by. */

@@ -1,7 +1,7 @@
 import type { Check } from '@/lib/results/result';
 import { fraction, root, symbol, type Printer, type WorkingLine, type WorkingPart } from '../working-parts';
 import { imperfectionFactor, type Curve } from './reduction-factor';
-import { annexBLines, criticalMomentLine, momentFactorLines, momentGradientLines } from './working-ec3-factors';
+import { annexBLines, criticalMomentLines, momentFactorLines, momentGradientLines } from './working-ec3-factors';
 import { classLine, given, M1, reader, squared, sum, words, type Reader } from './working-ec3-parts';
 
 const fy = symbol('f', 'y');
@@ -55,22 +55,13 @@ export function lateralWorking(check: Check, print: Printer): readonly WorkingLi
   const rolled = of.word('by') === 'rolled';
   const curve = of.word('curve');
   const W = `${of.word('Wname')},y`;
-  const inside = [fraction([symbol('I', 'w')], [symbol('I', 'z')]), words('+'), fraction([squared('L'), symbol('G'), symbol('I', 't')], [squared('π'), symbol('E'), symbol('I', 'z')])]; // prettier-ignore
-  const lift = [symbol('C', '2'), symbol('z', 'g')];
   const high = of.number('zg') > 0;
-  const critical = [
-    symbol('C', '1'),
-    fraction([squared('π'), symbol('E'), symbol('I', 'z')], [squared('L')]),
-    ...(high
-      ? [words('{'), root(...inside, words('+ ('), ...lift, words(')²')), words('−'), ...lift, words('}')]
-      : [root(...inside)]),
-  ];
   const lines: WorkingLine[] = [
     given('moment', print, [[symbol('M', 'Ed'), of.number('M'), 'moment'], [symbol('L'), of.number('L'), 'length']], `${of.word('face')} face in compression, between restraints`), // prettier-ignore
     classLine(of, print),
     ...momentGradientLines(of, print),
     ...(high ? [given('height of the load', print, [[symbol('C', '2'), of.number('C2'), 'number'], [symbol('z', 'g'), of.number('zg'), 'dimension']])] : []), // prettier-ignore
-    criticalMomentLine(of, print, critical),
+    ...criticalMomentLines(of, print),
     sum('slenderness', symbol('λ̄', 'LT'), [root(fraction([symbol('W', W), fy], [symbol('M', 'cr')]))], [root(fraction([print.number(of.number('W'), 'modulus'), words('·'), print.number(of.number('fy'), 'stress')], [print.number(of.number('Mcr'), 'moment')]))], n('lambdaLT'), '6.3.2.2(1)'), // prettier-ignore
     { what: 'buckling curve', parts: [words(`${curve}:`), symbol('α', 'LT'), words('='), print.number(alphaOf(curve), 'number')], source: rolled ? 'Tables 6.3, 6.5; λ̄LT,0 = 0.4, β = 0.75' : 'Tables 6.3, 6.4' }, // prettier-ignore
   ];

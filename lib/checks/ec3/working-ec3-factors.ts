@@ -13,40 +13,53 @@ export function momentGradientLines(of: Reader, print: Printer): readonly Workin
     ];
   }
   if (of.word('C1by') !== 'diagram') return [given('diagram of moments', print, [[C1, of.number('C1'), 'number']], 'uniform moment, on the safe side')]; // prettier-ignore
-  const M = (name: string): WorkingPart => print.number(Math.abs(of.number(name)), 'moment');
+  const M = (sub: string, name: string) => [symbol('M', sub), Math.abs(of.number(name)), 'moment'] as const;
+  const part = (name: string): WorkingPart => print.number(Math.abs(of.number(name)) / of.number('Mmax'), 'number');
   const letter = (sub: string): WorkingPart => symbol('M', sub, '2');
   return [
+    given('moments', print, [M('max', 'Mmax'), M('¼', 'Mquarter'), M('½', 'Mmiddle'), M('¾', 'MthreeQuarter')], 'at the quarter points of the length'), // prettier-ignore
     sum(
       'diagram of moments',
       C1,
       [root(fraction([words('35'), letter('max')], [letter('max'), words('+ 9'), letter('¼'), words('+ 16'), letter('½'), words('+ 9'), letter('¾')]))], // prettier-ignore
-      [root(fraction([words('35 ('), M('Mmax'), words(')²')], [words('('), M('Mmax'), words(')² + 9 ('), M('Mquarter'), words(')² + 16 ('), M('Mmiddle'), words(')² + 9 ('), M('MthreeQuarter'), words(')²')]))], // prettier-ignore
+      [root(fraction([words('35')], [words('1 + 9 · ('), part('Mquarter'), words(')² + 16 · ('), part('Mmiddle'), words(')² + 9 · ('), part('MthreeQuarter'), words(')²')]))], // prettier-ignore
       value,
-      'moments at the quarter points of the length; not below 1, not above 2.60',
+      'over the square of the largest; not below 1, not above 2.60',
     ),
   ];
 }
 
-/** M_cr with its numbers put in. */
-export function criticalMomentLine(of: Reader, print: Printer, formula: readonly WorkingPart[]): WorkingLine {
+/** M_cr in two lines, numbers put in: Euler's force of the length sideways, then the moment. */
+export function criticalMomentLines(of: Reader, print: Printer): readonly WorkingLine[] {
   const high = of.number('zg') > 0;
-  const [E, G] = [print.number(of.number('E'), 'stress'), print.number(of.number('G'), 'stress')];
-  const [Iz, It] = [print.number(of.number('Iz'), 'secondMoment'), print.number(of.number('It'), 'secondMoment')];
-  const L = print.number(of.number('L'), 'length');
-  const Iw = print.number(of.number('Iw'), 'warping');
-  const force = [squared('π'), words('·'), E, words('·'), Iz];
-  const inside = [fraction([Iw], [Iz]), words('+'), fraction([words('('), L, words(')² ·'), G, words('·'), It], force)];
+  const P = symbol('P', 'z');
+  const force = print.number(of.number('Pz'), 'force');
+  const Iz = print.number(of.number('Iz'), 'secondMoment');
+  const brackets = (inside: readonly WorkingPart[], lift: readonly WorkingPart[]): readonly WorkingPart[] =>
+    high ? [words('{'), root(...inside, words('+ ('), ...lift, words(')²')), words('−'), ...lift, words('}')] : [root(...inside)];
+  const [C1, C2, zg] = [symbol('C', '1'), symbol('C', '2'), symbol('z', 'g')];
+  const letters = [fraction([symbol('I', 'w')], [symbol('I', 'z')]), words('+'), fraction([symbol('G'), symbol('I', 't')], [P])];
+  const twist = [print.number(of.number('G'), 'stress'), words('·'), print.number(of.number('It'), 'secondMoment')];
+  const figures = [fraction([print.number(of.number('Iw'), 'warping')], [Iz]), words('+'), fraction(twist, [force])];
   const lift = [print.number(of.number('C2'), 'number'), words('·'), print.number(of.number('zg'), 'dimension')];
-  const numbers = [
-    print.number(of.number('C1'), 'number'),
-    words('·'),
-    fraction(force, [words('('), L, words(')²')]),
-    ...(high
-      ? [words('{'), root(...inside, words('+ ('), ...lift, words(')²')), words('−'), ...lift, words('}')]
-      : [root(...inside)]),
+  return [
+    sum(
+      'critical force sideways',
+      P,
+      [fraction([squared('π'), symbol('E'), symbol('I', 'z')], [squared('L')])],
+      [fraction([squared('π'), words('·'), print.number(of.number('E'), 'stress'), words('·'), Iz], [words('('), print.number(of.number('L'), 'length'), words(')²')])], // prettier-ignore
+      force,
+      'over L; elastic, gross section',
+    ),
+    sum(
+      'critical moment',
+      symbol('M', 'cr'),
+      [C1, P, ...brackets(letters, [C2, zg])],
+      [print.number(of.number('C1'), 'number'), words('·'), force, words('·'), ...brackets(figures, lift)],
+      print.number(of.number('Mcr'), 'moment'),
+      '(6.3.2.2(2))',
+    ),
   ];
-  const result = print.number(of.number('Mcr'), 'moment');
-  return sum('critical moment', symbol('M', 'cr'), formula, numbers, result, 'elastic, gross section (6.3.2.2(2))');
 }
 
 /** C_m of Table B.3 with the diagram that it is of. */
