@@ -4,7 +4,8 @@ import type { System } from '@/lib/units/quantity';
 
 export interface SectionOffered {
   readonly designation: string | null;
-  readonly range: string;
+  /** Null of the office's own. */
+  readonly range: string | null;
   readonly standard: string;
   /** SI by the library's column. */
   readonly properties: Readonly<Record<string, number | null>>;

@@ -2,10 +2,12 @@ import { PassThrough, Readable } from 'node:stream';
 import { door } from '@/app/_server/door';
 import { attachment } from '@/app/_server/download';
 import { requirePerson } from '@/app/_server/person';
+import { db } from '@/db/client';
+import { listOwnParts } from '@/db/queries/own-parts';
 import { ApiError } from '@/lib/api/error';
 import { libraryColumns } from '@/lib/library/library-columns';
 import { librarySheet } from '@/lib/library/library-sheet';
-import { libraryRows, libraryViewFrom } from '@/lib/library/library-view';
+import { type LibraryView, libraryRows, libraryViewFrom } from '@/lib/library/library-view';
 import { csvOf } from '@/lib/reports/workbook/write-csv';
 import { writeXlsx } from '@/lib/reports/workbook/write-xlsx';
 import { ranges } from '@/lib/sections/library';
@@ -14,7 +16,7 @@ const formats = ['json', 'csv', 'xlsx'];
 
 /** The library's sections of a view, in its order: as JSON in SI, or with `format=csv` or `xlsx` as a file in the view's units. */
 export const GET = door(async (request) => {
-  await requirePerson(request, 'read sections');
+  const person = await requirePerson(request, 'read sections');
   const params = new URL(request.url).searchParams;
   const { view, wrong } = libraryViewFrom(params);
   const format = params.get('format') ?? 'json';
@@ -33,7 +35,7 @@ export const GET = door(async (request) => {
       properties: Object.fromEntries(libraryColumns.map(({ key, value }) => [key, value(section)])),
       source: 'derived',
     }));
-    return Response.json({ sections, note, suggestion });
+    return Response.json({ own: await ownFitting(person.office, view), sections, note, suggestion });
   }
   const sheet = librarySheet(rows, view.units);
   const name = `Tallyframe sections${view.range === null ? '' : ` ${view.range}`}.${format}`;
@@ -45,5 +47,29 @@ export const GET = door(async (request) => {
   );
   return attachment(name, bytesOf(sink));
 });
+
+/** The office's own sections whose names hold what is searched for; none where a range is chosen. */
+async function ownFitting(office: number, { search, range }: LibraryView) {
+  if (range !== null) return [];
+  const key = (text: string): string => text.toLowerCase().replace(/\s+/g, '');
+  const parts = await listOwnParts(db(), office, 'section');
+  return parts
+    .filter(({ retiredAt, name }) => retiredAt === null && key(name).includes(key(search)))
+    .flatMap(({ name, version, section }) => {
+      if (!section) return [];
+      const properties = Object.fromEntries(libraryColumns.map(({ key: column, value }) => [column, value(section)]));
+      return [
+        {
+          designation: name,
+          range: null,
+          standard: `office v${version}`,
+          shape: section.shape,
+          made: null,
+          properties,
+          source: 'office',
+        },
+      ];
+    });
+}
 
 const bytesOf = (stream: Readable): ReadableStream<Uint8Array> => Readable.toWeb(stream.map((piece: unknown) => typeof piece === 'string' ? new TextEncoder().encode(piece) : piece)) as ReadableStream<Uint8Array>; // prettier-ignore

@@ -28,6 +28,8 @@ interface ChangeSectionProps {
 }
 
 interface Library {
+  /** The office's own that fit. */
+  readonly own: readonly SectionOffered[];
   readonly sections: readonly SectionOffered[];
   readonly suggestion: string | null;
 }
@@ -79,15 +81,15 @@ export function ChangeSection({ batch, letter, next, units, what, words, first =
           <Field
             label="Section"
             type="search"
-            hint="A designation however typed, or a section of the Sections sheet."
+            hint="A designation however typed, one of the office’s own, or a section of the Sections sheet."
             value={typed}
             disabled={busy}
             onChange={(event) => setTyped(event.target.value)}
           />
           {search.length > 1 && library.data && (
             <SectionOffers
-              offered={library.data.sections}
-              suggestion={library.data.suggestion}
+              offered={[...library.data.own, ...library.data.sections]}
+              suggestion={library.data.own.length > 0 ? null : library.data.suggestion}
               typed={search}
               chosen={to}
               units={units}

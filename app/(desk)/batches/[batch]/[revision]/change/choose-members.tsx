@@ -1,12 +1,12 @@
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
-import type { Facet } from '@/db/queries/lists';
 import type { SectionChange } from '@/lib/changes/change';
+import type { MembersOffered } from './members-offered';
 
 interface ChooseMembersProps {
   readonly action: string;
   readonly chosen: SectionChange['what'] | null;
-  readonly offered: Readonly<Record<'section' | 'role' | 'group', readonly Facet[]>>;
+  readonly offered: MembersOffered;
 }
 
 /** Which members: by section, role, group and frame; a form that is its address. */
@@ -14,7 +14,9 @@ export function ChooseMembers({ action, chosen, offered }: ChooseMembersProps) {
   return (
     <form className="section-filter" action={action} aria-label="Members to change">
       {(['section', 'role', 'group'] as const).map((name) => {
-        const values = offered[name].filter(({ value }) => value !== '');
+        const values = (offered[name] ?? []).filter(({ value }) => value !== '');
+        if (name === 'group' && offered.group === null)
+          return <Field key={name} label="Group" name="group" defaultValue={chosen?.group ?? ''} placeholder="any" />;
         if (values.length === 0) return null;
         return (
           <label key={name} className="section-pick">
@@ -23,7 +25,7 @@ export function ChooseMembers({ action, chosen, offered }: ChooseMembersProps) {
               <option value="">any</option>
               {values.map(({ value, count }) => (
                 <option key={value} value={value}>
-                  {value} ({count.toLocaleString('en-GB')})
+                  {count === null ? value : `${value} (${count.toLocaleString('en-GB')})`}
                 </option>
               ))}
             </select>

@@ -1,19 +1,21 @@
 import type { Metadata } from 'next';
+import { redirect } from 'next/navigation';
 import { requirePagePerson } from '@/app/_server/page-person';
-import { needResults, pageRevision, type RevisionParams } from '@/app/_server/page-revision';
+import { pageRevision, type RevisionParams } from '@/app/_server/page-revision';
 import { toParams, type SearchParams } from '@/app/_server/search-params';
 import { Notice } from '@/components/ui/notice';
 import { Sheet, Zone } from '@/components/ui/sheet';
 import { db } from '@/db/client';
 import { letterOf, listRevisions } from '@/db/queries/revisions';
-import { listFacets } from '@/db/queries/lists';
 import { pages } from '@/lib/api/addresses';
 import { askedWords } from '@/lib/changes/members-asked';
 import { mostMembers } from '@/lib/changes/change';
 import { RevisionHead } from '../_head/revision-head';
 import { ChangeSection } from './change-section';
 import { ChooseMembers } from './choose-members';
+import { FromSheet } from './from-sheet';
 import { membersAsked } from './members-asked';
+import { membersOffered } from './members-offered';
 
 export const metadata: Metadata = { title: 'Change a section' };
 
@@ -27,15 +29,14 @@ export default async function ChangePage({ params, searchParams }: ChangePagePro
   const { batch: of, revision: at } = await params;
   await requirePagePerson('change a revision', `/batches/${of}/${at}/change`);
   const { revision } = await pageRevision(params, 'change');
-  needResults(revision);
-  const { office, id, batch, letter, units } = revision;
+  const { office, batch, letter, units } = revision;
+  if (revision.state === 'reading' || revision.settings === null || revision.frames === 0)
+    redirect(pages.sheet(batch, letter, 'read'));
   const search = toParams(await searchParams);
-  const [asked, revisions, sections, roles, groups] = await Promise.all([
+  const [asked, revisions, offered] = await Promise.all([
     membersAsked(revision, search),
     listRevisions(db(), office, batch),
-    listFacets(db(), office, id, 'members', 'section'),
-    listFacets(db(), office, id, 'members', 'role'),
-    listFacets(db(), office, id, 'members', 'group'),
+    membersOffered(revision),
   ]);
   const latest = revisions.at(-1)?.letter ?? letter;
   const next = letterOf(revisions.length);
@@ -53,7 +54,7 @@ export default async function ChangePage({ params, searchParams }: ChangePagePro
           key={search.toString()}
           action={pages.sheet(batch, letter, 'change')}
           chosen={asked.what}
-          offered={{ section: sections, role: roles, group: groups }}
+          offered={offered}
         />
         {asked.tooMany && (
           <Notice kind="near">
@@ -76,6 +77,7 @@ export default async function ChangePage({ params, searchParams }: ChangePagePro
           first={search.get('to')}
         />
       )}
+      <FromSheet key={letter} batch={batch} letter={letter} next={next} />
     </Sheet>
   );
 }

@@ -15,6 +15,7 @@ import { may, type Person } from '@/lib/access/may';
 import { api, pages } from '@/lib/api/addresses';
 import { RevisionHead } from '../_head/revision-head';
 import { Combinations } from './combinations';
+import { MadeOf } from './made-of';
 import { ProblemsByCell } from './problems-by-cell';
 import { Reading } from './reading';
 import { RunGood } from './run-good';
@@ -76,6 +77,7 @@ async function WasRead({ person, revision }: { readonly person: Person; readonly
           <WhatWasRead sheets={sheetLines(sheets, problems)} summary={readSummary(files, sheets.length)} />
         )}
       </Zone>
+      <MadeOf person={person} revision={revision} />
       {defaults.length > 0 && revision.frames > 0 && (
         <Zone title="Taken as default" note="Setup is silent">
           <DefaultsTaken defaults={defaults} />
