@@ -7,7 +7,7 @@ export const metadata: Metadata = { title: 'Forgotten password' };
 /** For whoever has forgotten their password. */
 export default function ForgottenPage() {
   return (
-    <SignInFrame sheet="forgotten password">
+    <SignInFrame sheet="new password">
       <AskForPassword />
     </SignInFrame>
   );

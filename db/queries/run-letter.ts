@@ -21,7 +21,12 @@ export async function putRunFinished(db: Db, office: number, { revision, person,
   const { over, near, within, notChecked } = counts;
   await putInOutbox(db, office, starter.email, {
     kind: 'run finished',
-    about: { project: about.projectName, batch: about.batch, batchName: about.batchName, letter: about.letter },
+    about: {
+      project: [about.projectNumber, about.projectName].filter(Boolean).join(' '),
+      batch: about.batch,
+      batchName: about.batchName,
+      letter: about.letter,
+    },
     frames: over + near + within + notChecked,
     over,
     near,

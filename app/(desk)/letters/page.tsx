@@ -58,7 +58,7 @@ export default async function LettersPage() {
                     <th scope="row">{recipient}</th>
                     <td>{kind}</td>
                     <td>{dayTime(createdAt)}</td>
-                    <td>{state === 'sent' ? `sent ${dayTime(sentAt ?? createdAt)}` : state}</td>
+                    <td>{state === 'sent' ? `${kept === null ? 'sent' : 'kept'} ${dayTime(sentAt ?? createdAt)}` : state}</td>
                     <td>
                       {state !== 'sent' && lastError !== null && (
                         <span className="flex flex-wrap items-center gap-3">
