@@ -10,7 +10,8 @@ import { resultsSchema, type ResultsJson } from '@/lib/results/schema';
 import { askForReading, askForRun } from '@/worker/ask';
 import { createPools } from '@/worker/pools';
 import { WorkQueue } from '@/worker/queue';
-import { resultStream } from '@/worker/result-stream';
+import { reportStream, resultStream } from '@/worker/result-stream';
+import { readPdf } from '@/worker/threads/read-pdf';
 import { readingRevision, testDatabase, testOffice } from '@/worker/test-office';
 import { sha256 } from './sha256';
 
@@ -172,6 +173,14 @@ describe('the command line', () => {
     expect(frames).toHaveLength(13);
   });
 
+  it('writes the calculation report as a draft, with a bookmark for every frame', async () => {
+    const ended = await batch('braced-bents-12.xlsx', '--report', join(out, 'bents.pdf'));
+    expect(ended).toEqual({ code: 0, stdout: '', stderr: '' });
+    const { pages, outline } = await readPdf(readFileSync(join(out, 'bents.pdf')));
+    expect(outline.at(-1)!.items.map(({ title }) => title)).toEqual(Array.from({ length: 12 }, (_, i) => `X${String(i + 1).padStart(2, '0')}`)); // prettier-ignore
+    expect(pages.every((text) => text.includes('draft, not issued'))).toBe(true);
+  });
+
   it('lists every combination with --all', async () => {
     await batch('pipe-rack-12.xlsx', '--json', join(out, 'all.json'), '--all');
     const count = (name: string): number => results(name).frames.reduce((sum, frame) => sum + frame.checks.length, 0);
@@ -229,6 +238,10 @@ describe('the queue and the command line', () => {
         const workbook = resultStream(pools, { file: database.file, office, revision, as: 'xlsx' });
         await book.xlsx.load(await new Response(workbook).arrayBuffer());
         expect(book.worksheets[0]?.name).toBe('Cover');
+        const report = reportStream(pools, { file: database.file, office, revision, frames: [1] });
+        const { pages, outline } = await readPdf(Buffer.from(await new Response(report).arrayBuffer()));
+        expect(outline.at(-1)!.items).toHaveLength(1);
+        expect(pages[0]).toContain((await findRevisionById(database.db, office, revision))!.projectName);
         const own = `${name}-own.xlsx`;
         await batch(join(folder, name), '--xlsx', join(out, own));
         const typedBook = new ExcelJS.Workbook();

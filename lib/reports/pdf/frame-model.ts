@@ -64,8 +64,9 @@ function remarks(frame: Frame, index: number, units: System): string {
       tensionOnly ? 'tension only' : axialOnly ? 'axial only' : null,
       given('L major', lengthMajor_m),
       given('L minor', lengthMinor_m),
-      given('top held each', lengthLtbTop_m),
-      given('bottom held each', lengthLtbBottom_m),
+      ...(lengthLtbTop_m === lengthLtbBottom_m
+        ? [given('faces held each', lengthLtbTop_m)]
+        : [given('top held each', lengthLtbTop_m), given('bottom held each', lengthLtbBottom_m)]),
     ]
       .filter((one) => one !== null)
       .join(', ')

@@ -20,14 +20,10 @@ export function ResultTools({ batch, letter, ready, checking }: ResultToolsProps
             Result workbook
           </a>
           <a href={api.part(batch, letter, 'report')} download>
-            Calculation report
+            Draft report
           </a>
-          <a
-            href={`${api.part(batch, letter, 'report')}?frames=flagged`}
-            download
-            aria-label="Calculation report of the flagged frames"
-          >
-            of flagged
+          <a href={`${api.part(batch, letter, 'report')}?frames=flagged`} download>
+            Draft of flagged
           </a>
           <a href={api.part(batch, letter, 'csv')} download>
             CSV
