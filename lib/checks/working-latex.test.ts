@@ -60,4 +60,9 @@ describe('a line of calculation', () => {
     expect(set).toContain('<math');
     expect(set).not.toContain('katex-error');
   });
+
+  it('sets givens apart, also where only a blank stands between them', () => {
+    const given = (letter: string, value: string) => [symbol(letter), text('='), { kind: 'number', text: value }] as const;
+    expect(latexOf([...given('J', '0.5'), text(' '), ...given('c', '1.0')])).toMatch(/0\.5\}? \\quad c = /);
+  });
 });

@@ -1,7 +1,7 @@
 /**
  * Published limits on movement, to be copied into an office's own. The figures are as printed; national values and
- * recommendations are for whoever takes them to judge. An office limit holds in every service combination: where a source
- * limits one load alone, the preset is on the safe side.
+ * recommendations are for whoever takes them to judge. A preset holds in every service combination unless some are
+ * named: where its source limits one load alone, that is on the safe side.
  */
 export interface LimitPreset {
   /** "LM-IBC-ROOF noceil_L": the table and its row. */
