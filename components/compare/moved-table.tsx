@@ -18,15 +18,22 @@ export interface MovedContext {
   readonly frameHref: (side: 'before' | 'after', index: number) => string;
 }
 
+interface MovedTableProps {
+  readonly page: ComparedRows;
+  readonly of: MovedContext;
+  /** By row of frames or members, which change of the inputs touches it. */
+  readonly causes?: readonly (string | null)[] | null;
+}
+
 /** A page of what moved, each row with before, after and change. */
-export function MovedTable({ page, of }: { readonly page: ComparedRows; readonly of: MovedContext }) {
+export function MovedTable({ page, of, causes = null }: MovedTableProps) {
   const { before, after } = of.letters;
   if (page.rows.length === 0) return <p className="tbl-reading">None.</p>;
   switch (page.list) {
     case 'frames':
       return (
-        <Table caption="Frames that moved" heads={['Frame', ...standingHeads(of), 'Governing check', 'Section', <Unit key="m" name="Steel added" unit={unitLabel('mass', of.units)} />, `α_cr ${before}`, `α_cr ${after}`]} numeric={[1, 2, 3, 7, 8, 9]}>
-          {page.rows.map((pair) => (
+        <Table caption="Frames that moved" heads={['Frame', ...standingHeads(of), 'Governing check', 'Section', <Unit key="m" name="Steel added" unit={unitLabel('mass', of.units)} />, `α_cr ${before}`, `α_cr ${after}`, 'Cause']} numeric={[1, 2, 3, 7, 8, 9]}>
+          {page.rows.map((pair, i) => (
             <tr key={pair.id}>
               <th scope="row">
                 <FrameLink pair={pair} of={of} />
@@ -37,14 +44,15 @@ export function MovedTable({ page, of }: { readonly page: ComparedRows; readonly
               <td className="num">{added(pair, of.units)}</td>
               <td className="num">{formatNumber(pair.before?.criticalLoadFactor ?? null, { significant: 3 })}</td>
               <td className="num">{formatNumber(pair.after?.criticalLoadFactor ?? null, { significant: 3 })}</td>
+              <td className="compare-wide">{causes?.[i] ?? '–'}</td>
             </tr>
           ))}
         </Table>
       ); // prettier-ignore
     case 'members':
       return (
-        <Table caption="Members that moved" heads={['Frame', 'Member', ...standingHeads(of), 'Role', 'Section', 'Governing check']} numeric={[2, 3, 4]}>
-          {page.rows.map((pair) => (
+        <Table caption="Members that moved" heads={['Frame', 'Member', ...standingHeads(of), 'Role', 'Section', 'Governing check', 'Cause']} numeric={[2, 3, 4]}>
+          {page.rows.map((pair, i) => (
             <tr key={`${pair.frame} ${pair.id}`}>
               <th scope="row">
                 <Link href={of.frameHref('after', pair.index)} prefetch={false}>
@@ -56,6 +64,7 @@ export function MovedTable({ page, of }: { readonly page: ComparedRows; readonly
               <td>{(pair.after ?? pair.before)?.role}</td>
               <td>{fromTo(pair.before?.section, pair.after?.section)}</td>
               <td>{fromTo(pair.before?.check, pair.after?.check)}</td>
+              <td className="compare-wide">{causes?.[i] ?? '–'}</td>
             </tr>
           ))}
         </Table>

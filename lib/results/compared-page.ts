@@ -44,6 +44,8 @@ export interface ComparedPage {
   /** In the later revision's sheet order, then those that only the earlier one has; null where it was not asked for. */
   readonly strip: readonly ComparedCell[] | null;
   readonly page: ComparedRows;
+  /** Which change of the inputs touches each row of frames or members, in words; null for other lists. */
+  readonly causes: readonly (string | null)[] | null;
   /** Rows of the list that fit, on all pages. */
   readonly matching: number;
 }

@@ -93,6 +93,13 @@ describe('every page by axe', () => {
     ),
     `/batches/${batch}/A/frames/1/try`,
     `/batches/${batch}/A/size`,
+    '/sections',
+    '/sections?range=UPN&section=UPN+200',
+    '/sections/own',
+    '/sections/own/sections/new',
+    '/sections/own/grades/new',
+    '/sections/own/sections/import',
+    `/batches/${batch}/A/change?role=column`,
     '/no/such/page',
   ];
 

@@ -61,4 +61,46 @@ describe('sections on screen', () => {
     expect((await head.innerText()).replaceAll(/\s+/g, ' ')).toMatch(/section of role rafter.*IPE 600.*Stiffer rafters/);
     expect(complaints).toEqual([]);
   });
+
+  it('of the office’s own are drawn as they are typed, saved as a version, edited, and given to members by a sheet', async () => {
+    const lead = await (await browser.newContext({ viewport: { width: 1440, height: 900 } })).newPage();
+    lead.setDefaultTimeout(30_000);
+    const complaints = complaintsOf(lead);
+    await signInAs(lead, url, 'north', 'lead');
+    await lead.goto(`${url}/sections`);
+    await lead.getByRole('link', { name: 'The office’s own' }).click();
+    await lead.getByRole('link', { name: 'New section' }).click();
+    await lead.getByLabel('Name', { exact: true }).fill('ipe 300');
+    for (const [label, text] of [['depth, h', '620'], ['width, b', '240'], ['web, tw', '8'], ['flange, tf', '14']] as const) // prettier-ignore
+      await lead.getByLabel(label).fill(text);
+    await lead.getByText('IPE 300 is a standard one').waitFor();
+    await lead.getByLabel('Name', { exact: true }).fill('Girder 620');
+    await lead.getByRole('img', { name: /Girder 620 to scale: depth 620 mm, width 240 mm/ }).waitFor();
+    // 2·24·1.4 + 59.2·0.8 cm²
+    const facts = lead.getByRole('table', { name: 'Properties of Girder 620' });
+    expect(await facts.getByRole('row', { name: /^area/ }).innerText()).toMatch(/114\.6.*cm².*derived/s);
+    await lead.getByLabel('Source').fill('drawing 21');
+    await lead.getByRole('button', { name: 'Save as version 1' }).click();
+    await lead.getByText('No revision is made of it yet.').waitFor();
+
+    await lead.goto(`${url}/batches/${sheds.batch}/A/change`);
+    const rows = 'role,section\nrafter,Girder 620\n';
+    const chooser = lead.getByLabel('Choose a Changes sheet');
+    await chooser.setInputFiles({ name: 'Changes.csv', mimeType: 'text/csv', buffer: Buffer.from(rows.replace('620', '62O')) });
+    await lead.getByRole('table', { name: 'Problems by cell' }).getByText('B2').waitFor();
+    await chooser.setInputFiles({ name: 'Changes.csv', mimeType: 'text/csv', buffer: Buffer.from(rows) });
+    await lead.getByText('Changes.csv touches 24 frames').waitFor();
+    await lead.getByLabel('Why it is changed by this sheet').fill('Welded rafters');
+    await lead.getByRole('button', { name: /by the sheet and run 24 frames/ }).click();
+    await lead.waitForURL(/\/C\/read/);
+    await lead.goto(`${url}/sections/own`);
+    await lead.getByRole('link', { name: 'Girder 620' }).click();
+    await lead.getByRole('link', { name: /^Revision C of/ }).waitFor();
+    await lead.getByLabel('flange, tf').fill('16');
+    await lead.getByRole('button', { name: 'Save as version 2' }).click();
+    await lead.getByRole('button', { name: 'Save as version 3' }).waitFor();
+    const uses = lead.getByRole('table', { name: 'Revisions made of Girder 620' });
+    expect(await uses.getByRole('row').nth(1).innerText()).toMatch(/C.*v1.*24/s);
+    expect(complaints).toEqual([]);
+  });
 });

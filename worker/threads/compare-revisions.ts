@@ -23,13 +23,23 @@ export async function compareRevisions({ file, office, before, after, ...asked }
   if (!compared) return null;
   const { list, rows } = await rowsOf(compared, asked);
   const [groups, cells] = [await compared.inputGroups(), await compared.inputs()];
+  const shown = { list, rows: rows.slice(asked.offset, asked.offset + asked.limit) } as ComparedRows;
   return {
     totals: compareTotals(compared.frames, asked.by),
     inputs: { changes: groups.length, cells: cells.length, first: groups.slice(0, someChanges) },
     strip: asked.strip ? stripOf(compared) : null,
-    page: { list, rows: rows.slice(asked.offset, asked.offset + asked.limit) } as ComparedRows,
+    page: shown,
+    causes: await causesFor(compared, shown),
     matching: rows.length,
   };
+}
+
+/** By row of a list of frames or members; null for other lists. */
+async function causesFor(compared: Compared, page: ComparedRows): Promise<(string | null)[] | null> {
+  if (page.list !== 'frames' && page.list !== 'members') return null;
+  const { ofFrame, ofMember } = await compared.causes();
+  if (page.list === 'members') return page.rows.map(({ frame, id }) => ofMember(frame, id));
+  return page.rows.map(({ id, carried, before, after }) => (carried || !before || !after ? null : ofFrame(id)));
 }
 
 async function rowsOf(compared: Compared, { list, show, by }: CompareAsked): Promise<ComparedRows> {

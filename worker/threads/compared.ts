@@ -9,6 +9,7 @@ import {
 } from '@/db/queries/compare';
 import { listSheets } from '@/db/queries/problems';
 import { byMovement, type FramePair, type MemberPair, pairFrames, pairMembers } from '@/lib/results/compare';
+import { type Causes, causesOf } from '@/lib/results/compare-causes';
 import { compareInputs, groupDifferences, type InputDifference, type InputGroup } from '@/lib/results/compare-inputs';
 import { byReaction, pairReactions, type ReactionPair } from '@/lib/results/compare-reactions';
 
@@ -21,6 +22,8 @@ export interface Compared {
   readonly reactions: () => readonly ReactionPair[];
   readonly inputs: () => Promise<readonly InputDifference[]>;
   readonly inputGroups: () => Promise<readonly InputGroup[]>;
+  /** What touches a frame or member that is not the same in both. */
+  readonly causes: () => Promise<Causes>;
 }
 
 /** A thread keeps the last comparisons, so that their pages follow at once. */
@@ -77,6 +80,12 @@ function compare({ db, raw }: OpenDatabase, office: number, { before, after }: C
     ),
     inputs,
     inputGroups: once(async () => groupDifferences(await inputs())),
+    causes: once(async () =>
+      causesOf(
+        await inputs(),
+        frames.flatMap(({ id, carried }) => (carried ? [] : [id])),
+      ),
+    ),
   };
 }
 

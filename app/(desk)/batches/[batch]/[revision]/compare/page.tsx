@@ -9,11 +9,13 @@ import { type SearchParams, toParams } from '@/app/_server/search-params';
 import { ChangeLegend } from '@/components/compare/change-legend';
 import { ChangeStrip } from '@/components/compare/change-strip';
 import { ComparedFacts, VerdictTable } from '@/components/compare/compared-totals';
+import { RatioShift } from '@/components/compare/ratio-shift';
 import { MovedTable } from '@/components/compare/moved-table';
 import { Cautions, Notice } from '@/components/ui/notice';
 import { Columns, Sheet, Zone } from '@/components/ui/sheet';
 import { api, pages } from '@/lib/api/addresses';
 import { compareInput } from '@/lib/api/inputs';
+import type { ComparedRows } from '@/lib/results/compared-page';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { RevisionHead } from '../_head/revision-head';
 import { CompareChoice } from './compare-choice';
@@ -68,7 +70,7 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
   const { batch, letter, units } = after;
   const letters = { before: before.letter, after: letter };
   const size = asked.size;
-  const { totals, page, matching, strip, inputs } = await comparedPage(two, asked, true);
+  const { totals, page, causes, matching, strip, inputs } = await comparedPage(two, asked, true);
   const [settings, recorded] = [settingsThatDiffer(two), await recordedBetween(two)];
   const address = (chosen: Partial<CompareInput>) => {
     const { list, show, by } = { ...asked, ...chosen };
@@ -81,6 +83,9 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
   const unfinished = [before, after].filter(({ state }) => state === 'read' || state === 'running' || state === 'stopped');
   const side = (
     <>
+      <Zone title={`Ratio in ${letters.after} against ratio in ${letters.before}`} note="frames">
+        <RatioShift cells={strip ?? []} letters={letters} nearLimit={nearLimits.after} />
+      </Zone>
       <Zone title="What moved" note="frames">
         <ComparedFacts totals={totals} letters={letters} units={units} by={asked.by} hrefOf={(show) => `${address({ list: 'frames', show })}#moved`} />
       </Zone>
@@ -125,6 +130,8 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
       </Zone>
     </>
   ); // prettier-ignore
+  // where no row of the sheets touches a frame, what differs is how it is analysed and checked
+  const otherCause = settings.length === 0 ? null : settings.slice(0, 2).map((one) => `${one.setting} ${one.before} to ${one.after}`).join('; '); // prettier-ignore
   const pager = (
     <nav className="compare-foot" aria-label="Pages">
       {asked.page > 1 && (
@@ -163,6 +170,7 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
           />
           <MovedTable
             page={page}
+            causes={causes?.map((cause, i) => cause ?? (isCarried(page, i) ? null : otherCause)) ?? null}
             of={{
               letters,
               nearLimits,
@@ -178,5 +186,6 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
   );
 }
 
+const isCarried = (page: ComparedRows, i: number): boolean => page.list === 'frames' && page.rows[i]?.carried === true;
 const n = (value: number): string => value.toLocaleString('en-GB');
 const count = (value: number, one: string, more = `${one}s`): string => `${n(value)} ${value === 1 ? one : more}`;

@@ -16,7 +16,7 @@ export const GET = door(
     const two = await comparedTwo(person, revision, asked.with);
     if (two === null) throw new ApiError('conflict', 'This batch has no other revision to compare with.');
     needRead(two);
-    const { totals, inputs, page, matching } = await comparedPage(two, asked, false);
+    const { totals, inputs, page, causes, matching } = await comparedPage(two, asked, false);
     return Response.json({
       before: two.before.letter,
       after: two.after.letter,
@@ -26,6 +26,7 @@ export const GET = door(
       totals,
       list: page.list,
       rows: page.rows,
+      causes,
       matching,
       page: asked.page,
       size: asked.size,
