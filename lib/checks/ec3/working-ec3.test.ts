@@ -112,6 +112,19 @@ describe('working of EN 1993-1-1', () => {
     for (const part of ['C_1 = 1.77', 'M_cr =', 'λ̄_LT =', 'k_c = 0.75', 'χ_LT,mod =', '(6.58)']) expect(text).toContain(part);
   });
 
+  it('6.3.3 says by which line of Annex B its factors are: sway, λ̄ below 0.4, class 3 of a hollow section', () => {
+    const even = (): number => 2e4;
+    const text = (member: ReturnType<typeof memberOf>, L: number): string =>
+      textOf(rowOf(rowsOf(member, demandOf({ L, N: -1e5, M: even })), '6.3.3'));
+    const free = { start: false, end: true };
+    const swaying = demandOf({ L: 3, N: -5e4, M: even, held: { start: true, end: false } });
+    const cantilever = memberOf(ipe300, { L: 3, fy: 235e6, major: 6, minor: 6, free });
+    expect(textOf(rowOf(rowsOf(cantilever, swaying), '6.3.3'))).toContain('sway mode, not below 0.9');
+    expect(text(memberOf(heb300, { L: 1.5 }), 1.5)).toMatch(/k_zy = 0\.6 \+ λ̄_\w = .*λ̄ below 0\.4/);
+    const thin = shaped('rhs', { h: 200, b: 200, t: 5.5, r: 8.25 }, 'hot finished');
+    expect(text(memberOf(thin, { L: 4 }), 4)).toMatch(/class 3[\s\S]*k_zy = 0\.8 · k_yy/);
+  });
+
   it('a row that was not checked, and a check of another kind, have no working of its own', () => {
     const [refused] = rowsOf(memberOf(ipe300, { fy: null }), demandOf({ N: 1 }), defaultSettings);
     expect(ec3Working({ ...asCheck(refused!), check: 'EN 1993-1-1' }, print)).toEqual([]);
