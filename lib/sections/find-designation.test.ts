@@ -11,6 +11,20 @@ const suggested = (text: string): string | null => {
   return 'section' in result ? 'found' : result.suggestion;
 };
 
+describe('an ASTM shape is found by its metric label', () => {
+  // AISC Shapes Database v15.0, its column of metric labels
+  it.each([
+    ['W310X38.7', 'W12X26'], ['W310x39', 'W12X26'], ['310 x 38.7 W', 'W12X26'], ['W 200x46.1', 'W8X31'], ['W200X46', 'W8X31'],
+    ['HP310X79', 'HP12X53'], ['S310X47.3', 'S12X31.8'], ['C310x31', 'C12X20.7'], ['MC460X63.5', 'MC18X42.7'],
+  ])('%s is %s', (text, designation) => expect(found(text)).toBe(designation)); // prettier-ignore
+
+  it('and says so; a whole mass that two shapes share is none', () => {
+    expect(findDesignation('W310x39')).toMatchObject({ note: 'W12X26, whose metric label is W310X38.7' });
+    expect(findDesignation('W12x26')).toMatchObject({ note: null });
+    expect(found('W310X40')).toBeNull();
+  });
+});
+
 describe('a library designation is found however it is typed', () => {
   it.each([
     ['IPE300', 'IPE 300'], ['ipe 300', 'IPE 300'], [' IPE-300 ', 'IPE 300'], ['IPE A 300', 'IPE A 300'], ['IPEA300', 'IPE A 300'],

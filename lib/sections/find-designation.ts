@@ -2,6 +2,7 @@ import type { Section } from '@/lib/model/frame';
 import { designationKey, keysOf, plainHollowKeys } from './designation-keys';
 import { editDistance } from './edit-distance';
 import { librarySection, rangeNames, ranges, type RangeName } from './library';
+import { metricLabels } from './ranges/metric-labels';
 import type { RangeRow } from './ranges/range';
 
 /** Other standard ranges that a person may type: never taken for a near miss of one that is held. */
@@ -18,8 +19,27 @@ const byKey = new Map<string, Entry>();
 for (const range of rangeNames)
   for (const row of ranges[range].rows)
     for (const key of keysOf(row.designation, range)) byKey.set(key, { row, range, note: null });
+addMetricLabels();
 for (const range of ['HFSHS', 'HFRHS', 'HFCHS', 'CFSHS', 'CFRHS', 'CFCHS'] as const)
   for (const row of ranges[range].rows) addPlain(range, row);
+
+/** ASTM shapes are found by their metric label too, and by it with a whole mass where only one shape has that. */
+function addMetricLabels(): void {
+  const whole = new Map<string, string | null>();
+  for (const [designation, label] of metricLabels) {
+    const entry = byKey.get(designationKey(designation));
+    if (!entry) throw new RangeError(`Expected a shape of a range, got ${designation}`);
+    const note = `${entry.row.designation}, whose metric label is ${label}`;
+    for (const key of keysOf(label, entry.range)) if (!byKey.has(key)) byKey.set(key, { ...entry, note });
+    const rounded = label.replace(/[\d.]+$/, (mass) => String(Math.round(Number(mass))));
+    whole.set(rounded, whole.has(rounded) ? null : designation);
+  }
+  for (const [rounded, designation] of whole) {
+    const entry = designation === null ? undefined : byKey.get(designationKey(designation));
+    const note = `${designation}, whose metric label is ${metricLabels.get(designation ?? '') ?? ''}`;
+    if (entry) for (const key of keysOf(rounded, entry.range)) if (!byKey.has(key)) byKey.set(key, { ...entry, note });
+  }
+}
 
 /** A hollow section typed without how it is made: cold formed where that is held, whose properties are the smaller. */
 function addPlain(range: RangeName, row: RangeRow): void {

@@ -71,7 +71,13 @@ describe('sections on screen', () => {
     await lead.getByRole('link', { name: 'The office’s own' }).click();
     await lead.getByRole('link', { name: 'New section' }).click();
     await lead.getByLabel('Name', { exact: true }).fill('ipe 300');
-    for (const [label, text] of [['depth, h', '620'], ['width, b', '240'], ['web, tw', '8'], ['flange, tf', '14']] as const) // prettier-ignore
+    for (const [label, text] of [
+      ['depth, h', '620'],
+      ['width, b', '240'],
+      ['web, tw', '8'],
+      ['flange, tf', '14'],
+    ] as const)
+      // prettier-ignore
       await lead.getByLabel(label).fill(text);
     await lead.getByText('IPE 300 is a standard one').waitFor();
     await lead.getByLabel('Name', { exact: true }).fill('Girder 620');
