@@ -1,5 +1,5 @@
 'use client';
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Field } from '@/components/ui/field';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
@@ -26,6 +26,12 @@ export function CandidateTable({ group, units, nearLimit }: CandidateTableProps)
   const [text, setText] = useState('');
   const [show, setShow] = useState<Show>('all');
   const { candidates, chosen, name } = group;
+  const box = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    // the lightest come first, of which nearly all fail: what is chosen is brought into sight, within the table alone
+    const row = box.current?.querySelector<HTMLElement>('.tbl-selected');
+    if (row && box.current) box.current.scrollTop = Math.max(0, row.offsetTop - box.current.clientHeight / 2);
+  }, []);
   const found = candidates
     .filter((one) => one.name.toLowerCase().replaceAll(' ', '').includes(text.toLowerCase().replaceAll(' ', '')))
     .filter((one) => show === 'all' || fits(one) === (show === 'fits'))
@@ -48,7 +54,7 @@ export function CandidateTable({ group, units, nearLimit }: CandidateTableProps)
           {found.length} of {candidates.length}
         </p>
       </div>
-      <div className="tbl-wrap sizing-table" role="region" tabIndex={0} aria-label={`Candidates for ${name}`}>
+      <div ref={box} className="tbl-wrap sizing-table" role="region" tabIndex={0} aria-label={`Candidates for ${name}`}>
         <table className="tbl">
           <caption className="sr-only">Candidates for {name}, the lightest first</caption>
           <thead>

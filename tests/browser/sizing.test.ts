@@ -14,19 +14,23 @@ interface Told {
   };
 } // prettier-ignore
 
-const inPage = globalThis as typeof globalThis & { answers?: { readonly told?: Told }[]; Worker: typeof Worker };
+interface Listening {
+  answers?: { readonly told?: Told }[];
+}
 
 /** Keeps what workers of the page answer, so that the numbers behind what is shown can be looked at. */
 const listen = (page: Page) =>
   page.addInitScript(() => {
-    const answers: { told?: Told }[] = (inPage.answers = []);
-    inPage.Worker = class extends Worker {
+    const answers: { told?: Told }[] = [];
+    (window as unknown as Listening).answers = answers;
+    window.Worker = class extends Worker {
       constructor(address: string | URL, options?: WorkerOptions) {
         super(address, options);
         this.addEventListener('message', ({ data }: MessageEvent<{ told?: Told }>) => answers.push(data));
       }
     };
   });
+const answersOf = (page: Page) => page.evaluate(() => (window as unknown as Listening).answers ?? []);
 
 const tokensOf = (text: string): string => text.replaceAll(/\s+/g, ' ').trim();
 const checksOf = async (page: Page): Promise<string> =>
@@ -55,7 +59,7 @@ describe('trying and sizing', () => {
     await page.goto(`${url}/batches/${sheds.batch}/A/frames/1`);
     const stored = await checksOf(page);
     // nothing of the engine is brought before it is wanted
-    expect(await page.evaluate(() => inPage.answers?.length)).toBe(0);
+    expect(await answersOf(page)).toEqual([]);
     await page.getByRole('link', { name: 'Try a section' }).click();
     await page.waitForURL(/frames\/1\/try/);
     await page.getByText('a try: nothing is stored').waitFor();
@@ -77,7 +81,7 @@ describe('trying and sizing', () => {
     await expect.poll(() => checksOf(page)).toBe(stored);
     await kept.getByRole('button', { name: 'role rafter → IPE 550' }).click();
     await expect.poll(() => checksOf(page)).toBe(shown);
-    const tried = (await page.evaluate(() => inPage.answers?.at(-1)?.told)) as Told;
+    const tried = (await answersOf(page)).at(-1)?.told as Told;
 
     await page.getByLabel(/in frame .* only/).check();
     await page.getByRole('link', { name: 'Turn it into a change' }).click();
@@ -137,7 +141,8 @@ describe('trying and sizing', () => {
 });
 
 async function optionOf(group: ReturnType<Page['getByRole']>, words: string): Promise<string> {
-  const labels = await group.getByLabel('Members').locator('option').allInnerTexts();
+  await group.getByLabel('Members').waitFor();
+  const labels = await group.getByLabel('Members').locator('option').allTextContents();
   const found = labels.find((label) => label.startsWith(words));
   if (found === undefined) throw new Error(`Expected ${words} among ${labels.join(', ')}`);
   return found;

@@ -102,7 +102,7 @@ export function ChooseGroups({ offered, ranges, units, busy, first, onSize }: Ch
         </p>
       )}
       <div className="sizing-acts">
-        <Button look="filled" disabled={busy || offered.length === 0} onClick={size}>
+        <Button look={first.length > 0 ? 'outline' : 'filled'} disabled={busy || offered.length === 0} onClick={size}>
           Find the lightest
         </Button>
         {lines.length < Math.min(mostGroups, offered.length) && (

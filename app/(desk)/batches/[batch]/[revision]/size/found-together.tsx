@@ -60,7 +60,7 @@ export function FoundTogether({ batch, letter, next, units, nearLimit, sizing, f
         </tbody>
       </table>
       {together && (
-        <p>
+        <p className="sizing-together">
           Looked at together: {together.fit.toLocaleString('en-GB')} of {together.frames.toLocaleString('en-GB')} frames fit in
           every check; worst {together.frame} with {together.ratio === null ? 'no ratio' : formatRatio(together.ratio, nearLimit)},{' '}
           {together.governs}.

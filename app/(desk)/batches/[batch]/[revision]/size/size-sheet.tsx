@@ -135,11 +135,15 @@ function Progress({ sizing, may, busy, act }: ProgressProps) {
           </div>
         )}
       </div>
-      {reason && <p role={state === 'failed' ? 'alert' : 'status'}>{reason}</p>}
+      {reason && (
+        <p className="run-message" role={state === 'failed' ? 'alert' : 'status'}>
+          {reason}
+        </p>
+      )}
+      {going && <p className="run-message">You may close this page: the search goes on, also after a restart.</p>}
       <div className="rail" role="progressbar" aria-label="Frames and candidates done" aria-valuemin={0} aria-valuemax={total} aria-valuenow={done}>
         <span style={{ width: `${total > 0 ? (100 * done) / total : 0}%` }} />
       </div>
-      {going && <p>You may close this page: the search goes on, also after a restart.</p>}
     </section>
   ); // prettier-ignore
 }

@@ -127,15 +127,17 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, to, f
       <Zone title="Which members, which section">
         <div className="try-line">
           <Finder label="Members" options={options} value={chosen} onChange={setChosen} />
-          <Field label="Section" type="search" hint="A designation however typed, or a section of the Sections sheet." value={typed} onChange={(event) => setTyped(event.target.value)} />
+          <Field label="Section" type="search" placeholder="a designation however typed" value={typed} onChange={(event) => setTyped(event.target.value)} />
           <p role="status" className="try-state">
             {busy ? 'Working it out …' : tried.length === 0 ? 'As stored.' : tried.map((one) => `${wordsOf(one.of)} → ${one.taken.section.name}`).join('; ')}
           </p>
           {tried.length > 0 && <Button onClick={() => setTried(nothing)}>Back to what is stored</Button>}
         </div>
+        <div className="try-offers">
         {search.length > 1 && library.data && (
           <SectionOffers offered={library.data.sections} suggestion={library.data.suggestion} typed={search} chosen={taken} units={units} onChoose={(name) => void take(name, of.get(chosen))} />
         )}
+        </div>
         {refused && <Notice kind="error">{refused}</Notice>}
       </Zone>
       {told && (
