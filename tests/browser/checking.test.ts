@@ -16,7 +16,7 @@ describe('the checker’s desk', () => {
 
   beforeAll(async () => {
     analyst = await signedIn(url, 'north', 'analyst');
-    brought = await bring(analyst, `/api/projects/${people.north.project}/batches`, 'samples/pipe-rack-12.xlsx');
+    brought = await bring(analyst, `/api/projects/${people.north.project}/batches`, 'samples/code-sheds-24.xlsx');
     await run(analyst, brought);
     desk = `${url}/batches/${brought.batch}/${brought.revision}/checking`;
     browser = await openBrowser();
@@ -76,6 +76,7 @@ describe('the checker’s desk', () => {
     // every frame of the list seen, at reading speed
     await page.reload({ waitUntil: 'networkidle' });
     await page.getByRole('article').getByText('As asked on 12 November.').waitFor();
+    expect(rows.some(({ toAccept }) => toAccept > 0)).toBe(true);
     await page.getByRole('button', { name: 'Close the query' }).click();
     await page.getByText('Closed by checker of north').waitFor();
     for (let i = 0; i < rows.length; i++) await page.keyboard.press(i % 2 === 0 ? 's' : ' ');

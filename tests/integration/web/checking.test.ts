@@ -155,6 +155,28 @@ describe('checking', () => {
     expect(next.status).toBe(201);
   });
 
+  it('stands still at an over until it is accepted with a reason, which is kept with who and when', async () => {
+    const sheds = await bring(analyst, `/api/projects/${people.north.project}/batches`, 'samples/code-sheds-24.xlsx');
+    await run(analyst, sheds);
+    const { list, progress } = await send(analyst, sheds);
+    const over = list.find(({ part }) => part === 'over')!;
+    expect(progress.toAccept).toBeGreaterThan(0);
+    for (const { number } of list) await checker.json(frame(number, '/seen', sheds), { method: 'POST' });
+    const against = await refused(await checker.send(`${checkingAddress(sheds)}/pass`, {}));
+    expect(against).toEqual([409, expect.stringMatching(/over or not checked and not accepted/)]);
+    await seeAndAccept(checker, sheds, 'The haunch that is built is not in the sheet.');
+    const { frame: told } = await analyst.json<FrameTold>(frame(over.number, '', sheds));
+    const reason = 'The haunch that is built is not in the sheet.';
+    expect(told.toAccept).toMatchObject(told.toAccept.map(() => ({ accepted: { reason, by: 'checker of north' } })));
+    const [first] = told.toAccept;
+    const back = `${frame(over.number, '/acceptances', sheds)}?check=${first!.item}`;
+    expect((await checker.fetch(back, { method: 'DELETE' })).status).toBe(200);
+    expect((await checker.send(`${checkingAddress(sheds)}/pass`, {})).status).toBe(409);
+    await seeAndAccept(checker, sheds);
+    await pass(checker, sheds);
+    expect((await checkingOf(analyst, sheds)).state).toBe('checked');
+  });
+
   it('binds a lead who ran a frame, in the revision that carries it over too', async () => {
     const c = await bring(analyst, `/api/projects/${people.north.project}/batches`, 'samples/pipe-rack-12.xlsx');
     await run(lead, c);
