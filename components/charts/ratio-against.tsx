@@ -49,7 +49,7 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226,
     }
     setRead(best);
   };
-  const taken = chosen == null ? undefined : drawn.find((p) => p.frame === chosen);
+  const taken = chosen ? drawn.find((p) => p.frame === chosen) : undefined;
   const told = read ?? taken ?? worst;
   return (
     <div ref={box} className="chart">
