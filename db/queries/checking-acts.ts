@@ -25,14 +25,17 @@ export async function sendToCheck(db: Db, revision: RevisionRecord, by: By, note
   const against = whyNotMove(revision.state, 'send');
   if (against !== null) return against;
   if (revision.input === null || revision.engine === null) return 'Nothing of this revision has been read.';
-  // results of a revision in these states do not change any more, so they may be read before the transaction
+  // read before the transaction, which is to be short; that nothing has changed meanwhile is seen to in it
   const list = await findFramesToSee(db, revision.id, revision.input.sha256);
   if (list.length === 0) return 'No frame of this revision has a solution, so there is nothing to check.';
   const checkers = await listWhoMayCheck(db, revision.office, revision.id, by.id);
   if (checkers.length === 0)
     return 'Nobody of the office may check this revision: everyone who could has had a hand in it. The lead adds a checker.';
   return db.transaction().execute(async (within) => {
-    if (!(await move(within, revision, 'send', null))) return whyNotMove('to check', 'send');
+    // a run may have begun, and even ended, while the list was made
+    const now = await within.selectFrom('revision').select('stamp').where('id', '=', revision.id).executeTakeFirstOrThrow();
+    if (now.stamp !== revision.stamp) return 'Its results have changed just now. Look at them, and send it again.';
+    if (!(await move(within, revision, 'send', null))) return whyNotMove(await stateOf(within, revision), 'send') ?? 'Try again.';
     await insertCheckingList(within, revision.id, list);
     const at = await record(within, revision, 'sent', by, note);
     const sent = { sent_by: by.id, sent_at: at, checked_by: null, checked_at: null };

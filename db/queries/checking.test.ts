@@ -85,6 +85,20 @@ it('a revision is sent with its list, its note, its letters to those who may che
   expect(await given.send()).toMatch(/with the checker already/);
 });
 
+it('is not sent as it was looked at, where a run has changed it meanwhile', async () => {
+  const given = await prepared();
+  const seen = await given.revision();
+  await given.db
+    .updateTable('revision')
+    .set({ stamp: seen.stamp + 1 })
+    .where('id', '=', given.id)
+    .execute();
+  expect(await sendToCheck(given.db, seen, given.analyst, '')).toMatch(/changed just now/);
+  await updateRevisionState(given.db, given.own.office, given.id, ['run'], 'running');
+  expect(await sendToCheck(given.db, { ...seen, stamp: seen.stamp + 1 }, given.analyst, '')).toMatch(/still running/);
+  expect((await given.revision()).sent).toBeNull();
+});
+
 it('nobody checks what they made, and nothing is sent where nobody is left to check it', async () => {
   const given = await prepared();
   const { db, own, id } = given;
