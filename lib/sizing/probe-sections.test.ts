@@ -31,6 +31,16 @@ describe('sections as a change would find them', () => {
     expect(thick.materials['plate']?.fy_Pa).toBe(335e6);
   });
 
+  it('are the office’s own where the batch has none of the name, in what they are offered as', () => {
+    const bar = { kind: 'section', name: 'Bar 100x20', units: 'metric', cells: { shape: 'bar', h: '100', b: '20' }, version: 2, note: '', retired: false } as const; // prettier-ignore
+    const [own] = probeSections(shed, { own: [bar] }, [{ name: 'bar 100x20', materials: ['S275'] }]);
+    // 100 × 20 = 2000 mm²
+    expect(own).toMatchObject({ section: { name: 'Bar 100x20', shape: 'bar' }, materials: { S275: { grade: 'S275' } } });
+    if (own && 'section' in own) expect(own.section.properties.A_m2).toBeCloseTo(0.002, 12);
+    const [retired] = probeSections(shed, { own: [{ ...bar, retired: true }] }, [{ name: 'bar 100x20', materials: ['S275'] }]);
+    expect(retired).toHaveProperty('unfit');
+  });
+
   it('that are nowhere, or whose row is wrong, are refused with the sheets’ own words', () => {
     const found = probeSections(shed, {}, [
       { name: 'IPE 9999', materials: ['S275'] },
