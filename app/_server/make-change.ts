@@ -12,6 +12,7 @@ import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
 import { readSetting, saysTheSame } from '@/lib/changes/setting-value';
 import { settingWords, type Settings } from '@/lib/model/settings';
+import { ownVersions } from './own-versions';
 import { previewChanges } from './preview-changes';
 import { askForChange } from '@/worker/ask';
 import { queue, serverDatabase } from '@/worker/boot';
@@ -32,11 +33,12 @@ export async function makeChange(
   const settings = requireRead(revision);
   refuse(changes, settings);
   const sets = await setsOf(person, changes);
+  const versions = await ownVersions(person, revision, changes);
   const previews = known ?? (await previewsOf(person, revision, changes));
   const made = await askForChange(queue(), serverDatabase(), person.office, {
     from: revision.id,
     person: person.id,
-    changes: changes.map((change) => ({ change, ...wordsOf(change, settings, previews, sets) })),
+    changes: changes.map((change) => ({ change, ...(versions.get(change) ?? wordsOf(change, settings, previews, sets)) })),
     reason,
     run,
   });
@@ -56,7 +58,7 @@ export function requireRead({ state, settings, input, frames }: RevisionRecord):
 function refuse(changes: readonly Change[], settings: Settings): void {
   const fields: Record<string, string[]> = {};
   for (const change of changes) {
-    if (change.kind === 'section' || change.kind === 'office combinations') continue;
+    if (change.kind === 'section' || change.kind === 'office combinations' || change.kind === 'own version') continue;
     if (change.kind === 'list combinations') {
       const { leaveOut, factors, add } = change;
       const edits = leaveOut.length + factors.length + (add ?? []).length;
@@ -102,6 +104,7 @@ async function setsOf(person: Person, changes: readonly Change[]): Promise<Sets>
 
 function wordsOf(change: Change, settings: Settings, previews: Previews, sets: Sets): ChangeWords {
   if (change.kind === 'office combinations') return officeCombinationsWords(change, sets.get(change)?.name ?? '', settings);
+  if (change.kind === 'own version') throw new RangeError('Expected the versions of what is taken anew');
   if (change.kind !== 'section') return changeWords(change, settings);
   const preview = previews.get(change);
   if (!preview) throw new RangeError('Expected a preview of each change of section');

@@ -141,7 +141,7 @@ export async function insertOwnVersions(
         .executeTakeFirst();
       const cells = JSON.stringify(record.cells);
       const same = before?.cells === cells && before.units === record.units && before.note === note;
-      if (found?.retired_at != null)
+      if (found && found.retired_at !== null)
         await within.updateTable('own_part').set({ retired_at: null, retired_by: null }).where('id', '=', id).execute();
       if (same) {
         kept.push({ id, name, version: before.version, isNew: false });

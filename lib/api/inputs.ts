@@ -49,6 +49,7 @@ function subjectOf(change: Change): string {
   if (change.kind === 'section') return JSON.stringify(change.what);
   // what frames are combined by is one thing, whichever way it is changed
   if (change.kind === 'list combinations' || change.kind === 'office combinations') return 'combinationSet';
+  if (change.kind === 'own version') return `${change.part} ${change.name.toLowerCase()}`;
   return change.setting;
 }
 

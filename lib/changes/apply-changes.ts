@@ -2,6 +2,7 @@ import type { Change } from '@/lib/changes/change';
 import { changeSection, readForChange } from '@/lib/changes/change-section';
 import { changeSetting } from '@/lib/changes/change-setting';
 import { listCombinations } from '@/lib/changes/list-combinations';
+import { withLatest } from '@/lib/changes/with-own';
 import { officeCombinations } from '@/lib/changes/office-combinations';
 import type { OfficeSet } from '@/lib/combinations/office-set';
 import type { OwnThing } from '@/lib/intake/own/own-thing';
@@ -45,6 +46,8 @@ function applyOne(
     }
     case 'list combinations':
       return listCombinations(input, change, by);
+    case 'own version':
+      return withLatest(input, change, own);
     case 'office combinations': {
       const set = sets.get(setKey(change));
       if (!set) throw new RangeError(`Expected version ${change.version} of the office's combination set ${change.set}`);

@@ -3,10 +3,10 @@ import type { SectionChange } from '@/lib/changes/change';
 import { asksFor } from '@/lib/changes/members-asked';
 import { sectionSource, sourceKey, type SectionSource } from '@/lib/changes/section-source';
 import { type CellEdits, withCells } from '@/lib/changes/with-cell';
+import { withOwn } from '@/lib/changes/with-own';
 import type { RawCell, RawRow } from '@/lib/intake/files/raw-sheet';
 import { idText } from '@/lib/intake/ids';
 import type { Intake } from '@/lib/intake/intake';
-import { ownSheets } from '@/lib/intake/own/own-sheets';
 import type { OwnThing } from '@/lib/intake/own/own-thing';
 import type { FrameSeen } from '@/lib/intake/read-input';
 import { plainCell } from '@/lib/intake/rows/cell-marks';
@@ -127,15 +127,6 @@ export function changeSection(input: StoredInput, read: InputRead, change: Secti
   }
   const after = edited(input, edits, added, by);
   return { input: withOwn(after, read.seen[0]?.batch.ownSections.taken ?? new Set()), section: to.section, members: changed };
-}
-
-/** The input with the office's own sections that it takes: its rows say by themselves what its frames are made of. */
-function withOwn({ sheets, rows }: StoredInput, taken: ReadonlySet<OwnThing>): StoredInput {
-  const parts = ownSheets([...taken], sheets.length, sheets.map(({ name }) => name)).flatMap((sheet) => sheet.parts); // prettier-ignore
-  return {
-    sheets: [...sheets, ...parts.map(({ name, file, decimalMark }) => ({ name, file, decimalMark }))],
-    rows: [...rows, ...parts.flatMap((part) => rowsOfPart(part, part.order))],
-  };
 }
 
 /** A template's row once more for one frame, whose place it takes there. */

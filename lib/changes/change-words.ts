@@ -1,4 +1,4 @@
-import type { Change, ListCombinationsChange, OfficeCombinationsChange, SectionChange } from '@/lib/changes/change';
+import type { Change, ListCombinationsChange, OfficeCombinationsChange, OwnVersionChange, SectionChange } from '@/lib/changes/change';
 import { askedWords } from '@/lib/changes/members-asked';
 import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
@@ -16,7 +16,7 @@ export interface ChangeWords {
 }
 
 /** @param before the settings of the revision that is changed */
-export function changeWords(change: Exclude<Change, SectionChange | OfficeCombinationsChange>, before: Settings): ChangeWords {
+export function changeWords(change: Exclude<Change, SectionChange | OfficeCombinationsChange | OwnVersionChange>, before: Settings): ChangeWords {
   if (change.kind === 'list combinations') return { what: 'combinations', ...listedWords(change, before) };
   const { setting, value } = change;
   const read = readSetting(setting, value);

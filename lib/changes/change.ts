@@ -93,12 +93,20 @@ export const sectionChange = z.strictObject({
   to: id('the section that they take'),
 });
 
+/** The office's latest version of a section or material takes the place of the one that the revision was read with. */
+const ownVersionChange = z.strictObject({
+  kind: z.literal('own version'),
+  part: z.enum(['section', 'material'], { error: 'Say what is taken anew: section or material.' }),
+  /** As the office calls it. */
+  name: id('a section or material of the office’s own'),
+});
+
 /** Every kind of change. A further kind is one more line here, one in apply-changes.ts and one in change-words.ts. */
 export const changeSchema = z.discriminatedUnion(
   'kind',
-  [settingChange, sectionChange, listCombinationsChange, officeCombinationsChange],
+  [settingChange, sectionChange, listCombinationsChange, officeCombinationsChange, ownVersionChange],
   {
-    error: 'Say what kind of change it is: setting, section, list combinations or office combinations.',
+    error: 'Say what kind of change it is: setting, section, list combinations, office combinations or own version.',
   },
 );
 
@@ -106,4 +114,5 @@ export type Change = z.infer<typeof changeSchema>;
 export type SettingChange = Extract<Change, { kind: 'setting' }>;
 export type ListCombinationsChange = Extract<Change, { kind: 'list combinations' }>;
 export type OfficeCombinationsChange = Extract<Change, { kind: 'office combinations' }>;
+export type OwnVersionChange = Extract<Change, { kind: 'own version' }>;
 export type SectionChange = Extract<Change, { kind: 'section' }>;

@@ -72,6 +72,17 @@ describe('a section of the office’s own', () => {
       { letter: 'A', version: 1, frames: 1 },
     ]);
     expect(versions).toMatchObject([{ version: 2, note: 'drawing 7 rev. 1' }, { version: 1 }]);
+    // unless it is taken anew: then the frame that has it runs again, and no other
+    const take = { changes: [{ kind: 'own version', part: 'section', name: 'pg 400' }], reason: 'new drawing', run: true };
+    const taken = (await (await analyst.send(`${revisionAddress(b)}/changes`, take)).json()) as { revision: string };
+    const c = { batch: a.batch, revision: taken.revision };
+    await stateBecomes(analyst, c, (state) => state === 'run');
+    const of = async (one: Brought) => (JSON.parse(await results(one)) as Results).frames.map((frame) => JSON.stringify(frame));
+    const [was, is] = [await of(b), await of(c)];
+    expect(is.map((frame, i) => frame === was[i])).toEqual([false, true]);
+    const { changes } = await analyst.json<{ changes: unknown[] }>(`${revisionAddress(c)}/changes`);
+    expect(changes).toMatchObject([{ what: 'section PG 400', from: 'office v1', to: 'office v2' }]);
+    expect((await analyst.send(`${revisionAddress(c)}/changes`, take)).status).toBe(400);
     // the sheets brought in anew take the latest
     const anew = await bring(analyst, north, ...sheets('PG 400'));
     await run(analyst, anew);

@@ -6,6 +6,7 @@ import type { RevisionRecord } from '@/db/queries/revisions';
 import { may, type Person } from '@/lib/access/may';
 import { pages } from '@/lib/api/addresses';
 import { originOfPart } from '@/lib/intake/own/own-thing';
+import { TakeVersion } from './take-version';
 
 /** Sections and grades of the office's own that the frames are made of, by version; and the way to other sections. */
 export async function MadeOf({ person, revision }: { readonly person: Person; readonly revision: RevisionRecord }) {
@@ -37,7 +38,7 @@ export async function MadeOf({ person, revision }: { readonly person: Person; re
         <ul className="made-of">
           {own.map((part) => {
             const now = kept.find(({ kind, name }) => kind === part.kind && name === part.own);
-            const newer = now && part.version !== null && now.version > part.version ? ` Version ${now.version} is newer.` : '';
+            const newer = now !== undefined && now.retiredAt === null && part.version !== null && now.version > part.version;
             return (
               <li key={`${part.kind} ${part.name}`}>
                 {now ? (
@@ -47,7 +48,10 @@ export async function MadeOf({ person, revision }: { readonly person: Person; re
                 ) : (
                   part.name
                 )}
-                : {originOfPart(part)}, in {part.frames.toLocaleString('en-GB')} {part.frames === 1 ? 'frame' : 'frames'}.{newer}
+                : {originOfPart(part)}, in {part.frames.toLocaleString('en-GB')} {part.frames === 1 ? 'frame' : 'frames'}.
+                {newer && may(person, 'change a revision') && (
+                  <TakeVersion batch={batch} letter={letter} part={part.kind} name={now.name} version={now.version} />
+                )}
               </li>
             );
           })}
