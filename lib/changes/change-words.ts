@@ -1,4 +1,10 @@
-import type { Change, ListCombinationsChange, OfficeCombinationsChange, OwnVersionChange, SectionChange } from '@/lib/changes/change';
+import type {
+  Change,
+  ListCombinationsChange,
+  OfficeCombinationsChange,
+  OwnVersionChange,
+  SectionChange,
+} from '@/lib/changes/change';
 import { askedWords } from '@/lib/changes/members-asked';
 import type { SectionPreview } from '@/lib/changes/section-preview';
 import { settingText } from '@/lib/changes/setting-text';
@@ -16,7 +22,10 @@ export interface ChangeWords {
 }
 
 /** @param before the settings of the revision that is changed */
-export function changeWords(change: Exclude<Change, SectionChange | OfficeCombinationsChange | OwnVersionChange>, before: Settings): ChangeWords {
+export function changeWords(
+  change: Exclude<Change, SectionChange | OfficeCombinationsChange | OwnVersionChange>,
+  before: Settings,
+): ChangeWords {
   if (change.kind === 'list combinations') return { what: 'combinations', ...listedWords(change, before) };
   const { setting, value } = change;
   const read = readSetting(setting, value);

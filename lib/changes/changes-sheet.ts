@@ -13,7 +13,7 @@ import { type Role, roles } from '@/lib/model/frame';
 import type { Problem } from '@/lib/problems/problem';
 import * as say from '@/lib/problems/wording';
 
-export const changesDefinition: SheetDefinition = {
+const changesDefinition: SheetDefinition = {
   name: 'Changes',
   columns: new Map([
     ['frame', null],

@@ -104,7 +104,7 @@ function sectionsOf(table: Table, reader: Reader, problems: ProblemList, units: 
 }
 
 /** The section as it will be read from the record that is kept. */
-export function resolvedSection(record: OwnRecord): Section {
+function resolvedSection(record: OwnRecord): Section {
   const { read } = again('section', record);
   const section = read instanceof Sections ? read.rows()[0]?.[1].section : null;
   if (!section) throw new RangeError(`Expected a record of a section, got ${JSON.stringify(record)}`);
