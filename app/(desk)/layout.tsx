@@ -21,7 +21,7 @@ export default async function DeskLayout({ children }: { readonly children: Reac
       ? [{ label: 'Combinations', href: '/combinations', within: ['/combinations'] }]
       : []),
     ...(may(person, 'read limits') ? [{ label: 'Limits', href: '/limits', within: ['/limits'] }] : []),
-    ...(may(person, 'read people') ? [{ label: 'People', href: '/people', within: ['/people', '/letters'] }] : []),
+    ...(may(person, 'read people') ? [{ label: 'People', href: '/people', within: ['/people', '/letters', '/activity'] }] : []),
     ...(may(person, 'read what was issued') ? [{ label: 'Issued', href: '/issued', within: ['/issued'] }] : []),
   ];
   return (

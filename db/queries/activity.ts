@@ -84,13 +84,14 @@ export async function listActivity(db: Db, office: number, asked: ActivityAsked 
   return rows.map((row) => ({ ...row, detail: JSON.parse(row.detail) as ActivityListed['detail'] }));
 }
 
-/** Who did anything in a project, and which kinds of things were done: what its activity can be filtered by. */
+/** Who did anything in a project, or in the whole office, and what: what its activity can be filtered by. */
 export async function listActivityChoices(
   db: Db,
   office: number,
-  project: number,
+  project?: number,
 ): Promise<{ readonly people: readonly { readonly id: number; readonly name: string }[]; readonly whats: readonly string[] }> {
-  const of = db.selectFrom('activity').where('activity.office', '=', office).where('activity.project', '=', project);
+  const all = db.selectFrom('activity').where('activity.office', '=', office);
+  const of = project === undefined ? all : all.where('activity.project', '=', project);
   const people = await of
     .innerJoin('person', 'person.id', 'activity.person')
     .select(['person.id', 'person.name'])

@@ -44,6 +44,7 @@ const table = {
   'change people': ['lead'],
   'read letters': ['lead'],
   'read activity': staff,
+  'read the office’s activity': ['lead'],
   'be oneself': personRoles,
   'read issues': staff,
   issue: ['lead', 'checker'],

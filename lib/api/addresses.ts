@@ -39,6 +39,7 @@ export const pages = {
   letter: (letter: string) => `/letters/${e(letter)}`,
   forgotten: '/password',
   activity: (project: number) => `/projects/${project}/activity`,
+  officeActivity: '/activity',
   sections: '/sections',
   own: '/sections/own',
   ownNew: (kind: OwnKind) => `/sections/own/${ownPaths[kind]}/new`,
@@ -80,7 +81,8 @@ export const pages = {
         : `?frame=${e(of.frame)}${of.member === undefined ? '' : `&member=${e(of.member)}`}`
     }`,
   /** The same with the section that they take filled in. */
-  changeTo: (batch: number, letter: string, { what, to }: SectionChange) => `${pages.change(batch, letter, viewOfAsked(what))}&to=${e(to)}`,
+  changeTo: (batch: number, letter: string, { what, to }: SectionChange) =>
+    `${pages.change(batch, letter, viewOfAsked(what))}&to=${e(to)}`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>
@@ -116,7 +118,7 @@ export const api = {
   tokens: '/api/me/tokens',
   token: (token: number) => `/api/me/tokens/${token}`,
   letterAgain: (letter: number) => `/api/letters/${letter}/again`,
-  activity: (project: number, search = '') => `/api/projects/${project}/activity${search}`,
+  officeActivityExport: (search = '') => `/api/activity/export${search}`,
   activityExport: (project: number, search = '') => `/api/projects/${project}/activity/export${search}`,
   sections: '/api/sections',
   own: (kind: OwnKind) => `/api/own/${ownPaths[kind]}`,
@@ -156,7 +158,8 @@ export const api = {
     `/api/batches/${batch}/revisions/${e(letter)}/checking/queries/${query}`,
   checkingFrame: (batch: number, letter: string, number: number, part?: 'seen' | 'queries' | 'acceptances' | 'own-values') =>
     `/api/batches/${batch}/revisions/${e(letter)}/checking/frames/${number}${part === undefined ? '' : `/${part}`}`,
-  changesSheet: (batch: number, letter: string, search = '') => `/api/batches/${batch}/revisions/${e(letter)}/changes/sheet${search}`,
+  changesSheet: (batch: number, letter: string, search = '') =>
+    `/api/batches/${batch}/revisions/${e(letter)}/changes/sheet${search}`,
   preview: (batch: number, letter: string) => `/api/batches/${batch}/revisions/${e(letter)}/changes/preview`,
   table: (batch: number, letter: string, view: View, more: Readonly<Record<string, string | number>> = {}) =>
     tableAddress(batch, letter, view, '', more),

@@ -72,6 +72,7 @@ describe('every page by axe', () => {
     '/people',
     `/people/${people.north.people.analyst}`,
     '/letters',
+    '/activity',
     '/me',
     '/limits',
     '/combinations',

@@ -22,9 +22,14 @@ export default async function PeoplePage() {
   const projects = await listProjects(db(), lead.office);
   const failed = (await listLetters(db(), lead.office, { state: 'failed' })).length;
   const letters = (
-    <Link className="link" href={pages.letters}>
-      {failed === 0 ? 'Letters sent' : failed === 1 ? '1 letter failed' : `${failed} letters failed`}
-    </Link>
+    <span className="flex gap-4">
+      <Link className="link" href={pages.officeActivity}>
+        Activity
+      </Link>
+      <Link className="link" href={pages.letters}>
+        {failed === 0 ? 'Letters sent' : failed === 1 ? '1 letter failed' : `${failed} letters failed`}
+      </Link>
+    </span>
   );
   const list = (
     <>

@@ -56,6 +56,17 @@ describe('a project’s activity', () => {
     expect(lines[1]).toMatch(/,analyst of north,started a run,"'=1\+1, revision A",/);
   });
 
+  it('of the whole office is the lead’s: people and settings stand in it too', async () => {
+    const email = 'activity.wren@client.example';
+    await lead.send('/api/people/invitations', { email, role: 'client' });
+    const { entries } = await lead.json<Told>('/api/activity?what=invited+a+person');
+    expect(JSON.stringify(entries[0])).toContain(email);
+    expect(await (await lead.fetch('/api/activity/export?what=invited+a+person')).text()).toContain(email);
+    expect(await (await lead.fetch('/activity')).text()).toContain('invited a person');
+    const south = await signedIn(url, 'south', 'lead');
+    expect(await (await south.fetch('/api/activity')).text()).not.toContain(email);
+  });
+
   it('is shown on a page with its filters, and not at all to another office', async () => {
     const page = await (await lead.fetch(`/projects/${project}/activity?what=started+a+run`)).text();
     expect(page).toContain('revision A');
