@@ -27,6 +27,7 @@ export function publicRevision(revision: RevisionRecord) {
     runStartedAt,
     runFinishedAt,
     madeFrom: revision.madeFrom,
+    issued: revision.issued && { number: revision.issued.number, by: revision.issued.name, at: revision.issued.at },
     sentToCheck: revision.sent && { by: revision.sent.name, at: revision.sent.at },
     checked: revision.checked && { by: revision.checked.name, at: revision.checked.at },
   };
