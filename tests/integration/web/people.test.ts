@@ -94,7 +94,8 @@ describe('an invitation', () => {
 
   it('to an address that signs in to another office says so to its owner only', async () => {
     const email = emailOf('south', 'checker');
-    expect((await invite(email)).status, 'the lead learns nothing of it').toBe(201);
+    const made = await invite(email);
+    expect(made.status, 'the lead learns nothing of it').toBe(201);
     const letter = await letterTo({ dataDir, office: north.office, to: email, kind: 'invitation' });
     const answer = await new Visitor(url).send('/api/invitation', {
       token: secretOf(linkIn(letter)),
@@ -103,6 +104,9 @@ describe('an invitation', () => {
     });
     expect([answer.status, (await refusal(answer)).message]).toEqual([409, expect.stringContaining('another office')]);
     await signedIn(url, 'south', 'checker'); // whose password is what it was
+    // The link stays good, and with it the invitation.
+    const { invitation } = (await made.json()) as { invitation: { id: number } };
+    expect((await lead.fetch(`/api/people/invitations/${invitation.id}`, { method: 'DELETE' })).status).toBe(200);
   });
 });
 
