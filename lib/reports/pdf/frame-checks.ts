@@ -1,11 +1,12 @@
 /** Checks of a frame, worst first, and the working of those that govern. */
 import { workingLines } from '@/lib/checks/working-lines';
+import type { WorkingLine } from '@/lib/checks/working-parts';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Acceptance } from '@/lib/reports/issue-cover';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { checkPlace } from '@/lib/results/check-place';
-import type { Check } from '@/lib/results/result';
+import type { Check, Verdict } from '@/lib/results/result';
 import { unitLabel } from '@/lib/units/batch-unit';
 import { formatQuantity, formatRatio } from '@/lib/units/format';
 import type { Flow } from './flow';
@@ -13,7 +14,7 @@ import { verdictInk } from './ink';
 import { acceptedWords } from './summary-pages';
 import { table, type Row } from './table';
 import { verdictMark } from './verdict-shapes';
-import { workingLinesSet, type Box } from './working-boxes';
+import { overflows, workingLinesSet, type Box } from './working-boxes';
 import { wrap } from './wrap';
 
 /** Checks listed in full; of more only those that are flagged, and the worst of each subject and of each kind. */
@@ -95,20 +96,31 @@ export function workingPart(flow: Flow, frame: Frame, checks: readonly Check[], 
   const shown = worst.filter((check) => check.verdict === 'over').length + others.length;
   const more = over > shown ? `; ${over - shown} more that are over are worked out in the workbook` : '';
   flow.heading('Working', `the worst of each kind of check${others.length > 0 ? ', and others that are over' : ''}${more}`);
-  flow.need(Math.min(blocks[0]!.height, flow.whole - 40));
-  // each in the column that is shorter so far
+  flow.need(Math.min(heightOfLines(blocks[0]!), 160));
+  // each in the column that is shorter so far, carried on in the next where it is taller than what is left
   let ends = [flow.y, flow.y];
   for (const block of blocks) {
-    const k = ends[0]! <= ends[1]! ? 0 : 1;
-    if (ends[k]! + block.height > flow.zones.bottom && ends[k]! > flow.zones.y) {
-      flow.nextSheet();
-      ends = [flow.y, flow.y];
-      block.draw(flow.x, flow.y);
-      ends[0] = flow.y + block.height + 9;
-      continue;
+    let rest: Block | null = block;
+    while (rest) {
+      const [left = 0, right = 0] = ends;
+      if (rest.wide) ends = [Math.max(left, right), Math.max(left, right)];
+      let k: number = left <= right || rest.wide ? 0 : 1;
+      let fits = linesThatFit(rest, flow.zones.bottom - ends[k]!);
+      if (fits === 0) {
+        flow.nextSheet();
+        ends = [flow.y, flow.y];
+        k = 0;
+        fits = Math.max(1, linesThatFit(rest, flow.room));
+      }
+      const now: Block = { ...rest, lines: rest.lines.slice(0, fits) };
+      drawBlock(flow, now, flow.x + k * (columnWidth(flow) + between), ends[k]!);
+      ends[k] = ends[k]! + heightOfLines(now) + 9;
+      if (rest.wide) ends = [ends[k]!, ends[k]!];
+      const more = rest.lines.slice(fits);
+      // read on to the right, then on the next sheet
+      if (more.length > 0) ends = k === 0 && !rest.wide ? [flow.zones.bottom, ends[1]!] : [flow.zones.bottom, flow.zones.bottom];
+      rest = more.length > 0 ? { ...rest, title: block.carried, lines: more } : null;
     }
-    block.draw(flow.x + k * (columnWidth(flow) + between), ends[k]!);
-    ends[k] = ends[k]! + block.height + 9;
   }
   flow.y = Math.min(Math.max(...ends), flow.zones.bottom);
 }
@@ -118,57 +130,81 @@ const labelWidth = 72;
 const size = 8.6;
 const columnWidth = (flow: Flow): number => (flow.width - between) / 2;
 
-interface Block {
+interface LineSet {
+  readonly what: readonly string[];
+  readonly boxes: readonly Box[];
+  readonly source: readonly string[];
   readonly height: number;
-  draw(x: number, y: number): void;
+}
+/** A check's calculation. */
+interface Block {
+  readonly title: readonly string[];
+  /** Over the part of it that stands elsewhere. */
+  readonly carried: readonly string[];
+  readonly ratio: string;
+  readonly verdict: Verdict;
+  readonly lines: readonly LineSet[];
+  /** Across both columns: one of its formulas needs the room. */
+  readonly wide: boolean;
 }
 
-function blockOf(flow: Flow, frame: Frame, check: Check, lines: ReturnType<typeof workingLines>, nearLimit: number): Block {
+const headOf = ({ title }: Block): number => title.length * 11 + 5;
+const heightOfLines = (block: Block): number => headOf(block) + block.lines.reduce((sum, line) => sum + line.height, 0) + 2;
+
+/** Lines of a block that fit into a height: all, or so many that neither part is a scrap; 0 = it begins elsewhere. */
+function linesThatFit(block: Block, room: number): number {
+  if (heightOfLines(block) <= room) return block.lines.length;
+  let tall = headOf(block) + 2;
+  let count = 0;
+  while (count < block.lines.length && tall + block.lines[count]!.height <= room) tall += block.lines[count++]!.height;
+  const kept = Math.min(count, block.lines.length - 2);
+  return kept >= 3 ? kept : 0;
+}
+
+function blockOf(flow: Flow, frame: Frame, check: Check, lines: readonly WorkingLine[], nearLimit: number): Block {
   const { faces } = flow.file;
-  const width = columnWidth(flow);
-  const set = lines.map((line) => {
-    const what = wrap(line.what, faces.condensed, 8, labelWidth - 6);
+  const wide = lines.some(({ parts }) => overflows(parts, faces, size, columnWidth(flow) - labelWidth));
+  const width = widthOf(flow, wide);
+  const set = lines.map((line): LineSet => {
+    const what = wrap(plainly(line.what), faces.condensed, 8, labelWidth - 6);
     const boxes = workingLinesSet(line.parts, faces, size, width - labelWidth);
-    const source = line.source ? wrap(line.source, faces.condensed, 7.6, width - labelWidth) : [];
+    const source = line.source ? wrap(plainly(line.source), faces.condensed, 7.6, width - labelWidth) : [];
     const calculated = boxes.reduce((sum, box) => sum + heightOf(box), 0) + source.length * 9.4;
     return { what, boxes, source, height: Math.max(what.length * 9.6, calculated) + 4 };
   });
   const name = `${checkPlace(frame, check)}, ${check.check}`;
+  const title = (words: string): string[] => wrap(words, faces.condensedBold, 9, width - 52);
   const ratio = formatRatio(check.ratio, nearLimit);
-  const title = wrap(name, faces.condensedBold, 9, width - 52);
-  const head = title.length * 11 + 5;
-  return {
-    height: head + set.reduce((sum, line) => sum + line.height, 0) + 2,
-    draw(x, y) {
-      const { canvas } = flow;
-      title.forEach((line, i) => canvas.text(line, x, y + 8.5 + 11 * i, { face: faces.condensedBold, size: 9 }));
-      const right = x + width;
-      canvas.text(ratio, right, y + 8.5, {
-        face: faces.condensedBold,
-        size: 9,
-        colour: verdictInk[check.verdict],
-        anchor: 'end',
-      });
-      verdictMark(canvas, check.verdict, right - faces.condensedBold.width(ratio, 9) - 11, y + 8.5, 7);
-      let at = y + head - 1;
-      canvas.line(x, at, right, at, { width: 0.75 });
-      for (const line of set) {
-        line.what.forEach((words, i) =>
-          canvas.text(words, x, at + 9 + 9.6 * i, { face: faces.condensed, size: 8, colour: 'ink2' }),
-        );
-        let down = at + 2;
-        for (const box of line.boxes) {
-          box.draw(canvas, x + labelWidth, down + Math.max(box.above, 6.4) + 0.6);
-          down += heightOf(box);
-        }
-        line.source.forEach((words, i) =>
-          canvas.text(words, x + labelWidth, down + 7 + 9.4 * i, { face: faces.condensed, size: 7.6, colour: 'ink2' }),
-        );
-        at += line.height;
-        canvas.line(x, at, right, at, { colour: 'hair', width: 0.5 });
-      }
-    },
-  };
+  return { title: title(name), carried: title(`${name}, continued`), ratio, verdict: check.verdict, lines: set, wide };
 }
+
+const widthOf = (flow: Flow, wide: boolean): number => (wide ? flow.width : columnWidth(flow));
+
+function drawBlock(flow: Flow, { title, ratio, verdict, lines, wide }: Block, x: number, y: number): void {
+  const { faces } = flow.file;
+  const { canvas } = flow;
+  const right = x + widthOf(flow, wide);
+  title.forEach((line, i) => canvas.text(line, x, y + 8.5 + 11 * i, { face: faces.condensedBold, size: 9 }));
+  canvas.text(ratio, right, y + 8.5, { face: faces.condensedBold, size: 9, colour: verdictInk[verdict], anchor: 'end' });
+  verdictMark(canvas, verdict, right - faces.condensedBold.width(ratio, 9) - 11, y + 8.5, 7);
+  let at = y + title.length * 11 + 4;
+  canvas.line(x, at, right, at, { width: 0.75 });
+  for (const { what, boxes, source, height } of lines) {
+    what.forEach((words, i) => canvas.text(words, x, at + 9 + 9.6 * i, { face: faces.condensed, size: 8, colour: 'ink2' }));
+    let down = at + 2;
+    for (const box of boxes) {
+      box.draw(canvas, x + labelWidth, down + Math.max(box.above, 6.4) + 0.6);
+      down += heightOf(box);
+    }
+    source.forEach((words, i) =>
+      canvas.text(words, x + labelWidth, down + 7 + 9.4 * i, { face: faces.condensed, size: 7.6, colour: 'ink2' }),
+    );
+    at += height;
+    canvas.line(x, at, right, at, { colour: 'hair', width: 0.5 });
+  }
+}
+
+/** "α_cr" without its sign for a subscript, where it is set in one size. */
+const plainly = (words: string): string => words.replace(/([A-Za-zΑ-ωλχ])_([A-Za-z0-9])/gu, '$1$2');
 
 const heightOf = (box: Box): number => Math.max(box.above, 6.4) + Math.max(box.below, 1.9) + 2.2;

@@ -126,7 +126,7 @@ function lineOf(each: ReportFrame): FrameLine {
 }
 
 /** Why a frame has no solution; null where it has one. */
-export function whyUnsolved({ frame, evaluation }: ReportFrame): string | null {
+function whyUnsolved({ frame, evaluation }: ReportFrame): string | null {
   if (frame === null) return 'errors in its sheets stop it';
   if (evaluation === null) return 'it has not been run';
   return evaluation.status === 'solved'

@@ -50,7 +50,7 @@ export function summaryPages(flow: Flow, source: ReportSource, facts: ReportFact
 }
 
 /** "3 over, 4 near …": all that aren't none. */
-export function tallyWords(counts: ReportFacts['counts']): string {
+function tallyWords(counts: ReportFacts['counts']): string {
   const told = verdicts.flatMap((verdict) => (counts[verdict] === 0 ? [] : [`${counts[verdict]} ${verdict}`]));
   return told.length === 0 ? 'No frame' : `${told.join(', ')}.`;
 }

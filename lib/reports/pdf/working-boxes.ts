@@ -14,6 +14,8 @@ export interface Box {
 type Faces = PdfFile['faces'];
 
 const gap = 3;
+/** After these a formula may go on in the next line, which begins with them. */
+const signs: ReadonlySet<string> = new Set(['=', '+', '−', '·', '≤', '≥']);
 
 /** The parts of a line, wrapped at a width; each line is a box. */
 export function workingLinesSet(
@@ -25,20 +27,53 @@ export function workingLinesSet(
 ): Box[] {
   const lines: Box[][] = [[]];
   let used = 0;
-  for (const { box, tight, apart } of spaced(parts, faces, size, colour)) {
+  let lastBox = '';
+  const all = spaced(parts, faces, size, colour);
+  for (const [at, { box, text, tight, apart }] of all.entries()) {
+    // "N = 35 kN" stays together
+    if (apart && used + 9 + [0, 1, 2].reduce((sum, k) => sum + gap + (all[at + k]?.box.width ?? 0), 0) > width) {
+      lines.push([]);
+      used = 0;
+    }
     for (const [i, piece] of (box.width > width - used && box.pieces ? box.pieces() : [box]).entries()) {
       const before = used === 0 || (tight && i === 0) ? 0 : apart && i === 0 ? 9 : gap * (i > 0 ? 0.7 : 1);
       if (used > 0 && used + before + piece.width > width) {
-        lines.push([]);
-        used = 0;
+        // a line begins with its sign, rather than that the one before ends with it
+        const sign = signs.has(lastBox) && lines[lines.length - 1]!.length > 1 ? lines[lines.length - 1]!.pop() : undefined;
+        lines.push(sign ? [sign, blank(gap)] : []);
+        used = sign ? sign.width + gap : 0;
+        if (sign) {
+          lines[lines.length - 1]!.push(piece);
+          used += piece.width;
+          lastBox = '';
+          continue;
+        }
       }
+      lastBox = text;
       const row = lines[lines.length - 1]!;
       if (row.length > 0 && before > 0) row.push(blank(before));
       row.push(piece);
       used += (used === 0 ? 0 : before) + piece.width;
     }
   }
-  return lines.map(beside);
+  return lines.map((line) => fitted(beside(line), width));
+}
+
+/** Whether a line has a part that is wider than it may be. */
+export function overflows(parts: readonly WorkingPart[], faces: Faces, size: number, width: number): boolean {
+  return spaced(parts, faces, size, 'ink').some(({ box }) => box.width > width && !box.pieces);
+}
+
+/** Made smaller where it is too wide. */
+function fitted(box: Box, width: number): Box {
+  if (box.width <= width) return box;
+  const k = width / box.width;
+  return {
+    width,
+    above: box.above * k,
+    below: box.below * k,
+    draw: (canvas, x, baseline) => canvas.placed(x, baseline, k, () => box.draw(canvas, 0, 0)),
+  };
 }
 
 interface Part extends Box {
@@ -52,7 +87,7 @@ function spaced(
   faces: Faces,
   size: number,
   colour: Ink,
-): { box: Part; tight: boolean; apart: boolean }[] {
+): { box: Part; text: string; tight: boolean; apart: boolean }[] {
   let before = '';
   return parts.map((part, i) => {
     // "N = 35 kN" and what is given after it
@@ -66,15 +101,15 @@ function spaced(
     const text = 'text' in part ? part.text : '';
     const tight = before === '' || before.endsWith('(') || /^[,;:)²³]/.test(text);
     before = 'text' in part ? part.text : 'x';
-    return { box: boxOf(part, faces, size, colour), tight, apart };
+    return { box: boxOf(part, faces, size, colour), text: part.kind === 'text' ? part.text : '', tight, apart };
   });
 }
 
 function boxOf(part: WorkingPart, faces: Faces, size: number, colour: Ink): Part {
   switch (part.kind) {
     case 'text': {
-      const set = (words: string): Box => word(words, faces, 'condensed', size, colour);
-      return { ...set(part.text), pieces: () => part.text.split(' ').map(set) };
+      const set = (words: string): Box => worded(words, faces, size, colour);
+      return { ...inlineWords(part.text.split(' ').map(set)), pieces: () => part.text.split(' ').map(set) };
     }
     case 'symbol':
       return symbolBox(part, faces, size, colour);
@@ -104,6 +139,21 @@ function word(text: string, faces: Faces, face: keyof Faces, size: number, colou
     draw: (canvas, x, baseline) => canvas.text(text, x, baseline, { face: faces[face], size, colour }),
   };
 }
+
+/** A word in which "α_cr" has its subscript. */
+function worded(text: string, faces: Faces, size: number, colour: Ink): Box {
+  const [, before = '', symbol, sub, after = ''] = /^([(\[]*)([^_\s]{1,3})_([A-Za-z0-9,]*[A-Za-z0-9])(.*)$/u.exec(text) ?? [];
+  if (symbol === undefined || sub === undefined) return word(text, faces, 'condensed', size, colour);
+  const plain = (words: string): Box => word(words, faces, 'condensed', size, colour);
+  return beside([
+    plain(before),
+    symbolBox({ symbol, sub }, faces, size, colour),
+    after === '' ? blank(0) : worded(after, faces, size, colour),
+  ]);
+}
+
+const inlineWords = (words: readonly Box[]): Box =>
+  beside(words.flatMap((box, i) => (i === 0 ? [box] : [blank(gap * 0.7), box])));
 
 /** Latin letters slope, Greek ones and words stand. */
 function symbolBox(
