@@ -6,6 +6,7 @@ import type { BucklingSpace } from './critical/buckling-trial';
 import { nextCriticalLoadFactor, type CriticalMemory } from './critical/neighbour-critical';
 import type { SolvedCases } from './first-order-cases';
 import type { StateTrouble } from './failures';
+import { axialForcesOf } from './imperfections/axial-forces-of';
 import type { ImperfectionForces } from './imperfections/imperfection-forces';
 import { toLocal } from './load-vectors';
 import { memberDataFor } from './member-data';
@@ -31,6 +32,7 @@ export interface SetJob {
   readonly forces: ImperfectionForces | null;
   /** First-order states of the combination at hand, by its slack members. */
   readonly firsts: Map<string, FirstOrder>;
+  readonly start: StartForces;
   reductions: { readonly squash: Float64Array; readonly general: Float64Array } | null;
 }
 
@@ -74,7 +76,9 @@ function solved(
 ): SetResult {
   const { frame, t, space, settings } = job;
   const factors = first.state.factors;
-  const guess = startForces(first.state.endForces);
+  const guess = startForces(job, first.state.endForces);
+  const leans = planned.order === 2 && notional !== null && slack.length === 0;
+  if (leans) addLeaning(job, planned, notional);
   const analyse = planned.order === 2 ? solveSecondOrder : firstOrderCombination;
   let stiffness = planned.reduced ? reductions(job).general : null;
   let iterations = 0;
@@ -107,6 +111,7 @@ function solved(
       continue;
     }
     const { change, displacements, reactions, endForces, outOfBalance, handled } = result;
+    if (leans && planned.imperfection === 'right') remember(job, planned.combination, endForces);
     const whole: StateMethod = {
       ...method, imperfection: planned.imperfection, notional, loadScale, slack, iterations, change,
     }; // prettier-ignore
@@ -116,11 +121,48 @@ function solved(
   return { ok: false, trouble: { kind: 'not settled', reached: 1 } };
 }
 
+/**
+ * Adds what the imperfections do to the axial forces, to first order; leaning to the left together with what second order made
+ * of them when the same combination leaned to the right, for it will make much the same again.
+ */
+function addLeaning(
+  { t, solved, start }: SetJob,
+  { combination, imperfection, loadScale }: PlannedState,
+  notional: Float64Array,
+): void {
+  const { N, begun, beyond, leaned } = start;
+  axialForcesOf(solved, t, notional, leaned);
+  const again = imperfection !== 'right' && start.combination === combination;
+  for (let i = 0; i < N.length; i++) N[i] = begun[i] = N[i]! + leaned[i]! / loadScale + (again ? beyond[i]! : 0);
+}
+
+/** What second order made of the forces that the right-leaning state was begun with. */
+function remember({ start }: SetJob, combination: number, endForces: Float64Array): void {
+  const { begun, beyond } = start;
+  start.combination = combination;
+  for (let i = 0; i < beyond.length; i++) beyond[i] = endForces[6 * i]! - begun[i]!;
+}
+
 /** N at each member's start. */
-function startForces(endForces: Float64Array): Float64Array {
-  const N = new Float64Array(endForces.length / 6);
+function startForces({ start: { N } }: SetJob, endForces: Float64Array): Float64Array {
   for (let i = 0; i < N.length; i++) N[i] = endForces[6 * i]!;
   return N;
+}
+
+/** Axial forces that a state begins from, by member. */
+export interface StartForces {
+  readonly N: Float64Array;
+  /** As the last state that leans was begun; what its imperfections do to first order. */
+  readonly begun: Float64Array;
+  readonly leaned: Float64Array;
+  /** What the state of `combination` that leans to the right came to, less what it was begun with. */
+  readonly beyond: Float64Array;
+  combination: number;
+}
+
+export function startOf(members: number): StartForces {
+  const row = (): Float64Array => new Float64Array(members);
+  return { N: row(), begun: row(), leaned: row(), beyond: row(), combination: -1 };
 }
 
 /**

@@ -1,7 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
-import { analyseSet, criticalOf, type SetJob } from './analyse-set';
+import { analyseSet, criticalOf, startOf, type SetJob } from './analyse-set';
 import type { SolvedState } from './certificate';
 import { bucklingSpace } from './critical/buckling-trial';
 import { criticalMemory } from './critical/neighbour-critical';
@@ -45,6 +45,7 @@ export function combinationStates(
     critical: criticalMemory(frame, t),
     forces: imperfectionForces(frame, settings),
     firsts: new Map(),
+    start: startOf(frame.members.length),
     reductions: null,
   };
   const states: SolvedState[] = [];

@@ -21,6 +21,9 @@ export interface SolvedCases {
   readonly diagonal: Float64Array;
   readonly norm: number;
   readonly condition: number;
+  /** K as factored. */
+  readonly K: Float64Array;
+  readonly inner: Float64Array;
   readonly loads: LoadVectors;
   readonly d: Float64Array;
   readonly recovered: readonly Recovered[];
@@ -55,7 +58,7 @@ export function solveCases(frame: Frame, t: Topology, shearDeformation: boolean)
   solve(K, t, inner, d, frame.cases.length); // K d = f
   const recovered = frame.cases.map((_, c) => recover(frame, t, angles, loads, d, c, data)); // q = k T d + q_F, R = K d − f
   const cases = recovered.map((r, c) => caseState(frame, r, c, method));
-  return { angles, data, diagonal, norm, condition: condition.condition, loads, d, recovered, cases };
+  return { angles, data, diagonal, norm, condition: condition.condition, K, inner, loads, d, recovered, cases };
 }
 
 function caseState(frame: Frame, recovered: Recovered, index: number, method: StateMethod | null): ResultState {

@@ -6,10 +6,6 @@ import {
 import { FlatLines } from './flat-lines';
 import { gravity, memberData } from './member-data';
 
-/** Five Gauss points on −1 … 1 with their weights: exact to degree 9. */
-const gaussAt = [0, -0.5384693101056831, 0.5384693101056831, -0.906179845938664, 0.906179845938664] as const;
-const gaussWeight = [128 / 225, 0.47862867049936647, 0.47862867049936647, 0.23692688505618908, 0.23692688505618908] as const;
-
 /**
  * What moving does to the moment of all loads and reactions of a second-order state, N·m: Σ (u_x F_y − u_y F_x) where loads
  * as typed and reactions act, and Σ ∫ Q u′ dx along the members, for equilibrium is reckoned on members that keep their
@@ -123,19 +119,31 @@ function unloaded(frame: Frame, state: ResultState, member: number, scale: numbe
   return ((x * cos + y * sin) / length) * (bend - scale * state.endForces[e]! * (y * cos - x * sin));
 }
 
-/** ∫ Q u′ dx, Q = V − N v′ (movements as analysed: × scale). */
+const product = new Float64Array(2 * segmentNumbers);
+
+/** ∫ Q u′ dx, Q = V − N v′ (movements as analysed: × scale), term by term. */
 function shortening(lines: Float64Array, line: number, scale: number): number {
   let sum = 0;
   for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
-    const half = (lines[o + 1]! - lines[o]!) / 2;
-    if (!(half > 0)) continue;
-    for (let g = 0; g < 5; g++) {
-      const s = half * (1 + gaussAt[g]!);
-      const V = valueAt(lines, o + ofV, lines[o + degreeV]!, s);
-      const N = valueAt(lines, o + ofN, lines[o + degreeN]!, s);
-      const turn = slopeAt(lines, o + ofDeflection, lines[o + degreeDeflection]!, s);
-      const strain = slopeAt(lines, o + ofU, lines[o + degreeU]!, s);
-      sum += half * gaussWeight[g]! * (V - scale * N * turn) * strain;
+    const h = lines[o + 1]! - lines[o]!;
+    if (!(h > 0)) continue;
+    const ofQ = Math.max(lines[o + degreeV]!, lines[o + degreeN]! + lines[o + degreeDeflection]! - 1);
+    for (let k = 0; k <= ofQ; k++) product[k] = k <= lines[o + degreeV]! ? lines[o + ofV + k]! : 0;
+    for (let n = lines[o + degreeN]!; n >= 0; n--) {
+      const N = scale * lines[o + ofN + n]!;
+      if (N === 0) continue;
+      for (let k = lines[o + degreeDeflection]!; k > 0; k--)
+        product[n + k - 1] = product[n + k - 1]! - N * k * lines[o + ofDeflection + k]!;
+    }
+    let power = h;
+    for (let r = 1; r <= lines[o + degreeU]!; r++) {
+      const strain = r * lines[o + ofU + r]!;
+      if (strain !== 0) {
+        let part = 0;
+        for (let k = ofQ; k >= 0; k--) part = part * h + product[k]! / (k + r);
+        sum += strain * power * part;
+      }
+      power *= h;
     }
   }
   return sum;
@@ -200,10 +208,4 @@ function valueAt(lines: Float64Array, at: number, degree: number, s: number): nu
   let value = 0;
   for (let k = degree; k >= 0; k--) value = value * s + lines[at + k]!;
   return value;
-}
-
-function slopeAt(lines: Float64Array, at: number, degree: number, s: number): number {
-  let slope = 0;
-  for (let k = degree; k > 0; k--) slope = slope * s + k * lines[at + k]!;
-  return slope;
 }

@@ -65,7 +65,12 @@ export function prepare(input: SecondOrderInput, order: 1 | 2): Work {
     all[o + 2] = all[o + 2]! + k * (s.rz_rad ?? 0);
     settled = true;
   }
-  for (let i = 0; i < data.length; i++) {
+  const { made } = space;
+  const again = !slack && made.factors === factors && made.data === data && made.loadScale === loadScale;
+  made.factors = slack ? null : factors;
+  made.data = data;
+  made.loadScale = loadScale;
+  for (let i = 0; i < data.length && !again; i++) {
     const loading = loadings[i]!;
     combineLoading(frame, i, factors, loadScale, loading);
     const m = data[i]!;

@@ -1,7 +1,9 @@
 import type { Frame } from '@/lib/model/frame';
+import type { MemberData } from '../member-data';
 import type { Topology } from '../topology';
 import { emptyPasses, type Passes } from './next-guess';
 import { emptyLoading, type MemberLoading } from './member-loading';
+import { emptyPiece, type Piece } from './piece';
 
 /** Room for second-order analyses of one frame, used again by every combination. */
 export interface SecondOrderSpace {
@@ -15,11 +17,17 @@ export interface SecondOrderSpace {
   readonly nodeForces: Float64Array;
   readonly all: Float64Array;
   readonly loadings: readonly MemberLoading[];
+  /** What `loadings` and `held` were last made for, so that both directions of a combination share them; null = nothing. */
+  readonly made: { factors: Float64Array | null; data: readonly MemberData[] | null; loadScale: number };
   /** By member: N at the start of each as taken and as answered, and answered with both ends held along it. */
   readonly N: Float64Array;
   readonly answer: Float64Array;
   readonly held: Float64Array;
   readonly passes: Passes;
+  /** Members as the state at hand has them, ends clamped to the nodes. */
+  readonly pieces: readonly Piece[];
+  /** Rotations of their own ends, 2 a member. */
+  readonly turns: Float64Array;
 }
 
 export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
@@ -34,9 +42,12 @@ export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
     nodeForces: row(3 * frame.nodes.length),
     all: row(3 * frame.nodes.length),
     loadings: frame.members.map(emptyLoading),
+    made: { factors: null, data: null, loadScale: 1 },
     N: row(members),
     answer: row(members),
     held: row(members),
     passes: emptyPasses(members),
+    pieces: frame.members.map(emptyPiece),
+    turns: row(2 * members),
   };
 }

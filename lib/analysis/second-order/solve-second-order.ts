@@ -87,9 +87,12 @@ export function solveSecondOrder(input: SecondOrderInput): SecondOrderResult {
   const { N } = input.space;
   if (input.guess) for (let i = 0; i < N.length; i++) N[i] = input.guess[i]! * input.loadScale;
   else N.fill(0);
-  const straight = settle(work, 1);
-  if (straight.how === 'still' && straight.held < hesitant && work.turn <= mostTurn)
-    return recoverSecondOrder(work, straight.change);
+  let straight = settle(work, 1, true);
+  while (straight.how === 'still' && straight.held < hesitant && work.turn <= mostTurn) {
+    const state = recoverSecondOrder(work, straight.change);
+    if (!straight.foreseen || state.change <= still) return state;
+    straight = settle(work, 1);
+  }
   return inSteps(work);
 }
 
@@ -106,17 +109,21 @@ interface Settled {
   readonly change: number;
   /** What the second pass changed of what the first did. */
   readonly held: number;
+  /** The next pass would have changed nothing any more, by what the last one changed of the one before. */
+  readonly foreseen?: boolean;
 }
 
 /**
  * Repeats N ← share × (answer to N) from the N at hand until it stands still, each time with what the last passes say of the
  * next, so that a slow or swinging approach is a short one.
+ * @param foresee stop one pass short where that would change nothing: recovery makes up for it and says what is left
  */
-function settle(work: Work, share: number): Settled {
+function settle(work: Work, share: number, foresee = false): Settled {
   const { N, answer, loadings, passes } = work.input.space;
   let change = Infinity;
   let held = 0;
   let begun = 0;
+  let before = Infinity;
   work.share = share;
   let ahead = false;
   forget(passes);
@@ -145,6 +152,11 @@ function settle(work: Work, share: number): Settled {
     }
     if (pass === 0) begun = moved;
     else if (pass === 1) held = moved / begun;
+    if (foresee && pass > 0 && (moved / before) * moved <= 0.2 * still * size) {
+      N.set(answer);
+      return { how: 'still', change, held, foreseen: true };
+    }
+    before = moved;
     ahead = nextGuess(N, answer, passes);
   }
   N.set(answer);
