@@ -42,7 +42,7 @@ export function OwnSection({ section, units }: { readonly section: Section; read
         symbol: label,
         value: si === null ? null : formatNumber(libraryNumber(si, quantity, units), { significant: 4 }),
         unit: libraryUnit(quantity, units),
-        source: key === 'mass' ? 'at 7,850 kg/m³' : given ? 'given' : 'derived',
+        source: given && key !== 'mass' ? 'given' : 'derived',
       };
     });
   const outline = outlineOfSection(section);

@@ -30,7 +30,7 @@ export function SectionFacts({ name, properties }: { readonly name: string; read
         <tbody>
           {properties.map(({ key, what, symbol, value, unit, source }) => (
             <tr key={key}>
-              <th scope="row" className="tbl-plain">
+              <th scope="row" className="tbl-plain section-fact">
                 {what}
               </th>
               <td>{symbol}</td>

@@ -15,7 +15,7 @@ export interface UseLine {
 export function UsedIn({ name, uses }: { readonly name: string; readonly uses: readonly UseLine[] }) {
   if (uses.length === 0) return <p>No revision is made of it yet.</p>;
   return (
-    <div className="tbl-scroll" role="region" tabIndex={0} aria-label={`Revisions made of ${name}, scrolls`}>
+    <div className="tbl-scroll section-list" role="region" tabIndex={0} aria-label={`Revisions made of ${name}, scrolls`}>
       <table className="tbl">
         <caption className="sr-only">Revisions made of {name}</caption>
         <thead>

@@ -11,7 +11,7 @@ export interface VersionLine {
 /** Every version of one of the office's own, the latest first. */
 export function VersionList({ name, versions }: { readonly name: string; readonly versions: readonly VersionLine[] }) {
   return (
-    <div className="tbl-scroll" role="region" tabIndex={0} aria-label={`Versions of ${name}, scrolls`}>
+    <div className="tbl-scroll section-list" role="region" tabIndex={0} aria-label={`Versions of ${name}, scrolls`}>
       <table className="tbl">
         <caption className="sr-only">Versions of {name}</caption>
         <thead>

@@ -110,7 +110,7 @@ export function ImportTable({ kind }: { readonly kind: OwnKind }) {
             <Notice kind="error">Nothing is kept while a cell is wrong: mend what is named and choose the file again.</Notice>
           )}
           {read.records.length > 0 && (
-            <div className="tbl-scroll section-members" role="region" tabIndex={0} aria-label="What the table says">
+            <div className="tbl-scroll section-list section-members" role="region" tabIndex={0} aria-label="What the table says">
               <table className="tbl">
                 <caption className="sr-only">What the table says</caption>
                 <thead>

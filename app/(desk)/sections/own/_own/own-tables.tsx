@@ -15,7 +15,7 @@ const versionText = ({ version, retiredAt }: OwnPart): string =>
 export function OwnSectionTable({ parts }: { readonly parts: readonly OwnPart[] }) {
   if (parts.length === 0) return <p>The office keeps no section of its own.</p>;
   return (
-    <div className="tbl-scroll" role="region" tabIndex={0} aria-label="The office’s own sections, scrolls">
+    <div className="tbl-scroll section-list" role="region" tabIndex={0} aria-label="The office’s own sections, scrolls">
       <table className="tbl">
         <caption className="sr-only">The office’s own sections</caption>
         <thead>
@@ -73,7 +73,7 @@ export function OwnSectionTable({ parts }: { readonly parts: readonly OwnPart[] 
 export function GradeTable({ parts }: { readonly parts: readonly OwnPart[] }) {
   if (parts.length === 0) return <p>The office keeps no steel grade of its own.</p>;
   return (
-    <div className="tbl-scroll" role="region" tabIndex={0} aria-label="The office’s own steel grades, scrolls">
+    <div className="tbl-scroll section-list" role="region" tabIndex={0} aria-label="The office’s own steel grades, scrolls">
       <table className="tbl">
         <caption className="sr-only">The office’s own steel grades</caption>
         <thead>

@@ -37,7 +37,6 @@ const shapes = {
 } as const;
 type ShapeName = keyof typeof shapes;
 
-const optional: Readonly<Record<string, string>> = { r: 'blank: 0; of a hollow section 1.5 t' };
 const ofNone = { h: 'depth', b: 'width', t: 'thickest part' } as const;
 
 const properties: readonly (readonly [column: string, what: string, quantity: Quantity])[] = [
@@ -152,7 +151,14 @@ export function SectionForm({ start }: { readonly start: FormStart }) {
       </div>
       <fieldset className="own-figures">
         <legend>{shape === 'none' ? 'Outer dimensions, where known' : 'Dimensions'}</legend>
-        {of.map((column) => figure(column, label(column), 'dimension', optional[column]))}
+        {of.map((column) =>
+          figure(
+            column,
+            label(column),
+            'dimension',
+            column === 'r' ? (shape === 'rhs' ? 'blank: 1.5 t' : 'blank: 0') : undefined,
+          ),
+        )}
       </fieldset>
       <details className="own-properties" open={shape === 'none' || given.length > 0}>
         <summary>Published properties, used as given in place of derived ones</summary>

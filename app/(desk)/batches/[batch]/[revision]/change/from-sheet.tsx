@@ -108,7 +108,7 @@ export function FromSheet({ batch, letter, next }: FromSheetProps) {
               : `${read.carriedOver.toLocaleString('en-GB')} other frames keep their`}{' '}
             results, carried over from {letter}.
           </p>
-          <div className="tbl-scroll" role="region" tabIndex={0} aria-label="What the sheet changes">
+          <div className="tbl-scroll section-list" role="region" tabIndex={0} aria-label="What the sheet changes">
             <table className="tbl">
               <caption className="sr-only">What the sheet changes</caption>
               <thead>
