@@ -7,6 +7,7 @@ import { engineVersion } from '@/lib/analysis/engine-version';
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import { cautions } from '@/lib/reports/cautions';
+import type { Problem } from '@/lib/problems/problem';
 import type { IssueCover } from '@/lib/reports/issue-cover';
 import { writeReport, type ReportAsked } from '@/lib/reports/pdf/write-report';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
@@ -247,10 +248,15 @@ describe('a report of what went wrong', () => {
   };
 
   it('gives a frame without a solution its page with the reason, and names it as not issued', async () => {
-    const { pages, outline } = await made({ source: sourceOf([free], {}, [stopped]), cover: draft });
+    const message = 'Nodes, C4: y must be a number in m; found "4,O". Mend it there.';
+    const slip: Problem = { severity: 'error', code: 'not-a-number', sheet: 'Nodes', file: null, row: 4, column: 'y', cell: 'C4', frames: ['BAD'], found: '4,O', message, stopsAll: false }; // prettier-ignore
+    const source = { ...sourceOf([free], {}, [stopped]), problems: [slip] };
+    const { pages, outline } = await made({ source, cover: draft });
     const [loose, bad] = outline.at(-1)!.items.map(({ page }) => flat(pages[page - 1]!));
     expect(loose).toMatch(/^LOOSE not checked .*Not solved: .*it is not issued/);
     expect(bad).toMatch(/^BAD not checked .*errors in its sheets stop it/);
+    expect(bad).toContain(message);
+    expect(loose).not.toContain(message);
     const flags = flat(pages[outline.find(({ title }) => title === 'Flags')!.page - 1]!);
     expect(flags).toMatch(/Frames not issued .*LOOSE .*BAD errors in its sheets stop it/);
   });

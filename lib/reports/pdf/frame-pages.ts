@@ -4,6 +4,7 @@ import { drawingData } from '@/lib/drawing/frame-drawing-data';
 import { resultMethodWords } from '@/lib/drawing/result-method-words';
 import type { DrawingData } from '@/lib/drawing/drawing-data';
 import type { Frame } from '@/lib/model/frame';
+import type { Problem } from '@/lib/problems/problem';
 import type { Acceptance } from '@/lib/reports/issue-cover';
 import type { ReportFrame, ReportSource } from '@/lib/reports/workbook/report-source';
 import { lineMemo } from '@/lib/results/line-memo';
@@ -21,6 +22,7 @@ import { membersTable, nodesTable } from './frame-model';
 import { forcesTable, reactionsTable } from './frame-results';
 import type { FrameLine } from './report-facts';
 import { acceptedWords } from './summary-pages';
+import { table } from './table';
 import { deflectedView, diagramView, geometryView, ratioView, viewHeight, viewRow } from './views';
 
 export interface FrameAsked {
@@ -46,7 +48,7 @@ export function framePages(flow: Flow, asked: FrameAsked): void {
   facts(flow, asked);
   const { frame, evaluation } = each;
   if (frame === null) {
-    flow.paragraph(`There is no frame to draw: ${line.unsolved ?? ''}.`);
+    stoppedBy(flow, source.problems, line.id);
     return;
   }
   const solved = evaluation !== null && evaluation.status === 'solved' ? evaluation : null;
@@ -155,3 +157,17 @@ const counted = (count: number, what: string): string => `${count} ${what}${coun
 /** A result with its loads, unless its name says them already. */
 const told = (name: string, terms: string | null): string =>
   terms === null || name.startsWith(terms) ? name : `${name}, ${terms}`;
+
+/** The errors in the sheets that keep a frame from being read, each at its cell. */
+function stoppedBy(flow: Flow, problems: readonly Problem[], id: string): void {
+  const errors = problems.filter(({ severity, stopsAll, frames }) => severity === 'error' && (stopsAll || frames.includes(id)));
+  flow.heading('What stops it', errors.length === 0 ? null : 'there is no frame to draw until this is mended');
+  if (errors.length === 0) flow.paragraph('There is no frame to draw.');
+  table(
+    flow,
+    [{ head: 'Sheet' }, { head: 'Cell' }, { head: 'What and what to do', soft: true }],
+    errors.map(({ sheet, cell, row, message }) => ({
+      cells: [sheet ?? '–', cell ?? (row === null ? '–' : `row ${row}`), message],
+    })),
+  );
+}
