@@ -19,6 +19,7 @@ import { createPools } from '@/worker/pools';
 import { WorkQueue } from '@/worker/queue';
 import { checkSeeded } from './check';
 import { issueSeeded } from './issue';
+import { insertOwnSeeded } from './own-parts';
 import { seedOffice, seedPeople, type SeedPerson } from './people';
 import { seedProjects } from './projects';
 
@@ -95,6 +96,7 @@ async function fill(database: OpenDatabase, queue: WorkQueue, samples: string, s
       'The recommended values of EN 1990, as the office uses them for sheds up to 1000 m. Invented for this demonstration.',
     person: idOf('lead'),
   });
+  await insertOwnSeeded(db, office, idOf('lead'));
   for (const { name, number, client, batches } of seedProjects) {
     const lead = idOf('lead');
     const project = (await insertProject(db, office, { name, number, person: lead }))!;
