@@ -150,6 +150,62 @@ function addCoupling(
   }
 }
 
+/**
+ * `addMember` of the frame's member `i`, by where its blocks are known to go; what is not an unknown is left to `addSupports`.
+ * Members at nodes whose supports are turned go the long way.
+ */
+export function addMemberAt(
+  K: Float64Array,
+  t: Topology,
+  i: number,
+  m: MemberData,
+  k: MemberStiffness,
+  angles: Float64Array,
+): void {
+  if (angles[m.start] !== 0 || angles[m.end] !== 0) {
+    addMember(K, t, m, k, angles);
+    return;
+  }
+  const { blocks, turned } = t.places;
+  const c = m.cos;
+  const s = m.sin;
+  const { ka, kvv, kv1, kv2 } = k;
+  const xx = c * c * ka + s * s * kvv;
+  const xy = c * s * (ka - kvv);
+  const yy = s * s * ka + c * c * kvv;
+  const start = blocks[3 * i]!;
+  const end = blocks[3 * i + 1]!;
+  if (start >= 0) {
+    K[start] = K[start]! + xx;
+    K[start + 1] = K[start + 1]! + xy;
+    K[start + 2] = K[start + 2]! - s * kv1;
+    K[start + 4] = K[start + 4]! + yy;
+    K[start + 5] = K[start + 5]! + c * kv1;
+    K[start + 8] = K[start + 8]! + k.S11;
+  }
+  if (end < 0) return;
+  K[end] = K[end]! + xx;
+  K[end + 1] = K[end + 1]! + xy;
+  K[end + 2] = K[end + 2]! + s * kv2;
+  K[end + 4] = K[end + 4]! + yy;
+  K[end + 5] = K[end + 5]! - c * kv2;
+  K[end + 8] = K[end + 8]! + k.S22;
+  if (start < 0) return;
+  const at = blocks[3 * i + 2]!;
+  // moments of the row's node in the last column, of the column's node in the last row
+  const right = turned[i] !== 0 ? -kv1 : kv2;
+  const down = turned[i] !== 0 ? -kv2 : kv1;
+  K[at] = K[at]! - xx;
+  K[at + 1] = K[at + 1]! - xy;
+  K[at + 2] = K[at + 2]! - s * right;
+  K[at + 3] = K[at + 3]! - xy;
+  K[at + 4] = K[at + 4]! - yy;
+  K[at + 5] = K[at + 5]! + c * right;
+  K[at + 6] = K[at + 6]! + s * down;
+  K[at + 7] = K[at + 7]! - c * down;
+  K[at + 8] = K[at + 8]! + k.S12;
+}
+
 /** Adds the supports' springs, and 1 on the diagonal of everything that is not an unknown. */
 export function addSupports(K: Float64Array, t: Topology, frame: Frame): void {
   for (const support of frame.supports) {

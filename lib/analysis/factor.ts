@@ -11,6 +11,7 @@ import type { Topology } from './topology';
  * @param diagonal K's own diagonal before, 3 a position
  * @param tolerance a pivot not above tolerance × its own original diagonal stops the work; 0 = never
  *   (for an indefinite K: the number of negative pivots is then the number of negative eigenvalues)
+ *   and a pivot of nothing becomes the smallest negative one that still counts
  * @returns −1, or the row (3 × position + direction) whose pivot is not positive: the frame can move
  */
 export function factor(
@@ -30,8 +31,11 @@ export function factor(
     const q = 6 * i;
     const d01 = K[first + 1]!;
     const d02 = K[first + 2]!;
-    const p0 = pivot(K[first]!, diagonal[r]!, tolerance);
-    if (p0 !== p0) return r;
+    let p0 = K[first]!;
+    const own0 = diagonal[r]!;
+    if (tolerance > 0) {
+      if (!(p0 > tolerance * own0)) return r;
+    } else if (!(Math.abs(p0) > 1e-15 * Math.abs(own0))) p0 = -1e-15 * (Math.abs(own0) || 1);
     const i0 = 1 / p0;
     const l10 = d01 * i0;
     const l20 = d02 * i0;
@@ -39,16 +43,22 @@ export function factor(
     inner[q + 1] = l10;
     inner[q + 2] = l20;
     pivots[r] = p0;
-    const p1 = pivot(K[first + 4]! - l10 * d01, diagonal[r + 1]!, tolerance);
-    if (p1 !== p1) return r + 1;
+    let p1 = K[first + 4]! - l10 * d01;
+    const own1 = diagonal[r + 1]!;
+    if (tolerance > 0) {
+      if (!(p1 > tolerance * own1)) return r + 1;
+    } else if (!(Math.abs(p1) > 1e-15 * Math.abs(own1))) p1 = -1e-15 * (Math.abs(own1) || 1);
     const i1 = 1 / p1;
     const e = K[first + 5]! - l10 * d02;
     const l21 = e * i1;
     inner[q + 3] = i1;
     inner[q + 4] = l21;
     pivots[r + 1] = p1;
-    const p2 = pivot(K[first + 8]! - l20 * d02 - l21 * e, diagonal[r + 2]!, tolerance);
-    if (p2 !== p2) return r + 2;
+    let p2 = K[first + 8]! - l20 * d02 - l21 * e;
+    const own2 = diagonal[r + 2]!;
+    if (tolerance > 0) {
+      if (!(p2 > tolerance * own2)) return r + 2;
+    } else if (!(Math.abs(p2) > 1e-15 * Math.abs(own2))) p2 = -1e-15 * (Math.abs(own2) || 1);
     const i2 = 1 / p2;
     inner[q + 5] = i2;
     pivots[r + 2] = p2;
@@ -104,10 +114,4 @@ export function factor(
     }
   }
   return -1;
-}
-
-/** NaN = the frame can move here. With tolerance 0 a pivot of nothing becomes the smallest negative one that still counts. */
-function pivot(p: number, original: number, tolerance: number): number {
-  if (tolerance > 0) return p > tolerance * original ? p : NaN;
-  return Math.abs(p) > 1e-15 * Math.abs(original) ? p : -1e-15 * (Math.abs(original) || 1);
 }

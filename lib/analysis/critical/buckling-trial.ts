@@ -1,5 +1,5 @@
 import type { Frame } from '@/lib/model/frame';
-import { addMember, addSupports, emptyMemberStiffness } from '../assemble';
+import { addMemberAt, addSupports, emptyMemberStiffness } from '../assemble';
 import { factor } from '../factor';
 import type { MemberData } from '../member-data';
 import type { Topology } from '../topology';
@@ -50,7 +50,7 @@ export function trial(
   for (let i = 0; i < data.length; i++) {
     if (slack.includes(i)) continue;
     bucklingMember(data[i]!, pieces[i]!, lambda, k, count);
-    addMember(K, t, data[i]!, k, angles);
+    addMemberAt(K, t, i, data[i]!, k, angles);
   }
   addSupports(K, t, frame);
   factor(K, t, diagonal, inner, pivots, 0);

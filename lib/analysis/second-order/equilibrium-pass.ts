@@ -1,4 +1,4 @@
-import { addMember, addSupports, diagonalOf, emptyMemberStiffness, memberStiffness } from '../assemble';
+import { addMemberAt, addSupports, diagonalOf, emptyMemberStiffness, memberStiffness } from '../assemble';
 import { scaledNorm } from '../condition';
 import { factor } from '../factor';
 import type { MemberData } from '../member-data';
@@ -90,7 +90,8 @@ export function standsWithoutForces({ input }: Work): boolean {
   const { frame, t, angles, data, slack, space } = input;
   const k = emptyMemberStiffness();
   space.K.fill(0);
-  for (let i = 0; i < data.length; i++) if (!slack?.[i]) addMember(space.K, t, data[i]!, memberStiffness(data[i]!, k), angles);
+  for (let i = 0; i < data.length; i++)
+    if (!slack?.[i]) addMemberAt(space.K, t, i, data[i]!, memberStiffness(data[i]!, k), angles);
   addSupports(space.K, t, frame);
   return factored(input);
 }
@@ -145,7 +146,7 @@ export function respond(work: Work): boolean {
     const loading = loadings[i]!;
     memberChain(m, loading, bendingForce(work, i), true, piece, buckled, work.share);
     if (buckled.yes) return false;
-    addMember(K, t, m, piece, angles);
+    addMemberAt(K, t, i, m, piece, angles);
     let X1 = -held[i]!;
     let { Y1, m1, Y2, m2 } = piece;
     let X2 = held[i]! + loading.endN;
@@ -161,8 +162,14 @@ export function respond(work: Work): boolean {
       m1 += piece.kv1 * v + piece.S11 * u[2]! + piece.S12 * u[5]!;
       m2 += piece.kv2 * v + piece.S12 * u[2]! + piece.S22 * u[5]!;
     }
-    take(d, t.positionOf[m.start]!, angles[m.start]!, m, X1, Y1, m1);
-    take(d, t.positionOf[m.end]!, angles[m.end]!, m, X2, Y2, m2);
+    ends[0] = X1;
+    ends[1] = Y1;
+    ends[2] = m1;
+    ends[3] = X2;
+    ends[4] = Y2;
+    ends[5] = m2;
+    take(d, t.positionOf[m.start]!, angles, m, 0);
+    take(d, t.positionOf[m.end]!, angles, m, 3);
   }
   addSupports(K, t, frame);
   for (let p = 0; p < t.size; p++) for (let r = 0; r < 3; r++) if (!t.free[3 * t.nodeAt[p]! + r]) d[3 * p + r] = 0;
@@ -217,11 +224,14 @@ function localMovement(m: MemberData, angles: Float64Array, free: Uint8Array | n
   }
 }
 
-/** d −= Tᵀ q at one end. */
-function take(d: Float64Array, p: number, angle: number, m: MemberData, X: number, Y: number, M: number): void {
+/** d −= Tᵀ q at one end, q in `ends` from `e`. */
+function take(d: Float64Array, p: number, angles: Float64Array, m: MemberData, e: number): void {
   if (p < 0) return;
+  const X = ends[e]!;
+  const Y = ends[e + 1]!;
   let x = X * m.cos - Y * m.sin;
   let y = X * m.sin + Y * m.cos;
+  const angle = angles[e === 0 ? m.start : m.end]!;
   if (angle !== 0) {
     const ca = Math.cos(angle);
     const sa = Math.sin(angle);
@@ -232,5 +242,5 @@ function take(d: Float64Array, p: number, angle: number, m: MemberData, X: numbe
   const o = 3 * p;
   d[o] = d[o]! - x;
   d[o + 1] = d[o + 1]! - y;
-  d[o + 2] = d[o + 2]! - M;
+  d[o + 2] = d[o + 2]! - ends[e + 2]!;
 }

@@ -1,7 +1,7 @@
 import type { MemberData } from '../member-data';
 import { stride, type MemberLoading } from './member-loading';
 import { closed, emptyPiece, emptyTransfer, follow, jump, type Piece } from './piece';
-import { longest, transferAlong } from './transfer';
+import { given, longest, transferGiven } from './transfer';
 
 /** Where the axial force leaves a member no stiffness, so that the frame is past its critical load. */
 export interface Buckled {
@@ -57,8 +57,16 @@ export function memberChain(
     for (let j = 0; j < pieces; j++) {
       const s = j * h;
       const T = fresh ? whole : one;
-      const q0 = stretches[o + 4]! + s * q1;
-      transferAlong(m.EI, slip, h, a + s * (n1 + s * n2), n1 + 2 * s * n2, n2, q0, q1, loading.curvature, T);
+      given[0] = m.EI;
+      given[1] = slip;
+      given[2] = h;
+      given[3] = a + s * (n1 + s * n2);
+      given[4] = n1 + 2 * s * n2;
+      given[5] = n2;
+      given[6] = stretches[o + 4]! + s * q1;
+      given[7] = q1;
+      given[8] = loading.curvature;
+      transferGiven(T);
       if (j === 0) jump(T, stretches[o + 6]!, stretches[o + 7]!);
       if (!fresh) follow(whole, one);
       done += slender / pieces;

@@ -16,10 +16,19 @@ const mostDeflection = 8;
 /** A tie that damps what comes in at its ends by more than e to this is not followed from one end to the other. */
 const dampest = 6;
 
-const loading: MemberLoading = emptyLoading();
+/** Loads of the members in the last combination asked for: both of its directions have the same. */
+const known = {
+  frame: null as Frame | null,
+  factors: null as Float64Array | null,
+  loadings: [] as MemberLoading[],
+  made: new Uint8Array(0),
+};
+let loading: MemberLoading = emptyLoading();
 let pieces: LinePieces = emptyPieces(16);
 let turned: LinePieces = emptyPieces(16);
 const at: PieceEnd = { v: 0, psi: 0, M: 0, Q: 0 };
+/** Of the line at hand: one object, for a new one for each line costs more than what is in it. */
+const ends = { v1: 0, v2: 0, phi1: 0, phi2: 0, V: 0, M: 0 };
 
 /**
  * Internal forces and deflected line of a member of a second-order state, as polynomials between load points (more where
@@ -30,20 +39,39 @@ export function secondOrderLine(frame: Frame, state: ResultState, member: number
   const scale = state.method?.loadScale ?? 1;
   const e = 6 * member;
   const N0 = state.endForces[e]!;
-  combineLoading(frame, member, state.factors, 1, loading);
+  loading = loadingOf(frame, state.factors, member);
   const d = state.displacements;
   const [a, b] = [3 * m.start, 3 * m.end];
   const v1 = d[a + 1]! * m.cos - d[a]! * m.sin;
   const v2 = d[b + 1]! * m.cos - d[b]! * m.sin;
-  const ends = { v1, v2, phi1: d[a + 2]!, phi2: d[b + 2]!, V: state.endForces[e + 1]!, M: state.endForces[e + 2]! };
+  ends.v1 = v1;
+  ends.v2 = v2;
+  ends.phi1 = d[a + 2]!;
+  ends.phi2 = d[b + 2]!;
+  ends.V = state.endForces[e + 1]!;
+  ends.M = state.endForces[e + 2]!;
   const u1 = d[a]! * m.cos + d[a + 1]! * m.sin;
   // where an axial force that varies brings in higher powers than are gone to, pieces are halved until they don't matter
   for (let finer = 1; ; finer *= 2) {
     pieces = cut(m, loading, scale * N0, scale, finer, pieces);
     if (damping(m) > dampest) along(m, tieStarts(m, loading, pieces, ends));
-    else follow(m, scale * N0, ends);
+    else follow(m, scale * N0);
     if (written(m, state.endForces, e, u1, v2, scale, finer < 16, into)) return;
   }
+}
+
+function loadingOf(frame: Frame, factors: Float64Array, member: number): MemberLoading {
+  if (known.frame !== frame) {
+    while (known.loadings.length < frame.members.length) known.loadings.push(emptyLoading());
+    if (known.made.length < frame.members.length) known.made = new Uint8Array(frame.members.length);
+  }
+  if (known.frame !== frame || known.factors !== factors) known.made.fill(0);
+  known.frame = frame;
+  known.factors = factors;
+  const found = known.loadings[member]!;
+  if (!known.made[member]) combineLoading(frame, member, factors, 1, found);
+  known.made[member] = 1;
+  return found;
 }
 
 export interface LineEnds {
@@ -67,7 +95,7 @@ function damping(m: MemberData): number {
 }
 
 /** From piece to piece, from the forces and the rotation at the start. */
-function follow(m: MemberData, N: number, ends: LineEnds): void {
+function follow(m: MemberData, N: number): void {
   const slip = m.GAv === Infinity ? 0 : 1 / m.GAv;
   const known = m.startSpring > 0;
   const psi = !known

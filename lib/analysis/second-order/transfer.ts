@@ -31,13 +31,31 @@ export function transferAlong(
   kappa: number,
   out: Transfer,
 ): void {
-  if (n1 === 0 && n2 === 0) constant(EI, slip, l, N, q0, q1, kappa, out);
-  else varying(EI, slip, l, N, n1, n2, q0, q1, kappa, out);
-  out.Q_p = l * (q0 + 0.5 * l * q1);
+  given[0] = EI;
+  given[1] = slip;
+  given[2] = l;
+  given[3] = N;
+  given[4] = n1;
+  given[5] = n2;
+  given[6] = q0;
+  given[7] = q1;
+  given[8] = kappa;
+  transferGiven(out);
+}
+
+/** What `transferAlong` is asked for, in its order: numbers in a row are not made anew for every call. */
+export const given = new Float64Array(9);
+
+/** `transferAlong` of what stands in `given`. */
+export function transferGiven(out: Transfer): void {
+  if (given[4] === 0 && given[5] === 0) constant(out);
+  else varying(out);
+  out.Q_p = given[2]! * (given[6]! + 0.5 * given[2]! * given[7]!);
 }
 
 /** N constant: M″ = ωM + …, ω = N/(EI μ), μ = 1 + N/GAv, in C_k = Σ zⁱ/(2i + k)!, z = ωl² (Stumpff 1959): C_k = 1/k! + z C_{k+2}. */
-function constant(EI: number, slip: number, l: number, N: number, q0: number, q1: number, kappa: number, out: Transfer): void {
+function constant(out: Transfer): void {
+  const EI = given[0]!, slip = given[1]!, l = given[2]!, N = given[3]!, q0 = given[6]!, q1 = given[7]!, kappa = given[8]!; // prettier-ignore
   const mu = 1 + N * slip;
   const bend = N / mu;
   const z = (bend * l * l) / EI;
@@ -73,18 +91,9 @@ function constant(EI: number, slip: number, l: number, N: number, q0: number, q1
 }
 
 /** N varies: the same by power series in s/l, term from term, with N as it is. */
-function varying(
-  EI: number,
-  slip: number,
-  l: number,
-  N: number,
-  n1: number,
-  n2: number,
-  q0: number,
-  q1: number,
-  kappa: number,
-  out: Transfer,
-): void {
+function varying(out: Transfer): void {
+  const EI = given[0]!, slip = given[1]!, l = given[2]!, N = given[3]!, n1 = given[4]!, n2 = given[5]!; // prettier-ignore
+  const q0 = given[6]!, q1 = given[7]!, kappa = given[8]!; // prettier-ignore
   const a1 = n1 * l;
   const a2 = n2 * l * l;
   const b = l / EI;
