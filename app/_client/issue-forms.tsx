@@ -25,7 +25,7 @@ export function Ask({ address, frame }: { readonly address: string; readonly fra
   return (
     <form
       ref={form}
-      className="flex flex-col gap-2"
+      className="issue-ask flex flex-col gap-2"
       noValidate
       onSubmit={(event) => {
         event.preventDefault();
@@ -70,7 +70,7 @@ export function Say({ address, label, button }: { readonly address: string; read
   return (
     <form
       ref={form}
-      className="flex flex-col gap-2"
+      className="issue-ask flex flex-col gap-2"
       noValidate
       onSubmit={(event) => {
         event.preventDefault();

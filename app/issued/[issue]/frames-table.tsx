@@ -45,7 +45,7 @@ export function FramesTable({ rows, units, nearLimit, chosen, hrefOf, asked }: F
             <th scope="col" className="num">
               Ratio
             </th>
-            <th scope="col" aria-label="Level" />
+            <th scope="col" className="issue-wide" aria-label="Level" />
             <th scope="col">Verdict</th>
             <th scope="col">Questions</th>
           </tr>
@@ -74,7 +74,7 @@ export function FramesTable({ rows, units, nearLimit, chosen, hrefOf, asked }: F
               <td className="num">
                 <RatioText ratio={row.ratio} verdict={row.verdict} nearLimit={nearLimit} />
               </td>
-              <td>
+              <td className="issue-wide">
                 <LevelBar ratio={row.ratio} verdict={row.verdict} />
               </td>
               <td className="issue-wraps">
