@@ -15,7 +15,7 @@ export interface AlteredFrame {
 }
 
 /** A share by which the order of additions may differ and nothing else: below it a number is the same. */
-export const sameWithin = 1e-9;
+const sameWithin = 1e-9;
 
 /** @returns null where every verdict, ratio, movement, reaction and force is as it was stored */
 export function alteredFrame(

@@ -17,7 +17,7 @@ export interface IssuingCase {
 }
 
 /** Whether a role may issue at all in this office. */
-export const mayRoleIssue = (role: IssuingCase['role'], checkersIssue: boolean): boolean =>
+const mayRoleIssue = (role: IssuingCase['role'], checkersIssue: boolean): boolean =>
   role === 'lead' || (role === 'checker' && checkersIssue);
 
 /**
