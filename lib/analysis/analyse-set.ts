@@ -150,7 +150,7 @@ function startForces({ start: { N } }: SetJob, endForces: Float64Array): Float64
 }
 
 /** Axial forces that a state begins from, by member. */
-export interface StartForces {
+interface StartForces {
   readonly N: Float64Array;
   /** As the last state that leans was begun; what its imperfections do to first order. */
   readonly begun: Float64Array;
