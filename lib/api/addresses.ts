@@ -21,12 +21,11 @@ function searchOf(chosen: CompareChosen): string {
   return pieces.length === 0 ? '' : `?${pieces.join('&')}`;
 }
 
-/** A view of the members table that shows the members asked for; those named one by one are of one frame. */
-function viewOfAsked({ members, ...criteria }: SectionChange['what']): View {
-  const values = new Map(Object.entries(criteria).map(([key, value]) => [key, [value]]));
-  if (members) values.set('frame', [members[0]?.frame ?? '']).set('member', members.map(({ member }) => member)); // prettier-ignore
-  const filters = [...values].map(([column, some]) => ({ column, op: 'in' as const, values: some }));
-  return { table: 'members', filters, sort: null, columns: null };
+/** What of an address asks for members: those named one by one are of one frame, others a view of the members table. */
+function askedSearch({ members, ...criteria }: SectionChange['what']): string {
+  if (members) return `?frame=${e(members[0]?.frame ?? '')}${members.map(({ member }) => `&member=${e(member)}`).join('')}`;
+  const filters = Object.entries(criteria).map(([column, value]) => ({ column, op: 'in' as const, values: [value] }));
+  return viewToSearch({ table: 'members', filters, sort: null, columns: null });
 }
 
 export const pages = {
@@ -82,7 +81,7 @@ export const pages = {
     }`,
   /** The same with the section that they take filled in. */
   changeTo: (batch: number, letter: string, { what, to }: SectionChange) =>
-    `${pages.change(batch, letter, viewOfAsked(what))}&to=${e(to)}`,
+    `/batches/${batch}/${e(letter)}/change${askedSearch(what)}&to=${e(to)}`,
   table: (batch: number, letter: string, view: View) => `/batches/${batch}/${e(letter)}/${view.table}${viewToSearch(view)}`,
   /** A frame within the list that the view gives; its number is its place in sheet order, from 1. */
   frame: (batch: number, letter: string, number: number, list?: View) =>

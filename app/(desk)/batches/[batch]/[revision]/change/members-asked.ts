@@ -19,14 +19,13 @@ interface MembersAsked {
  * group are handed on as such, so that a change is for all that fit; any other view for the members that it shows.
  */
 export async function membersAsked(revision: RevisionRecord, params: URLSearchParams): Promise<MembersAsked> {
-  const [frame, member] = [params.get('frame'), params.get('member')];
-  if (frame && member && params.getAll('member').length === 1)
-    return { what: { members: [{ frame, member }] }, tooMany: false, none: false };
+  // members have no filter of their own: each is named beside the one frame that they are of
+  const [[frame, ...frames], named] = [params.getAll('frame'), params.getAll('member')];
+  if (frame && frames.length === 0 && named.length > 0)
+    return { what: { members: named.slice(0, mostMembers).map((member) => ({ frame, member })) }, tooMany: false, none: false };
   const view = viewFromParams('members', params);
   const filters = view.filters.filter((filter) => filter.op !== 'in' || filter.values.some((value) => value !== ''));
   if (filters.length === 0) return { what: null, tooMany: false, none: false };
-  const named = asMembers(filters);
-  if (named) return { what: { members: named }, tooMany: false, none: false };
   const criteria = asCriteria(filters);
   if (criteria) return { what: criteria, tooMany: false, none: false };
   const members = new Map<string, { frame: string; member: string }>();
@@ -41,16 +40,6 @@ export async function membersAsked(revision: RevisionRecord, params: URLSearchPa
     if (members.size > mostMembers) return { what: null, tooMany: true, none: false };
   }
   return { what: members.size === 0 ? null : { members: [...members.values()] }, tooMany: false, none: members.size === 0 };
-}
-
-/** Members of one frame, each by its name; null where the view is any other. */
-function asMembers(filters: readonly Filter[]): { frame: string; member: string }[] | null {
-  const valuesOf = (column: string): readonly string[] =>
-    filters.flatMap((filter) => (filter.column === column && filter.op === 'in' ? filter.values : []));
-  const [frames, members] = [valuesOf('frame'), valuesOf('member')];
-  const [frame] = frames;
-  if (filters.length !== 2 || frames.length !== 1 || frame === undefined || members.length === 0) return null;
-  return members.map((member) => ({ frame, member }));
 }
 
 function asCriteria(filters: readonly Filter[]): SectionChange['what'] | null {
