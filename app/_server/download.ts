@@ -1,4 +1,5 @@
 import 'server-only';
+import { Readable } from 'node:stream';
 
 const kinds: Readonly<Record<string, string>> = {
   csv: 'text/csv; charset=utf-8',
@@ -21,4 +22,11 @@ export function attachment(name: string, content: ReadableStream<Uint8Array> | U
   });
   if (content instanceof Uint8Array) headers.set('content-length', String(content.byteLength));
   return new Response(content, { headers });
+}
+
+/** What is made piece by piece, texts in UTF-8, as the body of a reply. */
+export function bodyOf(pieces: AsyncIterable<unknown> | Iterable<unknown>): ReadableStream<Uint8Array> {
+  const encoder = new TextEncoder();
+  const bytes = Readable.from(pieces).map((piece: unknown) => (typeof piece === 'string' ? encoder.encode(piece) : piece));
+  return Readable.toWeb(bytes) as ReadableStream<Uint8Array>;
 }

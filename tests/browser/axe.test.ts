@@ -104,7 +104,7 @@ describe('every page by axe', () => {
     '/no/such/page',
   ];
 
-  it('finds nothing on any page of the office, light or dark', async () => {
+  it('finds nothing on any page of the office, light or dark', { timeout: 360_000 }, async () => {
     const context = await browser.newContext({ viewport: { width: 1440, height: 900 } });
     const first = await context.newPage();
     const found = [

@@ -1,6 +1,6 @@
-import { PassThrough, Readable } from 'node:stream';
+import { PassThrough } from 'node:stream';
 import { door } from '@/app/_server/door';
-import { attachment } from '@/app/_server/download';
+import { attachment, bodyOf } from '@/app/_server/download';
 import { requirePerson } from '@/app/_server/person';
 import { db } from '@/db/client';
 import { listOwnParts } from '@/db/queries/own-parts';
@@ -39,13 +39,13 @@ export const GET = door(async (request) => {
   }
   const sheet = librarySheet(rows, view.units);
   const name = `Tallyframe sections${view.range === null ? '' : ` ${view.range}`}.${format}`;
-  if (format === 'csv') return attachment(name, bytesOf(Readable.from(csvOf(sheet))));
+  if (format === 'csv') return attachment(name, bodyOf(csvOf(sheet)));
   const sink = new PassThrough();
   writeXlsx([sheet], sink).then(
     () => (sink.writableEnded ? undefined : sink.end()),
     (error: unknown) => sink.destroy(error instanceof Error ? error : new Error('The workbook could not be written')),
   );
-  return attachment(name, bytesOf(sink));
+  return attachment(name, bodyOf(sink));
 });
 
 /** The office's own sections whose names hold what is searched for; none where a range is chosen. */
@@ -71,5 +71,3 @@ async function ownFitting(office: number, { search, range }: LibraryView) {
       ];
     });
 }
-
-const bytesOf = (stream: Readable): ReadableStream<Uint8Array> => Readable.toWeb(stream.map((piece: unknown) => typeof piece === 'string' ? new TextEncoder().encode(piece) : piece)) as ReadableStream<Uint8Array>; // prettier-ignore

@@ -1,6 +1,6 @@
 import { activityCsv, askedActivity } from '@/app/_server/activity';
 import { door } from '@/app/_server/door';
-import { attachment } from '@/app/_server/download';
+import { attachment, bodyOf } from '@/app/_server/download';
 import { parse, queryOf } from '@/app/_server/input';
 import { requirePerson } from '@/app/_server/person';
 import { activityInput } from '@/lib/api/people-inputs';
@@ -9,5 +9,5 @@ import { activityInput } from '@/lib/api/people-inputs';
 export const GET = door(async (request) => {
   const lead = await requirePerson(request, 'read the office’s activity');
   const asked = askedActivity(undefined, parse(activityInput, queryOf(request)));
-  return attachment(`Activity of ${lead.officeName}.csv`, ReadableStream.from(activityCsv(lead.office, asked)));
+  return attachment(`Activity of ${lead.officeName}.csv`, bodyOf(activityCsv(lead.office, asked)));
 });

@@ -1,7 +1,6 @@
-import { Readable } from 'node:stream';
 import { atRevision } from '@/app/_server/at-revision';
 import { door } from '@/app/_server/door';
-import { attachment } from '@/app/_server/download';
+import { attachment, bodyOf } from '@/app/_server/download';
 import { requireSizing } from '@/app/_server/sizings';
 import { ApiError } from '@/lib/api/error';
 import { csvOf } from '@/lib/reports/workbook/write-csv';
@@ -13,8 +12,7 @@ export const GET = door(
     const { found, id } = await requireSizing(revision, params.sizing);
     if (found === null) throw new ApiError('conflict', 'This sizing has not found anything yet.');
     const sheet = sizingSheet(found, revision.units, revision.settings?.nearLimit ?? 0.9);
-    const bytes = Readable.from(csvOf(sheet)).map((piece: unknown) => typeof piece === 'string' ? new TextEncoder().encode(piece) : piece); // prettier-ignore
     const name = `${revision.batchName} ${revision.letter} sizing ${id}.csv`;
-    return attachment(name, Readable.toWeb(bytes) as ReadableStream<Uint8Array>);
+    return attachment(name, bodyOf(csvOf(sheet)));
   }),
 );
