@@ -24,7 +24,8 @@ export type FrameStatus = VersionState | 'stopped';
 /** 0 within, 1 near, 2 not checked, 3 over: larger is worse; −1 = none yet (frames only). */
 export type VerdictRank = number;
 
-export interface DB extends CheckingTables, CombinationSetTables, IssuingTables, MailTables, OwnPartTables, SizingTables, TokenTables {
+export interface DB
+  extends CheckingTables, CombinationSetTables, IssuingTables, MailTables, OwnPartTables, SizingTables, TokenTables {
   office: { id: Generated<number>; name: string; created_at: string };
   person: { id: Generated<number>; email: string; name: string; password_hash: string; created_at: string };
   membership: { office: number; person: number; role: OfficeRole; created_at: string; ended_at: string | null };

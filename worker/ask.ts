@@ -67,8 +67,7 @@ export async function askForSizing(
   queue: WorkQueue,
   { db }: Pick<OpenDatabase, 'db'>,
   of: { readonly office: number; readonly revision: number; readonly person: number } & (
-    | { readonly request: SizingRequest }
-    | { readonly again: number }
+    { readonly request: SizingRequest } | { readonly again: number }
   ),
 ): Promise<number | undefined> {
   const asked = await db.transaction().execute(async (within) => {
