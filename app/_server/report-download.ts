@@ -4,7 +4,7 @@ import { insertActivity } from '@/db/queries/activity';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import type { Person } from '@/lib/access/may';
 import { ApiError } from '@/lib/api/error';
-import { readReportChoice } from '@/lib/reports/pdf/report-choice';
+import { readReportChoice } from '@/lib/reports/report-choice';
 import { pools } from '@/worker/boot';
 import { reportStream } from '@/worker/result-stream';
 import { requireResults } from './result-download';

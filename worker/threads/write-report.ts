@@ -3,7 +3,7 @@ import type { MessagePort } from 'node:worker_threads';
 import type { OpenDatabase } from '@/db/open';
 import { findIssueBasis } from '@/db/queries/issue-basis';
 import type { IssueCover } from '@/lib/reports/issue-cover';
-import type { ReportChoice } from '@/lib/reports/pdf/report-choice';
+import type { ReportChoice } from '@/lib/reports/report-choice';
 import { writeReport } from '@/lib/reports/pdf/write-report';
 import { openOnce } from './open-once';
 import { PortSink } from './port-sink';

@@ -1,6 +1,7 @@
 /** The calculation report of a batch in PDF, written frame by frame into a stream. */
 import type { Writable } from 'node:stream';
 import type { IssueCover } from '@/lib/reports/issue-cover';
+import type { ReportChoice } from '@/lib/reports/report-choice';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { basisPages, partsPages } from './basis-pages';
 import { drawContents, layOutContents, type Entry, type Place } from './contents-pages';
@@ -10,7 +11,6 @@ import { Flow } from './flow';
 import { framePages } from './frame-pages';
 import { PdfFile } from './pdf-file';
 import { reportFacts, type FrameLine, type ReportFacts } from './report-facts';
-import type { ReportChoice } from './report-choice';
 import type { ReportFonts } from './report-fonts';
 import { papers, type BlockFacts, type Paper } from './sheet';
 import { flagPages, summaryPages } from './summary-pages';

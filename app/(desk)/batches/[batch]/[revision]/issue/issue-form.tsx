@@ -9,7 +9,7 @@ import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { request, RequestError } from '@/lib/api/fetch';
-import { framesAsked } from '@/lib/issuing/frames-asked';
+import { readReportChoice } from '@/lib/reports/report-choice';
 
 interface IssueFormProps {
   readonly address: string;
@@ -30,7 +30,7 @@ export function IssueForm({ address, clients, frames, flagged, may, making }: Is
   const [some, setSome] = useState('');
   const [note, setNote] = useState('');
   const [begun, setBegun] = useState(making !== null);
-  const asked = which === 'some' ? framesAsked(some, frames) : null;
+  const asked = which === 'some' ? readReportChoice(some, frames) : null;
   const issue = useMutation({
     mutationFn: (json: object) => request(address, { method: 'POST', json }),
     onSuccess: () => setBegun(true),
@@ -50,7 +50,7 @@ export function IssueForm({ address, clients, frames, flagged, may, making }: Is
       onSubmit={(event) => {
         event.preventDefault();
         if (asked && 'wrong' in asked) return;
-        issue.mutate({ clients: [...chosen], note, frames: asked ? asked.numbers : which });
+        issue.mutate({ clients: [...chosen], note, frames: asked ? asked.frames : which });
       }}
     >
       <fieldset>

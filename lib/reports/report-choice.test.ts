@@ -6,10 +6,13 @@ describe('a choice of frames for a report', () => {
     expect(readReportChoice('all', 9)).toEqual({ frames: 'all' });
     expect(readReportChoice('flagged', 9)).toEqual({ frames: 'flagged' });
     expect(readReportChoice('7, 2-4,3', 9)).toEqual({ frames: [2, 3, 4, 7] });
+    expect(readReportChoice('20, 1-3; 2 – 4,', 50)).toEqual({ frames: [1, 2, 3, 4, 20] });
   });
 
   it.each([
     ['', 'Choose frames as all, flagged, or by their places in sheet order, like 3,7-12.'],
+    [' , ', 'Choose frames as all, flagged, or by their places in sheet order, like 3,7-12.'],
+    ['F12', 'Choose frames as all, flagged, or by their places in sheet order, like 3,7-12.'],
     ['some', 'Choose frames as all, flagged, or by their places in sheet order, like 3,7-12.'],
     ['0', 'Choose frames from 1 to 9; found 0.'],
     ['3-12', 'Choose frames from 1 to 9; found 3-12.'],
