@@ -1,6 +1,7 @@
 /** Which change of the inputs touches a frame or a member that moved, in a few words. */
 import { idKey } from '@/lib/intake/ids';
-import type { InputDifference } from '@/lib/results/compare-inputs';
+import type { FramePair } from '@/lib/results/compare';
+import type { InputDifference, SettingDifference } from '@/lib/results/compare-inputs';
 
 export interface Causes {
   /** Null: nothing in the rows of the sheets; then settings or the engine differ. */
@@ -45,6 +46,18 @@ export function causesOf(differences: readonly InputDifference[], frames: readon
       return said(named.map((touch) => ({ ...touch, rest: '' }))) ?? ofFrame(frame);
     },
   };
+}
+
+/** Whether a frame may have a cause at all: not one that is the same in both, or that one revision has only. */
+export const hasCause = ({ carried, before, after }: FramePair): boolean => !carried && before !== null && after !== null;
+
+/** Where no row of the sheets touches a frame, what differs is how it is analysed and checked; null where no setting differs. */
+export function settingsCause(settings: readonly SettingDifference[]): string | null {
+  if (settings.length === 0) return null;
+  return settings
+    .slice(0, mostNamed)
+    .map(({ setting, before, after }) => `${setting} ${before} to ${after}`)
+    .join('; ');
 }
 
 interface Touch {

@@ -1,5 +1,6 @@
 /** In a thread: two revisions of a batch compared, and a page of what moved. */
 import { fits } from '@/lib/results/compare';
+import { hasCause } from '@/lib/results/compare-causes';
 import { reactionMoved } from '@/lib/results/compare-reactions';
 import { compareTotals } from '@/lib/results/compare-totals';
 import type { CompareAsked, ComparedCell, ComparedPage, ComparedRows } from '@/lib/results/compared-page';
@@ -39,7 +40,7 @@ async function causesFor(compared: Compared, page: ComparedRows): Promise<(strin
   if (page.list !== 'frames' && page.list !== 'members') return null;
   const { ofFrame, ofMember } = await compared.causes();
   if (page.list === 'members') return page.rows.map(({ frame, id }) => ofMember(frame, id));
-  return page.rows.map(({ id, carried, before, after }) => (carried || !before || !after ? null : ofFrame(id)));
+  return page.rows.map((pair) => (hasCause(pair) ? ofFrame(pair.id) : null));
 }
 
 async function rowsOf(compared: Compared, { list, show, by }: CompareAsked): Promise<ComparedRows> {

@@ -7,7 +7,7 @@ import { comparedOf } from './compared';
 import { openOnce } from './open-once';
 import { PortSink } from './port-sink';
 
-export interface WriteCompareTask extends Omit<CompareSource, 'totals' | 'inputs' | 'frames' | 'members' | 'reactions' | 'before' | 'after'> {
+export interface WriteCompareTask extends Omit<CompareSource, 'totals' | 'causes' | 'inputs' | 'frames' | 'members' | 'reactions' | 'before' | 'after'> {
   /** The database's file. */
   readonly file: string;
   readonly office: number;
@@ -25,6 +25,7 @@ export async function writeCompare({ file, office, port, ...task }: WriteCompare
   const sheets = compareSheets({
     ...task,
     totals: compareTotals(compared.frames, task.by),
+    causes: await compared.causes(),
     inputs: await compared.inputs(),
     frames: compared.frames,
     members: compared.members(),

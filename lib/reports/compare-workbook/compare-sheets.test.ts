@@ -1,5 +1,7 @@
 import { expect, it } from 'vitest';
 import { type ComparedFrame, pairFrames, pairMembers } from '@/lib/results/compare';
+import { causesOf } from '@/lib/results/compare-causes';
+import type { InputDifference } from '@/lib/results/compare-inputs';
 import { pairReactions } from '@/lib/results/compare-reactions';
 import { compareTotals } from '@/lib/results/compare-totals';
 import { compareSheets } from './compare-sheets';
@@ -10,7 +12,9 @@ const frame = (id: string, version: number, more: Partial<ComparedFrame>): Compa
 }); // prettier-ignore
 const member = { id: 'AB', role: 'rafter', section: 'IPE 300', check: 'normal stress', combination: 'C1', verdict: 'within' as const, ratio: 0.5 }; // prettier-ignore
 
-async function written(): Promise<Map<string, unknown[][]>> {
+const gone: InputDifference = { sheet: 'Members', where: 'D2, AB', what: null, before: 'a row', after: null, rowBefore: 3, rowAfter: null }; // prettier-ignore
+
+async function written(inputs: readonly InputDifference[] = [gone]): Promise<Map<string, unknown[][]>> {
   const frames = pairFrames(
     [frame('D1', 1, {}), frame('D2', 2, {}), frame('old', 3, { mass: null })],
     [frame('D1', 1, {}), frame('D2', 4, { verdict: 'over', ratio: Infinity, count: 3 }), frame('new', 5, {})],
@@ -21,7 +25,7 @@ async function written(): Promise<Map<string, unknown[][]>> {
     settings: [{ setting: 'near limit', before: '0.90', after: '0.80' }],
     recorded: [{ letter: 'B', what: 'near limit', from: '0.90', to: '0.80', reason: 'asked for', person: 'Ana Lyst', at: '2026-11-30' }],
     totals: compareTotals(frames, 0.01),
-    inputs: [{ sheet: 'Members', where: 'D2, AB', what: null, before: 'a row', after: null, rowBefore: 3, rowAfter: null }],
+    inputs, causes: causesOf(inputs, ['D2', 'new', 'old']),
     frames,
     members: pairMembers(frames[1]!, [member, { ...member, id: 'BC' }], [{ ...member, section: 'IPE 330' }, { ...member, id: 'BC' }]),
     reactions: pairReactions({ id: 'D2', index: 1 }, [{ node: 'A', fx: 1e3, fy: 2e3, mz: 0 }], [{ node: 'A', fx: 1.5e3, fy: 2e3, mz: 0 }]),
@@ -56,6 +60,15 @@ it('lists members that moved or have another section, reactions that moved, rows
     'setting: near limit',
     'recorded change: near limit',
   ]);
+});
+
+it('says which change of the inputs touches a frame or a member, else which setting differs; nothing of frames that one has only', async () => {
+  const sheets = await written();
+  expect(sheets.get('Frames')!.map((row) => row.at(-1))).toEqual([null, 'AB taken from Members', null, null]);
+  expect(sheets.get('Members that moved')!.map((row) => row.at(-1))).toEqual(['taken from Members']);
+  const none = await written([]);
+  expect(none.get('Frames')!.map((row) => row.at(-1))).toEqual([null, 'near limit 0.90 to 0.80', null, null]);
+  expect(none.get('Members that moved')!.map((row) => row.at(-1))).toEqual(['near limit 0.90 to 0.80']);
 });
 
 it('adds up steel with the number off, and none where a mass is not known', async () => {

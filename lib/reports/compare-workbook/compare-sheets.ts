@@ -11,6 +11,7 @@ import {
 } from '@/lib/reports/workbook/report-sheet';
 import { cautions } from '@/lib/reports/cautions';
 import { hasMoved, massChange, massOf, type FramePair, type MemberPair, type Movement, type Standing } from '@/lib/results/compare'; // prettier-ignore
+import { type Causes, hasCause, settingsCause } from '@/lib/results/compare-causes';
 import type { InputDifference, SettingDifference } from '@/lib/results/compare-inputs';
 import { reactionMoved, type ReactionPair } from '@/lib/results/compare-reactions';
 import { comparedVerdicts, type ComparedTotals } from '@/lib/results/compare-totals';
@@ -42,6 +43,8 @@ export interface CompareSource {
   readonly recorded: readonly RecordedChange[];
   readonly totals: ComparedTotals;
   readonly inputs: readonly InputDifference[];
+  /** Which change of the inputs touches a frame or a member. */
+  readonly causes: Causes;
   readonly frames: readonly FramePair[];
   readonly members: readonly MemberPair[];
   readonly reactions: readonly ReactionPair[];
@@ -151,6 +154,7 @@ function standingColumns(source: CompareSource) {
 
 function framesSheet(source: CompareSource): ReportSheet {
   const { before, after, by } = source;
+  const otherCause = settingsCause(source.settings);
   const sided = (heading: string, width = 14) => [
     text(`${heading} ${before.letter}`, width),
     text(`${heading} ${after.letter}`, width),
@@ -158,7 +162,7 @@ function framesSheet(source: CompareSource): ReportSheet {
   const factor = (letter: string) => ({ heading: `α_cr ${letter}`, format: '0.00', width: 9 });
   return {
     name: 'Frames',
-    columns: [text('frame', 14), ...standingColumns(source), ...sided('governing check', 20), ...sided('section'), factor(before.letter), factor(after.letter)], // prettier-ignore
+    columns: [text('frame', 14), ...standingColumns(source), ...sided('governing check', 20), ...sided('section'), factor(before.letter), factor(after.letter), text('cause', 40)], // prettier-ignore
     *rows(): Iterable<ReportRow> {
       for (const pair of source.frames) {
         const [was, is] = [pair.before, pair.after];
@@ -166,6 +170,7 @@ function framesSheet(source: CompareSource): ReportSheet {
           pair.id, ...standing(was), ...standing(is), change(pair), pair.carried ? 'carried over' : movedWords(pair, by, lettersOf(source)),
           was?.check ?? null, is?.check ?? null, was?.section ?? null, is?.section ?? null,
           was?.criticalLoadFactor ?? null, is?.criticalLoadFactor ?? null,
+          hasCause(pair) ? (source.causes.ofFrame(pair.id) ?? otherCause) : null,
         ]; // prettier-ignore
       }
     },
@@ -174,9 +179,10 @@ function framesSheet(source: CompareSource): ReportSheet {
 
 function membersSheet(source: CompareSource): ReportSheet {
   const { before, after, by } = source;
+  const otherCause = settingsCause(source.settings);
   return {
     name: 'Members that moved',
-    columns: [text('frame', 14), text('member'), text('role'), text(`section ${before.letter}`, 14), text(`section ${after.letter}`, 14), ...standingColumns(source), text(`governing check ${before.letter}`, 20), text(`governing check ${after.letter}`, 20)], // prettier-ignore
+    columns: [text('frame', 14), text('member'), text('role'), text(`section ${before.letter}`, 14), text(`section ${after.letter}`, 14), ...standingColumns(source), text(`governing check ${before.letter}`, 20), text(`governing check ${after.letter}`, 20), text('cause', 40)], // prettier-ignore
     *rows(): Iterable<ReportRow> {
       for (const pair of source.members) {
         const [was, is] = [pair.before, pair.after];
@@ -184,6 +190,7 @@ function membersSheet(source: CompareSource): ReportSheet {
         yield [
           pair.frame, pair.id, (is ?? was)?.role ?? null, was?.section ?? null, is?.section ?? null,
           ...standing(was), ...standing(is), change(pair), movedWords(pair, by, lettersOf(source)), was?.check ?? null, is?.check ?? null,
+          source.causes.ofMember(pair.frame, pair.id) ?? otherCause,
         ]; // prettier-ignore
       }
     },

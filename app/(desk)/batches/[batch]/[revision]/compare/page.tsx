@@ -15,6 +15,7 @@ import { Cautions, Notice } from '@/components/ui/notice';
 import { Columns, Sheet, Zone } from '@/components/ui/sheet';
 import { api, pages } from '@/lib/api/addresses';
 import { compareInput } from '@/lib/api/inputs';
+import { hasCause, settingsCause } from '@/lib/results/compare-causes';
 import type { ComparedRows } from '@/lib/results/compared-page';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { RevisionHead } from '../_head/revision-head';
@@ -130,8 +131,7 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
       </Zone>
     </>
   ); // prettier-ignore
-  // where no row of the sheets touches a frame, what differs is how it is analysed and checked
-  const otherCause = settings.length === 0 ? null : settings.slice(0, 2).map((one) => `${one.setting} ${one.before} to ${one.after}`).join('; '); // prettier-ignore
+  const otherCause = settingsCause(settings);
   const pager = (
     <nav className="compare-foot" aria-label="Pages">
       {asked.page > 1 && (
@@ -170,7 +170,7 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
           />
           <MovedTable
             page={page}
-            causes={causes?.map((cause, i) => cause ?? (isCarried(page, i) ? null : otherCause)) ?? null}
+            causes={causes?.map((cause, i) => cause ?? (mayHaveCause(page, i) ? otherCause : null)) ?? null}
             of={{
               letters,
               nearLimits,
@@ -186,6 +186,9 @@ async function Compared({ two, asked }: { readonly two: ComparedTwo; readonly as
   );
 }
 
-const isCarried = (page: ComparedRows, i: number): boolean => page.list === 'frames' && page.rows[i]?.carried === true;
+function mayHaveCause(page: ComparedRows, i: number): boolean {
+  const pair = page.list === 'frames' ? page.rows[i] : undefined;
+  return pair === undefined || hasCause(pair);
+}
 const n = (value: number): string => value.toLocaleString('en-GB');
 const count = (value: number, one: string, more = `${one}s`): string => `${n(value)} ${value === 1 ? one : more}`;
