@@ -4,12 +4,13 @@ import { whyNotCheck, type Deed, type Work } from '@/lib/checking/independence';
 
 /**
  * Everyone with a part in a revision, by name: who made and sent it, and who uploaded, changed or ran any frame of it. A frame
- * carried over counts as theirs too who had a part in it in an earlier revision. [] for a revision that is not the office's.
+ * carried over counts as theirs too who had a part in it in an earlier revision, and a revision that was made by changes holds
+ * what was brought in and changed in every one that it goes back to. [] for a revision that is not the office's.
  */
 export async function listPreparers(db: Db, office: number, revision: number): Promise<Work[]> {
   const own = await db
     .selectFrom('revision')
-    .select(['batch', 'ordinal', 'created_by', 'run_by', 'sent_by'])
+    .select(['batch', 'ordinal', 'created_by', 'run_by', 'sent_by', 'made_from'])
     .where('id', '=', revision)
     .where('office', '=', office)
     .executeTakeFirst();
@@ -39,6 +40,8 @@ export async function listPreparers(db: Db, office: number, revision: number): P
     add(row.changed_by, 'changed');
     add(row.run_by, 'ran');
   }
+  for (const { created_by, made_from } of await revisionsBefore(db, own.made_from))
+    add(created_by, made_from === null ? 'uploaded' : 'changed');
   add(own.run_by, 'ran');
   add(own.created_by, 'made');
   const sent = await db
@@ -58,6 +61,27 @@ export async function listPreparers(db: Db, office: number, revision: number): P
     .orderBy('id')
     .execute();
   return names.map(({ id, name }) => ({ id, name, did: [...(did.get(id) ?? [])] }));
+}
+
+/** The revisions that one made by changes goes back to. A frame that was changed twice says only who changed it last. */
+async function revisionsBefore(db: Db, from: number | null): Promise<{ created_by: number; made_from: number | null }[]> {
+  if (from === null) return [];
+  return db
+    .withRecursive('chain', (one) =>
+      one
+        .selectFrom('revision')
+        .select(['id', 'created_by', 'made_from'])
+        .where('id', '=', from)
+        .unionAll(
+          one
+            .selectFrom('revision')
+            .innerJoin('chain', 'chain.made_from', 'revision.id')
+            .select(['revision.id', 'revision.created_by', 'revision.made_from']),
+        ),
+    )
+    .selectFrom('chain')
+    .select(['created_by', 'made_from'])
+    .execute();
 }
 
 export interface MayCheck {

@@ -1,4 +1,5 @@
 import { expect, it } from 'vitest';
+import { insertChangedRevision } from '@/db/queries/changes';
 import { passRevision, returnRevision, sendToCheck } from '@/db/queries/checking-acts';
 import { findChecking, findFrameMarks, listRevisionsToCheck, listStripMarks } from '@/db/queries/checking';
 import { findCheckProgress, listToSee } from '@/db/queries/checking-list';
@@ -12,6 +13,7 @@ import {
 } from '@/db/queries/checking-marks';
 import { listPreparers, listWhoMayCheck } from '@/db/queries/checking-people';
 import { answerQuery, insertQuery, listEarlierQueries, listQueries } from '@/db/queries/checking-queries';
+import { insertIntake } from '@/db/queries/intake';
 import { insertPerson } from '@/db/queries/people';
 import { findRevisionById, updateRevisionState } from '@/db/queries/revisions';
 import type { OfficeRole } from '@/db/schema';
@@ -127,6 +129,31 @@ it('who had a frame in an earlier revision has a part in every later one that ca
   const ids = async (revision: number) => (await listPreparers(db, own.office, revision)).map((one) => one.id);
   expect(await ids(carrying.id)).toContain(checker.id);
   expect(await ids(without.id)).not.toContain(checker.id);
+});
+
+it('who changed a frame has a part in it, however often others change it afterwards', async () => {
+  const given = await prepared();
+  const { db, raw, own, id, analyst, checker, lead } = given;
+  const asked = { changes: [], reason: 'Lighter.', run: false };
+  const make = async (from: number, person: number, span: number) => {
+    const { id: made } = (await insertChangedRevision(db, own.office, { ...asked, from, person }))!;
+    insertIntake(raw, own.office, made, intakeOf([portal('F1', span)]));
+    return made;
+  };
+  const later = await make(await make(id, lead.id, 20), analyst.id, 21);
+  // the frame itself names who brought it in and who changed it last, and no earlier revision has its content
+  const frame = await db
+    .selectFrom('revision_frame')
+    .select(['uploaded_by', 'changed_by'])
+    .where('revision', '=', later)
+    .execute();
+  expect(frame).toEqual([{ uploaded_by: analyst.id, changed_by: analyst.id }]);
+  const work = await listPreparers(db, own.office, later);
+  expect(work.find((one) => one.id === lead.id)?.did).toEqual(['changed']);
+  expect((await listWhoMayCheck(db, own.office, later)).map((one) => one.id)).toEqual([checker.id]);
+  // sheets that are brought in anew are theirs who brings them
+  const anew = await read({ db, raw, close: async () => {} }, own, intakeOf([portal('F1', 22)]));
+  expect((await listWhoMayCheck(db, own.office, anew.id)).map((one) => one.id)).toEqual([checker.id, lead.id]);
 });
 
 it('is passed only when all of the list is seen, every query is closed, and every over and not checked is accepted', async () => {
