@@ -36,6 +36,9 @@ describe.each(['metric', 'us'] as const)('the template in %s units', (units) => 
     expect(setup?.getCell('B5').dataValidation).toMatchObject({ formulae: ['"first order,second order"'] });
     expect(members?.getCell('K2').value).toBe('tension only');
     expect(members?.getCell('K3').dataValidation).toMatchObject({ formulae: ['"yes,no"'] });
+    const headings = (name: string) => (workbook.getWorksheet(name)?.getRow(2).values as unknown[]).map(String);
+    expect(headings('Sections')).toEqual(expect.arrayContaining(['published', 'source']));
+    expect(headings('Materials')).toEqual(expect.arrayContaining(['fy by thickness', 'source']));
     for (const name of sheetNames) {
       workbook
         .getWorksheet(name)

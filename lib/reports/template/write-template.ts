@@ -1,6 +1,7 @@
 import ExcelJS from 'exceljs';
 import { ruleSetNames } from '@/lib/combinations/read-rule-set';
-import { templateSheets, type TemplateColumn, type TemplateSheet } from '@/lib/reports/template/template-sheets';
+import type { TemplateColumn, TemplateSheet } from '@/lib/reports/template/template-sheet';
+import { templateSheets } from '@/lib/reports/template/template-sheets';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { System } from '@/lib/units/quantity';
 
