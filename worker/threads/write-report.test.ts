@@ -4,6 +4,7 @@ import { setTimeout as later } from 'node:timers/promises';
 import { describe, expect, it } from 'vitest';
 import { createAnalyser } from '@/lib/analysis/analyser';
 import { engineVersion } from '@/lib/analysis/engine-version';
+import type { PartOrigin } from '@/lib/intake/own/own-thing';
 import type { Frame } from '@/lib/model/frame';
 import { defaultSettings, type SettingOrigins, type Settings } from '@/lib/model/settings';
 import { cautions } from '@/lib/reports/cautions';
@@ -117,6 +118,21 @@ describe('a calculation report', () => {
     const text = flat((await made({ source: sourceOf(three) })).pages.join(' '));
     for (const caution of cautions) expect(text).toContain(caution);
     expect(text).toMatch(/deflection ratio L\/200 default, Setup is silent/);
+  });
+
+  it('says where sections and materials come from, and leaves it out of what an earlier version read', async () => {
+    const part = { kind: 'section', origin: 'library', version: null, note: null, own: null, frames: 3 } as const;
+    const parts: PartOrigin[] = [
+      { ...part, name: 'IPE 300' },
+      { ...part, name: 'PG 600', origin: 'office', version: 3, note: 'mill sheet 12', own: 'PG 600' },
+      { ...part, kind: 'material', name: 'S355 plate', origin: 'sheet', note: 'Materials row 4' },
+    ];
+    const text = async (source: ReportSource) => flat((await made({ source })).pages.join(' '));
+    const told = await text({ ...sourceOf(three), parts });
+    expect(told).toMatch(
+      /section IPE 300 standard 3 section PG 600 office v3 \(mill sheet 12\) 3 material S355 plate sheet \(Materials row 4\) 3/,
+    );
+    expect(await text(sourceOf(three))).not.toContain('Where sections and materials come from');
   });
 
   it('has for each frame its id with the governing ratio of the published results', async () => {

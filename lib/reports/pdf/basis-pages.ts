@@ -1,6 +1,7 @@
 /** Cautions, what was analysed and how, settings with where they come from, assumptions, what the frames are made of. */
 import { originWords } from '@/lib/changes/origin-words';
 import { settingText } from '@/lib/changes/setting-text';
+import { originOfPart, type PartOrigin } from '@/lib/intake/own/own-thing';
 import type { Material, Section } from '@/lib/model/frame';
 import { settingWords, statedSettings } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
@@ -47,7 +48,11 @@ export function basisPages(flow: Flow, source: ReportSource, facts: ReportFacts)
 }
 
 /** Combinations, limits, sections, materials, as they were used. */
-export function partsPages(flow: Flow, { settings }: ReportSource, { parts, combinations }: ReportFacts): void {
+export function partsPages(
+  flow: Flow,
+  { settings, parts: origins = [] }: ReportSource,
+  { parts, combinations }: ReportFacts,
+): void {
   const system = settings.units;
   flow.part({ title: 'Criteria and parts', note: 'combinations, limits, sections, materials' });
   flow.bookmark('Criteria and parts');
@@ -106,12 +111,13 @@ export function partsPages(flow: Flow, { settings }: ReportSource, { parts, comb
   );
   sections(flow, [...parts.sections.values()], system);
   materials(flow, [...parts.materials.values()], system);
+  whereFrom(flow, origins);
 }
 
 function sections(flow: Flow, all: readonly Section[], system: System): void {
   const of = (si: number | null, quantity: Quantity): string => formatQuantity(si, quantity, system);
   const unit = (quantity: Quantity): string => unitLabel(quantity, system);
-  flow.heading('Sections', 'properties as used; where they come from');
+  flow.heading('Sections', 'properties as used');
   const right = { align: 'right' } as const;
   table(
     flow,
@@ -162,5 +168,29 @@ function materials(flow: Flow, all: readonly Material[], system: System): void {
         [...new Set(Object.values(one.sources))].join(', ') || 'library',
       ],
     })), // prettier-ignore
+  );
+}
+
+function whereFrom(flow: Flow, all: readonly PartOrigin[]): void {
+  if (all.length === 0) return;
+  flow.heading('Where sections and materials come from', 'sheets, the office’s own, standard ranges');
+  table(
+    flow,
+    [
+      { head: 'Kind' },
+      { head: 'Name', face: 'condensedMedium' },
+      { head: 'Comes from', soft: true },
+      { head: 'The office’s name', ifAny: true },
+      { head: 'Frames', align: 'right' },
+    ],
+    all.map((part) => ({
+      cells: [
+        part.kind,
+        part.name,
+        originOfPart(part),
+        part.own === part.name ? null : part.own,
+        part.frames.toLocaleString('en-GB'),
+      ],
+    })),
   );
 }
