@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { redirect } from 'next/navigation';
 import { SignInRow, SignInSheet } from '@/components/sign-in/sign-in-sheet';
 import { Notice } from '@/components/ui/notice';
+import { localPath } from '@/lib/access/local-path';
 import { homeOf } from '@/lib/access/may';
 import { engineVersion } from '@/lib/analysis/engine-version';
 import { pagePerson } from '../_server/page-person';
@@ -27,9 +28,4 @@ export default async function SignInPage({ searchParams }: SignInProps) {
       <SignInForm next={localPath(next) ?? '/'} />
     </SignInSheet>
   );
-}
-
-/** A path of this site, and nothing that a browser could take for another. */
-function localPath(next: string | string[] | undefined): string | null {
-  return typeof next === 'string' && /^\/(?![/\\])[^\\]*$/.test(next) ? next : null;
 }
