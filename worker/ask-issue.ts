@@ -44,7 +44,8 @@ export async function askForIssue(
   const why = whyNot(basis, asked.person);
   if (why.length > 0) return { why };
   const issue = await insertIssue(db, of.office, basis, asked);
-  if (issue === undefined) return { why: ['An issue of this batch is being made already.'] };
+  if (issue === undefined)
+    return { why: ['An issue of this batch is being made already, or the revision was returned just now. Look at it again.'] };
   queue.wake();
   return { issue };
 }

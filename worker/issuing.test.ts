@@ -2,7 +2,9 @@ import { createHash } from 'node:crypto';
 import ExcelJS from 'exceljs';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { insertAnswer, insertQuestion, sendIssueTo, withdrawIssue } from '@/db/queries/issue-acts';
+import { findIssueBasis } from '@/db/queries/issue-basis';
 import { insertDownload, issueFilePieces, listDownloads, listIssueFiles } from '@/db/queries/issue-files';
+import { insertIssue } from '@/db/queries/issue-making';
 import { listQuestions } from '@/db/queries/issue-questions';
 import { findIssue, findIssueFor, findIssueOfRevision, listIssuesFor, type IssueRecord } from '@/db/queries/issues';
 import { findLatestJob } from '@/db/queries/jobs';
@@ -238,6 +240,24 @@ describe('issuing', () => {
     expect(await findIssue(database.db, of.office, failed.id === again.id ? 0 : failed.id)).toBeUndefined();
   });
 
+  it('is not begun where a checker returned the revision after it was looked at', async () => {
+    const of = await checked();
+    const basis = (await findIssueBasis(database.db, of.office, of.revision))!;
+    await updateRevisionState(database.db, of.office, of.revision, ['checked'], 'returned');
+    const asked = { note: null, clients: [], reportFrames: 'all', person: lead } as const;
+    expect(await insertIssue(database.db, of.office, basis, asked)).toBeUndefined();
+    // nor where it was passed again since, with what may be other acceptances
+    await updateRevisionState(database.db, of.office, of.revision, ['returned'], 'checked');
+    await database.db
+      .updateTable('revision')
+      .set({ checked_by: lead.id, checked_at: '2026-12-01T12:00:00.000Z' })
+      .where('id', '=', of.revision)
+      .execute();
+    expect(await insertIssue(database.db, of.office, basis, asked)).toBeUndefined();
+    const now = (await findIssueBasis(database.db, of.office, of.revision))!;
+    expect(await insertIssue(database.db, of.office, now, asked)).toBeTypeOf('number');
+  });
+
   it('hands nothing over where the revision was returned meanwhile', async () => {
     const of = await checked();
     const queue = queueOf({
@@ -262,6 +282,8 @@ describe('an issue that clients have', () => {
     await insertDownload(database.db, of.office, { issue: made.id, file: file!.id, person: clients[0]!.id });
     expect((await listDownloads(database.db, of.office, made.id)).map(({ name }) => name)).toEqual(['Cli Entham', 'Ana Lyst']);
     const said = { by: lead, reason: 'The snow of depot 7 was halved.' };
+    // whose sign-in has ended may build from it all the same
+    await database.db.updateTable('membership').set({ ended_at: '2026-12-01' }).where('person', '=', clients[0]!.id).execute();
     expect(await withdrawIssue(database.db, made, said)).toBe(2);
     expect(await stateOf(of)).toBe('withdrawn');
     expect((await findIssue(database.db, of.office, made.id))?.withdrawn).toMatchObject({

@@ -25,7 +25,10 @@ export async function tellClients(within: Db, issue: IssueRecord, only?: readonl
   }
 }
 
-/** Tells everyone who was sent an issue or took a file of it that it is withdrawn, but for who withdrew it. */
+/**
+ * Tells everyone who was sent an issue or took a file of it that it is withdrawn, but for who withdrew it: also those whose
+ * sign-in has ended since, who may build from it all the same.
+ */
 export async function tellWithdrawn(
   within: Db,
   issue: IssueRecord,
@@ -34,7 +37,7 @@ export async function tellWithdrawn(
   const sent = await within.selectFrom('issue_client').select('person').where('issue', '=', issue.id).execute();
   const took = await within.selectFrom('download').select('person').distinct().where('issue', '=', issue.id).execute();
   const people = [...new Set([...sent, ...took].map(({ person }) => person))].filter((person) => person !== by.id);
-  const emails = await emailsOf(within, issue.office, people);
+  const emails = await emailsOf(within, issue.office, people, { ended: true });
   for (const email of emails)
     await putInOutbox(within, issue.office, email, { kind: 'withdrawn', about: aboutIssue(issue), by: by.name, reason });
   return emails.length;
@@ -65,17 +68,21 @@ export async function tellOffice(
     await putInOutbox(within, issue.office, email, { kind: 'question', about: aboutIssue(issue), ...said });
 }
 
-/** Addresses of those among these people who are the office's still. */
-export async function emailsOf(within: Db, office: number, people: readonly number[]): Promise<string[]> {
+/** Addresses of those among these people who are the office's still. @param ended those who were once too */
+export async function emailsOf(
+  within: Db,
+  office: number,
+  people: readonly number[],
+  { ended = false }: { readonly ended?: boolean } = {},
+): Promise<string[]> {
   if (people.length === 0) return [];
-  const rows = await within
+  let query = within
     .selectFrom('membership')
     .innerJoin('person', 'person.id', 'membership.person')
     .select('person.email')
     .where('membership.office', '=', office)
-    .where('membership.ended_at', 'is', null)
     .where('membership.person', 'in', [...people])
-    .orderBy('person.email')
-    .execute();
-  return rows.map(({ email }) => email);
+    .orderBy('person.email');
+  if (!ended) query = query.where('membership.ended_at', 'is', null);
+  return (await query.execute()).map(({ email }) => email);
 }

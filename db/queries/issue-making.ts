@@ -23,12 +23,22 @@ export interface IssueAsked {
  * same revision is taken away: nobody was told of it, and its number is given again.
  *
  * @param basis on which the caller has made sure that this person may issue it
- * @returns the issue's id; undefined where another one was asked for meanwhile
+ * @returns the issue's id; undefined where another one was asked for meanwhile, or the revision is no longer as it was passed
  */
 export async function insertIssue(db: Db, office: number, basis: IssueBasis, asked: IssueAsked): Promise<number | undefined> {
   const { revision, number } = basis;
   const at = instant();
   return db.transaction().execute(async (within) => {
+    // the basis was read before: a checker may have returned the revision since
+    const passed = await within
+      .selectFrom('revision')
+      .select('id')
+      .where('id', '=', revision.id)
+      .where('office', '=', office)
+      .where('state', '=', 'checked')
+      .where('checked_at', 'is', revision.checked?.at ?? null)
+      .executeTakeFirst();
+    if (!passed) return undefined;
     await deleteFailed(within, office, revision.id);
     const row = await within
       .insertInto('issue')
