@@ -1,8 +1,6 @@
 import 'server-only';
 import type { CertificateData } from '@/components/certificate/certificate';
 import type { DrawingData } from '@/lib/drawing/drawing-data';
-import { workingLines } from '@/lib/checks/working-lines';
-import type { WorkingLine } from '@/lib/checks/working-parts';
 import { db } from '@/db/client';
 import { findFrame } from '@/db/queries/frames';
 import type { RevisionRecord } from '@/db/queries/revisions';
@@ -10,30 +8,10 @@ import { certificateLines } from '@/lib/analysis/certificate-lines';
 import { notFound } from '@/lib/api/error';
 import { frameNumberInput } from '@/lib/api/inputs';
 import type { MemberGoverning } from '@/lib/results/member-results';
-import { checkPlace } from '@/lib/results/check-place';
-import { worstFirst } from '@/lib/results/worst-first';
-import type { Certificate, Check, Verdict } from '@/lib/results/result';
+import { checkLines, type CheckLine } from '@/lib/results/check-line';
+import type { Certificate, Verdict } from '@/lib/results/result';
 import { drawingData } from '@/lib/drawing/frame-drawing-data';
 import { settingLines } from './setting-lines';
-
-/** A check as the frame page lists it, with its calculation. */
-export interface CheckLine {
-  readonly id: string;
-  /** "rafter BC", "node C" */
-  readonly where: string;
-  readonly check: string;
-  readonly combination: string | null;
-  readonly at: number | null;
-  readonly face: Check['face'];
-  readonly value: number | null;
-  readonly limit: number | null;
-  readonly quantity: Check['quantity'];
-  readonly ratio: number | null;
-  readonly verdict: Verdict;
-  readonly reason: string | null;
-  readonly reference: string;
-  readonly working: readonly WorkingLine[];
-}
 
 /** Everything the frame page and its route say of one frame; figures in SI. */
 export interface FrameDetail {
@@ -109,26 +87,7 @@ export async function frameDetail(revision: RevisionRecord, number: string, resu
     units,
     nearLimit,
     members: stored.members,
-    checks: frame && settings ? worstFirst(evaluation?.checks ?? []).map((check, index) => line(check, index)) : [],
+    checks: frame && settings ? checkLines(frame, evaluation?.checks ?? [], revision) : [],
     drawing: frame && drawingData({ frame, evaluation, members: stored.members, units, nearLimit, chosen: result }),
   };
-
-  function line(check: Check, index: number): CheckLine {
-    return {
-      id: String(index),
-      where: checkPlace(frame!, check),
-      check: check.check,
-      combination: check.combination,
-      at: check.at,
-      face: check.face,
-      value: check.value,
-      limit: check.limit,
-      quantity: check.quantity,
-      ratio: check.ratio,
-      verdict: check.verdict,
-      reason: check.reason,
-      reference: check.reference,
-      working: workingLines(check, revision),
-    };
-  }
 }

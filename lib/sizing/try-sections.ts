@@ -1,25 +1,16 @@
 /** Other sections tried on one frame: the engine of a run on a changed frame, nothing stored. Runs in a browser. */
 import type { Analyser } from '@/lib/analysis/analyser';
-import { workingLines } from '@/lib/checks/working-lines';
-import type { WorkingLine } from '@/lib/checks/working-parts';
 import type { DrawingData } from '@/lib/drawing/drawing-data';
 import { drawingData } from '@/lib/drawing/frame-drawing-data';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import { checkPlace } from '@/lib/results/check-place';
+import { checkLines, type CheckLine } from '@/lib/results/check-line';
 import { evaluateFrame } from '@/lib/results/evaluate';
 import { lineMemo } from '@/lib/results/line-memo';
 import { memberResults, type MemberGoverning } from '@/lib/results/member-results';
-import type { Check, FrameEvaluation, Governing, Verdict } from '@/lib/results/result';
-import { worstFirst } from '@/lib/results/worst-first';
+import type { FrameEvaluation, Governing, Verdict } from '@/lib/results/result';
 import { takenBy, type TriedSection } from '@/lib/sizing/taken-by';
 import { withSections } from '@/lib/sizing/with-sections';
-
-/** A check as the frame's page lists it. */
-export type TriedCheck = Pick<
-  Check,
-  'check' | 'combination' | 'at' | 'face' | 'value' | 'limit' | 'quantity' | 'ratio' | 'verdict' | 'reason' | 'reference'
-> & { readonly id: string; readonly where: string; readonly working: readonly WorkingLine[] };
 
 export interface TryTold {
   readonly verdict: Verdict;
@@ -30,7 +21,7 @@ export interface TryTold {
   readonly assumptions: readonly string[];
   readonly mass_kg: number | null;
   /** Worst first. */
-  readonly checks: readonly TriedCheck[];
+  readonly checks: readonly CheckLine[];
   readonly drawing: DrawingData;
 }
 
@@ -72,22 +63,7 @@ export function tryTold({ frame, evaluation, members }: Tried, settings: Setting
     notChecked: evaluation.notChecked.filter((reason) => !evaluation.failure || !reason.startsWith('not solved')),
     assumptions: evaluation.assumptions,
     mass_kg: evaluation.mass,
-    checks: worstFirst(evaluation.checks).map((check, i) => ({
-      id: `${i}`,
-      where: checkPlace(frame, check),
-      check: check.check,
-      combination: check.combination,
-      at: check.at,
-      face: check.face,
-      value: check.value,
-      limit: check.limit,
-      quantity: check.quantity,
-      ratio: check.ratio,
-      verdict: check.verdict,
-      reason: check.reason,
-      reference: check.reference,
-      working: workingLines(check, { settings, origins: null }),
-    })),
+    checks: checkLines(frame, evaluation.checks, { settings, origins: null }),
     drawing: drawingData({ frame, evaluation, members, units, nearLimit, chosen }),
   };
 }

@@ -5,9 +5,8 @@ import { DiagramView, LoadsView, RatioView } from '@/components/drawing/views';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import { Zone } from '@/components/ui/sheet';
-import { Working } from '@/components/working/working';
+import { CheckWorking } from '@/components/working/check-working';
 import type { FrameDetail } from '@/app/_server/frame-detail';
-import { isClause } from '@/lib/checks/design-code/clause-name';
 import Link from 'next/link';
 import { ChecksTable } from '../frames/[number]/checks-table';
 
@@ -70,16 +69,7 @@ export function FrameFacts({ frame, href, why }: FrameFactsProps) {
       )}
       {check && (
         <Zone>
-          <Working
-            title={`${check.where}, ${check.check}`}
-            reference={check.working.some((line) => line.what === 'reference') ? null : check.reference}
-            lines={check.working}
-            ratio={check.ratio}
-            verdict={check.verdict}
-            nearLimit={nearLimit}
-            reason={check.reason}
-            typeset={isClause(check.check)}
-          />
+          <CheckWorking check={check} nearLimit={nearLimit} />
         </Zone>
       )}
       <Zone>

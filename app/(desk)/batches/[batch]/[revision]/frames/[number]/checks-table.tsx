@@ -1,6 +1,6 @@
 'use client';
 import type { KeyboardEvent } from 'react';
-import type { CheckLine } from '@/app/_server/frame-detail';
+import type { CheckLine } from '@/lib/results/check-line';
 import { LevelBar } from '@/components/ui/level-bar';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { RatioText } from '@/components/ui/ratio-text';

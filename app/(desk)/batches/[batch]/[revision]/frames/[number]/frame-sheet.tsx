@@ -5,13 +5,12 @@ import { Certificate } from '@/components/certificate/certificate';
 import type { Diagram } from '@/lib/drawing/captions';
 import type { DrawingBuckled } from '@/lib/drawing/drawing-data';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
-import { Working } from '@/components/working/working';
+import { CheckWorking } from '@/components/working/check-working';
 import { Fact } from '@/components/ui/fact';
 import { Empty, Notice } from '@/components/ui/notice';
 import { QuantityText } from '@/components/ui/quantity-text';
 import { Columns, Zone } from '@/components/ui/sheet';
 import type { FrameDetail } from '@/app/_server/frame-detail';
-import { isClause } from '@/lib/checks/design-code/clause-name';
 import { api, pages } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
 import { ChecksTable } from './checks-table';
@@ -131,16 +130,7 @@ export function FrameSheet({ batch, letter, first, list, mayChange, sent }: Fram
       </Zone>
       {check && (
         <Zone>
-          <Working
-            title={`${check.where}, ${check.check}`}
-            reference={check.working.some((line) => line.what === 'reference') ? null : check.reference}
-            lines={check.working}
-            ratio={check.ratio}
-            verdict={check.verdict}
-            nearLimit={nearLimit}
-            reason={check.reason}
-            typeset={isClause(check.check)}
-          />
+          <CheckWorking check={check} nearLimit={nearLimit} />
         </Zone>
       )}
       <Zone title="Mass and assumptions">

@@ -3,7 +3,7 @@ import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { FrameDrawing } from '@/components/drawing/frame-drawing';
 import { SectionOffers, type SectionOffered } from '@/components/sections/section-offers';
-import { Working } from '@/components/working/working';
+import { CheckWorking } from '@/components/working/check-working';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Finder } from '@/components/ui/finder';
@@ -11,7 +11,6 @@ import { Notice } from '@/components/ui/notice';
 import { Columns, Zone } from '@/components/ui/sheet';
 import { api } from '@/lib/api/addresses';
 import { request } from '@/lib/api/fetch';
-import { isClause } from '@/lib/checks/design-code/clause-name';
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { SectionTaken } from '@/lib/sizing/section-taken';
@@ -167,16 +166,7 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, to, f
               </Zone>
               {check && (
                 <Zone>
-                  <Working
-                    title={`${check.where}, ${check.check}`}
-                    reference={check.working.some((line) => line.what === 'reference') ? null : check.reference}
-                    lines={check.working}
-                    ratio={check.ratio}
-                    verdict={check.verdict}
-                    nearLimit={nearLimit}
-                    reason={check.reason}
-                    typeset={isClause(check.check)}
-                  />
+                  <CheckWorking check={check} nearLimit={nearLimit} />
                 </Zone>
               )}
               {mayChange && tried.length > 0 && !busy && refused === null && (
