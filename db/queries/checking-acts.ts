@@ -1,7 +1,7 @@
 /** Sending a revision to check, returning it and passing it: state, record, letters and activity in one transaction. */
 import { instant } from '@/db/clock';
 import type { Db } from '@/db/open';
-import { insertActivity } from '@/db/queries/activity';
+import { insertCheckingActivity } from '@/db/queries/checking-activity';
 import { findCheckProgress, findFramesToSee, insertCheckingList } from '@/db/queries/checking-list';
 import { listWhoMayCheck } from '@/db/queries/checking-people';
 import { emailsOf } from '@/db/queries/issue-letters';
@@ -42,7 +42,7 @@ export async function sendToCheck(db: Db, revision: RevisionRecord, by: By, note
     await within.updateTable('revision').set(sent).where('id', '=', revision.id).execute();
     for (const { email } of checkers)
       await putInOutbox(within, revision.office, email, { kind: 'sent to check', about: aboutOf(revision), by: by.name, note });
-    await tell(within, revision, by, 'sent a revision to check', { note, listed: list.length });
+    await insertCheckingActivity(within, revision, by, 'sent a revision to check', { note, listed: list.length });
     return null;
   });
 }
@@ -59,7 +59,7 @@ export async function returnRevision(db: Db, revision: RevisionRecord, by: By, n
     await record(within, revision, 'returned', by, note);
     for (const email of await preparersEmails(within, revision, by))
       await putInOutbox(within, revision.office, email, { kind: 'returned', about: aboutOf(revision), by: by.name, note });
-    await tell(within, revision, by, 'returned a revision', { note });
+    await insertCheckingActivity(within, revision, by, 'returned a revision', { note });
     return null;
   });
 }
@@ -77,7 +77,7 @@ export async function passRevision(db: Db, revision: RevisionRecord, by: By, not
     await within.updateTable('revision').set(checked).where('id', '=', revision.id).execute();
     for (const email of await preparersEmails(within, revision, by))
       await putInOutbox(within, revision.office, email, { kind: 'passed', about: aboutOf(revision), by: by.name });
-    await tell(within, revision, by, 'passed a revision', { note });
+    await insertCheckingActivity(within, revision, by, 'passed a revision', { note });
     return null;
   });
 }
@@ -117,14 +117,4 @@ async function preparersEmails(within: Db, { office, batch, sent, createdBy }: R
 function aboutOf({ projectName, projectNumber, batch, batchName, letter }: RevisionRecord): AboutRevision {
   const project = projectNumber === null || projectNumber === '' ? projectName : `${projectNumber} ${projectName}`;
   return { project, batch, batchName, letter };
-}
-
-async function tell(
-  within: Db,
-  { office, project, batch, id }: RevisionRecord,
-  by: By,
-  what: string,
-  detail: Readonly<Record<string, string | number | null>>,
-): Promise<void> {
-  await insertActivity(within, office, { what, project, batch, revision: id, person: by.id, detail });
 }

@@ -2,7 +2,7 @@
 import { orNull } from '@/db/absent';
 import { instant } from '@/db/clock';
 import type { Db } from '@/db/open';
-import { insertActivity } from '@/db/queries/activity';
+import { insertCheckingActivity } from '@/db/queries/checking-activity';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { verdictOf } from '@/db/verdict-rank';
 import { canBeMarked } from '@/lib/checking/checking-states';
@@ -71,7 +71,8 @@ export async function updateSeen(
           .where('person', '=', key.person)
           .returning('frame')
           .execute();
-    if (changed.length > 0) await tell(within, revision, by, seen ? 'saw a frame' : 'took back a mark', { frame: frame.id });
+    if (changed.length > 0)
+      await insertCheckingActivity(within, revision, by, seen ? 'saw a frame' : 'took back a mark', { frame: frame.id });
     return null;
   });
 }
@@ -180,7 +181,12 @@ export async function insertAcceptances(
       await within.insertInto('checking_acceptance').values(values).execute();
     }
     const what = chosen.map(({ subject, check }) => [subject, check].filter(Boolean).join(' ')).join(', ');
-    await tell(within, revision, by, 'accepted a check', { frame: frame.id, check: what, reason, checks: all.length });
+    await insertCheckingActivity(within, revision, by, 'accepted a check', {
+      frame: frame.id,
+      check: what,
+      reason,
+      checks: all.length,
+    });
     return all.length;
   });
 }
@@ -253,7 +259,8 @@ export async function endAcceptance(
       .where('ended_at', 'is', null)
       .returning('check_name')
       .executeTakeFirst();
-    if (ended) await tell(within, revision, by, 'took back an acceptance', { frame: frame.id, check: ended.check_name });
+    if (ended)
+      await insertCheckingActivity(within, revision, by, 'took back an acceptance', { frame: frame.id, check: ended.check_name });
     return null;
   });
 }
@@ -294,7 +301,7 @@ export async function insertOwnValue(
         ...madeOn(revision, frame),
       })
       .execute();
-    await tell(within, revision, by, 'kept an own value', {
+    await insertCheckingActivity(within, revision, by, 'kept an own value', {
       frame: frame.id,
       of: value.label,
       ours: value.ours,
@@ -305,13 +312,3 @@ export async function insertOwnValue(
 }
 
 const madeOn = ({ input }: RevisionRecord, { engine }: MarkedFrame) => ({ input_sha256: input?.sha256 ?? '', engine });
-
-async function tell(
-  within: Db,
-  { office, project, batch, id }: RevisionRecord,
-  by: By,
-  what: string,
-  detail: Readonly<Record<string, string | number | null>>,
-): Promise<void> {
-  await insertActivity(within, office, { what, project, batch, revision: id, person: by.id, detail });
-}

@@ -1,7 +1,7 @@
 /** Queries of a checker: threads on a frame, member or check, closed by who raised them. */
 import { instant } from '@/db/clock';
 import type { Db } from '@/db/open';
-import { insertActivity } from '@/db/queries/activity';
+import { insertCheckingActivity } from '@/db/queries/checking-activity';
 import { markable, type MarkedFrame } from '@/db/queries/checking-marks';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { canBeAnswered } from '@/lib/checking/checking-states';
@@ -79,7 +79,7 @@ export async function insertQuery(
       .returning('id')
       .executeTakeFirstOrThrow();
     await within.insertInto('checking_message').values({ query: id, person: by.id, at, text: asked.text }).execute();
-    await tell(within, revision, by, 'raised a query', { query: id, frame: frame.id, text: asked.text });
+    await insertCheckingActivity(within, revision, by, 'raised a query', { query: id, frame: frame.id, text: asked.text });
     return id;
   });
 }
@@ -126,10 +126,10 @@ export async function answerQuery(
       return `Only ${row.name}, who raised it, closes this query.`;
     const at = instant();
     if (text !== null) await within.insertInto('checking_message').values({ query, person: by.id, at, text }).execute();
-    if (text !== null) await tell(within, revision, by, 'answered a query', { query, text });
+    if (text !== null) await insertCheckingActivity(within, revision, by, 'answered a query', { query, text });
     if (close) {
       await within.updateTable('checking_query').set({ closed_by: by.id, closed_at: at }).where('id', '=', query).execute();
-      await tell(within, revision, by, 'closed a query', { query });
+      await insertCheckingActivity(within, revision, by, 'closed a query', { query });
     }
     return null;
   });
@@ -182,14 +182,4 @@ async function withMessages(db: Db, rows: readonly Read[]): Promise<QueryRecord[
     closed: row.closed_at === null ? null : { name: row.closer_name ?? '', at: row.closed_at },
     messages: messages.filter(({ query }) => query === row.id).map(({ name, at, text }) => ({ by: name, at, text })),
   }));
-}
-
-async function tell(
-  within: Db,
-  { office, project, batch, id }: RevisionRecord,
-  by: { readonly id: number },
-  what: string,
-  detail: Readonly<Record<string, string | number | null>>,
-): Promise<void> {
-  await insertActivity(within, office, { what, project, batch, revision: id, person: by.id, detail });
 }

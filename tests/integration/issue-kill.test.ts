@@ -3,7 +3,6 @@ import { spawn } from 'node:child_process';
 import { copyFileSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { build } from 'esbuild';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { migrate } from '@/db/migrate';
 import { openDatabase } from '@/db/open';
@@ -18,6 +17,7 @@ import { insertUpload } from '@/db/queries/uploads';
 import { portalSheds } from '@/samples/portal-sheds';
 import { writeWorkbook } from '@/samples/write';
 import { readingRevision, testOffice } from '@/worker/test-office';
+import { buildChild } from '../setup/build-child';
 import { sha256 } from './sha256';
 
 const root = new URL('../..', import.meta.url).pathname;
@@ -27,17 +27,7 @@ const child = join(root, 'dist-worker', 'issue-kill-child.mjs');
 beforeAll(async () => {
   // The bundler runs as a program, since it is plain JavaScript without types.
   await ended(spawn(process.execPath, ['worker/build.mjs'], { cwd: root, stdio: 'inherit' }));
-  await build({
-    entryPoints: [join(root, 'tests/setup/kill-child.ts')],
-    outfile: child,
-    bundle: true,
-    platform: 'node',
-    target: 'node20',
-    format: 'esm',
-    packages: 'external',
-    tsconfig: join(root, 'tsconfig.json'),
-    logLevel: 'warning',
-  });
+  await buildChild('kill-child.ts', child);
 });
 afterAll(() => {
   rmSync(folder, { recursive: true, force: true });

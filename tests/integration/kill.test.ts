@@ -3,7 +3,6 @@ import { createHash } from 'node:crypto';
 import { copyFileSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { build } from 'esbuild';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { migrate } from '@/db/migrate';
 import { openDatabase, type OpenDatabase } from '@/db/open';
@@ -17,6 +16,7 @@ import { writeWorkbook } from '@/samples/write';
 import { chunkSize } from '@/worker/run-work';
 import { readingRevision, testOffice } from '@/worker/test-office';
 import { revisionSource } from '@/worker/threads/revision-source';
+import { buildChild } from '../setup/build-child';
 import { sha256 } from './sha256';
 
 const root = new URL('../..', import.meta.url).pathname;
@@ -28,17 +28,7 @@ const seed = 20261201;
 beforeAll(async () => {
   // The bundler runs as a program, since it is plain JavaScript without types.
   await ended(spawn(process.execPath, ['worker/build.mjs'], { cwd: root, stdio: 'inherit' }));
-  await build({
-    entryPoints: [join(root, 'tests/setup/kill-child.ts')],
-    outfile: child,
-    bundle: true,
-    platform: 'node',
-    target: 'node20',
-    format: 'esm',
-    packages: 'external',
-    tsconfig: join(root, 'tsconfig.json'),
-    logLevel: 'warning',
-  });
+  await buildChild('kill-child.ts', child);
 });
 afterAll(() => {
   rmSync(folder, { recursive: true, force: true });

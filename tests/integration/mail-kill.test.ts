@@ -2,7 +2,6 @@ import { spawn } from 'node:child_process';
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { build } from 'esbuild';
 import { afterAll, beforeAll, expect, it } from 'vitest';
 import { migrate } from '@/db/migrate';
 import { openDatabase } from '@/db/open';
@@ -11,6 +10,7 @@ import { insertPerson } from '@/db/queries/people';
 import { putInOutbox } from '@/db/queries/outbox';
 import { insertResetRequest } from '@/db/queries/password-resets';
 import { fakeMailService, type FakeMailService } from '../fakes/mail-service';
+import { buildChild } from '../setup/build-child';
 
 const root = new URL('../..', import.meta.url).pathname;
 const folder = mkdtempSync(join(tmpdir(), 'tallyframe-mail-'));
@@ -19,17 +19,7 @@ const secret = 'of the server, for tests only';
 let service: FakeMailService;
 
 beforeAll(async () => {
-  await build({
-    entryPoints: [join(root, 'tests/setup/mail-child.ts')],
-    outfile: child,
-    bundle: true,
-    platform: 'node',
-    target: 'node20',
-    format: 'esm',
-    packages: 'external',
-    tsconfig: join(root, 'tsconfig.json'),
-    logLevel: 'warning',
-  });
+  await buildChild('mail-child.ts', child);
   service = await fakeMailService();
 });
 afterAll(async () => {
