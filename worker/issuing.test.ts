@@ -295,6 +295,7 @@ describe('an issue that clients have', () => {
       `withdrawn ${made.number} → north@office.example`,
     ]);
     expect(await withdrawIssue(database.db, made, said), 'once').toBeUndefined();
+    expect(await sendIssueTo(database.db, made, { by: lead, clients: clients.slice(1) }), 'to nobody more').toEqual([]);
     expect(await lettersAboutIssues()).toHaveLength(3);
   });
 

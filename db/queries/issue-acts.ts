@@ -44,7 +44,7 @@ export async function withdrawIssue(
   });
 }
 
-/** Sends an issue to more clients of its project. @returns those who did not have it before */
+/** Sends an issue that is in force to more clients of its project. @returns those who did not have it before; none where it is not in force any more */
 export async function sendIssueTo(
   db: Db,
   issue: IssueRecord,
@@ -52,6 +52,9 @@ export async function sendIssueTo(
 ): Promise<number[]> {
   const sent_at = instant();
   return db.transaction().execute(async (within) => {
+    // withdrawn after it was looked at, its new holders would never hear of it
+    const inForce = within.selectFrom('issue').select('id').where('office', '=', issue.office).where('id', '=', issue.id);
+    if (!(await inForce.where('state', '=', 'issued').executeTakeFirst())) return [];
     const rows = await within
       .insertInto('issue_client')
       .values(clients.map(({ id, name }) => ({ issue: issue.id, person: id, name, sent_at })))
