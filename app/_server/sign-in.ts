@@ -11,8 +11,8 @@ import { log } from './log';
 /** A working day; then the person signs in again. */
 export const sessionSeconds = 10 * 3600;
 
-/** One at a time, so that a thousand guesses sent at once are counted before they are looked at. */
-const inTurn = new PQueue({ concurrency: 1 });
+/** Passwords are looked at one at a time, so that a thousand guesses sent at once are counted before they are looked at. */
+export const inTurn = new PQueue({ concurrency: 1 });
 
 /**
  * Looks at a name and password, and starts a session.
