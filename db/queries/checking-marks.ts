@@ -6,6 +6,7 @@ import { insertCheckingActivity } from '@/db/queries/checking-activity';
 import type { RevisionRecord } from '@/db/queries/revisions';
 import { verdictOf } from '@/db/verdict-rank';
 import { canBeMarked } from '@/lib/checking/checking-states';
+import { wholeFrameCheck } from '@/lib/reports/accepted-words';
 
 /** What is marked: a frame at its place from 0, with what its results hang on. */
 export interface MarkedFrame {
@@ -121,7 +122,7 @@ export async function listToAccept(db: Db, revision: number, frame: number): Pro
   }));
   const whole = listed?.whole ?? null;
   if (whole === null) return checks;
-  const said = { subject: null, check: 'the frame as a whole', combination: null, ratio: null, why: whole };
+  const said = { subject: null, check: wholeFrameCheck, combination: null, ratio: null, why: whole };
   return [...checks, { item: wholeFrame, verdict: 'not checked', ...said }];
 }
 

@@ -2,10 +2,14 @@
 import type { Acceptance } from '@/lib/reports/issue-cover';
 import type { Verdict } from '@/lib/results/result';
 
+/** What is accepted where no check's own row says why something of a frame is not checked; its rows in result files name no check. */
+export const wholeFrameCheck = 'the frame as a whole';
+
 /** A row of a result file, as far as an acceptance may be about it. */
 export interface AcceptedRow {
   readonly frame: string;
   readonly subject: string | null;
+  /** '' = the frame as a whole. */
   readonly check: string;
   readonly verdict: Verdict;
 }
@@ -16,7 +20,8 @@ export interface AcceptedRow {
  */
 export function acceptedWords(acceptances: readonly Acceptance[]): (row: AcceptedRow) => string | null {
   const byFrame = grouped(acceptances);
-  return ({ frame, subject, check, verdict }) => {
+  return ({ frame, subject, check: named, verdict }) => {
+    const check = named === '' ? wholeFrameCheck : named;
     const found = byFrame
       .get(frame)
       ?.find((one) => one.verdict === verdict && one.check === check && (one.subject === null || one.subject === subject));
