@@ -1,4 +1,5 @@
 /** The batch at a glance: strip, spread, what governs; then every flag with its reason, and every frame's line. */
+import { wholeFrameCheck } from '@/lib/reports/accepted-words';
 import type { Acceptance, IssueCover } from '@/lib/reports/issue-cover';
 import type { ReportSource } from '@/lib/reports/workbook/report-source';
 import { unitLabel } from '@/lib/units/batch-unit';
@@ -153,7 +154,7 @@ const isOf = (one: Acceptance, flag: Flag): boolean =>
   one.frame === flag.frame &&
   one.verdict === flag.verdict &&
   ((one.subject === null && flag.subjects.includes(null)) || flag.subjects.includes(one.subject)) &&
-  (flag.check === null || one.check === flag.check);
+  one.check === (flag.check ?? wholeFrameCheck);
 
 const signed = ({ by }: Acceptance): string => `${by.name}, ${shortDate(by.at)}`;
 
