@@ -23,7 +23,12 @@ export function CombinationTable({ combinations, frames, cases: further = [], ed
   const may = edits && onEdit ? editable(combinations) : null;
   const inEmpty = combinations.length * cases.length <= mostCells;
   return (
-    <div className="tbl-wrap max-h-[32rem] overflow-y-auto" role="region" tabIndex={0} aria-label="Combinations">
+    <div
+      className="tbl-wrap max-h-[32rem] overflow-y-auto print:max-h-none print:overflow-visible"
+      role="region"
+      tabIndex={0}
+      aria-label="Combinations"
+    >
       <table className="tbl tbl-tight">
         <caption className="sr-only">Combinations, with the factor on each load case</caption>
         <thead>

@@ -32,7 +32,7 @@ export function MovedTable({ page, of, causes = null }: MovedTableProps) {
   switch (page.list) {
     case 'frames':
       return (
-        <Table caption="Frames that moved" heads={['Frame', ...standingHeads(of), 'Governing check', 'Section', <Unit key="m" name="Steel added" unit={unitLabel('mass', of.units)} />, `α_cr ${before}`, `α_cr ${after}`, 'Cause']} numeric={[1, 2, 3, 7, 8, 9]}>
+        <Table caption="Frames that moved" heads={['Frame', ...standingHeads(of), 'Governing check', 'Section that governs', <Unit key="m" name="Steel added" unit={unitLabel('mass', of.units)} />, `α_cr ${before}`, `α_cr ${after}`, 'Cause']} numeric={[1, 2, 3, 7, 8, 9]}>
           {page.rows.map((pair, i) => (
             <tr key={pair.id}>
               <th scope="row">

@@ -59,7 +59,9 @@ export function GroupResult({ group, units, nearLimit, withOthers, frameHref }: 
       <CandidateTable group={group} units={units} nearLimit={nearLimit} />
       {stubbornCount > 0 && (
         <>
-          <h3>{count(stubbornCount, 'frame')} that fit with no candidate</h3>
+          <h3 className="sizing-stubborn">
+            {count(stubbornCount, 'frame')} that {stubbornCount === 1 ? 'fits' : 'fit'} with no candidate
+          </h3>
           <div
             className="tbl-wrap sizing-table"
             role="region"

@@ -29,7 +29,7 @@ export function ChecksTable({ checks, units, nearLimit, open, onOpen }: ChecksTa
   };
   return (
     <div
-      className="tbl-wrap max-h-[320px] overflow-y-auto"
+      className="tbl-wrap max-h-[320px] overflow-y-auto print:max-h-none print:overflow-visible"
       role="region"
       tabIndex={0}
       aria-label="Checks; arrow keys open a working"

@@ -13,7 +13,7 @@ export function TryLine({ action, members }: TryLineProps) {
   const roles = [...new Set(members.flatMap(({ role }) => (role === null ? [] : [role])))];
   const options = [...roles.map((role) => `role ${role}`), ...members.map(({ id }) => `member ${id}`)];
   return (
-    <form className="try-line zone" action={action} aria-label="Try a section">
+    <form className="try-line zone no-print" action={action} aria-label="Try a section">
       <label className="section-pick">
         Try a section on
         <select name="of">
