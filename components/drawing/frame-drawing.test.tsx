@@ -2,7 +2,8 @@ import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import type { DrawingBuckled, DrawingData, DrawingMethod, DrawingResult } from '@/lib/drawing/drawing-data';
-import { plainMethod, simpleBeam } from '@/lib/drawing/drawing-sample';
+import { simpleBeam } from '@/lib/drawing/drawing-sample';
+import { plainMethod } from '@/lib/drawing/plain-method';
 import { FrameDrawing } from './frame-drawing';
 
 const large = () => document.querySelector<SVGSVGElement>('.d-view-large')!;

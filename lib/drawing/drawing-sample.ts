@@ -1,16 +1,6 @@
 import type { MemberExtremes } from '@/lib/results/result';
-import type { DrawingData, DrawingLine, DrawingMethod, DrawingResult } from './drawing-data';
-
-export const plainMethod: DrawingMethod = {
-  order: 1,
-  criticalLoadFactor: null,
-  imperfection: null,
-  shearDeformation: false,
-  reducedStiffness: false,
-  loadScale: 1,
-  iterations: 1,
-  change: 0,
-};
+import type { DrawingData, DrawingLine, DrawingResult } from './drawing-data';
+import { plainMethod } from './plain-method';
 
 /** Frames small enough to check a drawing by hand, for tests. */
 

@@ -15,6 +15,7 @@ import type { MemberGoverning } from '@/lib/results/member-results';
 import type { Check, FrameEvaluation, ResultState } from '@/lib/results/result';
 import { imperfectionForces, noCasesAlone } from '@/lib/results/state-facts';
 import { describeState } from '@/lib/results/describe-state';
+import { plainMethod } from './plain-method';
 
 /** Standard gravity, m/s² (ISO 80000-3; sheets §2). */
 const g = 9.80665;
@@ -107,16 +108,7 @@ export function drawingCase(frame: Frame, index: number): DrawingResult {
     displacements: [],
     lines: [],
     slack: [],
-    method: {
-      order: 1,
-      criticalLoadFactor: null,
-      imperfection: null,
-      shearDeformation: false,
-      reducedStiffness: false,
-      loadScale: 1,
-      iterations: 1,
-      change: 0,
-    },
+    method: plainMethod,
   };
 }
 

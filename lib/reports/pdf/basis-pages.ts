@@ -173,6 +173,7 @@ function materials(flow: Flow, all: readonly Material[], system: System): void {
 
 function whereFrom(flow: Flow, all: readonly PartOrigin[]): void {
   if (all.length === 0) return;
+  const ofKind = (kind: PartOrigin['kind']) => all.filter((part) => part.kind === kind);
   flow.heading('Where sections and materials come from', 'sheets, the office’s own, standard ranges');
   table(
     flow,
@@ -183,7 +184,7 @@ function whereFrom(flow: Flow, all: readonly PartOrigin[]): void {
       { head: 'The office’s name', ifAny: true },
       { head: 'Frames', align: 'right' },
     ],
-    all.map((part) => ({
+    [...ofKind('section'), ...ofKind('material')].map((part) => ({
       cells: [
         part.kind,
         part.name,

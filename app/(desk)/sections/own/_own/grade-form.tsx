@@ -1,19 +1,17 @@
 'use client';
-import { useMutation } from '@tanstack/react-query';
-import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { Segments } from '@/components/ui/segments';
 import { Zone } from '@/components/ui/sheet';
-import { api, pages } from '@/lib/api/addresses';
-import { request, RequestError } from '@/lib/api/fetch';
+import { RequestError } from '@/lib/api/fetch';
 import { readOwnRecord } from '@/lib/intake/own/read-own-records';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity, System } from '@/lib/units/quantity';
 import { errorsByField } from './errors-by-field';
 import type { FormStart } from './section-form';
+import { useSaveOwn } from './use-save-own';
 
 const figures: readonly (readonly [column: string, label: string, quantity: Quantity, hint?: string])[] = [
   ['E', 'elastic modulus, E', 'stress'],
@@ -39,7 +37,6 @@ function stepsOf(text: string, fy: string): Step[] {
 
 /** A steel grade of the office's own: its strength by thickness and its constants; saved as a version. */
 export function GradeForm({ start }: { readonly start: FormStart }) {
-  const router = useRouter();
   const [name, setName] = useState(start.name);
   const [units, setUnits] = useState<System>(start.units);
   const [typed, setTyped] = useState<Readonly<Record<string, string>>>(start.cells);
@@ -63,16 +60,7 @@ export function GradeForm({ start }: { readonly start: FormStart }) {
   const read = readOwnRecord('material', record, note.trim());
   const wrong = errorsByField('material', read.problems);
   const warnings = read.problems.filter(({ severity }) => severity === 'warning');
-  const save = useMutation({
-    mutationFn: () =>
-      start.id === null
-        ? request<{ id: number }>(api.own('material'), { method: 'POST', json: { ...record, name: name.trim(), note } })
-        : request<{ id: number }>(api.ownPart('material', start.id), { method: 'PUT', json: { units, cells, note } }),
-    onSuccess: ({ id }) => {
-      router.push(pages.ownPart('material', id));
-      router.refresh();
-    },
-  });
+  const save = useSaveOwn('material', start.id, { ...record, name }, note);
   const sent = save.error instanceof RequestError ? save.error.body.fields : undefined;
   const errorOf = (field: string): string | null =>
     (tried || (typed[field] ?? '') !== '' ? (wrong[field] ?? null) : null) ?? sent?.[field]?.[0] ?? null;

@@ -1,6 +1,4 @@
 'use client';
-import { useMutation } from '@tanstack/react-query';
-import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { dimensionWords, OwnSection } from '@/components/sections/own-section';
 import { Button } from '@/components/ui/button';
@@ -8,12 +6,12 @@ import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { Segments } from '@/components/ui/segments';
 import { Columns, Zone } from '@/components/ui/sheet';
-import { api, pages } from '@/lib/api/addresses';
-import { request, RequestError } from '@/lib/api/fetch';
+import { RequestError } from '@/lib/api/fetch';
 import { readOwnRecord } from '@/lib/intake/own/read-own-records';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity, System } from '@/lib/units/quantity';
 import { errorsByField } from './errors-by-field';
+import { useSaveOwn } from './use-save-own';
 
 export interface FormStart {
   /** Null = a new one. */
@@ -62,7 +60,6 @@ function shapeOf({ cells }: FormStart): ShapeName {
 
 /** A section of the office's own, drawn to scale with what follows from its figures as they are typed; saved as a version. */
 export function SectionForm({ start }: { readonly start: FormStart }) {
-  const router = useRouter();
   const [name, setName] = useState(start.name);
   const [units, setUnits] = useState<System>(start.units);
   const [shape, setShape] = useState<ShapeName>(() => shapeOf(start));
@@ -81,16 +78,7 @@ export function SectionForm({ start }: { readonly start: FormStart }) {
   const wrong = errorsByField('section', read.problems);
   const warnings = read.problems.filter(({ severity }) => severity === 'warning');
   const section = read.records[0]?.section ?? null;
-  const save = useMutation({
-    mutationFn: () =>
-      start.id === null
-        ? request<{ id: number }>(api.own('section'), { method: 'POST', json: { ...record, name: name.trim(), note } })
-        : request<{ id: number }>(api.ownPart('section', start.id), { method: 'PUT', json: { units, cells, note } }),
-    onSuccess: ({ id }) => {
-      router.push(pages.ownPart('section', id));
-      router.refresh();
-    },
-  });
+  const save = useSaveOwn('section', start.id, { ...record, name }, note);
   const sent = save.error instanceof RequestError ? save.error.body.fields : undefined;
   /** A blank field is told when saving is tried, a figure that cannot be as it is typed. */
   const errorOf = (field: string): string | null =>
