@@ -1,6 +1,6 @@
 import { fileURLToPath } from 'node:url';
 import react from '@vitejs/plugin-react';
-import { defineConfig } from 'vitest/config';
+import { defineConfig, type TestProjectInlineConfiguration } from 'vitest/config';
 
 const root = fileURLToPath(new URL('.', import.meta.url));
 export default defineConfig({
@@ -43,19 +43,24 @@ export default defineConfig({
           hookTimeout: 180_000,
         },
       },
-      {
-        extends: true,
-        test: {
-          name: 'browser',
-          environment: 'node',
-          // One server for everything that asks a server.
-          include: ['tests/integration/web/**/*.test.ts', 'tests/browser/**/*.test.ts'],
-          globalSetup: ['tests/setup/server.ts'],
-          testTimeout: 120_000,
-          hookTimeout: 300_000,
-          fileParallelism: false,
-        },
-      },
+      served('web', 'tests/integration/web/**/*.test.ts'),
+      served('browser', 'tests/browser/**/*.test.ts'),
     ],
   },
 });
+
+/** Tests that ask a server: one for all of a project. */
+function served(name: string, include: string): TestProjectInlineConfiguration {
+  return {
+    extends: true,
+    test: {
+      name,
+      environment: 'node',
+      include: [include],
+      globalSetup: ['tests/setup/server.ts'],
+      testTimeout: 120_000,
+      hookTimeout: 300_000,
+      fileParallelism: false,
+    },
+  };
+}

@@ -95,7 +95,11 @@ describe('the checker’s desk', () => {
     }
     await page.getByRole('button', { name: 'Pass revision A' }).click();
     await page.getByText('Passed. As long as it is not issued').waitFor();
-    expect(await page.getByRole('group', { name: 'Title block' }).textContent()).toMatch(/Checkedchecker of north/);
+    // the head is read anew after the act
+    await page
+      .getByRole('group', { name: 'Title block' })
+      .getByText(/^checker of north/)
+      .waitFor();
     await page.goto(desk.replace('/checking', '/glance'), { waitUntil: 'networkidle' });
     expect(await page.locator('[data-mark]').count()).toBe(rows.length);
     expect([...complaints, ...ofSender]).toEqual([]);

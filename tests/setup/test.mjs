@@ -47,7 +47,7 @@ function count(ok) {
 }
 
 /** Runs some vitest projects; each test counts by itself, a run that ended before reporting counts as one failure. */
-function vitest(title, projects) {
+async function vitest(title, projects, how = step) {
   const report = join(scratch, `${projects[0]}.json`);
   const args = [
     'run',
@@ -56,7 +56,7 @@ function vitest(title, projects) {
     '--reporter=json',
     `--outputFile.json=${report}`,
   ];
-  const ok = step(title, bin('vitest'), args);
+  const ok = await how(title, bin('vitest'), args);
   try {
     const counts = JSON.parse(readFileSync(report, 'utf8'));
     passed += counts.numPassedTests;
@@ -80,8 +80,9 @@ const written = async () => {
 };
 await Promise.all([lint(), written()]);
 count(step('build', 'npm', ['run', '--silent', 'build']));
-vitest('unit, published-value and integration tests', ['node', 'dom', 'integration']);
-vitest('browser tests', ['browser']);
+await vitest('unit, published-value and integration tests', ['node', 'dom', 'integration']);
+// Each with a server of its own.
+await Promise.all([vitest('tests over HTTP', ['web'], stepBeside), vitest('browser tests', ['browser'], stepBeside)]);
 rmSync(scratch, { recursive: true, force: true });
 console.log(`\n${passed} passed, ${failed} failed`);
 process.exit(failed === 0 ? 0 : 1);

@@ -16,7 +16,7 @@ export const metadata: Metadata = { title: 'Letters' };
 export default async function LettersPage() {
   const lead = await requirePagePerson('read letters', '/letters');
   const letters = await listLetters(db(), lead.office);
-  const kept = keptLetters(lead.office);
+  const kept = keptLetters(lead);
   return (
     <Sheet>
       <Zone
@@ -32,7 +32,7 @@ export default async function LettersPage() {
         {kept !== null && (
           <Notice kind="near">
             No key of the mail service is set, so letters are kept on this machine and reach nobody. They are shown here for
-            development and trying out; set MAIL_KEY before real work.
+            development and trying out, but for others’ links to a new password; set MAIL_KEY before real work.
           </Notice>
         )}
         {letters.length === 0 ? (

@@ -14,7 +14,7 @@ export const metadata: Metadata = { title: 'Letter' };
 export default async function LetterPage({ params }: { readonly params: Promise<{ readonly letter: string }> }) {
   const { letter: asked } = await params;
   const lead = await requirePagePerson('read letters', `/letters/${asked}`);
-  const letter = keptLetters(lead.office)?.find((one) => one.id === asked);
+  const letter = keptLetters(lead)?.find((one) => one.id === asked);
   if (!letter) notFound();
   // The page's policy holds inside the frame too: its style sheet carries the page's nonce.
   const nonce = (await headers()).get('x-nonce') ?? '';
