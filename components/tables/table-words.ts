@@ -1,6 +1,7 @@
 import { checkQuantity } from '@/lib/tables/column-quantity';
 import { unitLabel } from '@/lib/units/batch-unit';
 import type { Quantity, System } from '@/lib/units/quantity';
+import { decimalsIn } from '@/lib/units/decimals';
 import { formatQuantity } from '@/lib/units/format';
 import type { Cell, Column, ColumnQuantity, Filter, Row, TableName, View } from '@/lib/tables/view';
 
@@ -43,7 +44,7 @@ export function numberText(value: Cell, column: Column, row: Row | null, units: 
   if (typeof value !== 'number') return value ?? '';
   const quantity = quantityOf(column, row);
   // a plain number among stresses and movements is a factor or a share, for which one decimal says too little
-  const decimals = column.quantity === 'byCheck' && quantity === 'number' ? 2 : (column.decimals ?? 2);
+  const decimals = column.quantity === 'byCheck' && quantity === 'number' ? 2 : decimalsIn(units, quantity, column.decimals ?? 2);
   const text = formatQuantity(value, quantity, units, { decimals });
   // whole numbers run to a batch's mass, which nobody reads without its thousands apart
   return decimals === 0 ? text.replace(/\B(?=(\d{3})+$)/g, ',') : text;

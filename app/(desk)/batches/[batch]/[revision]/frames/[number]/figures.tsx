@@ -4,6 +4,7 @@ import type { DrawingData, DrawingResult } from '@/lib/drawing/drawing-data';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
 import { unitLabel } from '@/lib/units/batch-unit';
+import { decimalsIn } from '@/lib/units/decimals';
 import { formatQuantity } from '@/lib/units/format';
 import type { Quantity, System } from '@/lib/units/quantity';
 
@@ -179,5 +180,5 @@ interface NumProps {
 }
 
 const Num = ({ value, quantity, units, decimals }: NumProps) => (
-  <td className="num">{formatQuantity(value ?? null, quantity, units, { decimals })}</td>
+  <td className="num">{formatQuantity(value ?? null, quantity, units, { decimals: decimalsIn(units, quantity, decimals) })}</td>
 );
