@@ -3,6 +3,7 @@ import react from '@vitejs/plugin-react';
 import { defineConfig, type TestProjectInlineConfiguration } from 'vitest/config';
 
 const root = fileURLToPath(new URL('.', import.meta.url));
+const everyPage = 'tests/browser/axe.test.ts';
 export default defineConfig({
   plugins: [react()],
   resolve: {
@@ -43,20 +44,22 @@ export default defineConfig({
           hookTimeout: 180_000,
         },
       },
-      served('web', 'tests/integration/web/**/*.test.ts'),
-      served('browser', 'tests/browser/**/*.test.ts'),
+      // The look at every page takes as long as a third of the journeys: beside the shorter of the two.
+      served('web', ['tests/integration/web/**/*.test.ts', everyPage]),
+      served('browser', ['tests/browser/**/*.test.ts'], [everyPage]),
     ],
   },
 });
 
 /** Tests that ask a server: one for all of a project. */
-function served(name: string, include: string): TestProjectInlineConfiguration {
+function served(name: string, include: string[], exclude: string[] = []): TestProjectInlineConfiguration {
   return {
     extends: true,
     test: {
       name,
       environment: 'node',
-      include: [include],
+      include,
+      exclude,
       globalSetup: ['tests/setup/server.ts'],
       testTimeout: 120_000,
       hookTimeout: 300_000,

@@ -232,8 +232,9 @@ describe('the queue and the command line', () => {
           const reader = resultStream(pools, { file: database.file, office, revision, as: 'json' }).getReader();
           expect((await reader.read()).value?.byteLength).toBeGreaterThan(1000);
           await reader.cancel();
-          continue;
         }
+        // Workbooks take long to be read whole: of one with slack members and of one with problems.
+        if (!['braced-bents-12.xlsx', 'slip.xlsx'].includes(name)) continue;
         const book = new ExcelJS.Workbook();
         const workbook = resultStream(pools, { file: database.file, office, revision, as: 'xlsx' });
         await book.xlsx.load(await new Response(workbook).arrayBuffer());

@@ -121,7 +121,7 @@ const table: Readonly<Record<string, Line>> = {
   [`${revision}/json`]: reads(),
   [`${revision}/marked-copy`]: reads(),
   [`${revision}/progress`]: reads(),
-  [`${revision}/report`]: reads(),
+  [`${revision}/report`]: reads('?frames=1'),
   [`${revision}/run`]: { who: { POST: makers, DELETE: makers } },
   [`${revision}/summary`]: reads(),
   [`${revision}/tables/[table]`]: reads(),

@@ -1,9 +1,11 @@
 import { SheetIndex } from '@/components/sheet-index/sheet-index';
 import { TitleBlock } from '@/components/title-block/title-block';
 import { day } from '@/app/_server/dates';
+import { pagePerson } from '@/app/_server/page-person';
 import { db } from '@/db/client';
 import { listRows } from '@/db/queries/lists';
 import type { RevisionRecord } from '@/db/queries/revisions';
+import { may } from '@/lib/access/may';
 import { pages } from '@/lib/api/addresses';
 import { whyNotMove } from '@/lib/checking/checking-states';
 import type { TableName } from '@/lib/tables/view';
@@ -28,6 +30,7 @@ const sheets = [
 
 /** Title block and sheet index over every page of a revision. */
 export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
+  const person = await pagePerson();
   const { batch, letter, frames, errors, warnings, notes } = revision;
   const number = sheets.findIndex((name) => name === sheet) + 1;
   const hasResults = revision.runStartedAt !== null;
@@ -52,7 +55,7 @@ export async function RevisionHead({ revision, sheet }: RevisionHeadProps) {
               batch={batch}
               letter={letter}
               ready={hasResults && revision.state !== 'running'}
-              checking={whyNotMove(revision.state, 'send') === null}
+              checking={person !== null && may(person, 'send to check') && whyNotMove(revision.state, 'send') === null}
             />
           }
         />

@@ -25,11 +25,12 @@ export function AcceptChecks({ marks, acts }: { readonly marks: FrameChecking; r
   };
   return (
     <>
-      {marks.toAccept.map(({ item, check, subject, accepted }) =>
+      {marks.toAccept.map(({ item, check, subject, verdict, ratio, accepted }) =>
         accepted === null ? null : (
           <div key={item} className="ck-accepted">
             <p>
               <CheckMark kind="accepted" /> <b>{[check, subject].filter(Boolean).join(' ')}</b>{' '}
+              <VerdictMark verdict={verdict} word /> <RatioText ratio={ratio} verdict={verdict} nearLimit={0.9} />{' '}
               <span className="ck-none">
                 accepted by {accepted.by}, {accepted.when}
               </span>

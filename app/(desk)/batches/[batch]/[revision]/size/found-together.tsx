@@ -30,7 +30,7 @@ export function FoundTogether({ batch, letter, next, units, nearLimit, sizing, f
   return (
     <Zone
       title="What was found"
-      note={`${sizing.by}, ${sizing.at.slice(0, 10)}; ${sizing.done.toLocaleString('en-GB')} frames × candidates in ${formatNumber(sizing.seconds, { significant: 2 })} s; ${sizing.engine}, input ${sizing.inputHash?.slice(0, 8) ?? ''}`}
+      note={`${sizing.by}, ${sizing.at.slice(0, 10)}; ${sizing.done.toLocaleString('en-GB')} frames × candidates in ${formatNumber(sizing.seconds, { significant: 2 })} s; ${sizing.engine}; hash of frames and candidates ${sizing.inputHash?.slice(0, 8) ?? ''}`}
       aside={
         <ButtonLink href={api.sizing(batch, letter, sizing.id, '/export')} download>
           CSV

@@ -24,11 +24,17 @@ import type { View } from '@/lib/tables/view';
 import { FrameSheet } from './frame-sheet';
 import { TryLine } from './try-line';
 
-export const metadata: Metadata = { title: 'Frame' };
-
 interface FramePageProps {
   readonly params: Promise<RevisionParams & { readonly number: string }>;
   readonly searchParams: Promise<SearchParams>;
+}
+
+/** Names the frame on the tab, and at the head of a printed page. */
+export async function generateMetadata({ params }: FramePageProps): Promise<Metadata> {
+  const { number } = await params;
+  const { person, revision } = await pageRevision(params, `frames/${number}`);
+  const frame = await findFrame(db(), person.office, revision.id, Number(number) - 1);
+  return { title: frame ? `Frame ${frame.id}, ${revision.batchName}, revision ${revision.letter}` : 'Frame' };
 }
 
 /** One frame: its drawing, its checks with their working, its figures; previous and next through the list it was opened from. */
