@@ -1,6 +1,6 @@
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
-import { bring, run, type Brought } from '../setup/bring';
+import { bring, run, stateBecomes, type Brought } from '../setup/bring';
 import { signedIn } from '../setup/visitor';
 import { complaintsOf, openBrowser, signInAs } from './browser';
 
@@ -99,6 +99,8 @@ describe('sections on screen', () => {
     await lead.getByLabel('Why it is changed by this sheet').fill('Welded rafters');
     await lead.getByRole('button', { name: /by the sheet and run 24 frames/ }).click();
     await lead.waitForURL(/\/C\/read/);
+    // what a revision is made of is known once its rows are read
+    await stateBecomes(await signedIn(url, 'north', 'lead'), { batch: sheds.batch, revision: 'C' }, (state) => state === 'run');
     await lead.goto(`${url}/sections/own`);
     await lead.getByRole('link', { name: 'Girder 620' }).click();
     await lead.getByRole('link', { name: /^Revision C of/ }).waitFor();
