@@ -63,8 +63,7 @@ export function CheckList({ rows, nearLimit, at, onGo }: CheckListProps) {
     if (line < 0) return;
     if (virtual) virtualizer.scrollToIndex(line, { align: 'auto' });
     else showWithin(box.current, line);
-    // scrolled to when another frame is looked at, not when the list is drawn again
-    // eslint-disable-next-line react-hooks/exhaustive-deps
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- scrolled to when another frame is looked at, not when the list is drawn again
   }, [at]);
   const draw = (one: Line) =>
     isPart(one) ? <Part {...one} /> : <Row row={one} nearLimit={nearLimit} current={one.number === at} onGo={onGo} />;

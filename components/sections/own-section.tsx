@@ -1,6 +1,6 @@
 import { SectionFacts, type PropertyShown } from '@/components/sections/section-facts';
 import { SectionPicture } from '@/components/sections/section-picture';
-import { libraryColumns, libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { columnsOfLibrary, libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { outlineOfSection } from '@/lib/library/own-outline';
 import type { Section, SectionProperties } from '@/lib/model/frame';
 import { fromSI, unitLabel } from '@/lib/units/batch-unit';
@@ -29,7 +29,7 @@ export function OwnSection({ section, units }: { readonly section: Section; read
       ? []
       : [{ key, what: dimensionWords[key], symbol: key, value: dimension(si, units), unit, source: 'given' }];
   });
-  const shown = libraryColumns
+  const shown = columnsOfLibrary
     .filter(({ key }) => section.dimensions === null || (key !== 'depth' && key !== 'width'))
     .map(({ key, label, what, quantity, value }): PropertyShown => {
       const typedShear = key === 'Av' && properties.AvTyped_m2 !== null;

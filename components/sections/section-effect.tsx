@@ -1,5 +1,5 @@
 import type { MemberChange, SectionFigures, SectionPreview } from '@/lib/changes/section-preview';
-import { libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { formatNumber } from '@/lib/units/format';
 import type { System } from '@/lib/units/quantity';
 

@@ -1,4 +1,4 @@
-import { libraryColumn, libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryColumn, libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { formatNumber } from '@/lib/units/format';
 import type { System } from '@/lib/units/quantity';
 

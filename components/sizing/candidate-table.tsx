@@ -3,7 +3,7 @@ import { useEffect, useRef, useState } from 'react';
 import { Field } from '@/components/ui/field';
 import { RatioText } from '@/components/ui/ratio-text';
 import { VerdictMark } from '@/components/ui/verdict-mark';
-import { libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { candidateVerdict, failsWords } from '@/lib/sizing/candidate-verdict';
 import type { CandidateFound, GroupFound } from '@/lib/sizing/sizing';
 import { formatNumber } from '@/lib/units/format';

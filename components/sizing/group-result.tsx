@@ -3,7 +3,7 @@ import type { ReactNode } from 'react';
 import { RatioAgainst } from '@/components/charts/ratio-against';
 import { Notice } from '@/components/ui/notice';
 import { Zone } from '@/components/ui/sheet';
-import { libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { candidateVerdict } from '@/lib/sizing/candidate-verdict';
 import type { GroupFound } from '@/lib/sizing/sizing';
 import { formatRatio } from '@/lib/units/format';

@@ -2,7 +2,7 @@
 import { text, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import { ranges } from '@/lib/sections/library';
 import type { System } from '@/lib/units/quantity';
-import { libraryColumns, libraryNumber, libraryUnit } from './library-columns';
+import { columnsOfLibrary, libraryNumber, libraryUnit } from './columns-of-library';
 import type { LibraryRow } from './library-view';
 
 /** Rows and order as in the view, every property in its unit; a property that is not available is said to be so. */
@@ -14,7 +14,7 @@ export function librarySheet(rows: readonly LibraryRow[], units: System): Report
       text('range', 16),
       text('standard', 16),
       text('properties', 12),
-      ...libraryColumns.map(({ label, quantity }) => ({
+      ...columnsOfLibrary.map(({ label, quantity }) => ({
         heading: `${label} [${libraryUnit(quantity, units)}]`,
         format: '0.0##',
         width: 12,
@@ -27,7 +27,7 @@ export function librarySheet(rows: readonly LibraryRow[], units: System): Report
           range,
           ranges[range].standard,
           'derived',
-          ...libraryColumns.map(({ value, quantity }) => {
+          ...columnsOfLibrary.map(({ value, quantity }) => {
             const si = value(section);
             return si === null ? 'not available' : Number(libraryNumber(si, quantity, units).toPrecision(10));
           }),

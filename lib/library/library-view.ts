@@ -5,7 +5,7 @@ import { librarySection, rangeNames, ranges, type RangeName } from '@/lib/sectio
 import type { RangeRow } from '@/lib/sections/ranges/range';
 import type { Section } from '@/lib/model/frame';
 import type { System } from '@/lib/units/quantity';
-import { boundedKeys, libraryColumn, libraryToSI } from './library-columns';
+import { boundedKeys, libraryColumn, libraryToSI } from './columns-of-library';
 
 type BoundedKey = (typeof boundedKeys)[number];
 

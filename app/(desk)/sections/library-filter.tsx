@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { pages } from '@/lib/api/addresses';
-import { boundedKeys, libraryColumn, libraryUnit } from '@/lib/library/library-columns';
+import { boundedKeys, libraryColumn, libraryUnit } from '@/lib/library/columns-of-library';
 import type { LibraryView } from '@/lib/library/library-view';
 import { rangeNames, ranges } from '@/lib/sections/library';
 

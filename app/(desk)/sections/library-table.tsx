@@ -1,5 +1,5 @@
 import Link from 'next/link';
-import { libraryColumns, libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { columnsOfLibrary, libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import type { LibraryRow, LibraryView } from '@/lib/library/library-view';
 import { sectionOutline } from '@/lib/library/section-outline';
 import { formatNumber } from '@/lib/units/format';
@@ -13,7 +13,7 @@ interface LibraryTableProps {
 }
 
 /** Shown in the list; the others stand with the section itself. */
-const shown = libraryColumns.filter(({ key }) =>
+const shown = columnsOfLibrary.filter(({ key }) =>
   ['mass', 'depth', 'width', 'A', 'I', 'W', 'Wpl', 'Iminor', 'It', 'Iw'].includes(key),
 );
 

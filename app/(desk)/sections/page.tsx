@@ -5,7 +5,7 @@ import { toParams, type SearchParams } from '@/app/_server/search-params';
 import { Columns, Sheet, Zone } from '@/components/ui/sheet';
 import { Empty, Notice } from '@/components/ui/notice';
 import { api, pages } from '@/lib/api/addresses';
-import { libraryColumns } from '@/lib/library/library-columns';
+import { columnsOfLibrary } from '@/lib/library/columns-of-library';
 import { libraryRow, libraryRows, libraryViewFrom } from '@/lib/library/library-view';
 import { LibraryFilter } from './library-filter';
 import { LibraryTable } from './library-table';
@@ -92,7 +92,7 @@ export default async function SectionsPage({ searchParams }: { readonly searchPa
         <span>
           {rows.length === 1 ? '1 section' : `${rows.length.toLocaleString('en-GB')} sections`}
           {last > 1 && `, ${(page - 1) * rowsAtOnce + 1}–${Math.min(rows.length, page * rowsAtOnce)} shown`}.{' '}
-          {libraryColumns.length} properties each are exported.
+          {columnsOfLibrary.length} properties each are exported.
         </span>
         {last > 1 && (
           <nav aria-label="Pages of sections">

@@ -1,7 +1,7 @@
 import { SectionFacts, type PropertyShown } from '@/components/sections/section-facts';
 import { SectionPicture } from '@/components/sections/section-picture';
 import { Zone } from '@/components/ui/sheet';
-import { libraryColumns, libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { columnsOfLibrary, libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import type { LibraryRow } from '@/lib/library/library-view';
 import { sectionOutline } from '@/lib/library/section-outline';
 import { ranges } from '@/lib/sections/library';
@@ -25,7 +25,7 @@ export function SectionSheet({ chosen, units }: { readonly chosen: LibraryRow; r
     const value = dimension(si, units);
     return [{ key, what: dimensionWords[key], symbol: key, value, unit: unitLabel('dimension', units), source: 'nominal' }];
   });
-  const properties = libraryColumns
+  const properties = columnsOfLibrary
     .filter(({ key }) => key !== 'depth' && key !== 'width')
     .map(({ key, label, what, quantity, value }): PropertyShown => {
       const si = value(section);

@@ -5,7 +5,7 @@ import { requirePerson } from '@/app/_server/person';
 import { db } from '@/db/client';
 import { listOwnParts } from '@/db/queries/own-parts';
 import { ApiError } from '@/lib/api/error';
-import { libraryColumns } from '@/lib/library/library-columns';
+import { columnsOfLibrary } from '@/lib/library/columns-of-library';
 import { librarySheet } from '@/lib/library/library-sheet';
 import { type LibraryView, libraryRows, libraryViewFrom } from '@/lib/library/library-view';
 import { csvOf } from '@/lib/reports/workbook/write-csv';
@@ -32,7 +32,7 @@ export const GET = door(async (request) => {
       standard: ranges[range].standard,
       shape: section.shape,
       made: section.made,
-      properties: Object.fromEntries(libraryColumns.map(({ key, value }) => [key, value(section)])),
+      properties: Object.fromEntries(columnsOfLibrary.map(({ key, value }) => [key, value(section)])),
       source: 'derived',
     }));
     return Response.json({ own: await ownFitting(person.office, view), sections, note, suggestion });
@@ -57,7 +57,7 @@ async function ownFitting(office: number, { search, range }: LibraryView) {
     .filter(({ retiredAt, name }) => retiredAt === null && key(name).includes(key(search)))
     .flatMap(({ name, version, section }) => {
       if (!section) return [];
-      const properties = Object.fromEntries(libraryColumns.map(({ key: column, value }) => [column, value(section)]));
+      const properties = Object.fromEntries(columnsOfLibrary.map(({ key: column, value }) => [column, value(section)]));
       return [
         {
           designation: name,

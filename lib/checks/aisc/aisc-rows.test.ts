@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Section } from '@/lib/model/frame';
-import { FT, KIP, KIPFT, librarySectionOf, memberOf, ofFy, rowNamed, rowsOf, stretchOf } from './hand-made-aisc';
+import { FT, KIP, KIPFT, sectionOfLibrary, memberOf, ofFy, rowNamed, rowsOf, stretchOf } from './hand-made-aisc';
 import { gradientOf } from './segment-moment';
 
 const checks = (found: ReturnType<typeof rowsOf>): string[] => found.rows.map((row) => row.check);
@@ -8,11 +8,11 @@ const within = (found: number | null, value: number, relative: number): void => 
   expect(Math.abs(found! / value - 1), `${found} against ${value}`).toBeLessThan(relative);
 };
 const changed = (name: string, change: Partial<Section['dimensions'] & object>, made?: Section['made']): Section => {
-  const section = librarySectionOf(name);
+  const section = sectionOfLibrary(name);
   return { ...section, dimensions: { ...section.dimensions!, ...change }, made: made === undefined ? section.made : made };
 };
 const withProperties = (name: string, change: Partial<Section['properties']>): Section => {
-  const section = librarySectionOf(name);
+  const section = sectionOfLibrary(name);
   return { ...section, properties: { ...section.properties, ...change } };
 };
 
@@ -193,8 +193,8 @@ describe('what can not be checked is said, never passed', () => {
     return rows[0]!.reason!;
   };
   it('no shape, a bar, tapered flanges, J missing, no yield strength', () => {
-    expect(only(memberOf({ ...librarySectionOf('W14X90'), shape: null }, 10))).toMatch(/shape not covered/);
-    expect(only(memberOf({ ...librarySectionOf('W14X90'), shape: 'bar' }, 10))).toMatch(/shape not covered/);
+    expect(only(memberOf({ ...sectionOfLibrary('W14X90'), shape: null }, 10))).toMatch(/shape not covered/);
+    expect(only(memberOf({ ...sectionOfLibrary('W14X90'), shape: 'bar' }, 10))).toMatch(/shape not covered/);
     expect(only(memberOf('C15X50', 10))).toBe('needs J, C_w, not available for tapered flanges');
     expect(only(memberOf('S24X121', 10))).toBe('needs J, C_w, not available for tapered flanges');
     expect(only(memberOf({ ...withProperties('W14X90', { It_m4: null }), designation: null }, 10))).toBe('needs J');
@@ -252,7 +252,7 @@ describe('what can not be checked is said, never passed', () => {
   });
 
   it('an I not said how made is taken as built up, and that is said', () => {
-    const found = rowsOf(memberOf({ ...librarySectionOf('W18X50'), made: null }, 10), [{ shear: 5 }]);
+    const found = rowsOf(memberOf({ ...sectionOfLibrary('W18X50'), made: null }, 10), [{ shear: 5 }]);
     expect(found.notes.some((said) => said.includes('taken as built up'))).toBe(true);
     expect(rowNamed(found, 'G2 shear').inputs()).toMatchObject({ factor: 0.9, rolled: null });
   });

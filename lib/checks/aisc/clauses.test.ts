@@ -3,7 +3,7 @@ import { boxEffectiveModulus, boxFlangeMoment, boxLateralTorsionalMoment, boxLim
 import { interaction } from './combined';
 import { flangeLocalBucklingMoment } from './flange-local-buckling';
 import { elasticBucklingStress, inelastic, nominalStress } from './flexural-buckling';
-import { librarySectionOf } from './hand-made-aisc';
+import { sectionOfLibrary } from './hand-made-aisc';
 import { channelFactor, effectiveRadius, lateralTorsionalMoment, limitingLengths, type OpenSection } from './lateral-torsional';
 import { minorAxisMoment, minorAxisPlasticMoment } from './minor-axis';
 import { momentGradient } from './moment-gradient';
@@ -36,14 +36,14 @@ describe('B3, D2: factors and yielding', () => {
 });
 
 describe('B4.1: width-to-thickness ratios', () => {
-  const W = (): NonNullable<ReturnType<typeof platesOf>> => platesOf(librarySectionOf('W18X50'))!;
+  const W = (): NonNullable<ReturnType<typeof platesOf>> => platesOf(sectionOfLibrary('W18X50'))!;
   it('a rolled web is clear of its fillets: W18x50 has b/2t 6.57 and h/t 45.2 (AISC Manual Table 1-1, from memory)', () => {
     near(W().flange, 6.57, 0.005);
     near(W().web, 45.2, 0.01);
     expect(W().builtUp).toBe(false);
   });
   it('of a built-up I the web is clear between its flanges', () => {
-    const section = librarySectionOf('W18X50');
+    const section = sectionOfLibrary('W18X50');
     const { h, tf, tw } = section.dimensions!;
     const welded = platesOf({ ...section, made: 'welded' })!;
     near(welded.web, (h! - 2 * tf!) / tw!);
@@ -51,7 +51,7 @@ describe('B4.1: width-to-thickness ratios', () => {
     expect(platesOf({ ...section, made: null })!.builtUp).toBe(true);
   });
   it('a wall is flat over its outside less three thicknesses, or more where its corners are sharper', () => {
-    const box = librarySectionOf('HSS8X6X3/8');
+    const box = sectionOfLibrary('HSS8X6X3/8');
     near(platesOf(box)!.web, 8 / 0.349 - 3, 1e-3);
     near(platesOf(box)!.flange, 6 / 0.349 - 3, 1e-3);
     const sharp = platesOf({ ...box, dimensions: { ...box.dimensions!, r: box.dimensions!.t! } })!;
@@ -59,7 +59,7 @@ describe('B4.1: width-to-thickness ratios', () => {
     near(platesOf({ ...box, dimensions: { ...box.dimensions!, r: null } })!.web, 8 / 0.349 - 3, 1e-3);
   });
   it('knows no plates of a bar, of a shape not said and of missing dimensions', () => {
-    const section = librarySectionOf('W18X50');
+    const section = sectionOfLibrary('W18X50');
     expect(platesOf({ ...section, shape: 'bar' })).toBeNull();
     expect(platesOf({ ...section, shape: null })).toBeNull();
     expect(platesOf({ ...section, dimensions: null })).toBeNull();

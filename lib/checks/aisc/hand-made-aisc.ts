@@ -18,7 +18,7 @@ const KSI = 6894757.293168361;
 export const ofFy = (ksi: number): Material =>
   steel({ standard: 'ASTM', E_Pa: 29000 * KSI, G_Pa: 11200 * KSI, fy_Pa: ksi * KSI });
 
-export function librarySectionOf(designation: string): Section {
+export function sectionOfLibrary(designation: string): Section {
   const found = findDesignation(designation);
   if (!('section' in found)) throw new Error(`${designation} is not in the library`);
   return found.section;
@@ -33,7 +33,7 @@ export function memberOf(section: Section | string, length: number, change: Part
   return {
     span: { name: 'A', kind: 'member', pieces, length_m: L, startNode: 0, endNode: 1, role: 'beam', whole: true },
     member: 0,
-    section: typeof section === 'string' ? librarySectionOf(section) : section,
+    section: typeof section === 'string' ? sectionOfLibrary(section) : section,
     material: ofFy(50),
     turned: false,
     role: 'beam',

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { workingFormat } from '../working-format';
 import { printer, type WorkingLine, type WorkingPart } from '../working-parts';
 import { aiscLrfd } from './aisc';
-import { checkFrom, librarySectionOf, memberOf, ofFy, rowNamed, rowsOf, type Asked } from './hand-made-aisc';
+import { checkFrom, sectionOfLibrary, memberOf, ofFy, rowNamed, rowsOf, type Asked } from './hand-made-aisc';
 import { aiscWorking } from './working-aisc';
 
 const print = printer(workingFormat('us', 0.9));
@@ -73,12 +73,12 @@ describe('the working of a clause, from its inputs only', () => {
     const web = working(memberOf('W16X26', 8), { compression: 5 }, 'E7 slender elements');
     expect(web.some((line) => line.startsWith('slender web'))).toBe(true);
     expect(sources(working(memberOf('W16X26', 20, held), { compression: 5 }, 'E7 slender elements'))).toContain('(E4-2)');
-    const section = librarySectionOf('W14X90');
+    const section = sectionOfLibrary('W14X90');
     const thin = { ...section, dimensions: { ...section.dimensions!, tf: 0.008 } };
     expect(
       working(memberOf(thin, 8), { compression: 5 }, 'E7 slender elements').some((line) => line.startsWith('slender flange')),
     ).toBe(true);
-    const tube = librarySectionOf('HSS10.000X0.188');
+    const tube = sectionOfLibrary('HSS10.000X0.188');
     const round = { ...tube, dimensions: { ...tube.dimensions!, t: 0.0025 } };
     expect(sources(working(memberOf(round, 8), { compression: 5 }, 'E7 slender elements'))).toContain('(E7-7)');
   });
@@ -94,8 +94,8 @@ describe('the working of a clause, from its inputs only', () => {
     expect(sources(working(memberOf('UPE 300', 10), { moment: 50 }, 'F2 bending'))).toContain('(F2-7), (F2-8b)');
   });
 
-  const flange = (name: string, tf: number): ReturnType<typeof librarySectionOf> => {
-    const section = librarySectionOf(name);
+  const flange = (name: string, tf: number): ReturnType<typeof sectionOfLibrary> => {
+    const section = sectionOfLibrary(name);
     return { ...section, dimensions: { ...section.dimensions!, tf } };
   };
   it('F3 and F6: noncompact and slender flanges', () => {
@@ -111,7 +111,7 @@ describe('the working of a clause, from its inputs only', () => {
 
   it('F7: noncompact and slender walls, a noncompact web, buckling sideways', () => {
     const of = (name: string, Lb: number, t?: number): string[] => {
-      const section = librarySectionOf(name);
+      const section = sectionOfLibrary(name);
       const box = t === undefined ? section : { ...section, dimensions: { ...section.dimensions!, t } };
       return sources(working(memberOf(box, Lb), { moment: 5, Lb }, 'F7 bending'));
     };
@@ -128,7 +128,7 @@ describe('the working of a clause, from its inputs only', () => {
     const lines = working(memberOf('HSS10.000X0.188', 10, { material }), { moment: 5 }, 'F8 bending');
     expect(sources(lines)).toContain('(F8-2)');
     expect(lines.some((line) => line.startsWith('wall D/t'))).toBe(true);
-    const tube = librarySectionOf('HSS10.000X0.188');
+    const tube = sectionOfLibrary('HSS10.000X0.188');
     const thin = { ...tube, dimensions: { ...tube.dimensions!, t: 0.001 } };
     expect(sources(working(memberOf(thin, 8), { moment: 1 }, 'F8 bending'))).toContain('(F8-3), (F8-4)');
     expect(sources(working(memberOf('HSS10.000X0.188', 10), { shear: 5 }, 'G5 shear'))).toContain('(G5-1)');
@@ -140,7 +140,7 @@ describe('the working of a clause, from its inputs only', () => {
     expect(sources(working(memberOf('W18X50', 10), { shear: 5 }, 'G2 shear', 'ASD'))).toContain('G2.1(a), (G2-2)');
     expect(sources(working(memberOf('HSS8X8X3/8', 10), { shear: 5 }, 'G4 shear'))).toContain('(G4-1)');
     const thinner = (name: string, change: object): ReturnType<typeof memberOf> => {
-      const section = librarySectionOf(name);
+      const section = sectionOfLibrary(name);
       return memberOf({ ...section, dimensions: { ...section.dimensions!, ...change } }, 10);
     };
     const shear = { shear: 5 };

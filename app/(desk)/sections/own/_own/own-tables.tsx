@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import type { OwnPart } from '@/db/queries/own-parts';
 import { pages } from '@/lib/api/addresses';
-import { libraryColumn, libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryColumn, libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { outlineOfSection } from '@/lib/library/own-outline';
 import { formatNumber } from '@/lib/units/format';
 import { figuresLine } from './own-figures';

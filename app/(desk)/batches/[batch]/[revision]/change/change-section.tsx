@@ -88,7 +88,7 @@ export function ChangeSection({ batch, letter, next, units, what, words, first =
           />
           {search.length > 1 && library.data && (
             <SectionOffers
-              offered={[...library.data.own, ...library.data.sections]}
+              offered={library.data.own.concat(library.data.sections)}
               suggestion={library.data.own.length > 0 ? null : library.data.suggestion}
               typed={search}
               chosen={to}

@@ -28,7 +28,7 @@ const column = (
   value: LibraryColumn['value'],
 ): LibraryColumn => ({ key, label, what, quantity, value });
 
-export const libraryColumns: readonly LibraryColumn[] = [
+export const columnsOfLibrary: readonly LibraryColumn[] = [
   column('mass', 'Mass', 'mass per length', 'massPerLength', ({ properties }) => properties.A_m2 * steelDensity_kg_m3),
   column('depth', 'Depth', 'depth', 'dimension', ({ properties }) => properties.depth_m),
   column('width', 'Width', 'width', 'dimension', ({ properties }) => properties.width_m),
@@ -45,7 +45,7 @@ export const libraryColumns: readonly LibraryColumn[] = [
   column('t', 't', 'thickest part, for yield by thickness', 'dimension', ({ properties }) => properties.t_m),
 ];
 
-const byKey = new Map(libraryColumns.map((one) => [one.key, one]));
+const byKey = new Map(columnsOfLibrary.map((one) => [one.key, one]));
 export const libraryColumn = (key: string): LibraryColumn | undefined => byKey.get(key);
 
 /** Columns that a view may be bounded by: at least, at most. */
