@@ -1,4 +1,4 @@
-import { libraryNumber, libraryUnit } from '@/lib/library/library-columns';
+import { libraryNumber, libraryUnit } from '@/lib/library/columns-of-library';
 import { text, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import { candidateVerdict } from '@/lib/sizing/candidate-verdict';
 import type { SizingFound } from '@/lib/sizing/sizing';
