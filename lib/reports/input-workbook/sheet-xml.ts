@@ -2,7 +2,7 @@
 import { cellAddress, cellPosition, columnLetters } from '@/lib/intake/files/cell-address';
 import type { RawCell, RawPart } from '@/lib/intake/files/raw-sheet';
 import { isTyped } from '@/lib/intake/rows/cell-marks';
-import { xmlText } from '@/lib/reports/marked-copy/xml-text';
+import { cellText, xmlText } from '@/lib/reports/xml-text';
 import { readNumber } from '@/lib/units/read-number';
 
 const head = '<?xml version="1.0" encoding="UTF-8" standalone="yes"?>\n';
@@ -97,14 +97,7 @@ function cellXml(cell: RawCell, at: string, part: RawPart): string {
 }
 
 function textXml(text: string, at: string): string {
-  // a workbook writes what XML cannot hold, and what looks like that, as _x000D_
-  const safe = text
-    .replace(/_(?=x[0-9A-Fa-f]{4}_)/g, '_x005F_')
-    .replace(
-      /[\u0000-\u0008\u000b-\u001f\ufffe\uffff]/g,
-      (c) => `_x${c.charCodeAt(0).toString(16).toUpperCase().padStart(4, '0')}_`,
-    );
-  return `<c r="${at}" t="inlineStr"><is><t xml:space="preserve">${xmlText(safe)}</t></is></c>`;
+  return `<c r="${at}" t="inlineStr"><is><t xml:space="preserve">${cellText(text)}</t></is></c>`;
 }
 
 /**

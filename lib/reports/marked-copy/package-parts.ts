@@ -1,5 +1,5 @@
 import { unzipSync, type Zippable, zipSync } from 'fflate';
-import { attribute, beforeEnd } from '@/lib/reports/marked-copy/xml-text';
+import { attribute, beforeEnd } from '@/lib/reports/xml-text';
 
 const officeRelation = 'http://schemas.openxmlformats.org/officeDocument/2006/relationships';
 const plainRelations = `<?xml version="1.0" encoding="UTF-8" standalone="yes"?>

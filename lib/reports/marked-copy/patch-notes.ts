@@ -1,5 +1,5 @@
 import type { Mark } from '@/lib/reports/marked-copy/marks';
-import { beforeEnd, prefixOf, xmlText } from '@/lib/reports/marked-copy/xml-text';
+import { beforeEnd, prefixOf, xmlText } from '@/lib/reports/xml-text';
 
 const main = 'http://schemas.openxmlformats.org/spreadsheetml/2006/main';
 const author = 'Tallyframe';

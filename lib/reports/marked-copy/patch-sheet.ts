@@ -1,7 +1,7 @@
 import { cellPosition } from '@/lib/intake/files/cell-address';
 import type { Mark } from '@/lib/reports/marked-copy/marks';
 import type { FilledStyles } from '@/lib/reports/marked-copy/patch-styles';
-import { attribute, prefixOf, withAttribute } from '@/lib/reports/marked-copy/xml-text';
+import { attribute, prefixOf, withAttribute } from '@/lib/reports/xml-text';
 
 /**
  * Gives the marked cells of a worksheet a fill, as text: cells that are there change their style, cells and rows that are

@@ -1,5 +1,5 @@
 import { fillColour, type Mark } from '@/lib/reports/marked-copy/marks';
-import { attribute, prefixOf, withAttribute } from '@/lib/reports/marked-copy/xml-text';
+import { attribute, prefixOf, withAttribute } from '@/lib/reports/xml-text';
 
 const main = 'http://schemas.openxmlformats.org/spreadsheetml/2006/main';
 

@@ -1,7 +1,7 @@
 import type { Problem } from '@/lib/problems/problem';
 import { problemHeadings, problemRow } from '@/lib/reports/marked-copy/marks';
 import type { PackageParts } from '@/lib/reports/marked-copy/package-parts';
-import { attribute, beforeEnd, prefixOf, xmlText } from '@/lib/reports/marked-copy/xml-text';
+import { attribute, beforeEnd, prefixOf, xmlText } from '@/lib/reports/xml-text';
 
 export const problemsSheetName = 'Problems found';
 const main = 'http://schemas.openxmlformats.org/spreadsheetml/2006/main';

@@ -3,11 +3,11 @@ import type { Writable } from 'node:stream';
 import ExcelJS from 'exceljs';
 import {
   crossesAsShown,
-  type ReportCell,
   type ReportColumn,
   type ReportRow,
   type ReportSheet,
 } from '@/lib/reports/workbook/report-sheet';
+import { rowWriter, type FormatOf } from '@/lib/reports/workbook/row-xml';
 
 /** Rows of one sheet that the format allows. */
 const mostRows = 1_048_576;
@@ -31,24 +31,22 @@ const headStyle: Partial<ExcelJS.Style> = {
 const everyDigit: Partial<ExcelJS.Style> = { numFmt: '0.000############' };
 const boldStyle: Partial<ExcelJS.Style> = { font: { bold: true, color: ink } };
 
-/** What a cell without any style gets: exceljs looks up a style object it knows, and works out anew each one it does not. */
+/** What a cell without any style gets. */
 const plainStyle: Partial<ExcelJS.Style> = {};
-
-function columnStyles(columns: readonly ReportColumn[]): Partial<ExcelJS.Style>[] {
-  const shared = new Map<string, Partial<ExcelJS.Style>>();
-  return columns.map(({ format }) => {
-    if (format === undefined) return plainStyle;
-    const known = shared.get(format) ?? { numFmt: format };
-    shared.set(format, known);
-    return known;
-  });
-}
 
 type StyledRow = ExcelJS.Row & { style: Partial<ExcelJS.Style> };
 
-interface Piped {
-  readonly pipes?: readonly { readonly _writableState?: { readonly length: number } }[];
+/** What exceljs has beside its declared types, pinned with its version and held by this module's tests. */
+interface StyledBook {
+  readonly styles: { addStyleModel(style: Partial<ExcelJS.Style>): number };
 }
+interface OpenSheet {
+  readonly stream: {
+    write(xml: Buffer): unknown;
+    readonly pipes?: readonly { readonly _writableState?: { readonly length: number } }[];
+  };
+}
+const streamOf = (page: ExcelJS.Worksheet): OpenSheet['stream'] => (page as unknown as OpenSheet).stream;
 
 const wentAway = (): Error => new Error('The reader of the workbook went away before it was complete');
 
@@ -59,9 +57,9 @@ function closedEarly(sink: Writable): Promise<boolean> {
 
 /** Waits until what the sheet has handed on is compressed and the sink has taken it. */
 async function keepPace(page: ExcelJS.Worksheet, sink: Writable): Promise<void> {
-  const { stream } = page as unknown as { stream?: Piped };
+  const stream = streamOf(page);
   // The zip library's streams are of a kind that does not offer writableLength yet.
-  const waiting = (): number => (stream?.pipes?.[0]?._writableState?.length ?? 0) + sink.writableLength;
+  const waiting = (): number => (stream.pipes?.[0]?._writableState?.length ?? 0) + sink.writableLength;
   await new Promise((resolve) => setImmediate(resolve));
   while (!sink.destroyed && waiting() > mostWaiting) await new Promise((resolve) => setTimeout(resolve, 2));
   if (sink.destroyed) throw wentAway();
@@ -90,37 +88,59 @@ function closePage(page: ExcelJS.Worksheet, sheet: ReportSheet, rows: number): v
   page.commit();
 }
 
-function styleOf(
-  value: string | number,
-  column: ReportColumn | undefined,
-  style: Partial<ExcelJS.Style>,
-): Partial<ExcelJS.Style> {
-  if (typeof value === 'string') return (column?.verdict ? verdictStyles[value] : undefined) ?? plainStyle;
-  const { nearLimit } = column ?? {};
-  return nearLimit !== undefined && crossesAsShown(value, nearLimit) ? everyDigit : style;
+/** Formats of a table's cells, each made known to the workbook once. */
+function formatsOf(book: ExcelJS.stream.xlsx.WorkbookWriter, columns: readonly ReportColumn[]): FormatOf {
+  const { styles } = book as unknown as StyledBook;
+  const numbers = columns.map(({ format }) => (format === undefined ? 0 : styles.addStyleModel({ numFmt: format })));
+  const verdicts = new Map(Object.entries(verdictStyles).map(([word, style]) => [word, styles.addStyleModel(style)]));
+  const exact = styles.addStyleModel(everyDigit);
+  return (value, index) => {
+    const column = columns[index];
+    if (typeof value === 'string') return column?.verdict === true ? (verdicts.get(value) ?? 0) : 0;
+    const { nearLimit } = column ?? {};
+    return nearLimit !== undefined && crossesAsShown(value, nearLimit) ? exact : (numbers[index] ?? 0);
+  };
 }
 
-function addRow(
-  page: ExcelJS.Worksheet,
-  sheet: ReportSheet,
-  styles: readonly Partial<ExcelJS.Style>[],
-  cells: readonly ReportCell[],
-): void {
-  // An absent value makes no cell at all; a null would make an empty one, with a style to be worked out.
-  const row = page.addRow(cells.includes(null) ? cells.map((cell) => cell ?? undefined) : cells) as StyledRow;
-  row.style = plainStyle;
-  const free = sheet.columns.length === 0;
-  for (let index = 0; index < cells.length; index += 1) {
-    const value = cells[index];
-    if (value === null || value === undefined) continue;
-    const style = free
-      ? index === 0 && sheet.boldFirst
-        ? boldStyle
-        : plainStyle
-      : styleOf(value, sheet.columns[index], styles[index] ?? plainStyle);
-    row.getCell(index + 1).style = style;
-  }
-  row.commit();
+/** Takes a sheet's rows after its heading: a table's as our own XML, free text through exceljs. */
+interface RowSink {
+  add(cells: ReportRow): void;
+  /** Hands on what has gathered. */
+  flush(): void;
+}
+
+/**
+ * exceljs makes some ten objects for a cell, which at millions of them is most of a workbook's time; so the rows of a table,
+ * plain numbers and words, go as XML into the sheet that exceljs has opened and closes again.
+ */
+function tableRows(page: ExcelJS.Worksheet, formatOf: FormatOf): RowSink {
+  const write = rowWriter(formatOf);
+  let row = 1;
+  let gathered = '';
+  return {
+    add(cells) {
+      row += 1;
+      gathered += write(row, cells);
+    },
+    flush() {
+      if (gathered !== '') streamOf(page).write(Buffer.from(gathered));
+      gathered = '';
+    },
+  };
+}
+
+function freeRows(page: ExcelJS.Worksheet, boldFirst: boolean): RowSink {
+  return {
+    add(cells) {
+      const row = page.addRow(cells.map((cell) => cell ?? undefined)) as StyledRow;
+      row.style = plainStyle;
+      cells.forEach((cell, index) => {
+        if (cell !== null) row.getCell(index + 1).style = index === 0 && boldFirst ? boldStyle : plainStyle;
+      });
+      row.commit();
+    },
+    flush() {},
+  };
 }
 
 /** Light compression: at the usual level a workbook takes about a sixth longer to write, and is about a fifth smaller (300 portals). */
@@ -142,22 +162,28 @@ function options(sink: Writable): Partial<ExcelJS.stream.xlsx.WorkbookStreamWrit
 export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, rowLimit = mostRows): Promise<void> {
   const book = new ExcelJS.stream.xlsx.WorkbookWriter(options(sink));
   for (const sheet of sheets) {
-    const styles = columnStyles(sheet.columns);
+    const formatOf = formatsOf(book, sheet.columns);
+    const sinkOf = (open: ExcelJS.Worksheet): RowSink =>
+      sheet.columns.length > 0 ? tableRows(open, formatOf) : freeRows(open, sheet.boldFirst === true);
     let part = 1;
     let page = openPage(book, sheet, part);
+    let taker = sinkOf(page);
     let rows = 1;
     let since = 0;
     /** Whether it is time to look at the sink. */
     const add = (cells: ReportRow): boolean => {
       if (rows >= rowLimit) {
+        taker.flush();
         closePage(page, sheet, rows);
         part += 1;
         page = openPage(book, sheet, part);
+        taker = sinkOf(page);
         rows = 1;
       }
-      addRow(page, sheet, styles, cells);
+      taker.add(cells);
       rows += 1;
       since = (since + 1) % breath;
+      if (since === 0) taker.flush();
       return since === 0;
     };
     const given = sheet.rows();
@@ -167,6 +193,7 @@ export async function writeXlsx(sheets: Iterable<ReportSheet>, sink: Writable, r
     } else {
       for (const cells of given) if (add(cells)) await keepPace(page, sink);
     }
+    taker.flush();
     closePage(page, sheet, rows);
   }
   const early = await Promise.race([book.commit().then(() => false), closedEarly(sink)]);

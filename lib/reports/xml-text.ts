@@ -8,6 +8,21 @@ export function xmlText(text: string): string {
     .replace(/"/g, '&quot;');
 }
 
+/** Whether a text has characters that a cell does not hold as they are. */
+const markedUp = /[&<>"_\u0000-\u0008\u000b-\u001f\ufffe\uffff]/;
+
+/** A cell's text: what XML cannot hold, and what looks like that, is written as _x000D_ (ECMA-376 part 1, 22.9.2.19). */
+export function cellText(text: string): string {
+  if (!markedUp.test(text)) return text;
+  const held = text
+    .replace(/_(?=x[0-9A-Fa-f]{4}_)/g, '_x005F_')
+    .replace(
+      /[\u0000-\u0008\u000b-\u001f\ufffe\uffff]/g,
+      (c) => `_x${c.charCodeAt(0).toString(16).toUpperCase().padStart(4, '0')}_`,
+    );
+  return xmlText(held);
+}
+
 /** Value of an attribute in the text of a tag, as written; null where it has none. */
 export function attribute(tag: string, name: string): string | null {
   const match = new RegExp(`\\s${name}\\s*=\\s*(?:"([^"]*)"|'([^']*)')`).exec(tag);
