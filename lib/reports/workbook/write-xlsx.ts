@@ -115,17 +115,24 @@ interface RowSink {
  */
 function tableRows(page: ExcelJS.Worksheet, formatOf: FormatOf): RowSink {
   const write = rowWriter(formatOf);
+  let bytes = Buffer.allocUnsafe(1 << 19);
   let row = 1;
-  let gathered = '';
+  let end = 0;
+  const flush = (): void => {
+    // a copy, since the next rows are written where these were
+    if (end > 0) streamOf(page).write(Buffer.from(bytes.subarray(0, end)));
+    end = 0;
+  };
   return {
     add(cells) {
       row += 1;
-      gathered += write(row, cells);
+      const xml = write(row, cells);
+      const most = 3 * xml.length; // bytes of UTF-8 for a unit of UTF-16
+      if (end + most > bytes.length) flush();
+      if (most > bytes.length) bytes = Buffer.allocUnsafe(2 * most);
+      end += bytes.write(xml, end);
     },
-    flush() {
-      if (gathered !== '') streamOf(page).write(Buffer.from(gathered));
-      gathered = '';
-    },
+    flush,
   };
 }
 
