@@ -1,12 +1,7 @@
 /** Sheets → one XLSX, streamed: a row is gone from memory once it is written, and the sink's pace is kept. */
 import type { Writable } from 'node:stream';
 import ExcelJS from 'exceljs';
-import {
-  crossesAsShown,
-  type ReportColumn,
-  type ReportRow,
-  type ReportSheet,
-} from '@/lib/reports/workbook/report-sheet';
+import { crossesAsShown, type ReportColumn, type ReportRow, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import { rowWriter, type FormatOf } from '@/lib/reports/workbook/row-xml';
 
 /** Rows of one sheet that the format allows. */
