@@ -2,7 +2,7 @@ import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import Sqlite from 'better-sqlite3';
 import { Kysely, SqliteDialect } from 'kysely';
-import { ImmediateDialect } from '@/db/immediate-dialect';
+import { WritingDialect } from '@/db/writing-dialect';
 import type { DB } from '@/db/schema';
 
 export type RawDatabase = Sqlite.Database;
@@ -44,7 +44,7 @@ export function openDatabase(file: string, { readonly = false }: { readonly?: bo
   raw.pragma('journal_size_limit = 67108864');
   raw.pragma('cache_size = -32000');
   raw.pragma('temp_store = MEMORY');
-  const db = new Kysely<DB>({ dialect: readonly ? new SqliteDialect({ database: raw }) : new ImmediateDialect(raw) });
+  const db = new Kysely<DB>({ dialect: readonly ? new SqliteDialect({ database: raw }) : new WritingDialect(raw) });
   drivers.set(db, raw);
   return { db, raw, close: () => db.destroy() };
 }

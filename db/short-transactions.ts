@@ -1,11 +1,12 @@
 import type { RawDatabase } from '@/db/open';
+import { standAside, takeTurn } from '@/db/writers-turn';
 
 /** A transaction takes no new item after this long, so that it ends well under the 50 ms it may last. */
 const slice_ms = 30;
 
 /**
  * Does `work` for every item, in as many transactions as keep each short; an item is never divided.
- * Between two of them others may write.
+ * Between two of them others write, those who wait first.
  *
  * @param last what each transaction ends with, such as counts of what was written in it
  */
@@ -19,7 +20,7 @@ export function inShortTransactions<T>(
   // An item is fetched (and made, where items come from a generator) before its transaction begins.
   let item = iterator.next();
   while (item.done !== true) {
-    raw.exec('begin immediate');
+    takeTurn(() => raw.exec('begin immediate'));
     try {
       const began = performance.now();
       do {
@@ -32,5 +33,6 @@ export function inShortTransactions<T>(
       if (raw.inTransaction) raw.exec('rollback');
       throw fault;
     }
+    standAside();
   }
 }
