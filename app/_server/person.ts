@@ -1,5 +1,4 @@
 import 'server-only';
-import { decode } from 'next-auth/jwt';
 import { db } from '@/db/client';
 import { findSession } from '@/db/queries/sessions';
 import { findToken } from '@/db/queries/tokens';
@@ -7,21 +6,11 @@ import { may, type Act, type Person } from '@/lib/access/may';
 import { scopeAllows, scopeWords } from '@/lib/access/token-scopes';
 import { ApiError, notFound } from '@/lib/api/error';
 import { sessionCookie, sessionSecret } from './auth';
-
-/** The id of the session row that a token names; undefined for one that was not made here. */
-async function sessionIn(token: string | undefined): Promise<string | undefined> {
-  if (token === undefined || token === '') return undefined;
-  try {
-    const session = (await decode({ token, secret: sessionSecret() }))?.session;
-    return typeof session === 'string' ? session : undefined;
-  } catch {
-    return undefined;
-  }
-}
+import { sessionNamed } from './session-token';
 
 /** Who a session token belongs to, by its row as it stands now; null = nobody (forged, ended, expired, no longer of the office). */
 export async function personOf(token: string | undefined): Promise<Person | null> {
-  const session = await sessionIn(token);
+  const session = await sessionNamed(token, sessionSecret());
   const found = session === undefined ? undefined : await findSession(db(), session);
   if (found === undefined) return null;
   const { person: id, name, email, role, office, officeName } = found;
@@ -30,7 +19,7 @@ export async function personOf(token: string | undefined): Promise<Person | null
 
 /** The session that a request is sent in, so that it may stay where others end. */
 export const sessionOf = (request: Request): Promise<string | undefined> =>
-  sessionIn(readCookie(request.headers.get('cookie'), sessionCookie()));
+  sessionNamed(readCookie(request.headers.get('cookie'), sessionCookie()), sessionSecret());
 
 /** The token of a script, where a request carries one; its cookies then count for nothing. */
 export function bearerOf(request: Request): string | null {

@@ -8,6 +8,12 @@ import type { View } from '@/lib/tables/view';
 
 const letters = ['a', 'b', 'c', 'd', 'e'] as const;
 
+/** A revision's results as they stand. */
+export interface AtStamp {
+  readonly revision: number;
+  readonly stamp: number;
+}
+
 /** Rows of a view that fit its filters: from the tally where it counts by all that is filtered, else counted once a stamp. */
 export function countRows(raw: RawDatabase, revision: number, stamp: number, view: View, filters: ReadFilters): number {
   const key = `${revision} ${stamp} ${view.table} ${JSON.stringify(view.filters)}`;
@@ -22,10 +28,10 @@ export function countRows(raw: RawDatabase, revision: number, stamp: number, vie
 }
 
 /** Rows that fit one filter by values alone; all of the table where that isn't known without counting them. */
-export function countOf(raw: RawDatabase, revision: number, view: View, filter: ByValues, otherwise: number): number {
-  return (
-    countByTally(raw, revision, view, { byValues: [filter], ranges: [], contains: [], frames: null, picked: '' }) ?? otherwise
-  );
+export function countOf(raw: RawDatabase, at: AtStamp, view: View, filter: ByValues, otherwise: number): number {
+  const key = `${at.revision} ${at.stamp} ${view.table} of ${filter.column} ${JSON.stringify(filter.values)}`;
+  const alone: ReadFilters = { byValues: [filter], ranges: [], contains: [], frames: null, picked: '' };
+  return remembered(raw, 'count', key, () => countByTally(raw, at.revision, view, alone) ?? otherwise);
 }
 
 function countByTally(raw: RawDatabase, revision: number, view: View, filters: ReadFilters): number | null {

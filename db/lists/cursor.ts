@@ -10,6 +10,7 @@ export function writeCursor(cursor: Cursor): string {
 
 /** Null for what was not written by writeCursor for a key of that length: the list then begins at its start. */
 export function readCursor(text: string, keys: number): Cursor | null {
+  if (text === '') return null;
   let read: unknown;
   try {
     read = JSON.parse(Buffer.from(text, 'base64url').toString('utf8'));

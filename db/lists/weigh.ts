@@ -11,5 +11,5 @@ export function weigh(raw: RawDatabase, revision: number, stamp: number, view: V
   const filters = readFilters(raw, revision, stamp, view);
   const total = countRows(raw, revision, stamp, { ...view, filters: [] }, none);
   const matching = view.filters.length === 0 ? total : countRows(raw, revision, stamp, view, filters);
-  return { filters, sizes: { total, matching, of: (one) => countOf(raw, revision, view, one, total) } };
+  return { filters, sizes: { total, matching, of: (one) => countOf(raw, { revision, stamp }, view, one, total) } };
 }

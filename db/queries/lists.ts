@@ -7,6 +7,7 @@ import { planOf, type Sizes } from '@/db/lists/plan';
 import { tallyColumns } from '@/db/lists/tally';
 import { weigh } from '@/db/lists/weigh';
 import { type Db, driverOf, type RawDatabase } from '@/db/open';
+import { remembered } from '@/db/remembered';
 import { statement } from '@/db/statements';
 import type { Cell, Row, RowPage, TableName, View } from '@/lib/tables/view';
 import { tables } from '@/lib/tables/view';
@@ -164,11 +165,15 @@ function totalsOf(
   sizes: Sizes,
 ): Record<string, Cell> {
   if (view.table === 'frames') return frameTotals(raw, revision, stamp, view, filters);
-  if (view.table !== 'members' && view.table !== 'checks') return {};
-  const worst: View = { ...view, sort: { column: 'ratio', descending: true } };
-  const plan = planOf(worst, filters, sizes, 1);
-  const selected = `t.ratio, ${keysOf(worst, plan.order)}`;
-  const page = { cursor: null, backwards: false, limit: 1, selected };
-  const ratio = fetchRows(raw, { revision, view: worst, plan }, page)[0]?.ratio ?? null;
-  return { ratio: columnOf(view.table, 'ratio').read(ratio) };
+  const { table } = view;
+  if (table !== 'members' && table !== 'checks') return {};
+  const key = `${revision} ${stamp} ${table} totals ${JSON.stringify(view.filters)}`;
+  return remembered(raw, 'count', key, () => {
+    const worst: View = { ...view, sort: { column: 'ratio', descending: true } };
+    const plan = planOf(worst, filters, sizes, 1);
+    const selected = `t.ratio, ${keysOf(worst, plan.order)}`;
+    const page = { cursor: null, backwards: false, limit: 1, selected };
+    const ratio = fetchRows(raw, { revision, view: worst, plan }, page)[0]?.ratio ?? null;
+    return { ratio: columnOf(table, 'ratio').read(ratio) };
+  });
 }
