@@ -39,7 +39,7 @@ const attempt_ms = 60_000;
  */
 export async function putInOutbox(db: Db, office: number, recipient: string, message: MailMessage): Promise<boolean> {
   const email = recipient.trim();
-  if (!mailKinds[message.kind].always && !(await wants(db, office, email, message.kind))) return false;
+  if (!(await mayReach(db, office, email, message.kind))) return false;
   const at = instant();
   await db
     .insertInto('outbox')
@@ -57,7 +57,9 @@ export async function putInOutbox(db: Db, office: number, recipient: string, mes
   return true;
 }
 
-async function wants(db: Db, office: number, email: string, kind: MailKind): Promise<boolean> {
+/** Whether letters of a kind go to someone as things stand: asked when one is written, and again when it is sent. */
+export async function mayReach(db: Db, office: number, email: string, kind: MailKind): Promise<boolean> {
+  if (mailKinds[kind].always) return true;
   const found = await db
     .selectFrom('membership')
     .innerJoin('person', 'person.id', 'membership.person')

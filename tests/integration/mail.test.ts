@@ -123,7 +123,15 @@ describe('the outbox', () => {
     const withdrawn: MailMessage = { kind: 'withdrawn', about: issue, by: 'Orla', reason: 'Snow was left out.' };
     expect(await putInOutbox(db, own.office, email, withdrawn)).toBe(true);
     await pump.look();
-    expect(service.delivered.map((one) => one.kind)).toEqual(['passed', 'withdrawn']);
+    expect(
+      service.delivered.map((one) => one.kind),
+      'not what was written before they left either',
+    ).toEqual(['withdrawn']);
+    const [kept] = await listLetters(db, own.office, { state: 'failed' });
+    expect(kept).toMatchObject({ kind: 'passed', lastError: expect.stringContaining('disabled') as string });
+    await updateLetterAgain(db, own.office, kept!.id);
+    await pump.look();
+    expect(service.delivered).toHaveLength(1);
   });
 
   it('rolls a letter back with the act that caused it', async () => {

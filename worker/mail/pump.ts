@@ -1,7 +1,7 @@
 /** Takes letters out of the outbox and hands them to the service, one after another, as they fall due. */
 import type { Db } from '@/db/open';
 import { findLinkSecret } from '@/db/queries/links';
-import { takeDueLetter, updateLetterRefused, updateLetterSent, type LetterInHand } from '@/db/queries/outbox';
+import { mayReach, takeDueLetter, updateLetterRefused, updateLetterSent, type LetterInHand } from '@/db/queries/outbox';
 import { answerResetRequests } from '@/db/queries/password-resets';
 import { waitAfter } from '@/lib/mail/back-off';
 import { writeLetter } from '@/lib/mail/letter';
@@ -67,6 +67,9 @@ export class MailPump {
   private async send(letter: LetterInHand): Promise<void> {
     const { db, service, site, secret, log, onAnswered } = this.options;
     const { id, office, officeName, recipient, message, idempotencyKey, attempts } = letter;
+    if (!(await mayReach(db, office, recipient, message.kind))) {
+      return updateLetterRefused(db, id, 'They were disabled, or declined such letters, before it was sent.', null);
+    }
     let linkSecret: string | null = null;
     if ('link' in message) {
       const found = await findLinkSecret(db, message.link, secret);

@@ -203,14 +203,18 @@ describe('a forgotten password', () => {
     expect((await ask('m@nowhere.example', '192.0.2.88')).status).toBe(429);
   });
 
-  it('is changed by its owner with the present one; other sessions end, this one stays', async () => {
+  it('is changed by its owner with the present one; other sessions and links end, this session stays', async () => {
     const { email } = await newcomer('curlew', 'checker');
+    await ask(email);
+    const link = secretOf(linkIn(await letterTo({ dataDir, office: north.office, to: email, kind: 'password reset' })));
     const [here, there] = [await signIn(email), await signIn(email)];
     const wrong = await here.send('/api/me/password', { current: 'not it at all', password: other }, 'PUT');
     expect((await refusal(wrong)).fields).toHaveProperty('current');
     expect((await here.send('/api/me/password', { current: testPassword, password: other }, 'PUT')).status).toBe(200);
     expect((await here.fetch('/api/projects')).status).toBe(200);
     expect((await there.fetch('/api/projects')).status).toBe(401);
+    const late = { token: link, password: 'yet another password' };
+    expect((await new Visitor(url).send('/api/password-reset', late, 'PUT')).status).toBe(404);
   });
 });
 

@@ -5,6 +5,7 @@ import { senderOf } from '@/app/_server/sender';
 import { inTurn } from '@/app/_server/sign-in';
 import { db } from '@/db/client';
 import { insertActivity } from '@/db/queries/activity';
+import { endLinks } from '@/db/queries/links';
 import { countFailedAttempts, findAccount, insertSignInAttempt } from '@/db/queries/people';
 import { endSessions, updatePassword } from '@/db/queries/standing';
 import type { Person } from '@/lib/access/may';
@@ -13,7 +14,7 @@ import { hashPassword, verifyPassword } from '@/lib/access/password';
 import { ApiError } from '@/lib/api/error';
 import { ownPasswordInput } from '@/lib/api/people-inputs';
 
-/** Changes one’s own password; every other session ends. A wrong present password counts as a failed sign-in. */
+/** Changes one’s own password; every other session ends, and every link to choose another by. A wrong present password counts as a failed sign-in. */
 export const PUT = door(async (request) => {
   const person = await requirePerson(request, 'be oneself');
   const { current, password } = await readJson(request, ownPasswordInput);
@@ -25,6 +26,7 @@ export const PUT = door(async (request) => {
     .execute(async (within) => {
       await updatePassword(within, person.id, hash);
       await endSessions(within, person.id, session);
+      await endLinks(within, { person: person.id });
       await insertActivity(within, person.office, { what: 'changed their password', person: person.id });
     });
   return Response.json({ changed: true });
