@@ -11,10 +11,13 @@ import type { FrameCheckingActs } from './use-frame-checking';
 export function AcceptChecks({ marks, acts }: { readonly marks: FrameChecking; readonly acts: FrameCheckingActs }) {
   const id = useId();
   const open = marks.toAccept.filter(({ accepted }) => accepted === null);
-  const [left, setLeft] = useState<ReadonlySet<number>>(new Set());
+  // What is over is accepted check by check: nobody should pass it by with a single press.
+  const [picked, setPicked] = useState<ReadonlySet<number>>(
+    () => new Set(open.filter(({ verdict }) => verdict === 'not checked').map(({ item }) => item)),
+  );
   const [reason, setReason] = useState('');
   const [alike, setAlike] = useState(false);
-  const chosen = open.filter(({ item }) => !left.has(item));
+  const chosen = open.filter(({ item }) => picked.has(item));
   const unchecked = chosen.some(({ verdict }) => verdict === 'not checked');
   const accept = () => {
     if (reason.trim() === '' || chosen.length === 0 || acts.busy) return;
@@ -65,12 +68,12 @@ export function AcceptChecks({ marks, acts }: { readonly marks: FrameChecking; r
                   <input
                     id={`${id} ${item}`}
                     type="checkbox"
-                    checked={!left.has(item)}
+                    checked={picked.has(item)}
                     onChange={(event) => {
-                      const next = new Set(left);
-                      if (event.target.checked) next.delete(item);
-                      else next.add(item);
-                      setLeft(next);
+                      const next = new Set(picked);
+                      if (event.target.checked) next.add(item);
+                      else next.delete(item);
+                      setPicked(next);
                     }}
                   />
                 )}
@@ -112,7 +115,10 @@ export function AcceptChecks({ marks, acts }: { readonly marks: FrameChecking; r
               )}
               <div className="ck-buttons">
                 <Button type="submit" look="checker" disabled={acts.busy || reason.trim() === '' || chosen.length === 0}>
-                  <CheckMark kind="accepted" /> Accept {chosen.length} {chosen.length === 1 ? 'check' : 'checks'}, with the reason
+                  <CheckMark kind="accepted" />{' '}
+                  {chosen.length === 0
+                    ? 'Tick what you accept'
+                    : `Accept ${chosen.length} ${chosen.length === 1 ? 'check' : 'checks'}, with the reason`}
                 </Button>
               </div>
             </>
