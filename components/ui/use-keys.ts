@@ -3,13 +3,15 @@ import { useEffect, useRef } from 'react';
 
 export type KeyMap = Readonly<Record<string, () => void>>;
 
-/** True where a key is being typed into something, or a chord belongs to the browser. */
+/** True where a key is being typed into something (a tick box takes no letters), or a chord belongs to the browser. */
 function taken(event: KeyboardEvent): boolean {
   if (event.defaultPrevented || event.ctrlKey || event.metaKey || event.altKey) return true;
   const target = event.target;
   return (
     target instanceof HTMLElement &&
-    target.closest('input, textarea, select, [contenteditable], [role="listbox"], dialog') !== null
+    target.closest(
+      'input:not([type="checkbox"], [type="radio"]), textarea, select, [contenteditable], [role="listbox"], dialog',
+    ) !== null
   );
 }
 
