@@ -51,6 +51,7 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226,
   };
   const taken = chosen ? drawn.find((p) => p.frame === chosen) : undefined;
   const told = read ?? taken ?? worst;
+  const beyond = drawn.filter((p) => p.ratio > high);
   return (
     <div ref={box} className="chart">
       <svg
@@ -87,6 +88,9 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226,
               .join('')}
           />
         ))}
+        {beyond.length > 0 && (
+          <path className="chart-beyond" d={beyond.map((p) => `M${X(p.x) - 3} ${head - 4}l3 -3 3 3`).join('')} />
+        )}
         <path className="chart-axis" d={`M${left} ${head}V${foot}H${width - 8}`} />
         <text className="chart-text" x={width - 8} y={height - 4} textAnchor="end">
           {axis}
@@ -100,6 +104,7 @@ export function RatioAgainst({ points, parameter, unit, nearLimit, height = 226,
         <b>{told.frame}</b> <VerdictMark verdict={told.verdict} size={10} /> {formatRatio(told.ratio, nearLimit)}, {parameter}{' '}
         {Number((told.x ?? 0).toPrecision(4))} {unit}
         {told.group ? `, ${told.group}` : ''}
+        {beyond.length > 0 && `; ${beyond.length.toLocaleString('en-GB')} above ${high}, drawn on the upper edge`}
       </p>
     </div>
   );

@@ -50,6 +50,22 @@ describe('ratio against a parameter', () => {
     expect(screen.getByRole('img', { name: 'Governing ratio against span, m: worst D1 with 1.13 at 18.5' })).toBeInTheDocument();
   });
 
+  it('says which points stand on the upper edge because they are above it', () => {
+    const point = (frame: string, ratio: number, x: number) => ({ frame, ratio, verdict: 'over' as const, x });
+    const { container, rerender } = render(
+      <RatioAgainst
+        parameter="mass"
+        unit="kg/m"
+        nearLimit={0.9}
+        points={[point('a', 5.2, 10), point('b', 2, 20), point('c', 2.4, 15)]}
+      />,
+    );
+    expect(screen.getByText(/; 2 above 2, drawn on the upper edge/)).toBeInTheDocument();
+    expect(container.querySelector('.chart-beyond')?.getAttribute('d')?.match(/M/g)).toHaveLength(2);
+    rerender(<RatioAgainst parameter="mass" unit="kg/m" nearLimit={0.9} points={[point('b', 2, 20)]} />);
+    expect(container.querySelector('.chart-beyond')).toBeNull();
+  });
+
   it('says so where no frame has the parameter', () => {
     render(<RatioAgainst parameter="span" unit="m" nearLimit={0.9} points={[]} />);
     expect(screen.getByText('No frame has a value of span and a ratio.')).toBeInTheDocument();
