@@ -120,13 +120,15 @@ function Trying({ batch, letter, next, units, nearLimit, mayChange, first, to, f
   }, [take, frame, chosen]);
   const told = shown?.told ?? null;
   const check = told?.checks.find((one) => one.id === open);
+  const offered = search.length > 1 && !library.isPlaceholderData ? library.data?.sections : undefined;
+  const only = offered?.length === 1 ? offered[0]?.designation : undefined;
   const taken = tried.find((one) => wordsOf(one.of) === chosen)?.taken.section.name ?? null;
   return (
     <>
       <Zone title="Which members, which section">
         <div className="try-line">
           <Finder label="Members" options={options} value={chosen} onChange={setChosen} />
-          <Field label="Section" type="search" placeholder="a designation however typed" value={typed} onChange={(event) => setTyped(event.target.value)} />
+          <Field label="Section" type="search" placeholder="a designation however typed" value={typed} onChange={(event) => setTyped(event.target.value)} onKeyDown={(event) => { if (event.key === 'Enter' && only) void take(only, of.get(chosen)); }} />
           <p role="status" className="try-state">
             {busy ? 'Working it out …' : tried.length === 0 ? 'As stored.' : tried.map((one) => `${wordsOf(one.of)} → ${one.taken.section.name}`).join('; ')}
           </p>
