@@ -8,6 +8,8 @@ export const evenNumbers = 6;
 export interface EvenStretches {
   /** By member, 1 = such a one. */
   readonly even: Uint8Array;
+  /** How many there are. */
+  readonly count: number;
   /** By member, then case, `evenNumbers` each. */
   readonly acting: Float64Array;
 }
@@ -41,7 +43,7 @@ function build(frame: Frame): EvenStretches {
       acting[o + 5] = one.curvature;
     });
   }
-  const made = { even, acting };
+  const made = { even, count: even.reduce((sum, one) => sum + one, 0), acting };
   known.set(frame, made);
   return made;
 }

@@ -1,5 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { MemberLine, ResultState } from '@/lib/results/result';
+import { evenLineNumbers, hasEvenLines, writeEvenLines } from './even-lines';
+import { evenStretches } from './even-stretches';
 import { flattened, headNumbers, segmentNumbers } from './flat-line';
 import { writeMemberLine } from './member-line';
 
@@ -41,7 +43,11 @@ export class FlatLines {
 
   /** Room for one more line of so many segments. @returns where it begins */
   room(segments: number): number {
-    const more = this.used + headNumbers + segments * segmentNumbers;
+    return this.roomFor(headNumbers + segments * segmentNumbers);
+  }
+
+  private roomFor(numbers: number): number {
+    const more = this.used + numbers;
     if (more > this.numbers.length) {
       let longer = spare;
       spare = null;
@@ -52,8 +58,26 @@ export class FlatLines {
     return this.used;
   }
 
-  /** @returns where the line begins that was worked out */
-  add(state: ResultState, member: number): number {
+  /**
+   * Works out a line; with that of an even member to first order those of all even members of the state, which costs little more.
+   * @param begins by member, where its line in this state begins; −1 = not worked out
+   * @returns where it begins
+   */
+  add(state: ResultState, member: number, begins: number[]): number {
+    if (this.given === null && hasEvenLines(state)) {
+      const stretches = evenStretches(this.frame);
+      if (stretches.even[member]) {
+        const more = stretches.count * evenLineNumbers;
+        const at = this.roomFor(more);
+        writeEvenLines(this.frame, state, stretches, this.numbers, at, begins);
+        this.used += more;
+        return begins[member]!;
+      }
+    }
+    return (begins[member] = this.addOne(state, member));
+  }
+
+  private addOne(state: ResultState, member: number): number {
     const at = this.used;
     if (this.given) {
       const row = flattened(this.given(state, member));
@@ -84,7 +108,7 @@ export class StateLines {
   /** Where in `numbers` a member's line begins; `numbers` is to be looked up again after it. */
   at(member: number): number {
     const known = this.begins[member]!;
-    return known >= 0 ? known : (this.begins[member] = this.all.add(this.state, member));
+    return known >= 0 ? known : this.all.add(this.state, member, this.begins);
   }
 
   forget(): void {

@@ -2,7 +2,7 @@ import type { Extreme, MemberExtremes, MemberLine } from '@/lib/results/result';
 import {
   degreeDeflection, degreeM, degreeN, degreeV, flattened, headNumbers, ofDeflection, ofM, ofN, ofV, segmentNumbers,
 } from './flat-line'; // prettier-ignore
-import { cubic, rootsWithin, valueOf } from './polynomial';
+import { asked, cubic, rootsWithin, valueOf } from './polynomial';
 
 /** Values this close, relative to the largest, are equal: the one nearest the start is named. */
 const equal = 1e-9;
@@ -109,9 +109,12 @@ function addCandidates(highest: number, from: number, to: number): void {
   } else if (degree > 2) {
     const nothing = (1e-13 * largestTerm(degree, s)) / s;
     let count: number;
-    if (degree === 4 && Math.abs(4 * p[4]!) * s * s * s > nothing)
-      count = cubic(p[1]!, 2 * p[2]!, 3 * p[3]!, 4 * p[4]!, s, nothing, roots);
-    else {
+    if (degree === 4 && Math.abs(4 * p[4]!) * s * s * s > nothing) {
+      for (let i = 0; i < 4; i++) asked[i] = (i + 1) * p[i + 1]!;
+      asked[4] = s;
+      asked[5] = nothing;
+      count = cubic(roots);
+    } else {
       for (let i = 1; i <= degree; i++) slope[i - 1] = i * p[i]!;
       count = rootsWithin(slope, degree - 1, s, nothing, roots);
     }
@@ -162,6 +165,7 @@ function writeExtreme(out: Float64Array, at: number): void {
 
 /** Largest of |v − chord|: what stands at the ends is rounding, for they are on the chord by definition. */
 function writeDeparture(lines: Float64Array, line: number, out: Float64Array, at: number): void {
+  if (lines[line] === 1 && writeEvenDeparture(lines, line, out, at)) return;
   const first = line + headNumbers;
   const past = first + lines[line]! * segmentNumbers;
   const length = lines[line + 1]!;
@@ -195,4 +199,53 @@ function writeDeparture(lines: Float64Array, line: number, out: Float64Array, at
   if (xs[i] === 0 || xs[i] === length) return;
   out[at] = values[i]!;
   out[at + 1] = xs[i]!;
+}
+
+/**
+ * The same for a member of one segment under even loads, the commonest: of degree 4, and nought at the start.
+ * @returns false where it is another one
+ */
+function writeEvenDeparture(lines: Float64Array, line: number, out: Float64Array, at: number): boolean {
+  const first = line + headNumbers;
+  const o = first + ofDeflection;
+  const degree = lines[first + degreeDeflection]!;
+  if (lines[first] !== 0 || (degree === 5 ? lines[o + 5] !== 0 : degree !== 4)) return false;
+  const h = lines[first + 1]!;
+  const v1 = lines[o]!;
+  const p2 = lines[o + 2]!;
+  const p3 = lines[o + 3]!;
+  const p4 = lines[o + 4]!;
+  const v2 = v1 + h * (lines[o + 1]! + h * (p2 + h * (p3 + h * p4)));
+  const p1 = lines[o + 1]! - (v2 - v1) / h;
+  const h2 = h * h;
+  const h3 = h2 * h;
+  const term = Math.max(Math.abs(p1) * h, Math.abs(p2) * h2, Math.abs(p3) * h3, Math.abs(p4) * (h3 * h));
+  const nothing = (1e-13 * term) / h;
+  if (!(Math.abs(4 * p4) * h * h * h > nothing)) return false;
+  asked[0] = p1;
+  asked[1] = 2 * p2;
+  asked[2] = 3 * p3;
+  asked[3] = 4 * p4;
+  asked[4] = h;
+  asked[5] = nothing;
+  const count = cubic(roots);
+  const end = Math.abs(h * (p1 + h * (p2 + h * (p3 + h * p4))));
+  let largest = end;
+  for (let i = 0; i < count; i++) {
+    const x = roots[i]!;
+    const here = x * (p1 + x * (p2 + x * (p3 + x * p4)));
+    slope[i] = here;
+    if (Math.abs(here) > largest) largest = Math.abs(here);
+  }
+  out[at] = 0;
+  out[at + 1] = 0;
+  if (largest <= 1e-12 * Math.abs(v1)) return true;
+  const near = largest * (1 - equal);
+  for (let i = 0; i < count; i++) {
+    if (Math.abs(slope[i]!) < near) continue;
+    out[at] = slope[i]!;
+    out[at + 1] = roots[i]!;
+    return true;
+  }
+  return true;
 }

@@ -1,6 +1,7 @@
 import type { Frame } from '@/lib/model/frame';
 import type { MemberLine, ResultState } from '@/lib/results/result';
-import { evenNumbers, evenStretches } from './even-stretches';
+import { writeEvenLine } from './even-lines';
+import { evenStretches } from './even-stretches';
 import { headNumbers, lineFrom, ofDeflection, ofM, ofN, ofU, ofV, segmentNumbers, writeDegrees } from './flat-line';
 import { memberDataFor, type MemberData } from './member-data';
 import { stretchesOf } from './member-stretches';
@@ -69,11 +70,15 @@ export function writeMemberLine(frame: Frame, state: ResultState, member: number
 
 /** Forces and movements where the next stretch begins: N, V, M, u, v, v′. In an array, for numbers kept by a module cost memory. */
 const now = new Float64Array(6);
-/** Sums over the cases: q_x, its slope, q_y, its slope (members of one stretch only), free strain and curvature. */
-const sums = new Float64Array(evenNumbers);
+/** Sums over the cases: free strain and curvature. */
+const free = new Float64Array(2);
 
 function firstOrderLine(frame: Frame, state: ResultState, member: number, m: MemberData, into: LineRoom): void {
   const { even, acting } = evenStretches(frame);
+  if (even[member]) {
+    const at = into.room(1);
+    return writeEvenLine(state, member, m, acting, into.numbers, at);
+  }
   const d = state.displacements;
   const a = 3 * m.start;
   const b = 3 * m.end;
@@ -86,18 +91,9 @@ function firstOrderLine(frame: Frame, state: ResultState, member: number, m: Mem
   now[3] = d[a]! * m.cos + d[a + 1]! * m.sin;
   now[4] = 0;
   now[5] = 0;
-  let at: number;
-  let count = 0;
-  if (even[member]) {
-    at = into.room(1);
-    sumEven(acting, evenNumbers * member * frame.cases.length, state.factors);
-    stretch(m, 0, m.length, sums[0]!, sums[1]!, sums[2]!, sums[3]!, into.numbers, at + headNumbers);
-    count = 1;
-  } else {
-    const last = sumUneven(frame, member, state.factors);
-    at = into.room(last + 2);
-    count = uneven(m, stretchesOf(frame, member).places, last, into.numbers, at + headNumbers);
-  }
+  const last = sumUneven(frame, member, state.factors);
+  const at = into.room(last + 2);
+  const count = uneven(m, stretchesOf(frame, member).places, last, into.numbers, at + headNumbers);
   const { numbers } = into;
   numbers[at] = count;
   numbers[at + 1] = m.length;
@@ -108,31 +104,6 @@ function firstOrderLine(frame: Frame, state: ResultState, member: number, m: Mem
     numbers[o] = numbers[o]! + v1 + turn * numbers[s]!;
     if (numbers[s + 1]! > numbers[s]!) numbers[o + 1] = numbers[o + 1]! + turn;
   }
-}
-
-function sumEven(acting: Float64Array, from: number, factors: Float64Array): void {
-  let x0 = 0;
-  let x1 = 0;
-  let y0 = 0;
-  let y1 = 0;
-  let e = 0;
-  let c = 0;
-  for (let i = 0, o = from; i < factors.length; i++, o += evenNumbers) {
-    const k = factors[i]!;
-    if (k === 0) continue;
-    x0 += k * acting[o]!;
-    x1 += k * acting[o + 1]!;
-    y0 += k * acting[o + 2]!;
-    y1 += k * acting[o + 3]!;
-    e += k * acting[o + 4]!;
-    c += k * acting[o + 5]!;
-  }
-  sums[0] = x0;
-  sums[1] = x1;
-  sums[2] = y0;
-  sums[3] = y1;
-  sums[4] = e;
-  sums[5] = c;
 }
 
 /** What acts at each of a member's places and on the stretches after them. @returns the last place */
@@ -165,8 +136,8 @@ function sumUneven(frame: Frame, member: number, factors: Float64Array): number 
     strain += k * acting.strain;
     curvature += k * acting.curvature;
   }
-  sums[4] = strain;
-  sums[5] = curvature;
+  free[0] = strain;
+  free[1] = curvature;
   return last;
 }
 
@@ -239,8 +210,8 @@ function stretch(
   const w1 = y1 / 2;
   const m2 = w0 / 2;
   const m3 = w1 / 3;
-  const e0 = N / m.EA + sums[4]!;
-  let k0 = M / m.EI + sums[5]!;
+  const e0 = N / m.EA + free[0]!;
+  let k0 = M / m.EI + free[1]!;
   let k1 = V / m.EI;
   if (m.GAv !== Infinity) {
     k0 -= w0 / m.GAv;

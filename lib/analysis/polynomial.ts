@@ -34,7 +34,12 @@ export function rootsWithin(p: ArrayLike<number>, degree: number, length: number
     return within(out, 1, length);
   }
   if (degree === 2) return quadratic(p[0]!, p[1]!, p[2]!, length, out);
-  if (degree === 3) return cubic(p[0]!, p[1]!, p[2]!, p[3]!, length, nothing, out);
+  if (degree === 3) {
+    for (let i = 0; i <= 3; i++) asked[i] = p[i]!;
+    asked[4] = length;
+    asked[5] = nothing;
+    return cubic(out);
+  }
   const q = rows[degree]!;
   for (let i = 0; i <= degree; i++) q[i] = p[i]!;
   const count = higher(degree, length, nothing);
@@ -118,19 +123,20 @@ function between(p: Float64Array, degree: number, slope: Float64Array, a: number
 
 const turns = new Float64Array(2);
 
+/** What `cubic` is asked: c₀, c₁, c₂, c₃, length, nothing. In an array, for numbers handed on to a function cost memory. */
+export const asked = new Float64Array(6);
+
 /**
- * The same for c₀ + c₁ s + c₂ s² + c₃ s³, the commonest: the slope of a member under even loads. Newton's steps begin where the
- * straight line between the bracket's ends is nought.
+ * The same for c₀ + c₁ s + c₂ s² + c₃ s³ as `asked`, the commonest: the slope of a member under even loads. Newton's steps
+ * begin where the straight line between the bracket's ends is nought.
  */
-export function cubic(
-  c0: number,
-  c1: number,
-  c2: number,
-  c3: number,
-  length: number,
-  nothing: number,
-  out: Float64Array,
-): number {
+export function cubic(out: Float64Array): number {
+  const c0 = asked[0]!;
+  const c1 = asked[1]!;
+  const c2 = asked[2]!;
+  const c3 = asked[3]!;
+  const length = asked[4]!;
+  const nothing = asked[5]!;
   let turnCount: number;
   if (3 * Math.abs(c3) * length * length * length > nothing) turnCount = quadratic(c1, 2 * c2, 3 * c3, length, turns);
   else {

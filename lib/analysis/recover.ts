@@ -1,6 +1,6 @@
 import type { Frame, Restraint } from '@/lib/model/frame';
 import { emptyMemberStiffness, memberStiffness } from './assemble';
-import { endForces, endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
+import { endInNodeAxes, toLocal, type LoadVectors } from './load-vectors';
 import { memberData, type MemberData } from './member-data';
 import { copyOf, numbers } from './numbers';
 import type { Topology } from './topology';
@@ -17,6 +17,31 @@ export interface Recovered {
 }
 
 const k = emptyMemberStiffness();
+
+/** Numbers of a member's k: ka, kvv, kv1, kv2, S11, S12, S22 (README 2.2). */
+const ofMember = 7;
+// asked for case after case of one frame
+let latest: readonly MemberData[] | null = null;
+let ofLatest = new Float64Array(0);
+
+/** k of every member, `ofMember` numbers each. */
+function stiffnessOf(data: readonly MemberData[]): Float64Array {
+  if (data === latest) return ofLatest;
+  if (ofLatest.length < ofMember * data.length) ofLatest = new Float64Array(2 * ofMember * data.length);
+  for (let i = 0, o = 0; i < data.length; i++, o += ofMember) {
+    memberStiffness(data[i]!, k);
+    ofLatest[o] = k.ka;
+    ofLatest[o + 1] = k.kvv;
+    ofLatest[o + 2] = k.kv1;
+    ofLatest[o + 3] = k.kv2;
+    ofLatest[o + 4] = k.S11;
+    ofLatest[o + 5] = k.S12;
+    ofLatest[o + 6] = k.S22;
+  }
+  latest = data;
+  return ofLatest;
+}
+
 const u = new Float64Array(6);
 const q = new Float64Array(6);
 
@@ -40,25 +65,39 @@ export function recover(
   // what the nodes must do to the members, node axes
   const asked = numbers(3 * nodes);
   let handled = 0;
-  for (let i = 0; i < data.length; i++) {
+  const stiffness = stiffnessOf(data);
+  for (let i = 0, o = 0; i < data.length; i++, o += ofMember) {
     const m = data[i]!;
     toLocal(m, angles, all, 3 * m.start, 3 * m.end, u);
-    endForces(memberStiffness(m, k), u, q);
+    const ka = stiffness[o]!;
+    const kvv = stiffness[o + 1]!;
+    const kv1 = stiffness[o + 2]!;
+    const kv2 = stiffness[o + 3]!;
+    const S12 = stiffness[o + 5]!;
+    const u1 = u[0]!;
+    const v1 = u[1]!;
+    const t1 = u[2]!;
+    const u2 = u[3]!;
+    const v2 = u[4]!;
+    const t2 = u[5]!;
     handled = Math.max(
       handled,
-      k.ka * Math.max(Math.abs(u[0]!), Math.abs(u[3]!)),
-      k.kvv * Math.max(Math.abs(u[1]!), Math.abs(u[4]!)),
-      (k.kv1 + k.kv2) * Math.max(Math.abs(u[2]!), Math.abs(u[5]!)),
+      ka * Math.max(Math.abs(u1), Math.abs(u2)),
+      kvv * Math.max(Math.abs(v1), Math.abs(v2)),
+      (kv1 + kv2) * Math.max(Math.abs(t1), Math.abs(t2)),
     );
+    const axial = ka * (u1 - u2);
+    const v = v1 - v2;
+    const shear = kvv * v + kv1 * t1 + kv2 * t2;
     const fixed = (loadCase * data.length + i) * 6;
-    for (let r = 0; r < 6; r++) q[r] = q[r]! + loads.fixedEnd[fixed + r]!;
-    for (let end = 0; end < 2; end++) {
-      const node = end === 0 ? m.start : m.end;
-      const [x, y] = endInNodeAxes(m, angles[node]!, q[3 * end]!, q[3 * end + 1]!);
-      asked[3 * node] = asked[3 * node]! + x;
-      asked[3 * node + 1] = asked[3 * node + 1]! + y;
-      asked[3 * node + 2] = asked[3 * node + 2]! + q[3 * end + 2]!;
-    }
+    q[0] = axial + loads.fixedEnd[fixed]!;
+    q[1] = shear + loads.fixedEnd[fixed + 1]!;
+    q[2] = kv1 * v + stiffness[o + 4]! * t1 + S12 * t2 + loads.fixedEnd[fixed + 2]!;
+    q[3] = -axial + loads.fixedEnd[fixed + 3]!;
+    q[4] = -shear + loads.fixedEnd[fixed + 4]!;
+    q[5] = kv2 * v + S12 * t1 + stiffness[o + 6]! * t2 + loads.fixedEnd[fixed + 5]!;
+    addEnd(m, angles, m.start, 0, asked);
+    addEnd(m, angles, m.end, 3, asked);
     // internal forces: N = −X₁, V = Y₁, M = −m₁ at the start; N = X₂, V = −Y₂, M = m₂ at the end (+ 0 makes −0 a 0)
     forces[6 * i] = -q[0]! + 0;
     forces[6 * i + 1] = q[1]! + 0;
@@ -78,6 +117,18 @@ export function recover(
   }
   const reactions = takeReactions(frame, t, angles, all, asked);
   return { displacements: all, reactions, endForces: forces, outOfBalance: asked, handled };
+}
+
+/** Adds one end of `q` to what its node must do to its members. */
+function addEnd(m: MemberData, angles: Float64Array, node: number, end: number, asked: Float64Array): void {
+  const angle = angles[node]!;
+  let x = q[end]! * m.cos - q[end + 1]! * m.sin;
+  let y = q[end]! * m.sin + q[end + 1]! * m.cos;
+  if (angle !== 0) [x, y] = endInNodeAxes(m, angle, q[end]!, q[end + 1]!);
+  const o = 3 * node;
+  asked[o] = asked[o]! + x;
+  asked[o + 1] = asked[o + 1]! + y;
+  asked[o + 2] = asked[o + 2]! + q[end + 2]!;
 }
 
 /**
