@@ -12,7 +12,7 @@ import { checkDisplacement } from './displacement';
 import { spansOf, type Span } from './spans';
 import { checkSpread } from './spread';
 import { checkStability, stabilitySubject } from './stability';
-import { checkStress, stressNotChecked, type SlenderIn } from './strength-stress';
+import { checkStress, stressKinds, stressNotChecked, type SlenderIn } from './strength-stress';
 import { checkSway } from './sway';
 
 export interface FrameChecks {
@@ -108,6 +108,7 @@ function checkStrength(
     return;
   }
   const lines = states.map((state) => flat.of(state));
+  const kindOf = stressKinds(frame, findings);
   const slender = new Map<number, ReturnType<SlenderIn>[]>();
   for (let i = 0; i < frame.members.length; i++) {
     let pieces: readonly number[] | null = null;
@@ -119,7 +120,7 @@ function checkStrength(
       if (found[c] === undefined) found[c] = find(oneLine(pieces.map((p) => objectOf(lines[c]!, p))));
       return found[c];
     };
-    checkStress(frame, settings, i, states, lines, slenderIn, findings);
+    checkStress(frame, settings, i, kindOf(i), states, lines, slenderIn, findings);
   }
   findings.assumptions.add(
     'Equivalent stress: the larger face stress with the peak shear stress of the same place, on the safe side',

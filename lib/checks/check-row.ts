@@ -16,7 +16,7 @@ export interface Findings {
 
 /** Takes a subject's rows of one check, a combination each: keeps the governing one. */
 export function keepGoverning(findings: Findings, rows: readonly Check[]): void {
-  const governing = governingRow(rows);
+  const governing = rows.length === 1 ? rows[0] : governingRow(rows);
   if (!governing) return;
   findings.checks.push(governing);
   findings.all?.push(...rows);

@@ -6,7 +6,7 @@ import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { namesSpan } from './limits';
 import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
-import { valueIn } from './line-bounds';
+import { bound, valueIn } from './line-bounds';
 import { SAME, turningPoints } from './peak';
 import { valueAt } from './polynomial';
 import { freeEnds, supported, type Span } from './spans';
@@ -52,7 +52,7 @@ export function checkDeflection(
   }
   if (!span.whole) return keepGoverning(findings, [notCheckedRow(subject, null, 'pieces of the span do not form one line')]);
   const rule = deflectionRule(frame, span, findings);
-  const measured = (c: number): Movement => deflectionOf(span, rule, lines[c]!);
+  const measured = (c: number, floor: number): Movement => deflectionOf(span, rule, lines[c]!, floor);
   const inputs = { rule: rule.kind, root: rule.kind === 'cantilever' ? rule.root : null };
   checkMovement(subject, 'deflection', limits, span.length_m, settings, states, measured, () => inputs, findings);
 }
@@ -77,8 +77,11 @@ function deflectionRule(frame: Frame, span: Span, findings: Findings): Deflectio
 const departure = new Float64Array(16);
 const points = new Float64Array(32);
 
-/** Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start. */
-function deflectionOf(span: Span, rule: DeflectionRule, lines: StateLines): Movement {
+/**
+ * Largest deflection of a span in size, m, and where; of equal ones the one nearest the span's start.
+ * @param floor one that is not above it need not be exact, m
+ */
+function deflectionOf(span: Span, rule: DeflectionRule, lines: StateLines, floor: number): Movement {
   const last = span.pieces.length - 1;
   const first = endDeflection(span, 0, lines, 'near');
   const final = endDeflection(span, last, lines, 'far');
@@ -103,6 +106,8 @@ function deflectionOf(span: Span, rule: DeflectionRule, lines: StateLines): Move
       const x0 = reversed ? from_m + length_m - from : from_m + from;
       departure[0] = departure[0]! - rest - slope * x0;
       departure[1] = departure[1]! - sign * slope;
+      // turning points are looked for only where they can matter
+      if (bound(departure, 0, degree, to - from) <= Math.max(floor, value)) continue;
       const count = turningPoints(departure, degree, to - from, points);
       for (let j = 0; j < count; j++) {
         const s = points[reversed ? count - 1 - j : j]!;

@@ -1,13 +1,13 @@
-import { degreeV, headNumbers, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
+import { degreeV, headNumbers, ofM, ofN, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
 import { faceStress } from './normal-stress';
 import { valueIn } from './line-bounds';
-import { forcesAt, keep, largerFace, noPeak, SAME, turningPoints, type Peak } from './peak';
+import { forcesAt, isShort, keep, largerFace, noPeak, SAME, turningPoints, type Peak } from './peak';
 import { valueAt } from './polynomial';
 
 const sigma = new Float64Array(16);
 const squared = new Float64Array(16);
 const points = new Float64Array(32);
-const peaks = [noPeak(), noPeak()] as const;
+const peaks = [noPeak('top'), noPeak('bottom')] as const;
 
 /**
  * Largest equivalent stress along a member, Pa: σ_v = √(σ² + 3τ²), σ the larger of the two faces in size, τ the elastic peak of
@@ -32,9 +32,33 @@ export function peakEquivalentStress(
   bound: number,
   floor: number,
 ): Peak {
-  const atEnds = scan(lines, line, perA, perTop, perBottom, perAv, false);
+  const atEnds = isShort(lines, line)
+    ? endsOfShort(lines, line + headNumbers, perA, perTop, perBottom, perAv)
+    : scan(lines, line, perA, perTop, perBottom, perAv, false);
   if (bound <= Math.max(atEnds.value, floor) * (1 + SAME)) return atEnds;
   return scan(lines, line, perA, perTop, perBottom, perAv, true);
+}
+
+/** What `scan` finds at the ends of a short line (peak.ts) whose segment begins at `o`. */
+function endsOfShort(lines: Float64Array, o: number, perA: number, perTop: number, perBottom: number, perAv: number): Peak {
+  const h = lines[o + 1]!;
+  const shear0 = lines[o + ofV]! * perAv;
+  const shear1 = valueIn(lines, o + ofV, 2, h) * perAv;
+  for (let f = 0; f < 2; f++) {
+    const perW = f === 0 ? -perTop : perBottom;
+    const c0 = lines[o + ofN]! * perA + lines[o + ofM]! * perW;
+    const c1 = lines[o + ofN + 1]! * perA + lines[o + ofM + 1]! * perW;
+    const c2 = lines[o + ofN + 2]! * perA + lines[o + ofM + 2]! * perW;
+    const c3 = (c2 * h + c1) * h + c0;
+    const start = Math.sqrt(c0 * c0 + 3 * shear0 * shear0);
+    const end = Math.sqrt(c3 * c3 + 3 * shear1 * shear1);
+    const peak = peaks[f]!;
+    const later = end > start * (1 + SAME);
+    peak.value = later ? end : start;
+    peak.at = later ? h : 0;
+    forcesAt(peak, lines, o, peak.at);
+  }
+  return largerFace(peaks[0], peaks[1]);
 }
 
 function scan(
@@ -50,7 +74,6 @@ function scan(
     const perW = f === 0 ? -perTop : perBottom;
     const peak = peaks[f]!;
     peak.value = -1;
-    peak.face = f === 0 ? 'top' : 'bottom';
     for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
       const from = lines[o]!;
       const h = lines[o + 1]! - from;

@@ -45,7 +45,7 @@ export function withoutLimit(settings: Settings, measure: 'deflection' | 'sway',
  * A subject's movement against the limits that name it, in every service combination.
  * @param limits most specific first; in a combination that none of them is for, the movement is not limited
  * @param length_m what a limit's ratio divides
- * @param measured the movement in a state, by its index
+ * @param measured the movement in a state, by its index; one that is not above `floor` (m) governs nothing and need not be exact
  * @param inputsOf what it was made of, for the working
  */
 export function checkMovement(
@@ -55,7 +55,7 @@ export function checkMovement(
   length_m: number,
   settings: Settings,
   states: readonly ResultState[],
-  measured: (state: number) => Movement,
+  measured: (state: number, floor: number) => Movement,
   inputsOf: (state: number) => Check['inputs'],
   findings: Findings,
 ): void {
@@ -98,7 +98,7 @@ export function checkMovement(
       rows.push(notCheckedRow(subject, combination, `needs ${needs} in ${limit.source}`));
       continue;
     }
-    const movement = measured(c);
+    const movement = measured(c, best ? (best.movement.value / best.allowed) * allowed : 0);
     if (findings.all) rows.push(row(c, limit, allowed, movement));
     else if (!best || movement.value / allowed > (best.movement.value / best.allowed) * (1 + SAME))
       best = { c, limit, allowed, movement };

@@ -1,4 +1,4 @@
-import { degreeM, degreeN, degreeV, ofM, ofN, ofV } from '@/lib/analysis/flat-line';
+import { degreeM, degreeN, degreeV, headNumbers, ofM, ofN, ofV } from '@/lib/analysis/flat-line';
 import { valueIn } from './line-bounds';
 import { rootsWithin } from './polynomial';
 
@@ -12,7 +12,7 @@ export interface Peak {
   M: number;
 }
 
-export const noPeak = (): Peak => ({ value: -1, at: 0, face: null, N: 0, V: 0, M: 0 });
+export const noPeak = (face: Peak['face'] = null): Peak => ({ value: -1, at: 0, face, N: 0, V: 0, M: 0 });
 
 /** Two extremes within this part of each other are equal: the one at the smallest x counts (sheets §4). */
 export const SAME = 1e-9;
@@ -45,6 +45,31 @@ export function keep(peak: Peak, value: number, at: number): boolean {
   peak.value = value;
   peak.at = at;
   return true;
+}
+
+/**
+ * Whether the segment at `o` is all of a member's line, from its start, and N, V and M change no faster than s²: members under
+ * even loads, the commonest, whose peaks need no loops over coefficients.
+ */
+export function isShort(lines: Float64Array, line: number): boolean {
+  const o = line + headNumbers;
+  if (lines[line] !== 1 || lines[o] !== 0 || lines[o + degreeN] !== 2 || lines[o + degreeV] !== 2) return false;
+  return lines[o + degreeM] === 3 && lines[o + ofM + 3] === 0;
+}
+
+/** Where c₀ + c₁ s + c₂ s² is largest in size from 0 to h; of equal places the first, as `keep` does. */
+export function peakOfShort(c0: number, c1: number, c2: number, h: number): number {
+  let largest = Math.abs(c0);
+  let at = 0;
+  const turn = c2 === 0 ? 0 : -c1 / (2 * c2);
+  if (turn > 0 && turn < h) {
+    const there = Math.abs((c2 * turn + c1) * turn + c0);
+    if (there > largest * (1 + SAME)) {
+      largest = there;
+      at = turn;
+    }
+  }
+  return Math.abs((c2 * h + c1) * h + c0) > largest * (1 + SAME) ? h : at;
 }
 
 /** The larger of the peaks of the two faces; of equal ones the smaller x, then the top. */

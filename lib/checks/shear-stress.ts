@@ -1,5 +1,6 @@
 import { degreeV, headNumbers, ofV, segmentNumbers } from '@/lib/analysis/flat-line';
-import { forcesAt, keep, noPeak, turningPoints, type Peak } from './peak';
+import { valueIn } from './line-bounds';
+import { forcesAt, isShort, keep, noPeak, peakOfShort, turningPoints, type Peak } from './peak';
 import { valueAt } from './polynomial';
 
 const shear = new Float64Array(16);
@@ -13,6 +14,14 @@ const peak = noPeak();
  * @param perAv 1/Av, 1/m²   @returns a record that the next call uses again
  */
 export function peakShearStress(lines: Float64Array, line: number, perAv: number): Peak {
+  if (isShort(lines, line)) {
+    const o = line + headNumbers;
+    const s = peakOfShort(lines[o + ofV]!, lines[o + ofV + 1]!, lines[o + ofV + 2]!, lines[o + 1]!);
+    peak.value = Math.abs(valueIn(lines, o + ofV, 2, s)) * perAv;
+    peak.at = s;
+    forcesAt(peak, lines, o, s);
+    return peak;
+  }
   peak.value = -1;
   for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
     const from = lines[o]!;

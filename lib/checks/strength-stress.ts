@@ -10,6 +10,7 @@ import { lineBounds } from './line-bounds';
 import { peakNormalStress } from './normal-stress';
 import { peakShearStress } from './shear-stress';
 import { plateProportions, slenderInCombination, type PlateProportions } from './slender-plates';
+import { equivalentWithin, shortPeaks, type Governing } from './short-peaks';
 import { StressBounds } from './stress-bounds';
 import { StressRows, stressNames, stressSubject } from './stress-rows';
 
@@ -25,9 +26,33 @@ export function stressNotChecked(frame: Frame, member: number, reason: string, f
   for (const check of stressNames) keepGoverning(findings, [notCheckedRow(stressSubject(frame, member, check), null, reason)]);
 }
 
+/** What the stress checks of members of one section, material and turn share. */
+interface StressKind {
+  readonly of: InPlane;
+  readonly plates: PlateProportions;
+}
+
+/** The kind of each member, worked out and its plates noted once for all members alike. */
+export function stressKinds(frame: Frame, findings: Findings): (member: number) => StressKind {
+  const known = new Map<number, StressKind>();
+  return (member) => {
+    const { section: s, material: m, turned } = frame.members[member]!;
+    const key = 2 * (s * frame.materials.length + m) + (turned ? 1 : 0);
+    let kind = known.get(key);
+    if (!kind) {
+      const section = frame.sections[s]!;
+      const material = frame.materials[m]!;
+      kind = { of: inPlane(section, turned), plates: plateProportions(section, turned, material) };
+      notePlates(section.name, kind.plates, material.standard, findings);
+      known.set(key, kind);
+    }
+    return kind;
+  };
+}
+
 /**
  * Elastic stress of one member over all strength combinations: normal, shear and equivalent stress.
- * @param lines the lines of each of `states`
+ * @param kind the member's (`stressKinds`)   @param lines the lines of each of `states`
  * @param slenderIn what is found of slender plates along the line of all pieces of its span of the same section, in a state: along
  *   the physical member, so that a node on it changes nothing; looked for once for all of them
  */
@@ -35,6 +60,7 @@ export function checkStress(
   frame: Frame,
   settings: Settings,
   member: number,
+  { of, plates }: StressKind,
   states: readonly ResultState[],
   lines: readonly StateLines[],
   slenderIn: SlenderIn,
@@ -43,10 +69,6 @@ export function checkStress(
   const m = frame.members[member]!;
   const section = frame.sections[m.section]!;
   const material = frame.materials[m.material]!;
-  const of = inPlane(section, m.turned);
-  const plates = plateProportions(section, m.turned, material);
-  notePlates(section.name, plates, material.standard, findings);
-
   const fy = material.fy_Pa;
   const noYield =
     fy !== null ? null : material.grade !== null && section.properties.t_m === null ? 'needs t (fy depends on it)' : 'needs fy';
@@ -113,6 +135,8 @@ function takePeaks(
   perBottom: number,
   perAv: number,
 ): void {
+  const short = shortPeaks(lines, member, perA, perTop, perBottom, perAv);
+  if (short) return takeShortPeaks(rows, states, lines, member, perA, perTop, perBottom, perAv, short);
   const bounds = new StressBounds(lines, member, perA, perTop, perBottom, perAv);
   for (let c = 0; c < lines.length; c++) {
     const both = bounds.mayGovern(2, c);
@@ -131,6 +155,30 @@ function takePeaks(
     const floor = rows.floor(2);
     // what is no number is kept, not passed over
     if (!(bound <= floor)) rows.take(2, name, peakEquivalentStress(line, at, perA, perTop, perBottom, perAv, bound, floor));
+  }
+}
+
+/** The same where `shortPeaks` says which states govern. */
+function takeShortPeaks(
+  rows: StressRows,
+  states: readonly ResultState[],
+  lines: readonly StateLines[],
+  member: number,
+  perA: number,
+  perTop: number,
+  perBottom: number,
+  perAv: number,
+  { normal, shear }: Governing,
+): void {
+  const at = (c: number): number => lines[c]!.at(member);
+  const { numbers } = lines[0]!;
+  rows.take(0, states[normal]!.name, peakNormalStress(numbers, at(normal), perA, perTop, perBottom));
+  rows.take(1, states[shear]!.name, peakShearStress(numbers, at(shear), perAv));
+  for (let c = 0; c < lines.length; c++) {
+    const bound = equivalentWithin(c);
+    const floor = rows.floor(2);
+    if (bound <= floor) continue;
+    rows.take(2, states[c]!.name, peakEquivalentStress(numbers, at(c), perA, perTop, perBottom, perAv, bound, floor));
   }
 }
 
