@@ -1,28 +1,42 @@
 import { render, screen } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { RatioAgainst } from './ratio-against';
-import { spreadBins } from '@/lib/drawing/spread-bins';
+import { spreadBins, type SpreadBin, type SpreadFrame } from '@/lib/drawing/spread-bins';
 import { Spread } from './spread';
 import { ticks, tickText } from '@/lib/drawing/axis';
 
+const framesOf = (ratios: readonly number[]): SpreadFrame[] =>
+  ratios.map((ratio) => ({ ratio, verdict: ratio > 1 ? 'over' : ratio >= 0.885 ? 'near' : 'within' }));
+const sum = (bins: readonly SpreadBin[], verdict: keyof SpreadBin['of']): number =>
+  bins.reduce((all, bin) => all + bin.of[verdict], 0);
+
 describe('the spread of ratios', () => {
   it('counts a ratio of exactly 1.00 as near and one above it as over', () => {
-    const { bins } = spreadBins([1, 1.0001, 0.9, 0.8999], 0.9);
-    const count = (verdict: string) => bins.filter((bin) => bin.verdict === verdict).reduce((sum, bin) => sum + bin.count, 0);
-    expect([count('within'), count('near'), count('over')]).toEqual([1, 2, 1]);
+    const { bins } = spreadBins(framesOf([1, 1.0001, 0.9, 0.8999]), 0.9);
+    expect([sum(bins, 'within'), sum(bins, 'near'), sum(bins, 'over')]).toEqual([1, 2, 1]);
+  });
+
+  it('leaves a frame within that its own check calls so above the near limit, in the step of its ratio', () => {
+    const { bins } = spreadBins([{ ratio: 0.96, verdict: 'within' }, { ratio: 0.97, verdict: 'near' }], 0.9); // prettier-ignore
+    expect(bins.filter(({ count }) => count > 0)).toEqual([
+      { from: 0.95, to: 0.975, count: 2, of: { within: 1, near: 1, over: 0 } },
+    ]);
+    const { container } = render(<Spread frames={[{ ratio: 0.98, verdict: 'within' }]} nearLimit={0.9} />);
+    expect([...container.querySelectorAll('.chart-bar')].map((bar) => bar.getAttribute('class'))).toEqual([
+      'chart-bar chart-within',
+    ]);
   });
 
   it('keeps every frame, and never lets a step straddle a near limit of its own', () => {
     const ratios = Array.from({ length: 200 }, (_, i) => ((i * 7919) % 1900) / 1000);
-    const { bins } = spreadBins(ratios, 0.885);
-    expect(bins.reduce((sum, bin) => sum + bin.count, 0)).toBe(200);
+    const { bins } = spreadBins(framesOf(ratios), 0.885);
+    expect(bins.reduce((all, bin) => all + bin.count, 0)).toBe(200);
     for (const bin of bins) expect(bin.from < 0.885 && bin.to > 0.885).toBe(false);
-    const over = bins.filter((bin) => bin.verdict === 'over').reduce((sum, bin) => sum + bin.count, 0);
-    expect(over).toBe(ratios.filter((ratio) => ratio > 1).length);
+    expect(sum(bins, 'over')).toBe(ratios.filter((ratio) => ratio > 1).length);
   });
 
   it('says what it shows in words', () => {
-    render(<Spread ratios={[0.5, 1.2]} nearLimit={0.9} />);
+    render(<Spread frames={framesOf([0.5, 1.2])} nearLimit={0.9} />);
     expect(screen.getByRole('img', { name: 'Governing ratios of 2 frames in steps of 0.025: 1 above 1.00' })).toBeInTheDocument();
   });
 

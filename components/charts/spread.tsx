@@ -1,21 +1,21 @@
 'use client';
 import { useId } from 'react';
-import { spreadBins } from '@/lib/drawing/spread-bins';
+import { spreadBins, stacked, type SpreadFrame } from '@/lib/drawing/spread-bins';
 import { useWidth } from '../ui/use-width';
 import { ticks, tickText } from '@/lib/drawing/axis';
 
 interface SpreadProps {
-  /** Governing ratio of every frame that has one. */
-  readonly ratios: readonly number[];
+  /** Every frame that has a governing ratio. */
+  readonly frames: readonly SpreadFrame[];
   readonly nearLimit: number;
   readonly height?: number;
 }
 
 /** How governing ratios are spread: frames in steps of 0.025, against the near limit and the limit at 1.00. */
-export function Spread({ ratios, nearLimit, height = 226 }: SpreadProps) {
+export function Spread({ frames, nearLimit, height = 226 }: SpreadProps) {
   const id = useId();
   const [box, width] = useWidth<HTMLDivElement>(400);
-  const { bins, low, high, above } = spreadBins(ratios, nearLimit);
+  const { bins, low, high, above } = spreadBins(frames, nearLimit);
   const top = Math.max(4, ...bins.map((bin) => bin.count));
   const left = 30;
   const [headroom, foot] = [22, height - 20];
@@ -23,14 +23,14 @@ export function Spread({ ratios, nearLimit, height = 226 }: SpreadProps) {
   const y = (count: number) => foot - (count / top) * (foot - headroom);
   const yTicks = ticks(0, top, height > 170 ? 4 : 3).filter((t) => t > 0 && Number.isInteger(t));
   const xTicks = ticks(low, high, width > 300 ? 8 : 5);
-  const over = ratios.filter((ratio) => ratio > 1).length;
+  const over = frames.filter(({ ratio }) => ratio > 1).length;
   return (
     <div ref={box} className="chart">
       <svg
         viewBox={`0 0 ${width} ${height}`}
         width="100%"
         role="img"
-        aria-label={`Governing ratios of ${ratios.length} frames in steps of 0.025: ${over} above 1.00`}
+        aria-label={`Governing ratios of ${frames.length} frames in steps of 0.025: ${over} above 1.00`}
       >
         <HatchPattern id={id} />
         {yTicks.map((t) => (
@@ -41,20 +41,26 @@ export function Spread({ ratios, nearLimit, height = 226 }: SpreadProps) {
             </text>
           </g>
         ))}
-        {bins.map((bin) => {
-          const [a, b] = [x(bin.from), x(bin.to)];
-          return (
-            <g key={bin.from} className={`chart-bar chart-${bin.verdict}`} data-count={bin.count}>
-              <rect
-                x={a + 0.5}
-                y={y(bin.count)}
-                width={Math.max(b - a - 1, 0.5)}
-                height={foot - y(bin.count)}
-                fill={bin.verdict === 'near' ? `url(#${id})` : undefined}
-              />
-              {bin.count > 0 && <path className="chart-cap" d={`M${a + 0.5} ${y(bin.count) + 0.75}H${b - 0.5}`} />}
-            </g>
-          );
+        {bins.map(({ from, to, of }) => {
+          const [a, b] = [x(from), x(to)];
+          let foundation = 0;
+          return stacked.map((verdict) => {
+            const below = foundation;
+            foundation += of[verdict];
+            if (of[verdict] === 0) return null;
+            return (
+              <g key={`${from} ${verdict}`} className={`chart-bar chart-${verdict}`} data-count={of[verdict]}>
+                <rect
+                  x={a + 0.5}
+                  y={y(foundation)}
+                  width={Math.max(b - a - 1, 0.5)}
+                  height={y(below) - y(foundation)}
+                  fill={verdict === 'near' ? `url(#${id})` : undefined}
+                />
+                <path className="chart-cap" d={`M${a + 0.5} ${y(foundation) + 0.75}H${b - 0.5}`} />
+              </g>
+            );
+          });
         })}
         <path className="chart-near-line" d={`M${x(nearLimit)} ${headroom - 8}V${foot}`} />
         <path className="chart-limit" d={`M${x(1)} ${headroom - 8}V${foot}`} />

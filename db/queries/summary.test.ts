@@ -45,6 +45,7 @@ it('agrees with the tables: counts, spread, what governs, sections, the worst te
     const ratios = own.flatMap((row) => (typeof row.ratio === 'number' ? [row.ratio] : [])).sort((a, b) => a - b);
     expect(one.members).toBe(own.length);
     expect(one.worst).toBe(ratios.at(-1));
+    expect(one.verdict).toBe(own.find((row) => row.ratio === one.worst)?.verdict);
     expect(one.median).toBe((ratios[(ratios.length - 1) >> 1]! + ratios[ratios.length >> 1]!) / 2);
     expect(one.over).toBe(own.filter((row) => row.verdict === 'over').length);
   }

@@ -47,6 +47,8 @@ export interface SectionSummary {
   /** Of its members that have a ratio. */
   readonly median: number | null;
   readonly worst: number | null;
+  /** Of the member that is worst; null where none has a ratio. */
+  readonly verdict: Verdict | null;
   readonly over: number;
 }
 
@@ -194,14 +196,17 @@ function sectionsOf(raw: RawDatabase, revision: number): SectionSummary[] {
   ).all(revision);
   const ratios = 'from member_row indexed by member_row_section_ratio where revision = ? and section = ? and ratio >= 0';
   const withRatio = statement<{ n: number }>(raw, `select count(*) as n ${ratios}`);
-  const nth = statement<{ ratio: number }>(raw, `select ratio ${ratios} order by ratio desc limit 2 offset ?`);
+  const inOrder = `${ratios} order by ratio desc`;
+  const nth = statement<{ ratio: number }>(raw, `select ratio ${inOrder} limit 2 offset ?`);
+  const first = statement<{ ratio: number; verdict: number }>(raw, `select ratio, verdict ${inOrder}, frame, member limit 1`);
   const found = counted.map(({ section, members, over }): SectionSummary => {
     const { n } = withRatio.get(revision, section)!;
-    if (n === 0) return { section, members, median: null, worst: null, over };
+    if (n === 0) return { section, members, median: null, worst: null, verdict: null, over };
     const at = (offset: number) => nth.all(revision, section, offset);
     const [low, high] = at((n - 1) >> 1);
     const median = n % 2 === 1 ? low!.ratio : (low!.ratio + high!.ratio) / 2;
-    return { section, members, median, worst: at(0)[0]!.ratio, over };
+    const { ratio: worst, verdict } = first.get(revision, section)!;
+    return { section, members, median, worst, verdict: verdictOf(verdict), over };
   });
   return found.sort((a, b) => (b.worst ?? -1) - (a.worst ?? -1) || (a.section < b.section ? -1 : 1));
 }

@@ -22,10 +22,10 @@ export function summaryPages(flow: Flow, source: ReportSource, facts: ReportFact
   flow.paragraph(tallyWords(counts), { face: 'sansBold', size: 10 });
   flow.space(4);
   strip(flow, frames);
-  const ratios = frames.flatMap(({ ratio }) => (ratio === null || !Number.isFinite(ratio) ? [] : [ratio]));
-  if (ratios.length > 0) {
+  const spread = frames.flatMap(({ ratio, verdict }) => (ratio === null || !Number.isFinite(ratio) ? [] : [{ ratio, verdict }]));
+  if (spread.length > 0) {
     flow.heading('Spread of governing ratios', 'frames in steps of 0.025');
-    spreadChart(flow, ratios, nearLimit, 130);
+    spreadChart(flow, spread, nearLimit, 130);
   }
   const governs = [...facts.governs].map(([check, of]) => ({
     check,

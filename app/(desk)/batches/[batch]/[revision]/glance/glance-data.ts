@@ -2,7 +2,6 @@ import type { GoverningCount, SectionWork } from '@/components/charts/charts-dat
 import type { WorstFrame } from '@/components/charts/worst-frames';
 import type { BatchSummary, SummaryCell } from '@/db/queries/summary';
 import { pages } from '@/lib/api/addresses';
-import type { Verdict } from '@/lib/results/result';
 
 export function worstFrames(batch: number, letter: string, cells: readonly SummaryCell[]): WorstFrame[] {
   return cells.map(({ index, id, verdict, ratio, check, subject, section, combination }) => ({
@@ -30,15 +29,12 @@ export function governingCounts(cells: readonly SummaryCell[]): GoverningCount[]
   return [...counts].map(([check, count]) => ({ check, ...count })).sort((a, b) => all(b) - all(a));
 }
 
-export function sectionWork(sections: BatchSummary['sections'], nearLimit: number): SectionWork[] {
-  return sections.slice(0, 8).map(({ section, members, median, worst }) => ({
+export function sectionWork(sections: BatchSummary['sections']): SectionWork[] {
+  return sections.slice(0, 8).map(({ section, members, median, worst, verdict }) => ({
     section,
     members,
     median,
     worst,
-    verdict: verdictOf(worst, nearLimit),
+    verdict: verdict ?? 'not checked',
   }));
 }
-
-const verdictOf = (ratio: number | null, nearLimit: number): Verdict =>
-  ratio === null ? 'not checked' : ratio > 1 ? 'over' : ratio >= nearLimit ? 'near' : 'within';

@@ -55,7 +55,7 @@ export default async function GlancePage({ params }: { readonly params: Promise<
         <GoverningChecks counts={governingCounts(cells)} frames={cells.length} />
       </Zone>
       <Zone title="Sections working hardest">
-        <HardestSections sections={sectionWork(summary.sections, nearLimit)} nearLimit={nearLimit} />
+        <HardestSections sections={sectionWork(summary.sections)} nearLimit={nearLimit} />
       </Zone>
     </>
   );
@@ -81,7 +81,10 @@ export default async function GlancePage({ params }: { readonly params: Promise<
           />
         )}
         <Zone title="Spread of governing ratios" note="frames in steps of 0.025">
-          <Spread ratios={cells.flatMap((cell) => cell.ratio ?? [])} nearLimit={nearLimit} />
+          <Spread
+            frames={cells.flatMap(({ ratio, verdict }) => (ratio === null ? [] : [{ ratio, verdict }]))}
+            nearLimit={nearLimit}
+          />
         </Zone>
       </div>
     </>
