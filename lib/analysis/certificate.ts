@@ -99,7 +99,9 @@ export function digitsOf(condition: number): number {
 
 /** A sum of cases has the rounding of each. @param cases floors of the cases, N; none where there are no cases */
 function floorOf(state: ResultState, cases: readonly number[]): number {
-  return cases.reduce((sum, floor, c) => sum + Math.abs(state.factors[c]!) * floor, 0);
+  let sum = 0;
+  for (let c = 0; c < cases.length; c++) sum += Math.abs(state.factors[c]!) * cases[c]!;
+  return sum;
 }
 
 /** Certificate item 3. @param cases floors of the cases, N   @param floors of every state; undefined = as sums of cases */

@@ -39,25 +39,27 @@ export function stateEquilibrium(frame: Frame, state: ResultState, floor: number
   let known = totals.get(frame);
   if (!known) totals.set(frame, (known = frame.cases.map((_, c) => typedTotals(frame, c, middle.x0, middle.y0))));
   const sum = { Fx: 0, Fy: 0, Mz: 0, sizeF: 0, sizeM: 0 };
-  known.forEach((total, c) => {
+  for (let c = 0; c < known.length; c++) {
     const k = state.factors[c]!;
-    if (k === 0) return;
+    if (k === 0) continue;
+    const total = known[c]!;
     sum.Fx += k * total.Fx;
     sum.Fy += k * total.Fy;
     sum.Mz += k * total.Mz;
     sum.sizeF += Math.abs(k) * total.sizeF;
     sum.sizeM += Math.abs(k) * total.sizeM;
-  });
+  }
   const notional = state.method?.notional;
   if (notional)
-    frame.nodes.forEach(({ x_m, y_m }, i) => {
+    for (let i = 0; i < frame.nodes.length; i++) {
+      const { x_m, y_m } = frame.nodes[i]!;
       const Fx = notional[2 * i]! / state.method!.loadScale;
       const Fy = notional[2 * i + 1]! / state.method!.loadScale;
       sum.Fx += Fx;
       sum.Fy += Fy;
       sum.Mz += (x_m - middle.x0) * Fy - (y_m - middle.y0) * Fx;
       sum.sizeF += Math.abs(Fx) + Math.abs(Fy);
-    });
+    }
   const moved = state.order === 2 ? momentOfMovement(frame, state, lines) : 0;
   return balance(frame, middle, sum, state.reactions, moved, floor);
 }
@@ -71,8 +73,8 @@ function balance(
   floor: number,
 ): number {
   let { Fx, Fy, Mz, sizeF, sizeM } = loads;
-  frame.supports.forEach((support, i) => {
-    const node = frame.nodes[support.node]!;
+  for (let i = 0; i < frame.supports.length; i++) {
+    const node = frame.nodes[frame.supports[i]!.node]!;
     const rx = reactions[3 * i]!;
     const ry = reactions[3 * i + 1]!;
     const rm = reactions[3 * i + 2]!;
@@ -82,7 +84,7 @@ function balance(
     Mz += rm + lever;
     sizeF += Math.hypot(rx, ry);
     sizeM += Math.abs((node.x_m - x0) * ry) + Math.abs((node.y_m - y0) * rx) + Math.abs(rm);
-  });
+  }
   // moments without any lever of their own are judged against the forces over the frame's size, and the other way round
   const scale = Math.max(sizeF, sizeM / size, floor);
   if (!(scale > 0)) return scale === 0 ? 0 : NaN;

@@ -19,16 +19,18 @@ export function momentOfMovement(frame: Frame, state: ResultState, lines: FlatLi
   const scale = state.method?.loadScale ?? 1;
   const d = state.displacements;
   let sum = 0;
-  const take = (node: number, Fx: number, Fy: number): void => {
-    sum += d[3 * node]! * Fy - d[3 * node + 1]! * Fx;
-  };
-  for (const load of frame.nodeLoads) {
-    const k = state.factors[load.case]!;
-    if (k !== 0) take(load.node, k * load.Fx_N, k * load.Fy_N);
+  for (const { node, case: c, Fx_N, Fy_N } of frame.nodeLoads) {
+    const k = state.factors[c]!;
+    if (k !== 0) sum += d[3 * node]! * (k * Fy_N) - d[3 * node + 1]! * (k * Fx_N);
   }
   const notional = state.method?.notional;
-  if (notional) for (let i = 0; i < frame.nodes.length; i++) take(i, notional[2 * i]! / scale, notional[2 * i + 1]! / scale);
-  frame.supports.forEach(({ node }, i) => take(node, state.reactions[3 * i]!, state.reactions[3 * i + 1]!));
+  if (notional)
+    for (let i = 0; i < frame.nodes.length; i++)
+      sum += d[3 * i]! * (notional[2 * i + 1]! / scale) - d[3 * i + 1]! * (notional[2 * i]! / scale);
+  for (let i = 0; i < frame.supports.length; i++) {
+    const { node } = frame.supports[i]!;
+    sum += d[3 * node]! * state.reactions[3 * i + 1]! - d[3 * node + 1]! * state.reactions[3 * i]!;
+  }
   const typed = typedAlong(frame);
   const own = lines.of(state);
   for (let i = 0; i < typed.length; i++) {

@@ -27,23 +27,13 @@ export function checkCriticalLoadFactor(settings: Settings, states: readonly Res
   const of = (state: ResultState): Subject => ({ ...subject, reference: references[state.order] });
   const f = settings.stressFactor;
   const rows: Check[] = [];
-  // lowest factor so far of those that are checked and not over: the others can't govern them
-  let lowest = Infinity;
-  let refused = false;
-  for (const state of states) {
-    const alpha = state.criticalLoadFactor;
-    const value = alpha === null ? null : alpha * f;
-    const tooLow = value !== null && value >= 1 && value < 10 && state.order === 1;
-    if (!findings.all && rows.length > 0 && (tooLow ? refused : (value ?? Infinity) >= lowest * (1 - SAME))) continue;
-    if (tooLow) {
-      refused = true;
-      const reason = `second-order effects not negligible (α_cr ${figure(value, 'down')}${f === 1 ? '' : ', stress factor included'})`;
-      rows.push(notCheckedRow(of(state), state.name, reason, { alpha, f, value }));
-      continue;
-    }
-    lowest = Math.min(lowest, value ?? Infinity);
+  const refuse = (state: ResultState, value: number): Check => {
+    const reason = `second-order effects not negligible (α_cr ${figure(value, 'down')}${f === 1 ? '' : ', stress factor included'})`;
+    return notCheckedRow(of(state), state.name, reason, { alpha: state.criticalLoadFactor, f, value });
+  };
+  const row = (state: ResultState, value: number | null): Check => {
     const ratio = value === null ? 0 : 1 / value;
-    rows.push({
+    return {
       ...of(state),
       combination: state.name,
       at: null,
@@ -53,8 +43,21 @@ export function checkCriticalLoadFactor(settings: Settings, states: readonly Res
       ratio,
       verdict: verdictOf(ratio, settings.nearLimit),
       reason: null,
-      inputs: { alpha, f, value, limit: 1, ratio },
-    });
+      inputs: { alpha: state.criticalLoadFactor, f, value, limit: 1, ratio },
+    };
+  };
+  // lowest factor so far of those that are checked, and the first that is not: the others can't govern them
+  let lowest: { readonly state: ResultState; readonly value: number | null } | null = null;
+  let refused = false;
+  for (const state of states) {
+    const alpha = state.criticalLoadFactor;
+    const value = alpha === null ? null : alpha * f;
+    if (value !== null && value >= 1 && value < 10 && state.order === 1) {
+      if (findings.all || !refused) rows.push(refuse(state, value));
+      refused = true;
+    } else if (findings.all || Number.isNaN(value)) rows.push(row(state, value));
+    else if (!lowest || (value ?? Infinity) < (lowest.value ?? Infinity) * (1 - SAME)) lowest = { state, value };
   }
+  if (lowest) rows.push(row(lowest.state, lowest.value));
   keepGoverning(findings, rows);
 }

@@ -56,6 +56,27 @@ describe('stability screening', () => {
     close(row.ratio, 0.75);
   });
 
+  it('takes the combination with the largest ratio wherever it stands, what is pulled and bent among them', () => {
+    const [push, bend] = [(part: number) => [-part * NcrMinor * 0.6], (M: number) => [0, 4 * M, -0.4 * M]];
+    const lines = [
+      line(10, { N: push(0.01), M: bend(400) }),
+      line(10, { N: [900e3] }),
+      line(10, { N: push(0.03) }),
+      line(10, { N: push(0.03) }),
+      line(10, { N: push(0.02), M: bend(900) }),
+      line(10, { N: push(0.0301) }),
+      line(10, { N: push(0.005) }),
+    ];
+    const of = (count: number) => {
+      const combinations = lines.slice(0, count).map((_, c) => combination(`C${c + 1}`, 'strength'));
+      const along = Object.fromEntries(lines.slice(0, count).map((AB, c) => [`C${c + 1}`, { AB }]));
+      return rowOf(check(frame({ combinations }), along), 'stability');
+    };
+    expect(of(5).combination).toBe('C3');
+    close(of(5).ratio, 0.75);
+    expect(of(7).combination).toBe('C6');
+  });
+
   it('is never near, and above 1 not checked, with the figures', () => {
     const at = (part: number) => rowOf(check(frame(), { C1: { AB: line(10, { N: [-part * NcrMinor * 0.6] }) } }), 'stability');
     expect(at(0.0399).verdict).toBe('within');

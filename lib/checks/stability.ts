@@ -1,12 +1,11 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
-import { degreeM, degreeN, headNumbers, ofM, ofN, segmentNumbers } from '@/lib/analysis/flat-line';
 import type { StateLines } from '@/lib/analysis/flat-lines';
 import type { Check, ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { figure } from './figure';
-import { SAME, turningPoints } from './peak';
-import { valueAt } from './polynomial';
+import { SAME } from './peak';
+import { actionBounds, actions, actionsOf } from './span-actions';
 import { spanBuckling, type SpanBuckling } from './span-buckling';
 import type { Span } from './spans';
 
@@ -63,6 +62,7 @@ export function checkStability(
   let best: { readonly screening: Screening; readonly state: ResultState } | null = null;
   for (let c = 0; c < states.length; c++) {
     const state = states[c]!;
+    if (best && !findings.all && staysBelow(best.screening.ratio, settings, buckling, state, span, lines[c]!)) continue;
     const found = screen(settings, buckling, state, span, lines[c]!);
     if (found.needs.length > 0 || found.ratio > 1) {
       rows.push(refused(settings, span, subject, state, buckling, found));
@@ -122,17 +122,39 @@ function screen(settings: Settings, of: SpanBuckling, state: ResultState, span: 
   let needs = NONE;
   if (N > 0 && of.NcrMinor === null) needs = ['I minor'];
   if (N > 0 && of.twists) needs = [...needs, 'N_cr of torsional-flexural buckling of a channel, which is not computed'];
-  const swayed = state.order === 2 && state.method !== null && state.method.imperfection !== null;
-  if (N > 0 && of.blankInPlane !== null && !swayed) {
-    const amplified = state.criticalLoadFactor === null ? Infinity : state.criticalLoadFactor * f;
-    if (!(amplified >= 10))
-      needs = [...needs, `length ${of.blankInPlane} (blank in plane, with α_cr × f = ${figure(amplified, 'down')} below 10)`];
+  if (N > 0 && mayNeedLength(of, state, f)) {
+    const amplified = (state.criticalLoadFactor ?? Infinity) * f;
+    needs = [...needs, `length ${of.blankInPlane} (blank in plane, with α_cr × f = ${figure(amplified, 'down')} below 10)`];
   }
   if ((positive > 0 || negative > 0) && of.ltb.kind === 'needs') {
     const known = needs;
     needs = [...known, ...of.ltb.needs.filter((need) => !known.includes(need))];
   }
   return { N, positive, negative, major, minor, bending, ratio, needs };
+}
+
+/** Whether nothing of a state can be refused or come above a ratio, by bounds of its forces: then it need not be screened. */
+function staysBelow(
+  ratio: number,
+  settings: Settings,
+  of: SpanBuckling,
+  state: ResultState,
+  span: Span,
+  lines: StateLines,
+): boolean {
+  if (of.NcrMinor === null || of.twists || of.ltb.kind === 'needs' || mayNeedLength(of, state, settings.stressFactor))
+    return false;
+  actionBounds(span, lines);
+  const compressed = actions[0]! / Math.min(of.NcrMajor, of.NcrMinor) / NEGLIGIBLE_N;
+  const bent = actions[1]! / Math.min(of.McrTop, of.McrBottom) / NEGLIGIBLE_M;
+  return Math.max(compressed, bent) < ratio * settings.stressFactor * (1 - SAME);
+}
+
+/** Whether a compressed span's blank length in the plane needs typing: without sway of second order, at α_cr × f below 10. */
+function mayNeedLength(of: SpanBuckling, state: ResultState, f: number): boolean {
+  if (of.blankInPlane === null) return false;
+  const swayed = state.order === 2 && state.method !== null && state.method.imperfection !== null;
+  return !swayed && !((state.criticalLoadFactor ?? Infinity) * f >= 10);
 }
 
 function refused(
@@ -217,38 +239,4 @@ function inputsOf(settings: Settings, span: Span, of: SpanBuckling, found: Scree
     limit: ratio === null ? null : 1,
     ratio,
   };
-}
-
-const points = new Float64Array(32);
-const force = new Float64Array(16);
-// in an array, for numbers kept by a module cost memory
-const actions = new Float64Array(3);
-
-/** Largest compression and moments of either sign along the pieces, N and N·m, into `actions`. */
-function actionsOf(span: Span, of: StateLines): void {
-  let compression = 0;
-  let sagging = 0;
-  let hogging = 0;
-  for (let p = 0; p < span.pieces.length; p++) {
-    const line = of.at(span.pieces[p]!.member);
-    const lines = of.numbers;
-    for (let i = lines[line]!, o = line + headNumbers; i > 0; i--, o += segmentNumbers) {
-      const h = lines[o + 1]! - lines[o]!;
-      const axial = lines[o + degreeN]!;
-      for (let k = 0; k <= axial; k++) force[k] = lines[o + ofN + k]!;
-      let count = turningPoints(force, axial, h, points);
-      for (let j = 0; j < count; j++) compression = Math.max(compression, -valueAt(force, axial, points[j]!));
-      const bent = lines[o + degreeM]!;
-      for (let k = 0; k <= bent; k++) force[k] = lines[o + ofM + k]!;
-      count = turningPoints(force, bent, h, points);
-      for (let j = 0; j < count; j++) {
-        const moment = valueAt(force, bent, points[j]!);
-        if (moment > sagging) sagging = moment;
-        if (-moment > hogging) hogging = -moment;
-      }
-    }
-  }
-  actions[0] = compression;
-  actions[1] = sagging;
-  actions[2] = hogging;
 }

@@ -16,13 +16,17 @@ export interface LinePieces {
   readonly M: Float64Array;
   readonly V: Float64Array;
   readonly v: Float64Array;
+  /** By piece: the degree that v′, M and V go to; v goes to one more. Beyond it coefficients mean nothing. */
+  readonly degrees: Uint8Array;
 }
 
 export const givenStride = 9;
 
 export function emptyPieces(room: number): LinePieces {
   const row = (n: number): Float64Array => new Float64Array(room * n);
-  return { count: 0, given: row(givenStride), w: row(terms), M: row(terms), V: row(terms), v: row(terms) };
+  return {
+    count: 0, given: row(givenStride), w: row(terms), M: row(terms), V: row(terms), v: row(terms), degrees: new Uint8Array(room),
+  }; // prettier-ignore
 }
 
 /** Pieces of a stretch of this length, N at most `size` in size and `low` at its lowest. */
@@ -150,8 +154,7 @@ export function series(
     Vi = Vnext;
     if (i < last) Msum += next;
   }
-  for (let i = last + 1; i < terms; i++) w[o + i] = M[o + i] = V[o + i] = 0;
-  for (let i = last + 2; i < terms; i++) v[o + i] = 0;
+  pieces.degrees[k] = last;
   at.v = vsum;
   at.psi = psi;
   at.M = Msum;

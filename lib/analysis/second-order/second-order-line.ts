@@ -119,11 +119,14 @@ function follow(m: MemberData, N: number): void {
     at.Q = -N;
     run(m, slip, turned, 0);
     const share = off / at.v;
-    for (let i = 0; i < terms * pieces.count; i++) {
-      pieces.M[i] = pieces.M[i]! + share * turned.M[i]!;
-      pieces.V[i] = pieces.V[i]! + share * turned.V[i]!;
-      pieces.v[i] = pieces.v[i]! + share * turned.v[i]!;
-    }
+    for (let k = 0; k < pieces.count; k++)
+      for (let i = terms * k, last = i + pieces.degrees[k]! + 1; i <= last; i++) {
+        if (i < last) {
+          pieces.M[i] = pieces.M[i]! + share * turned.M[i]!;
+          pieces.V[i] = pieces.V[i]! + share * turned.V[i]!;
+        }
+        pieces.v[i] = pieces.v[i]! + share * turned.v[i]!;
+      }
     off = 0;
   }
   for (let k = 0; k < pieces.count; k++) {
@@ -175,6 +178,7 @@ function largest(c: Float64Array, first: number): number {
 function lowered(
   c: Float64Array,
   k: number,
+  highest: number,
   allowed: number,
   beyond: number,
   cap: number,
@@ -182,7 +186,7 @@ function lowered(
   at: number,
 ): number {
   const o = terms * k;
-  const degree = economise(c, o, terms - 1, allowed, cap, beyond === Infinity ? beyond : beyond * allowed);
+  const degree = economise(c, o, highest, allowed, cap, beyond === Infinity ? beyond : beyond * allowed);
   const per = 1 / pieces.given[givenStride * k + 1]!;
   let power = 1;
   for (let i = 0; i <= degree; i++) {
@@ -221,11 +225,12 @@ function written(
     const n0 = pieces.given[g + 2]! / scale;
     const n1 = pieces.given[g + 3]! / scale;
     const n2 = pieces.given[g + 4]! / scale;
-    const V = lowered(pieces.V, k, ofShear, beyond, mostForces, out, s + ofV);
+    const highest = pieces.degrees[k]!;
+    const V = lowered(pieces.V, k, highest, ofShear, beyond, mostForces, out, s + ofV);
     if (V < 0) return false;
-    const M = lowered(pieces.M, k, ofMoment, beyond, mostForces, out, s + ofM);
+    const M = lowered(pieces.M, k, highest, ofMoment, beyond, mostForces, out, s + ofM);
     if (M < 0) return false;
-    const v = lowered(pieces.v, k, ofMovement, beyond, mostDeflection, out, s + ofDeflection);
+    const v = lowered(pieces.v, k, highest + 1, ofMovement, beyond, mostDeflection, out, s + ofDeflection);
     if (v < 0) return false;
     out[s] = pieces.given[g]!;
     out[s + 1] = k + 1 < pieces.count ? pieces.given[g + givenStride]! : m.length;
