@@ -9,6 +9,7 @@ import { checkDeflection } from './deflection';
 import { checkByCode, refuseMember } from './design-code/code-checks';
 import { designCodeOf } from './design-code/design-codes';
 import { checkDisplacement } from './displacement';
+import { limitsWithSetup } from './movement';
 import { spansOf, type Span } from './spans';
 import { checkSpread } from './spread';
 import { checkStability, stabilitySubject } from './stability';
@@ -55,8 +56,10 @@ export function checkFrame(
   const flat = lineOf.flat ?? new FlatLines(frame, lineOf);
   checkStrength(frame, settings, spans, strength, service.length > 0, lineOf, flat, findings);
   const moved = service.map((state) => flat.of(state));
-  for (const span of spans) checkDeflection(frame, settings, span, service, moved, findings);
-  for (const span of spans) checkSway(frame, settings, span, service, findings);
+  const deflections = limitsWithSetup(frame, settings, 'deflection');
+  for (const span of spans) checkDeflection(frame, settings, deflections, span, service, moved, findings);
+  const sways = limitsWithSetup(frame, settings, 'sway');
+  for (const span of spans) checkSway(frame, settings, sways, span, service, findings);
   checkDisplacement(frame, settings, service, findings);
   checkSpread(frame, settings, service, findings);
   return {

@@ -1,11 +1,11 @@
-import type { Frame } from '@/lib/model/frame';
+import type { Frame, Limit } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import { degreeDeflection, headNumbers, ofDeflection, segmentNumbers } from '@/lib/analysis/flat-line';
 import type { StateLines } from '@/lib/analysis/flat-lines';
 import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { namesSpan } from './limits';
-import { checkMovement, limitsWithSetup, withoutLimit, type Movement } from './movement';
+import { checkMovement, withoutLimit, type Movement } from './movement';
 import { bound, valueIn } from './line-bounds';
 import { SAME, turningPoints } from './peak';
 import { valueAt } from './polynomial';
@@ -23,17 +23,18 @@ type DeflectionRule = { readonly kind: 'span' } | { readonly kind: 'cantilever';
 /**
  * Deflection of a span in every service combination. A span: largest departure, square to the line between its moved ends.
  * A cantilever: largest displacement square to the member relative to the root node's, root rotation not deducted.
- * @param lines of each of `states`
+ * @param given the frame's limits of deflection, Setup's among them   @param lines of each of `states`
  */
 export function checkDeflection(
   frame: Frame,
   settings: Settings,
+  given: readonly Limit[],
   span: Span,
   states: readonly ResultState[],
   lines: readonly StateLines[],
   findings: Findings,
 ): void {
-  const named = limitsWithSetup(frame, settings, 'deflection').filter((limit) => namesSpan(limit, span, frame));
+  const named = given.filter((limit) => namesSpan(limit, span, frame));
   const byName = onlyWhereNamed(frame, span);
   const limits = byName ? named.filter((limit) => limit.target !== 'all') : named;
   const subject: Subject = {

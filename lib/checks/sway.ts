@@ -1,16 +1,20 @@
 import { isColumn } from '@/lib/analysis/imperfections/columns';
-import type { Frame } from '@/lib/model/frame';
+import type { Frame, Limit } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { ResultState } from '@/lib/results/result';
 import { keepGoverning, notCheckedRow, type Findings, type Subject } from './check-row';
 import { namesSpan } from './limits';
-import { checkMovement, limitsWithSetup, withoutLimit } from './movement';
+import { checkMovement, withoutLimit } from './movement';
 import type { Span } from './spans';
 
-/** Sway of a column in every service combination: |ux(top) − ux(bottom)| against its height |Δy|. */
+/**
+ * Sway of a column in every service combination: |ux(top) − ux(bottom)| against its height |Δy|.
+ * @param given the frame's limits of sway, Setup's among them
+ */
 export function checkSway(
   frame: Frame,
   settings: Settings,
+  given: readonly Limit[],
   span: Span,
   states: readonly ResultState[],
   findings: Findings,
@@ -23,7 +27,7 @@ export function checkSway(
     reference: 'Limits',
     member: span.pieces[0]!.member,
   };
-  const limits = limitsWithSetup(frame, settings, 'sway').filter((limit) => namesSpan(limit, span, frame));
+  const limits = given.filter((limit) => namesSpan(limit, span, frame));
   if (!isColumn(frame, span)) {
     // a limit that names this very member is not passed over in silence
     if (limits.some((limit) => limit.target === 'member' || limit.target === 'span'))
