@@ -12,6 +12,7 @@ import { toLocal } from './load-vectors';
 import { memberDataFor } from './member-data';
 import { strengthScale, type PlannedState } from './plan-states';
 import { ropeAmong } from './second-order/ropes';
+import { noLengthening, type LengtheningEstimate } from './second-order/lengthening';
 import type { SecondOrderSpace } from './second-order/second-order-space';
 import { firstOrderCombination, solveSecondOrder, type SecondOrderFailure } from './second-order/solve-second-order';
 import { firstReduction, reduce, shareOf, squashLoads } from './stiffness-reduction/reduced-stiffness';
@@ -41,7 +42,12 @@ interface FirstOrder extends SolvedState {
   alpha: number | null | undefined;
 }
 
-export type SetResult = (SolvedState & { readonly ok: true }) | { readonly ok: false; readonly trouble: StateTrouble };
+/** A state, and what the lengthening of its turned members would change, which is left out: nothing to first order. */
+export interface SetState extends SolvedState {
+  readonly lengthening: LengtheningEstimate;
+}
+
+export type SetResult = (SetState & { readonly ok: true }) | { readonly ok: false; readonly trouble: StateTrouble };
 
 /** Changes of a stiffness below this share are none; and how often it may change. */
 const settled = 1e-9;
@@ -53,10 +59,12 @@ export function analyseSet(job: SetJob, planned: PlannedState, slack: readonly n
   if (!first) return { ok: false, trouble: withoutThem(job, slack) };
   const notional = planned.imperfection && job.forces ? leaning(job.forces, first.state, planned) : null;
   const plain = planned.order === 1 && !notional && !planned.reduced && !planned.imperfection;
-  const found = plain ? { ok: true as const, ...first, alpha: undefined } : solved(job, planned, slack, first, notional);
+  const found = plain
+    ? { ok: true as const, ...first, alpha: undefined, lengthening: noLengthening }
+    : solved(job, planned, slack, first, notional);
   if (!found.ok) return found;
   const state = { ...found.state, name: planned.name };
-  return { ok: true, state, outOfBalance: found.outOfBalance, handled: found.handled };
+  return { ok: true, state, outOfBalance: found.outOfBalance, handled: found.handled, lengthening: found.lengthening };
 }
 
 /** The forces of the imperfections, the way that the state leans. */
@@ -110,13 +118,13 @@ function solved(
       for (let i = 0; i < guess.length; i++) guess[i] = result.endForces[6 * i]!;
       continue;
     }
-    const { change, displacements, reactions, endForces, outOfBalance, handled } = result;
+    const { change, displacements, reactions, endForces, outOfBalance, handled, lengthening } = result;
     if (leans && planned.imperfection === 'right') remember(job, planned.combination, endForces);
     const whole: StateMethod = {
       ...method, imperfection: planned.imperfection, notional, loadScale, slack, iterations, change,
     }; // prettier-ignore
     const state: ResultState = { ...first.state, order: planned.order, method: whole, displacements, reactions, endForces };
-    return { ok: true, state, outOfBalance, handled };
+    return { ok: true, state, outOfBalance, handled, lengthening };
   }
   return { ok: false, trouble: { kind: 'not settled', reached: 1 } };
 }

@@ -1,10 +1,11 @@
 import type { Frame } from '@/lib/model/frame';
 import type { Settings } from '@/lib/model/settings';
 import type { Failure } from '@/lib/results/result';
-import { analyseSet, criticalOf, startOf, type SetJob } from './analyse-set';
+import { analyseSet, criticalOf, startOf, type SetJob, type SetState } from './analyse-set';
 import type { SolvedState } from './certificate';
 import { bucklingSpace } from './critical/buckling-trial';
 import { criticalMemory } from './critical/neighbour-critical';
+import { shapeTrouble } from './drawn-shape';
 import { stateFailure, tieFailure, troubleWords, type StateTrouble } from './failures';
 import type { SolvedCases } from './first-order-cases';
 import { imperfectionForces } from './imperfections/imperfection-forces';
@@ -58,6 +59,8 @@ export function combinationStates(
     if ('code' in found) return found;
     const rope = planned.order === 2 && ropeIn(job, planned, found, ropes);
     if (rope) return rope;
+    const shape = shapeTrouble(job, found);
+    if (shape) return stateFailure(frame, planned.name, planned.loadScale, planned.reduced, shape);
     states.push(found);
   }
   return { states, condition: worstCondition(job, states) };
@@ -70,13 +73,13 @@ function ropeIn({ frame }: SetJob, planned: PlannedState, { state }: SolvedState
   return rope && stateFailure(frame, planned.name, planned.loadScale, planned.reduced, { kind: 'rope', ...rope });
 }
 
-function alone(job: SetJob, planned: PlannedState): SolvedState | Failure {
+function alone(job: SetJob, planned: PlannedState): SetState | Failure {
   const result = analyseSet(job, planned, []);
   if (!result.ok) return stateFailure(job.frame, planned.name, planned.loadScale, planned.reduced, result.trouble);
   return withCritical(job, planned, result, []);
 }
 
-function withTies(job: SetJob, planned: PlannedState): SolvedState | Failure {
+function withTies(job: SetJob, planned: PlannedState): SetState | Failure {
   const first = settled(job, { ...planned, order: 1, reduced: false }, []);
   if ('code' in first) return first;
   if (planned.order === 1 && !planned.reduced) return withCritical(job, planned, first.found, first.slack);
@@ -86,7 +89,7 @@ function withTies(job: SetJob, planned: PlannedState): SolvedState | Failure {
 }
 
 /** α_cr of strength combinations, once their slack ties are known. */
-function withCritical(job: SetJob, planned: PlannedState, found: SolvedState, slack: readonly number[]): SolvedState {
+function withCritical(job: SetJob, planned: PlannedState, found: SetState, slack: readonly number[]): SetState {
   if (planned.purpose !== 'strength') return found;
   return { ...found, state: { ...found.state, criticalLoadFactor: criticalOf(job, planned.combination, slack) } };
 }
@@ -97,10 +100,10 @@ function settled(
   planned: PlannedState,
   start: readonly number[],
   iterations = 0,
-): { readonly found: SolvedState; readonly slack: readonly number[]; readonly iterations: number } | Failure {
+): { readonly found: SetState; readonly slack: readonly number[]; readonly iterations: number } | Failure {
   const { frame, ties } = job;
   let trouble: StateTrouble | null = null;
-  const result = settleTies<SolvedState>(
+  const result = settleTies<SetState>(
     ties,
     (slack) => {
       const trial = analyseSet(job, planned, slack);
@@ -117,9 +120,9 @@ function settled(
     start,
   );
   if (result.ok) {
-    const { state, outOfBalance, handled } = result.solution;
+    const { state, outOfBalance, handled, lengthening } = result.solution;
     const method = state.method && { ...state.method, iterations };
-    return { found: { state: { ...state, method }, outOfBalance, handled }, slack: result.slack, iterations };
+    return { found: { state: { ...state, method }, outOfBalance, handled, lengthening }, slack: result.slack, iterations };
   }
   if (typeof result.why === 'string') return tieFailure(frame, planned.name, { ...result, why: result.why });
   const kept: StateTrouble | null = trouble;

@@ -64,6 +64,18 @@ export type StateTrouble =
   | { readonly kind: 'squashed'; readonly member: number; readonly share: number }
   /** A member (index) pulled so hard for its I, m⁴, that it is a rope (second-order/ropes.ts). */
   | { readonly kind: 'rope'; readonly member: number; readonly slenderness: number; readonly leastI_m4: number }
+  /**
+   * Its members turn so far, `turned` (index) the most, that their lengthening would change it (drawn-shape.ts): the strains of
+   * `member` (index) by the share `forces`, 0 = no more than is let pass, movements by `movements`; Infinity = it would not stand.
+   */
+  | {
+      readonly kind: 'drawn shape';
+      readonly turned: number;
+      readonly turn: number;
+      readonly member: number;
+      readonly forces: number;
+      readonly movements: number;
+    }
   /** `caught`: whichever way it moves, some tie is stretched; how far each is (movement-without.ts). */
   | { readonly kind: 'free'; readonly movement: string; readonly caught: boolean; readonly stretches: readonly number[] };
 
@@ -99,9 +111,25 @@ export function troubleWords(frame: Frame, scale: number, reduced: boolean, trou
         `${Math.ceil(trouble.slenderness)}. With an I of ${least} or more it can be followed (a round bar has π d⁴/64).`
       );
     }
+    case 'drawn shape':
+      return (
+        `changes its shape too much to be analysed on the drawn one${softened(reduced)}: member ${frame.members[trouble.turned]!.id} ` +
+        `turns by ${trouble.turn.toPrecision(2)} rad under ${loads}, and what members lengthen as they turn, which is left out here, ` +
+        `${lengthened(frame, trouble)}. Stiffen the frame, give flat members more rise, let their ends move along them, or reduce the load.`
+      );
     case 'free':
       return trouble.movement;
   }
+}
+
+function lengthened(frame: Frame, { member, forces, movements }: Extract<StateTrouble, { kind: 'drawn shape' }>): string {
+  if (!Number.isFinite(movements)) return 'would leave it no equilibrium near this one: it snaps through or gives way';
+  if (forces > 0) return `would change the forces of member ${frame.members[member]!.id} by ${percent(forces)}`;
+  return `would let it move ${percent(movements)} further`;
+}
+
+function percent(share: number): string {
+  return `${Number((100 * share).toPrecision(2))} %`;
 }
 
 const remedy = 'Stiffen or brace the frame, or reduce the load.';

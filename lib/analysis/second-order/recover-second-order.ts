@@ -4,6 +4,7 @@ import { takeReactions } from '../recover';
 import { solve } from '../solve';
 import { bendingForce, type Work } from './equilibrium-pass';
 import { clampedTurns, type Turns } from './joint-turns';
+import { lengtheningEstimate, noLengthening } from './lengthening';
 import { memberChain } from './member-chain';
 import type { SecondOrderState } from './solve-second-order';
 
@@ -33,6 +34,7 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
     handled = takeForces(work, all, forces, asked);
     change = changeOf(space.N, forces, slack);
   }
+  const lengthening = order === 2 ? lengtheningEstimate(work, all, forces, handled) : noLengthening;
   divideForces(work, forces);
   const reactions = takeReactions(frame, t, angles, all, asked);
   for (const values of [all, asked, reactions]) for (let i = 0; i < values.length; i++) values[i] = values[i]! / loadScale + 0;
@@ -45,12 +47,13 @@ export function recoverSecondOrder(work: Work, change: number): SecondOrderState
     handled: handled / loadScale,
     iterations: work.passes,
     change,
+    lengthening,
   };
 }
 
 /**
  * What members do at their ends under movements `all`: X₁ Y₁ ψ₁ … in local axes into `forces` as N, Q, M with the ends' own
- * rotations kept in `space.turns`, and what nodes are asked for beyond their loads into `asked`.
+ * rotations kept in `space.turns` and their chords' in `space.chords`, and what nodes are asked for beyond their loads into `asked`.
  * @returns the largest force met before stiffness × movement cancels
  */
 function takeForces({ input }: Work, all: Float64Array, forces: Float64Array, asked: Float64Array): number {
@@ -68,6 +71,7 @@ function takeForces({ input }: Work, all: Float64Array, forces: Float64Array, as
     u[5] = turns.end;
     space.turns[2 * i] = turns.start;
     space.turns[2 * i + 1] = turns.end;
+    space.chords[i] = (u[4]! - u[1]!) / m.length;
     endForces(piece, u, q);
     handled = Math.max(
       handled,

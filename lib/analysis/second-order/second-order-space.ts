@@ -28,6 +28,8 @@ export interface SecondOrderSpace {
   readonly pieces: readonly Piece[];
   /** Rotations of their own ends, 2 a member. */
   readonly turns: Float64Array;
+  /** Turns of the lines between their ends, 1 a member. */
+  readonly chords: Float64Array;
 }
 
 export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
@@ -49,5 +51,6 @@ export function secondOrderSpace(frame: Frame, t: Topology): SecondOrderSpace {
     passes: emptyPasses(members),
     pieces: frame.members.map(emptyPiece),
     turns: row(2 * members),
+    chords: row(members),
   };
 }

@@ -2,6 +2,7 @@ import type { Frame } from '@/lib/model/frame';
 import type { MemberData } from '../member-data';
 import type { Topology } from '../topology';
 import { prepare, respond, standsWithoutForces, type Work } from './equilibrium-pass';
+import type { LengtheningEstimate } from './lengthening';
 import { forget, nextGuess } from './next-guess';
 import { recoverSecondOrder } from './recover-second-order';
 import { givingWay } from './giving-way';
@@ -40,6 +41,8 @@ export interface SecondOrderState {
   /** Passes until the axial forces stood still, and their last change against the largest of them. */
   readonly iterations: number;
   readonly change: number;
+  /** What the lengthening of turned members would change, which is left out. */
+  readonly lengthening: LengtheningEstimate;
 }
 export interface SecondOrderFailure {
   readonly ok: false;
