@@ -17,7 +17,7 @@ export function inShortTransactions<T>(
   last: () => void = () => undefined,
 ): void {
   const iterator = items[Symbol.iterator]();
-  // An item is fetched (and made, where items come from a generator) before its transaction begins.
+  // What comes first is fetched (and made, where items come from a generator) before its transaction begins.
   let item = iterator.next();
   while (item.done !== true) {
     takeTurn(() => raw.exec('begin immediate'));

@@ -36,7 +36,11 @@ export async function runBatch(words: readonly string[], folder: string): Promis
       return 2;
     }
     if (!wanted.json && !wanted.xlsx && !wanted.csv && !wanted.report) process.stdout.write(await summarise(batch));
-    return batch.solved === intake.frames.length ? 0 : 1;
+    if (batch.solved === intake.frames.length) return 0;
+    const words = `${intake.frames.length - batch.solved} of ${intake.frames.length} frames not solved: the results say why.`;
+    // like the progress bar: where a person watches
+    if (process.stderr.isTTY) process.stderr.write(`${words}\n`);
+    return 1;
   } finally {
     batch.close();
   }

@@ -19,12 +19,20 @@ describe('the spread of ratios', () => {
   it('leaves a frame within that its own check calls so above the near limit, in the step of its ratio', () => {
     const { bins } = spreadBins([{ ratio: 0.96, verdict: 'within' }, { ratio: 0.97, verdict: 'near' }], 0.9); // prettier-ignore
     expect(bins.filter(({ count }) => count > 0)).toEqual([
-      { from: 0.95, to: 0.975, count: 2, of: { within: 1, near: 1, over: 0 } },
+      { from: 0.95, to: 0.975, count: 2, of: { within: 1, near: 1, over: 0, 'not checked': 0 } },
     ]);
     const { container } = render(<Spread frames={[{ ratio: 0.98, verdict: 'within' }]} nearLimit={0.9} />);
     expect([...container.querySelectorAll('.chart-bar')].map((bar) => bar.getAttribute('class'))).toEqual([
       'chart-bar chart-within',
     ]);
+  });
+
+  it('never draws as within what is not checked, and says how many stand in no step', () => {
+    const { bins } = spreadBins([{ ratio: 0.6, verdict: 'not checked' }, { ratio: 0.95, verdict: 'not checked' }], 0.9); // prettier-ignore
+    expect(['within', 'near', 'over', 'not checked'].map((one) => sum(bins, one as keyof SpreadBin['of']))).toEqual([0, 0, 0, 2]);
+    const { container } = render(<Spread frames={[{ ratio: 0.6, verdict: 'not checked' }]} without={29} nearLimit={0.9} />);
+    expect(container.querySelectorAll('.chart-not-checked')).toHaveLength(1);
+    expect(screen.getByText('29 not checked have no ratio and stand in no step.')).toBeInTheDocument();
   });
 
   it('keeps every frame, and never lets a step straddle a near limit of its own', () => {

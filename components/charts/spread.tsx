@@ -7,12 +7,14 @@ import { ticks, tickText } from '@/lib/drawing/axis';
 interface SpreadProps {
   /** Every frame that has a governing ratio. */
   readonly frames: readonly SpreadFrame[];
+  /** Frames without a ratio, which stand in no step. */
+  readonly without?: number;
   readonly nearLimit: number;
   readonly height?: number;
 }
 
 /** How governing ratios are spread: frames in steps of 0.025, against the near limit and the limit at 1.00. */
-export function Spread({ frames, nearLimit, height = 226 }: SpreadProps) {
+export function Spread({ frames, without = 0, nearLimit, height = 226 }: SpreadProps) {
   const id = useId();
   const [box, width] = useWidth<HTMLDivElement>(400);
   const { bins, low, high, above } = spreadBins(frames, nearLimit);
@@ -49,7 +51,7 @@ export function Spread({ frames, nearLimit, height = 226 }: SpreadProps) {
             foundation += of[verdict];
             if (of[verdict] === 0) return null;
             return (
-              <g key={`${from} ${verdict}`} className={`chart-bar chart-${verdict}`} data-count={of[verdict]}>
+              <g key={`${from} ${verdict}`} className={`chart-bar chart-${verdict.replace(' ', '-')}`} data-count={of[verdict]}>
                 <rect
                   x={a + 0.5}
                   y={y(foundation)}
@@ -57,7 +59,7 @@ export function Spread({ frames, nearLimit, height = 226 }: SpreadProps) {
                   height={y(below) - y(foundation)}
                   fill={verdict === 'near' ? `url(#${id})` : undefined}
                 />
-                <path className="chart-cap" d={`M${a + 0.5} ${y(foundation) + 0.75}H${b - 0.5}`} />
+                {verdict !== 'not checked' && <path className="chart-cap" d={`M${a + 0.5} ${y(foundation) + 0.75}H${b - 0.5}`} />}
               </g>
             );
           });
@@ -80,6 +82,12 @@ export function Spread({ frames, nearLimit, height = 226 }: SpreadProps) {
       {above > 0 && (
         <p className="chart-note">
           {above} above {high.toFixed(2)} stand in the last step.
+        </p>
+      )}
+      {without > 0 && (
+        <p className="chart-note">
+          {without.toLocaleString('en-GB')} not checked {without === 1 ? 'has' : 'have'} no ratio and{' '}
+          {without === 1 ? 'stands' : 'stand'} in no step.
         </p>
       )}
     </div>

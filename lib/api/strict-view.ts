@@ -1,6 +1,6 @@
 import { tables, type TableName, type View } from '@/lib/tables/view';
 import { ApiError } from './error';
-import { viewFromParams } from './view-address';
+import { misreadFilters, viewFromParams } from './view-address';
 
 /** What a table's route takes beside the view. */
 const others = ['after', 'before', 'size', 'format'];
@@ -9,12 +9,15 @@ const others = ['after', 'before', 'size', 'format'];
  * The view that an API request asks for. A page reads what it can of an address; a script is told what it got
  * wrong, since a filter left out would hand it rows it did not mean.
  *
- * @throws {ApiError} bad-request naming the keys that are no column, filter or sort of the table
+ * @throws {ApiError} bad-request naming the keys that are no column, filter or sort of the table, and filters by
+ *   what their column cannot hold
  */
 export function strictView(table: TableName, params: URLSearchParams): View {
   const view = viewFromParams(table, params);
   const fields: Record<string, string[]> = {};
-  const filtered = new Set(view.filters.map((filter) => filter.column));
+  const misread = misreadFilters(table, params);
+  for (const { column, why } of misread) fields[column] = [why];
+  const filtered = new Set([...view.filters, ...misread].map(({ column }) => column));
   for (const key of new Set(params.keys())) {
     if (key === 'sort' || key === 'columns' || others.includes(key) || filtered.has(key)) continue;
     const offered = tables[table].filter((column) => column.filter === true).map((column) => column.key);

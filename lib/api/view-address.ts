@@ -6,6 +6,8 @@
  * A repeated key is a list of values, `a..b` (either end open) a range in SI, `~text` text contained; a plain
  * value that would read as one of these is written after `=`. A leading `-` sorts downwards; no sort = sheet order.
  */
+import type { Severity } from '@/lib/problems/problem';
+import type { Verdict } from '@/lib/results/result';
 import { tableNames, tables, type Filter, type TableName, type View } from '@/lib/tables/view';
 
 /** Keys that are not columns. */
@@ -39,12 +41,12 @@ export function listToSearch(list: View): string {
   return `?list=${list.table}${search === '' ? '' : `&${search.slice(1)}`}`;
 }
 
-/** Reads an address as far as it makes sense: what names no column of the table is left out. */
+/** Reads an address as far as it makes sense: what names no column of the table, or no value of its column, is left out. */
 export function viewFromParams(table: TableName, params: URLSearchParams): View {
   const filters: Filter[] = [];
   for (const column of new Set(params.keys())) {
     if (reserved.has(column) || !filterable(table, column)) continue;
-    filters.push(...readFilters(column, params.getAll(column)));
+    filters.push(...readFilters(column, params.getAll(column)).filter((filter) => misread(table, filter) === null));
   }
   return { table, filters: filters.slice(0, 20), sort: readSort(table, params.get('sort')), columns: readColumns(table, params) };
 }
@@ -53,6 +55,42 @@ export function viewFromParams(table: TableName, params: URLSearchParams): View 
 export function viewToSearch(view: View): string {
   const text = viewToParams(view).toString().replaceAll('%2C', ',').replaceAll('%3A', ':').replaceAll('%7E', '~');
   return text === '' ? '' : `?${text}`;
+}
+
+const wordsOf: Readonly<Partial<Record<string, readonly string[]>>> = {
+  verdict: ['over', 'not checked', 'near', 'within'] satisfies readonly Verdict[],
+  severity: ['error', 'warning', 'note'] satisfies readonly Severity[],
+  kind: ['case', 'combination'],
+};
+
+/** Why no row could be asked for by a filter, in words; null where one could. */
+function misread(table: TableName, filter: Filter): string | null {
+  const column = tables[table].find((one) => one.key === filter.column);
+  if (!column) return null; // a parameter may be a number or a word
+  const words = wordsOf[column.key];
+  if (words) {
+    const known = filter.op === 'in' && filter.values.every((value) => words.includes(value));
+    return known ? null : `${column.key} is one of ${words.join(', ')}; a second one is given as a second ${column.key}=.`;
+  }
+  if (column.kind === 'number' || column.kind === 'ratio') {
+    const number = (text: string): boolean => text.trim() !== '' && Number.isFinite(Number(text));
+    const known = filter.op === 'range' || (filter.op === 'in' && filter.values.every(number));
+    return known ? null : `${column.key} is filtered by a number or by a range, like 0.8..1.2 with either end left open.`;
+  }
+  return filter.op === 'range'
+    ? `${column.key} is text, which has no range. Write = before it if it is meant as it stands.`
+    : null;
+}
+
+/** Filters of an address that ask for nothing their column could hold: the column, and why. */
+export function misreadFilters(table: TableName, params: URLSearchParams): { readonly column: string; readonly why: string }[] {
+  return [...new Set(params.keys())]
+    .filter((column) => !reserved.has(column) && filterable(table, column))
+    .flatMap((column) => readFilters(column, params.getAll(column)))
+    .flatMap((filter) => {
+      const why = misread(table, filter);
+      return why === null ? [] : [{ column: filter.column, why }];
+    });
 }
 
 function plain(value: string): string {

@@ -8,13 +8,16 @@ export interface SpreadFrame {
 }
 
 /** Verdicts of a ratio, as a bar stacks them from its foot. */
-export const stacked = ['within', 'near', 'over'] as const;
+export const stacked = ['within', 'near', 'over', 'not checked'] as const;
 
 export interface SpreadBin {
   readonly from: number;
   readonly to: number;
   readonly count: number;
-  /** Frames by verdict: above the near limit some checks know no near, and their frames stay within. */
+  /**
+   * Frames by verdict: above the near limit some checks know no near, and their frames stay within; a frame of which something
+   * is not checked stays not checked, whatever the ratio of the rest.
+   */
   readonly of: Readonly<Record<(typeof stacked)[number], number>>;
 }
 
@@ -35,7 +38,7 @@ export function spreadBins(
   for (let i = Math.round(low / step); i <= Math.round(high / step); i++) edges.push(Number((i * step).toFixed(3)));
   if (!edges.includes(nearLimit) && nearLimit > low) edges.push(nearLimit);
   edges.sort((a, b) => a - b);
-  const steps = edges.slice(1).map(() => ({ within: 0, near: 0, over: 0 }));
+  const steps = edges.slice(1).map(() => ({ within: 0, near: 0, over: 0, 'not checked': 0 }));
   const limitAt = edges.indexOf(1);
   for (const { ratio, verdict } of frames) {
     let at = 0;
@@ -43,10 +46,11 @@ export function spreadBins(
     if (ratio <= 1 && at === limitAt) at = limitAt - 1;
     const from = edges[at] ?? 0;
     const near = from >= nearLimit - 1e-12 && verdict !== 'within';
-    steps[at]![from >= 1 ? 'over' : near ? 'near' : 'within'] += 1;
+    const unchecked = verdict === 'not checked' || verdict === null;
+    steps[at]![from >= 1 ? 'over' : unchecked ? 'not checked' : near ? 'near' : 'within'] += 1;
   }
   const bins = steps.map((of, i): SpreadBin => {
-    return { from: edges[i] ?? 0, to: edges[i + 1] ?? 0, count: of.within + of.near + of.over, of };
+    return { from: edges[i] ?? 0, to: edges[i + 1] ?? 0, count: of.within + of.near + of.over + of['not checked'], of };
   });
   return { bins, low, high, above: ratios.filter((ratio) => ratio > high).length };
 }

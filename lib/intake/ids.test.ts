@@ -11,6 +11,8 @@ test.each([
   ['A_1', 'A1', false],
   ['0.5', '.5', false],
   ['100', '1e2', true],
+  ['1e400', 'Infinity', false],
+  ['1e400', '1e401', false],
   ['12345678901234567890', '12345678901234567891', false],
 ])('ids %s and %s are the same: %s', (a, b, same) => {
   expect(idKey(a) === idKey(b)).toBe(same);

@@ -19,7 +19,9 @@ export function numberAsId(value: number): string {
 export function idText(text: string): string {
   const trimmed = text.trim();
   if (!plainNumber.test(trimmed) || /^[+-]?0\d/.test(trimmed) || trimmed.length > 15) return trimmed;
-  return numberAsId(Number(trimmed));
+  const value = Number(trimmed);
+  // 1e400 is more than a number holds, and stays what was typed
+  return Number.isFinite(value) ? numberAsId(value) : trimmed;
 }
 
 const cache = new Map<string, string>();

@@ -23,6 +23,17 @@ export function cellText(text: string): string {
   return xmlText(held);
 }
 
+/** Characters that a spreadsheet takes in a cell; a file with a longer one is offered for repair. */
+const longest = 32_767;
+
+/** A text as a cell takes it; of a longer one the beginning, and how much is left out. */
+export function fitting(text: string): string {
+  if (text.length <= longest) return text;
+  // a character of two units is not cut in two
+  const kept = text.slice(0, longest - 80).replace(/[\ud800-\udbff]$/, '');
+  return `${kept} … and ${(text.length - kept.length).toLocaleString('en-GB')} characters more than a cell takes`;
+}
+
 /** Value of an attribute in the text of a tag, as written; null where it has none. */
 export function attribute(tag: string, name: string): string | null {
   const match = new RegExp(`\\s${name}\\s*=\\s*(?:"([^"]*)"|'([^']*)')`).exec(tag);

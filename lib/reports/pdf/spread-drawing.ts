@@ -2,7 +2,7 @@ import { ticks, tickText } from '@/lib/drawing/axis';
 import { spreadBins, stacked, type SpreadFrame } from '@/lib/drawing/spread-bins';
 import type { Flow } from './flow';
 import { num } from './canvas';
-import { hatch } from './verdict-shapes';
+import { hatch, verdictCell } from './verdict-shapes';
 
 /** How governing ratios are spread: frames in steps of 0.025, against the near limit and the limit at 1.00. */
 export function spreadChart(flow: Flow, frames: readonly SpreadFrame[], nearLimit: number, height: number): void {
@@ -28,6 +28,10 @@ export function spreadChart(flow: Flow, frames: readonly SpreadFrame[], nearLimi
       const head = y(foundation);
       const box = { x: x(from) + 0.4, y: head, width: Math.max(x(to) - x(from) - 0.8, 0.4), height: y(below) - head };
       const operators = `${num(box.x)} ${num(box.y)} ${num(box.width)} ${num(box.height)} re`;
+      if (verdict === 'not checked') {
+        verdictCell(canvas, verdict, box.x, box.y, box.width, box.height);
+        continue;
+      }
       if (verdict === 'near') hatch(canvas, operators, box, 2.4);
       else canvas.shape(operators, { fill: verdict === 'over' ? 'red' : 'plain' });
       const colour = verdict === 'over' ? 'red' : verdict === 'near' ? 'amber' : 'plainCap';

@@ -1,4 +1,5 @@
 /** The first sheet: what was analysed, by what, under which assumptions, and what must not be concluded from it. */
+import { settingText } from '@/lib/changes/setting-text';
 import { originOfPart } from '@/lib/intake/own/own-thing';
 import { settingWords, statedSettings } from '@/lib/model/settings';
 import { cautions, checkedWords } from '@/lib/reports/cautions';
@@ -70,7 +71,7 @@ function* rows(source: ReportSource, facts: BatchFacts): Iterable<ReportRow> {
     const origin = source.origins[name];
     yield [
       settingWords[name],
-      value === null ? 'silent' : typeof value === 'boolean' ? (value ? 'yes' : 'no') : value,
+      value === null || typeof value === 'boolean' ? (settingText(name, settings) ?? 'none given') : value,
       origin.changedBy ? `changed on screen by ${origin.changedBy}` : (origin.cell ?? originWords[origin.source]),
     ];
   }

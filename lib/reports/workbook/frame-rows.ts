@@ -6,11 +6,16 @@ import { verdictOf } from '@/lib/reports/workbook/verdict-of';
 import type { Verdict } from '@/lib/results/result';
 import type { System } from '@/lib/units/quantity';
 
+/** More reasons than this are not put into one cell. */
+const mostReasons = 40;
+
 function whyNot(each: ReportFrame): string {
   if (each.frame === null) return 'not analysed: errors in its sheets (see Problems)';
   if (each.evaluation === null) return 'not run';
   const reasons = each.evaluation.failure ? [each.evaluation.failure.message] : each.evaluation.notChecked;
-  return reasons.join('; ');
+  const shown = reasons.slice(0, mostReasons);
+  if (reasons.length > shown.length) shown.push(`and ${reasons.length - shown.length} more, see Flags`);
+  return shown.join('; ');
 }
 
 /** Smallest α_cr of a frame's strength combinations; null where nothing can buckle it. */

@@ -3,6 +3,7 @@ import type { Writable } from 'node:stream';
 import ExcelJS from 'exceljs';
 import { crossesAsShown, type ReportColumn, type ReportRow, type ReportSheet } from '@/lib/reports/workbook/report-sheet';
 import { rowWriter, type FormatOf } from '@/lib/reports/workbook/row-xml';
+import { fitting } from '@/lib/reports/xml-text';
 
 /** Rows of one sheet that the format allows. */
 const mostRows = 1_048_576;
@@ -134,7 +135,7 @@ function tableRows(page: ExcelJS.Worksheet, formatOf: FormatOf): RowSink {
 function freeRows(page: ExcelJS.Worksheet, boldFirst: boolean): RowSink {
   return {
     add(cells) {
-      const row = page.addRow(cells.map((cell) => cell ?? undefined)) as StyledRow;
+      const row = page.addRow(cells.map((cell) => (typeof cell === 'string' ? fitting(cell) : (cell ?? undefined)))) as StyledRow;
       row.style = plainStyle;
       cells.forEach((cell, index) => {
         if (cell !== null) row.getCell(index + 1).style = index === 0 && boldFirst ? boldStyle : plainStyle;

@@ -83,6 +83,7 @@ export default async function GlancePage({ params }: { readonly params: Promise<
         <Zone title="Spread of governing ratios" note="frames in steps of 0.025">
           <Spread
             frames={cells.flatMap(({ ratio, verdict }) => (ratio === null ? [] : [{ ratio, verdict }]))}
+            without={cells.filter(({ ratio, verdict }) => ratio === null && verdict !== null).length}
             nearLimit={nearLimit}
           />
         </Zone>
