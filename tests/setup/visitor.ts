@@ -16,7 +16,13 @@ export class Visitor {
     headers.set('cookie', [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; '));
     if (!headers.has('x-forwarded-for')) headers.set('x-forwarded-for', this.address);
     if (!headers.has('origin') && init.method !== undefined && init.method !== 'GET') headers.set('origin', this.url);
-    const response = await fetch(`${this.url}${path}`, { redirect: 'manual', ...init, headers });
+    const ask = (): Promise<Response> => fetch(`${this.url}${path}`, { redirect: 'manual', ...init, headers });
+    // a kept connection that the server closes just then is opened anew, as browsers do: for what only asks
+    const asksOnly = init.method === undefined || init.method === 'GET';
+    const response = await ask().catch((error: unknown) => {
+      if (asksOnly && isClosedConnection(error)) return ask();
+      throw error;
+    });
     for (const cookie of response.headers.getSetCookie()) {
       const [pair] = cookie.split(';');
       const at = pair?.indexOf('=') ?? -1;
@@ -43,6 +49,9 @@ export class Visitor {
     return this.fetch('/api/auth/callback/credentials', { method: 'POST', body });
   }
 }
+
+const isClosedConnection = (error: unknown): boolean =>
+  error instanceof TypeError && (error.cause as { code?: unknown } | undefined)?.code === 'UND_ERR_SOCKET';
 
 /** A visitor signed in as someone of an office. */
 export async function signedIn(url: string, office: OfficeKey, role: PersonRole): Promise<Visitor> {
